@@ -1,0 +1,63 @@
+package org.modestead.engine.linalg;
+
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+
+/** New matrices from old ones, in the notation of the formulas. No argument is modified. */
+public final class Matrices {
+
+    private Matrices() {}
+
+    /** Returns rows [r0, r1) and columns [c0, c1). */
+    public static DMatrixRMaj block(DMatrixRMaj a, int r0, int r1, int c0, int c1) {
+        return CommonOps_DDRM.extract(a, r0, r1, c0, c1);
+    }
+
+    /** Returns c · A. */
+    public static DMatrixRMaj scaled(DMatrixRMaj a, double c) {
+        DMatrixRMaj out = a.copy();
+        CommonOps_DDRM.scale(c, out);
+        return out;
+    }
+
+    /** Returns A B. */
+    public static DMatrixRMaj product(DMatrixRMaj a, DMatrixRMaj b) {
+        DMatrixRMaj out = new DMatrixRMaj(a.numRows, b.numCols);
+        CommonOps_DDRM.mult(a, b, out);
+        return out;
+    }
+
+    /** Returns Aᵀ B. */
+    public static DMatrixRMaj transposeProduct(DMatrixRMaj a, DMatrixRMaj b) {
+        DMatrixRMaj out = new DMatrixRMaj(a.numCols, b.numCols);
+        CommonOps_DDRM.multTransA(a, b, out);
+        return out;
+    }
+
+    /** Returns A Bᵀ. */
+    public static DMatrixRMaj productTranspose(DMatrixRMaj a, DMatrixRMaj b) {
+        DMatrixRMaj out = new DMatrixRMaj(a.numRows, b.numRows);
+        CommonOps_DDRM.multTransB(a, b, out);
+        return out;
+    }
+
+    /**
+     * Returns A^k by repeated squaring.
+     *
+     * @param a square
+     * @param k at least 0
+     */
+    public static DMatrixRMaj power(DMatrixRMaj a, int k) {
+        DMatrixRMaj out = CommonOps_DDRM.identity(a.numRows);
+        DMatrixRMaj square = a;
+        for (int rest = k; rest > 0; rest >>= 1) {
+            if ((rest & 1) == 1) {
+                out = product(out, square);
+            }
+            if (rest > 1) {
+                square = product(square, square);
+            }
+        }
+        return out;
+    }
+}

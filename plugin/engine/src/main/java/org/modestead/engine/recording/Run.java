@@ -1,0 +1,52 @@
+package org.modestead.engine.recording;
+
+import java.util.Objects;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * One uninterrupted recording: {@code p} samples of {@code n} channels and {@code q} inputs at rising times.
+ *
+ * <p>The arrays are handed over at construction and never written afterwards, by anyone. A missing cell is NaN.
+ *
+ * @param id the run's name in the table it came from, not empty
+ * @param times sample times, length p, strictly rising, in the unit of the {@link TimeAxis}
+ * @param values samples, p x n
+ * @param inputs known inputs (control), p x q, q may be 0
+ * @param leadIn leading samples given only as history (delay coordinates of the first state), in [0, p]; they are
+ *     never predicted and never scored
+ */
+public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int leadIn) {
+
+    /** Checks that the shapes agree. */
+    public Run {
+        Objects.requireNonNull(id);
+        if (values.numRows != times.length || inputs.numRows != times.length) {
+            throw new IllegalArgumentException("run " + id + ": " + times.length + " times, " + values.numRows
+                    + " rows of values, " + inputs.numRows + " rows of inputs; the three must agree");
+        }
+        if (leadIn < 0 || leadIn > times.length) {
+            throw new IllegalArgumentException("run " + id + ": lead-in " + leadIn + " of " + times.length + " samples");
+        }
+    }
+
+    /**
+     * A run without inputs and without lead-in.
+     *
+     * @param id not empty
+     * @param times length p, strictly rising
+     * @param values p x n
+     */
+    public Run(String id, double[] times, DMatrixRMaj values) {
+        this(id, times, values, new DMatrixRMaj(times.length, 0), 0);
+    }
+
+    /** Returns the number of samples p. */
+    public int samples() {
+        return times.length;
+    }
+
+    /** Returns last time minus first time, in the time unit. */
+    public double duration() {
+        return times[times.length - 1] - times[0];
+    }
+}

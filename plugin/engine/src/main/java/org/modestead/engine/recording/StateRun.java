@@ -1,0 +1,28 @@
+package org.modestead.engine.recording;
+
+import java.util.Objects;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * The states of one run after preparation and delay embedding.
+ *
+ * @param id the run's name
+ * @param times time of each state (of its newest sample), length p
+ * @param states p x N with N = channels * depth, column {@code delay * channels + channel}
+ * @param inputs inputs at the same times, p x q
+ */
+public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMaj inputs) {
+
+    /** Checks that the shapes agree. */
+    public StateRun {
+        Objects.requireNonNull(id);
+        if (states.numRows != times.length || inputs.numRows != times.length) {
+            throw new IllegalArgumentException("run " + id + ": rows of times, states and inputs differ");
+        }
+    }
+
+    /** Returns the number of states p. */
+    public int count() {
+        return times.length;
+    }
+}

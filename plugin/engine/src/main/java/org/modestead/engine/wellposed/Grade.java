@@ -1,0 +1,33 @@
+package org.modestead.engine.wellposed;
+
+/** What may be said about a mode. Ordered from best to worst; the worst decides overall. */
+public enum Grade {
+    /** Settles, is in the space, passes holdout, captures its part, joint = solo: report the mode. */
+    STANDS("stands", "report the mode"),
+    /** As {@link #STANDS}, but it overlaps other modes: report with its overlap. */
+    SETTLES("settles", "report the mode together with its overlap"),
+    /** Too few data, rungs or runs to tell. */
+    UNDECIDED("undecided", "collect more data as the finding says"),
+    /** Holdout passes, but the rate or the weight keeps changing as the basis grows. */
+    DRIFTS("drifts", "report only the projection and its forecast"),
+    /** The residual stays, or the norm grows without bound. */
+    ABSENT("absent", "no mode in this space: try another kernel");
+
+    private final String word;
+    private final String advice;
+
+    Grade(String word, String advice) {
+        this.word = word;
+        this.advice = advice;
+    }
+
+    /** Returns the word used in tables. */
+    public String word() {
+        return word;
+    }
+
+    /** Returns what the analyst may do. */
+    public String advice() {
+        return advice;
+    }
+}

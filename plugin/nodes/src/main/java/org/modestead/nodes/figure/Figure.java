@@ -1,0 +1,98 @@
+package org.modestead.nodes.figure;
+
+import java.util.List;
+import java.util.Objects;
+
+/**
+ * A picture as plain data. One renderer draws it for files, report and views; a page draws the same data for
+ * interaction. No picture is defined twice.
+ *
+ * @param id unique within a node's result, lower case with dashes
+ * @param kind how marks are meant to be read; decides aspect and helper lines only
+ * @param title one line
+ * @param caption one or two sentences: what it shows and how to read it (also the text alternative)
+ * @param x horizontal axis
+ * @param y vertical axis
+ * @param layers drawn in order
+ */
+public record Figure(String id, Kind kind, String title, String caption, Axis x, Axis y, List<Layer> layers) {
+
+    /** How marks are meant to be read. */
+    public enum Kind {
+        /** Values over time. */
+        TIME_SERIES,
+        /** Points of the complex plane, with the imaginary axis (growth | decay) marked and equal scales avoided. */
+        COMPLEX_PLANE,
+        /** A quantity over rank or order. */
+        CURVES,
+        /** Magnitude and phase by channel. */
+        SHAPES,
+        /** Bars by category. */
+        BARS
+    }
+
+    /**
+     * @param label with unit in brackets
+     * @param logarithmic base 10; values must be positive
+     * @param categories tick labels at 0, 1, 2, ...; empty for a numeric axis
+     * @param time how numbers are shown: {@code ""} plain, {@code "date"} days since 1970, {@code "date-time"} seconds
+     *     since 1970
+     */
+    public record Axis(String label, boolean logarithmic, List<String> categories, String time) {
+        /** A linear numeric axis. */
+        public static Axis linear(String label) {
+            return new Axis(label, false, List.of(), "");
+        }
+
+        /** A logarithmic axis. */
+        public static Axis log(String label) {
+            return new Axis(label, true, List.of(), "");
+        }
+
+        /** An axis of named categories. */
+        public static Axis categories(String label, List<String> names) {
+            return new Axis(label, false, List.copyOf(names), "");
+        }
+    }
+
+    /** One drawn thing. */
+    public sealed interface Layer {
+        /** Returns the name in the legend, empty for none. */
+        String name();
+
+        /** Returns what is selected with it, for example {@code mode:3}; empty when nothing is. */
+        String selection();
+    }
+
+    /** A line through points; NaN breaks it. */
+    public record Line(String name, String selection, double[] x, double[] y, Emphasis emphasis) implements Layer {}
+
+    /** The area between two curves; NaN breaks it. */
+    public record Band(String name, String selection, double[] x, double[] low, double[] high) implements Layer {}
+
+    /** Separate points with a label each (may be empty texts). */
+    public record Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis)
+            implements Layer {}
+
+    /** Bars of equal width at the category positions 0, 1, 2, ... */
+    public record Bars(String name, String selection, double[] heights) implements Layer {}
+
+    /** A straight line across the picture at one value. */
+    public record Rule(String name, String selection, boolean vertical, double at) implements Layer {}
+
+    /** How strongly a layer is drawn. */
+    public enum Emphasis {
+        /** What the picture is about. */
+        STRONG,
+        /** Context. */
+        NORMAL,
+        /** Background. */
+        FAINT
+    }
+
+    /** Takes an immutable copy. */
+    public Figure {
+        Objects.requireNonNull(kind);
+        layers = List.copyOf(layers);
+    }
+}
