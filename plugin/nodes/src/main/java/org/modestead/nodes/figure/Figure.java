@@ -57,7 +57,7 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
 
     /** One drawn thing. */
     public sealed interface Layer {
-        /** Returns the name in the legend, empty for none. */
+        /** Returns the name in the legend, empty for none; layers of one name share a legend entry and a colour. */
         String name();
 
         /** Returns what is selected with it, for example {@code mode:3}; empty when nothing is. */
@@ -71,8 +71,28 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
     public record Band(String name, String selection, double[] x, double[] low, double[] high) implements Layer {}
 
     /** Separate points with a label each (may be empty texts). */
-    public record Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis)
-            implements Layer {}
+    public record Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis, Mark mark)
+            implements Layer {
+
+        /** Points drawn as discs. */
+        public Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis) {
+            this(name, selection, x, y, labels, emphasis, Mark.DISC);
+        }
+    }
+
+    /** What a point looks like: shape and filling carry meaning where colour alone must not. */
+    public enum Mark {
+        /** A filled circle. */
+        DISC,
+        /** A filled square. */
+        SQUARE,
+        /** A circle with an open middle. */
+        RING,
+        /** A triangle with an open middle. */
+        TRIANGLE,
+        /** Two crossed strokes. */
+        CROSS
+    }
 
     /** Bars of equal width at the category positions 0, 1, 2, ... */
     public record Bars(String name, String selection, double[] heights) implements Layer {}

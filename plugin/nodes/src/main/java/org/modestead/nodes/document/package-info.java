@@ -1,0 +1,2 @@
+/** Reports as plain data. */
+package org.modestead.nodes.document;
