@@ -22,23 +22,17 @@ public final class Matrices {
 
     /** Returns A B. */
     public static DMatrixRMaj product(DMatrixRMaj a, DMatrixRMaj b) {
-        DMatrixRMaj out = new DMatrixRMaj(a.numRows, b.numCols);
-        CommonOps_DDRM.mult(a, b, out);
-        return out;
+        return LinearAlgebra.installed().multiply(a, b);
     }
 
     /** Returns Aᵀ B. */
     public static DMatrixRMaj transposeProduct(DMatrixRMaj a, DMatrixRMaj b) {
-        DMatrixRMaj out = new DMatrixRMaj(a.numCols, b.numCols);
-        CommonOps_DDRM.multTransA(a, b, out);
-        return out;
+        return LinearAlgebra.installed().multiplyTransA(a, b);
     }
 
     /** Returns A Bᵀ. */
     public static DMatrixRMaj productTranspose(DMatrixRMaj a, DMatrixRMaj b) {
-        DMatrixRMaj out = new DMatrixRMaj(a.numRows, b.numRows);
-        CommonOps_DDRM.multTransB(a, b, out);
-        return out;
+        return LinearAlgebra.installed().multiplyTransB(a, b);
     }
 
     /**

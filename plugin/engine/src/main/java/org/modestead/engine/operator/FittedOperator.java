@@ -16,7 +16,7 @@ import org.modestead.engine.recording.Snapshots;
  * @param compression up to rank R
  * @param rank chosen r in [1, R]
  * @param rankChoice why r was chosen, in words
- * @param estimator id of the estimator, for example {@code linear}
+ * @param estimator what filled the compression, kept so that checks can refit with another step
  * @param method what was fitted, in words, for the report
  * @param kernel the kernel, when the estimator uses one
  * @param snapshots what it was fitted to (channels, delays, preparation and the training runs)
@@ -26,7 +26,7 @@ public record FittedOperator(
         OrthonormalCompression compression,
         int rank,
         String rankChoice,
-        String estimator,
+        Estimator estimator,
         String method,
         Optional<KernelSpec> kernel,
         Snapshots snapshots,
@@ -35,6 +35,7 @@ public record FittedOperator(
     /** Takes immutable copies. */
     public FittedOperator {
         Objects.requireNonNull(compression);
+        Objects.requireNonNull(estimator);
         Objects.requireNonNull(kernel);
         doubts = List.copyOf(doubts);
     }

@@ -1,0 +1,40 @@
+package org.modestead.engine.wellposed;
+
+/**
+ * Thresholds of the checks. Every one is a setting with a documented default.
+ *
+ * @param ladderFrom lowest rank of the ladder, 0 = half the fitted rank, at least 2
+ * @param ladderTo highest rank of the ladder, 0 = the fitted rank plus half of it where the data support that
+ * @param shareThreshold energy share from which a mode counts for the overall verdict, in (0, 1); default 0.05
+ * @param residualThreshold largest holdout residual of a mode, in (0, 1]; default 0.25
+ * @param settleThreshold largest relative change of rate or weight over the last rungs, in (0, 1]; default 0.1
+ * @param normGrowthThreshold largest factor by which the space norm may grow over the last three rungs, above 1; default 3
+ * @param overlapThreshold largest overlap |&lt;φ, φ'&gt;| of unit eigenfunctions for {@code stands}, in (0, 1); default 0.1
+ * @param gapThreshold largest relative difference of joint and solo weights for {@code stands}, in (0, 1); default 0.1
+ * @param captureThreshold least share of the signal that the eigenfunctions must hold, in (0, 1); default 0.5
+ * @param stepThreshold largest relative difference of rates between a step and the other step; default 0.1
+ * @param completenessThreshold least goodness of fit with which 1/‖x‖ heads linearly to zero before a run counts as
+ *     escaping, in (0, 1); default 0.98
+ */
+public record JudgeSettings(
+        int ladderFrom,
+        int ladderTo,
+        double shareThreshold,
+        double residualThreshold,
+        double settleThreshold,
+        double normGrowthThreshold,
+        double overlapThreshold,
+        double gapThreshold,
+        double captureThreshold,
+        double stepThreshold,
+        double completenessThreshold) {
+
+    /** The documented defaults. */
+    public static final JudgeSettings DEFAULT = new JudgeSettings(0, 0, 0.05, 0.25, 0.1, 3, 0.1, 0.1, 0.5, 0.1, 0.98);
+
+    /** The same with other ends of the ladder. */
+    public JudgeSettings withLadder(int from, int to) {
+        return new JudgeSettings(from, to, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold);
+    }
+}
