@@ -66,7 +66,7 @@ record PumpHouse(
     private static final double LENGTH_SPREAD = 0.15;
     private static final double GAP_SECONDS = 2;
     private static final int DROPOUT_MIN = 2;
-    private static final int DROPOUT_SPREAD = 5;
+    private static final int DROPOUT_SPREAD = 3;
     private static final double WHIRL_AT_START = 0.04;
 
     /** Returns the modes that the recordings are made of; the whirl only if some run excites it. */
@@ -101,7 +101,7 @@ record PumpHouse(
         int gapFrom = isChosen(run, gaps, 0.25) ? (int) (samples * (0.3 + 0.4 * random.nextDouble())) : samples;
         double gapTo = gapFrom + GAP_SECONDS * rate;
         for (int k = 0; k < samples; k++) {
-            double time = round((k + jitter * spread(random)) / rate, TIME_DIGITS);
+            double time = Math.max(0, round((k + jitter * spread(random)) / rate, TIME_DIGITS));
             double[] values = measured(STATION.at(time, excitation), random);
             if (k < gapFrom || k >= gapTo) {
                 table.row(cells(id, time, values, silent[k]));

@@ -110,7 +110,7 @@ public final class SignalGenerator implements Node {
                                 + "not set 0.01 for the pump house and 0 for a flow."), "", 0, false, 1, OptionalDouble.empty()),
                 number(new Common("jitter", "Uneven steps", "Disturbances",
                         "Largest shift of a sample time as a share of the step.").when("scenario", PUMP_HOUSE), "", 0, 0.4, 0.1),
-                whole("dropouts", "Sensor drop-outs a run", "How often in a run one sensor says nothing for up to six samples.", 2),
+                whole("dropouts", "Sensor drop-outs a run", "How often in a run one sensor says nothing for two to four samples.", 2),
                 whole("gaps", "Runs with a logging gap", "Number of runs in which nothing was logged for two seconds.", 3),
                 whole("unstable-runs", "Runs with whirl", "Number of runs in which the rotor whirl grows.", 1));
     }
