@@ -1,0 +1,92 @@
+package org.modestead.engine.basis;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.FitFault;
+
+/**
+ * Monomials of total degree at most d. Total degree, not degree by component: the span is then invariant under every
+ * linear change of coordinates, so linear motion stays inside it.
+ *
+ * @param degree d, at least 1
+ */
+record MonomialDictionary(int degree) implements Dictionary {
+
+    private static final long MOST = 5000;
+
+    MonomialDictionary {
+        if (degree < 1) {
+            throw new FitFault("dictionary", "the degree is " + degree, "give a degree of at least 1");
+        }
+    }
+
+    @Override
+    public String describe() {
+        return "monomials of total degree up to " + degree;
+    }
+
+    @Override
+    public FunctionBasis on(int stateSize) {
+        double count = 1;
+        for (int k = 1; k <= degree; k++) {
+            count = count * (stateSize + k) / k;
+        }
+        if (count > MOST) {
+            throw new FitFault("dictionary", "degree " + degree + " on " + stateSize + " state components makes " + (long) count
+                    + " functions", "keep it at most " + MOST + ": lower the degree or the delay depth, or use a kernel");
+        }
+        List<int[]> exponents = new ArrayList<>();
+        for (int total = 0; total <= degree; total++) {
+            collect(new int[stateSize], 0, total, exponents);
+        }
+        return new Monomials(List.copyOf(exponents), degree, describe());
+    }
+
+    private static void collect(int[] exponent, int from, int rest, List<int[]> out) {
+        if (rest == 0) {
+            out.add(exponent.clone());
+            return;
+        }
+        for (int k = from; k < exponent.length; k++) {
+            exponent[k]++;
+            collect(exponent, k, rest - 1, out);
+            exponent[k]--;
+        }
+    }
+
+    /** The monomials on states of a known size. */
+    private record Monomials(List<int[]> exponents, int degree, String description) implements FunctionBasis {
+
+        @Override
+        public int size() {
+            return exponents.size();
+        }
+
+        @Override
+        public DMatrixRMaj evaluate(DMatrixRMaj states) {
+            DMatrixRMaj out = new DMatrixRMaj(states.numRows, size());
+            for (int i = 0; i < states.numRows; i++) {
+                for (int j = 0; j < size(); j++) {
+                    out.data[i * size() + j] = monomial(states, i, exponents.get(j));
+                }
+            }
+            return out;
+        }
+
+        private static double monomial(DMatrixRMaj states, int row, int[] exponent) {
+            double product = 1;
+            for (int k = 0; k < exponent.length; k++) {
+                for (int power = exponent[k]; power > 0; power--) {
+                    product *= states.data[row * states.numCols + k];
+                }
+            }
+            return product;
+        }
+
+        @Override
+        public String describe() {
+            return size() + " " + description;
+        }
+    }
+}

@@ -1,0 +1,33 @@
+package org.modestead.engine.kernel;
+
+import java.util.List;
+import java.util.Optional;
+import java.util.ServiceLoader;
+import org.modestead.engine.FitFault;
+
+/** The kernel families at hand: those of the engine and any found by {@link ServiceLoader}. */
+public final class KernelFamilies {
+
+    private KernelFamilies() {}
+
+    /** Returns all families in the order of the service files, the engine's own first; ids are unique. */
+    public static List<KernelFamily> all() {
+        return ServiceLoader.load(KernelFamily.class, KernelFamily.class.getClassLoader()).stream().map(ServiceLoader.Provider::get)
+                .toList();
+    }
+
+    /** Returns the family of an id. */
+    public static Optional<KernelFamily> byId(String id) {
+        return all().stream().filter(family -> family.id().equals(id)).findFirst();
+    }
+
+    /**
+     * Makes a kernel.
+     *
+     * @throws FitFault if the family is unknown or a parameter is missing or out of range
+     */
+    public static Kernel create(KernelSpec spec) {
+        return byId(spec.family()).orElseThrow(() -> new FitFault("kernel", "there is no family " + spec.family(),
+                "use one of " + String.join(", ", all().stream().map(KernelFamily::id).toList()))).create(spec);
+    }
+}

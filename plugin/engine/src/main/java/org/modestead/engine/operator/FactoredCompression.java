@@ -1,0 +1,107 @@
+package org.modestead.engine.operator;
+
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.basis.FunctionBasis;
+import org.modestead.engine.linalg.LinearAlgebra.Svd;
+import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.linalg.ThinSvd;
+
+/**
+ * A compression held by two tall factors F, F' (m samples x p functions), which is both smaller and more accurate than
+ * its four arrays: singular values of F are found to {@code ε s_1}, those of a formed Gram matrix only to
+ * {@code √ε s_1}.
+ *
+ * <pre>
+ *   data inner product:  G = FᵀF,  M = FᵀF',  N = F'ᵀF'   (p x p; basis = the p functions)
+ *   kernel space:        G = FFᵀ,  M = F'Fᵀ,  N = F'F'ᵀ   (m x m; basis = m sections or occupation functions,
+ *                                                          written in p orthonormal feature functions)
+ * </pre>
+ *
+ * <p>With {@code F = U S Wᵀ}: in the data inner product {@code Q = W S⁻¹} and {@code Ã = Uᵀ F' W S⁻¹}; in the kernel
+ * space {@code Q = U S⁻¹}, {@code Ã = S⁻¹ Uᵀ F' W}, and the orthonormal functions are {@code q = W} in the features.
+ *
+ * @param features p functions: those of the dictionary, or orthonormal features of the kernel's space
+ * @param now F, m x p; for the data inner product already multiplied by the square roots of the weights
+ * @param next F', m x p, the same functions after the action
+ * @param target m x N: in the data inner product g at the samples, multiplied by the square roots of the weights; in the
+ *     kernel space {@code <g_k, b_i>}
+ * @param innerProduct which of the two readings
+ * @param evolution step map or generator
+ */
+public record FactoredCompression(
+        FunctionBasis features,
+        DMatrixRMaj now,
+        DMatrixRMaj next,
+        DMatrixRMaj target,
+        InnerProduct innerProduct,
+        Evolution evolution)
+        implements Compression {
+
+    private static final double NOISE = 4 * Math.ulp(1.0);
+
+    @Override
+    public FunctionBasis basis() {
+        return features;
+    }
+
+    @Override
+    public DMatrixRMaj gram() {
+        return product(now, now);
+    }
+
+    @Override
+    public DMatrixRMaj action() {
+        return innerProduct == InnerProduct.DATA ? Matrices.transposeProduct(now, next) : Matrices.productTranspose(next, now);
+    }
+
+    @Override
+    public DMatrixRMaj second() {
+        return product(next, next);
+    }
+
+    @Override
+    public DMatrixRMaj observable() {
+        return innerProduct == InnerProduct.DATA ? Matrices.transposeProduct(now, target) : target;
+    }
+
+    private DMatrixRMaj product(DMatrixRMaj a, DMatrixRMaj b) {
+        return innerProduct == InnerProduct.DATA ? Matrices.transposeProduct(a, b) : Matrices.productTranspose(a, b);
+    }
+
+    @Override
+    public OrthonormalCompression whiten(int largest) {
+        Svd svd = ThinSvd.of(now, largest);
+        double first = svd.values().length == 0 ? 0 : svd.values()[0];
+        if (!(first > 0) || Double.isInfinite(first)) {
+            throw new FitFault("snapshot matrix", "its largest singular value is " + first,
+                    "the basis functions must be finite and must not all vanish on the data");
+        }
+        int rank = 0;
+        double noise = NOISE * Math.max(now.numRows, now.numCols) * first;
+        while (rank < Math.min(svd.values().length, largest) && svd.values()[rank] > noise) {
+            rank++;
+        }
+        double[] singular = java.util.Arrays.copyOf(svd.values(), rank);
+        DMatrixRMaj u = Matrices.block(svd.u(), 0, now.numRows, 0, rank);
+        DMatrixRMaj w = Matrices.block(svd.v(), 0, now.numCols, 0, rank);
+        return innerProduct == InnerProduct.DATA ? inData(u, w, singular) : inSpace(u, w, singular);
+    }
+
+    private OrthonormalCompression inData(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {
+        DMatrixRMaj map = w.copy();
+        CommonOps_DDRM.divideCols(map, singular);
+        DMatrixRMaj moved = Matrices.product(next, map);
+        return new OrthonormalCompression(features, map, Matrices.transposeProduct(u, moved), Matrices.transposeProduct(moved, moved),
+                Matrices.transposeProduct(u, target), singular, now.numRows, innerProduct, evolution);
+    }
+
+    private OrthonormalCompression inSpace(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {
+        DMatrixRMaj scaled = u.copy();
+        CommonOps_DDRM.divideCols(scaled, singular);
+        DMatrixRMaj moved = Matrices.transposeProduct(scaled, next);
+        return new OrthonormalCompression(features, w, Matrices.product(moved, w), Matrices.productTranspose(moved, moved),
+                Matrices.transposeProduct(scaled, target), singular, now.numRows, innerProduct, evolution);
+    }
+}

@@ -1,0 +1,56 @@
+package org.modestead.engine.operator;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+
+/**
+ * Training data split once more, for choices made before the final fit: the last quarter of the runs when there are at
+ * least four, otherwise the last quarter of every run. Holdout and calibration parts are not touched.
+ *
+ * @param fitting snapshots whose training part is the first three quarters
+ * @param judging states of the last quarter
+ */
+record InnerSplit(Snapshots fitting, List<StateRun> judging) {
+
+    private static final int ENOUGH_RUNS = 4;
+
+    static InnerSplit of(Snapshots snapshots) {
+        List<Run> runs = snapshots.training();
+        List<Run> first = new ArrayList<>();
+        List<Run> last = new ArrayList<>();
+        if (runs.size() >= ENOUGH_RUNS) {
+            int cut = runs.size() - runs.size() / 4;
+            first.addAll(runs.subList(0, cut));
+            last.addAll(runs.subList(cut, runs.size()));
+        } else {
+            for (Run run : runs) {
+                int cut = run.samples() - run.samples() / 4;
+                first.add(rows(run, 0, cut));
+                last.add(rows(run, Math.max(0, cut - 1 - snapshots.delay().reach()), run.samples()));
+            }
+        }
+        Snapshots fitting = withTraining(snapshots, first);
+        List<StateRun> judging = withTraining(snapshots, last).states(Snapshots.Part.TRAINING).stream().filter(run -> run.count() > 1).toList();
+        if (judging.isEmpty()) {
+            throw new FitFault("choice by held-out data", "the training runs are too short to leave a quarter out",
+                    "use longer runs, a smaller delay depth, or choose by another rule");
+        }
+        return new InnerSplit(fitting, judging);
+    }
+
+    private static Run rows(Run run, int from, int to) {
+        return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), Matrices.block(run.values(), from, to, 0, run.values().numCols),
+                Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0);
+    }
+
+    private static Snapshots withTraining(Snapshots s, List<Run> training) {
+        return new Snapshots(s.channels(), s.inputs(), s.time(), training, s.calibration(), s.holdout(), s.step(), s.delay(), s.preparation(),
+                s.facts(), s.doubts());
+    }
+}

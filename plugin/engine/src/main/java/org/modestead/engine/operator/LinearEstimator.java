@@ -1,0 +1,54 @@
+package org.modestead.engine.operator;
+
+import java.util.Optional;
+import org.modestead.engine.Progress;
+import org.modestead.engine.basis.Coordinates;
+import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.recording.Snapshots;
+
+/**
+ * Linear least squares in delay coordinates: the basis functions are the state components, the inner product the average
+ * over the data. With {@code X = U S Wᵀ} (m x N) the compression is {@code Uᵀ Y W S⁻¹}.
+ *
+ * <p>Schmid, J. Fluid Mech. 656:5, 2010; delay coordinates. Noise in X biases the eigenvalues towards
+ * zero, that is towards more damping.
+ *
+ * @param stride sampling steps per application of the operator, at least 1
+ */
+public record LinearEstimator(int stride) implements Estimator {
+
+    /** One sampling step. */
+    public LinearEstimator() {
+        this(1);
+    }
+
+    @Override
+    public String id() {
+        return "linear";
+    }
+
+    @Override
+    public String describe() {
+        return "linear least squares in delay coordinates";
+    }
+
+    @Override
+    public Optional<KernelSpec> kernel() {
+        return Optional.empty();
+    }
+
+    @Override
+    public Compression compress(Snapshots snapshots, Progress progress) {
+        StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, stride);
+        double weight = 1 / Math.sqrt(pairs.count());
+        var now = Matrices.scaled(pairs.now(), weight);
+        return new FactoredCompression(new Coordinates(snapshots.stateSize()), now, Matrices.scaled(pairs.next(), weight), now,
+                InnerProduct.DATA, new Evolution.StepMap(pairs.step()));
+    }
+
+    @Override
+    public Optional<Estimator> otherStep(Snapshots snapshots) {
+        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride)) : Optional.empty();
+    }
+}

@@ -1,0 +1,85 @@
+package org.modestead.engine.operator;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.Progress;
+import org.modestead.engine.recording.Snapshots;
+
+/** Fits an operator: compress, whiten, choose the rank. */
+public final class OperatorFitter {
+
+    private static final int LARGEST_RANK = 400;
+    private static final double THIN = 1e-6;
+
+    private OperatorFitter() {}
+
+    /**
+     * @param snapshots whose training part is fitted
+     * @param estimator which fills the compression
+     * @param rule how the rank is chosen
+     * @param ridge ρ relative to the largest squared singular value, at least 0: row i of the compressed operator is
+     *     multiplied by {@code s_i² / (s_i² + ρ s_1²)}, the Tikhonov solution of {@code (G + ρ s_1² I) K = M}
+     * @param progress polled for cancel
+     * @return never null
+     * @throws FitFault if the rank asked for is more than the data hold, or the data do not suit the estimator
+     */
+    public static FittedOperator fit(Snapshots snapshots, Estimator estimator, RankRule rule, double ridge, Progress progress) {
+        progress.report(0, "filling the arrays");
+        Compression compression = estimator.compress(snapshots, progress.part(0, 0.5));
+        progress.checkCancelled();
+        progress.report(0.5, "whitening");
+        OrthonormalCompression full = ridged(compression.whiten(LARGEST_RANK), ridge);
+        progress.checkCancelled();
+        progress.report(0.8, "choosing the rank");
+        RankChoice choice = RankSelection.choose(rule, full, estimator, snapshots, progress.part(0.8, 1));
+        progress.report(1, "fitted");
+        return new FittedOperator(full, choice.rank(), choice.reason(), estimator, estimator.describe(), estimator.kernel(), snapshots,
+                doubts(full, choice.rank(), snapshots));
+    }
+
+    private static OrthonormalCompression ridged(OrthonormalCompression c, double ridge) {
+        if (!(ridge >= 0) || Double.isInfinite(ridge)) {
+            throw new FitFault("ridge", "the ridge is " + ridge, "give 0 or a small positive number");
+        }
+        if (ridge == 0) {
+            return c;
+        }
+        DMatrixRMaj action = c.action().copy();
+        double first = c.singular()[0] * c.singular()[0];
+        for (int i = 0; i < c.rank(); i++) {
+            double squared = c.singular()[i] * c.singular()[i];
+            for (int j = 0; j < c.rank(); j++) {
+                action.data[i * c.rank() + j] *= squared / (squared + ridge * first);
+            }
+        }
+        return new OrthonormalCompression(c.basis(), c.map(), action, c.second(), c.observable(), c.singular(), c.snapshots(),
+                c.innerProduct(), c.evolution());
+    }
+
+    private static List<Doubt> doubts(OrthonormalCompression full, int rank, Snapshots snapshots) {
+        List<Doubt> doubts = new ArrayList<>();
+        double thin = full.singular()[rank - 1] / full.singular()[0];
+        if (thin < THIN) {
+            doubts.add(new Doubt("ill-conditioned", String.format(Locale.ROOT,
+                    "At rank %d the weakest direction carries %.2g of the strongest: noise of that relative size decides it.", rank, thin)));
+        }
+        if (full.snapshots() < 3 * rank) {
+            doubts.add(new Doubt("few-snapshots", String.format(Locale.ROOT,
+                    "Rank %d was fitted to %d snapshots; fewer than three a direction leave little to average over.", rank, full.snapshots())));
+        }
+        if (!snapshots.inputs().isEmpty()) {
+            doubts.add(new Doubt("inputs-not-separated",
+                    "Input columns are kept with the snapshots but this fit does not separate their effect from the free motion."));
+        }
+        if (full.evolution() instanceof Evolution.Generator generator && generator.contraction() < 1) {
+            doubts.add(new Doubt("scaled-generator", String.format(Locale.ROOT,
+                    "Eigenvalues are those of the generator scaled by %.4g; they tend to rates only as the contraction tends to 1.",
+                    generator.contraction())));
+        }
+        return doubts;
+    }
+}

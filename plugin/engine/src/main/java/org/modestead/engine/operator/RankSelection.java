@@ -1,0 +1,72 @@
+package org.modestead.engine.operator;
+
+import java.util.Arrays;
+import java.util.Locale;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.Progress;
+import org.modestead.engine.recording.Snapshots;
+
+/** Applies a rank rule. */
+final class RankSelection {
+
+    private RankSelection() {}
+
+    static RankChoice choose(RankRule rule, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
+        if (rule instanceof RankRule.Fixed fixed) {
+            return fixed(fixed.rank(), full);
+        }
+        if (rule instanceof RankRule.Energy energy) {
+            return energy(energy.share(), full.singular());
+        }
+        if (rule instanceof RankRule.HardThreshold) {
+            return hardThreshold(full);
+        }
+        return holdout(((RankRule.Holdout) rule).largest(), full, estimator, snapshots, progress);
+    }
+
+    private static RankChoice fixed(int rank, OrthonormalCompression full) {
+        if (rank < 1 || rank > full.rank()) {
+            throw new FitFault("rank", "rank " + rank + " was asked for but " + full.snapshots() + " snapshots of "
+                    + full.basis().describe() + " hold only " + full.rank() + " independent directions",
+                    "choose a rank from 1 to " + full.rank() + ", or add data");
+        }
+        return new RankChoice(rank, "fixed");
+    }
+
+    private static RankChoice energy(double share, double[] singular) {
+        double total = Arrays.stream(singular).map(s -> s * s).sum();
+        double sum = 0;
+        int rank = 0;
+        while (rank < singular.length && sum < share * total) {
+            sum += singular[rank] * singular[rank];
+            rank++;
+        }
+        return new RankChoice(Math.max(rank, 1), String.format(Locale.ROOT, "holds %.6g of the squared singular values, %.6g asked for",
+                sum / total, share));
+    }
+
+    private static RankChoice hardThreshold(OrthonormalCompression full) {
+        int rows = full.snapshots();
+        int columns = full.innerProduct() == InnerProduct.DATA ? full.basis().size() : rows;
+        double beta = (double) Math.min(rows, columns) / Math.max(rows, columns);
+        double omega = ((0.56 * beta - 0.95) * beta + 1.82) * beta + 1.43;
+        double[] padded = Arrays.copyOf(full.singular(), Math.max(full.rank(), Math.min(rows, columns)));
+        double median = median(padded);
+        int rank = (int) Arrays.stream(full.singular()).filter(s -> s > omega * median).count();
+        return new RankChoice(Math.max(rank, 1), String.format(Locale.ROOT,
+                "singular values above the hard threshold %.6g (%.4g times their median)", omega * median, omega));
+    }
+
+    private static double median(double[] falling) {
+        int middle = falling.length / 2;
+        return falling.length % 2 == 1 ? falling[middle] : (falling[middle - 1] + falling[middle]) / 2;
+    }
+
+    private static RankChoice holdout(int largest, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
+        InnerSplit split = InnerSplit.of(snapshots);
+        OrthonormalCompression trial = estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank()));
+        PredictionError.Best best = PredictionError.bestRank(trial, split.judging(), progress);
+        return new RankChoice(best.rank(), String.format(Locale.ROOT,
+                "best one-step prediction on a quarter of the training data left out: relative error %.4g", best.error()));
+    }
+}

@@ -1,0 +1,55 @@
+package org.modestead.engine.operator;
+
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+
+/**
+ * States and where they went one step later, over all runs of a part.
+ *
+ * @param now x, m x N
+ * @param next y, m x N
+ * @param step time from x to y
+ */
+record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step) {
+
+    /**
+     * @param snapshots with a uniform step
+     * @param part whose runs are paired
+     * @param stride sampling steps from x to y, at least 1
+     * @throws FitFault if the times are uneven or no run is long enough
+     */
+    static StatePairs of(Snapshots snapshots, Snapshots.Part part, int stride) {
+        double step = snapshots.step().orElseThrow(() -> new FitFault("operator", "the snapshots keep uneven times",
+                "resample to a uniform step, or fit the generator, which reads uneven times"));
+        List<StateRun> runs = snapshots.states(part).stream().filter(run -> run.count() > stride).toList();
+        int m = runs.stream().mapToInt(run -> run.count() - stride).sum();
+        if (m == 0) {
+            throw new FitFault("operator", "no run is longer than " + stride + " state" + (stride == 1 ? "" : "s") + " after delay embedding",
+                    "use longer runs, a smaller delay depth or a smaller step");
+        }
+        int n = snapshots.stateSize();
+        DMatrixRMaj now = new DMatrixRMaj(m, n);
+        DMatrixRMaj next = new DMatrixRMaj(m, n);
+        int at = 0;
+        for (StateRun run : runs) {
+            int count = run.count() - stride;
+            System.arraycopy(run.states().data, 0, now.data, at * n, count * n);
+            System.arraycopy(run.states().data, stride * n, next.data, at * n, count * n);
+            at += count;
+        }
+        return new StatePairs(now, next, stride * step);
+    }
+
+    /** Returns whether some training run has a pair at this stride. */
+    static boolean exist(Snapshots snapshots, int stride) {
+        return snapshots.states(Snapshots.Part.TRAINING).stream().anyMatch(run -> run.count() > stride + 1);
+    }
+
+    /** Returns the number of pairs m. */
+    int count() {
+        return now.numRows;
+    }
+}
