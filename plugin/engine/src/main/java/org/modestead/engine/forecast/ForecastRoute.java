@@ -1,0 +1,27 @@
+package org.modestead.engine.forecast;
+
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * One way to continue a run: a function of its history alone, at a fixed time step, in prepared units.
+ *
+ * <p>Implementations are immutable and thread-safe.
+ */
+public interface ForecastRoute {
+
+    /** Returns the word used in tables. */
+    String id();
+
+    /** Returns how many samples of history a forecast needs, at least 1. */
+    int memory();
+
+    /**
+     * Continues a run.
+     *
+     * @param history samples up to the origin, newest last, at least {@link #memory()} x n, prepared units, one step
+     *     apart; not modified
+     * @param steps how many to forecast, at least 1
+     * @return new steps x n matrix, prepared units; entries may overflow, the caller judges
+     */
+    DMatrixRMaj forecast(DMatrixRMaj history, int steps);
+}

@@ -1,0 +1,149 @@
+package org.modestead.engine.forecast;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.Progress;
+import org.modestead.engine.recording.Preparation;
+
+/**
+ * The forecast of every run by one route, back in recorded units, with what is doubtful about it.
+ *
+ * @param rows by run, time and channel
+ * @param doubts forecasts cut short, forecasts that leave the sampled region, runs too short to start from
+ */
+record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
+
+    private static final int NAMED = 5;
+
+    /**
+     * Forecasts.
+     *
+     * @throws ForecastFault if there is no run to start from
+     */
+    static ForecastTable of(ForecastTask task, ForecastRoute route, Bands bands, Progress progress) {
+        List<Series> all = starts(task);
+        Builder builder = new Builder(task, bands);
+        List<String> tooShort = new ArrayList<>();
+        for (int s = 0; s < all.size(); s++) {
+            progress.checkCancelled();
+            progress.report((double) s / all.size(), "forecasting run " + all.get(s).id());
+            if (all.get(s).length() < route.memory()) {
+                tooShort.add(all.get(s).id() + " (" + all.get(s).length() + " samples)");
+            } else {
+                builder.add(all.get(s), route);
+            }
+        }
+        if (tooShort.size() == all.size()) {
+            throw new ForecastFault("forecast", "no run is long enough for a state of " + route.memory() + " samples: "
+                    + named(tooShort), "longer runs or fewer delays are needed");
+        }
+        return new ForecastTable(builder.rows, builder.doubts(all.size(), tooShort));
+    }
+
+    private static List<Series> starts(ForecastTask task) {
+        if (task.plan().origin() == Origin.RECORDING_END) {
+            return Series.ends(task.snapshots(), task.step());
+        }
+        if (task.holdout().isEmpty()) {
+            throw new ForecastFault("forecast origin", "it is before the holdout, but the snapshots hold nothing back",
+                    "choose a holdout when building the snapshots, or start at the end of the recording");
+        }
+        return task.holdout();
+    }
+
+    private static String named(List<String> items) {
+        String head = String.join(", ", items.subList(0, Math.min(NAMED, items.size())));
+        return items.size() > NAMED ? head + " and " + (items.size() - NAMED) + " more" : head;
+    }
+
+    /** Collects rows run by run, and where something was doubtful. */
+    private static final class Builder {
+        private final ForecastTask task;
+        private final Bands bands;
+        private final List<ForecastRow> rows = new ArrayList<>();
+        private final List<String> cut = new ArrayList<>();
+        private final List<String> left = new ArrayList<>();
+
+        Builder(ForecastTask task, Bands bands) {
+            this.task = task;
+            this.bands = bands;
+        }
+
+        void add(Series series, ForecastRoute route) {
+            boolean end = task.plan().origin() == Origin.RECORDING_END;
+            int origin = end ? series.length() - 1 : series.firstOrigin(route.memory());
+            int steps = end || task.plan().horizon().isPresent()
+                    ? task.steps() : Math.min(task.steps(), series.length() - 1 - origin);
+            if (steps < 1) {
+                return;
+            }
+            DMatrixRMaj values = route.forecast(series.history(origin, route.memory()), steps);
+            int kept = sensible(values);
+            if (kept < steps) {
+                cut.add("run " + series.id() + " at " + label(time(series, origin, kept + 1)));
+            }
+            noteLeaving(series, origin, values, kept);
+            for (int lead = 1; lead <= kept; lead++) {
+                addRows(series, time(series, origin, lead), lead, values);
+            }
+        }
+
+        private int sensible(DMatrixRMaj values) {
+            for (int k = 0; k < values.data.length; k++) {
+                if (task.region().absurd(k % values.numCols, values.data[k])) {
+                    return k / values.numCols;
+                }
+            }
+            return values.numRows;
+        }
+
+        private void noteLeaving(Series series, int origin, DMatrixRMaj values, int kept) {
+            for (int k = 0; k < kept * values.numCols; k++) {
+                int channel = k % values.numCols;
+                if (task.region().leaves(channel, values.data[k])) {
+                    left.add("run " + series.id() + ", " + task.snapshots().channels().get(channel).label() + " at "
+                            + label(time(series, origin, k / values.numCols + 1)));
+                    return;
+                }
+            }
+        }
+
+        private void addRows(Series series, double time, int lead, DMatrixRMaj values) {
+            Preparation preparation = task.snapshots().preparation();
+            for (int c = 0; c < values.numCols; c++) {
+                double value = preparation.restore(c, time, values.get(lead - 1, c));
+                double half = bands.halfWidth(lead, c) * preparation.scale()[c];
+                rows.add(new ForecastRow(series.id(), time, c, value, value - half, value + half));
+            }
+        }
+
+        // Where the future was observed its own times are used, so that the tables can be joined on time.
+        private double time(Series series, int origin, int lead) {
+            int sample = origin + lead;
+            return sample < series.length() ? series.times()[sample] : series.end() + (sample - series.length() + 1) * task.step();
+        }
+
+        private String label(double time) {
+            return "time " + task.snapshots().time().format(time);
+        }
+
+        List<Doubt> doubts(int runs, List<String> tooShort) {
+            List<Doubt> out = new ArrayList<>();
+            if (!cut.isEmpty()) {
+                out.add(new Doubt("forecast-cut", "The forecast overflows or goes beyond 1000 times the range of the training data and is"
+                        + " cut there: " + named(cut) + "."));
+            }
+            if (!left.isEmpty()) {
+                out.add(new Doubt("forecast-extrapolates", "In " + left.size() + " of " + runs + " runs the forecast leaves the range"
+                        + " that training sampled (with a margin of 10 %); from there on it is extrapolated: " + named(left) + "."));
+            }
+            if (!tooShort.isEmpty()) {
+                out.add(new Doubt("run-too-short", "No forecast from runs shorter than one state of " + task.memory() + " samples: "
+                        + named(tooShort) + "."));
+            }
+            return out;
+        }
+    }
+}

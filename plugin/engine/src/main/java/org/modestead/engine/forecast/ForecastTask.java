@@ -1,0 +1,161 @@
+package org.modestead.engine.forecast;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.OptionalInt;
+import java.util.stream.DoubleStream;
+import java.util.stream.Stream;
+import org.modestead.engine.operator.Evolution;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.Snapshots.Part;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.Spectrum;
+
+/**
+ * What a plan means for the snapshots at hand, in steps.
+ *
+ * @param snapshots to forecast
+ * @param plan as asked for
+ * @param step Δt of every forecast, in time units
+ * @param memory samples of history that the fitted operator needs
+ * @param steps horizon in steps, at least 1
+ * @param season m of the seasonal naive baseline, empty for none
+ * @param region sampled in training
+ * @param holdout series that judge
+ * @param bands what the bands are calibrated on
+ */
+record ForecastTask(
+        Snapshots snapshots,
+        ForecastPlan plan,
+        double step,
+        int memory,
+        int steps,
+        OptionalInt season,
+        Region region,
+        List<Series> holdout,
+        BandSource bands) {
+
+    // Times are read from text and added up; a step shorter than this share of a step too much is rounding.
+    private static final double ROUNDING = 1e-6;
+    private static final double DEFAULT_SHARE = 0.1;
+
+    /** @throws ForecastFault if the parts do not belong together or the plan cannot be met */
+    static ForecastTask of(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, ForecastPlan plan) {
+        requireSame(snapshots, operator, spectrum);
+        double step = step(snapshots, operator);
+        int memory = snapshots.delay().reach() + 1;
+        List<Series> holdout = Series.of(snapshots, Part.HOLDOUT, step);
+        List<Series> calibration = Series.of(snapshots, Part.CALIBRATION, step);
+        return new ForecastTask(snapshots, plan, step, memory, steps(snapshots, plan, holdout, memory, step),
+                season(snapshots, plan, spectrum, step), Region.of(snapshots), holdout, BandSource.of(calibration, holdout, memory));
+    }
+
+    private static void requireSame(Snapshots snapshots, FittedOperator operator, Spectrum spectrum) {
+        Snapshots fitted = operator.snapshots();
+        if (!snapshots.channels().equals(fitted.channels()) || !snapshots.delay().equals(fitted.delay())) {
+            throw new ForecastFault("forecast", "the snapshots have channels " + snapshots.channels() + " with " + snapshots.delay()
+                    + ", the operator was fitted to " + fitted.channels() + " with " + fitted.delay(), "both must be the same");
+        }
+        if (!samePreparation(snapshots.preparation(), fitted.preparation())) {
+            throw new ForecastFault("forecast", "the snapshots were detrended or scaled otherwise than those the operator was fitted to",
+                    "forecast from the snapshots of the fit");
+        }
+        if (spectrum.rank() != operator.rank()) {
+            throw new ForecastFault("forecast", "the spectrum has rank " + spectrum.rank() + ", the operator " + operator.rank(),
+                    "extract the spectrum from this operator");
+        }
+    }
+
+    private static boolean samePreparation(Preparation a, Preparation b) {
+        return a.origin() == b.origin() && Arrays.equals(a.offset(), b.offset()) && Arrays.equals(a.slope(), b.slope())
+                && Arrays.equals(a.scale(), b.scale());
+    }
+
+    private static double step(Snapshots snapshots, FittedOperator operator) {
+        if (!(operator.evolution() instanceof Evolution.StepMap map)) {
+            return snapshots.step().orElseGet(() -> medianStep(snapshots.training()));
+        }
+        double sampled = snapshots.step().orElse(map.step());
+        if (Math.abs(sampled - map.step()) > ROUNDING * map.step()) {
+            throw new ForecastFault("forecast", "the snapshots have the step " + sampled + ", the step map " + map.step(),
+                    "both must have the same step");
+        }
+        return map.step();
+    }
+
+    private static double medianStep(List<Run> runs) {
+        double[] steps = runs.stream().flatMapToDouble(ForecastTask::gaps).sorted().toArray();
+        if (steps.length == 0) {
+            throw new ForecastFault("forecast", "no training run has two samples", "the time step cannot be told");
+        }
+        return steps[steps.length / 2];
+    }
+
+    private static DoubleStream gaps(Run run) {
+        double[] t = run.times();
+        return java.util.stream.IntStream.range(1, t.length).mapToDouble(k -> t[k] - t[k - 1]);
+    }
+
+    private static int steps(Snapshots snapshots, ForecastPlan plan, List<Series> holdout, int memory, double step) {
+        if (plan.horizon().isPresent()) {
+            return wholeSteps(plan.horizon().getAsDouble(), step);
+        }
+        int held = holdout.stream().mapToInt(series -> series.length() - 1 - series.firstOrigin(memory)).max().orElse(0);
+        double longest = runs(snapshots).mapToDouble(Run::duration).max().orElse(0);
+        return held > 0 ? held : wholeSteps(DEFAULT_SHARE * longest, step);
+    }
+
+    private static Stream<Run> runs(Snapshots snapshots) {
+        return Stream.of(Part.values()).flatMap(part -> snapshots.runs(part).stream());
+    }
+
+    /** Returns a time rounded up to whole steps, at least 1. */
+    static int wholeSteps(double time, double step) {
+        double steps = Math.ceil(time / step - ROUNDING);
+        if (steps > Integer.MAX_VALUE / 2) {
+            throw new ForecastFault("forecast horizon", "it is " + time + ", that is " + steps + " steps of " + step, "it must be shorter");
+        }
+        return Math.max(1, (int) steps);
+    }
+
+    private static OptionalInt season(Snapshots snapshots, ForecastPlan plan, Spectrum spectrum, double step) {
+        int longest = snapshots.training().stream().mapToInt(Run::samples).max().orElse(0);
+        if (plan.season() >= longest) {
+            throw new ForecastFault("forecast season", "it is " + plan.season() + " steps, the longest training run has " + longest
+                    + " samples", "it must be shorter than that run");
+        }
+        if (plan.season() > 0) {
+            return plan.season() > 1 ? OptionalInt.of(plan.season()) : OptionalInt.empty();
+        }
+        return spectrum.modes().stream().filter(Mode::oscillates).findFirst().map(mode -> mode.period() / step)
+                .filter(period -> period >= 2 - ROUNDING && Math.rint(period) < longest)
+                .map(period -> OptionalInt.of((int) Math.rint(period))).orElse(OptionalInt.empty());
+    }
+
+    /** Returns the longest lead time that forecast table or scores can need, in steps. */
+    int leads() {
+        return Math.max(steps, scoreSteps().stream().mapToInt(Integer::intValue).max().orElse(1));
+    }
+
+    /** Returns the longest lead time observed in the holdout, in steps, 0 without holdout. */
+    int observedLeads() {
+        return holdout.stream().mapToInt(series -> series.length() - 1 - series.firstOrigin(memory)).max().orElse(0);
+    }
+
+    /** Returns the score horizons in steps, rising, those that the holdout is too short for included. */
+    List<Integer> scoreSteps() {
+        int full = Math.min(steps, Math.max(1, observedLeads()));
+        Stream<Integer> asked = plan.scoreHorizons().isEmpty()
+                ? Stream.of(1, (full + 3) / 4, (full + 1) / 2, full)
+                : plan.scoreHorizons().stream().map(time -> wholeSteps(time, step));
+        return asked.distinct().sorted().toList();
+    }
+
+    /** Returns m of the scaled errors: the season, or 1. */
+    int scaleSeason() {
+        return season.orElse(1);
+    }
+}

@@ -1,0 +1,97 @@
+package org.modestead.engine.forecast;
+
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.data.ZMatrixRMaj;
+import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.operator.Evolution;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.recording.DelayEmbedding;
+import org.modestead.engine.spectrum.Spectrum;
+
+/**
+ * Forecast by modes.
+ *
+ * <pre>    y(t + kΔt) = Re Σ_j ξ_j m_j^k φ_j(x(t)),    φ(x) = q(x) V</pre>
+ *
+ * <p>The multiplier m_j of one step is the eigenvalue μ_j itself for a step map, so that a negative real μ_j, which
+ * has no real logarithm, alternates as it should; for a generator it is {@code exp(λ_j Δt)}. Conjugate pairs cancel
+ * their imaginary parts to rounding. Only the weights of the newest sample are used.
+ *
+ * <p><b>Weakness.</b> every mode is trusted for ever, and overlapping eigenfunctions give large weights that cancel:
+ * use it for modes that stand or settle. For the scaled generator with a &lt; 1 it reads the rates as those of the flow.
+ */
+public final class ModalRoute implements ForecastRoute {
+
+    private final OrthonormalCompression compression;
+    private final DelayEmbedding delay;
+    private final DMatrixRMaj vectorsRe;
+    private final DMatrixRMaj vectorsIm;
+    private final ZMatrixRMaj weights;
+    private final Complex[] multipliers;
+    private final int channels;
+
+    /**
+     * @param operator whose functions are evaluated
+     * @param spectrum of that operator at its chosen rank
+     * @param step Δt in time units, positive; for a step map its own step
+     */
+    public ModalRoute(FittedOperator operator, Spectrum spectrum, double step) {
+        compression = operator.chosen();
+        delay = operator.snapshots().delay();
+        channels = operator.snapshots().channels().size();
+        vectorsRe = part(spectrum.vectors(), 0);
+        vectorsIm = part(spectrum.vectors(), 1);
+        weights = spectrum.joint();
+        multipliers = multipliers(operator.evolution(), spectrum.eigenvalues(), step);
+    }
+
+    @Override
+    public String id() {
+        return Route.MODAL.word();
+    }
+
+    @Override
+    public int memory() {
+        return delay.reach() + 1;
+    }
+
+    @Override
+    public DMatrixRMaj forecast(DMatrixRMaj history, int steps) {
+        DMatrixRMaj q = compression.evaluate(DelayState.at(history, history.numRows - 1, delay));
+        DMatrixRMaj re = Matrices.product(q, vectorsRe);
+        DMatrixRMaj im = Matrices.product(q, vectorsIm);
+        DMatrixRMaj out = new DMatrixRMaj(steps, channels);
+        for (int j = 0; j < multipliers.length; j++) {
+            addMode(j, new Complex(re.data[j], im.data[j]), out);
+        }
+        return out;
+    }
+
+    private void addMode(int j, Complex start, DMatrixRMaj out) {
+        Complex phi = start;
+        for (int k = 0; k < out.numRows; k++) {
+            phi = phi.times(multipliers[j]);
+            for (int c = 0; c < channels; c++) {
+                double value = phi.re() * weights.getReal(j, c) - phi.im() * weights.getImag(j, c);
+                out.data[k * channels + c] += value;
+            }
+        }
+    }
+
+    private static Complex[] multipliers(Evolution evolution, List<Complex> eigenvalues, double step) {
+        return eigenvalues.stream()
+                .map(value -> evolution instanceof Evolution.StepMap ? value : evolution.rate(value).times(step).exp())
+                .toArray(Complex[]::new);
+    }
+
+    private static DMatrixRMaj part(ZMatrixRMaj z, int offset) {
+        DMatrixRMaj out = new DMatrixRMaj(z.numRows, z.numCols);
+        for (int k = 0; k < out.data.length; k++) {
+            out.data[k] = z.data[2 * k + offset];
+        }
+        return out;
+    }
+}

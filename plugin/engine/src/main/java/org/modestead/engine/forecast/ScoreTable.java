@@ -1,0 +1,116 @@
+package org.modestead.engine.forecast;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.stream.DoubleStream;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.forecast.Backtest.Errors;
+
+/**
+ * Scores on the holdout, one row a method and horizon.
+ *
+ * @param rows by method and horizon
+ * @param doubts horizons left out, few origins, forecasts that had to be limited
+ */
+record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
+
+    private static final int FEW_ORIGINS = 5;
+
+    static ScoreTable of(ForecastTask task, List<Judged> methods, ErrorUnits units) {
+        List<ScoreRow> rows = new ArrayList<>();
+        for (Judged method : methods) {
+            for (int horizon : task.scoreSteps()) {
+                if (origins(method, horizon) > 0) {
+                    rows.add(row(task, method, units, horizon));
+                }
+            }
+        }
+        return new ScoreTable(rows, doubts(task, methods, units));
+    }
+
+    private static long origins(Judged method, int horizon) {
+        return method.holdout().errors().stream().filter(e -> e.leads() >= horizon).count();
+    }
+
+    private static ScoreRow row(ForecastTask task, Judged method, ErrorUnits units, int horizon) {
+        List<Errors> reaching = method.holdout().errors().stream().filter(e -> e.leads() >= horizon).toList();
+        double[] pooled = reaching.stream().flatMapToDouble(e -> scaled(e, horizon, units.pooled())).toArray();
+        double mase = Scores.mean(reaching.stream().flatMapToDouble(e -> scaled(e, horizon, units.scaled()))
+                .map(Math::abs).filter(e -> !Double.isNaN(e)));
+        List<double[]> held = reaching.stream().filter(task.bands()::judges)
+                .flatMap(e -> bandScores(e, method.bands(), units, horizon, 1 - task.plan().coverage()).stream()).toList();
+        return new ScoreRow(method.route().id(), horizon * task.step(), Scores.rmse(pooled), Scores.mae(pooled), mase,
+                Scores.mean(held.stream().mapToDouble(s -> s[0])), Scores.mean(held.stream().mapToDouble(s -> s[1])));
+    }
+
+    private static DoubleStream scaled(Errors errors, int horizon, double[] factor) {
+        DMatrixRMaj values = errors.values();
+        int n = values.numCols;
+        return java.util.stream.IntStream.range(0, horizon * n).mapToDouble(k -> values.data[k] * factor[k % n]);
+    }
+
+    // Each entry: 1 or 0 for inside or outside, and the interval score. Both depend on the error alone, not on the value.
+    private static List<double[]> bandScores(Errors errors, Bands bands, ErrorUnits units, int horizon, double alpha) {
+        List<double[]> out = new ArrayList<>();
+        for (int lead = 1; lead <= horizon; lead++) {
+            for (int c = 0; c < errors.values().numCols; c++) {
+                double half = bands.halfWidth(lead, c) * units.pooled()[c];
+                double error = errors.values().get(lead - 1, c) * units.pooled()[c];
+                if (!Double.isNaN(half)) {
+                    out.add(new double[] {Math.abs(error) <= half ? 1 : 0, Scores.interval(-half, half, error, alpha)});
+                }
+            }
+        }
+        return out;
+    }
+
+    private static List<Doubt> doubts(ForecastTask task, List<Judged> methods, ErrorUnits units) {
+        List<Doubt> out = new ArrayList<>();
+        if (methods.get(0).holdout().errors().isEmpty()) {
+            out.add(new Doubt("no-holdout", "The snapshots hold back nothing that can be forecast: the forecast is not scored."));
+            return out;
+        }
+        addHorizonDoubts(task, methods.get(0), out);
+        for (Judged method : methods) {
+            addMethodDoubts(method, methods.get(0), out);
+        }
+        if (units.mixed()) {
+            out.add(new Doubt("mixed-units", "Scores pool channels of different units that were not scaled; the channel with the largest"
+                    + " numbers decides them. Scale the channels when building the snapshots."));
+        }
+        if (DoubleStream.of(units.scaled()).anyMatch(Double::isNaN)) {
+            out.add(new Doubt("no-naive-scale", "At least one channel does not change in training from one season (or step) to the next;"
+                    + " it is left out of the scaled error (mase)."));
+        }
+        return out;
+    }
+
+    private static void addHorizonDoubts(ForecastTask task, Judged route, List<Doubt> out) {
+        for (int horizon : task.scoreSteps()) {
+            long origins = origins(route, horizon);
+            String time = String.format(Locale.ROOT, "%.6g", horizon * task.step());
+            if (origins == 0) {
+                out.add(new Doubt("horizon-beyond-holdout", "The holdout is too short to score a horizon of " + time + " ("
+                        + horizon + " steps; it reaches " + task.observedLeads() + ")."));
+            } else if (origins < FEW_ORIGINS) {
+                out.add(new Doubt("few-origins", "Scores at horizon " + time + " rest on " + origins + " origin"
+                        + (origins == 1 ? "" : "s") + " only."));
+            }
+        }
+    }
+
+    private static void addMethodDoubts(Judged method, Judged route, List<Doubt> out) {
+        String name = method.route().id();
+        int origins = method.holdout().errors().size();
+        if (method.holdout().limited() > 0) {
+            out.add(new Doubt("score-limited", "In scoring, " + method.holdout().limited() + " values of method " + name
+                    + " overflow or go beyond 1000 times the training range; they count at that limit."));
+        }
+        if (method.route().memory() > route.route().memory() && origins < route.holdout().errors().size()) {
+            out.add(new Doubt("fewer-origins", "Method " + name + " is scored from " + origins + " origins, the others from "
+                    + route.holdout().errors().size() + ": earlier ones lack its history of " + method.route().memory() + " samples."));
+        }
+    }
+}
