@@ -51,7 +51,7 @@ record Backtest(List<Errors> errors, int limited) {
         for (int s = 0; s < all.size(); s++) {
             Series series = all.get(s);
             int start = series.firstOrigin(memory);
-            int count = Math.max(0, series.length() - 1 - start);
+            int count = Math.max(0, series.ahead(memory));
             int taken = Math.min(share, count);
             for (int k = 0; k < taken; k++) {
                 progress.checkCancelled();

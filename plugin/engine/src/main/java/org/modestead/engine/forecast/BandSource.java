@@ -23,23 +23,19 @@ record BandSource(List<Series> calibration, int firstSeries, int firstOrigin, bo
      * @param memory samples of history that the fitted operator needs
      */
     static BandSource of(List<Series> calibration, List<Series> holdout, int memory) {
-        if (calibration.stream().anyMatch(series -> scorable(series, memory) > 0)) {
+        if (calibration.stream().anyMatch(series -> series.ahead(memory) > 0)) {
             return new BandSource(calibration, 0, 0, false, "the calibration part");
         }
         if (holdout.size() > 1) {
             int half = (holdout.size() + 1) / 2;
             return new BandSource(holdout.subList(0, half), half, 0, true, "the first half of the holdout runs");
         }
-        if (holdout.size() == 1 && scorable(holdout.get(0), memory) > 1) {
+        if (holdout.size() == 1 && holdout.get(0).ahead(memory) > 1) {
             Series only = holdout.get(0);
-            int middle = only.length() - scorable(only, memory) / 2;
+            int middle = only.length() - only.ahead(memory) / 2;
             return new BandSource(List.of(only.before(middle)), 0, middle - 1, true, "the first half of the holdout");
         }
         return new BandSource(List.of(), 0, 0, false, "");
-    }
-
-    private static int scorable(Series series, int memory) {
-        return series.length() - 1 - series.firstOrigin(memory);
     }
 
     /** Returns whether an origin may judge the bands. */

@@ -32,7 +32,8 @@ record ErrorUnits(double[] pooled, double[] scaled, String words, boolean mixed)
         boolean common = channels.size() == 1
                 || !unit.isEmpty() && channels.stream().allMatch(channel -> channel.unit().equals(unit));
         double[] pooled = IntStream.range(0, scale.length).mapToDouble(c -> common ? scale[c] : 1).toArray();
-        double[] scaled = IntStream.range(0, scale.length).mapToDouble(c -> scale[c] / naive(snapshots, c, season)).toArray();
+        double[] scaled = IntStream.range(0, scale.length)
+                .mapToDouble(c -> scale[c] / naive(snapshots, c, season)).toArray();
         boolean unscaled = IntStream.range(0, scale.length).allMatch(c -> scale[c] == 1);
         return new ErrorUnits(pooled, scaled, common ? recorded(unit) : "prepared units (each channel divided by its scale)",
                 !common && unscaled);
@@ -43,8 +44,9 @@ record ErrorUnits(double[] pooled, double[] scaled, String words, boolean mixed)
     }
 
     private static double naive(Snapshots snapshots, int channel, int season) {
-        double scale = Scores.naiveScale(snapshots.training().stream().map(run -> recorded(run, channel, snapshots.preparation())).toList(),
-                season);
+        List<double[]> runs = snapshots.training().stream()
+                .map(run -> recorded(run, channel, snapshots.preparation())).toList();
+        double scale = Scores.naiveScale(runs, season);
         return scale > 0 ? scale : Double.NaN;
     }
 

@@ -41,7 +41,8 @@ public record ForecastPlan(
         horizon.ifPresent(time -> requirePositive("forecast horizon", time));
         scoreHorizons.forEach(time -> requirePositive("score horizon", time));
         if (!(coverage > 0 && coverage < 1)) {
-            throw new ForecastFault("forecast coverage", "it is " + coverage, "it must lie between 0 and 1, for example 0.9");
+            throw new ForecastFault("forecast coverage", "it is " + coverage,
+                    "it must lie between 0 and 1, for example 0.9");
         }
         if (season < 0) {
             throw new ForecastFault("forecast season", "it is " + season + " steps", "it must be 0 (guessed) or more");

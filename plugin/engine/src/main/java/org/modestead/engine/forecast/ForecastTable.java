@@ -75,7 +75,7 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
             boolean end = task.plan().origin() == Origin.RECORDING_END;
             int origin = end ? series.length() - 1 : series.firstOrigin(route.memory());
             int steps = end || task.plan().horizon().isPresent()
-                    ? task.steps() : Math.min(task.steps(), series.length() - 1 - origin);
+                    ? task.steps() : Math.min(task.steps(), series.ahead(route.memory()));
             if (steps < 1) {
                 return;
             }
@@ -122,7 +122,8 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
         // Where the future was observed its own times are used, so that the tables can be joined on time.
         private double time(Series series, int origin, int lead) {
             int sample = origin + lead;
-            return sample < series.length() ? series.times()[sample] : series.end() + (sample - series.length() + 1) * task.step();
+            int beyond = sample - series.length() + 1;
+            return beyond <= 0 ? series.times()[sample] : series.end() + beyond * task.step();
         }
 
         private String label(double time) {
@@ -132,16 +133,17 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
         List<Doubt> doubts(int runs, List<String> tooShort) {
             List<Doubt> out = new ArrayList<>();
             if (!cut.isEmpty()) {
-                out.add(new Doubt("forecast-cut", "The forecast overflows or goes beyond 1000 times the range of the training data and is"
-                        + " cut there: " + named(cut) + "."));
+                out.add(new Doubt("forecast-cut", "The forecast overflows or goes beyond 1000 times the range of the"
+                        + " training data and is cut there: " + named(cut) + "."));
             }
             if (!left.isEmpty()) {
-                out.add(new Doubt("forecast-extrapolates", "In " + left.size() + " of " + runs + " runs the forecast leaves the range"
-                        + " that training sampled (with a margin of 10 %); from there on it is extrapolated: " + named(left) + "."));
+                out.add(new Doubt("forecast-extrapolates", "In " + left.size() + " of " + runs + " runs the forecast leaves"
+                        + " the range that training sampled (with a margin of 10 %) and is extrapolated from there on: "
+                        + named(left) + "."));
             }
             if (!tooShort.isEmpty()) {
-                out.add(new Doubt("run-too-short", "No forecast from runs shorter than one state of " + task.memory() + " samples: "
-                        + named(tooShort) + "."));
+                out.add(new Doubt("run-too-short", "No forecast from runs shorter than one state of " + task.memory()
+                        + " samples: " + named(tooShort) + "."));
             }
             return out;
         }

@@ -1,12 +1,16 @@
 package org.modestead.engine.forecast;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.OptionalInt;
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
+import org.modestead.engine.Doubt;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
@@ -50,23 +54,30 @@ record ForecastTask(
         List<Series> holdout = Series.of(snapshots, Part.HOLDOUT, step);
         List<Series> calibration = Series.of(snapshots, Part.CALIBRATION, step);
         return new ForecastTask(snapshots, plan, step, memory, steps(snapshots, plan, holdout, memory, step),
-                season(snapshots, plan, spectrum, step), Region.of(snapshots), holdout, BandSource.of(calibration, holdout, memory));
+                season(snapshots, plan, spectrum, step), Region.of(snapshots), holdout,
+                BandSource.of(calibration, holdout, memory));
     }
 
     private static void requireSame(Snapshots snapshots, FittedOperator operator, Spectrum spectrum) {
         Snapshots fitted = operator.snapshots();
-        if (!snapshots.channels().equals(fitted.channels()) || !snapshots.delay().equals(fitted.delay())) {
-            throw new ForecastFault("forecast", "the snapshots have channels " + snapshots.channels() + " with " + snapshots.delay()
-                    + ", the operator was fitted to " + fitted.channels() + " with " + fitted.delay(), "both must be the same");
+        if (!states(snapshots).equals(states(fitted))) {
+            throw new ForecastFault("forecast", "the snapshots have " + states(snapshots) + ", the operator was fitted to "
+                    + states(fitted), "both must be the same");
         }
         if (!samePreparation(snapshots.preparation(), fitted.preparation())) {
-            throw new ForecastFault("forecast", "the snapshots were detrended or scaled otherwise than those the operator was fitted to",
+            throw new ForecastFault("forecast", "the snapshots were detrended or scaled otherwise than those of the fit",
                     "forecast from the snapshots of the fit");
         }
         if (spectrum.rank() != operator.rank()) {
-            throw new ForecastFault("forecast", "the spectrum has rank " + spectrum.rank() + ", the operator " + operator.rank(),
-                    "extract the spectrum from this operator");
+            throw new ForecastFault("forecast", "the spectrum has rank " + spectrum.rank() + ", the operator "
+                    + operator.rank(), "extract the spectrum from this operator");
         }
+    }
+
+    private static String states(Snapshots snapshots) {
+        List<String> labels = snapshots.channels().stream().map(Channel::label).toList();
+        return "channels " + labels + " with " + snapshots.delay().depth() + " delays "
+                + snapshots.delay().spacing() + " samples apart";
     }
 
     private static boolean samePreparation(Preparation a, Preparation b) {
@@ -96,14 +107,14 @@ record ForecastTask(
 
     private static DoubleStream gaps(Run run) {
         double[] t = run.times();
-        return java.util.stream.IntStream.range(1, t.length).mapToDouble(k -> t[k] - t[k - 1]);
+        return IntStream.range(1, t.length).mapToDouble(k -> t[k] - t[k - 1]);
     }
 
     private static int steps(Snapshots snapshots, ForecastPlan plan, List<Series> holdout, int memory, double step) {
         if (plan.horizon().isPresent()) {
             return wholeSteps(plan.horizon().getAsDouble(), step);
         }
-        int held = holdout.stream().mapToInt(series -> series.length() - 1 - series.firstOrigin(memory)).max().orElse(0);
+        int held = observedLeads(holdout, memory);
         double longest = runs(snapshots).mapToDouble(Run::duration).max().orElse(0);
         return held > 0 ? held : wholeSteps(DEFAULT_SHARE * longest, step);
     }
@@ -116,7 +127,8 @@ record ForecastTask(
     static int wholeSteps(double time, double step) {
         double steps = Math.ceil(time / step - ROUNDING);
         if (steps > Integer.MAX_VALUE / 2) {
-            throw new ForecastFault("forecast horizon", "it is " + time + ", that is " + steps + " steps of " + step, "it must be shorter");
+            throw new ForecastFault("forecast horizon", "it is " + time + ", that is " + steps + " steps of " + step,
+                    "it must be shorter");
         }
         return Math.max(1, (int) steps);
     }
@@ -124,8 +136,8 @@ record ForecastTask(
     private static OptionalInt season(Snapshots snapshots, ForecastPlan plan, Spectrum spectrum, double step) {
         int longest = snapshots.training().stream().mapToInt(Run::samples).max().orElse(0);
         if (plan.season() >= longest) {
-            throw new ForecastFault("forecast season", "it is " + plan.season() + " steps, the longest training run has " + longest
-                    + " samples", "it must be shorter than that run");
+            throw new ForecastFault("forecast season", "it is " + plan.season() + " steps, the longest training run has "
+                    + longest + " samples", "it must be shorter than that run");
         }
         if (plan.season() > 0) {
             return plan.season() > 1 ? OptionalInt.of(plan.season()) : OptionalInt.empty();
@@ -142,7 +154,11 @@ record ForecastTask(
 
     /** Returns the longest lead time observed in the holdout, in steps, 0 without holdout. */
     int observedLeads() {
-        return holdout.stream().mapToInt(series -> series.length() - 1 - series.firstOrigin(memory)).max().orElse(0);
+        return observedLeads(holdout, memory);
+    }
+
+    private static int observedLeads(List<Series> holdout, int memory) {
+        return Math.max(0, holdout.stream().mapToInt(series -> series.ahead(memory)).max().orElse(0));
     }
 
     /** Returns the score horizons in steps, rising, those that the holdout is too short for included. */
@@ -157,5 +173,25 @@ record ForecastTask(
     /** Returns m of the scaled errors: the season, or 1. */
     int scaleSeason() {
         return season.orElse(1);
+    }
+
+    /** Returns what a reader must know about the data that the operator goes on from. */
+    List<Doubt> doubts(FittedOperator operator) {
+        List<Doubt> out = new ArrayList<>();
+        if (snapshots.step().isEmpty()) {
+            out.add(new Doubt("uneven-times", "The recording is sampled unevenly: forecasts are " + Summary.figure(step)
+                    + " apart (the median training step), and observed values are interpolated linearly to these times for"
+                    + " the scores."));
+        }
+        if (!snapshots.inputs().isEmpty()) {
+            out.add(new Doubt("inputs-not-forecast", "The forecast does not know what the " + snapshots.inputs().size()
+                    + " inputs will do; it goes on as the training runs did on the whole."));
+        }
+        if (operator.evolution() instanceof Evolution.Generator generator && generator.contraction() != 1) {
+            out.add(new Doubt("scaled-generator", "The forecast reads the scaled generator (factor "
+                    + Summary.figure(generator.contraction()) + ") as that of the flow itself; the further the factor is"
+                    + " from 1, the rougher that is."));
+        }
+        return out;
     }
 }

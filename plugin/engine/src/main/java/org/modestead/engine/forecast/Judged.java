@@ -1,5 +1,8 @@
 package org.modestead.engine.forecast;
 
+import java.util.ArrayList;
+import java.util.List;
+import org.modestead.engine.Doubt;
 import org.modestead.engine.Progress;
 
 /**
@@ -19,5 +22,28 @@ record Judged(ForecastRoute route, Bands bands, int calibrationOrigins, Backtest
         Bands bands = Bands.of(calibration.errors(), leads, task.snapshots().channels().size(), task.plan().coverage());
         return new Judged(route, bands, calibration.errors().size(),
                 Backtest.of(route, task.holdout(), memory, leads, task.region(), progress));
+    }
+
+    /** Returns what a reader must know about the bands. */
+    List<Doubt> bandDoubts(ForecastTask task) {
+        int reach = bands.reach();
+        String promised = Summary.percent(task.plan().coverage());
+        if (reach == 0) {
+            return List.of(new Doubt("no-bands", "The forecast has no bands: " + calibrationOrigins + " origins outside"
+                    + " training are too few for " + promised + " coverage; keep a calibration part or a longer holdout."));
+        }
+        List<Doubt> out = new ArrayList<>();
+        out.add(new Doubt("bands-not-exchangeable", "The bands promise " + promised + " coverage only for exchangeable"
+                + " errors; errors of a time series are not, so trust the coverage measured on the holdout."));
+        if (reach < task.steps()) {
+            out.add(new Doubt("bands-end", "Bands reach " + Summary.figure(reach * task.step()) + " (" + reach + " of "
+                    + task.steps() + " steps) ahead; for longer ones keep a longer calibration part."));
+        }
+        if (task.bands().halved() && task.plan().origin() == Origin.BEFORE_HOLDOUT) {
+            out.add(new Doubt("bands-seen", "The bands were calibrated on " + task.bands().words() + ", which the forecast"
+                    + " table covers: do not count how often it lies inside them; the score table uses only the other"
+                    + " half."));
+        }
+        return out;
     }
 }

@@ -23,7 +23,8 @@ record RouteChoice(Route route, String sentence, List<Doubt> doubts) {
         Optional<Grade> grade = verdict.map(v -> v.overall().grade());
         boolean trusted = grade.map(RouteChoice::carries).orElse(true);
         Route route = asked == Route.AUTO ? (trusted ? Route.MODAL : Route.PROJECTION) : asked;
-        String because = grade.map(g -> "the verdict on the modes is '" + g.word() + "'").orElse("the modes were not checked");
+        String because = grade.map(g -> "the verdict on the modes is '" + g.word() + "'")
+                .orElse("the modes were not checked");
         String why = asked == Route.AUTO ? because : "the settings ask for it; " + because;
         return new RouteChoice(route, "Forecast by the " + route.word() + " route: " + why + ".", doubts(route, grade));
     }
@@ -37,9 +38,11 @@ record RouteChoice(Route route, String sentence, List<Doubt> doubts) {
             return List.of();
         }
         if (grade.isEmpty()) {
-            return List.of(new Doubt("modes-not-checked", "The forecast adds up modes that no well-posedness check has seen."));
+            return List.of(new Doubt("modes-not-checked",
+                    "The forecast adds up modes that no well-posedness check has seen."));
         }
-        return carries(grade.get()) ? List.of() : List.of(new Doubt("modes-not-trusted", "The forecast adds up modes whose verdict is '"
-                + grade.get().word() + "': " + grade.get().advice() + "; the projection route does not need them."));
+        return carries(grade.get()) ? List.of() : List.of(new Doubt("modes-not-trusted",
+                "The forecast adds up modes whose verdict is '" + grade.get().word() + "': " + grade.get().advice()
+                        + "; the projection route does not need them."));
     }
 }

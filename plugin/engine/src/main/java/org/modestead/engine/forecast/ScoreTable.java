@@ -1,9 +1,12 @@
 package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
-import java.util.Locale;
+import java.util.Optional;
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
+import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.forecast.Backtest.Errors;
@@ -27,7 +30,7 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
                 }
             }
         }
-        return new ScoreTable(rows, doubts(task, methods, units));
+        return new ScoreTable(rows, doubts(task, methods, units, rows));
     }
 
     private static long origins(Judged method, int horizon) {
@@ -48,7 +51,7 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
     private static DoubleStream scaled(Errors errors, int horizon, double[] factor) {
         DMatrixRMaj values = errors.values();
         int n = values.numCols;
-        return java.util.stream.IntStream.range(0, horizon * n).mapToDouble(k -> values.data[k] * factor[k % n]);
+        return IntStream.range(0, horizon * n).mapToDouble(k -> values.data[k] * factor[k % n]);
     }
 
     // Each entry: 1 or 0 for inside or outside, and the interval score. Both depend on the error alone, not on the value.
@@ -66,31 +69,49 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
         return out;
     }
 
-    private static List<Doubt> doubts(ForecastTask task, List<Judged> methods, ErrorUnits units) {
-        List<Doubt> out = new ArrayList<>();
+    private static List<Doubt> doubts(ForecastTask task, List<Judged> methods, ErrorUnits units, List<ScoreRow> rows) {
         if (methods.get(0).holdout().errors().isEmpty()) {
-            out.add(new Doubt("no-holdout", "The snapshots hold back nothing that can be forecast: the forecast is not scored."));
-            return out;
+            return List.of(new Doubt("no-holdout",
+                    "The snapshots hold back nothing that can be forecast: the forecast is not scored."));
         }
+        List<Doubt> out = new ArrayList<>();
         addHorizonDoubts(task, methods.get(0), out);
         for (Judged method : methods) {
             addMethodDoubts(method, methods.get(0), out);
         }
+        addUnitDoubts(units, out);
+        rows.stream().filter(row -> row.method().equals(rows.get(0).method()))
+                .forEach(own -> better(rows, own).ifPresent(naive -> out.add(naiveIsBetter(naive, own))));
+        return out;
+    }
+
+    private static Doubt naiveIsBetter(ScoreRow naive, ScoreRow own) {
+        return new Doubt("naive-is-better", "At horizon " + Summary.figure(own.horizon()) + " " + naive.method()
+                + " has the smaller error (RMSE " + Summary.figure(naive.rmse()) + " against " + Summary.figure(own.rmse())
+                + "): the fitted operator adds nothing there.");
+    }
+
+    private static Optional<ScoreRow> better(List<ScoreRow> rows, ScoreRow own) {
+        return rows.stream().filter(row -> row.horizon() == own.horizon() && row.rmse() < own.rmse())
+                .filter(row -> Stream.of(Route.values()).noneMatch(route -> route.word().equals(row.method())))
+                .min(Comparator.comparingDouble(ScoreRow::rmse));
+    }
+
+    private static void addUnitDoubts(ErrorUnits units, List<Doubt> out) {
         if (units.mixed()) {
-            out.add(new Doubt("mixed-units", "Scores pool channels of different units that were not scaled; the channel with the largest"
-                    + " numbers decides them. Scale the channels when building the snapshots."));
+            out.add(new Doubt("mixed-units", "Scores pool channels of different units that were not scaled; the channel with"
+                    + " the largest numbers decides them. Scale the channels when building the snapshots."));
         }
         if (DoubleStream.of(units.scaled()).anyMatch(Double::isNaN)) {
-            out.add(new Doubt("no-naive-scale", "At least one channel does not change in training from one season (or step) to the next;"
-                    + " it is left out of the scaled error (mase)."));
+            out.add(new Doubt("no-naive-scale", "At least one channel does not change in training from one season (or step)"
+                    + " to the next; it is left out of the scaled error (mase)."));
         }
-        return out;
     }
 
     private static void addHorizonDoubts(ForecastTask task, Judged route, List<Doubt> out) {
         for (int horizon : task.scoreSteps()) {
             long origins = origins(route, horizon);
-            String time = String.format(Locale.ROOT, "%.6g", horizon * task.step());
+            String time = Summary.figure(horizon * task.step());
             if (origins == 0) {
                 out.add(new Doubt("horizon-beyond-holdout", "The holdout is too short to score a horizon of " + time + " ("
                         + horizon + " steps; it reaches " + task.observedLeads() + ")."));
@@ -108,9 +129,10 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
             out.add(new Doubt("score-limited", "In scoring, " + method.holdout().limited() + " values of method " + name
                     + " overflow or go beyond 1000 times the training range; they count at that limit."));
         }
-        if (method.route().memory() > route.route().memory() && origins < route.holdout().errors().size()) {
+        if (origins < route.holdout().errors().size()) {
             out.add(new Doubt("fewer-origins", "Method " + name + " is scored from " + origins + " origins, the others from "
-                    + route.holdout().errors().size() + ": earlier ones lack its history of " + method.route().memory() + " samples."));
+                    + route.holdout().errors().size() + ": earlier ones lack its history of " + method.route().memory()
+                    + " samples."));
         }
     }
 }

@@ -131,6 +131,11 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
         return Math.max(first - 1, memory - 1);
     }
 
+    /** Returns how many samples can be forecast from the first origin; none when 0 or less. */
+    int ahead(int memory) {
+        return length() - 1 - firstOrigin(memory);
+    }
+
     /** Returns the last {@code memory} samples up to the origin, newest last. */
     DMatrixRMaj history(int origin, int memory) {
         return Matrices.block(values, origin + 1 - memory, origin + 1, 0, values.numCols);
@@ -138,6 +143,7 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
 
     /** Returns the series without what comes at and after a sample. */
     Series before(int end) {
-        return new Series(id, Arrays.copyOf(times, end), Matrices.block(values, 0, end, 0, values.numCols), Math.min(first, end));
+        DMatrixRMaj kept = Matrices.block(values, 0, end, 0, values.numCols);
+        return new Series(id, Arrays.copyOf(times, end), kept, Math.min(first, end));
     }
 }

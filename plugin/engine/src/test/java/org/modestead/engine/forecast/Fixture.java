@@ -1,6 +1,7 @@
 package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -13,7 +14,10 @@ import org.hipparchus.linear.EigenDecompositionNonSymmetric;
 import org.hipparchus.linear.FieldVector;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.FunctionBasis;
+import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.operator.Compression;
+import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
@@ -62,6 +66,34 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
         }
     }
 
+    /** Stands where a fitted operator names its estimator; nothing here fits. */
+    private static final class ByHand implements Estimator {
+        @Override
+        public String id() {
+            return "by-hand";
+        }
+
+        @Override
+        public String describe() {
+            return "written down by hand";
+        }
+
+        @Override
+        public Optional<KernelSpec> kernel() {
+            return Optional.empty();
+        }
+
+        @Override
+        public Compression compress(Snapshots snapshots, Progress progress) {
+            throw new UnsupportedOperationException("nothing is fitted here");
+        }
+
+        @Override
+        public Optional<Estimator> otherStep(Snapshots snapshots) {
+            return Optional.empty();
+        }
+    }
+
     /** The flow or map {@code x -> A x} of the state, seen through its coordinates: {@code action = Aᵀ}. */
     static Fixture linear(Snapshots snapshots, Evolution evolution, double[][] a) {
         int n = a.length;
@@ -69,13 +101,15 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
     }
 
     /** Any functions that an operator maps among themselves. */
-    static Fixture of(Snapshots snapshots, Evolution evolution, FunctionBasis basis, DMatrixRMaj action, DMatrixRMaj observable) {
+    static Fixture of(Snapshots snapshots, Evolution evolution, FunctionBasis basis, DMatrixRMaj action,
+            DMatrixRMaj observable) {
         int r = basis.size();
         double[] singular = new double[r];
-        java.util.Arrays.fill(singular, 1);
+        Arrays.fill(singular, 1);
         OrthonormalCompression compression = new OrthonormalCompression(basis, CommonOps_DDRM.identity(r), action,
                 CommonOps_DDRM.identity(r), observable, singular, 1, InnerProduct.DATA, evolution);
-        FittedOperator operator = new FittedOperator(compression, r, "by hand", "linear", "by hand", Optional.empty(), snapshots, List.of());
+        FittedOperator operator = new FittedOperator(compression, r, "by hand", new ByHand(), "by hand", Optional.empty(),
+                snapshots, List.of());
         return new Fixture(operator, spectrum(snapshots, evolution, action, observable));
     }
 
@@ -102,7 +136,8 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
         ZMatrixRMaj joint = new ZMatrixRMaj(r, observable.numCols);
         CommonOps_ZDRM.solve(vectors, right, joint);
         List<Complex> rates = values.stream().map(evolution::rate).toList();
-        return new Spectrum(values, rates, vectors, joint, joint, modes(rates), snapshots.channels(), snapshots.delay(), "s", List.of());
+        return new Spectrum(values, rates, vectors, joint, joint, modes(rates), snapshots.channels(), snapshots.delay(), "s",
+                List.of());
     }
 
     private static List<Mode> modes(List<Complex> rates) {
@@ -132,18 +167,21 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
     }
 
     /** Snapshots as a few words: channels c0, c1, ... of the given units, no delays, nothing prepared. */
-    static Snapshots snapshots(List<String> units, List<Run> training, List<Run> calibration, List<Run> holdout, OptionalDouble step) {
-        return snapshots(units, training, calibration, holdout, step, DelayEmbedding.NONE, Preparation.identity(units.size()));
+    static Snapshots snapshots(List<String> units, List<Run> training, List<Run> calibration, List<Run> holdout,
+            OptionalDouble step) {
+        Preparation asRecorded = Preparation.identity(units.size());
+        return snapshots(units, training, calibration, holdout, step, DelayEmbedding.NONE, asRecorded);
     }
 
-    static Snapshots snapshots(List<String> units, List<Run> training, List<Run> calibration, List<Run> holdout, OptionalDouble step,
-            DelayEmbedding delay, Preparation preparation) {
+    static Snapshots snapshots(List<String> units, List<Run> training, List<Run> calibration, List<Run> holdout,
+            OptionalDouble step, DelayEmbedding delay, Preparation preparation) {
         List<Channel> channels = new ArrayList<>();
         for (String unit : units) {
             channels.add(new Channel("c" + channels.size(), unit));
         }
-        return new Snapshots(channels, List.of(), new TimeAxis(TimeAxis.Kind.NUMBER, "s"), training, calibration, holdout, step, delay,
-                preparation, List.of(), List.of());
+        TimeAxis seconds = new TimeAxis(TimeAxis.Kind.NUMBER, "s");
+        return new Snapshots(channels, List.of(), seconds, training, calibration, holdout, step, delay, preparation,
+                List.of(), List.of());
     }
 
     /** Samples [from, to) of a signal sampled from time 0; the first {@code leadIn} of them are history. */

@@ -1,7 +1,10 @@
 package org.modestead.engine.forecast;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import java.util.Arrays;
+import java.util.Collections;
 import java.util.List;
 import java.util.OptionalDouble;
 import org.ejml.data.DMatrixRMaj;
@@ -27,13 +30,15 @@ class ForecastRouteTest {
 
     private static Snapshots plain(int channels, double step) {
         Fixture.Signal[] signals = new Fixture.Signal[channels];
-        java.util.Arrays.fill(signals, (Fixture.Signal) t -> Math.sin(t));
+        Arrays.fill(signals, (Fixture.Signal) t -> Math.sin(t));
         List<Run> training = List.of(Fixture.run("a", 0, 20, 0, step, signals));
-        return Fixture.snapshots(java.util.Collections.nCopies(channels, "m"), training, List.of(), List.of(), OptionalDouble.of(step));
+        List<String> units = Collections.nCopies(channels, "m");
+        return Fixture.snapshots(units, training, List.of(), List.of(), OptionalDouble.of(step));
     }
 
     private static List<ForecastRoute> routes(Fixture fixture, double step) {
-        return List.of(new ModalRoute(fixture.operator(), fixture.spectrum(), step), new ProjectionRoute(fixture.operator(), step));
+        return List.of(new ModalRoute(fixture.operator(), fixture.spectrum(), step),
+                new ProjectionRoute(fixture.operator(), step));
     }
 
     @Test
@@ -70,7 +75,8 @@ class ForecastRouteTest {
             DMatrixRMaj out = route.forecast(new DMatrixRMaj(new double[][] {{1, 0.5}}), 60);
             for (int k = 1; k <= 60; k++) {
                 double t = k * step;
-                assertEquals(Math.exp(-0.1 * t) * (Math.cos(2 * t) + 0.5 * Math.sin(2 * t)), out.get(k - 1, 0), ROUNDING, route.id());
+                double exact = Math.exp(-0.1 * t) * (Math.cos(2 * t) + 0.5 * Math.sin(2 * t));
+                assertEquals(exact, out.get(k - 1, 0), ROUNDING, route.id());
             }
             double[] integrated = integrate(a, new double[] {1, 0.5}, 60 * step);
             assertEquals(integrated[0], out.get(59, 0), INTEGRATOR, route.id());
@@ -108,7 +114,7 @@ class ForecastRouteTest {
         Fixture fixture = Fixture.linear(plain(2, 0.1), new Evolution.StepMap(0.1), new double[][] {{re, im}, {-im, re}});
         for (ForecastRoute route : routes(fixture, 0.1)) {
             DMatrixRMaj out = route.forecast(new DMatrixRMaj(new double[][] {{1, 0}}), 30);
-            assertEquals(Math.exp(-0.3) * Math.cos(6), out.get(29, 0), 1e-12, route.id() + ", 15 published digits, 30 steps");
+            assertEquals(Math.exp(-0.3) * Math.cos(6), out.get(29, 0), 1e-12, route.id() + ", 15 digits, 30 steps");
             assertEquals(-Math.exp(-0.3) * Math.sin(6), out.get(29, 1), 1e-12, route.id());
         }
     }
@@ -156,8 +162,9 @@ class ForecastRouteTest {
         double d = 1 / (2 * Math.cos(w));
         double[][] map = {{Math.cos(w) + d * Math.cos(2 * w), -d}, {Math.cos(w) - d * Math.cos(2 * w), d}};
         Fixture.Signal cosine = t -> Math.cos(w * t + 0.4);
-        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(Fixture.run("a", 0, 20, 0, 1, cosine)), List.of(), List.of(),
-                OptionalDouble.of(1), new DelayEmbedding(2, 2), Preparation.identity(1));
+        List<Run> training = List.of(Fixture.run("a", 0, 20, 0, 1, cosine));
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), training, List.of(), List.of(), OptionalDouble.of(1),
+                new DelayEmbedding(2, 2), Preparation.identity(1));
         Fixture fixture = Fixture.linear(snapshots, new Evolution.StepMap(1), map);
         for (ForecastRoute route : routes(fixture, 1)) {
             assertEquals(3, route.memory());
@@ -183,6 +190,6 @@ class ForecastRouteTest {
     void seasonalNaiveRepeatsTheLastSeason() {
         DMatrixRMaj history = new DMatrixRMaj(new double[][] {{9}, {1}, {2}, {3}});
         DMatrixRMaj out = new SeasonalNaive(Preparation.identity(1), 1, 3).forecast(history, 7);
-        org.junit.jupiter.api.Assertions.assertArrayEquals(new double[] {1, 2, 3, 1, 2, 3, 1}, out.data);
+        assertArrayEquals(new double[] {1, 2, 3, 1, 2, 3, 1}, out.data);
     }
 }

@@ -3,6 +3,7 @@ package org.modestead.engine.forecast;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import org.hipparchus.distribution.continuous.BetaDistribution;
@@ -72,18 +73,18 @@ class ScoresTest {
 
     @Test
     void conditionalCoverageIsBetaDistributed() {
-        // CHECKS C5.4: n = 99, k = 90, 5-95 % range .8467-.9442; measured here for uniform scores, where coverage = threshold.
+        // CHECKS C5.4: n = 99, k = 90, 5-95 % range .8467-.9442; for uniform scores the coverage is the threshold.
         Random random = new Random(20261201);
         int trials = 4000;
         double[] thresholds = new double[trials];
         for (int t = 0; t < trials; t++) {
             thresholds[t] = SplitConformal.threshold(random.doubles(99).toArray(), 0.9);
         }
-        java.util.Arrays.sort(thresholds);
+        Arrays.sort(thresholds);
         BetaDistribution beta = new BetaDistribution(90, 10);
         assertEquals(0.8467, beta.inverseCumulativeProbability(0.05), 5e-5);
         assertEquals(0.9442, beta.inverseCumulativeProbability(0.95), 5e-5);
-        // Sampling error of a 5 % quantile from 4000 trials: sqrt(.05 * .95 / 4000) / density(1.8) = 0.002, taken four times.
+        // Sampling error of a 5 % quantile from 4000 trials: sqrt(.05 * .95 / 4000) / density(1.8) = 0.002, four times.
         assertEquals(0.8467, thresholds[trials / 20], 0.008);
         assertEquals(0.9442, thresholds[trials - trials / 20], 0.008);
     }

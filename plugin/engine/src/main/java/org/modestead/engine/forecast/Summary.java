@@ -1,0 +1,57 @@
+package org.modestead.engine.forecast;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+
+/** What was done and how it came out, in sentences. */
+final class Summary {
+
+    private Summary() {}
+
+    static List<String> of(ForecastTask task, RouteChoice choice, Judged used, ErrorUnits units, List<ScoreRow> rows) {
+        List<String> out = new ArrayList<>();
+        out.add(choice.sentence());
+        out.add(horizon(task));
+        if (used.bands().reach() > 0) {
+            out.add(percent(task.plan().coverage()) + " bands calibrated on " + task.bands().words() + ", "
+                    + used.calibrationOrigins() + " origins.");
+        }
+        if (!rows.isEmpty()) {
+            out.add("Scores over the holdout, averaged over lead times up to the horizon, in " + units.words()
+                    + "; scaled errors (mase) against " + scale(task) + ".");
+            double shortest = rows.stream().mapToDouble(ScoreRow::horizon).min().orElseThrow();
+            double longest = rows.stream().mapToDouble(ScoreRow::horizon).max().orElseThrow();
+            rows.stream().filter(row -> row.horizon() == shortest || row.horizon() == longest)
+                    .map(Summary::score).forEach(out::add);
+        }
+        return out;
+    }
+
+    private static String horizon(ForecastTask task) {
+        String unit = task.snapshots().time().unit();
+        String from = task.plan().origin() == Origin.RECORDING_END ? "the end of every run"
+                : "the last state before the holdout of every run";
+        return "Horizon " + figure(task.steps() * task.step()) + (unit.isEmpty() ? "" : " " + unit) + ", " + task.steps()
+                + " steps of " + figure(task.step()) + ", from " + from + ".";
+    }
+
+    private static String scale(ForecastTask task) {
+        return task.season().isPresent() ? "a season of " + task.season().getAsInt() + " steps" : "one step";
+    }
+
+    private static String score(ScoreRow row) {
+        return "Horizon " + figure(row.horizon()) + ", " + row.method() + ": RMSE " + figure(row.rmse()) + ", MASE "
+                + (Double.isNaN(row.mase()) ? "unknown" : figure(row.mase())) + ".";
+    }
+
+    /** Returns a share as it is written in sentences. */
+    static String percent(double share) {
+        return String.format(Locale.ROOT, "%.4g", 100 * share).replaceAll("\\.?0+$", "") + " %";
+    }
+
+    /** Returns a number as it is written in sentences: five significant digits. */
+    static String figure(double value) {
+        return String.format(Locale.ROOT, "%.5g", value);
+    }
+}
