@@ -1,6 +1,7 @@
 package org.modestead.nodes.figure;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.function.ToDoubleFunction;
@@ -13,13 +14,14 @@ import org.modestead.nodes.words.TimeUnit;
 /** What becomes of each mode as the basis grows: the ladder of ranks, one curve a mode. */
 public final class LadderFigures {
     private static final int MOST_MODES = 6;
+    private static final double CARRIES = 1e-3;
     private static final double TWO_PI = 2 * Math.PI;
 
     private LadderFigures() {}
 
     /**
      * Draws frequency (when a mode oscillates), growth rate, weight, norm ratio and residual over the rank, for the at
-     * most six strongest modes that are not the constant.
+     * most six strongest modes that carry at least 0.1 % of the signal and are not the constant.
      *
      * @param spectrum the modes at the fitted rank
      * @param verdict with the ladder; an empty ladder gives no figures
@@ -32,7 +34,7 @@ public final class LadderFigures {
         List<Figure> figures = new ArrayList<>();
         if (ladder.modes().stream().anyMatch(Mode::oscillates)) {
             ladder.add(figures, "ladder-frequency", "Frequency over the ladder", Axes.frequency(unit),
-                    row -> Math.abs(row.rate().im()) / TWO_PI, "A mode that exists keeps its frequency as functions are added.");
+                    LadderFigures::frequency, "A mode that exists keeps its frequency as functions are added.");
         }
         ladder.add(figures, "ladder-growth", "Growth rate over the ladder", Axes.growth(unit), row -> row.rate().re(),
                 "A mode that exists keeps its growth rate as functions are added.");
@@ -47,10 +49,14 @@ public final class LadderFigures {
         return List.copyOf(figures);
     }
 
+    private static double frequency(LadderRow row) {
+        return row.rate().im() == 0 ? Double.NaN : Math.abs(row.rate().im()) / TWO_PI;
+    }
+
     private record Ladder(List<Mode> modes, List<LadderRow> rows, int rank) {
 
         Ladder(Spectrum spectrum, List<LadderRow> rows) {
-            this(spectrum.modes().stream().filter(mode -> !mode.constant()).limit(MOST_MODES).toList(),
+            this(spectrum.modes().stream().filter(mode -> !mode.constant() && mode.energyShare() >= CARRIES).limit(MOST_MODES).toList(),
                     rows.stream().sorted(Comparator.comparingInt(LadderRow::rank)).toList(), spectrum.rank());
         }
 
@@ -59,7 +65,7 @@ public final class LadderFigures {
             for (Mode mode : modes) {
                 List<LadderRow> own = rows.stream().filter(row -> row.mode() == mode.number()).toList();
                 double[] values = own.stream().mapToDouble(value).map(v -> drawable(v, y) ? v : Double.NaN).toArray();
-                if (java.util.Arrays.stream(values).anyMatch(v -> !Double.isNaN(v))) {
+                if (Arrays.stream(values).anyMatch(v -> !Double.isNaN(v))) {
                     layers.add(new Figure.Line("mode " + mode.number(), "mode:" + mode.number(),
                             own.stream().mapToDouble(LadderRow::rank).toArray(), values,
                             layers.isEmpty() ? Figure.Emphasis.STRONG : Figure.Emphasis.NORMAL));

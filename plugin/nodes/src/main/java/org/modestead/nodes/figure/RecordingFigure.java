@@ -3,8 +3,8 @@ package org.modestead.nodes.figure;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
-import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Run;
@@ -61,11 +61,10 @@ public final class RecordingFigure {
         return value -> (value - mean) / spread;
     }
 
-    private static java.util.OptionalDouble tailStart(Snapshots snapshots) {
-        double lastSeen = IntStream.range(0, snapshots.training().size()).mapToDouble(i -> last(snapshots.training().get(i)))
-                .max().orElse(Double.POSITIVE_INFINITY);
+    private static OptionalDouble tailStart(Snapshots snapshots) {
+        double lastSeen = snapshots.training().stream().mapToDouble(RecordingFigure::last).max().orElse(Double.POSITIVE_INFINITY);
         return snapshots.holdout().stream().filter(run -> run.leadIn() < run.samples()).mapToDouble(run -> run.times()[run.leadIn()])
-                .min().stream().filter(start -> start > lastSeen).findFirst();
+                .filter(start -> start > lastSeen).min();
     }
 
     private static double last(Run run) {

@@ -1,0 +1,29 @@
+package org.modestead.nodes.render;
+
+import java.awt.BasicStroke;
+import java.awt.Font;
+import java.util.Locale;
+import java.util.TimeZone;
+import org.knowm.xchart.style.AxesChartStyler;
+import org.modestead.nodes.figure.Figure;
+
+/** How every picture looks: white paper, thin frame, light grid. */
+final class HouseStyle {
+    private static final Font PLAIN = new Font(Font.SANS_SERIF, Font.PLAIN, 12);
+    private static final Font BOLD = new Font(Font.SANS_SERIF, Font.BOLD, 14);
+
+    private HouseStyle() {}
+
+    static void apply(AxesChartStyler style, Figure figure) {
+        style.setBaseFont(PLAIN).setChartBackgroundColor(Palette.PAPER).setChartFontColor(Palette.INK).setChartPadding(12)
+                .setPlotBackgroundColor(Palette.PAPER).setPlotBorderColor(Palette.FRAME).setPlotBorderVisible(true)
+                .setChartTitleFont(BOLD).setChartTitleBoxVisible(false).setChartTitlePadding(8)
+                .setLocale(Locale.ROOT).setMarkerSize(Marks.SIZE).setLegendVisible(false);
+        style.setPlotMargin(0).setAxisTitleFont(PLAIN).setAxisTickLabelsFont(PLAIN.deriveFont(11f)).setAxisTitlePadding(8)
+                .setAxisTickLabelsColor(Palette.QUIET_INK).setAxisTickMarksColor(Palette.FRAME).setAxisTickPadding(4)
+                .setAxisTickMarkLength(4).setPlotGridLinesColor(Palette.GRID).setPlotGridLinesStroke(new BasicStroke(1f))
+                .setTimezone(TimeZone.getTimeZone("UTC")).setXAxisTickMarkSpacingHint(80).setYAxisTickMarkSpacingHint(46)
+                .setXAxisLogarithmic(figure.x().logarithmic()).setYAxisLogarithmic(figure.y().logarithmic());
+        style.setPlotContentSize(1);
+    }
+}

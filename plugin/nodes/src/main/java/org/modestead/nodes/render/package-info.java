@@ -1,0 +1,2 @@
+/** The one renderer of figures: vector and pixel files, without a screen. */
+package org.modestead.nodes.render;
