@@ -1,0 +1,98 @@
+package org.modestead.engine.recording;
+
+import java.util.Arrays;
+import java.util.Optional;
+import org.ejml.data.DMatrixRMaj;
+
+/**
+ * Samples of one stretch at the wanted times: training first, then calibration, then holdout.
+ *
+ * @param id name of the runs made from it
+ * @param times rising
+ * @param values channels; written once, by {@link #prepare(Preparation)}
+ * @param inputs inputs
+ * @param ends one past the last sample of training, calibration and holdout
+ * @param interpolated samples at times that were not recorded
+ * @param filled interpolated cells of each recorded column
+ */
+record Piece(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int[] ends, int interpolated, long[] filled) {
+
+    /**
+     * Samples one stretch; a sample of a part is interpolated from recorded samples of that part and earlier ones only.
+     *
+     * @param id name
+     * @param rows without missing cells, at least one row
+     * @param gaps gaps of the run
+     * @param wanted which times
+     */
+    static Piece sample(String id, StagedRows rows, Gaps gaps, TargetTimes wanted) {
+        double[] times = wanted.of(rows, gaps);
+        DMatrixRMaj values = new DMatrixRMaj(times.length, rows.values().numCols);
+        DMatrixRMaj inputs = new DMatrixRMaj(times.length, rows.inputs().numCols);
+        int[] ends = new int[rows.ends().length];
+        int interpolated = 0;
+        int done = 0;
+        for (int stage = 0; stage < ends.length; stage++) {
+            int rowEnd = rows.ends()[stage];
+            ends[stage] = wanted.count(times, rows, rowEnd);
+            if (ends[stage] > done) {
+                interpolated += new MonotoneCubic(rows.times(), rows.values(), rows.from(), rowEnd)
+                        .evaluate(times, done, ends[stage], values);
+                new MonotoneCubic(rows.times(), rows.inputs(), rows.from(), rowEnd)
+                        .evaluate(times, done, ends[stage], inputs);
+                done = ends[stage];
+            }
+        }
+        return new Piece(id, times, values, inputs, ends, interpolated, rows.filled());
+    }
+
+    /** Returns the number of samples. */
+    int samples() {
+        return times.length;
+    }
+
+    /** Returns the number of samples that belong to a part. */
+    int samples(Snapshots.Part part) {
+        int stage = part.ordinal();
+        return ends[stage] - (stage == 0 ? 0 : ends[stage - 1]);
+    }
+
+    /** Turns recorded values into prepared ones, in place. */
+    void prepare(Preparation preparation) {
+        int n = values.numCols;
+        for (int k = 0, at = 0; k < times.length; k++) {
+            for (int c = 0; c < n; c++, at++) {
+                values.data[at] = preparation.prepare(c, times[k], values.data[at]);
+            }
+        }
+    }
+
+    /**
+     * Returns the samples of one part, after as much history as its first predicted sample needs.
+     *
+     * @param part which
+     * @param reach samples before the newest one that a state needs
+     * @return empty when the part has no sample, or with its history too few for two states
+     */
+    Optional<Run> part(Snapshots.Part part, int reach) {
+        int end = ends[part.ordinal()];
+        int begin = end - samples(part);
+        int leadIn = Math.min(begin, reach + 1);
+        if (end == begin || end - begin + leadIn < reach + 2) {
+            return Optional.empty();
+        }
+        int first = begin - leadIn;
+        if (first == 0 && end == times.length) {
+            return Optional.of(new Run(id, times, values, inputs, leadIn));
+        }
+        return Optional.of(new Run(id, Arrays.copyOfRange(times, first, end), rows(values, first, end),
+                rows(inputs, first, end), leadIn));
+    }
+
+    private static DMatrixRMaj rows(DMatrixRMaj all, int from, int to) {
+        int n = all.numCols;
+        DMatrixRMaj part = new DMatrixRMaj(to - from, n);
+        System.arraycopy(all.data, from * n, part.data, 0, part.data.length);
+        return part;
+    }
+}

@@ -1,0 +1,154 @@
+package org.modestead.engine.recording;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.RecordingFault;
+
+/**
+ * Whether a recording can be used at all, before any preparation.
+ *
+ * <p>Refused: no channel, no run, two runs of one name, a run of fewer than two samples, times that are no finite
+ * numbers or do not rise, infinite values, a channel or an input without a single number in some run, and channels that
+ * are all constant. One constant channel among others is a doubt: it carries nothing, but harms nothing either.
+ */
+public final class RecordingChecks {
+    private final Recording recording;
+    private final Wording wording;
+
+    private RecordingChecks(Recording recording) {
+        this.recording = recording;
+        this.wording = new Wording(recording.time());
+    }
+
+    /**
+     * Checks a recording.
+     *
+     * @param recording any
+     * @return one doubt for each constant channel, in column order
+     * @throws RecordingFault for the first thing that makes it unusable
+     */
+    public static List<Doubt> check(Recording recording) {
+        RecordingChecks checks = new RecordingChecks(recording);
+        checks.content();
+        for (Run run : recording.runs()) {
+            checks.times(run);
+            checks.numbers(run, run.values(), recording.channels(), "channel");
+            checks.numbers(run, run.inputs(), recording.inputs(), "input");
+        }
+        return checks.constants();
+    }
+
+    private void content() {
+        if (recording.channels().isEmpty()) {
+            throw new RecordingFault("recording", "it has no channel", "name at least one column as a channel");
+        }
+        if (recording.runs().isEmpty()) {
+            throw new RecordingFault("recording", "it has no run", "give a table with at least two rows");
+        }
+        Map<String, Integer> seen = new HashMap<>();
+        for (int i = 0; i < recording.runs().size(); i++) {
+            Run run = recording.runs().get(i);
+            Integer earlier = seen.put(run.id(), i + 1);
+            if (earlier != null) {
+                throw new RecordingFault("recording", "runs " + earlier + " and " + (i + 1) + " are both named " + run.id(),
+                        "give every run a name of its own");
+            }
+            if (run.samples() < 2) {
+                throw new RecordingFault("run " + run.id(), "it has " + Wording.count(run.samples(), "sample"),
+                        "a run needs at least 2 samples; leave this run out or check the run column");
+            }
+        }
+    }
+
+    private void times(Run run) {
+        double[] times = run.times();
+        for (int i = 0; i < times.length; i++) {
+            if (!Double.isFinite(times[i])) {
+                throw new RecordingFault("run " + run.id() + ", sample " + (i + 1), "the time is " + times[i],
+                        "give every sample a finite time or leave the sample out");
+            }
+            if (i > 0 && times[i] <= times[i - 1]) {
+                throw risingFault(run, i);
+            }
+        }
+    }
+
+    private RecordingFault risingFault(Run run, int row) {
+        double earlier = run.times()[row - 1];
+        double later = run.times()[row];
+        String where = "run " + run.id() + ", samples " + row + " and " + (row + 1);
+        if (earlier == later) {
+            return new RecordingFault(where, "both have the time " + wording.time(earlier),
+                    "keep one of the two, or name the column that tells runs apart");
+        }
+        return new RecordingFault(where, "the time falls from " + wording.time(earlier) + " to " + wording.time(later),
+                "sort the samples by time, or name the column that tells runs apart");
+    }
+
+    private void numbers(Run run, DMatrixRMaj values, List<Channel> columns, String kind) {
+        int n = columns.size();
+        boolean[] hasNumber = new boolean[n];
+        for (int i = 0, at = 0; i < run.samples(); i++) {
+            for (int c = 0; c < n; c++, at++) {
+                double value = values.data[at];
+                if (Double.isInfinite(value)) {
+                    throw new RecordingFault(wording.sample(run, i) + ", " + kind + " " + columns.get(c).name(),
+                            "the value is " + value, "replace it by a finite number or leave the cell empty");
+                }
+                hasNumber[c] |= value == value;
+            }
+        }
+        for (int c = 0; c < n; c++) {
+            if (!hasNumber[c]) {
+                throw new RecordingFault("run " + run.id() + ", " + kind + " " + columns.get(c).name(),
+                        "none of the " + run.samples() + " samples has a number",
+                        "leave out this " + kind + " or this run, or check that the column holds numbers");
+            }
+        }
+    }
+
+    private List<Doubt> constants() {
+        int n = recording.channels().size();
+        double[] low = new double[n];
+        double[] high = new double[n];
+        range(low, high);
+        List<Doubt> doubts = new ArrayList<>();
+        for (int c = 0; c < n; c++) {
+            if (low[c] == high[c]) {
+                doubts.add(new Doubt("constant-channel", "Channel " + recording.channels().get(c).name() + " is "
+                        + Wording.number(low[c]) + " in every sample; it tells nothing about the motion."));
+            }
+        }
+        if (doubts.size() == n) {
+            throw new RecordingFault("recording", n == 1 ? "channel " + recording.channels().get(0).name() + " is "
+                    + Wording.number(low[0]) + " in every sample" : "all " + n + " channels are constant",
+                    "name at least one channel that moves");
+        }
+        return doubts;
+    }
+
+    private void range(double[] low, double[] high) {
+        int n = low.length;
+        Arrays.fill(low, Double.POSITIVE_INFINITY);
+        Arrays.fill(high, Double.NEGATIVE_INFINITY);
+        for (Run run : recording.runs()) {
+            double[] data = run.values().data;
+            for (int at = 0, end = run.samples() * n; at < end; at += n) {
+                for (int c = 0; c < n; c++) {
+                    double value = data[at + c];
+                    if (value < low[c]) {
+                        low[c] = value;
+                    }
+                    if (value > high[c]) {
+                        high[c] = value;
+                    }
+                }
+            }
+        }
+    }
+}
