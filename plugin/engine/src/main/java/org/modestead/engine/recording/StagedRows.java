@@ -41,8 +41,12 @@ record StagedRows(double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int fr
             int end = ends[j] - stretch.from();
             ends[j] = Math.max(from, Math.min(lastComplete(values, end), lastComplete(inputs, end)));
         }
-        fill(times, values, ends, filled, 0);
-        fill(times, inputs, ends, filled, values.numCols);
+        HoleFilling holes = new HoleFilling(missing, stretch, values, inputs);
+        int done = from;
+        for (int end : ends) {
+            holes.fill(done, end, filled);
+            done = Math.max(done, end);
+        }
         return new StagedRows(times, values, inputs, from, ends, filled);
     }
 
@@ -82,46 +86,5 @@ record StagedRows(double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int fr
             last = Math.min(last, row);
         }
         return last;
-    }
-
-    private static void fill(double[] times, DMatrixRMaj values, int[] ends, long[] filled, int offset) {
-        DMatrixRMaj recorded = values.copy();
-        for (int c = 0; c < values.numCols; c++) {
-            int done = 0;
-            for (int end : ends) {
-                filled[offset + c] += fillColumn(times, recorded, values, c, new Stretch(Math.min(done, end), end));
-                done = Math.max(done, end);
-            }
-        }
-    }
-
-    /** Fills the missing cells of one column in the rows of a stage from all recorded cells before the stage's end. */
-    private static int fillColumn(double[] times, DMatrixRMaj recorded, DMatrixRMaj values, int column, Stretch stage) {
-        double[] knownTimes = new double[stage.to()];
-        DMatrixRMaj known = new DMatrixRMaj(stage.to(), 1);
-        int[] missing = new int[stage.length()];
-        int numbers = 0;
-        int holes = 0;
-        for (int row = 0; row < stage.to(); row++) {
-            double value = recorded.unsafe_get(row, column);
-            if (!Double.isNaN(value)) {
-                knownTimes[numbers] = times[row];
-                known.data[numbers++] = value;
-            } else if (row >= stage.from() && numbers > 0) {
-                missing[holes++] = row;
-            }
-        }
-        double[] targets = new double[holes];
-        for (int k = 0; k < holes; k++) {
-            targets[k] = times[missing[k]];
-        }
-        DMatrixRMaj found = new DMatrixRMaj(holes, 1);
-        if (holes > 0) {
-            new MonotoneCubic(knownTimes, known, 0, numbers).evaluate(targets, 0, holes, found);
-        }
-        for (int k = 0; k < holes; k++) {
-            values.unsafe_set(missing[k], column, found.data[k]);
-        }
-        return holes;
     }
 }

@@ -52,8 +52,13 @@ record StepEstimate(double typical, double shortest, double longest, double tole
         if (steps.length == 0) {
             return new StepEstimate(Double.NaN, Double.NaN, Double.NaN, 0);
         }
-        Arrays.sort(steps);
-        double median = steps[steps.length / 2];
+        double shortest = steps[0];
+        double longest = steps[0];
+        for (double step : steps) {
+            shortest = Math.min(shortest, step);
+            longest = Math.max(longest, step);
+        }
+        double median = longest - shortest <= RELATIVE_TOLERANCE * shortest ? shortest : median(steps);
         double tolerance = RELATIVE_TOLERANCE * median + ROUNDING_ULPS * Math.ulp(largestTime);
         double excess = 0;
         int equal = 0;
@@ -63,7 +68,12 @@ record StepEstimate(double typical, double shortest, double longest, double tole
                 equal++;
             }
         }
-        return new StepEstimate(median + excess / equal, steps[0], steps[steps.length - 1], tolerance);
+        return new StepEstimate(median + excess / equal, shortest, longest, tolerance);
+    }
+
+    private static double median(double[] steps) {
+        Arrays.sort(steps);
+        return steps[steps.length / 2];
     }
 
     /** Returns whether all steps equal the typical one. */
