@@ -128,7 +128,8 @@ public record ReportDocument(String title, String subtitle, List<Section> sectio
             rows = rows.stream().map(List::copyOf).toList();
             for (List<String> row : rows) {
                 if (row.size() != columns.size()) {
-                    throw new IllegalArgumentException("a row of table '" + caption + "' has " + row.size() + " cells, the table "
+                    throw new IllegalArgumentException("a row of table '" + caption + "' has " + row.size()
+                            + " cells, the table "
                             + columns.size() + " columns");
                 }
             }

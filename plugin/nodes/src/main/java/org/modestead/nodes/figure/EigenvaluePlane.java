@@ -37,7 +37,8 @@ public final class EigenvaluePlane {
         shown.stream().sorted(Comparator.comparing(mode -> order(mode, verdict)))
                 .forEach(mode -> layers.add(point(mode, verdict)));
         int hidden = spectrum.modes().size() - shown.size();
-        return new Figure("eigenvalues", Figure.Kind.COMPLEX_PLANE, "Eigenvalues in the complex plane", caption(verdict, hidden),
+        return new Figure("eigenvalues", Figure.Kind.COMPLEX_PLANE, "Eigenvalues in the complex plane",
+                caption(verdict, hidden),
                 Axes.growth(unit), Axes.frequency(unit), layers);
     }
 
@@ -71,9 +72,11 @@ public final class EigenvaluePlane {
         Optional<Grade> grade = mode.constant() ? Optional.empty() : grade(mode, verdict);
         String name = mode.constant() ? "constant (no evidence)" : grade.map(Grade::word).orElse("mode");
         String label = mode.constant() ? "" : Integer.toString(mode.number());
-        Figure.Emphasis emphasis = mode.constant() ? Figure.Emphasis.FAINT : grade.map(VerdictMarks::emphasis).orElse(Figure.Emphasis.STRONG);
+        Figure.Emphasis emphasis = mode.constant() ? Figure.Emphasis.FAINT
+                : grade.map(VerdictMarks::emphasis).orElse(Figure.Emphasis.STRONG);
         Figure.Mark mark = mode.constant() ? Figure.Mark.RING : grade.map(VerdictMarks::mark).orElse(Figure.Mark.DISC);
-        return new Figure.Points(name, "mode:" + mode.number(), new double[] {mode.rate().re()}, new double[] {mode.frequency()},
+        return new Figure.Points(name, "mode:" + mode.number(), new double[] {mode.rate().re()},
+                new double[] {mode.frequency()},
                 List.of(label), emphasis, mark);
     }
 
@@ -81,7 +84,8 @@ public final class EigenvaluePlane {
         String shapes = verdict.isPresent() ? " Shape and filling of a mark tell the verdict." : "";
         String left = hidden == 0 ? "" : " Left out: " + hidden + (hidden == 1 ? " mode" : " modes")
                 + " with less than 0.1 % of the signal far outside this range, or with an infinite rate.";
-        return "Each mark is a mode, numbered by falling share of the signal; a conjugate pair is one mark. Left of the line of zero"
+        return "Each mark is a mode, numbered by falling share of the signal; a conjugate pair is one mark. Left of the"
+                + " line of zero"
                 + " growth a mode decays, right of it it grows." + shapes + left;
     }
 }

@@ -71,7 +71,8 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
     public record Band(String name, String selection, double[] x, double[] low, double[] high) implements Layer {}
 
     /** Separate points with a label each (may be empty texts). */
-    public record Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis, Mark mark)
+    public record Points(String name, String selection, double[] x, double[] y, List<String> labels, Emphasis emphasis,
+            Mark mark)
             implements Layer {
 
         /** Points drawn as discs. */

@@ -38,13 +38,17 @@ public final class LadderFigures {
         }
         ladder.add(figures, "ladder-growth", "Growth rate over the ladder", Axes.growth(unit), row -> row.rate().re(),
                 "A mode that exists keeps its growth rate as functions are added.");
-        ladder.add(figures, "ladder-weight", "Weight over the ladder", Figure.Axis.log("weight [prepared units]"), LadderRow::weightNorm,
+        ladder.add(figures, "ladder-weight", "Weight over the ladder", Figure.Axis.log("weight [prepared units]"),
+                LadderRow::weightNorm,
                 "A weight that keeps changing belongs to one projection only, not to the system.");
-        ladder.add(figures, "ladder-norm", "Norm ratio over the ladder", Figure.Axis.log("norm in the space / norm over the data"),
-                LadderRow::normRatio, "A level curve: the eigenfunction belongs to the space. A rising one: it only imitates an"
+        ladder.add(figures, "ladder-norm", "Norm ratio over the ladder", Figure.Axis.log("norm in the space / norm over"
+                + " the data"),
+                LadderRow::normRatio, "A level curve: the eigenfunction belongs to the space. A rising one: it only"
+                + " imitates an"
                 + " eigenfunction on the sampled region.");
         ladder.add(figures, "ladder-residual", "Holdout residual over the ladder", Figure.Axis.log("relative residual"),
-                LadderRow::residual, "How far the eigenfunction misses its own law on data the fit never saw (on the training data"
+                LadderRow::residual, "How far the eigenfunction misses its own law on data the fit never saw (on the"
+                + " training data"
                 + " where nothing was held out). It must fall or stay small.");
         return List.copyOf(figures);
     }
@@ -56,11 +60,13 @@ public final class LadderFigures {
     private record Ladder(List<Mode> modes, List<LadderRow> rows, int rank) {
 
         Ladder(Spectrum spectrum, List<LadderRow> rows) {
-            this(spectrum.modes().stream().filter(mode -> !mode.constant() && mode.energyShare() >= CARRIES).limit(MOST_MODES).toList(),
+            this(spectrum.modes().stream().filter(mode -> !mode.constant() && mode.energyShare() >= CARRIES)
+                    .limit(MOST_MODES).toList(),
                     rows.stream().sorted(Comparator.comparingInt(LadderRow::rank)).toList(), spectrum.rank());
         }
 
-        void add(List<Figure> figures, String id, String title, Figure.Axis y, ToDoubleFunction<LadderRow> value, String reading) {
+        void add(List<Figure> figures, String id, String title, Figure.Axis y, ToDoubleFunction<LadderRow> value,
+                String reading) {
             List<Figure.Layer> layers = new ArrayList<>();
             for (Mode mode : modes) {
                 List<LadderRow> own = rows.stream().filter(row -> row.mode() == mode.number()).toList();
@@ -73,7 +79,8 @@ public final class LadderFigures {
             }
             if (!layers.isEmpty()) {
                 layers.add(new Figure.Rule("fitted rank", "", true, rank));
-                figures.add(new Figure(id, Figure.Kind.CURVES, title, reading, Figure.Axis.linear("rank (number of functions)"), y, layers));
+                figures.add(new Figure(id, Figure.Kind.CURVES, title, reading, Figure.Axis.linear("rank (number of"
+                        + " functions)"), y, layers));
             }
         }
 

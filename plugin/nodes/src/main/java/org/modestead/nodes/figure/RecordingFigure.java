@@ -35,7 +35,8 @@ public final class RecordingFigure {
             layers.addAll(lines(snapshots, runs, c, oneUnit));
         }
         tailStart(snapshots).ifPresent(at -> layers.add(new Figure.Rule("holdout starts", "", true, at)));
-        return new Figure("recording", Figure.Kind.TIME_SERIES, "Recorded channels", caption(snapshots, shown, runs.size(), oneUnit),
+        return new Figure("recording", Figure.Kind.TIME_SERIES, "Recorded channels",
+                caption(snapshots, shown, runs.size(), oneUnit),
                 Axes.time(snapshots.time()), Figure.Axis.linear(valueLabel(drawn, oneUnit)), layers);
     }
 
@@ -44,16 +45,19 @@ public final class RecordingFigure {
         int most = Math.max(FEWEST_POINTS, MOST_POINTS / runs.size());
         List<Figure.Layer> lines = new ArrayList<>();
         for (Run run : runs) {
-            double[] values = Arrays.stream(RecordedValues.of(run, channel, snapshots.preparation())).map(scaling).toArray();
+            double[] values = Arrays.stream(RecordedValues.of(run, channel, snapshots.preparation())).map(scaling)
+                    .toArray();
             Thinning.Curve curve = Thinning.thin(run.times(), values, most);
-            lines.add(new Figure.Line(snapshots.channels().get(channel).label(), "channel:" + (channel + 1), curve.x(), curve.y(),
+            lines.add(new Figure.Line(snapshots.channels().get(channel).label(), "channel:" + (channel + 1), curve.x(),
+                    curve.y(),
                     Figure.Emphasis.NORMAL));
         }
         return lines;
     }
 
     private static DoubleUnaryOperator standardised(Snapshots snapshots, List<Run> runs, int channel) {
-        double[] known = runs.stream().flatMapToDouble(run -> Arrays.stream(RecordedValues.of(run, channel, snapshots.preparation())))
+        double[] known = runs.stream().flatMapToDouble(run -> Arrays.stream(RecordedValues.of(run, channel,
+                snapshots.preparation())))
                 .filter(Double::isFinite).toArray();
         double mean = Arrays.stream(known).average().orElse(0);
         double variance = Arrays.stream(known).map(v -> (v - mean) * (v - mean)).average().orElse(0);
@@ -62,8 +66,10 @@ public final class RecordingFigure {
     }
 
     private static OptionalDouble tailStart(Snapshots snapshots) {
-        double lastSeen = snapshots.training().stream().mapToDouble(RecordingFigure::last).max().orElse(Double.POSITIVE_INFINITY);
-        return snapshots.holdout().stream().filter(run -> run.leadIn() < run.samples()).mapToDouble(run -> run.times()[run.leadIn()])
+        double lastSeen = snapshots.training().stream().mapToDouble(RecordingFigure::last).max()
+                .orElse(Double.POSITIVE_INFINITY);
+        return snapshots.holdout().stream().filter(run -> run.leadIn() < run.samples())
+                .mapToDouble(run -> run.times()[run.leadIn()])
                 .filter(start -> start > lastSeen).min();
     }
 
@@ -79,7 +85,8 @@ public final class RecordingFigure {
         String which = shown == snapshots.channels().size() ? "All " + shown + " channels" : "The first " + shown + " of "
                 + snapshots.channels().size() + " channels";
         String scale = oneUnit ? "." : ", each from its mean in its own standard deviations, for the units differ.";
-        return (shown == 1 && snapshots.channels().size() == 1 ? "The channel" : which) + " of " + runs + (runs == 1 ? " run" : " runs")
+        return (shown == 1 && snapshots.channels().size() == 1 ? "The channel" : which) + " of " + runs
+                + (runs == 1 ? " run" : " runs")
                 + " over time" + scale;
     }
 }

@@ -22,8 +22,10 @@ public final class SingularValues {
         List<Figure.Layer> layers = List.of(
                 new Figure.Line("singular values", "", number, relative, Figure.Emphasis.STRONG),
                 new Figure.Rule("rank " + operator.rank(), "", true, operator.rank()));
-        return new Figure("singular-values", Figure.Kind.CURVES, "Singular values", "Singular values relative to the largest. Those up to"
-                + " the marked rank were kept: " + operator.rankChoice() + ". A sharp drop just behind it says that the data hold no more;"
+        return new Figure("singular-values", Figure.Kind.CURVES, "Singular values",
+                "Singular values relative to the largest. Those up to"
+                + " the marked rank were kept: " + operator.rankChoice() + ". A sharp drop just behind it says that the"
+                + " data hold no more;"
                 + " a slow slope says that the rank is a choice.", Figure.Axis.linear("number"),
                 Figure.Axis.log("relative singular value"), layers);
     }

@@ -31,7 +31,8 @@ final class CategoryPlot {
         plot.draw();
         Range positions = new Range(-0.5, figure.x().categories().size() - 0.5);
         Overlay overlay = new Overlay(figure, positions, Range.y(figure),
-                position -> plot.chart.getScreenXFromChart(position + 0.5), plot.chart::getScreenYFromChart, new TimeTicks(0, ""));
+                position -> plot.chart.getScreenXFromChart(position + 0.5), plot.chart::getScreenYFromChart,
+                new TimeTicks(0, ""));
         return new Picture(plot.chart, overlay, Legend.of(figure, Size.of(figure).width(), false));
     }
 

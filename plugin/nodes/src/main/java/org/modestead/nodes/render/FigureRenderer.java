@@ -52,7 +52,8 @@ public final class FigureRenderer {
             throw new IllegalArgumentException("scale " + scale + " must be positive");
         }
         Picture picture = picture(figure);
-        BufferedImage image = new BufferedImage((int) Math.round(picture.getWidth() * scale), (int) Math.round(picture.getHeight() * scale),
+        BufferedImage image = new BufferedImage((int) Math.round(picture.getWidth() * scale),
+                (int) Math.round(picture.getHeight() * scale),
                 BufferedImage.TYPE_INT_RGB);
         Graphics2D graphics = image.createGraphics();
         graphics.setRenderingHint(RenderingHints.KEY_RENDERING, RenderingHints.VALUE_RENDER_QUALITY);

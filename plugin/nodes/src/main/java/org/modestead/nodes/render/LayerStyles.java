@@ -13,7 +13,8 @@ record LayerStyles(Figure figure, List<String> names) {
     private static final float[][] DASHES = {{}, {9, 4}, {3, 3}, {12, 4, 3, 4}, {6, 3}, {2, 4}};
 
     LayerStyles(Figure figure) {
-        this(figure, figure.layers().stream().filter(layer -> !(layer instanceof Figure.Rule) && !(layer instanceof Figure.Band))
+        this(figure, figure.layers().stream().filter(layer -> !(layer instanceof Figure.Rule)
+                && !(layer instanceof Figure.Band))
                 .map(LayerStyles::key).distinct().toList());
     }
 
@@ -49,7 +50,8 @@ record LayerStyles(Figure figure, List<String> names) {
     }
 
     private Color strongColour() {
-        return overTimeWithStrongLine() ? Palette.line(0) : figure.layers().stream().filter(LayerStyles::isStrong).findFirst()
+        return overTimeWithStrongLine() ? Palette.line(0)
+                : figure.layers().stream().filter(LayerStyles::isStrong).findFirst()
                 .map(strong -> Palette.line(index(strong))).orElse(Palette.line(0));
     }
 

@@ -34,7 +34,8 @@ final class Marks {
             double half = size / 2.0;
             switch (mark) {
                 case DISC -> graphics.fill(new Ellipse2D.Double(x - half, y - half, size, size));
-                case SQUARE -> graphics.fill(new Rectangle2D.Double(x - half * 0.9, y - half * 0.9, size * 0.9, size * 0.9));
+                case SQUARE -> graphics.fill(new Rectangle2D.Double(x - half * 0.9, y - half * 0.9, size * 0.9,
+                        size * 0.9));
                 case RING -> open(graphics, new Ellipse2D.Double(x - half, y - half, size, size));
                 case TRIANGLE -> open(graphics, triangle(x, y, half));
                 case CROSS -> cross(graphics, x, y, half * 0.85);

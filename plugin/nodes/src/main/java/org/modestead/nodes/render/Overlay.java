@@ -21,7 +21,8 @@ import org.modestead.nodes.figure.Figure;
  */
 record Overlay(Figure figure, Range x, Range y, DoubleUnaryOperator screenX, DoubleUnaryOperator screenY, TimeTicks times) {
     private static final Font SMALL = new Font(Font.SANS_SERIF, Font.PLAIN, 11);
-    private static final BasicStroke RULE = new BasicStroke(1.2f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_MITER, 10, new float[] {5, 4}, 0);
+    private static final BasicStroke RULE = new BasicStroke(1.2f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_MITER, 10,
+            new float[] {5, 4}, 0);
     private static final BasicStroke HALO = new BasicStroke(3f, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND);
     private static final FontRenderContext METRICS = new FontRenderContext(null, true, true);
     private static final double GAP = 8;
@@ -81,7 +82,8 @@ record Overlay(Figure figure, Range x, Range y, DoubleUnaryOperator screenX, Dou
         if (text.isEmpty()) {
             return;
         }
-        Shape outline = new TextLayout(text, SMALL, METRICS).getOutline(AffineTransform.getTranslateInstance(left, baseline));
+        Shape outline = new TextLayout(text, SMALL, METRICS)
+                .getOutline(AffineTransform.getTranslateInstance(left, baseline));
         Rectangle2D bounds = outline.getBounds2D();
         if (taken.stream().anyMatch(bounds::intersects)) {
             return;

@@ -12,7 +12,8 @@ import java.util.List;
  * also differ in a grey print. Nothing is told by colour alone: lines differ in dashes or marks too.
  */
 final class Palette {
-    static final List<Color> LINES = List.of(new Color(0x17508f), new Color(0xcf7f00), new Color(0x521632), new Color(0x00a373),
+    static final List<Color> LINES = List.of(new Color(0x17508f), new Color(0xcf7f00), new Color(0x521632),
+            new Color(0x00a373),
             new Color(0x8a35d9), new Color(0x454400));
     static final Color PAPER = Color.WHITE;
     static final Color INK = new Color(0x1d2530);

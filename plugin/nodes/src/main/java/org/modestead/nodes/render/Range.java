@@ -16,7 +16,8 @@ record Range(double low, double high) {
     private static final double LITTLE = 0.03;
 
     static Range x(Figure figure) {
-        return covering(figure.layers().stream().flatMapToDouble(Range::xs), figure.x(), figure.kind() == Figure.Kind.TIME_SERIES ? 0.01 : MARGIN);
+        return covering(figure.layers().stream().flatMapToDouble(Range::xs), figure.x(),
+                figure.kind() == Figure.Kind.TIME_SERIES ? 0.01 : MARGIN);
     }
 
     static Range y(Figure figure) {

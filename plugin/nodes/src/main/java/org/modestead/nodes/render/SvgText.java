@@ -99,13 +99,15 @@ final class SvgText {
         String[] box = attributes.get("viewBox").split(" ");
         out.append("<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" viewBox=\"").append(attributes.get("viewBox"))
                 .append("\" width=\"").append(box[2]).append("\" height=\"").append(box[3]).append("\" aria-label=\"")
-                .append(escape(figure.title() + ". " + figure.caption())).append("\"><title>").append(escape(figure.title()))
+                .append(escape(figure.title() + ". " + figure.caption())).append("\"><title>")
+                .append(escape(figure.title()))
                 .append("</title>");
     }
 
     private void element(String name, Map<String, String> attributes) {
         out.append("\n<").append(name);
-        new TreeMap<>(attributes).forEach((key, value) -> out.append(' ').append(key).append("=\"").append(value(key, value)).append('"'));
+        new TreeMap<>(attributes).forEach((key, value) -> out.append(' ').append(key).append("=\"")
+                .append(value(key, value)).append('"'));
     }
 
     private String value(String key, String value) {
@@ -122,7 +124,8 @@ final class SvgText {
     }
 
     private static String plainStyle(String style) {
-        return rounded(style.replace("stroke-miterlimit:10;", "").replace("stroke-dasharray:3,0;", "").replace("stroke:none;", ""));
+        return rounded(style.replace("stroke-miterlimit:10;", "").replace("stroke-dasharray:3,0;", "")
+                .replace("stroke:none;", ""));
     }
 
     private static String rounded(String text) {

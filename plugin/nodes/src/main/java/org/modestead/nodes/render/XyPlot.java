@@ -34,7 +34,8 @@ final class XyPlot {
         plot.draw();
         Overlay overlay = new Overlay(figure, Range.x(figure), Range.y(figure), plot.chart::getScreenXFromChart,
                 plot.chart::getScreenYFromChart, plot.times);
-        return new Picture(plot.chart, overlay, Legend.of(figure, Size.of(figure).width(), figure.kind() == Figure.Kind.CURVES));
+        return new Picture(plot.chart, overlay, Legend.of(figure, Size.of(figure).width(),
+                figure.kind() == Figure.Kind.CURVES));
     }
 
     private void draw() {
@@ -42,7 +43,8 @@ final class XyPlot {
         Range y = Range.y(figure);
         HouseStyle.apply(chart.getStyler(), figure);
         times.apply(chart.getStyler());
-        chart.getStyler().setXAxisMin(times.axis(x.low())).setXAxisMax(times.axis(x.high())).setYAxisMin(y.low()).setYAxisMax(y.high());
+        chart.getStyler().setXAxisMin(times.axis(x.low())).setXAxisMax(times.axis(x.high())).setYAxisMin(y.low())
+                .setYAxisMax(y.high());
         chart.setTitle(figure.title());
         chart.setXAxisTitle(figure.x().label());
         chart.setYAxisTitle(figure.y().label());
@@ -75,9 +77,11 @@ final class XyPlot {
             return;
         }
         XYSeries series = series(line.x(), y);
-        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Line).setLineColor(styles.colour(line)).setLineStyle(styles.stroke(line));
+        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Line).setLineColor(styles.colour(line))
+                .setLineStyle(styles.stroke(line));
         boolean marked = figure.kind() == Figure.Kind.CURVES && line.x().length <= MARKED_UP_TO;
-        series.setMarker(marked ? Marks.of(styles.curveMark(line)) : SeriesMarkers.NONE).setMarkerColor(styles.colour(line));
+        series.setMarker(marked ? Marks.of(styles.curveMark(line)) : SeriesMarkers.NONE)
+                .setMarkerColor(styles.colour(line));
     }
 
     private void points(Figure.Points points) {
@@ -86,7 +90,8 @@ final class XyPlot {
             return;
         }
         XYSeries series = series(points.x(), y);
-        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Scatter).setMarker(Marks.of(points.mark())).setMarkerColor(styles.colour(points));
+        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Scatter).setMarker(Marks.of(points.mark()))
+                .setMarkerColor(styles.colour(points));
     }
 
     private void band(Figure.Band band) {
@@ -114,7 +119,8 @@ final class XyPlot {
             y[2 * count - 1 - i] = high[from + i];
         }
         XYSeries series = series(x, y);
-        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.PolygonArea).setLineColor(CLEAR).setFillColor(styles.colour(band));
+        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.PolygonArea).setLineColor(CLEAR)
+                .setFillColor(styles.colour(band));
         series.setMarker(SeriesMarkers.NONE);
     }
 

@@ -1,0 +1,33 @@
+package org.modestead.nodes.words;
+
+import org.modestead.engine.wellposed.Grade;
+
+/** What each verdict means, for a reader who has never seen the checks. */
+public final class VerdictWords {
+    private VerdictWords() {}
+
+    /** Returns one sentence: what was found, without a subject's name; starts with a capital letter. */
+    public static String meaning(Grade grade) {
+        return switch (grade) {
+            case STANDS -> "It settles as functions are added, belongs to the function space, holds on data the fit"
+                    + " never saw and"
+                    + " does not depend on the other modes.";
+            case SETTLES -> "It settles as functions are added, belongs to the function space and holds on data the fit"
+                    + " never saw,"
+                    + " but it overlaps other modes, so its size depends on them.";
+            case UNDECIDED -> "The data are too few to tell whether it exists.";
+            case DRIFTS -> "It forecasts data the fit never saw, but its rate or its weight keeps changing as functions"
+                    + " are added:"
+                    + " the figures belong to this one projection, not to the system.";
+            case ABSENT -> "Either the error on data the fit never saw stays, or it grows without bound in the function"
+                    + " space:"
+                    + " there is no such mode in this space.";
+        };
+    }
+
+    /** Returns what may be done, as an instruction with a capital letter and a full stop. */
+    public static String advice(Grade grade) {
+        String advice = grade.advice();
+        return Character.toUpperCase(advice.charAt(0)) + advice.substring(1) + ".";
+    }
+}
