@@ -1,0 +1,126 @@
+package org.modestead.host.table;
+
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.sql.Statement;
+import java.time.LocalDate;
+import java.time.LocalDateTime;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
+import java.util.List;
+import java.util.Optional;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.RowCursor;
+
+/** Steps through a streamed DuckDB result. Not for use by several threads. */
+final class DuckDbCursor implements RowCursor {
+
+    private final Database database;
+    private final DuckDbTable table;
+    private final List<Column> columns;
+    private final Statement statement;
+    private final ResultSet rows;
+    private long row;
+
+    DuckDbCursor(Database database, String select, DuckDbTable table) throws SQLException {
+        this.database = database;
+        this.table = table;
+        this.columns = table.schema().columns();
+        this.statement = database.connection().createStatement();
+        this.rows = statement.executeQuery(select);
+    }
+
+    @Override
+    public boolean next() {
+        return read(() -> {
+            boolean more = rows.next();
+            row += more ? 1 : 0;
+            return more;
+        });
+    }
+
+    @Override
+    public long row() {
+        return row;
+    }
+
+    @Override
+    public boolean isMissing(int column) {
+        return columns.get(column).type() == CellType.DOUBLE ? Double.isNaN(number(column)) : cell(column).isEmpty();
+    }
+
+    @Override
+    public double number(int column) {
+        return read(() -> {
+            double value = rows.getDouble(column + 1);
+            return rows.wasNull() ? Double.NaN : value;
+        });
+    }
+
+    @Override
+    public String text(int column) {
+        return cell(column).map(Object::toString).orElse("");
+    }
+
+    @Override
+    public LocalDate date(int column) {
+        return (LocalDate) present(column);
+    }
+
+    @Override
+    public LocalDateTime dateTime(int column) {
+        Object cell = present(column);
+        return cell instanceof java.time.ZonedDateTime zoned ? zoned.toLocalDateTime() : (LocalDateTime) cell;
+    }
+
+    @Override
+    public Optional<Object> cell(int column) {
+        return read(() -> Optional.ofNullable(value(column, columns.get(column).type())));
+    }
+
+    @Override
+    public void close() {
+        try {
+            rows.close();
+            statement.close();
+        } catch (SQLException closing) {
+            throw table.explainer().explain(closing);
+        } finally {
+            database.close();
+        }
+    }
+
+    private Object value(int column, CellType type) throws SQLException {
+        Object found = switch (type) {
+            case DOUBLE -> number(column);
+            case LONG -> rows.getLong(column + 1);
+            case TEXT -> rows.getString(column + 1);
+            case FLAG -> rows.getBoolean(column + 1);
+            case DATE -> rows.getObject(column + 1, LocalDate.class);
+            case DATE_TIME -> rows.getObject(column + 1, LocalDateTime.class);
+            case ZONED_DATE_TIME -> rows.getObject(column + 1, OffsetDateTime.class);
+        };
+        boolean missing = found == null || rows.wasNull() || found instanceof Double number && number.isNaN();
+        if (missing) {
+            return null;
+        }
+        return found instanceof OffsetDateTime moment ? moment.atZoneSameInstant(ZoneOffset.UTC) : found;
+    }
+
+    private Object present(int column) {
+        return cell(column).orElseThrow(() -> new IllegalStateException("row " + row + ": the cell is missing"));
+    }
+
+    private <T> T read(Reading<T> reading) {
+        try {
+            return reading.read();
+        } catch (SQLException failure) {
+            throw table.explainer().explain(failure);
+        }
+    }
+
+    private interface Reading<T> {
+        T read() throws SQLException;
+    }
+}

@@ -1,0 +1,123 @@
+package org.modestead.host.table;
+
+import java.sql.SQLException;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import java.util.stream.Collectors;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.TableSchema;
+
+/** Makes a typed table of a file whose cells are texts, and names the cell that does not fit its column. */
+final class TextTable implements Explainer {
+
+    private static final Pattern MARK = Pattern.compile("modestead-cell ([0-9a-f]+) ([A-Z_]+) (\\d+)");
+    private static final int LONGEST_QUOTE = 60;
+
+    private final TextFile file;
+    private final TextRules rules;
+    private final SourceLimits limits;
+
+    TextTable(TextFile file, TextRules rules, SourceLimits limits) {
+        this.file = file;
+        this.rules = rules;
+        this.limits = limits;
+    }
+
+    /**
+     * Looks at the columns and returns the table.
+     *
+     * @throws TableFault if it has no row, or a cell among those looked at does not fit
+     */
+    DuckDbTable open() {
+        List<Column> columns;
+        try (Database database = Database.open(limits.megabytes())) {
+            columns = columns(new TextTyper(database, file.read(), rules).types(file.names()));
+        } catch (SQLException failure) {
+            throw explain(failure);
+        }
+        String select = columns.stream().map(this::cell).collect(Collectors.joining(", ", "SELECT ", " FROM " + file.read()));
+        return new DuckDbTable(Recipe.file(select, file.path()), new TableSchema(columns), file.shown(), limits.megabytes(),
+                limits.copied(), this);
+    }
+
+    private List<Column> columns(TextTyper.Result result) throws SQLException {
+        if (result.rows() == 0) {
+            throw new TableFault(file.shown(), "there is a header (" + String.join(", ", file.names()) + ") but no row below it",
+                    "give a table with at least one row");
+        }
+        List<Column> columns = new ArrayList<>();
+        for (int j = 0; j < file.names().size(); j++) {
+            String name = file.names().get(j);
+            TextTyper.Found found = result.columns().get(j);
+            Column column = new Column(name, found.type());
+            if (found.misfits() > 0) {
+                throw misfit(column);
+            }
+            if (found.cells() > 0 || !file.unnamed().contains(name)) {
+                columns.add(column);
+            }
+        }
+        return columns;
+    }
+
+    private String cell(Column column) {
+        String parsed = rules.parsed(column.type(), column.name());
+        String text = Sql.name(column.name());
+        return column.type() == CellType.TEXT ? text
+                : "CASE WHEN " + text + " IS NOT NULL AND " + parsed + " IS NULL THEN error('" + mark(column) + "') ELSE "
+                         + parsed + " END AS " + text;
+    }
+
+    /** Stands in DuckDB's message for the column whose cell did not fit; the row is looked for only then. */
+    private String mark(Column column) {
+        return "modestead-cell " + Integer.toHexString(file.path().hashCode()) + " " + column.type() + " "
+                + file.names().indexOf(column.name());
+    }
+
+    @Override
+    public Optional<TableFault> claim(DuckDbMessage message) {
+        Matcher mark = MARK.matcher(message.text());
+        boolean marked = mark.find() && mark.group(1).equals(Integer.toHexString(file.path().hashCode()));
+        return marked || message.text().contains(file.path().toString()) ? Optional.of(explain(message)) : Optional.empty();
+    }
+
+    @Override
+    public TableFault explain(DuckDbMessage message) {
+        Matcher mark = MARK.matcher(message.text());
+        if (mark.find()) {
+            CellType type = CellType.valueOf(mark.group(2));
+            return misfit(new Column(file.names().get(Integer.parseInt(mark.group(3))), type));
+        }
+        return limits.explain(file.shown(), message)
+                .or(() -> file.places().broken())
+                .orElseGet(() -> new TableFault(file.shown(), message.brief(), "correct the file"));
+    }
+
+    private TableFault misfit(Column column) {
+        String text = Sql.name(column.name());
+        String find = "SELECT place, cell FROM (SELECT row_number() OVER () AS place, " + text + " AS cell, "
+                + rules.parsed(column.type(), column.name()) + " AS parsed FROM " + file.read()
+                + ") WHERE cell IS NOT NULL AND parsed IS NULL LIMIT 1";
+        try (Database database = Database.open(limits.megabytes())) {
+            return database.one(find, row -> new TableFault(
+                    file.shown() + ", " + file.places().row(row.getLong(1)) + ", column " + column.name(),
+                    "the text \"" + shortened(row.getString(2)) + "\" in a column of type " + column.type().title(),
+                    "correct the cell, add this text to the setting missing, or name the column in the setting text-columns"));
+        } catch (SQLException failure) {
+            throw explainOnce(failure);
+        }
+    }
+
+    private TableFault explainOnce(SQLException failure) {
+        return file.places().broken().orElseGet(() -> new TableFault(file.shown(), DuckDbMessage.of(failure).brief(),
+                "correct the file"));
+    }
+
+    private static String shortened(String text) {
+        return text.length() <= LONGEST_QUOTE ? text : text.substring(0, LONGEST_QUOTE) + "...";
+    }
+}

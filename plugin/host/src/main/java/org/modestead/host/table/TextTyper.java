@@ -1,0 +1,111 @@
+package org.modestead.host.table;
+
+import java.sql.SQLException;
+import java.util.ArrayList;
+import java.util.EnumMap;
+import java.util.List;
+import java.util.Map;
+import java.util.stream.Collectors;
+import org.modestead.nodes.table.CellType;
+
+/**
+ * Finds what the columns of a text table hold. More than half of a column's cells decide, so that one wrong cell is an
+ * error to be named and not a column that silently becomes text.
+ *
+ * <p>The first {@value #SAMPLE} rows decide; columns that look whole or empty there are looked at to the end, since a
+ * single 1.5 makes them numbers.
+ */
+final class TextTyper {
+
+    static final int SAMPLE = 20480;
+
+    private static final List<CellType> TRIED = List.of(CellType.DOUBLE, CellType.LONG, CellType.FLAG, CellType.DATE,
+            CellType.DATE_TIME, CellType.ZONED_DATE_TIME);
+
+    private final Database database;
+    private final String read;
+    private final TextRules rules;
+
+    /**
+     * @param database in which the SQL runs
+     * @param read table expression that gives all columns as texts
+     * @param rules how texts become cells
+     */
+    TextTyper(Database database, String read, TextRules rules) {
+        this.database = database;
+        this.read = read;
+        this.rules = rules;
+    }
+
+    /**
+     * What a column holds.
+     *
+     * @param type of its cells
+     * @param cells how many are not missing, in the rows looked at
+     * @param misfits how many of these are not of the type
+     */
+    record Found(CellType type, long cells, long misfits) {}
+
+    /** The rows counted, and what each column holds. */
+    record Result(long rows, List<Found> columns) {}
+
+    Result types(List<String> names) throws SQLException {
+        Result sample = look(names, "(SELECT * FROM " + read + " LIMIT " + SAMPLE + ")");
+        if (sample.rows() < SAMPLE) {
+            return sample;
+        }
+        List<String> open = new ArrayList<>();
+        for (int j = 0; j < names.size(); j++) {
+            Found found = sample.columns().get(j);
+            if (found.type() == CellType.LONG || found.cells() == 0) {
+                open.add(names.get(j));
+            }
+        }
+        return open.isEmpty() ? sample : merge(names, sample, open, look(open, read));
+    }
+
+    private static Result merge(List<String> names, Result sample, List<String> open, Result whole) {
+        List<Found> merged = new ArrayList<>();
+        for (int j = 0; j < names.size(); j++) {
+            int at = open.indexOf(names.get(j));
+            merged.add(at < 0 ? sample.columns().get(j) : whole.columns().get(at));
+        }
+        return new Result(whole.rows(), merged);
+    }
+
+    private Result look(List<String> names, String rows) throws SQLException {
+        String counts = names.stream().map(this::counts).collect(Collectors.joining(", "));
+        return database.one("SELECT count(*), " + counts + " FROM " + rows, row -> {
+            List<Found> found = new ArrayList<>();
+            int next = 2;
+            for (String name : names) {
+                long cells = row.getLong(next++);
+                Map<CellType, Long> fitting = new EnumMap<>(CellType.class);
+                for (CellType type : TRIED) {
+                    fitting.put(type, row.getLong(next++));
+                }
+                CellType type = rules.textColumns().contains(name) ? CellType.TEXT : type(cells, fitting);
+                found.add(new Found(type, cells, cells - fitting.getOrDefault(type, cells)));
+            }
+            return new Result(row.getLong(1), found);
+        });
+    }
+
+    private String counts(String name) {
+        return "count(" + Sql.name(name) + "), " + TRIED.stream()
+                .map(type -> "count(" + rules.parsed(type, name) + ")").collect(Collectors.joining(", "));
+    }
+
+    private static CellType type(long cells, Map<CellType, Long> fitting) {
+        long numbers = fitting.get(CellType.DOUBLE);
+        if (cells == 0 || 2 * numbers > cells) {
+            return cells > 0 && fitting.get(CellType.LONG) == numbers ? CellType.LONG : CellType.DOUBLE;
+        }
+        for (CellType time : List.of(CellType.DATE, CellType.DATE_TIME, CellType.ZONED_DATE_TIME)) {
+            if (2 * fitting.get(time) > cells) {
+                return time;
+            }
+        }
+        return fitting.get(CellType.FLAG) == cells ? CellType.FLAG : CellType.TEXT;
+    }
+}

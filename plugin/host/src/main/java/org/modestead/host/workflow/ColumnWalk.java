@@ -1,0 +1,95 @@
+package org.modestead.host.workflow;
+
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import org.modestead.engine.Fault;
+import org.modestead.engine.Progress;
+import org.modestead.nodes.contract.ColumnChecks;
+import org.modestead.nodes.contract.Port;
+import org.modestead.nodes.contract.PortType;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.SettingProblem;
+import org.modestead.nodes.contract.Visibility;
+import org.modestead.nodes.table.TableSchema;
+
+/**
+ * The part of the check that goes through the steps in running order, knows the columns of each table on the way, and
+ * holds column and file settings against what is there.
+ */
+final class ColumnWalk {
+
+    private final Workflow workflow;
+    private final Map<String, PlannedStep> planned;
+    private final List<Problem> problems;
+    private final Map<Link.End, TableSchema> schemas = new HashMap<>();
+
+    ColumnWalk(Workflow workflow, Map<String, PlannedStep> planned, List<Problem> problems) {
+        this.workflow = workflow;
+        this.planned = planned;
+        this.problems = problems;
+    }
+
+    void walk(List<String> order) {
+        for (String id : order) {
+            PlannedStep step = planned.get(id);
+            if (step != null) {
+                visit(step);
+            }
+        }
+    }
+
+    private void visit(PlannedStep step) {
+        for (Port port : step.declaration().outputs()) {
+            port.schema().filter(schema -> port.type() == PortType.TABLE)
+                    .ifPresent(schema -> schemas.put(new Link.End(step.id(), port.id()), schema));
+        }
+        Map<String, TableSchema> arriving = arriving(step);
+        int before = problems.size();
+        missingFiles(step);
+        ColumnChecks.check(step.declaration(), step.settings(), arriving).forEach(found -> problem(step, found));
+        try {
+            step.node().check(arriving, step.settings()).forEach(found -> problem(step, found));
+            if (problems.size() == before) {
+                RunContext context = new RunContext(Progress.NONE, workflow.baseFolder(), workflow.baseFolder());
+                step.node().schemas(arriving, step.settings(), context)
+                        .forEach((port, schema) -> schemas.put(new Link.End(step.id(), port), schema));
+            }
+        } catch (Fault fault) {
+            problems.add(new Problem(workflow.fileName(), step.id(), fault.where(), fault.seen(), fault.wanted()));
+        }
+    }
+
+    private Map<String, TableSchema> arriving(PlannedStep step) {
+        Map<String, TableSchema> arriving = new HashMap<>();
+        step.inputs().forEach((port, source) -> {
+            if (schemas.containsKey(source)) {
+                arriving.put(port, schemas.get(source));
+            }
+        });
+        return arriving;
+    }
+
+    private void missingFiles(PlannedStep step) {
+        for (Setting setting : Visibility.shown(step.declaration(), step.settings())) {
+            String name = setting instanceof Setting.File file && file.reading() ? step.settings().text(file.key()) : "";
+            if (name.isEmpty()) {
+                continue;
+            }
+            Path path = workflow.baseFolder().resolve(name);
+            if (Files.isDirectory(path)) {
+                problem(step, new SettingProblem(setting.key(), name + " is a folder", "name a file in it"));
+            } else if (!Files.exists(path)) {
+                problem(step, new SettingProblem(setting.key(), "there is no file " + name,
+                        "name a file relative to " + workflow.baseFolder() + " or with its full path"));
+            }
+        }
+    }
+
+    private void problem(PlannedStep step, SettingProblem found) {
+        problems.add(new Problem(workflow.fileName(), step.id(), "setting " + found.key(), found.seen(), found.wanted()));
+    }
+}
