@@ -45,6 +45,11 @@ public record FittedOperator(
         return compression.leading(rank);
     }
 
+    /** The same operator judged against other runs: only the runs change, not what was fitted. */
+    public FittedOperator on(Snapshots others) {
+        return new FittedOperator(compression, rank, rankChoice, estimator, method, kernel, others, doubts);
+    }
+
     /** Returns step map or generator. */
     public Evolution evolution() {
         return compression.evolution();

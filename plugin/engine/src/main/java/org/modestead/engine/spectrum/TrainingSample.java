@@ -1,0 +1,49 @@
+package org.modestead.engine.spectrum;
+
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+
+/**
+ * Training states at which eigenfunctions are evaluated to measure sizes: all of them, or evenly spaced ones where there
+ * are very many.
+ *
+ * @param states p x N
+ * @param starts first state of every run, runs x N
+ * @param channels n, number of components that are the newest sample
+ * @param longest duration of the longest run in time units
+ */
+public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channels, double longest) {
+
+    private static final int MOST = 4000;
+
+    /** Collects the states of the training part. */
+    public static TrainingSample of(Snapshots snapshots) {
+        List<StateRun> runs = snapshots.states(Snapshots.Part.TRAINING);
+        int total = runs.stream().mapToInt(StateRun::count).sum();
+        if (total == 0) {
+            throw new FitFault("training part", "no run is long enough for one state", "use longer runs or a smaller delay depth");
+        }
+        int every = Math.max(1, (total + MOST - 1) / MOST);
+        int n = snapshots.stateSize();
+        DMatrixRMaj states = new DMatrixRMaj((total + every - 1) / every, n);
+        DMatrixRMaj starts = new DMatrixRMaj(runs.size(), n);
+        int seen = 0;
+        int kept = 0;
+        double longest = 0;
+        for (int i = 0; i < runs.size(); i++) {
+            StateRun run = runs.get(i);
+            System.arraycopy(run.states().data, 0, starts.data, i * n, n);
+            longest = Math.max(longest, run.times()[run.count() - 1] - run.times()[0]);
+            for (int k = 0; k < run.count(); k++, seen++) {
+                if (seen % every == 0) {
+                    System.arraycopy(run.states().data, k * n, states.data, kept * n, n);
+                    kept++;
+                }
+            }
+        }
+        return new TrainingSample(states, starts, snapshots.channels().size(), longest);
+    }
+}

@@ -1,0 +1,96 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import org.modestead.engine.spectrum.Mode;
+
+/**
+ * From findings to a grade. The order matters: evidence against a mode is taken before the lack of evidence for it.
+ *
+ * <ol>
+ * <li>the space norm grows from rung to rung, or the residual stays above its threshold: absent
+ * <li>a cluster of eigenvalues with one eigenfunction, or rate or weight keep changing: drifts
+ * <li>too few rungs, nothing held out, too small a share captured, or another step disagrees: undecided
+ * <li>overlap with other modes, or joint and solo weights differ: settles
+ * <li>otherwise: stands
+ * </ol>
+ *
+ * The constant function with rate 0 is an eigenfunction of every flow: it stands but counts as no evidence.
+ */
+final class Grading {
+
+    private Grading() {}
+
+    static ModeVerdict grade(Mode mode, Evidence evidence, List<Finding> findings) {
+        if (mode.constant()) {
+            return new ModeVerdict(mode.number(), Grade.STANDS, List.of(), false,
+                    "This is the constant function, which every motion leaves alone: true, but no evidence of a mode.");
+        }
+        boolean counts = evidence.carries(mode);
+        for (Grade grade : List.of(Grade.ABSENT, Grade.DRIFTS, Grade.UNDECIDED, Grade.SETTLES)) {
+            List<Finding> against = against(grade, mode.number(), evidence, findings);
+            if (!against.isEmpty()) {
+                return verdict(mode, grade, against, counts);
+            }
+        }
+        List<Finding> deciding = findings.stream().filter(f -> f.mode() == mode.number() && !Double.isNaN(f.threshold())).toList();
+        return verdict(mode, Grade.STANDS, deciding, counts);
+    }
+
+    private static List<Finding> against(Grade grade, int mode, Evidence evidence, List<Finding> findings) {
+        List<Finding> out = new ArrayList<>();
+        switch (grade) {
+            case ABSENT -> {
+                failed(findings, mode, "space-norm-growth").ifPresent(out::add);
+                failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value())).ifPresent(out::add);
+            }
+            case DRIFTS -> {
+                failed(findings, mode, "clustered-eigenvalues").ifPresent(out::add);
+                failed(findings, mode, "settling").filter(f -> !Double.isNaN(f.value())).ifPresent(out::add);
+            }
+            case UNDECIDED -> {
+                failed(findings, mode, "settling").ifPresent(out::add);
+                failed(findings, mode, "holdout-residual").ifPresent(out::add);
+                failed(findings, 0, "captured-share").ifPresent(out::add);
+                failed(findings, mode, "step-consistency").ifPresent(out::add);
+                if (!evidence.heldOut()) {
+                    out.add(new Finding(mode, "holdout-residual", Double.NaN, Double.NaN, false,
+                            "Nothing was held out, so its residual is no independent evidence: hold out runs or a tail."));
+                }
+            }
+            case SETTLES -> {
+                failed(findings, mode, "eigenfunction-overlap").ifPresent(out::add);
+                failed(findings, mode, "joint-solo-gap").ifPresent(out::add);
+            }
+            default -> throw new IllegalArgumentException(grade.word());
+        }
+        return out;
+    }
+
+    private static Optional<Finding> failed(List<Finding> findings, int mode, String check) {
+        return findings.stream().filter(f -> f.mode() == mode && f.check().equals(check) && !f.passed()).findFirst();
+    }
+
+    private static ModeVerdict verdict(Mode mode, Grade grade, List<Finding> deciding, boolean counts) {
+        StringBuilder sentence = new StringBuilder("Mode ").append(mode.number()).append(' ').append(grade.word()).append(": ")
+                .append(grade.advice()).append('.');
+        deciding.forEach(finding -> sentence.append(' ').append(finding.sentence()));
+        return new ModeVerdict(mode.number(), grade, deciding.stream().map(Finding::check).distinct().toList(), counts, sentence.toString());
+    }
+
+    /** The worst grade among the modes that count; undecided when none does. */
+    static ModeVerdict overall(List<ModeVerdict> verdicts) {
+        Optional<ModeVerdict> worst = verdicts.stream().filter(ModeVerdict::counts).max(Comparator.comparing(ModeVerdict::grade));
+        if (worst.isEmpty()) {
+            return new ModeVerdict(0, Grade.UNDECIDED, List.of("captured-share"), true,
+                    "No mode carries a stated share of the signal, so there is nothing to decide on: raise the rank or choose another kernel.");
+        }
+        long counted = verdicts.stream().filter(ModeVerdict::counts).count();
+        long same = verdicts.stream().filter(v -> v.counts() && v.grade() == worst.get().grade()).count();
+        return new ModeVerdict(0, worst.get().grade(), worst.get().decidedBy(), true, "Overall: " + worst.get().grade().word() + ", "
+                + worst.get().grade().advice() + ". Of " + counted + (counted == 1 ? " mode that carries" : " modes that carry")
+                + " the signal " + same + (same == 1 ? " has" : " have") + " this grade. " + worst.get().sentence());
+    }
+}

@@ -1,0 +1,37 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+
+/**
+ * Runs on which eigenfunctions are judged: those held out, or the training runs where nothing was held out, with the
+ * orthonormal functions evaluated once.
+ *
+ * @param heldOut whether the fit never saw them
+ * @param runs with at least two states each
+ * @param functions per run, p x R values of the orthonormal functions
+ * @param longest duration of the longest run
+ */
+record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, double longest) {
+
+    static JudgingRuns of(FittedOperator operator) {
+        Snapshots snapshots = operator.snapshots();
+        List<StateRun> held = usable(snapshots, Snapshots.Part.HOLDOUT);
+        boolean heldOut = !held.isEmpty();
+        List<StateRun> runs = heldOut ? held : usable(snapshots, Snapshots.Part.TRAINING);
+        List<DMatrixRMaj> functions = new ArrayList<>();
+        for (StateRun run : runs) {
+            functions.add(operator.compression().evaluate(run.states()));
+        }
+        double longest = runs.stream().mapToDouble(run -> run.times()[run.count() - 1] - run.times()[0]).max().orElse(0);
+        return new JudgingRuns(heldOut, runs, functions, longest);
+    }
+
+    private static List<StateRun> usable(Snapshots snapshots, Snapshots.Part part) {
+        return snapshots.states(part).stream().filter(run -> run.count() > 1).toList();
+    }
+}

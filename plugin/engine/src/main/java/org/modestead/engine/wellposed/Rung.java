@@ -1,0 +1,87 @@
+package org.modestead.engine.wellposed;
+
+import java.util.List;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.recording.StateRun;
+import org.modestead.engine.spectrum.Cluster;
+import org.modestead.engine.spectrum.Contributions;
+import org.modestead.engine.spectrum.ModalExpansion;
+import org.modestead.engine.spectrum.TrainingSample;
+
+/**
+ * The compression at one rank of the ladder, with the sizes of everything on it.
+ *
+ * @param expansion eigenpairs and weights
+ * @param parts one a mode
+ * @param captured share of the signal's variance on the judging runs that the projection holds, at most 1
+ */
+record Rung(ModalExpansion expansion, List<Part> parts, double captured) {
+
+    /**
+     * One mode of a rung.
+     *
+     * @param group columns of the expansion
+     * @param rate λ of the first of them
+     * @param weight root mean square over the training states of its contribution to the newest sample
+     * @param weightNorm norm of its joint weights on the newest sample
+     * @param normRatio ‖φ‖_H / ‖φ‖_L2(data)
+     * @param residual see {@link Residuals}
+     */
+    record Part(List<Integer> group, Complex rate, double weight, double weightNorm, double normRatio, double residual) {}
+
+    int rank() {
+        return expansion.rank();
+    }
+
+    static Rung of(OrthonormalCompression compression, DMatrixRMaj sampled, TrainingSample sample, JudgingRuns judging) {
+        ModalExpansion expansion = ModalExpansion.of(compression);
+        DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, compression.rank());
+        var values = org.modestead.engine.linalg.ComplexMatrices.product(functions, expansion.vectors());
+        double[] residuals = Residuals.of(expansion, judging);
+        List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream().map(group -> {
+            int j = group.get(0);
+            double size = 0;
+            for (int i = 0; i < values.numRows; i++) {
+                size += Math.pow(values.getReal(i, j), 2) + Math.pow(values.getImag(i, j), 2);
+            }
+            double norm = 0;
+            for (int k = 0; k < sample.channels(); k++) {
+                norm = Math.hypot(norm, Math.hypot(expansion.joint().getReal(j, k), expansion.joint().getImag(j, k)));
+            }
+            return new Part(group, expansion.rates().get(j),
+                    Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, sample.channels()))), norm,
+                    1 / Math.sqrt(size / values.numRows), residuals[j]);
+        }).toList();
+        return new Rung(expansion, parts, captured(compression, sample.channels(), judging));
+    }
+
+    /** {@code 1 - ‖g - Pg‖²/‖g - mean g‖²} over the newest samples of the judging runs. */
+    private static double captured(OrthonormalCompression compression, int channels, JudgingRuns judging) {
+        DMatrixRMaj weights = Matrices.block(compression.observable(), 0, compression.rank(), 0, channels);
+        double missed = 0;
+        double[] sum = new double[channels];
+        double squares = 0;
+        int count = 0;
+        for (int i = 0; i < judging.runs().size(); i++) {
+            StateRun run = judging.runs().get(i);
+            DMatrixRMaj projected = Matrices.product(Matrices.block(judging.functions().get(i), 0, run.count(), 0, compression.rank()), weights);
+            for (int row = 0; row < run.count(); row++) {
+                for (int k = 0; k < channels; k++) {
+                    double value = run.states().get(row, k);
+                    missed += Math.pow(value - projected.get(row, k), 2);
+                    sum[k] += value;
+                    squares += value * value;
+                }
+            }
+            count += run.count();
+        }
+        double spread = squares;
+        for (double s : sum) {
+            spread -= s * s / count;
+        }
+        return spread <= 0 ? 1 : 1 - missed / spread;
+    }
+}

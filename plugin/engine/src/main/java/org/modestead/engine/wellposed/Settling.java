@@ -1,0 +1,58 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import org.modestead.engine.Progress;
+import org.modestead.engine.spectrum.Mode;
+
+/**
+ * Whether rate and weight of a mode stop changing as functions join: the largest relative change from rung to rung over the
+ * last four rungs on which it was found. A mode that is not found on the rungs next to the fitted rank counts as changed
+ * altogether (1).
+ */
+public final class Settling implements Check {
+
+    /** Fewest rungs that can show settling. */
+    static final int LEAST_RUNGS = 3;
+
+    @Override
+    public String id() {
+        return "settling";
+    }
+
+    @Override
+    public List<Finding> examine(Evidence evidence, Progress progress) {
+        List<Finding> findings = new ArrayList<>();
+        double threshold = evidence.settings().settleThreshold();
+        for (Mode mode : evidence.spectrum().modes()) {
+            List<LadderRow> rows = evidence.lastRungsOf(mode.number());
+            if (evidence.rungs().size() < LEAST_RUNGS) {
+                findings.add(new Finding(mode.number(), id(), Double.NaN, threshold, false, "There are only " + evidence.rungs().size()
+                        + " rungs on the ladder; at least " + LEAST_RUNGS + " are needed to see whether it settles."));
+                continue;
+            }
+            double rate = rows.size() < LEAST_RUNGS ? 1 : change(rows, evidence.longest(), true);
+            double weight = rows.size() < LEAST_RUNGS ? 1 : change(rows, evidence.longest(), false);
+            double value = Math.max(rate, weight);
+            findings.add(new Finding(mode.number(), id(), value, threshold, value <= threshold, rows.size() < LEAST_RUNGS
+                    ? "It is found on only " + rows.size() + " of " + evidence.rungs().size() + " rungs."
+                    : String.format(Locale.ROOT, "Over the last rungs (ranks %d to %d) its rate changes by up to %.3g and its weight by up to %.3g.",
+                            rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight)));
+        }
+        return findings;
+    }
+
+    private static double change(List<LadderRow> rows, double longest, boolean ofRate) {
+        double largest = 0;
+        for (int k = 1; k < rows.size(); k++) {
+            LadderRow before = rows.get(k - 1);
+            LadderRow after = rows.get(k);
+            double size = Math.max(before.weight(), after.weight());
+            double change = ofRate ? Ladder.relativeChange(before.rate(), after.rate(), longest)
+                    : size == 0 ? 0 : Math.abs(after.weight() - before.weight()) / size;
+            largest = Math.max(largest, change);
+        }
+        return largest;
+    }
+}

@@ -1,0 +1,64 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.Progress;
+import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.spectrum.Matching;
+import org.modestead.engine.spectrum.ModalExpansion;
+import org.modestead.engine.spectrum.Mode;
+
+/**
+ * Rates must not depend on the step of the fit: the operator is fitted again with twice the step (a generator with
+ * segments twice as long, or half where the runs are too short) and the rates of the carrying modes are compared.
+ * Disagreement means aliasing, too coarse a step, or motion that is not forward complete. Modes above the sampling limit
+ * of the longer step are not compared.
+ */
+public final class StepConsistency implements Check {
+
+    @Override
+    public String id() {
+        return "step-consistency";
+    }
+
+    @Override
+    public List<Finding> examine(Evidence evidence, Progress progress) {
+        Optional<Estimator> other = evidence.operator().estimator().otherStep(evidence.operator().snapshots());
+        if (other.isEmpty()) {
+            return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The runs are too short to fit a second step."));
+        }
+        ModalExpansion expansion;
+        try {
+            OrthonormalCompression again = other.get().compress(evidence.operator().snapshots(), progress).whiten(evidence.operator().rank());
+            expansion = ModalExpansion.of(again);
+        } catch (FitFault fault) {
+            return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The second step could not be fitted: " + fault.getMessage()));
+        }
+        return compare(evidence, expansion);
+    }
+
+    private List<Finding> compare(Evidence evidence, ModalExpansion other) {
+        List<Mode> modes = evidence.carrying().filter(mode -> mode.frequency() < other.compression().evolution().aliasingLimit()).toList();
+        List<Complex> rates = other.rates().stream().filter(rate -> rate.im() >= 0).toList();
+        double[][] cost = new double[modes.size()][rates.size()];
+        for (int i = 0; i < modes.size(); i++) {
+            for (int j = 0; j < rates.size(); j++) {
+                cost[i][j] = Math.min(2, Ladder.relativeChange(modes.get(i).rate(), rates.get(j), evidence.longest()));
+            }
+        }
+        int[] matched = Matching.of(cost, 2);
+        List<Finding> findings = new ArrayList<>();
+        double threshold = evidence.settings().stepThreshold();
+        for (int i = 0; i < modes.size(); i++) {
+            double value = matched[i] < 0 ? 1 : cost[i][matched[i]];
+            findings.add(new Finding(modes.get(i).number(), id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
+                    "Fitted with another step its rate differs by %.3g.", value)));
+        }
+        return findings;
+    }
+}

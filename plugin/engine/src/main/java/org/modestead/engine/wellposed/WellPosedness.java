@@ -1,0 +1,56 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.ServiceLoader;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.Progress;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.spectrum.Spectrum;
+
+/** Decides whether the modes of a spectrum exist: climbs the ladder, puts every check's question, and grades. */
+public final class WellPosedness {
+
+    private WellPosedness() {}
+
+    /**
+     * @param snapshots those of the operator
+     * @param operator fitted
+     * @param spectrum extracted from it
+     * @param settings thresholds and ladder
+     * @param progress polled for cancel
+     * @return a verdict for every mode and overall, with all evidence
+     * @throws org.modestead.engine.FitFault if the ladder asked for does not fit the operator
+     */
+    public static Verdict judge(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, JudgeSettings settings, Progress progress) {
+        FittedOperator judged = operator.on(snapshots);
+        JudgingRuns judging = JudgingRuns.of(judged);
+        Ladder ladder = Ladder.climb(judged, spectrum, judging, settings, progress.part(0, 0.6));
+        Evidence evidence = Evidence.of(judged, spectrum, ladder, judging.heldOut(), settings);
+        List<Finding> findings = new ArrayList<>();
+        List<Check> checks = checks();
+        for (Check check : checks) {
+            progress.checkCancelled();
+            progress.report(0.6 + 0.4 * checks.indexOf(check) / checks.size(), check.id());
+            findings.addAll(check.examine(evidence, progress));
+        }
+        List<ModeVerdict> verdicts = spectrum.modes().stream().map(mode -> Grading.grade(mode, evidence, findings)).toList();
+        progress.report(1, "judged");
+        return new Verdict(Grading.overall(verdicts), verdicts, findings, ladder.rows(), doubts(judging, findings));
+    }
+
+    private static List<Check> checks() {
+        return ServiceLoader.load(Check.class, Check.class.getClassLoader()).stream().map(ServiceLoader.Provider::get).toList();
+    }
+
+    private static List<Doubt> doubts(JudgingRuns judging, List<Finding> findings) {
+        List<Doubt> doubts = new ArrayList<>();
+        if (!judging.heldOut()) {
+            doubts.add(new Doubt("nothing-held-out", "No run was held out: residuals were measured on the data the fit saw."));
+        }
+        findings.stream().filter(finding -> finding.mode() == 0 && !finding.passed())
+                .forEach(finding -> doubts.add(new Doubt(finding.check(), finding.sentence())));
+        return doubts;
+    }
+}
