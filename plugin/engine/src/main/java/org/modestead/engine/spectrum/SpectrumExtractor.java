@@ -18,7 +18,6 @@ public final class SpectrumExtractor {
     private static final double ILL_CONDITIONED = 1e8;
     private static final double NEAR_LIMIT = 0.95;
     private static final double NEGLIGIBLE = 1e-6;
-    private static final double CONSTANT_SPREAD = 0.05;
 
     private SpectrumExtractor() {}
 
@@ -60,7 +59,7 @@ public final class SpectrumExtractor {
             int first = m.group().get(0);
             Complex rate = rate(expansion, m.group(), clusters);
             modes.add(new Mode(modes.size() + 1, m.group(), rate, m.amplitude(), total > 0 ? m.energy() / total : 0, gap(expansion, first),
-                    weights(expansion, starts, m.group(), clusters), isConstant(functions, first, rate, sample.longest()), clusters[first]));
+                    weights(expansion, starts, m.group(), clusters), ConstantFunction.is(functions, first, rate, sample.longest()), clusters[first]));
         }
         return modes;
     }
@@ -122,22 +121,6 @@ public final class SpectrumExtractor {
             weights.add(clustered ? new Complex(sum.re(), 0) : sum);
         }
         return weights;
-    }
-
-    /** Constant on the sampled region and not moving over the longest run. */
-    private static boolean isConstant(ZMatrixRMaj functions, int j, Complex rate, double longest) {
-        if (rate.im() != 0 || Math.abs(rate.re()) * longest > CONSTANT_SPREAD) {
-            return false;
-        }
-        double mean = 0;
-        for (int i = 0; i < functions.numRows; i++) {
-            mean += functions.getReal(i, j) / functions.numRows;
-        }
-        double spread = 0;
-        for (int i = 0; i < functions.numRows; i++) {
-            spread += Math.pow(functions.getReal(i, j) - mean, 2) / functions.numRows;
-        }
-        return Math.sqrt(spread) <= CONSTANT_SPREAD * Math.abs(mean);
     }
 
     private static List<Doubt> doubts(ModalExpansion expansion, List<Mode> modes) {

@@ -16,6 +16,7 @@ import org.modestead.engine.spectrum.Spectrum;
  * @param ladder every mode on every rung where it was found
  * @param fitted expansion at the fitted rank
  * @param captured per rung, share of the judging runs' variance that the projection holds
+ * @param carryingNorm per rung, mean norm ratio of the modes that carry the signal
  * @param medianResidual per rung, median residual of its modes
  * @param undamped per rung, number of its modes with damping ratio below 5 %
  * @param heldOut whether the residuals were measured on runs the fit never saw
@@ -29,18 +30,23 @@ public record Evidence(
         List<LadderRow> ladder,
         ModalExpansion fitted,
         List<Double> captured,
+        List<Double> carryingNorm,
         List<Double> medianResidual,
         List<Integer> undamped,
         boolean heldOut,
         double longest,
         JudgeSettings settings) {
 
+    /** How many rungs at the top of a mode's ladder are looked at. */
+    static final int LAST_RUNGS = 4;
+
     private static final double UNDAMPED = 0.05;
 
     static Evidence of(FittedOperator operator, Spectrum spectrum, Ladder ladder, boolean heldOut, JudgeSettings settings) {
         ModalExpansion fitted = ladder.rungs().stream().filter(rung -> rung.rank() == operator.rank()).findFirst().orElseThrow().expansion();
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
-                ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Evidence::median).toList(),
+                ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(),
+                ladder.rungs().stream().map(Evidence::median).toList(),
                 ladder.rungs().stream().map(Evidence::countUndamped).toList(), heldOut, ladder.longest(), settings);
     }
 
@@ -62,7 +68,7 @@ public record Evidence(
     /** Returns the last rungs of one mode, at most four, by rising rank. */
     public List<LadderRow> lastRungsOf(int mode) {
         List<LadderRow> rows = ladderOf(mode);
-        return rows.subList(Math.max(0, rows.size() - 4), rows.size());
+        return rows.subList(Math.max(0, rows.size() - LAST_RUNGS), rows.size());
     }
 
     /** Returns the modes that carry a stated share of the signal and are not the constant function. */

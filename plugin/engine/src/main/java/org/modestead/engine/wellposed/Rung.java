@@ -2,11 +2,14 @@ package org.modestead.engine.wellposed;
 
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.recording.StateRun;
 import org.modestead.engine.spectrum.Cluster;
+import org.modestead.engine.spectrum.ConstantFunction;
 import org.modestead.engine.spectrum.Contributions;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.TrainingSample;
@@ -16,9 +19,10 @@ import org.modestead.engine.spectrum.TrainingSample;
  *
  * @param expansion eigenpairs and weights
  * @param parts one a mode
+ * @param carryingNorm geometric mean of the norm ratios of all modes but the constant, weighted by squared contribution
  * @param captured share of the signal's variance on the judging runs that the projection holds, at most 1
  */
-record Rung(ModalExpansion expansion, List<Part> parts, double captured) {
+record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, double captured) {
 
     /**
      * One mode of a rung.
@@ -39,23 +43,38 @@ record Rung(ModalExpansion expansion, List<Part> parts, double captured) {
     static Rung of(OrthonormalCompression compression, DMatrixRMaj sampled, TrainingSample sample, JudgingRuns judging) {
         ModalExpansion expansion = ModalExpansion.of(compression);
         DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, compression.rank());
-        var values = org.modestead.engine.linalg.ComplexMatrices.product(functions, expansion.vectors());
+        ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
         double[] residuals = Residuals.of(expansion, judging);
-        List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream().map(group -> {
-            int j = group.get(0);
-            double size = 0;
-            for (int i = 0; i < values.numRows; i++) {
-                size += Math.pow(values.getReal(i, j), 2) + Math.pow(values.getImag(i, j), 2);
+        List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream()
+                .map(group -> part(expansion, values, group, sample.channels(), residuals)).toList();
+        return new Rung(expansion, parts, carryingNorm(parts, values, sample.longest()), captured(compression, sample.channels(), judging));
+    }
+
+    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, int channels, double[] residuals) {
+        int j = group.get(0);
+        double size = 0;
+        for (int i = 0; i < values.numRows; i++) {
+            size = Math.hypot(size, ComplexMatrices.entry(values, i, j).abs());
+        }
+        double norm = 0;
+        for (int k = 0; k < channels; k++) {
+            norm = Math.hypot(norm, ComplexMatrices.entry(expansion.joint(), j, k).abs());
+        }
+        double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, channels)));
+        return new Part(group, expansion.rates().get(j), weight, norm, Math.sqrt(values.numRows) / size, residuals[j]);
+    }
+
+    private static double carryingNorm(List<Part> parts, ZMatrixRMaj values, double longest) {
+        double logarithms = 0;
+        double total = 0;
+        for (Part part : parts) {
+            if (!ConstantFunction.is(values, part.group().get(0), part.rate(), longest)) {
+                double share = part.weight() * part.weight();
+                logarithms += share * Math.log(part.normRatio());
+                total += share;
             }
-            double norm = 0;
-            for (int k = 0; k < sample.channels(); k++) {
-                norm = Math.hypot(norm, Math.hypot(expansion.joint().getReal(j, k), expansion.joint().getImag(j, k)));
-            }
-            return new Part(group, expansion.rates().get(j),
-                    Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, sample.channels()))), norm,
-                    1 / Math.sqrt(size / values.numRows), residuals[j]);
-        }).toList();
-        return new Rung(expansion, parts, captured(compression, sample.channels(), judging));
+        }
+        return total == 0 ? Double.NaN : Math.exp(logarithms / total);
     }
 
     /** {@code 1 - ‖g - Pg‖²/‖g - mean g‖²} over the newest samples of the judging runs. */

@@ -8,8 +8,8 @@ import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.spectrum.Mode;
 
 /**
- * Growth of {@code ‖φ‖_H / ‖φ‖_L2(data)} over the last four rungs. Bounded: the eigenfunction belongs to the space. Growing
- * from rung to rung: it only imitates an eigenfunction on the sampled region. In the data inner product both norms are the
+ * Growth of {@code ‖φ‖_H / ‖φ‖_L2(data)} over the ladder. Bounded: the eigenfunction belongs to the space. Growing without
+ * bound (see {@link NormTrend}): it only imitates an eigenfunction on the sampled region. In the data inner product both norms are the
  * same and the question has no content.
  */
 public final class SpaceNormGrowth implements Check {
@@ -29,20 +29,24 @@ public final class SpaceNormGrowth implements Check {
         }
         double threshold = evidence.settings().normGrowthThreshold();
         for (Mode mode : evidence.spectrum().modes()) {
-            List<LadderRow> rows = evidence.lastRungsOf(mode.number());
-            if (rows.size() < Settling.LEAST_RUNGS) {
-                continue;
+            List<LadderRow> rows = evidence.ladderOf(mode.number());
+            if (rows.size() >= Settling.LEAST_RUNGS) {
+                findings.add(finding(mode.number(), "Its norm", rows.stream().map(LadderRow::normRatio).toList(),
+                        rows.stream().map(LadderRow::rank).toList(), threshold));
+            } else if (evidence.rungs().size() >= Settling.LEAST_RUNGS && evidence.carries(mode)) {
+                findings.add(finding(mode.number(), "It cannot be followed down the ladder; the norm of the modes that carry the signal",
+                        evidence.carryingNorm(), evidence.rungs(), threshold));
             }
-            double growth = rows.get(rows.size() - 1).normRatio() / rows.get(0).normRatio();
-            boolean steady = true;
-            for (int k = 1; k < rows.size(); k++) {
-                steady &= rows.get(k).normRatio() > rows.get(k - 1).normRatio();
-            }
-            findings.add(new Finding(mode.number(), id(), growth, threshold, !(growth > threshold && steady), String.format(Locale.ROOT,
-                    "Its norm in the space relative to its size on the data goes from %.3g to %.3g over ranks %d to %d%s.",
-                    rows.get(0).normRatio(), rows.get(rows.size() - 1).normRatio(), rows.get(0).rank(), rows.get(rows.size() - 1).rank(),
-                    growth > threshold && steady ? ": growing from rung to rung, it only imitates an eigenfunction" : "")));
         }
         return findings;
+    }
+
+    private Finding finding(int mode, String what, List<Double> ratios, List<Integer> ranks, double threshold) {
+        int top = ratios.size() - 1;
+        NormTrend trend = NormTrend.of(ratios, threshold);
+        return new Finding(mode, id(), trend.factor(), threshold, !trend.growing(), String.format(Locale.ROOT,
+                "%s in the space relative to the size on the data goes from %.3g to %.3g over ranks %d to %d%s.", what, ratios.get(0),
+                ratios.get(top), ranks.get(0), ranks.get(top),
+                trend.growing() ? ": growing from rung to rung, such functions only imitate eigenfunctions" : ""));
     }
 }
