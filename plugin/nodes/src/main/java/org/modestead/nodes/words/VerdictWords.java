@@ -25,6 +25,26 @@ public final class VerdictWords {
         };
     }
 
+    /** Returns one sentence on the modes that carry the signal, taken together; the worst of them decides. */
+    public static String overall(Grade grade) {
+        return switch (grade) {
+            case STANDS -> "Every mode that carries a stated share of the signal settles, belongs to the function space,"
+                    + " holds on"
+                    + " data the fit never saw and does not depend on the others.";
+            case SETTLES -> "Every mode that carries a stated share of the signal settles and holds on data the fit"
+                    + " never saw, but"
+                    + " some overlap, so their sizes depend on each other.";
+            case UNDECIDED -> "For at least one mode that carries a stated share of the signal the data are too few to"
+                    + " tell whether it"
+                    + " exists.";
+            case DRIFTS -> "At least one mode that carries a stated share of the signal keeps changing as functions are"
+                    + " added: its"
+                    + " figures belong to this one projection, not to the system.";
+            case ABSENT -> "At least one mode that carries a stated share of the signal does not exist in this function"
+                    + " space.";
+        };
+    }
+
     /** Returns what may be done, as an instruction with a capital letter and a full stop. */
     public static String advice(Grade grade) {
         String advice = grade.advice();

@@ -1,0 +1,84 @@
+package org.modestead.nodes.figure;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Collections;
+import java.util.Comparator;
+import java.util.List;
+import org.modestead.engine.recording.Channel;
+import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.ModeShapes;
+import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.TimeUnit;
+
+/** How strongly, and how far out of step, each channel moves in a mode. */
+public final class ShapeFigures {
+    private ShapeFigures() {}
+
+    /**
+     * Draws magnitude and phase by channel for the strongest modes that are not the constant. Channels of one unit are
+     * drawn in it; otherwise each is divided by the scale it was prepared with.
+     *
+     * @param spectrum the modes
+     * @param preparation of the snapshots the operator was fitted to
+     * @param modes at most how many
+     * @return two figures a mode (magnitude, phase), kind {@link Figure.Kind#SHAPES}, selection keys {@code mode:<number>}
+     */
+    public static List<Figure> figures(Spectrum spectrum, Preparation preparation, int modes) {
+        List<Figure> figures = new ArrayList<>();
+        spectrum.modes().stream().filter(mode -> !mode.constant()).limit(modes).forEach(mode -> {
+            Shape shape = new Shape(spectrum, mode, preparation);
+            figures.add(shape.magnitude());
+            figures.add(shape.phase());
+        });
+        return List.copyOf(figures);
+    }
+
+    private record Shape(Spectrum spectrum, Mode mode, Preparation preparation) {
+
+        Figure magnitude() {
+            boolean oneUnit = spectrum.channels().stream().map(Channel::unit).distinct().count() == 1;
+            double[] heights = newest().stream().mapToDouble(entry -> oneUnit ? entry.magnitude()
+                    : entry.magnitude() / preparation.scale()[entry.channelIndex()]).toArray();
+            String label = oneUnit ? Axes.labelled("magnitude", spectrum.channels().get(0).unit())
+                    : "magnitude / scale of the channel";
+            String reading = oneUnit ? "" : " Units differ, so each channel is divided by the scale it was prepared with.";
+            return new Figure("shape-" + mode.number() + "-magnitude", Figure.Kind.SHAPES, title("magnitude"),
+                    "How far each channel moves in this mode." + reading, channels(), Figure.Axis.linear(label),
+                    List.of(new Figure.Bars("", "mode:" + mode.number(), heights)));
+        }
+
+        Figure phase() {
+            double[] degrees = newest().stream().mapToDouble(entry -> Math.toDegrees(entry.phase())).toArray();
+            double[] positions = new double[degrees.length];
+            Arrays.setAll(positions, i -> i);
+            return new Figure("shape-" + mode.number() + "-phase", Figure.Kind.SHAPES, title("phase"),
+                    "Phase of each channel against the one that moves most: 0° in step, 180° against it. Channels that"
+                    + " hardly move"
+                            + " have a phase by chance.",
+                    channels(), Figure.Axis.linear("phase [°]"), List.of(
+                            new Figure.Rule("", "", false, -180), new Figure.Rule("", "", false, 0),
+                            new Figure.Rule("", "", false, 180),
+                            new Figure.Points("", "mode:" + mode.number(), positions, degrees,
+                                    Collections.nCopies(degrees.length, ""), Figure.Emphasis.STRONG)));
+        }
+
+        private List<ModeShapes.Entry> newest() {
+            return ModeShapes.of(spectrum, mode, preparation).stream().filter(entry -> entry.delay() == 0)
+                    .sorted(Comparator.comparingInt(ModeShapes.Entry::channelIndex)).toList();
+        }
+
+        private Figure.Axis channels() {
+            return Figure.Axis.categories("channel", newest().stream().map(entry -> entry.channel().name()).toList());
+        }
+
+        private String title(String quantity) {
+            TimeUnit unit = new TimeUnit(spectrum.timeUnit());
+            String what = mode.oscillates() ? Digits.frequency(mode.frequency(), unit.frequency())
+                    : "no oscillation, rate " + Digits.figure(mode.rate().re(), unit.rate());
+            return "Mode " + mode.number() + " (" + what + "): " + quantity;
+        }
+    }
+}

@@ -1,0 +1,93 @@
+package org.modestead.nodes.report;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.wellposed.Grade;
+import org.modestead.engine.wellposed.ModeVerdict;
+import org.modestead.nodes.document.ReportDocument.Block;
+import org.modestead.nodes.document.ReportDocument.Callout;
+import org.modestead.nodes.document.ReportDocument.Paragraph;
+import org.modestead.nodes.document.ReportDocument.Points;
+import org.modestead.nodes.document.ReportDocument.Section;
+import org.modestead.nodes.document.ReportDocument.Tone;
+import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.ModeWords;
+import org.modestead.nodes.words.Sentence;
+import org.modestead.nodes.words.VerdictWords;
+
+/** The first page: what was fitted, what came out, what may be done with it. */
+final class SummarySection {
+    private static final double MOST_OF_SIGNAL = 0.95;
+
+    private SummarySection() {}
+
+    static Section of(ReportSource source, String notes) {
+        List<Block> blocks = new ArrayList<>();
+        if (!notes.isBlank()) {
+            blocks.add(new Paragraph(notes.strip()));
+        }
+        blocks.add(new Paragraph(fitted(source)));
+        blocks.add(new Paragraph(carrying(source)));
+        blocks.add(verdict(source));
+        blocks.add(new Points(source.leading().stream().map(mode -> headline(source, mode)).toList()));
+        ForecastSkill.sentence(source).ifPresent(skill -> blocks.add(new Paragraph(skill)));
+        return new Section("summary", "Summary", blocks);
+    }
+
+    private static String fitted(ReportSource source) {
+        String data = source.snapshots().map(SummarySection::data).orElse("");
+        String method = source.operator().map(operator -> Sentence.of(operator.method()) + " Rank " + operator.rank() + ": "
+                + Sentence.of(operator.rankChoice())).orElse("The spectrum has rank " + source.spectrum().rank()
+                + "; what it was fitted with was not handed to this report.");
+        return data.isEmpty() ? method : data + " " + method;
+    }
+
+    private static String data(Snapshots snapshots) {
+        int samples = snapshots.training().stream().mapToInt(Run::samples).sum();
+        return "Fitted to " + Sentence.count(samples, "sample") + " of"
+                + " " + Sentence.count(snapshots.channels().size(), "channel")
+                + " in " + Sentence.count(snapshots.training().size(), "training run") + "; "
+                + (snapshots.holdout().isEmpty() ? "nothing was held"
+                + " out." : Sentence.count(snapshots.holdout().size(), "part")
+                + " held out to judge.");
+    }
+
+    private static String carrying(ReportSource source) {
+        List<Mode> modes = source.spectrum().modes();
+        double share = 0;
+        int carrying = 0;
+        while (carrying < modes.size() && share < MOST_OF_SIGNAL) {
+            share += modes.get(carrying).energyShare();
+            carrying++;
+        }
+        boolean constant = modes.stream().limit(carrying).anyMatch(Mode::constant);
+        return carrying + " of " + Sentence.count(modes.size(), "mode") + (carrying == 1 ? " carries " : " carry ")
+                + Digits.percent(share) + " of the signal" + (constant ? ", the constant part among them." : ".");
+    }
+
+    private static Callout verdict(ReportSource source) {
+        return source.verdict().map(verdict -> told(verdict.overall())).orElseGet(() -> new Callout(Tone.CAUTION,
+                "it was not judged whether these modes exist", List.of("The figures below may be the weights of one"
+                + " projection"
+                + " only. Connect a Well-posedness Checker before any of them is reported as a mode.")));
+    }
+
+    private static Callout told(ModeVerdict overall) {
+        Grade grade = overall.grade();
+        return new Callout(ExistenceSection.tone(grade), "the modes together: " + grade.word(),
+                List.of(VerdictWords.overall(grade), Sentence.of(overall.sentence()),
+                "What may be done: " + VerdictWords.advice(grade)));
+    }
+
+    private static String headline(ReportSource source, Mode mode) {
+        Optional<Grade> grade = source.grade(mode);
+        return "Mode " + mode.number() + ": " + ModeWords.headline(mode, source.unit()) + "; "
+                + Digits.percent(mode.energyShare())
+                + " of the signal" + grade.map(g -> "; " + g.word() + " (" + g.advice() + ")").orElse("") + ".";
+    }
+}

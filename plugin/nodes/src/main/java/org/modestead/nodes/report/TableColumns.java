@@ -1,0 +1,47 @@
+package org.modestead.nodes.report;
+
+import java.time.LocalDate;
+import java.time.LocalDateTime;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.contract.SettingFault;
+import org.modestead.nodes.table.RowCursor;
+import org.modestead.nodes.table.Table;
+
+/**
+ * Finds columns by name and reads the times of result tables.
+ *
+ * @param table whose columns are meant
+ */
+record TableColumns(Table table) {
+    private static final String TIME = "time";
+
+    /**
+     * Returns the position of a column.
+     *
+     * @throws SettingFault if there is none of that name
+     */
+    int of(String name) {
+        return table.schema().indexOf(name).orElseThrow(() -> new SettingFault(table.origin(), "there is no column " + name,
+                "connect a table with the columns of the Reconstruction and Forecast node"));
+    }
+
+    /** Returns the current row's time as the engine counts it. */
+    double time(RowCursor cursor, Snapshots snapshots) {
+        int column = of(TIME);
+        return switch (table.schema().columns().get(column).type()) {
+            case DATE -> TimeAxis.ofDate(cursor.date(column));
+            case DATE_TIME, ZONED_DATE_TIME -> TimeAxis.ofDateTime(cursor.dateTime(column));
+            case TEXT -> written(cursor.text(column), snapshots.time());
+            default -> cursor.number(column);
+        };
+    }
+
+    private static double written(String text, TimeAxis axis) {
+        return switch (axis.kind()) {
+            case NUMBER -> Double.parseDouble(text);
+            case DATE -> TimeAxis.ofDate(LocalDate.parse(text));
+            case DATE_TIME -> TimeAxis.ofDateTime(LocalDateTime.parse(text));
+        };
+    }
+}
