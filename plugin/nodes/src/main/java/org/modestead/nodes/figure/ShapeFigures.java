@@ -18,8 +18,8 @@ public final class ShapeFigures {
     private ShapeFigures() {}
 
     /**
-     * Draws magnitude and phase by channel for the strongest modes that are not the constant. Channels of one unit are
-     * drawn in it; otherwise each is divided by the scale it was prepared with.
+     * Draws magnitude and phase by channel for the strongest modes that are not the constant. The largest
+     * magnitude is 1; channels of different units are first divided by the scale they were prepared with.
      *
      * @param spectrum the modes
      * @param preparation of the snapshots the operator was fitted to
@@ -39,15 +39,22 @@ public final class ShapeFigures {
     private record Shape(Spectrum spectrum, Mode mode, Preparation preparation) {
 
         Figure magnitude() {
-            boolean oneUnit = spectrum.channels().stream().map(Channel::unit).distinct().count() == 1;
-            double[] heights = newest().stream().mapToDouble(entry -> oneUnit ? entry.magnitude()
-                    : entry.magnitude() / preparation.scale()[entry.channelIndex()]).toArray();
-            String label = oneUnit ? Axes.labelled("magnitude", spectrum.channels().get(0).unit())
-                    : "magnitude / scale of the channel";
-            String reading = oneUnit ? "" : " Units differ, so each channel is divided by the scale it was prepared with.";
+            double[] sizes = newest().stream().mapToDouble(this::size).toArray();
+            double largest = Arrays.stream(sizes).max().orElse(0);
+            double[] heights = Arrays.stream(sizes).map(size -> largest > 0 ? size / largest : 0).toArray();
+            String scaled = oneUnit() ? "" : " Units differ, so each channel was first divided by the scale it was prepared with.";
             return new Figure("shape-" + mode.number() + "-magnitude", Figure.Kind.SHAPES, title("magnitude"),
-                    "How far each channel moves in this mode." + reading, channels(), Figure.Axis.linear(label),
+                    "How far each channel moves in this mode, relative to the one that moves most." + scaled, channels(),
+                    Figure.Axis.linear("magnitude relative to the largest"),
                     List.of(new Figure.Bars("", "mode:" + mode.number(), heights)));
+        }
+
+        private boolean oneUnit() {
+            return spectrum.channels().stream().map(Channel::unit).distinct().count() == 1;
+        }
+
+        private double size(ModeShapes.Entry entry) {
+            return oneUnit() ? entry.magnitude() : entry.magnitude() / preparation.scale()[entry.channelIndex()];
         }
 
         Figure phase() {

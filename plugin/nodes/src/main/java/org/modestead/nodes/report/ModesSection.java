@@ -34,9 +34,6 @@ final class ModesSection {
         }
         ShapeFigures.figures(source.spectrum(), preparation(source), source.modes())
                 .forEach(figure -> blocks.add(new Picture(figure)));
-        if (source.snapshots().isEmpty()) {
-            blocks.add(new Paragraph("Magnitudes are in prepared units, for the recording was not handed to this report."));
-        }
         return new Section("modes", "Modes", blocks);
     }
 
