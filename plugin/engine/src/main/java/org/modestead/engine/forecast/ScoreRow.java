@@ -12,8 +12,9 @@ package org.modestead.engine.forecast;
  * @param rmse root mean squared error
  * @param mae mean absolute error
  * @param mase mean absolute scaled error, see {@link Scores#naiveScale}; no unit; NaN without a training scale
- * @param coverage share of the observations inside the bands, in [0, 1]; NaN without bands
- * @param intervalScore mean interval score of the bands, see {@link Scores#interval}; NaN without bands
+ * @param coverage share of the observations inside the bands, over the lead times that have one and the origins that
+ *     they were not calibrated on, in [0, 1]; NaN without any
+ * @param intervalScore mean interval score of the same bands, see {@link Scores#interval}; NaN without any
  */
 public record ScoreRow(
         String method, double horizon, double rmse, double mae, double mase, double coverage, double intervalScore) {}

@@ -20,6 +20,8 @@ import org.modestead.engine.forecast.Backtest.Errors;
 record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
 
     private static final int FEW_ORIGINS = 5;
+    // Coverage this much below the promise is said aloud; less is within the scatter of some ten independent errors.
+    private static final double MISSED = 0.1;
 
     static ScoreTable of(ForecastTask task, List<Judged> methods, ErrorUnits units) {
         List<ScoreRow> rows = new ArrayList<>();
@@ -81,8 +83,17 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
         }
         addUnitDoubts(units, out);
         rows.stream().filter(row -> row.method().equals(rows.get(0).method()))
+                .filter(row -> row.coverage() < task.plan().coverage() - MISSED)
+                .forEach(row -> out.add(missed(row, task.plan().coverage())));
+        rows.stream().filter(row -> row.method().equals(rows.get(0).method()))
                 .forEach(own -> better(rows, own).ifPresent(naive -> out.add(naiveIsBetter(naive, own))));
         return out;
+    }
+
+    private static Doubt missed(ScoreRow row, double promised) {
+        return new Doubt("bands-too-narrow", "Up to horizon " + Summary.figure(row.horizon()) + " the bands held only "
+                + Summary.percent(row.coverage()) + " of the holdout instead of " + Summary.percent(promised)
+                + ": the errors there are larger than those they were calibrated on.");
     }
 
     private static Doubt naiveIsBetter(ScoreRow naive, ScoreRow own) {
@@ -104,7 +115,7 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
         }
         if (DoubleStream.of(units.scaled()).anyMatch(Double::isNaN)) {
             out.add(new Doubt("no-naive-scale", "At least one channel does not change in training from one season (or step)"
-                    + " to the next; it is left out of the scaled error (mase)."));
+                    + " to the next, or no training run is that long; it is left out of the scaled error (mase)."));
         }
     }
 
