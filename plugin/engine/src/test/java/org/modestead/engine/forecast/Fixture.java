@@ -13,6 +13,7 @@ import org.hipparchus.linear.Array2DRowRealMatrix;
 import org.hipparchus.linear.EigenDecompositionNonSymmetric;
 import org.hipparchus.linear.FieldVector;
 import org.modestead.engine.Progress;
+import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.linalg.Complex;
@@ -41,30 +42,6 @@ import org.modestead.engine.wellposed.Verdict;
  * @param spectrum of it
  */
 record Fixture(FittedOperator operator, Spectrum spectrum) {
-
-    /** Coordinates as functions: {@code q(x) = x}. */
-    static final class Coordinates implements FunctionBasis {
-        private final int size;
-
-        Coordinates(int size) {
-            this.size = size;
-        }
-
-        @Override
-        public int size() {
-            return size;
-        }
-
-        @Override
-        public DMatrixRMaj evaluate(DMatrixRMaj states) {
-            return states.copy();
-        }
-
-        @Override
-        public String describe() {
-            return size + " coordinates";
-        }
-    }
 
     /** Stands where a fitted operator names its estimator; nothing here fits. */
     private static final class ByHand implements Estimator {
