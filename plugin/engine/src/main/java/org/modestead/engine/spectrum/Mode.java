@@ -13,7 +13,7 @@ import org.modestead.engine.linalg.Complex;
  * @param indices columns of the spectrum's eigenvectors: one, or two conjugate ones (positive imaginary part first)
  * @param rate λ per time unit, imaginary part at least 0
  * @param amplitude root mean square over the training runs of the Euclidean norm over channels of the mode's part of
- *     the signal at the run's first state; peak value for an oscillation; in prepared units
+ *     the signal at the run's first sample; peak value for an oscillation; in prepared units
  * @param energyShare mean square of the mode's part over the training states divided by the sum of these over all
  *     modes, in [0, 1]
  * @param jointSoloGap relative difference of joint and solo weights, 0 for an orthonormal eigenbasis

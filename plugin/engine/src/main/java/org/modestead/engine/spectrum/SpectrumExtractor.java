@@ -17,7 +17,7 @@ public final class SpectrumExtractor {
 
     private static final double ILL_CONDITIONED = 1e8;
     private static final double NEAR_LIMIT = 0.95;
-    private static final double NEGLIGIBLE = 1e-6;
+    private static final double NEGLIGIBLE = 5e-3;
 
     private SpectrumExtractor() {}
 
@@ -47,7 +47,7 @@ public final class SpectrumExtractor {
         ZMatrixRMaj starts = expansion.eigenfunctions(sample.starts());
         List<Measured> measured = new ArrayList<>();
         for (List<Integer> group : Cluster.groups(expansion, clusters)) {
-            double energy = Contributions.meanSquare(Contributions.of(functions, expansion.joint(), group, sample.channels()));
+            double energy = Contributions.meanSquare(Contributions.of(functions, expansion.joint(), group, 0, sample.channels()));
             measured.add(new Measured(group, energy, amplitude(expansion, starts, group, clusters, sample.channels())));
         }
         measured.sort(Comparator.comparingDouble(Measured::energy).reversed()
@@ -80,16 +80,18 @@ public final class SpectrumExtractor {
         return Math.abs(mean.im()) <= 2 * spread ? new Complex(mean.re(), 0) : new Complex(mean.re(), Math.abs(mean.im()));
     }
 
+    /** Read off the oldest sample of the first state, that is where the run begins. */
     private static double amplitude(ModalExpansion expansion, ZMatrixRMaj starts, List<Integer> group, int[] clusters, int channels) {
+        int oldest = expansion.joint().numCols - channels;
         if (clusters[group.get(0)] != 0) {
-            return Math.sqrt(Contributions.meanSquare(Contributions.of(starts, expansion.joint(), group, channels)));
+            return Math.sqrt(Contributions.meanSquare(Contributions.of(starts, expansion.joint(), group, oldest, channels)));
         }
         int j = group.get(0);
         double peak = group.size();
         double sum = 0;
         for (int i = 0; i < starts.numRows; i++) {
             for (int k = 0; k < channels; k++) {
-                double part = peak * ComplexMatrices.entry(starts, i, j).times(ComplexMatrices.entry(expansion.joint(), j, k)).abs();
+                double part = peak * ComplexMatrices.entry(starts, i, j).times(ComplexMatrices.entry(expansion.joint(), j, oldest + k)).abs();
                 sum += part * part;
             }
         }

@@ -12,7 +12,7 @@ import org.modestead.engine.recording.StateRun;
  *
  * @param states p x N
  * @param starts first state of every run, runs x N
- * @param channels n, number of components that are the newest sample
+ * @param channels n, number of components that are the newest sample; the last n are the oldest one
  * @param longest duration of the longest run in time units
  */
 public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channels, double longest) {

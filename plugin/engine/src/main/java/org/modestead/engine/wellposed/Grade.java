@@ -11,7 +11,7 @@ public enum Grade {
     /** Holdout passes, but the rate or the weight keeps changing as the basis grows. */
     DRIFTS("drifts", "report only the projection and its forecast"),
     /** The residual stays, or the norm grows without bound. */
-    ABSENT("absent", "no mode in this space: try another kernel");
+    ABSENT("absent", "there is no such mode among these functions: try another kernel, dictionary or delay depth");
 
     private final String word;
     private final String advice;

@@ -60,7 +60,7 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         for (int k = 0; k < channels; k++) {
             norm = Math.hypot(norm, ComplexMatrices.entry(expansion.joint(), j, k).abs());
         }
-        double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, channels)));
+        double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, 0, channels)));
         return new Part(group, expansion.rates().get(j), weight, norm, Math.sqrt(values.numRows) / size, residuals[j]);
     }
 
