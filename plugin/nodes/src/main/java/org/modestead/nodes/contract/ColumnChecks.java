@@ -26,7 +26,8 @@ public final class ColumnChecks {
      * @param inputs schemas of connected input tables, by port id, where known; settings of other ports are skipped
      * @return all problems, empty when all is well
      */
-    public static List<SettingProblem> check(NodeDeclaration declaration, Settings settings, Map<String, TableSchema> inputs) {
+    public static List<SettingProblem> check(NodeDeclaration declaration, Settings settings, Map<String,
+            TableSchema> inputs) {
         List<SettingProblem> problems = new ArrayList<>();
         for (Setting setting : Visibility.shown(declaration, settings)) {
             if (setting instanceof Setting.OneColumn one && inputs.containsKey(one.port())) {
@@ -45,14 +46,16 @@ public final class ColumnChecks {
 
     private static Optional<SettingProblem> problem(String key, String name, Set<CellType> types, TableSchema schema) {
         OptionalInt index = schema.indexOf(name);
-        List<String> fitting = schema.columns().stream().filter(column -> types.contains(column.type())).map(Column::name).toList();
+        List<String> fitting = schema.columns().stream()
+                .filter(column -> types.contains(column.type())).map(Column::name).toList();
         if (index.isEmpty()) {
             return Optional.of(new SettingProblem(key, "the input has no column " + name
                     + NearestName.hint(name, schema.names()), wanted(types, fitting)));
         }
         CellType type = schema.columns().get(index.getAsInt()).type();
         return types.contains(type) ? Optional.empty()
-                : Optional.of(new SettingProblem(key, "the column " + name + " holds " + type.title(), wanted(types, fitting)));
+                : Optional.of(new SettingProblem(key, "the column " + name + " holds " + type.title(), wanted(types,
+                        fitting)));
     }
 
     private static String wanted(Set<CellType> types, List<String> fitting) {

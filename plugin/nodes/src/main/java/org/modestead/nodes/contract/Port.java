@@ -13,7 +13,8 @@ import org.modestead.nodes.table.TableSchema;
  * @param optional whether an input may stay unconnected; false for outputs
  * @param schema columns of an output table where they never change
  */
-public record Port(String id, PortType type, String title, String description, boolean optional, Optional<TableSchema> schema) {
+public record Port(String id, PortType type, String title, String description, boolean optional,
+        Optional<TableSchema> schema) {
 
     /** A port that must be connected, of a type other than a table with known columns. */
     public static Port of(String id, PortType type, String title, String description) {

@@ -46,7 +46,7 @@ public final class SettingText {
         return setting instanceof Setting.Numbers numbers ? numbers.unit() : "";
     }
 
-    /** Returns what is allowed beyond the kind, for example {@code above 0 and at most 1}; empty when nothing is to be said. */
+    /** Returns what is allowed beyond the kind, for example {@code above 0 and at most 1}; empty when that is all. */
     public static String range(Setting setting) {
         if (setting instanceof Setting.Number number) {
             return range(number.min(), number.minExclusive(), number.max(), unitWord(number.unit()));
@@ -62,7 +62,8 @@ public final class SettingText {
             return joined("each", range(numbers.min(), false, numbers.max(), unitWord(numbers.unit())));
         }
         return setting instanceof Setting.File file && !file.extensions().isEmpty()
-                ? "a name ending in " + file.extensions().stream().map(end -> "." + end).collect(Collectors.joining(", ")) : "";
+                ? "a name ending in " + file.extensions().stream().map(end -> "."
+                        + end).collect(Collectors.joining(", ")) : "";
     }
 
     /** Returns the default as text, empty when the setting is not set at first. */
@@ -99,7 +100,8 @@ public final class SettingText {
     public static String types(Set<CellType> types) {
         List<String> titles = List.of(CellType.values()).stream().filter(types::contains).map(CellType::title).toList();
         int last = titles.size() - 1;
-        return last < 1 ? String.join("", titles) : String.join(", ", titles.subList(0, last)) + " or " + titles.get(last);
+        return last < 1 ? String.join("", titles) : String.join(", ", titles.subList(0, last)) + " or "
+                + titles.get(last);
     }
 
     /** Writes a number without exponent or trailing zeros, as a person would type it, where that is short. */
@@ -109,7 +111,8 @@ public final class SettingText {
         }
         double size = Math.abs(value);
         boolean longWritten = size != 0 && (size < 1e-6 || size >= 1e15);
-        return longWritten ? Double.toString(value) : new BigDecimal(Double.toString(value)).stripTrailingZeros().toPlainString();
+        return longWritten ? Double.toString(value)
+                : new BigDecimal(Double.toString(value)).stripTrailingZeros().toPlainString();
     }
 
     private static String plain(List<Double> values) {

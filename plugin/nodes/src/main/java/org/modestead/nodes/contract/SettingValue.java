@@ -57,7 +57,8 @@ final class SettingValue {
         } else if (setting instanceof Setting.Choice choice) {
             return choice(choice, given);
         } else if (setting instanceof Setting.Flag) {
-            return given instanceof Boolean ? Checked.good(given) : wrongKind(setting, given, "true or false, without quotes");
+            return given instanceof Boolean ? Checked.good(given) : wrongKind(setting, given, "true or false, without"
+                    + " quotes");
         } else if (setting instanceof Setting.Columns columns) {
             return columns(columns, given);
         } else if (setting instanceof Setting.Texts) {
@@ -133,7 +134,8 @@ final class SettingValue {
     private static Checked text(Setting setting, Object given) {
         String kind = SettingText.kind(setting);
         if (!(given instanceof String text)) {
-            return wrongKind(setting, given, "a " + (kind.equals("column") ? "column name in quotes" : kind + " in quotes"));
+            return wrongKind(setting, given, "a " + (kind.equals("column") ? "column name in quotes" : kind
+                    + " in quotes"));
         }
         return text.isBlank() && SettingText.isRequired(setting)
                 ? Checked.bad(setting, "an empty text", "give a " + kind) : Checked.good(text);
@@ -164,14 +166,16 @@ final class SettingValue {
         List<SettingProblem> problems = new ArrayList<>();
         for (int i = 0; i < list.size(); i++) {
             if (!(list.get(i) instanceof String text) || text.isBlank()) {
-                problems.add(new SettingProblem(setting.key(), "entry " + (i + 1) + " is " + entry(list.get(i)), "use " + wanted));
+                problems.add(new SettingProblem(setting.key(), "entry " + (i + 1) + " is " + entry(list.get(i)), "use "
+                        + wanted));
             }
         }
         return problems.isEmpty() ? Checked.good(textList(given)) : new Checked(Optional.empty(), problems);
     }
 
     private static Checked numbers(Setting.Numbers setting, Object given) {
-        String wanted = "a list of numbers" + (SettingText.range(setting).isEmpty() ? "" : ", " + SettingText.range(setting));
+        String wanted = "a list of numbers" + (SettingText.range(setting).isEmpty() ? "" : ", "
+                + SettingText.range(setting));
         if (!(given instanceof List<?> list)) {
             return wrongKind(setting, given, wanted);
         }
@@ -183,7 +187,8 @@ final class SettingValue {
             if (value.isPresent()) {
                 values.add(value.get());
             } else {
-                problems.add(new SettingProblem(setting.key(), "entry " + (i + 1) + " is " + entry(list.get(i)), "use " + wanted));
+                problems.add(new SettingProblem(setting.key(), "entry " + (i + 1) + " is " + entry(list.get(i)), "use "
+                        + wanted));
             }
         }
         return problems.isEmpty() ? Checked.good(List.copyOf(values)) : new Checked(Optional.empty(), problems);
@@ -226,7 +231,8 @@ final class SettingValue {
     }
 
     private static String written(Number number) {
-        return number instanceof Double || number instanceof Float ? SettingText.plain(number.doubleValue()) : number.toString();
+        return number instanceof Double || number instanceof Float ? SettingText.plain(number.doubleValue())
+                : number.toString();
     }
 
     private static List<String> split(String text) {

@@ -77,10 +77,12 @@ public final class SettingsReader {
         }
         if (!(version instanceof Integer number) || number < 1) {
             return new Refused(List.of(new SettingProblem(VERSION, SettingValue.seen(version),
-                    "write the whole number under which the settings were stored, at most " + declaration.settingsVersion())));
+                    "write the whole number under which the settings were stored, at most "
+                            + declaration.settingsVersion())));
         }
         boolean older = number < declaration.settingsVersion();
-        return older ? read(declaration, node.upgrade(Map.copyOf(withoutNulls(stored)), number), declaration.settingsVersion())
+        return older ? read(declaration, node.upgrade(Map.copyOf(withoutNulls(stored)), number),
+                declaration.settingsVersion())
                 : read(declaration, stored, number);
     }
 
@@ -133,7 +135,8 @@ public final class SettingsReader {
                 .toList();
     }
 
-    private static List<SettingProblem> missing(NodeDeclaration declaration, Map<String, Object> raw, Map<String, Object> values) {
+    private static List<SettingProblem> missing(NodeDeclaration declaration, Map<String, Object> raw, Map<String,
+            Object> values) {
         return declaration.settings().stream()
                 .filter(setting -> SettingText.isRequired(setting) && raw.get(setting.key()) == null)
                 .filter(setting -> Visibility.isShown(declaration, values, setting))

@@ -96,7 +96,8 @@ public final class MemoryTable implements Table {
             for (int j = 0; j < cells.length; j++) {
                 Column column = schema.columns().get(j);
                 if (cells[j] != null && !ColumnStore.fits(column.type(), cells[j])) {
-                    throw new IllegalArgumentException("column " + column.name() + " holds " + column.type().title() + ", not "
+                    throw new IllegalArgumentException("column " + column.name() + " holds " + column.type().title()
+                            + ", not "
                             + cells[j].getClass().getSimpleName() + " " + cells[j]);
                 }
             }

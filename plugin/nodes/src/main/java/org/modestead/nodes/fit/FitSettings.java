@@ -1,0 +1,183 @@
+package org.modestead.nodes.fit;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import org.modestead.engine.basis.Dictionary;
+import org.modestead.engine.kernel.Kernel;
+import org.modestead.engine.operator.DictionaryEstimator;
+import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.KernelStepEstimator;
+import org.modestead.engine.operator.LinearEstimator;
+import org.modestead.engine.operator.OccupationEstimator;
+import org.modestead.engine.operator.RankRule;
+import org.modestead.engine.operator.SegmentPlan;
+import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.Setting.Common;
+import org.modestead.nodes.contract.Setting.Option;
+import org.modestead.nodes.contract.SettingFault;
+import org.modestead.nodes.contract.SettingProblem;
+import org.modestead.nodes.contract.Settings;
+
+/** Settings of the Operator Fitter, and what they mean for the engine. */
+final class FitSettings {
+
+    static final String ESTIMATOR = "estimator";
+    static final String DICTIONARY = "dictionary";
+    static final String PERIODS = "periods";
+    static final String RANK_RULE = "rank-rule";
+    static final String RIDGE = "ridge";
+    static final String SEGMENT = "segment-samples";
+
+    private static final String[] GENERATORS = {"generator", "scaled-generator"};
+    private static final double LARGEST = Double.MAX_VALUE;
+
+    private FitSettings() {}
+
+    /** Returns the settings in dialog order. */
+    static List<Setting> declared() {
+        List<Setting> all = new ArrayList<>();
+        all.add(estimator());
+        all.addAll(dictionarySettings());
+        all.addAll(kernelSettings());
+        all.addAll(rankSettings());
+        return all;
+    }
+
+    private static Setting estimator() {
+        return new Setting.Choice(new Common(ESTIMATOR, "Operator", "Operator", "Which operator is fitted, and through"
+                + " which functions."), List.of(
+                new Option("linear", "Step map, linear", "One step of the state by least squares, in the (delay)"
+                        + " coordinates themselves; needs an even step."),
+                new Option(DICTIONARY, "Step map, dictionary", "One step of named functions of the state by least"
+                        + " squares; needs an even step."),
+                new Option("kernel-step", "Step map, kernel", "One step in the space of the connected kernel; needs an"
+                        + " even step."),
+                new Option("generator", "Generator", "The rate of change in continuous time, in the space of the"
+                        + " connected kernel, from averages along pieces of runs; uneven steps are welcome and no"
+                        + " derivative is taken."),
+                new Option("scaled-generator", "Scaled generator", "As the generator, with states contracted towards"
+                        + " zero: this makes the operator compact for more flows, but its eigenvalues are only near"
+                        + " those of the generator.")),
+                "linear");
+    }
+
+    private static List<Setting> dictionarySettings() {
+        String group = "Dictionary";
+        return List.of(
+                new Setting.Choice(new Common(DICTIONARY, "Functions", group, "Named functions of the state.")
+                        .when(ESTIMATOR, DICTIONARY), List.of(
+                        new Option("monomials", "Monomials", "All products of powers of the state's components up to a"
+                                + " total degree."),
+                        new Option("fourier", "Fourier", "Sines and cosines of each component, for components that are"
+                                + " angles or otherwise periodic.")), "monomials"),
+                new Setting.Whole(new Common("degree", "Degree", group, "Largest total degree. The number of functions"
+                        + " grows fast with it: with N components and degree d it is (N+d)!/(N! d!).").when(DICTIONARY,
+                        "monomials"), "", 1, 20,
+                        OptionalLong.of(2)),
+                new Setting.Whole(new Common("order", "Order", group, "Number of harmonics of each component.")
+                        .when(DICTIONARY, "fourier"), "", 1, 100, OptionalLong.of(3)),
+                new Setting.Numbers(new Common(PERIODS, "Periods", group, "Period of each component of the state, in"
+                        + " prepared units; one number holds for all. Empty takes 2π, right for angles in radians.")
+                        .when(DICTIONARY, "fourier"), "", 1e-12, LARGEST, List.of()));
+    }
+
+    private static List<Setting> kernelSettings() {
+        String group = "Kernel";
+        return List.of(
+                new Setting.Whole(new Common("landmarks", "Landmarks", group, "Most states that carry a function each"
+                        + " when there are many; recordings of a few hundred samples use all. More cost time in"
+                        + " proportion and add detail.").when(ESTIMATOR, "kernel-step"), "states", 1, 100_000,
+                        OptionalLong.of(500)),
+                new Setting.Whole(new Common(SEGMENT, "Steps a piece", group, "Runs are cut into pieces of this many"
+                        + " sampling steps, each of which carries one function; 0 takes whole runs. Cut long runs, for"
+                        + " their average over many periods says little.").when(ESTIMATOR, GENERATORS), "steps", 0,
+                        1_000_000, OptionalLong.of(20)),
+                new Setting.Whole(new Common("end-smoothing", "Smoothing of the ends", group, "Samples in the local"
+                        + " cubic that smooths the ends of each piece, where noise acts most; fewer than 5 take the ends"
+                        + " as recorded.").when(ESTIMATOR, GENERATORS), "samples", 0, 1000, OptionalLong.of(0)),
+                new Setting.Number(new Common("contraction", "Contraction", group, "Factor a by which states are"
+                        + " contracted; nearer to 1 is nearer to the generator.").when(ESTIMATOR, "scaled-generator"), "",
+                        0, true, 0.999999,
+                        OptionalDouble.of(0.99)));
+    }
+
+    private static List<Setting> rankSettings() {
+        String group = "Rank";
+        return List.of(
+                new Setting.Choice(new Common(RANK_RULE, "Rank by", group, "How many orthonormal functions are kept:"
+                        + " too few miss motion, too many fit noise."), List.of(
+                        new Option("energy", "Share of the variance", "As many as hold the given share of the squared"
+                                + " singular values."),
+                        new Option("fixed", "Number", "The number given here."),
+                        new Option("hard-threshold", "Noise threshold", "Singular values above the threshold that is"
+                                + " optimal for white noise of unknown level."),
+                        new Option("holdout", "Smallest holdout error", "The number that predicts best one step ahead on"
+                                + " a quarter of the training samples, left out while choosing.")),
+                        "energy"),
+                new Setting.Number(new Common("energy", "Share", group, "Share of the sum of squared singular values to"
+                        + " be held.")
+                        .when(RANK_RULE, "energy"), "", 0, true, 1, OptionalDouble.of(0.9999)),
+                new Setting.Whole(new Common("rank", "Rank", group, "Number of functions kept.").when(RANK_RULE, "fixed"),
+                        "functions", 1, 10_000, OptionalLong.of(10)),
+                new Setting.Whole(new Common("largest-rank", "Largest rank", group, "Largest number of functions tried.")
+                        .when(RANK_RULE, "holdout"), "functions", 1, 10_000, OptionalLong.of(30)),
+                new Setting.Number(new Common(RIDGE, "Ridge", group, "Added to the squared singular values, relative to"
+                        + " the largest, before they are divided by: steadies an ill-conditioned fit at the price of a"
+                        + " small bias; 0 adds nothing."), "", 0, false, 1, OptionalDouble.of(0)));
+    }
+
+    /**
+     * Returns the estimator asked for.
+     *
+     * @throws SettingFault if it needs a kernel and none is connected
+     */
+    static Estimator estimator(Settings settings, Optional<Kernel> kernel) {
+        return switch (settings.text(ESTIMATOR)) {
+            case "linear" -> new LinearEstimator();
+            case DICTIONARY -> new DictionaryEstimator(dictionary(settings));
+            case "kernel-step" -> new KernelStepEstimator(needed(settings, kernel), settings.whole("landmarks"));
+            case "generator" -> new OccupationEstimator(needed(settings, kernel), segments(settings), 1);
+            default -> new OccupationEstimator(needed(settings, kernel), segments(settings),
+                    settings.number("contraction"));
+        };
+    }
+
+    private static Dictionary dictionary(Settings settings) {
+        return settings.text(DICTIONARY).equals("monomials") ? Dictionary.monomials(settings.whole("degree"))
+                : Dictionary.fourier(settings.whole("order"), periods(settings.numbers(PERIODS)));
+    }
+
+    private static double[] periods(List<Double> given) {
+        return given.isEmpty() ? new double[] {2 * Math.PI} : given.stream().mapToDouble(Double::doubleValue).toArray();
+    }
+
+    private static SegmentPlan segments(Settings settings) {
+        return new SegmentPlan(settings.whole(SEGMENT), settings.whole("end-smoothing"));
+    }
+
+    private static Kernel needed(Settings settings, Optional<Kernel> kernel) {
+        return kernel.orElseThrow(() -> new SettingFault("setting " + ESTIMATOR, "the operator "
+                + settings.text(ESTIMATOR)
+                + " without a kernel", "connect a Kernel Chooser to the input kernel, or choose linear or dictionary"));
+    }
+
+    /** Returns what is wrong whatever is connected. */
+    static List<SettingProblem> problems(Settings settings) {
+        boolean generator = List.of(GENERATORS).contains(settings.text(ESTIMATOR));
+        return generator && settings.whole(SEGMENT) == 1 ? List.of(new SettingProblem(SEGMENT, "pieces of one step",
+                "give at least 2 steps, or 0 for whole runs")) : List.of();
+    }
+
+    /** Returns how the rank is chosen. */
+    static RankRule rankRule(Settings settings) {
+        return switch (settings.text(RANK_RULE)) {
+            case "fixed" -> new RankRule.Fixed(settings.whole("rank"));
+            case "hard-threshold" -> new RankRule.HardThreshold();
+            case "holdout" -> new RankRule.Holdout(settings.whole("largest-rank"));
+            default -> new RankRule.Energy(settings.number("energy"));
+        };
+    }
+}

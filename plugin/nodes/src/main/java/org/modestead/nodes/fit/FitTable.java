@@ -1,0 +1,52 @@
+package org.modestead.nodes.fit;
+
+import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.operator.Evolution;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.InnerProduct;
+import org.modestead.nodes.contract.SettingText;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.MemoryTable;
+import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.TimeUnit;
+
+/** What was fitted and how well it is conditioned, one item a row. */
+final class FitTable {
+
+    static final TableSchema SCHEMA = TableSchema.of(Column.text("item"), Column.text("value"));
+
+    private FitTable() {}
+
+    static MemoryTable of(FittedOperator operator, double ridge) {
+        double[] singular = operator.compression().singular();
+        TimeUnit unit = new TimeUnit(operator.snapshots().time().unit());
+        MemoryTable.Builder rows = MemoryTable.builder(SCHEMA, "fit");
+        rows.row("operator", operator.estimator().id());
+        rows.row("method", operator.method());
+        rows.row("kernel", operator.kernel().map(KernelSpec::label).orElse("none"));
+        rows.row("kind", kind(operator.evolution(), unit));
+        rows.row("highest frequency", frequency(operator.evolution().aliasingLimit(), unit));
+        rows.row("inner product", operator.compression().innerProduct() == InnerProduct.DATA ? "average over the data"
+                : "kernel space");
+        rows.row("functions", operator.compression().basis().describe());
+        rows.row("snapshot pairs or pieces", Integer.toString(operator.compression().snapshots()));
+        rows.row("largest rank", Integer.toString(operator.compression().rank()));
+        rows.row("rank", Integer.toString(operator.rank()));
+        rows.row("rank chosen by", operator.rankChoice());
+        rows.row("condition", SettingText.plain(singular[0] / singular[operator.rank() - 1]));
+        rows.row("ridge", SettingText.plain(ridge));
+        return rows.build();
+    }
+
+    private static String kind(Evolution evolution, TimeUnit unit) {
+        if (evolution instanceof Evolution.StepMap map) {
+            return "step map, step " + SettingText.plain(map.step()) + " " + unit.name();
+        }
+        double contraction = ((Evolution.Generator) evolution).contraction();
+        return contraction == 1 ? "generator" : "scaled generator, contraction " + SettingText.plain(contraction);
+    }
+
+    private static String frequency(double limit, TimeUnit unit) {
+        return Double.isInfinite(limit) ? "no limit" : SettingText.plain(limit) + " " + unit.frequency();
+    }
+}

@@ -1,0 +1,96 @@
+package org.modestead.nodes.fit;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.kernel.Kernel;
+import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.OperatorFitter;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.nodes.contract.Node;
+import org.modestead.nodes.contract.NodeDeclaration;
+import org.modestead.nodes.contract.NodeInputs;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Port;
+import org.modestead.nodes.contract.PortType;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.SettingProblem;
+import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.figure.SingularValues;
+import org.modestead.nodes.table.TableSchema;
+
+/** Fits the operator that carries the signal forward, in steps or in continuous time. */
+public final class OperatorFitterNode implements Node {
+
+    @Override
+    public NodeDeclaration declaration() {
+        return new NodeDeclaration("operator-fitter", "Operator Fitter", NodeDeclaration.Stage.FIT,
+                "Fits the operator that carries the signal forward: a map of one step or the generator in continuous"
+                        + " time.",
+                description(), List.of(
+                        "Schmid, Dynamic mode decomposition of numerical and experimental data, Journal of Fluid"
+                                + " Mechanics 656:5, 2010",
+                        "Williams, Kevrekidis and Rowley, A data-driven approximation of the Koopman operator, Journal"
+                                + " of Nonlinear Science 25:1307, 2015",
+                        "Rosenfeld, Kamalapurkar, Gruss and Johnson, Dynamic mode decomposition for continuous time"
+                                + " systems with the Liouville operator, Journal of Nonlinear Science 32:5, 2022",
+                        "Gavish and Donoho, The optimal hard threshold for singular values is 4/√3, IEEE Transactions"
+                                + " on Information Theory 60:5040, 2014"),
+                List.of("Koopman", "Liouville", "generator", "transfer operator", "least squares", "singular values",
+                        "rank",
+                        "occupation kernel"),
+                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "Prepared states; only the training part"
+                        + " is fitted."),
+                        Port.optional("kernel", PortType.KERNEL, "Kernel", "Function space; needed by the kernel step"
+                                + " map and the generators.")),
+                List.of(Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator up to the largest rank"
+                        + " that the data support, with the rank chosen."),
+                        Port.table("fit", "Fit", "What was fitted and how well it is conditioned.", FitTable.SCHEMA)),
+                FitSettings.declared(), 1);
+    }
+
+    private static String description() {
+        return """
+                Looks at how functions of the state change from sample to sample, or along pieces of runs, and compresses \
+                that to a small matrix over orthonormal functions. Leading parts of this matrix are fits of lower rank: \
+                they are the rungs on which the Well-posedness Checker looks whether modes settle.
+
+                Start with the linear step map in delay coordinates: it is fast and right for signals that are sums of \
+                growing, decaying or steady oscillations. Use a dictionary or a kernel when the motion is nonlinear, and \
+                a generator when samples are uneven or when some states escape in finite time, for then no step map \
+                exists.
+
+                The rank decides most. Least squares on noisy samples reports too much damping; compare ranks, and let \
+                the checker judge.
+
+                Cost: linear and dictionary fits take samples times functions squared; kernel fits samples times \
+                landmarks times rank; no square matrix of all samples is formed.""";
+    }
+
+    @Override
+    public List<SettingProblem> check(Map<String, TableSchema> inputs, Settings settings) {
+        return FitSettings.problems(settings);
+    }
+
+    @Override
+    public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
+        Snapshots snapshots = inputs.get("snapshots", Snapshots.class);
+        Optional<Kernel> kernel = inputs.find("kernel", Kernel.class);
+        Estimator estimator = FitSettings.estimator(settings, kernel);
+        FittedOperator operator = OperatorFitter.fit(snapshots, estimator, FitSettings.rankRule(settings),
+                settings.number(FitSettings.RIDGE), context.progress());
+        List<Doubt> doubts = new ArrayList<>(operator.doubts());
+        if (kernel.isPresent() && operator.kernel().isEmpty()) {
+            doubts.add(new Doubt("kernel-unused", "A kernel is connected, but the operator " + operator.estimator()
+                    + " uses none."));
+        }
+        String rank = "Rank " + operator.rank() + " of at most " + operator.compression().rank() + ": "
+                + operator.rankChoice() + ".";
+        return new NodeResult(Map.of("operator", operator, "fit", FitTable.of(operator,
+                settings.number(FitSettings.RIDGE))),
+                List.of(SingularValues.figure(operator)), List.of("Fitted: " + operator.method() + ".", rank), doubts);
+    }
+}

@@ -1,0 +1,224 @@
+package org.modestead.nodes.prepare;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.Progress;
+import org.modestead.engine.RecordingFault;
+import org.modestead.engine.recording.Recording;
+import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.RowCursor;
+import org.modestead.nodes.table.Table;
+
+/**
+ * Turns a table into a recording, row by row, without holding the table.
+ *
+ * <p>Rows of different runs may be mixed; the rows of one run must be in order of time. Dates count in days (or weeks,
+ * years of 365.25 days), date-times in seconds (or min, h, d, week, year), numbers as they are. A missing cell of a
+ * channel stays missing; what happens to it is the snapshot plan's business.
+ */
+final class RecordingReader {
+
+    private static final int ROWS_BETWEEN_REPORTS = 4096;
+    private final Table table;
+    private final RecordingColumns columns;
+    private final List<String> channelColumns;
+    private final List<NumberCell> cells;
+    private final List<TextColumnWatch> watches;
+    private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
+
+    private RecordingReader(Table table, RecordingColumns columns) {
+        this.table = table;
+        this.columns = columns;
+        this.channelColumns = columns.channelColumns(table.schema());
+        List<String> read = new ArrayList<>(channelColumns);
+        read.addAll(columns.inputs());
+        this.cells = read.stream().map(name -> new NumberCell(table.origin(), name, position(name), type(name))).toList();
+        this.watches = columns.unusedTexts(table.schema()).stream()
+                .map(name -> new TextColumnWatch(name, position(name))).toList();
+    }
+
+    /**
+     * A recording and what its reader noticed.
+     *
+     * @param recording as logged
+     * @param rows number of table rows read
+     * @param doubts columns that look as if they should have been numbers
+     */
+    record Reading(Recording recording, long rows, List<Doubt> doubts) {}
+
+    /**
+     * Reads all rows.
+     *
+     * @throws RecordingFault naming table, row, column and value when a cell cannot be used
+     */
+    static Reading read(Table table, RecordingColumns columns, Progress progress) {
+        return new RecordingReader(table, columns).read(progress);
+    }
+
+    private Reading read(Progress progress) {
+        if (channelColumns.isEmpty()) {
+            throw new RecordingFault(table.origin(), "no column of numbers is left for the channels among "
+                    + String.join(", ", table.schema().names()), "choose the channels or convert their columns to"
+                    + " numbers");
+        }
+        TimeAxis axis = new TimeAxis(TimeAxis.Kind.NUMBER, columns.timeUnit());
+        long rows = 0;
+        try (RowCursor cursor = table.open()) {
+            RecordedTime time = null;
+            while (cursor.next()) {
+                time = time == null && !columns.time().isEmpty() ? firstTime(cursor) : time;
+                axis = time == null ? axis : time.axis();
+                append(cursor, time);
+                if (++rows % ROWS_BETWEEN_REPORTS == 0) {
+                    progress.checkCancelled();
+                    progress.report(0, rows + " rows read");
+                }
+            }
+        }
+        checkRows(rows);
+        return new Reading(recording(axis), rows, watches.stream().flatMap(watch -> watch.doubt().stream()).toList());
+    }
+
+    private RecordedTime firstTime(RowCursor cursor) {
+        int column = position(columns.time());
+        return RecordedTime.of(type(columns.time()), column, cursor.text(column), columns.timeUnit());
+    }
+
+    private void append(RowCursor cursor, RecordedTime time) {
+        RunBuffer run = runs.computeIfAbsent(runOf(cursor), RunBuffer::new);
+        double at = time == null ? run.samples() * columns.rowStep() : timeOf(cursor, time);
+        if (run.samples() > 0 && at <= run.lastTime()) {
+            throw outOfOrder(cursor, run, time, at);
+        }
+        run.start(cursor.row(), at);
+        for (int j = 0; j < cells.size(); j++) {
+            double value = cells.get(j).read(cursor);
+            if (j < channelColumns.size()) {
+                run.value(value);
+            } else {
+                run.input(value);
+            }
+        }
+        watches.forEach(watch -> watch.see(cursor));
+    }
+
+    private String runOf(RowCursor cursor) {
+        if (columns.run().isEmpty()) {
+            return "1";
+        }
+        String name = cursor.text(position(columns.run())).strip();
+        if (name.isEmpty()) {
+            throw new RecordingFault(place(cursor, columns.run()), "the name of the run is missing",
+                    "give every row the name of its run, or clear the run column");
+        }
+        return name;
+    }
+
+    private double timeOf(RowCursor cursor, RecordedTime time) {
+        String name = columns.time();
+        int column = position(name);
+        if (cursor.isMissing(column) || cursor.text(column).isBlank()) {
+            throw new RecordingFault(place(cursor, name), "the time is missing", "give every row its time or leave the"
+                    + " row out");
+        }
+        OptionalDouble found = time.read(cursor);
+        if (found.isEmpty() || Double.isInfinite(found.getAsDouble())) {
+            throw new RecordingFault(place(cursor, name), "the time is \"" + cursor.text(column) + "\"",
+                    "write " + time.wanted() + ", or choose another time column");
+        }
+        return found.getAsDouble();
+    }
+
+    private RecordingFault outOfOrder(RowCursor cursor, RunBuffer run, RecordedTime time, double at) {
+        String hint = columns.run().isEmpty() ? ", or set the run column if a new run starts here" : " of the run";
+        String within = columns.run().isEmpty() ? "" : " of run " + run.id();
+        return new RecordingFault(place(cursor, columns.time()), "the time " + time.axis().format(at)
+                + (at == run.lastTime() ? " repeats" : " comes after the later time") + " "
+                + time.axis().format(run.lastTime()) + " of row " + run.lastRow() + within,
+                "put rows in rising order of time, one row a time" + hint);
+    }
+
+    private void checkRows(long rows) {
+        if (rows == 0) {
+            throw new RecordingFault(table.origin(), "the table has a header but no rows", "give at least two rows");
+        }
+        if (rows == 1) {
+            throw new RecordingFault(table.origin(), "the table has one row only", "give at least two rows");
+        }
+    }
+
+    private Recording recording(TimeAxis axis) {
+        List<Run> finished = runs.values().stream()
+                .map(run -> run.finish(channelColumns.size(), columns.inputs().size())).toList();
+        return new Recording(columns.describe(channelColumns), columns.describe(columns.inputs()), finished, axis);
+    }
+
+    private String place(RowCursor cursor, String column) {
+        return table.origin() + ", row " + cursor.row() + " below the header, column " + column;
+    }
+
+    private int position(String name) {
+        return table.schema().indexOf(name).orElseThrow(() -> new RecordingFault(table.origin(), "there is no column "
+                + name,
+                "choose one of " + String.join(", ", table.schema().names())));
+    }
+
+    private CellType type(String name) {
+        return table.schema().columns().get(position(name)).type();
+    }
+
+    /** The rows of one run so far. */
+    private static final class RunBuffer {
+        private final String id;
+        private final GrowingDoubles times = new GrowingDoubles();
+        private final GrowingDoubles values = new GrowingDoubles();
+        private final GrowingDoubles inputs = new GrowingDoubles();
+        private long lastRow;
+
+        RunBuffer(String id) {
+            this.id = id;
+        }
+
+        String id() {
+            return id;
+        }
+
+        int samples() {
+            return times.size();
+        }
+
+        double lastTime() {
+            return times.last();
+        }
+
+        long lastRow() {
+            return lastRow;
+        }
+
+        void start(long row, double time) {
+            lastRow = row;
+            times.add(time);
+        }
+
+        void value(double value) {
+            values.add(value);
+        }
+
+        void input(double value) {
+            inputs.add(value);
+        }
+
+        Run finish(int channels, int knownInputs) {
+            DMatrixRMaj measured = DMatrixRMaj.wrap(times.size(), channels, values.toArray());
+            DMatrixRMaj known = DMatrixRMaj.wrap(times.size(), knownInputs, inputs.toArray());
+            return new Run(id, times.toArray(), measured, known, 0);
+        }
+    }
+}

@@ -1,0 +1,2 @@
+/** From tables to snapshots. */
+package org.modestead.nodes.prepare;
