@@ -22,9 +22,15 @@ public final class HoldoutResidual implements Check {
         for (Mode mode : evidence.spectrum().modes()) {
             double value = evidence.ladderOf(mode.number()).stream().filter(row -> row.rank() == evidence.operator().rank())
                     .mapToDouble(LadderRow::residual).findFirst().orElse(Double.NaN);
-            findings.add(new Finding(mode.number(), id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
-                    "On %s it misses its own rule of motion by %.3g of its size.", where, value)));
+            findings.add(new Finding(mode.number(), id(), value, threshold, value <= threshold, sentence(where, value)));
         }
         return findings;
+    }
+
+    private static String sentence(String where, double value) {
+        return Double.isNaN(value)
+                ? String.format(Locale.ROOT, "On %s it is weaker than %.0f %% of its size on the training runs, so they cannot judge it:"
+                        + " hold out a run that excites it.", where, 100 * Rung.EXCITED)
+                : String.format(Locale.ROOT, "On %s it misses its own rule of motion by %.3g of its size.", where, value);
     }
 }

@@ -3,9 +3,13 @@ package org.modestead.engine.wellposed;
 import java.util.ArrayList;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.data.ZMatrixRMaj;
+import org.modestead.engine.linalg.ComplexMatrices;
+import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
+import org.modestead.engine.spectrum.ModalExpansion;
 
 /**
  * Runs on which eigenfunctions are judged: those held out, or the training runs where nothing was held out, with the
@@ -29,6 +33,31 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
         }
         double longest = runs.stream().mapToDouble(run -> run.times()[run.count() - 1] - run.times()[0]).max().orElse(0);
         return new JudgingRuns(heldOut, runs, functions, longest);
+    }
+
+    /**
+     * Returns the root mean square of each eigenfunction over all states of the runs.
+     *
+     * @param expansion on one rung
+     * @return length r
+     */
+    double[] sizes(ModalExpansion expansion) {
+        double[] squares = new double[expansion.rank()];
+        int states = 0;
+        for (DMatrixRMaj evaluated : functions) {
+            DMatrixRMaj leading = Matrices.block(evaluated, 0, evaluated.numRows, 0, expansion.rank());
+            ZMatrixRMaj values = ComplexMatrices.product(leading, expansion.vectors());
+            for (int i = 0; i < values.numRows; i++) {
+                for (int j = 0; j < squares.length; j++) {
+                    squares[j] += Math.pow(ComplexMatrices.entry(values, i, j).abs(), 2);
+                }
+            }
+            states += values.numRows;
+        }
+        for (int j = 0; j < squares.length; j++) {
+            squares[j] = Math.sqrt(squares[j] / states);
+        }
+        return squares;
     }
 
     private static List<StateRun> usable(Snapshots snapshots, Snapshots.Part part) {

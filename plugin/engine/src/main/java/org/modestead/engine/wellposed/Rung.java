@@ -24,6 +24,9 @@ import org.modestead.engine.spectrum.TrainingSample;
  */
 record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, double captured) {
 
+    /** Size of an eigenfunction on the judging runs, relative to the training runs, below which they do not excite it. */
+    static final double EXCITED = 0.05;
+
     /**
      * One mode of a rung.
      *
@@ -32,7 +35,8 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
      * @param weight root mean square over the training states of its contribution to the newest sample
      * @param weightNorm norm of its joint weights on the newest sample
      * @param normRatio ‖φ‖_H / ‖φ‖_L2(data)
-     * @param residual see {@link Residuals}
+     * @param residual see {@link Residuals}; NaN where the judging runs do not excite the mode: what is left of it
+     *     there is noise, and noise is evidence neither for nor against it
      */
     record Part(List<Integer> group, Complex rate, double weight, double weightNorm, double normRatio, double residual) {}
 
@@ -45,12 +49,14 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, compression.rank());
         ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
         double[] residuals = Residuals.of(expansion, judging);
+        double[] judged = judging.sizes(expansion);
         List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream()
-                .map(group -> part(expansion, values, group, sample.channels(), residuals)).toList();
+                .map(group -> part(expansion, values, group, sample.channels(), residuals, judged)).toList();
         return new Rung(expansion, parts, carryingNorm(parts, values, sample.longest()), captured(compression, sample.channels(), judging));
     }
 
-    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, int channels, double[] residuals) {
+    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, int channels, double[] residuals,
+            double[] judged) {
         int j = group.get(0);
         double size = 0;
         for (int i = 0; i < values.numRows; i++) {
@@ -61,7 +67,8 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
             norm = Math.hypot(norm, ComplexMatrices.entry(expansion.joint(), j, k).abs());
         }
         double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, 0, channels)));
-        return new Part(group, expansion.rates().get(j), weight, norm, Math.sqrt(values.numRows) / size, residuals[j]);
+        double trained = size / Math.sqrt(values.numRows);
+        return new Part(group, expansion.rates().get(j), weight, norm, 1 / trained, judged[j] < EXCITED * trained ? Double.NaN : residuals[j]);
     }
 
     private static double carryingNorm(List<Part> parts, ZMatrixRMaj values, double longest) {
