@@ -8,6 +8,7 @@ import org.modestead.nodes.contract.SettingText;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.Digits;
 import org.modestead.nodes.words.TimeUnit;
 
 /** What was fitted and how well it is conditioned, one item a row. */
@@ -33,20 +34,20 @@ final class FitTable {
         rows.row("largest rank", Integer.toString(operator.compression().rank()));
         rows.row("rank", Integer.toString(operator.rank()));
         rows.row("rank chosen by", operator.rankChoice());
-        rows.row("condition", SettingText.plain(singular[0] / singular[operator.rank() - 1]));
+        rows.row("condition", Digits.cell(singular[0] / singular[operator.rank() - 1]));
         rows.row("ridge", SettingText.plain(ridge));
         return rows.build();
     }
 
     private static String kind(Evolution evolution, TimeUnit unit) {
         if (evolution instanceof Evolution.StepMap map) {
-            return "step map, step " + SettingText.plain(map.step()) + " " + unit.name();
+            return "step map, step " + Digits.cell(map.step()) + " " + unit.name();
         }
         double contraction = ((Evolution.Generator) evolution).contraction();
         return contraction == 1 ? "generator" : "scaled generator, contraction " + SettingText.plain(contraction);
     }
 
     private static String frequency(double limit, TimeUnit unit) {
-        return Double.isInfinite(limit) ? "no limit" : SettingText.plain(limit) + " " + unit.frequency();
+        return Double.isInfinite(limit) ? "no limit" : Digits.cell(limit) + " " + unit.frequency();
     }
 }

@@ -103,8 +103,6 @@ public final class SnapshotBuilderNode implements Node {
         MemoryTable.Builder rows = MemoryTable.builder(SUMMARY, "summary of " + table.origin());
         rows.row("table", table.origin()).row("rows", Long.toString(reading.rows()));
         rows.row("time", timeText(snapshots.time()));
-        rows.row("channels", names(snapshots.channels().stream().map(channel -> channel.label()).toList()));
-        rows.row("inputs", names(snapshots.inputs().stream().map(channel -> channel.label()).toList()));
         snapshots.facts().forEach(fact -> rows.row(fact.item(), fact.value()));
         return rows.build();
     }
@@ -129,9 +127,5 @@ public final class SnapshotBuilderNode implements Node {
             case DATE -> "date, counted in " + time.unit();
             case DATE_TIME -> "date-time (UTC), counted in " + time.unit();
         };
-    }
-
-    private static String names(List<String> names) {
-        return names.isEmpty() ? "none" : String.join(", ", names);
     }
 }

@@ -31,7 +31,7 @@ class NodeContractTest {
 
     private static Stream<DynamicTest> everyNode(Claim claim) {
         List<Node> nodes = NodeCatalog.load(List.of(Node.class.getClassLoader())).nodes();
-        assertTrue(nodes.size() >= 4, "the service file names the nodes");
+        assertTrue(nodes.size() >= 7, "the service file names the nodes");
         return nodes.stream().map(node -> DynamicTest.dynamicTest(node.declaration().id(),
                 () -> claim.check(node.declaration(), node)));
     }
@@ -124,7 +124,8 @@ class NodeContractTest {
     @TestFactory
     Stream<DynamicTest> columnSettingsNameAnInputTable() {
         return everyNode((declaration, node) -> {
-            List<String> tables = declaration.inputs().stream().filter(port -> port.type() == PortType.TABLE).map(Port::id).toList();
+            List<String> tables = declaration.inputs().stream()
+                    .filter(port -> port.type() == PortType.TABLE).map(Port::id).toList();
             declaration.settings().forEach(setting -> {
                 String port = setting instanceof Setting.OneColumn one ? one.port()
                         : setting instanceof Setting.Columns several ? several.port() : "";

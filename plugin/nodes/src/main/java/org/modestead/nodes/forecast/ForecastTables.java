@@ -1,0 +1,78 @@
+package org.modestead.nodes.forecast;
+
+import java.util.List;
+import org.modestead.engine.forecast.ForecastResult;
+import org.modestead.engine.forecast.ForecastRow;
+import org.modestead.engine.forecast.ReconstructionRow;
+import org.modestead.engine.forecast.ScoreRow;
+import org.modestead.engine.recording.Channel;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.MemoryTable;
+import org.modestead.nodes.table.TableSchema;
+
+/** Forecast, reconstruction and scores as tables. Times are written as they were recorded: number, date or date-time. */
+final class ForecastTables {
+
+    static final TableSchema SCORES = TableSchema.of(Column.text("method"), Column.number("horizon"),
+            Column.number("rmse"),
+            Column.number("mae"), Column.number("mase"), Column.number("coverage"), Column.number("interval_score"));
+
+    private ForecastTables() {}
+
+    static MemoryTable forecast(ForecastResult result, Snapshots snapshots) {
+        TableSchema schema = TableSchema.of(Column.text("run"), time(snapshots.time()), Column.text("channel"),
+                Column.number("value"),
+                Column.number("low"), Column.number("high"), Column.text("route"));
+        MemoryTable.Builder rows = MemoryTable.builder(schema, "forecast");
+        List<String> channels = names(snapshots);
+        for (ForecastRow row : result.forecast()) {
+            rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
+                    row.high(),
+                    result.routeUsed().word());
+        }
+        return rows.build();
+    }
+
+    static MemoryTable reconstruction(ForecastResult result, Snapshots snapshots) {
+        TableSchema schema = TableSchema.of(Column.text("run"), time(snapshots.time()), Column.text("channel"),
+                Column.number("observed"), Column.number("reconstructed"));
+        MemoryTable.Builder rows = MemoryTable.builder(schema, "reconstruction");
+        List<String> channels = names(snapshots);
+        for (ReconstructionRow row : result.reconstruction()) {
+            rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.observed(),
+                    row.reconstructed());
+        }
+        return rows.build();
+    }
+
+    static MemoryTable scores(ForecastResult result) {
+        MemoryTable.Builder rows = MemoryTable.builder(SCORES, "scores");
+        for (ScoreRow row : result.scores()) {
+            rows.row(row.method(), row.horizon(), row.rmse(), row.mae(), row.mase(), row.coverage(), row.intervalScore());
+        }
+        return rows.build();
+    }
+
+    private static List<String> names(Snapshots snapshots) {
+        return snapshots.channels().stream().map(Channel::name).toList();
+    }
+
+    private static Column time(TimeAxis axis) {
+        return new Column("time", switch (axis.kind()) {
+            case NUMBER -> CellType.DOUBLE;
+            case DATE -> CellType.DATE;
+            case DATE_TIME -> CellType.DATE_TIME;
+        });
+    }
+
+    private static Object cell(TimeAxis axis, double time) {
+        return switch (axis.kind()) {
+            case NUMBER -> time;
+            case DATE -> axis.toDate(time);
+            case DATE_TIME -> axis.toDateTime(time);
+        };
+    }
+}

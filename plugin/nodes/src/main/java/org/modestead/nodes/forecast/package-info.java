@@ -1,0 +1,2 @@
+/** Reconstruction and forecast. */
+package org.modestead.nodes.forecast;

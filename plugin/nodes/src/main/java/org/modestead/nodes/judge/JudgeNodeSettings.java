@@ -1,0 +1,94 @@
+package org.modestead.nodes.judge;
+
+import java.util.List;
+import java.util.OptionalDouble;
+import java.util.OptionalLong;
+import org.modestead.engine.wellposed.JudgeSettings;
+import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.Setting.Common;
+import org.modestead.nodes.contract.SettingProblem;
+import org.modestead.nodes.contract.Settings;
+
+/** Settings of the Well-posedness Checker: the ends of the ladder and every threshold, with the engine's defaults. */
+final class JudgeNodeSettings {
+
+    private static final String LADDER_FROM = "ladder-from";
+    private static final String LADDER_TO = "ladder-to";
+    private static final String SHARE = "share-threshold";
+    private static final String RESIDUAL = "residual-threshold";
+    private static final String SETTLE = "settle-threshold";
+    private static final String NORM_GROWTH = "norm-growth-threshold";
+    private static final String OVERLAP = "overlap-threshold";
+    private static final String GAP = "gap-threshold";
+    private static final String CAPTURE = "capture-threshold";
+    private static final String STEP = "step-threshold";
+    private static final String COMPLETENESS = "completeness-threshold";
+    private static final String LADDER = "Ladder";
+    private static final String THRESHOLDS = "Thresholds";
+    private static final long LARGEST_RANK = 10_000;
+    private static final double LARGEST = 1e12;
+    private static final JudgeSettings DEFAULT = JudgeSettings.DEFAULT;
+
+    private JudgeNodeSettings() {}
+
+    /** Returns the settings in dialog order. */
+    static List<Setting> declared() {
+        return List.of(
+                rank(LADDER_FROM, "Lowest rank", "Rank of the lowest rung; 0 takes half the fitted rank.",
+                        DEFAULT.ladderFrom()),
+                rank(LADDER_TO, "Highest rank", "Rank of the highest rung; 0 takes the fitted rank and half of it more,"
+                        + " as far as the data support that.", DEFAULT.ladderTo()),
+                share(SHARE, "Share that counts", "Share of the signal from which a mode enters the overall verdict.",
+                        DEFAULT.shareThreshold()),
+                share(RESIDUAL, "Largest residual", "Largest relative amount by which an eigenfunction may miss its own"
+                        + " law on data the fit never saw. Raise it for noisy recordings.", DEFAULT.residualThreshold()),
+                share(SETTLE, "Largest change on the ladder", "Largest relative change of a rate or weight over the"
+                        + " last rungs for a mode that has settled.", DEFAULT.settleThreshold()),
+                above(NORM_GROWTH, "Largest growth of the norm", "Largest factor by which the norm of an eigenfunction"
+                        + " in the space may grow over the last three rungs; beyond it the function only imitates an"
+                        + " eigenfunction on the sampled region.", DEFAULT.normGrowthThreshold()),
+                share(OVERLAP, "Largest overlap", "Largest overlap of unit eigenfunctions, 0 for orthogonal ones and 1"
+                        + " for equal ones, for a mode that stands on its own.", DEFAULT.overlapThreshold()),
+                share(GAP, "Largest joint-solo gap", "Largest relative difference between a mode's weight fitted"
+                        + " jointly with all others and its weight alone, for a mode that stands on its own.",
+                        DEFAULT.gapThreshold()),
+                share(CAPTURE, "Smallest captured share", "Smallest share of the signal that the eigenfunctions"
+                        + " together must hold.",
+                        DEFAULT.captureThreshold()),
+                share(STEP, "Largest change with the step", "Largest relative difference between rates from one step,"
+                        + " or piece length, and from another; more speaks of a step too coarse.",
+                        DEFAULT.stepThreshold()),
+                share(COMPLETENESS, "Fit of an escape", "Goodness of fit with which 1/size must head linearly to zero"
+                        + " before a run counts as escaping in finite time.", DEFAULT.completenessThreshold()));
+    }
+
+    private static Setting rank(String key, String label, String help, int initial) {
+        return new Setting.Whole(new Common(key, label, LADDER, help), "functions", 0, LARGEST_RANK,
+                OptionalLong.of(initial));
+    }
+
+    private static Setting share(String key, String label, String help, double initial) {
+        return new Setting.Number(new Common(key, label, THRESHOLDS, help), "", 0, true, 1, OptionalDouble.of(initial));
+    }
+
+    private static Setting above(String key, String label, String help, double initial) {
+        return new Setting.Number(new Common(key, label, THRESHOLDS, help), "", 1, true, LARGEST,
+                OptionalDouble.of(initial));
+    }
+
+    /** Returns what is wrong between settings. */
+    static List<SettingProblem> problems(Settings settings) {
+        int from = settings.whole(LADDER_FROM);
+        int to = settings.whole(LADDER_TO);
+        return from > 0 && to > 0 && from >= to ? List.of(new SettingProblem(LADDER_TO, "the highest rank " + to
+                + " is not above the lowest rank " + from, "give a highest rank above the lowest one, or 0")) : List.of();
+    }
+
+    /** Returns what the engine is to judge by. */
+    static JudgeSettings read(Settings settings) {
+        return new JudgeSettings(settings.whole(LADDER_FROM), settings.whole(LADDER_TO), settings.number(SHARE),
+                settings.number(RESIDUAL), settings.number(SETTLE), settings.number(NORM_GROWTH),
+                        settings.number(OVERLAP),
+                settings.number(GAP), settings.number(CAPTURE), settings.number(STEP), settings.number(COMPLETENESS));
+    }
+}

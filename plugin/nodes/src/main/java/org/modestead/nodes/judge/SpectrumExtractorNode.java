@@ -1,0 +1,114 @@
+package org.modestead.nodes.judge;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalLong;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.spectrum.SpectrumExtractor;
+import org.modestead.nodes.contract.Node;
+import org.modestead.nodes.contract.NodeDeclaration;
+import org.modestead.nodes.contract.NodeInputs;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Port;
+import org.modestead.nodes.contract.PortType;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.figure.EigenvaluePlane;
+import org.modestead.nodes.figure.Figure;
+import org.modestead.nodes.figure.ShapeFigures;
+import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.TimeUnit;
+
+/** Extracts growth rates, frequencies, damping and shapes from a fitted operator. */
+public final class SpectrumExtractorNode implements Node {
+
+    private static final String SHAPE_MODES = "shape-modes";
+    private static final String SHAPE_DELAYS = "shape-delays";
+    private static final int MODES_DRAWN = 3;
+
+    @Override
+    public NodeDeclaration declaration() {
+        return new NodeDeclaration("spectrum-extractor", "Spectrum Extractor", NodeDeclaration.Stage.JUDGE,
+                "Extracts modes from the fitted operator: growth rate, frequency, damping, share of the signal and"
+                        + " shape.",
+                description(), List.of("Rowley, Mezić, Bagheri, Schlatter and Henningson, Spectral analysis of"
+                        + " nonlinear flows, Journal of Fluid Mechanics 641:115, 2009"),
+                List.of("modes", "eigenvalues", "frequency", "damping", "growth rate", "mode shape", "modal analysis"),
+                List.of(Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator.")),
+                List.of(Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "Eigenvalues, eigenfunctions and weights."),
+                        Port.table("modes", "Modes", "One row a mode, strongest first; not judged yet, so the verdict"
+                                + " is missing.",
+                                ModeTable.SCHEMA),
+                        Port.table("shapes", "Shapes", "How far and how far out of step each channel moves in each mode.",
+                                ShapeTable.SCHEMA)),
+                settings(), 1);
+    }
+
+    private static String description() {
+        return """
+                Decomposes the compressed operator. An eigenvalue becomes a rate λ = σ + iω per time unit (for a step map \
+                λ = log(μ)/step): σ is the growth rate, |ω|/2π the damped frequency in cycles per time unit, -σ/|λ| the \
+                damping ratio, ln 2/σ the doubling time (negative: minus the halving time). A conjugate pair is one mode. \
+                Modes are numbered by falling share of the signal's mean square.
+
+                The shape tells by channel how far it moves in the mode and with what phase against the channel that \
+                moves most. Phases of channels that hardly move mean nothing.
+
+                These are the modes of one projection. Whether they belong to the system is not known until the \
+                Well-posedness Checker has looked. Do not report them before.
+
+                With a step map, motion faster than half the sampling rate appears folded to a lower frequency and cannot \
+                be told apart here. Cost: the cube of the rank.""";
+    }
+
+    private static List<Setting> settings() {
+        return List.of(
+                new Setting.Whole(new Setting.Common(SHAPE_MODES, "Modes in the shape table", "Tables", "Number of"
+                        + " modes, strongest first, whose shapes are written; 0 writes all."), "modes", 0, 100_000,
+                        OptionalLong.of(0)),
+                new Setting.Choice(new Setting.Common(SHAPE_DELAYS, "Delays in the shape table", "Tables", "Whether"
+                        + " shapes are written for the newest sample of the state only or for the delayed ones too."),
+                        List.of(
+                        new Setting.Option("newest", "Newest sample", "One row a mode and channel."),
+                        new Setting.Option("all", "All samples", "One row a mode, channel and delay.")), "newest"));
+    }
+
+    @Override
+    public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
+        FittedOperator operator = inputs.get("operator", FittedOperator.class);
+        Spectrum spectrum = SpectrumExtractor.extract(operator, context.progress());
+        Preparation preparation = operator.snapshots().preparation();
+        List<Figure> figures = new ArrayList<>();
+        figures.add(EigenvaluePlane.figure(spectrum, Optional.empty()));
+        figures.addAll(ShapeFigures.figures(spectrum, preparation, MODES_DRAWN));
+        return new NodeResult(Map.of("spectrum", spectrum, "modes", ModeTable.of(spectrum, Optional.empty()), "shapes",
+                ShapeTable.of(spectrum, preparation, settings.whole(SHAPE_MODES),
+                        settings.text(SHAPE_DELAYS).equals("all"))),
+                figures, summary(spectrum), spectrum.doubts());
+    }
+
+    private static List<String> summary(Spectrum spectrum) {
+        TimeUnit unit = new TimeUnit(spectrum.timeUnit());
+        List<String> sentences = new ArrayList<>();
+        sentences.add(spectrum.modes().size() + (spectrum.modes().size() == 1 ? " mode" : " modes") + " at rank "
+                + spectrum.rank()
+                + ", not judged yet.");
+        spectrum.modes().stream().filter(mode -> !mode.constant()).findFirst()
+                .ifPresent(mode -> sentences.add("The strongest " + describe(mode, unit) + "."));
+        return sentences;
+    }
+
+    private static String describe(Mode mode, TimeUnit unit) {
+        String motion = mode.oscillates() ? "oscillates at " + Digits.frequency(mode.frequency(), unit.frequency())
+                + " with a damping ratio of " + Digits.percent(mode.dampingRatio())
+                : (mode.rate().re() < 0 ? "decays" : "grows") + " at a rate of " + Digits.figure(mode.rate().re(),
+                        unit.rate());
+        return motion + " and carries " + Digits.percent(mode.energyShare()) + " of the signal";
+    }
+}

@@ -1,0 +1,2 @@
+/** Modes, and whether they exist. */
+package org.modestead.nodes.judge;

@@ -1,0 +1,148 @@
+package org.modestead.nodes.fit;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.stream.IntStream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.kernel.Kernel;
+import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.operator.Evolution;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.SettingFault;
+import org.modestead.nodes.testing.Ringing;
+import org.modestead.nodes.testing.Steps;
+
+class FitNodesTest {
+
+    private static final Object SNAPSHOTS = Steps.run("snapshot-builder", Map.of("table", Ringing.numbers(5)),
+            Map.of("time-column", "time", "run-column", "run", "holdout", "run-share")).outputs().get("snapshots");
+
+    private static NodeResult choose(Map<String, Object> raw) {
+        return Steps.run("kernel-chooser", Map.of("snapshots", SNAPSHOTS), raw);
+    }
+
+    private static KernelSpec chosen(Map<String, Object> raw) {
+        return ((Kernel) choose(raw).outputs().get("kernel")).spec();
+    }
+
+    private static NodeResult fit(Map<String, Object> raw, boolean withKernel) {
+        Map<String, Object> inputs = withKernel ? Map.of("snapshots", SNAPSHOTS, "kernel",
+                choose(Map.of("family", "exponential", "rate", 0.5)).outputs().get("kernel")) : Map.of("snapshots",
+                        SNAPSHOTS);
+        return Steps.run("operator-fitter", inputs, raw);
+    }
+
+    private static FittedOperator operator(Map<String, Object> raw, boolean withKernel) {
+        return (FittedOperator) fit(raw, withKernel).outputs().get("operator");
+    }
+
+    @Test
+    void parametersGoToTheFamilyChosenAndOthersDoNot() {
+        assertEquals(new KernelSpec("polynomial", Map.of("degree", 4.0, "offset", 0.5)),
+                chosen(Map.of("family", "polynomial", "degree", 4, "offset", 0.5, "rate", 9)));
+        assertEquals(new KernelSpec("gaussian", Map.of("scale", 0.7)),
+                chosen(Map.of("family", "gaussian", "scale-mode", "explicit", "scale", 0.7)));
+    }
+
+    @Test
+    void aScaleFromTheDataIsAMultipleOfTheMedianDistance() {
+        double once = chosen(Map.of("family", "gaussian")).parameters().get("scale");
+        double twice = chosen(Map.of("family", "gaussian", "scale-factor", 2)).parameters().get("scale");
+        assertTrue(once > 0 && once < 4, "both channels stay within 2 of zero, so distances within some 4");
+        assertEquals(2 * once, twice, 1e-15);
+    }
+
+    @Test
+    void aParameterThatTheFamilyRefusesIsToldBeforeRunning() {
+        assertEquals("degree is 2.5", Steps.check("kernel-chooser", Map.of("family", "polynomial", "degree",
+                2.5)).get(0).seen());
+        assertEquals(List.of(), Steps.check("kernel-chooser", Map.of("family", "gaussian")));
+    }
+
+    @Test
+    void rankingPutsTheSmallestErrorFirstAndHandsOnItsKernel() {
+        NodeResult ranked = choose(Map.of("choose", "rank", "candidates", List.of("gaussian", "linear"),
+                "scale-multiples", List.of(1, 4)));
+        List<Double> errors = IntStream.range(0, 3).mapToObj(i -> Steps.number(ranked, "ranking", "holdout_error",
+                i)).toList();
+        List<Double> sorted = new ArrayList<>(errors);
+        sorted.sort(null);
+        assertEquals(sorted, errors);
+        assertEquals(List.of("1", "2", "3"), Steps.column(ranked, "ranking", "place"));
+        assertEquals("linear()", Steps.column(ranked, "ranking", "kernel").get(0), "ringing is linear motion");
+        assertEquals("linear", ((Kernel) ranked.outputs().get("kernel")).spec().family());
+        assertEquals("kernel-ranking", ranked.figures().get(0).id());
+    }
+
+    @Test
+    void unknownFamiliesAreToldWithTheNearestKnownOne() {
+        assertEquals("there is no family gausian, perhaps you meant gaussian",
+                Steps.check("kernel-chooser", Map.of("choose", "rank", "candidates", List.of("gausian"))).get(0).seen());
+        assertEquals("no family is named", Steps.check("kernel-chooser", Map.of("choose", "rank", "candidates",
+                List.of())).get(0).seen());
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"linear", "dictionary", "kernel-step", "generator", "scaled-generator"})
+    void eachOperatorIsFittedAndDescribed(String estimator) {
+        NodeResult fitted = fit(Map.of("estimator", estimator), true);
+        FittedOperator operator = (FittedOperator) fitted.outputs().get("operator");
+        assertEquals(estimator, operator.estimator().id());
+        assertEquals(estimator, Steps.column(fitted, "fit", "value").get(0));
+        boolean map = operator.evolution() instanceof Evolution.StepMap;
+        assertEquals(!estimator.endsWith("generator"), map);
+        assertEquals("singular-values", fitted.figures().get(0).id());
+    }
+
+    @ParameterizedTest
+    @ValueSource(strings = {"kernel-step", "generator", "scaled-generator"})
+    void anOperatorThatNeedsAKernelSaysSoWhenNoneIsConnected(String estimator) {
+        SettingFault fault = assertThrows(SettingFault.class, () -> fit(Map.of("estimator", estimator), false));
+        assertEquals("the operator " + estimator + " without a kernel", fault.seen());
+    }
+
+    @Test
+    void aKernelThatIsConnectedButNotUsedIsADoubt() {
+        assertTrue(fit(Map.of(), true).doubts().stream().anyMatch(doubt -> doubt.code().equals("kernel-unused")));
+        assertFalse(fit(Map.of(), false).doubts().stream().anyMatch(doubt -> doubt.code().equals("kernel-unused")));
+    }
+
+    @Test
+    void rankRulesAndRidgeReachTheFit() {
+        assertEquals(1, operator(Map.of("rank-rule", "fixed", "rank", 1), false).rank());
+        assertEquals(2, operator(Map.of("rank-rule", "energy", "energy", 0.999999), false).rank());
+        assertTrue(operator(Map.of("rank-rule", "holdout", "largest-rank", 2), false).rank() <= 2);
+        assertThrows(FitFault.class, () -> operator(Map.of("rank-rule", "fixed", "rank", 3), false), "two channels hold"
+                + " rank 2");
+        double plain = operator(Map.of(), false).chosen().action().get(0, 0);
+        // the largest direction shrinks by s²/(s² + 0.5 s²)
+        assertEquals(plain / 1.5, operator(Map.of("ridge", 0.5), false).chosen().action().get(0, 0), 1e-12);
+    }
+
+    @Test
+    void aDictionaryHasAsManyFunctionsAsItsDegreeGives() {
+        // (2 + 3)! / (2! 3!) monomials of two channels up to degree 3
+        assertEquals(10, operator(Map.of("estimator", "dictionary", "degree", 3), false).compression().basis().size());
+        // the constant, and sine and cosine of 2 harmonics of 2 channels
+        assertEquals(9, operator(Map.of("estimator", "dictionary", "dictionary", "fourier", "order", 2, "periods",
+                List.of(9)), false)
+                .compression().basis().size());
+    }
+
+    @Test
+    void piecesOfOneStepAreToldBeforeRunningAndOnlyWhereTheyCount() {
+        assertEquals("segment-samples", Steps.check("operator-fitter", Map.of("estimator", "generator", "segment-samples",
+                1)).get(0).key());
+        assertEquals(List.of(), Steps.check("operator-fitter", Map.of("segment-samples", 1)));
+    }
+}
