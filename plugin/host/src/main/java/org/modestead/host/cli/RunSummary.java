@@ -1,0 +1,127 @@
+package org.modestead.host.cli;
+
+import java.io.PrintStream;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalInt;
+import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.wellposed.Verdict;
+import org.modestead.host.run.RunResult;
+import org.modestead.host.run.StepOutcome;
+import org.modestead.host.run.WorkflowRunner;
+import org.modestead.host.workflow.PlannedStep;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.RowCursor;
+import org.modestead.nodes.table.Table;
+import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.TimeUnit;
+
+/** The few lines that tell a person what came out: verdict, leading modes, doubts, where to read on. */
+final class RunSummary {
+
+    private static final int MODES_SHOWN = 8;
+    private static final String INDENT = "  ";
+
+    private final PrintStream out;
+
+    RunSummary(PrintStream out) {
+        this.out = out;
+    }
+
+    /** A column of the mode table that is shown, and the kind of its unit. */
+    private enum Shown {
+        MODE("mode"), FREQUENCY("frequency"), PERIOD("period"), LAMBDA_REAL("lambda_real"), DAMPING_RATIO("damping_ratio"),
+        AMPLITUDE("amplitude"), ENERGY_SHARE("energy_share"), VERDICT("verdict");
+
+        private final String column;
+
+        Shown(String column) {
+            this.column = column;
+        }
+
+        String head(TimeUnit unit) {
+            return switch (this) {
+                case MODE, VERDICT -> column;
+                case FREQUENCY -> "frequency [" + unit.frequency() + "]";
+                case PERIOD -> "period [" + unit.name() + "]";
+                case LAMBDA_REAL -> "growth [" + unit.rate() + "]";
+                case DAMPING_RATIO -> "damping";
+                case AMPLITUDE -> "amplitude";
+                case ENERGY_SHARE -> "energy share";
+            };
+        }
+
+        String cell(RowCursor cursor, int column, CellType type) {
+            if (type != CellType.DOUBLE) {
+                return cursor.text(column);
+            }
+            double value = cursor.number(column);
+            return this == DAMPING_RATIO || this == ENERGY_SHARE ? Digits.percent(value) : Digits.figure(value);
+        }
+    }
+
+    void print(RunResult result) {
+        for (PlannedStep step : result.plan().steps()) {
+            if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done) {
+                step(step, done.result(), unit(result));
+            }
+        }
+        long doubts = result.outcomes().values().stream().filter(StepOutcome.Done.class::isInstance)
+                .mapToLong(outcome -> ((StepOutcome.Done) outcome).result().doubts().size()).sum();
+        if (doubts > 0) {
+            out.println(doubts == 1 ? "1 doubt is told in the report." : doubts + " doubts are told in the report.");
+        }
+        out.println("Report: " + result.folder().resolve(WorkflowRunner.REPORT));
+    }
+
+    private void step(PlannedStep step, NodeResult result, TimeUnit unit) {
+        for (Object value : result.outputs().values()) {
+            if (value instanceof Verdict verdict) {
+                out.println("Verdict (" + step.id() + "): " + verdict.overall().grade().word() + ". " + verdict.overall().sentence());
+            }
+        }
+        if (result.outputs().get("modes") instanceof Table modes) {
+            modes(step.id(), modes, unit);
+        }
+    }
+
+    private void modes(String step, Table modes, TimeUnit unit) {
+        TableSchema schema = modes.schema();
+        List<Shown> columns = new ArrayList<>();
+        for (Shown shown : Shown.values()) {
+            if (schema.indexOf(shown.column).isPresent()) {
+                columns.add(shown);
+            }
+        }
+        if (columns.isEmpty()) {
+            return;
+        }
+        TextGrid grid = new TextGrid();
+        grid.row(columns.stream().map(shown -> shown.head(unit)).toList());
+        long rows = 0;
+        try (RowCursor cursor = modes.open()) {
+            while (cursor.next()) {
+                if (++rows <= MODES_SHOWN) {
+                    grid.row(columns.stream().map(shown -> cell(schema, cursor, shown)).toList());
+                }
+            }
+        }
+        out.println("Modes (" + step + ")" + (rows > MODES_SHOWN ? ", the first " + MODES_SHOWN + " of " + rows : "") + ":");
+        grid.lines(INDENT).forEach(out::println);
+    }
+
+    private static String cell(TableSchema schema, RowCursor cursor, Shown shown) {
+        OptionalInt index = schema.indexOf(shown.column);
+        return shown.cell(cursor, index.getAsInt(), schema.columns().get(index.getAsInt()).type());
+    }
+
+    private static TimeUnit unit(RunResult result) {
+        Optional<Spectrum> spectrum = result.outcomes().values().stream().filter(StepOutcome.Done.class::isInstance)
+                .flatMap(outcome -> ((StepOutcome.Done) outcome).result().outputs().values().stream())
+                .filter(Spectrum.class::isInstance).map(Spectrum.class::cast).findFirst();
+        return new TimeUnit(spectrum.map(Spectrum::timeUnit).orElse(""));
+    }
+}

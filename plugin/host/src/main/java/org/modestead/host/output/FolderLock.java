@@ -1,0 +1,61 @@
+package org.modestead.host.output;
+
+import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.channels.FileChannel;
+import java.nio.channels.FileLock;
+import java.nio.channels.OverlappingFileLockException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
+import java.util.Optional;
+
+/** Keeps two processes from writing one result folder; let go by the system even when the process is killed. */
+final class FolderLock implements AutoCloseable {
+
+    private final Path file;
+    private final FileChannel channel;
+
+    private FolderLock(Path file, FileChannel channel) {
+        this.file = file;
+        this.channel = channel;
+    }
+
+    /** Takes the lock, or returns empty when another process or run has it. */
+    static Optional<FolderLock> take(Path file) throws IOException {
+        while (true) {
+            FileChannel channel = FileChannel.open(file, StandardOpenOption.CREATE, StandardOpenOption.READ, StandardOpenOption.WRITE);
+            boolean held = false;
+            try {
+                FileLock lock = channel.tryLock();
+                if (lock == null) {
+                    return Optional.empty();
+                }
+                // The holder before may have removed the file between our opening and our locking it: then try again.
+                held = Files.exists(file) && owns(file, channel);
+                if (held) {
+                    return Optional.of(new FolderLock(file, channel));
+                }
+            } catch (OverlappingFileLockException sameProcess) {
+                return Optional.empty();
+            } finally {
+                if (!held) {
+                    channel.close();
+                }
+            }
+        }
+    }
+
+    private static boolean owns(Path file, FileChannel channel) throws IOException {
+        byte[] mark = (ProcessHandle.current().pid() + "\n").getBytes(StandardCharsets.UTF_8);
+        channel.truncate(0).write(ByteBuffer.wrap(mark), 0);
+        return Files.size(file) == mark.length && java.util.Arrays.equals(Files.readAllBytes(file), mark);
+    }
+
+    @Override
+    public void close() throws IOException {
+        Files.deleteIfExists(file);
+        channel.close();
+    }
+}

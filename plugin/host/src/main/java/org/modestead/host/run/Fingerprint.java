@@ -1,0 +1,85 @@
+package org.modestead.host.run;
+
+import java.io.IOException;
+import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.security.DigestInputStream;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import java.util.Map;
+import java.util.Optional;
+import java.util.TreeMap;
+import org.modestead.host.workflow.PlannedStep;
+import org.modestead.nodes.contract.NodeDeclaration;
+import org.modestead.nodes.contract.Setting;
+
+/**
+ * What a step's result depends on, as one SHA-256 digest: node, settings, the files they name, and the fingerprints of
+ * the steps it takes input from. Nodes give the same result for the same fingerprint.
+ */
+final class Fingerprint {
+
+    /** Larger files count by size and time of change alone: reading them would cost more than it saves. */
+    private static final long LARGEST_HASHED = 16L << 20;
+
+    private Fingerprint() {}
+
+    /**
+     * @param step whose result is meant
+     * @param inputs fingerprints by id of the steps that it takes input from
+     * @param baseFolder against which file settings are resolved
+     * @return empty when the step has effects besides its result and must run every time
+     */
+    static Optional<String> of(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
+        NodeDeclaration declaration = step.declaration();
+        boolean writes = declaration.settings().stream().anyMatch(setting -> setting instanceof Setting.File file && !file.reading());
+        boolean known = step.inputs().values().stream().allMatch(source -> inputs.containsKey(source.step()));
+        if (writes || declaration.outputs().isEmpty() || !known) {
+            return Optional.empty();
+        }
+        MessageDigest digest = sha256();
+        line(digest, "node", declaration.id() + " " + declaration.settingsVersion() + " " + step.node().getClass().getName());
+        new TreeMap<>(step.settings().values()).forEach((key, value) -> line(digest, "setting " + key,
+                value.getClass().getSimpleName() + " " + value));
+        for (Setting setting : declaration.settings()) {
+            if (setting instanceof Setting.File && !step.settings().text(setting.key()).isEmpty()) {
+                line(digest, "file " + setting.key(), file(baseFolder.resolve(step.settings().text(setting.key()))));
+            }
+        }
+        step.inputs().forEach((port, source) -> line(digest, "input " + port, inputs.get(source.step()) + "." + source.port()));
+        return Optional.of(HexFormat.of().formatHex(digest.digest()));
+    }
+
+    private static String file(Path path) throws IOException {
+        if (!Files.isRegularFile(path)) {
+            return path + " missing";
+        }
+        long size = Files.size(path);
+        String content = "";
+        if (size <= LARGEST_HASHED) {
+            MessageDigest digest = sha256();
+            try (InputStream in = new DigestInputStream(Files.newInputStream(path), digest)) {
+                in.transferTo(java.io.OutputStream.nullOutputStream());
+            }
+            content = HexFormat.of().formatHex(digest.digest());
+        }
+        return path.toAbsolutePath().normalize() + " " + size + " " + Files.getLastModifiedTime(path).toMillis() + " " + content;
+    }
+
+    private static void line(MessageDigest digest, String key, String value) {
+        byte[] bytes = (key + "=" + value).getBytes(StandardCharsets.UTF_8);
+        digest.update((bytes.length + ":").getBytes(StandardCharsets.UTF_8));
+        digest.update(bytes);
+    }
+
+    private static MessageDigest sha256() {
+        try {
+            return MessageDigest.getInstance("SHA-256");
+        } catch (NoSuchAlgorithmException impossible) {
+            throw new IllegalStateException("every Java has SHA-256", impossible);
+        }
+    }
+}

@@ -1,0 +1,95 @@
+package org.modestead.host.run;
+
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Path;
+import java.time.Duration;
+import java.time.Instant;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import org.modestead.host.output.Disk;
+import org.modestead.host.output.OutputFault;
+import org.modestead.host.output.OutputFolder;
+import org.modestead.host.workflow.RunPlan;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.document.ReportDocument;
+import org.modestead.nodes.report.HtmlReport;
+
+/** Runs checked workflows and leaves their results behind: tables, report and record, whole or not at all. */
+public final class WorkflowRunner {
+
+    /** Name of the report in the result folder. */
+    public static final String REPORT = "report.html";
+
+    private final int threads;
+    private final ResultCache cache;
+    private final Disk disk;
+
+    /**
+     * @param threads most steps at a time
+     * @param cache results of earlier runs; shared by the runs of this runner
+     * @param disk where results go
+     */
+    public WorkflowRunner(int threads, ResultCache cache, Disk disk) {
+        this.threads = threads;
+        this.cache = cache;
+        this.disk = disk;
+    }
+
+    /** A runner for one run: as many threads as cores, nothing cached, the machine's disk. */
+    public static WorkflowRunner once() {
+        return new WorkflowRunner(Runtime.getRuntime().availableProcessors(), new ResultCache(0), Disk.REAL);
+    }
+
+    /**
+     * Runs a workflow.
+     *
+     * <p>When a step fails, the results of the others are kept and the record says so. When the run is stopped or a
+     * result cannot be written, the folder stays as it was.
+     *
+     * @param plan with nothing wrong
+     * @param target result folder
+     * @param listener hears how it goes
+     * @param cancel stops it
+     * @throws OutputFault if the folder cannot be used
+     */
+    public RunResult run(RunPlan plan, Path target, RunListener listener, CancelSwitch cancel) {
+        Instant started = Instant.now();
+        try (OutputFolder folder = OutputFolder.open(target, disk)) {
+            StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder), listener, cancel);
+            Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener).run(threads);
+            RunResult result = new RunResult(plan, outcomes, folder.folder(), Duration.between(started, Instant.now()));
+            boolean kept = result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED;
+            if (kept && cancel.reason().isEmpty()) {
+                publish(result, started, folder);
+            }
+            return result;
+        }
+    }
+
+    private static void publish(RunResult result, Instant started, OutputFolder folder) {
+        try {
+            byte[] report = HtmlReport.write(report(result)).getBytes(StandardCharsets.UTF_8);
+            folder.write(REPORT, out -> out.write(report));
+            List<String> earlier = RunRecord.filesOf(folder.folder());
+            byte[] record = RunRecord.write(result, started, folder.files());
+            folder.write(RunRecord.NAME, out -> out.write(record));
+            folder.publish(earlier, RunRecord.NAME);
+        } catch (IOException unwritable) {
+            throw OutputFault.of(folder.folder().toString(), unwritable);
+        }
+    }
+
+    /** The report that the workflow itself makes, the last one if several; else one of what each step says. */
+    private static ReportDocument report(RunResult result) {
+        List<ReportDocument> made = new ArrayList<>();
+        for (StepOutcome outcome : result.outcomes().values()) {
+            if (outcome instanceof StepOutcome.Done done) {
+                NodeResult found = done.result();
+                found.document().ifPresent(made::add);
+            }
+        }
+        return made.isEmpty() || result.state() == RunResult.State.FAILED ? PlainReport.of(result) : made.get(made.size() - 1);
+    }
+}
