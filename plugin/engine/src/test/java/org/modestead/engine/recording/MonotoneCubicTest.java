@@ -115,6 +115,18 @@ class MonotoneCubicTest {
     }
 
     @Test
+    void theLimiterLeavesAWaveOfFortySamplesACycleAloneWhateverItsPhase() {
+        double[] times = fine(0, 3, 121);
+        // an unlimited Hermite cubic with exact slopes: h^4/384 times the fourth derivative
+        double unlimited = Math.pow(2 * Math.PI / 40, 4) / 384;
+        for (int phase = 0; phase < 50; phase++) {
+            double lead = phase / 2000.0;
+            double worst = worstError(times, t -> Math.sin(2 * Math.PI * (t + lead)), 1, 2);
+            assertTrue(worst < 1.2 * unlimited, "slopes add a little: " + worst / unlimited);
+        }
+    }
+
+    @Test
     void aStepIsNeverOvershotWhereASplineSwingsByATenth() {
         double[] times = Recordings.grid(20, 1);
         double[] values = sampled(times, t -> t < 10 ? 0 : 1);
@@ -146,7 +158,7 @@ class MonotoneCubicTest {
             @ForAll long seed, @ForAll @IntRange(min = 3, max = 60) int count) {
         double[] values = new Random(seed).doubles(count).toArray();
         double[] found = evaluate(fine(0, 10, count), values, fine(0, 10, 3000));
-        assertTrue(Arrays.stream(found).allMatch(y -> y > -0.2 && y < 1.2), "0.18 is the worst of a million tried");
+        assertTrue(Arrays.stream(found).allMatch(y -> y > -0.2 && y < 1.2), "0.187 is the worst of a million tried");
     }
 
     @Test
