@@ -15,7 +15,15 @@ import org.ejml.data.DMatrixRMaj;
  * @param interpolated samples at times that were not recorded
  * @param filled interpolated cells of each recorded column
  */
-record Piece(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int[] ends, int interpolated, long[] filled) {
+record Piece(
+        String id,
+        double[] times,
+        DMatrixRMaj values,
+        DMatrixRMaj inputs,
+        int[] ends,
+        int interpolated,
+        long[] filled) {
+
 
     /**
      * Samples one stretch; a sample of a part is interpolated from recorded samples of that part and earlier ones only.

@@ -43,11 +43,11 @@ final class PreparationLog {
         }
     }
 
-    /** Notes the samples of one run that are left out. */
-    void leftOut(Run run, long samples, String reason) {
+    /** Notes the samples of one run or piece that are left out. */
+    void leftOut(String run, long samples, String reason) {
         if (samples > 0) {
             dropped += samples;
-            doubts.add(new Doubt("samples-left-out", "Run " + run.id() + ": " + Wording.count(samples, "sample")
+            doubts.add(new Doubt("samples-left-out", "Run " + run + ": " + Wording.count(samples, "sample")
                     + " left out, " + reason + "."));
         }
     }

@@ -52,8 +52,9 @@ record RunPieces(SnapshotPlan plan, TargetTimes wanted, List<String> columnNames
             throw tooShort(run, longest, stretches.size());
         }
         kept.forEach(log::kept);
-        log.leftOut(run, run.samples() - usable, "where a column has no number");
-        log.leftOut(run, scattered, "in pieces with fewer than the " + plan.samplesNeeded() + " samples two states need");
+        log.leftOut(run.id(), run.samples() - usable, "where a column has no number");
+        log.leftOut(run.id(), scattered,
+                "in pieces with fewer than the " + plan.samplesNeeded() + " samples two states need");
         return kept;
     }
 

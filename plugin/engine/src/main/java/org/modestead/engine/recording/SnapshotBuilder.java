@@ -2,7 +2,6 @@ package org.modestead.engine.recording;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import org.modestead.engine.Doubt;
@@ -105,7 +104,8 @@ public final class SnapshotBuilder {
         }
         if (plan.delay().depth() > 1) {
             throw new RecordingFault("recording", "its time steps run from " + wording.span(step.shortest()) + " to "
-                    + wording.span(step.longest()) + ", but delay depth " + plan.delay().depth() + " needs one step throughout",
+                    + wording.span(step.longest()) + ", but delay depth " + plan.delay().depth()
+                    + " needs one step throughout",
                     "resample to a uniform step, for example the median " + wording.span(step.typical()));
         }
         return OptionalDouble.empty();
@@ -119,7 +119,7 @@ public final class SnapshotBuilder {
             }
         }
         if (training.isEmpty()) {
-            throw new RecordingFault("holdout", "what is left for training is too short: no piece has the " + plan.samplesNeeded()
+            throw new RecordingFault("training part", "no run left for it has the " + plan.samplesNeeded()
                     + " samples two states need", "keep less away or choose a smaller delay depth");
         }
         Detrending trend = Detrending.fit(training, recording.channels().size(), plan.detrend());
@@ -133,9 +133,8 @@ public final class SnapshotBuilder {
             Optional<Run> run = piece.part(part, plan.delay().reach());
             run.ifPresent(runs::add);
             if (run.isEmpty() && piece.samples(part) > 0) {
-                log.add(new Doubt("part-too-short", "Run " + piece.id() + ": its " + Wording.count(piece.samples(part),
-                        "sample") + " for " + part.name().toLowerCase(Locale.ROOT)
-                        + " are left out, too few for two states (" + plan.samplesNeeded() + " samples)."));
+                log.leftOut(piece.id(), piece.samples(part), "too few for two states in the " + SnapshotFacts.lower(part)
+                        + " part (" + plan.samplesNeeded() + " samples)");
             }
         }
         return runs;

@@ -74,7 +74,7 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
                 + String.join(", ", channels.stream().map(Channel::label).toList());
     }
 
-    private static String lower(Enum<?> choice) {
+    static String lower(Enum<?> choice) {
         return choice.name().toLowerCase(Locale.ROOT).replace('_', ' ');
     }
 }

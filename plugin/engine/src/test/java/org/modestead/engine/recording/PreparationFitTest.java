@@ -60,7 +60,8 @@ class PreparationFitTest {
 
     @Test
     void channelsOfOneUnitShareOnePooledDeviationAndChannelsWithoutUnitStandAlone() {
-        Run run = Recordings.run("A", TIMES, Math::sin, t -> 5 * Math.cos(2 * t), t -> 7 * Math.sin(3 * t), t -> t, t -> 2 * t);
+        Run run = Recordings.run("A", TIMES, Math::sin, t -> 5 * Math.cos(2 * t), t -> 7 * Math.sin(3 * t),
+                t -> t, t -> 2 * t);
         List<Channel> channels = List.of(new Channel("p", "bar"), new Channel("q", "m3/h"), new Channel("r", "bar"),
                 new Channel("s", ""), new Channel("t", ""));
         Snapshots snapshots = SnapshotBuilder.build(

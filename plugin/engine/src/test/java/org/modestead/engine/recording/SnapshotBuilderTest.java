@@ -103,7 +103,8 @@ class SnapshotBuilderTest {
         Snapshots snapshots = build(PLAIN.withDelay(2, 1), run("A", times, Math::sin));
         assertEquals(List.of("A#1", "A#3"), ids(snapshots.training()));
         assertTrue(doubts(snapshots).contains(
-                "Run A: 2 samples left out, in pieces with fewer than the 3 samples two states need."), doubts(snapshots)::toString);
+                "Run A: 2 samples left out, in pieces with fewer than the 3 samples two states need."),
+                doubts(snapshots)::toString);
         assertEquals("2", fact(snapshots, "samples left out"));
     }
 
@@ -243,7 +244,8 @@ class SnapshotBuilderTest {
     void missingCellsAreRefusedWithRunSampleTimeAndColumn() {
         Run run = without(without(run("A", grid(20, 0.5), Math::cos, Math::sin), 7, 1), 9, 0);
         assertEquals("run A, sample 8 (time 3.5 s), column c1: the cell has no number (2 such cells in this run); "
-                + "fill the cells, or have them interpolated or split.", fault(PLAIN.withMissing(MissingPolicy.REFUSE), run));
+                + "fill the cells, or have them interpolated or split.",
+                fault(PLAIN.withMissing(MissingPolicy.REFUSE), run));
     }
 
     @Test
@@ -271,7 +273,8 @@ class SnapshotBuilderTest {
 
     @Test
     void calibrationLiesBetweenTrainingAndATailHoldoutAndHandsOnTheHistory() {
-        Snapshots snapshots = build(PLAIN.withDelay(3, 1).withHoldout(new Split.Tail(0.2)).withCalibration(new Split.Tail(0.1)),
+        Snapshots snapshots = build(
+                PLAIN.withDelay(3, 1).withHoldout(new Split.Tail(0.2)).withCalibration(new Split.Tail(0.1)),
                 run("A", grid(50, 1), Math::sin));
         assertEquals(35, snapshots.training().get(0).times()[35]);
         assertEquals(36, snapshots.training().get(0).samples());
@@ -302,7 +305,8 @@ class SnapshotBuilderTest {
     @Test
     void aResampledTailContinuesTheGridOfItsTraining() {
         double[] times = Arrays.stream(grid(60, 1)).map(t -> t + 0.1 * Math.sin(t)).toArray();
-        Snapshots snapshots = build(PLAIN.withUniformStep(0.7).withHoldout(new Split.Tail(0.25)), run("A", times, Math::sin));
+        Snapshots snapshots = build(PLAIN.withUniformStep(0.7).withHoldout(new Split.Tail(0.25)),
+                run("A", times, Math::sin));
         Run training = snapshots.training().get(0);
         Run holdout = snapshots.holdout().get(0);
         assertEquals(training.times()[training.samples() - 1], holdout.times()[0]);
@@ -315,7 +319,7 @@ class SnapshotBuilderTest {
         Snapshots snapshots = build(PLAIN.withDelay(3, 1).withHoldout(new Split.TailDuration(8)),
                 run("A", grid(30, 1), Math::sin), run("B", grid(10, 1), Math::cos));
         assertEquals(List.of("A"), ids(snapshots.training()));
-        assertEquals(List.of("Run B: its 2 samples for training are left out, too few for two states (4 samples)."),
+        assertEquals(List.of("Run B: 2 samples left out, too few for two states in the training part (4 samples)."),
                 doubts(snapshots));
         assertEquals(2, snapshots.holdout().get(1).leadIn());
         assertEquals(10, snapshots.holdout().get(1).samples());
@@ -323,7 +327,7 @@ class SnapshotBuilderTest {
 
     @Test
     void aTrainingPartTooShortEverywhereIsRefused() {
-        assertEquals("holdout: what is left for training is too short: no piece has the 4 samples two states need; "
+        assertEquals("training part: no run left for it has the 4 samples two states need; "
                 + "keep less away or choose a smaller delay depth.",
                 fault(PLAIN.withDelay(3, 1).withHoldout(new Split.TailDuration(8)), run("B", grid(10, 1), Math::cos)));
     }
@@ -349,8 +353,8 @@ class SnapshotBuilderTest {
         }
         String doubt = doubts(build(PLAIN, run("A", times, Math::sin))).get(0);
         assertEquals("Run A has 9 gaps, split there: 2 s after 3.0 s, 2 s after 8.0 s, 2 s after 13.0 s, 2 s after 18.0 s, "
-                + "2 s after 23.0 s and 4 more; the median step is 1 s; so many gaps mean uneven sampling rather than pauses, "
-                + "for which a larger gap factor is right.", doubt);
+                + "2 s after 23.0 s and 4 more; the median step is 1 s; so many gaps mean uneven sampling rather than "
+                + "pauses, for which a larger gap factor is right.", doubt);
     }
 
     @Test
@@ -389,7 +393,8 @@ class SnapshotBuilderTest {
                 // never asked to stop
             }
         };
-        SnapshotBuilder.build(Recordings.of(run("A", grid(5, 1), Math::sin), run("B", grid(5, 1), Math::sin)), PLAIN, rising);
+        Recording recording = Recordings.of(run("A", grid(5, 1), Math::sin), run("B", grid(5, 1), Math::sin));
+        SnapshotBuilder.build(recording, PLAIN, rising);
         assertEquals(1, last[0]);
     }
 }
