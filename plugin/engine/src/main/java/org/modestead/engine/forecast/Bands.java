@@ -27,9 +27,10 @@ record Bands(double[][] halfWidths) {
      * @param coverage in (0, 1)
      */
     static Bands of(List<Errors> calibration, int leads, int channels, double coverage) {
+        int[] cumulative = cumulative(calibration, leads);
         double[][] halfWidths = new double[leads][channels];
         for (int lead = 1; lead <= leads; lead++) {
-            int reach = window(calibration, lead);
+            int reach = window(cumulative, lead);
             for (int c = 0; c < channels; c++) {
                 double width = SplitConformal.threshold(scores(calibration, lead, reach, c), coverage);
                 halfWidths[lead - 1][c] = Double.isFinite(width) ? width : Double.NaN;
@@ -38,25 +39,34 @@ record Bands(double[][] halfWidths) {
         return new Bands(halfWidths);
     }
 
-    private static int window(List<Errors> calibration, int lead) {
+    // Entry l: number of errors known at leads 1..l, from any origin.
+    private static int[] cumulative(List<Errors> calibration, int leads) {
+        int[] out = new int[leads + 1];
+        for (int lead = 1; lead <= leads; lead++) {
+            int reached = lead;
+            out[lead] = out[lead - 1] + (int) calibration.stream().filter(e -> e.leads() >= reached).count();
+        }
+        return out;
+    }
+
+    // A lead that no origin reaches gets no scores at all: shorter leads alone would promise too narrow a band.
+    private static int window(int[] cumulative, int lead) {
+        if (cumulative[lead] == cumulative[lead - 1]) {
+            return -1;
+        }
         int most = Math.max(1, lead / 4);
         int reach = 0;
-        while (reach < most && count(calibration, lead, reach) < ENOUGH) {
+        while (reach < most && count(cumulative, lead, reach) < ENOUGH) {
             reach++;
         }
         return reach;
     }
 
-    private static int count(List<Errors> calibration, int lead, int reach) {
-        int from = Math.max(1, lead - reach);
-        return calibration.stream().mapToInt(e -> Math.max(0, Math.min(e.leads(), lead + reach) - from + 1)).sum();
+    private static int count(int[] cumulative, int lead, int reach) {
+        return cumulative[Math.min(cumulative.length - 1, lead + reach)] - cumulative[Math.max(0, lead - reach - 1)];
     }
 
-    // A lead that no origin reaches gets no scores at all: shorter leads alone would promise too narrow a band.
     private static double[] scores(List<Errors> calibration, int lead, int reach, int channel) {
-        if (calibration.stream().noneMatch(e -> e.leads() >= lead)) {
-            return new double[0];
-        }
         return calibration.stream().flatMapToDouble(e -> scores(e, lead, reach, channel)).toArray();
     }
 

@@ -4,7 +4,7 @@ import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
-import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OrthonormalCompression;
@@ -27,8 +27,7 @@ public final class ModalRoute implements ForecastRoute {
 
     private final OrthonormalCompression compression;
     private final DelayEmbedding delay;
-    private final DMatrixRMaj vectorsRe;
-    private final DMatrixRMaj vectorsIm;
+    private final ZMatrixRMaj vectors;
     private final ZMatrixRMaj weights;
     private final Complex[] multipliers;
     private final int channels;
@@ -42,8 +41,7 @@ public final class ModalRoute implements ForecastRoute {
         compression = operator.chosen();
         delay = operator.snapshots().delay();
         channels = operator.snapshots().channels().size();
-        vectorsRe = part(spectrum.vectors(), 0);
-        vectorsIm = part(spectrum.vectors(), 1);
+        vectors = spectrum.vectors();
         weights = spectrum.joint();
         multipliers = multipliers(operator.evolution(), spectrum.eigenvalues(), step);
     }
@@ -61,11 +59,10 @@ public final class ModalRoute implements ForecastRoute {
     @Override
     public DMatrixRMaj forecast(DMatrixRMaj history, int steps) {
         DMatrixRMaj q = compression.evaluate(DelayState.at(history, history.numRows - 1, delay));
-        DMatrixRMaj re = Matrices.product(q, vectorsRe);
-        DMatrixRMaj im = Matrices.product(q, vectorsIm);
+        ZMatrixRMaj phi = ComplexMatrices.product(q, vectors);
         DMatrixRMaj out = new DMatrixRMaj(steps, channels);
         for (int j = 0; j < multipliers.length; j++) {
-            addMode(j, new Complex(re.data[j], im.data[j]), out);
+            addMode(j, new Complex(phi.getReal(0, j), phi.getImag(0, j)), out);
         }
         return out;
     }
@@ -85,13 +82,5 @@ public final class ModalRoute implements ForecastRoute {
         return eigenvalues.stream()
                 .map(value -> evolution instanceof Evolution.StepMap ? value : evolution.rate(value).times(step).exp())
                 .toArray(Complex[]::new);
-    }
-
-    private static DMatrixRMaj part(ZMatrixRMaj z, int offset) {
-        DMatrixRMaj out = new DMatrixRMaj(z.numRows, z.numCols);
-        for (int k = 0; k < out.data.length; k++) {
-            out.data[k] = z.data[2 * k + offset];
-        }
-        return out;
     }
 }

@@ -84,7 +84,8 @@ record ScoreTable(List<ScoreRow> rows, List<Doubt> doubts) {
         addUnitDoubts(units, out);
         rows.stream().filter(row -> row.method().equals(rows.get(0).method()))
                 .filter(row -> row.coverage() < task.plan().coverage() - MISSED)
-                .forEach(row -> out.add(missed(row, task.plan().coverage())));
+                .min(Comparator.comparingDouble(ScoreRow::coverage))
+                .ifPresent(row -> out.add(missed(row, task.plan().coverage())));
         rows.stream().filter(row -> row.method().equals(rows.get(0).method()))
                 .forEach(own -> better(rows, own).ifPresent(naive -> out.add(naiveIsBetter(naive, own))));
         return out;

@@ -1,11 +1,16 @@
 package org.modestead.engine.forecast;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 
 /** What was done and how it came out, in sentences. */
 final class Summary {
+
+    private static final int DIGITS = 5;
+    // Beyond this many decimals or trailing zeros a power of ten reads better.
+    private static final int PLAIN = 9;
 
     private Summary() {}
 
@@ -47,11 +52,16 @@ final class Summary {
 
     /** Returns a share as it is written in sentences. */
     static String percent(double share) {
-        return String.format(Locale.ROOT, "%.4g", 100 * share).replaceAll("\\.?0+$", "") + " %";
+        return figure(100 * share) + " %";
     }
 
-    /** Returns a number as it is written in sentences: five significant digits. */
+    /** Returns a number as it is written in sentences: at most five significant digits, no trailing zeros. */
     static String figure(double value) {
-        return String.format(Locale.ROOT, "%.5g", value);
+        if (!Double.isFinite(value)) {
+            return Double.toString(value);
+        }
+        BigDecimal rounded = new BigDecimal(value, new MathContext(DIGITS)).stripTrailingZeros();
+        boolean plain = Math.abs(rounded.scale()) <= PLAIN;
+        return plain ? rounded.toPlainString() : rounded.toString();
     }
 }

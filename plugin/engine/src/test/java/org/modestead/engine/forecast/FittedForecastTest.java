@@ -1,10 +1,12 @@
 package org.modestead.engine.forecast;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
@@ -23,8 +25,10 @@ import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.spectrum.SpectrumExtractor;
 
-/** The projection route on operators that were really fitted, against exact solutions. */
+/** Forecasts by operators that were really fitted, against exact solutions and recorded futures. */
 class FittedForecastTest {
 
     private static FittedOperator fit(Snapshots snapshots, Estimator estimator, int rank) {
@@ -85,5 +89,42 @@ class FittedForecastTest {
             // At rank 8 the odd functions reach x up to x^7: what is left of x is about 2e-8, of the forecast 2e-7.
             assertEquals(0.5 * Math.exp(2 * step), out.get(1, 0), 1e-6, "step " + step);
         }
+    }
+
+    @Test
+    void modesOfADelayFitForecastAsTheProjectionDoes() {
+        Fixture.Signal signal = t -> 2 * Math.exp(-0.02 * t) + Math.exp(-0.01 * t) * Math.cos(0.5 * t);
+        List<Run> training = List.of(Fixture.run("a", 0, 120, 0, 1, signal));
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), training, List.of(), List.of(), OptionalDouble.of(1),
+                new DelayEmbedding(6, 1), Preparation.identity(1));
+        FittedOperator operator = fit(snapshots, new LinearEstimator(), 3);
+        ForecastRoute modal = new ModalRoute(operator, SpectrumExtractor.extract(operator, Progress.NONE), 1);
+        DMatrixRMaj out = modal.forecast(training.get(0).values(), 60);
+        for (int k = 1; k <= 60; k++) {
+            // As for the projection; the eigenvectors of three well separated exponentials add little.
+            assertEquals(signal.at(119 + k), out.get(k - 1, 0), 1e-9);
+        }
+    }
+
+    @Test
+    void logarithmOfPassengersIsForecastBetterThanLastYear() {
+        // CHECKS C5.7: delay depth 48, rank 13 on the logarithm; the last 12 months are held out.
+        double[] y = PassengerSeries.values();
+        Fixture.Signal log = t -> Math.log(y[(int) Math.round(t)]);
+        List<Run> training = List.of(Fixture.run("a", 0, 132, 0, 1, log));
+        List<Run> holdout = List.of(Fixture.run("a", 131, 144, 1, 1, log));
+        Snapshots snapshots = Fixture.snapshots(List.of(""), training, List.of(), holdout, OptionalDouble.of(1),
+                new DelayEmbedding(48, 1), Preparation.identity(1));
+        FittedOperator operator = fit(snapshots, new LinearEstimator(), 13);
+        Spectrum spectrum = SpectrumExtractor.extract(operator, Progress.NONE);
+        ForecastPlan plan = new ForecastPlan(Route.AUTO, Origin.BEFORE_HOLDOUT, OptionalDouble.empty(), 0.9, 0,
+                List.of(12.0));
+        ForecastResult result = Forecaster.run(snapshots, operator, spectrum, Optional.empty(), plan, Progress.NONE);
+        List<String> methods = result.scores().stream().map(ScoreRow::method).toList();
+        assertEquals(List.of("modal", "projection", "persistence", "seasonal-naive"), methods, "the season is guessed");
+        double seasonal = result.scores().get(3).rmse();
+        assertEquals(0.111560, seasonal, 1e-6, "RMSE of log(y) against log(y one year before), computed from the series");
+        assertTrue(result.scores().get(0).rmse() < seasonal, result.scores().toString());
+        assertTrue(result.scores().get(1).rmse() < seasonal, result.scores().toString());
     }
 }
