@@ -328,6 +328,21 @@ final class RealSchur {
         row[k + 1] -= t * f[3];
     }
 
+    /** Returns the size of T without its eigenvalues; see {@link NormalityDeparture}. */
+    double departure() {
+        double size = 0;
+        for (int i = 0; i < n; i++) {
+            boolean pair = im[i] > 0;
+            if (pair) {
+                size = Math.hypot(size, Math.hypot(h[i][i] - h[i + 1][i + 1], h[i][i + 1] + h[i + 1][i]));
+            }
+            for (int j = i + (pair ? 2 : 1); j < n; j++) {
+                size = Math.hypot(size, h[i][j]);
+            }
+        }
+        return size;
+    }
+
     /** Returns the eigenvalues and unit right eigenvectors. */
     GeneralEigen eigen() {
         double norm = Math.max(hessenbergNorm(), SMALLEST_NORM);

@@ -44,6 +44,8 @@ public final class ExactResidual implements Check {
     }
 
     /**
+     * Returns the residual of one eigenpair in orthonormal functions.
+     *
      * @param action Ã, r x r
      * @param second Ñ, r x r
      * @param vectors r x r
@@ -51,7 +53,7 @@ public final class ExactResidual implements Check {
      * @param value μ
      * @return at least 0
      */
-    static double of(DMatrixRMaj action, DMatrixRMaj second, ZMatrixRMaj vectors, int j, Complex value) {
+    public static double of(DMatrixRMaj action, DMatrixRMaj second, ZMatrixRMaj vectors, int j, Complex value) {
         double squares = form(second, vectors, j).re() - 2 * value.conj().times(form(action, vectors, j)).re() + value.abs() * value.abs();
         return Math.sqrt(Math.max(0, squares));
     }

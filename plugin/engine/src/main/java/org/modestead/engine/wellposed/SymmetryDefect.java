@@ -28,7 +28,7 @@ public final class SymmetryDefect implements Check {
     }
 
     /** Returns the defect of a square matrix; 0 for the zero matrix. */
-    static double of(DMatrixRMaj action) {
+    public static double of(DMatrixRMaj action) {
         DMatrixRMaj difference = action.copy();
         CommonOps_DDRM.subtractEquals(difference, CommonOps_DDRM.transpose(action, null));
         double size = NormOps_DDRM.normF(action);
