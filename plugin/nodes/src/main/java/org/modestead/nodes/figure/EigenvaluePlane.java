@@ -61,7 +61,7 @@ public final class EigenvaluePlane {
     }
 
     private static int order(Mode mode, Optional<Verdict> verdict) {
-        return mode.constant() ? Grade.values().length : grade(mode, verdict).map(Grade::ordinal).orElse(0);
+        return mode.constant() ? -1 : grade(mode, verdict).map(Grade::ordinal).orElse(0);
     }
 
     private static Optional<Grade> grade(Mode mode, Optional<Verdict> verdict) {

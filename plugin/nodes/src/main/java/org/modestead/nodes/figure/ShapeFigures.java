@@ -42,7 +42,8 @@ public final class ShapeFigures {
             double[] sizes = newest().stream().mapToDouble(this::size).toArray();
             double largest = Arrays.stream(sizes).max().orElse(0);
             double[] heights = Arrays.stream(sizes).map(size -> largest > 0 ? size / largest : 0).toArray();
-            String scaled = oneUnit() ? "" : " Units differ, so each channel was first divided by the scale it was prepared with.";
+            String scaled = oneUnit() ? "" : " Units differ, so each channel was first divided by the scale it was"
+                    + " prepared with.";
             return new Figure("shape-" + mode.number() + "-magnitude", Figure.Kind.SHAPES, title("magnitude"),
                     "How far each channel moves in this mode, relative to the one that moves most." + scaled, channels(),
                     Figure.Axis.linear("magnitude relative to the largest"),

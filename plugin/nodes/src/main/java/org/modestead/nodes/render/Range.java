@@ -47,7 +47,7 @@ record Range(double low, double high) {
             return new Range(Math.pow(10, from - pad), Math.pow(10, to + pad));
         }
         double below = Math.floor(from - LITTLE);
-        return new Range(0.999 * Math.pow(10, below), 1.001 * Math.pow(10, Math.max(below + 1, Math.ceil(to + LITTLE))));
+        return new Range(0.9 * Math.pow(10, below), 1.1 * Math.pow(10, Math.max(below + 1, Math.ceil(to + LITTLE))));
     }
 
     static boolean drawable(double value, Figure.Axis axis) {

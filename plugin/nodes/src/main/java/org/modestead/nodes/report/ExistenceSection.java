@@ -69,8 +69,7 @@ final class ExistenceSection {
         blocks.add(new Heading("Mode " + mode.number() + " (" + ModeWords.headline(mode, source.unit()) + "): "
                 + one.grade().word()));
         blocks.add(new Paragraph(VerdictWords.meaning(one.grade()) + " " + Sentence.of(one.sentence())
-                + " What may be done: "
-                + VerdictWords.advice(one.grade())));
+                + " " + VerdictWords.advice(one.grade())));
         List<Finding> deciding = of(verdict, mode.number()).stream()
                 .filter(finding -> one.decidedBy().contains(finding.check())).toList();
         if (!deciding.isEmpty()) {
@@ -85,8 +84,8 @@ final class ExistenceSection {
     }
 
     private static String told(Finding finding) {
-        String threshold = Double.isNaN(finding.threshold()) ? "" : ", threshold " + Digits.figure(finding.threshold());
-        String value = Double.isNaN(finding.value()) ? "" : " (" + Digits.figure(finding.value()) + threshold + ")";
+        String threshold = Double.isNaN(finding.threshold()) ? "" : ", threshold " + Digits.cell(finding.threshold());
+        String value = Double.isNaN(finding.value()) ? "" : " (" + Digits.cell(finding.value()) + threshold + ")";
         return name(finding) + ": " + outcome(finding) + value + ". " + Sentence.of(finding.sentence());
     }
 
@@ -98,7 +97,7 @@ final class ExistenceSection {
         if (Double.isNaN(finding.threshold())) {
             return "for information";
         }
-        return finding.passed() ? "passed" : "not passed";
+        return finding.passed() ? "passed" : "failed";
     }
 
     private static Grid table(Verdict verdict) {

@@ -19,6 +19,7 @@ final class ReportStyle {
             .skip{position:absolute;left:-99rem}
             .skip:focus{left:1rem;top:1rem;background:var(--panel);padding:.5rem 1rem}
             nav ol{columns:2;column-gap:3rem;margin:.5rem 0;padding-left:1.4rem}
+            nav li{margin:0;padding:.12rem 0}
             nav h2{font-size:1rem;margin:2rem 0 0;border:0;padding:0}
             .callout{border:1px solid var(--rule);border-left:.4rem solid var(--note);background:var(--panel);
               padding:.7rem 1.1rem;margin:1rem 0}
@@ -34,7 +35,8 @@ final class ReportStyle {
             thead th{border-bottom:2px solid var(--note);vertical-align:bottom}
             tbody th{font-weight:600}
             tbody tr:nth-child(even){background:var(--stripe)}
-            .number{text-align:right;font-variant-numeric:tabular-nums;white-space:nowrap}
+            .number{text-align:right;font-variant-numeric:tabular-nums}
+            tbody .number{white-space:nowrap}
             .below{font-size:.88rem;margin-top:.4rem}
             figure{margin:1.4rem 0;break-inside:avoid}
             figure svg{display:block;width:100%;height:auto;background:#fff;border:1px solid var(--rule);border-radius:4px}
@@ -57,7 +59,7 @@ final class ReportStyle {
             .table{overflow:visible}
             table{font-size:8.5pt;min-width:0}
             th,td{padding:.2rem .5rem .2rem .3rem}
-            .number{white-space:normal}
+            tbody .number{white-space:normal}
             .middle{max-width:32rem}
             a{color:inherit;text-decoration:none}
             """;

@@ -39,6 +39,15 @@ final class SummarySection {
         return new Section("summary", "Summary", blocks);
     }
 
+    /** Returns what the node says of itself: count, verdict and skill. */
+    static List<String> sentences(ReportSource source) {
+        List<String> sentences = new ArrayList<>();
+        sentences.add(carrying(source));
+        source.verdict().ifPresent(verdict -> sentences.add(VerdictWords.overall(verdict.overall().grade())));
+        ForecastSkill.sentence(source).ifPresent(sentences::add);
+        return sentences;
+    }
+
     private static String fitted(ReportSource source) {
         String data = source.snapshots().map(SummarySection::data).orElse("");
         String method = source.operator().map(operator -> Sentence.of(operator.method()) + " Rank " + operator.rank() + ": "
@@ -79,15 +88,15 @@ final class SummarySection {
 
     private static Callout told(ModeVerdict overall) {
         Grade grade = overall.grade();
-        return new Callout(ExistenceSection.tone(grade), "the modes together: " + grade.word(),
+        return new Callout(ExistenceSection.tone(grade), VerdictWords.headline(grade),
                 List.of(VerdictWords.overall(grade), Sentence.of(overall.sentence()),
-                "What may be done: " + VerdictWords.advice(grade)));
+                VerdictWords.advice(grade)));
     }
 
     private static String headline(ReportSource source, Mode mode) {
         Optional<Grade> grade = source.grade(mode);
-        return "Mode " + mode.number() + ": " + ModeWords.headline(mode, source.unit()) + "; "
-                + Digits.percent(mode.energyShare())
-                + " of the signal" + grade.map(g -> "; " + g.word() + " (" + g.advice() + ")").orElse("") + ".";
+        return "Mode " + mode.number() + grade.map(g -> " " + VerdictWords.verb(g) + " (" + g.advice() + ")").orElse("")
+                + ": "
+                + ModeWords.headline(mode, source.unit()) + "; " + Digits.percent(mode.energyShare()) + " of the signal.";
     }
 }

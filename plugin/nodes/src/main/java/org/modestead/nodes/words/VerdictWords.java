@@ -25,6 +25,25 @@ public final class VerdictWords {
         };
     }
 
+    /** Returns the verdict as what follows a mode's name: {@code stands}, {@code is absent}. */
+    public static String verb(Grade grade) {
+        return switch (grade) {
+            case STANDS, SETTLES, DRIFTS -> grade.word();
+            case UNDECIDED, ABSENT -> "is " + grade.word();
+        };
+    }
+
+    /** Returns the overall verdict in a few words, without a capital letter. */
+    public static String headline(Grade grade) {
+        return switch (grade) {
+            case STANDS -> "the modes stand";
+            case SETTLES -> "the modes settle, but overlap";
+            case UNDECIDED -> "whether the modes exist is undecided";
+            case DRIFTS -> "the modes drift";
+            case ABSENT -> "a leading mode is absent";
+        };
+    }
+
     /** Returns one sentence on the modes that carry the signal, taken together; the worst of them decides. */
     public static String overall(Grade grade) {
         return switch (grade) {
@@ -45,9 +64,8 @@ public final class VerdictWords {
         };
     }
 
-    /** Returns what may be done, as an instruction with a capital letter and a full stop. */
+    /** Returns what may be done, as a sentence. */
     public static String advice(Grade grade) {
-        String advice = grade.advice();
-        return Character.toUpperCase(advice.charAt(0)) + advice.substring(1) + ".";
+        return "What may be done: " + grade.advice() + ".";
     }
 }
