@@ -1,5 +1,6 @@
 package org.modestead.nodes.figure;
 
+import java.util.Arrays;
 import java.util.List;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.nodes.words.TimeUnit;
@@ -14,6 +15,12 @@ final class Axes {
             case DATE -> new Figure.Axis("date", false, List.of(), "date");
             case DATE_TIME -> new Figure.Axis("date and time (UTC)", false, List.of(), "date-time");
         };
+    }
+
+    /** Returns engine times as the axis counts them: numbers as they are, else days or seconds since 1970. */
+    static double[] times(TimeAxis axis, double[] times) {
+        double factor = axis.calendarUnitsPerUnit();
+        return factor == 1 ? times : Arrays.stream(times).map(time -> time * factor).toArray();
     }
 
     static Figure.Axis growth(TimeUnit unit) {

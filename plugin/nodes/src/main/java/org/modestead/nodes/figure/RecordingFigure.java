@@ -34,7 +34,8 @@ public final class RecordingFigure {
         for (int c = 0; c < shown; c++) {
             layers.addAll(lines(snapshots, runs, c, oneUnit));
         }
-        tailStart(snapshots).ifPresent(at -> layers.add(new Figure.Rule("holdout starts", "", true, at)));
+        tailStart(snapshots).ifPresent(at -> layers.add(new Figure.Rule("holdout starts", "", true,
+                at * snapshots.time().calendarUnitsPerUnit())));
         return new Figure("recording", Figure.Kind.TIME_SERIES, "Recorded channels",
                 caption(snapshots, shown, runs.size(), oneUnit),
                 Axes.time(snapshots.time()), Figure.Axis.linear(valueLabel(drawn, oneUnit)), layers);
@@ -47,7 +48,7 @@ public final class RecordingFigure {
         for (Run run : runs) {
             double[] values = Arrays.stream(RecordedValues.of(run, channel, snapshots.preparation())).map(scaling)
                     .toArray();
-            Thinning.Curve curve = Thinning.thin(run.times(), values, most);
+            Thinning.Curve curve = Thinning.thin(Axes.times(snapshots.time(), run.times()), values, most);
             lines.add(new Figure.Line(snapshots.channels().get(channel).label(), "channel:" + (channel + 1), curve.x(),
                     curve.y(),
                     Figure.Emphasis.NORMAL));

@@ -1,7 +1,5 @@
 package org.modestead.nodes.report;
 
-import java.time.LocalDate;
-import java.time.LocalDateTime;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.nodes.contract.SettingFault;
@@ -29,19 +27,13 @@ record TableColumns(Table table) {
     /** Returns the current row's time as the engine counts it. */
     double time(RowCursor cursor, Snapshots snapshots) {
         int column = of(TIME);
+        double unit = snapshots.time().calendarUnitsPerUnit();
         return switch (table.schema().columns().get(column).type()) {
-            case DATE -> TimeAxis.ofDate(cursor.date(column));
-            case DATE_TIME, ZONED_DATE_TIME -> TimeAxis.ofDateTime(cursor.dateTime(column));
-            case TEXT -> written(cursor.text(column), snapshots.time());
-            default -> cursor.number(column);
-        };
-    }
-
-    private static double written(String text, TimeAxis axis) {
-        return switch (axis.kind()) {
-            case NUMBER -> Double.parseDouble(text);
-            case DATE -> TimeAxis.ofDate(LocalDate.parse(text));
-            case DATE_TIME -> TimeAxis.ofDateTime(LocalDateTime.parse(text));
+            case DATE -> TimeAxis.ofDate(cursor.date(column)) / unit;
+            case DATE_TIME, ZONED_DATE_TIME -> TimeAxis.ofDateTime(cursor.dateTime(column)) / unit;
+            case DOUBLE, LONG -> cursor.number(column);
+            case TEXT, FLAG -> throw new SettingFault(table.origin(), "column time holds " + cursor.text(column),
+                    "connect a table whose times are numbers, dates or date-times");
         };
     }
 }
