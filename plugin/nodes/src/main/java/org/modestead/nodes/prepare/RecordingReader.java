@@ -26,11 +26,14 @@ import org.modestead.nodes.table.Table;
 final class RecordingReader {
 
     private static final int ROWS_BETWEEN_REPORTS = 4096;
+    private static final int NONE = -1;
     private final Table table;
     private final RecordingColumns columns;
     private final List<String> channelColumns;
     private final List<NumberCell> cells;
     private final List<TextColumnWatch> watches;
+    private final int timeColumn;
+    private final int runColumn;
     private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
 
     private RecordingReader(Table table, RecordingColumns columns) {
@@ -42,6 +45,8 @@ final class RecordingReader {
         this.cells = read.stream().map(name -> new NumberCell(table.origin(), name, position(name), type(name))).toList();
         this.watches = columns.unusedTexts(table.schema()).stream()
                 .map(name -> new TextColumnWatch(name, position(name))).toList();
+        this.timeColumn = columns.time().isEmpty() ? NONE : position(columns.time());
+        this.runColumn = columns.run().isEmpty() ? NONE : position(columns.run());
     }
 
     /**
@@ -73,7 +78,7 @@ final class RecordingReader {
         try (RowCursor cursor = table.open()) {
             RecordedTime time = null;
             while (cursor.next()) {
-                time = time == null && !columns.time().isEmpty() ? firstTime(cursor) : time;
+                time = time == null && timeColumn != NONE ? firstTime(cursor) : time;
                 axis = time == null ? axis : time.axis();
                 append(cursor, time);
                 if (++rows % ROWS_BETWEEN_REPORTS == 0) {
@@ -87,8 +92,7 @@ final class RecordingReader {
     }
 
     private RecordedTime firstTime(RowCursor cursor) {
-        int column = position(columns.time());
-        return RecordedTime.of(type(columns.time()), column, cursor.text(column), columns.timeUnit());
+        return RecordedTime.of(type(columns.time()), timeColumn, cursor.text(timeColumn), columns.timeUnit());
     }
 
     private void append(RowCursor cursor, RecordedTime time) {
@@ -110,10 +114,10 @@ final class RecordingReader {
     }
 
     private String runOf(RowCursor cursor) {
-        if (columns.run().isEmpty()) {
+        if (runColumn == NONE) {
             return "1";
         }
-        String name = cursor.text(position(columns.run())).strip();
+        String name = cursor.text(runColumn).strip();
         if (name.isEmpty()) {
             throw new RecordingFault(place(cursor, columns.run()), "the name of the run is missing",
                     "give every row the name of its run, or clear the run column");
@@ -123,14 +127,13 @@ final class RecordingReader {
 
     private double timeOf(RowCursor cursor, RecordedTime time) {
         String name = columns.time();
-        int column = position(name);
-        if (cursor.isMissing(column) || cursor.text(column).isBlank()) {
+        if (cursor.isMissing(timeColumn) || cursor.text(timeColumn).isBlank()) {
             throw new RecordingFault(place(cursor, name), "the time is missing", "give every row its time or leave the"
                     + " row out");
         }
         OptionalDouble found = time.read(cursor);
         if (found.isEmpty() || Double.isInfinite(found.getAsDouble())) {
-            throw new RecordingFault(place(cursor, name), "the time is \"" + cursor.text(column) + "\"",
+            throw new RecordingFault(place(cursor, name), "the time is \"" + cursor.text(timeColumn) + "\"",
                     "write " + time.wanted() + ", or choose another time column");
         }
         return found.getAsDouble();
