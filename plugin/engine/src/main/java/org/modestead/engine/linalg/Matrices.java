@@ -8,9 +8,9 @@ public final class Matrices {
 
     private Matrices() {}
 
-    /** Returns rows [r0, r1) and columns [c0, c1). */
+    /** Returns rows [r0, r1) and columns [c0, c1), either of which may be none. */
     public static DMatrixRMaj block(DMatrixRMaj a, int r0, int r1, int c0, int c1) {
-        return CommonOps_DDRM.extract(a, r0, r1, c0, c1);
+        return r0 == r1 || c0 == c1 ? new DMatrixRMaj(r1 - r0, c1 - c0) : CommonOps_DDRM.extract(a, r0, r1, c0, c1);
     }
 
     /** Returns c · A. */

@@ -130,6 +130,16 @@ class FitNodesTest {
     }
 
     @Test
+    void choicesByLeftOutSamplesWorkOnOneRunAsWell() {
+        Object single = Steps.run("snapshot-builder", Map.of("table", Ringing.numbers(1)),
+                Map.of("time-column", "time", "run-column", "run")).outputs().get("snapshots");
+        NodeResult fitted = Steps.run("operator-fitter", Map.of("snapshots", single), Map.of("rank-rule", "holdout"));
+        assertEquals(2, ((FittedOperator) fitted.outputs().get("operator")).rank(), "a ringing pair needs both directions");
+        NodeResult ranked = Steps.run("kernel-chooser", Map.of("snapshots", single), Map.of("choose", "rank"));
+        assertEquals("1", Steps.column(ranked, "ranking", "place").get(0));
+    }
+
+    @Test
     void aDictionaryHasAsManyFunctionsAsItsDegreeGives() {
         // (2 + 3)! / (2! 3!) monomials of two channels up to degree 3
         assertEquals(10, operator(Map.of("estimator", "dictionary", "degree", 3), false).compression().basis().size());
