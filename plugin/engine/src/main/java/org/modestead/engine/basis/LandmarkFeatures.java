@@ -6,6 +6,7 @@ import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.Progress;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.linalg.Triangular;
 
 /**
  * Orthonormal functions of a kernel's space that span the sections at a few landmarks,
@@ -89,8 +90,7 @@ public record LandmarkFeatures(Kernel kernel, DMatrixRMaj landmarks, DMatrixRMaj
                 lower.set(i, j, factor[j][chosen[i]]);
             }
         }
-        DMatrixRMaj inverse = CommonOps_DDRM.identity(r);
-        org.ejml.dense.row.decomposition.TriangularSolver_DDRM.solveL(lower.data, inverse.data, r, r);
+        DMatrixRMaj inverse = Triangular.inverseOfLower(lower);
         CommonOps_DDRM.transpose(inverse);
         return new LandmarkFeatures(kernel, landmarks, inverse);
     }
