@@ -7,7 +7,7 @@ import java.util.OptionalDouble;
  * The exponential dot product kernel {@code K(x, y) = exp(ρ x·y)}: the real Fock (Bargmann) space, in which monomials
  * are orthogonal with {@code ‖x^α‖² = α!/ρ^|α|}. Bargmann, Comm. Pure Appl. Math. 14:187, 1961.
  */
-public final class ExponentialKernels implements KernelFamily {
+final class ExponentialKernels implements KernelFamily {
 
     @Override
     public String id() {

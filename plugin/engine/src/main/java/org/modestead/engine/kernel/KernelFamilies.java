@@ -5,15 +5,15 @@ import java.util.Optional;
 import java.util.ServiceLoader;
 import org.modestead.engine.FitFault;
 
-/** The kernel families at hand: those of the engine and any found by {@link ServiceLoader}. */
+/** The kernel families at hand: those of every {@link KernelLibrary} that {@link ServiceLoader} finds. */
 public final class KernelFamilies {
 
     private KernelFamilies() {}
 
     /** Returns all families in the order of the service files, the engine's own first; ids are unique. */
     public static List<KernelFamily> all() {
-        return ServiceLoader.load(KernelFamily.class, KernelFamily.class.getClassLoader()).stream().map(ServiceLoader.Provider::get)
-                .toList();
+        return ServiceLoader.load(KernelLibrary.class, KernelLibrary.class.getClassLoader()).stream()
+                .flatMap(provider -> provider.get().families().stream()).toList();
     }
 
     /** Returns the family of an id. */

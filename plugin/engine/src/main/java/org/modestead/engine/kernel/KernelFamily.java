@@ -2,7 +2,7 @@ package org.modestead.engine.kernel;
 
 import java.util.List;
 
-/** A family of kernels, found by {@link java.util.ServiceLoader}; others may add theirs. */
+/** A family of kernels with named parameters, brought by a {@link KernelLibrary}. */
 public interface KernelFamily {
 
     /** Returns the stable id, lower case with dashes. */

@@ -4,7 +4,7 @@ import java.util.List;
 import java.util.OptionalDouble;
 
 /** {@code K(x, y) = x·y}: its space holds the linear functions, {@code ‖x_k‖ = 1}, and nothing else. */
-public final class LinearKernels implements KernelFamily {
+final class LinearKernels implements KernelFamily {
 
     @Override
     public String id() {

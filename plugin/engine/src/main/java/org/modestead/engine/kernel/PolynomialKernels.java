@@ -7,7 +7,7 @@ import java.util.OptionalDouble;
  * {@code K(x, y) = (c + x·y)^d}: polynomials up to degree d, all of them for c &gt; 0. For one coordinate and c = 1,
  * {@code ‖x^n‖² = 1/binom(d, n)}; in general {@code ‖x_k‖² = 1/(d c^(d-1))}.
  */
-public final class PolynomialKernels implements KernelFamily {
+final class PolynomialKernels implements KernelFamily {
 
     @Override
     public String id() {
