@@ -3,10 +3,7 @@ package org.modestead.host.table;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.List;
-import java.util.Optional;
-import java.util.stream.Stream;
-import org.modestead.nodes.contract.NearestName;
+import org.modestead.host.output.Neighbours;
 
 /** Refuses files that no reader could read, each with a sentence of its own. */
 final class FileChecks {
@@ -23,7 +20,7 @@ final class FileChecks {
             throw new TableFault(shown, "this is a folder, not a file", "name a file in it");
         }
         if (!Files.exists(path)) {
-            throw new TableFault(shown, "there is no such file" + near(path),
+            throw new TableFault(shown, "there is no such file" + Neighbours.hint(path),
                     "name a file relative to the workflow's folder or with its full path");
         }
         if (!Files.isReadable(path)) {
@@ -42,20 +39,6 @@ final class FileChecks {
             return Files.size(path);
         } catch (IOException unreadable) {
             throw new TableFault(shown, "the file cannot be read (" + unreadable.getMessage() + ")", "allow reading it");
-        }
-    }
-
-    private static String near(Path path) {
-        Path folder = path.getParent();
-        if (folder == null || !Files.isDirectory(folder)) {
-            return folder == null ? "" : ", and no folder " + folder;
-        }
-        try (Stream<Path> inside = Files.list(folder)) {
-            List<String> names = inside.map(found -> found.getFileName().toString()).sorted().toList();
-            Optional<String> meant = NearestName.of(path.getFileName().toString(), names);
-            return meant.map(name -> ", perhaps you meant " + name).orElse("");
-        } catch (IOException unlisted) {
-            return "";
         }
     }
 }

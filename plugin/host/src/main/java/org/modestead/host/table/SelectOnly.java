@@ -4,6 +4,8 @@ import com.fasterxml.jackson.core.JsonProcessingException;
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
 import java.sql.SQLException;
+import java.util.Optional;
+import org.modestead.nodes.contract.SettingProblem;
 
 /** Lets one SELECT through and nothing else, as DuckDB's own parser reads it. */
 final class SelectOnly {
@@ -12,18 +14,17 @@ final class SelectOnly {
 
     private SelectOnly() {}
 
-    /** @throws TableFault if the text is not one SELECT statement */
-    static void check(Database database, String sql) throws SQLException {
+    /** Returns what is wrong when the text is not one SELECT statement. */
+    static Optional<SettingProblem> problem(Database database, String sql) throws SQLException {
         JsonNode parsed = tree(database.one("SELECT json_serialize_sql(" + Sql.text(sql) + "::VARCHAR)", row -> row.getString(1)));
         if (parsed.path("error").asBoolean()) {
             boolean syntax = parsed.path("error_type").asText().equals("parser");
-            throw new TableFault("setting sql", syntax ? parsed.path("error_message").asText() + place(parsed, sql)
-                    : "the query is not a SELECT", WANTED);
+            return Optional.of(new SettingProblem("sql", syntax ? parsed.path("error_message").asText() + place(parsed, sql)
+                    : "the query is not a SELECT", WANTED));
         }
         int statements = parsed.path("statements").size();
-        if (statements != 1) {
-            throw new TableFault("setting sql", statements == 0 ? "there is no statement" : statements + " statements", WANTED);
-        }
+        return statements == 1 ? Optional.empty()
+                : Optional.of(new SettingProblem("sql", statements == 0 ? "there is no statement" : statements + " statements", WANTED));
     }
 
     private static String place(JsonNode parsed, String sql) {

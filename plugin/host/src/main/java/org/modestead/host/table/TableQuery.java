@@ -15,6 +15,7 @@ import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
@@ -48,11 +49,21 @@ public final class TableQuery implements Node {
                         Port.optional("input3", PortType.TABLE, "Third table", "Called input3 in the query.")),
                 List.of(Port.of("table", PortType.TABLE, "Table", "The rows that the query gives.")),
                 List.of(new Setting.Text(new Setting.Common("sql", "Query", "Query", "One SELECT, for example: SELECT time, flow, "
-                                + "head - 2.5 AS head FROM input WHERE time >= 10 ORDER BY time"), "SELECT * FROM input", true, true),
+                                + "head - 2.5 AS head FROM input WHERE time >= 10 ORDER BY time"), "SELECT * FROM input", true, false),
                         new Setting.Whole(new Setting.Common("memory", "Memory", "Limits", "Memory for the query; what does not fit "
                                 + "goes to a temporary folder."), "MB", Database.LEAST_MEGABYTES, MOST_MEGABYTES,
                                 OptionalLong.of(Database.USUAL_MEGABYTES))),
                 1);
+    }
+
+    @Override
+    public List<SettingProblem> check(Map<String, TableSchema> inputs, Settings settings) {
+        SourceLimits limits = new SourceLimits(settings.whole("memory"), true);
+        try (Database database = Database.open(limits.megabytes())) {
+            return SelectOnly.problem(database, withoutEnd(settings.text("sql"))).stream().toList();
+        } catch (SQLException failure) {
+            throw new QueryExplainer(List.of(), limits).explain(failure);
+        }
     }
 
     @Override
@@ -86,7 +97,9 @@ public final class TableQuery implements Node {
         String sql = withoutEnd(settings.text("sql"));
         SourceLimits limits = new SourceLimits(settings.whole("memory"), true);
         try (Database database = Database.open(limits.megabytes())) {
-            SelectOnly.check(database, sql);
+            SelectOnly.problem(database, sql).ifPresent(problem -> {
+                throw new TableFault("setting sql", problem.seen(), problem.wanted());
+            });
             for (String port : INPUTS) {
                 if (inputs.containsKey(port)) {
                     database.execute("CREATE TABLE " + port + inputs.get(port).columns().stream()

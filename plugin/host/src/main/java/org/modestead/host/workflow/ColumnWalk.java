@@ -1,7 +1,5 @@
 package org.modestead.host.workflow;
 
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -11,9 +9,7 @@ import org.modestead.nodes.contract.ColumnChecks;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
-import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingProblem;
-import org.modestead.nodes.contract.Visibility;
 import org.modestead.nodes.table.TableSchema;
 
 /**
@@ -49,7 +45,6 @@ final class ColumnWalk {
         }
         Map<String, TableSchema> arriving = arriving(step);
         int before = problems.size();
-        missingFiles(step);
         ColumnChecks.check(step.declaration(), step.settings(), arriving).forEach(found -> problem(step, found));
         try {
             step.node().check(arriving, step.settings()).forEach(found -> problem(step, found));
@@ -71,22 +66,6 @@ final class ColumnWalk {
             }
         });
         return arriving;
-    }
-
-    private void missingFiles(PlannedStep step) {
-        for (Setting setting : Visibility.shown(step.declaration(), step.settings())) {
-            String name = setting instanceof Setting.File file && file.reading() ? step.settings().text(file.key()) : "";
-            if (name.isEmpty()) {
-                continue;
-            }
-            Path path = workflow.baseFolder().resolve(name);
-            if (Files.isDirectory(path)) {
-                problem(step, new SettingProblem(setting.key(), name + " is a folder", "name a file in it"));
-            } else if (!Files.exists(path)) {
-                problem(step, new SettingProblem(setting.key(), "there is no file " + name,
-                        "name a file relative to " + workflow.baseFolder() + " or with its full path"));
-            }
-        }
     }
 
     private void problem(PlannedStep step, SettingProblem found) {

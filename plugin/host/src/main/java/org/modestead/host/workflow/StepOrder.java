@@ -1,6 +1,8 @@
 package org.modestead.host.workflow;
 
 import java.util.ArrayList;
+import java.util.Collections;
+import java.util.Comparator;
 import java.util.HashSet;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -50,7 +52,10 @@ final class StepOrder {
         }
         List<String> found = new ArrayList<>(path);
         List<String> circle = new ArrayList<>(found.subList(found.indexOf(at), found.size()));
-        java.util.Collections.reverse(circle);
+        Collections.reverse(circle);
+        List<String> written = workflow.steps().stream().map(Step::id).toList();
+        String first = Collections.min(circle, Comparator.comparingInt(written::indexOf));
+        Collections.rotate(circle, -circle.indexOf(first));
         circle.add(circle.get(0));
         return circle;
     }

@@ -1,5 +1,7 @@
 package org.modestead.host.workflow;
 
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
@@ -7,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import org.modestead.host.output.Neighbours;
 import org.modestead.nodes.contract.NearestName;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
@@ -14,6 +17,7 @@ import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.contract.SettingsReader;
+import org.modestead.nodes.contract.Visibility;
 
 /** The part of the check that looks at each step alone: its node and its settings. */
 final class StepSettings {
@@ -66,7 +70,27 @@ final class StepSettings {
         reading.problems().forEach(found -> problems.add(new Problem(
                 replaced.contains(found.key()) ? OPTION : workflow.fileName(), step.id(), "setting " + found.key(), found.seen(),
                 found.wanted())));
+        missingFiles(step.id(), node.declaration(), stored, problems);
         return new Known(node, reading.settings());
+    }
+
+    /** Looks for the files to be read, whatever else is wrong with the step. */
+    private void missingFiles(String step, NodeDeclaration declaration, Map<String, Object> stored, List<Problem> problems) {
+        for (Setting setting : declaration.settings()) {
+            boolean read = setting instanceof Setting.File file && file.reading()
+                    && Visibility.isShown(declaration, stored, setting);
+            if (!read || !(stored.get(setting.key()) instanceof String name) || name.isBlank()) {
+                continue;
+            }
+            Path path = workflow.baseFolder().resolve(name);
+            if (Files.isDirectory(path)) {
+                problems.add(new Problem(workflow.fileName(), step, "setting " + setting.key(), name + " is a folder",
+                        "name a file in it"));
+            } else if (!Files.exists(path)) {
+                problems.add(new Problem(workflow.fileName(), step, "setting " + setting.key(), "there is no file " + name
+                        + Neighbours.hint(path), "name a file relative to " + workflow.baseFolder() + " or with its full path"));
+            }
+        }
     }
 
     private Set<String> replace(Step step, NodeDeclaration declaration, Map<String, Object> stored, List<Problem> problems) {
