@@ -26,8 +26,8 @@ public final class ColumnChecks {
      * @param inputs schemas of connected input tables, by port id, where known; settings of other ports are skipped
      * @return all problems, empty when all is well
      */
-    public static List<SettingProblem> check(NodeDeclaration declaration, Settings settings, Map<String,
-            TableSchema> inputs) {
+    public static List<SettingProblem> check(NodeDeclaration declaration, Settings settings,
+            Map<String, TableSchema> inputs) {
         List<SettingProblem> problems = new ArrayList<>();
         for (Setting setting : Visibility.shown(declaration, settings)) {
             if (setting instanceof Setting.OneColumn one && inputs.containsKey(one.port())) {

@@ -135,15 +135,19 @@ public final class SettingsReader {
                 .toList();
     }
 
-    private static List<SettingProblem> missing(NodeDeclaration declaration, Map<String, Object> raw, Map<String,
-            Object> values) {
+    private static List<SettingProblem> missing(NodeDeclaration declaration, Map<String, Object> raw,
+            Map<String, Object> values) {
         return declaration.settings().stream()
-                .filter(setting -> SettingText.isRequired(setting) && raw.get(setting.key()) == null)
+                .filter(setting -> SettingText.isRequired(setting) && raw.get(setting.key()) == null && !hasDefault(setting))
                 .filter(setting -> Visibility.isShown(declaration, values, setting))
                 .map(setting -> new SettingProblem(setting.key(), "no value", "give a " + SettingText.kind(setting)
                         + " for \"" + setting.common().label() + "\""
                         + (SettingText.range(setting).isEmpty() ? "" : ", " + SettingText.range(setting))))
                 .toList();
+    }
+
+    private static boolean hasDefault(Setting setting) {
+        return !SettingText.initial(setting).isBlank();
     }
 
     private static Map<String, Object> withoutNulls(Map<String, Object> stored) {

@@ -170,6 +170,16 @@ class SettingsReaderTest {
     }
 
     @Test
+    void aRequiredTextWithADefaultNeedNotBeGivenButMayNotBeBlank() {
+        NodeDeclaration titled = new NodeDeclaration("titled", "Titled", NodeDeclaration.Stage.REPORT, "P.", "D.",
+                List.of(), List.of(),
+                List.of(), List.of(), List.of(new Setting.Text(new Common("title", "Title", "G", "H."), "Report", false,
+                        true)), 1);
+        assertEquals("Report", SettingsReader.read(titled, Map.of(), 1).settings().orElseThrow().text("title"));
+        assertEquals("an empty text", SettingsReader.read(titled, Map.of("title", ""), 1).problems().get(0).seen());
+    }
+
+    @Test
     void hiddenSettingsAreCheckedAndKept() {
         assertEquals("x.csv", read(Map.of("path", "x.csv")).settings().orElseThrow().text("path"));
         assertEquals("the number 1", only(Map.of("path", 1)).seen());

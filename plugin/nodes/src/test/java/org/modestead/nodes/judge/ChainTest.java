@@ -25,8 +25,8 @@ class ChainTest {
 
     private record Chain(NodeResult snapshots, NodeResult operator, NodeResult spectrum, NodeResult verdict) {
 
-        static Chain of(Table table, Map<String, Object> snapshotSettings, Map<String, Object> fitSettings, Map<String,
-                Object> kernel) {
+        static Chain of(Table table, Map<String, Object> snapshotSettings, Map<String, Object> fitSettings,
+            Map<String, Object> kernel) {
             Map<String, Object> prepared = new HashMap<>(snapshotSettings);
             prepared.put("time-column", "time");
             prepared.put("run-column", "run");

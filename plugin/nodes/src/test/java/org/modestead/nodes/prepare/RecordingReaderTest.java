@@ -215,8 +215,8 @@ class RecordingReaderTest {
         assertEquals("the table has one row only", fault(table(Column.number("x")).row(1.0), columns("", "")).seen());
         assertTrue(fault(table(Column.number("t"), Column.text("x")).row(1.0, "a"), columns("t", "")).seen()
                 .startsWith("no column of numbers"));
-        assertEquals("there is no column flow", fault(table(Column.number("x")).row(1.0), columns("", "",
-                "flow")).seen());
+        assertEquals("there is no column flow", fault(table(Column.number("x")).row(1.0),
+                columns("", "", "flow")).seen());
     }
 
     @Test
