@@ -49,12 +49,10 @@ record Bands(double[][] halfWidths) {
         return out;
     }
 
-    // A lead that no origin reaches gets no scores at all: shorter leads alone would promise too narrow a band.
+    // A lead that no origin reaches may not widen its window: shorter leads alone would promise too narrow a band.
     private static int window(int[] cumulative, int lead) {
-        if (cumulative[lead] == cumulative[lead - 1]) {
-            return -1;
-        }
-        int most = Math.max(1, lead / 4);
+        boolean reached = cumulative[lead] > cumulative[lead - 1];
+        int most = reached ? Math.max(1, lead / 4) : 0;
         int reach = 0;
         while (reach < most && count(cumulative, lead, reach) < ENOUGH) {
             reach++;

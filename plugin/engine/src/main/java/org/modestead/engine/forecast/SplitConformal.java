@@ -15,7 +15,7 @@ import java.util.Arrays;
  */
 final class SplitConformal {
 
-    // (n+1)(1-α) that should be whole must not be lifted to the next integer by rounding: (19+1)·0.9 = 18.
+    // (n+1)(1-α) that should be whole must not be lifted to the next integer by rounding: 100 · 0.55 = 55.00000000000001.
     private static final double ROUNDING = 1e-9;
 
     private SplitConformal() {}

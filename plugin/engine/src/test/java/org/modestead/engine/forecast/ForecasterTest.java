@@ -148,6 +148,81 @@ class ForecasterTest {
         assertTrue(cut.sentence().contains("run a at time 5.0"), cut.sentence());
     }
 
+    @ParameterizedTest
+    @CsvSource({"MODAL", "PROJECTION"})
+    void runawayForecastsCountAtTheLimitInScoring(Route route) {
+        Snapshots snapshots = decayWithHoldout().operator().snapshots();
+        ForecastResult result = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{1e200}})
+                .run(plan(route, Origin.RECORDING_END, 5));
+        double width = 8 * (1 - Math.pow(0.9, 29));
+        for (ScoreRow row : result.scores().subList(0, 2)) {
+            // Every forecast is beyond 1000 widths and counts there; the observed decay adds less than one width.
+            assertEquals(1000 * width, row.rmse(), width, row.method());
+        }
+        assertTrue(find(result, "score-limited").sentence().contains(route.word()));
+        assertTrue(result.forecast().isEmpty(), "the first step is already beyond any sense");
+    }
+
+    @Test
+    void holdoutRunOfItsOwnIsForecastFromItsFirstState() {
+        Fixture.Signal cosine = t -> Math.cos(0.3 * t);
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(run(0, 30, 0, cosine)), List.of(),
+                List.of(Fixture.run("b", 100, 110, 0, 1, cosine)), OptionalDouble.of(1), new DelayEmbedding(2, 2),
+                Preparation.identity(1));
+        double d = 1 / (2 * Math.cos(0.3));
+        double[][] map = {{Math.cos(0.3) + d * Math.cos(0.6), -d}, {Math.cos(0.3) - d * Math.cos(0.6), d}};
+        ForecastResult result = Fixture.linear(snapshots, new Evolution.StepMap(1), map)
+                .run(new ForecastPlan(Route.MODAL, Origin.BEFORE_HOLDOUT, OptionalDouble.empty(), 0.9, 0, List.of()));
+        // The first state needs samples 100, 101 and 102; 103 to 109 are forecast.
+        assertEquals(List.of(103.0, 109.0),
+                List.of(result.forecast().get(0).time(), result.forecast().get(6).time()));
+        assertEquals(7, result.forecast().size());
+        assertEquals(cosine.at(109), result.forecast().get(6).value(), ROUNDING);
+    }
+
+    @Test
+    void bandsAreInRecordedUnitsAndEndWhereCalibrationEnds() {
+        // The map forgets everything, so the error is the sample itself: ±1 prepared, ±4 recorded.
+        Fixture.Signal wave = t -> Math.cos(Math.PI * t);
+        Preparation scaled = new Preparation(0, new double[] {7}, new double[1], new double[] {4});
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(run(0, 30, 0, wave)), List.of(run(29, 60, 1, wave)),
+                List.of(), OptionalDouble.of(1), DelayEmbedding.NONE, scaled);
+        ForecastResult result = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{1e-14}})
+                .run(plan(Route.PROJECTION, Origin.RECORDING_END, 40));
+        ForecastRow first = result.forecast().get(0);
+        assertEquals(60, first.time(), "the calibration part is the end of the recording");
+        assertEquals(3, first.low(), ROUNDING);
+        assertEquals(7, first.value(), ROUNDING);
+        assertEquals(11, first.high(), ROUNDING);
+        assertTrue(Double.isNaN(result.forecast().get(39).low()), "no calibration origin sees 40 steps ahead");
+        assertTrue(codes(result).contains("bands-end"));
+    }
+
+    @Test
+    void unevenHoldoutIsScoredAgainstInterpolatedValues() {
+        Fixture.Signal line = t -> 5 - t;
+        Run training = unevenly(line, 0, 0.5, 1, 1.5, 1.7, 2);
+        Run holdout = unevenly(line, 2, 2.3, 3, 3.2, 4.1, 5);
+        Run tail = new Run("a", holdout.times(), holdout.values(), holdout.inputs(), 1);
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(training), List.of(), List.of(tail),
+                OptionalDouble.empty());
+        ForecastPlan plan = new ForecastPlan(Route.PROJECTION, Origin.BEFORE_HOLDOUT, OptionalDouble.of(1.5), 0.9, 0,
+                List.of(0.5, 1.5));
+        ForecastResult result = Fixture.linear(snapshots, new Evolution.Generator(1), new double[][] {{1e-14}}).run(plan);
+        // Nothing moves, the truth falls by 0.5 a step: errors 0.5; then 0.5, 1, 1.5.
+        assertEquals(0.5, result.scores().get(0).mae(), 1e-9);
+        assertEquals(1, result.scores().get(1).mae(), 1e-9);
+        assertEquals(List.of(2.5, 3.0, 3.5), result.forecast().stream().map(ForecastRow::time).toList());
+    }
+
+    private static Run unevenly(Fixture.Signal signal, double... times) {
+        DMatrixRMaj values = new DMatrixRMaj(times.length, 1);
+        for (int k = 0; k < times.length; k++) {
+            values.data[k] = signal.at(times[k]);
+        }
+        return new Run("a", times, values);
+    }
+
     @Test
     void leavingTheSampledRegionIsDoubtedWithChannelAndTime() {
         Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(run(0, 11, 0, t -> Math.exp(0.1 * t))),
@@ -163,13 +238,8 @@ class ForecasterTest {
 
     @Test
     void unevenTimesAreForecastAtTheMedianTrainingStep() {
-        double[] times = {0, 0.5, 0.9, 1.5, 2, 2.5, 3.2};
-        DMatrixRMaj values = new DMatrixRMaj(times.length, 1);
-        for (int k = 0; k < times.length; k++) {
-            values.data[k] = Math.exp(-times[k]);
-        }
-        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(new Run("a", times, values)), List.of(), List.of(),
-                OptionalDouble.empty());
+        Run run = unevenly(t -> Math.exp(-t), 0, 0.5, 0.9, 1.5, 2, 2.5, 3.2);
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(run), List.of(), List.of(), OptionalDouble.empty());
         ForecastResult result = Fixture.linear(snapshots, new Evolution.Generator(1), new double[][] {{-1}})
                 .run(plan(Route.PROJECTION, Origin.RECORDING_END, 2));
         assertEquals(4, result.forecast().size());

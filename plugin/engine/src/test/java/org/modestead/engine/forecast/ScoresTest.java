@@ -63,6 +63,12 @@ class ScoresTest {
         assertEquals(rank, SplitConformal.rank(n, 1 - alpha));
     }
 
+    @Test
+    void wholeRanksAreNotLiftedByRounding() {
+        // 100 * 0.55 is 55.00000000000001 in double precision; the rank is 55.
+        assertEquals(55, SplitConformal.rank(99, 0.55));
+    }
+
     @ParameterizedTest
     @CsvSource({"0.2, 1.5", "0.1, 2.0", "0.05, Infinity"})
     void conformalThresholdOfTheWorkedExample(double alpha, double threshold) {
