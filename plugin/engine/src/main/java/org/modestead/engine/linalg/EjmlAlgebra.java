@@ -42,6 +42,7 @@ public final class EjmlAlgebra implements LinearAlgebra {
 
     @Override
     public SymmetricEigen symmetricEigen(DMatrixRMaj a) {
+        requireFinite("symmetric eigenvalues", a);
         int n = a.numRows;
         EigenDecomposition_F64<DMatrixRMaj> eigen = DecompositionFactory_DDRM.eig(n, true, true);
         if (!eigen.decompose(a.copy())) {
@@ -60,6 +61,7 @@ public final class EjmlAlgebra implements LinearAlgebra {
 
     @Override
     public Svd svd(DMatrixRMaj a) {
+        requireFinite("singular values", a);
         SingularValueDecomposition_F64<DMatrixRMaj> svd = DecompositionFactory_DDRM.svd(a.numRows, a.numCols, true, true, true);
         if (!svd.decompose(a.copy())) {
             throw notConverged("singular values", a);
@@ -95,6 +97,15 @@ public final class EjmlAlgebra implements LinearAlgebra {
             }
         }
         return vectors;
+    }
+
+    private static void requireFinite(String what, DMatrixRMaj a) {
+        for (int i = 0; i < a.getNumElements(); i++) {
+            if (!Double.isFinite(a.data[i])) {
+                throw new FitFault(what, "row " + i / a.numCols + ", column " + i % a.numCols + " of a " + a.numRows + " x " + a.numCols
+                        + " matrix holds " + a.data[i], "scale the data, or choose functions that stay finite on them");
+            }
+        }
     }
 
     private static FitFault notConverged(String what, DMatrixRMaj a) {

@@ -30,21 +30,21 @@ public interface LinearAlgebra {
     /**
      * Decomposes a symmetric matrix, {@code A = U diag(values) Uᵀ}, values falling.
      *
-     * @throws org.modestead.engine.FitFault if it does not converge
+     * @throws org.modestead.engine.FitFault if an entry is not finite or it does not converge
      */
     SymmetricEigen symmetricEigen(DMatrixRMaj a);
 
     /**
      * Decomposes any matrix in the compact form {@code A = U diag(s) Vᵀ}, s falling, k = min(m, n).
      *
-     * @throws org.modestead.engine.FitFault if it does not converge
+     * @throws org.modestead.engine.FitFault if an entry is not finite or it does not converge
      */
     Svd svd(DMatrixRMaj a);
 
     /**
      * Eigenvalues and right eigenvectors of a real square matrix.
      *
-     * @throws org.modestead.engine.FitFault if it does not converge
+     * @throws org.modestead.engine.FitFault if an entry is not finite or it does not converge
      */
     GeneralEigen eigen(DMatrixRMaj a);
 

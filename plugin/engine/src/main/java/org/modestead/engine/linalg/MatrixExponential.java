@@ -2,6 +2,7 @@ package org.modestead.engine.linalg;
 
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.ejml.dense.row.MatrixFeatures_DDRM;
 import org.ejml.dense.row.NormOps_DDRM;
 import org.modestead.engine.FitFault;
 
@@ -31,7 +32,7 @@ public final class MatrixExponential {
      */
     public static DMatrixRMaj of(DMatrixRMaj a) {
         double norm = NormOps_DDRM.inducedP1(a);
-        if (!Double.isFinite(norm)) {
+        if (!Double.isFinite(norm) || MatrixFeatures_DDRM.hasUncountable(a)) {
             throw new FitFault("matrix exponential", "an entry is not finite", "a finite operator is needed");
         }
         int squarings = norm > THETA_13 ? (int) Math.ceil(Math.log(norm / THETA_13) / Math.log(2)) : 0;

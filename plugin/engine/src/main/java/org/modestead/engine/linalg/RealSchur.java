@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.FitFault;
 
 /**
@@ -15,15 +16,17 @@ import org.modestead.engine.FitFault;
  * O(n³) time; backward stable, so eigenvalue errors are about machine precision times the eigenvalue's condition.
  *
  * <p>Golub and Van Loan, <i>Matrix Computations</i>, 4th ed., algorithms 7.4.2, 7.5.1, 7.5.2 and section 7.6.4;
- * deflation, exceptional shifts and scaling against overflow as in EISPACK's hqr2 (Smith et al., 1976).
+ * deflation and exceptional shifts as in EISPACK's hqr2 (Smith et al., 1976). Works on A divided by a power of two near its
+ * largest entry, which is exact and keeps squares and determinants from overflow and underflow.
  */
 final class RealSchur {
 
     private static final double EPS = Math.ulp(1.0);
-    private static final int MAX_SWEEPS = 60;
-    private static final double SMALLEST_NORM = 1e-140;
+    private static final int MAX_SWEEPS = 300;
+    private static final int PATIENCE = 20;
 
     private final int n;
+    private final int exponent;
     private final double[][] h;
     private final double[][] z;
     private final double[] re;
@@ -35,8 +38,12 @@ final class RealSchur {
         z = new double[n][n];
         re = new double[n];
         im = new double[n];
+        double largest = CommonOps_DDRM.elementMaxAbs(a);
+        exponent = largest == 0 ? 0 : Math.getExponent(largest);
         for (int i = 0; i < n; i++) {
-            System.arraycopy(a.data, i * n, h[i], 0, n);
+            for (int j = 0; j < n; j++) {
+                h[i][j] = Math.scalb(a.data[i * n + j], -exponent);
+            }
             z[i][i] = 1;
         }
     }
@@ -123,7 +130,7 @@ final class RealSchur {
         int sweeps = 0;
         double shiftSum = 0;
         while (high >= 0) {
-            int low = deflationStart(high, norm);
+            int low = deflationStart(high, norm, sweeps);
             if (low == high) {
                 h[high][high] += shiftSum;
                 re[high] = h[high][high];
@@ -155,11 +162,12 @@ final class RealSchur {
         return norm;
     }
 
-    private int deflationStart(int high, double norm) {
+    /** Small against its neighbours; against the whole matrix where a zero eigenvalue leaves neighbours that are rounding too. */
+    private int deflationStart(int high, double norm, int sweeps) {
         int low = high;
         while (low > 0) {
             double s = Math.abs(h[low - 1][low - 1]) + Math.abs(h[low][low]);
-            if (Math.abs(h[low][low - 1]) <= EPS * (s == 0 ? norm : s)) {
+            if (Math.abs(h[low][low - 1]) <= EPS * (s == 0 || sweeps > PATIENCE ? norm : s)) {
                 h[low][low - 1] = 0;
                 break;
             }
@@ -222,7 +230,7 @@ final class RealSchur {
         double y = h[high - 1][high - 1];
         double w = h[high][high - 1] * h[high - 1][high];
         double sum = shiftSum;
-        if (sweeps % 20 == 10) {
+        if (sweeps > 0 && sweeps % 10 == 0) {
             for (int i = 0; i <= high; i++) {
                 h[i][i] -= x;
             }
@@ -340,16 +348,16 @@ final class RealSchur {
                 size = Math.hypot(size, h[i][j]);
             }
         }
-        return size;
+        return Math.scalb(size, exponent);
     }
 
     /** Returns the eigenvalues and unit right eigenvectors. */
     GeneralEigen eigen() {
-        double norm = Math.max(hessenbergNorm(), SMALLEST_NORM);
+        double norm = Math.max(hessenbergNorm(), 1);
         ZMatrixRMaj vectors = new ZMatrixRMaj(n, n);
         List<Complex> values = new ArrayList<>(n);
         for (int k = 0; k < n; k++) {
-            values.add(new Complex(re[k], im[k]));
+            values.add(new Complex(Math.scalb(re[k], exponent), Math.scalb(im[k], exponent)));
             if (im[k] >= 0) {
                 setColumn(vectors, k, im[k] == 0 ? realVector(k, norm) : complexVector(k, norm));
             }
@@ -401,21 +409,22 @@ final class RealSchur {
         return x;
     }
 
-    /** Solves the 2 x 2 system of the diagonal block in rows i, i+1 by Cramer's rule. */
+    /** Solves the 2 x 2 system of the diagonal block in rows i, i+1, whose off-diagonal entries are not 0. */
     private void solvePair(double[] x, int i, int last, Complex lambda, double tiny) {
-        Complex b0 = rowSum(x, i, i + 2, last).times(-1);
-        Complex b1 = rowSum(x, i + 1, i + 2, last).times(-1);
-        Complex a = new Complex(h[i][i] - lambda.re(), -lambda.im());
-        Complex d = new Complex(h[i + 1][i + 1] - lambda.re(), -lambda.im());
-        double b = h[i][i + 1];
-        double c = h[i + 1][i];
-        Complex determinant = floored(a.times(d).minus(new Complex(b * c, 0)), tiny * tiny);
-        Complex x0 = divide(b0.times(d).minus(b1.times(b)), determinant);
-        Complex x1 = divide(b1.times(a).minus(b0.times(c)), determinant);
-        x[2 * i] = x0.re();
-        x[2 * i + 1] = x0.im();
-        x[2 * i + 2] = x1.re();
-        x[2 * i + 3] = x1.im();
+        Complex[] top = {new Complex(h[i][i] - lambda.re(), -lambda.im()), new Complex(h[i][i + 1], 0), rowSum(x, i, i + 2, last).times(-1)};
+        Complex[] bottom = {new Complex(h[i + 1][i], 0), new Complex(h[i + 1][i + 1] - lambda.re(), -lambda.im()),
+            rowSum(x, i + 1, i + 2, last).times(-1)};
+        boolean swapped = bottom[0].abs() > top[0].abs();
+        Complex[] pivotRow = swapped ? bottom : top;
+        Complex[] other = swapped ? top : bottom;
+        Complex factor = divide(other[0], pivotRow[0]);
+        Complex rest = floored(other[1].minus(factor.times(pivotRow[1])), tiny);
+        Complex second = divide(other[2].minus(factor.times(pivotRow[2])), rest);
+        Complex first = divide(pivotRow[2].minus(pivotRow[1].times(second)), pivotRow[0]);
+        x[2 * i] = first.re();
+        x[2 * i + 1] = first.im();
+        x[2 * i + 2] = second.re();
+        x[2 * i + 3] = second.im();
     }
 
     private Complex rowSum(double[] x, int row, int from, int to) {
