@@ -1,6 +1,8 @@
 package org.modestead.engine.kernel;
 
+import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
+import java.util.function.IntToDoubleFunction;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.linalg.Matrices;
 
@@ -10,8 +12,9 @@ import org.modestead.engine.linalg.Matrices;
  * @param spec family and parameters
  * @param space facts about the space
  * @param profile f, with non-negative Taylor coefficients (Schoenberg 1942)
+ * @param coefficients a_n of {@code f(t) = Σ a_n t^n}
  */
-record DotProductKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile) implements Kernel {
+record DotProductKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile, IntToDoubleFunction coefficients) implements Kernel {
 
     @Override
     public DMatrixRMaj matrix(DMatrixRMaj x, DMatrixRMaj y) {
@@ -29,5 +32,20 @@ record DotProductKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator p
             out[i] = profile.applyAsDouble(out[i]);
         }
         return out;
+    }
+
+    /** Monomials are orthogonal with {@code ‖x^α‖² = α!/(|α|! a_|α|)}, because {@code (x·y)^n = Σ n!/α! x^α y^α}. */
+    @Override
+    public OptionalDouble monomialNormSquared(int... exponents) {
+        int total = 0;
+        double multinomial = 1;
+        for (int exponent : exponents) {
+            for (int k = 1; k <= exponent; k++) {
+                total++;
+                multinomial *= (double) total / k;
+            }
+        }
+        double coefficient = coefficients.applyAsDouble(total);
+        return coefficient > 0 ? OptionalDouble.of(1 / (multinomial * coefficient)) : OptionalDouble.empty();
     }
 }

@@ -34,6 +34,14 @@ final class ExponentialKernels implements KernelFamily {
         double rate = Parameters.read(spec, this, "rate");
         return new DotProductKernel(spec, new SpaceFacts(true, true, OptionalDouble.of(1 / rate),
                 "The space holds all polynomials. With one coordinate only motion x' = a x + b has modes in it; orthogonal ones need b = 0."),
-                t -> Math.exp(rate * t));
+                t -> Math.exp(rate * t), n -> coefficient(rate, n));
+    }
+
+    private static double coefficient(double rate, int n) {
+        double out = 1;
+        for (int k = 1; k <= n; k++) {
+            out *= rate / k;
+        }
+        return out;
     }
 }

@@ -1,5 +1,6 @@
 package org.modestead.engine.kernel;
 
+import java.util.OptionalDouble;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -36,4 +37,14 @@ public interface Kernel {
      * @return length p
      */
     double[] diagonal(DMatrixRMaj x);
+
+    /**
+     * Returns ‖x^α‖² in the space: what a monomial, and with it every polynomial, weighs there.
+     *
+     * @param exponents α, one a state component, each at least 0
+     * @return empty when the monomial is not in the space or its norm is not known
+     */
+    default OptionalDouble monomialNormSquared(int... exponents) {
+        return OptionalDouble.empty();
+    }
 }

@@ -29,6 +29,6 @@ final class LinearKernels implements KernelFamily {
     @Override
     public Kernel create(KernelSpec spec) {
         return new DotProductKernel(spec, new SpaceFacts(false, true, OptionalDouble.of(1),
-                "The space holds linear functions only: it can hold the modes of linear motion about zero and no others."), t -> t);
+                "The space holds linear functions only: it can hold the modes of linear motion about zero and no others."), t -> t, n -> n == 1 ? 1 : 0);
     }
 }

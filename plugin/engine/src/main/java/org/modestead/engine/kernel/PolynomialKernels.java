@@ -41,6 +41,18 @@ final class PolynomialKernels implements KernelFamily {
         OptionalDouble norm = coordinates ? OptionalDouble.of(1 / (degree * Math.pow(offset, degree - 1))) : OptionalDouble.empty();
         return new DotProductKernel(spec, new SpaceFacts(offset > 0, coordinates, norm,
                 "The space holds polynomials up to degree " + (int) degree
-                        + ": motion that leads out of them (a term of higher degree) has no mode in it."), t -> Math.pow(offset + t, degree));
+                        + ": motion that leads out of them (a term of higher degree) has no mode in it."), t -> Math.pow(offset + t, degree),
+                n -> coefficient((int) degree, offset, n));
+    }
+
+    private static double coefficient(int degree, double offset, int n) {
+        if (n > degree) {
+            return 0;
+        }
+        double out = Math.pow(offset, degree - n);
+        for (int k = 1; k <= n; k++) {
+            out *= (double) (degree - n + k) / k;
+        }
+        return out;
     }
 }

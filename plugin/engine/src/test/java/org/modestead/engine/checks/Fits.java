@@ -54,11 +54,15 @@ final class Fits {
 
     /** Runs that all train, as they are. */
     static Snapshots snapshots(double step, int depth, List<Run> runs) {
+        return snapshots(step, depth, runs, List.of());
+    }
+
+    static Snapshots snapshots(double step, int depth, List<Run> runs, List<Run> holdout) {
         List<Channel> channels = new ArrayList<>();
         for (int k = 0; k < runs.get(0).values().numCols; k++) {
             channels.add(new Channel("c" + k, ""));
         }
-        return new Snapshots(channels, List.of(), new TimeAxis(TimeAxis.Kind.NUMBER, "s"), runs, List.of(), List.of(),
+        return new Snapshots(channels, List.of(), new TimeAxis(TimeAxis.Kind.NUMBER, "s"), runs, List.of(), holdout,
                 OptionalDouble.of(step), new DelayEmbedding(depth, 1), Preparation.identity(channels.size()), List.of(), List.of());
     }
 
