@@ -326,6 +326,8 @@ class ForecasterTest {
                     .run(plan(Route.PROJECTION, Origin.RECORDING_END, 1));
             double pooled = units.contains("bar") ? 1 : Math.sqrt((2 * 2 + 50 * 50) / 2.0);
             assertEquals(pooled, result.scores().get(0).rmse(), ROUNDING);
+            // The wave steps by 2 prepared units, whatever the scale: 1 / 2.
+            assertEquals(0.5, result.scores().get(0).mase(), ROUNDING);
             String words = units.contains("bar") ? "prepared units" : "in m;";
             assertTrue(result.summary().stream().anyMatch(sentence -> sentence.contains(words)));
         }
