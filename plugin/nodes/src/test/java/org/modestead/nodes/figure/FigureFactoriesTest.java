@@ -1,0 +1,113 @@
+package org.modestead.nodes.figure;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.time.LocalDate;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.modestead.engine.forecast.ForecastResult;
+import org.modestead.engine.forecast.Route;
+import org.modestead.engine.recording.Channel;
+import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.TimeAxis;
+import org.modestead.engine.wellposed.Grade;
+import org.modestead.nodes.report.ReportFixture;
+
+class FigureFactoriesTest {
+
+    @Test
+    void thePlaneMarksZeroGrowthAndLeavesOutWeakModesFarAwaySayingSo() {
+        Figure plane = EigenvaluePlane.figure(ReportFixture.spectrum(), Optional.empty());
+        assertTrue(plane.layers().stream().anyMatch(layer -> layer instanceof Figure.Rule rule && rule.vertical()
+                && rule.at() == 0));
+        assertEquals(List.of("mode:3", "mode:1", "mode:2"), plane.layers().stream().map(Figure.Layer::selection)
+                .filter(key -> !key.isEmpty()).toList());
+        assertTrue(plane.caption().contains("Left out: 2 modes"), plane.caption());
+        assertEquals("growth rate [1/s]", plane.x().label());
+        assertEquals("frequency [Hz]", plane.y().label());
+    }
+
+    @Test
+    void theVerdictIsToldByTheShapeOfTheMark() {
+        Figure plane = EigenvaluePlane.figure(ReportFixture.spectrum(), Optional.of(ReportFixture.verdict(Grade.STANDS)));
+        List<Figure.Points> points = plane.layers().stream().filter(Figure.Points.class::isInstance)
+                .map(Figure.Points.class::cast).toList();
+        assertEquals(points.size(), points.stream().map(Figure.Points::mark).distinct().count());
+        assertEquals(Grade.values().length, Arrays.stream(Grade.values()).map(VerdictMarks::mark).distinct().count());
+    }
+
+    @Test
+    void ladderCurvesRunFromLowToHighRankAndHoldNothingALogarithmCannotShow() {
+        List<Figure> figures = LadderFigures.figures(ReportFixture.spectrum(), ReportFixture.verdict(Grade.STANDS));
+        assertEquals(List.of("ladder-frequency", "ladder-growth", "ladder-weight", "ladder-norm", "ladder-residual"),
+                figures.stream().map(Figure::id).toList());
+        for (Figure figure : figures) {
+            for (Figure.Layer layer : figure.layers()) {
+                if (layer instanceof Figure.Line line) {
+                    assertArrayEquals(new double[] {4, 6, 8}, line.x());
+                    assertTrue(!figure.y().logarithmic() || Arrays.stream(line.y()).noneMatch(v -> v <= 0));
+                }
+            }
+        }
+    }
+
+    @Test
+    void channelsOfOneUnitAreDrawnInItAndOthersAsDistanceFromTheMean() {
+        List<Channel> levels = List.of(new Channel("north", "m"), new Channel("south", "m"));
+        Figure one = RecordingFigure.figure(ReportFixture.snapshots(levels, ReportFixture.SECONDS, 0, 0.1), 2);
+        assertEquals("value [m]", one.y().label());
+        Figure mixed = RecordingFigure.figure(ReportFixture.snapshots(), 2);
+        assertEquals("distance from the mean [standard deviations]", mixed.y().label());
+        assertTrue(mixed.layers().stream().anyMatch(layer -> layer instanceof Figure.Rule rule
+                && rule.name().equals("holdout starts")));
+    }
+
+    @Test
+    void timesCountedInYearsAreDrawnAsDates() {
+        TimeAxis years = new TimeAxis(TimeAxis.Kind.DATE, "year");
+        LocalDate first = LocalDate.of(1990, 1, 1);
+        double start = TimeAxis.ofDate(first) / 365.25;
+        Snapshots snapshots = ReportFixture.snapshots(List.of(new Channel("level", "m")), years, start, 1 / 365.25);
+        Figure figure = RecordingFigure.figure(snapshots, 1);
+        assertEquals("date", figure.x().time());
+        Figure.Line line = (Figure.Line) figure.layers().get(0);
+        // Days since 1970 of about 7000, divided and multiplied by 365.25: a few units in the last place.
+        assertEquals(first.toEpochDay(), line.x()[0], 1e-9);
+    }
+
+    @Test
+    void theLargestMagnitudeOfAShapeIsOne() {
+        List<Figure> shapes = ShapeFigures.figures(ReportFixture.spectrum(), Preparation.identity(2), 2);
+        assertEquals(4, shapes.size());
+        Figure.Bars bars = (Figure.Bars) shapes.get(0).layers().get(0);
+        assertArrayEquals(new double[] {0.5, 1}, bars.heights());
+        assertEquals(List.of("pressure", "flow"), shapes.get(0).x().categories());
+    }
+
+    @Test
+    void aForecastShowsItsBandAndTwiceItsLengthOfHistory() {
+        Snapshots snapshots = ReportFixture.snapshots();
+        List<Figure> figures = ForecastFigures.figures(snapshots, ReportFixture.forecast(snapshots), 1);
+        assertEquals(List.of("forecast-1", "reconstruction-1"), figures.stream().map(Figure::id).toList());
+        assertTrue(figures.get(0).layers().stream().anyMatch(Figure.Band.class::isInstance));
+        Figure.Line history = (Figure.Line) figures.get(0).layers().get(1);
+        double forecastLength = 99 * 0.05;
+        // The first sample inside the window lies at most one step of 0.05 after its edge.
+        assertEquals(25 - 2 * forecastLength, history.x()[0], 0.05);
+    }
+
+    @Test
+    void withoutScoresThePictureIsEmptyAndSaysWhy() {
+        Figure empty = ScoreFigures.figure(new ForecastResult(List.of(), List.of(), List.of(), Route.MODAL, List.of(),
+                List.of()));
+        assertTrue(empty.layers().isEmpty());
+        assertTrue(empty.caption().contains("Nothing was held out"));
+        assertFalse(ScoreFigures.figure(ReportFixture.forecast(ReportFixture.snapshots())).layers().isEmpty());
+    }
+}

@@ -1,0 +1,75 @@
+package org.modestead.nodes.words;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.Arrays;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+import java.util.function.Function;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.wellposed.Grade;
+
+class WordsTest {
+
+    @ParameterizedTest
+    @EnumSource(Grade.class)
+    void everyVerdictIsToldInWholeSentences(Grade grade) {
+        for (String sentence : List.of(VerdictWords.meaning(grade), VerdictWords.overall(grade),
+                VerdictWords.advice(grade))) {
+            assertTrue(Character.isUpperCase(sentence.charAt(0)) && sentence.endsWith("."), sentence);
+        }
+        assertTrue(VerdictWords.advice(grade).contains(grade.advice()));
+        assertTrue(VerdictWords.verb(grade).contains(grade.word()));
+    }
+
+    @Test
+    void noTwoVerdictsAreToldAlike() {
+        List<Function<Grade, String>> texts = List.of(VerdictWords::meaning, VerdictWords::overall, VerdictWords::headline,
+                VerdictWords::verb);
+        for (Function<Grade, String> text : texts) {
+            Set<String> told = new HashSet<>(Arrays.stream(Grade.values()).map(text).toList());
+            assertEquals(Grade.values().length, told.size());
+        }
+    }
+
+    @Test
+    void frequenciesAreHertzOnlyForSeconds() {
+        assertEquals("Hz", new TimeUnit("s").frequency());
+        assertEquals("cycles/d", new TimeUnit("d").frequency());
+        assertEquals("cycles/time unit", new TimeUnit("").frequency());
+        assertEquals("1/time unit", new TimeUnit("").rate());
+        assertEquals("12.3 time units", new TimeUnit("").span(12.34));
+    }
+
+    @Test
+    void aModeIsToldByWhatAnEngineerAsksFor() {
+        TimeUnit seconds = new TimeUnit("s");
+        // λ = -ζω ± iω sqrt(1 - ζ²) with ω = 2π 1.52 rad/s and ζ = 0.018; closed form.
+        double omega = 2 * Math.PI * 1.52 / Math.sqrt(1 - 0.018 * 0.018);
+        assertEquals("1.52 Hz, damping ratio 1.8 %", ModeWords.headline(mode(-0.018 * omega, 2 * Math.PI * 1.52), seconds));
+        assertEquals("no oscillation, halves every 2.00 s", ModeWords.headline(mode(-Math.log(2) / 2, 0), seconds));
+        assertEquals("no oscillation, doubles every 4.00 s", ModeWords.headline(mode(Math.log(2) / 4, 0), seconds));
+        assertEquals("no oscillation, neither grows nor decays", ModeWords.headline(mode(0, 0), seconds));
+        assertEquals("gone within one step", ModeWords.headline(mode(Double.NEGATIVE_INFINITY, 0), seconds));
+        assertTrue(ModeWords.headline(mode(Math.log(2), 6), seconds).endsWith("growing: doubles every 1.00 s"));
+    }
+
+    @Test
+    void sentencesBeginLargeAndEndWithOneStop() {
+        assertEquals("The weight doubled.", Sentence.of("the weight doubled"));
+        assertEquals("The weight doubled.", Sentence.of(" The weight doubled. "));
+        assertEquals("", Sentence.of(" "));
+        assertEquals("1 run", Sentence.count(1, "run"));
+        assertEquals("0 runs", Sentence.count(0, "run"));
+    }
+
+    private static Mode mode(double growth, double turn) {
+        return new Mode(1, List.of(0), new Complex(growth, turn), 1, 1, 0, List.of(), false, 0);
+    }
+}
