@@ -12,8 +12,8 @@ import org.modestead.engine.linalg.Complex;
  *   dynamic amplification   1/(2ζ√(1-ζ²))                 peak displacement over static displacement
  * </pre>
  *
- * <p>Formulas of one degree of freedom with viscous damping (Meirovitch, <i>Fundamentals of Vibrations</i>, chapters 2 and 3).
- * {@code ζ ≈ (f₂-f₁)/(2 f_n)} is an approximation, 0.25 % high at ζ = 5 %.
+ * <p>Formulas of one degree of freedom with viscous damping (Meirovitch, <i>Fundamentals of Vibrations</i>, chapters 2
+ * and 3). {@code ζ ≈ (f₂-f₁)/(2 f_n)} is an approximation, 0.25 % high at ζ = 5 %.
  *
  * @param ratio ζ in (-1, 1); negative grows
  */
@@ -22,7 +22,8 @@ public record Damping(double ratio) {
     /** Checks the range. */
     public Damping {
         if (!(ratio > -1 && ratio < 1)) {
-            throw new IllegalArgumentException("a damping ratio of " + ratio + " does not oscillate: it must lie in (-1, 1)");
+            throw new IllegalArgumentException("a damping ratio of " + ratio
+                    + " does not oscillate: it must lie in (-1, 1)");
         }
     }
 

@@ -23,7 +23,8 @@ public final class ModalAssurance {
      */
     public static double of(List<Complex> a, List<Complex> b) {
         if (a.size() != b.size()) {
-            throw new IllegalArgumentException("shapes of " + a.size() + " and " + b.size() + " components cannot be compared");
+            throw new IllegalArgumentException("shapes of " + a.size() + " and " + b.size()
+                    + " components cannot be compared");
         }
         double sizes = squared(a) * squared(b);
         if (!(sizes > 0)) {

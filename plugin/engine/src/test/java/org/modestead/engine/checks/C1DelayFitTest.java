@@ -73,7 +73,8 @@ class C1DelayFitTest {
         double[] expected = {0.951229424501, 0.860707976425, 0.778800783071};
         List<Mode> modes = slowestFirst(fit(8));
         for (int j = 0; j < 3; j++) {
-            assertEquals(expected[j], modes.get(j).rate().times(STEP).exp().re(), RATE_TOLERANCE * RATES[j] * STEP, "multiplier " + j);
+            assertEquals(expected[j], modes.get(j).rate().times(STEP).exp().re(), RATE_TOLERANCE * RATES[j] * STEP,
+                    "multiplier " + j);
         }
     }
 
@@ -92,7 +93,8 @@ class C1DelayFitTest {
     @Test
     void theHardThresholdDecidesTheSameRank() {
         for (int depth = 10; depth <= 14; depth++) {
-            FittedOperator operator = OperatorFitter.fit(lanczos(depth), new LinearEstimator(), new RankRule.HardThreshold(), 0, Progress.NONE);
+            FittedOperator operator = OperatorFitter.fit(lanczos(depth), new LinearEstimator(),
+                    new RankRule.HardThreshold(), 0, Progress.NONE);
             assertEquals(3, operator.rank(), "depth " + depth + ": " + operator.rankChoice());
         }
     }

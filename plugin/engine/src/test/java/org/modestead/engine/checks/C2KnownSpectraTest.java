@@ -4,8 +4,10 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.linalg.Complex;
@@ -21,7 +23,6 @@ import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
-import org.modestead.engine.wellposed.ExactResidual;
 
 /** CHECKS C2.1-C2.4: motions whose spectra are known. */
 class C2KnownSpectraTest {
@@ -66,7 +67,8 @@ class C2KnownSpectraTest {
         // closed form: (w1·x)^i (w2·x)^j has the rate i l1 + j l2; degree 2, rates -1 and -0.3, exact samples
         DMatrixRMaj step = MatrixExponential.of(matrix(new double[] {-0.1, 0.05}, new double[] {0, -0.03}));
         double[][] x = grid();
-        Spectrum spectrum = Fits.spectrum(Fits.pairs(0.1, x, moved(x, step)), new DictionaryEstimator(Dictionary.monomials(2)), 6);
+        Spectrum spectrum = Fits.spectrum(Fits.pairs(0.1, x, moved(x, step)),
+                new DictionaryEstimator(Dictionary.monomials(2)), 6);
         for (double rate : new double[] {0, -1, -0.3, -2, -1.3, -0.6}) {
             assertRate(spectrum, rate, 0, 1e-10);
         }
@@ -86,7 +88,7 @@ class C2KnownSpectraTest {
         DMatrixRMaj y = Matrices.productTranspose(new DMatrixRMaj(x), step);
         double[][] out = new double[x.length][];
         for (int i = 0; i < x.length; i++) {
-            out[i] = java.util.Arrays.copyOfRange(y.data, 2 * i, 2 * i + 2);
+            out[i] = Arrays.copyOfRange(y.data, 2 * i, 2 * i + 2);
         }
         return out;
     }
@@ -108,7 +110,8 @@ class C2KnownSpectraTest {
 
     @Test
     void largestNormOfTheTransient() {
-        // derived; ten printed digits of the norm, eight of the time; the maximum is flat, so the time is found from the slope
+        // derived; ten printed digits of the norm, eight of the time; the maximum is flat, so the
+        // time is found from the slope
         assertEquals(25.00625097, norm(transientAt(0.69284713)), 6e-9);
         double low = 0.6;
         double high = 0.8;
@@ -123,7 +126,9 @@ class C2KnownSpectraTest {
         assertEquals(25.00625097, norm(transientAt(low)), 6e-9);
     }
 
-    // ---- C2.3: Brunton, Brunton, Proctor and Kutz, PLoS ONE 11(2):e0150171, 2016 (citation from memory); values closed form ----
+    // ---- C2.3 ----
+
+    // Brunton, Brunton, Proctor and Kutz, PLoS ONE 11(2):e0150171, 2016 (citation from memory); values are closed forms
 
     private static final double MU = -0.05;
     private static final double LAMBDA = -1;
@@ -149,7 +154,8 @@ class C2KnownSpectraTest {
     @Test
     void slowManifoldGeneratorCarriesTheObservables() {
         // closed form; 1e-12 relative as in CHECKS C2.3
-        DMatrixRMaj generator = matrix(new double[] {MU, 0, 0}, new double[] {0, LAMBDA, -LAMBDA}, new double[] {0, 0, 2 * MU});
+        DMatrixRMaj generator = matrix(new double[] {MU, 0, 0}, new double[] {0, LAMBDA, -LAMBDA},
+                new double[] {0, 0, 2 * MU});
         DMatrixRMaj carried = Matrices.product(MatrixExponential.of(Matrices.scaled(generator, 3)), Fits.column(2, -1, 4));
         assertEquals(1.721415952850116, carried.data[0], 2e-12);
         assertEquals(3.021462497471487, carried.data[1], 3e-12);
@@ -161,12 +167,13 @@ class C2KnownSpectraTest {
         FittedOperator operator = Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4);
         ModalExpansion expansion = ModalExpansion.of(operator.chosen());
         for (double expected : new double[] {1, 0.995012479192682, 0.904837418035960, 0.990049833749168}) {
-            Complex found = expansion.eigenvalues().get(nearest(expansion, expected));
-            assertEquals(expected, found.re(), 1e-10);
-            assertEquals(0, found.im(), 1e-10);
+            Complex found = expansion.eigenvalues().get(Fits.nearest(expansion.eigenvalues(), expected));
+            assertEquals(expected, found.re(), 1e-12);
+            assertEquals(0, found.im(), 1e-12);
         }
         DMatrixRMaj start = operator.chosen().evaluate(matrix(new double[] {2, -1}));
-        DMatrixRMaj ahead = Matrices.product(Matrices.product(start, operator.propagator(3)), operator.chosen().observable());
+        DMatrixRMaj carried = Matrices.product(start, operator.propagator(3));
+        DMatrixRMaj ahead = Matrices.product(carried, operator.chosen().observable());
         assertEquals(1.721415952850116, ahead.data[0], 1e-10);
         assertEquals(3.021462497471487, ahead.data[1], 1e-10);
     }
@@ -176,7 +183,7 @@ class C2KnownSpectraTest {
         // closed form: x2 - b x1^2, b = 1.111111111111; CHECKS C2.3: 1e-10
         ModalExpansion expansion = ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4).chosen());
         var functions = ComplexMatrices.product(expansion.compression().map(), expansion.vectors());
-        int fast = nearest(expansion, 0.904837418035960);
+        int fast = Fits.nearest(expansion.eigenvalues(), 0.904837418035960);
         assertEquals(-1.111111111111111, functions.getReal(3, fast) / functions.getReal(2, fast), 1e-10);
         assertEquals(0, functions.getReal(0, fast) / functions.getReal(2, fast), 1e-10);
         assertEquals(0, functions.getReal(1, fast) / functions.getReal(2, fast), 1e-10);
@@ -184,31 +191,20 @@ class C2KnownSpectraTest {
 
     @Test
     void residualsVanishOnlyWhereTheObservablesAreClosed() {
-        // CHECKS C2.3: zero to rounding, √ε after the root of a difference of squares; without x1^2 the residual is of order one percent or more
+        // CHECKS C2.3: zero to rounding, √ε after the root of a difference of squares; without x1^2 the residual is of
+        // order one percent or more
         ModalExpansion closed = ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4).chosen());
         for (int j = 0; j < 4; j++) {
-            assertEquals(0, residual(closed, j), 1e-7, "closed, " + closed.eigenvalues().get(j));
+            assertEquals(0, Fits.residual(closed, j), 1e-7, "closed, " + closed.eigenvalues().get(j));
         }
         ListedFunctions open = ListedFunctions.of(x -> 1, x -> x[0], x -> x[1]);
         ModalExpansion leaking = ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(open), 3).chosen());
-        assertTrue(residual(leaking, nearest(leaking, 0.904837418035960)) > 0.01);
+        assertTrue(Fits.residual(leaking, Fits.nearest(leaking.eigenvalues(), 0.904837418035960)) > 0.01);
     }
 
-    private static double residual(ModalExpansion expansion, int j) {
-        return ExactResidual.of(expansion.compression().action(), expansion.compression().second(), expansion.vectors(), j,
-                expansion.eigenvalues().get(j));
-    }
+    // ---- C2.4 ----
 
-    private static int nearest(ModalExpansion expansion, double value) {
-        int best = 0;
-        for (int j = 0; j < expansion.rank(); j++) {
-            Complex target = new Complex(value, 0);
-            best = expansion.eigenvalues().get(j).minus(target).abs() < expansion.eigenvalues().get(best).minus(target).abs() ? j : best;
-        }
-        return best;
-    }
-
-    // ---- C2.4: Stuart-Landau; lattice after Bagheri, J. Fluid Mech. 726:596, 2013 (from memory); identities derived ----
+    // Stuart-Landau; lattice after Bagheri, J. Fluid Mech. 726:596, 2013 (from memory); identities derived
 
     private static final double GROWTH = 0.25;
     private static final double GAMMA = 2;
@@ -238,8 +234,10 @@ class C2KnownSpectraTest {
     }
 
     /** The exact eigenfunctions with -2μj + inω0, j = 0, 1, n = -2..2, as real functions. */
-    private static final ListedFunctions LATTICE = ListedFunctions.of(x -> 1, x -> radial(x), x -> Math.cos(phase(x)), x -> Math.sin(phase(x)),
-            x -> Math.cos(2 * phase(x)), x -> Math.sin(2 * phase(x)), x -> radial(x) * Math.cos(phase(x)), x -> radial(x) * Math.sin(phase(x)),
+    private static final ListedFunctions LATTICE = ListedFunctions.of(
+            x -> 1, x -> radial(x), x -> Math.cos(phase(x)), x -> Math.sin(phase(x)),
+            x -> Math.cos(2 * phase(x)), x -> Math.sin(2 * phase(x)),
+            x -> radial(x) * Math.cos(phase(x)), x -> radial(x) * Math.sin(phase(x)),
             x -> radial(x) * Math.cos(2 * phase(x)), x -> radial(x) * Math.sin(2 * phase(x)));
 
     @Test
@@ -278,7 +276,7 @@ class C2KnownSpectraTest {
     private static DMatrixRMaj leastSquares(DMatrixRMaj a, DMatrixRMaj b) {
         LinearAlgebra.Svd svd = LinearAlgebra.installed().svd(a);
         DMatrixRMaj coefficients = Matrices.transposeProduct(svd.u(), b);
-        org.ejml.dense.row.CommonOps_DDRM.divideRows(svd.values(), coefficients);
+        CommonOps_DDRM.divideRows(svd.values(), coefficients);
         return Matrices.product(svd.v(), coefficients);
     }
 

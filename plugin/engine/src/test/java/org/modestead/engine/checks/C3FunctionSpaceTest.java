@@ -54,7 +54,8 @@ class C3FunctionSpaceTest {
             factorial *= Math.max(1, n);
             assertEquals(factorial, Fits.exponential().monomialNormSquared(n).orElseThrow(), 1e-14 * factorial);
             double scaled = factorial / Math.pow(2.5, n);
-            assertEquals(scaled, Fits.kernel("exponential", "rate", 2.5).monomialNormSquared(n).orElseThrow(), 1e-14 * scaled);
+            assertEquals(scaled, Fits.kernel("exponential", "rate", 2.5).monomialNormSquared(n).orElseThrow(),
+                    1e-14 * scaled);
         }
         // closed form α! = 2! 0! 3!
         assertEquals(12, Fits.exponential().monomialNormSquared(2, 0, 3).orElseThrow(), 1e-13);
@@ -68,10 +69,12 @@ class C3FunctionSpaceTest {
         double sum = 0;
         for (int i = 0; i <= 30; i++) {
             for (int j = 0; j <= 30; j++) {
-                sum += Math.pow(x[0] * y[0], i) * Math.pow(x[1] * y[1], j) / Fits.exponential().monomialNormSquared(i, j).orElseThrow();
+                sum += Math.pow(x[0] * y[0], i) * Math.pow(x[1] * y[1], j) / Fits.exponential().monomialNormSquared(i, j)
+                        .orElseThrow();
             }
         }
-        double kernel = Fits.exponential().matrix(new DMatrixRMaj(new double[][] {x}), new DMatrixRMaj(new double[][] {y})).data[0];
+        double kernel = Fits.exponential().matrix(new DMatrixRMaj(new double[][] {x}), new DMatrixRMaj(new double[][] {y}))
+                .data[0];
         assertEquals(kernel, sum, 1e-14);
     }
 
@@ -98,8 +101,10 @@ class C3FunctionSpaceTest {
     /** Inner product of two functions in the space through their coefficients on the landmark functions. */
     private static double inner(LandmarkFeatures features, DoubleUnaryOperator f, DoubleUnaryOperator g) {
         double[] z = features.landmarks().data;
-        DMatrixRMaj left = Matrices.transposeProduct(features.inverseTransposed(), Fits.column(Arrays.stream(z).map(f).toArray()));
-        DMatrixRMaj right = Matrices.transposeProduct(features.inverseTransposed(), Fits.column(Arrays.stream(z).map(g).toArray()));
+        DMatrixRMaj left = Matrices.transposeProduct(features.inverseTransposed(),
+                Fits.column(Arrays.stream(z).map(f).toArray()));
+        DMatrixRMaj right = Matrices.transposeProduct(features.inverseTransposed(),
+                Fits.column(Arrays.stream(z).map(g).toArray()));
         return Matrices.transposeProduct(left, right).data[0];
     }
 
@@ -121,7 +126,8 @@ class C3FunctionSpaceTest {
     private static double trigonometric(double sign) {
         DMatrixRMaj exponents = new DMatrixRMaj(new double[][] {{0, 1}, {0, -1}});
         DMatrixRMaj weights = Fits.column(0.5, sign * 0.5);
-        return Matrices.transposeProduct(weights, Matrices.product(Fits.exponential().matrix(exponents, exponents), weights)).data[0];
+        return Matrices.transposeProduct(weights, Matrices.product(Fits.exponential().matrix(exponents, exponents),
+                weights)).data[0];
     }
 
     @Test
@@ -158,7 +164,8 @@ class C3FunctionSpaceTest {
 
     @Test
     void aGaussianBumpUpwardsIsAMixtureOfSections() {
-        // e^(bx²) = ∫ K(x, √(2b) t) e^(-t²/2)/√(2π) dt, norm² (1-4b²)^-1/2 = 1.25 at b = .3; the trapezoidal rule is exact to rounding
+        // e^(bx²) = ∫ K(x, √(2b) t) e^(-t²/2)/√(2π) dt, norm² (1-4b²)^-1/2 = 1.25 at b = .3; the trapezoidal rule is
+        // exact to rounding
         int count = 161;
         double[] times = new double[count];
         double[] weights = new double[count];
@@ -177,7 +184,8 @@ class C3FunctionSpaceTest {
 
     @Test
     void aSteepBumpIsNotInTheSpace() {
-        // closed form: at b = 1/2 the squared norms of the partial sums grow like 2√(terms/π), at b = .3 they converge to 1.25
+        // closed form: at b = 1/2 the squared norms of the partial sums grow like 2√(terms/π), at b = .3 they converge to
+        // 1.25
         assertEquals(1.25, bump(0.3, 80), 1e-14);
         assertEquals(2, bump(0.5, 80) / bump(0.5, 20), 0.02);
     }
@@ -212,7 +220,8 @@ class C3FunctionSpaceTest {
         for (double mu : new double[] {1, 2}) {
             MonomialSpace space = new MonomialSpace(Fits.kernel("exponential", "rate", mu));
             DMatrixRMaj multiplication = space.matrix(MonomialSpace.multiplication(), SIZE);
-            assertLeading(Matrices.scaled(space.matrix(MonomialSpace.liouville(1, 1), SIZE), 1 / mu), adjoint(multiplication));
+            assertLeading(Matrices.scaled(space.matrix(MonomialSpace.liouville(1, 1), SIZE), 1 / mu),
+                    adjoint(multiplication));
         }
         DMatrixRMaj linear = FOCK.matrix(MonomialSpace.liouville(1, 0, 1), SIZE);
         assertEquals(0, SymmetryDefect.of(linear));
@@ -227,7 +236,8 @@ class C3FunctionSpaceTest {
     @ParameterizedTest
     @ValueSource(strings = {"constant", "linear", "quadratic", "logistic"})
     void theAdjointOfTheGeneratorOnAnOccupationFunctionIsADifferenceOfSections(String motion) {
-        // A_f* K_y = f(y) ∂_y K(., y), integrated along x' = f(x): ∫ f(γ) x K(x, γ) dt = K(x, end) - K(x, start); quadrature below 1e-11
+        // A_f* K_y = f(y) ∂_y K(., y), integrated along x' = f(x): ∫ f(γ) x K(x, γ) dt = K(x, end) - K(x, start);
+        // quadrature below 1e-11
         Run run = Fits.run(motion, 101, 0.005, time -> new double[] {flow(motion, 0.4, time)});
         var compression = new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1)
                 .compress(Fits.snapshots(0.005, 1, List.of(run)), Progress.NONE);
@@ -237,7 +247,8 @@ class C3FunctionSpaceTest {
             weights[i] *= field(motion, segment.states().get(i, 0));
         }
         var moved = new OccupationFunctions(Fits.exponential(),
-                List.of(new OccupationFunctions.Segment(segment.times(), segment.states(), weights, segment.start(), segment.end())));
+                List.of(new OccupationFunctions.Segment(segment.times(), segment.states(), weights, segment.start(),
+                        segment.end())));
         DMatrixRMaj points = Fits.column(-1.5, -0.3, 0.2, 1.1, 2);
         DMatrixRMaj ends = Fits.exponential().matrix(points, Fits.column(segment.end()[0], segment.start()[0]));
         for (int i = 0; i < points.numRows; i++) {
@@ -272,9 +283,11 @@ class C3FunctionSpaceTest {
 
     /** The generator on ten runs that start in [-0.9, 0.9] and last 0.4. */
     private static Compression generator(String motion) {
-        List<Run> runs = IntStream.range(0, 10).mapToObj(i -> Fits.run("run " + i, 41, 0.01, time -> new double[] {flow(motion, -0.9 + 0.2 * i, time)}))
+        List<Run> runs = IntStream.range(0, 10).mapToObj(i -> Fits.run("run " + i, 41, 0.01,
+                time -> new double[] {flow(motion, -0.9 + 0.2 * i, time)}))
                 .toList();
-        return new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1).compress(Fits.snapshots(0.01, 1, runs), Progress.NONE);
+        return new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1)
+                .compress(Fits.snapshots(0.01, 1, runs), Progress.NONE);
     }
 
     @Test
@@ -292,22 +305,26 @@ class C3FunctionSpaceTest {
     private static Compression planar(Kernel kernel, double[][] field, double duration) {
         List<Run> runs = IntStream.range(0, 12).mapToObj(i -> Fits.run("run " + i, 41, duration / 40, time -> {
             double[] start = {Math.cos(2.4 * i) * (0.3 + 0.06 * i), Math.sin(2.4 * i) * (0.3 + 0.06 * i)};
-            return Matrices.product(MatrixExponential.of(Matrices.scaled(new DMatrixRMaj(field), time)), Fits.column(start)).data;
+            return Matrices.product(MatrixExponential.of(Matrices.scaled(new DMatrixRMaj(field), time)), Fits.column(start))
+                    .data;
         })).toList();
-        return new OccupationEstimator(kernel, SegmentPlan.WHOLE_RUNS, 1).compress(Fits.snapshots(duration / 40, 1, runs), Progress.NONE);
+        return new OccupationEstimator(kernel, SegmentPlan.WHOLE_RUNS, 1)
+                .compress(Fits.snapshots(duration / 40, 1, runs), Progress.NONE);
     }
 
     @Test
     void rotationHasASkewGenerator() {
         // f = Sx with S skew: A* = -A, a defect of exactly 2; quadrature leaves 1e-7 of it
-        assertEquals(2, SymmetryDefect.of(planar(Fits.exponential(), new double[][] {{0, 2}, {-2, 0}}, 0.6).whiten(6).action()), 1e-7);
+        assertEquals(2, SymmetryDefect.of(planar(Fits.exponential(), new double[][] {{0, 2}, {-2, 0}}, 0.6).whiten(6)
+                .action()), 1e-7);
     }
 
     @Test
     void theGeneratorOfLinearMotionIsNormalExactlyWhenTheMatrixIs() {
         // A_{Ax}* = A_{A'x}; on polynomials to degree 2, which linear motion does not leave, with the norms of (1 + x·y)²
         Kernel kernel = Fits.kernel("polynomial", "degree", 2, "offset", 1);
-        assertEquals(0, NormalityDefect.of(planar(kernel, new double[][] {{-0.1, 2}, {-2, -0.1}}, 0.6).whiten(6).action()), 1e-7);
+        assertEquals(0, NormalityDefect.of(planar(kernel, new double[][] {{-0.1, 2}, {-2, -0.1}}, 0.6).whiten(6).action()),
+                1e-7);
         assertTrue(NormalityDefect.of(planar(kernel, new double[][] {{-1, 1}, {0, -2}}, 0.6).whiten(6).action()) > 0.05);
     }
 
@@ -321,7 +338,8 @@ class C3FunctionSpaceTest {
 
     private static DMatrixRMaj linearStep(double[][] matrix) {
         double[][] x = {{0.2, 0.5}, {-0.7, 0.1}, {0.4, -0.9}, {1, 0.3}};
-        double[][] y = Arrays.stream(x).map(p -> Matrices.product(new DMatrixRMaj(matrix), Fits.column(p)).data).toArray(double[][]::new);
+        double[][] y = Arrays.stream(x).map(p -> Matrices.product(new DMatrixRMaj(matrix), Fits.column(p)).data)
+                .toArray(double[][]::new);
         return new KernelStepEstimator(Fits.exponential(), 4).compress(Fits.pairs(1, x, y), Progress.NONE).action();
     }
 
@@ -350,23 +368,19 @@ class C3FunctionSpaceTest {
         DMatrixRMaj operator = FOCK.matrix(MonomialSpace.liouville(1, b, a), 8);
         GeneralEigen eigen = LinearAlgebra.installed().eigen(operator);
         for (int n = 0; n < 8; n++) {
-            int column = nearest(eigen, a * n);
+            int column = Fits.nearest(eigen.values(), a * n);
             assertEquals(a * n, eigen.values().get(column).re(), 1e-12);
             double[] power = MonomialSpace.composition(1, b / a).image(n);
             double leading = eigen.vectors().getReal(n, column) / FOCK.norm(n);
             for (int k = 0; k <= n; k++) {
-                assertEquals(power[k], eigen.vectors().getReal(k, column) / FOCK.norm(k) / leading, 1e-10 * Math.max(1, power[k]));
+                assertEquals(power[k], eigen.vectors().getReal(k, column) / FOCK.norm(k) / leading,
+                        1e-10 * Math.max(1, power[k]));
             }
         }
         var gram = ComplexMatrices.conjugateTransposeProduct(eigen.vectors(), eigen.vectors());
-        double overlap = ComplexMatrices.entry(gram, nearest(eigen, 0), nearest(eigen, a)).abs();
+        double overlap = ComplexMatrices.entry(gram, Fits.nearest(eigen.values(), 0), Fits.nearest(eigen.values(), a)).abs();
         // closed form <1, x + b/a> over the norms
         assertEquals(Math.abs(b / a) / Math.hypot(1, b / a), overlap, 1e-14);
-    }
-
-    private static int nearest(GeneralEigen eigen, double value) {
-        return IntStream.range(0, eigen.values().size()).boxed()
-                .min(java.util.Comparator.comparingDouble(j -> Math.abs(eigen.values().get(j).re() - value))).orElseThrow();
     }
 
     @ParameterizedTest
@@ -390,24 +404,30 @@ class C3FunctionSpaceTest {
         // 0, 1, 2 for x' = x + 0.5; the higher rates of a finite span lie above, the low ones have settled to 1e-3
         List<Complex> rates = ModalExpansion.of(generator("affine").whiten(7)).rates();
         for (double expected : new double[] {0, 1, 2}) {
-            assertEquals(0, rates.stream().mapToDouble(rate -> Math.hypot(rate.re() - expected, rate.im())).min().orElseThrow(), 1e-2);
+            assertEquals(0, rates.stream().mapToDouble(rate -> Math.hypot(rate.re() - expected, rate.im())).min()
+                    .orElseThrow(), 1e-2);
         }
     }
 
     private static Grade overall(String motion) {
-        List<Run> runs = IntStream.range(0, 40).mapToObj(i -> Fits.run("run " + i, 21, 0.02, time -> new double[] {flow(motion, -1 + 2 * i / 39.0, time)}))
+        List<Run> runs = IntStream.range(0, 40).mapToObj(i -> Fits.run("run " + i, 21, 0.02,
+                time -> new double[] {flow(motion, -1 + 2 * i / 39.0, time)}))
                 .toList();
-        Snapshots snapshots = Fits.snapshots(0.02, 1, IntStream.range(0, 40).filter(i -> i % 5 != 2).mapToObj(runs::get).toList(),
+        Snapshots snapshots = Fits.snapshots(0.02, 1, IntStream.range(0, 40).filter(i -> i % 5 != 2).mapToObj(runs::get)
+                .toList(),
                 IntStream.range(0, 40).filter(i -> i % 5 == 2).mapToObj(runs::get).toList());
-        FittedOperator operator = Fits.fit(snapshots, new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1), 6);
-        return WellPosedness.judge(snapshots, operator, SpectrumExtractor.extract(operator, Progress.NONE), JudgeSettings.DEFAULT.withLadder(4, 10),
+        FittedOperator operator = Fits.fit(snapshots,
+                new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1), 6);
+        return WellPosedness.judge(snapshots, operator, SpectrumExtractor.extract(operator, Progress.NONE),
+                JudgeSettings.DEFAULT.withLadder(4, 10),
                 Progress.NONE).overall().grade();
     }
 
     @ParameterizedTest
     @CsvSource({"linear,STANDS", "affine,SETTLES", "constant,DRIFTS", "quadratic,ABSENT", "logistic,ABSENT", "cubic,ABSENT"})
     void theVerdictSaysWhichMotionHasModesInTheSpace(String motion, Grade expected) {
-        // only affine motion has modes, orthogonal ones only linear motion; under constant motion every exponent is one; of higher degree only constants
+        // only affine motion has modes, orthogonal ones only linear motion; under constant motion every exponent is one;
+        // of higher degree only constants
         assertEquals(expected, overall(motion));
     }
 }

@@ -22,8 +22,8 @@ import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.ModalExpansion;
 
 /**
- * CHECKS C3.5 and C3.6: the signal g(x) = x on the exponentials e^(λx), which are the sections K(., λ) of exp(xy). All values derived;
- * computed with 80 digits.
+ * CHECKS C3.5 and C3.6: the signal g(x) = x on the exponentials e^(λx), which are the sections K(., λ) of exp(xy). All
+ * values derived; computed with 80 digits.
  */
 class C3ProjectionTest {
 
@@ -49,7 +49,8 @@ class C3ProjectionTest {
     }
 
     private static OrthonormalCompression projection(double[] exponents) {
-        return new KernelStepEstimator(Fits.exponential(), exponents.length).compress(shifted(exponents), Progress.NONE).whiten(exponents.length);
+        return new KernelStepEstimator(Fits.exponential(), exponents.length).compress(shifted(exponents), Progress.NONE)
+                .whiten(exponents.length);
     }
 
     /** ‖x‖² - ‖Px‖² as the captured share takes it: the coefficients of x on the orthonormal functions. */
@@ -61,7 +62,8 @@ class C3ProjectionTest {
     }
 
     private static double condition(Kernel kernel, double[] exponents) {
-        double[] singular = LinearAlgebra.installed().svd(kernel.matrix(Fits.column(exponents), Fits.column(exponents))).values();
+        double[] singular = LinearAlgebra.installed().svd(kernel.matrix(Fits.column(exponents), Fits.column(exponents)))
+                .values();
         return singular[0] / singular[singular.length - 1];
     }
 
@@ -88,7 +90,8 @@ class C3ProjectionTest {
             determinant /= Math.pow(features.inverseTransposed().get(i, i), 2);
         }
         assertRelative(table.number(row, 2), determinant, 1e-8);
-        assertEquals(table.number(row, 7), residual(exponents), 1e-8, "1e-8 of ‖x‖² = 1");
+        assertEquals(table.number(row, 7), residual(exponents), n <= 5 ? 1e-8 * table.number(row, 7) : 1e-8,
+                "1e-8 of ‖x‖² = 1");
     }
 
     private static void assertRelative(double expected, double found, double tolerance) {
@@ -118,10 +121,7 @@ class C3ProjectionTest {
         var atZero = expansion.eigenfunctions(Fits.column(0));
         double[] out = new double[exponents.length];
         for (int i = 0; i < exponents.length; i++) {
-            int best = 0;
-            for (int j = 0; j < exponents.length; j++) {
-                best = Math.abs(expansion.rates().get(j).re() - exponents[i]) < Math.abs(expansion.rates().get(best).re() - exponents[i]) ? j : best;
-            }
+            int best = Fits.nearest(expansion.rates(), exponents[i]);
             assertEquals(exponents[i], expansion.rates().get(best).re(), 1e-8, "whatever was sampled is an eigenvalue");
             out[i] = expansion.joint().getReal(best, 0) * atZero.getReal(0, best);
         }
@@ -136,7 +136,8 @@ class C3ProjectionTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"1,0.425459064120,0.149081871761", "0.5,0.989658790826,0.0103412091745", "0.1,4.99991666764,1.66664722243e-5"})
+    @CsvSource({"1,0.425459064120,0.149081871761", "0.5,0.989658790826,0.0103412091745",
+            "0.1,4.99991666764,1.66664722243e-5"})
     void asAPairClosesTheResidualVanishesAndTheWeightsGrow(double a, double weight, double residual) {
         // closed form ±a/(2 sinh a²), 1 - a²/sinh a²; twelve printed digits, condition of the pair at most 200
         double[] exponents = {a, -a};
@@ -187,7 +188,8 @@ class C3ProjectionTest {
         var at = expansion.eigenfunctions(Fits.column(1));
         for (int j = 0; j <= degree; j++) {
             boolean linear = Math.abs(expansion.rates().get(j).re() - 1) < 0.5;
-            assertEquals(linear ? 1 : 0, expansion.joint().getReal(j, 0) * at.getReal(0, j), 1e-10, "rate " + expansion.rates().get(j));
+            assertEquals(linear ? 1 : 0, expansion.joint().getReal(j, 0) * at.getReal(0, j), 1e-10, "rate "
+                    + expansion.rates().get(j));
         }
     }
 }

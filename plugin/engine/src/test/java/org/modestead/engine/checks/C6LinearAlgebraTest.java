@@ -74,7 +74,8 @@ class C6LinearAlgebraTest {
 
     @Test
     void kacClementIsFarFromNormal() {
-        // from memory, recomputed (CHECKS C6.1): departure to the printed digits at 1e-12 relative, condition to three digits
+        // from memory, recomputed (CHECKS C6.1): departure to the printed digits at 1e-12 relative, condition to three
+        // digits
         assertEquals(10.5830052442584, NormalityDeparture.of(kac(8)), 1e-12 * 10.6);
         assertEquals(5.26, vectorCondition(kac(8)), 0.005);
     }
@@ -82,8 +83,9 @@ class C6LinearAlgebraTest {
     // ---- C6.2 ----
 
     /** Wilkinson 1965; values from memory, recomputed with 60 digits. */
-    private static final double[] FRANK = {0.0310280606440100, 0.0495074291852783, 0.0812276592404050, 0.143646519769221, 0.284749720558478,
-        0.643505319004856, 1.55398870913211, 3.51185594858076, 6.96153308556712, 12.3110774008685, 20.1989886458771, 32.2288915015722};
+    private static final double[] FRANK = {0.0310280606440100, 0.0495074291852783, 0.0812276592404050,
+        0.143646519769221, 0.284749720558478, 0.643505319004856, 1.55398870913211, 3.51185594858076, 6.96153308556712,
+        12.3110774008685, 20.1989886458771, 32.2288915015722};
 
     private static DMatrixRMaj frank() {
         return matrix(12, (i, j) -> j >= i - 1 ? 12 - Math.max(i, j) : 0);
@@ -121,7 +123,8 @@ class C6LinearAlgebraTest {
         for (int k = 0; k < 12; k++) {
             assertEquals(FRANK[k], values.get(k).re(), 1e-7, "eigenvalue " + k);
         }
-        assertTrue(spectrum.doubts().stream().anyMatch(doubt -> doubt.code().equals("eigenvectors-ill-conditioned")), spectrum.doubts().toString());
+        assertTrue(spectrum.doubts().stream().anyMatch(doubt -> doubt.code().equals("eigenvectors-ill-conditioned")),
+                spectrum.doubts().toString());
     }
 
     // ---- C6.3 ----
@@ -131,10 +134,11 @@ class C6LinearAlgebraTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"2,19.2814700679040", "3,524.056777586061", "4,15513.7387389326", "5,476607.250242561", "6,14951058.6401312", "8,15257575741.6469",
-        "10,1.602628687021688e13"})
+    @CsvSource({"2,19.2814700679040", "3,524.056777586061", "4,15513.7387389326", "5,476607.250242561",
+        "6,14951058.6401312", "8,15257575741.6469", "10,1.602628687021688e13"})
     void hilbertConditionNumbers(int n, double expected) {
-        // from memory, recomputed (CHECKS C6.3): relative tolerance about condition times machine precision, not below the 15 printed digits
+        // from memory, recomputed (CHECKS C6.3): relative tolerance about condition times machine precision, not below
+        // the 15 printed digits
         double[] singular = hilbertSingular(n);
         assertEquals(expected, singular[0] / singular[n - 1], expected * Math.max(expected * EPS, 1e-14));
     }
@@ -142,7 +146,8 @@ class C6LinearAlgebraTest {
     @Test
     void hilbertDeterminantOfOrderFive() {
         // closed form 1/266716800000; condition 5e5 times machine precision is 1e-10
-        assertEquals(1 / 266716800000.0, Arrays.stream(hilbertSingular(5)).reduce(1, (a, b) -> a * b), 1e-10 / 266716800000.0);
+        assertEquals(1 / 266716800000.0, Arrays.stream(hilbertSingular(5)).reduce(1, (a, b) -> a * b), 1e-10
+                / 266716800000.0);
     }
 
     // ---- C6.4 (Henrici 1962; derived; computed independently) ----

@@ -1,13 +1,18 @@
 package org.modestead.engine.checks;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import java.util.OptionalDouble;
+import java.util.TreeMap;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Progress;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.kernel.KernelFamilies;
 import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OperatorFitter;
@@ -18,9 +23,11 @@ import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
+import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.spectrum.SpectrumExtractor;
+import org.modestead.engine.wellposed.ExactResidual;
 
 /** Short ways from numbers to snapshots, kernels and fits for the tests of published and derived values. */
 final class Fits {
@@ -63,11 +70,12 @@ final class Fits {
             channels.add(new Channel("c" + k, ""));
         }
         return new Snapshots(channels, List.of(), new TimeAxis(TimeAxis.Kind.NUMBER, "s"), runs, List.of(), holdout,
-                OptionalDouble.of(step), new DelayEmbedding(depth, 1), Preparation.identity(channels.size()), List.of(), List.of());
+                OptionalDouble.of(step), new DelayEmbedding(depth, 1), Preparation.identity(channels.size()), List.of(),
+                        List.of());
     }
 
     static Kernel kernel(String family, Object... namesAndValues) {
-        java.util.Map<String, Double> parameters = new java.util.TreeMap<>();
+        Map<String, Double> parameters = new TreeMap<>();
         for (int i = 0; i < namesAndValues.length; i += 2) {
             parameters.put((String) namesAndValues[i], ((Number) namesAndValues[i + 1]).doubleValue());
         }
@@ -90,11 +98,25 @@ final class Fits {
     /** The mode whose rate is nearest to a wanted one. */
     static Mode nearest(Spectrum spectrum, double re, double im) {
         return spectrum.modes().stream()
-                .min(java.util.Comparator.comparingDouble(mode -> Math.hypot(mode.rate().re() - re, mode.rate().im() - im))).orElseThrow();
+                .min(Comparator.comparingDouble(mode -> Math.hypot(mode.rate().re() - re, mode.rate().im() - im)))
+                        .orElseThrow();
     }
 
     /** A column of numbers, one state of one component a row. */
     static DMatrixRMaj column(double... values) {
         return DMatrixRMaj.wrap(values.length, 1, values.clone());
+    }
+
+    /** The index of the eigenvalue nearest to a real one. */
+    static int nearest(List<Complex> values, double target) {
+        Complex at = new Complex(target, 0);
+        return IntStream.range(0, values.size()).boxed().min(Comparator.comparingDouble(j -> values.get(j).minus(at).abs()))
+                .orElseThrow();
+    }
+
+    /** The residual of one eigenpair over the training data. */
+    static double residual(ModalExpansion expansion, int j) {
+        return ExactResidual.of(expansion.compression().action(), expansion.compression().second(), expansion.vectors(), j,
+                expansion.eigenvalues().get(j));
     }
 }
