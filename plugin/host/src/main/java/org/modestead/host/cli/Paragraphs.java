@@ -7,12 +7,13 @@ import java.util.List;
 final class Paragraphs {
 
     static final int WIDTH = 96;
+    private static final int DEEPEST = 40;
 
     private Paragraphs() {}
 
     /** Returns the text with {@code first} before its first line and as many blanks before the others. */
     static List<String> hanging(String first, String text) {
-        String indent = " ".repeat(first.length());
+        String indent = " ".repeat(Math.min(first.length(), DEEPEST));
         List<String> lines = new ArrayList<>();
         StringBuilder line = new StringBuilder(first);
         boolean empty = true;

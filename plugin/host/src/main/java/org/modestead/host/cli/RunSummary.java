@@ -2,9 +2,11 @@ package org.modestead.host.cli;
 
 import java.io.PrintStream;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
+import java.util.TreeMap;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.host.run.RunResult;
@@ -64,11 +66,12 @@ final class RunSummary {
     }
 
     void print(RunResult result) {
-        for (PlannedStep step : result.plan().steps()) {
+        for (PlannedStep step : result.plan().order()) {
             if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done) {
-                step(step, done.result(), unit(result));
+                verdict(step, done.result());
             }
         }
+        modes(result);
         long doubts = result.outcomes().values().stream().filter(StepOutcome.Done.class::isInstance)
                 .mapToLong(outcome -> ((StepOutcome.Done) outcome).result().doubts().size()).sum();
         if (doubts > 0) {
@@ -77,14 +80,24 @@ final class RunSummary {
         out.println("Report: " + result.folder().resolve(WorkflowRunner.REPORT));
     }
 
-    private void step(PlannedStep step, NodeResult result, TimeUnit unit) {
-        for (Object value : result.outputs().values()) {
+    private void verdict(PlannedStep step, NodeResult result) {
+        for (Object value : new TreeMap<>(result.outputs()).values()) {
             if (value instanceof Verdict verdict) {
-                out.println("Verdict (" + step.id() + "): " + verdict.overall().grade().word() + ". " + verdict.overall().sentence());
+                Paragraphs.hanging("Verdict (" + step.id() + "): ", verdict.overall().sentence()).forEach(out::println);
             }
         }
-        if (result.outputs().get("modes") instanceof Table modes) {
-            modes(step.id(), modes, unit);
+    }
+
+    /** Shows the last mode table of the run: the judged one where modes were judged. */
+    private void modes(RunResult result) {
+        List<PlannedStep> order = new ArrayList<>(result.plan().order());
+        Collections.reverse(order);
+        for (PlannedStep step : order) {
+            if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done
+                    && done.result().outputs().get("modes") instanceof Table modes) {
+                modes(step.id(), modes, unit(result));
+                return;
+            }
         }
     }
 

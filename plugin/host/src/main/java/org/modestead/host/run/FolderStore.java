@@ -1,7 +1,6 @@
 package org.modestead.host.run;
 
 import java.io.IOException;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import org.modestead.engine.Progress;
 import org.modestead.host.output.CsvWriter;
@@ -10,10 +9,9 @@ import org.modestead.host.table.DuckDbTable;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.Port;
-import org.modestead.nodes.report.HtmlReport;
 import org.modestead.nodes.table.Table;
 
-/** Writes every table of a step as {@code STEP/PORT.csv}, and a step's own report beside them. */
+/** Writes every table of a step as {@code STEP/PORT.csv}. */
 final class FolderStore implements StepStore {
 
     private final OutputFolder folder;
@@ -34,10 +32,6 @@ final class FolderStore implements StepStore {
                 progress.report(0, "writing " + port.id() + ".csv");
                 folder.write(step.id() + "/" + port.id() + ".csv", out -> CsvWriter.write(table, out, progress));
             }
-        }
-        if (result.document().isPresent()) {
-            String page = HtmlReport.write(result.document().get());
-            folder.write(step.id() + "/report.html", out -> out.write(page.getBytes(StandardCharsets.UTF_8)));
         }
         progress.report(1, "done");
     }

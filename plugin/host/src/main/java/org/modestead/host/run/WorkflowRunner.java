@@ -5,15 +5,12 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.time.Instant;
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import org.modestead.host.output.Disk;
 import org.modestead.host.output.OutputFault;
 import org.modestead.host.output.OutputFolder;
 import org.modestead.host.workflow.RunPlan;
-import org.modestead.nodes.contract.NodeResult;
-import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.report.HtmlReport;
 
 /** Runs checked workflows and leaves their results behind: tables, report and record, whole or not at all. */
@@ -70,7 +67,7 @@ public final class WorkflowRunner {
 
     private static void publish(RunResult result, Instant started, OutputFolder folder) {
         try {
-            byte[] report = HtmlReport.write(report(result)).getBytes(StandardCharsets.UTF_8);
+            byte[] report = HtmlReport.write(RunDocument.of(result)).getBytes(StandardCharsets.UTF_8);
             folder.write(REPORT, out -> out.write(report));
             List<String> earlier = RunRecord.filesOf(folder.folder());
             byte[] record = RunRecord.write(result, started, folder.files());
@@ -79,17 +76,5 @@ public final class WorkflowRunner {
         } catch (IOException unwritable) {
             throw OutputFault.of(folder.folder().toString(), unwritable);
         }
-    }
-
-    /** The report that the workflow itself makes, the last one if several; else one of what each step says. */
-    private static ReportDocument report(RunResult result) {
-        List<ReportDocument> made = new ArrayList<>();
-        for (StepOutcome outcome : result.outcomes().values()) {
-            if (outcome instanceof StepOutcome.Done done) {
-                NodeResult found = done.result();
-                found.document().ifPresent(made::add);
-            }
-        }
-        return made.isEmpty() || result.state() == RunResult.State.FAILED ? PlainReport.of(result) : made.get(made.size() - 1);
     }
 }
