@@ -12,7 +12,7 @@ public final class ScaleHeuristic {
 
     /** The length scale as every radial family declares it. */
     static final KernelFamily.Parameter PARAMETER =
-            new KernelFamily.Parameter("scale", "Scale", "Length over which the kernel falls, in the unit of the prepared states.", 1e-300, 1);
+            new KernelFamily.Parameter("scale", "Scale", "Length over which the kernel falls, in the unit of the prepared states.", 1e-150, 1);
 
     private static final int MOST = 1000;
 

@@ -11,7 +11,7 @@ import org.modestead.engine.linalg.Matrices;
  * A compression whose four arrays are formed entry by entry; for up to a few hundred basis functions.
  *
  * <p>Whitening: {@code G = U S² Uᵀ}, {@code Q = U_R S_R⁻¹}, so {@code QᵀGQ = I} and {@code Ã = Qᵀ M Q}. Directions with
- * {@code s² <= 64 ε m s_1²} are rounding noise and are left out.
+ * {@code s² <= 64 ε s_1²} are rounding noise and are left out.
  *
  * @param basis m functions
  * @param gram G, m x m, symmetric

@@ -11,6 +11,7 @@ final class RankSelection {
 
     private RankSelection() {}
 
+    /** @throws FitFault if the rule asks for what cannot be */
     static RankChoice choose(RankRule rule, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
         if (rule instanceof RankRule.Fixed fixed) {
             return fixed(fixed.rank(), full);
@@ -34,6 +35,9 @@ final class RankSelection {
     }
 
     private static RankChoice energy(double share, double[] singular) {
+        if (!(share > 0 && share <= 1)) {
+            throw new FitFault("rank", "the share of energy is " + share, "give a share above 0 and at most 1");
+        }
         double total = Arrays.stream(singular).map(s -> s * s).sum();
         double sum = 0;
         int rank = 0;
@@ -63,6 +67,9 @@ final class RankSelection {
     }
 
     private static RankChoice holdout(int largest, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
+        if (largest < 1) {
+            throw new FitFault("rank", "the largest rank to try is " + largest, "give at least 1");
+        }
         InnerSplit split = InnerSplit.of(snapshots);
         OrthonormalCompression trial = estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank()));
         PredictionError.Best best = PredictionError.bestRank(trial, split.judging(), progress);

@@ -45,7 +45,7 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step) {
 
     /** Returns whether some training run has a pair at this stride. */
     static boolean exist(Snapshots snapshots, int stride) {
-        return snapshots.states(Snapshots.Part.TRAINING).stream().anyMatch(run -> run.count() > stride + 1);
+        return snapshots.states(Snapshots.Part.TRAINING).stream().anyMatch(run -> run.count() > stride);
     }
 
     /** Returns the number of pairs m. */

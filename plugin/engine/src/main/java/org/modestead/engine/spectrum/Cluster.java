@@ -32,12 +32,21 @@ public final class Cluster {
             for (int j = i + 1; j < r; j++) {
                 if (together(expansion, i, j, tolerance, scale)) {
                     int number = numbers[i] != 0 ? numbers[i] : numbers[j] != 0 ? numbers[j] : ++used;
-                    numbers[i] = number;
-                    numbers[j] = number;
+                    join(numbers, i, number);
+                    join(numbers, j, number);
                 }
             }
         }
         return numbers;
+    }
+
+    private static void join(int[] numbers, int at, int number) {
+        int before = numbers[at];
+        for (int k = 0; k < numbers.length; k++) {
+            if (k == at || before != 0 && numbers[k] == before) {
+                numbers[k] = number;
+            }
+        }
     }
 
     private static boolean together(ModalExpansion expansion, int i, int j, double tolerance, double scale) {
@@ -52,7 +61,7 @@ public final class Cluster {
         return 1 - overlap.abs() < tolerance;
     }
 
-    /** Groups column indices into modes: clusters, conjugate pairs, single real ones. */
+    /** Groups column indices into modes: clusters with their conjugates, conjugate pairs, single real ones. */
     public static List<List<Integer>> groups(ModalExpansion expansion, int[] numbers) {
         List<List<Integer>> groups = new ArrayList<>();
         boolean[] taken = new boolean[expansion.rank()];
@@ -62,8 +71,8 @@ public final class Cluster {
             }
             List<Integer> group = new ArrayList<>();
             for (int k = j; k < expansion.rank(); k++) {
-                boolean partner = k == j || numbers[j] != 0 && numbers[k] == numbers[j]
-                        || k == j + 1 && numbers[j] == 0 && expansion.eigenvalues().get(j).im() > 0;
+                int conjugate = k + (int) Math.signum(expansion.eigenvalues().get(k).im());
+                boolean partner = same(numbers, j, k) || same(numbers, j, conjugate);
                 if (partner && !taken[k]) {
                     group.add(k);
                     taken[k] = true;
@@ -72,5 +81,9 @@ public final class Cluster {
             groups.add(List.copyOf(group));
         }
         return groups;
+    }
+
+    private static boolean same(int[] numbers, int j, int k) {
+        return j == k || numbers[j] != 0 && numbers[j] == numbers[k];
     }
 }

@@ -10,7 +10,8 @@ import org.modestead.engine.linalg.Complex;
  * {@code |λ|/2π}, damping ratio {@code -σ/|λ|}, doubling time {@code ln 2/σ} (negative: the halving time of a decay).
  *
  * @param number 1-based, by falling energy share
- * @param indices columns of the spectrum's eigenvectors: one, or two conjugate ones (positive imaginary part first)
+ * @param indices columns of the spectrum's eigenvectors: one, or two conjugate ones (positive imaginary part first), or all
+ *     members of a cluster with their conjugates
  * @param rate λ per time unit, imaginary part at least 0
  * @param amplitude root mean square over the training runs of the Euclidean norm over channels of the mode's part of
  *     the signal at the run's first sample; peak value for an oscillation; in prepared units
@@ -60,9 +61,9 @@ public record Mode(
         return TWO_PI / Math.abs(rate.im());
     }
 
-    /** Returns -σ/|λ| in [-1, 1]; 0 for λ = 0. */
+    /** Returns -σ/|λ| in [-1, 1]; 0 for λ = 0, 1 for σ = -∞. */
     public double dampingRatio() {
-        return rate.abs() == 0 ? 0 : -rate.re() / rate.abs();
+        return rate.re() == Double.NEGATIVE_INFINITY ? 1 : rate.abs() == 0 ? 0 : -rate.re() / rate.abs();
     }
 
     /** Returns ln 2/σ: time to double, or when negative minus the time to halve; infinite for σ = 0. */

@@ -59,24 +59,25 @@ public final class SpectrumExtractor {
             int first = m.group().get(0);
             Complex rate = rate(expansion, m.group(), clusters);
             modes.add(new Mode(modes.size() + 1, m.group(), rate, m.amplitude(), total > 0 ? m.energy() / total : 0, gap(expansion, first),
-                    weights(expansion, starts, m.group(), clusters), ConstantFunction.is(functions, first, rate, sample.longest()), clusters[first]));
+                    weights(expansion, starts, m.group(), clusters), clusters[first] == 0 && ConstantFunction.is(functions, first, rate, sample.longest()), clusters[first]));
         }
         return modes;
     }
 
     private record Measured(List<Integer> group, double energy, double amplitude) {}
 
-    /** A cluster is told by the mean of its members: their imaginary parts are rounding. */
+    /** A cluster is told by the mean of its members: their differences are rounding. */
     private static Complex rate(ModalExpansion expansion, List<Integer> group, int[] clusters) {
         if (clusters[group.get(0)] == 0) {
             return expansion.rates().get(group.get(0));
         }
+        List<Integer> members = group.stream().filter(j -> clusters[j] == clusters[group.get(0)]).toList();
         Complex sum = Complex.ZERO;
-        for (int j : group) {
+        for (int j : members) {
             sum = sum.plus(expansion.rates().get(j));
         }
-        Complex mean = sum.times(1.0 / group.size());
-        double spread = group.stream().mapToDouble(j -> expansion.rates().get(j).minus(mean).abs()).max().orElse(0);
+        Complex mean = sum.times(1.0 / members.size());
+        double spread = members.stream().mapToDouble(j -> expansion.rates().get(j).minus(mean).abs()).max().orElse(0);
         return Math.abs(mean.im()) <= 2 * spread ? new Complex(mean.re(), 0) : new Complex(mean.re(), Math.abs(mean.im()));
     }
 
@@ -132,8 +133,10 @@ public final class SpectrumExtractor {
                     "The eigenfunctions are nearly dependent (condition %.2g): weights of single modes mean little.", expansion.condition())));
         }
         modes.stream().filter(mode -> mode.cluster() != 0).forEach(mode -> doubts.add(new Doubt("nearly-defective", String.format(
-                Locale.ROOT, "Mode %d gathers %d eigenvalues at %.6g that rounding cannot tell apart: growth like t e^(λt), not an oscillation.",
-                mode.number(), mode.indices().size(), mode.rate().re()))));
+                Locale.ROOT, "Mode %d gathers %d eigenvalues at %.6g%s that rounding cannot tell apart: growth like t e^(λt), not %s.",
+                mode.number(), mode.indices().size(), mode.rate().re(),
+                mode.oscillates() ? String.format(Locale.ROOT, " ± %.6gi", mode.rate().im()) : "",
+                mode.oscillates() ? "two modes" : "an oscillation"))));
         if (expansion.compression().evolution() instanceof Evolution.StepMap map) {
             modes.stream().filter(mode -> mode.energyShare() > NEGLIGIBLE).forEach(mode -> aliasing(expansion, mode, map, doubts));
         }

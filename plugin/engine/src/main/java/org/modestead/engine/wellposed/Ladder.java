@@ -103,8 +103,14 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, double longest) {
         return List.copyOf(rows);
     }
 
-    /** {@code |λ - λ'| / max(|λ|, |λ'|, 0.1/T)}: rates far below one over the longest run T cannot be resolved. */
+    /**
+     * {@code |λ - λ'| / max(|λ|, |λ'|, 0.1/T)}: rates far below one over the longest run T cannot be resolved. A multiplier of 0
+     * has the rate -∞, which is far from every other rate and no distance from itself.
+     */
     static double relativeChange(Complex a, Complex b, double longest) {
+        if (Double.isInfinite(a.re()) || Double.isInfinite(b.re())) {
+            return a.re() == b.re() ? 0 : 2;
+        }
         return a.minus(b).abs() / Math.max(Math.max(a.abs(), b.abs()), RESOLVED / longest);
     }
 

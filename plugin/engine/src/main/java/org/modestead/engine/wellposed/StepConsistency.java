@@ -35,6 +35,10 @@ public final class StepConsistency implements Check {
         ModalExpansion expansion;
         try {
             OrthonormalCompression again = other.get().compress(evidence.operator().snapshots(), progress).whiten(evidence.operator().rank());
+            if (again.rank() < evidence.operator().rank()) {
+                return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "Fitted with another step the data hold only rank "
+                        + again.rank() + ", so the rates cannot be compared."));
+            }
             expansion = ModalExpansion.of(again);
         } catch (FitFault fault) {
             return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The second step could not be fitted: " + fault.getMessage()));
