@@ -8,7 +8,7 @@ import java.util.List;
  * motion has a symmetry, every second rung repeats the one before).
  *
  * <p>Growing means: the last three distinct values rise, and either they rise together by more than a factor, or by more
- * than 10 % with an increment that is not shrinking (at least half of the one before). A convergent sequence of projections
+ * than 30 % with an increment that is not shrinking (at least half of the one before). A convergent sequence of projections
  * has shrinking increments.
  *
  * @param growing whether it grows without bound as far as can be seen
@@ -17,7 +17,7 @@ import java.util.List;
 record NormTrend(boolean growing, double factor) {
 
     private static final double SAME = 1e-3;
-    private static final double NOTABLE = 1.1;
+    private static final double NOTABLE = 1.3;
     private static final double SHRINKING = 0.5;
     private static final int LOOKED_AT = 3;
 
