@@ -7,6 +7,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
+import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
@@ -20,6 +22,7 @@ import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.GeneralEigen;
 import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.operator.Compression;
+import org.modestead.engine.operator.FactoredCompression;
 import org.modestead.engine.operator.GramCompression;
 import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.OccupationEstimator;
@@ -108,7 +111,7 @@ class C3OperatorTest {
         assertTrue(Arrays.stream(contracted).max().orElseThrow() <= 1.94773404105468 * 1.94773404105468);
     }
 
-    private static double[] ratio(double[] x, java.util.function.DoubleUnaryOperator map) {
+    private static double[] ratio(double[] x, DoubleUnaryOperator map) {
         double[] from = Fits.exponential().diagonal(Fits.column(x));
         double[] to = Fits.exponential().diagonal(Fits.column(Arrays.stream(x).map(map).toArray()));
         return IntStream.range(0, x.length).mapToDouble(k -> to[k] / from[k]).toArray();
@@ -163,7 +166,7 @@ class C3OperatorTest {
                 one.matrix(n -> MonomialSpace.monomial(n, 1), 40, two));
     }
 
-    private static void assertSingular(java.util.stream.DoubleStream expected, DMatrixRMaj operator) {
+    private static void assertSingular(DoubleStream expected, DMatrixRMaj operator) {
         double[] falling = expected.map(s -> -s).sorted().map(s -> -s).toArray();
         assertArrayEquals(falling, singular(operator), 1e-12);
     }
@@ -238,7 +241,20 @@ class C3OperatorTest {
         assertArrayEquals(new double[] {0.082255626695, 1.86096271464, 6.40856545052}, rising(compression), TOLERANCE);
     }
 
-    private static double[] rising(GramCompression compression) {
+    @Test
+    void landmarkFeaturesOfManySamplesGiveTheSameTable() {
+        // 1803 samples are too many to form the arrays entry by entry; the landmark factor stops at 1e-13 of the largest
+        Compression compression = new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1)
+                .compress(Fits.snapshots(1 / 600.0, 1, runs(601, 1, 0.25, 0.5, 1)), Progress.NONE);
+        assertTrue(compression instanceof FactoredCompression);
+        assertEquals(1.2062307431964, compression.gram().get(0, 0), TOLERANCE);
+        assertEquals(5.4441897386012, compression.gram().get(1, 2), TOLERANCE);
+        assertEquals(1.8561348799334, compression.action().get(0, 2), TOLERANCE);
+        assertEquals(249.35930407954, compression.action().get(2, 2), TOLERANCE);
+        assertArrayEquals(new double[] {0.082255626695, 1.86096271464, 6.40856545052}, rising(compression), TOLERANCE);
+    }
+
+    private static double[] rising(Compression compression) {
         int m = compression.gram().numRows;
         List<Complex> values = ModalExpansion.of(compression.whiten(m)).eigenvalues();
         assertEquals(m, values.size());

@@ -1,5 +1,6 @@
 package org.modestead.engine.checks;
 
+import java.util.function.IntToDoubleFunction;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.kernel.Kernel;
 
@@ -84,7 +85,7 @@ record MonomialSpace(Kernel kernel) {
     }
 
     /** Coefficients f^(n)(0)/n! of a function by its derivatives at 0. */
-    static double[] series(int terms, java.util.function.IntToDoubleFunction derivative) {
+    static double[] series(int terms, IntToDoubleFunction derivative) {
         double[] out = new double[terms];
         double factorial = 1;
         for (int n = 0; n < terms; n++) {
