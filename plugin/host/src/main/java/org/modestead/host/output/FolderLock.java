@@ -10,9 +10,12 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
 import java.util.Optional;
+import java.util.concurrent.ThreadLocalRandom;
 
 /** Keeps two processes from writing one result folder; let go by the system even when the process is killed. */
 final class FolderLock implements AutoCloseable {
+
+    private static final int LONGEST_MARK = 1 << 16;
 
     private final Path file;
     private final FileChannel channel;
@@ -33,7 +36,7 @@ final class FolderLock implements AutoCloseable {
                     return Optional.empty();
                 }
                 // The holder before may have removed the file between our opening and our locking it: then try again.
-                held = Files.exists(file) && owns(file, channel);
+                held = owns(file, channel);
                 if (held) {
                     return Optional.of(new FolderLock(file, channel));
                 }
@@ -47,10 +50,15 @@ final class FolderLock implements AutoCloseable {
         }
     }
 
+    /**
+     * Tells whether the name still leads to the locked file, by giving the file a length that no other has. It must not
+     * be opened a second time: POSIX lets a lock go when any of a process's handles of the file is closed.
+     */
     private static boolean owns(Path file, FileChannel channel) throws IOException {
-        byte[] mark = (ProcessHandle.current().pid() + "\n").getBytes(StandardCharsets.UTF_8);
-        channel.truncate(0).write(ByteBuffer.wrap(mark), 0);
-        return Files.size(file) == mark.length && java.util.Arrays.equals(Files.readAllBytes(file), mark);
+        int length = ThreadLocalRandom.current().nextInt(1, LONGEST_MARK);
+        channel.truncate(0);
+        channel.write(ByteBuffer.wrap(" ".repeat(length).getBytes(StandardCharsets.UTF_8)), 0);
+        return Files.exists(file) && Files.size(file) == length;
     }
 
     @Override

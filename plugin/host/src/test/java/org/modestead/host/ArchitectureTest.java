@@ -1,0 +1,76 @@
+package org.modestead.host;
+
+import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAnyPackage;
+import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.noClasses;
+import static com.tngtech.archunit.library.dependencies.SlicesRuleDefinition.slices;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import com.tngtech.archunit.core.domain.JavaClasses;
+import com.tngtech.archunit.core.importer.ClassFileImporter;
+import com.tngtech.archunit.core.importer.ImportOption;
+import com.tngtech.archunit.library.GeneralCodingRules;
+import org.junit.jupiter.api.Test;
+
+/** The arrows host -> nodes -> engine, and what each part may know. */
+class ArchitectureTest {
+
+    private static final String ENGINE = "org.modestead.engine..";
+    private static final String NODES = "org.modestead.nodes..";
+    private static final String HOST = "org.modestead.host..";
+    private static final int LEAST_CLASSES = 200;
+
+    private final JavaClasses classes = new ClassFileImporter().withImportOption(new ImportOption.DoNotIncludeTests())
+            .importPackages("org.modestead");
+
+    @Test
+    void theScanSeesAllThreeModules() {
+        assertTrue(classes.size() > LEAST_CLASSES, "only " + classes.size() + " classes");
+        for (String part : new String[] {ENGINE, NODES, HOST}) {
+            assertTrue(classes.stream().anyMatch(resideInAnyPackage(part)), part);
+        }
+    }
+
+    @Test
+    void theEngineKnowsNeitherNodesNorHostNorFormatsNorPictures() {
+        noClasses().that().resideInAPackage(ENGINE).should().dependOnClassesThat().resideInAnyPackage(NODES, HOST, "org.duckdb..",
+                "com.fasterxml..", "picocli..", "org.knowm..", "java.awt..", "javax.swing..", "java.sql..").check(classes);
+    }
+
+    @Test
+    void nodesKnowNoHostAndNoneOfItsLibraries() {
+        noClasses().that().resideInAPackage(NODES).should().dependOnClassesThat().resideInAnyPackage(HOST, "org.duckdb..",
+                "com.fasterxml..", "picocli..", "java.sql..", "javax.swing..").check(classes);
+    }
+
+    @Test
+    void nothingKnowsAnEditorsWorkbench() {
+        noClasses().should().dependOnClassesThat().resideInAnyPackage("org.eclipse.swt..", "org.eclipse.jface..", "org.eclipse.ui..")
+                .check(classes);
+    }
+
+    @Test
+    void packagesOfTheHostFormNoCircle() {
+        slices().matching("org.modestead.host.(**)").should().beFreeOfCycles().check(classes);
+    }
+
+    @Test
+    void packagesOfTheNodesFormNoCircle() {
+        slices().matching("org.modestead.nodes.(**)").should().beFreeOfCycles().check(classes);
+    }
+
+    @Test
+    void packagesOfTheEngineFormNoCircle() {
+        slices().matching("org.modestead.engine.(**)").should().beFreeOfCycles().check(classes);
+    }
+
+    @Test
+    void onlyTheCommandLineSpeaksAndOnlyMainTouchesTheStandardStreams() {
+        noClasses().that().doNotHaveFullyQualifiedName(Main.class.getName())
+                .should(GeneralCodingRules.ACCESS_STANDARD_STREAMS).check(classes);
+    }
+
+    @Test
+    void noClassThrowsExceptionsWithoutAName() {
+        noClasses().should(GeneralCodingRules.THROW_GENERIC_EXCEPTIONS).check(classes);
+    }
+}
