@@ -38,9 +38,10 @@ record ForecastFigure(Snapshots snapshots, List<ForecastRow> rows) {
         if (banded) {
             layers.add(new Figure.Band("forecast band", key(), times, column(ForecastRow::low), column(ForecastRow::high)));
         }
-        layers.addAll(recorded());
         layers.add(new Figure.Line("forecast", key(), times, column(ForecastRow::value), Figure.Emphasis.STRONG));
-        String band = banded ? " The shaded area is the band in which new values are expected." : " No band could be given.";
+        layers.addAll(recorded());
+        String band = banded ? " The shaded area is the band in which new values are expected."
+                : " No band could be given.";
         return new Figure("forecast-" + (channel() + 1), Figure.Kind.TIME_SERIES, "Forecast of " + named().name(),
                 "Forecast of run " + rows.get(0).run() + " against what was recorded." + band, Axes.time(snapshots.time()),
                 Figure.Axis.linear(named().label()), layers);
@@ -56,7 +57,8 @@ record ForecastFigure(Snapshots snapshots, List<ForecastRow> rows) {
     }
 
     private Optional<Figure.Layer> window(Run run, double from, double to) {
-        int[] inside = IntStream.range(0, run.samples()).filter(i -> run.times()[i] >= from && run.times()[i] <= to).toArray();
+        int[] inside = IntStream.range(0, run.samples()).filter(i -> run.times()[i] >= from && run.times()[i] <= to)
+                .toArray();
         if (inside.length == 0) {
             return Optional.empty();
         }

@@ -26,12 +26,13 @@ final class ReconstructionFigure {
         String key = "channel:" + (channel + 1);
         double[] times = Axes.times(snapshots.time(), column(rows, ReconstructionRow::time));
         return Optional.of(new Figure("reconstruction-" + (channel + 1), Figure.Kind.TIME_SERIES,
-                "Reconstruction of " + named.name(), "What the fitted functions make of the states of run " + rows.get(0).run()
+                "Reconstruction of " + named.name(), "What the fitted functions make of the states of run "
+                + rows.get(0).run()
                 + ", against what was recorded. Where the curves part, the functions cannot hold the signal.",
                 Axes.time(snapshots.time()), Figure.Axis.linear(named.label()), List.of(
-                        line("recorded", key, times, column(rows, ReconstructionRow::observed), Figure.Emphasis.NORMAL),
                         line("reconstructed", key, times, column(rows, ReconstructionRow::reconstructed),
-                                Figure.Emphasis.STRONG))));
+                                Figure.Emphasis.STRONG),
+                        line("recorded", key, times, column(rows, ReconstructionRow::observed), Figure.Emphasis.NORMAL))));
     }
 
     private static Figure.Line line(String name, String key, double[] times, double[] values, Figure.Emphasis emphasis) {

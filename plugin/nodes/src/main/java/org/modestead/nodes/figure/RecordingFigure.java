@@ -2,6 +2,7 @@ package org.modestead.nodes.figure;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
@@ -9,6 +10,7 @@ import java.util.stream.Stream;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.nodes.words.Sentence;
 
 /** The recorded channels over time, thinned so that every peak stays. */
 public final class RecordingFigure {
@@ -18,7 +20,7 @@ public final class RecordingFigure {
     private RecordingFigure() {}
 
     /**
-     * Draws the first channels of all runs. Channels of one unit share a scale in that unit; channels of different
+     * Draws the first channels of the runs that follow each other in time; of runs at the same times the earliest. Channels of one unit share a scale in that unit; channels of different
      * units are shown as distance from their mean in standard deviations.
      *
      * @param snapshots prepared runs; drawn in recorded values
@@ -29,7 +31,8 @@ public final class RecordingFigure {
         int shown = Math.min(channels, snapshots.channels().size());
         List<Channel> drawn = snapshots.channels().subList(0, shown);
         boolean oneUnit = drawn.stream().map(Channel::unit).distinct().count() == 1;
-        List<Run> runs = Stream.of(Snapshots.Part.values()).flatMap(part -> snapshots.runs(part).stream()).toList();
+        List<Run> all = Stream.of(Snapshots.Part.values()).flatMap(part -> snapshots.runs(part).stream()).toList();
+        List<Run> runs = apart(all);
         List<Figure.Layer> layers = new ArrayList<>();
         for (int c = 0; c < shown; c++) {
             layers.addAll(lines(snapshots, runs, c, oneUnit));
@@ -37,13 +40,13 @@ public final class RecordingFigure {
         tailStart(snapshots).ifPresent(at -> layers.add(new Figure.Rule("holdout starts", "", true,
                 at * snapshots.time().calendarUnitsPerUnit())));
         return new Figure("recording", Figure.Kind.TIME_SERIES, "Recorded channels",
-                caption(snapshots, shown, runs.size(), oneUnit),
+                caption(snapshots, shown, runs.size(), all.size(), oneUnit),
                 Axes.time(snapshots.time()), Figure.Axis.linear(valueLabel(drawn, oneUnit)), layers);
     }
 
     private static List<Figure.Layer> lines(Snapshots snapshots, List<Run> runs, int channel, boolean oneUnit) {
         DoubleUnaryOperator scaling = oneUnit ? DoubleUnaryOperator.identity() : standardised(snapshots, runs, channel);
-        int most = Math.max(FEWEST_POINTS, MOST_POINTS / runs.size());
+        int most = Math.max(FEWEST_POINTS, MOST_POINTS / Math.max(1, runs.size()));
         List<Figure.Layer> lines = new ArrayList<>();
         for (Run run : runs) {
             double[] values = Arrays.stream(RecordedValues.of(run, channel, snapshots.preparation())).map(scaling)
@@ -70,7 +73,7 @@ public final class RecordingFigure {
         double lastSeen = snapshots.training().stream().mapToDouble(RecordingFigure::last).max()
                 .orElse(Double.POSITIVE_INFINITY);
         return snapshots.holdout().stream().filter(run -> run.leadIn() < run.samples())
-                .mapToDouble(run -> run.times()[run.leadIn()])
+                .mapToDouble(RecordingFigure::first)
                 .filter(start -> start > lastSeen).min();
     }
 
@@ -82,12 +85,32 @@ public final class RecordingFigure {
         return oneUnit ? Axes.labelled("value", drawn.get(0).unit()) : "distance from the mean [standard deviations]";
     }
 
-    private static String caption(Snapshots snapshots, int shown, int runs, boolean oneUnit) {
-        String which = shown == snapshots.channels().size() ? "All " + shown + " channels" : "The first " + shown + " of "
-                + snapshots.channels().size() + " channels";
+    private static String caption(Snapshots snapshots, int shown, int drawn, int runs, boolean oneUnit) {
+        int channels = snapshots.channels().size();
+        String which = shown < channels ? "The first " + shown + " of " + channels + " channels"
+                : channels == 1 ? "The channel" : "All " + channels + " channels";
         String scale = oneUnit ? "." : ", each from its mean in its own standard deviations, for the units differ.";
-        return (shown == 1 && snapshots.channels().size() == 1 ? "The channel" : which) + " of " + runs
-                + (runs == 1 ? " run" : " runs")
-                + " over time" + scale;
+        String others = drawn == runs ? "" : " Drawn are " + drawn + " of " + Sentence.count(runs, "run")
+                + "; the others lie at the same times.";
+        return which + " over time" + scale + others;
+    }
+
+    /** Runs that follow each other; of those at the same times the earliest. */
+    private static List<Run> apart(List<Run> runs) {
+        List<Run> kept = new ArrayList<>();
+        double end = Double.NEGATIVE_INFINITY;
+        List<Run> rising = runs.stream().filter(run -> run.leadIn() < run.samples())
+                .sorted(Comparator.comparingDouble(RecordingFigure::first)).toList();
+        for (Run run : rising) {
+            if (first(run) > end) {
+                kept.add(run);
+                end = last(run);
+            }
+        }
+        return kept;
+    }
+
+    private static double first(Run run) {
+        return run.times()[run.leadIn()];
     }
 }

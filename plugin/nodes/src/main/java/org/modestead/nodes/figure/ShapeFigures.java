@@ -46,7 +46,7 @@ public final class ShapeFigures {
                     + " prepared with.";
             return new Figure("shape-" + mode.number() + "-magnitude", Figure.Kind.SHAPES, title("magnitude"),
                     "How far each channel moves in this mode, relative to the one that moves most." + scaled, channels(),
-                    Figure.Axis.linear("magnitude relative to the largest"),
+                    Figure.Axis.linear("relative magnitude"),
                     List.of(new Figure.Bars("", "mode:" + mode.number(), heights)));
         }
 
@@ -85,7 +85,7 @@ public final class ShapeFigures {
         private String title(String quantity) {
             TimeUnit unit = new TimeUnit(spectrum.timeUnit());
             String what = mode.oscillates() ? Digits.frequency(mode.frequency(), unit.frequency())
-                    : "no oscillation, rate " + Digits.figure(mode.rate().re(), unit.rate());
+                    : "no oscillation";
             return "Mode " + mode.number() + " (" + what + "): " + quantity;
         }
     }

@@ -3,6 +3,7 @@ package org.modestead.nodes.render;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.DoubleUnaryOperator;
 import java.util.stream.Collectors;
 import org.knowm.xchart.CategoryChart;
 import org.knowm.xchart.CategorySeries;
@@ -12,8 +13,7 @@ import org.modestead.nodes.figure.Figure;
 /** Draws a figure with categories along the horizontal axis: bars, points and lines at 0, 1, 2, ... */
 final class CategoryPlot {
     private static final int LEVEL_LABELS = 8;
-    private static final int LEVEL_CHARACTERS = 60;
-    private static final int MOST_LABELS = 40;
+    private static final int LEVEL_CHARACTERS = 52;
 
     private final Figure figure;
     private final LayerStyles styles;
@@ -30,20 +30,29 @@ final class CategoryPlot {
         CategoryPlot plot = new CategoryPlot(figure);
         plot.draw();
         Range positions = new Range(-0.5, figure.x().categories().size() - 0.5);
-        Overlay overlay = new Overlay(figure, positions, Range.y(figure),
-                position -> plot.chart.getScreenXFromChart(position + 0.5), plot.chart::getScreenYFromChart,
+        DoubleUnaryOperator screenX = position -> plot.chart.getScreenXFromChart(position + 0.5);
+        Overlay overlay = new Overlay(figure, positions, Range.y(figure), screenX, plot.chart::getScreenYFromChart,
                 new TimeTicks(0, ""));
-        return new Picture(plot.chart, overlay, Legend.of(figure, Size.of(figure).width(), false));
+        return new Picture(plot.chart, overlay, level(figure) ? SlantedLabels.NONE
+                : new SlantedLabels(figure.x().categories(), figure.x().label(), screenX),
+                Legend.of(figure, Size.of(figure).width(), false));
+    }
+
+    /** Returns whether the names fit side by side. */
+    private static boolean level(Figure figure) {
+        List<String> names = figure.x().categories();
+        return names.size() <= LEVEL_LABELS && names.stream().mapToInt(String::length).sum() <= LEVEL_CHARACTERS;
     }
 
     private void draw() {
-        List<String> names = figure.x().categories();
         Range y = Range.y(figure);
         HouseStyle.apply(chart.getStyler(), figure);
-        chart.getStyler().setYAxisMin(y.low()).setYAxisMax(y.high()).setXAxisMaxLabelCount(MOST_LABELS);
+        chart.getStyler().setYAxisMin(y.low()).setYAxisMax(y.high());
         chart.getStyler().setAvailableSpaceFill(0.7).setPlotGridVerticalLinesVisible(false);
-        boolean level = names.size() <= LEVEL_LABELS && names.stream().mapToInt(String::length).sum() <= LEVEL_CHARACTERS;
-        chart.getStyler().setXAxisLabelRotation(level ? 0 : 45);
+        if (!level(figure)) {
+            chart.getStyler().setXAxisTicksVisible(false).setXAxisTitleVisible(false);
+        }
+        chart.setCustomYAxisTickLabelsFormatter(HouseStyle::tick);
         chart.setTitle(figure.title());
         chart.setXAxisTitle(figure.x().label());
         chart.setYAxisTitle(figure.y().label());

@@ -2,6 +2,9 @@ package org.modestead.nodes.render;
 
 import java.awt.BasicStroke;
 import java.awt.Font;
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.Locale;
 import java.util.TimeZone;
 import org.knowm.xchart.style.AxesChartStyler;
@@ -10,6 +13,9 @@ import org.modestead.nodes.figure.Figure;
 /** How every picture looks: white paper, thin frame, light grid. */
 final class HouseStyle {
     private static final Font PLAIN = new Font(Font.SANS_SERIF, Font.PLAIN, 12);
+    private static final int TICK_DIGITS = 7;
+    private static final int SHORTEST_PLAIN = 4;
+    private static final int LONGEST_PLAIN = 5;
     private static final Font BOLD = new Font(Font.SANS_SERIF, Font.BOLD, 14);
 
     private HouseStyle() {}
@@ -25,5 +31,18 @@ final class HouseStyle {
                 .setTimezone(TimeZone.getTimeZone("UTC")).setXAxisTickMarkSpacingHint(80).setYAxisTickMarkSpacingHint(46)
                 .setXAxisLogarithmic(figure.x().logarithmic()).setYAxisLogarithmic(figure.y().logarithmic());
         style.setPlotContentSize(1);
+    }
+
+    /** Returns a tick's number without the rounding errors of stepping, as few characters as say it. */
+    static String tick(double value) {
+        if (value == 0 || !Double.isFinite(value)) {
+            return "0";
+        }
+        BigDecimal rounded = new BigDecimal(value).round(new MathContext(TICK_DIGITS, RoundingMode.HALF_EVEN))
+                .stripTrailingZeros();
+        int exponent = rounded.precision() - rounded.scale() - 1;
+        boolean plain = exponent >= -SHORTEST_PLAIN && exponent <= LONGEST_PLAIN;
+        return (plain ? rounded.toPlainString() : rounded.movePointLeft(exponent).toPlainString() + "e" + exponent)
+                .replace('-', '\u2212');
     }
 }

@@ -7,7 +7,7 @@ import org.modestead.nodes.figure.Figure;
 
 /**
  * Which colour and stroke each layer of one figure gets: layers of one name share a colour, a band takes that of the
- * strong line it surrounds, and beside a strong line over time everything else is grey context.
+ * strong line it surrounds, and over time a strong line is broad, so that thin dark context drawn over it leaves both in sight.
  */
 record LayerStyles(Figure figure, List<String> names) {
     private static final float[][] DASHES = {{}, {9, 4}, {3, 3}, {12, 4, 3, 4}, {6, 3}, {2, 4}};
@@ -65,8 +65,8 @@ record LayerStyles(Figure figure, List<String> names) {
 
     BasicStroke stroke(Figure.Line line) {
         float width = switch (line.emphasis()) {
-            case STRONG -> 2.4f;
-            case NORMAL -> 1.5f;
+            case STRONG -> overTimeWithStrongLine() ? 3.4f : 2.4f;
+            case NORMAL -> overTimeWithStrongLine() ? 1.1f : 1.5f;
             case FAINT -> 1f;
         };
         float[] dash = figure.kind() == Figure.Kind.CURVES ? DASHES[index(line) % DASHES.length] : DASHES[0];

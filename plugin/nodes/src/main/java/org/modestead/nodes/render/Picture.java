@@ -12,9 +12,10 @@ import org.knowm.xchart.internal.chartpart.IChart;
  *
  * @param chart drawn first
  * @param overlay drawn over it
- * @param legend drawn below it
+ * @param labels names of categories below it, where they do not fit on its axis
+ * @param legend drawn below all
  */
-record Picture(Chart<?, ?> chart, Overlay overlay, Legend legend) implements IChart {
+record Picture(Chart<?, ?> chart, Overlay overlay, SlantedLabels labels, Legend legend) implements IChart {
 
     @Override
     public void paint(Graphics2D graphics, int width, int height) {
@@ -22,8 +23,10 @@ record Picture(Chart<?, ?> chart, Overlay overlay, Legend legend) implements ICh
         graphics.setRenderingHint(RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
         graphics.setColor(Palette.PAPER);
         graphics.fill(new Rectangle2D.Double(0, 0, width, height));
-        chart.paint(graphics, width, height - legend.height());
+        int chartHeight = height - legend.height() - labels.height();
+        chart.paint(graphics, width, chartHeight);
         overlay.paint(graphics);
+        labels.paint(graphics, width, chartHeight);
         legend.paint(graphics, width, height - legend.height());
     }
 
@@ -34,7 +37,7 @@ record Picture(Chart<?, ?> chart, Overlay overlay, Legend legend) implements ICh
 
     @Override
     public int getHeight() {
-        return chart.getHeight() + legend.height();
+        return chart.getHeight() + labels.height() + legend.height();
     }
 
     @Override

@@ -34,7 +34,7 @@ final class XyPlot {
         plot.draw();
         Overlay overlay = new Overlay(figure, Range.x(figure), Range.y(figure), plot.chart::getScreenXFromChart,
                 plot.chart::getScreenYFromChart, plot.times);
-        return new Picture(plot.chart, overlay, Legend.of(figure, Size.of(figure).width(),
+        return new Picture(plot.chart, overlay, SlantedLabels.NONE, Legend.of(figure, Size.of(figure).width(),
                 figure.kind() == Figure.Kind.CURVES));
     }
 
@@ -42,6 +42,10 @@ final class XyPlot {
         Range x = Range.x(figure);
         Range y = Range.y(figure);
         HouseStyle.apply(chart.getStyler(), figure);
+        chart.setCustomYAxisTickLabelsFormatter(HouseStyle::tick);
+        if (!times.dated()) {
+            chart.setCustomXAxisTickLabelsFormatter(HouseStyle::tick);
+        }
         times.apply(chart.getStyler());
         chart.getStyler().setXAxisMin(times.axis(x.low())).setXAxisMax(times.axis(x.high())).setYAxisMin(y.low())
                 .setYAxisMax(y.high());

@@ -68,10 +68,10 @@ final class ExistenceSection {
         List<Block> blocks = new ArrayList<>();
         blocks.add(new Heading("Mode " + mode.number() + " (" + ModeWords.headline(mode, source.unit()) + "): "
                 + one.grade().word()));
-        blocks.add(new Paragraph(VerdictWords.meaning(one.grade()) + " " + Sentence.of(one.sentence())
-                + " " + VerdictWords.advice(one.grade())));
         List<Finding> deciding = of(verdict, mode.number()).stream()
                 .filter(finding -> one.decidedBy().contains(finding.check())).toList();
+        String reasons = deciding.isEmpty() ? Sentence.of(one.sentence()) + " " : "";
+        blocks.add(new Paragraph(VerdictWords.meaning(one.grade()) + " " + reasons + VerdictWords.advice(one.grade())));
         if (!deciding.isEmpty()) {
             blocks.add(new Paragraph("Decided by:"));
             blocks.add(new Points(deciding.stream().map(ExistenceSection::told).toList()));

@@ -41,7 +41,7 @@ final class ForecastSkill {
         double naive = persistence(source, row.horizon()).orElseThrow().rmse();
         double skill = 1 - row.rmse() / naive;
         String figures = " (root mean square error " + Digits.figure(row.rmse()) + " against " + Digits.figure(naive) + ")";
-        String ahead = source.unit().span(row.horizon()) + " ahead the " + row.method() + " forecast errs ";
+        String ahead = source.unit().exactly(row.horizon()) + " ahead the " + row.method() + " forecast errs ";
         if (skill > 0) {
             return ahead + Digits.percent(skill) + " less than persistence" + figures + ".";
         }

@@ -89,9 +89,15 @@ public final class HtmlReport {
     }
 
     private static boolean small(List<Block> blocks, int i) {
-        return i < blocks.size() && blocks.get(i) instanceof Picture picture
-                && picture.figure().kind() != Figure.Kind.TIME_SERIES
-                && picture.figure().kind() != Figure.Kind.COMPLEX_PLANE;
+        return i < blocks.size() && blocks.get(i) instanceof Picture picture && width(picture.figure()).equals("small");
+    }
+
+    private static String width(Figure figure) {
+        return switch (figure.kind()) {
+            case TIME_SERIES -> "wide";
+            case COMPLEX_PLANE -> "middle";
+            case CURVES, SHAPES, BARS -> "small";
+        };
     }
 
     private void block(Block block) {
@@ -169,7 +175,7 @@ public final class HtmlReport {
         Figure numbered = new Figure("figure-" + figures, figure.kind(), figure.title(), figure.caption(), figure.x(),
                 figure.y(),
                 figure.layers());
-        out.append(figure.kind() == Figure.Kind.TIME_SERIES ? "<figure>\n" : "<figure class=\"middle\">\n")
+        out.append("<figure class=\"").append(width(figure)).append("\">\n")
                 .append(FigureRenderer.svg(numbered)).append("\n<figcaption>").append(escaped("Figure " + figures + "."
                 + " " + figure.caption()))
                 .append("</figcaption>\n</figure>\n");

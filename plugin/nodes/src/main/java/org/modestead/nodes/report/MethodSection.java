@@ -50,6 +50,13 @@ final class MethodSection {
     }
 
     private static KeyValues data(Snapshots snapshots, TimeUnit unit) {
+        List<Entry> told = snapshots.facts().stream().map(fact -> new Entry(Sentence.capital(fact.item()), fact.value()))
+                .toList();
+        return new KeyValues("Data and preparation", told.isEmpty() ? counted(snapshots, unit) : told);
+    }
+
+    /** What can be seen from the runs themselves, where nobody recorded what was done to them. */
+    private static List<Entry> counted(Snapshots snapshots, TimeUnit unit) {
         List<Entry> entries = new ArrayList<>();
         for (Snapshots.Part part : Snapshots.Part.values()) {
             List<Run> runs = snapshots.runs(part);
@@ -57,12 +64,11 @@ final class MethodSection {
             entries.add(new Entry(Sentence.capital(part.name().toLowerCase(Locale.ROOT)), runs.isEmpty() ? "none"
                     : Sentence.count(samples, "sample") + " in " + Sentence.count(runs.size(), "run")));
         }
-        entries.add(new Entry("Time step", snapshots.step().isPresent() ? unit.span(snapshots.step().getAsDouble())
+        entries.add(new Entry("Time step", snapshots.step().isPresent() ? unit.exactly(snapshots.step().getAsDouble())
                 : "uneven"));
         entries.add(new Entry("Delay coordinates", snapshots.delay().depth() == 1 ? "none" : snapshots.delay().depth()
                 + " samples stacked, " + Sentence.count(snapshots.delay().spacing(), "sample") + " apart"));
-        snapshots.facts().forEach(fact -> entries.add(new Entry(Sentence.capital(fact.item()), fact.value())));
-        return new KeyValues("Data and preparation", entries);
+        return entries;
     }
 
     private static Grid channels(Snapshots snapshots, TimeUnit unit) {
@@ -93,7 +99,7 @@ final class MethodSection {
 
     private static String evolution(Evolution evolution, TimeUnit unit) {
         if (evolution instanceof Evolution.StepMap map) {
-            return "one step of " + unit.span(map.step()) + "; frequencies above "
+            return "one step of " + unit.exactly(map.step()) + "; frequencies above "
                     + Digits.frequency(map.aliasingLimit(), unit.frequency()) + " appear folded";
         }
         double contraction = ((Evolution.Generator) evolution).contraction();

@@ -83,7 +83,7 @@ public final class ModeReportNode implements Node {
                         + " shapes and the account of their checks. The table lists more."), "", 1, 20, OptionalLong.of(4)),
                 new Setting.Whole(new Common(CHANNELS, "Channels drawn", "Report",
                 "How many channels, from the first one, are drawn in"
-                        + " time series."), "", 1, 20, OptionalLong.of(3)));
+                        + " time series."), "", 1, 20, OptionalLong.of(2)));
     }
 
     @Override

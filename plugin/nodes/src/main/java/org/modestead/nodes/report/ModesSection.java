@@ -65,10 +65,11 @@ final class ModesSection {
     private static List<String> row(ReportSource source, Mode mode) {
         String verdict = mode.constant() ? "constant, no evidence" : source.grade(mode).map(Grade::word).orElse("not"
                 + " judged");
-        return List.of(Integer.toString(mode.number()), Digits.figure(mode.frequency()),
-                Digits.figure(mode.naturalFrequency()),
-                mode.oscillates() ? Digits.figure(mode.period()) : "none", Digits.figure(mode.rate().re()),
-                Digits.percent(mode.dampingRatio()), Digits.figure(mode.doublingTime()), Digits.figure(mode.amplitude()),
-                Digits.percent(mode.energyShare()), verdict);
+        boolean oscillates = mode.oscillates();
+        return List.of(Integer.toString(mode.number()), oscillates ? Digits.figure(mode.frequency()) : "none",
+                oscillates ? Digits.figure(mode.naturalFrequency()) : "none",
+                oscillates ? Digits.figure(mode.period()) : "none",
+                Digits.figure(mode.rate().re()), Digits.percent(mode.dampingRatio()), Digits.figure(mode.doublingTime()),
+                Digits.figure(mode.amplitude()), Digits.percent(mode.energyShare()), verdict);
     }
 }

@@ -42,6 +42,7 @@ final class ReportStyle {
             figure svg{display:block;width:100%;height:auto;background:#fff;border:1px solid var(--rule);border-radius:4px}
             figcaption{font-size:.92rem;margin-top:.4rem;max-width:52rem}
             .middle{max-width:46rem}
+            .small{max-width:32rem}
             .pair{display:grid;grid-template-columns:1fr 1fr;gap:0 1.5rem}
             footer{margin-top:3rem;padding-bottom:2rem;font-size:.88rem}
             @media (max-width:48rem){.pair{grid-template-columns:1fr}nav ol{columns:1}}
@@ -60,7 +61,7 @@ final class ReportStyle {
             table{font-size:8.5pt;min-width:0}
             th,td{padding:.2rem .5rem .2rem .3rem}
             tbody .number{white-space:normal}
-            .middle{max-width:32rem}
+            .middle,.small{max-width:32rem}
             a{color:inherit;text-decoration:none}
             """;
 

@@ -9,6 +9,7 @@ import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.ModeVerdict;
+import org.modestead.engine.wellposed.Verdict;
 import org.modestead.nodes.document.ReportDocument.Block;
 import org.modestead.nodes.document.ReportDocument.Callout;
 import org.modestead.nodes.document.ReportDocument.Paragraph;
@@ -50,8 +51,8 @@ final class SummarySection {
 
     private static String fitted(ReportSource source) {
         String data = source.snapshots().map(SummarySection::data).orElse("");
-        String method = source.operator().map(operator -> Sentence.of(operator.method()) + " Rank " + operator.rank() + ": "
-                + Sentence.of(operator.rankChoice())).orElse("The spectrum has rank " + source.spectrum().rank()
+        String method = source.operator().map(operator -> Sentence.of(operator.method()) + " Rank " + operator.rank() + " ("
+                + operator.rankChoice() + ").").orElse("The spectrum has rank " + source.spectrum().rank()
                 + "; what it was fitted with was not handed to this report.");
         return data.isEmpty() ? method : data + " " + method;
     }
@@ -80,17 +81,26 @@ final class SummarySection {
     }
 
     private static Callout verdict(ReportSource source) {
-        return source.verdict().map(verdict -> told(verdict.overall())).orElseGet(() -> new Callout(Tone.CAUTION,
+        return source.verdict().map(SummarySection::told).orElseGet(() -> new Callout(Tone.CAUTION,
                 "it was not judged whether these modes exist", List.of("The figures below may be the weights of one"
                 + " projection"
                 + " only. Connect a Well-posedness Checker before any of them is reported as a mode.")));
     }
 
-    private static Callout told(ModeVerdict overall) {
-        Grade grade = overall.grade();
-        return new Callout(ExistenceSection.tone(grade), VerdictWords.headline(grade),
-                List.of(VerdictWords.overall(grade), Sentence.of(overall.sentence()),
-                VerdictWords.advice(grade)));
+    private static Callout told(Verdict verdict) {
+        Grade grade = verdict.overall().grade();
+        List<String> same = verdict.modes().stream().filter(mode -> mode.counts() && mode.grade() == grade)
+                .map(mode -> Integer.toString(mode.mode())).toList();
+        if (same.isEmpty()) {
+            return new Callout(ExistenceSection.tone(grade), VerdictWords.headline(grade),
+                    List.of(Sentence.of(verdict.overall().sentence()), VerdictWords.advice(grade)));
+        }
+        long counted = verdict.modes().stream().filter(ModeVerdict::counts).count();
+        return new Callout(ExistenceSection.tone(grade), VerdictWords.headline(grade), List.of(VerdictWords.overall(grade),
+                "Of " + Sentence.count(counted, "mode") + " that carry a stated share of the signal " + same.size()
+                        + (same.size() == 1 ? " has" : " have") + " this verdict: "
+                        + (same.size() == 1 ? "mode " : "modes ") + String.join(", ", same) + ".",
+                        VerdictWords.advice(grade)));
     }
 
     private static String headline(ReportSource source, Mode mode) {

@@ -36,4 +36,9 @@ public record TimeUnit(String symbol) {
     public String span(double time) {
         return Digits.figure(time, name());
     }
+
+    /** Returns a length of time that was set, such as a step, with its unit and without zeros that say nothing. */
+    public String exactly(double time) {
+        return Digits.cell(time) + " " + name();
+    }
 }

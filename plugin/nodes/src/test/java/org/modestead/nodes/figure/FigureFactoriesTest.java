@@ -14,6 +14,7 @@ import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.Route;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.engine.wellposed.Grade;
@@ -69,6 +70,17 @@ class FigureFactoriesTest {
     }
 
     @Test
+    void ofRunsAtTheSameTimesOnlyTheEarliestIsDrawnAndTheCaptionSaysSo() {
+        Snapshots one = ReportFixture.snapshots();
+        List<Run> same = List.of(one.training().get(0), one.training().get(0));
+        Figure figure = RecordingFigure.figure(new Snapshots(one.channels(), one.inputs(), one.time(), same, List.of(),
+                List.of(),
+                one.step(), one.delay(), one.preparation(), List.of(), List.of()), 1);
+        assertEquals(1, figure.layers().size());
+        assertTrue(figure.caption().endsWith("Drawn are 1 of 2 runs; the others lie at the same times."), figure.caption());
+    }
+
+    @Test
     void timesCountedInYearsAreDrawnAsDates() {
         TimeAxis years = new TimeAxis(TimeAxis.Kind.DATE, "year");
         LocalDate first = LocalDate.of(1990, 1, 1);
@@ -96,7 +108,7 @@ class FigureFactoriesTest {
         List<Figure> figures = ForecastFigures.figures(snapshots, ReportFixture.forecast(snapshots), 1);
         assertEquals(List.of("forecast-1", "reconstruction-1"), figures.stream().map(Figure::id).toList());
         assertTrue(figures.get(0).layers().stream().anyMatch(Figure.Band.class::isInstance));
-        Figure.Line history = (Figure.Line) figures.get(0).layers().get(1);
+        Figure.Line history = (Figure.Line) figures.get(0).layers().get(2);
         double forecastLength = 99 * 0.05;
         // The first sample inside the window lies at most one step of 0.05 after its edge.
         assertEquals(25 - 2 * forecastLength, history.x()[0], 0.05);

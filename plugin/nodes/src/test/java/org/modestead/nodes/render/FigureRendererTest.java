@@ -12,8 +12,10 @@ import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.io.StringReader;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.regex.Pattern;
 import javax.imageio.ImageIO;
 import javax.xml.parsers.DocumentBuilderFactory;
 import org.junit.jupiter.api.Test;
@@ -74,11 +76,11 @@ class FigureRendererTest {
     void idsStartWithTheFiguresIdSoThatManyFitOnOnePage() {
         Figure figure = figures().get(1);
         String svg = FigureRenderer.svg(figure);
-        List<String> ids = java.util.regex.Pattern.compile(" id=\"([^\"]*)\"").matcher(svg).results().map(m -> m.group(1))
+        List<String> ids = Pattern.compile(" id=\"([^\"]*)\"").matcher(svg).results().map(m -> m.group(1))
                 .toList();
         assertFalse(ids.isEmpty());
         assertTrue(ids.stream().allMatch(id -> id.startsWith(figure.id() + "-")));
-        assertTrue(java.util.regex.Pattern.compile("url\\(#([^)]*)\\)").matcher(svg).results()
+        assertTrue(Pattern.compile("url\\(#([^)]*)\\)").matcher(svg).results()
                 .allMatch(m -> ids.contains(m.group(1))));
     }
 
@@ -104,10 +106,10 @@ class FigureRendererTest {
     @Test
     void aLineOfManyPointsIsOnePathSoThatDashesRunThrough() {
         double[] x = new double[500];
-        java.util.Arrays.setAll(x, i -> i);
+        Arrays.setAll(x, i -> i);
         String with = FigureRenderer.svg(curves(Figure.Axis.linear("y"), List.of(line(x, x))));
         assertFalse(with.contains("<line"));
-        assertTrue(java.util.regex.Pattern.compile("<path[^>]*( L[^ ]*){499}").matcher(with).find());
+        assertTrue(Pattern.compile("<path[^>]*( L[^ ]*){499}").matcher(with).find());
     }
 
     @Test
@@ -123,6 +125,27 @@ class FigureRendererTest {
     }
 
     @Test
+    void everyNameOfACrowdedAxisFindsItsPlaceBelowThePlot() {
+        List<String> names = List.of("suction_pressure", "discharge_pressure", "flow", "sump_level", "motor_current",
+                "bearing_vibration");
+        Figure level = bars(List.of("a", "b", "c", "d", "e", "f"));
+        Figure crowded = bars(names);
+        assertTrue(SlantedLabels.NONE.height() == 0 && new SlantedLabels(names, "channel", x -> x).height() > 40);
+        assertFalse(FigureRenderer.svg(level).contains("viewBox=\"" + viewBox(crowded) + "\""));
+    }
+
+    @Test
+    void ticksAreWrittenWithoutTheErrorsOfStepping() {
+        assertEquals("0.3", HouseStyle.tick(0.1 + 0.2));
+        assertEquals("\u22120.05", HouseStyle.tick(-0.05));
+        assertEquals("100000", HouseStyle.tick(1e5));
+        assertEquals("1e6", HouseStyle.tick(1e6));
+        assertEquals("0.0001", HouseStyle.tick(1e-4));
+        assertEquals("1.5e\u22127", HouseStyle.tick(1.5e-7));
+        assertEquals("0", HouseStyle.tick(-0.0));
+    }
+
+    @Test
     void barsWithoutCategoriesAreRefused() {
         Figure figure = curves(Figure.Axis.linear("y"), List.of(new Figure.Bars("", "", new double[] {1})));
         assertThrows(IllegalArgumentException.class, () -> FigureRenderer.svg(figure));
@@ -134,5 +157,18 @@ class FigureRendererTest {
 
     private static Figure curves(Figure.Axis y, List<Figure.Layer> layers) {
         return new Figure("curves", Figure.Kind.CURVES, "Curves", "What they show.", Figure.Axis.linear("x"), y, layers);
+    }
+
+    private static Figure bars(List<String> names) {
+        double[] heights = new double[names.size()];
+        Arrays.fill(heights, 1);
+        return new Figure("bars", Figure.Kind.SHAPES, "Bars", "How high.", Figure.Axis.categories("channel", names),
+                Figure.Axis.linear("height"), List.of(new Figure.Bars("", "", heights)));
+    }
+
+    private static String viewBox(Figure figure) {
+        String svg = FigureRenderer.svg(figure);
+        int from = svg.indexOf("viewBox=\"") + "viewBox=\"".length();
+        return svg.substring(from, svg.indexOf('"', from));
     }
 }

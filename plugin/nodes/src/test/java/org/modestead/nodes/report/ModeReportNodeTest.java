@@ -68,8 +68,10 @@ class ModeReportNodeTest {
                 summary);
         assertTrue(summary.contains("3 of 5 modes carry 100 % of the signal, the constant part among them."), summary);
         assertTrue(summary.contains("the modes drift"), summary);
-        assertTrue(summary.contains("0.500 s ahead the modal forecast errs 50 % less than persistence"), summary);
-        assertTrue(summary.contains("2.00 s ahead the modal forecast errs 33 % more than persistence"), summary);
+        assertTrue(summary.contains("Of 2 modes that carry a stated share of the signal 1 has this verdict: mode 2."),
+                summary);
+        assertTrue(summary.contains("0.5 s ahead the modal forecast errs 50 % less than persistence"), summary);
+        assertTrue(summary.contains("2 s ahead the modal forecast errs 33 % more than persistence"), summary);
         assertTrue(summary.contains("Recorded after the repair."), summary);
     }
 

@@ -1,6 +1,7 @@
 package org.modestead.nodes.report;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.OptionalDouble;
 import java.util.Random;
@@ -106,7 +107,7 @@ public final class ReportFixture {
     private static Run part(double[] times, DMatrixRMaj values, int from, int to) {
         DMatrixRMaj own = new DMatrixRMaj(to - from, values.numCols);
         System.arraycopy(values.data, from * values.numCols, own.data, 0, own.data.length);
-        return new Run("night", java.util.Arrays.copyOfRange(times, from, to), own);
+        return new Run("night", Arrays.copyOfRange(times, from, to), own);
     }
 
     /** A forecast of the held-out part with bands, a reconstruction of the rest, and scores that beat persistence. */

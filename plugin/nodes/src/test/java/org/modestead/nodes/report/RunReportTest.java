@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.regex.Pattern;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.wellposed.Grade;
@@ -90,7 +91,7 @@ class RunReportTest {
         StepAccount second = new StepAccount("second", "Mode Report", Stage.REPORT, reporter().result(), Map.of());
         String page = HtmlReport.write(RunReport.assemble("pumps", List.of(reporter(), second), VERSIONS));
         assertTrue(page.contains("Summary (second)"));
-        List<String> ids = java.util.regex.Pattern.compile("\\sid=\"([^\"]*)\"").matcher(page).results()
+        List<String> ids = Pattern.compile("\\sid=\"([^\"]*)\"").matcher(page).results()
                 .map(m -> m.group(1)).toList();
         assertEquals(ids.stream().distinct().count(), ids.size());
         assertFalse(page.contains("null"));
