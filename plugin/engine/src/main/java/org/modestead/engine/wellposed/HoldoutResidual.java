@@ -29,8 +29,8 @@ public final class HoldoutResidual implements Check {
 
     private static String sentence(String where, double value) {
         return Double.isNaN(value)
-                ? String.format(Locale.ROOT, "On %s it is weaker than %.0f %% of its size on the training runs, so they cannot judge it:"
-                        + " hold out a run that excites it.", where, 100 * Rung.EXCITED)
+                ? String.format(Locale.ROOT, "On %s it is weaker than %.0f %% of its size on the training runs, so they"
+                        + " cannot judge it: hold out a run that excites it.", where, 100 * Rung.EXCITED)
                 : String.format(Locale.ROOT, "On %s it misses its own rule of motion by %.3g of its size.", where, value);
     }
 }

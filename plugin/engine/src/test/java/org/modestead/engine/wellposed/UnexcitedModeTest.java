@@ -52,14 +52,17 @@ class UnexcitedModeTest {
             training.add(run("training " + i, 1 + 0.2 * i, i == 2 ? 0.1 : 0, random));
         }
         Snapshots snapshots = new Snapshots(List.of(new Channel("a", ""), new Channel("b", "")), List.of(),
-                new TimeAxis(TimeAxis.Kind.NUMBER, "s"), training, List.of(), List.of(run("held out", 1.1, heldOutExcitation, random)),
+                new TimeAxis(TimeAxis.Kind.NUMBER, "s"), training, List.of(),
+                        List.of(run("held out", 1.1, heldOutExcitation, random)),
                 OptionalDouble.of(STEP), new DelayEmbedding(6, 1), Preparation.identity(2), List.of(), List.of());
-        FittedOperator operator = OperatorFitter.fit(snapshots, new LinearEstimator(), new RankRule.Fixed(2), 0, Progress.NONE);
+        FittedOperator operator = OperatorFitter.fit(snapshots, new LinearEstimator(), new RankRule.Fixed(2), 0,
+                Progress.NONE);
         Spectrum spectrum = SpectrumExtractor.extract(operator, Progress.NONE);
         Mode growth = spectrum.modes().stream().filter(mode -> mode.rate().re() > 0).findFirst().orElseThrow();
         // closed form; noise of 1e-3 over 600 states leaves well under a hundredth
         assertEquals(GROWTH, growth.rate().re(), 0.01);
-        Verdict verdict = WellPosedness.judge(snapshots, operator, spectrum, JudgeSettings.DEFAULT.withLadder(2, 5), Progress.NONE);
+        Verdict verdict = WellPosedness.judge(snapshots, operator, spectrum, JudgeSettings.DEFAULT.withLadder(2, 5),
+                Progress.NONE);
         return verdict.of(growth.number()).orElseThrow();
     }
 

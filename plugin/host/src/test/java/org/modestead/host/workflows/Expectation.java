@@ -23,7 +23,8 @@ import org.modestead.nodes.table.Table;
  * @param atMost largest number allowed, instead of {@code expected}
  * @param reason where the figure comes from and why the tolerance is what it is
  */
-record Expectation(String step, String table, Map<String, JsonNode> where, String column, JsonNode expected, double tolerance,
+record Expectation(String step, String table, Map<String, JsonNode> where, String column, JsonNode expected,
+        double tolerance,
         @JsonProperty("at-least") Double atLeast, @JsonProperty("at-most") Double atMost, String reason) {
 
     /**
@@ -58,7 +59,8 @@ record Expectation(String step, String table, Map<String, JsonNode> where, Strin
             return Optional.of("no column " + column + " among " + row.keySet());
         }
         boolean met = isText() ? isSaid(cell) : isWithin(cell);
-        return met ? Optional.empty() : Optional.of(column + " is " + cell + ", wanted " + wanted() + " (" + reason + "); row " + row);
+        return met ? Optional.empty() : Optional.of(column + " is " + cell + ", wanted " + wanted() + " (" + reason
+                + "); row " + row);
     }
 
     private boolean isText() {
@@ -75,11 +77,13 @@ record Expectation(String step, String table, Map<String, JsonNode> where, Strin
     }
 
     private double low() {
-        return expected != null ? expected.asDouble() - tolerance : Optional.ofNullable(atLeast).orElse(Double.NEGATIVE_INFINITY);
+        return expected != null ? expected.asDouble() - tolerance
+                : Optional.ofNullable(atLeast).orElse(Double.NEGATIVE_INFINITY);
     }
 
     private double high() {
-        return expected != null ? expected.asDouble() + tolerance : Optional.ofNullable(atMost).orElse(Double.POSITIVE_INFINITY);
+        return expected != null ? expected.asDouble() + tolerance
+                : Optional.ofNullable(atMost).orElse(Double.POSITIVE_INFINITY);
     }
 
     private String wanted() {

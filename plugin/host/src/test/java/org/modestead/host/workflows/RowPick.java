@@ -23,11 +23,13 @@ final class RowPick {
      */
     static Map<String, String> row(Table table, Map<String, JsonNode> where) {
         List<Map<String, String>> rows = rows(table).stream().filter(row -> where.entrySet().stream()
-                .allMatch(wanted -> wanted.getValue().isFloatingPointNumber() || isMet(row.get(wanted.getKey()), wanted.getValue())))
+                .allMatch(wanted -> wanted.getValue().isFloatingPointNumber()
+                        || isMet(row.get(wanted.getKey()), wanted.getValue())))
                 .toList();
         boolean nearest = where.values().stream().anyMatch(JsonNode::isFloatingPointNumber);
         if (rows.isEmpty() || rows.size() > 1 && !nearest) {
-            throw new AssertionError(rows.size() + " rows of " + table.origin() + " meet " + where + " among " + rows(table));
+            throw new AssertionError(rows.size() + " rows of " + table.origin() + " meet " + where + " among "
+                    + rows(table));
         }
         return rows.stream().min(Comparator.comparingDouble(row -> distance(row, where))).orElseThrow();
     }

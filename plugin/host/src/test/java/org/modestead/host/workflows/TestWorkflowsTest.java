@@ -25,7 +25,8 @@ import org.modestead.nodes.table.Table;
 class TestWorkflowsTest {
 
     /** Surefire names the module's folder; an IDE starts in it. */
-    private static final Path FOLDERS = Path.of(System.getProperty("basedir", "")).resolve("../../test-workflows").toAbsolutePath().normalize();
+    private static final Path FOLDERS = Path.of(System.getProperty("basedir", ""), "../../test-workflows")
+            .toAbsolutePath().normalize();
     private static final String EXPECTED = "expected.json";
 
     @TempDir
@@ -87,7 +88,8 @@ class TestWorkflowsTest {
 
     private static Table table(RunResult run, Expectation expected) {
         StepOutcome outcome = run.outcomes().get(expected.step());
-        if (outcome instanceof StepOutcome.Done done && done.result().outputs().get(expected.table()) instanceof Table table) {
+        if (outcome instanceof StepOutcome.Done done
+                && done.result().outputs().get(expected.table()) instanceof Table table) {
             return table;
         }
         throw new AssertionError("there is no table " + expected.step() + "." + expected.table() + " among the results of "

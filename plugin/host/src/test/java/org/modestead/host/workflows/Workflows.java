@@ -19,7 +19,8 @@ final class Workflows {
 
     /** Checks and runs a workflow; what is wrong with it fails the test. */
     static RunResult run(Path workflow, Path target) {
-        WorkflowChecker.Outcome checked = new WorkflowChecker(NodeCatalog.load(List.of(Workflows.class.getClassLoader()))).check(WorkflowFile.read(workflow), List.of());
+        NodeCatalog catalog = NodeCatalog.load(List.of(Workflows.class.getClassLoader()));
+        WorkflowChecker.Outcome checked = new WorkflowChecker(catalog).check(WorkflowFile.read(workflow), List.of());
         return checked.plan().map(plan -> WorkflowRunner.once().run(plan, target, RunListener.NONE, new CancelSwitch()))
                 .orElseThrow(() -> new AssertionError(checked.problems().toString()));
     }

@@ -22,7 +22,8 @@ import org.modestead.nodes.table.TableSchema;
 record FlowRuns(Flow flow, int runs, double duration, int samples, double noise, long seed) {
 
     static TableSchema schema() {
-        return TableSchema.of(new Column("run", CellType.TEXT), new Column("time", CellType.DOUBLE), new Column("x", CellType.DOUBLE));
+        return TableSchema.of(new Column("run", CellType.TEXT), new Column("time", CellType.DOUBLE),
+                new Column("x", CellType.DOUBLE));
     }
 
     /** Returns the start of a run, counted from 0. */

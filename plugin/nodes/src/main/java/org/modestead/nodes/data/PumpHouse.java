@@ -31,12 +31,13 @@ import org.modestead.nodes.table.TableSchema;
  * @param seed of all random numbers
  */
 record PumpHouse(
-        int runs, double duration, double rate, double jitter, double noise, int unstableRuns, int gaps, int dropouts, long seed) {
+        int runs, double duration, double rate, double jitter, double noise, int unstableRuns, int gaps, int dropouts,
+        long seed) {
 
-    static final List<Channel> CHANNELS = List.of(new Channel("suction_pressure", "bar"), new Channel("discharge_pressure", "bar"),
-            new Channel("flow", "m3/h"), new Channel("sump_level", "m"), new Channel("motor_current", "A"),
-            new Channel("bearing_vibration", "mm/s"), new Channel("casing_vibration", "mm/s"),
-            new Channel("bearing_temperature", "degC"));
+    static final List<Channel> CHANNELS = List.of(new Channel("suction_pressure", "bar"),
+            new Channel("discharge_pressure", "bar"), new Channel("flow", "m3/h"), new Channel("sump_level", "m"),
+            new Channel("motor_current", "A"), new Channel("bearing_vibration", "mm/s"),
+            new Channel("casing_vibration", "mm/s"), new Channel("bearing_temperature", "degC"));
 
     private static final TrueMode SURGE = TrueMode.oscillation("surge", 0.62, 0.02);
     private static final TrueMode DRAINING = TrueMode.decay("draining", 25);
@@ -76,7 +77,8 @@ record PumpHouse(
 
     /** Returns the columns: run, time in seconds, one a channel. */
     static TableSchema schema() {
-        List<Column> columns = new ArrayList<>(List.of(new Column("run", CellType.TEXT), new Column("time", CellType.DOUBLE)));
+        List<Column> columns = new ArrayList<>(List.of(new Column("run", CellType.TEXT),
+                new Column("time", CellType.DOUBLE)));
         CHANNELS.forEach(channel -> columns.add(new Column(channel.label(), CellType.DOUBLE)));
         return new TableSchema(columns);
     }

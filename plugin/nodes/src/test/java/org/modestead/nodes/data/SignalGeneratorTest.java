@@ -64,7 +64,8 @@ class SignalGeneratorTest {
         Map<String, List<double[]>> runs = numbers(table(with(CLEAN, "runs", 4)));
         List<TrueMode> modes = station(4).truth();
         runs.forEach((run, rows) -> {
-            // half a last digit of each instrument; least squares moves errors about, by less than half of it with 9 functions
+            // half a last digit of each instrument; least squares moves errors about by less
+            // than half of that with 9 functions
             double[] roundings = {5e-5, 5e-5, 5e-3, 5e-5, 5e-4, 5e-5, 5e-5, 5e-4};
             for (int c = 0; c < roundings.length; c++) {
                 assertTrue(worstResidual(rows, c, modes) < 1.5 * roundings[c], run + ", channel " + c);
