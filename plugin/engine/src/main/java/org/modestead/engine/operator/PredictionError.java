@@ -9,7 +9,8 @@ import org.modestead.engine.recording.StateRun;
 
 /**
  * How well a compression predicts the state one sampling step ahead:
- * {@code ‖y - q(x)ᵀ P <g, q>‖ / ‖y - mean y‖} over given runs.
+ * {@code ‖y - q(x)ᵀ P <g, q>‖ / ‖y - mean y‖} over given runs. On uneven times every step of a run is taken for its
+ * mean step, so that jitter of the steps sets a floor that all candidates share.
  */
 final class PredictionError {
 

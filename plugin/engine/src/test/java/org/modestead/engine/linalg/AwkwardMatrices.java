@@ -134,7 +134,8 @@ final class AwkwardMatrices {
     }
 
     private static DMatrixRMaj twoRotations() {
-        return new DMatrixRMaj(new double[][] {{0.6, -0.8, 0.3, 0}, {0.8, 0.6, 0, 0.3}, {0, 0, 0.6, -0.8}, {0, 0, 0.8, 0.6}});
+        return new DMatrixRMaj(new double[][] {{0.6, -0.8, 0.3, 0}, {0.8, 0.6, 0, 0.3}, {0, 0, 0.6, -0.8},
+                {0, 0, 0.8, 0.6}});
     }
 
     private static DMatrixRMaj bordered() {

@@ -59,7 +59,8 @@ class ComplexSystemTest {
     @Test
     void conditionOfOrthonormalColumnsIsOne() {
         double s = Math.sqrt(0.5);
-        ZMatrixRMaj v = ComplexMatrices.joined(new DMatrixRMaj(new double[][] {{s, s}, {0, 0}}), new DMatrixRMaj(new double[][] {{0, 0}, {s, -s}}));
+        ZMatrixRMaj v = ComplexMatrices.joined(new DMatrixRMaj(new double[][] {{s, s}, {0, 0}}),
+                new DMatrixRMaj(new double[][] {{0, 0}, {s, -s}}));
         assertEquals(1, ComplexSystem.of(v).condition(), 1e-14);
     }
 }

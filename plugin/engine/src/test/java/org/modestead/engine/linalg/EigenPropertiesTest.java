@@ -14,7 +14,8 @@ class EigenPropertiesTest {
 
     @Property(tries = 150)
     void residualsAreAFewRoundingErrorsAtAnySizeAndScale(
-            @ForAll long seed, @ForAll @IntRange(min = 1, max = 60) int n, @ForAll @DoubleRange(min = -150, max = 150) double exponent) {
+            @ForAll long seed, @ForAll @IntRange(min = 1, max = 60) int n,
+                    @ForAll @DoubleRange(min = -150, max = 150) double exponent) {
         DMatrixRMaj a = AwkwardMatrices.scaled(AwkwardMatrices.random(n, n, seed), Math.pow(10, exponent));
         assertTrue(AwkwardMatrices.eigenRatio(a, LinearAlgebra.installed().eigen(a)) < 30);
     }
@@ -28,7 +29,8 @@ class EigenPropertiesTest {
     }
 
     @Property(tries = 100)
-    void blockwiseRepeatedSparseIntegersNeverBreakTheIteration(@ForAll long seed, @ForAll @IntRange(min = 2, max = 12) int n) {
+    void blockwiseRepeatedSparseIntegersNeverBreakTheIteration(@ForAll long seed,
+            @ForAll @IntRange(min = 2, max = 12) int n) {
         java.util.Random random = new java.util.Random(seed);
         DMatrixRMaj a = new DMatrixRMaj(n, n);
         for (int i = 0; i < n * n; i++) {

@@ -24,8 +24,9 @@ import org.junit.jupiter.api.TestFactory;
 import org.modestead.engine.FitFault;
 
 /**
- * What every implementation of {@link LinearAlgebra} must do. Numbers are judged by scaled residuals: below this threshold an
- * answer is as good as one rounding error in each entry of the input (common practice; LAPACK's own tests use 20 to 50).
+ * What every implementation of {@link LinearAlgebra} must do. Numbers are judged by scaled residuals: below this
+ * threshold an answer is as good as one rounding error in each entry of the input (common practice; LAPACK's own tests
+ * use 20 to 50).
  */
 abstract class LinearAlgebraContract {
 
@@ -70,7 +71,8 @@ abstract class LinearAlgebraContract {
                 assertTrue(eigen.values().get(j).im() > 0, "the positive imaginary part comes first");
                 assertEquals(eigen.values().get(j).conj(), eigen.values().get(j + 1));
                 for (int i = 0; i < entry.getValue().numRows; i++) {
-                    assertEquals(ComplexMatrices.entry(eigen.vectors(), i, j).conj(), ComplexMatrices.entry(eigen.vectors(), i, j + 1));
+                    assertEquals(ComplexMatrices.entry(eigen.vectors(), i, j).conj(),
+                            ComplexMatrices.entry(eigen.vectors(), i, j + 1));
                 }
                 j++;
             }
@@ -97,7 +99,8 @@ abstract class LinearAlgebraContract {
 
     @Test
     void eigenvaluesOfACompanionMatrixAreTheRoots() {
-        List<Complex> values = algebra().eigen(AwkwardMatrices.companion(8)).values().stream().sorted(Comparator.comparingDouble(Complex::re))
+        List<Complex> values = algebra().eigen(AwkwardMatrices.companion(8)).values().stream()
+                .sorted(Comparator.comparingDouble(Complex::re))
                 .toList();
         for (int k = 0; k < 8; k++) {
             // closed form; roots 1..8 have condition numbers up to 1e6
@@ -171,7 +174,8 @@ abstract class LinearAlgebraContract {
     @Test
     void singularValuesAgreeWithASecondComputation() {
         DMatrixRMaj a = AwkwardMatrices.random(50, 31, 23);
-        assertArrayEquals(new SingularValueDecomposition(hipparchus(a)).getSingularValues(), algebra().svd(a).values(), 1e-12);
+        assertArrayEquals(new SingularValueDecomposition(hipparchus(a)).getSingularValues(), algebra().svd(a).values(),
+                1e-12);
     }
 
     @Test
@@ -239,7 +243,8 @@ abstract class LinearAlgebraContract {
     }
 
     private static List<Complex> sorted(List<Complex> values) {
-        return values.stream().sorted(Comparator.comparingDouble((Complex z) -> Math.rint(z.re() * 1e8)).thenComparingDouble(Complex::im)).toList();
+        return values.stream().sorted(Comparator.comparingDouble((Complex z) ->
+                Math.rint(z.re() * 1e8)).thenComparingDouble(Complex::im)).toList();
     }
 
     private static RealMatrix hipparchus(DMatrixRMaj a) {

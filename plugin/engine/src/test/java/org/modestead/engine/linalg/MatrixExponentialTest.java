@@ -54,7 +54,8 @@ class MatrixExponentialTest {
                 return times(a, y);
             }
         };
-        double[] integrated = new DormandPrince853Integrator(1e-8, 0.1, 1e-13, 1e-13).integrate(equation, new ODEState(0, start), 1.5)
+        double[] integrated = new DormandPrince853Integrator(1e-8, 0.1, 1e-13, 1e-13).integrate(equation,
+                new ODEState(0, start), 1.5)
                 .getPrimaryState();
         double[] carried = times(MatrixExponential.of(Matrices.scaled(a, 1.5)), start);
         for (int i = 0; i < n; i++) {

@@ -24,7 +24,8 @@ class DefectiveSignalsTest {
     }
 
     private static Snapshots fadingRamp(int depth) {
-        return Motions.snapshots(0.1, depth, List.of(Motions.run("a", 60, 0.1, t -> new double[] {t * Math.exp(-t)})), List.of());
+        return Motions.snapshots(0.1, depth, List.of(Motions.run("a", 60, 0.1, t -> new double[] {t * Math.exp(-t)})),
+                List.of());
     }
 
     @ParameterizedTest

@@ -18,7 +18,8 @@ class ModeShapesTest {
 
     private static Snapshots travelling() {
         // 4 cos(wt), 2 cos(wt - π/3), 1 cos(wt + 2.5)
-        return Motions.snapshots(OptionalDouble.of(STEP), new DelayEmbedding(3, 2), List.of(Motions.run("a", 120, STEP, t -> new double[] {
+        return Motions.snapshots(OptionalDouble.of(STEP), new DelayEmbedding(3, 2),
+                List.of(Motions.run("a", 120, STEP, t -> new double[] {
             4 * Math.cos(W * t), 2 * Math.cos(W * t - Math.PI / 3), Math.cos(W * t + 2.5)})), List.of());
     }
 
@@ -64,6 +65,7 @@ class ModeShapesTest {
         Snapshots snapshots = Motions.snapshots(STEP, 1, List.of(
                 Motions.run("a", 40, STEP, t -> new double[] {Math.exp(-t), -0.5 * Math.exp(-t)})), List.of());
         Spectrum spectrum = Motions.spectrum(snapshots, new LinearEstimator(), 1);
-        assertEquals(Math.PI, ModeShapes.of(spectrum, spectrum.modes().get(0), Preparation.identity(2)).get(1).phase(), 1e-12);
+        assertEquals(Math.PI, ModeShapes.of(spectrum, spectrum.modes().get(0), Preparation.identity(2)).get(1).phase(),
+                1e-12);
     }
 }

@@ -76,11 +76,13 @@ class SpectrumExtractorTest {
             ModalExpansion expansion = ModalExpansion.of(operator.chosen());
             for (double tau : new double[] {0.1, 0.37, 2}) {
                 ZMatrixRMaj before = expansion.eigenfunctions(new DMatrixRMaj(new double[][] {start}));
-                ZMatrixRMaj after = expansion.eigenfunctions(new DMatrixRMaj(new double[][] {rotation(start[0], start[1], tau)}));
+                ZMatrixRMaj after = expansion.eigenfunctions(new DMatrixRMaj(new double[][] {rotation(start[0], start[1],
+                        tau)}));
                 for (int j = 0; j < expansion.rank(); j++) {
                     // step maps keep 1e-9; the rate of a generator is off by the quadrature, times tau
                     Complex expected = expansion.rates().get(j).times(tau).exp().times(ComplexMatrices.entry(before, 0, j));
-                    assertEquals(0, ComplexMatrices.entry(after, 0, j).minus(expected).abs(), 1e-4, estimator.describe() + ", tau " + tau);
+                    assertEquals(0, ComplexMatrices.entry(after, 0, j).minus(expected).abs(), 1e-4,
+                            estimator.describe() + ", tau " + tau);
                 }
             }
         }
@@ -128,10 +130,12 @@ class SpectrumExtractorTest {
 
     @Test
     void motionAtTheSamplingLimitIsDoubted() {
-        Snapshots near = Motions.snapshots(1, 4, List.of(Motions.run("a", 100, 1, t -> new double[] {Math.cos(0.97 * Math.PI * t + 0.4)})),
+        Snapshots near = Motions.snapshots(1, 4, List.of(Motions.run("a", 100, 1,
+                t -> new double[] {Math.cos(0.97 * Math.PI * t + 0.4)})),
                 List.of());
         assertDoubted(near, "aliasing", true);
-        Snapshots slow = Motions.snapshots(1, 4, List.of(Motions.run("a", 100, 1, t -> new double[] {Math.cos(0.5 * Math.PI * t + 0.4)})),
+        Snapshots slow = Motions.snapshots(1, 4, List.of(Motions.run("a", 100, 1,
+                t -> new double[] {Math.cos(0.5 * Math.PI * t + 0.4)})),
                 List.of());
         assertDoubted(slow, "aliasing", false);
     }
@@ -139,7 +143,8 @@ class SpectrumExtractorTest {
     @Test
     void aNegativeMultiplierIsDoubted() {
         // (-0.5)^k, CHECKS C2.18: no real motion in continuous time at this step
-        Snapshots alternating = Motions.snapshots(1, 1, List.of(Motions.run("a", 12, 1, t -> new double[] {Math.pow(-0.5, Math.rint(t))})),
+        Snapshots alternating = Motions.snapshots(1, 1, List.of(Motions.run("a", 12, 1,
+                t -> new double[] {Math.pow(-0.5, Math.rint(t))})),
                 List.of());
         assertDoubted(alternating, "negative-multiplier", true);
         Mode mode = Motions.spectrum(alternating, new LinearEstimator(), 1).modes().get(0);
@@ -150,7 +155,8 @@ class SpectrumExtractorTest {
     private static void assertDoubted(Snapshots snapshots, String code, boolean expected) {
         int rank = snapshots.stateSize() == 1 ? 1 : 2;
         Spectrum spectrum = Motions.spectrum(snapshots, new LinearEstimator(), rank);
-        assertEquals(expected, spectrum.doubts().stream().anyMatch(doubt -> doubt.code().equals(code)), spectrum.doubts().toString());
+        assertEquals(expected, spectrum.doubts().stream().anyMatch(doubt -> doubt.code().equals(code)),
+                spectrum.doubts().toString());
     }
 
     @Test

@@ -40,9 +40,11 @@ class FlowsTest {
     }
 
     private static Verdict verdict(String name, Kernel kernel, double noise, int rank, long seed) {
-        Snapshots snapshots = Motions.snapshots(LENGTH / 19, 1, Motions.spread(flow(name), 40, -1, 1, 20, LENGTH, noise, seed),
+        Snapshots snapshots = Motions.snapshots(LENGTH / 19, 1, Motions.spread(flow(name), 40, -1, 1, 20, LENGTH, noise,
+                seed),
                 Motions.spread(flow(name), 9, -0.9, 0.9, 20, LENGTH, noise, seed + 100));
-        FittedOperator operator = Motions.fit(snapshots, new OccupationEstimator(kernel, new SegmentPlan(0, noise > 0 ? 20 : 0), 1), rank);
+        FittedOperator operator = Motions.fit(snapshots, new OccupationEstimator(kernel,
+                new SegmentPlan(0, noise > 0 ? 20 : 0), 1), rank);
         return Motions.judge(operator, JudgeSettings.DEFAULT.withLadder(4, rank));
     }
 
@@ -80,7 +82,8 @@ class FlowsTest {
         assertEquals(1, rows.get(rows.size() - 1).weightNorm(), 1e-3);
         assertEquals(rows.get(0).weightNorm(), rows.get(rows.size() - 1).weightNorm(), 1e-3);
         Verdict riccati = verdict("x^2", EXPONENTIAL, 0, 10, 1);
-        double largest = riccati.ladder().stream().filter(row -> row.rank() == 10).mapToDouble(LadderRow::weightNorm).max().orElseThrow();
+        double largest = riccati.ladder().stream().filter(row ->
+                row.rank() == 10).mapToDouble(LadderRow::weightNorm).max().orElseThrow();
         // worked figures: 1.1, 3, 20, 249 at ranks 4, 6, 8, 10
         assertEquals(249, largest, 50);
     }
@@ -93,7 +96,8 @@ class FlowsTest {
     }
 
     private static double value(Verdict verdict, String check) {
-        return verdict.findings().stream().filter(f -> f.mode() == 0 && f.check().equals(check)).findFirst().orElseThrow().value();
+        return verdict.findings().stream().filter(f -> f.mode() == 0
+                && f.check().equals(check)).findFirst().orElseThrow().value();
     }
 
     @ParameterizedTest

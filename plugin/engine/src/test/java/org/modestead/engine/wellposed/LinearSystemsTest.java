@@ -20,7 +20,10 @@ import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.spectrum.SpectrumExtractor;
 
-/** What any tool must get right: lightly damped oscillations in a few channels, several runs, a little noise; and noise alone. */
+/**
+ * What any tool must get right: lightly damped oscillations in a few channels, several runs, a little noise; and noise
+ * alone.
+ */
 class LinearSystemsTest {
 
     private static final double STEP = 0.1;
@@ -28,7 +31,8 @@ class LinearSystemsTest {
     private static final double W2 = 2 * Math.PI * 1.7;
     private static final double ZETA = 0.02;
     private static final double[][] SHAPE = {
-        {1, 0.3, -0.4, 0.1}, {0.2, 1, 0.5, -0.6}, {0.7, -0.2, 0.3, 0.8}, {0.1, 0.4, 0.9, -0.3}, {0.5, 0.5, -0.1, 0.2}, {-0.3, 0.8, 0.2, 0.4}
+        {1, 0.3, -0.4, 0.1}, {0.2, 1, 0.5, -0.6}, {0.7, -0.2, 0.3, 0.8}, {0.1, 0.4, 0.9, -0.3}, {0.5, 0.5, -0.1, 0.2},
+                {-0.3, 0.8, 0.2, 0.4}
     };
 
     /** Two fading oscillations and a slow decay, each run from another start. */
@@ -62,7 +66,8 @@ class LinearSystemsTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"2, 6, 0.001", "2, 10, 0.01", "3, 6, 0.001", "3, 6, 0.01", "4, 5, 0.001", "6, 4, 0.001", "6, 4, 0.01", "6, 8, 0.005"})
+    @CsvSource({"2, 6, 0.001", "2, 10, 0.01", "3, 6, 0.001", "3, 6, 0.01", "4, 5, 0.001", "6, 4, 0.001", "6, 4, 0.01",
+            "6, 8, 0.005"})
     void aLightlyDampedOscillationIsThereAndSaidToBe(int channels, int depth, double noise) {
         for (long seed : new long[] {1, 2, 3}) {
             FittedOperator operator = Motions.fit(ringing(channels, depth, noise, seed), new LinearEstimator(), 5);
@@ -79,7 +84,8 @@ class LinearSystemsTest {
     @ParameterizedTest
     @CsvSource({"2, 8", "3, 6", "6, 4"})
     void noiseFreeRingingIsNeverWorseThanSettled(int channels, int depth) {
-        Grade grade = Motions.judge(Motions.fit(ringing(channels, depth, 0, 4), new LinearEstimator(), 5), JudgeSettings.DEFAULT).overall().grade();
+        Grade grade = Motions.judge(Motions.fit(ringing(channels, depth, 0, 4), new LinearEstimator(), 5),
+                JudgeSettings.DEFAULT).overall().grade();
         assertTrue(grade.compareTo(Grade.SETTLES) <= 0, grade.word());
     }
 
@@ -112,8 +118,10 @@ class LinearSystemsTest {
     private static void assertNoEvidence(boolean walk, long seed) {
         for (int[] choice : new int[][] {{1, 8, 4}, {2, 6, 6}, {3, 1, 3}, {2, 10, 12}}) {
             Random random = new Random(seed);
-            Snapshots snapshots = Motions.snapshots(STEP, choice[1], noise(6, choice[0], walk, random), noise(3, choice[0], walk, random));
-            Grade grade = Motions.judge(Motions.fit(snapshots, new LinearEstimator(), choice[2]), JudgeSettings.DEFAULT).overall().grade();
+            Snapshots snapshots = Motions.snapshots(STEP, choice[1], noise(6, choice[0], walk, random),
+                    noise(3, choice[0], walk, random));
+            Grade grade = Motions.judge(Motions.fit(snapshots, new LinearEstimator(), choice[2]),
+                    JudgeSettings.DEFAULT).overall().grade();
             assertNotEquals(Grade.STANDS, grade);
             assertNotEquals(Grade.SETTLES, grade, choice[0] + " channels, depth " + choice[1] + ", rank " + choice[2]);
         }
