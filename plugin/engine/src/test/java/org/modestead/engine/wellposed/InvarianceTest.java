@@ -61,7 +61,8 @@ class InvarianceTest {
         Recording recording = new Recording(List.of(new Channel("a", "bar"), new Channel("b", "m"), new Channel("c", "K")),
                 List.of(), runs,
                 new TimeAxis(TimeAxis.Kind.NUMBER, "s"));
-        SnapshotPlan plan = SnapshotPlan.DEFAULT.withUniformStep(STEP * timeUnit).withDelay(estimator instanceof LinearEstimator ? 4 : 1, 1)
+        int depth = estimator instanceof LinearEstimator ? 4 : 1;
+        SnapshotPlan plan = SnapshotPlan.DEFAULT.withUniformStep(STEP * timeUnit).withDelay(depth, 1)
                 .withPreparation(Detrend.NONE, Scaling.STD).withHoldout(new Split.Runs(List.of("r2", "r5")));
         Snapshots snapshots = SnapshotBuilder.build(recording, plan, Progress.NONE);
         FittedOperator operator = Motions.fit(snapshots, estimator, rank);
