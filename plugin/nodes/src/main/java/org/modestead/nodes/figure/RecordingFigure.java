@@ -20,8 +20,9 @@ public final class RecordingFigure {
     private RecordingFigure() {}
 
     /**
-     * Draws the first channels of the runs that follow each other in time; of runs at the same times the earliest. Channels of one unit share a scale in that unit; channels of different
-     * units are shown as distance from their mean in standard deviations.
+     * Draws the first channels of the runs that follow each other in time; of runs at the same times the earliest.
+     * Channels of one unit share a scale in that unit; channels of different units are shown as distance from their
+     * mean in standard deviations.
      *
      * @param snapshots prepared runs; drawn in recorded values
      * @param channels at most how many, at least 1

@@ -10,7 +10,7 @@ import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.ModeShapes;
 import org.modestead.engine.spectrum.Spectrum;
-import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.ModeWords;
 import org.modestead.nodes.words.TimeUnit;
 
 /** How strongly, and how far out of step, each channel moves in a mode. */
@@ -83,9 +83,7 @@ public final class ShapeFigures {
         }
 
         private String title(String quantity) {
-            TimeUnit unit = new TimeUnit(spectrum.timeUnit());
-            String what = mode.oscillates() ? Digits.frequency(mode.frequency(), unit.frequency())
-                    : "no oscillation";
+            String what = mode.oscillates() ? ModeWords.cycle(mode, new TimeUnit(spectrum.timeUnit())) : "no oscillation";
             return "Mode " + mode.number() + " (" + what + "): " + quantity;
         }
     }

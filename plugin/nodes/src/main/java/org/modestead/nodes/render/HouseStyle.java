@@ -14,7 +14,7 @@ import org.modestead.nodes.figure.Figure;
 final class HouseStyle {
     private static final Font PLAIN = new Font(Font.SANS_SERIF, Font.PLAIN, 12);
     private static final int TICK_DIGITS = 7;
-    private static final int SHORTEST_PLAIN = 4;
+    private static final int SHORTEST_PLAIN = 5;
     private static final int LONGEST_PLAIN = 5;
     private static final Font BOLD = new Font(Font.SANS_SERIF, Font.BOLD, 14);
 

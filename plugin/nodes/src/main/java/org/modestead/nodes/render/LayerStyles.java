@@ -7,7 +7,8 @@ import org.modestead.nodes.figure.Figure;
 
 /**
  * Which colour and stroke each layer of one figure gets: layers of one name share a colour, a band takes that of the
- * strong line it surrounds, and over time a strong line is broad, so that thin dark context drawn over it leaves both in sight.
+ * strong line it surrounds, and over time a strong line is broad and dark, so that the thin grey context drawn over it
+ * leaves both in sight.
  */
 record LayerStyles(Figure figure, List<String> names) {
     private static final float[][] DASHES = {{}, {9, 4}, {3, 3}, {12, 4, 3, 4}, {6, 3}, {2, 4}};

@@ -18,7 +18,7 @@ final class Palette {
     static final Color PAPER = Color.WHITE;
     static final Color INK = new Color(0x1d2530);
     static final Color QUIET_INK = new Color(0x4a5563);
-    static final Color CONTEXT = new Color(0x1d2530);
+    static final Color CONTEXT = new Color(0x8a94a0);
     static final Color FAINT = new Color(0x8a94a0);
     static final Color GRID = new Color(0xe3e7ec);
     static final Color FRAME = new Color(0xb8c0ca);

@@ -18,7 +18,7 @@ final class ReportStyle {
             a{color:var(--link)}
             .skip{position:absolute;left:-99rem}
             .skip:focus{left:1rem;top:1rem;background:var(--panel);padding:.5rem 1rem}
-            nav ol{columns:2;column-gap:3rem;margin:.5rem 0;padding-left:1.4rem}
+            nav ol{columns:2;column-gap:3rem;margin:.5rem 0;padding-left:2rem}
             nav li{margin:0;padding:.12rem 0}
             nav h2{font-size:1rem;margin:2rem 0 0;border:0;padding:0}
             .callout{border:1px solid var(--rule);border-left:.4rem solid var(--note);background:var(--panel);
@@ -45,7 +45,7 @@ final class ReportStyle {
             .small{max-width:32rem}
             .pair{display:grid;grid-template-columns:1fr 1fr;gap:0 1.5rem}
             footer{margin-top:3rem;padding-bottom:2rem;font-size:.88rem}
-            @media (max-width:48rem){.pair{grid-template-columns:1fr}nav ol{columns:1}}
+            @media screen and (max-width:48rem){.pair{grid-template-columns:1fr}nav ol{columns:1}}
             """;
     private static final String PAPER = """
             @page{margin:16mm 14mm}
@@ -61,7 +61,8 @@ final class ReportStyle {
             table{font-size:8.5pt;min-width:0}
             th,td{padding:.2rem .5rem .2rem .3rem}
             tbody .number{white-space:normal}
-            .middle,.small{max-width:32rem}
+            .middle,.small{max-width:30rem}
+            figcaption,.below{font-size:8.5pt}
             a{color:inherit;text-decoration:none}
             """;
 

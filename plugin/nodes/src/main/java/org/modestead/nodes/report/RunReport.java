@@ -33,6 +33,9 @@ import org.modestead.nodes.words.Sentence;
 public final class RunReport {
     private static final Set<Stage> TOLD_BY_DOCUMENT = Set.of(Stage.JUDGE, Stage.FORECAST, Stage.REPORT);
 
+    private static final int MOST_ROWS = 50;
+    private static final int MOST_RAW_ROWS = 10;
+
     private final List<StepAccount> steps;
     private final boolean led;
     private final Set<List<String>> shown = new HashSet<>();
@@ -110,20 +113,28 @@ public final class RunReport {
         if (!doubts.isEmpty()) {
             blocks.add(new Callout(Tone.CAUTION, "doubts raised by this step", doubts));
         }
-        step.result().figures().stream().filter(figure -> shown.add(drawnData(figure)))
-                .forEach(figure -> blocks.add(new Picture(figure)));
-        if (!led || !TOLD_BY_DOCUMENT.contains(step.stage())) {
-            new TreeMap<>(step.result().outputs()).forEach((port, value) -> {
-                if (value instanceof Table table) {
-                    blocks.add(TableExcerpt.of(table, step.stepId(), port));
-                }
-            });
+        List<Figure> fresh = step.result().figures().stream().filter(figure -> shown.add(drawnData(figure))).toList();
+        fresh.forEach(figure -> blocks.add(new Picture(figure)));
+        boolean toldAbove = led && TOLD_BY_DOCUMENT.contains(step.stage()) && fresh.isEmpty();
+        if (!toldAbove) {
+            blocks.addAll(tables(step));
         }
         if (blocks.isEmpty()) {
             blocks.add(new Paragraph("Everything this step found is told above."));
         }
         return new Section(id("step", index + 1, step.stepId()), "Step: " + step.nodeTitle() + " (" + step.stepId() + ")",
                 blocks);
+    }
+
+    private static List<Block> tables(StepAccount step) {
+        int most = step.stage() == Stage.DATA ? MOST_RAW_ROWS : MOST_ROWS;
+        List<Block> tables = new ArrayList<>();
+        new TreeMap<>(step.result().outputs()).forEach((port, value) -> {
+            if (value instanceof Table table) {
+                tables.add(TableExcerpt.of(table, step.stepId(), port, most));
+            }
+        });
+        return tables;
     }
 
     private Section repeat(Map<String, String> versions) {

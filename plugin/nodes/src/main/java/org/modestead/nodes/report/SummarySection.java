@@ -97,7 +97,8 @@ final class SummarySection {
         }
         long counted = verdict.modes().stream().filter(ModeVerdict::counts).count();
         return new Callout(ExistenceSection.tone(grade), VerdictWords.headline(grade), List.of(VerdictWords.overall(grade),
-                "Of " + Sentence.count(counted, "mode") + " that carry a stated share of the signal " + same.size()
+                "Of " + Sentence.count(counted, "mode") + (counted == 1 ? " that carries" : " that carry")
+                + " a stated share of the signal " + same.size()
                         + (same.size() == 1 ? " has" : " have") + " this verdict: "
                         + (same.size() == 1 ? "mode " : "modes ") + String.join(", ", same) + ".",
                         VerdictWords.advice(grade)));

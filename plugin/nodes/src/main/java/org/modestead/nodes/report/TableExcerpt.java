@@ -13,19 +13,18 @@ import org.modestead.nodes.words.Sentence;
 
 /** The first rows and columns of an output table, and how much more there is. */
 final class TableExcerpt {
-    private static final int MOST_ROWS = 50;
     private static final int MOST_COLUMNS = 12;
 
     private TableExcerpt() {}
 
-    static Grid of(Table table, String stepId, String port) {
+    static Grid of(Table table, String stepId, String port, int most) {
         List<Column> columns = table.schema().columns();
         int shown = Math.min(MOST_COLUMNS, columns.size());
         List<List<String>> rows = new ArrayList<>();
         long more = 0;
         try (RowCursor cursor = table.open()) {
             while (cursor.next()) {
-                if (rows.size() < MOST_ROWS) {
+                if (rows.size() < most) {
                     rows.add(row(cursor, columns.subList(0, shown)));
                 } else {
                     more++;

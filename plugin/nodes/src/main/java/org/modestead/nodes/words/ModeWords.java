@@ -4,6 +4,11 @@ import org.modestead.engine.spectrum.Mode;
 
 /** A mode in words, with as many digits as its figures bear. */
 public final class ModeWords {
+    /** Below this frequency in cycles per time unit people count how long a cycle lasts. */
+    private static final double SLOW = 0.1;
+    /** Damping ratio that changes the size of a cycle by less than 0.3 %. */
+    private static final double UNDAMPED = 5e-4;
+
     private ModeWords() {}
 
     /**
@@ -22,10 +27,21 @@ public final class ModeWords {
         if (!mode.oscillates()) {
             return "no oscillation, " + change(mode, unit);
         }
+        return cycle(mode, unit) + ", " + damping(mode, unit);
+    }
+
+    /** Returns the frequency of an oscillating mode, or how long a cycle lasts where that is easier to grasp. */
+    public static String cycle(Mode mode, TimeUnit unit) {
+        return mode.frequency() < SLOW ? "one cycle every " + unit.span(mode.period())
+                : Digits.frequency(mode.frequency(), unit.frequency());
+    }
+
+    private static String damping(Mode mode, TimeUnit unit) {
+        if (Math.abs(mode.dampingRatio()) < UNDAMPED) {
+            return "next to no damping";
+        }
         String growing = mode.rate().re() > 0 ? ", growing: " + change(mode, unit) : "";
-        return Digits.frequency(mode.frequency(), unit.frequency()) + ", damping ratio "
-                + Digits.percent(mode.dampingRatio())
-                + growing;
+        return "damping ratio " + Digits.percent(mode.dampingRatio()) + growing;
     }
 
     /** Returns {@code doubles every …}, {@code halves every …} or {@code neither grows nor decays}. */

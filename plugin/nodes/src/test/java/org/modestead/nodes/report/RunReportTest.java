@@ -61,6 +61,19 @@ class RunReportTest {
     }
 
     @Test
+    void aSecondPipelineThatTheModeReportDoesNotTellKeepsItsTables() {
+        MemoryTable modes = MemoryTable.builder(TableSchema.of(Column.number("mode")), "modes").row(1.0).build();
+        StepAccount other = new StepAccount("other", "Spectrum Extractor", Stage.JUDGE,
+                new NodeResult(Map.of("modes", modes),
+                List.of(RecordingFigure.figure(ReportFixture.snapshots(), 1)), List.of(), List.of()), Map.of());
+        StepAccount told = new StepAccount("told", "Spectrum Extractor", Stage.JUDGE, new NodeResult(Map.of("modes", modes),
+                List.of(RecordingFigure.figure(ReportFixture.snapshots(), 2)), List.of(), List.of()), Map.of());
+        ReportDocument document = RunReport.assemble("pumps", List.of(other, told, reporter()), VERSIONS);
+        assertTrue(section(document, "step-1-other").blocks().stream().anyMatch(Grid.class::isInstance));
+        assertFalse(section(document, "step-2-told").blocks().stream().anyMatch(Grid.class::isInstance));
+    }
+
+    @Test
     void longTablesAreCutAndSaySo() {
         ReportDocument document = RunReport.assemble("pumps", List.of(builder()), VERSIONS);
         Grid grid = (Grid) section(document, "step-1-build").blocks().stream().filter(Grid.class::isInstance).findFirst()

@@ -56,6 +56,8 @@ class WordsTest {
         assertEquals("no oscillation, halves every 2.00 s", ModeWords.headline(mode(-Math.log(2) / 2, 0), seconds));
         assertEquals("no oscillation, doubles every 4.00 s", ModeWords.headline(mode(Math.log(2) / 4, 0), seconds));
         assertEquals("no oscillation, neither grows nor decays", ModeWords.headline(mode(0, 0), seconds));
+        assertEquals("one cycle every 364 s, next to no damping",
+                ModeWords.headline(mode(-1e-6, 2 * Math.PI / 364), seconds));
         assertEquals("gone within one step", ModeWords.headline(mode(Double.NEGATIVE_INFINITY, 0), seconds));
         assertTrue(ModeWords.headline(mode(Math.log(2), 6), seconds).endsWith("growing: doubles every 1.00 s"));
     }
