@@ -32,7 +32,8 @@ class ArchitectureTest {
 
     @Test
     void theEngineKnowsNeitherNodesNorHostNorFormatsNorPictures() {
-        noClasses().that().resideInAPackage(ENGINE).should().dependOnClassesThat().resideInAnyPackage(NODES, HOST, "org.duckdb..",
+        noClasses().that().resideInAPackage(ENGINE).should().dependOnClassesThat().resideInAnyPackage(NODES,
+                HOST, "org.duckdb..",
                 "com.fasterxml..", "picocli..", "org.knowm..", "java.awt..", "javax.swing..", "java.sql..").check(classes);
     }
 
@@ -44,7 +45,8 @@ class ArchitectureTest {
 
     @Test
     void nothingKnowsAnEditorsWorkbench() {
-        noClasses().should().dependOnClassesThat().resideInAnyPackage("org.eclipse.swt..", "org.eclipse.jface..", "org.eclipse.ui..")
+        noClasses().should().dependOnClassesThat()
+                .resideInAnyPackage("org.eclipse.swt..", "org.eclipse.jface..", "org.eclipse.ui..")
                 .check(classes);
     }
 

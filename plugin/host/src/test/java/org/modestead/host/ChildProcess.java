@@ -29,7 +29,8 @@ public record ChildProcess(Process process, Path err) {
         command.add(Path.of(System.getProperty("java.home"), "bin", "java").toString());
         command.addAll(javaOptions);
         command.addAll(List.of("-Djava.awt.headless=true", "-cp",
-                System.getProperty("surefire.test.class.path", System.getProperty("java.class.path")), Main.class.getName()));
+                System.getProperty("surefire.test.class.path", System.getProperty("java.class.path")),
+                Main.class.getName()));
         command.addAll(List.of(arguments));
         Path err = folder.resolve("child-err.txt");
         Process process = new ProcessBuilder(command).directory(folder.toFile()).redirectError(err.toFile())

@@ -36,10 +36,13 @@ public record FakeNode(String id, Work work) implements Node {
 
     @Override
     public NodeDeclaration declaration() {
-        return new NodeDeclaration(id, id, NodeDeclaration.Stage.DATA, "Serves a test.", "Serves a test.", List.of(), List.of(),
-                List.of(Port.optional("a", PortType.TABLE, "A", "A table."), Port.optional("b", PortType.TABLE, "B", "A table.")),
+        return new NodeDeclaration(id, id, NodeDeclaration.Stage.DATA, "Serves a test.", "Serves a test.", List.of(),
+                List.of(),
+                List.of(Port.optional("a", PortType.TABLE, "A", "A table."),
+                Port.optional("b", PortType.TABLE, "B", "A table.")),
                 List.of(Port.table("table", "Table", "One number.", SCHEMA)),
-                List.of(new Setting.Whole(new Setting.Common("level", "Level", "All", "A number.", Optional.empty()), "", 0, 100,
+                List.of(new Setting.Whole(new Setting.Common("level", "Level", "All", "A number.", Optional.empty()), "", 0,
+                100,
                         OptionalLong.of(1))),
                 1);
     }

@@ -53,7 +53,8 @@ public final class TestWorkflows {
     }
 
     private static WorkflowChecker.Outcome check(Path file, NodeCatalog nodes, String... set) {
-        List<SettingOverride> overrides = List.of(set).stream().map(text -> SettingOverride.parse(text).orElseThrow()).toList();
+        List<SettingOverride> overrides = List.of(set).stream().map(text -> SettingOverride.parse(text).orElseThrow())
+                .toList();
         return new WorkflowChecker(nodes).check(WorkflowFile.read(file), overrides);
     }
 

@@ -16,14 +16,18 @@ import picocli.CommandLine.Parameters;
         description = {"Tells everything wrong with a workflow at once, without running it.", ""})
 final class CheckCommand implements Callable<Integer> {
 
+    /** Explains {@code --set} wherever it is offered. */
+    static final String SET_HELP = "A setting to use in place of the one in the file; may be given several times. List "
+            + "entries "
+            + "are separated by commas.";
+
     private final Terminal terminal;
     private final Supplier<NodeCatalog> catalog;
 
     @Parameters(paramLabel = "WORKFLOW", description = "Workflow file, or a folder that holds a workflow.json.")
     private Path workflow;
 
-    @Option(names = "--set", paramLabel = "STEP.KEY=VALUE", description = "A setting to use in place of the one in the file; may "
-            + "be given several times. List entries are separated by commas.")
+    @Option(names = "--set", paramLabel = "STEP.KEY=VALUE", description = SET_HELP)
     private List<String> set = new ArrayList<>();
 
     CheckCommand(Terminal terminal, Supplier<NodeCatalog> catalog) {

@@ -15,6 +15,7 @@ final class Interrupt implements AutoCloseable {
     private final CancelSwitch cancel;
     private final Terminal terminal;
     private final CountDownLatch tidy = new CountDownLatch(1);
+    private volatile boolean written;
     private final Thread hook = new Thread(this::stop, "stop");
 
     private Interrupt(CancelSwitch cancel, Terminal terminal) {
@@ -28,8 +29,13 @@ final class Interrupt implements AutoCloseable {
         return interrupt;
     }
 
-    /** Tells that the run has ended and tidied up. */
-    void ended() {
+    /**
+     * Tells that the run has ended and tidied up.
+     *
+     * @param kept whether it had written its results before it could be stopped
+     */
+    void ended(boolean kept) {
+        written = kept;
         tidy.countDown();
     }
 
@@ -39,8 +45,10 @@ final class Interrupt implements AutoCloseable {
         terminal.err().println("Stopping ...");
         try {
             boolean done = tidy.await(LONGEST_WAIT_SECONDS, TimeUnit.SECONDS);
-            terminal.err().println(done ? "Stopped; the result folder is as it was before."
-                    : "Stopped without waiting for a step that did not react; the result folder is as it was before.");
+            String state = written ? "Stopped, but the run had just written its results."
+                    : "Stopped; the result folder is as it was before.";
+            terminal.err().println(done ? state : "Stopped without waiting for a step that did not react; the result "
+                    + "folder is as it was before.");
         } catch (InterruptedException hurried) {
             Thread.currentThread().interrupt();
         }

@@ -47,7 +47,8 @@ final class NodePage {
         }
         heading(title);
         for (Port port : ports) {
-            text("  ", port.id() + ": " + port.type().title() + (port.optional() ? ", optional" : "") + ". " + port.description());
+            text("  ", port.id() + ": " + port.type().title() + (port.optional() ? ", optional" : "")
+                    + ". " + port.description());
             port.schema().ifPresent(schema -> text("      ", "Columns: "
                     + schema.columns().stream().map(Column::name).collect(Collectors.joining(", ")) + "."));
         }
@@ -79,7 +80,8 @@ final class NodePage {
                 : initial.isEmpty() ? "not set by default" : "default " + initial;
         String range = setting instanceof Setting.Choice ? "" : SettingText.range(setting);
         String unit = SettingText.unit(setting);
-        return Stream.of(SettingText.kind(setting), range, range.contains(unit) || unit.isEmpty() ? "" : "in " + unit, standing)
+        return Stream.of(SettingText.kind(setting), range, range.contains(unit) || unit.isEmpty() ? "" : "in " + unit,
+                standing)
                 .filter(part -> !part.isEmpty()).collect(Collectors.joining(", ")) + ".";
     }
 

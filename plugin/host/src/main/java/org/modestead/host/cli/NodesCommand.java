@@ -36,7 +36,8 @@ final class NodesCommand implements Callable<Integer> {
         }
         Optional<Node> found = nodes.find(node);
         if (found.isEmpty()) {
-            terminal.err().println("There is no node \"" + node + "\"" + NearestName.hint(node, nodes.ids()) + "; use one of "
+            terminal.err().println("There is no node \"" + node + "\"" + NearestName.hint(node, nodes.ids())
+                    + "; use one of "
                     + String.join(", ", nodes.ids()) + ".");
             return ExitCode.WRONG;
         }
@@ -51,7 +52,8 @@ final class NodesCommand implements Callable<Integer> {
                     .filter(declaration -> declaration.stage() == stage).toList();
             if (!here.isEmpty()) {
                 terminal.out().println(stage.title());
-                here.forEach(declaration -> Paragraphs.hanging("  " + pad(declaration.id(), width) + "  ", declaration.purpose())
+                here.forEach(declaration -> Paragraphs.hanging("  " + pad(declaration.id(), width) + "  ",
+                        declaration.purpose())
                         .forEach(terminal.out()::println));
             }
         }

@@ -19,8 +19,8 @@ import picocli.CommandLine.Parameters;
 
 /** Checks and runs a workflow and writes its results. */
 @Command(name = "run", mixinStandardHelpOptions = true, versionProvider = ReleaseVersion.class,
-        description = {"Checks a workflow, runs it and writes its results: DIR/STEP/PORT.csv for every table, DIR/report.html, "
-                + "DIR/run.json. Nothing half-written is left when it fails or is stopped.", ""})
+        description = {"Checks a workflow, runs it and writes its results: DIR/STEP/PORT.csv for every table, "
+                + "DIR/report.html, DIR/run.json. Nothing half-written is left when it fails or is stopped.", ""})
 final class RunCommand implements Callable<Integer> {
 
     private final Terminal terminal;
@@ -32,8 +32,7 @@ final class RunCommand implements Callable<Integer> {
     @Option(names = "--out", paramLabel = "DIR", description = "Result folder; default: out in the workflow's folder.")
     private Path out;
 
-    @Option(names = "--set", paramLabel = "STEP.KEY=VALUE", description = "A setting to use in place of the one in the file; may "
-            + "be given several times. List entries are separated by commas.")
+    @Option(names = "--set", paramLabel = "STEP.KEY=VALUE", description = CheckCommand.SET_HELP)
     private List<String> set = new ArrayList<>();
 
     RunCommand(Terminal terminal, Supplier<NodeCatalog> catalog) {
@@ -55,7 +54,7 @@ final class RunCommand implements Callable<Integer> {
         RunResult result;
         try (Interrupt interrupt = Interrupt.on(cancel, terminal)) {
             result = WorkflowRunner.once().run(plan.get(), target, progress, cancel);
-            interrupt.ended();
+            interrupt.ended(result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED);
         } finally {
             progress.close();
         }
@@ -66,7 +65,8 @@ final class RunCommand implements Callable<Integer> {
         result.failures().forEach(terminal.err()::println);
         result.outcomes().forEach((step, outcome) -> {
             if (outcome instanceof StepOutcome.Skipped skipped) {
-                terminal.err().println("step " + step + ": left out, because step " + skipped.because() + " gave no result.");
+                terminal.err().println("step " + step + ": left out, because step " + skipped.because()
+                        + " gave no result.");
             } else if (outcome instanceof StepOutcome.Failed failed) {
                 failed.defect().ifPresent(defect -> terminal.err().println("Details: " + CommandLineHost.log(defect) + "."));
             }
@@ -81,10 +81,8 @@ final class RunCommand implements Callable<Integer> {
                 yield ExitCode.FAILED;
             }
             case UNWRITTEN -> ExitCode.FAILED;
-            case STOPPED -> {
-                terminal.err().println("Stopped; nothing was written.");
-                yield ExitCode.STOPPED;
-            }
+            // what stopped it has told the person
+            case STOPPED -> ExitCode.STOPPED;
         };
     }
 }

@@ -80,7 +80,8 @@ public final class CsvWriter {
         if (cell instanceof LocalDateTime time) {
             return time.format(DateTimeFormatter.ISO_LOCAL_DATE_TIME);
         }
-        return cell instanceof ZonedDateTime moment ? moment.format(DateTimeFormatter.ISO_OFFSET_DATE_TIME) : cell.toString();
+        return cell instanceof ZonedDateTime moment ? moment.format(DateTimeFormatter.ISO_OFFSET_DATE_TIME)
+                : cell.toString();
     }
 
     private static void text(Writer writer, String text) throws IOException {

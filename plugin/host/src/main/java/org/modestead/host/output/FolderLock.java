@@ -28,7 +28,8 @@ final class FolderLock implements AutoCloseable {
     /** Takes the lock, or returns empty when another process or run has it. */
     static Optional<FolderLock> take(Path file) throws IOException {
         while (true) {
-            FileChannel channel = FileChannel.open(file, StandardOpenOption.CREATE, StandardOpenOption.READ, StandardOpenOption.WRITE);
+            FileChannel channel = FileChannel.open(file, StandardOpenOption.CREATE, StandardOpenOption.READ,
+                    StandardOpenOption.WRITE);
             boolean held = false;
             try {
                 FileLock lock = channel.tryLock();

@@ -22,8 +22,10 @@ public final class OutputFault extends Fault {
             return new OutputFault(where, "the disk is full (" + text + ")",
                     "make room or choose a folder on another disk; nothing half-written was left");
         }
-        String reason = failure instanceof FileSystemException system && system.getReason() != null ? system.getReason() : text;
-        boolean denied = failure instanceof AccessDeniedException || text.toLowerCase(Locale.ROOT).contains("permission denied");
+        String reason = failure instanceof FileSystemException system && system.getReason() != null ? system.getReason()
+                : text;
+        boolean denied = failure instanceof AccessDeniedException || text.toLowerCase(Locale.ROOT)
+                .contains("permission denied");
         return new OutputFault(where, denied ? "the file may not be written" : "the file cannot be written (" + reason + ")",
                 denied ? "allow writing there or choose another folder" : "choose a folder that can be written");
     }

@@ -35,13 +35,15 @@ final class Fingerprint {
      */
     static Optional<String> of(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
         NodeDeclaration declaration = step.declaration();
-        boolean writes = declaration.settings().stream().anyMatch(setting -> setting instanceof Setting.File file && !file.reading());
+        boolean writes = declaration.settings().stream().anyMatch(setting -> setting instanceof Setting.File file
+                && !file.reading());
         boolean known = step.inputs().values().stream().allMatch(source -> inputs.containsKey(source.step()));
         if (writes || declaration.outputs().isEmpty() || !known) {
             return Optional.empty();
         }
         MessageDigest digest = sha256();
-        line(digest, "node", declaration.id() + " " + declaration.settingsVersion() + " " + step.node().getClass().getName());
+        line(digest, "node", declaration.id() + " " + declaration.settingsVersion() + " " + step.node().getClass()
+                .getName());
         new TreeMap<>(step.settings().values()).forEach((key, value) -> line(digest, "setting " + key,
                 value.getClass().getSimpleName() + " " + value));
         for (Setting setting : declaration.settings()) {
@@ -49,7 +51,8 @@ final class Fingerprint {
                 line(digest, "file " + setting.key(), file(baseFolder.resolve(step.settings().text(setting.key()))));
             }
         }
-        step.inputs().forEach((port, source) -> line(digest, "input " + port, inputs.get(source.step()) + "." + source.port()));
+        step.inputs().forEach((port, source) -> line(digest, "input " + port, inputs.get(source.step())
+                + "." + source.port()));
         return Optional.of(HexFormat.of().formatHex(digest.digest()));
     }
 
@@ -66,7 +69,8 @@ final class Fingerprint {
             }
             content = HexFormat.of().formatHex(digest.digest());
         }
-        return path.toAbsolutePath().normalize() + " " + size + " " + Files.getLastModifiedTime(path).toMillis() + " " + content;
+        return path.toAbsolutePath().normalize() + " " + size + " " + Files.getLastModifiedTime(path).toMillis()
+                + " " + content;
     }
 
     private static void line(MessageDigest digest, String key, String value) {

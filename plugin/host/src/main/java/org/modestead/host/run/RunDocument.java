@@ -26,7 +26,8 @@ final class RunDocument {
         for (PlannedStep step : result.plan().order()) {
             StepOutcome outcome = result.outcomes().get(step.id());
             if (outcome instanceof StepOutcome.Done done) {
-                accounts.add(new StepAccount(step.id(), step.declaration().title(), step.declaration().stage(), done.result(),
+                accounts.add(new StepAccount(step.id(), step.declaration().title(), step.declaration().stage(),
+                        done.result(),
                         settings(step)));
             } else {
                 missing.add(outcome instanceof StepOutcome.Failed failed ? failed.sentence() : "step " + step.id()

@@ -15,8 +15,10 @@ import org.modestead.host.workflow.RunPlan;
  * @param outcomes by step id in the order of the workflow file
  * @param folder where the results are
  * @param time it took
+ * @param stopped whether the person stopped it before its results were kept
  */
-public record RunResult(RunPlan plan, Map<String, StepOutcome> outcomes, Path folder, Duration time) {
+public record RunResult(RunPlan plan, Map<String, StepOutcome> outcomes, Path folder, Duration time,
+        boolean stopped) {
 
     /** How a run ended, in one word. */
     public enum State {
@@ -50,7 +52,7 @@ public record RunResult(RunPlan plan, Map<String, StepOutcome> outcomes, Path fo
     public State state() {
         if (outcomes.values().stream().anyMatch(StepOutcome.Unwritten.class::isInstance)) {
             return State.UNWRITTEN;
-        } else if (outcomes.values().stream().anyMatch(StepOutcome.Stopped.class::isInstance)) {
+        } else if (stopped) {
             return State.STOPPED;
         }
         return outcomes.values().stream().allMatch(StepOutcome.Done.class::isInstance) ? State.DONE : State.FAILED;

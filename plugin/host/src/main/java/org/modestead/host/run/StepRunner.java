@@ -72,7 +72,8 @@ final class StepRunner {
                     + "; allow reading and writing there.", Optional.empty(), since(start)));
         } catch (OutOfMemoryError memory) {
             return ended(step, new StepOutcome.Failed("step " + step.id() + ": the memory of "
-                    + (Runtime.getRuntime().maxMemory() >> 20) + " MB ran out; start Java with more, for example -Xmx4g, or give the "
+                    + (Runtime.getRuntime().maxMemory() >> 20)
+                    + " MB ran out; start Java with more, for example -Xmx4g, or give the "
                     + "step less (fewer rows, landmarks or delays).", Optional.empty(), since(start)));
         } catch (RuntimeException | Error defect) {
             return ended(step, new StepOutcome.Failed("step " + step.id() + ": an error in the program ("

@@ -54,11 +54,12 @@ public final class WorkflowRunner {
     public RunResult run(RunPlan plan, Path target, RunListener listener, CancelSwitch cancel) {
         Instant started = Instant.now();
         try (OutputFolder folder = OutputFolder.open(target, disk)) {
-            StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder), listener, cancel);
+            StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder), listener,
+                    cancel);
             Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener).run(threads);
-            RunResult result = new RunResult(plan, outcomes, folder.folder(), Duration.between(started, Instant.now()));
-            boolean kept = result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED;
-            if (kept && cancel.reason().isEmpty()) {
+            RunResult result = new RunResult(plan, outcomes, folder.folder(), Duration.between(started, Instant.now()),
+                    cancel.reason().isPresent());
+            if (result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED) {
                 publish(result, started, folder);
             }
             return result;

@@ -27,11 +27,13 @@ final class CsvSource {
                 unnamed.add(names.get(j));
             }
         }
-        return new TextFile(format.path(), format.shown(), read(format, names, missing), names, unnamed, new CsvPlaces(format));
+        return new TextFile(format.path(), format.shown(), read(format, names, missing), names, unnamed,
+                new CsvPlaces(format));
     }
 
     private static String read(CsvFormat format, List<String> names, List<String> missing) {
-        String columns = names.stream().map(name -> Sql.text(name) + ": 'VARCHAR'").collect(Collectors.joining(", ", "{", "}"));
+        String columns = names.stream().map(name -> Sql.text(name) + ": 'VARCHAR'")
+                .collect(Collectors.joining(", ", "{", "}"));
         List<String> nulls = new ArrayList<>(missing);
         nulls.add(0, "");
         return "read_csv(" + Sql.text(format.path().toString()) + ", auto_detect = false, columns = " + columns
@@ -87,7 +89,8 @@ final class CsvSource {
             } catch (CharacterCodingException foreign) {
                 return Optional.of(EncodingScan.fault(format));
             } catch (IOException unreadable) {
-                return Optional.of(new TableFault(format.shown(), "the file cannot be read (" + unreadable.getMessage() + ")",
+                return Optional.of(new TableFault(format.shown(), "the file cannot be read (" + unreadable.getMessage()
+                        + ")",
                         "check that it is complete"));
             }
         }

@@ -25,6 +25,9 @@ final class Database implements AutoCloseable {
     /** Memory that is enough for files of any length, because they are streamed. */
     static final int USUAL_MEGABYTES = 512;
 
+    /** More than any machine has; a limit only against slips. */
+    static final long MOST_MEGABYTES = 1 << 20;
+
     private final Connection connection;
     private final Path spill;
 

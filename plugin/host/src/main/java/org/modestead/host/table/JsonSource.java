@@ -23,10 +23,12 @@ final class JsonSource {
      */
     static TextFile open(Path path, String shown, List<String> missing, SourceLimits limits) {
         List<String> names = names(path, shown, limits);
-        String columns = names.stream().map(name -> Sql.text(name) + ": 'VARCHAR'").collect(Collectors.joining(", ", "{", "}"));
+        String columns = names.stream().map(name -> Sql.text(name) + ": 'VARCHAR'")
+                .collect(Collectors.joining(", ", "{", "}"));
         String read = "(SELECT " + names.stream().map(name -> "CASE WHEN " + Sql.name(name) + " NOT IN "
                 + Sql.texts(withEmpty(missing)) + " THEN " + Sql.name(name) + " END AS " + Sql.name(name))
-                .collect(Collectors.joining(", ")) + " FROM read_json(" + Sql.text(path.toString()) + ", columns = " + columns + "))";
+                .collect(Collectors.joining(", ")) + " FROM read_json(" + Sql.text(path.toString())
+                + ", columns = " + columns + "))";
         return new TextFile(path, shown, read, names, Set.of(), new JsonPlaces());
     }
 

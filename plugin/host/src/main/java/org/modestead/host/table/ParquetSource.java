@@ -22,7 +22,8 @@ final class ParquetSource {
                 throw new TableFault(shown, "the table has " + shape.schema().columns().size() + " columns but no row",
                         "give a table with at least one row");
             }
-            return new DuckDbTable(Recipe.file(shape.select(), path), shape.schema(), shown, limits.megabytes(), limits.copied(),
+            return new DuckDbTable(Recipe.file(shape.select(), path), shape.schema(), shown, limits.megabytes(),
+                    limits.copied(),
                     new ParquetExplainer(path, shown, limits));
         } catch (SQLException failure) {
             throw new ParquetExplainer(path, shown, limits).explain(failure);

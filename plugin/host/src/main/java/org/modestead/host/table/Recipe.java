@@ -36,7 +36,8 @@ record Recipe(String select, List<Path> files, Map<String, Table> loaded) {
             return stored.recipe();
         }
         String name = "loaded-" + UUID.randomUUID();
-        String columns = table.schema().columns().stream().map(Column::name).map(Sql::name).collect(Collectors.joining(", "));
+        String columns = table.schema().columns().stream().map(Column::name).map(Sql::name)
+                .collect(Collectors.joining(", "));
         return new Recipe("SELECT " + columns + " FROM " + Sql.name(name), List.of(), Map.of(name, table));
     }
 

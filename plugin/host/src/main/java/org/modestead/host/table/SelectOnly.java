@@ -16,7 +16,8 @@ final class SelectOnly {
 
     /** Returns what is wrong when the text is not one SELECT statement. */
     static Optional<SettingProblem> problem(Database database, String sql) throws SQLException {
-        JsonNode parsed = tree(database.one("SELECT json_serialize_sql(" + Sql.text(sql) + "::VARCHAR)", row -> row.getString(1)));
+        JsonNode parsed = tree(database.one("SELECT json_serialize_sql(" + Sql.text(sql) + "::VARCHAR)",
+                row -> row.getString(1)));
         if (parsed.path("error").asBoolean()) {
             boolean syntax = parsed.path("error_type").asText().equals("parser");
             return Optional.of(new SettingProblem("sql", syntax ? parsed.path("error_message").asText() + place(parsed, sql)
@@ -24,7 +25,8 @@ final class SelectOnly {
         }
         int statements = parsed.path("statements").size();
         return statements == 1 ? Optional.empty()
-                : Optional.of(new SettingProblem("sql", statements == 0 ? "there is no statement" : statements + " statements", WANTED));
+                : Optional.of(new SettingProblem("sql", statements == 0 ? "there is no statement" : statements
+                + " statements", WANTED));
     }
 
     private static String place(JsonNode parsed, String sql) {

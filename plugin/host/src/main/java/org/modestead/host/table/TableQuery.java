@@ -23,8 +23,9 @@ import org.modestead.nodes.table.TableSchema;
 /** Node: prepares tables with one SQL query. */
 public final class TableQuery implements Node {
 
+    private static final String EXAMPLE = "One SELECT, for example: SELECT time, flow, head - 2.5 AS head FROM input "
+            + "WHERE time >= 10 ORDER BY time";
     private static final List<String> INPUTS = List.of("input", "input2", "input3");
-    private static final long MOST_MEGABYTES = 1 << 20;
 
     /** Makes the node; it has no state. */
     public TableQuery() {}
@@ -34,24 +35,26 @@ public final class TableQuery implements Node {
         return new NodeDeclaration("table-query", "Table Query", NodeDeclaration.Stage.DATA,
                 "Prepares tables with one SQL query: choose, join, filter, compute, group, sort.",
                 """
-                Runs one SELECT over the connected tables, which are called input, input2 and input3 in it. The dialect is \
+                Runs one SELECT over the connected tables, which are called input, input2 and input3 in it. The dialect is
                 DuckDB's.
 
-                The query sees these tables and nothing else: no other file, no network, no setting can be reached from it, and \
-                only a SELECT is accepted. Rows come in the order of the input unless the query sorts them; add ORDER BY after \
-                grouping or joining, since a recording needs rising times.
+                The query sees these tables and nothing else: no other file, no network, no setting can be reached from
+                it, and only a SELECT is accepted. Rows come in the order of the input unless the query sorts them; add
+                ORDER BY after grouping or joining, since a recording needs rising times.
 
-                Rows are made whenever somebody asks for them. What does not fit into the memory limit goes to a temporary folder.""",
+                Rows are made whenever somebody asks for them. What does not fit into the memory limit goes to a temporary
+                folder.""",
                 List.of(),
                 List.of("sql", "select", "filter", "join", "aggregate", "group", "sort", "resample", "compute column"),
                 List.of(Port.of("input", PortType.TABLE, "Table", "Called input in the query."),
                         Port.optional("input2", PortType.TABLE, "Second table", "Called input2 in the query."),
                         Port.optional("input3", PortType.TABLE, "Third table", "Called input3 in the query.")),
                 List.of(Port.of("table", PortType.TABLE, "Table", "The rows that the query gives.")),
-                List.of(new Setting.Text(new Setting.Common("sql", "Query", "Query", "One SELECT, for example: SELECT time, flow, "
-                                + "head - 2.5 AS head FROM input WHERE time >= 10 ORDER BY time"), "SELECT * FROM input", true, false),
-                        new Setting.Whole(new Setting.Common("memory", "Memory", "Limits", "Memory for the query; what does not fit "
-                                + "goes to a temporary folder."), "MB", Database.LEAST_MEGABYTES, MOST_MEGABYTES,
+                List.of(new Setting.Text(new Setting.Common("sql", "Query", "Query", EXAMPLE), "SELECT * FROM input", true,
+                false),
+                        new Setting.Whole(new Setting.Common("memory", "Memory", "Limits",
+                                "Memory for the query; what does not fit goes to a temporary folder."), "MB",
+                                Database.LEAST_MEGABYTES, Database.MOST_MEGABYTES,
                                 OptionalLong.of(Database.USUAL_MEGABYTES))),
                 1);
     }
@@ -85,7 +88,8 @@ public final class TableQuery implements Node {
         }
         Recipe recipe = Recipe.over("WITH " + String.join(", ", named) + " " + shape.select(), recipes);
         SourceLimits limits = new SourceLimits(settings.whole("memory"), true);
-        DuckDbTable table = new DuckDbTable(recipe, shape.schema(), "query of " + tables.get(0).origin(), limits.megabytes(), true,
+        DuckDbTable table = new DuckDbTable(recipe, shape.schema(), "query of " + tables.get(0).origin(),
+                limits.megabytes(), true,
                 new QueryExplainer(tables, limits));
         return new NodeResult(Map.of("table", table), List.of(),
                 List.of("Query with " + shape.schema().columns().size() + " columns: "

@@ -38,24 +38,30 @@ public final class TableSink implements Node {
         return new NodeDeclaration("table-sink", "Table Sink", NodeDeclaration.Stage.REPORT,
                 "Writes a table to a CSV, Parquet or JSON file.",
                 """
-                Writes the rows as they come, so the table may be far larger than memory. The file appears under its name only \
-                when it is complete; one that was there before stays until then.
+                Writes the rows as they come, so the table may be far larger than memory. The file appears under its name
+                only when it is complete; one that was there before stays until then.
 
-                CSV is written as UTF-8 with a header, commas, line feeds and a decimal point; a missing cell is empty. Every table \
-                of a workflow is written to the result folder anyway: this step is for a file in another place or format.""",
+                CSV is written as UTF-8 with a header, commas, line feeds and a decimal point; a missing cell is empty.
+                Every table of a workflow is written to the result folder anyway: this step is for a file in another place
+                or format.""",
                 List.of("RFC 4180, Common Format and MIME Type for CSV Files, 2005"),
                 List.of("csv", "parquet", "json", "export", "write", "save", "file"),
                 List.of(Port.of("table", PortType.TABLE, "Table", "The rows to be written.")),
-                List.of(),
-                List.of(new Setting.File(new Setting.Common("path", "File", "File", "The file to write; a name is taken in the folder "
-                                + "of the workflow. Missing folders are made."), false, List.of(CSV, PARQUET, JSON), true),
-                        new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by the "
-                                + "end of its name: .parquet, .json, and CSV for all others."),
-                                List.of(new Setting.Option(AUTO, "By name", "Goes by the end of the file's name."),
-                                        new Setting.Option(CSV, "CSV", "Text with one row a line."),
-                                        new Setting.Option(PARQUET, "Parquet", "Columnar file with typed columns."),
-                                        new Setting.Option(JSON, "JSON", "A list of objects.")), AUTO)),
-                1);
+                List.of(), settings(), 1);
+    }
+
+    private static List<Setting> settings() {
+        return List.of(
+                new Setting.File(new Setting.Common("path", "File", "File", "The file to write; a name is taken in the "
+                + "folder "
+                        + "of the workflow. Missing folders are made."), false, List.of(CSV, PARQUET, JSON), true),
+                new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by "
+                + "the "
+                        + "end of its name: .parquet, .json, and CSV for all others."),
+                        List.of(new Setting.Option(AUTO, "By name", "Goes by the end of the file's name."),
+                                new Setting.Option(CSV, "CSV", "Text with one row a line."),
+                                new Setting.Option(PARQUET, "Parquet", "Columnar file with typed columns."),
+                                new Setting.Option(JSON, "JSON", "A list of objects.")), AUTO));
     }
 
     @Override

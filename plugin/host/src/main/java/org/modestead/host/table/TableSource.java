@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.OptionalLong;
+import java.util.stream.Stream;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
@@ -25,7 +26,7 @@ public final class TableSource implements Node {
     private static final String PARQUET = "parquet";
     private static final String JSON = "json";
     private static final String AUTO = "auto";
-    private static final long MOST_MEGABYTES = 1 << 20;
+    private static final long MOST_SKIPPED = 1_000_000;
 
     /** Makes the node; it has no state. */
     public TableSource() {}
@@ -37,14 +38,15 @@ public final class TableSource implements Node {
                 """
                 Reads the file row by row whenever somebody asks for the rows, so it may be far larger than memory.
 
-                In a CSV or JSON file a column is of the type that more than half of its cells have: whole number, number, \
-                true/false, date, date-time or text. A cell that does not fit is an error that names row, column and text; it \
-                never turns the column into text by itself. Dates and times are written as in 2015-06-30 and \
-                2015-06-30T12:00:00 unless the setting time-format says otherwise. A last column without a name and without any \
-                cell (a delimiter at the end of each line) is left out; other columns without a name are called column1, \
-                column2 and so on by their position.
+                In a CSV or JSON file a column is of the type that more than half of its cells have: whole number, number,
+                true/false, date, date-time or text. A cell that does not fit is an error that names row, column and text;
+                it never turns the column into text by itself. Dates and times are written as in 2015-06-30 and
+                2015-06-30T12:00:00 unless the setting time-format says otherwise. A last column without a name and
+                without any cell (a delimiter at the end of each line) is left out; other columns without a name are
+                called column1, column2 and so on by their position.
 
-                The types are found in the first 20480 rows; columns that look whole or empty there are read to the end once more.""",
+                The types are found in the first 20480 rows; columns that look whole or empty there are read to the end
+                once more.""",
                 List.of("RFC 4180, Common Format and MIME Type for CSV Files, 2005"),
                 List.of("csv", "parquet", "json", "import", "read", "load", "file"),
                 List.of(),
@@ -53,40 +55,65 @@ public final class TableSource implements Node {
     }
 
     private static List<Setting> settings() {
-        Setting.Common format = new Setting.Common("format", "Format", "File", "How the file is written; auto goes by the end of "
-                + "its name: .parquet, .json, .jsonl, .ndjson, and CSV for all others.");
+        return Stream.of(fileSettings(), csvSettings(), cellSettings(), limitSettings()).flatMap(List::stream).toList();
+    }
+
+    private static List<Setting> fileSettings() {
         return List.of(
-                new Setting.File(new Setting.Common("path", "File", "File", "The file to read; a name is looked up in the folder of "
-                        + "the workflow."), true, List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson"), true),
-                new Setting.Choice(format, List.of(new Setting.Option(AUTO, "By name", "Goes by the end of the file's name."),
-                        new Setting.Option(CSV, "CSV", "Text with one row a line; also gzipped."),
-                        new Setting.Option(PARQUET, "Parquet", "Columnar file with typed columns."),
-                        new Setting.Option(JSON, "JSON", "A list of objects, or one object a line.")), AUTO),
-                new Setting.Choice(csv("delimiter", "Delimiter", "What stands between cells; auto takes the one that occurs most in "
-                        + "the first line."), List.of(new Setting.Option(AUTO, "Found", "The most frequent in the first line."),
-                        new Setting.Option("comma", "Comma", "a,b"), new Setting.Option("semicolon", "Semicolon", "a;b"),
-                        new Setting.Option("tab", "Tab", "A tab character."), new Setting.Option("bar", "Bar", "a|b")), AUTO),
-                new Setting.Flag(csv("header", "Header", "Whether the first line names the columns; without, they are called column1, "
-                        + "column2 and so on."), true),
+                new Setting.File(new Setting.Common("path", "File", "File",
+                        "The file to read; a name is looked up in the folder of the workflow."), true,
+                        List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson"), true),
+                new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by "
+                + "the "
+                        + "end of its name: .parquet, .json, .jsonl, .ndjson, and CSV for all others."),
+                        List.of(new Setting.Option(AUTO, "By name", "Goes by the end of the file's name."),
+                                new Setting.Option(CSV, "CSV", "Text with one row a line; also gzipped."),
+                                new Setting.Option(PARQUET, "Parquet", "Columnar file with typed columns."),
+                                new Setting.Option(JSON, "JSON", "A list of objects, or one object a line.")), AUTO));
+    }
+
+    private static List<Setting> csvSettings() {
+        return List.of(
+                new Setting.Choice(csv("delimiter", "Delimiter",
+                        "What stands between cells; auto takes the one that occurs most in the first line."),
+                        List.of(new Setting.Option(AUTO, "Found", "The most frequent in the first line."),
+                                new Setting.Option("comma", "Comma", "a,b"),
+                                new Setting.Option("semicolon", "Semicolon", "a;b"),
+                                new Setting.Option("tab", "Tab", "A tab character."),
+                                new Setting.Option("bar", "Bar", "a|b")), AUTO),
+                new Setting.Flag(csv("header", "Header", "Whether the first line names the columns; without, they are "
+                        + "called column1, column2 and so on."), true),
                 new Setting.Choice(csv("decimal", "Decimal sign", "How numbers are written."),
-                        List.of(new Setting.Option("point", "Point", "1.5"), new Setting.Option("comma", "Comma", "1,5")), "point"),
+                        List.of(new Setting.Option("point", "Point", "1.5"),
+                                new Setting.Option("comma", "Comma", "1,5")), "point"),
                 new Setting.Choice(csv("encoding", "Encoding", "How letters are stored."),
                         List.of(new Setting.Option("utf-8", "UTF-8", "What nearly every program writes."),
                                 new Setting.Option("latin-1", "Latin-1", "ISO 8859-1, older Western programs."),
                                 new Setting.Option("utf-16", "UTF-16", "Two bytes a letter.")), "utf-8"),
-                new Setting.Whole(csv("skip-lines", "Lines to skip", "Lines before the header that are not part of the table."), "",
-                        0, 1000000, OptionalLong.of(0)),
-                new Setting.Texts(text("missing", "Missing", "Texts that stand for a missing cell, besides the empty one."),
+                new Setting.Whole(csv("skip-lines", "Lines to skip",
+                        "Lines before the header that are not part of the table."), "", 0, MOST_SKIPPED,
+                        OptionalLong.of(0)));
+    }
+
+    private static List<Setting> cellSettings() {
+        return List.of(
+                new Setting.Texts(text("missing", "Missing",
+                        "Texts that stand for a missing cell, besides the empty one."),
                         List.of("NA", "N/A", "NaN", "nan", "null", "NULL")),
-                new Setting.Texts(text("text-columns", "Text columns", "Columns to be read as text whatever they hold, for example "
-                        + "numbers that are names."), List.of()),
-                new Setting.Text(text("time-format", "Time format", "How dates or date-times are written where it is not ISO 8601, in "
-                        + "strptime codes: %d.%m.%Y %H:%M:%S for 30.06.2015 12:00:00."), "", false, false),
-                new Setting.Whole(new Setting.Common("memory", "Memory", "Limits", "Memory for reading; any file can be read with the "
-                        + "default, because it is never loaded whole."), "MB", Database.LEAST_MEGABYTES, MOST_MEGABYTES,
-                        OptionalLong.of(Database.USUAL_MEGABYTES)),
-                new Setting.Flag(new Setting.Common("copy", "Copy to results", "Limits", "Whether the table as read is written to the "
-                        + "result folder too; switch it off for very large files."), true));
+                new Setting.Texts(text("text-columns", "Text columns",
+                        "Columns to be read as text whatever they hold, for example numbers that are names."), List.of()),
+                new Setting.Text(text("time-format", "Time format", "How dates or date-times are written where it is not "
+                        + "ISO 8601, in strptime codes: %d.%m.%Y %H:%M:%S for 30.06.2015 12:00:00."), "", false, false));
+    }
+
+    private static List<Setting> limitSettings() {
+        return List.of(
+                new Setting.Whole(new Setting.Common("memory", "Memory", "Limits",
+                        "Memory for reading; any file can be read with the default, because it is never loaded "
+                        + "whole."), "MB",
+                        Database.LEAST_MEGABYTES, Database.MOST_MEGABYTES, OptionalLong.of(Database.USUAL_MEGABYTES)),
+                new Setting.Flag(new Setting.Common("copy", "Copy to results", "Limits", "Whether the table as read is "
+                        + "written to the result folder too; switch it off for very large files."), true));
     }
 
     private static Setting.Common csv(String key, String label, String help) {
@@ -108,7 +135,8 @@ public final class TableSource implements Node {
         List<String> columns = table.schema().columns().stream()
                 .map(column -> column.name() + " (" + column.type().title() + ")").toList();
         return new NodeResult(Map.of("table", table), List.of(),
-                List.of("Read from " + table.origin() + " with " + columns.size() + " columns: " + String.join(", ", columns) + "."),
+                List.of("Read from " + table.origin() + " with " + columns.size() + " columns: " + String.join(", ", columns)
+                + "."),
                 List.of());
     }
 

@@ -39,14 +39,16 @@ final class TextTable implements Explainer {
         } catch (SQLException failure) {
             throw explain(failure);
         }
-        String select = columns.stream().map(this::cell).collect(Collectors.joining(", ", "SELECT ", " FROM " + file.read()));
+        String select = columns.stream().map(this::cell).collect(Collectors.joining(", ", "SELECT ", " FROM "
+                + "" + file.read()));
         return new DuckDbTable(Recipe.file(select, file.path()), new TableSchema(columns), file.shown(), limits.megabytes(),
                 limits.copied(), this);
     }
 
     private List<Column> columns(TextTyper.Result result) throws SQLException {
         if (result.rows() == 0) {
-            throw new TableFault(file.shown(), "there is a header (" + String.join(", ", file.names()) + ") but no row below it",
+            throw new TableFault(file.shown(), "there is a header (" + String.join(", ", file.names())
+                    + ") but no row below it",
                     "give a table with at least one row");
         }
         List<Column> columns = new ArrayList<>();
@@ -106,7 +108,8 @@ final class TextTable implements Explainer {
             return database.one(find, row -> new TableFault(
                     file.shown() + ", " + file.places().row(row.getLong(1)) + ", column " + column.name(),
                     "the text \"" + shortened(row.getString(2)) + "\" in a column of type " + column.type().title(),
-                    "correct the cell, add this text to the setting missing, or name the column in the setting text-columns"));
+                    "correct the cell, add this text to the setting missing, or name the column in the setting "
+                    + "text-columns"));
         } catch (SQLException failure) {
             throw explainOnce(failure);
         }

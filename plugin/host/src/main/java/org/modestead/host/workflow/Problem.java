@@ -8,7 +8,8 @@ import java.util.stream.Stream;
  *
  * @param file the workflow file, or the command line option that is wrong
  * @param step id of the step, empty when it is not about one
- * @param key what it is about, for example {@code setting rank}, {@code link a.table -> b.table} or {@code line 3, column 7};
+ * @param key what it is about, for example {@code setting rank}, {@code link a.table -> b.table} or {@code line 3, column
+ * 7};
  *     may be empty
  * @param seen what was found, with the value
  * @param wanted what would be right, as an instruction

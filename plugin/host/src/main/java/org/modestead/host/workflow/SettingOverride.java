@@ -20,7 +20,8 @@ public record SettingOverride(String step, String key, String text) {
         int equals = typed.indexOf('=');
         int dot = typed.indexOf('.');
         boolean sound = dot > 0 && equals > dot + 1;
-        return sound ? Optional.of(new SettingOverride(typed.substring(0, dot).strip(), typed.substring(dot + 1, equals).strip(),
+        return sound ? Optional.of(new SettingOverride(typed.substring(0, dot).strip(), typed.substring(dot + 1, equals)
+                .strip(),
                 typed.substring(equals + 1))) : Optional.empty();
     }
 }

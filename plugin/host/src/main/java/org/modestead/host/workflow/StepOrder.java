@@ -43,7 +43,8 @@ final class StepOrder {
         return inputs.getOrDefault(step, Map.of()).values().stream().map(Link.End::step).distinct().sorted().toList();
     }
 
-    /** Follows the inputs backwards from a step that waits for ever, until a step comes back; told in the flow's direction. */
+    /** Follows the inputs backwards from a step that waits for ever,
+            until a step comes back; told in the flow's direction. */
     private List<String> circle(String start) {
         Set<String> path = new LinkedHashSet<>();
         String at = start;

@@ -68,7 +68,8 @@ final class StepSettings {
         Set<String> replaced = replace(step, node.declaration(), stored, problems);
         SettingsReader.Reading reading = SettingsReader.read(node, stored);
         reading.problems().forEach(found -> problems.add(new Problem(
-                replaced.contains(found.key()) ? OPTION : workflow.fileName(), step.id(), "setting " + found.key(), found.seen(),
+                replaced.contains(found.key()) ? OPTION : workflow.fileName(), step.id(), "setting " + found.key(),
+                found.seen(),
                 found.wanted())));
         missingFiles(step.id(), node.declaration(), stored, problems);
         return new Known(node, reading.settings());
@@ -88,7 +89,8 @@ final class StepSettings {
                         "name a file in it"));
             } else if (!Files.exists(path)) {
                 problems.add(new Problem(workflow.fileName(), step, "setting " + setting.key(), "there is no file " + name
-                        + Neighbours.hint(path), "name a file relative to " + workflow.baseFolder() + " or with its full path"));
+                        + Neighbours.hint(path), "name a file relative to " + workflow.baseFolder()
+                        + " or with its full path"));
             }
         }
     }
@@ -104,7 +106,8 @@ final class StepSettings {
             if (setting.isEmpty()) {
                 List<String> keys = declaration.settings().stream().map(Setting::key).toList();
                 problems.add(new Problem(OPTION, step.id(), "setting " + override.key(), "no setting of that name in "
-                        + declaration.id() + NearestName.hint(override.key(), keys), "use one of " + String.join(", ", keys)));
+                        + declaration.id() + NearestName.hint(override.key(), keys), "use one of " + String.join(", ",
+                        keys)));
                 continue;
             }
             Optional<Object> value = SettingsReader.fromText(setting.get(), override.text());

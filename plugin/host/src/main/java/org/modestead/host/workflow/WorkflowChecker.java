@@ -60,7 +60,8 @@ public final class WorkflowChecker {
         return new Outcome(Optional.of(new RunPlan(workflow, List.copyOf(planned.values()), ordered)), problems);
     }
 
-    private static Map<String, PlannedStep> plan(Map<String, StepSettings.Known> known, Map<String, Map<String, Link.End>> inputs) {
+    private static Map<String, PlannedStep> plan(Map<String, StepSettings.Known> known, Map<String, Map<String,
+            Link.End>> inputs) {
         Map<String, PlannedStep> planned = new LinkedHashMap<>();
         known.forEach((id, step) -> step.settings().ifPresent(settings ->
                 planned.put(id, new PlannedStep(id, step.node(), settings, inputs.getOrDefault(id, Map.of())))));

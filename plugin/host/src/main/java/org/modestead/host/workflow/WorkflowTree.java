@@ -147,7 +147,8 @@ final class WorkflowTree {
     private static Map<String, Object> values(JsonNode settings) {
         Map<String, Object> values = new LinkedHashMap<>();
         ObjectMapper mapper = new ObjectMapper();
-        settings.properties().forEach(field -> values.put(field.getKey(), mapper.convertValue(field.getValue(), Object.class)));
+        settings.properties()
+                .forEach(field -> values.put(field.getKey(), mapper.convertValue(field.getValue(), Object.class)));
         return values;
     }
 

@@ -35,7 +35,8 @@ class BadInputTest {
     @Test
     void emptyFile() throws IOException {
         given("");
-        refused(2, "step source", "pumps.csv", "the file is empty (0 bytes)", "give a table with a header and at least one row");
+        refused(2, "step source", "pumps.csv", "the file is empty (0 bytes)", "give a table with a header and at least one "
+                + "row");
     }
 
     @Test
@@ -102,7 +103,8 @@ class BadInputTest {
     @Test
     void unknownNodeSettingTypeCircleAndMissingLinkAllAtOnce() throws IOException {
         given(samples(100));
-        TestWorkflows.write(folder, List.of("source:table-sorce", "build:snapshot-builder:{\"delay-deph\": 2, \"scaling\": \"wide\"}",
+        TestWorkflows.write(folder, List.of("source:table-sorce", "build:snapshot-builder:{\"delay-deph\": 2, \"scaling\": "
+                + "\"wide\"}",
                 "a:table-query", "b:table-query", "fit:operator-fitter:{\"rank\": \"ten\"}"),
                 List.of("a.table>b.input", "b.table>a.input", "b.table>fit.snapshots"));
         run();
@@ -113,7 +115,8 @@ class BadInputTest {
                 "step fit, setting rank: the text \"ten\"; use a whole number",
                 "link b.table -> fit.snapshots: a Table cannot feed an input that takes Snapshots",
                 "the steps a -> b -> a feed each other in a circle",
-                "step build, input table: nothing is linked to it").map(part -> () -> assertTrue(said.contains(part), part + "\n" + said)));
+                "step build, input table: nothing is linked to it")
+                .map(part -> () -> assertTrue(said.contains(part), part + "\n" + said)));
     }
 
     @Test
@@ -138,7 +141,8 @@ class BadInputTest {
     void unwritableTarget() throws IOException {
         given(samples(100));
         Files.createDirectory(folder.resolve("taken.csv"));
-        TestWorkflows.write(folder, List.of("source:table-source:{\"path\": \"pumps.csv\"}", "sink:table-sink:{\"path\": \"taken.csv\"}"),
+        TestWorkflows.write(folder, List.of("source:table-source:{\"path\": \"pumps.csv\"}", "sink:table-sink:{\"path\": "
+                + "\"taken.csv\"}"),
                 List.of("source.table>sink.table"));
         refused(2, "step sink", "taken.csv", "this is a folder, not a file", "name a file in it");
     }
@@ -146,7 +150,8 @@ class BadInputTest {
     private void given(String csv) throws IOException {
         Files.writeString(folder.resolve("pumps.csv"), csv);
         TestWorkflows.write(folder, List.of("source:table-source:{\"path\": \"pumps.csv\"}",
-                "build:snapshot-builder:{\"time-column\": \"time\", \"time-unit\": \"s\", \"channels\": [\"flow\"], \"delay-depth\": 30}",
+                "build:snapshot-builder:{\"time-column\": \"time\", \"time-unit\": \"s\", \"channels\": [\"flow\"], "
+                + "\"delay-depth\": 30}",
                 "fit:operator-fitter", "spectrum:spectrum-extractor"),
                 List.of("source.table>build.table", "build.snapshots>fit.snapshots", "fit.operator>spectrum.operator"));
     }

@@ -28,7 +28,8 @@ class BigFileTest {
         write(folder.resolve("big.csv"));
         assertTrue(Files.size(folder.resolve("big.csv")) > LEAST_BYTES);
         TestWorkflows.write(folder, List.of("source:table-source:{\"path\": \"big.csv\", \"copy\": false, \"memory\": 128}",
-                "sum:table-query:{\"sql\": \"SELECT run, count(*) AS n, sum(flow) AS total FROM input GROUP BY run ORDER BY run\"}",
+                "sum:table-query:{\"sql\": \"SELECT run, count(*) AS n, sum(flow) AS total FROM input GROUP BY run ORDER "
+                + "BY run\"}",
                 "copy:table-sink:{\"path\": \"copy.csv\"}"),
                 List.of("source.table>sum.input", "source.table>copy.table"));
         ChildProcess child = ChildProcess.start(folder, List.of("-Xmx96m"), "run", folder.toString());

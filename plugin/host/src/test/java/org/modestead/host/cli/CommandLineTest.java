@@ -43,13 +43,15 @@ class CommandLineTest {
         assertEquals(0, run("run", folder.toString()));
         assertEquals("value\n1.0\n", Files.readString(folder.resolve("out/a/table.csv")));
         assertTrue(out().endsWith("Report: " + folder.resolve("out/report.html") + "\n"), this::out);
-        assertEquals("a: started\na: done in 0.0 s\nb: started\nb: done in 0.0 s\n", err().replaceAll("\\d\\.\\d s", "0.0 s"));
+        assertEquals("a: started\na: done in 0.0 s\nb: started\nb: done in 0.0 s\n",
+                err().replaceAll("\\d\\.\\d s", "0.0 s"));
     }
 
     @Test
     void settingsAndFolderOfTheCommandLineCount() throws IOException {
         TestWorkflows.write(folder, List.of("a:source"), List.of());
-        assertEquals(0, run("run", folder.resolve("workflow.json").toString(), "--out", folder.resolve("x/y").toString(), "--set",
+        assertEquals(0, run("run", folder.resolve("workflow.json").toString(), "--out", folder.resolve("x/y")
+                .toString(), "--set",
                 "a.level=42"));
         assertEquals("value\n42.0\n", Files.readString(folder.resolve("x/y/a/table.csv")));
     }
@@ -70,7 +72,8 @@ class CommandLineTest {
     void aDefectIsOneSentenceWithALogThatHoldsTheDetails() throws IOException {
         TestWorkflows.write(folder, List.of("d:defect"), List.of());
         assertEquals(1, run("run", folder.toString()));
-        assertTrue(err().contains("step d: an error in the program (IllegalStateException: a slip); please report it with the log."),
+        assertTrue(err().contains("step d: an error in the program (IllegalStateException: a slip); please report it with "
+                + "the log."),
                 this::err);
         assertFalse(err().contains("\tat "), "no stack trace");
         String log = err().replaceAll("(?s).*Details: the log (\\S+)\\..*", "$1");
@@ -84,7 +87,8 @@ class CommandLineTest {
         assertEquals(2, run("run", folder.toString(), "--set", "b.levl=1", "--set", "nonsense"));
         assertEquals("""
                 --set: "nonsense" is not of the form step.key=value; write for example --set fit.rank=8.
-                workflow.json, step a, field node: there is no node "sorce", perhaps you meant source; use one of source, pass, fail, defect.
+                workflow.json, step a, field node: there is no node "sorce", perhaps you meant source; use one of source, pass, \
+                fail, defect.
                 --set, step b, setting levl: no setting of that name in pass, perhaps you meant level; use one of level.
                 workflow.json, step b, setting level: the number 101; use a whole number at least 0 and at most 100.
                 workflow.json, link a.table -> other.a: there is no step "other"; use one of a, b.
@@ -106,11 +110,13 @@ class CommandLineTest {
     @Test
     void nodesListsAndExplains() {
         assertEquals(0, run("nodes"));
-        assertEquals("Data\n  source  Serves a test.\n  pass    Serves a test.\n  fail    Serves a test.\n  defect  Serves a test.\n",
+        assertEquals("Data\n  source  Serves a test.\n  pass    Serves a test.\n  fail    Serves a test.\n  defect  Serves "
+                + "a test.\n",
                 out());
         out.reset();
         assertEquals(0, run("nodes", "source"));
-        assertTrue(out().contains("    level: whole number, at least 0 and at most 100, default 1.\n        A number.\n"), this::out);
+        assertTrue(out().contains("    level: whole number, at least 0 and at most 100, default 1.\n        A number.\n"),
+                this::out);
         assertEquals(2, run("nodes", "sourc"));
         assertTrue(err().startsWith("There is no node \"sourc\", perhaps you meant source; use one of "), this::err);
     }

@@ -31,7 +31,8 @@ class StopTest {
         Files.writeString(folder.resolve("t.csv"), "time,flow\n0,1\n1,2\n");
         Files.createDirectory(folder.resolve("long"));
         TestWorkflows.write(folder, List.of("source:table-source:{\"path\": \"t.csv\"}"), List.of());
-        TestWorkflows.write(folder.resolve("long"), List.of("source:table-source:{\"path\": \"../t.csv\"}", "more:wait-for-stop"),
+        TestWorkflows.write(folder.resolve("long"), List.of("source:table-source:{\"path\": "
+                + "\"../t.csv\"}", "more:wait-for-stop"),
                 List.of("source.table>more.a"));
     }
 
@@ -73,14 +74,16 @@ class StopTest {
         ChildProcess second = ChildProcess.start(Files.createDirectory(folder.resolve("second")), List.of(), "run",
                 folder.resolve("workflow.json").toString(), "--out", folder.resolve("out").toString());
         assertEquals(1, second.exit());
-        assertTrue(second.said().contains("another run is writing this folder; wait until it ends, or choose another folder."),
+        assertTrue(second.said().contains("another run is writing this folder; wait until it ends, or choose another "
+                + "folder."),
                 second.said());
         first.process().destroyForcibly();
         first.exit();
     }
 
     private ChildProcess longRun() throws IOException, InterruptedException {
-        ChildProcess child = ChildProcess.start(folder, List.of("-Xmx256m"), "run", folder.resolve("long").toString(), "--out",
+        ChildProcess child = ChildProcess.start(folder, List.of("-Xmx256m"), "run", folder.resolve("long")
+                .toString(), "--out",
                 folder.resolve("out").toString());
         child.await("more: started");
         return child;

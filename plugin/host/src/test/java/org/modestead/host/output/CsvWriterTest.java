@@ -44,7 +44,8 @@ class CsvWriterTest {
     void textIsQuotedWhereItMustBe() throws IOException {
         TableSchema schema = TableSchema.of(new Column("a,b", CellType.TEXT), new Column("c", CellType.TEXT));
         assertEquals("\"a,b\",c\n\"say \"\"x\"\"\",\"two\nlines\"\n\" blank\",plain text\n",
-                written(MemoryTable.builder(schema, "test").row("say \"x\"", "two\nlines").row(" blank", "plain text").build()));
+                written(MemoryTable.builder(schema, "test").row("say \"x\"", "two\nlines").row(" blank", "plain text")
+                .build()));
     }
 
     private static String written(MemoryTable table) throws IOException {

@@ -98,7 +98,8 @@ class OutputFolderTest {
 
     @Test
     void aFullDiskIsToldAsSuch() {
-        assertEquals("results of step fit: the disk is full (No space left on device); make room or choose a folder on another disk; "
+        assertEquals("results of step fit: the disk is full (No space left on device); make room or choose a folder on "
+                + "another disk; "
                 + "nothing half-written was left.",
                 OutputFault.of("results of step fit", new IOException("No space left on device")).getMessage());
     }
@@ -113,7 +114,8 @@ class OutputFolderTest {
 
     private List<String> all() throws IOException {
         try (Stream<Path> inside = Files.walk(parent)) {
-            return inside.filter(path -> !path.equals(parent)).map(path -> parent.relativize(path).toString()).sorted().toList();
+            return inside.filter(path -> !path.equals(parent)).map(path -> parent.relativize(path).toString()).sorted()
+                    .toList();
         }
     }
 }

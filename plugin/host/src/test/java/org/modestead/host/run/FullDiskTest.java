@@ -71,7 +71,8 @@ class FullDiskTest {
 
     private static void assertTold(RunResult result) {
         assertEquals(RunResult.State.UNWRITTEN, result.state());
-        assertTrue(result.failures().get(0).matches("results of step source: the disk is full \\(.*\\); make room or choose a folder on "
+        assertTrue(result.failures().get(0).matches("results of step source: the disk is full \\(.*\\); make room or "
+                + "choose a folder on "
                 + "another disk; nothing half-written was left\\."), result.failures().toString());
     }
 

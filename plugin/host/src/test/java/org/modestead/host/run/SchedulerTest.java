@@ -46,7 +46,8 @@ class SchedulerTest {
     void catalog() {
         nodes = NodeCatalog.of(List.of(
                 new FakeNode("source", (inputs, settings, context) -> note("source", settings.whole("level"))),
-                new FakeNode("double", (inputs, settings, context) -> note("double", 2 * value(inputs, "a") * settings.whole("level"))),
+                new FakeNode("double", (inputs, settings, context) ->
+                note("double", 2 * value(inputs, "a") * settings.whole("level"))),
                 new FakeNode("sum", (inputs, settings, context) -> note("sum", value(inputs, "a") + value(inputs, "b"))),
                 new FakeNode("meet", (inputs, settings, context) -> meet()),
                 new FakeNode("fail", (inputs, settings, context) -> {
@@ -93,8 +94,10 @@ class SchedulerTest {
             links.add((i < 4 ? "a" : "d" + (i - 4)) + ".table>d" + i + ".a");
         }
         RunPlan plan = TestWorkflows.plan(TestWorkflows.write(folder, steps, links), nodes);
-        new WorkflowRunner(1, new ResultCache(0), Disk.REAL).run(plan, folder.resolve("one"), RunListener.NONE, new CancelSwitch());
-        new WorkflowRunner(4, new ResultCache(0), Disk.REAL).run(plan, folder.resolve("four"), RunListener.NONE, new CancelSwitch());
+        new WorkflowRunner(1, new ResultCache(0), Disk.REAL).run(plan, folder.resolve("one"), RunListener.NONE,
+                new CancelSwitch());
+        new WorkflowRunner(4, new ResultCache(0), Disk.REAL).run(plan, folder.resolve("four"), RunListener.NONE,
+                new CancelSwitch());
         for (String name : RunRecord.filesOf(folder.resolve("one"))) {
             assertArrayEquals(Files.readAllBytes(folder.resolve("one").resolve(name)),
                     Files.readAllBytes(folder.resolve("four").resolve(name)), name);
@@ -108,7 +111,8 @@ class SchedulerTest {
                 List.of("bad.table>after.a", "after.table>later.a", "a.table>b.a"));
         RunResult result = run(file, new CancelSwitch());
         assertEquals(RunResult.State.FAILED, result.state());
-        assertEquals(List.of("step bad, rank: the rank 9 is above the 4 that the data hold; choose at most 4."), result.failures());
+        assertEquals(List.of("step bad, rank: the rank 9 is above the 4 that the data hold; choose at most 4."),
+                result.failures());
         assertEquals(new StepOutcome.Skipped("bad"), result.outcomes().get("later"));
         assertInstanceOf(StepOutcome.Done.class, result.outcomes().get("b"));
         assertTrue(Files.exists(folder.resolve("out/b/table.csv")));
@@ -158,7 +162,8 @@ class SchedulerTest {
         assertTrue(((StepOutcome.Done) again.outcomes().get("b")).cached());
         assertEquals("value\n14.0\n", Files.readString(folder.resolve("out/d/table.csv")));
         ran.clear();
-        runner.run(TestWorkflows.plan(file, nodes, "c.level=5"), folder.resolve("out"), RunListener.NONE, new CancelSwitch());
+        runner.run(TestWorkflows.plan(file, nodes, "c.level=5"), folder.resolve("out"), RunListener.NONE,
+                new CancelSwitch());
         assertEquals(List.of(), ran, "nothing changed, nothing runs, and the tables are written all the same");
         assertEquals("value\n14.0\n", Files.readString(folder.resolve("out/d/table.csv")));
     }
@@ -170,7 +175,8 @@ class SchedulerTest {
         for (int i = 0; i < 2; i++) {
             runner.run(TestWorkflows.plan(file, nodes), folder.resolve("out"), RunListener.NONE, new CancelSwitch());
         }
-        assertEquals(List.of("source", "double", "source", "double"), ran, "the second result pushes the first out each time");
+        assertEquals(List.of("source", "double", "source", "double"),
+                ran, "the second result pushes the first out each time");
     }
 
     @Test
@@ -197,13 +203,15 @@ class SchedulerTest {
     }
 
     private boolean cached(WorkflowRunner runner, Path file) {
-        RunResult result = runner.run(TestWorkflows.plan(file, TestWorkflows.allNodes()), folder.resolve("out"), RunListener.NONE,
+        RunResult result = runner.run(TestWorkflows.plan(file, TestWorkflows.allNodes()), folder.resolve("out"),
+                RunListener.NONE,
                 new CancelSwitch());
         return ((StepOutcome.Done) result.outcomes().get("s")).cached();
     }
 
     private RunResult run(Path file, CancelSwitch cancel) {
-        return new WorkflowRunner(2, new ResultCache(0), Disk.REAL).run(TestWorkflows.plan(file, nodes), folder.resolve("out"),
+        return new WorkflowRunner(2, new ResultCache(0), Disk.REAL).run(TestWorkflows.plan(file, nodes),
+                folder.resolve("out"),
                 RunListener.NONE, cancel);
     }
 

@@ -82,19 +82,23 @@ class TableQueryTest {
             text.append(i).append(',').append(i == TextTyper.SAMPLE + 50 ? "abc" : "1.5").append('\n');
         }
         Files.writeString(folder.resolve("t.csv"), text.toString());
-        Table sum = Steps.query(folder, "SELECT sum(flow) AS total FROM input", Map.of("input", Steps.source(folder, "t.csv")));
+        Table sum = Steps.query(folder, "SELECT sum(flow) AS total FROM input",
+                Map.of("input", Steps.source(folder, "t.csv")));
         TableFault fault = assertThrows(TableFault.class, () -> Steps.rows(sum));
-        assertEquals("t.csv, row " + (TextTyper.SAMPLE + 50) + " (line " + (TextTyper.SAMPLE + 51) + "), column flow", fault.where());
+        assertEquals("t.csv, row " + (TextTyper.SAMPLE + 50) + " (line " + (TextTyper.SAMPLE + 51) + "), column flow",
+                fault.where());
     }
 
     @Test
     void wrongNamesAndFailingExpressionsAreOneSentence() throws IOException {
         TableFault name = assertThrows(TableFault.class, () -> query("SELECT flwo FROM input"));
-        assertTrue(name.getMessage().matches("setting sql: Referenced column \"flwo\" not found.*flow.*; correct the query\\."),
+        assertTrue(name.getMessage().matches("setting sql: Referenced column \"flwo\" not found.*flow.*; correct the "
+                + "query\\."),
                 name::getMessage);
         TableFault twice = assertThrows(TableFault.class, () -> query("SELECT flow, time AS flow FROM input"));
         assertEquals("setting sql, column flow", twice.where());
-        TableFault late = assertThrows(TableFault.class, () -> Steps.rows(query("SELECT CAST(note AS DOUBLE) AS n FROM input")));
+        TableFault late = assertThrows(TableFault.class, () -> Steps.rows(query("SELECT CAST(note AS DOUBLE) AS n FROM "
+                + "input")));
         assertTrue(late.getMessage().startsWith("setting sql: Could not convert string 'a'"), late::getMessage);
     }
 

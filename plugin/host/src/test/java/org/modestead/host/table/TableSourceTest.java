@@ -32,9 +32,11 @@ class TableSourceTest {
                 1,2,false,2020-01-02,2020-01-01 10:00:01.5,
                 2,NaN,true,2020-01-03,2020-01-01T10:00:02,x
                 """);
-        assertEquals(List.of(CellType.LONG, CellType.DOUBLE, CellType.FLAG, CellType.DATE, CellType.DATE_TIME, CellType.TEXT),
+        assertEquals(List.of(CellType.LONG, CellType.DOUBLE, CellType.FLAG, CellType.DATE, CellType.DATE_TIME,
+                CellType.TEXT),
                 types(table));
-        assertEquals(List.of("0|1.5|true|2020-01-01|2020-01-01T10:00|a, b", "1|2.0|false|2020-01-02|2020-01-01T10:00:01.500|",
+        assertEquals(List.of("0|1.5|true|2020-01-01|2020-01-01T10:00|a, "
+                + "b", "1|2.0|false|2020-01-02|2020-01-01T10:00:01.500|",
                 "2||true|2020-01-03|2020-01-01T10:00:02|x"), Steps.rows(table));
     }
 
@@ -84,7 +86,8 @@ class TableSourceTest {
     void leavesOutTheEmptyColumnOfATrailingDelimiterButKeepsANamedEmptyChannel() throws IOException {
         assertEquals(List.of("time", "flow"), read("time,flow,\n0,1,\n1,2,\n").schema().names());
         Table table = read("time,flow\n0,\n1,NaN\n");
-        assertEquals(List.of(CellType.LONG, CellType.DOUBLE), types(table), "an empty channel is a channel, to be refused later");
+        assertEquals(List.of(CellType.LONG, CellType.DOUBLE),
+                types(table), "an empty channel is a channel, to be refused later");
     }
 
     @Test
@@ -99,7 +102,8 @@ class TableSourceTest {
     @Test
     void textInANumberColumnNamesFileRowLineColumnAndText() throws IOException {
         TableFault fault = refused("time,note,flow\n0,\"a\nb\",1\n1,c,abc\n2,c,3\n");
-        assertEquals("t.csv, row 2 (line 4), column flow: the text \"abc\" in a column of type whole number; correct the cell, add this "
+        assertEquals("t.csv, row 2 (line 4), column flow: the text \"abc\" in a column of type whole number; correct the "
+                + "cell, add this "
                 + "text to the setting missing, or name the column in the setting text-columns.", fault.getMessage());
     }
 
@@ -118,7 +122,8 @@ class TableSourceTest {
 
     @Test
     void textThatIsDeclaredMissingOrTextPasses() throws IOException {
-        assertEquals(List.of("0|1", "1|", "2|3"), Steps.rows(read("time,flow\n0,1\n1,n.a.\n2,3\n", "missing", List.of("n.a."))));
+        assertEquals(List.of("0|1", "1|", "2|3"),
+                Steps.rows(read("time,flow\n0,1\n1,n.a.\n2,3\n", "missing", List.of("n.a."))));
         assertEquals(List.of(CellType.LONG, CellType.TEXT),
                 types(read("time,run\n0,1\n1,2\n2,2b\n", "text-columns", List.of("run"))));
     }
@@ -150,9 +155,11 @@ class TableSourceTest {
 
     @Test
     void raggedRowsAreNamedWithTheirWidth() throws IOException {
-        assertEquals("t.csv, row 2 (line 3): 3 cells where the header has 2; give every row as many cells, and quote cells that hold "
+        assertEquals("t.csv, row 2 (line 3): 3 cells where the header has 2; give every row as many cells, and quote cells "
+                + "that hold "
                 + "the delimiter.", refused("time,flow\n0,1\n1,2,3\n").getMessage());
-        assertTrue(refused("time,flow\n0,1\n1\n").getMessage().startsWith("t.csv, row 2 (line 3): 1 cell where the header has 2"));
+        assertTrue(refused("time,flow\n0,1\n1\n").getMessage()
+                .startsWith("t.csv, row 2 (line 3): 1 cell where the header has 2"));
     }
 
     @Test
@@ -173,7 +180,8 @@ class TableSourceTest {
     void textOfAnotherEncodingIsNamedByLine() throws IOException {
         Files.write(folder.resolve("t.csv"), "time,débit\n0,1\n".getBytes(StandardCharsets.ISO_8859_1));
         TableFault fault = assertThrows(TableFault.class, () -> Steps.source(folder, "t.csv"));
-        assertEquals("t.csv, line 1: the text is not UTF-8; save the file as UTF-8, or set encoding to latin-1 if that is what it is.",
+        assertEquals("t.csv, line 1: the text is not UTF-8; save the file as UTF-8, or set encoding to latin-1 if that is "
+                + "what it is.",
                 fault.getMessage());
         Files.write(folder.resolve("t.csv"), "time,note\n0,a\n1,é\n".getBytes(StandardCharsets.ISO_8859_1));
         TableFault late = assertThrows(TableFault.class, () -> Steps.rows(Steps.source(folder, "t.csv")));
@@ -183,8 +191,10 @@ class TableSourceTest {
     @Test
     void missingFileAndFolderAreNamed() throws IOException {
         Files.writeString(folder.resolve("pumps.csv"), "time,flow\n0,1\n");
-        assertEquals("pump.csv: there is no such file, perhaps you meant pumps.csv; name a file relative to the workflow's folder "
-                + "or with its full path.", assertThrows(TableFault.class, () -> Steps.source(folder, "pump.csv")).getMessage());
+        assertEquals("pump.csv: there is no such file, perhaps you meant pumps.csv; name a file relative to the workflow's "
+                + "folder "
+                + "or with its full path.", assertThrows(TableFault.class, () -> Steps.source(folder, "pump.csv"))
+                .getMessage());
         Files.createDirectory(folder.resolve("data"));
         assertEquals("data: this is a folder, not a file; name a file in it.",
                 assertThrows(TableFault.class, () -> Steps.source(folder, "data")).getMessage());
@@ -198,7 +208,8 @@ class TableSourceTest {
         TableFault fault = assertThrows(TableFault.class, () -> Steps.source(folder, "t.json"));
         assertEquals("t.json, row 2, column f", fault.where());
         Files.writeString(folder.resolve("t.json"), "[{\"t\":0},{\"t\":");
-        assertTrue(assertThrows(TableFault.class, () -> Steps.source(folder, "t.json")).getMessage().startsWith("t.json: Malformed"));
+        assertTrue(assertThrows(TableFault.class, () -> Steps.source(folder, "t.json")).getMessage()
+                .startsWith("t.json: Malformed"));
     }
 
     @Test
@@ -210,7 +221,8 @@ class TableSourceTest {
         assertEquals(Steps.rows(csv), Steps.rows(parquet));
         Files.writeString(folder.resolve("broken.parquet"), "hello");
         TableFault fault = assertThrows(TableFault.class, () -> Steps.source(folder, "broken.parquet"));
-        assertTrue(fault.getMessage().startsWith("broken.parquet: ") && !fault.getMessage().contains("\n"), fault::getMessage);
+        assertTrue(fault.getMessage().startsWith("broken.parquet: ") && !fault.getMessage().contains("\n"),
+                fault::getMessage);
     }
 
     @Test

@@ -21,7 +21,8 @@ class WorkflowFileTest {
     void readsStepsSettingsAndLinksInFileOrder() throws IOException {
         WorkflowFile.Reading reading = read("""
                 {"format": "modestead-workflow/1", "name": "Pumps",
-                 "steps": [{"id": "b", "node": "x", "settings": {"rank": 8, "names": ["u", "v"], "none": null}}, {"id": "a", "node": "y"}],
+                 "steps": [{"id": "b", "node": "x", "settings": {"rank": 8, "names": ["u", "v"], "none": null}},
+                           {"id": "a", "node": "y"}],
                  "links": [{"from": "b.table", "to": "a.input"}]}""");
         assertEquals(List.of(), reading.problems());
         Workflow workflow = reading.workflow().orElseThrow();
@@ -35,7 +36,8 @@ class WorkflowFileTest {
 
     @Test
     void aFolderStandsForItsWorkflowFile() throws IOException {
-        Files.writeString(folder.resolve("workflow.json"), "{\"format\": \"modestead-workflow/1\", \"steps\": [{\"id\": \"a\", \"node\": \"x\"}]}");
+        Files.writeString(folder.resolve("workflow.json"), "{\"format\": \"modestead-workflow/1\", \"steps\": [{\"id\": "
+                + "\"a\", \"node\": \"x\"}]}");
         assertEquals(folder.getFileName().toString(), WorkflowFile.read(folder).workflow().orElseThrow().name());
     }
 
@@ -66,15 +68,18 @@ class WorkflowFileTest {
                            {"id": "d", "node": "x"}, {"id": "D", "node": "x"}],
                  "links": [{"from": "c", "to": "d.x"}, {"from": "c.t", "to": "d.x", "via": "e"}, "c.t"]}""");
         assertEquals(List.of(
-                "w.json, field format: the text \"modestead-workflow/9\"; write \"modestead-workflow/1\", the one format this release "
+                "w.json, field format: the text \"modestead-workflow/9\"; write \"modestead-workflow/1\", the one format "
+                + "this release "
                         + "knows.",
                 "w.json, field nam: the workflow has no such field, perhaps you meant name; use format, name, steps, links.",
                 "w.json, entry 1 of steps, field id: the text \"a b\"; write an id of letters, digits, - and _ in quotes.",
-                "w.json, step c, field setings: a step has no such field, perhaps you meant settings; use id, node, settings.",
+                "w.json, step c, field setings: a step has no such field, perhaps you meant settings; use id, node, "
+                + "settings.",
                 "w.json, step c, field node: the number 3; write the id of a node in quotes.",
                 "w.json, step c, field settings: a list; write an object, {\"key\": value}.",
                 "w.json, entry 3 of steps: the number 5; write an object, { ... }.",
-                "w.json, step D, field id: a second step with this id; give every step an id of its own (capital letters make no "
+                "w.json, step D, field id: a second step with this id; give every step an id of its own (capital letters "
+                + "make no "
                         + "difference).",
                 "w.json, entry 1 of links, field from: the text \"c\"; write \"step.port\".",
                 "w.json, field via: a link (entry 2 of links) has no such field; use from, to.",
@@ -84,9 +89,11 @@ class WorkflowFileTest {
 
     @Test
     void missingFileFolderAndOtherContentAreNamed() throws IOException {
-        assertTrue(WorkflowFile.read(folder.resolve("none.json")).problems().get(0).sentence().contains("there is no such file"));
+        assertTrue(WorkflowFile.read(folder.resolve("none.json")).problems().get(0).sentence()
+                .contains("there is no such file"));
         assertTrue(WorkflowFile.read(folder).problems().get(0).sentence().contains("the folder holds no workflow.json"));
-        assertEquals("w.json: the file holds a list, not an object; begin it with {\"format\": \"modestead-workflow/1\".", only("[]"));
+        assertEquals("w.json: the file holds a list, not an object; begin it with {\"format\": \"modestead-workflow/1\".",
+                only("[]"));
         assertTrue(only("").startsWith("w.json: the file holds nothing"));
     }
 
