@@ -35,13 +35,14 @@ public final class OperatorFitter {
         OrthonormalCompression full = ridged(compression.whiten(LARGEST_RANK), ridge);
         progress.checkCancelled();
         progress.report(0.8, "choosing the rank");
-        RankChoice choice = RankSelection.choose(rule, full, estimator, snapshots, progress.part(0.8, 1));
+        RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
         progress.report(1, "fitted");
         return new FittedOperator(full, choice.rank(), choice.reason(), estimator, estimator.describe(), estimator.kernel(), snapshots,
                 doubts(full, choice.rank(), snapshots));
     }
 
-    private static OrthonormalCompression ridged(OrthonormalCompression c, double ridge) {
+    /** Applies the ridge of {@link #fit}. */
+    static OrthonormalCompression ridged(OrthonormalCompression c, double ridge) {
         if (!(ridge >= 0) || Double.isInfinite(ridge)) {
             throw new FitFault("ridge", "the ridge is " + ridge, "give 0 or a small positive number");
         }

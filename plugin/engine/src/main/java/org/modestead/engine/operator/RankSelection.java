@@ -12,7 +12,8 @@ final class RankSelection {
     private RankSelection() {}
 
     /** @throws FitFault if the rule asks for what cannot be */
-    static RankChoice choose(RankRule rule, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
+    static RankChoice choose(RankRule rule, OrthonormalCompression full, Estimator estimator, double ridge, Snapshots snapshots,
+            Progress progress) {
         if (rule instanceof RankRule.Fixed fixed) {
             return fixed(fixed.rank(), full);
         }
@@ -22,7 +23,7 @@ final class RankSelection {
         if (rule instanceof RankRule.HardThreshold) {
             return hardThreshold(full);
         }
-        return holdout(((RankRule.Holdout) rule).largest(), full, estimator, snapshots, progress);
+        return holdout(((RankRule.Holdout) rule).largest(), full, estimator, ridge, snapshots, progress);
     }
 
     private static RankChoice fixed(int rank, OrthonormalCompression full) {
@@ -66,12 +67,14 @@ final class RankSelection {
         return falling.length % 2 == 1 ? falling[middle] : (falling[middle - 1] + falling[middle]) / 2;
     }
 
-    private static RankChoice holdout(int largest, OrthonormalCompression full, Estimator estimator, Snapshots snapshots, Progress progress) {
+    private static RankChoice holdout(int largest, OrthonormalCompression full, Estimator estimator, double ridge,
+            Snapshots snapshots, Progress progress) {
         if (largest < 1) {
             throw new FitFault("rank", "the largest rank to try is " + largest, "give at least 1");
         }
         InnerSplit split = InnerSplit.of(snapshots);
-        OrthonormalCompression trial = estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank()));
+        OrthonormalCompression trial = OperatorFitter.ridged(
+                estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank())), ridge);
         PredictionError.Best best = PredictionError.bestRank(trial, split.judging(), progress);
         return new RankChoice(best.rank(), String.format(Locale.ROOT,
                 "best one-step prediction on a quarter of the training data left out: relative error %.4g", best.error()));

@@ -128,6 +128,18 @@ class OperatorFitterTest {
     }
 
     @Test
+    void theRankIsChosenWithTheRidgeThatIsFitted() {
+        String plain = fit(lowRank(0.1, 6), new RankRule.Holdout(8), 0).rankChoice();
+        String ridged = fit(lowRank(0.1, 6), new RankRule.Holdout(8), 0.5).rankChoice();
+        // the figure in the reason is the error of the trial: a heavy ridge must show in it
+        assertTrue(error(ridged) > 2 * error(plain), ridged + " against " + plain);
+    }
+
+    private static double error(String reason) {
+        return Double.parseDouble(reason.substring(reason.lastIndexOf(' ') + 1));
+    }
+
+    @Test
     void aRidgeShrinksTheMultipliers() {
         double plain = SpectrumExtractor.extract(fit(lowRank(0.1, 6), new RankRule.Fixed(4), 0),
                 Progress.NONE).eigenvalues().get(0).abs();
