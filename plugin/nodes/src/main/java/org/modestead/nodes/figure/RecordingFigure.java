@@ -91,7 +91,7 @@ public final class RecordingFigure {
         String which = shown < channels ? "The first " + shown + " of " + channels + " channels"
                 : channels == 1 ? "The channel" : "All " + channels + " channels";
         String scale = oneUnit ? "." : ", each from its mean in its own standard deviations, for the units differ.";
-        String others = drawn == runs ? "" : " Drawn are " + drawn + " of " + Sentence.count(runs, "run")
+        String others = drawn == runs ? "" : " Drawn: " + drawn + " of " + Sentence.count(runs, "run")
                 + "; the others lie at the same times.";
         return which + " over time" + scale + others;
     }

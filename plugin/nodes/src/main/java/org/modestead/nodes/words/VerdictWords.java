@@ -2,19 +2,20 @@ package org.modestead.nodes.words;
 
 import org.modestead.engine.wellposed.Grade;
 
-/** What each verdict means, for a reader who has never seen the checks. */
+/**
+ * What each verdict means, for a reader who has never seen the checks. Says only what holds in every function space:
+ * whether a mode belongs to the space can be told in a kernel's space alone, and the findings say it there.
+ */
 public final class VerdictWords {
     private VerdictWords() {}
 
     /** Returns one sentence: what was found, without a subject's name; starts with a capital letter. */
     public static String meaning(Grade grade) {
         return switch (grade) {
-            case STANDS -> "It settles as functions are added, belongs to the function space, holds on data the fit"
-                    + " never saw and"
-                    + " does not depend on the other modes.";
-            case SETTLES -> "It settles as functions are added, belongs to the function space and holds on data the fit"
-                    + " never saw,"
-                    + " but it overlaps other modes, so its size depends on them.";
+            case STANDS -> "It settles as functions are added, holds on data the fit never saw and does not depend on the"
+                    + " other modes.";
+            case SETTLES -> "It settles as functions are added and holds on data the fit never saw, but it overlaps other"
+                    + " modes, so its size depends on them.";
             case UNDECIDED -> "The data are too few to tell whether it exists.";
             case DRIFTS -> "It forecasts data the fit never saw, but its rate or its weight keeps changing as functions"
                     + " are added:"
@@ -47,8 +48,7 @@ public final class VerdictWords {
     /** Returns one sentence on the modes that carry the signal, taken together; the worst of them decides. */
     public static String overall(Grade grade) {
         return switch (grade) {
-            case STANDS -> "Every mode that carries a stated share of the signal settles, belongs to the function space,"
-                    + " holds on"
+            case STANDS -> "Every mode that carries a stated share of the signal settles as functions are added, holds on"
                     + " data the fit never saw and does not depend on the others.";
             case SETTLES -> "Every mode that carries a stated share of the signal settles and holds on data the fit"
                     + " never saw, but"

@@ -77,7 +77,7 @@ class FigureFactoriesTest {
                 List.of(),
                 one.step(), one.delay(), one.preparation(), List.of(), List.of()), 1);
         assertEquals(1, figure.layers().size());
-        assertTrue(figure.caption().endsWith("Drawn are 1 of 2 runs; the others lie at the same times."), figure.caption());
+        assertTrue(figure.caption().endsWith("Drawn: 1 of 2 runs; the others lie at the same times."), figure.caption());
     }
 
     @Test
