@@ -32,13 +32,18 @@ public final class OperatorFitter {
         Compression compression = estimator.compress(snapshots, progress.part(0, 0.5));
         progress.checkCancelled();
         progress.report(0.5, "whitening");
-        OrthonormalCompression full = ridged(compression.whiten(LARGEST_RANK), ridge);
+        OrthonormalCompression full = ridged(compression.whiten(largest(rule)), ridge);
         progress.checkCancelled();
         progress.report(0.8, "choosing the rank");
         RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
         progress.report(1, "fitted");
         return new FittedOperator(full, choice.rank(), choice.reason(), estimator, estimator.describe(), estimator.kernel(), snapshots,
                 doubts(full, choice.rank(), snapshots));
+    }
+
+    /** The hard threshold needs the median of all singular values, whatever their number. */
+    private static int largest(RankRule rule) {
+        return rule instanceof RankRule.HardThreshold ? Integer.MAX_VALUE : LARGEST_RANK;
     }
 
     /** Applies the ridge of {@link #fit}. */

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.List;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.MatrixExponential;
@@ -12,7 +13,7 @@ import org.modestead.engine.recording.StateRun;
  * {@code ‖y - q(x)ᵀ P <g, q>‖ / ‖y - mean y‖} over given runs. On uneven times every step of a run is taken for its
  * mean step, so that jitter of the steps sets a floor that all candidates share.
  */
-final class PredictionError {
+public final class PredictionError {
 
     private PredictionError() {}
 
@@ -24,28 +25,62 @@ final class PredictionError {
     record Best(int rank, double error, double persistence) {}
 
     static Best bestRank(OrthonormalCompression compression, List<StateRun> runs, Progress progress) {
-        double[] squared = new double[compression.rank()];
-        double persistence = 0;
+        List<Integer> ranks = IntStream.rangeClosed(1, compression.rank()).boxed().toList();
+        List<DMatrixRMaj> functions = runs.stream().map(run -> compression.evaluate(run.states())).toList();
+        double[] errors = relative(compression, runs, functions, ranks, progress);
+        int best = 0;
+        for (int r = 1; r < errors.length; r++) {
+            best = errors[r] < errors[best] ? r : best;
+        }
+        return new Best(best + 1, errors[best], persistence(runs));
+    }
+
+    /**
+     * @param compression up to rank R
+     * @param runs on which it is judged, at least two states each
+     * @param functions per run, p x R values of the orthonormal functions at its states
+     * @param ranks to judge, each in [1, R]
+     * @param progress polled once a run and rank
+     * @return relative errors in the order of the ranks; 0 is perfect, 1 no better than the mean
+     */
+    public static double[] relative(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
+            List<Integer> ranks, Progress progress) {
+        double[] errors = new double[ranks.size()];
         double spread = 0;
-        for (StateRun run : runs) {
-            DMatrixRMaj now = Matrices.block(run.states(), 0, run.count() - 1, 0, run.states().numCols);
-            DMatrixRMaj next = Matrices.block(run.states(), 1, run.count(), 0, run.states().numCols);
-            double step = (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
-            DMatrixRMaj functions = compression.evaluate(now);
-            for (int r = 1; r <= compression.rank(); r++) {
+        for (int i = 0; i < runs.size(); i++) {
+            StateRun run = runs.get(i);
+            DMatrixRMaj next = later(run);
+            for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
-                OrthonormalCompression rung = compression.leading(r);
-                DMatrixRMaj carried = Matrices.product(propagator(rung, step), rung.observable());
-                squared[r - 1] += squaredDistance(Matrices.product(Matrices.block(functions, 0, now.numRows, 0, r), carried), next);
+                OrthonormalCompression rung = compression.leading(ranks.get(k));
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run)), rung.observable());
+                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - 1, 0, rung.rank());
+                errors[k] += squaredDistance(Matrices.product(now, carried), next);
             }
-            persistence += squaredDistance(now, next);
             spread += squaredSpread(next);
         }
-        int best = 0;
-        for (int r = 1; r < squared.length; r++) {
-            best = squared[r] < squared[best] ? r : best;
+        for (int k = 0; k < errors.length; k++) {
+            errors[k] = Math.sqrt(errors[k] / spread);
         }
-        return new Best(best + 1, Math.sqrt(squared[best] / spread), Math.sqrt(persistence / spread));
+        return errors;
+    }
+
+    private static double persistence(List<StateRun> runs) {
+        double squared = 0;
+        double spread = 0;
+        for (StateRun run : runs) {
+            squared += squaredDistance(Matrices.block(run.states(), 0, run.count() - 1, 0, run.states().numCols), later(run));
+            spread += squaredSpread(later(run));
+        }
+        return Math.sqrt(squared / spread);
+    }
+
+    private static DMatrixRMaj later(StateRun run) {
+        return Matrices.block(run.states(), 1, run.count(), 0, run.states().numCols);
+    }
+
+    private static double meanStep(StateRun run) {
+        return (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
     }
 
     private static DMatrixRMaj propagator(OrthonormalCompression rung, double step) {

@@ -29,7 +29,7 @@ public final class ContinuousSpectrum implements Check {
         double first = evidence.medianResidual().get(0);
         double top = evidence.medianResidual().get(last);
         boolean suspected = filling >= FILLING && top > FALLING * first && top > evidence.settings().residualThreshold();
-        return List.of(new Finding(0, id(), filling, FILLING, !suspected, String.format(Locale.ROOT,
+        return List.of(new Finding(0, id(), filling, Double.NaN, !suspected, String.format(Locale.ROOT,
                 "From rank %d to %d undamped oscillations go from %d to %d and the median residual from %.3g to %.3g%s.", evidence.rungs().get(0),
                 evidence.rungs().get(last), evidence.undamped().get(0), evidence.undamped().get(last), first, top,
                 suspected ? ": frequencies seem to fill a continuous range, so single ones mean nothing" : "")));

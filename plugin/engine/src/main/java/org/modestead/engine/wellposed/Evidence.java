@@ -18,6 +18,7 @@ import org.modestead.engine.spectrum.Spectrum;
  * @param captured per rung, share of the judging runs' variance that the projection holds
  * @param carryingNorm per rung, mean norm ratio of the modes that carry the signal
  * @param medianResidual per rung, median residual of its modes
+ * @param predictionErrors per rung, relative one-step prediction error on the judging runs
  * @param undamped per rung, number of its modes with damping ratio below 5 %
  * @param heldOut whether the residuals were measured on runs the fit never saw
  * @param longest duration of the longest training run
@@ -32,6 +33,7 @@ public record Evidence(
         List<Double> captured,
         List<Double> carryingNorm,
         List<Double> medianResidual,
+        List<Double> predictionErrors,
         List<Integer> undamped,
         boolean heldOut,
         double longest,
@@ -47,7 +49,7 @@ public record Evidence(
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
                 ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(),
                 ladder.rungs().stream().map(Evidence::median).toList(),
-                ladder.rungs().stream().map(Evidence::countUndamped).toList(), heldOut, ladder.longest(), settings);
+                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), heldOut, ladder.longest(), settings);
     }
 
     private static double median(Rung rung) {

@@ -1,6 +1,7 @@
 package org.modestead.engine.wellposed;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.TreeSet;
@@ -10,6 +11,7 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.PredictionError;
 import org.modestead.engine.spectrum.Matching;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
@@ -19,15 +21,23 @@ import org.modestead.engine.spectrum.TrainingSample;
  * The operator at nested ranks: does a mode stay what it is when functions join? Modes of neighbouring rungs are matched
  * by optimal assignment on {@code |λ - λ'|/scale + 1 - |<φ, φ'>|}, outwards from the fitted rank.
  *
+ * <p>Unless its top is set, the ladder ends below the first rung above the fitted rank whose one-step prediction of the judging
+ * runs is more than 5 % worse than that of a lower rung: from there on functions carry noise.
+ *
  * @param rungs by rising rank, at least one
  * @param rows every mode of the spectrum on every rung where it was found
+ * @param predictionErrors per rung, relative one-step error on the judging runs
  * @param longest duration of the longest training run
  */
-record Ladder(List<Rung> rungs, List<LadderRow> rows, double longest) {
+record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, double longest) {
 
     private static final int MOST_RUNGS = 12;
     private static final double TOO_FAR = 1.2;
     private static final double TRUSTED = 1e-11;
+    private static final double ROUNDING = 1e-10;
+
+    /** Prediction error over the best so far from which on a rung counts as worse. */
+    static final double WORSE = 1.05;
 
     /** Rates below this share of one over the longest run cannot be told from zero. */
     static final double RESOLVED = 0.1;
@@ -36,13 +46,31 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, double longest) {
         TrainingSample sample = TrainingSample.of(operator.snapshots());
         DMatrixRMaj sampled = operator.compression().evaluate(sample.states());
         List<Integer> ranks = ranks(operator, settings);
+        double[] errors = PredictionError.relative(operator.compression(), judging.runs(), judging.functions(), ranks, progress);
+        if (settings.ladderTo() == 0) {
+            ranks = ranks.subList(0, belowNoise(ranks, errors, operator.rank()));
+        }
         List<Rung> rungs = new ArrayList<>();
         for (int rank : ranks) {
             progress.checkCancelled();
             progress.report((double) rungs.size() / ranks.size(), "ladder, rank " + rank);
             rungs.add(Rung.of(operator.compression().leading(rank), sampled, sample, judging));
         }
-        return new Ladder(List.copyOf(rungs), rows(rungs, spectrum, ranks.indexOf(operator.rank()), sample.longest()), sample.longest());
+        List<Double> kept = Arrays.stream(errors).limit(rungs.size()).boxed().toList();
+        return new Ladder(List.copyOf(rungs), rows(rungs, spectrum, ranks.indexOf(operator.rank()), sample.longest()), kept,
+                sample.longest());
+    }
+
+    /** Returns how many rungs are kept. */
+    static int belowNoise(List<Integer> ranks, double[] errors, int fitted) {
+        double best = Double.POSITIVE_INFINITY;
+        for (int k = 0; k < errors.length; k++) {
+            if (ranks.get(k) > fitted && errors[k] > WORSE * best && best > ROUNDING) {
+                return k;
+            }
+            best = Math.min(best, errors[k]);
+        }
+        return errors.length;
     }
 
     private static List<Integer> ranks(FittedOperator operator, JudgeSettings settings) {

@@ -69,7 +69,7 @@ class ChecksTest {
                 modes, List.of(new Channel("a", "")), DelayEmbedding.NONE, "s", List.of());
         List<Integer> rungs = captured.size() == RUNGS.size() ? RUNGS : List.of(compression.rank());
         return new Evidence(operator, spectrum, rungs, ladder, expansion, captured, List.of(1.0, 1.0, 1.0, 1.0),
-                List.of(0.1, 0.1, 0.1, 0.1), List.of(0, 0, 0, 0), true, 10, JudgeSettings.DEFAULT);
+                List.of(0.1, 0.1, 0.1, 0.1), List.of(0.1, 0.1, 0.1, 0.1), List.of(0, 0, 0, 0), true, 10, JudgeSettings.DEFAULT);
     }
 
     private static List<LadderRow> ladder(double[] rates, double[] weights, double[] norms, double residual) {
@@ -96,7 +96,7 @@ class ChecksTest {
     @Test
     void idsAreUniqueAndEveryCheckIsFoundByTheServiceLoader() {
         List<String> ids = ServiceLoader.load(Check.class).stream().map(p -> p.get().id()).toList();
-        assertEquals(14, ids.size());
+        assertEquals(15, ids.size());
         assertEquals(ids.size(), ids.stream().distinct().count());
         assertTrue(ids.stream().allMatch(id -> id.matches("[a-z]+(-[a-z]+)*")), ids.toString());
     }
@@ -259,12 +259,29 @@ class ChecksTest {
         assertTrue(only(new ContinuousSpectrum(), base, 0).passed());
         Evidence filling = new Evidence(base.operator(), base.spectrum(), List.of(10, 20, 30), List.of(), base.fitted(),
                 List.of(1.0, 1.0, 1.0),
-                List.of(1.0, 1.0, 1.0), List.of(0.5, 0.5, 0.5), List.of(4, 8, 14), true, 10, JudgeSettings.DEFAULT);
+                List.of(1.0, 1.0, 1.0), List.of(0.5, 0.5, 0.5), List.of(0.1, 0.1, 0.1), List.of(4, 8, 14), true, 10, JudgeSettings.DEFAULT);
         assertFalse(only(new ContinuousSpectrum(), filling, 0).passed());
         Evidence falling = new Evidence(base.operator(), base.spectrum(), List.of(10, 20, 30), List.of(), base.fitted(),
                 List.of(1.0, 1.0, 1.0),
-                List.of(1.0, 1.0, 1.0), List.of(0.5, 0.3, 0.1), List.of(4, 8, 14), true, 10, JudgeSettings.DEFAULT);
+                List.of(1.0, 1.0, 1.0), List.of(0.5, 0.3, 0.1), List.of(0.1, 0.1, 0.1), List.of(4, 8, 14), true, 10, JudgeSettings.DEFAULT);
         assertTrue(only(new ContinuousSpectrum(), falling, 0).passed());
+    }
+
+    @Test
+    void aRankThatPredictsWorseThanALowerOneTakesNoiseForMotion() {
+        Finding worse = only(new PredictionLimit(), predicting(List.of(0.3, 0.2, 0.22)), 0);
+        assertFalse(worse.passed());
+        assertEquals(20, worse.value());
+        assertTrue(worse.sentence().contains("lower it"), worse.sentence());
+        assertTrue(only(new PredictionLimit(), predicting(List.of(0.3, 0.2, 0.205)), 0).passed(), "2.5 % worse is chance");
+    }
+
+    /** Evidence whose fitted rank is the last of three rungs. */
+    private static Evidence predicting(List<Double> errors) {
+        Evidence base = evidence(DIAGONAL, List.of(SINGLE), List.of());
+        int fitted = base.operator().rank();
+        return new Evidence(base.operator(), base.spectrum(), List.of(10, 20, fitted), List.of(), base.fitted(), List.of(1.0, 1.0, 1.0),
+                List.of(1.0, 1.0, 1.0), List.of(0.1, 0.1, 0.1), errors, List.of(0, 0, 0), true, 10, JudgeSettings.DEFAULT);
     }
 
     @Test

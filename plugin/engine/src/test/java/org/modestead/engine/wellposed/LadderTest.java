@@ -61,6 +61,16 @@ class LadderTest {
     }
 
     @Test
+    void theLadderEndsWhereNoiseTakesOverButNeverBelowTheFittedRank() {
+        List<Integer> ranks = List.of(2, 4, 6, 8, 10);
+        double[] errors = {0.5, 0.2, 0.19, 0.198, 0.21};
+        assertEquals(4, Ladder.belowNoise(ranks, errors, 4), "rank 10 predicts 10 % worse than rank 6, rank 8 only 4 %");
+        assertEquals(5, Ladder.belowNoise(ranks, errors, 10), "the fitted rank stays, with a doubt of its own");
+        assertEquals(5, Ladder.belowNoise(ranks, new double[] {1e-2, 1e-6, 1e-13, 3e-13, 1e-12}, 4),
+                "at rounding level worse means nothing");
+    }
+
+    @Test
     void everyRowBelongsToAModeAndAppearsOnceARung() {
         List<LadderRow> rows = Motions.judge(Motions.fit(tones(), new LinearEstimator(), 9), JudgeSettings.DEFAULT).ladder();
         assertEquals(rows.size(), rows.stream().map(row -> row.rank() + "/" + row.mode()).distinct().count());

@@ -37,8 +37,8 @@ public final class SnapshotBuilderNode implements Node {
         return new NodeDeclaration("snapshot-builder", "Snapshot Builder", NodeDeclaration.Stage.PREPARE,
                 "Turns a logged table into snapshots: runs of even or uneven samples, prepared and split for fit and"
                         + " judgement.",
-                description(), List.of("Takens, Detecting strange attractors in turbulence, Lecture Notes in"
-                        + " Mathematics 898, 1981"),
+                description(), List.of("Takens, Detecting strange attractors in turbulence, in: Dynamical"
+                        + " Systems and Turbulence, Springer 1981"),
                 List.of("recording", "time series", "resample", "gap", "delay", "embedding", "holdout", "detrend",
                         "normalise"),
                 List.of(Port.of(SnapshotSettings.TABLE, PortType.TABLE, "Table", "Logged samples, one row a time.")),
