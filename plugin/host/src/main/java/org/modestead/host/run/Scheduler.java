@@ -24,6 +24,7 @@ final class Scheduler {
     private final RunPlan plan;
     private final StepRunner runner;
     private final RunListener listener;
+    private final CancelSwitch cancel;
     private final Map<String, StepRunner.Ended> ended = new HashMap<>();
     private final List<PlannedStep> waiting;
     private int running;
@@ -32,11 +33,13 @@ final class Scheduler {
      * @param plan to be run once
      * @param runner does one step
      * @param listener hears how it goes
+     * @param cancel stops it
      */
-    Scheduler(RunPlan plan, StepRunner runner, RunListener listener) {
+    Scheduler(RunPlan plan, StepRunner runner, RunListener listener, CancelSwitch cancel) {
         this.plan = plan;
         this.runner = runner;
         this.listener = listener;
+        this.cancel = cancel;
         this.waiting = new ArrayList<>(plan.order());
     }
 
@@ -50,6 +53,7 @@ final class Scheduler {
         ExecutorService pool = Executors.newFixedThreadPool(threads, task -> {
             Thread thread = new Thread(task, "step");
             thread.setDaemon(true);
+            cancel.works(thread);
             return thread;
         });
         try {

@@ -99,6 +99,7 @@ final class StepRunner {
             store.keep(step, result, progress(step.id()).part(WORK, 1));
             return Optional.empty();
         } catch (IOException unwritable) {
+            cancel.check();
             OutputFault fault = OutputFault.of("results of step " + step.id(), unwritable);
             cancel.cancel(fault.getMessage());
             return Optional.of(new StepOutcome.Unwritten(fault.getMessage()));
@@ -119,8 +120,9 @@ final class StepRunner {
         };
     }
 
-    private static Ended ended(PlannedStep step, StepOutcome outcome) {
-        return new Ended(step, outcome, Optional.empty());
+    /** What goes wrong after the person asked to stop, goes wrong because of it. */
+    private Ended ended(PlannedStep step, StepOutcome outcome) {
+        return new Ended(step, cancel.reason().isPresent() ? new StepOutcome.Stopped() : outcome, Optional.empty());
     }
 
     private static Duration since(long start) {

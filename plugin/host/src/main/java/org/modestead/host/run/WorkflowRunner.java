@@ -56,7 +56,7 @@ public final class WorkflowRunner {
         try (OutputFolder folder = OutputFolder.open(target, disk)) {
             StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder), listener,
                     cancel);
-            Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener).run(threads);
+            Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener, cancel).run(threads);
             RunResult result = new RunResult(plan, outcomes, folder.folder(), Duration.between(started, Instant.now()),
                     cancel.reason().isPresent());
             if (result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED) {

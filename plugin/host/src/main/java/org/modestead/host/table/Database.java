@@ -77,17 +77,21 @@ final class Database implements AutoCloseable {
     /** Runs a statement without result. */
     void execute(String sql) throws SQLException {
         try (Statement statement = connection.createStatement()) {
-            statement.execute(sql);
+            InterruptWatch.during(statement, () -> statement.execute(sql));
         }
     }
 
     /** Runs a query that gives one row and hands it over. */
     <T> T one(String sql, RowReader<T> reader) throws SQLException {
-        try (Statement statement = connection.createStatement(); ResultSet row = statement.executeQuery(sql)) {
-            if (!row.next()) {
-                throw new SQLException("no row from " + sql);
-            }
-            return reader.read(row);
+        try (Statement statement = connection.createStatement()) {
+            return InterruptWatch.during(statement, () -> {
+                try (ResultSet row = statement.executeQuery(sql)) {
+                    if (!row.next()) {
+                        throw new SQLException("no row from " + sql);
+                    }
+                    return reader.read(row);
+                }
+            });
         }
     }
 

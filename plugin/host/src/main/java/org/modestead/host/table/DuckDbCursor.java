@@ -20,6 +20,7 @@ final class DuckDbCursor implements RowCursor {
     private final DuckDbTable table;
     private final List<Column> columns;
     private final Statement statement;
+    private final InterruptWatch watch;
     private final ResultSet rows;
     private long row;
 
@@ -28,7 +29,21 @@ final class DuckDbCursor implements RowCursor {
         this.table = table;
         this.columns = table.schema().columns();
         this.statement = database.connection().createStatement();
-        this.rows = statement.executeQuery(select);
+        this.watch = InterruptWatch.over(statement);
+        this.rows = rows(select);
+    }
+
+    private ResultSet rows(String select) throws SQLException {
+        boolean open = false;
+        try {
+            ResultSet found = statement.executeQuery(select);
+            open = true;
+            return found;
+        } finally {
+            if (!open) {
+                watch.close();
+            }
+        }
     }
 
     @Override
@@ -81,6 +96,7 @@ final class DuckDbCursor implements RowCursor {
 
     @Override
     public void close() {
+        watch.close();
         try {
             rows.close();
             statement.close();

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertInstanceOf;
+import static org.junit.jupiter.api.Assertions.assertTimeoutPreemptively;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import com.fasterxml.jackson.databind.JsonNode;
@@ -11,6 +12,7 @@ import com.fasterxml.jackson.databind.ObjectMapper;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.concurrent.CountDownLatch;
@@ -146,6 +148,39 @@ class SchedulerTest {
         assertEquals(RunResult.State.STOPPED, result.state());
         assertEquals(List.of("note.txt"), list(folder.resolve("out")));
         assertEquals(List.of("out", "workflow.json"), list(folder), "nothing is left beside the folder");
+    }
+
+    @Test
+    void aQueryThatComputesForLongStopsAtOnce() throws IOException {
+        Files.writeString(folder.resolve("t.csv"), "time,flow\n0,1\n");
+        Path file = TestWorkflows.write(folder, List.of("s:table-source:{\"path\": \"t.csv\"}",
+                "q:table-query:{\"sql\": \"SELECT sum(a.i * b.i) AS n FROM range(9000000) a(i), range(9000000) b(i)\"}"),
+                List.of("s.table>q.input"));
+        CancelSwitch cancel = new CancelSwitch();
+        RunListener person = new RunListener() {
+            @Override
+            public void started(String step) {
+                // waits for the writing of the table, which is when the query computes
+            }
+
+            @Override
+            public void progress(String step, double fraction, String message) {
+                if (step.equals("q") && message.startsWith("writing")) {
+                    new Thread(() -> cancel.cancel("enough")).start();
+                }
+            }
+
+            @Override
+            public void ended(String step, StepOutcome outcome) {
+                // told by the result
+            }
+        };
+        RunResult result = assertTimeoutPreemptively(Duration.ofSeconds(PATIENCE_SECONDS), () -> new WorkflowRunner(2,
+                new ResultCache(0), Disk.REAL).run(TestWorkflows.plan(file, TestWorkflows.allNodes()), folder.resolve("out"),
+                        person, cancel));
+        assertEquals(RunResult.State.STOPPED, result.state());
+        assertEquals(new StepOutcome.Stopped(), result.outcomes().get("q"));
+        assertFalse(Files.exists(folder.resolve("out")));
     }
 
     @Test
