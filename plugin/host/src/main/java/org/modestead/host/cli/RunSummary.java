@@ -6,7 +6,6 @@ import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
-import java.util.TreeMap;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.host.run.RunResult;
@@ -66,12 +65,17 @@ final class RunSummary {
     }
 
     void print(RunResult result) {
+        TimeUnit unit = unit(result);
+        boolean judged = false;
         for (PlannedStep step : result.plan().order()) {
-            if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done) {
-                verdict(step, done.result());
+            if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done && verdict(step.id(), done.result())) {
+                judged = true;
+                table(done.result()).ifPresent(modes -> modes(step.id(), modes, unit));
             }
         }
-        modes(result);
+        if (!judged) {
+            lastModes(result, unit);
+        }
         long doubts = result.outcomes().values().stream().filter(StepOutcome.Done.class::isInstance)
                 .mapToLong(outcome -> ((StepOutcome.Done) outcome).result().doubts().size()).sum();
         if (doubts > 0) {
@@ -80,25 +84,31 @@ final class RunSummary {
         out.println("Report: " + result.folder().resolve(WorkflowRunner.REPORT));
     }
 
-    private void verdict(PlannedStep step, NodeResult result) {
-        for (Object value : new TreeMap<>(result.outputs()).values()) {
-            if (value instanceof Verdict verdict) {
-                Paragraphs.hanging("Verdict (" + step.id() + "): ", verdict.overall().sentence()).forEach(out::println);
+    /** Tells the verdict of a step that judges; returns whether it is one. */
+    private boolean verdict(String step, NodeResult result) {
+        Optional<Verdict> verdict = result.outputs().values().stream().filter(Verdict.class::isInstance)
+                .map(Verdict.class::cast).findFirst();
+        verdict.ifPresent(found -> Paragraphs.hanging("Verdict (" + step + "): ", found.overall().sentence())
+                .forEach(out::println));
+        return verdict.isPresent();
+    }
+
+    /** Shows the last mode table of a run in which nothing was judged. */
+    private void lastModes(RunResult result, TimeUnit unit) {
+        List<PlannedStep> order = new ArrayList<>(result.plan().order());
+        Collections.reverse(order);
+        for (PlannedStep step : order) {
+            Optional<Table> modes = result.outcomes().get(step.id()) instanceof StepOutcome.Done done ? table(done.result())
+                    : Optional.empty();
+            if (modes.isPresent()) {
+                modes(step.id(), modes.get(), unit);
+                return;
             }
         }
     }
 
-    /** Shows the last mode table of the run: the judged one where modes were judged. */
-    private void modes(RunResult result) {
-        List<PlannedStep> order = new ArrayList<>(result.plan().order());
-        Collections.reverse(order);
-        for (PlannedStep step : order) {
-            if (result.outcomes().get(step.id()) instanceof StepOutcome.Done done
-                    && done.result().outputs().get("modes") instanceof Table modes) {
-                modes(step.id(), modes, unit(result));
-                return;
-            }
-        }
+    private static Optional<Table> table(NodeResult result) {
+        return result.outputs().get("modes") instanceof Table modes ? Optional.of(modes) : Optional.empty();
     }
 
     private void modes(String step, Table modes, TimeUnit unit) {
