@@ -26,6 +26,8 @@ final class RunSummary {
     private static final int MODES_SHOWN = 8;
     private static final String INDENT = "  ";
 
+    private static final String NO_OSCILLATION = "–";
+
     private final PrintStream out;
 
     RunSummary(PrintStream out) {
@@ -138,6 +140,10 @@ final class RunSummary {
 
     private static String cell(TableSchema schema, RowCursor cursor, Shown shown) {
         OptionalInt index = schema.indexOf(shown.column);
+        OptionalInt frequency = schema.indexOf(Shown.FREQUENCY.column);
+        if (shown == Shown.DAMPING_RATIO && frequency.isPresent() && cursor.number(frequency.getAsInt()) == 0) {
+            return NO_OSCILLATION;
+        }
         return shown.cell(cursor, index.getAsInt(), schema.columns().get(index.getAsInt()).type());
     }
 

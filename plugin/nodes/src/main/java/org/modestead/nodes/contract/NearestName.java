@@ -35,7 +35,7 @@ public final class NearestName {
     }
 
     private static boolean near(String a, String b) {
-        int allowed = Math.max(1, Math.max(a.length(), b.length()) / LETTERS_PER_EDIT);
+        int allowed = Math.max(1, (Math.max(a.length(), b.length()) + 1) / LETTERS_PER_EDIT);
         boolean begins = Math.min(a.length(), b.length()) >= LETTERS_PER_EDIT && (a.startsWith(b) || b.startsWith(a));
         return begins || distance(a, b) <= allowed;
     }

@@ -69,7 +69,8 @@ final class ModesSection {
         return List.of(Integer.toString(mode.number()), oscillates ? Digits.figure(mode.frequency()) : "none",
                 oscillates ? Digits.figure(mode.naturalFrequency()) : "none",
                 oscillates ? Digits.figure(mode.period()) : "none",
-                Digits.figure(mode.rate().re()), Digits.percent(mode.dampingRatio()), Digits.figure(mode.doublingTime()),
+                Digits.figure(mode.rate().re()), oscillates ? Digits.percent(mode.dampingRatio()) : "none",
+                Digits.figure(mode.doublingTime()),
                 Digits.figure(mode.amplitude()), Digits.percent(mode.energyShare()), verdict);
     }
 }

@@ -14,6 +14,8 @@ import org.modestead.nodes.words.Sentence;
 /** The first rows and columns of an output table, and how much more there is. */
 final class TableExcerpt {
     private static final int MOST_COLUMNS = 12;
+    // A source may be far larger than memory: its rows are not counted to the end for a note.
+    private static final long MOST_COUNTED = 1_000_000;
 
     private TableExcerpt() {}
 
@@ -23,7 +25,7 @@ final class TableExcerpt {
         List<List<String>> rows = new ArrayList<>();
         long more = 0;
         try (RowCursor cursor = table.open()) {
-            while (cursor.next()) {
+            while (more < MOST_COUNTED && cursor.next()) {
                 if (rows.size() < most) {
                     rows.add(row(cursor, columns.subList(0, shown)));
                 } else {
@@ -49,7 +51,7 @@ final class TableExcerpt {
     private static String note(long rows, int columns, String file) {
         List<String> left = new ArrayList<>();
         if (rows > 0) {
-            left.add(Sentence.count(rows, "more row"));
+            left.add((rows == MOST_COUNTED ? "at least " : "") + Sentence.count(rows, "more row"));
         }
         if (columns > 0) {
             left.add(Sentence.count(columns, "more column"));
