@@ -16,6 +16,7 @@ import org.modestead.engine.recording.Snapshots;
  * @param compression up to rank R
  * @param rank chosen r in [1, R]
  * @param rankChoice why r was chosen, in words
+ * @param ridge ρ that was applied, see {@link Ridge}
  * @param estimator what filled the compression, kept so that checks can refit with another step
  * @param method what was fitted, in words, for the report
  * @param kernel the kernel, when the estimator uses one
@@ -26,6 +27,7 @@ public record FittedOperator(
         OrthonormalCompression compression,
         int rank,
         String rankChoice,
+        double ridge,
         Estimator estimator,
         String method,
         Optional<KernelSpec> kernel,
@@ -47,7 +49,7 @@ public record FittedOperator(
 
     /** The same operator judged against other runs: only the runs change, not what was fitted. */
     public FittedOperator on(Snapshots others) {
-        return new FittedOperator(compression, rank, rankChoice, estimator, method, kernel, others, doubts);
+        return new FittedOperator(compression, rank, rankChoice, ridge, estimator, method, kernel, others, doubts);
     }
 
     /** Returns step map or generator. */

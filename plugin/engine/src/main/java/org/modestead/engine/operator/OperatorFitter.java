@@ -3,7 +3,6 @@ package org.modestead.engine.operator;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
@@ -21,8 +20,7 @@ public final class OperatorFitter {
      * @param snapshots whose training part is fitted
      * @param estimator which fills the compression
      * @param rule how the rank is chosen
-     * @param ridge ρ relative to the largest squared singular value, at least 0: row i of the compressed operator is
-     *     multiplied by {@code s_i² / (s_i² + ρ s_1²)}, the Tikhonov solution of {@code (G + ρ s_1² I) K = M}
+     * @param ridge ρ, see {@link Ridge}; at least 0
      * @param progress polled for cancel
      * @return never null
      * @throws FitFault if the rank asked for is more than the data hold, or the data do not suit the estimator
@@ -32,38 +30,18 @@ public final class OperatorFitter {
         Compression compression = estimator.compress(snapshots, progress.part(0, 0.5));
         progress.checkCancelled();
         progress.report(0.5, "whitening");
-        OrthonormalCompression full = ridged(compression.whiten(largest(rule)), ridge);
+        OrthonormalCompression full = Ridge.apply(compression.whiten(largest(rule)), ridge);
         progress.checkCancelled();
         progress.report(0.8, "choosing the rank");
         RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
         progress.report(1, "fitted");
-        return new FittedOperator(full, choice.rank(), choice.reason(), estimator, estimator.describe(), estimator.kernel(), snapshots,
+        return new FittedOperator(full, choice.rank(), choice.reason(), ridge, estimator, estimator.describe(), estimator.kernel(), snapshots,
                 doubts(full, choice.rank(), snapshots));
     }
 
     /** The hard threshold needs the median of all singular values, whatever their number. */
     private static int largest(RankRule rule) {
         return rule instanceof RankRule.HardThreshold ? Integer.MAX_VALUE : LARGEST_RANK;
-    }
-
-    /** Applies the ridge of {@link #fit}. */
-    static OrthonormalCompression ridged(OrthonormalCompression c, double ridge) {
-        if (!(ridge >= 0) || Double.isInfinite(ridge)) {
-            throw new FitFault("ridge", "the ridge is " + ridge, "give 0 or a small positive number");
-        }
-        if (ridge == 0) {
-            return c;
-        }
-        DMatrixRMaj action = c.action().copy();
-        double first = c.singular()[0] * c.singular()[0];
-        for (int i = 0; i < c.rank(); i++) {
-            double squared = c.singular()[i] * c.singular()[i];
-            for (int j = 0; j < c.rank(); j++) {
-                action.data[i * c.rank() + j] *= squared / (squared + ridge * first);
-            }
-        }
-        return new OrthonormalCompression(c.basis(), c.map(), action, c.second(), c.observable(), c.singular(), c.snapshots(),
-                c.innerProduct(), c.evolution());
     }
 
     private static List<Doubt> doubts(OrthonormalCompression full, int rank, Snapshots snapshots) {

@@ -73,7 +73,7 @@ final class RankSelection {
             throw new FitFault("rank", "the largest rank to try is " + largest, "give at least 1");
         }
         InnerSplit split = InnerSplit.of(snapshots);
-        OrthonormalCompression trial = OperatorFitter.ridged(
+        OrthonormalCompression trial = Ridge.apply(
                 estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank())), ridge);
         PredictionError.Best best = PredictionError.bestRank(trial, split.judging(), progress);
         return new RankChoice(best.rank(), String.format(Locale.ROOT,

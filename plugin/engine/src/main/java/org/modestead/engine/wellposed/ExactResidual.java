@@ -10,6 +10,7 @@ import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.operator.Ridge;
 import org.modestead.engine.spectrum.Mode;
 
 /**
@@ -33,9 +34,10 @@ public final class ExactResidual implements Check {
         if (compression.innerProduct() != InnerProduct.DATA) {
             return findings;
         }
+        DMatrixRMaj action = Ridge.removed(compression, evidence.operator().ridge());
         for (Mode mode : evidence.spectrum().modes()) {
             int j = mode.indices().get(0);
-            double residual = of(compression.action(), compression.second(), evidence.spectrum().vectors(), j,
+            double residual = of(action, compression.second(), evidence.spectrum().vectors(), j,
                     evidence.spectrum().eigenvalues().get(j));
             findings.add(new Finding(mode.number(), id(), residual, Double.NaN, true, String.format(Locale.ROOT,
                     "Over the training data one application of the operator misses the eigenvalue by %.3g.", residual)));

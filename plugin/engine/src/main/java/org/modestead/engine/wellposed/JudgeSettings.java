@@ -4,7 +4,8 @@ package org.modestead.engine.wellposed;
  * Thresholds of the checks. Every one is a setting with a documented default.
  *
  * @param ladderFrom lowest rank of the ladder, 0 = half the fitted rank, at least 2
- * @param ladderTo highest rank of the ladder, 0 = the fitted rank plus half of it where the data support that
+ * @param ladderTo highest rank of the ladder, 0 = the fitted rank plus half of it where the data support that, less where
+ *     noise takes over
  * @param shareThreshold energy share from which a mode counts for the overall verdict, in (0, 1); default 0.05
  * @param residualThreshold largest holdout residual of a mode, in (0, 1]; default 0.25
  * @param settleThreshold largest relative change of rate or weight over the last rungs, in (0, 1]; default 0.1

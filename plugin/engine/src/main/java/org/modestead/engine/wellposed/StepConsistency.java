@@ -9,6 +9,7 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.operator.Ridge;
 import org.modestead.engine.spectrum.Matching;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
@@ -34,7 +35,8 @@ public final class StepConsistency implements Check {
         }
         ModalExpansion expansion;
         try {
-            OrthonormalCompression again = other.get().compress(evidence.operator().snapshots(), progress).whiten(evidence.operator().rank());
+            OrthonormalCompression again = Ridge.apply(other.get().compress(evidence.operator().snapshots(), progress)
+                    .whiten(evidence.operator().rank()), evidence.operator().ridge());
             if (again.rank() < evidence.operator().rank()) {
                 return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "Fitted with another step the data hold only rank "
                         + again.rank() + ", so the rates cannot be compared."));

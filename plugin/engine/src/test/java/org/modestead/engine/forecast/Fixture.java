@@ -85,7 +85,7 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
         Arrays.fill(singular, 1);
         OrthonormalCompression compression = new OrthonormalCompression(basis, CommonOps_DDRM.identity(r), action,
                 CommonOps_DDRM.identity(r), observable, singular, 1, InnerProduct.DATA, evolution);
-        FittedOperator operator = new FittedOperator(compression, r, "by hand", new ByHand(), "by hand", Optional.empty(),
+        FittedOperator operator = new FittedOperator(compression, r, "by hand", 0, new ByHand(), "by hand", Optional.empty(),
                 snapshots, List.of());
         return new Fixture(operator, spectrum(snapshots, evolution, action, observable));
     }

@@ -60,7 +60,7 @@ class ChecksTest {
         OrthonormalCompression compression = compression(action, product, evolution);
         Run run = Motions.run("a", 20, 1, t -> new double[action.numRows]);
         Snapshots snapshots = Motions.snapshots(1, 1, List.of(run), List.of());
-        FittedOperator operator = new FittedOperator(compression, compression.rank(), "fixed", new LinearEstimator(),
+        FittedOperator operator = new FittedOperator(compression, compression.rank(), "fixed", 0, new LinearEstimator(),
                 "by hand", Optional.empty(),
                 snapshots, List.of());
         ModalExpansion expansion = ModalExpansion.of(compression);

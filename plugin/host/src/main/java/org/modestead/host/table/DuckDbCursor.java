@@ -74,24 +74,8 @@ final class DuckDbCursor implements RowCursor {
     }
 
     @Override
-    public String text(int column) {
-        return cell(column).map(Object::toString).orElse("");
-    }
-
-    @Override
-    public LocalDate date(int column) {
-        return (LocalDate) present(column);
-    }
-
-    @Override
-    public LocalDateTime dateTime(int column) {
-        Object cell = present(column);
-        return cell instanceof java.time.ZonedDateTime zoned ? zoned.toLocalDateTime() : (LocalDateTime) cell;
-    }
-
-    @Override
     public Optional<Object> cell(int column) {
-        return read(() -> Optional.ofNullable(value(column, columns.get(column).type())));
+        return read(() -> value(column, columns.get(column).type()));
     }
 
     @Override
@@ -107,7 +91,7 @@ final class DuckDbCursor implements RowCursor {
         }
     }
 
-    private Object value(int column, CellType type) throws SQLException {
+    private Optional<Object> value(int column, CellType type) throws SQLException {
         Object found = switch (type) {
             case DOUBLE -> number(column);
             case LONG -> rows.getLong(column + 1);
@@ -119,13 +103,9 @@ final class DuckDbCursor implements RowCursor {
         };
         boolean missing = found == null || rows.wasNull() || found instanceof Double number && number.isNaN();
         if (missing) {
-            return null;
+            return Optional.empty();
         }
-        return found instanceof OffsetDateTime moment ? moment.atZoneSameInstant(ZoneOffset.UTC) : found;
-    }
-
-    private Object present(int column) {
-        return cell(column).orElseThrow(() -> new IllegalStateException("row " + row + ": the cell is missing"));
+        return Optional.of(found instanceof OffsetDateTime moment ? moment.atZoneSameInstant(ZoneOffset.UTC) : found);
     }
 
     private <T> T read(Reading<T> reading) {

@@ -37,7 +37,7 @@ final class JudgeNodeSettings {
                 rank(LADDER_FROM, "Lowest rank", "Rank of the lowest rung; 0 takes half the fitted rank.",
                         DEFAULT.ladderFrom()),
                 rank(LADDER_TO, "Highest rank", "Rank of the highest rung; 0 takes the fitted rank and half of it more,"
-                        + " as far as the data support that.", DEFAULT.ladderTo()),
+                        + " as far as the data support that, and ends earlier where noise takes over.", DEFAULT.ladderTo()),
                 share(SHARE, "Share that counts", "Share of the signal from which a mode enters the overall verdict.",
                         DEFAULT.shareThreshold()),
                 share(RESIDUAL, "Largest residual", "Largest relative amount by which an eigenfunction may miss its own"

@@ -1,9 +1,5 @@
 package org.modestead.nodes.table;
 
-import java.time.LocalDate;
-import java.time.LocalDateTime;
-import java.time.ZoneOffset;
-import java.time.ZonedDateTime;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
@@ -130,30 +126,8 @@ public final class MemoryTable implements Table {
         }
 
         @Override
-        public boolean isMissing(int column) {
-            return cell(column).isEmpty();
-        }
-
-        @Override
         public double number(int column) {
             return stores.get(column).number(at);
-        }
-
-        @Override
-        public String text(int column) {
-            return cell(column).map(Object::toString).orElse("");
-        }
-
-        @Override
-        public LocalDate date(int column) {
-            return (LocalDate) present(column);
-        }
-
-        @Override
-        public LocalDateTime dateTime(int column) {
-            Object cell = present(column);
-            return cell instanceof ZonedDateTime zoned ? zoned.withZoneSameInstant(ZoneOffset.UTC).toLocalDateTime()
-                    : (LocalDateTime) cell;
         }
 
         @Override
@@ -164,10 +138,6 @@ public final class MemoryTable implements Table {
         @Override
         public void close() {
             // holds nothing but arrays
-        }
-
-        private Object present(int column) {
-            return cell(column).orElseThrow(() -> new IllegalStateException("row " + row() + ": the cell is missing"));
         }
     }
 }

@@ -2,6 +2,9 @@ package org.modestead.nodes.table;
 
 import java.time.LocalDate;
 import java.time.LocalDateTime;
+import java.time.ZoneOffset;
+import java.time.ZonedDateTime;
+import java.util.Optional;
 
 /**
  * Steps through the rows of a table. Before the first {@link #next()} there is no current row.
@@ -17,24 +20,38 @@ public interface RowCursor extends AutoCloseable {
     long row();
 
     /** Returns whether the cell is missing. */
-    boolean isMissing(int column);
+    default boolean isMissing(int column) {
+        return cell(column).isEmpty();
+    }
 
     /** Returns the number in a column of type DOUBLE or LONG; NaN when missing. */
     double number(int column);
 
     /** Returns the cell written as text whatever its type; empty when missing. */
-    String text(int column);
+    default String text(int column) {
+        return cell(column).map(Object::toString).orElse("");
+    }
 
     /** Returns the date in a column of type DATE. */
-    LocalDate date(int column);
+    default LocalDate date(int column) {
+        return (LocalDate) present(column);
+    }
 
     /** Returns the date-time in a column of type DATE_TIME or ZONED_DATE_TIME (at UTC then). */
-    LocalDateTime dateTime(int column);
+    default LocalDateTime dateTime(int column) {
+        Object cell = present(column);
+        return cell instanceof ZonedDateTime zoned ? zoned.withZoneSameInstant(ZoneOffset.UTC).toLocalDateTime()
+                : (LocalDateTime) cell;
+    }
 
     /**
      * Returns the cell as the Java type that {@link CellType} names, empty when missing.
      */
-    java.util.Optional<Object> cell(int column);
+    Optional<Object> cell(int column);
+
+    private Object present(int column) {
+        return cell(column).orElseThrow(() -> new IllegalStateException("row " + row() + ": the cell is missing"));
+    }
 
     @Override
     void close();
