@@ -1,0 +1,38 @@
+package org.modestead.engine.battery;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/** All cases, and all trials of them. */
+final class Battery {
+
+    static final double[] NOISE = {0, 0.001, 0.01, 0.05};
+    static final int[] RUNS = {5, 20, 80};
+
+    private Battery() {}
+
+    static List<Case> cases() {
+        List<Case> out = new ArrayList<>();
+        out.addAll(LinearFlows.cases());
+        out.addAll(LineFlows.cases());
+        out.addAll(Oscillators.cases());
+        out.addAll(Signals.cases());
+        out.addAll(NoModes.cases());
+        return out;
+    }
+
+    /** Every case at every noise and number of runs, seeds 1 to a number. */
+    static List<Trial> trials(int seeds) {
+        List<Trial> out = new ArrayList<>();
+        for (Case known : cases()) {
+            for (double noise : NOISE) {
+                for (int runs : RUNS) {
+                    for (long seed = 1; seed <= seeds; seed++) {
+                        out.add(new Trial(known, noise, runs, seed));
+                    }
+                }
+            }
+        }
+        return out;
+    }
+}

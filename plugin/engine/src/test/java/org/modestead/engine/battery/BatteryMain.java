@@ -1,0 +1,30 @@
+package org.modestead.engine.battery;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/** Judges the whole battery and prints the confusion tables; arguments: number of seeds, and {@code wrong} to list every wrong verdict first. */
+public final class BatteryMain {
+
+    private BatteryMain() {}
+
+    /** Runs it. */
+    public static void main(String[] arguments) {
+        int seeds = arguments.length > 0 ? Integer.parseInt(arguments[0]) : 2;
+        boolean listed = arguments.length > 1 && arguments[1].equals("wrong");
+        System.out.println(run(seeds, listed));
+    }
+
+    static String run(int seeds, boolean listed) {
+        List<Trial.Outcome> outcomes = new ArrayList<>();
+        for (Trial trial : Battery.trials(seeds)) {
+            outcomes.add(trial.judge());
+        }
+        StringBuilder out = new StringBuilder();
+        if (listed) {
+            outcomes.stream().filter(outcome -> !outcome.right()).forEach(outcome -> out.append(outcome).append(System.lineSeparator()));
+        }
+        Confusion confusion = new Confusion(outcomes);
+        return out + confusion.byCase() + confusion.report();
+    }
+}

@@ -1,0 +1,105 @@
+package org.modestead.engine.battery;
+
+import java.util.Arrays;
+import java.util.Random;
+import java.util.function.UnaryOperator;
+import org.ejml.data.DMatrixRMaj;
+import org.hipparchus.ode.ODEState;
+import org.hipparchus.ode.OrdinaryDifferentialEquation;
+import org.hipparchus.ode.nonstiff.DormandPrince853Integrator;
+import org.modestead.engine.linalg.MatrixExponential;
+
+/** Ways to make a path: closed form, iterated map, linear flow, integrated flow. */
+final class Paths {
+
+    private Paths() {}
+
+    /** A random start. */
+    interface Start {
+        double[] draw(Random random);
+    }
+
+    /** State at a time after a start. */
+    interface Solution {
+        double[] at(double[] start, double time);
+    }
+
+    /** {@code x'} at {@code x}. */
+    interface Field {
+        double[] at(double[] x);
+    }
+
+    /** Every component uniform in an interval. */
+    static Start box(int size, double low, double high) {
+        return random -> random.doubles(size, low, high).toArray();
+    }
+
+    static KnownSystem closed(String name, int samples, double step, Start start, Solution solution) {
+        return new KnownSystem(name, step, random -> {
+            double[] from = start.draw(random);
+            double[][] rows = new double[samples][];
+            for (int k = 0; k < samples; k++) {
+                rows[k] = solution.at(from, k * step);
+            }
+            return rows;
+        });
+    }
+
+    static KnownSystem map(String name, int samples, double step, Start start, UnaryOperator<double[]> next) {
+        return new KnownSystem(name, step, random -> {
+            double[][] rows = new double[samples][];
+            rows[0] = start.draw(random);
+            for (int k = 1; k < samples; k++) {
+                rows[k] = next.apply(rows[k - 1]);
+            }
+            return rows;
+        });
+    }
+
+    /** {@code x' = A x}, exactly. */
+    static KnownSystem linear(String name, int samples, double step, double[][] a) {
+        DMatrixRMaj generator = new DMatrixRMaj(a);
+        for (int k = 0; k < generator.getNumElements(); k++) {
+            generator.data[k] *= step;
+        }
+        DMatrixRMaj flow = MatrixExponential.of(generator);
+        return map(name, samples, step, box(a.length, -1, 1), x -> {
+            double[] y = new double[x.length];
+            for (int i = 0; i < y.length; i++) {
+                for (int j = 0; j < y.length; j++) {
+                    y[i] += flow.get(i, j) * x[j];
+                }
+            }
+            return y;
+        });
+    }
+
+    /** Integrated to 1e-10, first on to a given time that is not recorded; channels are the first ones of the state. */
+    static KnownSystem flow(String name, int samples, double step, double unrecorded, int channels, Start start, Field field) {
+        return new KnownSystem(name, step, random -> {
+            double[] x = start.draw(random);
+            x = unrecorded > 0 ? advanced(field, x, unrecorded) : x;
+            double[][] rows = new double[samples][];
+            for (int k = 0; k < samples; k++) {
+                rows[k] = Arrays.copyOf(x, channels);
+                x = advanced(field, x, step);
+            }
+            return rows;
+        });
+    }
+
+    private static double[] advanced(Field field, double[] x, double time) {
+        OrdinaryDifferentialEquation equation = new OrdinaryDifferentialEquation() {
+            @Override
+            public int getDimension() {
+                return x.length;
+            }
+
+            @Override
+            public double[] computeDerivatives(double t, double[] y) {
+                return field.at(y);
+            }
+        };
+        return new DormandPrince853Integrator(1e-9, time, 1e-10, 1e-10).integrate(equation, new ODEState(0, x), time).getPrimaryState();
+    }
+}
