@@ -25,7 +25,7 @@ import org.modestead.engine.spectrum.TrainingSample;
  * runs is more than 5 % worse than that of a lower rung: from there on functions carry noise.
  *
  * @param rungs by rising rank, at least one
- * @param rows every mode of the spectrum on every rung where it was found
+ * @param rows every mode of the spectrum on every rung where it was found, and as mode 0 the strongest of every rung
  * @param predictionErrors per rung, relative one-step error on the judging runs
  * @param longest duration of the longest training run
  */
@@ -123,12 +123,29 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
                     continue;
                 }
                 Rung.Part part = rungs.get(k).parts().get(at);
-                rows.add(new LadderRow(rungs.get(k).rank(), mode.number(), part.rate(), part.weight(), part.weightNorm(), part.normRatio(),
-                        part.residual(), before.isEmpty() ? Double.NaN : relativeChange(before.get(), part.rate(), longest)));
+                rows.add(row(rungs.get(k).rank(), mode.number(), part, before, longest));
                 before = Optional.of(part.rate());
             }
         }
+        addStrongest(rungs, rows, longest);
         return List.copyOf(rows);
+    }
+
+    /** The strongest mode of every rung, as mode 0: where modes cannot be followed, this shows what becomes of the signal's weights. */
+    private static void addStrongest(List<Rung> rungs, List<LadderRow> rows, double longest) {
+        Optional<Complex> before = Optional.empty();
+        for (Rung rung : rungs) {
+            if (rung.strongest().isPresent()) {
+                Rung.Part part = rung.strongest().get();
+                rows.add(row(rung.rank(), 0, part, before, longest));
+                before = Optional.of(part.rate());
+            }
+        }
+    }
+
+    private static LadderRow row(int rank, int mode, Rung.Part part, Optional<Complex> before, double longest) {
+        return new LadderRow(rank, mode, part.rate(), part.weight(), part.weightNorm(), part.normRatio(), part.residual(),
+                before.map(rate -> relativeChange(rate, part.rate(), longest)).orElse(Double.NaN));
     }
 
     /**

@@ -6,7 +6,7 @@ import org.modestead.engine.linalg.Complex;
  * One mode on one rung.
  *
  * @param rank of the rung
- * @param mode number of the mode at the fitted rank that it was matched to
+ * @param mode number of the mode at the fitted rank that it was matched to; 0 for the strongest mode of the rung, whichever it is
  * @param rate λ on this rung
  * @param weight size of its contribution: root mean square over the training states, prepared units
  * @param weightNorm norm of its joint weight vector over the newest samples, prepared units

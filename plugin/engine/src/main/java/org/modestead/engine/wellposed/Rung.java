@@ -1,6 +1,8 @@
 package org.modestead.engine.wellposed;
 
+import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
@@ -37,8 +39,10 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
      * @param normRatio ‖φ‖_H / ‖φ‖_L2(data)
      * @param residual see {@link Residuals}; NaN where the judging runs do not excite the mode: what is left of it
      *     there is noise, and noise is evidence neither for nor against it
+     * @param constant whether it is the constant function, see {@link ConstantFunction}
      */
-    record Part(List<Integer> group, Complex rate, double weight, double weightNorm, double normRatio, double residual) {}
+    record Part(List<Integer> group, Complex rate, double weight, double weightNorm, double normRatio, double residual,
+            boolean constant) {}
 
     int rank() {
         return expansion.rank();
@@ -51,13 +55,14 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         double[] residuals = Residuals.of(expansion, judging);
         double[] judged = judging.sizes(expansion);
         List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream()
-                .map(group -> part(expansion, values, group, sample.channels(), residuals, judged)).toList();
-        return new Rung(expansion, parts, carryingNorm(parts, values, sample.longest()), captured(compression, sample.channels(), judging));
+                .map(group -> part(expansion, values, group, sample, residuals, judged)).toList();
+        return new Rung(expansion, parts, carryingNorm(parts), captured(compression, sample.channels(), judging));
     }
 
-    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, int channels, double[] residuals,
+    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, TrainingSample sample, double[] residuals,
             double[] judged) {
         int j = group.get(0);
+        int channels = sample.channels();
         double size = 0;
         for (int i = 0; i < values.numRows; i++) {
             size = Math.hypot(size, ComplexMatrices.entry(values, i, j).abs());
@@ -68,14 +73,20 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         }
         double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, 0, channels)));
         double trained = size / Math.sqrt(values.numRows);
-        return new Part(group, expansion.rates().get(j), weight, norm, 1 / trained, judged[j] < EXCITED * trained ? Double.NaN : residuals[j]);
+        return new Part(group, expansion.rates().get(j), weight, norm, 1 / trained, judged[j] < EXCITED * trained ? Double.NaN : residuals[j],
+                ConstantFunction.is(values, j, expansion.rates().get(j), sample.longest()));
     }
 
-    private static double carryingNorm(List<Part> parts, ZMatrixRMaj values, double longest) {
+    /** Returns the mode, not the constant, that adds most to the signal on this rung; empty when there is none but the constant. */
+    Optional<Part> strongest() {
+        return parts.stream().filter(part -> !part.constant()).max(Comparator.comparingDouble(Part::weight));
+    }
+
+    private static double carryingNorm(List<Part> parts) {
         double logarithms = 0;
         double total = 0;
         for (Part part : parts) {
-            if (!ConstantFunction.is(values, part.group().get(0), part.rate(), longest)) {
+            if (!part.constant()) {
                 double share = part.weight() * part.weight();
                 logarithms += share * Math.log(part.normRatio());
                 total += share;

@@ -11,7 +11,7 @@ import org.modestead.engine.Doubt;
  * @param overall worst grade among the modes that carry a stated share of the signal
  * @param modes one a mode of the spectrum, in its order
  * @param findings every check's outcome
- * @param ladder every mode on every rung
+ * @param ladder every mode on every rung, and as mode 0 the strongest mode of every rung
  * @param doubts what a reader of the results must know
  */
 public record Verdict(ModeVerdict overall, List<ModeVerdict> modes, List<Finding> findings, List<LadderRow> ladder, List<Doubt> doubts) {

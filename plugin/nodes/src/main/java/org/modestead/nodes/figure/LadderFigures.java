@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.ToDoubleFunction;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
@@ -17,11 +18,14 @@ public final class LadderFigures {
     private static final double CARRIES = 1e-3;
     private static final double TWO_PI = 2 * Math.PI;
 
+    private static final int STRONGEST = 0;
+
     private LadderFigures() {}
 
     /**
      * Draws frequency (when a mode oscillates), growth rate, weight, norm ratio and residual over the rank, for the at
-     * most six strongest modes that carry at least 0.1 % of the signal and are not the constant.
+     * most six strongest modes that carry at least 0.1 % of the signal and are not the constant; where some of them cannot be
+     * followed over all ranks, also for the strongest mode of each rank.
      *
      * @param spectrum the modes at the fitted rank
      * @param verdict with the ladder; an empty ladder gives no figures
@@ -69,19 +73,30 @@ public final class LadderFigures {
                 String reading) {
             List<Figure.Layer> layers = new ArrayList<>();
             for (Mode mode : modes) {
-                List<LadderRow> own = rows.stream().filter(row -> row.mode() == mode.number()).toList();
-                double[] values = own.stream().mapToDouble(value).map(v -> drawable(v, y) ? v : Double.NaN).toArray();
-                if (Arrays.stream(values).anyMatch(v -> !Double.isNaN(v))) {
-                    layers.add(new Figure.Line("mode " + mode.number(), "mode:" + mode.number(),
-                            own.stream().mapToDouble(LadderRow::rank).toArray(), values,
-                            layers.isEmpty() ? Figure.Emphasis.STRONG : Figure.Emphasis.NORMAL));
-                }
+                line("mode " + mode.number(), mode.number(), layers.isEmpty() ? Figure.Emphasis.STRONG : Figure.Emphasis.NORMAL, y,
+                        value).ifPresent(layers::add);
+            }
+            if (!layers.isEmpty() && modes.stream().anyMatch(mode -> count(mode.number()) < count(STRONGEST))) {
+                line("strongest of each rank", STRONGEST, Figure.Emphasis.FAINT, y, value).ifPresent(layers::add);
             }
             if (!layers.isEmpty()) {
                 layers.add(new Figure.Rule("fitted rank", "", true, rank));
                 figures.add(new Figure(id, Figure.Kind.CURVES, title, reading, Figure.Axis.linear("rank (number of"
                         + " functions)"), y, layers));
             }
+        }
+
+        private Optional<Figure.Layer> line(String name, int mode, Figure.Emphasis emphasis, Figure.Axis y,
+                ToDoubleFunction<LadderRow> value) {
+            List<LadderRow> own = rows.stream().filter(row -> row.mode() == mode).toList();
+            double[] values = own.stream().mapToDouble(value).map(v -> drawable(v, y) ? v : Double.NaN).toArray();
+            return Arrays.stream(values).allMatch(Double::isNaN) ? Optional.empty()
+                    : Optional.of(new Figure.Line(name, mode == STRONGEST ? "" : "mode:" + mode,
+                            own.stream().mapToDouble(LadderRow::rank).toArray(), values, emphasis));
+        }
+
+        private long count(int mode) {
+            return rows.stream().filter(row -> row.mode() == mode).count();
         }
 
         private static boolean drawable(double value, Figure.Axis y) {

@@ -19,7 +19,7 @@ final class LadderTable {
     static MemoryTable of(Verdict verdict) {
         MemoryTable.Builder rows = MemoryTable.builder(SCHEMA, "ladder");
         for (LadderRow row : verdict.ladder()) {
-            rows.row((long) row.rank(), (long) row.mode(), row.rate().re(), row.rate().im(), row.weight(),
+            rows.row((long) row.rank(), (long) row.mode(), row.rate().re(), row.rate().im(), row.weightNorm(),
                     row.normRatio(),
                     row.residual());
         }

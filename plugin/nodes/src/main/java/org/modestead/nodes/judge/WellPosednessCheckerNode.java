@@ -46,7 +46,8 @@ public final class WellPosednessCheckerNode implements Node {
                         Port.table("findings", "Findings", "Verdict and checks of the operator as a whole (mode 0) and"
                                 + " of each mode.",
                                 FindingTable.SCHEMA),
-                        Port.table("ladder", "Ladder", "Each mode on each rank.", LadderTable.SCHEMA),
+                        Port.table("ladder", "Ladder", "Each mode on each rank; mode 0 is the strongest mode of the rank,"
+                                + " whichever it is. The weight is that of an eigenfunction of unit norm in the space.", LadderTable.SCHEMA),
                         Port.table("modes", "Modes", "The mode table with its verdicts.", ModeTable.SCHEMA)),
                 JudgeNodeSettings.declared(), 1);
     }
