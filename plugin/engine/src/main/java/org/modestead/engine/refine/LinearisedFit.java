@@ -1,0 +1,76 @@
+package org.modestead.engine.refine;
+
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.ejml.dense.row.NormOps_DDRM;
+import org.modestead.engine.linalg.LinearAlgebra;
+import org.modestead.engine.linalg.LinearAlgebra.Svd;
+import org.modestead.engine.linalg.Matrices;
+
+/**
+ * Residuals r and their derivative J at some rates, {@code r(α + δ) ≈ r + J δ}, with columns of J scaled to length 1:
+ * {@code J = U S Vᵀ diag(lengths)}.
+ *
+ * @param lengths of the columns of J, 1 for a column of zeros
+ * @param svd of the scaled derivative
+ * @param tangent {@code Uᵀ r}, k x 1: what of the residual a change of rates can take away
+ * @param norm of r
+ */
+record LinearisedFit(double[] lengths, Svd svd, DMatrixRMaj tangent, double norm) {
+
+    static LinearisedFit of(DMatrixRMaj derivative, DMatrixRMaj residuals) {
+        DMatrixRMaj scaled = derivative.copy();
+        double[] lengths = new double[derivative.numCols];
+        for (int k = 0; k < lengths.length; k++) {
+            double length = NormOps_DDRM.normF(CommonOps_DDRM.extractColumn(derivative, k, null));
+            lengths[k] = length > 0 ? length : 1;
+        }
+        CommonOps_DDRM.divideCols(scaled, lengths);
+        Svd svd = LinearAlgebra.installed().svd(scaled);
+        return new LinearisedFit(lengths, svd, Matrices.transposeProduct(svd.u(), residuals), NormOps_DDRM.normF(residuals));
+    }
+
+    /**
+     * The damped step {@code -(JᵀJ + μ diag(lengths)²)⁻¹ Jᵀ r}.
+     *
+     * <p>Marquardt, J. SIAM 11:431, 1963.
+     *
+     * @param damping μ, positive
+     */
+    double[] step(double damping) {
+        DMatrixRMaj along = tangent.copy();
+        for (int i = 0; i < along.numRows; i++) {
+            double s = svd.values()[i];
+            along.data[i] *= -s / (s * s + damping);
+        }
+        double[] step = Matrices.product(svd.v(), along).data;
+        for (int k = 0; k < lengths.length; k++) {
+            step[k] /= lengths[k];
+        }
+        return step;
+    }
+
+    /** Returns the length of {@code Uᵀ r}. */
+    double removable() {
+        return NormOps_DDRM.normF(tangent);
+    }
+
+    /**
+     * Returns {@code √((JᵀJ)⁻¹_kk)} for every column.
+     *
+     * @return NaN where rounding decides
+     */
+    double[] spreads() {
+        double floor = Math.ulp(1.0) * svd.u().numRows * svd.values()[0];
+        double[] out = new double[lengths.length];
+        for (int k = 0; k < out.length; k++) {
+            double sum = 0;
+            for (int i = 0; i < svd.values().length; i++) {
+                double part = svd.values()[i] > floor ? svd.v().get(k, i) / svd.values()[i] : Double.NaN;
+                sum += part * part;
+            }
+            out[k] = Math.sqrt(sum) / lengths[k];
+        }
+        return out;
+    }
+}
