@@ -29,6 +29,7 @@ import org.modestead.engine.linalg.ThinSvd;
  *     kernel space {@code <g_k, b_i>}
  * @param innerProduct which of the two readings
  * @param evolution step map or generator
+ * @param correction for noise, in the data inner product only
  */
 public record FactoredCompression(
         FunctionBasis features,
@@ -36,10 +37,24 @@ public record FactoredCompression(
         DMatrixRMaj next,
         DMatrixRMaj target,
         InnerProduct innerProduct,
-        Evolution evolution)
+        Evolution evolution,
+        NoiseCorrection correction)
         implements Compression {
 
     private static final double NOISE = 4 * Math.ulp(1.0);
+
+    /** Checks that a correction meets the inner product it is made for. */
+    public FactoredCompression {
+        if (correction != NoiseCorrection.NONE && innerProduct != InnerProduct.DATA) {
+            throw new IllegalArgumentException(correction + " in the inner product " + innerProduct);
+        }
+    }
+
+    /** Without a correction. */
+    public FactoredCompression(FunctionBasis features, DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
+            InnerProduct innerProduct, Evolution evolution) {
+        this(features, now, next, target, innerProduct, evolution, NoiseCorrection.NONE);
+    }
 
     @Override
     public FunctionBasis basis() {
@@ -93,8 +108,11 @@ public record FactoredCompression(
         DMatrixRMaj map = w.copy();
         CommonOps_DDRM.divideCols(map, singular);
         DMatrixRMaj moved = Matrices.product(next, map);
-        return new OrthonormalCompression(features, map, Matrices.transposeProduct(u, moved), Matrices.transposeProduct(moved, moved),
-                Matrices.transposeProduct(u, target), singular, now.numRows, innerProduct, evolution);
+        DMatrixRMaj action = Matrices.transposeProduct(u, moved);
+        OrthonormalCompression plain = new OrthonormalCompression(features, map, action,
+                Matrices.transposeProduct(moved, moved), Matrices.transposeProduct(u, target), singular, now.numRows,
+                innerProduct, evolution);
+        return correction == NoiseCorrection.NONE ? plain : plain.corrected(NoisyStep.of(correction, u, moved, action));
     }
 
     private OrthonormalCompression inSpace(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {

@@ -12,15 +12,21 @@ import org.modestead.engine.recording.Snapshots;
  * over the data. With {@code X = U S Wᵀ} (m x N) the compression is {@code Uᵀ Y W S⁻¹}.
  *
  * <p>Schmid, J. Fluid Mech. 656:5, 2010; delay coordinates. Noise in X biases the eigenvalues towards
- * zero, that is towards more damping.
+ * zero, that is towards more damping, unless it is corrected.
  *
  * @param stride sampling steps per application of the operator, at least 1
+ * @param correction of that bias
  */
-public record LinearEstimator(int stride) implements Estimator {
+public record LinearEstimator(int stride, NoiseCorrection correction) implements Estimator {
+
+    /** One sampling step, least squares. */
+    public LinearEstimator() {
+        this(NoiseCorrection.NONE);
+    }
 
     /** One sampling step. */
-    public LinearEstimator() {
-        this(1);
+    public LinearEstimator(NoiseCorrection correction) {
+        this(1, correction);
     }
 
     @Override
@@ -30,7 +36,7 @@ public record LinearEstimator(int stride) implements Estimator {
 
     @Override
     public String describe() {
-        return "linear least squares in delay coordinates";
+        return "linear " + correction.words() + " in delay coordinates";
     }
 
     @Override
@@ -44,11 +50,12 @@ public record LinearEstimator(int stride) implements Estimator {
         double weight = 1 / Math.sqrt(pairs.count());
         var now = Matrices.scaled(pairs.now(), weight);
         return new FactoredCompression(new Coordinates(snapshots.stateSize()), now, Matrices.scaled(pairs.next(), weight), now,
-                InnerProduct.DATA, new Evolution.StepMap(pairs.step()));
+                InnerProduct.DATA, new Evolution.StepMap(pairs.step()), correction);
     }
 
     @Override
     public Optional<Estimator> otherStep(Snapshots snapshots) {
-        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride)) : Optional.empty();
+        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride, correction))
+                : Optional.empty();
     }
 }

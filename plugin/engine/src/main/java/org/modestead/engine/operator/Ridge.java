@@ -17,7 +17,7 @@ public final class Ridge {
      * @param compression without one
      * @param ridge ρ relative to the largest squared singular value, at least 0
      * @return the same compression for 0
-     * @throws FitFault if the ridge is negative or not finite
+     * @throws FitFault if the ridge is negative or not finite, or meets a noise correction
      */
     public static OrthonormalCompression apply(OrthonormalCompression compression, double ridge) {
         if (!(ridge >= 0) || Double.isInfinite(ridge)) {
@@ -25,6 +25,10 @@ public final class Ridge {
         }
         if (ridge == 0) {
             return compression;
+        }
+        if (compression.noisy().isPresent()) {
+            throw new FitFault("ridge", "a ridge of " + ridge + " shrinks what the noise correction restores",
+                    "set the ridge to 0, or fit without noise correction");
         }
         DMatrixRMaj action = compression.action().copy();
         for (int i = 0; i < compression.rank(); i++) {
@@ -35,13 +39,13 @@ public final class Ridge {
     }
 
     /**
-     * Returns the action {@code <A q_j, q_i>} as the data give it, before the ridge was applied.
+     * Returns the action {@code <A q_j, q_i>} as the data give it, before ridge or noise correction were applied.
      *
      * @param compression with the ridge applied
      * @param ridge that was applied
      */
     public static DMatrixRMaj removed(OrthonormalCompression compression, double ridge) {
-        DMatrixRMaj action = compression.action().copy();
+        DMatrixRMaj action = compression.measured().copy();
         for (int i = 0; i < compression.rank(); i++) {
             scaleRow(action, i, 1 / shrinkage(compression.singular(), i, ridge));
         }

@@ -13,6 +13,7 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.ThinSvd;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.LinearEstimator;
+import org.modestead.engine.operator.NoiseCorrection;
 import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.Run;
@@ -46,7 +47,12 @@ class C1DelayFitTest {
 
     /** Squared singular values from the fourth on are rounding: a share of 1 - 1e-12 leaves exactly them out. */
     private static FittedOperator fit(int depth) {
-        return OperatorFitter.fit(lanczos(depth), new LinearEstimator(), new RankRule.Energy(1 - 1e-12), 0, Progress.NONE);
+        return fit(depth, NoiseCorrection.NONE);
+    }
+
+    private static FittedOperator fit(int depth, NoiseCorrection correction) {
+        return OperatorFitter.fit(lanczos(depth), new LinearEstimator(correction), new RankRule.Energy(1 - 1e-12), 0,
+                Progress.NONE);
     }
 
     private static List<Mode> slowestFirst(FittedOperator operator) {
@@ -57,13 +63,17 @@ class C1DelayFitTest {
     @ParameterizedTest
     @ValueSource(ints = {4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20})
     void certifiedRatesAndAmplitudesAtEveryDepthWithTheRankDecidedByTheEngine(int depth) {
-        FittedOperator operator = fit(depth);
-        assertEquals(3, operator.rank());
-        List<Mode> modes = slowestFirst(operator);
-        for (int j = 0; j < 3; j++) {
-            assertEquals(0, modes.get(j).rate().im());
-            assertEquals(-RATES[j], modes.get(j).rate().re(), RATE_TOLERANCE * RATES[j], "rate " + j);
-            assertEquals(AMPLITUDES[j], modes.get(j).amplitude(), AMPLITUDE_TOLERANCE * AMPLITUDES[j], "amplitude " + j);
+        for (NoiseCorrection correction : NoiseCorrection.values()) {
+            FittedOperator operator = fit(depth, correction);
+            assertEquals(3, operator.rank());
+            List<Mode> modes = slowestFirst(operator);
+            for (int j = 0; j < 3; j++) {
+                String which = j + " by " + correction;
+                assertEquals(0, modes.get(j).rate().im());
+                assertEquals(-RATES[j], modes.get(j).rate().re(), RATE_TOLERANCE * RATES[j], "rate " + which);
+                assertEquals(AMPLITUDES[j], modes.get(j).amplitude(), AMPLITUDE_TOLERANCE * AMPLITUDES[j],
+                        "amplitude " + which);
+            }
         }
     }
 

@@ -11,6 +11,7 @@ import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.LinearEstimator;
+import org.modestead.engine.operator.NoiseCorrection;
 import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.operator.SegmentPlan;
@@ -25,6 +26,7 @@ import org.modestead.nodes.contract.Settings;
 final class FitSettings {
 
     static final String ESTIMATOR = "estimator";
+    static final String NOISE_CORRECTION = "noise-correction";
     static final String DICTIONARY = "dictionary";
     static final String PERIODS = "periods";
     static final String RANK_RULE = "rank-rule";
@@ -40,6 +42,7 @@ final class FitSettings {
     static List<Setting> declared() {
         List<Setting> all = new ArrayList<>();
         all.add(estimator());
+        all.add(noiseCorrection());
         all.addAll(dictionarySettings());
         all.addAll(kernelSettings());
         all.addAll(rankSettings());
@@ -62,6 +65,20 @@ final class FitSettings {
                         + " zero: this makes the operator compact for more flows, but its eigenvalues are only near"
                         + " those of the generator.")),
                 "linear");
+    }
+
+    private static Setting noiseCorrection() {
+        return new Setting.Choice(new Common(NOISE_CORRECTION, "Noise correction", "Operator", "Noise makes least squares"
+                + " report too much damping, the more the weaker the signal. A correction takes that bias away where noise"
+                + " is white and of the same size in all prepared channels; estimates scatter a little more. It depends on"
+                + " the rank: a rank above that of the signal fits noise. Needs a ridge of 0.")
+                .when(ESTIMATOR, "linear"), List.of(
+                new Option("none", "None", "Least squares: right for clean samples."),
+                new Option("total-least-squares", "Total least squares", "Noise in the earlier and in the later state alike"
+                        + " is projected out."),
+                new Option("forward-backward", "Forward and backward", "The mean of the step forward and the inverted step"
+                        + " backward: noise shrinks both alike, so the shrinkage cancels.")),
+                "none");
     }
 
     private static List<Setting> dictionarySettings() {
@@ -136,12 +153,20 @@ final class FitSettings {
      */
     static Estimator estimator(Settings settings, Optional<Kernel> kernel) {
         return switch (settings.text(ESTIMATOR)) {
-            case "linear" -> new LinearEstimator();
+            case "linear" -> new LinearEstimator(correction(settings));
             case DICTIONARY -> new DictionaryEstimator(dictionary(settings));
             case "kernel-step" -> new KernelStepEstimator(needed(settings, kernel), settings.whole("landmarks"));
             case "generator" -> new OccupationEstimator(needed(settings, kernel), segments(settings), 1);
             default -> new OccupationEstimator(needed(settings, kernel), segments(settings),
                     settings.number("contraction"));
+        };
+    }
+
+    private static NoiseCorrection correction(Settings settings) {
+        return switch (settings.text(NOISE_CORRECTION)) {
+            case "total-least-squares" -> NoiseCorrection.TOTAL_LEAST_SQUARES;
+            case "forward-backward" -> NoiseCorrection.FORWARD_BACKWARD;
+            default -> NoiseCorrection.NONE;
         };
     }
 
@@ -166,9 +191,16 @@ final class FitSettings {
 
     /** Returns what is wrong whatever is connected. */
     static List<SettingProblem> problems(Settings settings) {
-        boolean generator = List.of(GENERATORS).contains(settings.text(ESTIMATOR));
-        return generator && settings.whole(SEGMENT) == 1 ? List.of(new SettingProblem(SEGMENT, "pieces of one step",
-                "give at least 2 steps, or 0 for whole runs")) : List.of();
+        List<SettingProblem> problems = new ArrayList<>();
+        if (List.of(GENERATORS).contains(settings.text(ESTIMATOR)) && settings.whole(SEGMENT) == 1) {
+            problems.add(new SettingProblem(SEGMENT, "pieces of one step", "give at least 2 steps, or 0 for whole runs"));
+        }
+        boolean corrected = settings.text(ESTIMATOR).equals("linear") && correction(settings) != NoiseCorrection.NONE;
+        if (corrected && settings.number(RIDGE) > 0) {
+            problems.add(new SettingProblem(RIDGE, "a ridge beside the noise correction " + settings.text(NOISE_CORRECTION)
+                    + ", which it would undo", "set the ridge to 0, or the noise correction to none"));
+        }
+        return problems;
     }
 
     /** Returns how the rank is chosen. */

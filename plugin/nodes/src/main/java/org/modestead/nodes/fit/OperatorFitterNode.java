@@ -38,8 +38,14 @@ public final class OperatorFitterNode implements Node {
                         "Rosenfeld, Kamalapurkar, Gruss and Johnson, Dynamic mode decomposition for continuous time"
                                 + " systems with the Liouville operator, Journal of Nonlinear Science 32:5, 2022",
                         "Gavish and Donoho, The optimal hard threshold for singular values is 4/√3, IEEE Transactions"
-                                + " on Information Theory 60:5040, 2014"),
-                List.of("Koopman", "Liouville", "generator", "transfer operator", "least squares", "singular values",
+                                + " on Information Theory 60:5040, 2014",
+                        "Hemati, Rowley, Deem and Cattafesta, De-biasing the dynamic mode decomposition for applied"
+                                + " Koopman spectral analysis of noisy datasets, Theoretical and Computational Fluid"
+                                + " Dynamics 31:349, 2017",
+                        "Dawson, Hemati, Williams and Rowley, Characterizing and correcting for the effect of sensor noise"
+                                + " in the dynamic mode decomposition, Experiments in Fluids 57:42, 2016"),
+                List.of("Koopman", "Liouville", "generator", "transfer operator", "least squares",
+                        "total least squares", "noise", "damping bias", "singular values",
                         "rank",
                         "occupation kernel"),
                 List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "Prepared states; only the training part"
@@ -63,8 +69,9 @@ public final class OperatorFitterNode implements Node {
                 a generator when samples are uneven or when some states escape in finite time, for then no step map \
                 exists.
 
-                The rank decides most. Least squares on noisy samples reports too much damping; compare ranks, and let \
-                the checker judge.
+                The rank decides most: compare ranks, and let the checker judge. Least squares on noisy samples reports \
+                too much damping; the linear step map can be corrected for that, by total least squares or by going \
+                forward and backward. Compare both: where they disagree, the damping is not known well.
 
                 Cost: linear and dictionary fits take samples times functions squared; kernel fits samples times \
                 landmarks times rank; no square matrix of all samples is formed.""";

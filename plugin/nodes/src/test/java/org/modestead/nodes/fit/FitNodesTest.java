@@ -11,6 +11,7 @@ import java.util.Map;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.kernel.Kernel;
@@ -154,5 +155,23 @@ class FitNodesTest {
         assertEquals("segment-samples", Steps.check("operator-fitter", Map.of("estimator", "generator", "segment-samples",
                 1)).get(0).key());
         assertEquals(List.of(), Steps.check("operator-fitter", Map.of("segment-samples", 1)));
+    }
+
+    @ParameterizedTest
+    @CsvSource({"none, linear least squares in delay coordinates",
+        "total-least-squares, linear total least squares in delay coordinates",
+        "forward-backward, linear least squares forward and backward in delay coordinates"})
+    void theNoiseCorrectionReachesTheFitAndItsDescription(String correction, String method) {
+        NodeResult fitted = fit(Map.of("noise-correction", correction), false);
+        assertEquals(method, Steps.column(fitted, "fit", "value").get(1));
+        assertEquals("Fitted: " + method + ".", fitted.summary().get(0));
+    }
+
+    @Test
+    void aRidgeBesideANoiseCorrectionIsToldBeforeRunningAndOnlyWhereItCounts() {
+        Map<String, Object> both = Map.of("noise-correction", "total-least-squares", "ridge", 0.1);
+        assertEquals("ridge", Steps.check("operator-fitter", both).get(0).key());
+        assertEquals(List.of(), Steps.check("operator-fitter", Map.of("noise-correction", "total-least-squares",
+                "ridge", 0.1, "estimator", "dictionary")));
     }
 }
