@@ -11,21 +11,29 @@ import org.modestead.engine.linalg.Matrices;
  * Residuals r and their derivative J at some rates, {@code r(α + δ) ≈ r + J δ}, with columns of J scaled to length 1:
  * {@code J = U S Vᵀ diag(lengths)}.
  *
- * @param lengths of the columns of J, 1 for a column of zeros
+ * @param lengths of the columns of J; 1 for a rate that the samples do not feel, whose scaled column is 0
  * @param svd of the scaled derivative
  * @param tangent {@code Uᵀ r}, k x 1: what of the residual a change of rates can take away
  * @param norm of r
  */
 record LinearisedFit(double[] lengths, Svd svd, DMatrixRMaj tangent, double norm) {
 
+    /** A rate with a smaller share in an undecided direction is not touched by it. */
+    private static final double UNTOUCHED = 1e-8;
+
     static LinearisedFit of(DMatrixRMaj derivative, DMatrixRMaj residuals) {
         DMatrixRMaj scaled = derivative.copy();
         double[] lengths = new double[derivative.numCols];
+        double floor = 0;
         for (int k = 0; k < lengths.length; k++) {
-            double length = NormOps_DDRM.normF(CommonOps_DDRM.extractColumn(derivative, k, null));
-            lengths[k] = length > 0 ? length : 1;
+            lengths[k] = NormOps_DDRM.normF(CommonOps_DDRM.extractColumn(derivative, k, null));
+            floor = Math.max(floor, Math.ulp(1.0) * lengths[k]);
         }
-        CommonOps_DDRM.divideCols(scaled, lengths);
+        for (int k = 0; k < lengths.length; k++) {
+            boolean felt = lengths[k] > floor;
+            CommonOps_DDRM.scaleCol(felt ? 1 / lengths[k] : 0, scaled, k);
+            lengths[k] = felt ? lengths[k] : 1;
+        }
         Svd svd = LinearAlgebra.installed().svd(scaled);
         return new LinearisedFit(lengths, svd, Matrices.transposeProduct(svd.u(), residuals), NormOps_DDRM.normF(residuals));
     }
@@ -66,7 +74,8 @@ record LinearisedFit(double[] lengths, Svd svd, DMatrixRMaj tangent, double norm
         for (int k = 0; k < out.length; k++) {
             double sum = 0;
             for (int i = 0; i < svd.values().length; i++) {
-                double part = svd.values()[i] > floor ? svd.v().get(k, i) / svd.values()[i] : Double.NaN;
+                double share = svd.v().get(k, i);
+                double part = svd.values()[i] > floor ? share / svd.values()[i] : Math.abs(share) < UNTOUCHED ? 0 : Double.NaN;
                 sum += part * part;
             }
             out[k] = Math.sqrt(sum) / lengths[k];

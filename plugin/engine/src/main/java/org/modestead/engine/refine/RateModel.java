@@ -73,10 +73,10 @@ public record RateModel(List<RateTerm> terms, Optional<DMatrixRMaj> ties) {
         return new RateModel(moved, ties);
     }
 
-    /** Returns whether every function stays within the range of numbers up to a time, before or after 0. */
-    boolean finiteUpTo(double time) {
-        return terms.stream().mapToDouble(RateTerm::growth)
-                .allMatch(growth -> Math.abs(growth * time) < LARGEST_EXPONENT);
+    /** Returns whether every function is largest, between two times, at a size that numbers can hold; it may fade to 0. */
+    boolean representable(double earliest, double latest) {
+        return terms.stream().mapToDouble(RateTerm::growth).allMatch(growth -> Double.isFinite(growth)
+                && Math.abs(Math.max(growth * earliest, growth * latest)) < LARGEST_EXPONENT);
     }
 
     /** Returns Φ T at the times, n x q. */

@@ -38,10 +38,10 @@ public final class RateRefinement {
      * @param runs of the same channels, at any times; time 0 is where the weights hold
      * @param progress polled for cancel
      * @return never null; look at its convergence
-     * @throws FitFault if nothing is free, a sample is not finite, samples are too few or the start overflows
+     * @throws FitFault if nothing is free, a sample is not finite, samples are too few or a start rate is out of range
      */
     public static RefinedRates refine(RateModel start, List<Run> runs, Progress progress) {
-        double latest = requireFit(start, runs);
+        requireFit(start, runs);
         ProjectedFit fit = ProjectedFit.of(start, runs);
         double rounding = ROUNDINGS * Math.ulp(1.0) * size(runs);
         double damping = FIRST_DAMPING;
@@ -51,7 +51,7 @@ public final class RateRefinement {
             if (linear.removable() <= Math.max(REMOVABLE * linear.norm(), rounding)) {
                 return result(fit, iteration, Convergence.CONVERGED);
             }
-            Optional<Step> step = descend(fit, linear, damping, latest);
+            Optional<Step> step = descend(fit, linear, damping);
             if (step.isEmpty()) {
                 return result(fit, iteration, linear.removable() < BELOW_ROUNDING * linear.norm() ? Convergence.CONVERGED
                         : Convergence.STALLED);
@@ -65,7 +65,7 @@ public final class RateRefinement {
     private record Step(ProjectedFit fit, double damping) {}
 
     /** Tries ever more cautious steps until one makes the residual smaller. */
-    private static Optional<Step> descend(ProjectedFit fit, LinearisedFit linear, double damping, double latest) {
+    private static Optional<Step> descend(ProjectedFit fit, LinearisedFit linear, double damping) {
         double[] now = fit.model().free().stream().mapToDouble(FreeRate::value).toArray();
         double sum = fit.residualSum();
         for (double tried = damping; tried < LARGEST_DAMPING; tried *= FACTOR) {
@@ -74,7 +74,7 @@ public final class RateRefinement {
                 next[k] += now[k];
             }
             RateModel model = fit.model().at(next);
-            if (!Arrays.equals(now, next) && model.finiteUpTo(latest)) {
+            if (!Arrays.equals(now, next) && representable(model, fit.runs())) {
                 ProjectedFit candidate = ProjectedFit.of(model, fit.runs());
                 if (candidate.residualSum() < sum) {
                     return Optional.of(new Step(candidate, Math.max(tried / FACTOR, Double.MIN_NORMAL)));
@@ -84,7 +84,7 @@ public final class RateRefinement {
         return Optional.empty();
     }
 
-    private static double requireFit(RateModel start, List<Run> runs) {
+    private static void requireFit(RateModel start, List<Run> runs) {
         if (start.free().isEmpty()) {
             throw new FitFault("optimised fit", "no rate is free", "leave at least one rate free");
         }
@@ -100,12 +100,22 @@ public final class RateRefinement {
                     + " degrees of freedom beyond rates and weights",
                     "use fewer rates or more samples");
         }
-        double latest = runs.stream().flatMapToDouble(run -> Arrays.stream(run.times())).map(Math::abs).max().orElse(0);
-        if (!start.finiteUpTo(latest)) {
-            throw new FitFault("optimised fit", "the start rates overflow by time " + latest,
-                    "start from smaller rates, or count time from the start of the recording");
+        if (!representable(start, runs)) {
+            throw new FitFault("optimised fit", "the start rates leave the range of numbers between the times " + earliest(runs)
+                    + " and " + latest(runs), "start from smaller rates, or count time from the start of the recording");
         }
-        return latest;
+    }
+
+    private static boolean representable(RateModel model, List<Run> runs) {
+        return model.representable(earliest(runs), latest(runs));
+    }
+
+    private static double earliest(List<Run> runs) {
+        return runs.stream().mapToDouble(run -> run.times()[0]).min().orElse(0);
+    }
+
+    private static double latest(List<Run> runs) {
+        return runs.stream().mapToDouble(run -> run.times()[run.samples() - 1]).max().orElse(0);
     }
 
     private static int degreesOfFreedom(RateModel model, List<Run> runs) {

@@ -2,6 +2,7 @@ package org.modestead.engine.refine;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -183,12 +184,24 @@ class RateRefinementTest {
         assertEquals("the samples leave -3 degrees of freedom beyond rates and weights",
                 refused(start(), List.of(three)).seen());
         Run late = new Run("late", new double[] {1e4, 1e4 + 1, 1e4 + 2, 1e4 + 3}, new DMatrixRMaj(4, 1));
-        assertEquals("the start rates overflow by time 10003.0", refused(new RateModel(List.of(new RateTerm.Real(-1, true))),
-                List.of(late)).seen());
+        assertEquals("the start rates leave the range of numbers between the times 10000.0 and 10003.0",
+                refused(new RateModel(List.of(new RateTerm.Real(-1, true))), List.of(late)).seen());
         DMatrixRMaj holes = new DMatrixRMaj(4, 1);
         holes.set(2, 0, Double.NaN);
         assertEquals("optimised fit, run gap", refused(new RateModel(List.of(new RateTerm.Real(-1, true))),
                 List.of(new Run("gap", new double[] {0, 1, 2, 3}, holes))).where());
+    }
+
+    @Test
+    void aStartThatFadesWithinTheRecordingIsNoObstacle() {
+        // e^(-500 t) is nothing after the first sample, whose share it takes
+        RateModel model = new RateModel(List.of(new RateTerm.Real(-0.5, true), new RateTerm.Real(-500, true)));
+        RefinedRates refined = RateRefinement.refine(model, List.of(decaying()), Progress.NONE);
+        assertEquals(DECAY, ((RateTerm.Real) refined.model().terms().get(0)).growth(), 1e-9);
+        assertFalse(Double.isNaN(refined.growthErrors()[0]));
+        assertTrue(Double.isNaN(refined.growthErrors()[1]), "one sample does not decide a rate");
+        assertThrows(FitFault.class, () -> RateRefinement.refine(new RateModel(List.of(
+                new RateTerm.Real(Double.NEGATIVE_INFINITY, true))), List.of(decaying()), Progress.NONE));
     }
 
     private static FitFault refused(RateModel model, List<Run> runs) {
