@@ -1,13 +1,14 @@
 package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Progress;
 
 /**
  * Rolling-origin errors of one route: forecast from many origins of each series, always with the history up to the
- * origin alone and with the operator as it was fitted.
+ * origin alone.
  *
  * <p>Tashman, "Out-of-sample tests of forecasting accuracy", Int. J. Forecasting 16:437, 2000.
  *
@@ -45,21 +46,28 @@ record Backtest(List<Errors> errors, int limited) {
      * @param leads longest lead time in steps, at least 1
      */
     static Backtest of(ForecastRoute route, List<Series> all, int memory, int leads, Region region, Progress progress) {
+        List<Start> starts = Start.perSeries(all, memory, origins(leads));
+        return from(starts, Collections.nCopies(starts.size(), route), all, leads, region, progress);
+    }
+
+    /**
+     * Forecasts from given origins, each with a route of its own.
+     *
+     * @param starts origins with at least the memory of their route before them
+     * @param routes one a start
+     * @param leads longest lead time in steps, at least 1
+     */
+    static Backtest from(List<Start> starts, List<ForecastRoute> routes, List<Series> all, int leads, Region region,
+            Progress progress) {
         List<Errors> errors = new ArrayList<>();
         int limited = 0;
-        int share = Math.max(1, origins(leads) / Math.max(1, all.size()));
-        for (int s = 0; s < all.size(); s++) {
-            Series series = all.get(s);
-            int start = series.firstOrigin(memory);
-            int count = Math.max(0, series.ahead(memory));
-            int taken = Math.min(share, count);
-            for (int k = 0; k < taken; k++) {
-                progress.checkCancelled();
-                int origin = start + (int) ((long) k * count / taken);
-                DMatrixRMaj values = forecast(route, series, origin, leads);
-                limited += limit(values, region);
-                errors.add(new Errors(s, origin, minusObserved(values, series, origin)));
-            }
+        for (int k = 0; k < starts.size(); k++) {
+            progress.checkCancelled();
+            int origin = starts.get(k).origin();
+            Series series = all.get(starts.get(k).series());
+            DMatrixRMaj values = forecast(routes.get(k), series, origin, leads);
+            limited += limit(values, region);
+            errors.add(new Errors(starts.get(k).series(), origin, minusObserved(values, series, origin)));
         }
         return new Backtest(List.copyOf(errors), limited);
     }
@@ -70,7 +78,7 @@ record Backtest(List<Errors> errors, int limited) {
 
     private static DMatrixRMaj forecast(ForecastRoute route, Series series, int origin, int leads) {
         int observed = Math.min(leads, series.length() - 1 - origin);
-        return route.forecast(series.history(origin, route.memory()), observed);
+        return route.forecast(series.history(origin, route.used(origin + 1)), observed);
     }
 
     private static int limit(DMatrixRMaj values, Region region) {

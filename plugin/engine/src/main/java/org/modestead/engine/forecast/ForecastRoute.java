@@ -16,6 +16,16 @@ public interface ForecastRoute {
     int memory();
 
     /**
+     * Returns how many samples of history are to be handed over: the memory, unless more sharpens the forecast.
+     *
+     * @param available samples recorded up to the origin, at least {@link #memory()}
+     * @return in [memory, available]
+     */
+    default int used(int available) {
+        return memory();
+    }
+
+    /**
      * Continues a run.
      *
      * @param history samples up to the origin, newest last, at least {@link #memory()} x n, prepared units, one step

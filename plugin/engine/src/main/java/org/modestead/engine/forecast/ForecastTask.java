@@ -147,6 +147,11 @@ record ForecastTask(
                 .map(period -> OptionalInt.of((int) Math.rint(period))).orElse(OptionalInt.empty());
     }
 
+    /** Returns the same task with another horizon, in steps, at least 1. */
+    ForecastTask withSteps(int other) {
+        return new ForecastTask(snapshots, plan, step, memory, other, season, region, holdout, bands);
+    }
+
     /** Returns the longest lead time that forecast table or scores can need, in steps. */
     int leads() {
         return Math.max(steps, scoreSteps().stream().mapToInt(Integer::intValue).max().orElse(1));
@@ -154,7 +159,12 @@ record ForecastTask(
 
     /** Returns the longest lead time observed in the holdout, in steps, 0 without holdout. */
     int observedLeads() {
-        return observedLeads(holdout, memory);
+        return observedLeads(memory);
+    }
+
+    /** Returns the longest lead time observed in the holdout after so many samples of history, in steps, 0 for none. */
+    int observedLeads(int history) {
+        return observedLeads(holdout, history);
     }
 
     private static int observedLeads(List<Series> holdout, int memory) {

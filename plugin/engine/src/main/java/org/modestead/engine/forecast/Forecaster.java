@@ -6,7 +6,6 @@ import java.util.Optional;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.Progress;
 import org.modestead.engine.operator.FittedOperator;
-import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Verdict;
@@ -16,7 +15,8 @@ import org.modestead.engine.wellposed.Verdict;
  *
  * <p><b>Bands</b> are split-conformal ({@link SplitConformal}), per lead time and channel, calibrated on the calibration
  * part or else on the first half of the holdout. <b>Scores</b> are rolling-origin errors over the holdout
- * ({@link ScoreRow}) for both routes, persistence and, where there is a season, the seasonal naive forecast. Coverage
+ * ({@link ScoreRow}) for both routes and the naive methods: persistence, the seasonal naive forecast where there is a
+ * season, drift and mean. Coverage
  * and interval score come only from origins that the bands were not calibrated on; point scores from all.
  *
  * <p><b>Time step.</b> That of the snapshots; uneven snapshots are forecast at the median training step, and what is
@@ -43,7 +43,7 @@ public final class Forecaster {
             Optional<Verdict> verdict, ForecastPlan plan, Progress progress) {
         ForecastTask task = ForecastTask.of(snapshots, operator, spectrum, plan);
         RouteChoice choice = RouteChoice.of(plan.route(), verdict);
-        List<Judged> methods = judge(task, routes(task, operator, spectrum, choice.route()), progress.part(0, 0.7));
+        List<Judged> methods = judge(task, Methods.of(task, operator, spectrum, choice.route()), progress.part(0, 0.7));
         ErrorUnits units = ErrorUnits.of(snapshots, task.scaleSeason());
         ScoreTable scores = ScoreTable.of(task, methods, units);
         Judged used = methods.get(0);
@@ -58,18 +58,6 @@ public final class Forecaster {
         doubts.addAll(reconstruction.doubts());
         return new ForecastResult(table.rows(), reconstruction.rows(), scores.rows(), choice.route(),
                 Summary.of(task, choice, used, units, scores.rows()), doubts);
-    }
-
-    // The route of the forecast table comes first.
-    private static List<ForecastRoute> routes(ForecastTask task, FittedOperator operator, Spectrum spectrum, Route used) {
-        ForecastRoute modal = new ModalRoute(operator, spectrum, task.step());
-        ForecastRoute projection = new ProjectionRoute(operator, task.step());
-        Preparation preparation = task.snapshots().preparation();
-        boolean modes = used == Route.MODAL;
-        List<ForecastRoute> out = new ArrayList<>(List.of(modes ? modal : projection, modes ? projection : modal));
-        out.add(new Persistence(preparation, task.step()));
-        task.season().ifPresent(season -> out.add(new SeasonalNaive(preparation, task.step(), season)));
-        return out;
     }
 
     private static List<Judged> judge(ForecastTask task, List<ForecastRoute> routes, Progress progress) {

@@ -16,12 +16,21 @@ import org.modestead.engine.Progress;
 record Judged(ForecastRoute route, Bands bands, int calibrationOrigins, Backtest holdout) {
 
     static Judged of(ForecastTask task, ForecastRoute route, Progress progress) {
-        int memory = Math.max(task.memory(), route.memory());
+        Backtest holdout = Backtest.of(route, task.holdout(), memory(task, route), task.leads(), task.region(), progress);
+        return of(task, route, holdout, progress);
+    }
+
+    /** Calibrates the bands of a route whose errors on the holdout are already known. */
+    static Judged of(ForecastTask task, ForecastRoute route, Backtest holdout, Progress progress) {
         int leads = task.leads();
-        Backtest calibration = Backtest.of(route, task.bands().calibration(), memory, leads, task.region(), progress);
+        Backtest calibration = Backtest.of(route, task.bands().calibration(), memory(task, route), leads, task.region(),
+                progress);
         Bands bands = Bands.of(calibration.errors(), leads, task.snapshots().channels().size(), task.plan().coverage());
-        return new Judged(route, bands, calibration.errors().size(),
-                Backtest.of(route, task.holdout(), memory, leads, task.region(), progress));
+        return new Judged(route, bands, calibration.errors().size(), holdout);
+    }
+
+    private static int memory(ForecastTask task, ForecastRoute route) {
+        return Math.max(task.memory(), route.memory());
     }
 
     /** Returns what a reader must know about the bands. */

@@ -7,7 +7,8 @@ package org.modestead.engine.forecast;
  * observed. Errors are in recorded units when there is one channel or all channels share a known unit, and in
  * prepared units (recorded error divided by the channel's scale) otherwise.
  *
- * @param method {@code modal}, {@code projection}, {@code persistence} or {@code seasonal-naive}
+ * @param method {@code modal}, {@code projection}, {@code persistence}, {@code seasonal-naive}, {@code drift} or
+ *     {@code mean}
  * @param horizon h times the step, in time units
  * @param rmse root mean squared error
  * @param mae mean absolute error

@@ -18,6 +18,13 @@ final class Summary {
         List<String> out = new ArrayList<>();
         out.add(choice.sentence());
         out.add(horizon(task));
+        out.addAll(judged(task, used, units, rows));
+        return out;
+    }
+
+    /** Returns how the bands were made and how the forecasts scored. */
+    static List<String> judged(ForecastTask task, Judged used, ErrorUnits units, List<ScoreRow> rows) {
+        List<String> out = new ArrayList<>();
         if (used.bands().reach() > 0) {
             out.add(percent(task.plan().coverage()) + " bands calibrated on " + task.bands().words() + ", "
                     + used.calibrationOrigins() + " origins.");
@@ -34,11 +41,16 @@ final class Summary {
     }
 
     private static String horizon(ForecastTask task) {
-        String unit = task.snapshots().time().unit();
         String from = task.plan().origin() == Origin.RECORDING_END ? "the end of every run"
                 : "the last state before the holdout of every run";
+        return length(task) + ", from " + from + ".";
+    }
+
+    /** Returns the horizon in time units and steps. */
+    static String length(ForecastTask task) {
+        String unit = task.snapshots().time().unit();
         return "Horizon " + figure(task.steps() * task.step()) + (unit.isEmpty() ? "" : " " + unit) + ", " + task.steps()
-                + " steps of " + figure(task.step()) + ", from " + from + ".";
+                + " steps of " + figure(task.step());
     }
 
     private static String scale(ForecastTask task) {

@@ -121,7 +121,8 @@ class FittedForecastTest {
                 List.of(12.0));
         ForecastResult result = Forecaster.run(snapshots, operator, spectrum, Optional.empty(), plan, Progress.NONE);
         List<String> methods = result.scores().stream().map(ScoreRow::method).toList();
-        assertEquals(List.of("modal", "projection", "persistence", "seasonal-naive"), methods, "the season is guessed");
+        assertEquals(List.of("modal", "projection", "persistence", "seasonal-naive", "drift", "mean"), methods,
+                "the season is guessed");
         double seasonal = result.scores().get(3).rmse();
         assertEquals(0.111560, seasonal, 1e-6, "RMSE of log(y) against log(y one year before), computed from the series");
         assertTrue(result.scores().get(0).rmse() < seasonal, result.scores().toString());

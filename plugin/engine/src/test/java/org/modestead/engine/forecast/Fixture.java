@@ -138,9 +138,11 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
     }
 
     ForecastResult run(ForecastPlan plan, Grade grade) {
-        ModeVerdict overall = new ModeVerdict(0, grade, List.of(), true, "");
-        Verdict verdict = new Verdict(overall, List.of(), List.of(), List.of(), List.of());
-        return Forecaster.run(operator.snapshots(), operator, spectrum, Optional.of(verdict), plan, Progress.NONE);
+        return Forecaster.run(operator.snapshots(), operator, spectrum, Optional.of(verdict(grade)), plan, Progress.NONE);
+    }
+
+    static Verdict verdict(Grade grade) {
+        return new Verdict(new ModeVerdict(0, grade, List.of(), true, ""), List.of(), List.of(), List.of(), List.of());
     }
 
     /** Snapshots as a few words: channels c0, c1, ... of the given units, no delays, nothing prepared. */

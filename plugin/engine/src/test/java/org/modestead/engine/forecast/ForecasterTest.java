@@ -261,7 +261,7 @@ class ForecasterTest {
                 List.of(12.0));
         List<ScoreRow> scores = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{1}}).run(plan).scores();
         List<String> methods = scores.stream().map(ScoreRow::method).toList();
-        assertEquals(List.of("projection", "modal", "persistence", "seasonal-naive"), methods);
+        assertEquals(List.of("projection", "modal", "persistence", "seasonal-naive", "drift", "mean"), methods);
         for (ScoreRow row : scores.subList(0, 3)) {
             assertEquals(102.9765345, row.rmse(), 1e-7, row.method() + ", digits published");
             assertEquals(76, row.mae(), ROUNDING, row.method());
@@ -270,6 +270,8 @@ class ForecasterTest {
         assertEquals(50.70831621, seasonal.rmse(), 1e-8);
         assertEquals(47.83333333, seasonal.mae(), 1e-8);
         assertEquals(1.570881226, seasonal.mase(), 1e-9);
+        assertEquals(92.66636343, scores.get(4).rmse(), 1e-8);
+        assertEquals(226.2656715, scores.get(5).rmse(), 1e-7);
     }
 
     @Test

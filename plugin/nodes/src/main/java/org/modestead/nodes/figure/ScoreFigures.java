@@ -2,7 +2,6 @@ package org.modestead.nodes.figure;
 
 import java.util.Comparator;
 import java.util.List;
-import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.ScoreRow;
 
 /** Forecast error against the naive methods, over the horizon. */
@@ -15,19 +14,19 @@ public final class ScoreFigures {
      * Draws the root mean square error of every method over the horizon; one curve a method, the first one strongest.
      * The scale is logarithmic when the errors span more than a factor of 100.
      *
-     * @param result scored
+     * @param scores by method and horizon
      * @return kind {@link Figure.Kind#CURVES}; without layers when nothing was scored
      */
-    public static Figure figure(ForecastResult result) {
-        List<String> methods = result.scores().stream().map(ScoreRow::method).distinct().toList();
-        List<Figure.Layer> layers = methods.stream().map(method -> curve(result.scores(), method,
+    public static Figure figure(List<ScoreRow> scores) {
+        List<String> methods = scores.stream().map(ScoreRow::method).distinct().toList();
+        List<Figure.Layer> layers = methods.stream().map(method -> curve(scores, method,
                 method.equals(methods.get(0)))).toList();
         String caption = layers.isEmpty() ? "Nothing was held out, so no forecast could be scored."
                 : "Root mean square error of forecasts of data that the fit never saw, by how far ahead they reach. A"
                 + " fitted operator"
                         + " is worth using only where its curve lies below those of the naive methods.";
         return new Figure("scores", Figure.Kind.CURVES, "Forecast error by horizon", caption,
-                Figure.Axis.linear("horizon [time units of the recording]"), errorAxis(result.scores()), layers);
+                Figure.Axis.linear("horizon [time units of the recording]"), errorAxis(scores), layers);
     }
 
     private static Figure.Axis errorAxis(List<ScoreRow> scores) {

@@ -65,7 +65,7 @@ public final class ForecastNode implements Node {
 
                 Scores come from the holdout, from many starts. Errors are root mean square (rmse), mean absolute (mae) \
                 and scaled by the one-step naive error in training (mase, below 1 is better than naive). Compare with \
-                persistence and the seasonal naive method in the same table: a model that does not beat them must not be \
+                the naive methods in the same table (persistence, the same season last time, drift, the mean so far): a model that does not beat them must not be \
                 used. Errors are in recorded units where all channels share one, in prepared units otherwise.
 
                 Where decisions on pressure, structures or grids hang on a forecast, keep the usual safety margins; local \
@@ -81,10 +81,10 @@ public final class ForecastNode implements Node {
                 context.progress());
         List<Figure> figures = new ArrayList<>(ForecastFigures.figures(snapshots, result, MOST_CHANNELS_DRAWN));
         if (!result.scores().isEmpty()) {
-            figures.add(ScoreFigures.figure(result));
+            figures.add(ScoreFigures.figure(result.scores()));
         }
         return new NodeResult(Map.of("forecast", ForecastTables.forecast(result, snapshots), "reconstruction",
-                ForecastTables.reconstruction(result, snapshots), "scores", ForecastTables.scores(result)),
+                ForecastTables.reconstruction(result, snapshots), "scores", ForecastTables.scores(result.scores())),
                 figures, result.summary(), result.doubts());
     }
 }

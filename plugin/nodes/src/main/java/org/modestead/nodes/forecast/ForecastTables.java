@@ -1,6 +1,8 @@
 package org.modestead.nodes.forecast;
 
 import java.util.List;
+import org.modestead.engine.forecast.BacktestResult;
+import org.modestead.engine.forecast.ErrorRow;
 import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.ForecastRow;
 import org.modestead.engine.forecast.ReconstructionRow;
@@ -13,7 +15,7 @@ import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
 
-/** Forecast, reconstruction and scores as tables. Times are written as they were recorded: number, date or date-time. */
+/** Forecast, reconstruction, scores and errors as tables. Times are written as they were recorded: number, date or date-time. */
 final class ForecastTables {
 
     static final TableSchema SCORES = TableSchema.of(Column.text("method"), Column.number("horizon"),
@@ -23,7 +25,7 @@ final class ForecastTables {
     private ForecastTables() {}
 
     static MemoryTable forecast(ForecastResult result, Snapshots snapshots) {
-        TableSchema schema = TableSchema.of(Column.text("run"), time(snapshots.time()), Column.text("channel"),
+        TableSchema schema = TableSchema.of(Column.text("run"), time("time", snapshots.time()), Column.text("channel"),
                 Column.number("value"),
                 Column.number("low"), Column.number("high"), Column.text("route"));
         MemoryTable.Builder rows = MemoryTable.builder(schema, "forecast");
@@ -37,7 +39,7 @@ final class ForecastTables {
     }
 
     static MemoryTable reconstruction(ForecastResult result, Snapshots snapshots) {
-        TableSchema schema = TableSchema.of(Column.text("run"), time(snapshots.time()), Column.text("channel"),
+        TableSchema schema = TableSchema.of(Column.text("run"), time("time", snapshots.time()), Column.text("channel"),
                 Column.number("observed"), Column.number("reconstructed"));
         MemoryTable.Builder rows = MemoryTable.builder(schema, "reconstruction");
         List<String> channels = names(snapshots);
@@ -48,10 +50,23 @@ final class ForecastTables {
         return rows.build();
     }
 
-    static MemoryTable scores(ForecastResult result) {
+    static MemoryTable scores(List<ScoreRow> scores) {
         MemoryTable.Builder rows = MemoryTable.builder(SCORES, "scores");
-        for (ScoreRow row : result.scores()) {
+        for (ScoreRow row : scores) {
             rows.row(row.method(), row.horizon(), row.rmse(), row.mae(), row.mase(), row.coverage(), row.intervalScore());
+        }
+        return rows.build();
+    }
+
+    static MemoryTable errors(BacktestResult result, Snapshots snapshots) {
+        TableSchema schema = TableSchema.of(Column.text("method"), Column.text("run"),
+                time("origin", snapshots.time()), Column.number("horizon"), Column.text("channel"),
+                Column.number("error"));
+        MemoryTable.Builder rows = MemoryTable.builder(schema, "errors");
+        List<String> channels = names(snapshots);
+        for (ErrorRow row : result.errors()) {
+            rows.row(row.method(), row.run(), cell(snapshots.time(), row.origin()), row.horizon(),
+                    channels.get(row.channel()), row.error());
         }
         return rows.build();
     }
@@ -60,8 +75,8 @@ final class ForecastTables {
         return snapshots.channels().stream().map(Channel::name).toList();
     }
 
-    private static Column time(TimeAxis axis) {
-        return new Column("time", switch (axis.kind()) {
+    private static Column time(String name, TimeAxis axis) {
+        return new Column(name, switch (axis.kind()) {
             case NUMBER -> CellType.DOUBLE;
             case DATE -> CellType.DATE;
             case DATE_TIME -> CellType.DATE_TIME;

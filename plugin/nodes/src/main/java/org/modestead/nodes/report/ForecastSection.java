@@ -42,7 +42,7 @@ final class ForecastSection {
             blocks.add(new Paragraph("Nothing was held out, so the forecast could not be scored against data the fit"
                     + " never saw."));
         } else {
-            blocks.add(new Picture(ScoreFigures.figure(source.forecast().result())));
+            blocks.add(new Picture(ScoreFigures.figure(source.forecast().result().scores())));
             blocks.add(scores(source));
         }
     }

@@ -10,8 +10,6 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
-import org.modestead.engine.forecast.ForecastResult;
-import org.modestead.engine.forecast.Route;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
@@ -116,10 +114,9 @@ class FigureFactoriesTest {
 
     @Test
     void withoutScoresThePictureIsEmptyAndSaysWhy() {
-        Figure empty = ScoreFigures.figure(new ForecastResult(List.of(), List.of(), List.of(), Route.MODAL, List.of(),
-                List.of()));
+        Figure empty = ScoreFigures.figure(List.of());
         assertTrue(empty.layers().isEmpty());
         assertTrue(empty.caption().contains("Nothing was held out"));
-        assertFalse(ScoreFigures.figure(ReportFixture.forecast(ReportFixture.snapshots())).layers().isEmpty());
+        assertFalse(ScoreFigures.figure(ReportFixture.forecast(ReportFixture.snapshots()).scores()).layers().isEmpty());
     }
 }

@@ -48,7 +48,7 @@ class FigureRendererTest {
         figures.addAll(ShapeFigures.figures(ReportFixture.spectrum(), Preparation.identity(2), 1));
         figures.addAll(LadderFigures.figures(ReportFixture.spectrum(), ReportFixture.verdict(Grade.ABSENT)));
         figures.addAll(ForecastFigures.figures(snapshots, ReportFixture.forecast(snapshots), 1));
-        figures.add(ScoreFigures.figure(ReportFixture.forecast(snapshots)));
+        figures.add(ScoreFigures.figure(ReportFixture.forecast(snapshots).scores()));
         figures.add(curves(Figure.Axis.log("nothing"), List.of()));
         return figures;
     }
