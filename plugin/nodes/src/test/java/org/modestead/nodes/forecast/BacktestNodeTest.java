@@ -79,8 +79,8 @@ class BacktestNodeTest {
     void theVerdictDecidesTheRouteAndTheFirstSentenceSaysSo() {
         NodeResult result = backtest(Ringing.numbers(5), Map.of("holdout", "run-share"), Map.of());
         String route = Steps.column(result, "scores", "method").get(0);
-        assertTrue(result.sentences().get(0).startsWith("Forecast by the " + route + " route: the verdict on the modes is"),
-                result.sentences().get(0));
+        assertTrue(result.summary().get(0).startsWith("Forecast by the " + route + " route: the verdict on the modes is"),
+                result.summary().get(0));
     }
 
     @Test
