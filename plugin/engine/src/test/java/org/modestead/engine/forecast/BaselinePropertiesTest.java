@@ -78,7 +78,8 @@ class BaselinePropertiesTest {
         assertEquals(Math.min(most, possible), starts.size());
         assertEquals(starts.size(), new HashSet<>(starts).size());
         for (Start start : starts) {
-            assertTrue(start.origin() + 1 >= memory && start.origin() + reach < lengths.get(start.series()), start.toString());
+            assertTrue(start.origin() + 1 >= memory && start.origin() + reach < lengths.get(start.series()),
+                    start.toString());
         }
         assertEquals(starts, starts.stream().sorted((a, b) -> a.series() != b.series()
                 ? Integer.compare(a.series(), b.series()) : Integer.compare(a.origin(), b.origin())).toList());

@@ -72,7 +72,8 @@ class RollingOriginTest {
         Random random = new Random(20261201);
         int samples = (int) plan.forecast().horizon().orElseThrow() + 1;
         Snapshots snapshots = Fixture.snapshots(List.of("m"), wandering("t", 20, 50, random),
-                wandering("c", calibration, samples, random), wandering("h", holdout, samples, random), OptionalDouble.of(1));
+                wandering("c", calibration, samples, random), wandering("h", holdout, samples, random),
+                OptionalDouble.of(1));
         FittedOperator exact = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{PHI}}).operator();
         return RollingOrigin.run(snapshots, exact, Optional.empty(), plan, Progress.NONE);
     }
@@ -194,7 +195,8 @@ class RollingOriginTest {
         Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(Fixture.run("a", 0, 30, 0, 1, wave)), List.of(),
                 List.of(Fixture.run("a", 29, 50, 1, 1, wave)), OptionalDouble.of(1), DelayEmbedding.NONE, scaled);
         FittedOperator still = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{1}}).operator();
-        BacktestResult result = RollingOrigin.run(snapshots, still, Optional.empty(), plan(4, Refit.NEVER, 1), Progress.NONE);
+        BacktestResult result = RollingOrigin.run(snapshots, still, Optional.empty(), plan(4, Refit.NEVER, 1),
+                Progress.NONE);
         // The wave turns by 2 prepared units a step, 8 recorded ones.
         result.errors().stream().filter(row -> row.method().equals("persistence"))
                 .forEach(row -> assertEquals(8, Math.abs(row.error()), 1e-12));
@@ -255,7 +257,8 @@ class RollingOriginTest {
     void aPauseStartsANewRunAndOtherRunsStayUnseen() {
         Run training = Fixture.run("a", 0, 10, 0, 1, t -> t);
         Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(training), List.of(),
-                List.of(Fixture.run("a", 15, 30, 0, 1, t -> t), Fixture.run("b", 0, 30, 0, 1, t -> t)), OptionalDouble.of(1));
+                List.of(Fixture.run("a", 15, 30, 0, 1, t -> t), Fixture.run("b", 0, 30, 0, 1, t -> t)),
+                OptionalDouble.of(1));
         Snapshots known = KnownAt.of(snapshots, "a", 20, 1);
         assertEquals(List.of(10, 6), known.training().stream().map(Run::samples).toList());
         assertEquals(List.of("a", "a"), known.training().stream().map(Run::id).toList());

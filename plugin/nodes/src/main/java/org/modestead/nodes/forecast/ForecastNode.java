@@ -65,8 +65,9 @@ public final class ForecastNode implements Node {
 
                 Scores come from the holdout, from many starts. Errors are root mean square (rmse), mean absolute (mae) \
                 and scaled by the one-step naive error in training (mase, below 1 is better than naive). Compare with \
-                the naive methods in the same table (persistence, the same season last time, drift, the mean so far): a model that does not beat them must not be \
-                used. Errors are in recorded units where all channels share one, in prepared units otherwise.
+                the naive methods in the same table (persistence, the same season last time, drift, the mean so far): a \
+                model that does not beat them must not be used. Errors are in recorded units where all channels share \
+                one, in prepared units otherwise.
 
                 Where decisions on pressure, structures or grids hang on a forecast, keep the usual safety margins; local \
                 codes and licensed practice come first. Cost: starts times horizon times the square of the rank.""";

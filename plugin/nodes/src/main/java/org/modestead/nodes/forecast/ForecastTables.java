@@ -15,7 +15,7 @@ import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
 
-/** Forecast, reconstruction, scores and errors as tables. Times are written as they were recorded: number, date or date-time. */
+/** Forecast, reconstruction, scores and errors as tables. Times are as recorded: number, date or date-time. */
 final class ForecastTables {
 
     static final TableSchema SCORES = TableSchema.of(Column.text("method"), Column.number("horizon"),
