@@ -40,7 +40,7 @@ public final class EigenfunctionOverlap implements Check {
         return findings;
     }
 
-    private static double largest(ZMatrixRMaj gram, Mode mode, Mode other) {
+    static double largest(ZMatrixRMaj gram, Mode mode, Mode other) {
         double largest = 0;
         for (int i : mode.indices()) {
             for (int j : other.indices()) {

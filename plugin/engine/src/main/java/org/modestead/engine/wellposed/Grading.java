@@ -13,7 +13,7 @@ import org.modestead.engine.spectrum.Mode;
  * <li>the space norm grows from rung to rung, or the residual stays above its threshold: absent
  * <li>a cluster of eigenvalues with one eigenfunction, or rate or weight keep changing: drifts
  * <li>too few rungs, nothing held out, too small a share captured, or another step disagrees: undecided
- * <li>overlap with other modes, or joint and solo weights differ: settles
+ * <li>overlap with other modes, joint and solo weights differ, or the space does not hold the signal: settles
  * <li>otherwise: stands
  * </ol>
  *
@@ -63,6 +63,7 @@ final class Grading {
             case SETTLES -> {
                 failed(findings, mode, "eigenfunction-overlap").ifPresent(out::add);
                 failed(findings, mode, "joint-solo-gap").ifPresent(out::add);
+                failed(findings, 0, "signal-in-space").ifPresent(out::add);
             }
             default -> throw new IllegalArgumentException(grade.word());
         }

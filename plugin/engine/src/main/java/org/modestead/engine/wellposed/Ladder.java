@@ -93,7 +93,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
     }
 
     /** Highest rank whose direction is not rounding noise. */
-    private static int trusted(FittedOperator operator) {
+    static int trusted(FittedOperator operator) {
         double[] singular = operator.compression().singular();
         int rank = operator.rank();
         while (rank < singular.length && Math.pow(singular[rank] / singular[0], 2) > TRUSTED) {

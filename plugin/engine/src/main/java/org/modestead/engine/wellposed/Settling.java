@@ -3,6 +3,8 @@ package org.modestead.engine.wellposed;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import org.modestead.engine.Progress;
 import org.modestead.engine.spectrum.Mode;
 
@@ -10,6 +12,9 @@ import org.modestead.engine.spectrum.Mode;
  * Whether rate and weight of a mode stop changing as functions join: the largest relative change from rung to rung over the
  * last four rungs on which it was found. A mode that is not found on the rungs next to the fitted rank counts as changed
  * altogether (1).
+ *
+ * <p>Where no function is left to join, because the fitted rank takes in all the data hold, the ladder has no upper part and
+ * its lower rungs lack functions that the signal needs. There the question is answered by {@link Closure}.
  */
 public final class Settling implements Check {
 
@@ -26,6 +31,11 @@ public final class Settling implements Check {
         List<Finding> findings = new ArrayList<>();
         double threshold = evidence.settings().settleThreshold();
         for (Mode mode : evidence.spectrum().modes()) {
+            Optional<Finding> closed = closed(mode.number(), evidence, threshold);
+            if (closed.isPresent()) {
+                findings.add(closed.get());
+                continue;
+            }
             List<LadderRow> rows = evidence.lastRungsOf(mode.number());
             if (evidence.rungs().size() < LEAST_RUNGS) {
                 findings.add(new Finding(mode.number(), id(), Double.NaN, threshold, false, "There are only " + evidence.rungs().size()
@@ -41,6 +51,16 @@ public final class Settling implements Check {
                             rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight)));
         }
         return findings;
+    }
+
+    private Optional<Finding> closed(int mode, Evidence evidence, double threshold) {
+        OptionalDouble missed = Closure.missed(mode, evidence);
+        if (missed.isEmpty() || missed.getAsDouble() > Closure.CLOSED) {
+            return Optional.empty();
+        }
+        return Optional.of(new Finding(mode, id(), missed.getAsDouble(), threshold, true, String.format(Locale.ROOT,
+                "No function is left to join, and the motion does not lead out of those there are (to %.3g of its size): nothing can change it.",
+                missed.getAsDouble())));
     }
 
     private static double change(List<LadderRow> rows, double longest, boolean ofRate) {

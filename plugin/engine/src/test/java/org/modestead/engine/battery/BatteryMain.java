@@ -3,7 +3,10 @@ package org.modestead.engine.battery;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Judges the whole battery and prints the confusion tables; arguments: number of seeds, and {@code wrong} to list every wrong verdict first. */
+/**
+ * Judges the whole battery and prints the confusion tables; arguments: number of seeds, and {@code wrong} to
+ * list every wrong verdict first.
+ */
 public final class BatteryMain {
 
     private BatteryMain() {}

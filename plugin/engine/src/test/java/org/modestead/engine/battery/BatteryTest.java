@@ -10,8 +10,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.condition.EnabledIfSystemProperty;
 
 /**
- * The verdict on systems whose truth is known. The quick part, one seed, keeps what holds; {@code -Dbattery=full} judges everything and
- * prints the confusion tables.
+ * The verdict on systems whose truth is known. The quick part, one seed, keeps what holds; {@code -Dbattery=full}
+ * judges everything and prints the confusion tables.
  */
 class BatteryTest {
 
@@ -21,18 +21,36 @@ class BatteryTest {
     private static final String RIGHT = """
             rotation 2d / exponential
             rotation 2d / polynomial
+            rotation 2d / delays-6
             rotation 2d / monomials-2
             rotation 2d / gaussian
             two decays 2d / exponential
+            two decays 2d / delays-6
+            two decays 2d / monomials-2
             two decays 2d / gaussian
+            sheared decays 2d / delays-6
+            sheared decays 2d / monomials-2
             sheared decays 2d / gaussian
+            rotation and decay 3d / linear-kernel-step
+            rotation and decay 3d / delays-4
+            pushed rotation 3d / linear-kernel-step
+            pushed rotation 3d / delays-4
+            three rotations 6d / linear-kernel-step
+            three rotations 6d / delays-4
+            coupled rotations 6d / delays-4
             x'=x / exponential
+            x'=x / polynomial
+            x'=x / monomials-4
             x'=x / gaussian
+            x'=x / delays-6
             x'=-x / exponential
             x'=-x / polynomial
             x'=-x / monomials-4
             x'=-x / gaussian
+            x'=-x / delays-6
             x'=x+1/2 / exponential
+            x'=x+1/2 / polynomial
+            x'=x+1/2 / monomials-4
             x'=1 / exponential
             x'=1 / monomials-4
             x'=1 / delays-6
@@ -42,6 +60,9 @@ class BatteryTest {
             x'=-x^3 / monomials-5
             x'=x-x^2 / exponential
             x'=x-x^2 / monomials-5
+            slow manifold / monomials-2
+            slow manifold / delays-6
+            Hopf on the cycle / delays-6
             Hopf on the cycle / exponential
             Hopf off the cycle / monomials-3
             van der Pol on the cycle / delays-20
@@ -55,10 +76,16 @@ class BatteryTest {
             Lotka-Volterra ensemble / delays-12
             Lotka-Volterra ensemble / monomials-3
             Lotka-Volterra orbit / delays-12
+            circle rotation / delays-4
             circle rotation / exponential-step
+            heat equation / linear-kernel-step
+            heat equation / delays-3
+            advection equation / linear-kernel-step
+            advection equation / delays-2
             coherent state / delays-20
             ramps / delays-4
             critically damped / delays-4
+            two decays, one channel / delays-8
             chaotic logistic map / monomials-6
             chaotic logistic map / delays-8
             chaotic logistic map / gaussian-step

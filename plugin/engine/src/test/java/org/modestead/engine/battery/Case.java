@@ -16,7 +16,10 @@ record Case(KnownSystem system, Look look, Truth truth) {
         return system.name() + " / " + look.name();
     }
 
-    /** Thresholds may be set on these cases; figures are reported on the others. The rule is the parity of the id's CRC-32. */
+    /**
+     * Thresholds may be set on these cases; figures are reported on the others. The rule is the parity of the id's
+     * CRC-32.
+     */
     boolean calibrates() {
         CRC32 sum = new CRC32();
         sum.update(id().getBytes(StandardCharsets.UTF_8));

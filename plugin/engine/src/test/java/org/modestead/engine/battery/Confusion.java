@@ -29,7 +29,8 @@ record Confusion(List<Trial.Outcome> outcomes) {
         for (String id : new LinkedHashSet<>(outcomes.stream().map(o -> o.trial().truth().id()).toList())) {
             List<Trial.Outcome> own = outcomes.stream().filter(o -> o.trial().truth().id().equals(id)).toList();
             Case known = own.get(0).trial().truth();
-            out.append(String.format(Locale.ROOT, "%s %-58s %-17s", known.calibrates() ? "C" : "R", id, known.truth().word()));
+            out.append(String.format(Locale.ROOT, "%s %-58s %-17s", known.calibrates() ? "C" : "R", id,
+                    known.truth().word()));
             for (double noise : new LinkedHashSet<>(own.stream().map(o -> o.trial().noise()).toList())) {
                 out.append("  ");
                 own.stream().filter(o -> o.trial().noise() == noise).forEach(o -> out.append(o.right() ? "." : sign(o)));
@@ -43,13 +44,15 @@ record Confusion(List<Trial.Outcome> outcomes) {
         return outcome.given().map(grade -> grade == Grade.STANDS ? "S" : grade.word().substring(0, 1)).orElse("-");
     }
 
-    private static void split(StringBuilder out, List<Trial.Outcome> half, String name, String by, Function<Trial.Outcome, Object> key) {
+    private static void split(StringBuilder out, List<Trial.Outcome> half, String name, String by,
+            Function<Trial.Outcome, Object> key) {
         Set<Object> keys = new LinkedHashSet<>(half.stream().map(key).toList());
         for (Object value : keys) {
             List<Trial.Outcome> part = half.stream().filter(o -> key.apply(o).equals(value)).toList();
             long right = part.stream().filter(Trial.Outcome::right).count();
             long falseReports = part.stream().filter(Trial.Outcome::falseReport).count();
-            out.append(String.format(Locale.ROOT, "%n%s, %s %s: %d of %d right (%.1f %%), stands where there is no mode: %d%n", name, by, value,
+            out.append(String.format(Locale.ROOT,
+                    "%n%s, %s %s: %d of %d right (%.1f %%), stands where there is no mode: %d%n", name, by, value,
                     right, part.size(), 100.0 * right / part.size(), falseReports));
             table(out, part);
         }
@@ -63,7 +66,8 @@ record Confusion(List<Trial.Outcome> outcomes) {
         given.add("refused");
         out.append(String.format(Locale.ROOT, "| %-18s|", "wanted \\ given"));
         given.forEach(word -> out.append(String.format(Locale.ROOT, " %9s |", word)));
-        out.append(String.format(Locale.ROOT, "%n|---|")).append("---:|".repeat(given.size())).append(System.lineSeparator());
+        out.append(String.format(Locale.ROOT,
+                "%n|---|")).append("---:|".repeat(given.size())).append(System.lineSeparator());
         for (Truth truth : Truth.values()) {
             out.append(String.format(Locale.ROOT, "| %-18s|", truth.word()));
             for (String word : given) {

@@ -7,9 +7,10 @@ import java.util.List;
  * {@code x' = A x}. Left eigenvectors w of A give the eigenfunctions w·x (CHECKS C2.1), which carry the whole signal.
  *
  * <ul>
- * <li>Space of exp(x·y), of (1 + x·y)^p and of x·y: all hold w·x, and the adjoint of the generator is that of Aᵀ (C3.3: shown for
- *     exp; the three norms are invariant under rotations of the state, so the same proof serves). Normal exactly if A is:
- *     stands for normal A. For other A, &lt;w1·x, w2·x&gt; is a multiple of w1·w2, not zero: settles.
+ * <li>Space of exp(x·y), of (1 + x·y)^p and of x·y: all hold w·x, and the adjoint of the generator is that of Aᵀ
+ * (C3.3: shown for     exp; the three norms are invariant under rotations of the state, so the same proof serves).
+ * Normal exactly if A is:     stands for normal A. For other A, &lt;w1·x, w2·x&gt; is a multiple of w1·w2, not zero:
+ * settles.
  * <li>Space of the Gaussian kernel: holds no polynomial (C3.12), so no w·x: nothing to report.
  * <li>Delays and dictionaries of monomials hold w·x, but their inner product is an average over the data: reportable.
  * </ul>

@@ -19,15 +19,17 @@ final class NoModes {
     }
 
     /**
-     * Logistic map 4x(1 - x) (C2.15): the only eigenvalue in L² of its measure is 1; the residual of every other is 1: absent. Lorenz
-     * (C2.16): mixing, no point spectrum but 1.
+     * Logistic map 4x(1 - x) (C2.15): the only eigenvalue in L² of its measure is 1; the residual of every other is
+     * 1: absent. Lorenz (C2.16): mixing, no point spectrum but 1.
      */
     private static void chaos(List<Case> out) {
-        KnownSystem logistic = Paths.map("chaotic logistic map", 60, 1, Paths.box(1, 0.01, 0.99), x -> new double[] {4 * x[0] * (1 - x[0])});
+        KnownSystem logistic = Paths.map("chaotic logistic map", 60, 1, Paths.box(1, 0.01, 0.99),
+                x -> new double[] {4 * x[0] * (1 - x[0])});
         out.add(new Case(logistic, Look.monomials(6, 7), Truth.ABSENT));
         out.add(new Case(logistic, Look.delays(8, 4), Truth.NONE));
         out.add(new Case(logistic, Look.step("gaussian", 10, "scale", 0.3), Truth.NONE));
-        KnownSystem lorenz = Paths.flow("Lorenz", 200, 0.05, 20, 3, Paths.box(3, 1, 10), x -> new double[] {10 * (x[1] - x[0]),
+        KnownSystem lorenz = Paths.flow("Lorenz", 200, 0.05, 20, 3, Paths.box(3, 1, 10),
+                x -> new double[] {10 * (x[1] - x[0]),
             x[0] * (28 - x[2]) - x[1], x[0] * x[1] - 8.0 / 3 * x[2]});
         out.add(new Case(lorenz, Look.delays(10, 8), Truth.NONE));
         out.add(new Case(lorenz, Look.monomials(3, 20), Truth.NONE));
@@ -35,9 +37,10 @@ final class NoModes {
     }
 
     /**
-     * White noise and the random walk obey no rule of motion. Ornstein-Uhlenbeck (C2.13) has eigenfunctions of the mean motion only: over the
-     * mode's own time 1/theta its path misses e^(-theta t) by √(1 - e^-2) = 0.93 of its size: absent as a rule of motion. A level
-     * that jumps once, at a random time, keeps its level before and after (the rate 0) but not across: no cycle and no rate.
+     * White noise and the random walk obey no rule of motion. Ornstein-Uhlenbeck (C2.13) has eigenfunctions of the
+     * mean motion only: over the mode's own time 1/theta its path misses e^(-theta t) by √(1 - e^-2) = 0.93 of its
+     * size: absent as a rule of motion. A level that jumps once, at a random time, keeps its level before and after
+     * (the rate 0) but not across: no cycle and no rate.
      */
     private static void chance(List<Case> out) {
         KnownSystem white = new KnownSystem("white noise", 0.1, random -> {

@@ -26,15 +26,17 @@ final class Oscillators {
     }
 
     /**
-     * C2.3 with mu = -0.3, lambda = -1: eigenfunctions x1, x2 - b x1², x1² are polynomials of degree 2, b = 2.5, and carry the signal. In
-     * the space of exp(x·y), {@code <x2 - b x1², x1²> = -2b}, norms √(1 + 2b²) and √2: overlap 0.96, settles. Delays: both channels
-     * are sums of the three exponentials. Reportable where the norm is that of the data.
+     * C2.3 with mu = -0.3, lambda = -1: eigenfunctions x1, x2 - b x1², x1² are polynomials of degree 2, b = 2.5, and
+     * carry the signal. In the space of exp(x·y), {@code <x2 - b x1², x1²> = -2b}, norms √(1 + 2b²) and √2: overlap
+     * 0.96, settles. Delays: both channels are sums of the three exponentials. Reportable where the norm is that of
+     * the data.
      */
     private static void slowManifold(List<Case> out) {
         double mu = -0.3;
         double lambda = -1;
         double b = lambda / (lambda - 2 * mu);
-        KnownSystem system = Paths.closed("slow manifold", 60, 0.05, Paths.box(2, -1, 1), (x, t) -> new double[] {x[0] * exp(mu * t),
+        KnownSystem system = Paths.closed("slow manifold", 60, 0.05, Paths.box(2, -1, 1), (x,
+                t) -> new double[] {x[0] * exp(mu * t),
             (x[1] - b * x[0] * x[0]) * exp(lambda * t) + b * x[0] * x[0] * exp(2 * mu * t)});
         out.add(new Case(system, Look.exponential(10), Truth.SETTLES));
         out.add(new Case(system, Look.monomials(2, 6), Truth.REPORTABLE));
@@ -42,10 +44,11 @@ final class Oscillators {
     }
 
     /**
-     * C2.4. On the cycle the motion is a rotation: x + iy is an eigenfunction, and rotations keep the norm of the space of exp(x·y):
-     * stands. Off it, eigenfunctions contain ln r and 1/r², singular at the origin: none is entire: absent from the space of exp(x·y). In
-     * the average over data from the ring 0.08 to 0.98 exp(i(θ - β ln r)) is bounded and smooth, its limit on the cycle is the
-     * signal, and only the lattice's are smooth across the cycle: reportable.
+     * C2.4. On the cycle the motion is a rotation: x + iy is an eigenfunction, and rotations keep the norm of the
+     * space of exp(x·y): stands. Off it, eigenfunctions contain ln r and 1/r², singular at the origin: none is
+     * entire: absent from the space of exp(x·y). In the average over data from the ring 0.08 to 0.98 exp(i(θ - β ln
+     * r)) is bounded and smooth, its limit on the cycle is the signal, and only the lattice's are smooth across the
+     * cycle: reportable.
      */
     private static void hopf(List<Case> out) {
         KnownSystem on = hopf("Hopf on the cycle", (a, b) -> 0.5);
@@ -72,23 +75,25 @@ final class Oscillators {
     }
 
     /**
-     * C2.5, mu = 1. On the cycle x(t) is periodic and odd harmonics fall by 8 to 10: six delay modes hold all but 1e-2 of it. From starts all over
-     * the plane: eigenfunctions are analytic near the origin only, the cycle is their boundary, so no entire one. (In the average over
-     * the data the phase of the cycle is an eigenfunction, but nothing here says how well a given degree reaches it: no case.)
+     * C2.5, mu = 1. On the cycle x(t) is periodic and odd harmonics fall by 8 to 10: six delay modes hold all but
+     * 1e-2 of it. From starts all over the plane: eigenfunctions are analytic near the origin only, the cycle is
+     * their boundary, so no entire one. (In the average over the data the phase of the cycle is an eigenfunction, but
+     * nothing here says how well a given degree reaches it: no case.)
      */
     private static void vanDerPol(List<Case> out) {
         Paths.Field field = x -> new double[] {x[1], (1 - x[0] * x[0]) * x[1] - x[0]};
-        out.add(new Case(Paths.flow("van der Pol on the cycle", 150, 0.1, 40, 1, random -> new double[] {2 * random.nextDouble() + 0.1,
+        out.add(new Case(Paths.flow("van der Pol on the cycle", 150, 0.1, 40, 1,
+                random -> new double[] {2 * random.nextDouble() + 0.1,
             random.nextDouble()}, field), Look.delays(20, 6), Truth.REPORTABLE));
         KnownSystem off = Paths.flow("van der Pol off the cycle", 60, 0.1, 0, 2, Paths.box(2, -2, 2), field);
         out.add(new Case(off, Look.step("exponential", 12, "rate", 0.25), Truth.NONE));
     }
 
     /**
-     * C2.7. Undamped over amplitudes 0.5 to 2.5 the period runs from 1.6 % to 80 % above 2π: a continuous range of frequencies, no
-     * isolated one, in any space. Damped and large: the phase of the eigenfunction turns without end towards the separatrix, so
-     * it is not entire. Amplitude at most 0.05: the frequency varies by 1.6e-4, linear to that share, rates
-     * -0.1 ± 0.995i or ±i.
+     * C2.7. Undamped over amplitudes 0.5 to 2.5 the period runs from 1.6 % to 80 % above 2π: a continuous range of
+     * frequencies, no isolated one, in any space. Damped and large: the phase of the eigenfunction turns without end
+     * towards the separatrix, so it is not entire. Amplitude at most 0.05: the frequency varies by 1.6e-4, linear to
+     * that share, rates -0.1 ± 0.995i or ±i.
      */
     private static void pendulum(List<Case> out) {
         KnownSystem undamped = pendulum("pendulum, amplitudes 0.5 to 2.5", 0, 0.5, 2.5);
@@ -107,17 +112,19 @@ final class Oscillators {
     }
 
     /**
-     * C2.8. Over an ensemble of orbits the period runs from 2π to above 7: no isolated frequency. On one orbit (y0 = 1.5) the motion
-     * is periodic; a constant and two harmonics of delays hold it.
+     * C2.8. Over an ensemble of orbits the period runs from 2π to above 7: no isolated frequency. On one orbit (y0 =
+     * 1.5) the motion is periodic; a constant and two harmonics of delays hold it.
      */
     private static void lotkaVolterra(List<Case> out) {
         Paths.Field field = x -> new double[] {x[0] * (1 - x[1]), x[1] * (x[0] - 1)};
-        KnownSystem ensemble = Paths.flow("Lotka-Volterra ensemble", 150, 0.2, 0, 2, random -> new double[] {1, 1.2 + 2.3 * random.nextDouble()},
+        KnownSystem ensemble = Paths.flow("Lotka-Volterra ensemble", 150, 0.2, 0, 2, random -> new double[] {1,
+                1.2 + 2.3 * random.nextDouble()},
                 field);
         out.add(new Case(ensemble, Look.delays(12, 7), Truth.NONE));
         out.add(new Case(ensemble, Look.monomials(3, 10), Truth.NONE));
         KnownSystem orbit = new KnownSystem("Lotka-Volterra orbit", 0.2, random -> {
-            KnownSystem later = Paths.flow("", 100, 0.2, 0.01 + 6 * random.nextDouble(), 2, r -> new double[] {1, 1.5}, field);
+            KnownSystem later = Paths.flow("", 100, 0.2, 0.01 + 6 * random.nextDouble(), 2, r -> new double[] {1,
+                    1.5}, field);
             return later.path().draw(random);
         });
         out.add(new Case(orbit, Look.delays(12, 5), Truth.REPORTABLE));

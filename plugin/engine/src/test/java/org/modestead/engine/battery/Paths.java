@@ -75,7 +75,8 @@ final class Paths {
     }
 
     /** Integrated to 1e-10, first on to a given time that is not recorded; channels are the first ones of the state. */
-    static KnownSystem flow(String name, int samples, double step, double unrecorded, int channels, Start start, Field field) {
+    static KnownSystem flow(String name, int samples, double step, double unrecorded, int channels, Start start,
+            Field field) {
         return new KnownSystem(name, step, random -> {
             double[] x = start.draw(random);
             x = unrecorded > 0 ? advanced(field, x, unrecorded) : x;
@@ -100,6 +101,7 @@ final class Paths {
                 return field.at(y);
             }
         };
-        return new DormandPrince853Integrator(1e-9, time, 1e-10, 1e-10).integrate(equation, new ODEState(0, x), time).getPrimaryState();
+        return new DormandPrince853Integrator(1e-9, time, 1e-10, 1e-10).integrate(equation, new ODEState(0, x),
+                time).getPrimaryState();
     }
 }

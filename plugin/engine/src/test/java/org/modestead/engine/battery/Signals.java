@@ -34,11 +34,15 @@ final class Signals {
             cos(2 * PI * (x[0] + GOLDEN * t)), sin(2 * PI * (x[0] + GOLDEN * t))});
         out.add(new Case(plane, Look.delays(4, 2), Truth.REPORTABLE));
         out.add(new Case(plane, Look.step("exponential", 5, "rate", 1), Truth.STANDS));
-        KnownSystem angle = Paths.map("circle rotation, angle", 60, 1, Paths.box(1, 0, 1), x -> new double[] {(x[0] + GOLDEN) % 1});
+        KnownSystem angle = Paths.map("circle rotation, angle", 60, 1, Paths.box(1, 0, 1),
+                x -> new double[] {(x[0] + GOLDEN) % 1});
         out.add(new Case(angle, Look.fourier(3), Truth.REPORTABLE));
     }
 
-    /** C2.12: second differences at 6 points are a symmetric matrix: orthogonal w·x in the dual space of the state: stands. */
+    /**
+     * C2.12: second differences at 6 points are a symmetric matrix: orthogonal w·x in the dual space of the state:
+     * stands.
+     */
     private static void heat(List<Case> out) {
         double[][] a = new double[6][6];
         for (int i = 0; i < 6; i++) {
@@ -54,8 +58,8 @@ final class Signals {
     }
 
     /**
-     * C2.12: travelling waves of wave numbers 1 and 2 at 8 points of a period, speed 0.1: each is a rotation in its own plane of the state, the
-     * planes orthogonal: stands in the dual space of the state.
+     * C2.12: travelling waves of wave numbers 1 and 2 at 8 points of a period, speed 0.1: each is a rotation in its
+     * own plane of the state, the planes orthogonal: stands in the dual space of the state.
      */
     private static void advection(List<Case> out) {
         KnownSystem system = Paths.closed("advection equation", 60, 0.1, Paths.box(4, 0.3, 1), (u, t) -> {
@@ -71,9 +75,9 @@ final class Signals {
     }
 
     /**
-     * Coherent state (C2.17): frequencies n + 1/2; those with amplitudes above 1 % are six, each a pair in (Re, Im): rank 10 and more hold
-     * the signal: reportable. Defective (C2.18): a + bt has a double multiplier 1, (a + bt)e^-t a double e^-dt: a generalised
-     * eigenfunction carries the signal, no eigenbasis: drifts.
+     * Coherent state (C2.17): frequencies n + 1/2; those with amplitudes above 1 % are six, each a pair in (Re, Im):
+     * rank 10 and more hold the signal: reportable. Defective (C2.18): a + bt has a double multiplier 1, (a + bt)e^-t
+     * a double e^-dt: a generalised eigenfunction carries the signal, no eigenbasis: drifts.
      */
     private static void sums(List<Case> out) {
         KnownSystem coherent = Paths.closed("coherent state", 120, 0.25, Paths.box(1, 0, 12), (u, t) -> {
@@ -82,9 +86,11 @@ final class Signals {
             return new double[] {size * cos(-sin(s) - s / 2), size * sin(-sin(s) - s / 2)};
         });
         out.add(new Case(coherent, Look.delays(20, 12), Truth.REPORTABLE));
-        KnownSystem drift = Paths.closed("ramps", 60, 1, Paths.box(2, -1, 1), (u, t) -> new double[] {2 * u[0] + 0.1 * u[1] * t});
+        KnownSystem drift = Paths.closed("ramps", 60, 1, Paths.box(2, -1, 1), (u,
+                t) -> new double[] {2 * u[0] + 0.1 * u[1] * t});
         out.add(new Case(drift, Look.delays(4, 2), Truth.DRIFTS));
-        KnownSystem critical = Paths.closed("critically damped", 60, 0.1, Paths.box(2, -1, 1), (u, t) -> new double[] {(u[0] + 3 * u[1] * t) * exp(-t)});
+        KnownSystem critical = Paths.closed("critically damped", 60, 0.1, Paths.box(2, -1, 1), (u,
+                t) -> new double[] {(u[0] + 3 * u[1] * t) * exp(-t)});
         out.add(new Case(critical, Look.delays(4, 2), Truth.DRIFTS));
         KnownSystem apart = Paths.closed("two decays, one channel", 80, 0.1, Paths.box(2, 0.5, 1), (u, t) ->
                 new double[] {u[0] * exp(-0.3 * t) + (2 * u[1] - 1.5) * exp(-2 * t) * sqrt(2)});

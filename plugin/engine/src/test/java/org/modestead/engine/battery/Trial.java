@@ -48,8 +48,10 @@ record Trial(Case truth, double noise, int runs, long seed) {
 
         @Override
         public String toString() {
-            return String.format(Locale.ROOT, "%s, noise %.3g, %d runs, seed %d: wanted %s, given %s. %s", trial.truth().id(),
-                    trial.noise(), trial.runs(), trial.seed(), trial.truth().truth().word(), given.map(Grade::word).orElse("refused"), why);
+            return String.format(Locale.ROOT, "%s, noise %.3g, %d runs, seed %d: wanted %s, given %s. %s",
+                    trial.truth().id(),
+                    trial.noise(), trial.runs(), trial.seed(), trial.truth().truth().word(),
+                            given.map(Grade::word).orElse("refused"), why);
         }
     }
 

@@ -1,0 +1,70 @@
+package org.modestead.engine.wellposed;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+import org.modestead.engine.basis.Dictionary;
+import org.modestead.engine.fixtures.Motions;
+import org.modestead.engine.fixtures.Motions.Flow;
+import org.modestead.engine.operator.DictionaryEstimator;
+import org.modestead.engine.operator.LinearEstimator;
+import org.modestead.engine.operator.OccupationEstimator;
+import org.modestead.engine.operator.SegmentPlan;
+import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.Snapshots;
+
+/**
+ * An invariant span needs no ladder; one that was merely cut by rounding, or that holds a defective block, is
+ * not taken for it.
+ */
+class ClosureTest {
+
+    @Test
+    void aDecayInDelaysEndsTheLadderAndIsReported() {
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 6; i++) {
+            double start = 1 + i;
+            runs.add(Motions.run("r" + i, 40, 0.1, t -> new double[] {start * Math.exp(-t)}));
+        }
+        Snapshots snapshots = Motions.snapshots(0.1, 4, runs.subList(0, 4), runs.subList(4, 6));
+        assertEquals(Grade.STANDS, Motions.judge(Motions.fit(snapshots, new LinearEstimator(), 1),
+                JudgeSettings.DEFAULT).overall().grade());
+    }
+
+    @Test
+    void polynomialsUnderTranslationAreOneDefectiveBlockAndDrift() {
+        // d/dx is nilpotent on polynomials: x is a generalised eigenfunction only, CHECKS C2.18
+        Snapshots snapshots = snapshots(Double::sum);
+        assertEquals(Grade.DRIFTS, Motions.judge(Motions.fit(snapshots, new DictionaryEstimator(Dictionary.monomials(4)), 5),
+                JudgeSettings.DEFAULT).overall().grade());
+    }
+
+    @Test
+    void aLadderThatRoundingCutsIsNotAtItsEnd() {
+        Snapshots snapshots = snapshots(Double::sum);
+        for (int rank : new int[] {8, 9, 10}) {
+            Verdict verdict = Motions.judge(Motions.fit(snapshots,
+                    new OccupationEstimator(Motions.kernel("exponential", "rate", 1),
+                    SegmentPlan.WHOLE_RUNS, 1), rank), JudgeSettings.DEFAULT);
+            assertTrue(verdict.overall().grade().compareTo(Grade.SETTLES) > 0, "rank " + rank);
+        }
+    }
+
+    @Test
+    void inAGaussianSpaceNothingStands() {
+        Snapshots snapshots = snapshots((a, t) -> a * Math.exp(t));
+        Verdict verdict = Motions.judge(Motions.fit(snapshots, new OccupationEstimator(Motions.kernel("gaussian",
+                "scale", 1),
+                SegmentPlan.WHOLE_RUNS, 1), 6), JudgeSettings.DEFAULT);
+        assertTrue(verdict.findings().stream().anyMatch(f -> f.check().equals("signal-in-space") && !f.passed()));
+        assertTrue(verdict.modes().stream().filter(ModeVerdict::counts).noneMatch(mode -> mode.grade() == Grade.STANDS));
+    }
+
+    private static Snapshots snapshots(Flow flow) {
+        return Motions.snapshots(0.4 / 19, 1, Motions.spread(flow, 40, -1, 1, 20, 0.4, 0, 1),
+                Motions.spread(flow, 9, -0.9, 0.9, 20, 0.4, 0, 2));
+    }
+}
