@@ -36,17 +36,26 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
     }
 
     /**
-     * Returns the root mean square of each eigenfunction over all states of the runs.
+     * Evaluates the eigenfunctions at all states of the runs.
      *
      * @param expansion on one rung
+     * @return per run p x r
+     */
+    List<ZMatrixRMaj> eigenfunctions(ModalExpansion expansion) {
+        return functions.stream().map(evaluated -> ComplexMatrices.product(
+                Matrices.block(evaluated, 0, evaluated.numRows, 0, expansion.rank()), expansion.vectors())).toList();
+    }
+
+    /**
+     * Returns the root mean square of each eigenfunction over all states of the runs.
+     *
+     * @param eigenfunctions per run p x r
      * @return length r
      */
-    double[] sizes(ModalExpansion expansion) {
-        double[] squares = new double[expansion.rank()];
+    static double[] sizes(List<ZMatrixRMaj> eigenfunctions) {
+        double[] squares = new double[eigenfunctions.get(0).numCols];
         int states = 0;
-        for (DMatrixRMaj evaluated : functions) {
-            DMatrixRMaj leading = Matrices.block(evaluated, 0, evaluated.numRows, 0, expansion.rank());
-            ZMatrixRMaj values = ComplexMatrices.product(leading, expansion.vectors());
+        for (ZMatrixRMaj values : eigenfunctions) {
             for (int i = 0; i < values.numRows; i++) {
                 for (int j = 0; j < squares.length; j++) {
                     squares[j] += Math.pow(ComplexMatrices.entry(values, i, j).abs(), 2);

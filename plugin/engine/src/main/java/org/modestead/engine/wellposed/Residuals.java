@@ -1,10 +1,9 @@
 package org.modestead.engine.wellposed;
 
-import org.ejml.data.DMatrixRMaj;
+import java.util.List;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
-import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.StateRun;
 import org.modestead.engine.spectrum.ModalExpansion;
 
@@ -25,16 +24,16 @@ final class Residuals {
 
     /**
      * @param expansion on one rung
-     * @param judging runs with the orthonormal functions evaluated
+     * @param judging runs
+     * @param eigenfunctions per run p x r values of the expansion's eigenfunctions
      * @return length r, one an eigenpair; NaN where φ vanishes
      */
-    static double[] of(ModalExpansion expansion, JudgingRuns judging) {
+    static double[] of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions) {
         int r = expansion.rank();
         double[][] squares = new double[r][2 * (SHARES.length + 1)];
         for (int i = 0; i < judging.runs().size(); i++) {
             StateRun run = judging.runs().get(i);
-            DMatrixRMaj functions = Matrices.block(judging.functions().get(i), 0, run.count(), 0, r);
-            ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
+            ZMatrixRMaj values = eigenfunctions.get(i);
             for (int j = 0; j < r; j++) {
                 for (int lag = 0; lag <= SHARES.length; lag++) {
                     double target = lag == 0 ? 0 : SHARES[lag - 1] * ownTime(expansion.rates().get(j), judging.longest());

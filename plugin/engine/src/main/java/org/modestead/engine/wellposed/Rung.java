@@ -52,8 +52,9 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         ModalExpansion expansion = ModalExpansion.of(compression);
         DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, compression.rank());
         ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
-        double[] residuals = Residuals.of(expansion, judging);
-        double[] judged = judging.sizes(expansion);
+        List<ZMatrixRMaj> unseen = judging.eigenfunctions(expansion);
+        double[] residuals = Residuals.of(expansion, judging, unseen);
+        double[] judged = JudgingRuns.sizes(unseen);
         List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream()
                 .map(group -> part(expansion, values, group, sample, residuals, judged)).toList();
         return new Rung(expansion, parts, carryingNorm(parts), captured(compression, sample.channels(), judging));
