@@ -46,7 +46,7 @@ class C1DelayFitTest {
     }
 
     /** Squared singular values from the fourth on are rounding: a share of 1 - 1e-12 leaves exactly them out. */
-    private static FittedOperator fit(int depth) {
+    static FittedOperator fit(int depth) {
         return fit(depth, NoiseCorrection.NONE);
     }
 
@@ -55,7 +55,7 @@ class C1DelayFitTest {
                 Progress.NONE);
     }
 
-    private static List<Mode> slowestFirst(FittedOperator operator) {
+    static List<Mode> slowestFirst(FittedOperator operator) {
         Spectrum spectrum = SpectrumExtractor.extract(operator, Progress.NONE);
         return spectrum.modes().stream().sorted(Comparator.comparingDouble(mode -> -mode.rate().re())).toList();
     }

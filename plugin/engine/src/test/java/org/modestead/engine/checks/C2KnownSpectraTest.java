@@ -164,27 +164,43 @@ class C2KnownSpectraTest {
     @Test
     void slowManifoldSpectrumAndForecastFromData() {
         // closed form; CHECKS C2.3: 1e-10
-        FittedOperator operator = Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4);
-        ModalExpansion expansion = ModalExpansion.of(operator.chosen());
+        ModalExpansion expansion = slowExpansion();
         for (double expected : new double[] {1, 0.995012479192682, 0.904837418035960, 0.990049833749168}) {
             Complex found = expansion.eigenvalues().get(Fits.nearest(expansion.eigenvalues(), expected));
             assertEquals(expected, found.re(), 1e-12);
             assertEquals(0, found.im(), 1e-12);
         }
+        double[] ahead = slowForecast();
+        assertEquals(1.721415952850116, ahead[0], 1e-10);
+        assertEquals(3.021462497471487, ahead[1], 1e-10);
+    }
+
+    /** From (2, -1), three time units on, by the operator that the runs give. */
+    static double[] slowForecast() {
+        FittedOperator operator = Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4);
         DMatrixRMaj start = operator.chosen().evaluate(matrix(new double[] {2, -1}));
-        DMatrixRMaj carried = Matrices.product(start, operator.propagator(3));
-        DMatrixRMaj ahead = Matrices.product(carried, operator.chosen().observable());
-        assertEquals(1.721415952850116, ahead.data[0], 1e-10);
-        assertEquals(3.021462497471487, ahead.data[1], 1e-10);
+        return Matrices.product(Matrices.product(start, operator.propagator(3)), operator.chosen().observable()).data;
+    }
+
+    /** The four modes of the slow manifold from its runs. */
+    static ModalExpansion slowExpansion() {
+        return ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4).chosen());
+    }
+
+    /** -b in the eigenfunction x2 - b x1² of the fast multiplier. */
+    static double slowParabola(ModalExpansion expansion) {
+        var functions = ComplexMatrices.product(expansion.compression().map(), expansion.vectors());
+        int fast = Fits.nearest(expansion.eigenvalues(), 0.904837418035960);
+        return functions.getReal(3, fast) / functions.getReal(2, fast);
     }
 
     @Test
     void slowManifoldIsReadOffTheEigenfunction() {
         // closed form: x2 - b x1^2, b = 1.111111111111; CHECKS C2.3: 1e-10
-        ModalExpansion expansion = ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4).chosen());
+        ModalExpansion expansion = slowExpansion();
         var functions = ComplexMatrices.product(expansion.compression().map(), expansion.vectors());
         int fast = Fits.nearest(expansion.eigenvalues(), 0.904837418035960);
-        assertEquals(-1.111111111111111, functions.getReal(3, fast) / functions.getReal(2, fast), 1e-10);
+        assertEquals(-1.111111111111111, slowParabola(expansion), 1e-10);
         assertEquals(0, functions.getReal(0, fast) / functions.getReal(2, fast), 1e-10);
         assertEquals(0, functions.getReal(1, fast) / functions.getReal(2, fast), 1e-10);
     }
@@ -193,7 +209,7 @@ class C2KnownSpectraTest {
     void residualsVanishOnlyWhereTheObservablesAreClosed() {
         // CHECKS C2.3: zero to rounding, √ε after the root of a difference of squares; without x1^2 the residual is of
         // order one percent or more
-        ModalExpansion closed = ModalExpansion.of(Fits.fit(slowRuns(), new DictionaryEstimator(CLOSED), 4).chosen());
+        ModalExpansion closed = slowExpansion();
         for (int j = 0; j < 4; j++) {
             assertEquals(0, Fits.residual(closed, j), 1e-7, "closed, " + closed.eigenvalues().get(j));
         }
@@ -206,12 +222,12 @@ class C2KnownSpectraTest {
 
     // Stuart-Landau; lattice after Bagheri, J. Fluid Mech. 726:596, 2013 (from memory); identities derived
 
-    private static final double GROWTH = 0.25;
-    private static final double GAMMA = 2;
-    private static final double BETA = 0.5;
+    static final double GROWTH = 0.25;
+    static final double GAMMA = 2;
+    static final double BETA = 0.5;
 
     /** Exact flow in polar coordinates. */
-    private static double[] stuartLandau(double radius, double angle, double time) {
+    static double[] stuartLandau(double radius, double angle, double time) {
         double squared = GROWTH / (1 + (GROWTH / (radius * radius) - 1) * Math.exp(-2 * GROWTH * time));
         double now = Math.sqrt(squared);
         return new double[] {now, angle + (GAMMA - BETA * GROWTH) * time + BETA * Math.log(now / radius)};
@@ -225,7 +241,7 @@ class C2KnownSpectraTest {
         return Fits.snapshots(0.05, 1, runs);
     }
 
-    private static double radial(double[] state) {
+    static double radial(double[] state) {
         return 1 - GROWTH / (state[0] * state[0]);
     }
 
@@ -252,25 +268,30 @@ class C2KnownSpectraTest {
     @Test
     void stuartLandauIsCarriedByItsEigenfunctions() {
         // closed form; from r = 0.1, θ = 0 over t = 10: CHECKS C2.4 asks 1e-12 of the formula, 1e-6 of fine data
-        FittedOperator operator = Fits.fit(polarRuns(), new DictionaryEstimator(LATTICE), 10);
-        DMatrixRMaj start = operator.chosen().evaluate(matrix(new double[] {0.1, 0}));
-        DMatrixRMaj carried = Matrices.product(start, operator.propagator(10));
-        // back from the orthonormal functions to the listed ones: values at t = 10 of f = q <f, q>
-        DMatrixRMaj samples = polarStates();
-        DMatrixRMaj weights = leastSquares(operator.chosen().evaluate(samples), LATTICE.evaluate(samples));
-        double[] functions = Matrices.product(carried, weights).data;
+        double[] functions = latticeAhead(polarRuns());
         assertEquals(-24, LATTICE.evaluate(matrix(new double[] {0.1, 0})).data[1], 1e-12);
         assertEquals(-0.161710727978051, functions[1], 1e-9);
         assertEquals(Math.exp(-5), functions[1] / -24, 1e-10);
-        double radius = Math.sqrt(GROWTH / (1 - functions[1]));
-        assertEquals(0.463896402263257, radius, 1e-9);
-        // three turns of the phase have passed: the sine and cosine know the rest
-        double angle = Math.atan2(functions[3], functions[2]) + BETA * Math.log(radius) + 6 * Math.PI;
-        assertEquals(19.51724553516256, angle, 1e-9);
+        double[] polar = polar(functions);
+        assertEquals(0.463896402263257, polar[0], 1e-9);
+        assertEquals(19.51724553516256, polar[1], 1e-9);
     }
 
-    private static DMatrixRMaj polarStates() {
-        return polarRuns().states(Snapshots.Part.TRAINING).get(1).states();
+    /** Values of the listed eigenfunctions ten time units after r = 0.1, θ = 0, by the operator that runs give. */
+    static double[] latticeAhead(Snapshots runs) {
+        FittedOperator operator = Fits.fit(runs, new DictionaryEstimator(LATTICE), 10);
+        DMatrixRMaj start = operator.chosen().evaluate(matrix(new double[] {0.1, 0}));
+        DMatrixRMaj carried = Matrices.product(start, operator.propagator(10));
+        // back from the orthonormal functions to the listed ones: values at t = 10 of f = q <f, q>
+        DMatrixRMaj samples = runs.states(Snapshots.Part.TRAINING).get(1).states();
+        DMatrixRMaj weights = leastSquares(operator.chosen().evaluate(samples), LATTICE.evaluate(samples));
+        return Matrices.product(carried, weights).data;
+    }
+
+    /** Radius and angle from those values; three turns have passed, the sine and cosine of the phase know the rest. */
+    static double[] polar(double[] functions) {
+        double radius = Math.sqrt(GROWTH / (1 - functions[1]));
+        return new double[] {radius, Math.atan2(functions[3], functions[2]) + BETA * Math.log(radius) + 6 * Math.PI};
     }
 
     private static DMatrixRMaj leastSquares(DMatrixRMaj a, DMatrixRMaj b) {

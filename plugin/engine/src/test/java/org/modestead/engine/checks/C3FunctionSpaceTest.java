@@ -42,7 +42,7 @@ import org.modestead.engine.wellposed.WellPosedness;
 /** CHECKS C3.1-C3.4: facts of the space of exp(xy), the real Fock space (Bargmann 1961). All derived. */
 class C3FunctionSpaceTest {
 
-    private static final MonomialSpace FOCK = new MonomialSpace(Fits.exponential());
+    static final MonomialSpace FOCK = new MonomialSpace(Fits.exponential());
 
     // ---- C3.1 ----
 
@@ -110,15 +110,15 @@ class C3FunctionSpaceTest {
 
     // ---- C3.2; 1e-14 as in CHECKS ----
 
-    private static double[] powers(double a) {
+    static double[] powers(double a) {
         return MonomialSpace.series(60, n -> Math.pow(a, n));
     }
 
-    private static double[] sine() {
+    static double[] sine() {
         return MonomialSpace.series(60, n -> new double[] {0, 1, 0, -1}[n % 4]);
     }
 
-    private static double[] cosine() {
+    static double[] cosine() {
         return MonomialSpace.series(60, n -> new double[] {1, 0, -1, 0}[n % 4]);
     }
 
@@ -166,6 +166,19 @@ class C3FunctionSpaceTest {
     void aGaussianBumpUpwardsIsAMixtureOfSections() {
         // e^(bx²) = ∫ K(x, √(2b) t) e^(-t²/2)/√(2π) dt, norm² (1-4b²)^-1/2 = 1.25 at b = .3; the trapezoidal rule is
         // exact to rounding
+        OccupationFunctions mixture = bumpOfSections();
+        assertEquals(Math.exp(0.3 * 0.49), mixture.evaluate(Fits.column(0.7)).data[0], 1e-14);
+        assertEquals(1.25, squaredNorm(mixture), 1e-14);
+    }
+
+    /** Of an occupation function of one segment. */
+    static double squaredNorm(OccupationFunctions single) {
+        OccupationFunctions.Segment segment = single.segments().get(0);
+        return Matrices.transposeProduct(Fits.column(segment.weights()), single.evaluate(segment.states())).data[0];
+    }
+
+    /** e^(0.3 x²). */
+    static OccupationFunctions bumpOfSections() {
         int count = 161;
         double[] times = new double[count];
         double[] weights = new double[count];
@@ -175,11 +188,8 @@ class C3FunctionSpaceTest {
             weights[i] = 0.15 * Math.exp(-times[i] * times[i] / 2) / Math.sqrt(2 * Math.PI);
             states.set(i, 0, Math.sqrt(0.6) * times[i]);
         }
-        var mixture = new OccupationFunctions(Fits.exponential(),
+        return new OccupationFunctions(Fits.exponential(),
                 List.of(new OccupationFunctions.Segment(times, states, weights, new double[1], new double[1])));
-        assertEquals(Math.exp(0.3 * 0.49), mixture.evaluate(Fits.column(0.7)).data[0], 1e-14);
-        double squared = Matrices.transposeProduct(Fits.column(weights), mixture.evaluate(states)).data[0];
-        assertEquals(1.25, squared, 1e-14);
     }
 
     @Test
@@ -190,7 +200,7 @@ class C3FunctionSpaceTest {
         assertEquals(2, bump(0.5, 80) / bump(0.5, 20), 0.02);
     }
 
-    private static double bump(double b, int terms) {
+    static double bump(double b, int terms) {
         double sum = 0;
         double ratio = 1;
         for (int k = 0; k < terms; k++) {

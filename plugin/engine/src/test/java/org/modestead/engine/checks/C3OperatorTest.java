@@ -35,11 +35,11 @@ import org.modestead.engine.spectrum.ModalExpansion;
 class C3OperatorTest {
 
     /** CHECKS C3.7: a 50 x 50 truncation agrees to 1e-14. */
-    private static final int SIZE = 50;
+    static final int SIZE = 50;
 
     private static final MonomialSpace FOCK = new MonomialSpace(Fits.exponential());
 
-    private static double[] singular(DMatrixRMaj a) {
+    static double[] singular(DMatrixRMaj a) {
         return LinearAlgebra.installed().svd(a).values();
     }
 
@@ -197,7 +197,7 @@ class C3OperatorTest {
         return runs;
     }
 
-    private static GramCompression generator(List<Run> runs) {
+    static GramCompression generator(List<Run> runs) {
         double step = runs.get(0).times()[1];
         return (GramCompression) new OccupationEstimator(Fits.exponential(), SegmentPlan.WHOLE_RUNS, 1)
                 .compress(Fits.snapshots(step, 1, runs), Progress.NONE);

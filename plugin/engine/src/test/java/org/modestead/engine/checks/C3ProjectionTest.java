@@ -29,13 +29,13 @@ class C3ProjectionTest {
 
     private static final int EQUISPACED_FROM = 4;
 
-    private static double[] integers(int n) {
+    static double[] integers(int n) {
         double[] out = new double[n];
         Arrays.setAll(out, k -> k);
         return out;
     }
 
-    private static double[] equispaced(int n) {
+    static double[] equispaced(int n) {
         double[] out = new double[n];
         Arrays.setAll(out, k -> -1 + 2.0 * k / (n - 1));
         return out;
@@ -54,14 +54,14 @@ class C3ProjectionTest {
     }
 
     /** ‖x‖² - ‖Px‖² as the captured share takes it: the coefficients of x on the orthonormal functions. */
-    private static double residual(double[] exponents) {
+    static double residual(double[] exponents) {
         OrthonormalCompression compression = projection(exponents);
         assertEquals(exponents.length, compression.rank());
         double held = Arrays.stream(compression.observable().data).map(c -> c * c).sum();
         return Fits.exponential().space().coordinateNormSquared().orElseThrow() - held;
     }
 
-    private static double condition(Kernel kernel, double[] exponents) {
+    static double condition(Kernel kernel, double[] exponents) {
         double[] singular = LinearAlgebra.installed().svd(kernel.matrix(Fits.column(exponents), Fits.column(exponents)))
                 .values();
         return singular[0] / singular[singular.length - 1];

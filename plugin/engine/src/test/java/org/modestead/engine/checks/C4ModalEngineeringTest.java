@@ -108,7 +108,7 @@ class C4ModalEngineeringTest {
     // ---- C4.4 ----
 
     /** Stiffness of equal masses and springs, m = k = 1; the last mass free or held by a spring to a second wall. */
-    private static SymmetricEigen chain(int masses, boolean secondWall) {
+    static SymmetricEigen chain(int masses, boolean secondWall) {
         DMatrixRMaj stiffness = new DMatrixRMaj(masses, masses);
         for (int i = 0; i < masses; i++) {
             stiffness.set(i, i, i == masses - 1 && !secondWall ? 1 : 2);
@@ -120,7 +120,7 @@ class C4ModalEngineeringTest {
         return LinearAlgebra.installed().symmetricEigen(stiffness);
     }
 
-    private static double[] rising(SymmetricEigen eigen) {
+    static double[] rising(SymmetricEigen eigen) {
         int n = eigen.values().length;
         return IntStream.range(0, n).mapToDouble(k -> Math.sqrt(eigen.values()[n - 1 - k])).toArray();
     }
@@ -172,7 +172,7 @@ class C4ModalEngineeringTest {
      * Roots βL of a cantilever: the compliance operator in the energy inner product ∫u''v'', on functions clamped at 0
      * whose second derivatives are orthonormal Legendre polynomials, so G = I and M_ij = ∫ b_i b_j has eigenvalues 1/β⁴.
      */
-    private static double[] cantilever() {
+    static double[] cantilever() {
         double[][] twice = new double[POLYNOMIALS][];
         for (int k = 0; k < POLYNOMIALS; k++) {
             double[] legendre = new double[k + 1];

@@ -40,7 +40,7 @@ class C6LinearAlgebraTest {
         return out;
     }
 
-    private static List<Complex> risingEigenvalues(DMatrixRMaj a) {
+    static List<Complex> risingEigenvalues(DMatrixRMaj a) {
         return rising(LinearAlgebra.installed().eigen(a).values());
     }
 
@@ -87,7 +87,7 @@ class C6LinearAlgebraTest {
         0.143646519769221, 0.284749720558478, 0.643505319004856, 1.55398870913211, 3.51185594858076, 6.96153308556712,
         12.3110774008685, 20.1989886458771, 32.2288915015722};
 
-    private static DMatrixRMaj frank() {
+    static DMatrixRMaj frank() {
         return matrix(12, (i, j) -> j >= i - 1 ? 12 - Math.max(i, j) : 0);
     }
 

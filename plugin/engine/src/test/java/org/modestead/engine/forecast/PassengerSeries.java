@@ -6,7 +6,7 @@ import java.util.stream.Stream;
  * Monthly totals of airline passengers, thousands, 1949-1960: G. E. P. Box and G. M. Jenkins, "Time Series Analysis:
  * Forecasting and Control", Holden-Day 1976, series G.
  */
-final class PassengerSeries {
+public final class PassengerSeries {
 
     private static final String THOUSANDS = """
             112 118 132 129 121 135 148 148 136 119 104 118 115 126 141 135 125 149 170 170 158 133
@@ -19,7 +19,7 @@ final class PassengerSeries {
 
     private PassengerSeries() {}
 
-    static double[] values() {
+    public static double[] values() {
         return Stream.of(THOUSANDS.trim().split("\\s+")).mapToDouble(Double::parseDouble).toArray();
     }
 }
