@@ -1,5 +1,7 @@
 package org.modestead.engine.basis;
 
+import java.util.Optional;
+
 /** An explicit list of functions, known before the number of state components is. Immutable. */
 public interface Dictionary {
 
@@ -9,6 +11,18 @@ public interface Dictionary {
      * @throws org.modestead.engine.FitFault if there would be too many, or if the dictionary does not suit N
      */
     FunctionBasis on(int stateSize);
+
+    /**
+     * Returns the functions through which inputs act on these functions, evaluated at {@code [x, u]}: by default the constant,
+     * the inputs, and their products with every function, which is exact to first order in the inputs.
+     *
+     * @param stateSize N
+     * @param inputs columns of inputs
+     * @throws org.modestead.engine.FitFault if there would be too many
+     */
+    default FunctionBasis inputTerms(int stateSize, int inputs) {
+        return new InputTerms(stateSize, inputs, Optional.of(on(stateSize)));
+    }
 
     /** Returns what it is, for the report. */
     String describe();

@@ -1,6 +1,7 @@
 package org.modestead.engine.basis;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
@@ -28,19 +29,39 @@ record MonomialDictionary(int degree) implements Dictionary {
 
     @Override
     public FunctionBasis on(int stateSize) {
+        return new Monomials(exponents(stateSize, "state components"), describe());
+    }
+
+    /**
+     * The constant and all monomials of state and inputs up to the degree in which an input stands: exact for linear motion, whose
+     * next state is a polynomial of both.
+     */
+    @Override
+    public FunctionBasis inputTerms(int stateSize, int inputs) {
+        List<int[]> terms = new ArrayList<>();
+        terms.add(new int[stateSize + inputs]);
+        for (int[] exponent : exponents(stateSize + inputs, "state components and inputs")) {
+            if (Arrays.stream(exponent, stateSize, stateSize + inputs).anyMatch(power -> power > 0)) {
+                terms.add(exponent);
+            }
+        }
+        return new Monomials(List.copyOf(terms), "input terms, " + describe());
+    }
+
+    private List<int[]> exponents(int size, String what) {
         double count = 1;
         for (int k = 1; k <= degree; k++) {
-            count = count * (stateSize + k) / k;
+            count = count * (size + k) / k;
         }
         if (count > MOST) {
-            throw new FitFault("dictionary", "degree " + degree + " on " + stateSize + " state components makes " + (long) count
+            throw new FitFault("dictionary", "degree " + degree + " on " + size + " " + what + " makes " + (long) count
                     + " functions", "keep it at most " + MOST + ": lower the degree or the delay depth, or use a kernel");
         }
         List<int[]> exponents = new ArrayList<>();
         for (int total = 0; total <= degree; total++) {
-            collect(new int[stateSize], 0, total, exponents);
+            collect(new int[size], 0, total, exponents);
         }
-        return new Monomials(List.copyOf(exponents), degree, describe());
+        return List.copyOf(exponents);
     }
 
     private static void collect(int[] exponent, int from, int rest, List<int[]> out) {
@@ -55,8 +76,8 @@ record MonomialDictionary(int degree) implements Dictionary {
         }
     }
 
-    /** The monomials on states of a known size. */
-    private record Monomials(List<int[]> exponents, int degree, String description) implements FunctionBasis {
+    /** Monomials in a known number of variables. */
+    private record Monomials(List<int[]> exponents, String description) implements FunctionBasis {
 
         @Override
         public int size() {

@@ -78,7 +78,8 @@ record Backtest(List<Errors> errors, int limited) {
 
     private static DMatrixRMaj forecast(ForecastRoute route, Series series, int origin, int leads) {
         int observed = Math.min(leads, series.length() - 1 - origin);
-        return route.forecast(series.history(origin, route.used(origin + 1)), observed);
+        int used = route.used(origin + 1);
+        return route.forecast(series.history(origin, used), series.inputs(origin, used, observed), observed);
     }
 
     private static int limit(DMatrixRMaj values, Region region) {

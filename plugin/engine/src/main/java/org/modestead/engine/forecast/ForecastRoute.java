@@ -34,4 +34,16 @@ public interface ForecastRoute {
      * @return new steps x n matrix, prepared units; entries may overflow, the caller judges
      */
     DMatrixRMaj forecast(DMatrixRMaj history, int steps);
+
+    /**
+     * Continues a run whose inputs are known; a route that knows nothing of inputs does not read them.
+     *
+     * @param history as above
+     * @param inputs (history rows + steps) x q: those at the samples of the history and at the steps to come
+     * @param steps how many to forecast, at least 1
+     * @return as above
+     */
+    default DMatrixRMaj forecast(DMatrixRMaj history, DMatrixRMaj inputs, int steps) {
+        return forecast(history, steps);
+    }
 }

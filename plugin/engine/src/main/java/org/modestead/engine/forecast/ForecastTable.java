@@ -79,7 +79,8 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
             if (steps < 1) {
                 return;
             }
-            DMatrixRMaj values = route.forecast(series.history(origin, route.memory()), steps);
+            DMatrixRMaj values = route.forecast(series.history(origin, route.memory()),
+                    series.inputs(origin, route.memory(), steps), steps);
             int kept = sensible(values);
             if (kept < steps) {
                 cut.add("run " + series.id() + " at " + label(time(series, origin, kept + 1)));

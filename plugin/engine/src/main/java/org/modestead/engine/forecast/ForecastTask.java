@@ -193,7 +193,10 @@ record ForecastTask(
                     + " apart (the median training step), and observed values are interpolated linearly to these times for"
                     + " the scores."));
         }
-        if (!snapshots.inputs().isEmpty()) {
+        if (operator.compression().inputs().isPresent()) {
+            out.add(new Doubt("inputs-assumed", "Forecast and scores take the inputs as they were recorded, those after the origin"
+                    + " included; where the recording ends they are held at their last values."));
+        } else if (!snapshots.inputs().isEmpty()) {
             out.add(new Doubt("inputs-not-forecast", "The forecast does not know what the " + snapshots.inputs().size()
                     + " inputs will do; it goes on as the training runs did on the whole."));
         }

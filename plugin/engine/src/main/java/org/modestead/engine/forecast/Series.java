@@ -16,12 +16,18 @@ import org.modestead.engine.recording.Snapshots;
  * @param id the run's name
  * @param times sample times, length p, strictly rising, one step apart
  * @param values prepared samples, p x n
+ * @param inputs known inputs at the same times, p x q
  * @param first samples before this one are history and never scored, in [0, p]
  */
-record Series(String id, double[] times, DMatrixRMaj values, int first) {
+record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int first) {
 
     /** Neighbouring samples further apart than this many steps do not belong to one uninterrupted recording. */
     private static final double CONTIGUOUS = 1.5;
+
+    /** Without inputs. */
+    Series(String id, double[] times, DMatrixRMaj values, int first) {
+        this(id, times, values, new DMatrixRMaj(times.length, 0), first);
+    }
 
     /**
      * Returns the runs of a part, each continued backwards into the earlier parts it was cut from. Uneven runs are
@@ -57,7 +63,7 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
     }
 
     private static Series joined(Snapshots snapshots, Snapshots.Part part, Run run, double step) {
-        Series out = new Series(run.id(), run.times(), run.values(), run.leadIn());
+        Series out = new Series(run.id(), run.times(), run.values(), run.inputs(), run.leadIn());
         for (int earlier = part.ordinal() - 1; earlier >= 0; earlier--) {
             for (Run before : snapshots.runs(Snapshots.Part.values()[earlier])) {
                 if (before.id().equals(run.id())) {
@@ -76,13 +82,16 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
         if (more == 0 || before.times()[more - 1] < times[0] - CONTIGUOUS * step) {
             return this;
         }
-        int n = values.numCols;
         double[] joinedTimes = Arrays.copyOf(before.times(), more + length());
         System.arraycopy(times, 0, joinedTimes, more, length());
-        DMatrixRMaj joined = new DMatrixRMaj(more + length(), n);
-        System.arraycopy(before.values().data, 0, joined.data, 0, more * n);
-        System.arraycopy(values.data, 0, joined.data, more * n, length() * n);
-        return new Series(id, joinedTimes, joined, first + more);
+        return new Series(id, joinedTimes, stacked(before.values(), more, values), stacked(before.inputs(), more, inputs), first + more);
+    }
+
+    private static DMatrixRMaj stacked(DMatrixRMaj before, int rows, DMatrixRMaj after) {
+        DMatrixRMaj out = new DMatrixRMaj(rows + after.numRows, after.numCols);
+        System.arraycopy(before.data, 0, out.data, 0, rows * after.numCols);
+        System.arraycopy(after.data, 0, out.data, rows * after.numCols, after.getNumElements());
+        return out;
     }
 
     private Series even(double step, int anchor) {
@@ -91,23 +100,25 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
         int after = (int) Math.floor((end() - at) / step + 1e-9);
         double[] grid = new double[before + after + 1];
         DMatrixRMaj out = new DMatrixRMaj(grid.length, values.numCols);
+        DMatrixRMaj known = new DMatrixRMaj(grid.length, inputs.numCols);
         int left = 0;
         for (int k = 0; k < grid.length; k++) {
             grid[k] = at + (k - before) * step;
             while (left < length() - 2 && times[left + 1] <= grid[k]) {
                 left++;
             }
-            interpolate(left, grid[k], out, k);
+            interpolate(values, left, grid[k], out, k);
+            interpolate(inputs, left, grid[k], known, k);
         }
-        return new Series(id, grid, out, Math.min(first, before + 1));
+        return new Series(id, grid, out, known, Math.min(first, before + 1));
     }
 
-    private void interpolate(int left, double time, DMatrixRMaj out, int row) {
+    private void interpolate(DMatrixRMaj from, int left, double time, DMatrixRMaj out, int row) {
         int right = Math.min(left + 1, length() - 1);
         double share = right == left ? 0 : (time - times[left]) / (times[right] - times[left]);
         double inside = Math.max(0, Math.min(1, share));
         for (int c = 0; c < out.numCols; c++) {
-            out.set(row, c, (1 - inside) * values.get(left, c) + inside * values.get(right, c));
+            out.set(row, c, (1 - inside) * from.get(left, c) + inside * from.get(right, c));
         }
     }
 
@@ -141,9 +152,23 @@ record Series(String id, double[] times, DMatrixRMaj values, int first) {
         return Matrices.block(values, origin + 1 - memory, origin + 1, 0, values.numCols);
     }
 
+    /**
+     * Returns the inputs at the history of a forecast and at the steps to come; after the last recorded one they are held.
+     *
+     * @return (memory + steps) x q
+     */
+    DMatrixRMaj inputs(int origin, int memory, int steps) {
+        DMatrixRMaj out = new DMatrixRMaj(memory + steps, inputs.numCols);
+        for (int k = 0; k < out.numRows; k++) {
+            int sample = Math.min(origin + 1 - memory + k, length() - 1);
+            System.arraycopy(inputs.data, sample * inputs.numCols, out.data, k * inputs.numCols, inputs.numCols);
+        }
+        return out;
+    }
+
     /** Returns the series without what comes at and after a sample. */
     Series before(int end) {
         DMatrixRMaj kept = Matrices.block(values, 0, end, 0, values.numCols);
-        return new Series(id, Arrays.copyOf(times, end), kept, Math.min(first, end));
+        return new Series(id, Arrays.copyOf(times, end), kept, Matrices.block(inputs, 0, end, 0, inputs.numCols), Math.min(first, end));
     }
 }

@@ -5,7 +5,6 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.kernel.KernelSpec;
-import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.Snapshots;
 
 /**
@@ -17,12 +16,13 @@ import org.modestead.engine.recording.Snapshots;
  *
  * @param dictionary the functions
  * @param stride sampling steps per application of the operator, at least 1
+ * @param inputs what is made of known inputs, see {@link InputEffect}
  */
-public record DictionaryEstimator(Dictionary dictionary, int stride) implements Estimator {
+public record DictionaryEstimator(Dictionary dictionary, int stride, InputUse inputs) implements Estimator {
 
-    /** One sampling step. */
+    /** One sampling step, inputs held. */
     public DictionaryEstimator(Dictionary dictionary) {
-        this(dictionary, 1);
+        this(dictionary, 1, InputUse.HELD);
     }
 
     @Override
@@ -44,14 +44,11 @@ public record DictionaryEstimator(Dictionary dictionary, int stride) implements 
     public Compression compress(Snapshots snapshots, Progress progress) {
         FunctionBasis basis = dictionary.on(snapshots.stateSize());
         StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, stride);
-        double weight = 1 / Math.sqrt(pairs.count());
-        return new FactoredCompression(basis, Matrices.scaled(basis.evaluate(pairs.now()), weight),
-                Matrices.scaled(basis.evaluate(pairs.next()), weight), Matrices.scaled(pairs.now(), weight), InnerProduct.DATA,
-                new Evolution.StepMap(pairs.step()));
+        return StepRegression.of(pairs, basis, inputs, dictionary::inputTerms, NoiseCorrection.NONE);
     }
 
     @Override
     public Optional<Estimator> otherStep(Snapshots snapshots) {
-        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new DictionaryEstimator(dictionary, 2 * stride)) : Optional.empty();
+        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new DictionaryEstimator(dictionary, 2 * stride, inputs)) : Optional.empty();
     }
 }

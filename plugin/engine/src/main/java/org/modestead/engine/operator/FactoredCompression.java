@@ -1,7 +1,9 @@
 package org.modestead.engine.operator;
 
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.ejml.dense.row.NormOps_DDRM;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.linalg.LinearAlgebra.Svd;
@@ -30,6 +32,8 @@ import org.modestead.engine.linalg.ThinSvd;
  * @param innerProduct which of the two readings
  * @param evolution step map or generator
  * @param correction for noise, in the data inner product only
+ * @param inputs what known inputs add to the p functions, where they were projected out of F, F' and the target; in the data
+ *     inner product only
  */
 public record FactoredCompression(
         FunctionBasis features,
@@ -38,7 +42,8 @@ public record FactoredCompression(
         DMatrixRMaj target,
         InnerProduct innerProduct,
         Evolution evolution,
-        NoiseCorrection correction)
+        NoiseCorrection correction,
+        Optional<InputEffect> inputs)
         implements Compression {
 
     private static final double NOISE = 4 * Math.ulp(1.0);
@@ -48,9 +53,18 @@ public record FactoredCompression(
         if (correction != NoiseCorrection.NONE && innerProduct != InnerProduct.DATA) {
             throw new IllegalArgumentException(correction + " in the inner product " + innerProduct);
         }
+        if (inputs.isPresent() && innerProduct != InnerProduct.DATA) {
+            throw new IllegalArgumentException("inputs in the inner product " + innerProduct);
+        }
     }
 
-    /** Without a correction. */
+    /** Without inputs. */
+    public FactoredCompression(FunctionBasis features, DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
+            InnerProduct innerProduct, Evolution evolution, NoiseCorrection correction) {
+        this(features, now, next, target, innerProduct, evolution, correction, Optional.empty());
+    }
+
+    /** Without a correction and without inputs. */
     public FactoredCompression(FunctionBasis features, DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
             InnerProduct innerProduct, Evolution evolution) {
         this(features, now, next, target, innerProduct, evolution, NoiseCorrection.NONE);
@@ -89,19 +103,28 @@ public record FactoredCompression(
     public OrthonormalCompression whiten(int largest) {
         Svd svd = ThinSvd.of(now, largest);
         double first = svd.values().length == 0 ? 0 : svd.values()[0];
+        double rounding = NOISE * Math.max(now.numRows, now.numCols) * Math.max(first, sizeWithInputs());
+        if (inputs.isPresent() && first <= rounding) {
+            throw new FitFault("inputs", "they explain all that the states do", "let the free motion show: record runs in which it"
+                    + " is not driven alone, or leave the inputs in");
+        }
         if (!(first > 0) || Double.isInfinite(first)) {
             throw new FitFault("snapshot matrix", "its largest singular value is " + first,
                     "the basis functions must be finite and must not all vanish on the data");
         }
         int rank = 0;
-        double noise = NOISE * Math.max(now.numRows, now.numCols) * first;
-        while (rank < Math.min(svd.values().length, largest) && svd.values()[rank] > noise) {
+        while (rank < Math.min(svd.values().length, largest) && svd.values()[rank] > rounding) {
             rank++;
         }
         double[] singular = java.util.Arrays.copyOf(svd.values(), rank);
         DMatrixRMaj u = Matrices.block(svd.u(), 0, now.numRows, 0, rank);
         DMatrixRMaj w = Matrices.block(svd.v(), 0, now.numCols, 0, rank);
         return innerProduct == InnerProduct.DATA ? inData(u, w, singular) : inSpace(u, w, singular);
+    }
+
+    /** What is left of the functions after inputs were projected out carries the rounding of the whole. */
+    private double sizeWithInputs() {
+        return inputs.map(effect -> Math.hypot(NormOps_DDRM.normF(now), NormOps_DDRM.normF(effect.now()))).orElse(0.0);
     }
 
     private OrthonormalCompression inData(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {
@@ -112,7 +135,8 @@ public record FactoredCompression(
         OrthonormalCompression plain = new OrthonormalCompression(features, map, action,
                 Matrices.transposeProduct(moved, moved), Matrices.transposeProduct(u, target), singular, now.numRows,
                 innerProduct, evolution);
-        return correction == NoiseCorrection.NONE ? plain : plain.corrected(NoisyStep.of(correction, u, moved, action));
+        OrthonormalCompression free = inputs.map(effect -> plain.separated(effect.combined(map))).orElse(plain);
+        return correction == NoiseCorrection.NONE ? free : free.corrected(NoisyStep.of(correction, u, moved, action));
     }
 
     private OrthonormalCompression inSpace(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {

@@ -3,8 +3,8 @@ package org.modestead.engine.operator;
 import java.util.Optional;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Coordinates;
+import org.modestead.engine.basis.InputTerms;
 import org.modestead.engine.kernel.KernelSpec;
-import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.Snapshots;
 
 /**
@@ -16,17 +16,18 @@ import org.modestead.engine.recording.Snapshots;
  *
  * @param stride sampling steps per application of the operator, at least 1
  * @param correction of that bias
+ * @param inputs what is made of known inputs, see {@link InputEffect}
  */
-public record LinearEstimator(int stride, NoiseCorrection correction) implements Estimator {
+public record LinearEstimator(int stride, NoiseCorrection correction, InputUse inputs) implements Estimator {
 
-    /** One sampling step, least squares. */
+    /** One sampling step, least squares, inputs held. */
     public LinearEstimator() {
         this(NoiseCorrection.NONE);
     }
 
-    /** One sampling step. */
+    /** One sampling step, inputs held. */
     public LinearEstimator(NoiseCorrection correction) {
-        this(1, correction);
+        this(1, correction, InputUse.HELD);
     }
 
     @Override
@@ -47,15 +48,12 @@ public record LinearEstimator(int stride, NoiseCorrection correction) implements
     @Override
     public Compression compress(Snapshots snapshots, Progress progress) {
         StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, stride);
-        double weight = 1 / Math.sqrt(pairs.count());
-        var now = Matrices.scaled(pairs.now(), weight);
-        return new FactoredCompression(new Coordinates(snapshots.stateSize()), now, Matrices.scaled(pairs.next(), weight), now,
-                InnerProduct.DATA, new Evolution.StepMap(pairs.step()), correction);
+        return StepRegression.of(pairs, new Coordinates(snapshots.stateSize()), inputs, InputTerms::new, correction);
     }
 
     @Override
     public Optional<Estimator> otherStep(Snapshots snapshots) {
-        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride, correction))
+        return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride, correction, inputs))
                 : Optional.empty();
     }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import org.modestead.engine.Doubt;
@@ -13,6 +14,7 @@ public final class OperatorFitter {
 
     private static final int LARGEST_RANK = 400;
     private static final double THIN = 1e-6;
+    private static final double LITTLE_FREE = 1e-3;
 
     private OperatorFitter() {}
 
@@ -39,6 +41,18 @@ public final class OperatorFitter {
                 doubts(full, choice.rank(), snapshots));
     }
 
+    private static double freeShare(OrthonormalCompression full, InputEffect effect) {
+        double free = Arrays.stream(full.singular()).map(s -> s * s).sum();
+        double explained = 0;
+        for (int j = 0; j < full.rank(); j++) {
+            double scale = full.singular()[j];
+            for (int a = 0; a < effect.count(); a++) {
+                explained += Math.pow(scale * effect.now().get(a, j), 2);
+            }
+        }
+        return free / (free + explained);
+    }
+
     /** The hard threshold needs the median of all singular values, whatever their number. */
     private static int largest(RankRule rule) {
         return rule instanceof RankRule.HardThreshold ? Integer.MAX_VALUE : LARGEST_RANK;
@@ -51,14 +65,20 @@ public final class OperatorFitter {
             doubts.add(new Doubt("ill-conditioned", String.format(Locale.ROOT,
                     "At rank %d the weakest direction carries %.2g of the strongest: noise of that relative size decides it.", rank, thin)));
         }
-        if (full.snapshots() < 3 * rank) {
+        int fitted = rank + full.inputs().map(InputEffect::count).orElse(0);
+        if (full.snapshots() < 3 * fitted) {
             doubts.add(new Doubt("few-snapshots", String.format(Locale.ROOT,
-                    "Rank %d was fitted to %d snapshots; fewer than three a direction leave little to average over.", rank, full.snapshots())));
+                    "Rank %d%s was fitted to %d snapshots; fewer than three a direction leave little to average over.", rank,
+                    fitted == rank ? "" : " and " + (fitted - rank) + " input terms", full.snapshots())));
         }
-        if (!snapshots.inputs().isEmpty()) {
-            doubts.add(new Doubt("inputs-not-separated",
-                    "Input columns are kept with the snapshots but this fit does not separate their effect from the free motion."));
+        if (!snapshots.inputs().isEmpty() && full.inputs().isEmpty()) {
+            doubts.add(new Doubt("inputs-not-separated", "Input columns are kept with the snapshots but this fit does not separate their"
+                    + " effect from the free motion: it may show their frequencies as modes."));
         }
+        full.inputs().filter(effect -> freeShare(full, effect) < LITTLE_FREE).ifPresent(effect -> doubts.add(new Doubt("inputs-explain-states",
+                String.format(Locale.ROOT, "The inputs of the moment explain all but %.2g of the states' mean square, as under feedback or in a"
+                        + " steady state: free motion hardly shows, so its rates rest on little. Vary inputs independently of the state.",
+                        freeShare(full, effect)))));
         if (full.evolution() instanceof Evolution.Generator generator && generator.contraction() < 1) {
             doubts.add(new Doubt("scaled-generator", String.format(Locale.ROOT,
                     "Eigenvalues are those of the generator scaled by %.4g; they tend to rates only as the contraction tends to 1.",

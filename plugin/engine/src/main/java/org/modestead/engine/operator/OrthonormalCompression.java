@@ -5,7 +5,9 @@ import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.basis.FunctionBasis;
+import org.modestead.engine.basis.JoinedFunctions;
 import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.recording.StateRun;
 
 /**
  * The operator seen through R orthonormal functions q_1..q_R, ordered so that the leading r of them are the
@@ -21,6 +23,8 @@ import org.modestead.engine.linalg.Matrices;
  * @param innerProduct in which the q are orthonormal
  * @param evolution step map or generator
  * @param noisy what was measured, where the action is corrected for noise
+ * @param inputs what known inputs add, where they are separated; the q are then orthonormal less what inputs explain of them, and
+ *     read state and inputs
  */
 public record OrthonormalCompression(
         FunctionBasis basis,
@@ -32,18 +36,32 @@ public record OrthonormalCompression(
         int snapshots,
         InnerProduct innerProduct,
         Evolution evolution,
-        Optional<NoisyStep> noisy) {
+        Optional<NoisyStep> noisy,
+        Optional<InputEffect> inputs) {
 
-    /** Without a noise correction. */
+    /** Without a noise correction and without inputs. */
     public OrthonormalCompression(FunctionBasis basis, DMatrixRMaj map, DMatrixRMaj action, DMatrixRMaj second,
             DMatrixRMaj observable, double[] singular, int snapshots, InnerProduct innerProduct, Evolution evolution) {
-        this(basis, map, action, second, observable, singular, snapshots, innerProduct, evolution, Optional.empty());
+        this(basis, map, action, second, observable, singular, snapshots, innerProduct, evolution, Optional.empty(),
+                Optional.empty());
     }
 
     /** The same functions with the action corrected for noise. */
     OrthonormalCompression corrected(NoisyStep step) {
         return new OrthonormalCompression(basis, map, step.corrected(singular), second, observable, singular, snapshots,
-                innerProduct, evolution, Optional.of(step));
+                innerProduct, evolution, Optional.of(step), inputs);
+    }
+
+    /**
+     * The same functions less what inputs explain of them at once, {@code q° = q - p <q, p>}.
+     *
+     * @param effect on the functions q
+     */
+    OrthonormalCompression separated(InputEffect effect) {
+        FunctionBasis joined = new JoinedFunctions(observable.numCols, basis, effect.terms());
+        DMatrixRMaj explained = Matrices.scaled(Matrices.product(effect.map(), effect.now()), -1);
+        return new OrthonormalCompression(joined, CommonOps_DDRM.concatRowsMulti(map, explained), action, second, observable, singular,
+                snapshots, innerProduct, evolution, noisy, Optional.of(effect));
     }
 
     /** Returns the action as the data give it, before any noise correction. */
@@ -71,14 +89,43 @@ public record OrthonormalCompression(
         OrthonormalCompression head = new OrthonormalCompression(basis, Matrices.block(map, 0, map.numRows, 0, r),
                 Matrices.block(action, 0, r, 0, r), Matrices.block(second, 0, r, 0, r),
                 Matrices.block(observable, 0, r, 0, observable.numCols), Arrays.copyOf(singular, r), snapshots, innerProduct,
-                evolution);
+                evolution, Optional.empty(), inputs.map(effect -> effect.leading(r)));
         return noisy.map(step -> head.corrected(step.leading(r))).orElse(head);
+    }
+
+    /** Returns the number of functions of the state that the q are combined from. */
+    public int functions() {
+        return basis.size() - inputs.map(effect -> effect.terms().size()).orElse(0);
+    }
+
+    /** Returns what the functions are evaluated at for every state of a run: the states, with the inputs where they are separated. */
+    public DMatrixRMaj arguments(StateRun run) {
+        return inputs.map(effect -> effect.arguments(run)).orElseGet(run::states);
+    }
+
+    /** Returns the states of a run, p x N, less what inputs explain of them at once. */
+    public DMatrixRMaj signal(StateRun run) {
+        return inputs.map(effect -> less(run.states(), effect.values(effect.arguments(run)), effect.observedNow()))
+                .orElseGet(run::states);
+    }
+
+    /** Returns the later state of each neighbouring pair of a run, (p - 1) x N, less what the earlier inputs explain of it. */
+    public DMatrixRMaj signalAhead(StateRun run) {
+        DMatrixRMaj later = Matrices.block(run.states(), 1, run.count(), 0, run.states().numCols);
+        return inputs.map(effect -> less(later, Matrices.block(effect.values(effect.arguments(run)), 0, run.count() - 1, 0, effect.count()),
+                effect.observedNext())).orElse(later);
+    }
+
+    private static DMatrixRMaj less(DMatrixRMaj states, DMatrixRMaj values, DMatrixRMaj weights) {
+        DMatrixRMaj out = states.copy();
+        CommonOps_DDRM.subtractEquals(out, Matrices.product(values, weights));
+        return out;
     }
 
     /**
      * Evaluates the orthonormal functions.
      *
-     * @param states p x N
+     * @param states p x N; with the inputs where they are separated, see {@link #arguments}
      * @return p x R with entry (i, j) = q_j(x_i)
      */
     public DMatrixRMaj evaluate(DMatrixRMaj states) {

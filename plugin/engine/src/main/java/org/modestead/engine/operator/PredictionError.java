@@ -11,7 +11,8 @@ import org.modestead.engine.recording.StateRun;
 /**
  * How well a compression predicts the state one sampling step ahead:
  * {@code ‖y - q(x)ᵀ P <g, q>‖ / ‖y - mean y‖} over given runs. On uneven times every step of a run is taken for its
- * mean step, so that jitter of the steps sets a floor that all candidates share.
+ * mean step, so that jitter of the steps sets a floor that all candidates share. What
+ * known inputs explain of y at once is taken off first, where they are separated.
  */
 public final class PredictionError {
 
@@ -26,7 +27,7 @@ public final class PredictionError {
 
     static Best bestRank(OrthonormalCompression compression, List<StateRun> runs, Progress progress) {
         List<Integer> ranks = IntStream.rangeClosed(1, compression.rank()).boxed().toList();
-        List<DMatrixRMaj> functions = runs.stream().map(run -> compression.evaluate(run.states())).toList();
+        List<DMatrixRMaj> functions = runs.stream().map(run -> compression.evaluate(compression.arguments(run))).toList();
         double[] errors = relative(compression, runs, functions, ranks, progress);
         int best = 0;
         for (int r = 1; r < errors.length; r++) {
@@ -49,7 +50,7 @@ public final class PredictionError {
         double spread = 0;
         for (int i = 0; i < runs.size(); i++) {
             StateRun run = runs.get(i);
-            DMatrixRMaj next = later(run);
+            DMatrixRMaj next = compression.signalAhead(run);
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
                 OrthonormalCompression rung = compression.leading(ranks.get(k));

@@ -52,7 +52,7 @@ final class RankSelection {
 
     private static RankChoice hardThreshold(OrthonormalCompression full) {
         int rows = full.snapshots();
-        int columns = full.innerProduct() == InnerProduct.DATA ? full.basis().size() : rows;
+        int columns = full.innerProduct() == InnerProduct.DATA ? full.functions() : rows;
         double beta = (double) Math.min(rows, columns) / Math.max(rows, columns);
         double omega = ((0.56 * beta - 0.95) * beta + 1.82) * beta + 1.43;
         double[] padded = Arrays.copyOf(full.singular(), Math.max(full.rank(), Math.min(rows, columns)));

@@ -35,7 +35,8 @@ public final class Ridge {
             scaleRow(action, i, shrinkage(compression.singular(), i, ridge));
         }
         return new OrthonormalCompression(compression.basis(), compression.map(), action, compression.second(), compression.observable(),
-                compression.singular(), compression.snapshots(), compression.innerProduct(), compression.evolution());
+                compression.singular(), compression.snapshots(), compression.innerProduct(), compression.evolution(),
+                compression.noisy(), compression.inputs());
     }
 
     /**

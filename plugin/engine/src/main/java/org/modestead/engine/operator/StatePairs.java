@@ -12,8 +12,12 @@ import org.modestead.engine.recording.StateRun;
  * @param now x, m x N
  * @param next y, m x N
  * @param step time from x to y
+ * @param runs they come from, each longer than the stride
+ * @param inputs q, number of known inputs
+ * @param reach samples before its own time that a state reaches back
+ * @param stride sampling steps from x to y
  */
-record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step) {
+record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun> runs, int inputs, int reach, int stride) {
 
     /**
      * @param snapshots with a uniform step
@@ -40,7 +44,19 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step) {
             System.arraycopy(run.states().data, stride * n, next.data, at * n, count * n);
             at += count;
         }
-        return new StatePairs(now, next, stride * step);
+        return new StatePairs(now, next, stride * step, runs, snapshots.inputs().size(), snapshots.delay().reach(), stride);
+    }
+
+    /** Returns the inputs that act between x and y, m x size. */
+    DMatrixRMaj windows(InputWindow window) {
+        DMatrixRMaj out = new DMatrixRMaj(count(), window.size());
+        int at = 0;
+        for (StateRun run : runs) {
+            int length = (run.count() - stride) * window.size();
+            System.arraycopy(window.of(run).data, 0, out.data, at, length);
+            at += length;
+        }
+        return out;
     }
 
     /** Returns whether some training run has a pair at this stride. */

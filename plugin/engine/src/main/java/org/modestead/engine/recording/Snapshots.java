@@ -115,13 +115,16 @@ public record Snapshots(
         double[] times = new double[count];
         System.arraycopy(run.times(), reach, times, 0, count);
         DMatrixRMaj states = new DMatrixRMaj(count, stateSize());
-        DMatrixRMaj known = new DMatrixRMaj(count, inputs.size());
+        DMatrixRMaj known = new DMatrixRMaj(count, inputs.size() * (reach + 1));
         for (int k = 0; k < count; k++) {
             for (int d = 0; d < delay.depth(); d++) {
                 int sample = k + reach - d * delay.spacing();
                 System.arraycopy(run.values().data, sample * n, states.data, k * states.numCols + d * n, n);
             }
-            System.arraycopy(run.inputs().data, (k + reach) * known.numCols, known.data, k * known.numCols, known.numCols);
+            for (int back = 0; back <= reach; back++) {
+                System.arraycopy(run.inputs().data, (k + reach - back) * inputs.size(), known.data, k * known.numCols + back * inputs.size(),
+                        inputs.size());
+            }
         }
         return new StateRun(run.id(), times, states, known);
     }

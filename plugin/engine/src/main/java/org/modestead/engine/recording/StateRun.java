@@ -9,7 +9,8 @@ import org.ejml.data.DMatrixRMaj;
  * @param id the run's name
  * @param times time of each state (of its newest sample), length p
  * @param states p x N with N = channels * depth, column {@code delay * channels + channel}
- * @param inputs inputs at the same times, p x q
+ * @param inputs known inputs over the whole reach of each state, p x q (reach + 1): those at its own time first, then those one
+ *     sample earlier, and so on
  */
 public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMaj inputs) {
 

@@ -33,7 +33,7 @@ public final class SpectrumExtractor {
         ModalExpansion expansion = ModalExpansion.of(operator.chosen());
         progress.checkCancelled();
         progress.report(0.5, "sizes of the modes");
-        TrainingSample sample = TrainingSample.of(operator.snapshots());
+        TrainingSample sample = TrainingSample.of(operator);
         List<Mode> modes = modes(expansion, sample);
         progress.report(1, "extracted");
         return new Spectrum(expansion.eigenvalues(), expansion.rates(), expansion.vectors(), expansion.joint(), expansion.solo(), modes,

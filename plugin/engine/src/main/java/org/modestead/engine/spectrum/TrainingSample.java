@@ -1,8 +1,10 @@
 package org.modestead.engine.spectrum;
 
 import java.util.List;
+import java.util.function.Function;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
 
@@ -10,8 +12,8 @@ import org.modestead.engine.recording.StateRun;
  * Training states at which eigenfunctions are evaluated to measure sizes: all of them, or evenly spaced ones where there
  * are very many.
  *
- * @param states p x N
- * @param starts first state of every run, runs x N
+ * @param states p x N, with the inputs where they are separated
+ * @param starts first state of every run, likewise
  * @param channels n, number of components that are the newest sample; the last n are the oldest one
  * @param longest duration of the longest run in time units
  */
@@ -21,13 +23,22 @@ public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channel
 
     /** Collects the states of the training part. */
     public static TrainingSample of(Snapshots snapshots) {
+        return of(snapshots, StateRun::states);
+    }
+
+    /** Collects what the functions of an operator are evaluated at over the training part. */
+    public static TrainingSample of(FittedOperator operator) {
+        return of(operator.snapshots(), operator.compression()::arguments);
+    }
+
+    private static TrainingSample of(Snapshots snapshots, Function<StateRun, DMatrixRMaj> arguments) {
         List<StateRun> runs = snapshots.states(Snapshots.Part.TRAINING);
         int total = runs.stream().mapToInt(StateRun::count).sum();
         if (total == 0) {
             throw new FitFault("training part", "no run is long enough for one state", "use longer runs or a smaller delay depth");
         }
         int every = Math.max(1, (total + MOST - 1) / MOST);
-        int n = snapshots.stateSize();
+        int n = arguments.apply(runs.get(0)).numCols;
         DMatrixRMaj states = new DMatrixRMaj((total + every - 1) / every, n);
         DMatrixRMaj starts = new DMatrixRMaj(runs.size(), n);
         int seen = 0;
@@ -35,11 +46,12 @@ public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channel
         double longest = 0;
         for (int i = 0; i < runs.size(); i++) {
             StateRun run = runs.get(i);
-            System.arraycopy(run.states().data, 0, starts.data, i * n, n);
+            DMatrixRMaj all = arguments.apply(run);
+            System.arraycopy(all.data, 0, starts.data, i * n, n);
             longest = Math.max(longest, run.times()[run.count() - 1] - run.times()[0]);
             for (int k = 0; k < run.count(); k++, seen++) {
                 if (seen % every == 0) {
-                    System.arraycopy(run.states().data, k * n, states.data, kept * n, n);
+                    System.arraycopy(all.data, k * n, states.data, kept * n, n);
                     kept++;
                 }
             }

@@ -29,7 +29,7 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
         List<StateRun> runs = heldOut ? held : usable(snapshots, Snapshots.Part.TRAINING);
         List<DMatrixRMaj> functions = new ArrayList<>();
         for (StateRun run : runs) {
-            functions.add(operator.compression().evaluate(run.states()));
+            functions.add(operator.compression().evaluate(operator.compression().arguments(run)));
         }
         double longest = runs.stream().mapToDouble(run -> run.times()[run.count() - 1] - run.times()[0]).max().orElse(0);
         return new JudgingRuns(heldOut, runs, functions, longest);

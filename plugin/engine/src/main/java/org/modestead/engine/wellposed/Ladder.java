@@ -43,7 +43,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
     static final double RESOLVED = 0.1;
 
     static Ladder climb(FittedOperator operator, Spectrum spectrum, JudgingRuns judging, JudgeSettings settings, Progress progress) {
-        TrainingSample sample = TrainingSample.of(operator.snapshots());
+        TrainingSample sample = TrainingSample.of(operator);
         DMatrixRMaj sampled = operator.compression().evaluate(sample.states());
         List<Integer> ranks = ranks(operator, settings);
         double[] errors = PredictionError.relative(operator.compression(), judging.runs(), judging.functions(), ranks, progress);

@@ -14,7 +14,7 @@ import org.modestead.engine.spectrum.ModalExpansion;
  *
  * root mean square over all pairs of states, for τ = one step and up to the mode's own time
  * {@code τ_c = min(T/2, 1/|Re λ|, 2π/|Im λ|)}: shorter would pass anything slow, longer would compare what has died away
- * with noise. The largest over the τ counts.
+ * with noise. The largest over the τ counts. What known inputs add on the way is taken off first, where they are separated.
  */
 final class Residuals {
 
@@ -34,10 +34,11 @@ final class Residuals {
         for (int i = 0; i < judging.runs().size(); i++) {
             StateRun run = judging.runs().get(i);
             ZMatrixRMaj values = eigenfunctions.get(i);
+            Complex[][] driven = driven(expansion, run);
             for (int j = 0; j < r; j++) {
                 for (int lag = 0; lag <= SHARES.length; lag++) {
                     double target = lag == 0 ? 0 : SHARES[lag - 1] * ownTime(expansion.rates().get(j), judging.longest());
-                    add(run.times(), values, j, expansion.rates().get(j), target, squares[j], 2 * lag);
+                    add(run.times(), values, driven[j], j, expansion.rates().get(j), target, squares[j], 2 * lag);
                 }
             }
         }
@@ -48,13 +49,30 @@ final class Residuals {
         return out;
     }
 
+    /** Returns what inputs have added to each eigenfunction since the run's first state; no entries where none are separated. */
+    private static Complex[][] driven(ModalExpansion expansion, StateRun run) {
+        Complex[][] out = new Complex[expansion.rank()][0];
+        expansion.compression().inputs().ifPresent(effect -> {
+            ZMatrixRMaj pushed = ComplexMatrices.product(effect.pushed(effect.arguments(run)), expansion.vectors());
+            for (int j = 0; j < out.length; j++) {
+                out[j] = new Complex[run.count()];
+                out[j][0] = Complex.ZERO;
+                for (int k = 1; k < run.count(); k++) {
+                    out[j][k] = out[j][k - 1].times(expansion.eigenvalues().get(j)).plus(ComplexMatrices.entry(pushed, k - 1, j));
+                }
+            }
+        });
+        return out;
+    }
+
     private static double ownTime(Complex rate, double longest) {
         double time = longest / 2;
         time = rate.re() == 0 ? time : Math.min(time, 1 / Math.abs(rate.re()));
         return rate.im() == 0 ? time : Math.min(time, 2 * Math.PI / Math.abs(rate.im()));
     }
 
-    private static void add(double[] times, ZMatrixRMaj values, int j, Complex rate, double target, double[] squares, int at) {
+    private static void add(double[] times, ZMatrixRMaj values, Complex[] driven, int j, Complex rate, double target, double[] squares,
+            int at) {
         int to = 1;
         for (int from = 0; from < times.length - 1; from++) {
             to = Math.max(to, from + 1);
@@ -66,10 +84,15 @@ final class Residuals {
                 return;
             }
             Complex next = ComplexMatrices.entry(values, to, j);
-            double miss = next.minus(rate.times(tau).exp().times(ComplexMatrices.entry(values, from, j))).abs();
+            double miss = free(values, driven, to, j).minus(rate.times(tau).exp().times(free(values, driven, from, j))).abs();
             squares[at] += miss * miss;
             squares[at + 1] += next.abs() * next.abs();
         }
+    }
+
+    private static Complex free(ZMatrixRMaj values, Complex[] driven, int k, int j) {
+        Complex value = ComplexMatrices.entry(values, k, j);
+        return driven.length == 0 ? value : value.minus(driven[k]);
     }
 
     private static double worst(double[] squares) {

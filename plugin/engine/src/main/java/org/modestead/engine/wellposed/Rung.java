@@ -96,7 +96,7 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         return total == 0 ? Double.NaN : Math.exp(logarithms / total);
     }
 
-    /** {@code 1 - ‖g - Pg‖²/‖g - mean g‖²} over the newest samples of the judging runs. */
+    /** {@code 1 - ‖g - Pg‖²/‖g - mean g‖²} over the newest samples of the judging runs, less what inputs explain. */
     private static double captured(OrthonormalCompression compression, int channels, JudgingRuns judging) {
         DMatrixRMaj weights = Matrices.block(compression.observable(), 0, compression.rank(), 0, channels);
         double missed = 0;
@@ -106,9 +106,10 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         for (int i = 0; i < judging.runs().size(); i++) {
             StateRun run = judging.runs().get(i);
             DMatrixRMaj projected = Matrices.product(Matrices.block(judging.functions().get(i), 0, run.count(), 0, compression.rank()), weights);
+            DMatrixRMaj signal = compression.signal(run);
             for (int row = 0; row < run.count(); row++) {
                 for (int k = 0; k < channels; k++) {
-                    double value = run.states().get(row, k);
+                    double value = signal.get(row, k);
                     missed += Math.pow(value - projected.get(row, k), 2);
                     sum[k] += value;
                     squares += value * value;

@@ -9,12 +9,14 @@ import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.InputUse;
 import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.operator.NoiseCorrection;
 import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.operator.SegmentPlan;
+import org.modestead.engine.recording.Snapshots;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.Setting.Option;
@@ -27,6 +29,7 @@ final class FitSettings {
 
     static final String ESTIMATOR = "estimator";
     static final String NOISE_CORRECTION = "noise-correction";
+    static final String INPUTS = "inputs";
     static final String DICTIONARY = "dictionary";
     static final String PERIODS = "periods";
     static final String RANK_RULE = "rank-rule";
@@ -43,6 +46,7 @@ final class FitSettings {
         List<Setting> all = new ArrayList<>();
         all.add(estimator());
         all.add(noiseCorrection());
+        all.add(inputs());
         all.addAll(dictionarySettings());
         all.addAll(kernelSettings());
         all.addAll(rankSettings());
@@ -79,6 +83,21 @@ final class FitSettings {
                 new Option("forward-backward", "Forward and backward", "The mean of the step forward and the inverted step"
                         + " backward: noise shrinks both alike, so the shrinkage cancels.")),
                 "none");
+    }
+
+    private static Setting inputs() {
+        return new Setting.Choice(new Common(INPUTS, "Inputs", "Operator", "What is made of the input columns of the"
+                + " snapshots, where there are any. Separated, the modes are those of the motion left to itself, and what"
+                + " drives it adds no mode of its own. Inputs count as free of noise, must vary independently of the state,"
+                + " and act within the delay depth: choose it long enough for dead times."), List.of(
+                new Option("held", "Separate, held", "Each input keeps its value until the next sample: set points,"
+                        + " switched valves. Step maps, linear or dictionary, only."),
+                new Option("straight", "Separate, straight", "Each input runs straight to the next sample: loads and"
+                        + " weather. Not where a controller sets the input from the state of the same moment. Step maps,"
+                        + " linear or dictionary, only."),
+                new Option("leave-in", "Leave in", "Inputs are not told to the fit: what they cause counts as free motion"
+                        + " and may appear as modes.")),
+                "held");
     }
 
     private static List<Setting> dictionarySettings() {
@@ -153,8 +172,8 @@ final class FitSettings {
      */
     static Estimator estimator(Settings settings, Optional<Kernel> kernel) {
         return switch (settings.text(ESTIMATOR)) {
-            case "linear" -> new LinearEstimator(correction(settings));
-            case DICTIONARY -> new DictionaryEstimator(dictionary(settings));
+            case "linear" -> new LinearEstimator(1, correction(settings), inputUse(settings));
+            case DICTIONARY -> new DictionaryEstimator(dictionary(settings), 1, inputUse(settings));
             case "kernel-step" -> new KernelStepEstimator(needed(settings, kernel), settings.whole("landmarks"));
             case "generator" -> new OccupationEstimator(needed(settings, kernel), segments(settings), 1);
             default -> new OccupationEstimator(needed(settings, kernel), segments(settings),
@@ -168,6 +187,28 @@ final class FitSettings {
             case "forward-backward" -> NoiseCorrection.FORWARD_BACKWARD;
             default -> NoiseCorrection.NONE;
         };
+    }
+
+    private static InputUse inputUse(Settings settings) {
+        return switch (settings.text(INPUTS)) {
+            case "leave-in" -> InputUse.LEFT_IN;
+            case "straight" -> InputUse.STRAIGHT;
+            default -> InputUse.HELD;
+        };
+    }
+
+    /**
+     * Checks that the operator can do with the inputs what is asked.
+     *
+     * @throws SettingFault if it uses a kernel and inputs are to be separated
+     */
+    static void requireSeparable(Settings settings, Snapshots snapshots) {
+        boolean kernel = !List.of("linear", DICTIONARY).contains(settings.text(ESTIMATOR));
+        if (kernel && !snapshots.inputs().isEmpty() && inputUse(settings) != InputUse.LEFT_IN) {
+            throw new SettingFault("setting " + INPUTS, "inputs to be separated by the operator " + settings.text(ESTIMATOR)
+                    + ", in whose space an input multiplies the state in more ways than data can tell apart",
+                    "fit the linear or the dictionary step map, or leave the inputs in");
+        }
     }
 
     private static Dictionary dictionary(Settings settings) {

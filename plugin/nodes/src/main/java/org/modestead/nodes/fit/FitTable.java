@@ -4,6 +4,7 @@ import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
+import org.modestead.engine.operator.InputUse;
 import org.modestead.nodes.contract.SettingText;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
@@ -30,6 +31,7 @@ final class FitTable {
         rows.row("inner product", operator.compression().innerProduct() == InnerProduct.DATA ? "average over the data"
                 : "kernel space");
         rows.row("functions", operator.compression().basis().describe());
+        rows.row("inputs", inputs(operator));
         rows.row("snapshot pairs or pieces", Integer.toString(operator.compression().snapshots()));
         rows.row("largest rank", Integer.toString(operator.compression().rank()));
         rows.row("rank", Integer.toString(operator.rank()));
@@ -37,6 +39,12 @@ final class FitTable {
         rows.row("condition", Digits.cell(singular[0] / singular[operator.rank() - 1]));
         rows.row("ridge", SettingText.plain(ridge));
         return rows.build();
+    }
+
+    private static String inputs(FittedOperator operator) {
+        int columns = operator.snapshots().inputs().size();
+        return columns == 0 ? "none" : operator.compression().inputs().map(effect -> columns + ", " + effect.use().words() + ", "
+                + effect.count() + " independent terms").orElse(columns + ", " + InputUse.LEFT_IN.words());
     }
 
     private static String kind(Evolution evolution, TimeUnit unit) {

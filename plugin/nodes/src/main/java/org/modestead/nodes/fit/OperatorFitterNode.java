@@ -1,6 +1,7 @@
 package org.modestead.nodes.fit;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -43,9 +44,11 @@ public final class OperatorFitterNode implements Node {
                                 + " Koopman spectral analysis of noisy datasets, Theoretical and Computational Fluid"
                                 + " Dynamics 31:349, 2017",
                         "Dawson, Hemati, Williams and Rowley, Characterizing and correcting for the effect of sensor noise"
-                                + " in the dynamic mode decomposition, Experiments in Fluids 57:42, 2016"),
+                                + " in the dynamic mode decomposition, Experiments in Fluids 57:42, 2016",
+                        "Proctor, Brunton and Kutz, Dynamic mode decomposition with control, SIAM Journal on Applied"
+                                + " Dynamical Systems 15:142, 2016"),
                 List.of("Koopman", "Liouville", "generator", "transfer operator", "least squares",
-                        "total least squares", "noise", "damping bias", "singular values",
+                        "total least squares", "noise", "control", "inputs", "forced motion", "damping bias", "singular values",
                         "rank",
                         "occupation kernel"),
                 List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "Prepared states; only the training part"
@@ -55,7 +58,7 @@ public final class OperatorFitterNode implements Node {
                 List.of(Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator up to the largest rank"
                         + " that the data support, with the rank chosen."),
                         Port.table("fit", "Fit", "What was fitted and how well it is conditioned.", FitTable.SCHEMA)),
-                FitSettings.declared(), 1);
+                FitSettings.declared(), 2);
     }
 
     private static String description() {
@@ -73,6 +76,10 @@ public final class OperatorFitterNode implements Node {
                 too much damping; the linear step map can be corrected for that, by total least squares or by going \
                 forward and backward. Compare both: where they disagree, the damping is not known well.
 
+                Where the snapshots carry input columns, a step map on the coordinates or on a dictionary separates what \
+                they drive: y = A x + B u, with all samples of the inputs that the state's delays reach over, a constant \
+                for the resting point, and for monomials their products with the state. The operator A is that of the free motion.
+
                 Cost: linear and dictionary fits take samples times functions squared; kernel fits samples times \
                 landmarks times rank; no square matrix of all samples is formed.""";
     }
@@ -82,10 +89,19 @@ public final class OperatorFitterNode implements Node {
         return FitSettings.problems(settings);
     }
 
+    /** Version 1 knew nothing of inputs and left them in. */
+    @Override
+    public Map<String, Object> upgrade(Map<String, Object> stored, int version) {
+        Map<String, Object> settings = new LinkedHashMap<>(stored);
+        settings.putIfAbsent(FitSettings.INPUTS, "leave-in");
+        return settings;
+    }
+
     @Override
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
         Snapshots snapshots = inputs.get("snapshots", Snapshots.class);
         Optional<Kernel> kernel = inputs.find("kernel", Kernel.class);
+        FitSettings.requireSeparable(settings, snapshots);
         Estimator estimator = FitSettings.estimator(settings, kernel);
         FittedOperator operator = OperatorFitter.fit(snapshots, estimator, FitSettings.rankRule(settings),
                 settings.number(FitSettings.RIDGE), context.progress());

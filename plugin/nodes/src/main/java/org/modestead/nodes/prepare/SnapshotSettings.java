@@ -79,7 +79,9 @@ final class SnapshotSettings {
                         + " Empty takes every column of numbers that has no other part here. A column of text is"
                         + " accepted when each cell holds a number."), TABLE, NUMBERS, 0, OptionalInt.empty()),
                 new Setting.Columns(new Common(INPUTS, "Inputs", group, "Columns of known inputs such as valve"
-                        + " positions or set points: not forecast, but told to the fit where it can use them."), TABLE,
+                        + " positions or set points. They are neither detrended, scaled nor forecast; the Operator Fitter can"
+                        + " separate what they drive. At new sample times they are interpolated like channels, which rounds"
+                        + " off steps: keep the recorded times where inputs are switched."), TABLE,
                         NUMBERS, 0, OptionalInt.empty()),
                 new Setting.Texts(new Common(UNITS, "Units", group, "Units of channels as channel=unit, one a line, for"
                         + " example flow=m3/h. A column named flow [m3/h] needs no entry."), List.of()));
