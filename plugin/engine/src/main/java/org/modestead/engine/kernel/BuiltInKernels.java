@@ -15,13 +15,13 @@ public final class BuiltInKernels implements KernelLibrary {
 
     /**
      * {@code K(x, y) = exp(-|x-y|²/(2 s²))}. Its space holds no non-zero polynomial and no constant (Steinwart, Hush and
-     * Scovel, IEEE Trans. Inf. Theory 52:4635, 2006; Minh, Constr. Approx. 32:307, 2010), hence no eigenfunction of a
-     * polynomial flow.
+     * Scovel, IEEE Trans. Inf. Theory 52:4635, 2006; Minh, Constr. Approx. 32:307, 2010), hence with one coordinate no
+     * eigenfunction of a polynomial flow, and with several none that grows or decays; see {@link ModeRoom#STEADY}.
      */
     private static KernelFamily gaussian() {
         return new RadialFamily("gaussian", "Gaussian", "exp(-|x-y|²/(2 scale²))",
-                "The space holds no constant, no polynomial and no exponential: polynomial motion has no mode in it, although forecasts"
-                        + " through it may be good.",
+                "The space holds no constant, no polynomial and no exponential, and its functions fade far off: no mode that grows or decays"
+                        + " is in it, although forecasts through it may be good.",
                 scale -> squared -> Math.exp(-squared / (2 * scale * scale)));
     }
 

@@ -32,7 +32,7 @@ final class ExponentialKernels implements KernelFamily {
     @Override
     public Kernel create(KernelSpec spec) {
         double rate = Parameters.read(spec, this, "rate");
-        return new DotProductKernel(spec, new SpaceFacts(true, true, OptionalDouble.of(1 / rate),
+        return new DotProductKernel(spec, new SpaceFacts(true, true, OptionalDouble.of(1 / rate), ModeRoom.AFFINE,
                 "The space holds all polynomials. With one coordinate only motion x' = a x + b has modes in it; orthogonal ones need b = 0."),
                 t -> Math.exp(rate * t), n -> coefficient(rate, n));
     }

@@ -1,6 +1,7 @@
 package org.modestead.engine.kernel;
 
 import java.util.Map;
+import java.util.OptionalDouble;
 import java.util.TreeMap;
 
 /**
@@ -14,6 +15,14 @@ public record KernelSpec(String family, Map<String, Double> parameters) {
     /** Takes an immutable, sorted copy. */
     public KernelSpec {
         parameters = java.util.Collections.unmodifiableMap(new TreeMap<>(parameters));
+    }
+
+    /** Returns the length over which the kernel varies: its scale, or one over the root of its rate; empty when it has neither. */
+    public OptionalDouble scale() {
+        if (parameters.containsKey("scale")) {
+            return OptionalDouble.of(parameters.get("scale"));
+        }
+        return parameters.containsKey("rate") ? OptionalDouble.of(1 / Math.sqrt(parameters.get("rate"))) : OptionalDouble.empty();
     }
 
     /** Returns for example {@code gaussian(scale=0.8)}. */

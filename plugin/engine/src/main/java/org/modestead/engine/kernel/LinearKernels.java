@@ -28,7 +28,7 @@ final class LinearKernels implements KernelFamily {
 
     @Override
     public Kernel create(KernelSpec spec) {
-        return new DotProductKernel(spec, new SpaceFacts(false, true, OptionalDouble.of(1),
+        return new DotProductKernel(spec, new SpaceFacts(false, true, OptionalDouble.of(1), ModeRoom.LINEAR,
                 "The space holds linear functions only: it can hold the modes of linear motion about zero and no others."), t -> t, n -> n == 1 ? 1 : 0);
     }
 }

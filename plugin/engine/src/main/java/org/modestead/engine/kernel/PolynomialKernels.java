@@ -39,10 +39,22 @@ final class PolynomialKernels implements KernelFamily {
         }
         boolean coordinates = degree == 1 || offset > 0;
         OptionalDouble norm = coordinates ? OptionalDouble.of(1 / (degree * Math.pow(offset, degree - 1))) : OptionalDouble.empty();
-        return new DotProductKernel(spec, new SpaceFacts(offset > 0, coordinates, norm,
-                "The space holds polynomials up to degree " + (int) degree
-                        + ": motion that leads out of them (a term of higher degree) has no mode in it."), t -> Math.pow(offset + t, degree),
+        return new DotProductKernel(spec, new SpaceFacts(offset > 0, coordinates, norm, room(offset > 0, coordinates),
+                sentence((int) degree, offset > 0)), t -> Math.pow(offset + t, degree),
                 n -> coefficient((int) degree, offset, n));
+    }
+
+    /** Only linear and affine motion leads from polynomials up to a degree into the same: f·∇ raises the degree by that of f less one. */
+    private static String sentence(int degree, boolean constants) {
+        return "The space holds polynomials " + (constants ? "up to" : "of") + " degree " + degree + (constants ? "" : " and no others")
+                + ": motion that leads out of them (a term of higher degree) has no mode in it.";
+    }
+
+    private static ModeRoom room(boolean constants, boolean coordinates) {
+        if (constants) {
+            return ModeRoom.AFFINE;
+        }
+        return coordinates ? ModeRoom.LINEAR : ModeRoom.PRODUCTS;
     }
 
     private static double coefficient(int degree, double offset, int n) {

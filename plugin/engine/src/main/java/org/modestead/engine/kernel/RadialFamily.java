@@ -25,6 +25,6 @@ record RadialFamily(String id, String title, String formula, String space, Doubl
     @Override
     public Kernel create(KernelSpec spec) {
         double scale = Parameters.read(spec, this, ScaleHeuristic.PARAMETER.name());
-        return new RadialKernel(spec, new SpaceFacts(false, false, OptionalDouble.empty(), space), profile.apply(scale));
+        return new RadialKernel(spec, new SpaceFacts(false, false, OptionalDouble.empty(), ModeRoom.STEADY, space), profile.apply(scale));
     }
 }

@@ -11,16 +11,26 @@ import org.modestead.engine.recording.StateRun;
 
 /**
  * Training data split once more, for choices made before the final fit: the last quarter of the runs when there are at
- * least four, otherwise the last quarter of every run. Holdout and calibration parts are not touched.
+ * least four, otherwise the last quarter of every run. Holdout and calibration parts are not looked at and not handed on.
  *
- * @param fitting snapshots whose training part is the first three quarters
+ * @param fitting snapshots whose training part is the first three quarters and whose holdout part is the last one
  * @param judging states of the last quarter
  */
-record InnerSplit(Snapshots fitting, List<StateRun> judging) {
+public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
 
     private static final int ENOUGH_RUNS = 4;
 
-    static InnerSplit of(Snapshots snapshots) {
+    /** Takes an immutable copy. */
+    public InnerSplit {
+        judging = List.copyOf(judging);
+    }
+
+    /**
+     * Splits the training part of snapshots.
+     *
+     * @throws FitFault if the training runs are too short to leave a quarter out
+     */
+    public static InnerSplit of(Snapshots snapshots) {
         List<Run> runs = snapshots.training();
         List<Run> first = new ArrayList<>();
         List<Run> last = new ArrayList<>();
@@ -35,8 +45,8 @@ record InnerSplit(Snapshots fitting, List<StateRun> judging) {
                 last.add(rows(run, Math.max(0, cut - 1 - snapshots.delay().reach()), run.samples()));
             }
         }
-        Snapshots fitting = withTraining(snapshots, first);
-        List<StateRun> judging = withTraining(snapshots, last).states(Snapshots.Part.TRAINING).stream().filter(run -> run.count() > 1).toList();
+        Snapshots fitting = parts(snapshots, first, last);
+        List<StateRun> judging = fitting.states(Snapshots.Part.HOLDOUT).stream().filter(run -> run.count() > 1).toList();
         if (judging.isEmpty()) {
             throw new FitFault("choice by held-out data", "the training runs are too short to leave a quarter out",
                     "use longer runs, a smaller delay depth, or choose by another rule");
@@ -49,8 +59,8 @@ record InnerSplit(Snapshots fitting, List<StateRun> judging) {
                 Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0);
     }
 
-    private static Snapshots withTraining(Snapshots s, List<Run> training) {
-        return new Snapshots(s.channels(), s.inputs(), s.time(), training, s.calibration(), s.holdout(), s.step(), s.delay(), s.preparation(),
+    private static Snapshots parts(Snapshots s, List<Run> training, List<Run> judging) {
+        return new Snapshots(s.channels(), s.inputs(), s.time(), training, List.of(), judging, s.step(), s.delay(), s.preparation(),
                 s.facts(), s.doubts());
     }
 }

@@ -7,7 +7,9 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.Map;
+import java.util.function.DoubleBinaryOperator;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -96,11 +98,61 @@ class KernelFamiliesTest {
     }
 
     @Test
+    void theRoomForModesFollowsFromConstantsAndCoordinates() {
+        // CHECKS C3.4, C3.11, C3.12 and the proof beside ModeRoom
+        assertEquals(ModeRoom.AFFINE, Motions.kernel("exponential", "rate", 2).space().room());
+        assertEquals(ModeRoom.AFFINE, Motions.kernel("polynomial", "degree", 3, "offset", 1).space().room());
+        assertEquals(ModeRoom.LINEAR, Motions.kernel("polynomial", "degree", 1, "offset", 0).space().room());
+        assertEquals(ModeRoom.PRODUCTS, Motions.kernel("polynomial", "degree", 2, "offset", 0).space().room());
+        assertEquals(ModeRoom.LINEAR, Motions.kernel("linear").space().room());
+        for (String family : List.of("gaussian", "laplacian", "matern32", "matern52")) {
+            assertEquals(ModeRoom.STEADY, Motions.kernel(family, "scale", 1).space().room());
+        }
+        assertFalse(ModeRoom.STEADY.holds(true));
+        assertTrue(ModeRoom.STEADY.holds(false) && ModeRoom.LINEAR.holds(true) && ModeRoom.AFFINE.holds(true));
+        assertFalse(ModeRoom.PRODUCTS.holds(false));
+    }
+
+    /** fᵀ K⁻¹ f on a grid of spacing 1: rises with the grid to the squared norm of f where f is in the space, else without bound. */
+    private static double normOnGrid(int reach, DoubleBinaryOperator f) {
+        int side = 2 * reach + 1;
+        DMatrixRMaj points = new DMatrixRMaj(side * side, 2);
+        DMatrixRMaj values = new DMatrixRMaj(side * side, 1);
+        for (int i = 0; i < side * side; i++) {
+            points.set(i, 0, i / side - reach);
+            points.set(i, 1, i % side - reach);
+            values.set(i, f.applyAsDouble(points.get(i, 0), points.get(i, 1)));
+        }
+        DMatrixRMaj weights = new DMatrixRMaj(side * side, 1);
+        CommonOps_DDRM.solve(Motions.kernel("gaussian", "scale", 1).matrix(points, points), values, weights);
+        return CommonOps_DDRM.dot(values, weights);
+    }
+
+    @Test
+    void inTwoCoordinatesTheGaussianSpaceHoldsAModeOfSteadyRotationButNotTheCoordinate() {
+        // (x + iy) exp(-(x²+y²)/4) turns by e^(iωt) under rotation. Real part: with ‖x e^(-x²/4)‖² = (3/4)^(-3/2) and
+        // ‖e^(-y²/4)‖² = (3/4)^(-1/2) (as in CHECKS C3.12, s = 1, α = 1/4) its squared norm is 16/9
+        double rotating = normOnGrid(5, (x, y) -> x * Math.exp(-(x * x + y * y) / 4));
+        assertTrue(rotating <= 16.0 / 9 && rotating > 0.9 * 16 / 9, "" + rotating);
+        double near = normOnGrid(3, (x, y) -> x);
+        double far = normOnGrid(6, (x, y) -> x);
+        // the mean square over the grid grows like its reach squared, its area likewise: sixteen times
+        assertTrue(far > 8 * near, near + " " + far);
+    }
+
+    @Test
     void aLabelNamesFamilyAndParameters() {
         assertEquals("gaussian(scale=0.800000)", new KernelSpec("gaussian", Map.of("scale", 0.8)).label());
         assertEquals("polynomial(degree=3, offset=1)", new KernelSpec("polynomial",
                 Map.of("offset", 1.0, "degree", 3.0)).label());
         assertEquals("linear()", new KernelSpec("linear", Map.of()).label());
+    }
+
+    @Test
+    void theScaleOfAKernelIsThatOfItsRateToo() {
+        assertEquals(0.8, new KernelSpec("gaussian", Map.of("scale", 0.8)).scale().orElseThrow());
+        assertEquals(5, new KernelSpec("exponential", Map.of("rate", 0.04)).scale().orElseThrow(), 1e-14);
+        assertTrue(new KernelSpec("linear", Map.of()).scale().isEmpty());
     }
 
     @Test

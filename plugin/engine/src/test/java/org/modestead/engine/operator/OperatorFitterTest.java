@@ -8,7 +8,6 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
-import java.util.OptionalDouble;
 import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
@@ -18,10 +17,8 @@ import org.junit.jupiter.params.provider.ValueSource;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.fixtures.Motions;
-import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.linalg.MatrixExponential;
 import org.modestead.engine.linalg.Matrices;
-import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.SpectrumExtractor;
@@ -175,56 +172,5 @@ class OperatorFitterTest {
                 new RankRule.Fixed(4), 0, Progress.NONE);
         assertArrayEquals(MatrixExponential.of(Matrices.scaled(generator.chosen().action(), 0.25)).data,
                 generator.propagator(0.25).data);
-    }
-
-    // ---- kernels ranked ----
-
-    private static Snapshots pendulum(OptionalDouble step, double jitter) {
-        Random random = new Random(8);
-        List<Run> runs = new ArrayList<>();
-        for (int i = 0; i < 8; i++) {
-            double turn = i;
-            double[] times = Motions.grid(30, 0.1);
-            for (int k = 1; k < 29; k++) {
-                times[k] += jitter * (random.nextDouble() - 0.5);
-            }
-            runs.add(Motions.run("r" + i, times, t -> new double[] {Math.cos(2 * t + turn), Math.sin(2 * t + turn)}, 0,
-                    random));
-        }
-        return Motions.snapshots(step, DelayEmbedding.NONE, runs, List.of());
-    }
-
-    private static final List<KernelSpec> CANDIDATES = List.of(new KernelSpec("nonsense", Map.of()),
-            new KernelSpec("laplacian", Map.of("scale", 0.05)),
-            new KernelSpec("linear", Map.of()), new KernelSpec("gaussian", Map.of("scale", 0.02)),
-                    new KernelSpec("exponential", Map.of("rate", 1e4)));
-
-    @Test
-    void kernelsAreRankedByHeldOutErrorAndThoseThatFailComeLast() {
-        List<KernelRanking.Row> rows = KernelRanking.rank(pendulum(OptionalDouble.of(0.1), 0), CANDIDATES,
-                new KernelRanking.Plan(20), Progress.NONE);
-        assertEquals(CANDIDATES.size(), rows.size());
-        assertEquals("linear", rows.get(0).kernel().family());
-        // linear motion in a linear space is predicted to rounding, persistence misses by the turn of a step, 2 sin(0.1)
-        assertTrue(rows.get(0).holdoutError() < 1e-10);
-        assertEquals(2 * Math.sin(0.1), rows.get(0).persistenceError(), 0.02);
-        for (int k = 1; k < rows.size(); k++) {
-            assertTrue(Double.isNaN(rows.get(k).holdoutError())
-                    || rows.get(k).holdoutError() >= rows.get(k - 1).holdoutError());
-        }
-        for (KernelRanking.Row row : rows.subList(3, 5)) {
-            assertTrue(Double.isNaN(row.holdoutError()) && row.rank() == 0 && row.note().startsWith("Could not be fitted"),
-                    row.toString());
-        }
-    }
-
-    @Test
-    void onUnevenTimesKernelsAreRankedByTheGenerator() {
-        List<KernelRanking.Row> rows = KernelRanking.rank(pendulum(OptionalDouble.empty(), 0.08),
-                List.of(new KernelSpec("gaussian", Map.of("scale", 0.02)),
-                new KernelSpec("linear", Map.of())), new KernelRanking.Plan(10), Progress.NONE);
-        assertEquals("linear", rows.get(0).kernel().family());
-        // steps jitter by up to 80 % and the mean step is used: worse than on even times, better than predicting no change
-        assertTrue(rows.get(0).holdoutError() < rows.get(0).persistenceError() / 2, rows.toString());
     }
 }

@@ -2,6 +2,7 @@ package org.modestead.nodes.figure;
 
 import java.util.List;
 import java.util.Objects;
+import java.util.Optional;
 
 /**
  * A picture as plain data. One renderer draws it for files, report and views; a page draws the same data for
@@ -13,9 +14,10 @@ import java.util.Objects;
  * @param caption one or two sentences: what it shows and how to read it (also the text alternative)
  * @param x horizontal axis
  * @param y vertical axis
+ * @param right a second vertical axis on the right, for a {@link Backdrop}; empty for none
  * @param layers drawn in order
  */
-public record Figure(String id, Kind kind, String title, String caption, Axis x, Axis y, List<Layer> layers) {
+public record Figure(String id, Kind kind, String title, String caption, Axis x, Axis y, Optional<Axis> right, List<Layer> layers) {
 
     /** How marks are meant to be read. */
     public enum Kind {
@@ -28,7 +30,9 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
         /** Magnitude and phase by channel. */
         SHAPES,
         /** Bars by category. */
-        BARS
+        BARS,
+        /** Separate marks, whose shape and filling tell what they are; lines beneath are context. */
+        MARKS
     }
 
     /**
@@ -66,6 +70,9 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
 
     /** A line through points; NaN breaks it. */
     public record Line(String name, String selection, double[] x, double[] y, Emphasis emphasis) implements Layer {}
+
+    /** A faint line behind all else, read against the right axis; NaN breaks it. */
+    public record Backdrop(String name, String selection, double[] x, double[] y) implements Layer {}
 
     /** The area between two curves; NaN breaks it. */
     public record Band(String name, String selection, double[] x, double[] low, double[] high) implements Layer {}
@@ -111,9 +118,15 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
         FAINT
     }
 
+    /** A figure with one vertical axis. */
+    public Figure(String id, Kind kind, String title, String caption, Axis x, Axis y, List<Layer> layers) {
+        this(id, kind, title, caption, x, y, Optional.empty(), layers);
+    }
+
     /** Takes an immutable copy. */
     public Figure {
         Objects.requireNonNull(kind);
+        Objects.requireNonNull(right);
         layers = List.copyOf(layers);
     }
 }

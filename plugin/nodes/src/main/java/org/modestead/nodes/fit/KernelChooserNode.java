@@ -6,12 +6,14 @@ import java.util.Map;
 import java.util.Optional;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.choose.KernelRanking;
+import org.modestead.engine.choose.RankedKernel;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.kernel.KernelFamilies;
 import org.modestead.engine.kernel.KernelFamily;
 import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.kernel.ModeRoom;
 import org.modestead.engine.kernel.ScaleHeuristic;
-import org.modestead.engine.operator.KernelRanking;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.nodes.contract.NearestName;
 import org.modestead.nodes.contract.Node;
@@ -23,8 +25,10 @@ import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.figure.Figure;
+import org.modestead.nodes.figure.RankingFigure;
 import org.modestead.nodes.table.TableSchema;
-import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.TimeUnit;
 
 /** Chooses the function space through which the signal is looked at. */
 public final class KernelChooserNode implements Node {
@@ -34,6 +38,7 @@ public final class KernelChooserNode implements Node {
         return new NodeDeclaration("kernel-chooser", "Kernel Chooser", NodeDeclaration.Stage.FIT,
                 "Chooses the kernel, that is the functions through which the signal is looked at, by hand or by ranking.",
                 description(), List.of("Aronszajn, Theory of reproducing kernels, Transactions of the AMS 68:337, 1950",
+                        "Breiman, Friedman, Olshen and Stone, Classification and Regression Trees, Wadsworth, 1984",
                         "Steinwart, Hush and Scovel, An explicit description of the reproducing kernel Hilbert spaces"
                                 + " of Gaussian RBF kernels, IEEE Transactions on Information Theory 52:4635, 2006"),
                 List.of("kernel", "reproducing kernel", "Gaussian", "Matern", "length scale", "bandwidth", "feature"
@@ -55,13 +60,19 @@ public final class KernelChooserNode implements Node {
 
                 The exponential dot product exp(rate x·y) holds all polynomials; the polynomial kernel holds those up to \
                 its degree; the linear kernel holds linear functions only. Gaussian, Laplacian and Matérn kernels hold no \
-                polynomial and no constant: forecasts through them may be good while modes of polynomial motion cannot \
-                exist in them.
+                polynomial and no constant, and their functions fade far off: forecasts through them may be good while \
+                modes that grow or decay cannot exist in them.
 
-                By ranking, each candidate is fitted to three quarters of the training samples, and the errors of one step \
-                on the rest are compared with those of persistence; the holdout is not touched. A small error says that \
-                the space forecasts well, not that modes exist in it: that is for the Well-posedness Checker. Cost grows \
-                with candidates times samples times the square of the rank.""";
+                By ranking, each candidate is fitted to three quarters of the training samples and predicts the rest; the \
+                holdout is not touched. The best of each family are then judged on the same split: do their modes settle, \
+                predict and carry the signal? The order is by verdict first. Under one verdict the smaller error comes \
+                first, but among errors that are equal within noise (one standard error of the paired differences) the \
+                simplest kernel: smallest rank, then smallest scale. Kernels that were not judged follow those that were.
+
+                A small error alone says that the space forecasts well, not that modes exist in it. The verdict here comes \
+                from a part of the training samples at a small rank: it chooses a space, and the Well-posedness Checker has \
+                the last word. Each row also tells which modes the space can hold at all. Cost grows with candidates times \
+                samples times the square of the rank; judging takes about as long again.""";
     }
 
     @Override
@@ -108,36 +119,36 @@ public final class KernelChooserNode implements Node {
             return ranked(snapshots, settings, median, context);
         }
         KernelSpec spec = KernelSettings.fixed(settings, median);
-        KernelRanking.Row only = new KernelRanking.Row(spec, 0, Double.NaN, Double.NaN, "chosen by hand");
-        return result(KernelFamilies.create(spec), List.of(only), "The kernel is " + spec.label() + ".", List.of());
+        Kernel kernel = KernelFamilies.create(spec);
+        RankedKernel only = new RankedKernel(spec, 0, Double.NaN, Double.NaN, Optional.empty(), kernel.space().room(),
+                "chosen by hand");
+        return result(kernel, List.of(only), List.of("The kernel is " + spec.label() + "."), List.of(), List.of());
     }
 
     private static NodeResult ranked(Snapshots snapshots, Settings settings, double median, RunContext context) {
-        List<KernelRanking.Row> rows = KernelRanking.rank(snapshots, KernelSettings.candidates(settings, median),
-                new KernelRanking.Plan(settings.whole(KernelSettings.RANK)), context.progress());
-        KernelRanking.Row best = rows.get(0);
-        if (!Double.isFinite(best.holdoutError())) {
+        List<RankedKernel> rows = KernelRanking.rank(snapshots, KernelSettings.candidates(settings, median),
+                KernelSettings.plan(settings), context.progress());
+        RankedKernel best = rows.get(0);
+        if (!best.fitted()) {
             throw new FitFault("kernel ranking", "none of the " + rows.size() + " kernels could be fitted ("
                     + best.note() + ")",
                     "choose other families or scales, or give more data");
         }
-        String errors = Digits.figure(best.holdoutError()) + " of the spread against "
-                + Digits.figure(best.persistenceError())
-                + " of persistence";
-        List<Doubt> doubts = best.holdoutError() < best.persistenceError() ? List.of()
-                : List.of(new Doubt("kernel-no-better-than-persistence", "The best kernel, " + best.kernel().label()
-                        + ", predicts one step no better than persistence does: " + errors + "."));
-        return result(KernelFamilies.create(best.kernel()), rows, "Of " + rows.size() + " kernels, "
-                + best.kernel().label()
-                + " predicts best one step ahead on training samples that were left out: " + errors + ".", doubts);
+        RankingWords words = new RankingWords(rows, settings.whole(KernelSettings.STEPS),
+                new TimeUnit(snapshots.time().unit()));
+        return result(KernelFamilies.create(best.kernel()), rows, words.summary(), words.doubts(),
+                RankingFigure.of(rows, settings.whole(KernelSettings.STEPS)).stream().toList());
     }
 
-    private static NodeResult result(Kernel kernel, List<KernelRanking.Row> rows, String chosen, List<Doubt> doubts) {
-        List<String> summary = new ArrayList<>(List.of(chosen));
+    private static NodeResult result(Kernel kernel, List<RankedKernel> rows, List<String> chosen, List<Doubt> doubts,
+            List<Figure> figures) {
+        List<String> summary = new ArrayList<>(chosen);
+        if (kernel.space().room() != ModeRoom.UNKNOWN) {
+            summary.add("The space of the kernel holds " + kernel.space().room().statement() + ".");
+        }
         if (!kernel.space().sentence().isEmpty()) {
             summary.add(kernel.space().sentence());
         }
-        return new NodeResult(Map.of("kernel", kernel, "ranking", RankingTable.of(rows)), RankingTable.figures(rows),
-                summary, doubts);
+        return new NodeResult(Map.of("kernel", kernel, "ranking", RankingTable.of(rows)), figures, summary, doubts);
     }
 }

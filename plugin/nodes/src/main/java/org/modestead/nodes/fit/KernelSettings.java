@@ -9,6 +9,7 @@ import java.util.OptionalDouble;
 import java.util.OptionalLong;
 import java.util.TreeMap;
 import java.util.stream.Collectors;
+import org.modestead.engine.choose.RankingPlan;
 import org.modestead.engine.kernel.KernelFamilies;
 import org.modestead.engine.kernel.KernelFamily;
 import org.modestead.engine.kernel.KernelFamily.Parameter;
@@ -30,6 +31,10 @@ final class KernelSettings {
     static final String SCALE_MODE = "scale-mode";
     static final String CANDIDATES = "candidates";
     static final String RANK = "rank";
+    static final String STEPS = "steps-ahead";
+
+    private static final String JUDGE = "judge";
+    private static final String JUDGED = "judged-per-family";
 
     private static final String FACTOR = "scale-factor";
     private static final String MULTIPLES = "scale-multiples";
@@ -45,10 +50,11 @@ final class KernelSettings {
     static List<Setting> declared() {
         List<Setting> all = new ArrayList<>();
         all.add(new Setting.Choice(new Common(CHOOSE, "Choose", "Kernel", "Whether the kernel is given here or the best"
-                + " of several on held-out data is taken."), List.of(
+                + " of several, by verdict and on held-out data, is taken."), List.of(
                 new Option(FAMILY, "By family", "One family with the parameters given here."),
-                new Option(RANK, "By ranking", "Several kernels are fitted, and the one with the smallest one-step"
-                        + " error on data kept away from the fit is taken.")), FAMILY));
+                new Option(RANK, "By ranking", "Several kernels are fitted and compared on training data kept"
+                        + " away from those fits: first by whether modes exist in their space, then by the error of"
+                        + " predictions.")), FAMILY));
         all.add(new Setting.Choice(new Common(FAMILY, "Family", "Kernel", "The functions through which the signal is"
                 + " looked at. What modes can exist depends on it.").when(CHOOSE, FAMILY),
                 KernelFamilies.all().stream().map(KernelSettings::option).toList(), "exponential"));
@@ -111,8 +117,23 @@ final class KernelSettings {
                 new Setting.Numbers(new Common(DEGREES, "Degrees", group, "Families with a degree are tried at these.")
                         .when(CHOOSE, RANK), "", 1, 20, List.of(2.0, 3.0)),
                 new Setting.Whole(new Common(RANK, "Largest rank", group, "Largest number of functions tried for each"
-                        + " candidate; the one that predicts best counts.").when(CHOOSE, RANK), "functions", 1, 10_000,
-                        OptionalLong.of(20)));
+                        + " candidate; the smallest one that predicts as well as the best within noise counts.")
+                        .when(CHOOSE, RANK), "functions", 1, 10_000,
+                        OptionalLong.of(20)),
+                new Setting.Whole(new Common(STEPS, "Steps ahead", group, "Sampling steps over which the compared"
+                        + " predictions reach. More steps tell kernels apart that all predict one step well.")
+                        .when(CHOOSE, RANK), "steps", 1, 10_000, OptionalLong.of(1)),
+                new Setting.Flag(new Common(JUDGE, "Judge candidates", group, "Whether the best kernels of each family"
+                        + " are also judged, so that a space in which modes exist comes before one that only predicts"
+                        + " well. Switch it off to save time.").when(CHOOSE, RANK), true),
+                new Setting.Whole(new Common(JUDGED, "Judged of each family", group, "How many kernels of each family,"
+                        + " those that predict best, are judged; the others follow them in the ranking.")
+                        .when(JUDGE, "true"), "kernels", 1, 1000, OptionalLong.of(2)));
+    }
+
+    /** Returns how candidates are compared. */
+    static RankingPlan plan(Settings settings) {
+        return new RankingPlan(settings.whole(RANK), settings.whole(STEPS), settings.flag(JUDGE) ? settings.whole(JUDGED) : 0);
     }
 
     /** Returns whether the kernel's length scale is to be taken from the data. */

@@ -15,7 +15,8 @@ record LayerStyles(Figure figure, List<String> names) {
 
     LayerStyles(Figure figure) {
         this(figure, figure.layers().stream().filter(layer -> !(layer instanceof Figure.Rule)
-                && !(layer instanceof Figure.Band))
+                && !(layer instanceof Figure.Band) && !(layer instanceof Figure.Backdrop)
+                && !(figure.kind() == Figure.Kind.MARKS && layer instanceof Figure.Points))
                 .map(LayerStyles::key).distinct().toList());
     }
 
@@ -32,7 +33,10 @@ record LayerStyles(Figure figure, List<String> names) {
             return colour(line, line.emphasis());
         }
         if (layer instanceof Figure.Points points) {
-            return colour(points, points.emphasis());
+            return figure.kind() == Figure.Kind.MARKS ? ink(points.emphasis()) : colour(points, points.emphasis());
+        }
+        if (layer instanceof Figure.Backdrop) {
+            return Palette.CONTEXT;
         }
         if (layer instanceof Figure.Band) {
             return Palette.band(strongColour());
@@ -48,6 +52,15 @@ record LayerStyles(Figure figure, List<String> names) {
             return emphasis == Figure.Emphasis.STRONG ? strongColour() : Palette.CONTEXT;
         }
         return Palette.line(index(layer));
+    }
+
+    /** Where shapes tell, colour tells nothing but how much a mark matters. */
+    private static Color ink(Figure.Emphasis emphasis) {
+        return switch (emphasis) {
+            case STRONG -> Palette.INK;
+            case NORMAL -> Palette.QUIET_INK;
+            case FAINT -> Palette.FAINT;
+        };
     }
 
     private Color strongColour() {
@@ -70,9 +83,15 @@ record LayerStyles(Figure figure, List<String> names) {
             case NORMAL -> overTimeWithStrongLine() ? 1.1f : 1.5f;
             case FAINT -> 1f;
         };
-        float[] dash = figure.kind() == Figure.Kind.CURVES ? DASHES[index(line) % DASHES.length] : DASHES[0];
+        boolean dashed = figure.kind() == Figure.Kind.CURVES || figure.kind() == Figure.Kind.MARKS;
+        float[] dash = dashed ? DASHES[index(line) % DASHES.length] : DASHES[0];
         return dash.length == 0 ? new BasicStroke(width, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND)
                 : new BasicStroke(width, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 10, dash, 0);
+    }
+
+    /** The stroke of a line behind all else. */
+    static BasicStroke backdrop() {
+        return new BasicStroke(1.3f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND);
     }
 
     Figure.Mark curveMark(Figure.Line line) {

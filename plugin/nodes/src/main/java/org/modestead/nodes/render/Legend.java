@@ -83,6 +83,9 @@ record Legend(List<List<Entry>> rows, LayerStyles styles, boolean marked) {
             if (marked) {
                 Marks.of(styles.curveMark(line)).paint(graphics, centre, middle, Marks.SIZE);
             }
+        } else if (layer instanceof Figure.Backdrop) {
+            graphics.setStroke(LayerStyles.backdrop());
+            graphics.draw(new Line2D.Double(left, middle, left + SIGN, middle));
         } else if (layer instanceof Figure.Points points) {
             Marks.of(points.mark()).paint(graphics, left + SIGN - Marks.SIZE / 2.0 - 2, middle, Marks.SIZE);
         } else {

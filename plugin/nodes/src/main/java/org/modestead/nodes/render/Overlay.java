@@ -61,7 +61,10 @@ record Overlay(Figure figure, Range x, Range y, DoubleUnaryOperator screenX, Dou
     private void labels(Graphics2D graphics, Figure.Points points, List<Rectangle2D> taken) {
         for (int i = 0; i < points.x().length; i++) {
             if (Double.isFinite(points.x()[i]) && Range.drawable(points.y()[i], figure.y())) {
-                text(graphics, points.labels().get(i), left(points.x()[i]) + GAP, top(points.y()[i]) - 5, taken);
+                String label = points.labels().get(i);
+                double at = left(points.x()[i]);
+                boolean room = at + GAP + width(label) < left(x.high());
+                text(graphics, label, room ? at + GAP : at - GAP - width(label), top(points.y()[i]) - 5, taken);
             }
         }
     }

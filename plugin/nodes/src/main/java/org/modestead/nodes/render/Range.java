@@ -24,6 +24,12 @@ record Range(double low, double high) {
         return covering(figure.layers().stream().flatMapToDouble(Range::ys), figure.y(), MARGIN);
     }
 
+    /** The range of the right axis. */
+    static Range right(Figure figure, Figure.Axis axis) {
+        return covering(figure.layers().stream().filter(Figure.Backdrop.class::isInstance)
+                .flatMapToDouble(layer -> DoubleStream.of(((Figure.Backdrop) layer).y())), axis, MARGIN);
+    }
+
     private static Range covering(DoubleStream values, Figure.Axis axis, double margin) {
         double[] drawn = values.filter(v -> drawable(v, axis)).sorted().toArray();
         if (drawn.length == 0) {
@@ -63,6 +69,9 @@ record Range(double low, double high) {
         }
         if (layer instanceof Figure.Band band) {
             return DoubleStream.of(band.x());
+        }
+        if (layer instanceof Figure.Backdrop backdrop) {
+            return DoubleStream.of(backdrop.x());
         }
         return layer instanceof Figure.Rule rule && rule.vertical() ? DoubleStream.of(rule.at()) : DoubleStream.empty();
     }

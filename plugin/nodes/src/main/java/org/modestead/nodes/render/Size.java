@@ -13,7 +13,7 @@ record Size(int width, int height) {
     static Size of(Figure figure) {
         return switch (figure.kind()) {
             case TIME_SERIES -> new Size(960, 380);
-            case COMPLEX_PLANE -> new Size(720, 500);
+            case COMPLEX_PLANE, MARKS -> new Size(720, 500);
             case CURVES, SHAPES, BARS -> new Size(500, 330);
         };
     }

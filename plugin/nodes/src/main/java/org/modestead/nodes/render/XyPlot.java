@@ -8,12 +8,14 @@ import java.util.List;
 import org.knowm.xchart.XYChart;
 import org.knowm.xchart.XYSeries;
 import org.knowm.xchart.XYSeries.XYSeriesRenderStyle;
+import org.knowm.xchart.style.Styler;
 import org.knowm.xchart.style.markers.SeriesMarkers;
 import org.modestead.nodes.figure.Figure;
 
 /** Draws a figure with numbers or times on both axes. */
 final class XyPlot {
     private static final int MARKED_UP_TO = 60;
+    private static final int RIGHT = 1;
     private static final Color CLEAR = new Color(0, 0, 0, 0);
 
     private final Figure figure;
@@ -52,10 +54,33 @@ final class XyPlot {
         chart.setTitle(figure.title());
         chart.setXAxisTitle(figure.x().label());
         chart.setYAxisTitle(figure.y().label());
-        figure.layers().forEach(this::add);
+        figure.right().ifPresent(this::rightAxis);
+        figure.layers().stream().filter(Figure.Backdrop.class::isInstance).forEach(this::add);
+        figure.layers().stream().filter(layer -> !(layer instanceof Figure.Backdrop)).forEach(this::add);
         if (chart.getSeriesCollection().isEmpty()) {
             blank(x, y);
         }
+    }
+
+    private void rightAxis(Figure.Axis axis) {
+        Range range = Range.right(figure, axis);
+        chart.getStyler().setYAxisMin(RIGHT, range.low()).setYAxisMax(RIGHT, range.high());
+        chart.getStyler().setYAxisGroupPosition(RIGHT, Styler.YAxisPosition.Right);
+        chart.setYAxisGroupTitle(RIGHT, axis.label());
+    }
+
+    private void backdrop(Figure.Backdrop backdrop) {
+        Figure.Axis axis = figure.right().orElseThrow(() -> new IllegalArgumentException("figure " + figure.id()
+                + ": a backdrop needs a right axis"));
+        double[] y = Arrays.stream(backdrop.y()).map(v -> Range.drawable(v, axis) ? v : Double.NaN).toArray();
+        if (Arrays.stream(y).allMatch(Double::isNaN)) {
+            return;
+        }
+        XYSeries series = series(backdrop.x(), y);
+        series.setYAxisGroup(RIGHT);
+        series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Line).setLineColor(styles.colour(backdrop))
+                .setLineStyle(LayerStyles.backdrop());
+        series.setMarker(SeriesMarkers.NONE);
     }
 
     private void blank(Range x, Range y) {
@@ -70,6 +95,8 @@ final class XyPlot {
             points(points);
         } else if (layer instanceof Figure.Band band) {
             band(band);
+        } else if (layer instanceof Figure.Backdrop backdrop) {
+            backdrop(backdrop);
         } else if (layer instanceof Figure.Bars) {
             throw new IllegalArgumentException("figure " + figure.id() + ": bars need a category axis");
         }

@@ -11,6 +11,9 @@ final class DrawnData {
         if (layer instanceof Figure.Line line) {
             return Arrays.toString(line.x()) + Arrays.toString(line.y());
         }
+        if (layer instanceof Figure.Backdrop backdrop) {
+            return Arrays.toString(backdrop.x()) + Arrays.toString(backdrop.y());
+        }
         if (layer instanceof Figure.Points points) {
             return Arrays.toString(points.x()) + Arrays.toString(points.y());
         }

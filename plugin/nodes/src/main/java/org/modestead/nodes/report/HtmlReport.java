@@ -95,7 +95,7 @@ public final class HtmlReport {
     private static String width(Figure figure) {
         return switch (figure.kind()) {
             case TIME_SERIES -> "wide";
-            case COMPLEX_PLANE -> "middle";
+            case COMPLEX_PLANE, MARKS -> "middle";
             case CURVES, SHAPES, BARS -> "small";
         };
     }

@@ -8,8 +8,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.time.LocalDate;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
+import org.modestead.engine.choose.KernelVerdict;
+import org.modestead.engine.choose.RankedKernel;
+import org.modestead.engine.kernel.KernelSpec;
+import org.modestead.engine.kernel.ModeRoom;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
@@ -39,6 +44,30 @@ class FigureFactoriesTest {
                 .map(Figure.Points.class::cast).toList();
         assertEquals(points.size(), points.stream().map(Figure.Points::mark).distinct().count());
         assertEquals(Grade.values().length, Arrays.stream(Grade.values()).map(VerdictMarks::mark).distinct().count());
+    }
+
+    private static RankedKernel kernel(String family, Map<String, Double> parameters, double error, Optional<Grade> grade) {
+        return new RankedKernel(new KernelSpec(family, parameters), 3, error, 0.5,
+                grade.map(given -> new KernelVerdict(given, 0.9, 0.1, 0.01, Optional.empty(), true, "")), ModeRoom.AFFINE, "");
+    }
+
+    @Test
+    void theRankingIsALineAFamilyWithTheChosenKernelAndEachVerdictInWords() {
+        List<RankedKernel> rows = List.of(kernel("linear", Map.of(), 0.1, Optional.of(Grade.STANDS)),
+                kernel("gaussian", Map.of("scale", 2.0), 0.05, Optional.of(Grade.DRIFTS)),
+                kernel("gaussian", Map.of("scale", 1.0), 0.2, Optional.empty()));
+        Figure figure = RankingFigure.of(rows, 1).orElseThrow();
+        List<Figure.Line> lines = figure.layers().stream().filter(Figure.Line.class::isInstance).map(Figure.Line.class::cast).toList();
+        assertEquals(List.of("Linear", "Gaussian"), lines.stream().map(Figure.Line::name).toList());
+        assertArrayEquals(new double[] {0.1, 0.1}, lines.get(0).y(), "no scale: a level line");
+        assertArrayEquals(new double[] {1, 2}, lines.get(1).x(), "by rising scale");
+        List<Figure.Points> points = figure.layers().stream().filter(Figure.Points.class::isInstance).map(Figure.Points.class::cast).toList();
+        assertEquals(List.of("stands", "drifts", "not judged"), points.stream().map(Figure.Points::name).toList());
+        assertEquals("chosen: Linear, stands", points.get(0).labels().get(0));
+        assertEquals(VerdictMarks.mark(Grade.DRIFTS), points.get(1).mark());
+        assertTrue(figure.x().logarithmic());
+        assertEquals(Figure.Kind.BARS, RankingFigure.of(List.of(rows.get(0), rows.get(0)), 1).orElseThrow().kind(), "no scale at all");
+        assertTrue(RankingFigure.of(rows.subList(0, 1), 1).isEmpty());
     }
 
     @Test

@@ -19,11 +19,15 @@ import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.contract.SettingFault;
 import org.modestead.nodes.testing.Ringing;
 import org.modestead.nodes.testing.Steps;
 
 class FitNodesTest {
+
+    // double precision on noise-free samples
+    private static final double CLEAN = 1e-9;
 
     private static final Object SNAPSHOTS = Steps.run("snapshot-builder", Map.of("table", Ringing.numbers(5)),
             Map.of("time-column", "time", "run-column", "run", "holdout", "run-share")).outputs().get("snapshots");
@@ -71,8 +75,8 @@ class FitNodesTest {
     }
 
     @Test
-    void rankingPutsTheSmallestErrorFirstAndHandsOnItsKernel() {
-        NodeResult ranked = choose(Map.of("choose", "rank", "candidates", List.of("gaussian", "linear"),
+    void rankingWithoutVerdictsPutsTheSmallestErrorFirstAndHandsOnItsKernel() {
+        NodeResult ranked = choose(Map.of("choose", "rank", "judge", false, "candidates", List.of("gaussian", "linear"),
                 "scale-multiples", List.of(1, 4)));
         List<Double> errors = IntStream.range(0, 3).mapToObj(i -> Steps.number(ranked, "ranking", "holdout_error",
                 i)).toList();
@@ -83,6 +87,36 @@ class FitNodesTest {
         assertEquals("linear()", Steps.column(ranked, "ranking", "kernel").get(0), "ringing is linear motion");
         assertEquals("linear", ((Kernel) ranked.outputs().get("kernel")).spec().family());
         assertEquals("kernel-ranking", ranked.figures().get(0).id());
+        assertEquals(List.of("", "", ""), Steps.column(ranked, "ranking", "verdict"));
+    }
+
+    @Test
+    void rankingByVerdictTellsEachKernelsVerdictAndWhatItsSpaceHolds() {
+        NodeResult ranked = choose(Map.of("choose", "rank", "candidates", List.of("gaussian", "linear"),
+                "scale-multiples", List.of(1, 4), "judged-per-family", 1));
+        assertEquals(List.of("linear", "gaussian", "gaussian"), Steps.column(ranked, "ranking", "kernel").stream()
+                .map(label -> label.substring(0, label.indexOf('('))).toList());
+        List<String> verdicts = Steps.column(ranked, "ranking", "verdict");
+        // x' = Ax in the space of linear functions, whose two modes take in all there is
+        assertTrue(List.of("stands", "settles").contains(verdicts.get(0)), verdicts.toString());
+        assertEquals("", verdicts.get(2), "one of each family is judged");
+        assertTrue(Steps.number(ranked, "ranking", "captured_share", 0) > 0.999);
+        assertTrue(Steps.number(ranked, "ranking", "holdout_residual", 0) < CLEAN);
+        List<String> holds = Steps.column(ranked, "ranking", "holds");
+        assertTrue(holds.get(0).startsWith("modes of linear motion about zero only"), holds.get(0));
+        assertTrue(holds.get(1).startsWith("no mode that grows or decays"), holds.get(1));
+        assertTrue(ranked.summary().get(0).startsWith("Of 3 kernels, linear() comes first"), ranked.summary().get(0));
+        assertTrue(ranked.summary().get(1).contains("modes of linear motion about zero"), ranked.summary().toString());
+        assertEquals(Figure.Kind.MARKS, ranked.figures().get(0).kind());
+    }
+
+    @Test
+    void aSpaceThatCannotHoldTheModeFoundIsDoubtedByName() {
+        // ringing down is decay, which no function of a fading space can follow
+        NodeResult ranked = choose(Map.of("choose", "rank", "candidates", List.of("gaussian"), "scale-multiples", List.of(4)));
+        String told = ranked.doubts().stream().filter(doubt -> doubt.code().equals("no-room-for-the-mode")).findFirst()
+                .orElseThrow().sentence();
+        assertTrue(told.contains("None of the spaces compared has room for it") && told.contains("1.50 cycles"), told);
     }
 
     @Test

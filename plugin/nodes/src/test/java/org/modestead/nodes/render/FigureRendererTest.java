@@ -50,6 +50,7 @@ class FigureRendererTest {
         figures.addAll(ForecastFigures.figures(snapshots, ReportFixture.forecast(snapshots), 1));
         figures.add(ScoreFigures.figure(ReportFixture.forecast(snapshots).scores()));
         figures.add(curves(Figure.Axis.log("nothing"), List.of()));
+        figures.add(marks());
         return figures;
     }
 
@@ -92,6 +93,23 @@ class FigureRendererTest {
         assertEquals(2 * once.getWidth(), twice.getWidth());
         assertEquals(2 * once.getHeight(), twice.getHeight());
         assertThrows(IllegalArgumentException.class, () -> FigureRenderer.png(figure, 0));
+    }
+
+    /** Marks over a backdrop with an axis of its own. */
+    private static Figure marks() {
+        double[] x = {0, 1, 2};
+        return new Figure("marks", Figure.Kind.MARKS, "Marks", "What they show.", Figure.Axis.linear("x"), Figure.Axis.linear("y"),
+                Optional.of(Figure.Axis.linear("behind")), List.of(new Figure.Points("seen", "", x, x, List.of("", "a label at the edge", ""),
+                Figure.Emphasis.STRONG, Figure.Mark.TRIANGLE), new Figure.Backdrop("power", "", x, new double[] {-300, Double.NaN, 900})));
+    }
+
+    @Test
+    void aBackdropHasItsOwnScaleAndNeedsItsAxis() {
+        Figure figure = marks();
+        assertEquals(2.1, Range.y(figure).high(), 1e-12, "the marks alone scale the left axis");
+        assertEquals(960, Range.right(figure, figure.right().orElseThrow()).high(), 1e-12);
+        Figure without = new Figure(figure.id(), figure.kind(), "Marks", "What.", figure.x(), figure.y(), figure.layers());
+        assertThrows(IllegalArgumentException.class, () -> FigureRenderer.svg(without));
     }
 
     @Test
