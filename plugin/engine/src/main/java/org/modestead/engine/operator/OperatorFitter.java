@@ -14,6 +14,7 @@ public final class OperatorFitter {
 
     private static final int LARGEST_RANK = 400;
     private static final double THIN = 1e-6;
+    private static final double STRAINED = 0.2;
     private static final double LITTLE_FREE = 1e-3;
 
     private OperatorFitter() {}
@@ -79,6 +80,10 @@ public final class OperatorFitter {
                 String.format(Locale.ROOT, "The inputs of the moment explain all but %.2g of the states' mean square, as under feedback or in a"
                         + " steady state: free motion hardly shows, so its rates rest on little. Vary inputs independently of the state.",
                         freeShare(full, effect)))));
+        OrthonormalCompression chosen = full.leading(rank);
+        chosen.imposed().filter(imposing -> imposing.change(chosen.action()) > STRAINED).ifPresent(imposing -> doubts.add(new Doubt(
+                "structure-strained", String.format(Locale.ROOT, "Making the operator %s changes it by %.2g of its size: the data hardly agree"
+                        + " with that.", imposing.structure().words(), imposing.change(chosen.action())))));
         if (full.evolution() instanceof Evolution.Generator generator && generator.contraction() < 1) {
             doubts.add(new Doubt("scaled-generator", String.format(Locale.ROOT,
                     "Eigenvalues are those of the generator scaled by %.4g; they tend to rates only as the contraction tends to 1.",

@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.FitFault;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.basis.JoinedFunctions;
 import org.modestead.engine.linalg.Matrices;
@@ -15,7 +16,7 @@ import org.modestead.engine.recording.StateRun;
  *
  * @param basis functions b_1..b_p from which the q are combined
  * @param map p x R: {@code q_j = Σ_i map_ij b_i}
- * @param action R x R: {@code <A q_j, q_i>}, after ridge and noise correction
+ * @param action R x R: {@code <A q_j, q_i>}, after ridge, noise correction and structure
  * @param second R x R: {@code <A q_j, A q_i>} in the data inner product, {@code <A* q_j, A* q_i>} in the kernel space
  * @param observable R x N: {@code <g_k, q_i>} for the full-state observable g
  * @param singular R singular values of the whitening, falling, positive
@@ -25,6 +26,7 @@ import org.modestead.engine.recording.StateRun;
  * @param noisy what was measured, where the action is corrected for noise
  * @param inputs what known inputs add, where they are separated; the q are then orthonormal less what inputs explain of them, and
  *     read state and inputs
+ * @param imposed a structure that the action was given, last of all, with the action before that
  */
 public record OrthonormalCompression(
         FunctionBasis basis,
@@ -37,19 +39,20 @@ public record OrthonormalCompression(
         InnerProduct innerProduct,
         Evolution evolution,
         Optional<NoisyStep> noisy,
-        Optional<InputEffect> inputs) {
+        Optional<InputEffect> inputs,
+        Optional<ImposedStructure> imposed) {
 
     /** Without a noise correction and without inputs. */
     public OrthonormalCompression(FunctionBasis basis, DMatrixRMaj map, DMatrixRMaj action, DMatrixRMaj second,
             DMatrixRMaj observable, double[] singular, int snapshots, InnerProduct innerProduct, Evolution evolution) {
         this(basis, map, action, second, observable, singular, snapshots, innerProduct, evolution, Optional.empty(),
-                Optional.empty());
+                Optional.empty(), Optional.empty());
     }
 
     /** The same functions with the action corrected for noise. */
     OrthonormalCompression corrected(NoisyStep step) {
         return new OrthonormalCompression(basis, map, step.corrected(singular), second, observable, singular, snapshots,
-                innerProduct, evolution, Optional.of(step), inputs);
+                innerProduct, evolution, Optional.of(step), inputs, Optional.empty());
     }
 
     /**
@@ -61,12 +64,30 @@ public record OrthonormalCompression(
         FunctionBasis joined = new JoinedFunctions(observable.numCols, basis, effect.terms());
         DMatrixRMaj explained = Matrices.scaled(Matrices.product(effect.map(), effect.now()), -1);
         return new OrthonormalCompression(joined, CommonOps_DDRM.concatRowsMulti(map, explained), action, second, observable, singular,
-                snapshots, innerProduct, evolution, noisy, Optional.of(effect));
+                snapshots, innerProduct, evolution, noisy, Optional.of(effect), Optional.empty());
     }
 
-    /** Returns the action as the data give it, before any noise correction. */
-    DMatrixRMaj measured() {
-        return noisy.map(NoisyStep::measured).orElse(action);
+    /**
+     * The same functions with the nearest action that has a structure.
+     *
+     * @throws FitFault if an operator of this kind cannot have it, or if it meets a noise correction that it does not leave room for
+     */
+    OrthonormalCompression constrained(Structure structure) {
+        if (!structure.suits(evolution)) {
+            throw StructuredEstimator.refused(structure, evolution);
+        }
+        if (noisy.isPresent() && structure.orthogonal()) {
+            throw new FitFault("structure", "a noise correction beside an operator made " + structure.words(),
+                    "choose one of the two: the structure takes away the feigned damping, too");
+        }
+        ImposedStructure imposing = new ImposedStructure(structure, action);
+        return new OrthonormalCompression(basis, map, imposing.action(singular, innerProduct, evolution), second, observable, singular,
+                snapshots, innerProduct, evolution, noisy, inputs, Optional.of(imposing));
+    }
+
+    /** Returns the action as the data give it, before any noise correction and without any structure imposed. */
+    public DMatrixRMaj measured() {
+        return noisy.map(NoisyStep::measured).orElseGet(() -> imposed.map(ImposedStructure::free).orElse(action));
     }
 
     /** Returns R. */
@@ -75,7 +96,7 @@ public record OrthonormalCompression(
     }
 
     /**
-     * Returns the compression onto the leading r functions; a noise correction is made anew for them.
+     * Returns the compression onto the leading r functions; a noise correction is made and a structure imposed anew for them.
      *
      * @param r in [1, R]
      */
@@ -87,10 +108,11 @@ public record OrthonormalCompression(
             throw new IllegalArgumentException("rank " + r + " is not in [1, " + rank() + "]");
         }
         OrthonormalCompression head = new OrthonormalCompression(basis, Matrices.block(map, 0, map.numRows, 0, r),
-                Matrices.block(action, 0, r, 0, r), Matrices.block(second, 0, r, 0, r),
+                Matrices.block(imposed.map(ImposedStructure::free).orElse(action), 0, r, 0, r), Matrices.block(second, 0, r, 0, r),
                 Matrices.block(observable, 0, r, 0, observable.numCols), Arrays.copyOf(singular, r), snapshots, innerProduct,
-                evolution, Optional.empty(), inputs.map(effect -> effect.leading(r)));
-        return noisy.map(step -> head.corrected(step.leading(r))).orElse(head);
+                evolution, Optional.empty(), inputs.map(effect -> effect.leading(r)), Optional.empty());
+        OrthonormalCompression free = noisy.map(step -> head.corrected(step.leading(r))).orElse(head);
+        return imposed.map(imposing -> free.constrained(imposing.structure())).orElse(free);
     }
 
     /** Returns the number of functions of the state that the q are combined from. */

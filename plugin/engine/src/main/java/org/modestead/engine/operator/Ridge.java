@@ -17,7 +17,7 @@ public final class Ridge {
      * @param compression without one
      * @param ridge ρ relative to the largest squared singular value, at least 0
      * @return the same compression for 0
-     * @throws FitFault if the ridge is negative or not finite, or meets a noise correction
+     * @throws FitFault if the ridge is negative or not finite, or meets a noise correction or a structure
      */
     public static OrthonormalCompression apply(OrthonormalCompression compression, double ridge) {
         if (!(ridge >= 0) || Double.isInfinite(ridge)) {
@@ -30,13 +30,17 @@ public final class Ridge {
             throw new FitFault("ridge", "a ridge of " + ridge + " shrinks what the noise correction restores",
                     "set the ridge to 0, or fit without noise correction");
         }
+        if (compression.imposed().isPresent()) {
+            throw new FitFault("ridge", "a ridge of " + ridge + " beside an operator made " + compression.imposed().get().structure().words(),
+                    "set the ridge to 0: the structure steadies the fit");
+        }
         DMatrixRMaj action = compression.action().copy();
         for (int i = 0; i < compression.rank(); i++) {
             scaleRow(action, i, shrinkage(compression.singular(), i, ridge));
         }
         return new OrthonormalCompression(compression.basis(), compression.map(), action, compression.second(), compression.observable(),
                 compression.singular(), compression.snapshots(), compression.innerProduct(), compression.evolution(),
-                compression.noisy(), compression.inputs());
+                compression.noisy(), compression.inputs(), compression.imposed());
     }
 
     /**

@@ -25,8 +25,8 @@ public final class NormalityDefect implements Check {
         DMatrixRMaj action = evidence.fitted().compression().action();
         double defect = of(action);
         return List.of(new Finding(0, id(), defect, Double.NaN, true, String.format(Locale.ROOT,
-                "The compressed operator fails to commute with its adjoint by %.3g of its squared size; departure from normality %.3g.",
-                defect, NormalityDeparture.of(action))));
+                "The compressed operator fails to commute with its adjoint by %.3g of its squared size; departure from normality %.3g.%s",
+                defect, NormalityDeparture.of(action), Imposed.sentence(evidence.operator(), NormalityDefect::of))));
     }
 
     /** Returns the relative commutator norm; 0 for the zero matrix. */

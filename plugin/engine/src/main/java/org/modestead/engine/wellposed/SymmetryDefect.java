@@ -23,8 +23,9 @@ public final class SymmetryDefect implements Check {
     public List<Finding> examine(Evidence evidence, Progress progress) {
         double defect = of(evidence.operator().chosen().action());
         return List.of(new Finding(0, id(), defect, Double.NaN, true, String.format(Locale.ROOT,
-                "The compressed operator differs from its adjoint by %.3g of its size%s.", defect,
-                defect < 1e-6 ? ": it is self-adjoint to rounding, so its eigenfunctions are orthogonal" : "")));
+                "The compressed operator differs from its adjoint by %.3g of its size%s.%s", defect,
+                defect < 1e-6 ? ": it is self-adjoint to rounding, so its eigenfunctions are orthogonal" : "",
+                Imposed.sentence(evidence.operator(), SymmetryDefect::of))));
     }
 
     /** Returns the defect of a square matrix; 0 for the zero matrix. */

@@ -24,13 +24,17 @@ public final class UnitarityDefect implements Check {
         if (!(evidence.operator().evolution() instanceof Evolution.StepMap)) {
             return List.of();
         }
-        DMatrixRMaj action = evidence.operator().chosen().action();
+        double defect = of(evidence.operator().chosen().action());
+        return List.of(new Finding(0, id(), defect, Double.NaN, true, String.format(Locale.ROOT,
+                "The step map changes norms by %.3g (root mean square over directions); 0 would be motion that neither grows nor fades.%s",
+                defect, Imposed.sentence(evidence.operator(), UnitarityDefect::of))));
+    }
+
+    private static double of(DMatrixRMaj action) {
         DMatrixRMaj square = Matrices.transposeProduct(action, action);
         for (int i = 0; i < square.numRows; i++) {
             square.add(i, i, -1);
         }
-        double defect = NormOps_DDRM.normF(square) / Math.sqrt(square.numRows);
-        return List.of(new Finding(0, id(), defect, Double.NaN, true, String.format(Locale.ROOT,
-                "The step map changes norms by %.3g (root mean square over directions); 0 would be motion that neither grows nor fades.", defect)));
+        return NormOps_DDRM.normF(square) / Math.sqrt(square.numRows);
     }
 }

@@ -16,6 +16,8 @@ import org.modestead.engine.operator.NoiseCorrection;
 import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.operator.SegmentPlan;
+import org.modestead.engine.operator.Structure;
+import org.modestead.engine.operator.StructuredEstimator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Setting.Common;
@@ -30,6 +32,8 @@ final class FitSettings {
     static final String ESTIMATOR = "estimator";
     static final String NOISE_CORRECTION = "noise-correction";
     static final String INPUTS = "inputs";
+    static final String STRUCTURE = "structure";
+    static final String NONE = "none";
     static final String DICTIONARY = "dictionary";
     static final String PERIODS = "periods";
     static final String RANK_RULE = "rank-rule";
@@ -47,6 +51,7 @@ final class FitSettings {
         all.add(estimator());
         all.add(noiseCorrection());
         all.add(inputs());
+        all.add(structure());
         all.addAll(dictionarySettings());
         all.addAll(kernelSettings());
         all.addAll(rankSettings());
@@ -98,6 +103,24 @@ final class FitSettings {
                 new Option("leave-in", "Leave in", "Inputs are not told to the fit: what they cause counts as free motion"
                         + " and may appear as modes.")),
                 "held");
+    }
+
+    private static Setting structure() {
+        return new Setting.Choice(new Common(STRUCTURE, "Structure", "Operator", "What is known of the motion beforehand and"
+                + " imposed on the operator, at every rank: the nearest operator that has it. Sizes and angles are those of"
+                + " the average over the training data, or of the kernel's space. Orthogonality that is imposed is no evidence: a"
+                + " mode that would stand is then said to settle. Needs a ridge of 0."), List.of(
+                new Option(NONE, "None", "The operator is as the data give it."),
+                new Option("self-adjoint", "Self-adjoint", "Reversible motion such as diffusion: rates are real,"
+                        + " eigenfunctions orthogonal."),
+                new Option("skew", "Skew-adjoint", "For the generator: motion that keeps averages, rates are purely"
+                        + " oscillating."),
+                new Option("unitary", "Unitary", "For step maps: motion that keeps averages, nothing grows or fades. Runs"
+                        + " must be long enough, or many enough, that their average is the lasting one. It takes feigned damping"
+                        + " away; frequencies are found about as well as without it."),
+                new Option("stable", "Stable", "Nothing grows: growing parts are brought to the edge of stability at the"
+                        + " least change of the operator.")),
+                NONE);
     }
 
     private static List<Setting> dictionarySettings() {
@@ -171,6 +194,21 @@ final class FitSettings {
      * @throws SettingFault if it needs a kernel and none is connected
      */
     static Estimator estimator(Settings settings, Optional<Kernel> kernel) {
+        Estimator free = free(settings, kernel);
+        return structure(settings).<Estimator>map(structure -> new StructuredEstimator(free, structure)).orElse(free);
+    }
+
+    private static Optional<Structure> structure(Settings settings) {
+        return switch (settings.text(STRUCTURE)) {
+            case "self-adjoint" -> Optional.of(Structure.SELF_ADJOINT);
+            case "skew" -> Optional.of(Structure.SKEW);
+            case "unitary" -> Optional.of(Structure.UNITARY);
+            case "stable" -> Optional.of(Structure.STABLE);
+            default -> Optional.empty();
+        };
+    }
+
+    private static Estimator free(Settings settings, Optional<Kernel> kernel) {
         return switch (settings.text(ESTIMATOR)) {
             case "linear" -> new LinearEstimator(1, correction(settings), inputUse(settings));
             case DICTIONARY -> new DictionaryEstimator(dictionary(settings), 1, inputUse(settings));
@@ -240,6 +278,30 @@ final class FitSettings {
         if (corrected && settings.number(RIDGE) > 0) {
             problems.add(new SettingProblem(RIDGE, "a ridge beside the noise correction " + settings.text(NOISE_CORRECTION)
                     + ", which it would undo", "set the ridge to 0, or the noise correction to none"));
+        }
+        structure(settings).ifPresent(structure -> problems.addAll(problems(settings, structure, corrected)));
+        return problems;
+    }
+
+    private static List<SettingProblem> problems(Settings settings, Structure structure, boolean corrected) {
+        List<SettingProblem> problems = new ArrayList<>();
+        String estimator = settings.text(ESTIMATOR);
+        boolean generator = List.of(GENERATORS).contains(estimator);
+        if (structure == Structure.SKEW && !estimator.equals("generator")) {
+            problems.add(new SettingProblem(STRUCTURE, "the operator " + estimator + " to be made skew-adjoint", generator
+                    ? "fit the plain generator" : "choose unitary for a step map, or fit the generator"));
+        }
+        if (structure == Structure.UNITARY && generator) {
+            problems.add(new SettingProblem(STRUCTURE, "the operator " + estimator + " to be made unitary",
+                    "choose skew-adjoint for the generator, or fit a step map"));
+        }
+        if (corrected && structure.orthogonal()) {
+            problems.add(new SettingProblem(STRUCTURE, "the noise correction " + settings.text(NOISE_CORRECTION)
+                    + " beside an operator made " + structure.words(), "choose one of the two"));
+        }
+        if (settings.number(RIDGE) > 0) {
+            problems.add(new SettingProblem(RIDGE, "a ridge beside an operator made " + structure.words(),
+                    "set the ridge to 0: the structure steadies the fit"));
         }
         return problems;
     }

@@ -5,6 +5,7 @@ import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.InputUse;
+import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.nodes.contract.SettingText;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
@@ -32,6 +33,7 @@ final class FitTable {
                 : "kernel space");
         rows.row("functions", operator.compression().basis().describe());
         rows.row("inputs", inputs(operator));
+        rows.row("structure", structure(operator.chosen()));
         rows.row("snapshot pairs or pieces", Integer.toString(operator.compression().snapshots()));
         rows.row("largest rank", Integer.toString(operator.compression().rank()));
         rows.row("rank", Integer.toString(operator.rank()));
@@ -39,6 +41,11 @@ final class FitTable {
         rows.row("condition", Digits.cell(singular[0] / singular[operator.rank() - 1]));
         rows.row("ridge", SettingText.plain(ridge));
         return rows.build();
+    }
+
+    private static String structure(OrthonormalCompression chosen) {
+        return chosen.imposed().map(imposing -> imposing.structure().words() + ", changes the operator by "
+                + Digits.cell(imposing.change(chosen.action())) + " of its size").orElse("none");
     }
 
     private static String inputs(FittedOperator operator) {

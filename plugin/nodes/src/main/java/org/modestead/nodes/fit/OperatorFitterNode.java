@@ -46,9 +46,17 @@ public final class OperatorFitterNode implements Node {
                         "Dawson, Hemati, Williams and Rowley, Characterizing and correcting for the effect of sensor noise"
                                 + " in the dynamic mode decomposition, Experiments in Fluids 57:42, 2016",
                         "Proctor, Brunton and Kutz, Dynamic mode decomposition with control, SIAM Journal on Applied"
-                                + " Dynamical Systems 15:142, 2016"),
+                                + " Dynamical Systems 15:142, 2016",
+                        "Higham, The symmetric Procrustes problem, BIT 28:133, 1988",
+                        "Baddoo, Herrmann, McKeon, Kutz and Brunton, Physics-informed dynamic mode decomposition, Proceedings of"
+                                + " the Royal Society A 479:20220576, 2023",
+                        "Colbrook, The mpEDMD algorithm for data-driven computations of measure-preserving dynamical systems,"
+                                + " SIAM Journal on Numerical Analysis 61:1585, 2023",
+                        "Noferini and Poloni, Nearest Ω-stable matrix via Riemannian optimization, Numerische Mathematik"
+                                + " 148:817, 2021"),
                 List.of("Koopman", "Liouville", "generator", "transfer operator", "least squares",
-                        "total least squares", "noise", "control", "inputs", "forced motion", "damping bias", "singular values",
+                        "total least squares", "noise", "control", "inputs", "forced motion", "self-adjoint", "unitary",
+                        "measure-preserving", "stable", "damping bias", "singular values",
                         "rank",
                         "occupation kernel"),
                 List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "Prepared states; only the training part"
@@ -79,6 +87,9 @@ public final class OperatorFitterNode implements Node {
                 Where the snapshots carry input columns, a step map on the coordinates or on a dictionary separates what \
                 they drive: y = A x + B u, with all samples of the inputs that the state's delays reach over, a constant \
                 for the resting point, and for monomials their products with the state. The operator A is that of the free motion.
+
+                A structure known beforehand can be imposed: self-adjoint, skew-adjoint (generator), unitary (step map) or \
+                stable. The fit table tells how much of the free fit it takes away; where that is much, the data disagree.
 
                 Cost: linear and dictionary fits take samples times functions squared; kernel fits samples times \
                 landmarks times rank; no square matrix of all samples is formed.""";

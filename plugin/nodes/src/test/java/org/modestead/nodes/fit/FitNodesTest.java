@@ -208,4 +208,28 @@ class FitNodesTest {
         assertEquals(List.of(), Steps.check("operator-fitter", Map.of("noise-correction", "total-least-squares",
                 "ridge", 0.1, "estimator", "dictionary")));
     }
+
+    @ParameterizedTest
+    @CsvSource({"linear, self-adjoint, self-adjoint", "linear, unitary, unitary", "dictionary, stable, stable",
+        "kernel-step, unitary, unitary", "generator, skew, skew-adjoint", "scaled-generator, stable, stable"})
+    void aStructureReachesTheFitAndItsTable(String estimator, String structure, String words) {
+        NodeResult fitted = fit(Map.of("estimator", estimator, "structure", structure), true);
+        assertTrue(((FittedOperator) fitted.outputs().get("operator")).method().endsWith(", made " + words));
+        String row = Steps.texts(fitted, "fit").stream().filter(cells -> cells.get(0).equals("structure")).findFirst().orElseThrow().get(1);
+        assertTrue(row.startsWith(words + ", changes the operator by "), row);
+    }
+
+    @ParameterizedTest
+    @CsvSource({"linear, skew, none, 0, structure", "generator, unitary, none, 0, structure", "scaled-generator, skew, none, 0, structure",
+        "linear, unitary, total-least-squares, 0, structure", "linear, stable, none, 0.1, ridge"})
+    void structuresThatDoNotGoTogetherWithTheRestAreToldBeforeRunning(String estimator, String structure, String correction, double ridge,
+            String key) {
+        Map<String, Object> raw = Map.of("estimator", estimator, "structure", structure, "noise-correction", correction, "ridge", ridge);
+        assertEquals(List.of(key), Steps.check("operator-fitter", raw).stream().map(problem -> problem.key()).toList());
+    }
+
+    @Test
+    void stabilityAndANoiseCorrectionGoTogether() {
+        assertEquals(List.of(), Steps.check("operator-fitter", Map.of("structure", "stable", "noise-correction", "total-least-squares")));
+    }
 }
