@@ -27,7 +27,7 @@ public interface Dictionary {
     /** Returns what it is, for the report. */
     String describe();
 
-    /** Monomials {@code x^α} with {@code |α| <= degree}, the constant first. */
+    /** Monomials {@code √(|α|!/α!) x^α} with {@code |α| <= degree}, the constant first. */
     static Dictionary monomials(int degree) {
         return new MonomialDictionary(degree);
     }

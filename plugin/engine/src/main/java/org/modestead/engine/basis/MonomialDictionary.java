@@ -7,8 +7,11 @@ import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
 
 /**
- * Monomials of total degree at most d. Total degree, not degree by component: the span is then invariant under every
- * linear change of coordinates, so linear motion stays inside it.
+ * Monomials of total degree at most d, {@code √(|α|!/α!) x^α}. Total degree, not degree by component: the span is then
+ * invariant under every linear change of coordinates, so linear motion stays inside it.
+ *
+ * <p>The factor is that of the feature map of {@code Σ_k (x·y)^k}: a rotation of the coordinates then turns the functions
+ * of each degree into one another by a rotation, and no cut at a smaller rank depends on how the coordinates were turned.
  *
  * @param degree d, at least 1
  */
@@ -76,8 +79,29 @@ record MonomialDictionary(int degree) implements Dictionary {
         }
     }
 
-    /** Monomials in a known number of variables. */
-    private record Monomials(List<int[]> exponents, String description) implements FunctionBasis {
+    /**
+     * Monomials in a known number of variables.
+     *
+     * @param factors √(|α|!/α!), one a monomial
+     */
+    private record Monomials(List<int[]> exponents, double[] factors, String description) implements FunctionBasis {
+
+        Monomials(List<int[]> exponents, String description) {
+            this(exponents, exponents.stream().mapToDouble(Monomials::factor).toArray(), description);
+        }
+
+        /** As the root of a product of binomials. */
+        private static double factor(int[] exponent) {
+            double count = 1;
+            int total = 0;
+            for (int power : exponent) {
+                for (int k = 1; k <= power; k++) {
+                    total++;
+                    count = count * total / k;
+                }
+            }
+            return Math.sqrt(count);
+        }
 
         @Override
         public int size() {
@@ -89,7 +113,7 @@ record MonomialDictionary(int degree) implements Dictionary {
             DMatrixRMaj out = new DMatrixRMaj(states.numRows, size());
             for (int i = 0; i < states.numRows; i++) {
                 for (int j = 0; j < size(); j++) {
-                    out.data[i * size() + j] = monomial(states, i, exponents.get(j));
+                    out.data[i * size() + j] = factors[j] * monomial(states, i, exponents.get(j));
                 }
             }
             return out;

@@ -99,15 +99,19 @@ public final class SpectrumExtractor {
         return Math.sqrt(sum / starts.numRows);
     }
 
+    /** ‖joint - solo‖ over the larger of their norms, so that it does not depend on how the channels are turned. */
     private static double gap(ModalExpansion expansion, int j) {
         double difference = 0;
-        double size = 0;
+        double jointSize = 0;
+        double soloSize = 0;
         for (int k = 0; k < expansion.joint().numCols; k++) {
             Complex joint = ComplexMatrices.entry(expansion.joint(), j, k);
             Complex solo = ComplexMatrices.entry(expansion.solo(), j, k);
             difference = Math.hypot(difference, joint.minus(solo).abs());
-            size = Math.hypot(size, Math.max(joint.abs(), solo.abs()));
+            jointSize = Math.hypot(jointSize, joint.abs());
+            soloSize = Math.hypot(soloSize, solo.abs());
         }
+        double size = Math.max(jointSize, soloSize);
         return size == 0 ? 0 : difference / size;
     }
 

@@ -50,7 +50,8 @@ public final class StepConsistency implements Check {
 
     private List<Finding> compare(Evidence evidence, ModalExpansion other) {
         List<Mode> modes = evidence.carrying().filter(mode -> mode.frequency() < other.compression().evolution().aliasingLimit()).toList();
-        List<Complex> rates = other.rates().stream().filter(rate -> rate.im() >= 0).toList();
+        // both of a pair: rounding may turn a rate that two functions share into a pair, and then two modes look for it
+        List<Complex> rates = other.rates();
         double[][] cost = new double[modes.size()][rates.size()];
         for (int i = 0; i < modes.size(); i++) {
             for (int j = 0; j < rates.size(); j++) {
