@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.basis.FunctionBasis;
@@ -50,5 +51,10 @@ public record DictionaryEstimator(Dictionary dictionary, int stride, InputUse in
     @Override
     public Optional<Estimator> otherStep(Snapshots snapshots) {
         return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new DictionaryEstimator(dictionary, 2 * stride, inputs)) : Optional.empty();
+    }
+
+    @Override
+    public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
     }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.Progress;
 import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.recording.Snapshots;
@@ -35,4 +36,16 @@ public interface Estimator {
      * @return empty when the snapshots are too short for either
      */
     Optional<Estimator> otherStep(Snapshots snapshots);
+
+    /**
+     * Returns what every training run tells of the action on given functions, so that runs can be weighted anew.
+     *
+     * @param snapshots only the training part is read
+     * @param functions q, from a compression that this estimator filled
+     * @return one entry a run with at least one observation, evaluated as the stream is drawn; empty where the estimator
+     *     offers none
+     */
+    default Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return Stream.empty();
+    }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.KernelSections;
 import org.modestead.engine.basis.LandmarkFeatures;
@@ -62,5 +63,10 @@ public record KernelStepEstimator(Kernel space, int landmarks, int stride) imple
     public Optional<Estimator> otherStep(Snapshots snapshots) {
         return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new KernelStepEstimator(space, landmarks, 2 * stride))
                 : Optional.empty();
+    }
+
+    @Override
+    public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
     }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.basis.InputTerms;
@@ -55,5 +56,10 @@ public record LinearEstimator(int stride, NoiseCorrection correction, InputUse i
     public Optional<Estimator> otherStep(Snapshots snapshots) {
         return StatePairs.exist(snapshots, 2 * stride) ? Optional.of(new LinearEstimator(2 * stride, correction, inputs))
                 : Optional.empty();
+    }
+
+    @Override
+    public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
     }
 }

@@ -2,6 +2,7 @@ package org.modestead.engine.operator;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.FitFault;
@@ -146,5 +147,18 @@ public record OccupationEstimator(Kernel space, SegmentPlan plan, double contrac
             return Optional.empty();
         }
         return Optional.of(new OccupationEstimator(space, new SegmentPlan(other, plan.endSmoothing()), contraction));
+    }
+
+    @Override
+    public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return snapshots.states(Snapshots.Part.TRAINING).stream().map(run -> Segments.of(List.of(run), plan))
+                .filter(segments -> !segments.isEmpty()).map(segments -> observed(segments, functions));
+    }
+
+    private ObservedRun observed(List<Segment> segments, OrthonormalCompression functions) {
+        DMatrixRMaj nodes = stacked(segments);
+        return new ObservedRun(averaged(segments, functions.evaluate(nodes)),
+                difference(functions.evaluate(ends(segments, false)), functions.evaluate(ends(segments, true))),
+                averaged(segments, nodes));
     }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.List;
+import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.recording.Snapshots;
@@ -34,7 +35,17 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun>
             throw new FitFault("operator", "no run is longer than " + stride + " state" + (stride == 1 ? "" : "s") + " after delay embedding",
                     "use longer runs, a smaller delay depth or a smaller step");
         }
-        int n = snapshots.stateSize();
+        return of(runs, m, snapshots.stateSize(), stride, step);
+    }
+
+    /** The pairs of each run by itself; runs without a pair are left out. */
+    static Stream<StatePairs> perRun(Snapshots snapshots, Snapshots.Part part, int stride) {
+        double step = snapshots.step().orElseThrow();
+        return snapshots.states(part).stream().filter(run -> run.count() > stride)
+                .map(run -> of(List.of(run), run.count() - stride, snapshots.stateSize(), stride, step));
+    }
+
+    private static StatePairs of(List<StateRun> runs, int m, int n, int stride, double step) {
         DMatrixRMaj now = new DMatrixRMaj(m, n);
         DMatrixRMaj next = new DMatrixRMaj(m, n);
         int at = 0;

@@ -1,6 +1,8 @@
 package org.modestead.engine.spectrum;
 
 import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
 import org.modestead.engine.linalg.Complex;
 
 /**
@@ -21,6 +23,7 @@ import org.modestead.engine.linalg.Complex;
  * @param weights joint weights of the N state components on the first index, prepared units
  * @param constant whether this is the constant function of rate 0, which every flow has: no evidence
  * @param cluster number of the cluster of nearly equal eigenvalues it belongs to, 0 for none
+ * @param intervals of its figures, where they were computed
  */
 public record Mode(
         int number,
@@ -31,7 +34,8 @@ public record Mode(
         double jointSoloGap,
         List<Complex> weights,
         boolean constant,
-        int cluster) {
+        int cluster,
+        Optional<ModeIntervals> intervals) {
 
     private static final double TWO_PI = 2 * Math.PI;
 
@@ -39,6 +43,19 @@ public record Mode(
     public Mode {
         indices = List.copyOf(indices);
         weights = List.copyOf(weights);
+        Objects.requireNonNull(intervals);
+    }
+
+    /** Without intervals. */
+    public Mode(int number, List<Integer> indices, Complex rate, double amplitude, double energyShare, double jointSoloGap,
+            List<Complex> weights, boolean constant, int cluster) {
+        this(number, indices, rate, amplitude, energyShare, jointSoloGap, weights, constant, cluster, Optional.empty());
+    }
+
+    /** Returns the same mode with intervals. */
+    public Mode with(ModeIntervals found) {
+        return new Mode(number, indices, rate, amplitude, energyShare, jointSoloGap, weights, constant, cluster,
+                Optional.of(found));
     }
 
     /** Returns whether the mode oscillates (a conjugate pair). */

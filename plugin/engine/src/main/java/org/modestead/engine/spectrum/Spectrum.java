@@ -1,5 +1,6 @@
 package org.modestead.engine.spectrum;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -45,5 +46,12 @@ public record Spectrum(
     /** Returns the rank r. */
     public int rank() {
         return rates.size();
+    }
+
+    /** Returns the same spectrum with other modes and further doubts. */
+    public Spectrum with(List<Mode> others, List<Doubt> further) {
+        List<Doubt> all = new ArrayList<>(doubts);
+        all.addAll(further);
+        return new Spectrum(eigenvalues, rates, vectors, joint, solo, others, channels, delay, timeUnit, all);
     }
 }

@@ -1,0 +1,57 @@
+package org.modestead.engine.operator;
+
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.linalg.Matrices;
+
+/**
+ * What one run tells of the action on given functions q_1..q_R, one row an observation: a snapshot pair (x, y) or a segment
+ * γ from s to e. With whatever estimator, the observations of all runs give the compressed operator by
+ *
+ * <pre>    Ã = (Σ now nowᵀ)⁻¹ Σ now nextᵀ,    observable = (Σ now nowᵀ)⁻¹ Σ now targetᵀ  (in coordinates of the q)</pre>
+ *
+ * so that they may be weighted anew, as a bootstrap does, without filling the arrays of the fit again.
+ *
+ * @param now {@code q(x)}, or {@code ∫ q(γ(t)) dt}; observations x R
+ * @param next {@code q(y)}, or {@code q(e) - q(s)}; observations x R
+ * @param target the state x, or {@code ∫ γ(t) dt}; observations x N
+ */
+public record ObservedRun(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target) {
+
+    /** Checks that the rows agree. */
+    public ObservedRun {
+        if (now.numRows != next.numRows || now.numRows != target.numRows) {
+            throw new IllegalArgumentException("rows differ: " + now.numRows + ", " + next.numRows + ", " + target.numRows);
+        }
+    }
+
+    /** Returns the observation of one run by a step map. */
+    static ObservedRun of(StatePairs pairs, OrthonormalCompression functions) {
+        return new ObservedRun(functions.evaluate(pairs.now()), functions.evaluate(pairs.next()), pairs.now());
+    }
+
+    /** Returns the number of observations. */
+    public int count() {
+        return now.numRows;
+    }
+
+    /** Returns the observations of some rows, {@code from} included, {@code to} not. */
+    public ObservedRun rows(int from, int to) {
+        return new ObservedRun(Matrices.block(now, from, to, 0, now.numCols), Matrices.block(next, from, to, 0, next.numCols),
+                Matrices.block(target, from, to, 0, target.numCols));
+    }
+
+    /** Returns the same with another target. */
+    public ObservedRun withTarget(DMatrixRMaj other) {
+        return new ObservedRun(now, next, other);
+    }
+
+    /** Returns the same with every function divided by its scale. */
+    public ObservedRun dividedBy(double[] scale) {
+        DMatrixRMaj before = now.copy();
+        DMatrixRMaj after = next.copy();
+        CommonOps_DDRM.divideCols(before, scale);
+        CommonOps_DDRM.divideCols(after, scale);
+        return new ObservedRun(before, after, target);
+    }
+}
