@@ -60,6 +60,9 @@ public record LinearEstimator(int stride, NoiseCorrection correction, InputUse i
 
     @Override
     public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        if (functions.inputs().isPresent()) {
+            return Stream.empty();
+        }
         return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
     }
 }

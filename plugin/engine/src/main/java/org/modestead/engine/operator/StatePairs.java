@@ -35,17 +35,18 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun>
             throw new FitFault("operator", "no run is longer than " + stride + " state" + (stride == 1 ? "" : "s") + " after delay embedding",
                     "use longer runs, a smaller delay depth or a smaller step");
         }
-        return of(runs, m, snapshots.stateSize(), stride, step);
+        return of(snapshots, runs, m, stride, step);
     }
 
     /** The pairs of each run by itself; runs without a pair are left out. */
     static Stream<StatePairs> perRun(Snapshots snapshots, Snapshots.Part part, int stride) {
         double step = snapshots.step().orElseThrow();
         return snapshots.states(part).stream().filter(run -> run.count() > stride)
-                .map(run -> of(List.of(run), run.count() - stride, snapshots.stateSize(), stride, step));
+                .map(run -> of(snapshots, List.of(run), run.count() - stride, stride, step));
     }
 
-    private static StatePairs of(List<StateRun> runs, int m, int n, int stride, double step) {
+    private static StatePairs of(Snapshots snapshots, List<StateRun> runs, int m, int stride, double step) {
+        int n = snapshots.stateSize();
         DMatrixRMaj now = new DMatrixRMaj(m, n);
         DMatrixRMaj next = new DMatrixRMaj(m, n);
         int at = 0;
