@@ -55,9 +55,8 @@ public record DictionaryEstimator(Dictionary dictionary, int stride, InputUse in
 
     @Override
     public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
-        if (functions.inputs().isPresent()) {
-            return Stream.empty();
-        }
-        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
+        FunctionBasis basis = dictionary.on(snapshots.stateSize());
+        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride)
+                .map(pairs -> ObservedRun.of(pairs, basis, functions));
     }
 }

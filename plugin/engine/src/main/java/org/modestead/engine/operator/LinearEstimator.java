@@ -60,9 +60,7 @@ public record LinearEstimator(int stride, NoiseCorrection correction, InputUse i
 
     @Override
     public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
-        if (functions.inputs().isPresent()) {
-            return Stream.empty();
-        }
-        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride).map(pairs -> ObservedRun.of(pairs, functions));
+        return StatePairs.perRun(snapshots, Snapshots.Part.TRAINING, stride)
+                .map(pairs -> ObservedRun.of(pairs, new Coordinates(snapshots.stateSize()), functions));
     }
 }

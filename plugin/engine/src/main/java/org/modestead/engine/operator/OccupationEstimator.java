@@ -159,6 +159,6 @@ public record OccupationEstimator(Kernel space, SegmentPlan plan, double contrac
         DMatrixRMaj nodes = stacked(segments);
         return new ObservedRun(averaged(segments, functions.evaluate(nodes)),
                 difference(functions.evaluate(ends(segments, false)), functions.evaluate(ends(segments, true))),
-                averaged(segments, nodes));
+                averaged(segments, nodes), 0);
     }
 }

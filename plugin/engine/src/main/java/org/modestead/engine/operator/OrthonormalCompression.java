@@ -5,6 +5,7 @@ import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.basis.JoinedFunctions;
 import org.modestead.engine.linalg.Matrices;
@@ -88,6 +89,22 @@ public record OrthonormalCompression(
     /** Returns the action as the data give it, before any noise correction and without any structure imposed. */
     public DMatrixRMaj measured() {
         return noisy.map(NoisyStep::measured).orElseGet(() -> imposed.map(ImposedStructure::free).orElse(action));
+    }
+
+    /**
+     * Whitens other data of these functions and treats them as this compression was treated: noise correction and structure.
+     * Inputs must have been projected out already; a ridge is not applied.
+     *
+     * @param now samples x R, in the scale of the data: every function multiplied by its singular value in the data inner product
+     * @param next samples x R, likewise
+     * @param target samples x c
+     * @param rank at least 1
+     * @return of this rank, or less where the data hold less; its basis are the R functions in their scale
+     */
+    public OrthonormalCompression again(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target, int rank) {
+        OrthonormalCompression free = new FactoredCompression(new Coordinates(rank()), now, next, target, innerProduct, evolution,
+                noisy.map(NoisyStep::correction).orElse(NoiseCorrection.NONE)).whiten(rank);
+        return imposed.map(imposing -> free.constrained(imposing.structure())).orElse(free);
     }
 
     /** Returns R. */

@@ -1,6 +1,7 @@
 package org.modestead.engine.operator;
 
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.kernel.KernelSpec;
@@ -37,6 +38,11 @@ public record StructuredEstimator(Estimator free, Structure structure) implement
     @Override
     public Optional<Estimator> otherStep(Snapshots snapshots) {
         return free.otherStep(snapshots).map(other -> new StructuredEstimator(other, structure));
+    }
+
+    @Override
+    public Stream<ObservedRun> observed(Snapshots snapshots, OrthonormalCompression functions) {
+        return free.observed(snapshots, functions);
     }
 
     /** Returns the fault of a structure that an operator cannot have. */

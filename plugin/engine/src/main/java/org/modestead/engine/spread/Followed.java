@@ -53,7 +53,7 @@ record Followed(List<Complex> rates, ZMatrixRMaj functions, DMatrixRMaj starts, 
      * @param stretch of the replicates
      */
     static Followed of(FittedOperator operator, Spectrum spectrum, List<Mode> modes, Frame frame, double stretch) {
-        TrainingSample sample = TrainingSample.of(operator.snapshots());
+        TrainingSample sample = TrainingSample.of(operator);
         boolean divided = operator.compression().innerProduct() == InnerProduct.SPACE;
         DMatrixRMaj starts = frame.functions().evaluate(sample.starts());
         if (divided) {

@@ -4,23 +4,20 @@ import java.util.Arrays;
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.linalg.LinearAlgebra.SymmetricEigen;
 import org.modestead.engine.linalg.Matrices;
-import org.modestead.engine.operator.FactoredCompression;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
-import org.modestead.engine.operator.NoiseCorrection;
-import org.modestead.engine.operator.NoisyStep;
+import org.modestead.engine.operator.InputEffect;
 import org.modestead.engine.operator.ObservedRun;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.Ridge;
 
 /**
  * The leading R' functions of a fit, within which it is repeated with other weights: what the observations sum to is
- * turned back into a pair of factors of R' rows, and these go the way of the data, through whitening to rank r, noise correction
- * and ridge. So a replicate belongs to the estimator in use, and costs O(R'³) whatever the length of the recording.
+ * turned back into a pair of factors of R' rows, and these go the way of the data, through whitening to rank r, noise
+ * correction, structure and ridge. So a replicate belongs to the estimator in use, and costs O(R'³) whatever the length of the recording.
  *
  * <p>Functions are held divided by their scale, {@code p = q} in the data inner product and {@code p = q/s} in the kernel's
  * space, so that the sum over the recorded data of {@code p pᵀ} is a multiple of the identity and its root is accurate.
@@ -57,7 +54,8 @@ record Frame(OrthonormalCompression functions, double[] scale, int rank, double 
     }
 
     /** Returns the fit to these sums; empty where they do not hold r directions. */
-    Optional<Refit> refit(Moments sums) {
+    Optional<Refit> refit(Moments drawn) {
+        Moments sums = drawn.without(functions.inputs().map(InputEffect::count).orElse(0));
         SymmetricEigen eigen = LinearAlgebra.installed().symmetricEigen(sums.gram());
         double[] root = Arrays.stream(eigen.values()).map(d -> Math.sqrt(Math.max(0, d))).toArray();
         if (!(root[0] > 0) || root[Math.min(rank, root.length) - 1] <= NULL * root[0]) {
@@ -70,17 +68,14 @@ record Frame(OrthonormalCompression functions, double[] scale, int rank, double 
         CommonOps_DDRM.multRows(inverse, turn);
         DMatrixRMaj next = Matrices.product(turn, sums.cross());
         DMatrixRMaj target = Matrices.product(turn, sums.observable());
-        NoiseCorrection correction = functions.noisy().map(NoisyStep::correction).orElse(NoiseCorrection.NONE);
-        if (correction != NoiseCorrection.NONE) {
+        if (functions.noisy().isPresent()) {
             next = CommonOps_DDRM.concatRowsMulti(next, rest(sums.second(), next));
             now = padded(now);
             target = padded(target);
         }
         CommonOps_DDRM.multCols(now, scale);
         CommonOps_DDRM.multCols(next, scale);
-        FactoredCompression data = new FactoredCompression(new Coordinates(width()), now, next, target, functions.innerProduct(),
-                functions.evolution(), correction);
-        OrthonormalCompression white = Ridge.apply(data.whiten(rank), ridge);
+        OrthonormalCompression white = Ridge.apply(functions.again(now, next, target, rank), ridge);
         return white.rank() < rank ? Optional.empty() : Optional.of(Refit.of(white, scale));
     }
 

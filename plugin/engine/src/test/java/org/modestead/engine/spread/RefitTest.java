@@ -8,6 +8,7 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Random;
+import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Dictionary;
@@ -24,6 +25,9 @@ import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.operator.SegmentPlan;
+import org.modestead.engine.operator.Structure;
+import org.modestead.engine.operator.StructuredEstimator;
+import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.ModalExpansion;
@@ -120,6 +124,54 @@ class RefitTest {
             FittedOperator again = fit(snapshots(drawn, 6), estimator, 4, 0);
             assertRates(ModalExpansion.of(again.chosen()).rates(), replicate.rates(), 1e-6, estimator.describe());
         }
+    }
+
+    @Test
+    void structuresAreImposedOnReplicatesToo() {
+        for (Structure structure : List.of(Structure.SELF_ADJOINT, Structure.UNITARY, Structure.STABLE)) {
+            assertOnceIsTheFit(new StructuredEstimator(new LinearEstimator(), structure), 3, 4, 0);
+            assertOnceIsTheFit(new StructuredEstimator(new KernelStepEstimator(Motions.kernel("exponential", "rate", 1), 40), structure), 1, 4, 0);
+        }
+    }
+
+    @Test
+    void inputsAreSeparatedInEveryReplicate() {
+        List<Run> six = drivenRuns();
+        List<Run> drawn = List.of(six.get(0), six.get(0), six.get(2), six.get(3), six.get(5), six.get(5));
+        for (Estimator estimator : List.of(new LinearEstimator(), new DictionaryEstimator(Dictionary.monomials(1)))) {
+            FittedOperator operator = fit(driven(six), estimator, 2, 0);
+            double[] once = {1, 1, 1, 1, 1, 1};
+            assertRates(ModalExpansion.of(operator.chosen()).rates(), refit(operator, once).rates(), 1e-8, estimator.describe());
+            FittedOperator again = fit(driven(drawn), estimator, 2, 0);
+            assertRates(ModalExpansion.of(again.chosen()).rates(), refit(operator, 2, 0, 1, 1, 0, 2).rates(), 1e-8, estimator.describe());
+        }
+    }
+
+    /** A fading rotation pushed by a known random input and by unknown noise. */
+    private static List<Run> drivenRuns() {
+        Random random = new Random(11);
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 6; i++) {
+            DMatrixRMaj values = new DMatrixRMaj(30, 2);
+            DMatrixRMaj inputs = new DMatrixRMaj(30, 1);
+            for (int t = 0; t < 30; t++) {
+                double u = random.nextGaussian();
+                inputs.set(t, 0, u);
+                double x = t == 0 ? random.nextGaussian() : values.get(t - 1, 0);
+                double y = t == 0 ? random.nextGaussian() : values.get(t - 1, 1);
+                double before = t == 0 ? 0 : inputs.get(t - 1, 0);
+                values.set(t, 0, 0.9 * x - 0.3 * y + before + 0.05 * random.nextGaussian());
+                values.set(t, 1, 0.3 * x + 0.9 * y - 0.5 * before + 0.05 * random.nextGaussian());
+            }
+            runs.add(new Run("r" + i, Motions.grid(30, 0.1), values, inputs, 0));
+        }
+        return runs;
+    }
+
+    private static Snapshots driven(List<Run> runs) {
+        Snapshots plain = snapshots(runs, 1);
+        return new Snapshots(plain.channels(), List.of(new Channel("u", "")), plain.time(), runs, List.of(), List.of(), plain.step(),
+                plain.delay(), plain.preparation(), List.of(), List.of());
     }
 
     @Test
