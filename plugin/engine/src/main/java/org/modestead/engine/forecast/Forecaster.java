@@ -50,6 +50,8 @@ public final class Forecaster {
         ForecastTable table = ForecastTable.of(task, used.route(), used.bands(), progress.part(0.7, 0.9));
         Reconstruction reconstruction = Reconstruction.of(snapshots, operator, progress.part(0.9, 1));
         progress.report(1, "forecast done");
+        List<String> summary = new ArrayList<>(Summary.of(task, choice, used, units, scores.rows()));
+        DistributionScores.sentence(task, methods, units).ifPresent(summary::add);
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
         doubts.addAll(table.doubts());
@@ -57,7 +59,7 @@ public final class Forecaster {
         doubts.addAll(scores.doubts());
         doubts.addAll(reconstruction.doubts());
         return new ForecastResult(table.rows(), reconstruction.rows(), scores.rows(), choice.route(),
-                Summary.of(task, choice, used, units, scores.rows()), doubts);
+                summary, doubts);
     }
 
     private static List<Judged> judge(ForecastTask task, List<ForecastRoute> routes, Progress progress) {

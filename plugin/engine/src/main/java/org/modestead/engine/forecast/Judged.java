@@ -10,10 +10,11 @@ import org.modestead.engine.Progress;
  *
  * @param route that was judged
  * @param bands calibrated on its own errors
- * @param calibrationOrigins number of origins behind the bands
+ * @param distribution of these errors
+ * @param calibrationOrigins number of origins behind both
  * @param holdout errors on the holdout
  */
-record Judged(ForecastRoute route, Bands bands, int calibrationOrigins, Backtest holdout) {
+record Judged(ForecastRoute route, Bands bands, ErrorDistribution distribution, int calibrationOrigins, Backtest holdout) {
 
     static Judged of(ForecastTask task, ForecastRoute route, Progress progress) {
         Backtest holdout = Backtest.of(route, task.holdout(), memory(task, route), task.leads(), task.region(), progress);
@@ -25,8 +26,10 @@ record Judged(ForecastRoute route, Bands bands, int calibrationOrigins, Backtest
         int leads = task.leads();
         Backtest calibration = Backtest.of(route, task.bands().calibration(), memory(task, route), leads, task.region(),
                 progress);
-        Bands bands = Bands.of(calibration.errors(), leads, task.snapshots().channels().size(), task.plan().coverage());
-        return new Judged(route, bands, calibration.errors().size(), holdout);
+        int channels = task.snapshots().channels().size();
+        Bands bands = Bands.of(calibration.errors(), leads, channels, task.plan().coverage());
+        ErrorDistribution distribution = ErrorDistribution.of(calibration.errors(), leads, channels);
+        return new Judged(route, bands, distribution, calibration.errors().size(), holdout);
     }
 
     private static int memory(ForecastTask task, ForecastRoute route) {

@@ -61,6 +61,7 @@ public final class RollingOrigin {
         progress.report(1, "backtest done");
         List<String> summary = new ArrayList<>(List.of(choice.sentence(), sentence(task, starts, plan)));
         summary.addAll(Summary.judged(task, judged.get(0), units, scores.rows()));
+        DistributionScores.sentence(task, judged, units).ifPresent(summary::add);
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
         doubts.addAll(judged.get(0).bandDoubts(task));

@@ -55,6 +55,40 @@ final class Scores {
         return high - low + 2 / alpha * miss;
     }
 
+    /**
+     * Returns the pinball score of a quantile: {@code τ (y-q)} above it, {@code (1-τ) (q-y)} below. Its mean is smallest
+     * where q is the τ-quantile of y.
+     *
+     * <p>Gneiting and Raftery, J. Amer. Stat. Assoc. 102:359, 2007, section 6. The interval score is 2/α times the pinball
+     * scores of both ends, the levels α/2 and 1-α/2.
+     *
+     * @param level τ in (0, 1)
+     * @param quantile q
+     * @param observed y
+     */
+    static double pinball(double level, double quantile, double observed) {
+        return observed >= quantile ? level * (observed - quantile) : (1 - level) * (quantile - observed);
+    }
+
+    /**
+     * Returns the continuous ranked probability score of equally likely values: the area {@code ∫ (F(x) - 1{x >= y})² dx}
+     * between their distribution function F and that of the observed value, in its unit; for one value the absolute error.
+     * It is twice the mean pinball score of the values as quantiles at the levels {@code (i - 1/2)/n}.
+     *
+     * <p>Gneiting and Raftery, J. Amer. Stat. Assoc. 102:359, 2007, section 4.2; Laio and Tamea, Hydrol. Earth Syst. Sci. 11:1267,
+     * 2007, for the quantiles.
+     *
+     * @param rising n at least 1 values, sorted
+     * @param observed y
+     */
+    static double crps(double[] rising, double observed) {
+        double sum = 0;
+        for (int i = 0; i < rising.length; i++) {
+            sum += pinball((i + 0.5) / rising.length, rising[i], observed);
+        }
+        return 2 * sum / rising.length;
+    }
+
     /** Returns the mean, NaN of nothing. */
     static double mean(DoubleStream values) {
         return values.average().orElse(Double.NaN);

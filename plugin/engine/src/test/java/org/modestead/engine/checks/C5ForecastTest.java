@@ -19,6 +19,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.modestead.engine.Progress;
 import org.modestead.engine.forecast.BacktestPlan;
 import org.modestead.engine.forecast.BacktestResult;
+import org.modestead.engine.forecast.ErrorRow;
 import org.modestead.engine.forecast.ForecastPlan;
 import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.ForecastRow;
@@ -122,6 +123,21 @@ class C5ForecastTest {
     }
 
     @Test
+    void seasonalNaiveErrorsOfPassengersInPercent() {
+        // CHECKS C5.7: MAPE 9.987532921 %. Errors in percent are no score of the engine, because they depend on where the
+        // scale has its zero; its errors give the figure
+        Snapshots snapshots = snapshots(PASSENGERS, 0, 12, 48, false);
+        List<Double> leads = IntStream.rangeClosed(1, 12).mapToObj(lead -> (double) lead).toList();
+        ForecastPlan forecast = new ForecastPlan(Route.AUTO, Origin.RECORDING_END, OptionalDouble.of(12), 0.9, 12, leads);
+        List<ErrorRow> errors = RollingOrigin.run(snapshots, fit(snapshots, 13), Optional.empty(),
+                new BacktestPlan(forecast, 1, Refit.NEVER), Progress.NONE).errors().stream()
+                .filter(row -> row.method().equals("seasonal-naive")).toList();
+        assertEquals(12, errors.size());
+        assertEquals(9.987532921, 100 * errors.stream().mapToDouble(row -> Math.abs(row.error())
+                / PASSENGERS[(int) Math.round(row.origin() + row.horizon())]).average().orElseThrow(), 5e-10);
+    }
+
+    @Test
     void delayModesOfTheLogarithmOfPassengersAreTheYearAndItsFractionsAndGrowth() {
         // CHECKS C5.7, d = 48, r = 13, printed to two decimals and five
         List<Mode> modes = modes(each(PASSENGERS, Math::log), 48, 13, false);
@@ -193,7 +209,9 @@ class C5ForecastTest {
     @Test
     void sunspotCyclesOfTwoDelayFits() {
         // CHECKS C5.9: d = 22, r = 2 and d = 44, r = 6, printed to two decimals, the slow one to a year
-        assertEquals(10.82, nearestPeriod(modes(SUNSPOTS, 22, 2, true), 10.8), 0.005);
+        Mode cycle = nearest(modes(SUNSPOTS, 22, 2, true), 10.8);
+        assertEquals(10.82, cycle.period(), 0.005);
+        assertTrue(cycle.period() > 10 && cycle.period() < 11.5 && cycle.rate().re() < 0, "quasi-periodic: it fades");
         List<Mode> six = modes(SUNSPOTS, 44, 6, true);
         assertEquals(11.24, nearestPeriod(six, 11.24), 0.005);
         assertEquals(10.20, nearestPeriod(six, 10.2), 0.005);
@@ -233,6 +251,8 @@ class C5ForecastTest {
         assertEquals(919.35, DoubleStream.of(NILE).average().orElseThrow(), 1e-9);
         assertEquals(1097.75, Arrays.stream(NILE, 0, 28).average().orElseThrow(), 1e-9);
         assertEquals(849.9722, Arrays.stream(NILE, 28, 100).average().orElseThrow(), 5e-5);
+        double variance = DoubleStream.of(NILE).map(y -> (y - 919.35) * (y - 919.35)).sum() / 99;
+        assertEquals(169.2275, Math.sqrt(variance), 5e-5);
     }
 
     @ParameterizedTest

@@ -3,10 +3,11 @@ package org.modestead.engine.checks;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
+import org.modestead.engine.forecast.NormalCrps;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.spectrum.Damping;
 
-/** Rows C4 and C6 of the table of checks: terms of the trades and linear algebra. */
+/** Rows C4 to C6 of the table of checks: terms of the trades, scores and linear algebra. */
 final class MeasuredTrades {
 
     private MeasuredTrades() {}
@@ -26,6 +27,10 @@ final class MeasuredTrades {
     static List<Found> cantilever(CheckRow row) {
         return Found.by("modes of the compliance", Arrays.stream(C4ModalEngineeringTest.cantilever()).boxed()
                 .min(Comparator.comparingDouble(root -> Math.abs(root - row.expected()))).orElseThrow());
+    }
+
+    static List<Found> rankedProbability(CheckRow row) {
+        return Found.by("pinball scores of all quantiles", NormalCrps.of(row.after("y=")));
     }
 
     static List<Found> frank(CheckRow row) {

@@ -113,6 +113,21 @@ class RollingOriginTest {
     }
 
     @Test
+    void asADistributionTheExactOperatorScoresWhatANormalForecastDoes() {
+        // Closed form: deviation times 1/√π (CHECKS C5.3), deviation √(1 - φ²); a score scatters by about 0.45 deviations, so
+        // 2000 of them by 1 %, the 2000 errors of calibration by as much: four times both
+        String sentence = wandering(2000, 2000, plan(2000, Refit.NEVER, 1)).summary().stream()
+                .filter(line -> line.contains("CRPS")).findFirst().orElseThrow();
+        double deviation = Math.sqrt(1 - PHI * PHI);
+        assertEquals(deviation / Math.sqrt(Math.PI), distributionScore(sentence, "projection"), 0.08 * deviation);
+        assertTrue(distributionScore(sentence, "projection") < distributionScore(sentence, "persistence"), sentence);
+    }
+
+    private static double distributionScore(String sentence, String method) {
+        return Double.parseDouble(sentence.replaceFirst(".*" + method + " ([0-9.]+[0-9]).*", "$1"));
+    }
+
+    @Test
     void hundredIntervalsHoldAsManyObservationsAsTheBinomialAllows() {
         // CHECKS C5.5: 84 to 95 of 100 at 90 %
         double coverage = wandering(500, 100, plan(100, Refit.NEVER, 1)).scores().get(0).coverage();

@@ -6,6 +6,8 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
+import java.util.stream.IntStream;
+import org.hipparchus.analysis.integration.gauss.GaussIntegratorFactory;
 import org.hipparchus.distribution.continuous.BetaDistribution;
 import org.hipparchus.distribution.continuous.NormalDistribution;
 import org.hipparchus.distribution.discrete.BinomialDistribution;
@@ -24,6 +26,7 @@ class ScoresTest {
         double[] errors = {-1, 0, 2, -1};
         assertEquals(1.22474487139159, Scores.rmse(errors), ROUNDING);
         assertEquals(1, Scores.mae(errors), ROUNDING);
+        assertEquals(0, Scores.mean(Arrays.stream(errors)), ROUNDING, "no bias");
         double scale = Scores.naiveScale(List.of(new double[] {1, 3, 2, 4, 3}), 1);
         assertEquals(1.5, scale, ROUNDING);
         assertEquals(0.666666666666667, Scores.mae(errors) / scale, 1e-15);
@@ -54,6 +57,62 @@ class ScoresTest {
         }
         // The midpoint rule loses about 1/n of the unbounded tails, times 2/alpha.
         assertEquals(4.67560558440283, sum / n, 2e-4);
+    }
+
+    @ParameterizedTest
+    @CsvSource({"3, 0.9", "1, 0.1"})
+    void pinballScoreOfTheWorkedExample(double observed, double score) {
+        // CHECKS C5.2: level 0.9, quantile 2
+        assertEquals(score, Scores.pinball(0.9, 2, observed), 1e-15);
+    }
+
+    @ParameterizedTest
+    @CsvSource({"7", "4", "1", "2", "6"})
+    void intervalScoreIsThatOfItsTwoQuantiles(double observed) {
+        double alpha = 0.1;
+        double both = Scores.pinball(alpha / 2, 2, observed) + Scores.pinball(1 - alpha / 2, 6, observed);
+        assertEquals(Scores.interval(2, 6, observed, alpha), 2 / alpha * both, 1e-13);
+    }
+
+    @ParameterizedTest
+    @CsvSource({"0, 0.233694977255109", "1, 0.602441357627616", "2, 1.45279182168590"})
+    void rankedProbabilityScoreOfANormalDistribution(double observed, double score) {
+        // CHECKS C5.3, digits printed; by quadrature over quantiles, and from a thousand quantiles as equally likely values
+        assertEquals(score, NormalCrps.of(observed), 1e-13);
+        NormalDistribution normal = new NormalDistribution();
+        double[] quantiles = IntStream.range(0, 1000).mapToDouble(i -> normal.inverseCumulativeProbability((i + 0.5) / 1000))
+                .toArray();
+        // steps of 1/1000 in the distribution function: their squares add up to 1/(12 n²) of a width of about 6
+        assertEquals(score, Scores.crps(quantiles, observed), 1e-5);
+    }
+
+    @Test
+    void meanRankedProbabilityScoreOfACalibratedNormalForecast() {
+        // CHECKS C5.3: 1/√π; the score grows like |y| only, so the rule reaches rounding
+        NormalDistribution normal = new NormalDistribution();
+        double mean = new GaussIntegratorFactory().legendre(100, -12, 12)
+                .integrate(y -> NormalCrps.of(y) * normal.density(y));
+        assertEquals(0.564189583547756, mean, 1e-12);
+    }
+
+    @Test
+    void rankedProbabilityScoreIsTheAreaBetweenTheDistributionFunctions() {
+        // F is 0, 1/3, 2/3, 1 between the values 1, 2, 4; against a step at 3: (1/3)² + (2/3)² · 1 + (1/3)² · 1
+        assertEquals(1 / 9.0 + 4 / 9.0 + 1 / 9.0, Scores.crps(new double[] {1, 2, 4}, 3), 1e-15);
+        assertEquals(2.5, Scores.crps(new double[] {1}, 3.5), 1e-15, "of one value the absolute error");
+    }
+
+    @Test
+    void rankedProbabilityScoreIsDistanceLessHalfTheSpread() {
+        // an independent form: mean |x - y| - mean |x - x'|/2
+        Random random = new Random(3);
+        double[] values = random.doubles(25, -2, 5).sorted().toArray();
+        for (double observed : new double[] {-3, 0.4, 2, 9}) {
+            double distance = Arrays.stream(values).map(x -> Math.abs(x - observed)).average().orElseThrow();
+            double spread = Arrays.stream(values).flatMap(x -> Arrays.stream(values).map(other -> Math.abs(x - other)))
+                    .average().orElseThrow();
+            assertEquals(distance - spread / 2, Scores.crps(values, observed), ROUNDING);
+        }
     }
 
     @ParameterizedTest
