@@ -37,6 +37,11 @@ public final class ModalAssurance {
         return Math.min(1, (product.re() * product.re() + product.im() * product.im()) / sizes);
     }
 
+    /** Returns {@link #of}, or 0 where a shape has no component that is not zero: it resembles nothing. */
+    static double orNone(List<Complex> a, List<Complex> b) {
+        return squared(a) > 0 && squared(b) > 0 ? of(a, b) : 0;
+    }
+
     private static double squared(List<Complex> shape) {
         return shape.stream().mapToDouble(z -> z.re() * z.re() + z.im() * z.im()).sum();
     }

@@ -7,6 +7,7 @@ import org.modestead.engine.Doubt;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
+import org.modestead.engine.recording.Preparation;
 
 /**
  * Eigenvalues, eigenfunctions and weights of a fitted operator at its chosen rank r.
@@ -19,6 +20,7 @@ import org.modestead.engine.recording.DelayEmbedding;
  * @param modes by falling energy share, numbered from 1
  * @param channels of the snapshots
  * @param delay of the snapshots
+ * @param preparation of the snapshots: how prepared units become those of the channels
  * @param timeUnit unit of time, empty when unknown
  * @param doubts what a reader of the results must know
  */
@@ -31,6 +33,7 @@ public record Spectrum(
         List<Mode> modes,
         List<Channel> channels,
         DelayEmbedding delay,
+        Preparation preparation,
         String timeUnit,
         List<Doubt> doubts) {
 
@@ -52,6 +55,6 @@ public record Spectrum(
     public Spectrum with(List<Mode> others, List<Doubt> further) {
         List<Doubt> all = new ArrayList<>(doubts);
         all.addAll(further);
-        return new Spectrum(eigenvalues, rates, vectors, joint, solo, others, channels, delay, timeUnit, all);
+        return new Spectrum(eigenvalues, rates, vectors, joint, solo, others, channels, delay, preparation, timeUnit, all);
     }
 }

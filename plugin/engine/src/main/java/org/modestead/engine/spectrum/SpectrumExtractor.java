@@ -37,7 +37,8 @@ public final class SpectrumExtractor {
         List<Mode> modes = modes(expansion, sample);
         progress.report(1, "extracted");
         return new Spectrum(expansion.eigenvalues(), expansion.rates(), expansion.vectors(), expansion.joint(), expansion.solo(), modes,
-                operator.snapshots().channels(), operator.snapshots().delay(), operator.snapshots().time().unit(),
+                operator.snapshots().channels(), operator.snapshots().delay(), operator.snapshots().preparation(),
+                operator.snapshots().time().unit(),
                 doubts(expansion, modes));
     }
 

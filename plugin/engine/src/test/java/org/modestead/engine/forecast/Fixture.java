@@ -113,8 +113,8 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
         ZMatrixRMaj joint = new ZMatrixRMaj(r, observable.numCols);
         CommonOps_ZDRM.solve(vectors, right, joint);
         List<Complex> rates = values.stream().map(evolution::rate).toList();
-        return new Spectrum(values, rates, vectors, joint, joint, modes(rates), snapshots.channels(), snapshots.delay(), "s",
-                List.of());
+        return new Spectrum(values, rates, vectors, joint, joint, modes(rates), snapshots.channels(), snapshots.delay(),
+                snapshots.preparation(), "s", List.of());
     }
 
     private static List<Mode> modes(List<Complex> rates) {

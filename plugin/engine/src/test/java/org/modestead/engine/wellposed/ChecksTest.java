@@ -23,6 +23,7 @@ import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
+import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.ModalExpansion;
@@ -66,7 +67,7 @@ class ChecksTest {
         ModalExpansion expansion = ModalExpansion.of(compression);
         Spectrum spectrum = new Spectrum(expansion.eigenvalues(), expansion.rates(), expansion.vectors(), expansion.joint(),
                 expansion.solo(),
-                modes, List.of(new Channel("a", "")), DelayEmbedding.NONE, "s", List.of());
+                modes, List.of(new Channel("a", "")), DelayEmbedding.NONE, Preparation.identity(1), "s", List.of());
         List<Integer> rungs = captured.size() == RUNGS.size() ? RUNGS : List.of(compression.rank());
         return new Evidence(operator, spectrum, rungs, ladder, expansion, captured, List.of(1.0, 1.0, 1.0, 1.0),
                 List.of(0.1, 0.1, 0.1, 0.1), List.of(0.1, 0.1, 0.1, 0.1), List.of(0, 0, 0, 0), true, 10, JudgeSettings.DEFAULT);

@@ -39,13 +39,18 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
      * @param label with unit in brackets
      * @param logarithmic base 10; values must be positive
      * @param categories tick labels at 0, 1, 2, ...; empty for a numeric axis
-     * @param time how numbers are shown: {@code ""} plain, {@code "date"} days since 1970, {@code "date-time"} seconds
-     *     since 1970
+     * @param time how numbers are shown: {@code ""} plain, {@code "whole"} plain and only where they are whole, {@code "date"}
+     *     days since 1970, {@code "date-time"} seconds since 1970
      */
     public record Axis(String label, boolean logarithmic, List<String> categories, String time) {
         /** A linear numeric axis. */
         public static Axis linear(String label) {
             return new Axis(label, false, List.of(), "");
+        }
+
+        /** A linear axis of whole numbers. */
+        public static Axis whole(String label) {
+            return new Axis(label, false, List.of(), "whole");
         }
 
         /** A logarithmic axis. */
@@ -121,6 +126,11 @@ public record Figure(String id, Kind kind, String title, String caption, Axis x,
     /** A figure with one vertical axis. */
     public Figure(String id, Kind kind, String title, String caption, Axis x, Axis y, List<Layer> layers) {
         this(id, kind, title, caption, x, y, Optional.empty(), layers);
+    }
+
+    /** The same figure under another id. */
+    public Figure named(String other) {
+        return new Figure(other, kind, title, caption, x, y, right, layers);
     }
 
     /** Takes an immutable copy. */

@@ -6,7 +6,9 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalLong;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
+import org.modestead.engine.spectrum.ChannelGroup;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.spectrum.SpectrumExtractor;
@@ -18,10 +20,13 @@ import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.figure.EigenvaluePlane;
 import org.modestead.nodes.figure.Figure;
+import org.modestead.nodes.figure.GroupFigures;
 import org.modestead.nodes.figure.ShapeFigures;
+import org.modestead.nodes.table.TableSchema;
 import org.modestead.nodes.words.Digits;
 import org.modestead.nodes.words.TimeUnit;
 
@@ -46,7 +51,9 @@ public final class SpectrumExtractorNode implements Node {
                                 + " is missing.",
                                 ModeTable.SCHEMA),
                         Port.table("shapes", "Shapes", "How far and how far out of step each channel moves in each mode.",
-                                ShapeTable.SCHEMA)),
+                                ShapeTable.SCHEMA),
+                        Port.table("groups", "Groups", "How each group of channels moves in each mode; empty when channels"
+                                + " are not grouped.", GroupTable.SCHEMA)),
                 settings(), 1);
     }
 
@@ -58,7 +65,8 @@ public final class SpectrumExtractorNode implements Node {
                 Modes are numbered by falling share of the signal's mean square.
 
                 The shape tells by channel how far it moves in the mode and with what phase against the channel that \
-                moves most. Phases of channels that hardly move mean nothing.
+                moves most. Phases of channels that hardly move mean nothing. Channels can be grouped, by the beginning of \
+                their names or by a list; then each group's share of the mode and the phase of its mean are told as well.
 
                 These are the modes of one projection. Whether they belong to the system is not known until the \
                 Well-posedness Checker has looked. Do not report them before.
@@ -68,28 +76,39 @@ public final class SpectrumExtractorNode implements Node {
     }
 
     private static List<Setting> settings() {
-        return List.of(
+        List<Setting> all = new ArrayList<>(List.of(
                 new Setting.Whole(new Setting.Common(SHAPE_MODES, "Modes in the shape table", "Tables", "Number of"
-                        + " modes, strongest first, whose shapes are written; 0 writes all."), "modes", 0, 100_000,
+                        + " modes, strongest first, whose shapes, and those of groups, are written; 0 writes all."), "modes", 0,
+                        100_000,
                         OptionalLong.of(0)),
                 new Setting.Choice(new Setting.Common(SHAPE_DELAYS, "Delays in the shape table", "Tables", "Whether"
                         + " shapes are written for the newest sample of the state only or for the delayed ones too."),
                         List.of(
                         new Setting.Option("newest", "Newest sample", "One row a mode and channel."),
-                        new Setting.Option("all", "All samples", "One row a mode, channel and delay.")), "newest"));
+                        new Setting.Option("all", "All samples", "One row a mode, channel and delay.")), "newest")));
+        all.addAll(GroupSettings.declared());
+        return all;
+    }
+
+    @Override
+    public List<SettingProblem> check(Map<String, TableSchema> inputs, Settings settings) {
+        return GroupSettings.problems(settings);
     }
 
     @Override
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
         FittedOperator operator = inputs.get("operator", FittedOperator.class);
+        List<ChannelGroup> groups = GroupSettings.read(settings, operator.snapshots().channels().stream().map(Channel::name).toList());
         Spectrum spectrum = SpectrumExtractor.extract(operator, context.progress());
         Preparation preparation = operator.snapshots().preparation();
         List<Figure> figures = new ArrayList<>();
         figures.add(EigenvaluePlane.figure(spectrum, Optional.empty()));
         figures.addAll(ShapeFigures.figures(spectrum, preparation, MODES_DRAWN));
+        figures.addAll(GroupFigures.figures(spectrum, groups, MODES_DRAWN));
+        int most = settings.whole(SHAPE_MODES);
         return new NodeResult(Map.of("spectrum", spectrum, "modes", ModeTable.of(spectrum, Optional.empty()), "shapes",
-                ShapeTable.of(spectrum, preparation, settings.whole(SHAPE_MODES),
-                        settings.text(SHAPE_DELAYS).equals("all"))),
+                ShapeTable.of(spectrum, preparation, most, settings.text(SHAPE_DELAYS).equals("all")),
+                "groups", GroupTable.of(spectrum, groups, most)),
                 figures, summary(spectrum), spectrum.doubts());
     }
 

@@ -49,6 +49,8 @@ final class CategoryPlot {
         HouseStyle.apply(chart.getStyler(), figure);
         chart.getStyler().setYAxisMin(y.low()).setYAxisMax(y.high());
         chart.getStyler().setAvailableSpaceFill(0.7).setPlotGridVerticalLinesVisible(false);
+        // the series of a shape are groups of channels, which stand side by side and never in one place
+        chart.getStyler().setOverlapped(figure.kind() == Figure.Kind.SHAPES);
         if (!level(figure)) {
             chart.getStyler().setXAxisTicksVisible(false).setXAxisTitleVisible(false);
         }

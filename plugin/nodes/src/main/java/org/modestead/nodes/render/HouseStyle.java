@@ -13,6 +13,8 @@ import org.modestead.nodes.figure.Figure;
 /** How every picture looks: white paper, thin frame, light grid. */
 final class HouseStyle {
     private static final Font PLAIN = new Font(Font.SANS_SERIF, Font.PLAIN, 12);
+    static final int ACROSS = 80;
+    static final int UPWARDS = 46;
     private static final int TICK_DIGITS = 7;
     private static final int SHORTEST_PLAIN = 5;
     private static final int LONGEST_PLAIN = 5;
@@ -28,9 +30,19 @@ final class HouseStyle {
         style.setPlotMargin(0).setAxisTitleFont(PLAIN).setAxisTickLabelsFont(PLAIN.deriveFont(11f)).setAxisTitlePadding(8)
                 .setAxisTickLabelsColor(Palette.QUIET_INK).setAxisTickMarksColor(Palette.FRAME).setAxisTickPadding(4)
                 .setAxisTickMarkLength(4).setPlotGridLinesColor(Palette.GRID).setPlotGridLinesStroke(new BasicStroke(1f))
-                .setTimezone(TimeZone.getTimeZone("UTC")).setXAxisTickMarkSpacingHint(80).setYAxisTickMarkSpacingHint(46)
+                .setTimezone(TimeZone.getTimeZone("UTC")).setXAxisTickMarkSpacingHint(ACROSS).setYAxisTickMarkSpacingHint(UPWARDS)
                 .setXAxisLogarithmic(figure.x().logarithmic()).setYAxisLogarithmic(figure.y().logarithmic());
         style.setPlotContentSize(1);
+    }
+
+    /**
+     * Returns how far apart ticks stand at least, so that an axis of whole numbers carries no others.
+     *
+     * @param usual distance in pixels
+     * @param length of the axis in pixels, roughly
+     */
+    static int spacing(Figure.Axis axis, Range range, int usual, int length) {
+        return axis.time().equals("whole") ? Math.max(usual, (int) (length / (range.high() - range.low()))) : usual;
     }
 
     /** Returns a tick's number without the rounding errors of stepping, as few characters as say it. */

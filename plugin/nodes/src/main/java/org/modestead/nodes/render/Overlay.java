@@ -61,11 +61,19 @@ record Overlay(Figure figure, Range x, Range y, DoubleUnaryOperator screenX, Dou
     private void labels(Graphics2D graphics, Figure.Points points, List<Rectangle2D> taken) {
         for (int i = 0; i < points.x().length; i++) {
             if (Double.isFinite(points.x()[i]) && Range.drawable(points.y()[i], figure.y())) {
-                String label = points.labels().get(i);
-                double at = left(points.x()[i]);
-                boolean room = at + GAP + width(label) < left(x.high());
-                text(graphics, label, room ? at + GAP : at - GAP - width(label), top(points.y()[i]) - 5, taken);
+                label(graphics, points.labels().get(i), left(points.x()[i]), top(points.y()[i]), taken);
             }
+        }
+    }
+
+    /** Above and right of the mark where there is room, else above and left, else below and right. */
+    private void label(Graphics2D graphics, String label, double at, double height, List<Rectangle2D> taken) {
+        boolean room = at + GAP + width(label) < left(x.high());
+        if (room && text(graphics, label, at + GAP, height - 5, taken)) {
+            return;
+        }
+        if (!text(graphics, label, at - GAP - width(label), height - 5, taken) && room) {
+            text(graphics, label, at + GAP, height + 14, taken);
         }
     }
 
@@ -81,20 +89,22 @@ record Overlay(Figure figure, Range x, Range y, DoubleUnaryOperator screenX, Dou
         return text.isEmpty() ? 0 : new TextLayout(text, SMALL, METRICS).getAdvance();
     }
 
-    private static void text(Graphics2D graphics, String text, double left, double baseline, List<Rectangle2D> taken) {
+    /** Returns whether there was nothing in the way. */
+    private static boolean text(Graphics2D graphics, String text, double left, double baseline, List<Rectangle2D> taken) {
         if (text.isEmpty()) {
-            return;
+            return true;
         }
         Shape outline = new TextLayout(text, SMALL, METRICS)
                 .getOutline(AffineTransform.getTranslateInstance(left, baseline));
         Rectangle2D bounds = outline.getBounds2D();
         if (taken.stream().anyMatch(bounds::intersects)) {
-            return;
+            return false;
         }
         taken.add(bounds);
         halo(graphics, outline);
         graphics.setColor(Palette.INK);
         graphics.fill(outline);
+        return true;
     }
 
     private static void halo(Graphics2D graphics, Shape outline) {

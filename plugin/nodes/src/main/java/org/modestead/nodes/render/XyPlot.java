@@ -16,6 +16,8 @@ import org.modestead.nodes.figure.Figure;
 final class XyPlot {
     private static final int MARKED_UP_TO = 60;
     private static final int RIGHT = 1;
+    /** Pixels that title, labels and ticks take, roughly. */
+    private static final int FRAME = 90;
     private static final Color CLEAR = new Color(0, 0, 0, 0);
 
     private final Figure figure;
@@ -49,6 +51,9 @@ final class XyPlot {
             chart.setCustomXAxisTickLabelsFormatter(HouseStyle::tick);
         }
         times.apply(chart.getStyler());
+        Size size = Size.of(figure);
+        chart.getStyler().setXAxisTickMarkSpacingHint(HouseStyle.spacing(figure.x(), x, HouseStyle.ACROSS, size.width() - FRAME))
+                .setYAxisTickMarkSpacingHint(HouseStyle.spacing(figure.y(), y, HouseStyle.UPWARDS, size.height() - FRAME));
         chart.getStyler().setXAxisMin(times.axis(x.low())).setXAxisMax(times.axis(x.high())).setYAxisMin(y.low())
                 .setYAxisMax(y.high());
         chart.setTitle(figure.title());

@@ -172,9 +172,7 @@ public final class HtmlReport {
 
     private void picture(Figure figure) {
         figures++;
-        Figure numbered = new Figure("figure-" + figures, figure.kind(), figure.title(), figure.caption(), figure.x(),
-                figure.y(),
-                figure.layers());
+        Figure numbered = figure.named("figure-" + figures);
         out.append("<figure class=\"").append(width(figure)).append("\">\n")
                 .append(FigureRenderer.svg(numbered)).append("\n<figcaption>").append(escaped("Figure " + figures + "."
                 + " " + figure.caption()))

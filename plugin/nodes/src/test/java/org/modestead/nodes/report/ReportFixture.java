@@ -53,7 +53,8 @@ public final class ReportFixture {
                 mode(4, -900, 12, 1e-5, false), mode(5, Double.NEGATIVE_INFINITY, 0, 0, false));
         List<Complex> rates = modes.stream().map(Mode::rate).toList();
         ZMatrixRMaj none = new ZMatrixRMaj(1, 1);
-        return new Spectrum(rates, rates, none, none, none, modes, channels, DelayEmbedding.NONE, "s",
+        return new Spectrum(rates, rates, none, none, none, modes, channels, DelayEmbedding.NONE,
+                Preparation.identity(channels.size()), "s",
                 List.of(new Doubt("aliasing", "frequencies above 10 Hz appear folded")));
     }
 
