@@ -24,8 +24,15 @@ public record OccupationFunctions(Kernel kernel, List<Segment> segments) impleme
      * @param weights quadrature weights, length p; see {@link Quadrature}
      * @param start state at the first time, length N, smoothed where asked
      * @param end state at the last time, length N, smoothed where asked
+     * @param runWeight how much its run counts, positive
      */
-    public record Segment(double[] times, DMatrixRMaj states, double[] weights, double[] start, double[] end) {}
+    public record Segment(double[] times, DMatrixRMaj states, double[] weights, double[] start, double[] end, double runWeight) {
+
+        /** A segment of a run of weight 1. */
+        public Segment(double[] times, DMatrixRMaj states, double[] weights, double[] start, double[] end) {
+            this(times, states, weights, start, end, 1);
+        }
+    }
 
     /** Takes an immutable copy. */
     public OccupationFunctions {

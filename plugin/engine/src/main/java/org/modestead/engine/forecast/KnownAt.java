@@ -75,7 +75,7 @@ final class KnownAt {
 
     private static Run samples(Run run, int from, int to) {
         return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), rows(run.values(), from, to),
-                rows(run.inputs(), from, to), 0);
+                rows(run.inputs(), from, to), 0, run.weight());
     }
 
     private static DMatrixRMaj rows(DMatrixRMaj a, int from, int to) {
@@ -86,6 +86,6 @@ final class KnownAt {
         double[] times = DoubleStream.concat(Arrays.stream(before.times()),
                 Arrays.stream(after.times())).toArray();
         return new Run(before.id(), times, CommonOps_DDRM.concatRowsMulti(before.values(), after.values()),
-                CommonOps_DDRM.concatRowsMulti(before.inputs(), after.inputs()), before.leadIn());
+                CommonOps_DDRM.concatRowsMulti(before.inputs(), after.inputs()), before.leadIn(), before.weight());
     }
 }

@@ -56,7 +56,7 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
 
     private static Run rows(Run run, int from, int to) {
         return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), Matrices.block(run.values(), from, to, 0, run.values().numCols),
-                Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0);
+                Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0, run.weight());
     }
 
     private static Snapshots parts(Snapshots s, List<Run> training, List<Run> judging) {

@@ -49,13 +49,15 @@ public record KernelStepEstimator(Kernel space, int landmarks, int stride) imple
     public Compression compress(Snapshots snapshots, Progress progress) {
         StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, stride);
         Evolution evolution = new Evolution.StepMap(pairs.step());
+        RowWeights weights = pairs.weights();
         if (pairs.count() <= DIRECT) {
-            return new GramCompression(new KernelSections(space, pairs.now()), space.matrix(pairs.now(), pairs.now()),
+            return weights.functions(new GramCompression(new KernelSections(space, pairs.now()), space.matrix(pairs.now(), pairs.now()),
                     space.matrix(pairs.next(), pairs.now()), space.matrix(pairs.next(), pairs.next()), pairs.now(), InnerProduct.SPACE,
-                    evolution);
+                    evolution));
         }
         LandmarkFeatures features = LandmarkFeatures.choose(space, pairs.now(), landmarks, progress);
-        return new FactoredCompression(features, features.evaluate(pairs.now()), features.evaluate(pairs.next()), pairs.now(),
+        return new FactoredCompression(features, weights.rows(features.evaluate(pairs.now())),
+                weights.rows(features.evaluate(pairs.next())), weights.rows(pairs.now()),
                 InnerProduct.SPACE, evolution);
     }
 

@@ -81,7 +81,8 @@ public record OccupationEstimator(Kernel space, SegmentPlan plan, double contrac
         DMatrixRMaj action = difference(basis.evaluate(ends), basis.evaluate(starts));
         DMatrixRMaj second = difference(difference(space.matrix(ends, ends), space.matrix(ends, starts)),
                 difference(space.matrix(starts, ends), space.matrix(starts, starts)));
-        return new GramCompression(basis, gram, action, second, averaged(segments, stacked(segments)), InnerProduct.SPACE, evolution());
+        return weights(segments).functions(new GramCompression(basis, gram, action, second, averaged(segments, stacked(segments)),
+                InnerProduct.SPACE, evolution()));
     }
 
     private Compression factored(List<Segment> segments, Progress progress) {
@@ -89,7 +90,13 @@ public record OccupationEstimator(Kernel space, SegmentPlan plan, double contrac
         LandmarkFeatures features = LandmarkFeatures.choose(space, nodes, LANDMARKS, progress);
         DMatrixRMaj now = averaged(segments, features.evaluate(nodes));
         DMatrixRMaj next = difference(features.evaluate(ends(segments, false)), features.evaluate(ends(segments, true)));
-        return new FactoredCompression(features, now, next, averaged(segments, nodes), InnerProduct.SPACE, evolution());
+        RowWeights weights = weights(segments);
+        return new FactoredCompression(features, weights.rows(now), weights.rows(next), weights.rows(averaged(segments, nodes)),
+                InnerProduct.SPACE, evolution());
+    }
+
+    private static RowWeights weights(List<Segment> segments) {
+        return RowWeights.of(segments.stream().mapToDouble(Segment::runWeight).toArray());
     }
 
     private Evolution evolution() {

@@ -37,6 +37,6 @@ final class Segments {
         double[] times = Arrays.copyOfRange(run.times(), from, to + 1);
         DMatrixRMaj states = Matrices.block(run.states(), from, to + 1, 0, run.states().numCols);
         return new Segment(times, states, Quadrature.weights(times), EndState.of(times, states, true, smoothing),
-                EndState.of(times, states, false, smoothing));
+                EndState.of(times, states, false, smoothing), run.weight());
     }
 }

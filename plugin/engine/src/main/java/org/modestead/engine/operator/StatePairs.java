@@ -1,5 +1,6 @@
 package org.modestead.engine.operator;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
@@ -57,6 +58,17 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun>
             at += count;
         }
         return new StatePairs(now, next, stride * step, runs, snapshots.inputs().size(), snapshots.delay().reach(), stride);
+    }
+
+    /** Returns the weights of the pairs, those of their runs. */
+    RowWeights weights() {
+        double[] out = new double[count()];
+        int at = 0;
+        for (StateRun run : runs) {
+            Arrays.fill(out, at, at + run.count() - stride, run.weight());
+            at += run.count() - stride;
+        }
+        return RowWeights.of(out);
     }
 
     /** Returns the inputs that act between x and y, m x size. */

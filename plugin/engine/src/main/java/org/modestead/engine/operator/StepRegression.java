@@ -30,20 +30,21 @@ final class StepRegression {
 
     static FactoredCompression of(StatePairs pairs, FunctionBasis functions, InputUse use, Terms terms,
             NoiseCorrection correction) {
+        RowWeights weights = pairs.weights();
         double weight = 1 / Math.sqrt(pairs.count());
-        DMatrixRMaj now = Matrices.scaled(functions.evaluate(pairs.now()), weight);
-        DMatrixRMaj next = Matrices.scaled(functions.evaluate(pairs.next()), weight);
-        DMatrixRMaj target = Matrices.scaled(pairs.now(), weight);
+        DMatrixRMaj now = weights.rows(functions.evaluate(pairs.now()), weight);
+        DMatrixRMaj next = weights.rows(functions.evaluate(pairs.next()), weight);
+        DMatrixRMaj target = weights.rows(pairs.now(), weight);
         Evolution evolution = new Evolution.StepMap(pairs.step());
         if (use == InputUse.LEFT_IN || pairs.inputs() == 0) {
             return new FactoredCompression(functions, now, next, target, InnerProduct.DATA, evolution, correction);
         }
         InputWindow window = new InputWindow(use, pairs.inputs(), pairs.reach(), pairs.stride());
         FunctionBasis inputTerms = terms.on(pairs.now().numCols, window.size());
-        DMatrixRMaj known = Matrices.scaled(inputTerms.evaluate(
+        DMatrixRMaj known = weights.rows(inputTerms.evaluate(
                 CommonOps_DDRM.concatColumnsMulti(pairs.now(), pairs.windows(window))), weight);
         Projection projection = Projection.on(known, inputTerms);
-        DMatrixRMaj targetNext = Matrices.scaled(pairs.next(), weight);
+        DMatrixRMaj targetNext = weights.rows(pairs.next(), weight);
         InputEffect effect = new InputEffect(window, inputTerms, projection.map(), projection.held(now), projection.held(next),
                 projection.held(target), projection.held(targetNext));
         return new FactoredCompression(functions, projection.rest(now), projection.rest(next), projection.rest(target),

@@ -8,6 +8,8 @@ import org.ejml.data.DMatrixRMaj;
  * Samples of one stretch at the wanted times: training first, then calibration, then holdout.
  *
  * @param id name of the runs made from it
+ * @param recorded name of the run it was cut from
+ * @param weight of that run as recorded
  * @param times rising
  * @param values channels; written once, by {@link #prepare(Preparation)}
  * @param inputs inputs
@@ -17,6 +19,8 @@ import org.ejml.data.DMatrixRMaj;
  */
 record Piece(
         String id,
+        String recorded,
+        double weight,
         double[] times,
         DMatrixRMaj values,
         DMatrixRMaj inputs,
@@ -29,11 +33,12 @@ record Piece(
      * Samples one stretch; a sample of a part is interpolated from recorded samples of that part and earlier ones only.
      *
      * @param id name
+     * @param run it is cut from
      * @param rows without missing cells, at least one row
      * @param gaps gaps of the run
      * @param wanted which times
      */
-    static Piece sample(String id, StagedRows rows, Gaps gaps, TargetTimes wanted) {
+    static Piece sample(String id, Run run, StagedRows rows, Gaps gaps, TargetTimes wanted) {
         double[] times = wanted.of(rows, gaps);
         DMatrixRMaj values = new DMatrixRMaj(times.length, rows.values().numCols);
         DMatrixRMaj inputs = new DMatrixRMaj(times.length, rows.inputs().numCols);
@@ -51,7 +56,7 @@ record Piece(
                 done = ends[stage];
             }
         }
-        return new Piece(id, times, values, inputs, ends, interpolated, rows.filled());
+        return new Piece(id, run.id(), run.weight(), times, values, inputs, ends, interpolated, rows.filled());
     }
 
     /** Returns the number of samples. */

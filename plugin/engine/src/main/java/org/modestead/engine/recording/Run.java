@@ -14,8 +14,9 @@ import org.ejml.data.DMatrixRMaj;
  * @param inputs known inputs (control), p x q, q may be 0
  * @param leadIn leading samples given only as history (delay coordinates of the first state), in [0, p]; they are
  *     never predicted and never scored
+ * @param weight how much each of its samples counts in a fit, at least 0; only the ratio to other runs matters
  */
-public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int leadIn) {
+public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int leadIn, double weight) {
 
     /** Checks that the shapes agree. */
     public Run {
@@ -27,6 +28,19 @@ public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inp
         if (leadIn < 0 || leadIn > times.length) {
             throw new IllegalArgumentException("run " + id + ": lead-in " + leadIn + " of " + times.length + " samples");
         }
+        if (!(weight >= 0) || Double.isInfinite(weight)) {
+            throw new IllegalArgumentException("run " + id + ": weight " + weight);
+        }
+    }
+
+    /** A run of weight 1. */
+    public Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs, int leadIn) {
+        this(id, times, values, inputs, leadIn, 1);
+    }
+
+    /** The same run with another weight. */
+    public Run weighted(double other) {
+        return new Run(id, times, values, inputs, leadIn, other);
     }
 
     /**

@@ -39,7 +39,7 @@ record RunPieces(SnapshotPlan plan, TargetTimes wanted, List<String> columnNames
                 continue;
             }
             String id = stretches.size() == 1 ? run.id() : run.id() + "#" + (i + 1);
-            Piece piece = Piece.sample(id, rows, gaps, wanted);
+            Piece piece = Piece.sample(id, run, rows, gaps, wanted);
             usable += rows.length();
             longest = Math.max(longest, piece.samples());
             if (piece.samples() < plan.samplesNeeded()) {

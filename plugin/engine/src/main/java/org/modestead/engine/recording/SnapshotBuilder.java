@@ -65,13 +65,14 @@ public final class SnapshotBuilder {
         progress.report(0.7, "detrending and scaling");
         Preparation preparation = preparation();
         prepare(preparation);
-        List<Run> training = parts(Part.TRAINING);
-        List<Run> calibration = parts(Part.CALIBRATION);
-        List<Run> holdout = parts(Part.HOLDOUT);
+        RunWeights weights = RunWeights.of(training(), plan.weighting(), recording.channels().size());
+        List<Run> training = parts(Part.TRAINING, weights);
+        List<Run> calibration = parts(Part.CALIBRATION, weights);
+        List<Run> holdout = parts(Part.HOLDOUT, weights);
         Snapshots bare = new Snapshots(recording.channels(), recording.inputs(), recording.time(), training, calibration,
                 holdout, step, plan.delay(), preparation, List.of(), log.doubts());
         progress.report(1, "snapshots ready");
-        return new SnapshotFacts(recording, plan, log, bare).complete();
+        return new SnapshotFacts(recording, plan, log, weights, bare).complete();
     }
 
     private void prepare(Preparation preparation) {
@@ -111,13 +112,17 @@ public final class SnapshotBuilder {
         return OptionalDouble.empty();
     }
 
+    /** Returns the pieces that train. */
+    private List<Piece> training() {
+        return pieces.stream().filter(piece -> piece.samples(Part.TRAINING) >= plan.samplesNeeded() && counts(piece)).toList();
+    }
+
+    private boolean counts(Piece piece) {
+        return plan.weighting() != RunWeighting.GIVEN || piece.weight() > 0;
+    }
+
     private Preparation preparation() {
-        List<Piece> training = new ArrayList<>();
-        for (Piece piece : pieces) {
-            if (piece.samples(Part.TRAINING) >= plan.samplesNeeded()) {
-                training.add(piece);
-            }
-        }
+        List<Piece> training = training();
         if (training.isEmpty()) {
             throw new RecordingFault("training part", "no run left for it has the " + plan.samplesNeeded()
                     + " samples two states need", "keep less away or choose a smaller delay depth");
@@ -127,11 +132,15 @@ public final class SnapshotBuilder {
                 ChannelScales.fit(training, recording.channels(), trend, plan.scaling()));
     }
 
-    private List<Run> parts(Part part) {
+    private List<Run> parts(Part part, RunWeights weights) {
         List<Run> runs = new ArrayList<>();
         for (Piece piece : pieces) {
+            if (part == Part.TRAINING && !counts(piece)) {
+                log.leftOut(piece.id(), piece.samples(part), "of weight 0");
+                continue;
+            }
             Optional<Run> run = piece.part(part, plan.delay().reach());
-            run.ifPresent(runs::add);
+            run.ifPresent(found -> runs.add(found.weighted(weights.of(piece.recorded()))));
             if (run.isEmpty() && piece.samples(part) > 0) {
                 log.leftOut(piece.id(), piece.samples(part), "too few for two states in the " + SnapshotFacts.lower(part)
                         + " part (" + plan.samplesNeeded() + " samples)");

@@ -12,9 +12,10 @@ import org.modestead.engine.recording.Snapshots.Part;
  * @param recording as logged
  * @param plan what was asked
  * @param log what was counted
+ * @param weights of the training runs
  * @param bare snapshots that have no facts yet
  */
-record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log, Snapshots bare) {
+record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log, RunWeights weights, Snapshots bare) {
 
     /** Returns the snapshots with their facts. */
     Snapshots complete() {
@@ -36,6 +37,7 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
         facts.add(new Fact("detrend", lower(plan.detrend())));
         facts.add(new Fact("scaling", lower(plan.scaling())));
         facts.add(new Fact("delay", delay()));
+        facts.add(new Fact("run weights", weights.words(plan.weighting())));
         for (Part part : Part.values()) {
             facts.add(new Fact(lower(part) + " runs", Integer.toString(bare.runs(part).size())));
             facts.add(new Fact(lower(part) + " samples", Long.toString(samples(part))));

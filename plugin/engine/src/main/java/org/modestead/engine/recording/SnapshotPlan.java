@@ -16,6 +16,7 @@ import java.util.OptionalDouble;
  * @param delay delay coordinates
  * @param holdout what only judges
  * @param calibration what only sets the width of forecast bands, taken from what the holdout leaves
+ * @param weighting how much the samples of each training run count in a fit
  */
 public record SnapshotPlan(
         GapPolicy gapPolicy,
@@ -27,7 +28,8 @@ public record SnapshotPlan(
         Scaling scaling,
         DelayEmbedding delay,
         Split holdout,
-        Split calibration) {
+        Split calibration,
+        RunWeighting weighting) {
 
     /** Gap factor of a plan that names none. */
     public static final double DEFAULT_GAP_FACTOR = 1.5;
@@ -35,7 +37,7 @@ public record SnapshotPlan(
     /** Gaps split, recorded times and values kept, missing cells interpolated, no delays, everything trains. */
     public static final SnapshotPlan DEFAULT = new SnapshotPlan(GapPolicy.SPLIT, OptionalDouble.empty(), Resampling.KEEP,
             OptionalDouble.empty(), MissingPolicy.INTERPOLATE, Detrend.NONE, Scaling.NONE, DelayEmbedding.NONE,
-            new Split.None(), new Split.None());
+            new Split.None(), new Split.None(), RunWeighting.EQUAL_SAMPLES);
 
     /** Checks the ranges. */
     public SnapshotPlan {
@@ -47,6 +49,7 @@ public record SnapshotPlan(
         Objects.requireNonNull(delay);
         Objects.requireNonNull(holdout);
         Objects.requireNonNull(calibration);
+        Objects.requireNonNull(weighting);
         if (gapFactor.isPresent() && !(gapFactor.getAsDouble() > 1)) {
             throw new IllegalArgumentException("a gap factor of " + gapFactor.getAsDouble() + " must be above 1");
         }
@@ -65,49 +68,54 @@ public record SnapshotPlan(
         return delay.reach() + 2;
     }
 
+    /** The same plan with other weights of runs. */
+    public SnapshotPlan withWeighting(RunWeighting rule) {
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, calibration, rule);
+    }
+
     /** The same plan with another way with gaps. */
     public SnapshotPlan withGaps(GapPolicy policy, double factor) {
         return new SnapshotPlan(policy, OptionalDouble.of(factor), resampling, step, missing, detrend, scaling, delay,
-                holdout, calibration);
+                holdout, calibration, weighting);
     }
 
     /** The same plan, resampled to the median step of all runs. */
     public SnapshotPlan withUniformStep() {
         return new SnapshotPlan(gapPolicy, gapFactor, Resampling.UNIFORM, OptionalDouble.empty(), missing, detrend, scaling,
-                delay, holdout, calibration);
+                delay, holdout, calibration, weighting);
     }
 
     /** The same plan, resampled to a step in time units. */
     public SnapshotPlan withUniformStep(double uniform) {
         return new SnapshotPlan(gapPolicy, gapFactor, Resampling.UNIFORM, OptionalDouble.of(uniform), missing, detrend,
-                scaling, delay, holdout, calibration);
+                scaling, delay, holdout, calibration, weighting);
     }
 
     /** The same plan with another way with missing cells. */
     public SnapshotPlan withMissing(MissingPolicy policy) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, policy, detrend, scaling, delay, holdout,
-                calibration);
+                calibration, weighting);
     }
 
     /** The same plan with other detrending and scaling. */
     public SnapshotPlan withPreparation(Detrend trend, Scaling scale) {
-        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, trend, scale, delay, holdout, calibration);
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, trend, scale, delay, holdout, calibration, weighting);
     }
 
     /** The same plan with other delay coordinates. */
     public SnapshotPlan withDelay(int depth, int spacing) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling,
-                new DelayEmbedding(depth, spacing), holdout, calibration);
+                new DelayEmbedding(depth, spacing), holdout, calibration, weighting);
     }
 
     /** The same plan with another holdout. */
     public SnapshotPlan withHoldout(Split split) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, split,
-                calibration);
+                calibration, weighting);
     }
 
     /** The same plan with another calibration part. */
     public SnapshotPlan withCalibration(Split split) {
-        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, split);
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, split, weighting);
     }
 }

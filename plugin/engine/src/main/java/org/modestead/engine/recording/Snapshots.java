@@ -87,7 +87,8 @@ public record Snapshots(
     }
 
     /**
-     * Returns the delay-embedded states of one part, one entry a run that is long enough for at least one state.
+     * Returns the delay-embedded states of one part, one entry a run that is long enough for at least one state;
+     * training runs of weight 0 take no part.
      *
      * @param part which runs
      * @return possibly empty, never null
@@ -95,7 +96,8 @@ public record Snapshots(
     public List<StateRun> states(Part part) {
         List<StateRun> embedded = new ArrayList<>();
         for (Run run : runs(part)) {
-            if (run.samples() > delay.reach()) {
+            boolean counts = part != Part.TRAINING || run.weight() > 0;
+            if (counts && run.samples() > delay.reach()) {
                 embedded.add(embed(run));
             }
         }
@@ -126,6 +128,6 @@ public record Snapshots(
                         inputs.size());
             }
         }
-        return new StateRun(run.id(), times, states, known);
+        return new StateRun(run.id(), times, states, known, run.weight());
     }
 }

@@ -11,8 +11,9 @@ import org.ejml.data.DMatrixRMaj;
  * @param states p x N with N = channels * depth, column {@code delay * channels + channel}
  * @param inputs known inputs over the whole reach of each state, p x q (reach + 1): those at its own time first, then those one
  *     sample earlier, and so on
+ * @param weight see {@link Run#weight()}
  */
-public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMaj inputs) {
+public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMaj inputs, double weight) {
 
     /** Checks that the shapes agree. */
     public StateRun {
@@ -20,6 +21,11 @@ public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMa
         if (states.numRows != times.length || inputs.numRows != times.length) {
             throw new IllegalArgumentException("run " + id + ": rows of times, states and inputs differ");
         }
+    }
+
+    /** A run of weight 1. */
+    public StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMaj inputs) {
+        this(id, times, states, inputs, 1);
     }
 
     /** Returns the number of states p. */

@@ -22,6 +22,7 @@ import org.modestead.nodes.table.TableSchema;
  * @param run column that names the run of each row; empty = one run
  * @param channels columns of measured quantities; empty = every column of numbers without another part
  * @param inputs columns of known inputs
+ * @param weight column with the weight of each run, the same number in all its rows; empty = none
  * @param units unit by column name or channel name; others are read from {@code name [unit]}
  */
 record RecordingColumns(
@@ -31,6 +32,7 @@ record RecordingColumns(
         String run,
         List<String> channels,
         List<String> inputs,
+        String weight,
         Map<String, String> units) {
 
     private static final Pattern NAME_AND_UNIT = Pattern.compile("(.*\\S)\\s*\\[([^\\[\\]]*)\\]\\s*");
@@ -41,6 +43,12 @@ record RecordingColumns(
         units = Map.copyOf(units);
     }
 
+    /** Without a column of weights. */
+    RecordingColumns(String time, double rowStep, String timeUnit, String run, List<String> channels, List<String> inputs,
+            Map<String, String> units) {
+        this(time, rowStep, timeUnit, run, channels, inputs, "", units);
+    }
+
     /** Returns the channel columns, found from the schema where none are named. */
     List<String> channelColumns(TableSchema schema) {
         if (!channels.isEmpty()) {
@@ -49,6 +57,7 @@ record RecordingColumns(
         Set<String> taken = new HashSet<>(inputs);
         taken.add(time);
         taken.add(run);
+        taken.add(weight);
         return schema.columns().stream()
                 .filter(column -> column.type().isNumber() && !taken.contains(column.name()))
                 .map(Column::name)
@@ -61,6 +70,7 @@ record RecordingColumns(
         taken.addAll(channels);
         taken.add(time);
         taken.add(run);
+        taken.add(weight);
         return !channels.isEmpty() ? List.of() : schema.columns().stream()
                 .filter(column -> column.type() == CellType.TEXT && !taken.contains(column.name()))
                 .map(Column::name)

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -34,6 +35,7 @@ final class RecordingReader {
     private final List<TextColumnWatch> watches;
     private final int timeColumn;
     private final int runColumn;
+    private final Optional<NumberCell> weightCell;
     private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
 
     private RecordingReader(Table table, RecordingColumns columns) {
@@ -47,6 +49,8 @@ final class RecordingReader {
                 .map(name -> new TextColumnWatch(name, position(name))).toList();
         this.timeColumn = columns.time().isEmpty() ? NONE : position(columns.time());
         this.runColumn = columns.run().isEmpty() ? NONE : position(columns.run());
+        this.weightCell = Optional.of(columns.weight()).filter(name -> !name.isEmpty())
+                .map(name -> new NumberCell(table.origin(), name, position(name), type(name)));
     }
 
     /**
@@ -101,6 +105,7 @@ final class RecordingReader {
         if (run.samples() > 0 && at <= run.lastTime()) {
             throw outOfOrder(cursor, run, time, at);
         }
+        weightCell.ifPresent(cell -> readWeight(cell, cursor, run));
         run.start(cursor.row(), at);
         for (int j = 0; j < cells.size(); j++) {
             double value = cells.get(j).read(cursor);
@@ -111,6 +116,19 @@ final class RecordingReader {
             }
         }
         watches.forEach(watch -> watch.see(cursor));
+    }
+
+    private void readWeight(NumberCell cell, RowCursor cursor, RunBuffer run) {
+        double weight = cell.read(cursor);
+        if (!(weight >= 0)) {
+            throw new RecordingFault(place(cursor, cell.name()), "the weight is " + (Double.isNaN(weight) ? "missing"
+                    : cursor.text(cell.column())), "give every row the weight of its run, 0 or a positive number");
+        }
+        if (run.samples() > 0 && weight != run.weight()) {
+            throw new RecordingFault(place(cursor, cell.name()), "the weight is " + cursor.text(cell.column())
+                    + ", but other rows of run " + run.id() + " have another", "give all rows of a run the same weight");
+        }
+        run.weigh(weight);
     }
 
     private String runOf(RowCursor cursor) {
@@ -184,6 +202,7 @@ final class RecordingReader {
         private final GrowingDoubles values = new GrowingDoubles();
         private final GrowingDoubles inputs = new GrowingDoubles();
         private long lastRow;
+        private double weight = 1;
 
         RunBuffer(String id) {
             this.id = id;
@@ -195,6 +214,14 @@ final class RecordingReader {
 
         int samples() {
             return times.size();
+        }
+
+        double weight() {
+            return weight;
+        }
+
+        void weigh(double given) {
+            weight = given;
         }
 
         double lastTime() {
@@ -221,7 +248,7 @@ final class RecordingReader {
         Run finish(int channels, int knownInputs) {
             DMatrixRMaj measured = DMatrixRMaj.wrap(times.size(), channels, values.toArray());
             DMatrixRMaj known = DMatrixRMaj.wrap(times.size(), knownInputs, inputs.toArray());
-            return new Run(id, times.toArray(), measured, known, 0);
+            return new Run(id, times.toArray(), measured, known, 0, weight);
         }
     }
 }

@@ -62,6 +62,9 @@ public final class SnapshotBuilderNode implements Node {
                 and no forecast can be scored. Whole runs are the fairest holdout; with one run take its end. A \
                 calibration part sets the width of forecast bands.
 
+                Several runs train together. Long ones count more unless runs are weighted: alike, by their noise, or by a \
+                column; a run of weight 2 counts as one that is there twice.
+
                 The table is streamed; memory is needed for 8 bytes a sample, channel and copy.""";
     }
 

@@ -32,6 +32,10 @@ final class SnapshotChecks {
         emptyRuns(settings, SnapshotSettings.HOLDOUT).ifPresent(problems::add);
         emptyRuns(settings, SnapshotSettings.CALIBRATION).ifPresent(problems::add);
         problems.addAll(partsTwice(settings));
+        if (settings.text(SnapshotSettings.RUN_WEIGHTS).equals("given") && settings.text(SnapshotSettings.WEIGHT_COLUMN).isEmpty()) {
+            problems.add(new SettingProblem(SnapshotSettings.WEIGHT_COLUMN, "no column of weights is named", "name it, or choose"
+                    + " other weights"));
+        }
         return problems;
     }
 
@@ -72,6 +76,12 @@ final class SnapshotChecks {
                 problems.add(new SettingProblem(key, "the column " + column + " is a channel or an input as well",
                         "give each column one part"));
             }
+        }
+        String weight = SnapshotSettings.weightColumn(settings);
+        if (!weight.isEmpty() && (channels.contains(weight) || settings.texts(SnapshotSettings.INPUTS).contains(weight)
+                || weight.equals(settings.text(SnapshotSettings.TIME_COLUMN)) || weight.equals(settings.text(SnapshotSettings.RUN_COLUMN)))) {
+            problems.add(new SettingProblem(SnapshotSettings.WEIGHT_COLUMN, "the column " + weight + " has another part as well",
+                    "give each column one part"));
         }
         String time = settings.text(SnapshotSettings.TIME_COLUMN);
         if (!time.isEmpty() && time.equals(settings.text(SnapshotSettings.RUN_COLUMN))) {

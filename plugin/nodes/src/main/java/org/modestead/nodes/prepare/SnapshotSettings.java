@@ -14,6 +14,7 @@ import org.modestead.engine.recording.Detrend;
 import org.modestead.engine.recording.GapPolicy;
 import org.modestead.engine.recording.MissingPolicy;
 import org.modestead.engine.recording.Resampling;
+import org.modestead.engine.recording.RunWeighting;
 import org.modestead.engine.recording.Scaling;
 import org.modestead.engine.recording.SnapshotPlan;
 import org.modestead.engine.recording.Split;
@@ -37,6 +38,9 @@ final class SnapshotSettings {
     static final String DELAY_DEPTH = "delay-depth";
     static final String HOLDOUT = "holdout";
     static final String CALIBRATION = "calibration";
+    static final String RUN_WEIGHTS = "run-weights";
+    static final String WEIGHT_COLUMN = "weight-column";
+    static final String EQUAL_SAMPLES = "equal-samples";
 
     private static final Set<CellType> TIMES = Set.of(CellType.DOUBLE, CellType.LONG, CellType.DATE, CellType.DATE_TIME,
             CellType.ZONED_DATE_TIME, CellType.TEXT);
@@ -52,6 +56,7 @@ final class SnapshotSettings {
         all.addAll(tableSettings());
         all.addAll(timeSettings());
         all.addAll(preparationSettings());
+        all.addAll(weightSettings());
         all.addAll(splitSettings(HOLDOUT, "Holdout", "to judge modes and forecasts on data that the fit never saw"));
         all.addAll(splitSettings(CALIBRATION, "Calibration",
                 "to set the width of forecast bands; taken from what the holdout leaves"));
@@ -138,6 +143,24 @@ final class SnapshotSettings {
                         + " the stack; without effect at depth 1."), "samples", 1, 100_000, OptionalLong.of(1)));
     }
 
+    private static List<Setting> weightSettings() {
+        String group = "Weights of runs";
+        return List.of(
+                new Setting.Choice(new Common(RUN_WEIGHTS, "Weights", group, "How much the samples of each training run count"
+                        + " in the fit. Only ratios matter. Trend and scales are taken from all samples alike, and so are the"
+                        + " shares of the signal that modes carry."), List.of(
+                        new Option(EQUAL_SAMPLES, "Every sample alike", "Long runs count more."),
+                        new Option("equal-runs", "Every run alike", "The samples of a run together count as much as those of"
+                                + " any other."),
+                        new Option("noise", "By noise", "The noisier a run, the less it counts: by the inverse of the noise"
+                                + " variance, told from how far samples lie from the line through their neighbours. Sample"
+                                + " fast enough that the signal is nearly straight over three samples."),
+                        new Option("given", "From a column", "As a column of the table says.")), EQUAL_SAMPLES),
+                new Setting.OneColumn(new Common(WEIGHT_COLUMN, "Column of weights", group, "Column with the weight of each"
+                        + " run, the same number in all its rows; 0 leaves the run out of training.")
+                        .when(RUN_WEIGHTS, "given"), TABLE, NUMBERS, false));
+    }
+
     private static List<Setting> splitSettings(String key, String group, String purpose) {
         return List.of(
                 new Setting.Choice(new Common(key, group + " part", group, "Which samples are kept away from the fit "
@@ -166,7 +189,13 @@ final class SnapshotSettings {
     static RecordingColumns columns(Settings settings) {
         return new RecordingColumns(settings.text(TIME_COLUMN), settings.number("row-step"),
                 settings.text(TIME_UNIT).strip(),
-                settings.text(RUN_COLUMN), settings.texts(CHANNELS), settings.texts(INPUTS), units(settings));
+                settings.text(RUN_COLUMN), settings.texts(CHANNELS), settings.texts(INPUTS), weightColumn(settings),
+                units(settings));
+    }
+
+    /** Returns the column of weights, empty where none is asked for. */
+    static String weightColumn(Settings settings) {
+        return settings.text(RUN_WEIGHTS).equals("given") ? settings.text(WEIGHT_COLUMN) : "";
     }
 
     /** Returns units by channel; entries without {@code =} are left out (the node's check has told of them). */
@@ -189,7 +218,8 @@ final class SnapshotSettings {
                 option(MissingPolicy.class, settings, "missing"), option(Detrend.class, settings, "detrend"),
                 option(Scaling.class, settings, "scaling"),
                 new DelayEmbedding(settings.whole(DELAY_DEPTH), settings.whole("delay-spacing")),
-                split(settings, HOLDOUT), split(settings, CALIBRATION));
+                split(settings, HOLDOUT), split(settings, CALIBRATION),
+                option(RunWeighting.class, settings, RUN_WEIGHTS));
     }
 
     private static Split split(Settings settings, String key) {

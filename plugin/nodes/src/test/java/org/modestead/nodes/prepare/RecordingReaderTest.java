@@ -239,4 +239,28 @@ class RecordingReaderTest {
         };
         assertThrows(Cancelled.class, () -> RecordingReader.read(table, columns("", ""), stopped));
     }
+
+    private static RecordingColumns weighed() {
+        return new RecordingColumns("t", 1, "", "run", List.of(), List.of(), "w", Map.of());
+    }
+
+    private static MemoryTable.Builder weights() {
+        return table(Column.text("run"), Column.number("t"), Column.number("x"), Column.number("w"));
+    }
+
+    @Test
+    void aColumnOfWeightsIsNoChannelAndGivesEveryRunItsWeight() {
+        Recording recording = read(weights().row("a", 0.0, 1.0, 2.5).row("b", 0.0, 3.0, 0.0).row("a", 1.0, 2.0, 2.5).row("b", 1.0, 4.0, 0.0),
+                weighed());
+        assertEquals(List.of("x"), recording.channels().stream().map(Channel::name).toList());
+        assertEquals(List.of(2.5, 0.0), recording.runs().stream().map(Run::weight).toList());
+    }
+
+    @Test
+    void weightsThatChangeWithinARunAreMissingOrNegativeAreRefusedWithTheirPlace() {
+        assertEquals("pumps.csv, row 2 below the header, column w: the weight is 3.0, but other rows of run a have another; give all rows"
+                + " of a run the same weight.", fault(weights().row("a", 0.0, 1.0, 2.0).row("a", 1.0, 2.0, 3.0), weighed()).getMessage());
+        assertEquals("the weight is missing", fault(weights().row("a", 0.0, 1.0, null).row("a", 1.0, 2.0, 3.0), weighed()).seen());
+        assertEquals("the weight is -1.0", fault(weights().row("a", 0.0, 1.0, -1.0).row("a", 1.0, 2.0, -1.0), weighed()).seen());
+    }
 }

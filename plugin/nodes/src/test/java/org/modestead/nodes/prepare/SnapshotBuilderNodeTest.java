@@ -139,4 +139,32 @@ class SnapshotBuilderNodeTest {
     private static List<String> keys(List<SettingProblem> problems) {
         return problems.stream().map(SettingProblem::key).toList();
     }
+
+    @Test
+    void weightsOfRunsReachTheSnapshots() {
+        MemoryTable.Builder rows = MemoryTable.builder(TableSchema.of(Column.text("run"), Column.number("t"), Column.number("level"),
+                Column.number("trust")), "pumps.csv");
+        for (int run = 0; run < 3; run++) {
+            for (int k = 0; k < 20; k++) {
+                rows.row("r" + run, k * 0.1, Math.cos(k * 0.3 + run), (double) run);
+            }
+        }
+        Map<String, Object> raw = Map.of("time-column", "t", "run-column", "run", "run-weights", "given", "weight-column", "trust");
+        NodeResult result = NODE.run(new NodeInputs(Map.of("table", rows.build())), settings(raw), new RunContext(Progress.NONE,
+                Path.of("."), Path.of(".")));
+        Snapshots snapshots = (Snapshots) result.outputs().get("snapshots");
+        assertEquals(List.of("level"), snapshots.channels().stream().map(c -> c.name()).toList());
+        assertEquals(List.of("r1", "r2"), snapshots.training().stream().map(r -> r.id()).toList());
+        assertEquals(2, snapshots.training().get(1).weight() / snapshots.training().get(0).weight(), 1e-14);
+        // a table of the same samples without the wish leaves the column a channel
+        assertEquals(1, ((Snapshots) run(Map.of("time-column", "t", "run-column", "run")).outputs().get("snapshots")).training().get(0)
+                .weight());
+    }
+
+    @Test
+    void aColumnOfWeightsMustBeNamedAndHaveNoOtherPart() {
+        assertEquals("no column of weights is named", check(Map.of("run-weights", "given")).get(0).seen());
+        assertEquals(List.of("weight-column"), check(Map.of("time-column", "t", "channels", List.of("level"), "run-weights", "given",
+                "weight-column", "level")).stream().map(SettingProblem::key).toList());
+    }
 }
