@@ -39,6 +39,11 @@ public record InputEffect(
         return map.numCols;
     }
 
+    /** Returns the sampling steps from one state to the other. */
+    public int stride() {
+        return window.stride();
+    }
+
     /** Returns what the inputs are taken to do between samples. */
     public InputUse use() {
         return window.use();
@@ -77,19 +82,19 @@ public record InputEffect(
     }
 
     /**
-     * Returns what the inputs add, from each state to the next, to the functions less what inputs explain of them at once,
+     * Returns what the inputs add, from each state to the one a stride d later, to the functions less what inputs explain of them at once,
      * {@code q° = q - p now}:
      *
-     * <pre>    q°(x_(k+1)) = q°(x_k) A + pushed_k,    pushed_k = p_k next - p_(k+1) now</pre>
+     * <pre>    q°(x_(k+d)) = q°(x_k) A + pushed_k,    pushed_k = p_k next - p_(k+d) now</pre>
      *
      * @param arguments of neighbouring states, rows x (N + inputs)
-     * @return (rows - 1) x R
+     * @return (rows - d) x R
      */
     public DMatrixRMaj pushed(DMatrixRMaj arguments) {
         DMatrixRMaj values = values(arguments);
-        int last = values.numRows - 1;
-        DMatrixRMaj out = Matrices.product(Matrices.block(values, 0, last, 0, count()), next);
-        CommonOps_DDRM.subtractEquals(out, Matrices.product(Matrices.block(values, 1, last + 1, 0, count()), now));
+        int count = values.numRows - stride();
+        DMatrixRMaj out = Matrices.product(Matrices.block(values, 0, count, 0, count()), next);
+        CommonOps_DDRM.subtractEquals(out, Matrices.product(Matrices.block(values, stride(), values.numRows, 0, count()), now));
         return out;
     }
 }

@@ -30,7 +30,7 @@ public record ObservedRun(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
 
     /** Returns the observations of one run by a step map on functions in a kernel's space. */
     static ObservedRun of(StatePairs pairs, OrthonormalCompression functions) {
-        return new ObservedRun(functions.evaluate(pairs.now()), functions.evaluate(pairs.next()), pairs.now(), 0);
+        return new ObservedRun(functions.evaluate(pairs.now()), functions.evaluate(pairs.next()), pairs.now(), 0).weighted(weight(pairs));
     }
 
     /**
@@ -43,11 +43,21 @@ public record ObservedRun(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
         DMatrixRMaj now = Matrices.product(ofState.evaluate(pairs.now()), map);
         DMatrixRMaj next = Matrices.product(ofState.evaluate(pairs.next()), map);
         if (functions.inputs().isEmpty()) {
-            return new ObservedRun(now, next, pairs.now(), 0);
+            return new ObservedRun(now, next, pairs.now(), 0).weighted(weight(pairs));
         }
         InputEffect effect = functions.inputs().get();
         DMatrixRMaj known = effect.values(CommonOps_DDRM.concatColumnsMulti(pairs.now(), pairs.windows(effect.window())));
-        return new ObservedRun(CommonOps_DDRM.concatColumnsMulti(now, known), next, pairs.now(), known.numCols);
+        return new ObservedRun(CommonOps_DDRM.concatColumnsMulti(now, known), next, pairs.now(), known.numCols).weighted(weight(pairs));
+    }
+
+    private static double weight(StatePairs pairs) {
+        return pairs.runs().get(0).weight();
+    }
+
+    /** Returns the same, each row counting as much as a weight says. */
+    ObservedRun weighted(double weight) {
+        double root = Math.sqrt(weight);
+        return weight == 1 ? this : new ObservedRun(Matrices.scaled(now, root), Matrices.scaled(next, root), Matrices.scaled(target, root), known);
     }
 
     /** Returns the number of observations. */

@@ -166,6 +166,6 @@ public record OccupationEstimator(Kernel space, SegmentPlan plan, double contrac
         DMatrixRMaj nodes = stacked(segments);
         return new ObservedRun(averaged(segments, functions.evaluate(nodes)),
                 difference(functions.evaluate(ends(segments, false)), functions.evaluate(ends(segments, true))),
-                averaged(segments, nodes), 0);
+                averaged(segments, nodes), 0).weighted(segments.get(0).runWeight());
     }
 }

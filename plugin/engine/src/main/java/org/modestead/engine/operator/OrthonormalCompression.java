@@ -73,7 +73,7 @@ public record OrthonormalCompression(
      *
      * @throws FitFault if an operator of this kind cannot have it, or if it meets a noise correction that it does not leave room for
      */
-    OrthonormalCompression constrained(Structure structure) {
+    public OrthonormalCompression constrained(Structure structure) {
         if (!structure.suits(evolution)) {
             throw StructuredEstimator.refused(structure, evolution);
         }

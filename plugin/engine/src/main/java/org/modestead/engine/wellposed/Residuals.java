@@ -56,9 +56,10 @@ final class Residuals {
             ZMatrixRMaj pushed = ComplexMatrices.product(effect.pushed(effect.arguments(run)), expansion.vectors());
             for (int j = 0; j < out.length; j++) {
                 out[j] = new Complex[run.count()];
-                out[j][0] = Complex.ZERO;
-                for (int k = 1; k < run.count(); k++) {
-                    out[j][k] = out[j][k - 1].times(expansion.eigenvalues().get(j)).plus(ComplexMatrices.entry(pushed, k - 1, j));
+                for (int k = 0; k < run.count(); k++) {
+                    int before = k - effect.stride();
+                    out[j][k] = before < 0 ? Complex.ZERO
+                            : out[j][before].times(expansion.eigenvalues().get(j)).plus(ComplexMatrices.entry(pushed, before, j));
                 }
             }
         });

@@ -102,6 +102,20 @@ class RefitTest {
     }
 
     @Test
+    void weightsOfRunsAreRefittedAlike() {
+        List<Run> weighted = runs(6, 30);
+        weighted.set(1, weighted.get(1).weighted(3));
+        weighted.set(4, weighted.get(4).weighted(0.2));
+        double[] once = {1, 1, 1, 1, 1, 1};
+        for (Estimator estimator : List.of(new LinearEstimator(), new LinearEstimator(NoiseCorrection.TOTAL_LEAST_SQUARES),
+                new DictionaryEstimator(Dictionary.monomials(1)), new KernelStepEstimator(Motions.kernel("linear"), 40),
+                new OccupationEstimator(Motions.kernel("linear"), new SegmentPlan(10, 0), 1))) {
+            FittedOperator operator = fit(snapshots(weighted, 1), estimator, 2, 0);
+            assertRates(ModalExpansion.of(operator.chosen()).rates(), refit(operator, once).rates(), 1e-6, estimator.describe());
+        }
+    }
+
+    @Test
     void arraysHeldByFactorsAreRefittedAlike() {
         Snapshots many = snapshots(runs(30, 60), 1);
         double[] once = new double[30];
