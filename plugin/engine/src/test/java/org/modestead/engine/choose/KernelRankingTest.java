@@ -115,6 +115,24 @@ class KernelRankingTest {
         return row.verdict().map(verdict -> verdict.grade().ordinal()).orElse(row.fitted() ? 5 : 6);
     }
 
+    private static List<RankedKernel> flow(Motions.Flow flow) {
+        return KernelRanking.rank(Motions.snapshots(0.05, 1, Motions.spread(flow, 20, -1, 1, 9, 0.4, 0, 1), List.of()),
+                List.of(spec("gaussian", "scale", 1), spec("exponential", "rate", 1), new KernelSpec("polynomial", Map.of("degree", 3.0,
+                "offset", 1.0))), new RankingPlan(6, 1, 1), Progress.NONE);
+    }
+
+    @Test
+    void flowsInClosedFormAreJudgedAsTheTheorySays() {
+        // DESIGN section 4 and CHECKS C3.4, C3.11: x' = x has the orthogonal modes x^n in both spaces that hold polynomials,
+        // x' = x² has none in any of them. Its runs from x0 = 1 end at 1/(1 - 0.4)
+        List<RankedKernel> growth = flow((start, time) -> start * Math.exp(time));
+        assertEquals(Optional.of(Grade.STANDS), growth.get(0).verdict().map(KernelVerdict::grade), growth.toString());
+        assertTrue(growth.stream().filter(row -> row.kernel().family().equals("gaussian")).allMatch(row -> row.verdict().orElseThrow().grade()
+                != Grade.STANDS), growth.toString());
+        List<RankedKernel> square = flow((start, time) -> start / (1 - start * time));
+        assertTrue(square.stream().allMatch(row -> row.verdict().orElseThrow().grade().compareTo(Grade.UNDECIDED) >= 0), square.toString());
+    }
+
     @Test
     void theRoomOfEverySpaceIsTold() {
         List<RankedKernel> rows = KernelRanking.rank(spiral(0.01, 12), SPACES, UNJUDGED, Progress.NONE);
