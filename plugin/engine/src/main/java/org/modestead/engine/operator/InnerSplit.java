@@ -11,7 +11,8 @@ import org.modestead.engine.recording.StateRun;
 
 /**
  * Training data split once more, for choices made before the final fit: the last quarter of the runs when there are at
- * least four, otherwise the last quarter of every run. Holdout and calibration parts are not looked at and not handed on.
+ * least four, otherwise the last quarter of every run. Runs of weight 0 take no part; holdout and calibration parts are not looked at
+ * and not handed on.
  *
  * @param fitting snapshots whose training part is the first three quarters and whose holdout part is the last one
  * @param judging states of the last quarter
@@ -31,7 +32,7 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
      * @throws FitFault if the training runs are too short to leave a quarter out
      */
     public static InnerSplit of(Snapshots snapshots) {
-        List<Run> runs = snapshots.training();
+        List<Run> runs = snapshots.training().stream().filter(run -> run.weight() > 0).toList();
         List<Run> first = new ArrayList<>();
         List<Run> last = new ArrayList<>();
         if (runs.size() >= ENOUGH_RUNS) {

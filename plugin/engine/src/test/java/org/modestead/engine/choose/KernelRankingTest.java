@@ -154,6 +154,17 @@ class KernelRankingTest {
     }
 
     @Test
+    void runsOfWeightZeroTakeNoPart() {
+        Snapshots without = spiral(0.01, 12);
+        List<Run> more = new ArrayList<>(without.training());
+        more.add(Motions.run("broken", 30, 0.2, t -> new double[] {7 * t, Math.exp(t)}).weighted(0));
+        Snapshots with = new Snapshots(without.channels(), without.inputs(), without.time(), more, List.of(), List.of(), without.step(),
+                without.delay(), without.preparation(), without.facts(), without.doubts());
+        assertEquals(KernelRanking.rank(without, SPACES, UNJUDGED, Progress.NONE).toString(),
+                KernelRanking.rank(with, SPACES, UNJUDGED, Progress.NONE).toString());
+    }
+
+    @Test
     void ofKernelsThatPredictAlikeTheSimplestComesFirst() {
         // with noise 0.05 scales 4, 5 and 6 predict alike within noise: the rank is the same, so the smallest scale leads
         List<RankedKernel> rows = KernelRanking.rank(spiral(0.05, 12), List.of(spec("gaussian", "scale", 6), spec("gaussian", "scale", 5),
