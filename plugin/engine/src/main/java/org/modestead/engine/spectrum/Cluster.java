@@ -1,22 +1,28 @@
 package org.modestead.engine.spectrum;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
+import org.modestead.engine.linalg.LinearAlgebra;
 
 /**
- * Eigenvalues that are one as far as rounding can tell: a nearly defective matrix splits a multiple eigenvalue by the
- * square root of its rounding error, real or complex by chance, so such a pair is neither two modes nor a slow oscillation.
+ * Eigenvalues that are one as far as rounding can tell: a nearly defective matrix splits an eigenvalue of multiplicity p by
+ * the p-th root of its rounding error, real or complex by chance, so what comes out is neither several modes nor a slow
+ * oscillation.
  *
- * <p>A pair belongs together when its distance is at most {@code 30 √(ε s_1/s_r) ‖Ã‖}, the first-order size of that
- * splitting with the whitening's condition as amplifier, and its unit eigenvectors are parallel to the same accuracy.
- * Equal eigenvalues with independent eigenvectors are no cluster. Wilkinson, <i>The Algebraic Eigenvalue Problem</i>,
- * 1965, chapter 2.
+ * <p>A pair belongs together when its distance is at most {@code 30 √(ε s_1/s_r) ‖Ã‖}, the first-order size of that splitting
+ * with the whitening's condition as amplifier, and p > 2 when their distances are at most
+ * {@code min((10 ε s_1/s_r)^(1/p), 0.01) ‖Ã‖}: less room for rounding, since its root is so much wider. Their unit eigenvectors
+ * are parallel to the same accuracy. Equal eigenvalues with independent eigenvectors are no cluster. Wilkinson, <i>The
+ * Algebraic Eigenvalue Problem</i>, 1965, chapter 2.
  */
 public final class Cluster {
 
-    private static final double FACTOR = 30;
+    private static final double OF_A_PAIR = 900;
+    private static final double OF_MORE = 10;
+    private static final double WIDEST = 0.01;
 
     private Cluster() {}
 
@@ -24,16 +30,21 @@ public final class Cluster {
     public static int[] numbers(ModalExpansion expansion) {
         int r = expansion.rank();
         double[] singular = expansion.compression().singular();
-        double tolerance = FACTOR * Math.sqrt(Math.ulp(1.0) * singular[0] / singular[r - 1]);
-        double scale = expansion.eigenvalues().stream().mapToDouble(Complex::abs).max().orElse(0);
+        double rounding = Math.ulp(1.0) * singular[0] / singular[r - 1];
+        double pair = Math.sqrt(OF_A_PAIR * rounding);
+        double limit = Math.max(WIDEST, pair);
+        double[][] apart = apart(expansion, limit);
+        int most = Arrays.stream(apart).mapToInt(row -> (int) Arrays.stream(row).filter(d -> d <= limit).count()).max().orElse(0);
         int[] numbers = new int[r];
         int used = 0;
-        for (int i = 0; i < r; i++) {
-            for (int j = i + 1; j < r; j++) {
-                if (together(expansion, i, j, tolerance, scale)) {
-                    int number = numbers[i] != 0 ? numbers[i] : numbers[j] != 0 ? numbers[j] : ++used;
-                    join(numbers, i, number);
-                    join(numbers, j, number);
+        for (int multiplicity = 2; multiplicity <= most; multiplicity++) {
+            double splitting = multiplicity == 2 ? pair : Math.min(WIDEST, Math.pow(OF_MORE * rounding, 1.0 / multiplicity));
+            for (int i = 0; i < r; i++) {
+                List<Integer> group = around(apart, i, splitting);
+                if (group.size() >= multiplicity) {
+                    int number = group.stream().mapToInt(j -> numbers[j]).filter(k -> k != 0).findFirst().orElse(used + 1);
+                    used = Math.max(used, number);
+                    group.forEach(j -> join(numbers, j, number));
                 }
             }
         }
@@ -49,16 +60,42 @@ public final class Cluster {
         }
     }
 
-    private static boolean together(ModalExpansion expansion, int i, int j, double tolerance, double scale) {
-        double distance = expansion.eigenvalues().get(i).minus(expansion.eigenvalues().get(j)).abs();
-        if (distance > tolerance * scale) {
-            return false;
+    /** The eigenvalues within a splitting of one and of each other. */
+    private static List<Integer> around(double[][] apart, int i, double splitting) {
+        List<Integer> group = new ArrayList<>(List.of(i));
+        for (int j = 0; j < apart.length; j++) {
+            int candidate = j;
+            if (j != i && group.stream().allMatch(k -> apart[k][candidate] <= splitting)) {
+                group.add(j);
+            }
         }
+        return group;
+    }
+
+    /** The larger of distance over ‖Ã‖ and lack of parallelism, infinite where the distance alone is above a limit. */
+    private static double[][] apart(ModalExpansion expansion, double limit) {
+        int r = expansion.rank();
+        double scale = LinearAlgebra.installed().svd(expansion.compression().action()).values()[0];
+        double[][] apart = new double[r][r];
+        for (int i = 0; i < r; i++) {
+            for (int j = i + 1; j < r; j++) {
+                double distance = expansion.eigenvalues().get(i).minus(expansion.eigenvalues().get(j)).abs();
+                boolean far = distance > limit * scale;
+                apart[i][j] = far ? Double.POSITIVE_INFINITY
+                        : Math.max(scale == 0 ? 0 : distance / scale, 1 - overlap(expansion, i, j));
+                apart[j][i] = apart[i][j];
+            }
+        }
+        return apart;
+    }
+
+    private static double overlap(ModalExpansion expansion, int i, int j) {
         Complex overlap = Complex.ZERO;
         for (int k = 0; k < expansion.rank(); k++) {
-            overlap = overlap.plus(ComplexMatrices.entry(expansion.vectors(), k, i).conj().times(ComplexMatrices.entry(expansion.vectors(), k, j)));
+            overlap = overlap.plus(ComplexMatrices.entry(expansion.vectors(), k, i).conj()
+                    .times(ComplexMatrices.entry(expansion.vectors(), k, j)));
         }
-        return 1 - overlap.abs() < tolerance;
+        return overlap.abs();
     }
 
     /** Groups column indices into modes: clusters with their conjugates, conjugate pairs, single real ones. */

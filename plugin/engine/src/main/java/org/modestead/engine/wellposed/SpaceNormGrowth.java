@@ -10,7 +10,7 @@ import org.modestead.engine.spectrum.Mode;
 /**
  * Growth of {@code ‖φ‖_H / ‖φ‖_L2(data)} over the ladder. Bounded: the eigenfunction belongs to the space. Growing without
  * bound (see {@link NormTrend}): it only imitates an eigenfunction on the sampled region. In the data inner product both norms are the
- * same and the question has no content.
+ * same and the question has no content, nor has it for a cluster, whose members are directions that rounding picked.
  */
 public final class SpaceNormGrowth implements Check {
 
@@ -29,6 +29,9 @@ public final class SpaceNormGrowth implements Check {
         }
         double threshold = evidence.settings().normGrowthThreshold();
         for (Mode mode : evidence.spectrum().modes()) {
+            if (mode.cluster() != 0) {
+                continue;
+            }
             List<LadderRow> rows = evidence.ladderOf(mode.number());
             if (rows.size() >= Settling.LEAST_RUNGS) {
                 findings.add(finding(mode.number(), "Its norm", rows.stream().map(LadderRow::normRatio).toList(),

@@ -48,13 +48,13 @@ record Judged(Optional<Fit> fit) {
 
         /**
          * What rounding may do to the rates: of the arrays, against the weakest direction that is kept, magnified by the
-         * condition of the eigenfunctions. Landmarks stand for a kernel's functions to 1e-6; which samples they are
+         * condition of the eigenfunctions. Landmarks stand for a kernel's functions to 1e-5; which samples they are
          * depends on which comes first where the kernel is as large at all of them.
          */
         double accuracy() {
             double[] singular = operator.compression().singular();
             double weakest = singular[operator.rank() - 1] / singular[0];
-            return (operator.kernel().isPresent() ? 1e-6 : 1e-9) + 100 * Math.ulp(1.0) / (weakest * weakest) * ModalExpansion.of(operator.chosen()).condition();
+            return (operator.kernel().isPresent() ? 1e-5 : 1e-9) + 100 * Math.ulp(1.0) / (weakest * weakest) * ModalExpansion.of(operator.chosen()).condition();
         }
 
         /** Whether several functions share its rate: then rounding picks which mixture of them is called a mode. */

@@ -52,6 +52,30 @@ class DefectiveSignalsTest {
         assertEquals(1, spectrum.modes().get(0).energyShare(), 1e-12);
     }
 
+    @ParameterizedTest
+    @ValueSource(ints = {2, 3, 4})
+    void aPolynomialInTimeIsOneClusterHoweverManyEigenvaluesItTakes(int degree) {
+        // degree d: eigenvalue 1 with a Jordan block of size d + 1, split by the (d+1)-th root of rounding
+        Snapshots snapshots = Motions.snapshots(1, degree + 1, List.of(Motions.run("a", 40, 1, t -> new double[] {
+            Math.pow((t - 20) / 20, degree) + 0.3 * t / 20 + 1})), List.of());
+        Spectrum spectrum = Motions.spectrum(snapshots, new LinearEstimator(), degree + 1);
+        assertEquals(1, spectrum.modes().size(), spectrum.modes().toString());
+        assertEquals(degree + 1, spectrum.modes().get(0).indices().size());
+        assertFalse(spectrum.modes().get(0).oscillates());
+        // the mean of the members is the trace, good to rounding times the condition of the whitening
+        assertEquals(0, spectrum.modes().get(0).rate().re(), 1e-8);
+    }
+
+    @Test
+    void threeSlowDecaysAreNoCluster() {
+        // multipliers 0.99, 0.98 and 0.97: a hundredth apart, where rounding reaches a thousandth
+        Snapshots snapshots = Motions.snapshots(1, 3, List.of(Motions.run("a", 300, 1, t -> new double[] {
+            Math.pow(0.99, t) + Math.pow(0.98, t) + Math.pow(0.97, t)})), List.of());
+        Spectrum spectrum = Motions.spectrum(snapshots, new LinearEstimator(), 3);
+        assertEquals(3, spectrum.modes().size());
+        assertTrue(spectrum.modes().stream().allMatch(mode -> mode.cluster() == 0));
+    }
+
     @Test
     void aClusterDriftsByVerdict() {
         Verdict verdict = Motions.judge(Motions.fit(drift(4), new LinearEstimator(), 2), JudgeSettings.DEFAULT);
