@@ -8,12 +8,13 @@ import java.util.Objects;
  * <p>Frequency, period and doubling time follow from the ends of the rate's interval. Doubling time runs through infinity
  * where the growth rate passes zero, period where the frequency reaches it: there one end is missing.
  *
+ * @param level share of recordings whose interval should hold the truth, in (0, 1)
  * @param growth of σ, the real part of the rate, per time unit
  * @param turning of ω, the imaginary part of the rate, both ends at least 0
  * @param dampingRatio of -σ/|λ|, both ends in [-1, 1]
  * @param amplitude in prepared units, both ends at least 0
  */
-public record ModeIntervals(Interval growth, Interval turning, Interval dampingRatio, Interval amplitude) {
+public record ModeIntervals(double level, Interval growth, Interval turning, Interval dampingRatio, Interval amplitude) {
 
     private static final double TWO_PI = 2 * Math.PI;
 

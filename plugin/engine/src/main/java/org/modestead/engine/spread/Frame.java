@@ -32,13 +32,13 @@ import org.modestead.engine.operator.Ridge;
 record Frame(OrthonormalCompression functions, double[] scale, int rank, double ridge) {
 
     /** Directions beyond the rank that a replicate may turn into; more cost more and are turned into less. */
-    private static final int WIDE = 60;
+    private static final int WIDE = 48;
     private static final double NULL = 1e-12;
 
     static Frame of(FittedOperator operator) {
         OrthonormalCompression full = operator.compression();
         int rank = operator.rank();
-        int width = Math.min(full.rank(), Math.max(rank, Math.min(WIDE, 4 * rank + 20)));
+        int width = Math.min(full.rank(), Math.max(rank, Math.min(WIDE, 3 * rank + 12)));
         OrthonormalCompression head = full.leading(width);
         return new Frame(head, head.singular(), rank, operator.ridge());
     }

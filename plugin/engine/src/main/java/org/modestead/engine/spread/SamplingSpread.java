@@ -101,8 +101,8 @@ public record SamplingSpread(SpreadPlan plan, List<ModeSpread> modes, String dra
         Replicated amplitude = figures.of(mode.amplitude(), Followed.Found::amplitude);
         double infinite = Double.POSITIVE_INFINITY;
         Interval size = mode.amplitude() > 0 && Double.isFinite(amplitude.deviation()) ? amplitude.positive(level, pieces) : Interval.UNKNOWN;
-        return new ModeIntervals(growth.interval(level, pieces, -infinite, infinite), turning.interval(level, pieces, 0, infinite),
-                damping.interval(level, pieces, -1, 1), size);
+        return new ModeIntervals(level, growth.interval(level, pieces, -infinite, infinite),
+                turning.interval(level, pieces, 0, infinite), damping.interval(level, pieces, -1, 1), size);
     }
 
     /** Figures of the replicates, stretched where the weights were shrunk. */

@@ -65,7 +65,7 @@ class IntervalFiguresTest {
     }
 
     private static ModeIntervals growth(double low, double high) {
-        return new ModeIntervals(new Interval(low, high), new Interval(0, 2 * Math.PI), Interval.UNKNOWN, Interval.UNKNOWN);
+        return new ModeIntervals(0.9, new Interval(low, high), new Interval(0, 2 * Math.PI), Interval.UNKNOWN, Interval.UNKNOWN);
     }
 
     @Test

@@ -4,11 +4,13 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.ModeVerdict;
 import org.modestead.engine.wellposed.Verdict;
+import org.modestead.nodes.words.Digits;
 import org.modestead.nodes.words.TimeUnit;
 
 /**
@@ -34,11 +36,12 @@ public final class EigenvaluePlane {
         List<Mode> shown = shown(spectrum.modes());
         List<Figure.Layer> layers = new ArrayList<>();
         layers.add(new Figure.Rule("zero growth", "", true, 0));
+        shown.stream().filter(EigenvaluePlane::carries).forEach(mode -> layers.addAll(bars(mode)));
         shown.stream().sorted(Comparator.comparing(mode -> order(mode, verdict)))
                 .forEach(mode -> layers.add(point(mode, verdict)));
         int hidden = spectrum.modes().size() - shown.size();
         return new Figure("eigenvalues", Figure.Kind.COMPLEX_PLANE, "Eigenvalues in the complex plane",
-                caption(verdict, hidden),
+                caption(spectrum, verdict, hidden),
                 Axes.growth(unit), Axes.frequency(unit), layers);
     }
 
@@ -80,12 +83,28 @@ public final class EigenvaluePlane {
                 List.of(label), emphasis, mark);
     }
 
-    private static String caption(Optional<Verdict> verdict, int hidden) {
+    /** One bar across, for the growth rate, and one upwards, for the frequency. */
+    private static List<Figure.Layer> bars(Mode mode) {
+        return mode.intervals().map(found -> {
+            Interval growth = found.growth();
+            Interval frequency = found.frequency();
+            String selection = "mode:" + mode.number();
+            return List.<Figure.Layer>of(
+                    new Figure.Line("interval", selection, new double[] {growth.low(), growth.high()},
+                            new double[] {mode.frequency(), mode.frequency()}, Figure.Emphasis.NORMAL),
+                    new Figure.Line("interval", selection, new double[] {mode.rate().re(), mode.rate().re()},
+                            new double[] {frequency.low(), frequency.high()}, Figure.Emphasis.NORMAL));
+        }).orElse(List.of());
+    }
+
+    private static String caption(Spectrum spectrum, Optional<Verdict> verdict, int hidden) {
         String shapes = verdict.isPresent() ? " Shape and filling of a mark tell the verdict." : "";
+        String bars = spectrum.modes().stream().flatMap(mode -> mode.intervals().stream()).findFirst()
+                .map(found -> " Bars are " + Digits.percent(found.level()) + " intervals.").orElse("");
         String left = hidden == 0 ? "" : " Left out: " + hidden + (hidden == 1 ? " mode" : " modes")
                 + " with less than 0.1 % of the signal far outside this range, or with an infinite rate.";
         return "Each mark is a mode, numbered by falling share of the signal; a conjugate pair is one mark. Left of the"
                 + " line of zero"
-                + " growth a mode decays, right of it it grows." + shapes + left;
+                + " growth a mode decays, right of it it grows." + shapes + bars + left;
     }
 }

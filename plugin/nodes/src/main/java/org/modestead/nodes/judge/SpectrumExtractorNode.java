@@ -5,6 +5,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalLong;
+import org.modestead.engine.Doubt;
+import org.modestead.engine.Progress;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
@@ -12,6 +14,7 @@ import org.modestead.engine.spectrum.ChannelGroup;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.spectrum.SpectrumExtractor;
+import org.modestead.engine.spread.SamplingSpread;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
@@ -43,12 +46,13 @@ public final class SpectrumExtractorNode implements Node {
                 "Extracts modes from the fitted operator: growth rate, frequency, damping, share of the signal and"
                         + " shape.",
                 description(), List.of("Rowley, Mezić, Bagheri, Schlatter and Henningson, Spectral analysis of"
-                        + " nonlinear flows, Journal of Fluid Mechanics 641:115, 2009"),
+                        + " nonlinear flows, Journal of Fluid Mechanics 641:115, 2009", "Politis and Romano, in LePage and Billard"
+                        + " (eds.), Exploring the Limits of Bootstrap, Wiley 1992; after Künsch, Annals of Statistics 17:1217, 1989"),
                 List.of("modes", "eigenvalues", "frequency", "damping", "growth rate", "mode shape", "modal analysis"),
                 List.of(Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator.")),
                 List.of(Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "Eigenvalues, eigenfunctions and weights."),
-                        Port.table("modes", "Modes", "One row a mode, strongest first; not judged yet, so the verdict"
-                                + " is missing.",
+                        Port.table("modes", "Modes", "One row a mode, strongest first, with intervals; not judged yet, so the"
+                                + " verdict is missing.",
                                 ModeTable.SCHEMA),
                         Port.table("shapes", "Shapes", "How far and how far out of step each channel moves in each mode.",
                                 ShapeTable.SCHEMA),
@@ -68,11 +72,19 @@ public final class SpectrumExtractorNode implements Node {
                 moves most. Phases of channels that hardly move mean nothing. Channels can be grouped, by the beginning of \
                 their names or by a list; then each group's share of the mode and the phase of its mean are told as well.
 
+                Intervals tell how far a figure would come out otherwise with another recording of the same kind: the fit is \
+                repeated with whole runs drawn anew, or with blocks of neighbouring samples where there are fewer than eight \
+                runs, and every mode is found again in each replicate. They hold the spread, and the bias that fades as \
+                recordings grow, but not the bias that stays: measurement noise makes plain least squares report too much \
+                damping however long the recording is. Correct the noise in the Operator Fitter to be rid of that. A mode \
+                that four of five replicates do not show has no interval. Doubling time runs through infinity where the growth \
+                rate may be zero: that end is missing.
+
                 These are the modes of one projection. Whether they belong to the system is not known until the \
                 Well-posedness Checker has looked. Do not report them before.
 
                 With a step map, motion faster than half the sampling rate appears folded to a lower frequency and cannot \
-                be told apart here. Cost: the cube of the rank.""";
+                be told apart here. Cost: the cube of the rank, once, and once a replicate for the intervals.""";
     }
 
     private static List<Setting> settings() {
@@ -87,6 +99,7 @@ public final class SpectrumExtractorNode implements Node {
                         new Setting.Option("newest", "Newest sample", "One row a mode and channel."),
                         new Setting.Option("all", "All samples", "One row a mode, channel and delay.")), "newest")));
         all.addAll(GroupSettings.declared());
+        all.addAll(IntervalSettings.declared());
         return all;
     }
 
@@ -99,7 +112,7 @@ public final class SpectrumExtractorNode implements Node {
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
         FittedOperator operator = inputs.get("operator", FittedOperator.class);
         List<ChannelGroup> groups = GroupSettings.read(settings, operator.snapshots().channels().stream().map(Channel::name).toList());
-        Spectrum spectrum = SpectrumExtractor.extract(operator, context.progress());
+        Spectrum spectrum = spectrum(operator, settings, context.progress());
         Preparation preparation = operator.snapshots().preparation();
         List<Figure> figures = new ArrayList<>();
         figures.add(EigenvaluePlane.figure(spectrum, Optional.empty()));
@@ -110,6 +123,16 @@ public final class SpectrumExtractorNode implements Node {
                 ShapeTable.of(spectrum, preparation, most, settings.text(SHAPE_DELAYS).equals("all")),
                 "groups", GroupTable.of(spectrum, groups, most)),
                 figures, summary(spectrum), spectrum.doubts());
+    }
+
+    private static Spectrum spectrum(FittedOperator operator, Settings settings, Progress progress) {
+        Spectrum plain = SpectrumExtractor.extract(operator, progress.part(0, 0.2));
+        if (IntervalSettings.tooCostly(settings, operator.rank())) {
+            return plain.with(plain.modes(), List.of(new Doubt("no-intervals", "No intervals were computed: at rank " + operator.rank()
+                    + " the replicates take long; ask for them with 'always', or lower the rank.")));
+        }
+        return IntervalSettings.read(settings, operator.rank())
+                .map(plan -> SamplingSpread.of(operator, plain, plan, progress.part(0.2, 1)).in(plain)).orElse(plain);
     }
 
     private static List<String> summary(Spectrum spectrum) {

@@ -2,9 +2,13 @@ package org.modestead.nodes.report;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.DoubleFunction;
+import java.util.function.Function;
+import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.ModeIntervals;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.nodes.document.ReportDocument.Block;
 import org.modestead.nodes.document.ReportDocument.Grid;
@@ -50,7 +54,7 @@ final class ModesSection {
         return new Grid("Modes by falling share of the signal", heads(source.unit()), rows,
                 rest + "Frequency is the damped one, as it"
                 + " is seen in the signal; the natural one is what it would be without damping. Amplitude is in prepared"
-                + " units.");
+                + " units." + intervals(modes));
     }
 
     private static List<Head> heads(TimeUnit unit) {
@@ -66,11 +70,26 @@ final class ModesSection {
         String verdict = mode.constant() ? "constant, no evidence" : source.grade(mode).map(Grade::word).orElse("not"
                 + " judged");
         boolean oscillates = mode.oscillates();
-        return List.of(Integer.toString(mode.number()), oscillates ? Digits.figure(mode.frequency()) : "none",
+        return List.of(Integer.toString(mode.number()),
+                oscillates ? Digits.figure(mode.frequency()) + range(mode, ModeIntervals::frequency, Digits::figure) : "none",
                 oscillates ? Digits.figure(mode.naturalFrequency()) : "none",
-                oscillates ? Digits.figure(mode.period()) : "none",
-                Digits.figure(mode.rate().re()), oscillates ? Digits.percent(mode.dampingRatio()) : "none",
-                Digits.figure(mode.doublingTime()),
-                Digits.figure(mode.amplitude()), Digits.percent(mode.energyShare()), verdict);
+                oscillates ? Digits.figure(mode.period()) + range(mode, ModeIntervals::period, Digits::figure) : "none",
+                Digits.figure(mode.rate().re()) + range(mode, ModeIntervals::growth, Digits::figure),
+                oscillates ? Digits.percent(mode.dampingRatio()) + range(mode, ModeIntervals::dampingRatio, Digits::percent) : "none",
+                Digits.figure(mode.doublingTime())
+                        + range(mode, found -> found.doublingTime(mode.rate().re()), Digits::figure),
+                Digits.figure(mode.amplitude()) + range(mode, ModeIntervals::amplitude, Digits::figure),
+                Digits.percent(mode.energyShare()), verdict);
+    }
+
+    private static String range(Mode mode, Function<ModeIntervals, Interval> which, DoubleFunction<String> words) {
+        return mode.intervals().map(which).filter(interval -> !Double.isNaN(interval.low()) || !Double.isNaN(interval.high()))
+                .map(interval -> " (" + words.apply(interval.low()) + " to " + words.apply(interval.high()) + ")").orElse("");
+    }
+
+    private static String intervals(List<Mode> modes) {
+        return modes.stream().flatMap(mode -> mode.intervals().stream()).findFirst().map(found -> " In brackets where a figure may"
+                + " lie, told by fits to resampled runs or blocks: " + Digits.percent(found.level()) + " intervals, which hold spread"
+                + " but no bias that stays, such as the damping that noise feigns. An end that runs to infinity is not told.").orElse("");
     }
 }

@@ -135,4 +135,29 @@ class ChainTest {
         assertTrue(chain.verdict().summary().get(0).startsWith("Overall: " + grade), chain.verdict().summary().get(0));
         assertTrue(Steps.column(chain.verdict(), "modes", "verdict").contains(grade));
     }
+
+    @Test
+    void intervalsHoldTheFiguresOfANoisyRecordingAndStayEmptyWhenNotAskedFor() {
+        NodeResult data = Steps.run("signal-generator", Map.of(), Map.of("scenario", "pump-house", "gaps", 0,
+                "dropouts", 0, "jitter", 0));
+        NodeResult snapshots = Steps.run("snapshot-builder", Map.of("table", data.outputs().get("table")), Map.of("time-column", "time",
+                "run-column", "run", "time-unit", "s", "detrend", "mean", "scaling", "std", "delay-depth", 20));
+        NodeResult operator = Steps.run("operator-fitter", Map.of("snapshots", snapshots.outputs().get("snapshots")),
+                Map.of("rank-rule", "fixed", "rank", 7));
+        Map<String, Object> input = Map.of("operator", operator.outputs().get("operator"));
+        NodeResult with = Steps.run("spectrum-extractor", input, Map.of());
+        NodeResult without = Steps.run("spectrum-extractor", input, Map.of("intervals", "none"));
+        assertEquals(Steps.column(without, "modes", "lambda_real"), Steps.column(with, "modes", "lambda_real"));
+        assertEquals("", Steps.column(without, "modes", "frequency_low").get(0));
+        int surge = 0;
+        while (Steps.number(with, "modes", "frequency", surge) < 0.5) {
+            surge++;
+        }
+        double low = Steps.number(with, "modes", "frequency_low", surge);
+        double high = Steps.number(with, "modes", "frequency_high", surge);
+        // 0.62 Hz with 2 % damping; 1 % noise over 16 minutes tells it to far less than 1 %
+        assertTrue(low < high && low > 0.61 && high < 0.63, low + " to " + high);
+        assertEquals(1 / high, Steps.number(with, "modes", "period_low", surge), 1e-12);
+        assertEquals(Steps.texts(with, "modes"), Steps.texts(Steps.run("spectrum-extractor", input, Map.of()), "modes"));
+    }
 }
