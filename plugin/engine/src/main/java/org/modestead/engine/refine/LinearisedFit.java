@@ -69,17 +69,30 @@ record LinearisedFit(double[] lengths, Svd svd, DMatrixRMaj tangent, double norm
      * @return NaN where rounding decides
      */
     double[] spreads() {
+        return variances(0);
+    }
+
+    /** Returns the entries of {@code (JᵀJ)⁻¹} beside its diagonal, {@code (k, k + 1)}; NaN where rounding decides. */
+    double[] neighbours() {
+        return variances(1);
+    }
+
+    /** {@code √((JᵀJ)⁻¹_kk)} for 0 apart, {@code (JᵀJ)⁻¹_(k, k+1)} for 1. */
+    private double[] variances(int apart) {
         double floor = Math.ulp(1.0) * svd.u().numRows * svd.values()[0];
-        double[] out = new double[lengths.length];
+        double[] out = new double[lengths.length - apart];
         for (int k = 0; k < out.length; k++) {
             double sum = 0;
             for (int i = 0; i < svd.values().length; i++) {
-                double share = svd.v().get(k, i);
-                double part = svd.values()[i] > floor ? share / svd.values()[i] : Math.abs(share) < UNTOUCHED ? 0 : Double.NaN;
-                sum += part * part;
+                sum += part(k, i, floor) * part(k + apart, i, floor);
             }
-            out[k] = Math.sqrt(sum) / lengths[k];
+            out[k] = apart == 0 ? Math.sqrt(sum) / lengths[k] : sum / (lengths[k] * lengths[k + apart]);
         }
         return out;
+    }
+
+    private double part(int k, int direction, double floor) {
+        double share = svd.v().get(k, direction);
+        return svd.values()[direction] > floor ? share / svd.values()[direction] : Math.abs(share) < UNTOUCHED ? 0 : Double.NaN;
     }
 }

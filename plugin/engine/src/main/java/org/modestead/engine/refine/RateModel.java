@@ -33,6 +33,27 @@ public record RateModel(List<RateTerm> terms, Optional<DMatrixRMaj> ties) {
         this(terms, Optional.empty());
     }
 
+    /**
+     * Returns terms whose sum is zero at time 0, as that of a motion that starts from rest there.
+     *
+     * @param terms at least two functions
+     */
+    public static RateModel fromZero(List<RateTerm> terms) {
+        List<Boolean> counts = new ArrayList<>();
+        for (RateTerm term : terms) {
+            counts.add(true);
+            if (term.functions() == 2) {
+                counts.add(false);
+            }
+        }
+        DMatrixRMaj ties = new DMatrixRMaj(counts.size(), counts.size() - 1);
+        for (int f = 1; f < counts.size(); f++) {
+            ties.set(f, f - 1, 1);
+            ties.set(0, f - 1, counts.get(f) ? -1 : 0);
+        }
+        return new RateModel(terms, Optional.of(ties));
+    }
+
     /** Returns the number of weights a channel, q. */
     public int weights() {
         return ties.map(t -> t.numCols).orElse(functions(terms));

@@ -138,12 +138,19 @@ public final class RateRefinement {
         double[] spreads = linear.spreads();
         double[] growth = new double[fit.model().terms().size()];
         double[] angular = new double[growth.length];
+        double[] cross = new double[growth.length];
+        double[] neighbours = linear.neighbours();
+        for (int k = 0; k < neighbours.length; k++) {
+            if (free.get(k).term() == free.get(k + 1).term()) {
+                cross[free.get(k).term()] = deviation * deviation * neighbours[k];
+            }
+        }
         for (int k = 0; k < spreads.length; k++) {
             double[] part = free.get(k).part() == FreeRate.Part.GROWTH ? growth : angular;
             part[free.get(k).term()] = deviation * spreads[k];
         }
         double offset = linear.removable() / Math.sqrt(free.size()) / deviation;
-        return new RefinedRates(fit.model(), growth, angular, fit.weights(), fit.residualSum(), freedom, iterations,
+        return new RefinedRates(fit.model(), growth, angular, cross, fit.weights(), fit.residualSum(), freedom, iterations,
                 convergence, offset);
     }
 }

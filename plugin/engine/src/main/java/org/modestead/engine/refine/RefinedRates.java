@@ -9,6 +9,7 @@ import org.ejml.data.DMatrixRMaj;
  * @param model the terms at the rates found
  * @param growthErrors standard error of the growth of each term, 0 where it is not free, NaN where rounding decides
  * @param angularErrors standard error of the angular frequency of each term, likewise
+ * @param crossCovariances covariance of growth and angular frequency of each term, 0 unless both are free, NaN where rounding decides
  * @param weights one q x c matrix ξ a run, in the order of the runs
  * @param residualSum sum of squared residuals over all runs and channels
  * @param degreesOfFreedom samples less free rates and weights
@@ -22,6 +23,7 @@ public record RefinedRates(
         RateModel model,
         double[] growthErrors,
         double[] angularErrors,
+        double[] crossCovariances,
         List<DMatrixRMaj> weights,
         double residualSum,
         int degreesOfFreedom,

@@ -1,7 +1,7 @@
 package org.modestead.engine.spread;
 
 /** Quantiles of the standard normal and of Student's distribution, to the few digits that an interval needs. */
-final class NormalQuantiles {
+public final class NormalQuantiles {
 
     private NormalQuantiles() {}
 
@@ -42,7 +42,7 @@ final class NormalQuantiles {
      * @param p in (0, 1)
      * @param n degrees of freedom, at least 3; error below 0.02 for p in [0.025, 0.975]
      */
-    static double student(double p, double n) {
+    public static double student(double p, double n) {
         double x = normal(p);
         double x2 = x * x;
         double g1 = x * (x2 + 1) / 4;
