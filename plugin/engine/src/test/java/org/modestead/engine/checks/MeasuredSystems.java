@@ -179,7 +179,8 @@ final class MeasuredSystems {
                 samples);
     }
 
-    private static Orbit recordedCycle() {
+    /** Two periods of the cycle at mu = 1, 128 samples each. */
+    static Orbit recordedCycle() {
         ReferenceTable table = ReferenceTable.read("vdp_mu1_cycle.csv");
         double[][] states = IntStream.range(0, table.rows().size())
                 .mapToObj(k -> new double[] {table.number(k, 1), table.number(k, 2)}).toArray(double[][]::new);

@@ -65,6 +65,15 @@ record Orbit(double step, double[][] states) {
         return new Oscillation(sum.rates().get(strongest), 2 * sum.parts().get(strongest).abs());
     }
 
+    /** Every oscillation in a number of the state whose amplitude is above a limit, by rising frequency. */
+    List<Oscillation> oscillations(int depth, ListedFunctions.StateFunction signal, double limit) {
+        Sum sum = sum(depth, signal);
+        return IntStream.range(0, sum.rates().size()).filter(j -> sum.rates().get(j).im() > 0)
+                .mapToObj(j -> new Oscillation(sum.rates().get(j), 2 * sum.parts().get(j).abs()))
+                .filter(part -> part.amplitude() > limit)
+                .sorted(Comparator.comparingDouble(part -> part.rate().im())).toList();
+    }
+
     /**
      * A conjugate pair.
      *
