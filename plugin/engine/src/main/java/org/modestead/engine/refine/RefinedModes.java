@@ -121,7 +121,7 @@ public record RefinedModes(RefinedRates rates, List<Run> runs, List<Mode> modes)
         double alongAngular = mode.rate().re() * mode.rate().im() / cubed;
         double damping = Math.sqrt(Math.max(0, alongGrowth * alongGrowth * growth * growth + alongAngular * alongAngular * angular * angular
                 + 2 * alongGrowth * alongAngular * rates.crossCovariances()[term]));
-        return new ModeIntervals(around(mode.rate().re(), t * growth, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY),
+        return new ModeIntervals(level, around(mode.rate().re(), t * growth, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY),
                 around(mode.rate().im(), t * angular, 0, Double.POSITIVE_INFINITY), around(mode.dampingRatio(), t * damping, -1, 1),
                 Interval.UNKNOWN);
     }
