@@ -37,8 +37,12 @@ final class ModeTable {
     private ModeTable() {}
 
     static MemoryTable of(Spectrum spectrum, Optional<Verdict> verdict) {
+        return of(spectrum.modes(), verdict);
+    }
+
+    static MemoryTable of(List<Mode> modes, Optional<Verdict> verdict) {
         MemoryTable.Builder rows = MemoryTable.builder(SCHEMA, "modes");
-        for (Mode mode : spectrum.modes()) {
+        for (Mode mode : modes) {
             List<Object> cells = new ArrayList<>();
             cells.addAll(List.of((long) mode.number(), mode.rate().re(), mode.rate().im(), mode.frequency(),
                     finite(mode.period()), mode.dampingRatio(), finite(mode.doublingTime()), mode.amplitude(),

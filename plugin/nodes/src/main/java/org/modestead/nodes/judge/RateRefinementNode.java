@@ -48,7 +48,7 @@ public final class RateRefinementNode implements Node {
                         + " play no part."),
                         Port.optional("spectrum", PortType.SPECTRUM, "Spectrum", "Modes whose rates the search starts from.")),
                 List.of(Port.table("modes", "Modes", "Refined modes, strongest first, with intervals; not judged, so the verdict is"
-                        + " missing.", RefinedModeTable.SCHEMA),
+                        + " missing.", ModeTable.SCHEMA),
                         Port.table("fit", "Fit", "How well the sum of exponentials meets the samples and how the search ended.", FIT)),
                 RefinementSettings.declared(), 1);
     }
@@ -81,7 +81,7 @@ public final class RateRefinementNode implements Node {
                 context.progress());
         List<Doubt> doubts = new ArrayList<>(start.doubts());
         doubts.addAll(doubts(refined.rates(), snapshots));
-        return new NodeResult(Map.of("modes", RefinedModeTable.of(refined.modes()), "fit", fit(refined)), List.of(),
+        return new NodeResult(Map.of("modes", ModeTable.of(refined.modes(), Optional.empty()), "fit", fit(refined)), List.of(),
                 summary(refined, snapshots), doubts);
     }
 
