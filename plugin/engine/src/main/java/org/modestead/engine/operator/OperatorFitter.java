@@ -38,8 +38,12 @@ public final class OperatorFitter {
         progress.report(0.8, "choosing the rank");
         RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
         progress.report(1, "fitted");
-        return new FittedOperator(full, choice.rank(), choice.reason(), ridge, estimator, estimator.describe(), estimator.kernel(), snapshots,
+        return new FittedOperator(full, choice.rank(), choice.reason(), ridge, estimator, method(estimator, full), estimator.kernel(), snapshots,
                 doubts(full, choice.rank(), snapshots));
+    }
+
+    private static String method(Estimator estimator, OrthonormalCompression full) {
+        return estimator.describe() + full.inputs().map(effect -> ", inputs " + effect.use().words()).orElse("");
     }
 
     private static double freeShare(OrthonormalCompression full, InputEffect effect) {

@@ -39,7 +39,7 @@ final class StepRegression {
         if (use == InputUse.LEFT_IN || pairs.inputs() == 0) {
             return new FactoredCompression(functions, now, next, target, InnerProduct.DATA, evolution, correction);
         }
-        InputWindow window = new InputWindow(use, pairs.inputs(), pairs.reach(), pairs.stride());
+        InputWindow window = InputWindow.of(use, pairs.inputs(), pairs.reach(), pairs.stride(), pairs.runs());
         FunctionBasis inputTerms = terms.on(pairs.now().numCols, window.size());
         DMatrixRMaj known = weights.rows(inputTerms.evaluate(
                 CommonOps_DDRM.concatColumnsMulti(pairs.now(), pairs.windows(window))), weight);

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
@@ -80,5 +81,19 @@ class DrivenForecastTest {
         Series series = new Series("a", new double[] {0, 1, 2}, new DMatrixRMaj(3, 1), Motions.column(4, 5, 6), 0);
         assertArrayEquals(new double[] {5, 6, 6, 6}, series.inputs(2, 2, 2).data);
         assertArrayEquals(new double[] {4, 5, 6}, series.inputs(1, 2, 1).data);
+    }
+
+    @Test
+    void backtestsWithRefitsKnowTheInputsOfTheRunTheyGoOnFrom() {
+        List<Run> training = training(false).stream().map(Driven::position).toList();
+        Run whole = Driven.position(Driven.run("a", 260, 1, 0, Driven.random(1), false));
+        Run tail = new Run("a", Arrays.copyOfRange(whole.times(), 156, 260), Matrices.block(whole.values(), 156, 260, 0, 1),
+                Matrices.block(whole.inputs(), 156, 260, 0, 1), 4);
+        Snapshots snapshots = Driven.snapshots(4, training, List.of(tail));
+        FittedOperator operator = Motions.fit(snapshots, new LinearEstimator(), 2);
+        BacktestResult result = RollingOrigin.run(snapshots, operator, Optional.empty(), new BacktestPlan(ForecastPlan.DEFAULT, 3,
+                Refit.EVERY_ORIGIN), Progress.NONE);
+        result.scores().stream().filter(row -> row.method().equals("modal") || row.method().equals("projection"))
+                .forEach(row -> assertEquals(0, row.rmse(), 1e-7, row.toString()));
     }
 }

@@ -7,13 +7,13 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.Random;
+import java.util.stream.DoubleStream;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
+import net.jqwik.api.constraints.DoubleRange;
 import net.jqwik.api.constraints.IntRange;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
@@ -24,7 +24,6 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.fixtures.Driven;
 import org.modestead.engine.fixtures.Motions;
-import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.Channel;
@@ -35,7 +34,6 @@ import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
-import org.modestead.engine.spectrum.SpectrumExtractor;
 import org.modestead.engine.wellposed.Finding;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.JudgeSettings;
@@ -283,9 +281,11 @@ class InputSeparationTest {
                 new TimeAxis(TimeAxis.Kind.NUMBER, ""), List.of(new Run("a", times, values, inputs, 0)), List.of(), List.of(),
                 java.util.OptionalDouble.of(1), DelayEmbedding.NONE, Preparation.identity(1), List.of(), List.of());
         DictionaryEstimator estimator = new DictionaryEstimator(Dictionary.fourier(1, 2 * Math.PI));
+        // free motion is that under the mean input
+        double mean = CommonOps_DDRM.elementSum(inputs) / 400;
         Mode mode = Motions.nearest(Motions.spectrum(snapshots, estimator, 2), 0, 0.3);
         // second order in the input: 0.02² / 2
-        assertEquals(0.3, mode.rate().im(), 5e-4);
+        assertEquals(0.3 + mean, mode.rate().im(), 5e-4);
         assertEquals(0, mode.rate().re(), 5e-4);
     }
 
@@ -297,5 +297,28 @@ class InputSeparationTest {
         OrthonormalCompression alone = new LinearEstimator().compress(snapshots, Progress.NONE).whiten(4);
         assertArrayEquals(alone.action().data, full.leading(4).action().data, 1e-11);
         assertArrayEquals(alone.inputs().orElseThrow().next().data, full.leading(4).inputs().orElseThrow().next().data, 1e-11);
+    }
+
+    @Property(tries = 30)
+    void unitAndZeroOfAnInputDoNotMatter(@ForAll long seed, @ForAll @DoubleRange(min = -4, max = 4) double exponent,
+            @ForAll @DoubleRange(min = -100, max = 100) double offset, @ForAll boolean monomials) {
+        Random random = new Random(seed);
+        List<Run> runs = List.of(Driven.noisy(Driven.run("a", 80, 1, 0, Driven.random(seed), false), 0.05, random),
+                Driven.noisy(Driven.run("b", 80, 0, 1, Driven.random(seed + 1), false), 0.05, random));
+        List<Run> others = runs.stream().map(run -> {
+            DMatrixRMaj inputs = Matrices.scaled(run.inputs(), Math.pow(10, exponent));
+            CommonOps_DDRM.add(inputs, offset * Math.pow(10, exponent), inputs);
+            return new Run(run.id(), run.times(), run.values(), inputs, 0);
+        }).toList();
+        Estimator estimator = monomials ? new DictionaryEstimator(Dictionary.monomials(2)) : new LinearEstimator();
+        double[] plain = multipliers(estimator, runs);
+        double[] other = multipliers(estimator, others);
+        // inputs are counted from their mean: rounding of the offset, up to a hundred times the swing
+        assertArrayEquals(plain, other, 1e-6);
+    }
+
+    private static double[] multipliers(Estimator estimator, List<Run> runs) {
+        return LinearAlgebra.installed().eigen(estimator.compress(Driven.snapshots(1, runs, List.of()), Progress.NONE).whiten(2).action())
+                .values().stream().flatMapToDouble(value -> DoubleStream.of(value.re(), Math.abs(value.im()))).sorted().toArray();
     }
 }

@@ -268,7 +268,7 @@ class StructureTest {
                 Driven.GROWTH, Driven.ANGULAR);
         assertEquals(Driven.GROWTH, mode.rate().re(), 1e-8, "the free motion is stable already");
         assertTrue(operator.chosen().inputs().isPresent());
-        assertEquals("linear least squares in delay coordinates, made stable", operator.method());
+        assertEquals("linear least squares in delay coordinates, made stable, inputs separated, held from sample to sample", operator.method());
     }
 
     @Test
