@@ -19,7 +19,7 @@ final class DistributionScores {
      * @param methods the judged route first
      */
     static Optional<String> sentence(ForecastTask task, List<Judged> methods, ErrorUnits units) {
-        int horizon = task.scoreSteps().stream().filter(steps -> steps <= task.observedLeads()).max(Integer::compare).orElse(0);
+        int horizon = task.longestScored();
         if (horizon == 0 || Double.isNaN(mean(task, methods.get(0), units, horizon))) {
             return Optional.empty();
         }

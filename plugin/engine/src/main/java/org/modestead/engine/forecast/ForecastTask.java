@@ -180,6 +180,11 @@ record ForecastTask(
         return asked.distinct().sorted().toList();
     }
 
+    /** Returns the longest score horizon in steps that the holdout reaches, 0 for none. */
+    int longestScored() {
+        return scoreSteps().stream().filter(horizon -> horizon <= observedLeads()).max(Integer::compare).orElse(0);
+    }
+
     /** Returns m of the scaled errors: the season, or 1. */
     int scaleSeason() {
         return season.orElse(1);

@@ -52,6 +52,7 @@ public final class Forecaster {
         progress.report(1, "forecast done");
         List<String> summary = new ArrayList<>(Summary.of(task, choice, used, units, scores.rows()));
         DistributionScores.sentence(task, methods, units).ifPresent(summary::add);
+        PercentScores.sentence(task, methods).ifPresent(summary::add);
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
         doubts.addAll(table.doubts());

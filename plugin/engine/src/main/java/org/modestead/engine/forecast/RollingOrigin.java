@@ -62,6 +62,7 @@ public final class RollingOrigin {
         List<String> summary = new ArrayList<>(List.of(choice.sentence(), sentence(task, starts, plan)));
         summary.addAll(Summary.judged(task, judged.get(0), units, scores.rows()));
         DistributionScores.sentence(task, judged, units).ifPresent(summary::add);
+        PercentScores.sentence(task, judged).ifPresent(summary::add);
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
         doubts.addAll(judged.get(0).bandDoubts(task));

@@ -1,6 +1,7 @@
 package org.modestead.engine.forecast;
 
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 
 /** The formulas by which forecasts are judged. */
 final class Scores {
@@ -15,6 +16,17 @@ final class Scores {
     /** Returns {@code mean |e|}; NaN for no errors. */
     static double mae(double[] errors) {
         return mean(DoubleStream.of(errors).map(Math::abs));
+    }
+
+    /** Returns the mean absolute error in percent, {@code 100 mean |e|/|y|}, for observed y; NaN for no errors. */
+    static double percent(double[] errors, double[] observed) {
+        return mean(IntStream.range(0, errors.length).mapToDouble(k -> 100 * Math.abs(errors[k] / observed[k])));
+    }
+
+    /** Returns the symmetric one, {@code 200 mean |e|/(|y| + |y + e|)}: of the mean of observed and forecast. */
+    static double symmetricPercent(double[] errors, double[] observed) {
+        return mean(IntStream.range(0, errors.length).mapToDouble(k -> 200 * Math.abs(errors[k])
+                / (Math.abs(observed[k]) + Math.abs(observed[k] + errors[k]))));
     }
 
     /**

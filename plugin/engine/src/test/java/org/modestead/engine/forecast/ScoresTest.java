@@ -27,6 +27,9 @@ class ScoresTest {
         assertEquals(1.22474487139159, Scores.rmse(errors), ROUNDING);
         assertEquals(1, Scores.mae(errors), ROUNDING);
         assertEquals(0, Scores.mean(Arrays.stream(errors)), ROUNDING, "no bias");
+        double[] observed = {3, 5, 4, 6};
+        assertEquals(25, Scores.percent(errors, observed), 1e-13);
+        assertEquals(24.5454545454545, Scores.symmetricPercent(errors, observed), 5e-14);
         double scale = Scores.naiveScale(List.of(new double[] {1, 3, 2, 4, 3}), 1);
         assertEquals(1.5, scale, ROUNDING);
         assertEquals(0.666666666666667, Scores.mae(errors) / scale, 1e-15);

@@ -61,8 +61,9 @@ public final class BacktestNode implements Node {
                 the operator as it was fitted. Coverage should come near the share asked for; the interval score adds up \
                 width and fines for misses, smaller is better. Where calibration has ten origins or more, the summary also \
                 takes each method as a distribution, its value with its errors of calibration around it, and gives the mean \
-                continuous ranked probability score (CRPS): in the unit of the errors, smaller is better. Successive times \
-                are not independent, so with few origins all of these scatter.
+                continuous ranked probability score (CRPS): in the unit of the errors, smaller is better. Where everything \
+                observed is positive and nothing near zero, it tells the errors in percent as well. Successive times are not \
+                independent, so with few origins all of these scatter.
 
                 Left to itself the node judges the modes where the verdict lets them stand, the projection otherwise; \
                 both are scored. Where decisions on pressure, structures or grids hang on a forecast, keep the usual safety \
