@@ -2,9 +2,11 @@ package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.Progress;
+import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Preparation;
 
 /**
@@ -20,11 +22,12 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
     /**
      * Forecasts.
      *
+     * @param beyond the bands at longer leads, where they can be told
      * @throws ForecastFault if there is no run to start from
      */
-    static ForecastTable of(ForecastTask task, ForecastRoute route, Bands bands, Progress progress) {
+    static ForecastTable of(ForecastTask task, ForecastRoute route, Bands bands, Optional<BandsBeyond> beyond, Progress progress) {
         List<Series> all = starts(task);
-        Builder builder = new Builder(task, bands);
+        Builder builder = new Builder(task, bands, beyond);
         List<String> tooShort = new ArrayList<>();
         for (int s = 0; s < all.size(); s++) {
             progress.checkCancelled();
@@ -62,13 +65,15 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
     private static final class Builder {
         private final ForecastTask task;
         private final Bands bands;
+        private final Optional<BandsBeyond> beyond;
         private final List<ForecastRow> rows = new ArrayList<>();
         private final List<String> cut = new ArrayList<>();
         private final List<String> left = new ArrayList<>();
 
-        Builder(ForecastTask task, Bands bands) {
+        Builder(ForecastTask task, Bands bands, Optional<BandsBeyond> beyond) {
             this.task = task;
             this.bands = bands;
+            this.beyond = beyond;
         }
 
         void add(Series series, ForecastRoute route) {
@@ -86,9 +91,22 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
                 cut.add("run " + series.id() + " at " + label(time(series, origin, kept + 1)));
             }
             noteLeaving(series, origin, values, kept);
+            DMatrixRMaj halves = halves(series.history(origin, route.memory()), steps);
             for (int lead = 1; lead <= kept; lead++) {
-                addRows(series, time(series, origin, lead), lead, values);
+                addRows(series, time(series, origin, lead), lead, values, halves);
             }
+        }
+
+        private DMatrixRMaj halves(DMatrixRMaj history, int steps) {
+            if (beyond.isPresent()) {
+                DelayEmbedding delay = task.snapshots().delay();
+                return beyond.get().halfWidths(DelayState.at(history, history.numRows - 1, delay), steps);
+            }
+            DMatrixRMaj out = new DMatrixRMaj(steps, task.snapshots().channels().size());
+            for (int k = 0; k < out.data.length; k++) {
+                out.data[k] = bands.halfWidth(k / out.numCols + 1, k % out.numCols);
+            }
+            return out;
         }
 
         private int sensible(DMatrixRMaj values) {
@@ -111,11 +129,11 @@ record ForecastTable(List<ForecastRow> rows, List<Doubt> doubts) {
             }
         }
 
-        private void addRows(Series series, double time, int lead, DMatrixRMaj values) {
+        private void addRows(Series series, double time, int lead, DMatrixRMaj values, DMatrixRMaj halves) {
             Preparation preparation = task.snapshots().preparation();
             for (int c = 0; c < values.numCols; c++) {
                 double value = preparation.restore(c, time, values.get(lead - 1, c));
-                double half = bands.halfWidth(lead, c) * preparation.scale()[c];
+                double half = halves.get(lead - 1, c) * preparation.scale()[c];
                 rows.add(new ForecastRow(series.id(), time, c, value, value - half, value + half));
             }
         }

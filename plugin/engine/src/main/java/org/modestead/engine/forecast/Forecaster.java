@@ -14,7 +14,8 @@ import org.modestead.engine.wellposed.Verdict;
  * Reconstructs what was recorded, forecasts what comes, puts bands around it and holds it against naive baselines.
  *
  * <p><b>Bands</b> are split-conformal ({@link SplitConformal}), per lead time and channel, calibrated on the calibration
- * part or else on the first half of the holdout. <b>Scores</b> are rolling-origin errors over the holdout
+ * part or else on the first half of the holdout, and go on beyond the leads observed there by the operator and the spread of the
+ * fit where these can be told ({@link BandsBeyond}). <b>Scores</b> are rolling-origin errors over the holdout
  * ({@link ScoreRow}) for both routes and the naive methods: persistence, the seasonal naive forecast where there is a
  * season, drift and mean. Coverage
  * and interval score come only from origins that the bands were not calibrated on; point scores from all.
@@ -47,7 +48,8 @@ public final class Forecaster {
         ErrorUnits units = ErrorUnits.of(snapshots, task.scaleSeason());
         ScoreTable scores = ScoreTable.of(task, methods, units);
         Judged used = methods.get(0);
-        ForecastTable table = ForecastTable.of(task, used.route(), used.bands(), progress.part(0.7, 0.9));
+        Optional<BandsBeyond> beyond = BandsBeyond.of(task, operator, used.bands(), progress.part(0.7, 0.75));
+        ForecastTable table = ForecastTable.of(task, used.route(), used.bands(), beyond, progress.part(0.75, 0.9));
         Reconstruction reconstruction = Reconstruction.of(snapshots, operator, progress.part(0.9, 1));
         progress.report(1, "forecast done");
         List<String> summary = new ArrayList<>(Summary.of(task, choice, used, units, scores.rows()));
@@ -56,7 +58,7 @@ public final class Forecaster {
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
         doubts.addAll(table.doubts());
-        doubts.addAll(used.bandDoubts(task));
+        doubts.addAll(used.bandDoubts(task, beyond.isPresent()));
         doubts.addAll(scores.doubts());
         doubts.addAll(reconstruction.doubts());
         return new ForecastResult(table.rows(), reconstruction.rows(), scores.rows(), choice.route(),

@@ -36,8 +36,12 @@ record Judged(ForecastRoute route, Bands bands, ErrorDistribution distribution, 
         return Math.max(task.memory(), route.memory());
     }
 
-    /** Returns what a reader must know about the bands. */
-    List<Doubt> bandDoubts(ForecastTask task) {
+    /**
+     * Returns what a reader must know about the bands.
+     *
+     * @param beyond whether they go on at leads that no calibration reaches
+     */
+    List<Doubt> bandDoubts(ForecastTask task, boolean beyond) {
         int reach = bands.reach();
         String promised = Summary.percent(task.plan().coverage());
         if (reach == 0) {
@@ -47,7 +51,11 @@ record Judged(ForecastRoute route, Bands bands, ErrorDistribution distribution, 
         List<Doubt> out = new ArrayList<>();
         out.add(new Doubt("bands-not-exchangeable", "The bands promise " + promised + " coverage only for exchangeable"
                 + " errors; errors of a time series are not, so trust the coverage measured on the holdout."));
-        if (reach < task.steps()) {
+        if (reach < task.steps() && beyond) {
+            out.add(new Doubt("bands-extrapolated", "Errors were seen up to " + Summary.figure(reach * task.step()) + " (" + reach + " of "
+                    + task.steps() + " steps) ahead; beyond, the bands widen as the operator lets noise pile up and as fits to"
+                    + " resampled runs differ: they are as good as the operator, and no holdout has seen them."));
+        } else if (reach < task.steps()) {
             out.add(new Doubt("bands-end", "Bands reach " + Summary.figure(reach * task.step()) + " (" + reach + " of "
                     + task.steps() + " steps) ahead; for longer ones keep a longer calibration part."));
         }

@@ -65,7 +65,7 @@ public final class RollingOrigin {
         PercentScores.sentence(task, judged).ifPresent(summary::add);
         List<Doubt> doubts = new ArrayList<>(choice.doubts());
         doubts.addAll(task.doubts(operator));
-        doubts.addAll(judged.get(0).bandDoubts(task));
+        doubts.addAll(judged.get(0).bandDoubts(task, false));
         doubts.addAll(scores.doubts());
         return new BacktestResult(scores.rows(), errors(task, judged), choice.route(), summary, doubts);
     }

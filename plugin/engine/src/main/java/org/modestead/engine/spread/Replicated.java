@@ -38,8 +38,7 @@ record Replicated(double fitted, double[] values) {
     Interval interval(double level, double pieces, double least, double most) {
         double[] sorted = values.clone();
         Arrays.sort(sorted);
-        double n = Math.max(FEWEST, pieces);
-        double reach = NormalQuantiles.student((1 + level) / 2, n - 1) * Math.sqrt(n / (n - 1));
+        double reach = reach(level, pieces);
         if (fitted <= least || fitted >= most) {
             double low = quantile(sorted, NormalQuantiles.probability(-reach));
             double high = quantile(sorted, NormalQuantiles.probability(reach));
@@ -61,8 +60,14 @@ record Replicated(double fitted, double[] values) {
         return new Interval(Math.exp(found.low()), Math.exp(found.high()));
     }
 
+    /** Returns how many standard deviations of the replicates an interval reaches to either side. */
+    static double reach(double level, double pieces) {
+        double n = Math.max(FEWEST, pieces);
+        return NormalQuantiles.student((1 + level) / 2, n - 1) * Math.sqrt(n / (n - 1));
+    }
+
     /** Linear between the order statistics, the k-th of n at k/(n + 1); the outermost ones beyond. */
-    private static double quantile(double[] sorted, double p) {
+    static double quantile(double[] sorted, double p) {
         double at = Math.max(0, Math.min(sorted.length - 1, p * (sorted.length + 1) - 1));
         int k = Math.min((int) at, Math.max(0, sorted.length - 2));
         return sorted.length == 1 ? sorted[0] : sorted[k] + (at - k) * (sorted[k + 1] - sorted[k]);
