@@ -61,7 +61,9 @@ public final class ForecastNode implements Node {
                 Bands are split-conformal: as wide as the errors on the calibration part were, horizon by horizon; \
                 without one, on the first half of the holdout, which then is not scored. They hold their share of \
                 observations if errors stay as they were; a changed plant breaks them, and successive times are not \
-                independent.
+                independent. Beyond the leads that calibration reaches, the band of a step map goes on: what one step leaves \
+                over piles up by the operator, and fits to resampled runs differ more and more. It is then as good as the \
+                operator, and a doubt says from where on.
 
                 Scores come from the holdout, from many starts. Errors are root mean square (rmse), mean absolute (mae) \
                 and scaled by the one-step naive error in training (mase, below 1 is better than naive). Compare with \

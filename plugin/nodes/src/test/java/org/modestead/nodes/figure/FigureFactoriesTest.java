@@ -46,6 +46,18 @@ class FigureFactoriesTest {
         assertEquals(Grade.values().length, Arrays.stream(Grade.values()).map(VerdictMarks::mark).distinct().count());
     }
 
+    @Test
+    void intervalsAreBarsThroughTheMarkOfTheirMode() {
+        Figure plane = EigenvaluePlane.figure(ReportFixture.withIntervals(), Optional.empty());
+        List<Figure.Line> bars = plane.layers().stream().filter(Figure.Line.class::isInstance).map(Figure.Line.class::cast).toList();
+        assertEquals(List.of("mode:1", "mode:1"), bars.stream().map(Figure.Line::selection).toList());
+        assertArrayEquals(new double[] {-0.25, -0.1}, bars.get(0).x());
+        assertArrayEquals(new double[] {9.55 / (2 * Math.PI), 9.55 / (2 * Math.PI)}, bars.get(0).y());
+        assertArrayEquals(new double[] {-0.1719, -0.1719}, bars.get(1).x());
+        assertArrayEquals(new double[] {1.5, 1.54}, bars.get(1).y(), 1e-12);
+        assertTrue(plane.caption().contains("Bars are 90 % intervals."), plane.caption());
+    }
+
     private static RankedKernel kernel(String family, Map<String, Double> parameters, double error, Optional<Grade> grade) {
         return new RankedKernel(new KernelSpec(family, parameters), 3, error, 0.5,
                 grade.map(given -> new KernelVerdict(given, 0.9, 0.1, 0.01, Optional.empty(), true, "")), ModeRoom.AFFINE, "");

@@ -62,6 +62,16 @@ class ModeReportNodeTest {
     }
 
     @Test
+    void intervalsStandBesideTheFigures() {
+        Map<String, Object> inputs = Map.of("spectrum", ReportFixture.withIntervals());
+        String modes = text(run(inputs), "Modes");
+        for (String cell : List.of("1.52 (1.50 to 1.54)", "\u22120.172 (\u22120.250 to \u22120.100)", "1.8 % (1.0 % to 2.6 %)",
+                "\u22124.03 (\u22126.93 to \u22122.77)", "1.00 (0.900 to 1.10)", "90 % intervals")) {
+            assertTrue(modes.contains(cell), cell + " in " + modes);
+        }
+    }
+
+    @Test
     void theSummaryHasHeadlineShareVerdictAndSkillInWords() {
         String summary = text(run(inputs(Grade.STANDS)), "Summary");
         assertTrue(summary.contains("Mode 1 stands (report the mode): 1.52 Hz, damping ratio 1.8 %; 70 % of the signal."),

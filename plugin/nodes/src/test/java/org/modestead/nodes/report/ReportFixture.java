@@ -20,7 +20,9 @@ import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
+import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.ModeIntervals;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Finding;
 import org.modestead.engine.wellposed.Grade;
@@ -56,6 +58,15 @@ public final class ReportFixture {
         return new Spectrum(rates, rates, none, none, none, modes, channels, DelayEmbedding.NONE,
                 Preparation.identity(channels.size()), "s",
                 List.of(new Doubt("aliasing", "frequencies above 10 Hz appear folded")));
+    }
+
+    /** The same with 90 % intervals at mode 1. */
+    public static Spectrum withIntervals() {
+        Spectrum plain = spectrum();
+        List<Mode> modes = new ArrayList<>(plain.modes());
+        modes.set(0, modes.get(0).with(new ModeIntervals(0.9, new Interval(-0.25, -0.1),
+                new Interval(2 * Math.PI * 1.5, 2 * Math.PI * 1.54), new Interval(0.01, 0.026), new Interval(0.9, 1.1))));
+        return plain.with(modes, List.of());
     }
 
     private static Mode mode(int number, double growth, double turn, double share, boolean constant) {
