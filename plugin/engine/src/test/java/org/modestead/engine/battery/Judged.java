@@ -54,7 +54,8 @@ record Judged(Optional<Fit> fit) {
         double accuracy() {
             double[] singular = operator.compression().singular();
             double weakest = singular[operator.rank() - 1] / singular[0];
-            return (operator.kernel().isPresent() ? 1e-5 : 1e-9) + 100 * Math.ulp(1.0) / (weakest * weakest) * ModalExpansion.of(operator.chosen()).condition();
+            double rounding = 100 * Math.ulp(1.0) / (weakest * weakest);
+            return (operator.kernel().isPresent() ? 1e-5 : 1e-9) + rounding * ModalExpansion.of(operator.chosen()).condition();
         }
 
         /** Whether several functions share its rate: then rounding picks which mixture of them is called a mode. */
