@@ -97,7 +97,7 @@ class ChecksTest {
     @Test
     void idsAreUniqueAndEveryCheckIsFoundByTheServiceLoader() {
         List<String> ids = ServiceLoader.load(Check.class).stream().map(p -> p.get().id()).toList();
-        assertEquals(16, ids.size());
+        assertEquals(17, ids.size());
         assertEquals(ids.size(), ids.stream().distinct().count());
         assertTrue(ids.stream().allMatch(id -> id.matches("[a-z]+(-[a-z]+)*")), ids.toString());
     }
