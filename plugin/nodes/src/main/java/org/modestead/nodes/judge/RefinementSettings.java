@@ -51,7 +51,8 @@ final class RefinementSettings {
                         new Setting.Option("free", "Growth and frequency", "Each may grow or fade at its own rate."),
                         new Setting.Option("steady", "Frequency only", "None grows or fades.")), "free"),
                 new Setting.Flag(new Common(CONSTANT, "Constant", model, "Whether a constant of its own is added for every run and"
-                        + " channel, in place of any the spectrum holds."), false),
+                        + " channel, in place of any the spectrum holds: offsets of sensors, and what subtracting a mean leaves. Without"
+                        + " it slow rates bend to make up for offsets."), true),
                 new Setting.Flag(new Common(FROM_ZERO, "From zero", model, "Whether the signal is zero at time zero, as that of a"
                         + " motion that starts from rest there."), false),
                 new Setting.Choice(new Common(TIME_ZERO, "Time zero", model, "Where time is zero for each run. It matters for"

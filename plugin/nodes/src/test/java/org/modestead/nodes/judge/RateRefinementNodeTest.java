@@ -82,7 +82,7 @@ class RateRefinementNodeTest {
                 .get("operator");
         Object spectrum = Steps.run("spectrum-extractor", Map.of("operator", operator), Map.of()).outputs().get("spectrum");
         assertTrue(((Spectrum) spectrum).modes().size() >= 2);
-        NodeResult refined = refine(Map.of("snapshots", snapshots, "spectrum", spectrum), Map.of("least-share", 0));
+        NodeResult refined = refine(Map.of("snapshots", snapshots, "spectrum", spectrum), Map.of("least-share", 0, "constant", false));
         assertEquals("converged", search(refined));
         assertEquals(1.6117193594e-8, fit(refined, "residual sum"), 1e-6 * 1.6e-8, "tolerance of CHECKS C1.2");
         List<Double> rates = Steps.column(refined, "modes", "lambda_real").stream().map(Double::valueOf).sorted().toList();
@@ -96,7 +96,7 @@ class RateRefinementNodeTest {
     void runsShareRatesAndTheTableHasTheColumnsOfTheModeTableAndIntervals() {
         Object snapshots = Steps.run("snapshot-builder", Map.of("table", Ringing.numbers(3)), Map.of("time-column", "time", "run-column",
                 "run")).outputs().get("snapshots");
-        NodeResult refined = refine(Map.of("snapshots", snapshots), Map.of("start-periods", List.of(0.7)));
+        NodeResult refined = refine(Map.of("snapshots", snapshots), Map.of("start-periods", List.of(0.7), "constant", false));
         assertEquals(Ringing.FREQUENCY, Steps.number(refined, "modes", "frequency", 0), 1e-9);
         assertEquals(Ringing.DAMPING, Steps.number(refined, "modes", "damping_ratio", 0), 1e-9);
         assertEquals("", Steps.column(refined, "modes", "verdict").get(0));
@@ -105,6 +105,24 @@ class RateRefinementNodeTest {
         assertEquals(Math.sqrt(5), Steps.number(refined, "modes", "amplitude", 0), 1e-8);
         assertEquals(3, fit(refined, "runs"));
         assertTrue(refined.doubts().isEmpty(), refined.doubts().toString());
+    }
+
+    @Test
+    void offsetsDoNotBendASlowRateUnlessTheConstantIsLeftOut() {
+        double[] times = new double[100];
+        double[] values = new double[100];
+        for (int k = 0; k < 100; k++) {
+            times[k] = 0.1 * k;
+            values[k] = 3 + 2 * Math.exp(-0.4 * times[k]);
+        }
+        Map<String, Object> start = Map.of("start-rates", List.of(-0.3));
+        NodeResult refined = refine(Map.of("snapshots", snapshots(times, values, Map.of("detrend", "mean"))), start);
+        List<Double> rates = Steps.column(refined, "modes", "lambda_real").stream().map(Double::valueOf).sorted().toList();
+        assertEquals(-0.4, rates.get(0), 1e-8);
+        assertEquals(0, rates.get(1));
+        NodeResult bent = refine(Map.of("snapshots", snapshots(times, values, Map.of("detrend", "mean"))),
+                Map.of("start-rates", List.of(-0.3), "constant", false));
+        assertTrue(Math.abs(Steps.number(bent, "modes", "lambda_real", 0) + 0.4) > 0.05);
     }
 
     @Test
@@ -181,7 +199,7 @@ class RateRefinementNodeTest {
         assertEquals("neither a spectrum is connected nor a rate or period given",
                 assertThrows(SettingFault.class, () -> refine(Map.of("snapshots", snapshots), Map.of())).seen());
         assertEquals("setting from-zero", assertThrows(SettingFault.class, () -> refine(Map.of("snapshots", snapshots),
-                Map.of("start-rates", List.of(-1), "from-zero", true))).where());
+                Map.of("start-rates", List.of(-1), "from-zero", true, "constant", false))).where());
     }
 
     @Test
