@@ -136,7 +136,12 @@ public final class KernelChooserNode implements Node {
         }
         RankingWords words = new RankingWords(rows, settings.whole(KernelSettings.STEPS),
                 new TimeUnit(snapshots.time().unit()));
-        return result(KernelFamilies.create(best.kernel()), rows, words.summary(), words.doubts(),
+        List<Doubt> doubts = new ArrayList<>(words.doubts());
+        if (!snapshots.inputs().isEmpty()) {
+            doubts.add(new Doubt("inputs-not-separated", "Kernels are compared with the inputs left in: what they drive counts as free"
+                    + " motion."));
+        }
+        return result(KernelFamilies.create(best.kernel()), rows, words.summary(), doubts,
                 RankingFigure.of(rows, settings.whole(KernelSettings.STEPS)).stream().toList());
     }
 

@@ -55,17 +55,17 @@ public final class RateRefinementNode implements Node {
 
     private static String description() {
         return """
-                A fit of steps or pieces is a detour: noise in the states bends its rates. Here the signal of every run and channel \\
-                is written as a sum of exponentials, steady, growing or fading, with rates that all runs share and sizes of their \\
-                own, and the squared misfit to all samples is made as small as it gets. For any rates the best sizes follow at once, \\
+                A fit of steps or pieces is a detour: noise in the states bends its rates. Here the signal of every run and channel \
+                is written as a sum of exponentials, steady, growing or fading, with rates that all runs share and sizes of their \
+                own, and the squared misfit to all samples is made as small as it gets. For any rates the best sizes follow at once, \
                 so that the search runs over the rates alone. Times may be uneven; runs of greater weight count more.
 
-                The search finds the minimum next to its start. Start from the spectrum of a fitted operator, and add periods that \\
-                are known from elsewhere or rates that it missed. Compare the residual with the noise you expect: if it is much larger, \\
+                The search finds the minimum next to its start. Start from the spectrum of a fitted operator, and add periods that \
+                are known from elsewhere or rates that it missed. Compare the residual with the noise you expect: if it is much larger, \
                 terms are missing.
 
-                The intervals are those of least squares, for white noise and the right number of terms. They say nothing of whether \\
-                the modes exist: the Well-posedness Checker judges the operator, not this fit. Do not use it for motion that is \\
+                The intervals are those of least squares, for white noise and the right number of terms. They say nothing of whether \
+                the modes exist: the Well-posedness Checker judges the operator, not this fit. Do not use it for motion that is \
                 no sum of exponentials, or whose inputs matter.
 
                 Cost: samples times channels times the square of the number of terms, for each of some ten steps.""";

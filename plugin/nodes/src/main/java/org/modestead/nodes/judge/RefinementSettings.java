@@ -40,12 +40,12 @@ final class RefinementSettings {
                         + " least this share of the signal are refined; others are left out. Without effect where no spectrum is"
                         + " connected."), "", 0, false, 1, OptionalDouble.of(0.01)),
                 new Setting.Numbers(new Common(START_RATES, "Further rates", start, "Growth rates from which further real terms"
-                        + " start, negative for decays, one a term."), "per time", -LARGEST, LARGEST, List.of()),
+                        + " start, negative for decays, one a term."), "1/time", -LARGEST, LARGEST, List.of()),
                 new Setting.Numbers(new Common(START_PERIODS, "Further periods", start, "Periods from which further oscillations"
-                        + " start, steady at first, one a term."), "time", Double.MIN_NORMAL, LARGEST, List.of()),
+                        + " start, steady at first, one a term."), "time", 1e-12, LARGEST, List.of()),
                 new Setting.Numbers(new Common(FIXED_PERIODS, "Known periods", model, "Periods of steady oscillations that are"
                         + " known, such as the day or the year: their sizes are fitted, their periods are not."), "time",
-                        Double.MIN_NORMAL, LARGEST, List.of()),
+                        1e-12, LARGEST, List.of()),
                 new Setting.Choice(new Common(OSCILLATIONS, "Oscillations", model, "What is fitted of each oscillation that is not"
                         + " known."), List.of(
                         new Setting.Option("free", "Growth and frequency", "Each may grow or fade at its own rate."),

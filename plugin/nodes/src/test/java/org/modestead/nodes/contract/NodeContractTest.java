@@ -61,6 +61,7 @@ class NodeContractTest {
         return everyNode((declaration, node) -> {
             assertSentence(declaration.purpose());
             assertSentence(declaration.description());
+            assertFalse(declaration.description().contains("\\"), "a line continuation shows");
             assertTrue(declaration.description().length() > SHORTEST_DESCRIPTION, "the description is too short to help");
             assertFalse(declaration.keywords().isEmpty());
             Stream.concat(declaration.inputs().stream(), declaration.outputs().stream()).forEach(port -> {

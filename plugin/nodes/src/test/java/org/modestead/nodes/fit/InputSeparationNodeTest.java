@@ -72,4 +72,11 @@ class InputSeparationNodeTest {
                 .outputs().get("operator");
         assertTrue(left.doubts().stream().anyMatch(doubt -> doubt.code().equals("inputs-not-separated")));
     }
+
+    @Test
+    void kernelsComparedUnderInputsAreDoubted() {
+        NodeResult ranked = Steps.run("kernel-chooser", Map.of("snapshots", snapshots()), Map.of("choose", "rank", "candidates",
+                List.of("linear")));
+        assertTrue(ranked.doubts().stream().anyMatch(doubt -> doubt.code().equals("inputs-not-separated")), ranked.doubts().toString());
+    }
 }
