@@ -12,7 +12,7 @@ import org.modestead.engine.linalg.NearestStable;
 /**
  * A structure that was imposed on an action, and the action before that. With X the coordinates of the snapshots in the
  * orthonormal functions (m x r), Y those after a step, and {@code D = XᵀX}, which is I in the data inner product and {@code S²} in
- * the kernel space, the free action is {@code Ã = D⁻¹ XᵀY} and the misfit {@code ‖Y - X A‖² = ‖D^(1/2) (A - Ã)‖² + const}. Its minimum is
+ * the kernel space, the free action is {@code Ã = D⁻¹ XᵀY} and the misfit is {@code ‖D^(1/2) (A - Ã)‖² + const}. Its minimum is
  *
  * <pre>
  *   self-adjoint   a_ij = (d_i ã_ij + d_j ã_ji) / (d_i + d_j)       Higham, BIT 28:133, 1988 (symmetric Procrustes problem)

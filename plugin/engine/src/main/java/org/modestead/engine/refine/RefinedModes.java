@@ -19,9 +19,9 @@ import org.modestead.engine.spread.NormalQuantiles;
 /**
  * The optimised fit told as modes: sizes from the weights of every run, intervals from the covariance of the rates.
  *
- * <p>Intervals are {@code value ± t s} with Student's quantile; that of the damping ratio goes through its slope with respect to growth and
- * angular frequency, {@code ζ = -σ/|λ|}: {@code ∂ζ/∂σ = -ω²/|λ|³}, {@code ∂ζ/∂ω = σω/|λ|³}. They hold for white noise and the right number of
- * terms. What is held fixed has no interval.
+ * <p>Intervals are {@code value ± t s} with Student's quantile; that of the damping ratio {@code ζ = -σ/|λ|} goes through its slopes,
+ * {@code ∂ζ/∂σ = -ω²/|λ|³} and {@code ∂ζ/∂ω = σω/|λ|³}. They hold for white noise and the right number of terms. What is held fixed has no
+ * interval.
  *
  * @param rates as fitted; weights are those of the runs in {@link #runs()}
  * @param runs that were fitted: those of weight above 0, times counted from where asked

@@ -93,8 +93,9 @@ final class FitSettings {
     private static Setting inputs() {
         return new Setting.Choice(new Common(INPUTS, "Inputs", "Operator", "What is made of the input columns of the"
                 + " snapshots, where there are any. Separated, the modes are those of the motion left to itself, with"
-                + " inputs resting at their mean over training, and what drives it adds no mode of its own. Inputs count as free of noise, must vary independently of the state,"
-                + " and act within the delay depth: choose it long enough for dead times."), List.of(
+                + " inputs resting at their mean over training, and what drives it adds no mode of its own. Inputs count as"
+                + " free of noise, must vary independently of the state, and act within the delay depth: choose it long enough"
+                + " for dead times."), List.of(
                 new Option("held", "Separate, held", "Each input keeps its value until the next sample: set points,"
                         + " switched valves. Step maps, linear or dictionary, only."),
                 new Option("straight", "Separate, straight", "Each input runs straight to the next sample: loads and"
