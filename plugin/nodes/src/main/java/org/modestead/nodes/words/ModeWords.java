@@ -1,6 +1,7 @@
 package org.modestead.nodes.words;
 
 import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.ModeIntervals;
 
 /** A mode in words, with as many digits as its figures bear. */
 public final class ModeWords {
@@ -12,7 +13,7 @@ public final class ModeWords {
     private ModeWords() {}
 
     /**
-     * Returns for example {@code 1.52 Hz, damping ratio 1.8 %} or {@code no oscillation, halves every 12.3 s}.
+     * Returns for example {@code 1.52 Hz, damping ratio 1.8 %}, each with its interval in brackets where there is one, or {@code no oscillation, halves every 12.3 s}.
      *
      * @param mode any
      * @param unit of time
@@ -27,7 +28,7 @@ public final class ModeWords {
         if (!mode.oscillates()) {
             return "no oscillation, " + change(mode, unit);
         }
-        return cycle(mode, unit) + ", " + damping(mode, unit);
+        return cycle(mode, unit) + range(mode, unit) + ", " + damping(mode, unit);
     }
 
     /** Returns the frequency of an oscillating mode, or how long a cycle lasts where that is easier to grasp. */
@@ -36,12 +37,23 @@ public final class ModeWords {
                 : Digits.frequency(mode.frequency(), unit.frequency());
     }
 
+    /** Returns where the frequency, or the length of a cycle, may lie; empty without intervals or where an end is not known. */
+    private static String range(Mode mode, TimeUnit unit) {
+        boolean slow = mode.frequency() < SLOW;
+        return mode.intervals().map(found -> slow ? found.period() : found.frequency())
+                .filter(found -> Double.isFinite(found.low()) && Double.isFinite(found.high()))
+                .map(found -> " (" + (slow ? unit.span(found.low()) : Digits.figure(found.low())) + " to "
+                        + (slow ? unit.span(found.high()) : Digits.figure(found.high())) + ")").orElse("");
+    }
+
     private static String damping(Mode mode, TimeUnit unit) {
         if (Math.abs(mode.dampingRatio()) < UNDAMPED) {
             return "next to no damping";
         }
         String growing = mode.rate().re() > 0 ? ", growing: " + change(mode, unit) : "";
-        return "damping ratio " + Digits.percent(mode.dampingRatio()) + growing;
+        String range = mode.intervals().map(ModeIntervals::dampingRatio)
+                .map(found -> " (" + Digits.percent(found.low()) + " to " + Digits.percent(found.high()) + ")").orElse("");
+        return "damping ratio " + Digits.percent(mode.dampingRatio()) + range + growing;
     }
 
     /** Returns {@code doubles every …}, {@code halves every …} or {@code neither grows nor decays}. */

@@ -12,7 +12,9 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.ModeIntervals;
 import org.modestead.engine.wellposed.Grade;
 
 class WordsTest {
@@ -73,5 +75,15 @@ class WordsTest {
 
     private static Mode mode(double growth, double turn) {
         return new Mode(1, List.of(0), new Complex(growth, turn), 1, 1, 0, List.of(), false, 0);
+    }
+
+    @Test
+    void headlinesTellIntervalsWhereThereAreSome() {
+        Mode ringing = mode(-0.1719, 9.55).with(new ModeIntervals(0.9, new Interval(-0.25, -0.1),
+                new Interval(2 * Math.PI * 1.5, 2 * Math.PI * 1.54), new Interval(0.01, 0.026), Interval.UNKNOWN));
+        assertEquals("1.52 Hz (1.50 to 1.54), damping ratio 1.8 % (1.0 % to 2.6 %)", ModeWords.headline(ringing, new TimeUnit("s")));
+        Mode slow = mode(-0.01, 0.1).with(new ModeIntervals(0.9, new Interval(-0.02, 0), new Interval(0, 0.2), new Interval(0, 0.2),
+                Interval.UNKNOWN));
+        assertEquals("one cycle every 62.8 s, damping ratio 10 % (0 % to 20 %)", ModeWords.headline(slow, new TimeUnit("s")));
     }
 }
