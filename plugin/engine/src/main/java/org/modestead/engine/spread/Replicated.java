@@ -42,7 +42,7 @@ record Replicated(double fitted, double[] values) {
         if (fitted <= least || fitted >= most) {
             double low = quantile(sorted, NormalQuantiles.probability(-reach));
             double high = quantile(sorted, NormalQuantiles.probability(reach));
-            return new Interval(Math.min(low, fitted), Math.max(high, fitted));
+            return new Interval(Math.max(least, Math.min(low, fitted)), Math.min(most, Math.max(high, fitted)));
         }
         double centre = 2 * fitted - quantile(sorted, 0.5);
         double half = reach * (quantile(sorted, 1 - TAIL) - quantile(sorted, TAIL)) / (2 * TAIL_REACH);

@@ -60,6 +60,9 @@ class IntervalFiguresTest {
         Interval atEnd = new Replicated(1, values).interval(0.9, 1e9, 0, 1);
         assertEquals(0.05, atEnd.low(), 1e-6);
         assertEquals(1, atEnd.high());
+        // replicates stretched beyond what can be, as those of blocks are
+        double[] stretched = IntStream.rangeClosed(1, 99).mapToDouble(k -> k < 20 ? -7 : 1).toArray();
+        assertEquals(new Interval(-1, 1), new Replicated(1, stretched).interval(0.9, 20, -1, 1));
         Interval positive = new Replicated(0.1, values).positive(0.9, 100);
         assertTrue(positive.low() > 0 && positive.high() > positive.low());
     }
