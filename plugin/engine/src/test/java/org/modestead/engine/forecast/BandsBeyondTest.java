@@ -13,6 +13,7 @@ import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.hipparchus.distribution.discrete.BinomialDistribution;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.condition.EnabledIfSystemProperty;
 import org.modestead.engine.Progress;
 import org.modestead.engine.fixtures.Motions;
 import org.modestead.engine.linalg.Complex;
@@ -88,6 +89,7 @@ class BandsBeyondTest {
     }
 
     @Test
+    @EnabledIfSystemProperty(named = "coverage", matches = "full")
     void noiseThatPilesUpIsHeld() {
         assertCovers(new Complex(-0.2, 3), 20, 0.1, Route.MODAL);
     }
