@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.FitFault;
 import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.linalg.LinearAlgebra.SymmetricEigen;
 import org.modestead.engine.linalg.Matrices;
@@ -75,8 +76,17 @@ record Frame(OrthonormalCompression functions, double[] scale, int rank, double 
         }
         CommonOps_DDRM.multCols(now, scale);
         CommonOps_DDRM.multCols(next, scale);
-        OrthonormalCompression white = Ridge.apply(functions.again(now, next, target, rank), ridge);
-        return white.rank() < rank ? Optional.empty() : Optional.of(Refit.of(white, scale));
+        return refit(now, next, target);
+    }
+
+    /** A draw that the method cannot be fitted to is one in which no mode is found again. */
+    private Optional<Refit> refit(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target) {
+        try {
+            OrthonormalCompression white = Ridge.apply(functions.again(now, next, target, rank), ridge);
+            return white.rank() < rank ? Optional.empty() : Optional.of(Refit.of(white, scale));
+        } catch (FitFault impossible) {
+            return Optional.empty();
+        }
     }
 
     /** A root of what of the later functions no combination of the earlier ones explains. */

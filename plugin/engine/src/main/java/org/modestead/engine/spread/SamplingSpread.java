@@ -62,7 +62,7 @@ public record SamplingSpread(SpreadPlan plan, List<ModeSpread> modes, String dra
         Replicates replicates = Replicates.of(operator, plan, progress.part(0, 0.9));
         if (replicates.refits().isEmpty()) {
             return new SamplingSpread(plan, List.of(), "", 0, List.of(new Doubt("no-intervals",
-                    "No intervals: this fit offers nothing that could be resampled.")));
+                    "No intervals: this fit offers nothing that could be resampled, or none of the resampled fits succeeded.")));
         }
         Followed followed = Followed.of(operator, spectrum, modes, replicates.frame(), replicates.stretch());
         List<List<Optional<Followed.Found>>> found = new ArrayList<>();

@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.Random;
+import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.Cancelled;
 import org.modestead.engine.Progress;
@@ -53,6 +54,37 @@ class SamplingSpreadTest {
         double expected = Math.sqrt(2) * 0.3 / Math.sqrt(squares) / (Recordings.STEP * Math.exp(-0.2 * Recordings.STEP));
         // 60 runs tell their spread to 1/√120 = 9 %, 200 replicates to 5 %
         assertEquals(expected, spread(operator, SpreadPlan.DEFAULT).of(1).orElseThrow().deviation(), 0.3 * expected);
+    }
+
+    private static ModeIntervals intervals(List<Run> runs, double step) {
+        FittedOperator operator = Motions.fit(Motions.snapshots(step, 1, runs, List.of()), new LinearEstimator(), 2);
+        return spread(operator, SpreadPlan.DEFAULT).of(1).flatMap(ModeSpread::intervals).orElseThrow();
+    }
+
+    private static void assertInterval(Interval expected, double factor, Interval actual) {
+        // rounding of the fit, times the condition of a well excited plane
+        assertEquals(expected.low() * factor, actual.low(), 1e-9);
+        assertEquals(expected.high() * factor, actual.high(), 1e-9);
+    }
+
+    @Test
+    void timeUnitAndOrderAndUnitsOfChannelsLeaveTheIntervalsAlone() {
+        List<Run> runs = new Recordings(ONE, 12, 50, 0, 2, 0.3, AS_IT_IS, 0, 1).next(new Random(8)).training();
+        ModeIntervals plain = intervals(runs, 0.1);
+        List<Run> slow = runs.stream().map(run -> new Run(run.id(), Motions.grid(50, 0.2), run.values())).toList();
+        assertInterval(plain.growth(), 0.5, intervals(slow, 0.2).growth());
+        assertInterval(plain.frequency(), 0.5, intervals(slow, 0.2).frequency());
+        assertInterval(plain.dampingRatio(), 1, intervals(slow, 0.2).dampingRatio());
+        List<Run> turned = runs.stream().map(run -> {
+            DMatrixRMaj values = run.values().copy();
+            for (int t = 0; t < 50; t++) {
+                values.set(t, 0, 1000 * run.values().get(t, 1));
+                values.set(t, 1, run.values().get(t, 0));
+            }
+            return new Run(run.id(), run.times(), values);
+        }).toList();
+        assertInterval(plain.growth(), 1, intervals(turned, 0.1).growth());
+        assertInterval(plain.frequency(), 1, intervals(turned, 0.1).frequency());
     }
 
     @Test

@@ -38,8 +38,8 @@ final class IntervalSettings {
                         new Setting.Option(NONE, "None", "The columns of the intervals stay empty.")), AUTOMATIC),
                 new Setting.Number(shown(LEVEL, "Level", "Share of recordings of this kind whose interval should hold the true"
                         + " figure."), "", 0.5, false, 0.999, OptionalDouble.of(DEFAULT.level())),
-                new Setting.Whole(shown(REPLICATES, "Replicates", "How often the fit is repeated. More steady the ends of the"
-                        + " intervals; a level of 0.99 deserves 1000."), "fits", FEWEST, MOST, OptionalLong.of(DEFAULT.replicates())),
+                new Setting.Whole(shown(REPLICATES, "Replicates", "How often the fit is repeated. More of them steady the"
+                        + " ends of the intervals."), "fits", FEWEST, MOST, OptionalLong.of(DEFAULT.replicates())),
                 new Setting.Whole(shown(SEED, "Seed", "Of the draws; the same seed gives the same intervals."), "", 0,
                         Integer.MAX_VALUE, OptionalLong.of(DEFAULT.seed())));
     }
