@@ -57,7 +57,8 @@ public record ObservedRun(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target,
     /** Returns the same, each row counting as much as a weight says. */
     ObservedRun weighted(double weight) {
         double root = Math.sqrt(weight);
-        return weight == 1 ? this : new ObservedRun(Matrices.scaled(now, root), Matrices.scaled(next, root), Matrices.scaled(target, root), known);
+        return weight == 1 ? this
+                : new ObservedRun(Matrices.scaled(now, root), Matrices.scaled(next, root), Matrices.scaled(target, root), known);
     }
 
     /** Returns the number of observations. */

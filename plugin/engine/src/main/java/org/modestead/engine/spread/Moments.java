@@ -64,7 +64,8 @@ record Moments(DMatrixRMaj gram, DMatrixRMaj cross, DMatrixRMaj second, DMatrixR
         DMatrixRMaj onNext = Matrices.block(cross, p, p + known, 0, cross.numCols);
         DMatrixRMaj onTarget = Matrices.block(observable, p, p + known, 0, observable.numCols);
         DMatrixRMaj explains = Matrices.product(inverse, onNow);
-        return new Moments(less(Matrices.block(gram, 0, p, 0, p), explains, onNow), less(Matrices.block(cross, 0, p, 0, cross.numCols), explains, onNext),
+        return new Moments(less(Matrices.block(gram, 0, p, 0, p), explains, onNow),
+                less(Matrices.block(cross, 0, p, 0, cross.numCols), explains, onNext),
                 less(second, Matrices.product(inverse, onNext), onNext),
                 less(Matrices.block(observable, 0, p, 0, observable.numCols), explains, onTarget));
     }

@@ -9,8 +9,8 @@ import org.modestead.engine.operator.ObservedRun;
 
 /**
  * What is drawn with replacement: whole runs where there are at least {@value #ENOUGH_RUNS}, blocks of neighbouring
- * observations otherwise (what lies between two gaps counts as a run). Runs are independent of each other whatever happens within them; blocks must be longer than the
- * noise remembers.
+ * observations otherwise (what lies between two gaps counts as a run). Runs are independent of each other whatever happens
+ * within them; blocks must be longer than the noise remembers.
  *
  * <p>Blocks start anywhere on the circle of all observations (circular block bootstrap, Politis and Romano, in LePage and
  * Billard, eds., <i>Exploring the Limits of Bootstrap</i>, Wiley 1992; after Künsch, Ann. Statist. 17:1217, 1989). They are made

@@ -144,7 +144,8 @@ class RefitTest {
     void structuresAreImposedOnReplicatesToo() {
         for (Structure structure : List.of(Structure.SELF_ADJOINT, Structure.UNITARY, Structure.STABLE)) {
             assertOnceIsTheFit(new StructuredEstimator(new LinearEstimator(), structure), 3, 4, 0);
-            assertOnceIsTheFit(new StructuredEstimator(new KernelStepEstimator(Motions.kernel("exponential", "rate", 1), 40), structure), 1, 4, 0);
+            assertOnceIsTheFit(new StructuredEstimator(new KernelStepEstimator(Motions.kernel("exponential", "rate", 1), 40),
+                    structure), 1, 4, 0);
         }
     }
 
