@@ -4,8 +4,9 @@ import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 
 /**
- * The state at one end of a segment, read off a cubic fitted by least squares to the samples next to it, so that noise
- * of a single sample does not enter the action of the generator undamped.
+ * The state at one sample, read off a cubic fitted by least squares to the samples around it, so that noise of a single
+ * sample does not enter the action of the generator undamped. In the middle of a run the cubic reaches to both sides, which
+ * damps far more than at the ends of a run, where it can reach to one side only.
  */
 public final class EndState {
 
@@ -16,22 +17,22 @@ public final class EndState {
     /**
      * @param times length p, rising
      * @param states p x N
-     * @param atStart first or last time
-     * @param samples how many samples enter; below 5 the sample itself is taken, and never more than p
+     * @param at index of the sample, in [0, p)
+     * @param samples how many samples enter, as evenly around it as the run allows; below 5 the sample itself is taken, and
+     *     never more than p
      * @return length N
      */
-    public static double[] of(double[] times, DMatrixRMaj states, boolean atStart, int samples) {
+    public static double[] of(double[] times, DMatrixRMaj states, int at, int samples) {
         int p = times.length;
         int used = Math.min(samples, p);
-        int end = atStart ? 0 : p - 1;
         if (used <= COEFFICIENTS) {
-            return java.util.Arrays.copyOfRange(states.data, end * states.numCols, (end + 1) * states.numCols);
+            return java.util.Arrays.copyOfRange(states.data, at * states.numCols, (at + 1) * states.numCols);
         }
-        int first = atStart ? 0 : p - used;
+        int first = Math.max(0, Math.min(p - used, at - used / 2));
         double length = times[first + used - 1] - times[first];
         DMatrixRMaj design = new DMatrixRMaj(used, COEFFICIENTS);
         for (int i = 0; i < used; i++) {
-            double u = (times[first + i] - times[end]) / length;
+            double u = (times[first + i] - times[at]) / length;
             for (int j = 0; j < COEFFICIENTS; j++) {
                 design.set(i, j, Math.pow(u, j));
             }

@@ -66,6 +66,42 @@ public final class PredictionError {
         return errors;
     }
 
+    /**
+     * How closely the newest sample of the next state can be predicted at all: the smallest root mean square error over the ranks,
+     * channel by channel. No prediction foresees noise, so this bounds the noise of a channel from above.
+     *
+     * @param compression up to rank R
+     * @param runs on which it is judged, at least two states each
+     * @param functions per run, p x R values of the orthonormal functions at its states
+     * @param ranks to judge, each in [1, R]
+     * @param channels n, the first n state components are the newest sample
+     * @return length n, in prepared units
+     */
+    public static double[] leastOfNewest(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
+            List<Integer> ranks, int channels) {
+        double[] least = new double[channels];
+        java.util.Arrays.fill(least, Double.POSITIVE_INFINITY);
+        for (int rank : ranks) {
+            OrthonormalCompression rung = compression.leading(rank);
+            double[] squares = new double[channels];
+            int count = 0;
+            for (int i = 0; i < runs.size(); i++) {
+                StateRun run = runs.get(i);
+                DMatrixRMaj weights = Matrices.block(rung.observable(), 0, rank, 0, channels);
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run)), weights);
+                DMatrixRMaj predicted = Matrices.product(Matrices.block(functions.get(i), 0, run.count() - 1, 0, rank), carried);
+                for (int k = 0; k < predicted.getNumElements(); k++) {
+                    squares[k % channels] += Math.pow(predicted.data[k] - run.states().get(k / channels + 1, k % channels), 2);
+                }
+                count += predicted.numRows;
+            }
+            for (int c = 0; c < channels; c++) {
+                least[c] = Math.min(least[c], Math.sqrt(squares[c] / count));
+            }
+        }
+        return least;
+    }
+
     private static double persistence(List<StateRun> runs) {
         double squared = 0;
         double spread = 0;

@@ -36,7 +36,7 @@ final class Segments {
     private static Segment segment(StateRun run, int from, int to, int smoothing) {
         double[] times = Arrays.copyOfRange(run.times(), from, to + 1);
         DMatrixRMaj states = Matrices.block(run.states(), from, to + 1, 0, run.states().numCols);
-        return new Segment(times, states, Quadrature.weights(times), EndState.of(times, states, true, smoothing),
-                EndState.of(times, states, false, smoothing), run.weight());
+        return new Segment(times, states, Quadrature.weights(times), EndState.of(run.times(), run.states(), from, smoothing),
+                EndState.of(run.times(), run.states(), to, smoothing), run.weight());
     }
 }

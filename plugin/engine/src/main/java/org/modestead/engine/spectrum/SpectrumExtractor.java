@@ -59,8 +59,10 @@ public final class SpectrumExtractor {
         for (Measured m : measured) {
             int first = m.group().get(0);
             Complex rate = rate(expansion, m.group(), clusters);
+            boolean constant = modes.stream().noneMatch(Mode::constant) && clusters[first] == 0
+                    && ConstantFunction.is(functions, first, rate, sample.longest());
             modes.add(new Mode(modes.size() + 1, m.group(), rate, m.amplitude(), total > 0 ? m.energy() / total : 0, gap(expansion, first),
-                    weights(expansion, starts, m.group(), clusters), clusters[first] == 0 && ConstantFunction.is(functions, first, rate, sample.longest()), clusters[first]));
+                    weights(expansion, starts, m.group(), clusters), constant, clusters[first]));
         }
         return modes;
     }

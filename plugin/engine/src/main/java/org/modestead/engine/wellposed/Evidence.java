@@ -16,10 +16,12 @@ import org.modestead.engine.spectrum.Spectrum;
  * @param ladder every mode on every rung where it was found
  * @param fitted expansion at the fitted rank
  * @param captured per rung, share of the judging runs' variance that the projection holds
+ * @param carryingNormNoise per rung, factor by which noise of the data's own size changes it
  * @param carryingNorm per rung, mean norm ratio of the modes that carry the signal
  * @param medianResidual per rung, median residual of its modes
  * @param predictionErrors per rung, relative one-step prediction error on the judging runs
  * @param undamped per rung, number of its modes with damping ratio below 5 %
+ * @param twins per mode of the spectrum, whether the judging runs cannot tell it from half of a defective one
  * @param heldOut whether the residuals were measured on runs the fit never saw
  * @param longest duration of the longest training run
  * @param settings thresholds
@@ -32,12 +34,17 @@ public record Evidence(
         ModalExpansion fitted,
         List<Double> captured,
         List<Double> carryingNorm,
+        List<Double> carryingNormNoise,
         List<Double> medianResidual,
         List<Double> predictionErrors,
         List<Integer> undamped,
+        List<Boolean> twins,
         boolean heldOut,
         double longest,
         JudgeSettings settings) {
+
+    /** A norm that noise of the data's own size changes by more than this factor is not looked at. */
+    static final double NOISY_NORM = 1.1;
 
     /** How many rungs at the top of a mode's ladder are looked at. */
     static final int LAST_RUNGS = 4;
@@ -47,9 +54,9 @@ public record Evidence(
     static Evidence of(FittedOperator operator, Spectrum spectrum, Ladder ladder, boolean heldOut, JudgeSettings settings) {
         ModalExpansion fitted = ladder.rungs().stream().filter(rung -> rung.rank() == operator.rank()).findFirst().orElseThrow().expansion();
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
-                ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(),
+                ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(), ladder.normEffects(),
                 ladder.rungs().stream().map(Evidence::median).toList(),
-                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), heldOut, ladder.longest(), settings);
+                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), ladder.twins(), heldOut, ladder.longest(), settings);
     }
 
     private static double median(Rung rung) {
@@ -67,10 +74,29 @@ public record Evidence(
         return ladder.stream().filter(row -> row.mode() == mode).toList();
     }
 
-    /** Returns the last rungs of one mode, at most four, by rising rank. */
-    public List<LadderRow> lastRungsOf(int mode) {
-        List<LadderRow> rows = ladderOf(mode);
-        return rows.subList(Math.max(0, rows.size() - LAST_RUNGS), rows.size());
+    /**
+     * Returns the rungs of one mode up to where noise of the data's own size takes over, by rising rank: those on which noise leaves rate and
+     * weight alone, as far as the first on which it does not.
+     */
+    public List<LadderRow> clearRungsOf(int mode) {
+        return clear(ladderOf(mode), row -> row.noise().change() <= settings.settleThreshold());
+    }
+
+    /** The same for the norm. */
+    List<LadderRow> clearNormsOf(int mode) {
+        return clear(ladderOf(mode), row -> row.noise().norm() <= NOISY_NORM);
+    }
+
+    /** Returns the highest rung on which noise leaves rate, weight and norm of a mode alone; the fitted rank where there is none. */
+    LadderRow clearestOf(int mode) {
+        List<LadderRow> rows = clear(ladderOf(mode), row -> row.noise().norm() <= NOISY_NORM && row.noise().change() <= settings.settleThreshold());
+        return rows.isEmpty() ? ladderOf(mode).stream().filter(row -> row.rank() == operator.rank()).findFirst().orElseThrow()
+                : rows.get(rows.size() - 1);
+    }
+
+    /** Leading noisy entries are dropped; the list ends before the first noisy one after that. */
+    static <T> List<T> clear(List<T> rows, java.util.function.Predicate<T> isClear) {
+        return rows.stream().dropWhile(isClear.negate()).takeWhile(isClear).toList();
     }
 
     /** Returns the modes that carry a stated share of the signal and are not the constant function. */

@@ -48,6 +48,8 @@ final class Grading {
             }
             case DRIFTS -> {
                 failed(findings, mode, "clustered-eigenvalues").ifPresent(out::add);
+                failed(findings, mode, "resolved-rates").ifPresent(out::add);
+                failed(findings, mode, SignalInSpace.LIKENESS).ifPresent(out::add);
                 failed(findings, mode, "settling").filter(f -> !Double.isNaN(f.value())).ifPresent(out::add);
             }
             case UNDECIDED -> {

@@ -18,8 +18,10 @@ public final class JointSoloGap implements Check {
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
         double threshold = evidence.settings().gapThreshold();
-        return evidence.spectrum().modes().stream().map(mode -> new Finding(mode.number(), id(), mode.jointSoloGap(), threshold,
-                mode.jointSoloGap() <= threshold, String.format(Locale.ROOT,
-                        "Its weights fitted together with the other modes and alone differ by %.3g of their size.", mode.jointSoloGap()))).toList();
+        return evidence.spectrum().modes().stream().map(mode -> {
+            LadderRow row = evidence.clearestOf(mode.number());
+            return new Finding(mode.number(), id(), row.gap(), threshold, row.gap() <= threshold, String.format(Locale.ROOT,
+                    "At rank %d its weights fitted together with the other modes and alone differ by %.3g of their size.", row.rank(), row.gap()));
+        }).toList();
     }
 }

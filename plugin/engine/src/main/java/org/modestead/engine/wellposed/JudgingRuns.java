@@ -2,11 +2,13 @@ package org.modestead.engine.wellposed;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
 import org.modestead.engine.spectrum.ModalExpansion;
@@ -18,9 +20,14 @@ import org.modestead.engine.spectrum.ModalExpansion;
  * @param heldOut whether the fit never saw them
  * @param runs with at least two states each
  * @param functions per run, p x R values of the orthonormal functions
+ * @param disturbed the same for copies of the runs with further noise, copy after copy, possibly none
  * @param longest duration of the longest run
  */
-record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, double longest) {
+record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, List<DMatrixRMaj> disturbed, double longest) {
+
+    private static final int MOST_COPIES = 8;
+    private static final int ENOUGH_STATES = 4000;
+    private static final long SEED = 7541;
 
     static JudgingRuns of(FittedOperator operator) {
         Snapshots snapshots = operator.snapshots();
@@ -32,7 +39,32 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
             functions.add(operator.compression().evaluate(operator.compression().arguments(run)));
         }
         double longest = runs.stream().mapToDouble(run -> run.times()[run.count() - 1] - run.times()[0]).max().orElse(0);
-        return new JudgingRuns(heldOut, runs, functions, longest);
+        return new JudgingRuns(heldOut, runs, functions, List.of(), longest);
+    }
+
+    /**
+     * The same with copies of the runs that carry as much noise again, in pairs with opposite signs, so that what is odd in the noise cancels.
+     *
+     * @param operator that was judged
+     * @param noise its level
+     */
+    JudgingRuns with(FittedOperator operator, NoiseLevel noise) {
+        int states = runs.stream().mapToInt(StateRun::count).sum();
+        int copies = Math.max(2, Math.min(MOST_COPIES, 2 * (ENOUGH_STATES / (2 * states) + 1)));
+        Random random = new Random(SEED);
+        List<Run> recorded = operator.snapshots().runs(heldOut ? Snapshots.Part.HOLDOUT : Snapshots.Part.TRAINING).stream()
+                .filter(run -> run.samples() - operator.snapshots().delay().reach() > 1).toList();
+        List<DMatrixRMaj> noisier = new ArrayList<>();
+        for (int pair = 0; pair < copies / 2; pair++) {
+            List<DMatrixRMaj> doses = recorded.stream().map(run -> noise.noise(run, random)).toList();
+            for (double sign : new double[] {1, -1}) {
+                for (int i = 0; i < recorded.size(); i++) {
+                    Run run = NoiseLevel.disturbed(recorded.get(i), doses.get(i), sign);
+                    noisier.add(operator.compression().evaluate(operator.compression().arguments(operator.snapshots().embed(run))));
+                }
+            }
+        }
+        return new JudgingRuns(heldOut, runs, functions, List.copyOf(noisier), longest);
     }
 
     /**
@@ -42,7 +74,16 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
      * @return per run p x r
      */
     List<ZMatrixRMaj> eigenfunctions(ModalExpansion expansion) {
-        return functions.stream().map(evaluated -> ComplexMatrices.product(
+        return eigenfunctions(expansion, functions);
+    }
+
+    /** The same on the copies with further noise. */
+    List<ZMatrixRMaj> disturbedEigenfunctions(ModalExpansion expansion) {
+        return eigenfunctions(expansion, disturbed);
+    }
+
+    private static List<ZMatrixRMaj> eigenfunctions(ModalExpansion expansion, List<DMatrixRMaj> values) {
+        return values.stream().map(evaluated -> ComplexMatrices.product(
                 Matrices.block(evaluated, 0, evaluated.numRows, 0, expansion.rank()), expansion.vectors())).toList();
     }
 

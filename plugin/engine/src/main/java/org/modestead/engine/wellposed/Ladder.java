@@ -3,7 +3,6 @@ package org.modestead.engine.wellposed;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import java.util.Optional;
 import java.util.TreeSet;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
@@ -11,6 +10,7 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.PredictionError;
 import org.modestead.engine.spectrum.Matching;
 import org.modestead.engine.spectrum.Mode;
@@ -19,64 +19,60 @@ import org.modestead.engine.spectrum.TrainingSample;
 
 /**
  * The operator at nested ranks: does a mode stay what it is when functions join? Modes of neighbouring rungs are matched
- * by optimal assignment on {@code |λ - λ'|/scale + 1 - |<φ, φ'>|}, outwards from the fitted rank.
+ * by optimal assignment on {@code |λ - λ'|/scale + 1 - |<φ, φ'>| + |w - w'|/(2 max(w, w'))}, outwards from the fitted rank.
  *
- * <p>Unless its top is set, the ladder ends below the first rung above the fitted rank whose one-step prediction of the judging
- * runs is more than 5 % worse than that of a lower rung: from there on functions carry noise.
+ * <p>Unless its top is set, the ladder climbs on above the fitted rank as far as rounding allows. Where noise takes over is told rung by rung
+ * and mode by mode, see {@link NoiseEffect}.
  *
  * @param rungs by rising rank, at least one
  * @param rows every mode of the spectrum on every rung where it was found, and as mode 0 the strongest of every rung
  * @param predictionErrors per rung, relative one-step error on the judging runs
+ * @param normEffects per rung, factor by which noise changes the mean norm of the modes that carry the signal
+ * @param twins per mode of the spectrum, see {@link TwinRates}
  * @param longest duration of the longest training run
  */
-record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, double longest) {
+record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, double longest) {
 
     private static final int MOST_RUNGS = 12;
-    private static final double TOO_FAR = 1.2;
+    private static final double TOO_FAR = 1.5;
     private static final double TRUSTED = 1e-11;
-    private static final double ROUNDING = 1e-10;
-
-    /** Prediction error over the best so far from which on a rung counts as worse. */
-    static final double WORSE = 1.05;
+    private static final int HIGHER = 10;
 
     /** Rates below this share of one over the longest run cannot be told from zero. */
     static final double RESOLVED = 0.1;
 
-    static Ladder climb(FittedOperator operator, Spectrum spectrum, JudgingRuns judging, JudgeSettings settings, Progress progress) {
+    static Ladder climb(FittedOperator operator, Spectrum spectrum, JudgingRuns unjudged, JudgeSettings settings, Progress progress) {
         TrainingSample sample = TrainingSample.of(operator);
         DMatrixRMaj sampled = operator.compression().evaluate(sample.states());
         List<Integer> ranks = ranks(operator, settings);
-        double[] errors = PredictionError.relative(operator.compression(), judging.runs(), judging.functions(), ranks, progress);
-        if (settings.ladderTo() == 0) {
-            ranks = ranks.subList(0, belowNoise(ranks, errors, operator.rank()));
-        }
+        double[] errors = PredictionError.relative(operator.compression(), unjudged.runs(), unjudged.functions(), ranks, progress);
+        NoiseLevel noise = NoiseLevel.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
+                unjudged.runs(), unjudged.functions(), ranks, sample.channels()));
+        JudgingRuns judging = unjudged.with(operator, noise);
+        List<OrthonormalCompression> noisier = noise.refits(operator, ranks.get(ranks.size() - 1), progress);
         List<Rung> rungs = new ArrayList<>();
+        List<List<NoiseEffect>> effects = new ArrayList<>();
+        List<Double> normEffects = new ArrayList<>();
         for (int rank : ranks) {
             progress.checkCancelled();
             progress.report((double) rungs.size() / ranks.size(), "ladder, rank " + rank);
-            rungs.add(Rung.of(operator.compression().leading(rank), sampled, sample, judging));
+            Rung rung = Rung.of(operator.compression().leading(rank), sampled, sample, judging);
+            rungs.add(rung);
+            List<Rung> others = noisier.stream().filter(fit -> fit.rank() >= rank).map(fit -> Rung.fitted(fit.leading(rank), sample)).toList();
+            effects.add(NoiseEffect.of(rung, others, sample.longest()));
+            normEffects.add(others.stream().mapToDouble(o -> NoiseEffect.factor(rung.carryingNorm(), o.carryingNorm())).max().orElse(1));
         }
-        List<Double> kept = Arrays.stream(errors).limit(rungs.size()).boxed().toList();
-        return new Ladder(List.copyOf(rungs), rows(rungs, spectrum, ranks.indexOf(operator.rank()), sample.longest()), kept,
-                sample.longest());
-    }
-
-    /** Returns how many rungs are kept. */
-    static int belowNoise(List<Integer> ranks, double[] errors, int fitted) {
-        double best = Double.POSITIVE_INFINITY;
-        for (int k = 0; k < errors.length; k++) {
-            if (ranks.get(k) > fitted && errors[k] > WORSE * best && best > ROUNDING) {
-                return k;
-            }
-            best = Math.min(best, errors[k]);
-        }
-        return errors.length;
+        int fitted = ranks.indexOf(operator.rank());
+        List<Boolean> twins = TwinRates.twins(rungs.get(fitted), judging, noisier.stream().filter(fit -> fit.rank() >= operator.rank())
+                .map(fit -> Rung.fitted(fit.leading(operator.rank()), sample)).toList());
+        return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
+                normEffects, spectrum.modes().stream().map(mode -> twins.get(partOf(rungs.get(fitted), mode))).toList(), sample.longest());
     }
 
     private static List<Integer> ranks(FittedOperator operator, JudgeSettings settings) {
         int fitted = operator.rank();
         int from = settings.ladderFrom() > 0 ? settings.ladderFrom() : Math.max(2, (fitted + 1) / 2);
-        int to = settings.ladderTo() > 0 ? settings.ladderTo() : Math.min(trusted(operator), fitted + Math.max(2, (fitted + 1) / 2));
+        int to = settings.ladderTo() > 0 ? settings.ladderTo() : Math.min(trusted(operator), Math.max(3 * fitted, fitted + HIGHER));
         if (settings.ladderTo() > operator.compression().rank() || settings.ladderFrom() > fitted) {
             throw new FitFault("ladder", "ranks " + from + " to " + to + " were asked for, the operator has rank " + fitted
                     + " and the data hold " + operator.compression().rank(),
@@ -102,50 +98,37 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         return rank;
     }
 
-    private static List<LadderRow> rows(List<Rung> rungs, Spectrum spectrum, int fitted, double longest) {
+    private static List<LadderRow> rows(List<Rung> rungs, List<List<NoiseEffect>> effects, Spectrum spectrum, int fitted, double longest) {
         int[][] tracks = new int[rungs.size()][];
-        tracks[fitted] = new int[spectrum.modes().size()];
-        for (Mode mode : spectrum.modes()) {
-            tracks[fitted][mode.number() - 1] = partOf(rungs.get(fitted), mode);
-        }
+        tracks[fitted] = spectrum.modes().stream().mapToInt(mode -> partOf(rungs.get(fitted), mode)).toArray();
+        Sighting[] above = sightings(rungs.get(fitted), tracks[fitted]);
+        Sighting[] below = above.clone();
         for (int k = fitted + 1; k < rungs.size(); k++) {
-            tracks[k] = follow(rungs.get(k - 1), tracks[k - 1], rungs.get(k), longest);
+            tracks[k] = follow(above, rungs.get(k), longest);
         }
         for (int k = fitted - 1; k >= 0; k--) {
-            tracks[k] = follow(rungs.get(k + 1), tracks[k + 1], rungs.get(k), longest);
+            tracks[k] = follow(below, rungs.get(k), longest);
         }
         List<LadderRow> rows = new ArrayList<>();
         for (Mode mode : spectrum.modes()) {
-            Optional<Complex> before = Optional.empty();
             for (int k = 0; k < rungs.size(); k++) {
                 int at = tracks[k][mode.number() - 1];
-                if (at < 0) {
-                    continue;
+                if (at >= 0) {
+                    rows.add(row(rungs.get(k).rank(), mode.number(), rungs.get(k).parts().get(at), effects.get(k).get(at)));
                 }
-                Rung.Part part = rungs.get(k).parts().get(at);
-                rows.add(row(rungs.get(k).rank(), mode.number(), part, before, longest));
-                before = Optional.of(part.rate());
             }
         }
-        addStrongest(rungs, rows, longest);
+        for (int k = 0; k < rungs.size(); k++) {
+            Rung rung = rungs.get(k);
+            List<NoiseEffect> own = effects.get(k);
+            rung.strongest().ifPresent(part -> rows.add(row(rung.rank(), 0, part, own.get(rung.parts().indexOf(part)))));
+        }
         return List.copyOf(rows);
     }
 
-    /** The strongest mode of every rung, as mode 0: where modes cannot be followed, this shows what becomes of the signal's weights. */
-    private static void addStrongest(List<Rung> rungs, List<LadderRow> rows, double longest) {
-        Optional<Complex> before = Optional.empty();
-        for (Rung rung : rungs) {
-            if (rung.strongest().isPresent()) {
-                Rung.Part part = rung.strongest().get();
-                rows.add(row(rung.rank(), 0, part, before, longest));
-                before = Optional.of(part.rate());
-            }
-        }
-    }
-
-    private static LadderRow row(int rank, int mode, Rung.Part part, Optional<Complex> before, double longest) {
+    private static LadderRow row(int rank, int mode, Rung.Part part, NoiseEffect noise) {
         return new LadderRow(rank, mode, part.rate(), part.weight(), part.weightNorm(), part.normRatio(), part.residual(),
-                before.map(rate -> relativeChange(rate, part.rate(), longest)).orElse(Double.NaN));
+                part.rawResidual(), part.gap(), part.overlap(), noise);
     }
 
     /**
@@ -168,22 +151,29 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         return -1;
     }
 
-    private static int[] follow(Rung from, int[] track, Rung to, double longest) {
-        double[][] cost = new double[from.parts().size()][to.parts().size()];
+    /** Where a mode was seen last. */
+    private record Sighting(Rung rung, int part) {}
+
+    private static Sighting[] sightings(Rung rung, int[] parts) {
+        return Arrays.stream(parts).mapToObj(part -> new Sighting(rung, part)).toArray(Sighting[]::new);
+    }
+
+    /** Finds the modes on another rung, whether or not the rung between has them, and notes where they were seen. */
+    private static int[] follow(Sighting[] seen, Rung to, double longest) {
+        double[][] cost = new double[seen.length][to.parts().size()];
         for (int a = 0; a < cost.length; a++) {
+            Rung.Part left = seen[a].rung().parts().get(seen[a].part());
             for (int b = 0; b < cost[a].length; b++) {
-                Rung.Part left = from.parts().get(a);
                 Rung.Part right = to.parts().get(b);
                 cost[a][b] = Math.min(1, relativeChange(left.rate(), right.rate(), longest)) + 1
-                        - overlap(from, left.group().get(0), to, right.group().get(0));
+                        - overlap(seen[a].rung(), left.group().get(0), to, right.group().get(0)) + NoiseEffect.weight(left, right) / 2;
             }
         }
         int[] matched = Matching.of(cost, TOO_FAR);
-        int[] out = new int[track.length];
-        for (int k = 0; k < track.length; k++) {
-            out[k] = track[k] < 0 ? -1 : matched[track[k]];
+        for (int a = 0; a < matched.length; a++) {
+            seen[a] = matched[a] < 0 ? seen[a] : new Sighting(to, matched[a]);
         }
-        return out;
+        return matched;
     }
 
     /** |<φ, φ'>| of unit eigenfunctions: nested ranks share their leading orthonormal functions. */

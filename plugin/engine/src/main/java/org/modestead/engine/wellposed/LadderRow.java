@@ -11,7 +11,11 @@ import org.modestead.engine.linalg.Complex;
  * @param weight size of its contribution: root mean square over the training states, prepared units
  * @param weightNorm norm of its joint weight vector over the newest samples, prepared units
  * @param normRatio ‖φ‖_H / ‖φ‖_L2(data)
- * @param residual holdout residual (training residual where there is no holdout)
- * @param distance how far it moved from the rung before: |Δλ| scaled; NaN on the lowest rung
+ * @param residual holdout residual (training residual where there is no holdout), the share of the noise taken off
+ * @param rawResidual the same with it
+ * @param gap relative difference of joint and solo weights, see {@link Eigenspace}
+ * @param overlap largest with its own conjugate and with the functions of other rates that carry the signal
+ * @param noise what noise of the data's own size does to the mode
  */
-public record LadderRow(int rank, int mode, Complex rate, double weight, double weightNorm, double normRatio, double residual, double distance) {}
+public record LadderRow(int rank, int mode, Complex rate, double weight, double weightNorm, double normRatio, double residual,
+        double rawResidual, double gap, double overlap, NoiseEffect noise) {}

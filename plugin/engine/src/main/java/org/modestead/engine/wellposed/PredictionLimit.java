@@ -10,6 +10,9 @@ import org.modestead.engine.Progress;
  */
 public final class PredictionLimit implements Check {
 
+    /** Prediction error over the smallest from which on a rank counts as worse. */
+    private static final double WORSE = 1.05;
+
     @Override
     public String id() {
         return "prediction-limit";
@@ -23,7 +26,7 @@ public final class PredictionLimit implements Check {
             best = errors.get(k) < errors.get(best) ? k : best;
         }
         int fitted = evidence.rungs().indexOf(evidence.operator().rank());
-        boolean noise = best < fitted && errors.get(fitted) > Ladder.WORSE * errors.get(best);
+        boolean noise = best < fitted && errors.get(fitted) > WORSE * errors.get(best);
         return List.of(new Finding(0, id(), evidence.rungs().get(best), Double.NaN, !noise, String.format(Locale.ROOT,
                 "One step ahead rank %d predicts best (relative error %.3g; %.3g at the fitted rank %d)%s.", evidence.rungs().get(best),
                 errors.get(best), errors.get(fitted), evidence.operator().rank(),

@@ -1,5 +1,6 @@
 package org.modestead.engine.wellposed;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
@@ -15,20 +16,58 @@ import org.modestead.engine.spectrum.ModalExpansion;
  * root mean square over all pairs of states, for τ = one step and up to the mode's own time
  * {@code τ_c = min(T/2, 1/|Re λ|, 2π/|Im λ|)}: shorter would pass anything slow, longer would compare what has died away
  * with noise. The largest over the τ counts. What known inputs add on the way is taken off first, where they are separated.
+ *
+ * <p>Noise of the data adds to both norms, in squares. How much it adds is seen by adding as much again, with the level of
+ * {@link NoiseLevel}: {@code clear² = 2 ‖.‖² - ‖.‖²_noisier}, the straight line through one and two doses of noise read off at none
+ * (simulation extrapolation, Cook and Stefanski, J. Am. Stat. Assoc. 89:1314, 1994, with a line). Where more than half of the
+ * eigenfunction's squared size is noise, nothing is taken off.
  */
 final class Residuals {
 
     private static final double[] SHARES = {0.25, 0.5, 1};
 
+    /** Share of the squared size that must not be noise for the noise to be taken off. */
+    private static final double MOSTLY_NOISE = 0.5;
+
     private Residuals() {}
+
+    /**
+     * @param raw as the data give it
+     * @param clear what is left of it when the share of the noise is taken off, see {@link Residuals}
+     */
+    record Pair(double raw, double clear) {
+
+        static final Pair UNKNOWN = new Pair(Double.NaN, Double.NaN);
+    }
 
     /**
      * @param expansion on one rung
      * @param judging runs
      * @param eigenfunctions per run p x r values of the expansion's eigenfunctions
+     * @param disturbed the same on copies of the runs with further noise, a whole number of copies one after the other, possibly none
      * @return length r, one an eigenpair; NaN where φ vanishes
      */
-    static double[] of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions) {
+    static List<Pair> of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions, List<ZMatrixRMaj> disturbed) {
+        int runs = judging.runs().size();
+        int copies = disturbed.size() / runs;
+        double[][] plain = squares(expansion, judging, eigenfunctions);
+        double[][] noisier = new double[plain.length][plain[0].length];
+        for (int copy = 0; copy < copies; copy++) {
+            double[][] one = squares(expansion, judging, disturbed.subList(copy * runs, (copy + 1) * runs));
+            for (int j = 0; j < one.length; j++) {
+                for (int k = 0; k < one[j].length; k++) {
+                    noisier[j][k] += one[j][k] / copies;
+                }
+            }
+        }
+        List<Pair> out = new ArrayList<>();
+        for (int j = 0; j < plain.length; j++) {
+            out.add(worst(plain[j], copies == 0 ? plain[j] : noisier[j]));
+        }
+        return out;
+    }
+
+    private static double[][] squares(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions) {
         int r = expansion.rank();
         double[][] squares = new double[r][2 * (SHARES.length + 1)];
         for (int i = 0; i < judging.runs().size(); i++) {
@@ -42,11 +81,7 @@ final class Residuals {
                 }
             }
         }
-        double[] out = new double[r];
-        for (int j = 0; j < r; j++) {
-            out[j] = worst(squares[j]);
-        }
-        return out;
+        return squares;
     }
 
     /** Returns what inputs have added to each eigenfunction since the run's first state; no entries where none are separated. */
@@ -96,12 +131,16 @@ final class Residuals {
         return driven.length == 0 ? value : value.minus(driven[k]);
     }
 
-    private static double worst(double[] squares) {
-        double worst = Double.NaN;
-        for (int k = 0; k < squares.length; k += 2) {
-            if (squares[k + 1] > 0) {
-                double residual = Math.sqrt(squares[k] / squares[k + 1]);
-                worst = Double.isNaN(worst) ? residual : Math.max(worst, residual);
+    private static Pair worst(double[] plain, double[] noisier) {
+        Pair worst = Pair.UNKNOWN;
+        for (int k = 0; k < plain.length; k += 2) {
+            if (plain[k + 1] > 0) {
+                double raw = Math.sqrt(plain[k] / plain[k + 1]);
+                double miss = Math.max(0, 2 * plain[k] - noisier[k]);
+                double size = 2 * plain[k + 1] - noisier[k + 1];
+                double clear = size < MOSTLY_NOISE * plain[k + 1] ? raw : Math.sqrt(miss / size);
+                worst = Double.isNaN(worst.raw()) ? new Pair(raw, clear)
+                        : new Pair(Math.max(worst.raw(), raw), Math.max(worst.clear(), clear));
             }
         }
         return worst;

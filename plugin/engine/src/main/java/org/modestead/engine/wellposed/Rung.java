@@ -1,8 +1,10 @@
 package org.modestead.engine.wellposed;
 
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
@@ -29,6 +31,9 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
     /** Size of an eigenfunction on the judging runs, relative to the training runs, below which they do not excite it. */
     static final double EXCITED = 0.05;
 
+    /** Share of the summed squared weights from which another function counts for the overlap. */
+    private static final double NOTABLE = 0.05;
+
     /**
      * One mode of a rung.
      *
@@ -39,10 +44,13 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
      * @param normRatio ‖φ‖_H / ‖φ‖_L2(data)
      * @param residual see {@link Residuals}; NaN where the judging runs do not excite the mode: what is left of it
      *     there is noise, and noise is evidence neither for nor against it
+     * @param rawResidual the same before the share of the noise was taken off
+     * @param gap relative difference of joint and solo weights, see {@link Eigenspace}
+     * @param overlap largest with its own conjugate and with the functions of other rates that carry the signal
      * @param constant whether it is the constant function, see {@link ConstantFunction}
      */
     record Part(List<Integer> group, Complex rate, double weight, double weightNorm, double normRatio, double residual,
-            boolean constant) {}
+            double rawResidual, double gap, double overlap, boolean constant) {}
 
     int rank() {
         return expansion.rank();
@@ -50,32 +58,87 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
 
     static Rung of(OrthonormalCompression compression, DMatrixRMaj sampled, TrainingSample sample, JudgingRuns judging) {
         ModalExpansion expansion = ModalExpansion.of(compression);
-        DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, compression.rank());
-        ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
         List<ZMatrixRMaj> unseen = judging.eigenfunctions(expansion);
-        double[] residuals = Residuals.of(expansion, judging, unseen);
-        double[] judged = JudgingRuns.sizes(unseen);
-        List<Part> parts = Cluster.groups(expansion, Cluster.numbers(expansion)).stream()
-                .map(group -> part(expansion, values, group, sample, residuals, judged)).toList();
+        List<Residuals.Pair> residuals = Residuals.of(expansion, judging, unseen, judging.disturbedEigenfunctions(expansion));
+        List<Part> parts = parts(expansion, sampled, sample, residuals, JudgingRuns.sizes(unseen));
         return new Rung(expansion, parts, carryingNorm(parts), captured(compression, sample.channels(), judging));
     }
 
-    private static Part part(ModalExpansion expansion, ZMatrixRMaj values, List<Integer> group, TrainingSample sample, double[] residuals,
+    /** The same without judging: no residuals, no captured share. */
+    static Rung fitted(OrthonormalCompression compression, TrainingSample sample) {
+        ModalExpansion expansion = ModalExpansion.of(compression);
+        double[] unjudged = new double[expansion.rank()];
+        List<Part> parts = parts(expansion, compression.evaluate(sample.states()), sample,
+                java.util.Collections.nCopies(expansion.rank(), Residuals.Pair.UNKNOWN), unjudged);
+        return new Rung(expansion, parts, carryingNorm(parts), Double.NaN);
+    }
+
+    private static List<Part> parts(ModalExpansion expansion, DMatrixRMaj sampled, TrainingSample sample, List<Residuals.Pair> residuals,
             double[] judged) {
-        int j = group.get(0);
-        int channels = sample.channels();
-        double size = 0;
-        for (int i = 0; i < values.numRows; i++) {
-            size = Math.hypot(size, ComplexMatrices.entry(values, i, j).abs());
-        }
+        DMatrixRMaj functions = Matrices.block(sampled, 0, sampled.numRows, 0, expansion.rank());
+        ZMatrixRMaj values = ComplexMatrices.product(functions, expansion.vectors());
+        List<List<Integer>> groups = Cluster.groups(expansion, Cluster.numbers(expansion));
+        List<Eigenspace> spaces = IntStream.range(0, groups.size())
+                .mapToObj(p -> Eigenspace.of(expansion, groups, p, sample.longest())).toList();
+        double[] weights = spaces.stream().mapToDouble(space -> Math.sqrt(Contributions.meanSquare(
+                Contributions.of(values, expansion.joint(), space.all(), 0, sample.channels())))).toArray();
+        return IntStream.range(0, groups.size()).mapToObj(p -> {
+            int j = groups.get(p).get(0);
+            double trained = rootMeanSquare(values, j);
+            Residuals.Pair residual = judged[j] < EXCITED * trained ? Residuals.Pair.UNKNOWN : residuals.get(j);
+            return new Part(groups.get(p), expansion.rates().get(j), weights[p], weightNorm(expansion, j, sample.channels()),
+                    1 / size(functions, spaces.get(p).carrier()), residual.clear(), residual.raw(), spaces.get(p).gap(),
+                    overlap(spaces, weights, p), ConstantFunction.is(values, j, expansion.rates().get(j), sample.longest()));
+        }).toList();
+    }
+
+    private static double weightNorm(ModalExpansion expansion, int j, int channels) {
         double norm = 0;
         for (int k = 0; k < channels; k++) {
             norm = Math.hypot(norm, ComplexMatrices.entry(expansion.joint(), j, k).abs());
         }
-        double weight = Math.sqrt(Contributions.meanSquare(Contributions.of(values, expansion.joint(), group, 0, channels)));
-        double trained = size / Math.sqrt(values.numRows);
-        return new Part(group, expansion.rates().get(j), weight, norm, 1 / trained, judged[j] < EXCITED * trained ? Double.NaN : residuals[j],
-                ConstantFunction.is(values, j, expansion.rates().get(j), sample.longest()));
+        return norm;
+    }
+
+    private static double rootMeanSquare(ZMatrixRMaj values, int j) {
+        double size = 0;
+        for (int i = 0; i < values.numRows; i++) {
+            size = Math.hypot(size, ComplexMatrices.entry(values, i, j).abs());
+        }
+        return size / Math.sqrt(values.numRows);
+    }
+
+    /** Root mean square over the sampled states of the function with given coefficients. */
+    private static double size(DMatrixRMaj functions, Complex[] coefficients) {
+        double size = 0;
+        for (int i = 0; i < functions.numRows; i++) {
+            Complex value = Complex.ZERO;
+            for (int k = 0; k < coefficients.length; k++) {
+                value = value.plus(coefficients[k].times(functions.get(i, k)));
+            }
+            size = Math.hypot(size, value.abs());
+        }
+        return size / Math.sqrt(functions.numRows);
+    }
+
+    /** Largest overlap of the carrier with its own conjugate and with carriers of other rates that add a notable part to the signal. */
+    private static double overlap(List<Eigenspace> spaces, double[] weights, int p) {
+        double total = Arrays.stream(weights).map(w -> w * w).sum();
+        Complex[] own = spaces.get(p).carrier();
+        boolean oscillates = spaces.get(p).all().size() > spaces.get(p).columns().size();
+        double largest = oscillates ? Eigenspace.inner(conjugate(own), own).abs() : 0;
+        for (int q = 0; q < spaces.size(); q++) {
+            boolean other = !spaces.get(p).all().contains(spaces.get(q).columns().get(0));
+            if (other && weights[q] * weights[q] >= NOTABLE * total) {
+                Complex[] its = spaces.get(q).carrier();
+                largest = Math.max(largest, Math.max(Eigenspace.inner(its, own).abs(), Eigenspace.inner(conjugate(its), own).abs()));
+            }
+        }
+        return largest;
+    }
+
+    private static Complex[] conjugate(Complex[] a) {
+        return Arrays.stream(a).map(Complex::conj).toArray(Complex[]::new);
     }
 
     /** Returns the mode, not the constant, that adds most to the signal on this rung; empty when there is none but the constant. */

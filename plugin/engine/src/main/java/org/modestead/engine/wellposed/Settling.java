@@ -36,30 +36,41 @@ public final class Settling implements Check {
                 findings.add(closed.get());
                 continue;
             }
-            List<LadderRow> rows = evidence.lastRungsOf(mode.number());
-            if (evidence.rungs().size() < LEAST_RUNGS) {
-                findings.add(new Finding(mode.number(), id(), Double.NaN, threshold, false, "There are only " + evidence.rungs().size()
-                        + " rungs on the ladder; at least " + LEAST_RUNGS + " are needed to see whether it settles."));
-                continue;
-            }
-            double rate = rows.size() < LEAST_RUNGS ? 1 : change(rows, evidence.longest(), true);
-            double weight = rows.size() < LEAST_RUNGS ? 1 : change(rows, evidence.longest(), false);
-            double value = Math.max(rate, weight);
-            findings.add(new Finding(mode.number(), id(), value, threshold, value <= threshold, rows.size() < LEAST_RUNGS
-                    ? "It is found on only " + rows.size() + " of " + evidence.rungs().size() + " rungs."
-                    : String.format(Locale.ROOT, "Over the last rungs (ranks %d to %d) its rate changes by up to %.3g and its weight by up to %.3g.",
-                            rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight)));
+            findings.add(climbed(mode.number(), evidence, threshold));
         }
         return findings;
     }
 
+    private Finding climbed(int mode, Evidence evidence, double threshold) {
+        if (evidence.rungs().size() < LEAST_RUNGS) {
+            return new Finding(mode, id(), Double.NaN, threshold, false, "There are only " + evidence.rungs().size()
+                    + " rungs on the ladder; at least " + LEAST_RUNGS + " are needed to see whether it settles.");
+        }
+        List<LadderRow> found = evidence.ladderOf(mode);
+        if (found.size() < LEAST_RUNGS) {
+            return new Finding(mode, id(), 1, threshold, false, "It is found on only " + found.size() + " of " + evidence.rungs().size() + " rungs.");
+        }
+        List<LadderRow> clear = evidence.clearRungsOf(mode);
+        List<LadderRow> rows = clear.subList(Math.max(0, clear.size() - Evidence.LAST_RUNGS), clear.size());
+        if (rows.size() < LEAST_RUNGS) {
+            return new Finding(mode, id(), Double.NaN, threshold, false, "Only on " + rows.size() + " of " + found.size()
+                    + " rungs does noise of the size found in the data change it by less than " + threshold + " of its size.");
+        }
+        double rate = change(rows, evidence.longest(), true);
+        double weight = change(rows, evidence.longest(), false);
+        double value = Math.max(rate, weight);
+        return new Finding(mode, id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
+                "Over the last rungs that noise leaves alone (ranks %d to %d) its rate changes by up to %.3g and its weight by up to %.3g.",
+                rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight));
+    }
+
     private Optional<Finding> closed(int mode, Evidence evidence, double threshold) {
         OptionalDouble missed = Closure.missed(mode, evidence);
-        if (missed.isEmpty() || missed.getAsDouble() > Closure.CLOSED) {
+        if (missed.isEmpty()) {
             return Optional.empty();
         }
         return Optional.of(new Finding(mode, id(), missed.getAsDouble(), threshold, true, String.format(Locale.ROOT,
-                "No function is left to join, and the motion does not lead out of those there are (to %.3g of its size): nothing can change it.",
+                "No function is left to join, and among those there are it misses its own rule of motion by only %.3g: nothing can change it.",
                 missed.getAsDouble())));
     }
 

@@ -1,5 +1,6 @@
 package org.modestead.engine.wellposed;
 
+import java.util.ArrayList;
 import java.util.List;
 import org.modestead.engine.Progress;
 import org.modestead.engine.kernel.KernelFamilies;
@@ -8,10 +9,15 @@ import org.modestead.engine.operator.InnerProduct;
 
 /**
  * Whether the state's coordinates belong to the kernel's space. Where they do not (Gaussian, Laplacian, Matérn: no polynomial
- * and no constant), the weights of the signal are those of an imitation on the sampled region, so that orthogonality in
- * the norm of the space is no evidence: such modes may settle, but they do not stand.
+ * and no constant), no finite sum of eigenfunctions of the space can be the signal, and its weights are those of an imitation on the sampled region.
+ * On a set that the motion never leaves, a likeness may still belong to the space (the coordinates on a circle do); then the norm of a mode comes to rest
+ * on the ladder. Where it comes to rest the mode may settle, but orthogonality in the norm of the space is no evidence. Where it keeps
+ * rising, or cannot be followed, the weights are no more than a projection's.
  */
 public final class SignalInSpace implements Check {
+
+    /** Id of the finding about single modes. */
+    static final String LIKENESS = "likeness-at-rest";
 
     @Override
     public String id() {
@@ -24,8 +30,22 @@ public final class SignalInSpace implements Check {
             return List.of();
         }
         SpaceFacts facts = KernelFamilies.create(evidence.operator().kernel().get()).space();
+        List<Finding> findings = new ArrayList<>();
         boolean holds = facts.holdsCoordinates();
-        return List.of(new Finding(0, id(), holds ? 1 : 0, 1, holds, holds ? "The space of the kernel holds the signal."
+        findings.add(new Finding(0, id(), holds ? 1 : 0, 1, holds, holds ? "The space of the kernel holds the signal."
                 : "The space of the kernel does not hold the signal itself, only likenesses of it on the sampled region."));
+        if (!holds) {
+            evidence.spectrum().modes().forEach(mode -> findings.add(likeness(mode.number(), evidence)));
+        }
+        return findings;
+    }
+
+    private static Finding likeness(int mode, Evidence evidence) {
+        List<LadderRow> rows = evidence.clearNormsOf(mode);
+        boolean atRest = rows.size() >= Settling.LEAST_RUNGS
+                && !NormTrend.of(rows.stream().map(LadderRow::normRatio).toList(), evidence.settings().normGrowthThreshold()).rising();
+        return new Finding(mode, LIKENESS, atRest ? 1 : 0, 1, atRest, atRest
+                ? "The norm of its likeness in the space comes to rest: on the set that was visited it may belong to the space."
+                : "The norm of its likeness in the space has not come to rest: its weights are those of a projection.");
     }
 }

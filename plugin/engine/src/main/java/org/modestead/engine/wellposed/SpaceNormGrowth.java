@@ -3,6 +3,7 @@ package org.modestead.engine.wellposed;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.stream.IntStream;
 import org.modestead.engine.Progress;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.spectrum.Mode;
@@ -28,17 +29,23 @@ public final class SpaceNormGrowth implements Check {
             return findings;
         }
         double threshold = evidence.settings().normGrowthThreshold();
+        List<Integer> clear = Evidence.clear(IntStream.range(0, evidence.rungs().size()).boxed().toList(),
+                k -> evidence.carryingNormNoise().get(k) <= Evidence.NOISY_NORM);
         for (Mode mode : evidence.spectrum().modes()) {
             if (mode.cluster() != 0) {
                 continue;
             }
-            List<LadderRow> rows = evidence.ladderOf(mode.number());
+            if (Closure.missed(mode.number(), evidence).isPresent()) {
+                findings.add(new Finding(mode.number(), id(), 1, threshold, true, "The space is finite and has been seen whole: no norm can grow."));
+                continue;
+            }
+            List<LadderRow> rows = evidence.clearNormsOf(mode.number());
             if (rows.size() >= Settling.LEAST_RUNGS) {
                 findings.add(finding(mode.number(), "Its norm", rows.stream().map(LadderRow::normRatio).toList(),
                         rows.stream().map(LadderRow::rank).toList(), threshold));
-            } else if (evidence.rungs().size() >= Settling.LEAST_RUNGS && evidence.carries(mode)) {
+            } else if (clear.size() >= Settling.LEAST_RUNGS && evidence.carries(mode)) {
                 findings.add(finding(mode.number(), "It cannot be followed down the ladder; the norm of the modes that carry the signal",
-                        evidence.carryingNorm(), evidence.rungs(), threshold));
+                        clear.stream().map(evidence.carryingNorm()::get).toList(), clear.stream().map(evidence.rungs()::get).toList(), threshold));
             }
         }
         return findings;
