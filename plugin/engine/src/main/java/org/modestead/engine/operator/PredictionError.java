@@ -90,8 +90,9 @@ public final class PredictionError {
                 DMatrixRMaj weights = Matrices.block(rung.observable(), 0, rank, 0, channels);
                 DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run)), weights);
                 DMatrixRMaj predicted = Matrices.product(Matrices.block(functions.get(i), 0, run.count() - 1, 0, rank), carried);
+                DMatrixRMaj next = compression.signalAhead(run);
                 for (int k = 0; k < predicted.getNumElements(); k++) {
-                    squares[k % channels] += Math.pow(predicted.data[k] - run.states().get(k / channels + 1, k % channels), 2);
+                    squares[k % channels] += Math.pow(predicted.data[k] - next.get(k / channels, k % channels), 2);
                 }
                 count += predicted.numRows;
             }

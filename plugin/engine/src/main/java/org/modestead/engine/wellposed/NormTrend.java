@@ -4,28 +4,32 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * Whether a sequence of norms over the rungs is bounded or grows without bound, judged from its last distinct values (where
- * motion has a symmetry, every second rung repeats the one before).
+ * Whether a sequence of norms over the rungs is bounded or grows without bound. Every second rung may repeat the one before (motion with a symmetry)
+ * and single rungs may jump, so thirds of the ladder are compared by their geometric means.
  *
- * <p>Growing means: the last three distinct values rise, and either they rise together by more than a factor, or by more
- * than 30 % with an increment that is not shrinking (at least half of the one before). A convergent sequence of projections
- * has shrinking increments.
+ * <p>Growing means that the last third exceeds the first by more than a factor, or that the three last distinct values rise by more than
+ * 30 % with an increment that is not shrinking (at least half of the one before). A convergent sequence of projections has shrinking
+ * increments. Still rising means that the last distinct values rise by more than 5 % together.
  *
  * @param growing whether it grows without bound as far as can be seen
- * @param factor last value over the first of those looked at
+ * @param factor geometric mean of the last third over that of the first
+ * @param rising whether it has not come to rest
  */
-record NormTrend(boolean growing, double factor) {
+record NormTrend(boolean growing, double factor, boolean rising) {
 
     private static final double SAME = 1e-3;
     private static final double NOTABLE = 1.3;
     private static final double SHRINKING = 0.5;
+    private static final double AT_REST = 1.05;
     private static final int LOOKED_AT = 3;
 
     /**
      * @param norms by rising rank, at least one, positive
-     * @param threshold factor above which steady growth counts at once
+     * @param threshold factor above which growth counts at once
      */
     static NormTrend of(List<Double> norms, double threshold) {
+        int third = Math.max(1, norms.size() / 3);
+        double factor = mean(norms.subList(norms.size() - third, norms.size())) / mean(norms.subList(0, third));
         List<Double> distinct = new ArrayList<>();
         for (double norm : norms) {
             if (distinct.isEmpty() || Math.abs(norm / distinct.get(distinct.size() - 1) - 1) > SAME) {
@@ -33,13 +37,17 @@ record NormTrend(boolean growing, double factor) {
             }
         }
         List<Double> last = distinct.subList(Math.max(0, distinct.size() - LOOKED_AT), distinct.size());
-        double factor = last.get(last.size() - 1) / last.get(0);
         if (last.size() < LOOKED_AT) {
-            return new NormTrend(false, factor);
+            return new NormTrend(factor > threshold, factor, false);
         }
         double before = last.get(1) - last.get(0);
         double after = last.get(2) - last.get(1);
-        boolean rising = before > 0 && after > 0;
-        return new NormTrend(rising && (factor > threshold || factor > NOTABLE && after > SHRINKING * before), factor);
+        double climb = last.get(2) / last.get(0);
+        boolean steady = before > 0 && after > SHRINKING * before && climb > NOTABLE;
+        return new NormTrend(factor > threshold || steady, factor, before > 0 && after > 0 && climb > AT_REST);
+    }
+
+    private static double mean(List<Double> positive) {
+        return Math.exp(positive.stream().mapToDouble(Math::log).average().orElse(0));
     }
 }
