@@ -16,7 +16,8 @@ import org.modestead.engine.spectrum.Mode;
 
 /**
  * Rates must not depend on the step of the fit: the operator is fitted again with twice the step (a generator with
- * segments twice as long, or half where the runs are too short) and the rates of the carrying modes are compared.
+ * segments twice as long, or half where the runs are too short) and the rates of the carrying modes are compared, on the highest rung
+ * of the ladder that noise leaves alone for all of them.
  * Disagreement means aliasing, too coarse a step, or motion that is not forward complete. Modes above the sampling limit
  * of the longer step are not compared.
  */
@@ -33,11 +34,12 @@ public final class StepConsistency implements Check {
         if (other.isEmpty()) {
             return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The runs are too short to fit a second step."));
         }
+        int rank = evidence.carrying().mapToInt(mode -> evidence.clearestOf(mode.number()).rank()).min().orElse(evidence.operator().rank());
         ModalExpansion expansion;
         try {
             OrthonormalCompression again = Ridge.apply(other.get().compress(evidence.operator().snapshots(), progress)
-                    .whiten(evidence.operator().rank()), evidence.operator().ridge());
-            if (again.rank() < evidence.operator().rank()) {
+                    .whiten(rank), evidence.operator().ridge());
+            if (again.rank() < rank) {
                 return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "Fitted with another step the data hold only rank "
                         + again.rank() + ", so the rates cannot be compared."));
             }
@@ -45,17 +47,18 @@ public final class StepConsistency implements Check {
         } catch (FitFault fault) {
             return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The second step could not be fitted: " + fault.getMessage()));
         }
-        return compare(evidence, expansion);
+        return compare(evidence, expansion, rank);
     }
 
-    private List<Finding> compare(Evidence evidence, ModalExpansion other) {
+    private List<Finding> compare(Evidence evidence, ModalExpansion other, int rank) {
         List<Mode> modes = evidence.carrying().filter(mode -> mode.frequency() < other.compression().evolution().aliasingLimit()).toList();
         // both of a pair: rounding may turn a rate that two functions share into a pair, and then two modes look for it
         List<Complex> rates = other.rates();
         double[][] cost = new double[modes.size()][rates.size()];
         for (int i = 0; i < modes.size(); i++) {
+            Complex own = rateAt(evidence, modes.get(i), rank);
             for (int j = 0; j < rates.size(); j++) {
-                cost[i][j] = Math.min(2, Ladder.relativeChange(modes.get(i).rate(), rates.get(j), evidence.longest()));
+                cost[i][j] = Math.min(2, Ladder.relativeChange(own, rates.get(j), evidence.longest()));
             }
         }
         int[] matched = Matching.of(cost, 2);
@@ -67,5 +70,11 @@ public final class StepConsistency implements Check {
                     "Fitted with another step its rate differs by %.3g.", value)));
         }
         return findings;
+    }
+
+    private static Complex rateAt(Evidence evidence, Mode mode, int rank) {
+        Complex rate = evidence.ladderOf(mode.number()).stream().filter(row -> row.rank() == rank).map(LadderRow::rate).findFirst()
+                .orElse(mode.rate());
+        return new Complex(rate.re(), Math.abs(rate.im()));
     }
 }
