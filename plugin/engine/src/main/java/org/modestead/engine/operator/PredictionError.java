@@ -16,6 +16,9 @@ import org.modestead.engine.recording.StateRun;
  */
 public final class PredictionError {
 
+    /** An error within 2 % of the least is as good, and the lowest such rank is taken. */
+    private static final double NO_BETTER = 1.02;
+
     private PredictionError() {}
 
     /**
@@ -29,11 +32,50 @@ public final class PredictionError {
         List<Integer> ranks = IntStream.rangeClosed(1, compression.rank()).boxed().toList();
         List<DMatrixRMaj> functions = runs.stream().map(run -> compression.evaluate(compression.arguments(run))).toList();
         double[] errors = relative(compression, runs, functions, ranks, progress);
+        double[] far = halfwayAhead(compression, runs, functions, ranks, progress);
+        double least = Double.POSITIVE_INFINITY;
+        for (int r = 0; r < errors.length; r++) {
+            errors[r] = Math.hypot(errors[r], far[r]);
+            least = Math.min(least, errors[r]);
+        }
         int best = 0;
-        for (int r = 1; r < errors.length; r++) {
-            best = errors[r] < errors[best] ? r : best;
+        while (!(errors[best] <= NO_BETTER * least)) {
+            best++;
         }
         return new Best(best + 1, errors[best], persistence(runs));
+    }
+
+    /** Errors of predicting the state half a run ahead, where spurious modes have had time to grow; 0 where inputs drive it on the way. */
+    private static double[] halfwayAhead(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
+            List<Integer> ranks, Progress progress) {
+        double[] errors = new double[ranks.size()];
+        if (compression.inputs().isPresent()) {
+            return errors;
+        }
+        double spread = 0;
+        for (int i = 0; i < runs.size(); i++) {
+            StateRun run = runs.get(i);
+            int ahead = Math.max(1, (run.count() - 1) / 2);
+            DMatrixRMaj later = Matrices.block(run.states(), ahead, run.count(), 0, run.states().numCols);
+            for (int k = 0; k < errors.length; k++) {
+                progress.checkCancelled();
+                OrthonormalCompression rung = compression.leading(ranks.get(k));
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), ahead), rung.observable());
+                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - ahead, 0, rung.rank());
+                errors[k] += squaredDistance(Matrices.product(now, carried), later);
+            }
+            spread += squaredSpread(later);
+        }
+        for (int k = 0; k < errors.length; k++) {
+            double error = Math.sqrt(errors[k] / spread);
+            errors[k] = Double.isNaN(error) ? Double.POSITIVE_INFINITY : error;
+        }
+        return errors;
+    }
+
+    private static DMatrixRMaj propagator(OrthonormalCompression rung, double step, int steps) {
+        return rung.evolution() instanceof Evolution.StepMap ? Matrices.power(rung.action(), steps)
+                : MatrixExponential.of(Matrices.scaled(rung.action(), steps * step));
     }
 
     /**

@@ -30,7 +30,7 @@ public final class EigenfunctionOverlap implements Check {
                 "The condition of the eigenfunctions is %.3g; 1 is an orthogonal set.", evidence.fitted().condition())));
         for (Mode mode : evidence.spectrum().modes()) {
             LadderRow row = evidence.clearestOf(mode.number());
-            findings.add(new Finding(mode.number(), id(), row.overlap(), threshold, !imposed && row.overlap() <= threshold,
+            findings.add(new Finding(mode.number(), id(), row.overlap(), threshold, !imposed && row.overlap() <= Math.max(threshold, row.noise().blur()),
                     imposed ? IMPOSED : String.format(Locale.ROOT,
                     "At rank %d it overlaps its own conjugate or another mode that carries the signal by at most %.3g (0 is orthogonal, 1 the same function).",
                     row.rank(), row.overlap())));

@@ -46,6 +46,13 @@ public record Evidence(
     /** A norm that noise of the data's own size changes by more than this factor is not looked at. */
     static final double NOISY_NORM = 1.1;
 
+    /** A norm that noise changes by less than this factor moves an overlap by less than 0.1. */
+    private static final double STILL_NORM = 1.005;
+
+    private static final double USABLE = 0.25;
+    private static final double GOOD = 0.05;
+    private static final double TWICE = 2;
+
     /** How many rungs at the top of a mode's ladder are looked at. */
     static final int LAST_RUNGS = 4;
 
@@ -74,24 +81,46 @@ public record Evidence(
         return ladder.stream().filter(row -> row.mode() == mode).toList();
     }
 
+    /** Returns the rungs of one mode, by rising rank, on which noise of the data's own size changes rate and weight by no more than a quarter. */
+    public List<LadderRow> usableRungsOf(int mode) {
+        return ladderOf(mode).stream().filter(row -> row.noise().change() <= USABLE).toList();
+    }
+
     /**
-     * Returns the rungs of one mode up to where noise of the data's own size takes over, by rising rank: those on which noise leaves rate and
-     * weight alone, as far as the first on which it does not.
+     * Returns those of them on which the mode moves by its own rule on the judging runs: to 5 % once the noise is taken off, or about as well as
+     * on any rung. Lower ranks lack functions it needs, higher ones fit noise.
      */
-    public List<LadderRow> clearRungsOf(int mode) {
-        return clear(ladderOf(mode), row -> row.noise().change() <= settings.settleThreshold());
+    public List<LadderRow> goodRungsOf(int mode) {
+        List<LadderRow> usable = usableRungsOf(mode);
+        double best = usable.stream().mapToDouble(LadderRow::rawResidual).filter(r -> !Double.isNaN(r)).min().orElse(Double.NaN);
+        return usable.stream().filter(row -> row.residual() <= Math.max(GOOD, TWICE * best)).toList();
     }
 
-    /** The same for the norm. */
+    /** Returns the good rungs where they are enough to show settling, otherwise the usable ones. */
+    List<LadderRow> tellingRungsOf(int mode) {
+        List<LadderRow> good = goodRungsOf(mode);
+        return good.size() >= Settling.LEAST_RUNGS ? good : usableRungsOf(mode);
+    }
+
+    /** Returns the telling rungs on which noise leaves the norm alone. */
     List<LadderRow> clearNormsOf(int mode) {
-        return clear(ladderOf(mode), row -> row.noise().norm() <= NOISY_NORM);
+        return tellingRungsOf(mode).stream().filter(row -> row.noise().norm() <= NOISY_NORM).toList();
     }
 
-    /** Returns the highest rung on which noise leaves rate, weight and norm of a mode alone; the fitted rank where there is none. */
+    /**
+     * Returns the rung on which orthogonality is read: the highest telling one on which noise changes the norm by no more than half a per cent, or
+     * the one on which it changes it least; the fitted rank where none is telling.
+     */
     LadderRow clearestOf(int mode) {
-        List<LadderRow> rows = clear(ladderOf(mode), row -> row.noise().norm() <= NOISY_NORM && row.noise().change() <= settings.settleThreshold());
-        return rows.isEmpty() ? ladderOf(mode).stream().filter(row -> row.rank() == operator.rank()).findFirst().orElseThrow()
-                : rows.get(rows.size() - 1);
+        List<LadderRow> rows = tellingRungsOf(mode);
+        List<LadderRow> still = rows.stream().filter(row -> row.noise().norm() <= STILL_NORM).toList();
+        return still.isEmpty() ? rows.stream().min(java.util.Comparator.comparingDouble(row -> row.noise().norm())).orElseGet(() -> fittedOf(mode))
+                : still.get(still.size() - 1);
+    }
+
+    /** Returns the row of a mode at the fitted rank. */
+    LadderRow fittedOf(int mode) {
+        return ladderOf(mode).stream().filter(row -> row.rank() == operator.rank()).findFirst().orElseThrow();
     }
 
     /** Leading noisy entries are dropped; the list ends before the first noisy one after that. */

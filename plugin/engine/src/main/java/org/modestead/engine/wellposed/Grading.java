@@ -44,7 +44,8 @@ final class Grading {
         switch (grade) {
             case ABSENT -> {
                 failed(findings, mode, "space-norm-growth").ifPresent(out::add);
-                failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value())).ifPresent(out::add);
+                failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value()) && !FittedRank.spoilt(mode, evidence))
+                        .ifPresent(out::add);
             }
             case DRIFTS -> {
                 failed(findings, mode, "clustered-eigenvalues").ifPresent(out::add);
@@ -55,6 +56,7 @@ final class Grading {
             case UNDECIDED -> {
                 failed(findings, mode, "settling").ifPresent(out::add);
                 failed(findings, mode, "holdout-residual").ifPresent(out::add);
+                failed(findings, mode, "fitted-rank").ifPresent(out::add);
                 failed(findings, 0, "captured-share").ifPresent(out::add);
                 failed(findings, mode, "step-consistency").ifPresent(out::add);
                 if (!evidence.heldOut()) {

@@ -20,7 +20,7 @@ public final class JointSoloGap implements Check {
         double threshold = evidence.settings().gapThreshold();
         return evidence.spectrum().modes().stream().map(mode -> {
             LadderRow row = evidence.clearestOf(mode.number());
-            return new Finding(mode.number(), id(), row.gap(), threshold, row.gap() <= threshold, String.format(Locale.ROOT,
+            return new Finding(mode.number(), id(), row.gap(), threshold, row.gap() <= Math.max(threshold, row.noise().blur()), String.format(Locale.ROOT,
                     "At rank %d its weights fitted together with the other modes and alone differ by %.3g of their size.", row.rank(), row.gap()));
         }).toList();
     }

@@ -33,7 +33,7 @@ import org.modestead.engine.spectrum.TrainingSample;
  */
 record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, double longest) {
 
-    private static final int MOST_RUNGS = 12;
+    private static final int MOST_RUNGS = 14;
     private static final double TOO_FAR = 1.5;
     private static final double TRUSTED = 1e-11;
     private static final int HIGHER = 10;
@@ -71,7 +71,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
 
     private static List<Integer> ranks(FittedOperator operator, JudgeSettings settings) {
         int fitted = operator.rank();
-        int from = settings.ladderFrom() > 0 ? settings.ladderFrom() : Math.max(2, (fitted + 1) / 2);
+        int from = settings.ladderFrom() > 0 ? settings.ladderFrom() : Math.min(2, fitted);
         int to = settings.ladderTo() > 0 ? settings.ladderTo() : Math.min(trusted(operator), Math.max(3 * fitted, fitted + HIGHER));
         if (settings.ladderTo() > operator.compression().rank() || settings.ladderFrom() > fitted) {
             throw new FitFault("ladder", "ranks " + from + " to " + to + " were asked for, the operator has rank " + fitted

@@ -68,6 +68,11 @@ public record NoiseEffect(double rate, double weight, double norm) {
         return Math.max(rate, weight);
     }
 
+    /** Returns the overlap that noise alone may show: a part of size b beside a function of size 1 lengthens it to √(1 + b²). */
+    double blur() {
+        return norm <= 1 ? 0 : Math.sqrt(1 - 1 / (norm * norm));
+    }
+
     /** Returns the larger over the smaller of two positive figures. */
     static double factor(double a, double b) {
         return Math.max(a / b, b / a);

@@ -9,9 +9,9 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.spectrum.Mode;
 
 /**
- * Whether rate and weight of a mode stop changing as functions join: the largest relative change from rung to rung over the
- * last four rungs on which it was found. A mode that is not found on the rungs next to the fitted rank counts as changed
- * altogether (1).
+ * Whether rate and weight of a mode stop changing as functions join: how far they are, on the last four telling rungs, from those of the
+ * last one, the worst of four left out (where two modes cross on the ladder, one rung may show neither). A change that noise of the data's own size
+ * makes as well does not count as one. A mode that is not found on the rungs next to the fitted rank counts as changed altogether (1).
  *
  * <p>Where no function is left to join, because the fitted rank takes in all the data hold, the ladder has no upper part and
  * its lower rungs lack functions that the signal needs. There the question is answered by {@link Closure}.
@@ -50,17 +50,18 @@ public final class Settling implements Check {
         if (found.size() < LEAST_RUNGS) {
             return new Finding(mode, id(), 1, threshold, false, "It is found on only " + found.size() + " of " + evidence.rungs().size() + " rungs.");
         }
-        List<LadderRow> clear = evidence.clearRungsOf(mode);
-        List<LadderRow> rows = clear.subList(Math.max(0, clear.size() - Evidence.LAST_RUNGS), clear.size());
-        if (rows.size() < LEAST_RUNGS) {
-            return new Finding(mode, id(), Double.NaN, threshold, false, "Only on " + rows.size() + " of " + found.size()
-                    + " rungs does noise of the size found in the data change it by less than " + threshold + " of its size.");
+        List<LadderRow> usable = evidence.usableRungsOf(mode);
+        if (usable.size() < LEAST_RUNGS) {
+            return new Finding(mode, id(), Double.NaN, threshold, false, "Only on " + usable.size() + " of " + found.size()
+                    + " rungs does noise of the size found in the data leave it as it is.");
         }
-        double rate = change(rows, evidence.longest(), true);
-        double weight = change(rows, evidence.longest(), false);
+        List<LadderRow> telling = evidence.tellingRungsOf(mode);
+        List<LadderRow> rows = telling.subList(Math.max(0, telling.size() - Evidence.LAST_RUNGS), telling.size());
+        double rate = distance(rows, evidence.longest(), true);
+        double weight = distance(rows, evidence.longest(), false);
         double value = Math.max(rate, weight);
         return new Finding(mode, id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
-                "Over the last rungs that noise leaves alone (ranks %d to %d) its rate changes by up to %.3g and its weight by up to %.3g.",
+                "On the last rungs that tell of it (ranks %d to %d) its rate differs by up to %.3g and its weight by up to %.3g.",
                 rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight));
     }
 
@@ -74,16 +75,16 @@ public final class Settling implements Check {
                 missed.getAsDouble())));
     }
 
-    private static double change(List<LadderRow> rows, double longest, boolean ofRate) {
-        double largest = 0;
-        for (int k = 1; k < rows.size(); k++) {
-            LadderRow before = rows.get(k - 1);
-            LadderRow after = rows.get(k);
-            double size = Math.max(before.weight(), after.weight());
-            double change = ofRate ? Ladder.relativeChange(before.rate(), after.rate(), longest)
-                    : size == 0 ? 0 : Math.abs(after.weight() - before.weight()) / size;
-            largest = Math.max(largest, change);
-        }
-        return largest;
+    /** From the last rung; of three distances the middle one. */
+    private static double distance(List<LadderRow> rows, double longest, boolean ofRate) {
+        LadderRow last = rows.get(rows.size() - 1);
+        double[] distances = rows.subList(0, rows.size() - 1).stream().mapToDouble(row -> {
+            double size = Math.max(row.weight(), last.weight());
+            double change = ofRate ? Ladder.relativeChange(row.rate(), last.rate(), longest)
+                    : size == 0 ? 0 : Math.abs(last.weight() - row.weight()) / size;
+            double noise = ofRate ? Math.max(row.noise().rate(), last.noise().rate()) : Math.max(row.noise().weight(), last.noise().weight());
+            return change <= noise ? 0 : change;
+        }).sorted().toArray();
+        return distances[distances.length < Evidence.LAST_RUNGS - 1 ? distances.length - 1 : distances.length - 2];
     }
 }

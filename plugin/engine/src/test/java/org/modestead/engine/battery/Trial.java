@@ -64,16 +64,12 @@ record Trial(Case truth, double noise, int runs, long seed) {
         }
     }
 
-    /** At the rank of the look, or at all the data hold where that is less. */
+    /** The tool chooses the rank, up to that of the look. */
     private FittedOperator fitted() {
         List<Run> all = truth.system().runs(runs, noise, seed);
         int training = runs - (int) Math.max(1, Math.round(HELD_OUT * runs));
         Snapshots snapshots = Motions.snapshots(truth.system().step(), truth.look().depth(), all.subList(0, training),
                 all.subList(training, runs));
-        try {
-            return Motions.fit(snapshots, truth.look().estimator(), truth.look().rank());
-        } catch (FitFault fewer) {
-            return OperatorFitter.fit(snapshots, truth.look().estimator(), new RankRule.Energy(1), 0, Progress.NONE);
-        }
+        return OperatorFitter.fit(snapshots, truth.look().estimator(), new RankRule.Holdout(30), 0, Progress.NONE);
     }
 }
