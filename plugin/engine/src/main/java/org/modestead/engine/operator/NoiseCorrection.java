@@ -13,7 +13,10 @@ public enum NoiseCorrection {
     TOTAL_LEAST_SQUARES("total least squares"),
 
     /** The geometric mean of the step forward and the inverted step backward, see {@link ForwardBackward}. */
-    FORWARD_BACKWARD("least squares forward and backward");
+    FORWARD_BACKWARD("least squares forward and backward"),
+
+    /** What noise adds to the arrays is measured and taken off, for any functions, see {@link NoiseMoments}. */
+    EXTRAPOLATION("least squares extrapolated to no noise");
 
     private final String words;
 

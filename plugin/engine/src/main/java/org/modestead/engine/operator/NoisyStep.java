@@ -1,5 +1,6 @@
 package org.modestead.engine.operator;
 
+import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
@@ -12,9 +13,16 @@ import org.modestead.engine.linalg.Matrices;
  *
  * @param correction not {@link NoiseCorrection#NONE}
  * @param moved (R + k) x r: the orthonormal functions q_1..q_r after a step, in an orthonormal frame that begins with
- *     q_1..q_R, R at least r; so {@code movedᵀ moved} is the second moment, and its head the measured action
+ *     q_1..q_R, R at least r; so {@code movedᵀ moved} is the second moment, and its head the measured action. For the extrapolation
+ *     only the measured action
+ * @param moments what noise adds, for the extrapolation
  */
-public record NoisyStep(NoiseCorrection correction, DMatrixRMaj moved) {
+public record NoisyStep(NoiseCorrection correction, DMatrixRMaj moved, Optional<NoiseMoments> moments) {
+
+    /** For the extrapolation. */
+    static NoisyStep of(DMatrixRMaj action, NoiseMoments moments) {
+        return new NoisyStep(NoiseCorrection.EXTRAPOLATION, action, Optional.of(moments));
+    }
 
     /**
      * @param now m x R, orthonormal columns: samples of the functions
@@ -26,12 +34,12 @@ public record NoisyStep(NoiseCorrection correction, DMatrixRMaj moved) {
         CommonOps_DDRM.subtract(next, rest, rest);
         QRDecomposition<DMatrixRMaj> qr = DecompositionFactory_DDRM.qr(rest.numRows, rest.numCols);
         qr.decompose(rest);
-        return new NoisyStep(correction, CommonOps_DDRM.concatRowsMulti(action, qr.getR(null, true)));
+        return new NoisyStep(correction, CommonOps_DDRM.concatRowsMulti(action, qr.getR(null, true)), Optional.empty());
     }
 
     /** The same step seen by the leading r functions. */
     NoisyStep leading(int r) {
-        return new NoisyStep(correction, Matrices.block(moved, 0, moved.numRows, 0, r));
+        return new NoisyStep(correction, Matrices.block(moved, 0, moments.isPresent() ? r : moved.numRows, 0, r), moments.map(m -> m.leading(r)));
     }
 
     /** Returns {@code <A q_j, q_i>} as the data give it, r x r. */
@@ -45,6 +53,9 @@ public record NoisyStep(NoiseCorrection correction, DMatrixRMaj moved) {
      * @param singular of the functions, at least r
      */
     DMatrixRMaj corrected(double[] singular) {
+        if (moments.isPresent()) {
+            return moments.get().corrected(moved);
+        }
         return correction == NoiseCorrection.TOTAL_LEAST_SQUARES ? TotalLeastSquares.action(moved, singular)
                 : ForwardBackward.action(measured(), Matrices.transposeProduct(moved, moved));
     }

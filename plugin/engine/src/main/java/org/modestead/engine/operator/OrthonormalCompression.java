@@ -102,9 +102,20 @@ public record OrthonormalCompression(
      * @return of this rank, or less where the data hold less; its basis are the R functions in their scale
      */
     public OrthonormalCompression again(DMatrixRMaj now, DMatrixRMaj next, DMatrixRMaj target, int rank) {
-        OrthonormalCompression free = new FactoredCompression(new Coordinates(rank()), now, next, target, innerProduct, evolution,
-                noisy.map(NoisyStep::correction).orElse(NoiseCorrection.NONE)).whiten(rank);
+        Optional<NoiseMoments> moments = noisy.flatMap(NoisyStep::moments);
+        OrthonormalCompression white = new FactoredCompression(new Coordinates(rank()), now, next, target, innerProduct, evolution,
+                moments.isPresent() ? NoiseCorrection.NONE : noisy.map(NoisyStep::correction).orElse(NoiseCorrection.NONE)).whiten(rank);
+        OrthonormalCompression free = moments.map(noise -> white.corrected(NoisyStep.of(white.action(), noise.of(inFunctions(white))))).orElse(white);
         return imposed.map(imposing -> free.constrained(imposing.structure())).orElse(free);
+    }
+
+    /** How functions combined from these in their scale are combined from these as they are. */
+    private DMatrixRMaj inFunctions(OrthonormalCompression other) {
+        DMatrixRMaj out = other.map().copy();
+        if (innerProduct == InnerProduct.DATA) {
+            CommonOps_DDRM.multRows(singular, out);
+        }
+        return out;
     }
 
     /** Returns R. */

@@ -16,8 +16,8 @@ import org.modestead.engine.recording.StateRun;
  */
 public final class PredictionError {
 
-    /** An error within 2 % of the least is as good, and the lowest such rank is taken. */
-    private static final double NO_BETTER = 1.02;
+    /** An error within half a per cent of the least is as good, and the lowest such rank is taken. */
+    private static final double NO_BETTER = 1.005;
 
     private PredictionError() {}
 

@@ -44,7 +44,7 @@ public record Evidence(
         JudgeSettings settings) {
 
     /** A norm that noise of the data's own size changes by more than this factor is not looked at. */
-    static final double NOISY_NORM = 1.1;
+    static final double NOISY_NORM = 1.05;
 
     /** A norm that noise changes by less than this factor moves an overlap by less than 0.1. */
     private static final double STILL_NORM = 1.005;
@@ -93,7 +93,7 @@ public record Evidence(
     public List<LadderRow> goodRungsOf(int mode) {
         List<LadderRow> usable = usableRungsOf(mode);
         double best = usable.stream().mapToDouble(LadderRow::rawResidual).filter(r -> !Double.isNaN(r)).min().orElse(Double.NaN);
-        return usable.stream().filter(row -> row.residual() <= Math.max(GOOD, TWICE * best)).toList();
+        return usable.stream().filter(row -> row.residual() <= Math.min(Math.max(GOOD, TWICE * best), settings.residualThreshold())).toList();
     }
 
     /** Returns the good rungs where they are enough to show settling, otherwise the usable ones. */
@@ -104,7 +104,7 @@ public record Evidence(
 
     /** Returns the telling rungs on which noise leaves the norm alone. */
     List<LadderRow> clearNormsOf(int mode) {
-        return tellingRungsOf(mode).stream().filter(row -> row.noise().norm() <= NOISY_NORM).toList();
+        return clear(tellingRungsOf(mode), row -> row.noise().norm() <= NOISY_NORM);
     }
 
     /**

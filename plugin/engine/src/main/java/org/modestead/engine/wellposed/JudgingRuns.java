@@ -8,6 +8,7 @@ import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.recording.SampleNoise;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
@@ -48,7 +49,7 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
      * @param operator that was judged
      * @param noise its level
      */
-    JudgingRuns with(FittedOperator operator, NoiseLevel noise) {
+    JudgingRuns with(FittedOperator operator, SampleNoise noise) {
         int states = runs.stream().mapToInt(StateRun::count).sum();
         int copies = Math.max(2, Math.min(MOST_COPIES, 2 * (ENOUGH_STATES / (2 * states) + 1)));
         Random random = new Random(SEED);
@@ -59,7 +60,7 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
             List<DMatrixRMaj> doses = recorded.stream().map(run -> noise.noise(run, random)).toList();
             for (double sign : new double[] {1, -1}) {
                 for (int i = 0; i < recorded.size(); i++) {
-                    Run run = NoiseLevel.disturbed(recorded.get(i), doses.get(i), sign);
+                    Run run = SampleNoise.disturbed(recorded.get(i), doses.get(i), sign);
                     noisier.add(operator.compression().evaluate(operator.compression().arguments(operator.snapshots().embed(run))));
                 }
             }

@@ -12,6 +12,9 @@ import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.PredictionError;
+import org.modestead.engine.operator.Ridge;
+import org.modestead.engine.recording.SampleNoise;
+import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Matching;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
@@ -36,6 +39,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
     private static final int MOST_RUNGS = 14;
     private static final double TOO_FAR = 1.5;
     private static final double TRUSTED = 1e-11;
+    private static final long SEED = 9311;
     private static final int HIGHER = 10;
 
     /** Rates below this share of one over the longest run cannot be told from zero. */
@@ -46,10 +50,10 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         DMatrixRMaj sampled = operator.compression().evaluate(sample.states());
         List<Integer> ranks = ranks(operator, settings);
         double[] errors = PredictionError.relative(operator.compression(), unjudged.runs(), unjudged.functions(), ranks, progress);
-        NoiseLevel noise = NoiseLevel.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
+        SampleNoise noise = SampleNoise.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
                 unjudged.runs(), unjudged.functions(), ranks, sample.channels()));
         JudgingRuns judging = unjudged.with(operator, noise);
-        List<OrthonormalCompression> noisier = noise.refits(operator, ranks.get(ranks.size() - 1), progress);
+        List<OrthonormalCompression> noisier = noisierFits(operator, noise, ranks.get(ranks.size() - 1), progress);
         List<Rung> rungs = new ArrayList<>();
         List<List<NoiseEffect>> effects = new ArrayList<>();
         List<Double> normEffects = new ArrayList<>();
@@ -67,6 +71,19 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
                 .map(fit -> Rung.fitted(fit.leading(operator.rank()), sample)).toList());
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
                 normEffects, spectrum.modes().stream().map(mode -> twins.get(partOf(rungs.get(fitted), mode))).toList(), sample.longest());
+    }
+
+    /** The operator fitted twice more, to training runs with as much noise again; what cannot be fitted is left out. */
+    private static List<OrthonormalCompression> noisierFits(FittedOperator operator, SampleNoise noise, int rank, Progress progress) {
+        List<OrthonormalCompression> out = new ArrayList<>();
+        for (Snapshots noisier : noise.disturbed(operator.snapshots(), 1, SEED)) {
+            try {
+                out.add(Ridge.apply(operator.estimator().compress(noisier, progress).whiten(rank), operator.ridge()));
+            } catch (FitFault fault) {
+                progress.checkCancelled();
+            }
+        }
+        return out;
     }
 
     private static List<Integer> ranks(FittedOperator operator, JudgeSettings settings) {
@@ -171,9 +188,25 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         }
         int[] matched = Matching.of(cost, TOO_FAR);
         for (int a = 0; a < matched.length; a++) {
+            matched[a] = matched[a] < 0 ? sameRate(seen[a], to, longest) : matched[a];
             seen[a] = matched[a] < 0 ? seen[a] : new Sighting(to, matched[a]);
         }
         return matched;
+    }
+
+    /** Modes of one rate may be fewer on another rung, and are then looked for together; -1 where there is none. */
+    private static int sameRate(Sighting seen, Rung to, double longest) {
+        Complex rate = seen.rung().parts().get(seen.part()).rate();
+        int best = -1;
+        double least = Eigenspace.SAME_RATE;
+        for (int b = 0; b < to.parts().size(); b++) {
+            double change = relativeChange(rate, to.parts().get(b).rate(), longest);
+            if (change < least && !to.parts().get(b).constant()) {
+                least = change;
+                best = b;
+            }
+        }
+        return best;
     }
 
     /** |<φ, φ'>| of unit eigenfunctions: nested ranks share their leading orthonormal functions. */

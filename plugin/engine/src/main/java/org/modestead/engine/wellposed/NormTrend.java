@@ -9,7 +9,7 @@ import java.util.List;
  *
  * <p>Growing means that the last third exceeds the first by more than a factor, or that the three last distinct values rise by more than
  * 30 % with an increment that is not shrinking (at least half of the one before). A convergent sequence of projections has shrinking
- * increments. Still rising means that the last distinct values rise by more than 5 % together.
+ * increments. Still rising means that the last distinct values rise by more than 1 % together.
  *
  * @param growing whether it grows without bound as far as can be seen
  * @param factor geometric mean of the last third over that of the first
@@ -20,7 +20,7 @@ record NormTrend(boolean growing, double factor, boolean rising) {
     private static final double SAME = 1e-3;
     private static final double NOTABLE = 1.3;
     private static final double SHRINKING = 0.5;
-    private static final double AT_REST = 1.05;
+    private static final double AT_REST = 1.01;
     private static final int LOOKED_AT = 3;
 
     /**
@@ -37,14 +37,15 @@ record NormTrend(boolean growing, double factor, boolean rising) {
             }
         }
         List<Double> last = distinct.subList(Math.max(0, distinct.size() - LOOKED_AT), distinct.size());
+        boolean rising = last.get(last.size() - 1) > AT_REST * last.get(0);
         if (last.size() < LOOKED_AT) {
-            return new NormTrend(factor > threshold, factor, false);
+            return new NormTrend(factor > threshold, factor, rising);
         }
         double before = last.get(1) - last.get(0);
         double after = last.get(2) - last.get(1);
         double climb = last.get(2) / last.get(0);
         boolean steady = before > 0 && after > SHRINKING * before && climb > NOTABLE;
-        return new NormTrend(factor > threshold || steady, factor, before > 0 && after > 0 && climb > AT_REST);
+        return new NormTrend(factor > threshold || steady, factor, rising);
     }
 
     private static double mean(List<Double> positive) {

@@ -18,7 +18,7 @@ import org.modestead.engine.spectrum.ModalExpansion;
  * with noise. The largest over the τ counts. What known inputs add on the way is taken off first, where they are separated.
  *
  * <p>Noise of the data adds to both norms, in squares. How much it adds is seen by adding as much again, with the level of
- * {@link NoiseLevel}: {@code clear² = 2 ‖.‖² - ‖.‖²_noisier}, the straight line through one and two doses of noise read off at none
+ * {@link SampleNoise}: {@code clear² = 2 ‖.‖² - ‖.‖²_noisier}, the straight line through one and two doses of noise read off at none
  * (simulation extrapolation, Cook and Stefanski, J. Am. Stat. Assoc. 89:1314, 1994, with a line). Where more than half of the
  * eigenfunction's squared size is noise, nothing is taken off.
  */

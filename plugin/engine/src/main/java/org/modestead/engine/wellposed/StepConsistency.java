@@ -10,7 +10,6 @@ import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.Ridge;
-import org.modestead.engine.spectrum.Matching;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
 
@@ -52,21 +51,13 @@ public final class StepConsistency implements Check {
 
     private List<Finding> compare(Evidence evidence, ModalExpansion other, int rank) {
         List<Mode> modes = evidence.carrying().filter(mode -> mode.frequency() < other.compression().evolution().aliasingLimit()).toList();
-        // both of a pair: rounding may turn a rate that two functions share into a pair, and then two modes look for it
-        List<Complex> rates = other.rates();
-        double[][] cost = new double[modes.size()][rates.size()];
-        for (int i = 0; i < modes.size(); i++) {
-            Complex own = rateAt(evidence, modes.get(i), rank);
-            for (int j = 0; j < rates.size(); j++) {
-                cost[i][j] = Math.min(2, Ladder.relativeChange(own, rates.get(j), evidence.longest()));
-            }
-        }
-        int[] matched = Matching.of(cost, 2);
         List<Finding> findings = new ArrayList<>();
         double threshold = evidence.settings().stepThreshold();
-        for (int i = 0; i < modes.size(); i++) {
-            double value = matched[i] < 0 ? 1 : cost[i][matched[i]];
-            findings.add(new Finding(modes.get(i).number(), id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
+        for (Mode mode : modes) {
+            Complex own = rateAt(evidence, mode, rank);
+            // the nearest, though two modes may look for one: functions that share a rate may show it as one or as several
+            double value = other.rates().stream().mapToDouble(rate -> Ladder.relativeChange(own, rate, evidence.longest())).min().orElse(1);
+            findings.add(new Finding(mode.number(), id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
                     "Fitted with another step its rate differs by %.3g.", value)));
         }
         return findings;

@@ -21,13 +21,16 @@ import org.modestead.engine.recording.StateRun;
 record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Complex rateTwo, Complex overlap) {
 
     /** Overlap of unit eigenfunctions from which on they may be halves of a defective one. */
-    static final double PARALLEL = 0.7;
+    static final double PARALLEL = 0.5;
 
     private static final double HALF = 0.5;
+
+    /** Weight relative to the mode's from which another is taken for its half: halves carry large opposite weights. */
+    private static final double NOTABLE = 0.1;
     private static final double MEAN = 0.25;
 
     /** Coupling over the time looked at, below which the functions share a rate without being one defective pair. */
-    private static final double UNCOUPLED = 0.01;
+    private static final double UNCOUPLED = 0.1;
 
     /** Squared misses above which noise rules and the judging runs cannot decide. */
     private static final double EXACT = 1e-4;
@@ -54,14 +57,15 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
      */
     static List<Boolean> twins(Rung rung, JudgingRuns judging, List<Rung> noisier) {
         List<ZMatrixRMaj> values = judging.eigenfunctions(rung.expansion());
-        return rung.parts().stream().map(part -> hasTwin(rung, part.group().get(0), judging, values, noisier)).toList();
+        return rung.parts().stream().map(part -> hasTwin(rung, part, judging, values, noisier)).toList();
     }
 
-    private static boolean hasTwin(Rung rung, int column, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier) {
-        for (int other = 0; other < rung.rank(); other++) {
-            if (other != column) {
+    private static boolean hasTwin(Rung rung, Rung.Part part, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier) {
+        int column = part.group().get(0);
+        for (Rung.Part partner : rung.parts()) {
+            for (int other : partner.weight() >= NOTABLE * part.weight() ? partner.group() : List.<Integer>of()) {
                 TwinRates pair = of(rung.expansion().vectors(), rung.expansion().rates(), column, other);
-                if (pair.parallel() && (pair.splitByNoise(noisier) || !pair.toldApart(judging, values))) {
+                if (other != column && pair.parallel() && pair.coupled(judging) && (pair.splitByNoise(noisier) || !pair.toldApart(judging, values))) {
                     return true;
                 }
             }
@@ -111,20 +115,31 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
         return overlap.abs() > PARALLEL && Double.isFinite(rateOne.re()) && Double.isFinite(rateTwo.re());
     }
 
+    /** Whether one of the functions pushes the other at all; functions that share a rate without that are two modes. */
+    private boolean coupled(JudgingRuns judging) {
+        return rateTwo.minus(rateOne).times(overlap).times(span(judging) / sine()).abs() >= UNCOUPLED;
+    }
+
+    private double sine() {
+        return Math.sqrt(Math.max(1 - overlap.abs() * overlap.abs(), 1e-300));
+    }
+
+    private double span(JudgingRuns judging) {
+        double span = judging.longest() / 2;
+        for (Complex rate : List.of(rateOne, rateTwo)) {
+            span = rate.re() == 0 ? span : Math.min(span, 1 / Math.abs(rate.re()));
+        }
+        return span;
+    }
+
     /**
      * @param judging runs
      * @param values per run, p x r eigenfunctions
      * @return whether two rates predict them better than one does
      */
     private boolean toldApart(JudgingRuns judging, List<ZMatrixRMaj> values) {
-        double s = Math.sqrt(Math.max(1 - overlap.abs() * overlap.abs(), 1e-300));
-        double span = judging.longest() / 2;
-        for (Complex rate : List.of(rateOne, rateTwo)) {
-            span = rate.re() == 0 ? span : Math.min(span, 1 / Math.abs(rate.re()));
-        }
-        if (rateTwo.minus(rateOne).times(overlap).times(span / s).abs() < UNCOUPLED) {
-            return true;
-        }
+        double s = sine();
+        double span = span(judging);
         double[] misses = new double[4];
         int pairs = 0;
         for (double lag : LAGS) {

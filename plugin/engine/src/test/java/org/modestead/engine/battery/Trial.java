@@ -7,6 +7,7 @@ import org.modestead.engine.Fault;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.fixtures.Motions;
+import org.modestead.engine.operator.ExtrapolatedEstimator;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
@@ -70,6 +71,6 @@ record Trial(Case truth, double noise, int runs, long seed) {
         int training = runs - (int) Math.max(1, Math.round(HELD_OUT * runs));
         Snapshots snapshots = Motions.snapshots(truth.system().step(), truth.look().depth(), all.subList(0, training),
                 all.subList(training, runs));
-        return OperatorFitter.fit(snapshots, truth.look().estimator(), new RankRule.Holdout(30), 0, Progress.NONE);
+        return OperatorFitter.fit(snapshots, new ExtrapolatedEstimator(truth.look().estimator()), new RankRule.Holdout(30), 0, Progress.NONE);
     }
 }

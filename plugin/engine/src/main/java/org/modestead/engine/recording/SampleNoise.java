@@ -1,36 +1,32 @@
-package org.modestead.engine.wellposed;
+package org.modestead.engine.recording;
 
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
-import org.modestead.engine.FitFault;
-import org.modestead.engine.Progress;
-import org.modestead.engine.operator.FittedOperator;
-import org.modestead.engine.operator.OrthonormalCompression;
-import org.modestead.engine.operator.Ridge;
-import org.modestead.engine.recording.Run;
-import org.modestead.engine.recording.Snapshots;
 
 /**
  * Standard deviation of the noise on single samples, one a channel: what a cubic through two neighbours on either side misses
  * of a sample, {@code e_k = y_k - Σ w_j y_j}, divided by {@code √(1 + Σ w_j²)} and averaged robustly (median of {@code |e|} over 0.6745).
- * Smooth motion leaves next to nothing, so the figure is an upper bound that is close where the sampling is fine. A second upper
+ * Smooth motion leaves next to nothing, so the figure is an upper bound that is close where the sampling is fine. Where it is coarse, {@link NearestStates} bounds it closer. A further upper
  * bound is what the best one-step prediction of runs not fitted misses, since no prediction foresees noise; the lower of both counts.
  *
  * <p>Differencing after Gasser, Sroka and Jennen-Steinmetz, Biometrika 73:625, 1986 (there with a line, here with a cubic; formula from memory).
  *
  * @param deviations n, in prepared units
  */
-record NoiseLevel(double[] deviations) {
+public record SampleNoise(double[] deviations) {
 
     private static final int NEIGHBOURS = 2;
-    private static final long SEED = 9311;
     private static final double MEDIAN_OF_NORMAL = 0.6744897501960817;
 
-    /** From all runs that fit or judge. */
-    static NoiseLevel rough(Snapshots snapshots) {
+    /**
+     * Measures it on all runs that fit or judge.
+     *
+     * @param snapshots prepared; runs of fewer than five samples say nothing
+     */
+    public static SampleNoise rough(Snapshots snapshots) {
         int n = snapshots.channels().size();
         double[] out = new double[n];
         for (int c = 0; c < n; c++) {
@@ -43,43 +39,40 @@ record NoiseLevel(double[] deviations) {
             double[] sorted = misses.stream().flatMapToDouble(Arrays::stream).map(Math::abs).sorted().toArray();
             out[c] = sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
         }
-        return new NoiseLevel(out);
+        List<Run> runs = new ArrayList<>(snapshots.runs(Snapshots.Part.TRAINING));
+        runs.addAll(snapshots.runs(Snapshots.Part.HOLDOUT));
+        return new SampleNoise(out).atMost(NearestStates.bounds(runs, n));
     }
 
     /** Returns the lower of this level and given bounds, channel by channel. */
-    NoiseLevel atMost(double[] bounds) {
+    public SampleNoise atMost(double[] bounds) {
         double[] out = deviations.clone();
         for (int c = 0; c < out.length; c++) {
             out[c] = Math.min(out[c], bounds[c]);
         }
-        return new NoiseLevel(out);
+        return new SampleNoise(out);
     }
 
     /**
-     * Fits the operator twice more to its training runs with as much noise again, the second time with the opposite sign: what is odd in the
-     * noise shows in one of them at least.
+     * Returns copies of snapshots whose training runs carry as much noise again, in pairs with opposite signs, so that what is odd in the noise
+     * shows, or cancels.
      *
-     * @param operator as fitted
-     * @param rank highest wanted
-     * @param progress polled for cancel
-     * @return up to that rank; those that cannot be fitted are left out
+     * @param snapshots not written
+     * @param pairs number of pairs
+     * @param seed of the noise
      */
-    List<OrthonormalCompression> refits(FittedOperator operator, int rank, Progress progress) {
-        Snapshots s = operator.snapshots();
-        Random random = new Random(SEED);
-        List<DMatrixRMaj> doses = s.training().stream().map(run -> noise(run, random)).toList();
-        List<OrthonormalCompression> out = new ArrayList<>();
-        for (double sign : new double[] {1, -1}) {
-            List<Run> training = new ArrayList<>();
-            for (int i = 0; i < doses.size(); i++) {
-                training.add(disturbed(s.training().get(i), doses.get(i), sign));
-            }
-            Snapshots noisier = new Snapshots(s.channels(), s.inputs(), s.time(), training, s.calibration(), s.holdout(), s.step(), s.delay(),
-                    s.preparation(), s.facts(), s.doubts());
-            try {
-                out.add(Ridge.apply(operator.estimator().compress(noisier, progress).whiten(rank), operator.ridge()));
-            } catch (FitFault fault) {
-                progress.checkCancelled();
+    public List<Snapshots> disturbed(Snapshots snapshots, int pairs, long seed) {
+        Random random = new Random(seed);
+        List<Snapshots> out = new ArrayList<>();
+        for (int pair = 0; pair < pairs; pair++) {
+            List<DMatrixRMaj> doses = snapshots.training().stream().map(run -> noise(run, random)).toList();
+            for (double sign : new double[] {1, -1}) {
+                List<Run> training = new ArrayList<>();
+                for (int i = 0; i < doses.size(); i++) {
+                    training.add(disturbed(snapshots.training().get(i), doses.get(i), sign));
+                }
+                out.add(new Snapshots(snapshots.channels(), snapshots.inputs(), snapshots.time(), training, snapshots.calibration(),
+                        snapshots.holdout(), snapshots.step(), snapshots.delay(), snapshots.preparation(), snapshots.facts(), snapshots.doubts()));
             }
         }
         return out;
@@ -116,7 +109,7 @@ record NoiseLevel(double[] deviations) {
     }
 
     /** White noise of this level for every sample of a run, p x n. */
-    DMatrixRMaj noise(Run run, Random random) {
+    public DMatrixRMaj noise(Run run, Random random) {
         DMatrixRMaj out = new DMatrixRMaj(run.values().numRows, run.values().numCols);
         for (int k = 0; k < out.getNumElements(); k++) {
             out.data[k] = deviations[k % deviations.length] * random.nextGaussian();
@@ -124,7 +117,8 @@ record NoiseLevel(double[] deviations) {
         return out;
     }
 
-    static Run disturbed(Run run, DMatrixRMaj noise, double sign) {
+    /** Returns a run with noise added, or taken off for the sign -1. */
+    public static Run disturbed(Run run, DMatrixRMaj noise, double sign) {
         DMatrixRMaj values = run.values().copy();
         for (int k = 0; k < values.getNumElements(); k++) {
             values.data[k] += sign * noise.data[k];
