@@ -53,6 +53,31 @@ public record SampleNoise(double[] deviations) {
         return new SampleNoise(out);
     }
 
+    /** Returns the level over the standard deviation of the training samples, root mean square over the channels that move. */
+    public double shareOf(Snapshots snapshots) {
+        int n = deviations.length;
+        double sum = 0;
+        int moving = 0;
+        for (int c = 0; c < n; c++) {
+            double mean = 0;
+            double squares = 0;
+            int count = 0;
+            for (Run run : snapshots.training()) {
+                for (int k = 0; k < run.samples(); k++) {
+                    mean += run.values().get(k, c);
+                    squares += run.values().get(k, c) * run.values().get(k, c);
+                    count++;
+                }
+            }
+            double variance = squares / count - Math.pow(mean / count, 2);
+            if (variance > 0) {
+                sum += deviations[c] * deviations[c] / variance;
+                moving++;
+            }
+        }
+        return moving == 0 ? 0 : Math.sqrt(sum / moving);
+    }
+
     /**
      * Returns copies of snapshots whose training runs carry as much noise again, in pairs with opposite signs, so that what is odd in the noise
      * shows, or cancels.

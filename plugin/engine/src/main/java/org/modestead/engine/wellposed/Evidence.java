@@ -22,6 +22,7 @@ import org.modestead.engine.spectrum.Spectrum;
  * @param predictionErrors per rung, relative one-step prediction error on the judging runs
  * @param undamped per rung, number of its modes with damping ratio below 5 %
  * @param twins per mode of the spectrum, whether the judging runs cannot tell it from half of a defective one
+ * @param noiseShare standard deviation of the noise over that of the signal, root mean square over the channels
  * @param heldOut whether the residuals were measured on runs the fit never saw
  * @param longest duration of the longest training run
  * @param settings thresholds
@@ -39,6 +40,7 @@ public record Evidence(
         List<Double> predictionErrors,
         List<Integer> undamped,
         List<Boolean> twins,
+        double noiseShare,
         boolean heldOut,
         double longest,
         JudgeSettings settings) {
@@ -49,7 +51,7 @@ public record Evidence(
     /** A norm that noise changes by less than this factor moves an overlap by less than 0.1. */
     private static final double STILL_NORM = 1.005;
 
-    private static final double USABLE = 0.25;
+    static final double USABLE = 0.25;
     private static final double GOOD = 0.05;
     private static final double TWICE = 2;
 
@@ -63,7 +65,7 @@ public record Evidence(
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
                 ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(), ladder.normEffects(),
                 ladder.rungs().stream().map(Evidence::median).toList(),
-                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), ladder.twins(), heldOut, ladder.longest(), settings);
+                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), ladder.twins(), ladder.noiseShare(), heldOut, ladder.longest(), settings);
     }
 
     private static double median(Rung rung) {

@@ -32,9 +32,11 @@ import org.modestead.engine.spectrum.TrainingSample;
  * @param predictionErrors per rung, relative one-step error on the judging runs
  * @param normEffects per rung, factor by which noise changes the mean norm of the modes that carry the signal
  * @param twins per mode of the spectrum, see {@link TwinRates}
+ * @param noiseShare standard deviation of the noise over that of the signal, root mean square over the channels
  * @param longest duration of the longest training run
  */
-record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, double longest) {
+record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, double noiseShare,
+        double longest) {
 
     private static final int MOST_RUNGS = 14;
     private static final double TOO_FAR = 1.5;
@@ -70,7 +72,8 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         List<Boolean> twins = TwinRates.twins(rungs.get(fitted), judging, noisier.stream().filter(fit -> fit.rank() >= operator.rank())
                 .map(fit -> Rung.fitted(fit.leading(operator.rank()), sample)).toList());
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
-                normEffects, spectrum.modes().stream().map(mode -> twins.get(partOf(rungs.get(fitted), mode))).toList(), sample.longest());
+                normEffects, spectrum.modes().stream().map(mode -> twins.get(partOf(rungs.get(fitted), mode))).toList(), noise.shareOf(operator.snapshots()),
+                sample.longest());
     }
 
     /** The operator fitted twice more, to training runs with as much noise again; what cannot be fitted is left out. */

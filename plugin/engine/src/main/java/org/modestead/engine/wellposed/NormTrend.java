@@ -39,7 +39,7 @@ record NormTrend(boolean growing, double factor, boolean rising) {
         List<Double> last = distinct.subList(Math.max(0, distinct.size() - LOOKED_AT), distinct.size());
         boolean rising = last.get(last.size() - 1) > AT_REST * last.get(0);
         if (last.size() < LOOKED_AT) {
-            return new NormTrend(factor > threshold, factor, rising);
+            return new NormTrend(norms.size() >= LOOKED_AT && factor > threshold, factor, rising);
         }
         double before = last.get(1) - last.get(0);
         double after = last.get(2) - last.get(1);

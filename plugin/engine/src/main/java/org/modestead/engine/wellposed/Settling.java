@@ -18,6 +18,9 @@ import org.modestead.engine.spectrum.Mode;
  */
 public final class Settling implements Check {
 
+    /** A rate that noise changes by more than this many times its own share of the mode is not determined by the data. */
+    private static final double AMPLIFIED = 10;
+
     /** Fewest rungs that can show settling. */
     static final int LEAST_RUNGS = 3;
 
@@ -52,6 +55,14 @@ public final class Settling implements Check {
         }
         List<LadderRow> usable = evidence.usableRungsOf(mode);
         if (usable.size() < LEAST_RUNGS) {
+            double limit = AMPLIFIED * evidence.noiseShare() / Math.sqrt(evidence.spectrum().modes().get(mode - 1).energyShare());
+            double[] upset = found.stream().mapToDouble(row -> row.noise().rate()).filter(change -> change > Math.max(limit, Evidence.USABLE)).sorted()
+                    .toArray();
+            if (upset.length >= LEAST_RUNGS) {
+                return new Finding(mode, id(), upset[upset.length / 2], threshold, false, String.format(Locale.ROOT, "As much noise again, %.2g of the"
+                        + " signal, changes its rate by %.3g of its size on %d of %d rungs: the data do not determine it.", evidence.noiseShare(),
+                        upset[upset.length / 2], upset.length, found.size()));
+            }
             return new Finding(mode, id(), Double.NaN, threshold, false, "Only on " + usable.size() + " of " + found.size()
                     + " rungs does noise of the size found in the data leave it as it is.");
         }

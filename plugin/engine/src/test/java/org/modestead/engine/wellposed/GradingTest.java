@@ -43,7 +43,7 @@ class GradingTest {
         FittedOperator operator = Motions.fit(Motions.snapshots(1, 1, List.of(run), List.of()), new LinearEstimator(), 1);
         Spectrum spectrum = SpectrumExtractor.extract(operator, org.modestead.engine.Progress.NONE);
         return new Evidence(operator, spectrum, List.of(1), List.of(), ModalExpansion.of(operator.chosen()), List.of(1.0),
-                List.of(1.0), List.of(0.0), List.of(0.0), List.of(0), heldOut, 10, JudgeSettings.DEFAULT);
+                List.of(1.0), List.of(1.0), List.of(0.0), List.of(0.0), List.of(0), List.of(false), 0.01, heldOut, 10, JudgeSettings.DEFAULT);
     }
 
     private static Mode mode(double share, boolean constant) {

@@ -50,7 +50,22 @@ class NormTrendTest {
     }
 
     @Test
-    void theFactorIsTheLastOverTheFirstOfTheLastThree() {
-        assertEquals(25, NormTrend.of(List.of(1.0, 2.0, 10.0, 50.0), 3).factor(), 1e-12);
+    void theFactorIsThatOfTheLastThirdOverTheFirst() {
+        assertEquals(50, NormTrend.of(List.of(1.0, 2.0, 10.0, 50.0), 3).factor(), 1e-12);
+        assertEquals(2, NormTrend.of(List.of(1.0, 4.0, 7.0, 7.0, 2.0, 8.0), 3).factor(), 1e-12, "geometric means 2 and 4");
+    }
+
+    @Test
+    void jaggedGrowthOverTheWholeLadderIsGrowth() {
+        // the Hopf flow off its cycle in the space of exp(x·y), where no eigenfunction is entire
+        assertTrue(growing(2.97, 2.82, 6.6, 5.0, 9.0, 21.0, 16.6, 24.5, 67.0, 227.0, 390.0, 244.0));
+        // x' of a sheared flow: two modes cross on the way and the norm returns
+        assertFalse(growing(4.46, 4.88, 4.74, 4.74, 7.98, 10.7, 10.7, 8.6, 8.1, 7.2, 5.1, 4.55));
+    }
+
+    @Test
+    void whatHasComeToRestNoLongerRises() {
+        assertFalse(NormTrend.of(List.of(3.0, 4.0, 4.19, 4.195, 4.2), 3).rising());
+        assertTrue(NormTrend.of(List.of(3.8, 4.22, 4.22, 4.59), 3).rising());
     }
 }
