@@ -52,7 +52,7 @@ public record Evidence(
     private static final double STILL_NORM = 1.005;
 
     static final double USABLE = 0.25;
-    private static final double GOOD = 0.05;
+    static final double GOOD = 0.05;
     private static final double TWICE = 2;
 
     /** How many rungs at the top of a mode's ladder are looked at. */

@@ -10,10 +10,13 @@ import org.modestead.engine.spectrum.Mode;
  * From findings to a grade. The order matters: evidence against a mode is taken before the lack of evidence for it.
  *
  * <ol>
- * <li>the space norm grows from rung to rung, or the residual stays above its threshold: absent
- * <li>a cluster of eigenvalues with one eigenfunction, or rate or weight keep changing: drifts
- * <li>too few rungs, nothing held out, too small a share captured, or another step disagrees: undecided
- * <li>overlap with other modes, joint and solo weights differ, or the space does not hold the signal: settles
+ * <li>the space norm grows from rung to rung, or the residual stays above its threshold on every rung: absent
+ * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a likeness whose norm still rises, or rate or
+ *     weight keep changing: drifts
+ * <li>too few rungs, nothing held out, a fitted rank that does not show the mode as it is, too small a share captured, or another step
+ *     disagrees: undecided
+ * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not hold
+ *     the signal: settles
  * <li>otherwise: stands
  * </ol>
  *
@@ -67,6 +70,8 @@ final class Grading {
             case SETTLES -> {
                 failed(findings, mode, "eigenfunction-overlap").ifPresent(out::add);
                 failed(findings, mode, "joint-solo-gap").ifPresent(out::add);
+                failed(findings, mode, "noise-sensitivity").ifPresent(out::add);
+                failed(findings, mode, "close-residual").ifPresent(out::add);
                 failed(findings, 0, "signal-in-space").ifPresent(out::add);
             }
             default -> throw new IllegalArgumentException(grade.word());

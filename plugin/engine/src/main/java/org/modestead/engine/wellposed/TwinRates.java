@@ -20,8 +20,8 @@ import org.modestead.engine.recording.StateRun;
  */
 record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Complex rateTwo, Complex overlap) {
 
-    /** Overlap of unit eigenfunctions from which on they may be halves of a defective one. */
-    static final double PARALLEL = 0.5;
+    /** Overlap of unit eigenfunctions below which they are hardly halves of a defective one. */
+    static final double PARALLEL = 0.25;
 
     private static final double HALF = 0.5;
 

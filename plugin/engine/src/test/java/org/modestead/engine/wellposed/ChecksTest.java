@@ -97,7 +97,7 @@ class ChecksTest {
     @Test
     void idsAreUniqueAndEveryCheckIsFoundByTheServiceLoader() {
         List<String> ids = ServiceLoader.load(Check.class).stream().map(p -> p.get().id()).toList();
-        assertEquals(19, ids.size());
+        assertEquals(21, ids.size());
         assertEquals(ids.size(), ids.stream().distinct().count());
         assertTrue(ids.stream().allMatch(id -> id.matches("[a-z]+(-[a-z]+)*")), ids.toString());
     }

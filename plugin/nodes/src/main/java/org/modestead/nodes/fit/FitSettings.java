@@ -9,6 +9,7 @@ import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.ExtrapolatedEstimator;
 import org.modestead.engine.operator.InputUse;
 import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.LinearEstimator;
@@ -31,6 +32,7 @@ final class FitSettings {
 
     static final String ESTIMATOR = "estimator";
     static final String NOISE_CORRECTION = "noise-correction";
+    private static final String EXTRAPOLATION = "extrapolation";
     static final String INPUTS = "inputs";
     static final String STRUCTURE = "structure";
     static final String NONE = "none";
@@ -80,13 +82,15 @@ final class FitSettings {
         return new Setting.Choice(new Common(NOISE_CORRECTION, "Noise correction", "Operator", "Noise makes least squares"
                 + " report too much damping, the more the weaker the signal. A correction takes that bias away where noise"
                 + " is white and of the same size in all prepared channels; estimates scatter a little more. It depends on"
-                + " the rank: a rank above that of the signal fits noise. Needs a ridge of 0.")
-                .when(ESTIMATOR, "linear"), List.of(
+                + " the rank: a rank above that of the signal fits noise. Needs a ridge of 0."), List.of(
                 new Option("none", "None", "Least squares: right for clean samples."),
                 new Option("total-least-squares", "Total least squares", "Noise in the earlier and in the later state alike"
-                        + " is projected out."),
+                        + " is projected out. Linear operator only."),
                 new Option("forward-backward", "Forward and backward", "The mean of the step forward and the inverted step"
-                        + " backward: noise shrinks both alike, so the shrinkage cancels.")),
+                        + " backward: noise shrinks both alike, so the shrinkage cancels. Linear operator only."),
+                new Option(EXTRAPOLATION, "Extrapolation", "The level of the noise is measured, as much again is added, and what"
+                        + " that changes in the averages is taken off. For every operator; channels may carry noise of different"
+                        + " size. Not beside separated inputs.")),
                 "none");
     }
 
@@ -209,9 +213,18 @@ final class FitSettings {
         };
     }
 
+    private static boolean extrapolated(Settings settings) {
+        return correction(settings) == NoiseCorrection.EXTRAPOLATION;
+    }
+
     private static Estimator free(Settings settings, Optional<Kernel> kernel) {
+        Estimator plain = plain(settings, kernel);
+        return extrapolated(settings) ? new ExtrapolatedEstimator(plain) : plain;
+    }
+
+    private static Estimator plain(Settings settings, Optional<Kernel> kernel) {
         return switch (settings.text(ESTIMATOR)) {
-            case "linear" -> new LinearEstimator(1, correction(settings), inputUse(settings));
+            case "linear" -> new LinearEstimator(1, extrapolated(settings) ? NoiseCorrection.NONE : correction(settings), inputUse(settings));
             case DICTIONARY -> new DictionaryEstimator(dictionary(settings), 1, inputUse(settings));
             case "kernel-step" -> new KernelStepEstimator(needed(settings, kernel), settings.whole("landmarks"));
             case "generator" -> new OccupationEstimator(needed(settings, kernel), segments(settings), 1);
@@ -224,6 +237,7 @@ final class FitSettings {
         return switch (settings.text(NOISE_CORRECTION)) {
             case "total-least-squares" -> NoiseCorrection.TOTAL_LEAST_SQUARES;
             case "forward-backward" -> NoiseCorrection.FORWARD_BACKWARD;
+            case EXTRAPOLATION -> NoiseCorrection.EXTRAPOLATION;
             default -> NoiseCorrection.NONE;
         };
     }
@@ -275,7 +289,12 @@ final class FitSettings {
         if (List.of(GENERATORS).contains(settings.text(ESTIMATOR)) && settings.whole(SEGMENT) == 1) {
             problems.add(new SettingProblem(SEGMENT, "pieces of one step", "give at least 2 steps, or 0 for whole runs"));
         }
-        boolean corrected = settings.text(ESTIMATOR).equals("linear") && correction(settings) != NoiseCorrection.NONE;
+        NoiseCorrection correction = correction(settings);
+        boolean corrected = correction != NoiseCorrection.NONE;
+        if (corrected && correction != NoiseCorrection.EXTRAPOLATION && !settings.text(ESTIMATOR).equals("linear")) {
+            problems.add(new SettingProblem(NOISE_CORRECTION, settings.text(NOISE_CORRECTION) + " with the operator " + settings.text(ESTIMATOR),
+                    "choose extrapolation, which every operator can do, or none"));
+        }
         if (corrected && settings.number(RIDGE) > 0) {
             problems.add(new SettingProblem(RIDGE, "a ridge beside the noise correction " + settings.text(NOISE_CORRECTION)
                     + ", which it would undo", "set the ridge to 0, or the noise correction to none"));

@@ -194,7 +194,8 @@ class FitNodesTest {
     @ParameterizedTest
     @CsvSource({"none, linear least squares in delay coordinates",
         "total-least-squares, linear total least squares in delay coordinates",
-        "forward-backward, linear least squares forward and backward in delay coordinates"})
+        "forward-backward, linear least squares forward and backward in delay coordinates",
+        "extrapolation, 'linear least squares in delay coordinates, extrapolated to no noise'"})
     void theNoiseCorrectionReachesTheFitAndItsDescription(String correction, String method) {
         NodeResult fitted = fit(Map.of("noise-correction", correction), false);
         assertEquals(method, Steps.column(fitted, "fit", "value").get(1));
@@ -205,8 +206,19 @@ class FitNodesTest {
     void aRidgeBesideANoiseCorrectionIsToldBeforeRunningAndOnlyWhereItCounts() {
         Map<String, Object> both = Map.of("noise-correction", "total-least-squares", "ridge", 0.1);
         assertEquals("ridge", Steps.check("operator-fitter", both).get(0).key());
-        assertEquals(List.of(), Steps.check("operator-fitter", Map.of("noise-correction", "total-least-squares",
-                "ridge", 0.1, "estimator", "dictionary")));
+        assertEquals(List.of(), Steps.check("operator-fitter", Map.of("ridge", 0.1, "estimator", "dictionary")));
+    }
+
+    @Test
+    void onlyTheExtrapolationSuitsEveryOperator() {
+        for (String correction : List.of("total-least-squares", "forward-backward")) {
+            assertEquals("noise-correction", Steps.check("operator-fitter", Map.of("noise-correction", correction, "estimator",
+                    "dictionary")).get(0).key());
+        }
+        for (String estimator : List.of("dictionary", "kernel-step", "generator")) {
+            NodeResult fitted = fit(Map.of("noise-correction", "extrapolation", "estimator", estimator), true);
+            assertTrue(((FittedOperator) fitted.outputs().get("operator")).method().endsWith(", extrapolated to no noise"));
+        }
     }
 
     @ParameterizedTest
