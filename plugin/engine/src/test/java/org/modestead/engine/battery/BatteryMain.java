@@ -1,6 +1,5 @@
 package org.modestead.engine.battery;
 
-import java.util.ArrayList;
 import java.util.List;
 
 /**
@@ -19,15 +18,12 @@ public final class BatteryMain {
     }
 
     static String run(int seeds, boolean listed) {
-        List<Trial.Outcome> outcomes = new ArrayList<>();
-        for (Trial trial : Battery.trials(seeds)) {
-            outcomes.add(trial.judge());
-        }
+        List<Trial.Outcome> outcomes = Battery.trials(seeds).parallelStream().map(Trial::judge).toList();
         StringBuilder out = new StringBuilder();
         if (listed) {
             outcomes.stream().filter(outcome -> !outcome.right()).forEach(outcome -> out.append(outcome).append(System.lineSeparator()));
         }
         Confusion confusion = new Confusion(outcomes);
-        return out + confusion.byCase() + confusion.report();
+        return out + confusion.byCase() + confusion.report() + confusion.summary();
     }
 }

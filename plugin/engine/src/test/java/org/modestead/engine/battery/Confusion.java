@@ -11,16 +11,40 @@ import org.modestead.engine.wellposed.Grade;
 /** Verdict wanted against verdict given, counted. */
 record Confusion(List<Trial.Outcome> outcomes) {
 
-    /** The whole report: both halves, each by noise and by number of runs. */
+    /** The whole report: both parts, each by noise and by number of runs. */
     String report() {
         StringBuilder out = new StringBuilder();
         for (boolean calibrating : new boolean[] {true, false}) {
             List<Trial.Outcome> half = outcomes.stream().filter(o -> o.trial().truth().calibrates() == calibrating).toList();
-            String name = calibrating ? "calibration half" : "reporting half";
+            String name = calibrating ? "calibration part" : "reporting part";
             split(out, half, name, "noise", o -> o.trial().noise());
             split(out, half, name, "runs", o -> o.trial().runs());
         }
         return out.toString();
+    }
+
+    /** Shares of right verdicts as a table for the README: by noise, each by number of runs. */
+    String summary() {
+        StringBuilder out = new StringBuilder(String.format(Locale.ROOT, "%n| part | noise |"));
+        Set<Integer> runs = new LinkedHashSet<>(outcomes.stream().map(o -> o.trial().runs()).toList());
+        runs.forEach(count -> out.append(' ').append(count).append(" runs |"));
+        out.append(String.format(Locale.ROOT, " all | `stands` without a mode |%n|---|---:|")).append("---:|".repeat(runs.size() + 2));
+        for (boolean calibrating : new boolean[] {true, false}) {
+            for (double noise : new LinkedHashSet<>(outcomes.stream().map(o -> o.trial().noise()).toList())) {
+                List<Trial.Outcome> row = outcomes.stream().filter(o -> o.trial().truth().calibrates() == calibrating
+                        && o.trial().noise() == noise).toList();
+                out.append(String.format(Locale.ROOT, "%n| %s | %.1f %% |", calibrating ? "calibration" : "reporting", 100 * noise));
+                runs.forEach(count -> out.append(String.format(Locale.ROOT, " %.1f %% |", right(row.stream().filter(o ->
+                        o.trial().runs() == count).toList()))));
+                out.append(String.format(Locale.ROOT, " %.1f %% | %d of %d |", right(row), row.stream().filter(Trial.Outcome::falseReport).count(),
+                        row.stream().filter(o -> o.trial().truth().truth().forbidsReport()).count()));
+            }
+        }
+        return out.append(System.lineSeparator()).toString();
+    }
+
+    private static double right(List<Trial.Outcome> part) {
+        return 100.0 * part.stream().filter(Trial.Outcome::right).count() / part.size();
     }
 
     /** One line a case, one column a noise level, one sign a trial (runs, then seeds); a dot where the verdict is right. */

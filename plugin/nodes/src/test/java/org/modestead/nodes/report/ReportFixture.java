@@ -28,6 +28,7 @@ import org.modestead.engine.wellposed.Finding;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.LadderRow;
 import org.modestead.engine.wellposed.ModeVerdict;
+import org.modestead.engine.wellposed.NoiseEffect;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
@@ -85,8 +86,8 @@ public final class ReportFixture {
                 new Finding(2, "settling", 0.7, 0.05, false, "the weight doubled"));
         List<LadderRow> ladder = new ArrayList<>();
         for (int rank : new int[] {8, 4, 6}) {
-            ladder.add(new LadderRow(rank, 1, new Complex(-0.17, 9.55), 1, 1, 1.1, 0.1 / rank, 0.01));
-            ladder.add(new LadderRow(rank, 2, new Complex(-0.5, 0), 1, rank, Double.NaN, 0, 0.01));
+            ladder.add(new LadderRow(rank, 1, new Complex(-0.17, 9.55), 1, 1, 1.1, 0.1 / rank, 0.1 / rank, 0, 0, NoiseEffect.NONE));
+            ladder.add(new LadderRow(rank, 2, new Complex(-0.5, 0), 1, rank, Double.NaN, 0, 0, 0, 0, NoiseEffect.NONE));
         }
         return new Verdict(modes.get(first.compareTo(Grade.DRIFTS) > 0 ? 0 : 1), modes, findings, ladder,
                 List.of(new Doubt("few-runs", "only one run was recorded")));
