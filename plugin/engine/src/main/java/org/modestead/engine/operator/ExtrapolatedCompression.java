@@ -5,7 +5,8 @@ import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.basis.FunctionBasis;
 
 /**
- * A compression whose action is extrapolated to no noise once it is written in orthonormal functions; the four arrays are those of the data.
+ * A compression whose action is extrapolated to no noise once it is written in orthonormal functions; the four arrays are those of the
+ * data.
  *
  * @param plain as the data give it
  * @param noise finds what noise adds to the moments of given functions

@@ -5,9 +5,11 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * How differently nearly equal states go on: of every sample and the one before it, the nearest other such pair is looked for (channels in units of
+ * How differently nearly equal states go on: of every sample and the one before it, the nearest other such pair is looked for (channels
+ * in units of
  * their spread), and the samples that follow both are compared. Motion that obeys a rule takes neighbours to neighbours, noise of standard
- * deviation σ sets them apart by {@code √2 σ}, so {@code median |difference| / (0.6745 √2)} bounds σ from above where samples are too far apart in time for
+ * deviation σ sets them apart by {@code √2 σ}, so {@code median |difference| / (0.6745 √2)} bounds σ from above where samples are too far
+ * apart in time for
  * a smooth curve through them.
  *
  * <p>The idea of the Gamma test, Stefánsson, Končar and Jones, Neural Comput. Appl. 5:131, 1997, at the first neighbour (from memory).

@@ -9,7 +9,8 @@ import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.spectrum.ModalExpansion;
 
 /**
- * All eigenfunctions of one rate. Where several independent ones share it (a resonance: a rate that is the sum of others), each single one is an
+ * All eigenfunctions of one rate. Where several independent ones share it (a resonance: a rate that is the sum of others), each single
+ * one is an
  * arbitrary choice, and only what the space as a whole does to the signal has a meaning:
  *
  * <pre>

@@ -89,7 +89,8 @@ public record Evidence(
     }
 
     /**
-     * Returns those of them on which the mode moves by its own rule on the judging runs: to 5 % once the noise is taken off, or about as well as
+     * Returns those of them on which the mode moves by its own rule on the judging runs: to 5 % once the noise is taken off, or about as
+     * well as
      * on any rung. Lower ranks lack functions it needs, higher ones fit noise.
      */
     public List<LadderRow> goodRungsOf(int mode) {
@@ -110,7 +111,8 @@ public record Evidence(
     }
 
     /**
-     * Returns the rung on which orthogonality is read: the highest telling one on which noise changes the norm by no more than half a per cent, or
+     * Returns the rung on which orthogonality is read: the highest telling one on which noise changes the norm by no more than half a per
+     * cent, or
      * the one on which it changes it least; the fitted rank where none is telling.
      */
     LadderRow clearestOf(int mode) {

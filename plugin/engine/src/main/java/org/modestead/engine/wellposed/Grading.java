@@ -11,11 +11,13 @@ import org.modestead.engine.spectrum.Mode;
  *
  * <ol>
  * <li>the space norm grows from rung to rung, or the residual stays above its threshold on every rung: absent
- * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a likeness whose norm still rises, or rate or
+ * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a likeness whose norm still rises, or
+ * rate or
  *     weight keep changing: drifts
  * <li>too few rungs, nothing held out, a fitted rank that does not show the mode as it is, too small a share captured, or another step
  *     disagrees: undecided
- * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not hold
+ * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not
+ * hold
  *     the signal: settles
  * <li>otherwise: stands
  * </ol>

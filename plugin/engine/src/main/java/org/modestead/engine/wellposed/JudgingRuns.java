@@ -44,7 +44,8 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
     }
 
     /**
-     * The same with copies of the runs that carry as much noise again, in pairs with opposite signs, so that what is odd in the noise cancels.
+     * The same with copies of the runs that carry as much noise again, in pairs with opposite signs, so that what is odd in the noise
+     * cancels.
      *
      * @param operator that was judged
      * @param noise its level

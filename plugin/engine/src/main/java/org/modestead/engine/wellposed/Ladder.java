@@ -24,7 +24,8 @@ import org.modestead.engine.spectrum.TrainingSample;
  * The operator at nested ranks: does a mode stay what it is when functions join? Modes of neighbouring rungs are matched
  * by optimal assignment on {@code |λ - λ'|/scale + 1 - |<φ, φ'>| + |w - w'|/(2 max(w, w'))}, outwards from the fitted rank.
  *
- * <p>Unless its top is set, the ladder climbs on above the fitted rank as far as rounding allows. Where noise takes over is told rung by rung
+ * <p>Unless its top is set, the ladder climbs on above the fitted rank as far as rounding allows. Where noise takes over is told rung by
+ * rung
  * and mode by mode, see {@link NoiseEffect}.
  *
  * @param rungs by rising rank, at least one

@@ -4,7 +4,8 @@ import java.util.ArrayList;
 import java.util.List;
 
 /**
- * Whether a sequence of norms over the rungs is bounded or grows without bound. Every second rung may repeat the one before (motion with a symmetry)
+ * Whether a sequence of norms over the rungs is bounded or grows without bound. Every second rung may repeat the one before (motion with
+ * a symmetry)
  * and single rungs may jump, so thirds of the ladder are compared by their geometric means.
  *
  * <p>Growing means that the last third exceeds the first by more than a factor, or that the three last distinct values rise by more than

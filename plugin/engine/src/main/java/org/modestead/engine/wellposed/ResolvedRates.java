@@ -5,7 +5,8 @@ import org.modestead.engine.Progress;
 import org.modestead.engine.spectrum.Mode;
 
 /**
- * Whether the judging runs tell a mode from half of a defective one: where noise splits a multiple rate with one eigenfunction, two modes with
+ * Whether the judging runs tell a mode from half of a defective one: where noise splits a multiple rate with one eigenfunction, two modes
+ * with
  * nearly the same function and nearly the same rate appear, or a slow oscillation, and neither is there; see {@link TwinRates}. What
  * rounding splits is found by {@link ClusteredEigenvalues} already.
  */

@@ -10,7 +10,8 @@ import org.modestead.engine.spectrum.Mode;
 
 /**
  * Whether rate and weight of a mode stop changing as functions join: how far they are, on the last four telling rungs, from those of the
- * last one, the worst of four left out (where two modes cross on the ladder, one rung may show neither). A change that noise of the data's own size
+ * last one, the worst of four left out (where two modes cross on the ladder, one rung may show neither). A change that noise of the
+ * data's own size
  * makes as well does not count as one. A mode that is not found on the rungs next to the fitted rank counts as changed altogether (1).
  *
  * <p>Where no function is left to join, because the fitted rank takes in all the data hold, the ladder has no upper part and

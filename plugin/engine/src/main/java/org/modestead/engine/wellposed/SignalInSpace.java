@@ -9,8 +9,10 @@ import org.modestead.engine.operator.InnerProduct;
 
 /**
  * Whether the state's coordinates belong to the kernel's space. Where they do not (Gaussian, Laplacian, Matérn: no polynomial
- * and no constant), no finite sum of eigenfunctions of the space can be the signal, and its weights are those of an imitation on the sampled region.
- * On a set that the motion never leaves, a likeness may still belong to the space (the coordinates on a circle do); then the norm of a mode comes to rest
+ * and no constant), no finite sum of eigenfunctions of the space can be the signal, and its weights are those of an imitation on the
+ * sampled region.
+ * On a set that the motion never leaves, a likeness may still belong to the space (the coordinates on a circle do); then the norm of a
+ * mode comes to rest
  * on the ladder. Where it comes to rest the mode may settle, but orthogonality in the norm of the space is no evidence. Where it keeps
  * rising, or cannot be followed, the weights are no more than a projection's.
  */

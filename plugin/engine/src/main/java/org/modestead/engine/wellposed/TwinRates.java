@@ -15,7 +15,8 @@ import org.modestead.engine.recording.StateRun;
  *   one rate:   e_1 -> e^(λ τ) e_1       e_2 -> e^(λ τ) (e_2 + (λ_2 - λ_1) (c/s) τ e_1)
  * </pre>
  *
- * <p>Both are held against the judging runs, over one step and up to half their length or the time in which the pair fades. λ is λ_1, λ_2 or their mean, whichever
+ * <p>Both are held against the judging runs, over one step and up to half their length or the time in which the pair fades. λ is λ_1, λ_2
+ * or their mean, whichever
  * misses least.
  */
 record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Complex rateTwo, Complex overlap) {
@@ -74,8 +75,10 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
     }
 
     /**
-     * Whether as much noise again changes the squared difference of the rates by more than half, so that noise may have made all of it, while
-     * their mean stays. (Where it moves the mean as far as the rates lie apart, two independent functions share one rate, and their split is
+     * Whether as much noise again changes the squared difference of the rates by more than half, so that noise may have made all of it,
+     * while
+     * their mean stays. (Where it moves the mean as far as the rates lie apart, two independent functions share one rate, and their split
+     * is
      * no more than that.)
      */
     private boolean splitByNoise(List<Rung> noisier) {

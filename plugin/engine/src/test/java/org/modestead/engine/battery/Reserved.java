@@ -34,7 +34,8 @@ final class Reserved {
     }
 
     /**
-     * Normal with rates -0.25 ± 1.4i; diagonal with rates -0.5, -1.3 (no rate is a sum of others up to degree 2); upper triangular with left
+     * Normal with rates -0.25 ± 1.4i; diagonal with rates -0.5, -1.3 (no rate is a sum of others up to degree 2); upper triangular with
+     * left
      * eigenvectors (1, 1) of -0.6 and (0, 1) of -1.7, overlap 0.71. As in {@link LinearFlows}. The Gaussian space
      * holds no mode that decays: near the fixed point an analytic eigenfunction of these rates is a polynomial.
      */
@@ -140,7 +141,8 @@ final class Reserved {
     }
 
     /**
-     * Van der Pol at mu = 0.5 (odd harmonics fall faster than at 1). Duffing x'' + x + x³ = 0 (C2.6): the period runs from 5.77 at amplitude 0.5 to 3.2 at 2;
+     * Van der Pol at mu = 0.5 (odd harmonics fall faster than at 1). Duffing x'' + x + x³ = 0 (C2.6): the period runs from 5.77 at
+     * amplitude 0.5 to 3.2 at 2;
      * at amplitudes up to 0.05 the frequency varies by {@code 3/8 · 0.05² = 1e-3}. Lotka-Volterra, y0 = 2.
      */
     private static void oscillators(List<Case> out) {

@@ -49,7 +49,8 @@ class NoiseMomentsTest {
 
     @Test
     void theBiasOfALinearFitIsTakenOff() {
-        // least squares: multiplier divided by 1 + σ²/s², here a rate too low by about σ²/(s² Δt) = 0.0004/(0.05 0.05) = 0.16, s² = mean square of the fading channel
+        // least squares: multiplier divided by 1 + σ²/s², here a rate too low by about σ²/(s² Δt) = 0.0004/(0.05 0.05) = 0.16, s² = mean
+        // square of the fading channel
         double plain = bias(new LinearEstimator(), 2);
         double corrected = bias(new ExtrapolatedEstimator(new LinearEstimator()), 2);
         assertTrue(plain < -0.1, "least squares is biased: " + plain);
