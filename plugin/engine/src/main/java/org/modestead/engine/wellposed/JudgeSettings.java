@@ -3,13 +3,13 @@ package org.modestead.engine.wellposed;
 /**
  * Thresholds of the checks. Every one is a setting with a documented default.
  *
- * @param ladderFrom lowest rank of the ladder, 0 = half the fitted rank, at least 2
- * @param ladderTo highest rank of the ladder, 0 = the fitted rank plus half of it where the data support that, less where
- *     noise takes over
+ * @param ladderFrom lowest rank of the ladder, 0 = 2
+ * @param ladderTo highest rank of the ladder, 0 = three times the fitted rank, at least ten more, as far as rounding allows
  * @param shareThreshold energy share from which a mode counts for the overall verdict, in (0, 1); default 0.05
- * @param residualThreshold largest holdout residual of a mode, in (0, 1]; default 0.25
- * @param settleThreshold largest relative change of rate or weight over the last rungs, in (0, 1]; default 0.1
- * @param normGrowthThreshold largest factor by which the space norm may grow over the last three rungs, above 1; default 3
+ * @param residualThreshold largest holdout residual of a mode, noise taken off, in (0, 1]; default 0.25
+ * @param settleThreshold largest relative difference of rate or weight between the last telling rungs, in (0, 1]; default 0.1
+ * @param normGrowthThreshold largest factor by which the space norm may grow from the first third of the ladder to the last, above 1;
+ *     default 3
  * @param overlapThreshold largest overlap |&lt;φ, φ'&gt;| of unit eigenfunctions for {@code stands}, in (0, 1); default 0.1
  * @param gapThreshold largest relative difference of joint and solo weights for {@code stands}, in (0, 1); default 0.1
  * @param captureThreshold least share of the signal that the eigenfunctions must hold, in (0, 1); default 0.5

@@ -34,18 +34,18 @@ final class JudgeNodeSettings {
     /** Returns the settings in dialog order. */
     static List<Setting> declared() {
         return List.of(
-                rank(LADDER_FROM, "Lowest rank", "Rank of the lowest rung; 0 takes half the fitted rank.",
+                rank(LADDER_FROM, "Lowest rank", "Rank of the lowest rung; 0 takes 2.",
                         DEFAULT.ladderFrom()),
-                rank(LADDER_TO, "Highest rank", "Rank of the highest rung; 0 takes the fitted rank and half of it more,"
-                        + " as far as the data support that, and ends earlier where noise takes over.", DEFAULT.ladderTo()),
+                rank(LADDER_TO, "Highest rank", "Rank of the highest rung; 0 takes three times the fitted rank,"
+                        + " at least ten more, as far as rounding allows. Rungs that noise spoils are told by the check itself and do not count.", DEFAULT.ladderTo()),
                 share(SHARE, "Share that counts", "Share of the signal from which a mode enters the overall verdict.",
                         DEFAULT.shareThreshold()),
                 share(RESIDUAL, "Largest residual", "Largest relative amount by which an eigenfunction may miss its own"
-                        + " law on data the fit never saw. Raise it for noisy recordings.", DEFAULT.residualThreshold()),
-                share(SETTLE, "Largest change on the ladder", "Largest relative change of a rate or weight over the"
-                        + " last rungs for a mode that has settled.", DEFAULT.settleThreshold()),
+                        + " law on data the fit never saw, once the noise that is found in the data has been taken off.", DEFAULT.residualThreshold()),
+                share(SETTLE, "Largest change on the ladder", "Largest relative difference of a rate or weight between"
+                        + " the last rungs that tell of a mode, for one that has settled, and the most that noise may change it for one that stands.", DEFAULT.settleThreshold()),
                 above(NORM_GROWTH, "Largest growth of the norm", "Largest factor by which the norm of an eigenfunction"
-                        + " in the space may grow over the last three rungs; beyond it the function only imitates an"
+                        + " in the space may grow from the first third of the ladder to the last; beyond it the function only imitates an"
                         + " eigenfunction on the sampled region.", DEFAULT.normGrowthThreshold()),
                 share(OVERLAP, "Largest overlap", "Largest overlap of unit eigenfunctions, 0 for orthogonal ones and 1"
                         + " for equal ones, for a mode that stands on its own.", DEFAULT.overlapThreshold()),
