@@ -48,8 +48,8 @@ public record Evidence(
     /** A norm that noise of the data's own size changes by more than this factor is not looked at. */
     static final double NOISY_NORM = 1.05;
 
-    /** A norm that noise changes by less than this factor moves an overlap by less than 0.1. */
-    private static final double STILL_NORM = 1.005;
+    /** A norm that noise changes by less than this factor moves an overlap by less than half of 0.1: a part of size b lengthens by b²/2. */
+    private static final double STILL_NORM = 1.001;
 
     static final double USABLE = 0.25;
     static final double GOOD = 0.05;
@@ -111,15 +111,20 @@ public record Evidence(
     }
 
     /**
-     * Returns the rung on which orthogonality is read: the highest telling one on which noise changes the norm by no more than half a per
-     * cent, or
-     * the one on which it changes it least; the fitted rank where none is telling.
+     * Returns the rung on which orthogonality is read: the highest telling one before noise begins to change the norm by more than a tenth of a
+     * per cent, or the one on which it changes it least; the fitted rank where none is telling.
      */
     LadderRow clearestOf(int mode) {
         List<LadderRow> rows = tellingRungsOf(mode);
-        List<LadderRow> still = rows.stream().filter(row -> row.noise().norm() <= STILL_NORM).toList();
+        List<LadderRow> still = clear(rows, row -> row.noise().norm() <= STILL_NORM);
         return still.isEmpty() ? rows.stream().min(java.util.Comparator.comparingDouble(row -> row.noise().norm())).orElseGet(() -> fittedOf(mode))
                 : still.get(still.size() - 1);
+    }
+
+    /** Returns the highest rung that tells of a mode; the fitted rank where none does. */
+    LadderRow lastTellingOf(int mode) {
+        List<LadderRow> rows = tellingRungsOf(mode);
+        return rows.isEmpty() ? fittedOf(mode) : rows.get(rows.size() - 1);
     }
 
     /** Returns the row of a mode at the fitted rank. */

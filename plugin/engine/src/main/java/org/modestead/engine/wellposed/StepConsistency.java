@@ -16,7 +16,7 @@ import org.modestead.engine.spectrum.Mode;
 /**
  * Rates must not depend on the step of the fit: the operator is fitted again with twice the step (a generator with
  * segments twice as long, or half where the runs are too short) and the rates of the carrying modes are compared, on the highest rung
- * of the ladder that noise leaves alone for all of them.
+ * of the ladder that tells of all of them.
  * Disagreement means aliasing, too coarse a step, or motion that is not forward complete. Modes above the sampling limit
  * of the longer step are not compared.
  */
@@ -33,7 +33,7 @@ public final class StepConsistency implements Check {
         if (other.isEmpty()) {
             return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "The runs are too short to fit a second step."));
         }
-        int rank = evidence.carrying().mapToInt(mode -> evidence.clearestOf(mode.number()).rank()).min().orElse(evidence.operator().rank());
+        int rank = evidence.carrying().mapToInt(mode -> evidence.lastTellingOf(mode.number()).rank()).min().orElse(evidence.operator().rank());
         ModalExpansion expansion;
         try {
             OrthonormalCompression again = Ridge.apply(other.get().compress(evidence.operator().snapshots(), progress)
