@@ -24,9 +24,8 @@ public final class PredictionError {
     /**
      * @param rank with the smallest error
      * @param error relative, 0 is perfect, 1 no better than the mean
-     * @param persistence error of predicting no change
      */
-    record Best(int rank, double error, double persistence) {}
+    record Best(int rank, double error) {}
 
     static Best bestRank(OrthonormalCompression compression, List<StateRun> runs, Progress progress) {
         List<Integer> ranks = IntStream.rangeClosed(1, compression.rank()).boxed().toList();
@@ -42,7 +41,7 @@ public final class PredictionError {
         while (!(errors[best] <= NO_BETTER * least)) {
             best++;
         }
-        return new Best(best + 1, errors[best], persistence(runs));
+        return new Best(best + 1, errors[best]);
     }
 
     /** Errors of predicting the state half a run ahead, where spurious modes have had time to grow; 0 where inputs drive it on the way. */
@@ -96,7 +95,7 @@ public final class PredictionError {
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
                 OrthonormalCompression rung = compression.leading(ranks.get(k));
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run)), rung.observable());
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), 1), rung.observable());
                 DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - 1, 0, rung.rank());
                 errors[k] += squaredDistance(Matrices.product(now, carried), next);
             }
@@ -130,7 +129,7 @@ public final class PredictionError {
             for (int i = 0; i < runs.size(); i++) {
                 StateRun run = runs.get(i);
                 DMatrixRMaj weights = Matrices.block(rung.observable(), 0, rank, 0, channels);
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run)), weights);
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), 1), weights);
                 DMatrixRMaj predicted = Matrices.product(Matrices.block(functions.get(i), 0, run.count() - 1, 0, rank), carried);
                 DMatrixRMaj next = compression.signalAhead(run);
                 for (int k = 0; k < predicted.getNumElements(); k++) {
@@ -145,26 +144,8 @@ public final class PredictionError {
         return least;
     }
 
-    private static double persistence(List<StateRun> runs) {
-        double squared = 0;
-        double spread = 0;
-        for (StateRun run : runs) {
-            squared += squaredDistance(Matrices.block(run.states(), 0, run.count() - 1, 0, run.states().numCols), later(run));
-            spread += squaredSpread(later(run));
-        }
-        return Math.sqrt(squared / spread);
-    }
-
-    private static DMatrixRMaj later(StateRun run) {
-        return Matrices.block(run.states(), 1, run.count(), 0, run.states().numCols);
-    }
-
     private static double meanStep(StateRun run) {
         return (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
-    }
-
-    private static DMatrixRMaj propagator(OrthonormalCompression rung, double step) {
-        return rung.evolution() instanceof Evolution.StepMap ? rung.action() : MatrixExponential.of(Matrices.scaled(rung.action(), step));
     }
 
     private static double squaredDistance(DMatrixRMaj a, DMatrixRMaj b) {

@@ -18,7 +18,6 @@ final class NearestStates {
 
     private static final int MOST = 1500;
     private static final int ASKED = 300;
-    private static final double MEDIAN_OF_NORMAL = 0.6744897501960817;
 
     private NearestStates() {}
 
@@ -49,7 +48,7 @@ final class NearestStates {
         for (int c = 0; c < n; c++) {
             int channel = c;
             double[] sorted = differences.stream().mapToDouble(d -> d[channel]).sorted().toArray();
-            out[c] = sorted[sorted.length / 2] / (MEDIAN_OF_NORMAL * Math.sqrt(2));
+            out[c] = sorted[sorted.length / 2] / (SampleNoise.MEDIAN_OF_NORMAL * Math.sqrt(2));
         }
         return out;
     }

@@ -10,8 +10,7 @@ import org.ejml.data.DMatrixRMaj;
  * Standard deviation of the noise on single samples, one a channel: what a cubic through two neighbours on either side misses
  * of a sample, {@code e_k = y_k - Σ w_j y_j}, divided by {@code √(1 + Σ w_j²)} and averaged robustly (median of {@code |e|} over 0.6745).
  * Smooth motion leaves next to nothing, so the figure is an upper bound that is close where the sampling is fine. Where it is coarse,
- * {@link NearestStates} bounds it closer. A further upper
- * bound is what the best one-step prediction of runs not fitted misses, since no prediction foresees noise; the lower of both counts.
+ * {@link NearestStates} bounds it closer. A further upper bound is what the best one-step prediction of runs not fitted misses, since no prediction foresees noise; the lower of both counts.
  *
  * <p>Differencing after Gasser, Sroka and Jennen-Steinmetz, Biometrika 73:625, 1986 (there with a line, here with a cubic; formula from
  * memory).
@@ -21,7 +20,9 @@ import org.ejml.data.DMatrixRMaj;
 public record SampleNoise(double[] deviations) {
 
     private static final int NEIGHBOURS = 2;
-    private static final double MEDIAN_OF_NORMAL = 0.6744897501960817;
+
+    /** Median of |x| for x normal with standard deviation 1. */
+    static final double MEDIAN_OF_NORMAL = 0.6744897501960817;
 
     /**
      * Measures it on all runs that fit or judge.
@@ -82,8 +83,7 @@ public record SampleNoise(double[] deviations) {
 
     /**
      * Returns copies of snapshots whose training runs carry as much noise again, in pairs with opposite signs, so that what is odd in the
-     * noise
-     * shows, or cancels.
+     * noise shows, or cancels.
      *
      * @param snapshots not written
      * @param pairs number of pairs

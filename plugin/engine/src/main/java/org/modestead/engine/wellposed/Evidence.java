@@ -90,8 +90,7 @@ public record Evidence(
 
     /**
      * Returns those of them on which the mode moves by its own rule on the judging runs: to 5 % once the noise is taken off, or about as
-     * well as
-     * on any rung. Lower ranks lack functions it needs, higher ones fit noise.
+     * well as on any rung. Lower ranks lack functions it needs, higher ones fit noise.
      */
     public List<LadderRow> goodRungsOf(int mode) {
         List<LadderRow> usable = usableRungsOf(mode);

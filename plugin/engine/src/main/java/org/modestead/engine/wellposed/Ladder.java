@@ -25,8 +25,7 @@ import org.modestead.engine.spectrum.TrainingSample;
  * by optimal assignment on {@code |λ - λ'|/scale + 1 - |<φ, φ'>| + |w - w'|/(2 max(w, w'))}, outwards from the fitted rank.
  *
  * <p>Unless its top is set, the ladder climbs on above the fitted rank as far as rounding allows. Where noise takes over is told rung by
- * rung
- * and mode by mode, see {@link NoiseEffect}.
+ * rung and mode by mode, see {@link NoiseEffect}.
  *
  * @param rungs by rising rank, at least one
  * @param rows every mode of the spectrum on every rung where it was found, and as mode 0 the strongest of every rung
@@ -56,33 +55,50 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         SampleNoise noise = SampleNoise.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
                 unjudged.runs(), unjudged.functions(), ranks, sample.channels()));
         JudgingRuns judging = unjudged.with(operator, noise);
-        List<OrthonormalCompression> noisier = noisierFits(operator, noise, ranks.get(ranks.size() - 1), progress);
+        List<NoisierFit> noisier = noisierFits(operator, noise, ranks.get(ranks.size() - 1), sample, progress);
         List<Rung> rungs = new ArrayList<>();
         List<List<NoiseEffect>> effects = new ArrayList<>();
         List<Double> normEffects = new ArrayList<>();
+        List<Boolean> twins = List.of();
         for (int rank : ranks) {
             progress.checkCancelled();
             progress.report((double) rungs.size() / ranks.size(), "ladder, rank " + rank);
             Rung rung = Rung.of(operator.compression().leading(rank), sampled, sample, judging);
             rungs.add(rung);
-            List<Rung> others = noisier.stream().filter(fit -> fit.rank() >= rank).map(fit -> Rung.fitted(fit.leading(rank), sample)).toList();
+            List<Rung> others = noisier.stream().filter(fit -> fit.compression().rank() >= rank).map(fit -> fit.rung(rank, sample)).toList();
+            if (rank == operator.rank()) {
+                twins = TwinRates.twins(rung, judging, others);
+            }
             effects.add(NoiseEffect.of(rung, others, sample.longest()));
             normEffects.add(others.stream().mapToDouble(o -> NoiseEffect.factor(rung.carryingNorm(), o.carryingNorm())).max().orElse(1));
         }
         int fitted = ranks.indexOf(operator.rank());
-        List<Boolean> twins = TwinRates.twins(rungs.get(fitted), judging, noisier.stream().filter(fit -> fit.rank() >= operator.rank())
-                .map(fit -> Rung.fitted(fit.leading(operator.rank()), sample)).toList());
+        List<Boolean> byPart = twins;
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
-                normEffects, spectrum.modes().stream().map(mode -> twins.get(partOf(rungs.get(fitted), mode))).toList(), noise.shareOf(operator.snapshots()),
+                normEffects, spectrum.modes().stream().map(mode -> byPart.get(partOf(rungs.get(fitted), mode))).toList(), noise.shareOf(operator.snapshots()),
                 sample.longest());
     }
 
+    /**
+     * The operator fitted to noisier runs.
+     *
+     * @param compression up to the top of the ladder
+     * @param sampled its functions at the sampled training states
+     */
+    private record NoisierFit(OrthonormalCompression compression, DMatrixRMaj sampled) {
+
+        Rung rung(int rank, TrainingSample sample) {
+            return Rung.fitted(compression.leading(rank), sampled, sample);
+        }
+    }
+
     /** The operator fitted twice more, to training runs with as much noise again; what cannot be fitted is left out. */
-    private static List<OrthonormalCompression> noisierFits(FittedOperator operator, SampleNoise noise, int rank, Progress progress) {
-        List<OrthonormalCompression> out = new ArrayList<>();
+    private static List<NoisierFit> noisierFits(FittedOperator operator, SampleNoise noise, int rank, TrainingSample sample, Progress progress) {
+        List<NoisierFit> out = new ArrayList<>();
         for (Snapshots noisier : noise.disturbed(operator.snapshots(), 1, SEED)) {
             try {
-                out.add(Ridge.apply(operator.estimator().compress(noisier, progress).whiten(rank), operator.ridge()));
+                OrthonormalCompression fit = Ridge.apply(operator.estimator().compress(noisier, progress).whiten(rank), operator.ridge());
+                out.add(new NoisierFit(fit, fit.evaluate(sample.states())));
             } catch (FitFault fault) {
                 progress.checkCancelled();
             }

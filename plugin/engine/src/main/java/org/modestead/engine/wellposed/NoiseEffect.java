@@ -59,8 +59,13 @@ public record NoiseEffect(double rate, double weight, double norm) {
     }
 
     static double weight(Rung.Part a, Rung.Part b) {
-        double size = Math.max(a.weight(), b.weight());
-        return size == 0 ? 0 : Math.abs(a.weight() - b.weight()) / size;
+        return relativeDifference(a.weight(), b.weight());
+    }
+
+    /** Returns the difference of two sizes over the larger; 0 where both vanish. */
+    static double relativeDifference(double a, double b) {
+        double size = Math.max(a, b);
+        return size == 0 ? 0 : Math.abs(a - b) / size;
     }
 
     /** Returns the larger of the changes of rate and weight. */

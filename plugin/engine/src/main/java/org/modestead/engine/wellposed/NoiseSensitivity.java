@@ -7,8 +7,7 @@ import org.modestead.engine.spectrum.Mode;
 
 /**
  * How well noise of the data's own size lets rate and weight of a mode be known, see {@link NoiseEffect}, on the rung it is judged on. A
- * mode whose
- * figures it moves by more than they must settle to may be reported, but it does not stand.
+ * mode whose figures it moves by more than they must settle to may be reported, but it does not stand.
  */
 public final class NoiseSensitivity implements Check {
 

@@ -65,10 +65,10 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
     }
 
     /** The same without judging: no residuals, no captured share. */
-    static Rung fitted(OrthonormalCompression compression, TrainingSample sample) {
+    static Rung fitted(OrthonormalCompression compression, DMatrixRMaj sampled, TrainingSample sample) {
         ModalExpansion expansion = ModalExpansion.of(compression);
         double[] unjudged = new double[expansion.rank()];
-        List<Part> parts = parts(expansion, compression.evaluate(sample.states()), sample,
+        List<Part> parts = parts(expansion, sampled, sample,
                 java.util.Collections.nCopies(expansion.rank(), Residuals.Pair.UNKNOWN), unjudged);
         return new Rung(expansion, parts, carryingNorm(parts), Double.NaN);
     }

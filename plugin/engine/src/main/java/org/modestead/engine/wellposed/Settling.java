@@ -91,9 +91,8 @@ public final class Settling implements Check {
     private static double distance(List<LadderRow> rows, double longest, boolean ofRate) {
         LadderRow last = rows.get(rows.size() - 1);
         double[] distances = rows.subList(0, rows.size() - 1).stream().mapToDouble(row -> {
-            double size = Math.max(row.weight(), last.weight());
             double change = ofRate ? Ladder.relativeChange(row.rate(), last.rate(), longest)
-                    : size == 0 ? 0 : Math.abs(last.weight() - row.weight()) / size;
+                    : NoiseEffect.relativeDifference(row.weight(), last.weight());
             double noise = ofRate ? Math.max(row.noise().rate(), last.noise().rate()) : Math.max(row.noise().weight(), last.noise().weight());
             return change <= noise ? 0 : change;
         }).sorted().toArray();

@@ -16,8 +16,7 @@ import org.modestead.engine.recording.StateRun;
  * </pre>
  *
  * <p>Both are held against the judging runs, over one step and up to half their length or the time in which the pair fades. λ is λ_1, λ_2
- * or their mean, whichever
- * misses least.
+ * or their mean, whichever misses least.
  */
 record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Complex rateTwo, Complex overlap) {
 
@@ -76,10 +75,8 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
 
     /**
      * Whether as much noise again changes the squared difference of the rates by more than half, so that noise may have made all of it,
-     * while
-     * their mean stays. (Where it moves the mean as far as the rates lie apart, two independent functions share one rate, and their split
-     * is
-     * no more than that.)
+     * while their mean stays. (Where it moves the mean as far as the rates lie apart, two independent functions share one rate, and their split
+     * is no more than that.)
      */
     private boolean splitByNoise(List<Rung> noisier) {
         Complex now = rateOne.minus(rateTwo);
