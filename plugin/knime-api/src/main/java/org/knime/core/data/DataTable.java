@@ -1,0 +1,6 @@
+package org.knime.core.data;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public interface DataTable {
+    DataTableSpec getDataTableSpec();
+}

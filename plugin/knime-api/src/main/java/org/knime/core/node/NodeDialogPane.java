@@ -1,0 +1,46 @@
+package org.knime.core.node;
+
+import java.awt.Component;
+import javax.swing.JPanel;
+import org.knime.core.node.port.PortObjectSpec;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public abstract class NodeDialogPane {
+    protected NodeDialogPane() {
+        throw new UnsupportedOperationException();
+    }
+
+    public final JPanel getPanel() {
+        throw new UnsupportedOperationException();
+    }
+
+    protected final void addTab(final String title, final Component component) {
+        throw new UnsupportedOperationException();
+    }
+
+    protected final void addTab(final String title, final Component component, final boolean wrapInScrollPane) {
+        throw new UnsupportedOperationException();
+    }
+
+    protected void loadSettingsFrom(final NodeSettingsRO settings, final PortObjectSpec[] specs) throws NotConfigurableException {
+        throw new UnsupportedOperationException();
+    }
+
+    protected abstract void saveSettingsTo(NodeSettingsWO settings) throws InvalidSettingsException;
+
+    public void onOpen() {
+        throw new UnsupportedOperationException();
+    }
+
+    public void onClose() {
+        throw new UnsupportedOperationException();
+    }
+
+    public void onCancel() {
+        throw new UnsupportedOperationException();
+    }
+
+    public boolean closeOnESC() {
+        throw new UnsupportedOperationException();
+    }
+}

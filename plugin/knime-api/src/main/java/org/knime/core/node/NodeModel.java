@@ -1,0 +1,34 @@
+package org.knime.core.node;
+
+import java.io.File;
+import java.io.IOException;
+import org.knime.core.node.port.PortObject;
+import org.knime.core.node.port.PortObjectSpec;
+import org.knime.core.node.port.PortType;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public abstract class NodeModel implements AbstractNodeView.ViewableModel {
+    protected NodeModel(final PortType[] inPortTypes, final PortType[] outPortTypes) {
+        throw new UnsupportedOperationException();
+    }
+
+    protected abstract void loadInternals(File folder, ExecutionMonitor exec) throws IOException, CanceledExecutionException;
+
+    protected abstract void saveInternals(File folder, ExecutionMonitor exec) throws IOException, CanceledExecutionException;
+
+    protected abstract void saveSettingsTo(NodeSettingsWO settings);
+
+    protected abstract void validateSettings(NodeSettingsRO settings) throws InvalidSettingsException;
+
+    protected abstract void loadValidatedSettingsFrom(NodeSettingsRO settings) throws InvalidSettingsException;
+
+    protected abstract void reset();
+
+    protected final void pushFlowVariableDouble(final String name, final double value) {
+        throw new UnsupportedOperationException();
+    }
+
+    protected final void pushFlowVariableInt(final String name, final int value) {
+        throw new UnsupportedOperationException();
+    }
+}
