@@ -1,0 +1,47 @@
+package org.modestead.knime.table;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.knime.core.data.DataColumnSpec;
+import org.knime.core.data.DataColumnSpecCreator;
+import org.knime.core.data.DataTableSpec;
+import org.knime.core.data.DataType;
+import org.knime.core.data.def.BooleanCell;
+import org.knime.core.data.def.DoubleCell;
+import org.knime.core.data.def.LongCell;
+import org.knime.core.data.def.StringCell;
+import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.TableSchema;
+
+/** Column names and types of tables, from the platform's to the nodes' and back. */
+public final class TableSpecs {
+
+    private TableSpecs() {}
+
+    /** Returns the columns that the nodes can read; others are left out, as if they were not there. */
+    public static TableSchema schema(DataTableSpec spec) {
+        List<Column> columns = new ArrayList<>();
+        for (DataColumnSpec column : spec) {
+            CellTypes.kind(column.getType()).ifPresent(kind -> columns.add(new Column(column.getName(), kind)));
+        }
+        return new TableSchema(columns);
+    }
+
+    /** Returns the platform's spec for a table of the nodes. */
+    public static DataTableSpec spec(TableSchema schema) {
+        return new DataTableSpec(schema.columns().stream()
+                .map(column -> new DataColumnSpecCreator(column.name(), type(column.type())).createSpec())
+                .toArray(DataColumnSpec[]::new));
+    }
+
+    private static DataType type(CellType kind) {
+        return switch (kind) {
+            case DOUBLE -> DoubleCell.TYPE;
+            case LONG -> LongCell.TYPE;
+            case TEXT -> StringCell.TYPE;
+            case FLAG -> BooleanCell.TYPE;
+            case DATE, DATE_TIME, ZONED_DATE_TIME -> TimeCells.type(kind).orElse(StringCell.TYPE);
+        };
+    }
+}
