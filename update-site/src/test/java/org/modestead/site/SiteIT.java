@@ -86,7 +86,7 @@ class SiteIT {
         }
         assertEquals(new TreeSet<>(List.of("artifacts.jar", "content.jar", "features/org.modestead.feature",
                 "plugins/" + ENGINE, "plugins/" + NODES, "plugins/org.ejml.core", "plugins/org.ejml.ddense", "plugins/org.ejml.zdense",
-                "plugins/org.jgrapht.core", "plugins/org.jheaps", "plugins/org.apfloat", "plugins/org.knowm.xchart", "plugins/de.erichseifert.vectorgraphics2d")), found);
+                "plugins/org.jgrapht.core", "plugins/org.jheaps", "plugins/org.apfloat", "plugins/com.fasterxml.jackson.core.jackson-core", "plugins/org.knowm.xchart", "plugins/de.erichseifert.vectorgraphics2d")), found);
     }
 
     @Test
@@ -103,7 +103,8 @@ class SiteIT {
 
     /** The root pom and libraries.target both name versions. */
     @ParameterizedTest
-    @ValueSource(strings = {"org.ejml.core", "org.ejml.ddense", "org.ejml.zdense", "org.jgrapht.core", "org.jheaps", "org.apfloat", "org.knowm.xchart", "de.erichseifert.vectorgraphics2d"})
+    @ValueSource(strings = {"org.ejml.core", "org.ejml.ddense", "org.ejml.zdense", "org.jgrapht.core", "org.jheaps", "org.apfloat",
+            "com.fasterxml.jackson.core.jackson-core", "org.knowm.xchart", "de.erichseifert.vectorgraphics2d"})
     void librariesHaveTheVersionsThatTheTestsRanWith(String library) {
         assertEquals(new Version(System.getProperty(library)), BUNDLES.get(library).getVersion());
     }

@@ -40,7 +40,13 @@ class ArchitectureTest {
     @Test
     void nodesKnowNoHostAndNoneOfItsLibraries() {
         noClasses().that().resideInAPackage(NODES).should().dependOnClassesThat().resideInAnyPackage(HOST, "org.duckdb..",
-                "com.fasterxml..", "picocli..", "java.sql..", "javax.swing..").check(classes);
+                "com.fasterxml.jackson.databind..", "picocli..", "java.sql..", "javax.swing..").check(classes);
+    }
+
+    @Test
+    void onlyModelFilesOfTheNodesKnowJson() {
+        noClasses().that().resideInAPackage(NODES).and().resideOutsideOfPackage("org.modestead.nodes.modelfile..")
+                .should().dependOnClassesThat().resideInAPackage("com.fasterxml..").check(classes);
     }
 
     @Test

@@ -3,7 +3,6 @@ package org.modestead.engine.basis;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
 
 /**
@@ -15,11 +14,12 @@ import org.modestead.engine.FitFault;
  *
  * @param degree d, at least 1
  */
-record MonomialDictionary(int degree) implements Dictionary {
+public record MonomialDictionary(int degree) implements Dictionary {
 
     private static final long MOST = 5000;
 
-    MonomialDictionary {
+    /** Checks the range. */
+    public MonomialDictionary {
         if (degree < 1) {
             throw new FitFault("dictionary", "the degree is " + degree, "give a degree of at least 1");
         }
@@ -32,7 +32,7 @@ record MonomialDictionary(int degree) implements Dictionary {
 
     @Override
     public FunctionBasis on(int stateSize) {
-        return new Monomials(exponents(stateSize, "state components"), describe());
+        return new MonomialFunctions(exponents(stateSize, "state components"), describe());
     }
 
     /**
@@ -48,7 +48,7 @@ record MonomialDictionary(int degree) implements Dictionary {
                 terms.add(exponent);
             }
         }
-        return new Monomials(List.copyOf(terms), "input terms, " + describe());
+        return new MonomialFunctions(List.copyOf(terms), "input terms, " + describe());
     }
 
     private List<int[]> exponents(int size, String what) {
@@ -76,62 +76,6 @@ record MonomialDictionary(int degree) implements Dictionary {
             exponent[k]++;
             collect(exponent, k, rest - 1, out);
             exponent[k]--;
-        }
-    }
-
-    /**
-     * Monomials in a known number of variables.
-     *
-     * @param factors √(|α|!/α!), one a monomial
-     */
-    private record Monomials(List<int[]> exponents, double[] factors, String description) implements FunctionBasis {
-
-        Monomials(List<int[]> exponents, String description) {
-            this(exponents, exponents.stream().mapToDouble(Monomials::factor).toArray(), description);
-        }
-
-        /** As the root of a product of binomials. */
-        private static double factor(int[] exponent) {
-            double count = 1;
-            int total = 0;
-            for (int power : exponent) {
-                for (int k = 1; k <= power; k++) {
-                    total++;
-                    count = count * total / k;
-                }
-            }
-            return Math.sqrt(count);
-        }
-
-        @Override
-        public int size() {
-            return exponents.size();
-        }
-
-        @Override
-        public DMatrixRMaj evaluate(DMatrixRMaj states) {
-            DMatrixRMaj out = new DMatrixRMaj(states.numRows, size());
-            for (int i = 0; i < states.numRows; i++) {
-                for (int j = 0; j < size(); j++) {
-                    out.data[i * size() + j] = factors[j] * monomial(states, i, exponents.get(j));
-                }
-            }
-            return out;
-        }
-
-        private static double monomial(DMatrixRMaj states, int row, int[] exponent) {
-            double product = 1;
-            for (int k = 0; k < exponent.length; k++) {
-                for (int power = exponent[k]; power > 0; power--) {
-                    product *= states.data[row * states.numCols + k];
-                }
-            }
-            return product;
-        }
-
-        @Override
-        public String describe() {
-            return size() + " " + description;
         }
     }
 }

@@ -40,7 +40,11 @@ public final class Steps {
 
     /** Returns a node's table as texts, one list a row. */
     public static List<List<String>> texts(NodeResult result, String port) {
-        Table table = (Table) result.outputs().get(port);
+        return texts((Table) result.outputs().get(port));
+    }
+
+    /** Returns a table as texts, one list a row. */
+    public static List<List<String>> texts(Table table) {
         List<List<String>> rows = new ArrayList<>();
         try (RowCursor cursor = table.open()) {
             while (cursor.next()) {
