@@ -1,0 +1,8 @@
+package org.knime.core.node.workflow;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public class ConnectionContainer {
+    ConnectionContainer() {
+        throw new UnsupportedOperationException();
+    }
+}

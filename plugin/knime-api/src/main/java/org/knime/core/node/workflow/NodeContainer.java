@@ -1,0 +1,26 @@
+package org.knime.core.node.workflow;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public abstract class NodeContainer {
+    public final NodeID getID() {
+        throw new UnsupportedOperationException();
+    }
+
+    public final NodeMessage getNodeMessage() {
+        throw new UnsupportedOperationException();
+    }
+
+    public NodeContainerState getNodeContainerState() {
+        throw new UnsupportedOperationException();
+    }
+
+    public void setUIInformation(final NodeUIInformation uiInformation) {
+        throw new UnsupportedOperationException();
+    }
+
+    public abstract String getName();
+
+    public abstract NodeOutPort getOutPort(int index);
+
+    public abstract int getNrOutPorts();
+}

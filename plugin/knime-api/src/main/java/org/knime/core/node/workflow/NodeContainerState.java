@@ -1,0 +1,12 @@
+package org.knime.core.node.workflow;
+
+/** Signatures of the platform's public interface of this name; no behaviour. */
+public interface NodeContainerState {
+    boolean isIdle();
+
+    boolean isConfigured();
+
+    boolean isExecuted();
+
+    boolean isExecutionInProgress();
+}

@@ -1,0 +1,5 @@
+package org.knime.core.node.workflow;
+
+/** Signatures of the platform's public interface of this name; no behaviour. */
+public interface NodePort {
+}
