@@ -60,7 +60,7 @@ public record FieldsReader(String path, Stored.Fields fields) {
     public <E extends Enum<E>> E choice(String name, Class<E> type) {
         String word = text(name);
         return Arrays.stream(type.getEnumConstants()).filter(one -> FieldsWriter.word(one).equals(word)).findFirst()
-                .orElseThrow(() -> wrong(name, word, "one of "
+                .orElseThrow(() -> wrong(name, seen(new Stored.Text(word)), "one of "
                         + String.join(", ", Arrays.stream(type.getEnumConstants()).map(FieldsWriter::word).toList())));
     }
 

@@ -10,6 +10,7 @@ import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.util.ArrayList;
 import java.util.HashMap;
+import java.util.HexFormat;
 import java.util.List;
 import java.util.Map;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -97,7 +98,7 @@ class PortFilesTest {
     /** A file that says in what it differs. */
     private record HexFile(List<String> lines) {
         static HexFile of(PortType type, Object value) {
-            String hex = java.util.HexFormat.of().formatHex(written(type, value));
+            String hex = HexFormat.of().formatHex(written(type, value));
             List<String> lines = new ArrayList<>();
             for (int from = 0; from < hex.length(); from += 64) {
                 lines.add(hex.substring(from, Math.min(hex.length(), from + 64)));
