@@ -3,6 +3,7 @@ package org.knime.core.node;
 import java.awt.Component;
 import javax.swing.JPanel;
 import org.knime.core.node.port.PortObjectSpec;
+import org.knime.core.node.workflow.VariableType;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
 public abstract class NodeDialogPane {
@@ -27,6 +28,10 @@ public abstract class NodeDialogPane {
     }
 
     protected abstract void saveSettingsTo(NodeSettingsWO settings) throws InvalidSettingsException;
+
+    public FlowVariableModel createFlowVariableModel(final String[] keys, final VariableType<?> type) {
+        throw new UnsupportedOperationException();
+    }
 
     public void onOpen() {
         throw new UnsupportedOperationException();

@@ -1,0 +1,12 @@
+package org.knime.core.node.workflow;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public final class FlowVariable {
+    private FlowVariable() {
+        throw new UnsupportedOperationException();
+    }
+
+    public String getValueAsString() {
+        throw new UnsupportedOperationException();
+    }
+}

@@ -1,0 +1,2 @@
+/** The configuration dialog, made from a node's declaration. Only {@code DeclaredDialog} knows the platform. */
+package org.modestead.knime.dialog;
