@@ -20,6 +20,7 @@ import javax.swing.JScrollPane;
 import javax.swing.JTabbedPane;
 import javax.swing.JTextArea;
 import org.modestead.knime.columns.ColumnRules;
+import org.modestead.knime.swing.Sheet;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingProblem;

@@ -51,14 +51,13 @@ public final class FigureRenderer {
         if (!(scale > 0)) {
             throw new IllegalArgumentException("scale " + scale + " must be positive");
         }
-        Picture picture = picture(figure);
-        BufferedImage image = new BufferedImage((int) Math.round(picture.getWidth() * scale),
-                (int) Math.round(picture.getHeight() * scale),
+        Drawing drawing = drawing(figure);
+        BufferedImage image = new BufferedImage((int) Math.round(drawing.width() * scale),
+                (int) Math.round(drawing.height() * scale),
                 BufferedImage.TYPE_INT_RGB);
         Graphics2D graphics = image.createGraphics();
         graphics.setRenderingHint(RenderingHints.KEY_RENDERING, RenderingHints.VALUE_RENDER_QUALITY);
-        graphics.scale(scale, scale);
-        picture.paint(graphics, picture.getWidth(), picture.getHeight());
+        drawing.paint(graphics, scale);
         graphics.dispose();
         ByteArrayOutputStream bytes = new ByteArrayOutputStream();
         try {
@@ -67,6 +66,16 @@ public final class FigureRenderer {
             throw new UncheckedIOException("a figure could not be drawn in memory", e);
         }
         return bytes.toByteArray();
+    }
+
+    /**
+     * Prepares a figure for painting by Java 2D: what a view on a screen shows is what a file holds.
+     *
+     * @param figure what to draw
+     * @throws IllegalArgumentException if a layer does not fit the axes
+     */
+    public static Drawing drawing(Figure figure) {
+        return new Drawing(picture(figure));
     }
 
     private static Picture picture(Figure figure) {

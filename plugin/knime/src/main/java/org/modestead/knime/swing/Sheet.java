@@ -1,4 +1,4 @@
-package org.modestead.knime.dialog;
+package org.modestead.knime.swing;
 
 import java.awt.Dimension;
 import java.awt.GridBagConstraints;
@@ -13,7 +13,7 @@ import javax.swing.JScrollPane;
 import javax.swing.Scrollable;
 
 /** Things below each other, as wide as the window, scrolled up and down only. */
-final class Sheet extends JPanel implements Scrollable {
+public final class Sheet extends JPanel implements Scrollable {
     private static final long serialVersionUID = 1L;
     private static final int STEP = 24;
 
@@ -29,7 +29,7 @@ final class Sheet extends JPanel implements Scrollable {
     }
 
     /** Returns a pane that keeps the parts at the top and scrolls where they are more than fit. */
-    static JScrollPane scrolled(List<? extends JComponent> parts) {
+    public static JScrollPane scrolled(List<? extends JComponent> parts) {
         JScrollPane pane = new JScrollPane(new Sheet(parts), JScrollPane.VERTICAL_SCROLLBAR_AS_NEEDED,
                 JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
         pane.setBorder(BorderFactory.createEmptyBorder());

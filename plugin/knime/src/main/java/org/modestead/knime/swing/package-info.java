@@ -1,0 +1,2 @@
+/** What dialog and views share of Swing. */
+package org.modestead.knime.swing;
