@@ -1,6 +1,7 @@
 package org.modestead.nodes.contract;
 
 import org.modestead.engine.kernel.Kernel;
+import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Spectrum;
@@ -20,7 +21,9 @@ public enum PortType {
     /** Eigenvalues, eigenfunctions and weights. */
     SPECTRUM("Spectrum", Spectrum.class),
     /** Whether the modes exist. */
-    VERDICT("Verdict", Verdict.class);
+    VERDICT("Verdict", Verdict.class),
+    /** Operator, spectrum and verdict together, to go on elsewhere. */
+    MODEL("Model", Model.class);
 
     private final String title;
     private final Class<?> valueClass;

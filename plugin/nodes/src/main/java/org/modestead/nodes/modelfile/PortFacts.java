@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.modestead.engine.kernel.Kernel;
+import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
@@ -30,7 +31,10 @@ final class PortFacts {
         if (value instanceof Spectrum spectrum) {
             return spectrum(spectrum);
         }
-        return value instanceof Verdict verdict ? verdict(verdict) : List.of();
+        if (value instanceof Verdict verdict) {
+            return verdict(verdict);
+        }
+        return value instanceof Model model ? model(model) : List.of();
     }
 
     private static List<PortFact> snapshots(Snapshots snapshots) {
@@ -66,6 +70,17 @@ final class PortFacts {
         return List.of(new PortFact("overall", verdict.overall().grade().word()),
                 new PortFact("modes that count", Long.toString(verdict.modes().stream().filter(ModeVerdict::counts).count())),
                 new PortFact("sentence", verdict.overall().sentence()));
+    }
+
+    private static List<PortFact> model(Model model) {
+        List<PortFact> out = new ArrayList<>();
+        if (!model.name().isEmpty()) {
+            out.add(new PortFact("name", model.name()));
+        }
+        out.addAll(operator(model.operator()));
+        out.add(new PortFact("modes", Integer.toString(model.spectrum().modes().size())));
+        out.addAll(verdict(model.verdict()));
+        return out;
     }
 
     private static String labels(List<Channel> channels) {

@@ -7,9 +7,11 @@ import java.util.List;
 import java.util.Locale;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.modelfile.FieldsReader;
+import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
 import org.modestead.engine.modelfile.Stored;
 import org.modestead.engine.modelfile.StoredKernel;
+import org.modestead.engine.modelfile.StoredModel;
 import org.modestead.engine.modelfile.StoredOperator;
 import org.modestead.engine.modelfile.StoredSnapshots;
 import org.modestead.engine.modelfile.StoredSpectrum;
@@ -70,6 +72,7 @@ public final class PortFiles {
             case OPERATOR -> StoredOperator.of((FittedOperator) value);
             case SPECTRUM -> StoredSpectrum.of((Spectrum) value);
             case VERDICT -> StoredVerdict.of((Verdict) value);
+            case MODEL -> StoredModel.of((Model) value);
             case TABLE -> throw noTables();
         };
     }
@@ -81,6 +84,7 @@ public final class PortFiles {
             case OPERATOR -> StoredOperator.read(content);
             case SPECTRUM -> StoredSpectrum.read(content);
             case VERDICT -> StoredVerdict.read(content);
+            case MODEL -> StoredModel.read(content);
             case TABLE -> throw noTables();
         };
     }

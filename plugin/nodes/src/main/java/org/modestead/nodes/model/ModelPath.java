@@ -1,0 +1,91 @@
+package org.modestead.nodes.model;
+
+import java.io.BufferedInputStream;
+import java.io.BufferedOutputStream;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.OutputStream;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
+import org.modestead.engine.modelfile.Model;
+import org.modestead.engine.modelfile.ModelFileFault;
+import org.modestead.nodes.contract.PortType;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.modelfile.PortFiles;
+
+/**
+ * The file that a setting names.
+ *
+ * @param path absolute
+ * @param shown as the person wrote it
+ */
+record ModelPath(Path path, String shown) {
+
+    static final String SETTING = "file";
+    static final String EXTENSION = "zip";
+
+    static ModelPath of(Settings settings, RunContext context) {
+        String shown = settings.text(SETTING);
+        return new ModelPath(context.baseFolder().resolve(shown).toAbsolutePath().normalize(), shown);
+    }
+
+    /** @throws ModelFileFault if there is nothing to read */
+    void requireReadable() {
+        if (Files.isDirectory(path)) {
+            throw new ModelFileFault(shown, "this is a folder, not a file", "name a file in it");
+        }
+        if (!Files.exists(path)) {
+            throw new ModelFileFault(shown, "there is no such file", "name a file relative to the workflow's folder or with its full path");
+        }
+        if (!Files.isReadable(path)) {
+            throw new ModelFileFault(shown, "the file may not be read", "allow reading it");
+        }
+    }
+
+    /** @throws ModelFileFault if it cannot be written there */
+    void requireWritable() {
+        if (Files.isDirectory(path)) {
+            throw new ModelFileFault(shown, "this is a folder, not a file", "name a file in it");
+        }
+        Path folder = path.getParent();
+        while (folder != null && !Files.exists(folder)) {
+            folder = folder.getParent();
+        }
+        if (folder == null || !Files.isDirectory(folder) || !Files.isWritable(folder)) {
+            throw new ModelFileFault(shown, "nothing can be written in the folder " + folder, "allow writing there or choose another folder");
+        }
+    }
+
+    Model read() {
+        requireReadable();
+        try (InputStream in = new BufferedInputStream(Files.newInputStream(path))) {
+            return (Model) PortFiles.read(PortType.MODEL, in);
+        } catch (ModelFileFault fault) {
+            throw new ModelFileFault(shown + ", " + fault.where(), fault.seen(), fault.wanted());
+        } catch (IOException unreadable) {
+            throw new ModelFileFault(shown, "the file cannot be read (" + unreadable.getMessage() + ")", "see whether it opens elsewhere");
+        }
+    }
+
+    /** Writes beside the place and moves there in one step: one that was there before stays until then. */
+    void write(Model model) {
+        requireWritable();
+        Path part = path.resolveSibling("." + path.getFileName() + "." + ProcessHandle.current().pid() + ".part");
+        try {
+            Files.createDirectories(path.getParent());
+            try {
+                try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part))) {
+                    PortFiles.write(PortType.MODEL, model, out);
+                }
+                Files.move(part, path, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
+            } finally {
+                Files.deleteIfExists(part);
+            }
+        } catch (IOException unwritable) {
+            throw new ModelFileFault(shown, "the file cannot be written (" + unwritable.getMessage() + ")",
+                    "make room and allow writing, or choose another folder");
+        }
+    }
+}
