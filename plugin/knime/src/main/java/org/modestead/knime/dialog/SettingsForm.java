@@ -117,6 +117,9 @@ public final class SettingsForm {
         if (!tabbed()) {
             alignLabels();
         }
+        if (sections.isEmpty()) {
+            component.add(new JLabel("This node has nothing to set."), BorderLayout.LINE_START);
+        }
         component.add(tabbed() ? tabs : Sheet.scrolled(sections.stream().map(section -> section.lay(true)).toList()), BorderLayout.CENTER);
         if (tabbed()) {
             sections.forEach(section -> tabs.addTab(section.title(), Sheet.scrolled(List.of(section.lay(false)))));
