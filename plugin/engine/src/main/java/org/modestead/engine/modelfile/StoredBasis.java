@@ -134,36 +134,38 @@ final class StoredBasis {
                 .vectors("times", segments.stream().map(OccupationFunctions.Segment::times).toList())
                 .matrices("states", n, segments.stream().map(OccupationFunctions.Segment::states).toList())
                 .vectors("weights", segments.stream().map(OccupationFunctions.Segment::weights).toList())
-                .matrices("starts", n, segments.stream().map(segment -> DMatrixRMaj.wrap(1, n, segment.start())).toList())
-                .matrices("ends", n, segments.stream().map(segment -> DMatrixRMaj.wrap(1, n, segment.end())).toList())
+                .matrix("starts", rows(segments.stream().map(OccupationFunctions.Segment::start).toList()))
+                .matrix("ends", rows(segments.stream().map(OccupationFunctions.Segment::end).toList()))
                 .vector("run_weights", segments.stream().mapToDouble(OccupationFunctions.Segment::runWeight).toArray()).done();
+    }
+
+    private static DMatrixRMaj rows(List<double[]> rows) {
+        return new DMatrixRMaj(rows.toArray(double[][]::new));
+    }
+
+    private static double[] row(DMatrixRMaj a, int i) {
+        return Arrays.copyOfRange(a.data, i * a.numCols, (i + 1) * a.numCols);
     }
 
     private static List<OccupationFunctions.Segment> segments(FieldsReader in, int arguments) {
         List<double[]> times = in.vectors("times");
-        int count = times.size();
-        List<DMatrixRMaj> states = ofEach(in, "states", arguments, count);
+        List<DMatrixRMaj> states = in.matrices("states");
         List<double[]> weights = in.vectors("weights");
-        List<DMatrixRMaj> starts = ofEach(in, "starts", arguments, count);
-        List<DMatrixRMaj> ends = ofEach(in, "ends", arguments, count);
-        double[] runWeights = in.vector("run_weights", count);
+        int count = times.size();
+        if (count == 0 || states.size() != count || weights.size() != count) {
+            throw in.wrong("states", states.size() + " segments of states, " + weights.size() + " of weights", count + " of each");
+        }
         for (int i = 0; i < count; i++) {
             int samples = times.get(i).length;
-            if (weights.size() != count || weights.get(i).length != samples || states.get(i).numRows != samples || starts.get(i).numRows != 1
-                    || ends.get(i).numRows != 1) {
-                throw in.wrong("states", "segment " + i + " with pieces of other lengths", "as many weights and states as times");
+            if (weights.get(i).length != samples || states.get(i).numRows != samples || states.get(i).numCols != arguments) {
+                throw in.wrong("states", "segment " + i + " of another shape", samples + " states of " + arguments + " components with as many weights");
             }
         }
+        DMatrixRMaj starts = in.matrix("starts", count, arguments);
+        DMatrixRMaj ends = in.matrix("ends", count, arguments);
+        double[] runWeights = in.vector("run_weights", count);
         return IntStream.range(0, count).mapToObj(i -> new OccupationFunctions.Segment(times.get(i), states.get(i), weights.get(i),
-                starts.get(i).data, ends.get(i).data, runWeights[i])).toList();
-    }
-
-    private static List<DMatrixRMaj> ofEach(FieldsReader in, String name, int columns, int count) {
-        List<DMatrixRMaj> found = in.matrices(name);
-        if (count == 0 || found.size() != count || found.get(0).numCols != columns) {
-            throw in.wrong(name, found.size() + " segments", count + " of " + columns + " columns");
-        }
-        return found;
+                row(starts, i), row(ends, i), runWeights[i])).toList();
     }
 
     private static DMatrixRMaj columns(FieldsReader in, String name, int columns) {

@@ -197,7 +197,7 @@ class BrokenFilesTest {
 
     @Test
     void aKernelOfAnExtensionThatIsNotThereIsNamed() throws IOException {
-        byte[] bytes = PortFilesTest.written(PortType.KERNEL, StoredFits.SECTIONS.kernel(StoredFits.SECTIONS.snapshots()));
+        byte[] bytes = PortFilesTest.written(PortType.KERNEL, StoredFits.WEIGHTED_SECTIONS.kernel(StoredFits.WEIGHTED_SECTIONS.snapshots()));
         String changed = new String(bytes, StandardCharsets.ISO_8859_1);
         Map<String, byte[]> index = new LinkedHashMap<>();
         try (ZipInputStream zip = new ZipInputStream(new ByteArrayInputStream(bytes))) {
