@@ -1,7 +1,10 @@
 package org.modestead.nodes.contract;
 
+import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
+import java.util.Optional;
 import org.modestead.nodes.table.TableSchema;
 
 /**
@@ -36,6 +39,26 @@ public interface Node {
      */
     default Map<String, TableSchema> schemas(Map<String, TableSchema> inputs, Settings settings, RunContext context) {
         return Map.of();
+    }
+
+    /**
+     * Tells all that can be told of the outputs before running. A host that knows only tables calls {@link #schemas}; one whose typed
+     * ports carry an outlook calls this. Unless a node says otherwise, its values are made of the recording that its first input with
+     * an outlook is made of, and its tables have the columns that {@link #schemas} tells.
+     *
+     * @param inputs what is known of the connected inputs
+     * @param settings checked against the declaration
+     * @param context base folder of the workflow
+     * @return what is known of the outputs; tables with fixed columns ({@link Port#schema()}) need not be repeated
+     * @throws org.modestead.engine.Fault when it is already certain that {@link #run} must fail
+     */
+    default Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Map<String, Outlook> values = new HashMap<>();
+        Optional<Outlook> first = declaration().inputs().stream().map(port -> inputs.values().get(port.id()))
+                .filter(Objects::nonNull).findFirst();
+        first.ifPresent(outlook -> declaration().outputs().stream().filter(port -> port.type() != PortType.TABLE)
+                .forEach(port -> values.put(port.id(), outlook)));
+        return new Expected(schemas(inputs.tables(), settings, context), values);
     }
 
     /**

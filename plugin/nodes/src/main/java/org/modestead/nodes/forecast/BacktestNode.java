@@ -2,15 +2,19 @@ package org.modestead.nodes.forecast;
 
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.modestead.engine.forecast.BacktestResult;
 import org.modestead.engine.forecast.RollingOrigin;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.TimeAxis;
 import org.modestead.engine.wellposed.Verdict;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
@@ -68,6 +72,12 @@ public final class BacktestNode implements Node {
                 Left to itself the node judges the modes where the verdict lets them stand, the projection otherwise; \
                 both are scored. Where decisions on pressure, structures or grids hang on a forecast, keep the usual safety \
                 margins; local codes and licensed practice come first. Cost: one fit an origin.""";
+    }
+
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Optional<TimeAxis> time = Optional.ofNullable(inputs.values().get("snapshots")).flatMap(Outlook::time);
+        return new Expected(time.map(axis -> Map.of("errors", ForecastTables.errorColumns(axis))).orElse(Map.of()), Map.of());
     }
 
     @Override

@@ -3,16 +3,20 @@ package org.modestead.nodes.forecast;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.Forecaster;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.TimeAxis;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Verdict;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
@@ -73,6 +77,13 @@ public final class ForecastNode implements Node {
 
                 Where decisions on pressure, structures or grids hang on a forecast, keep the usual safety margins; local \
                 codes and licensed practice come first. Cost: starts times horizon times the square of the rank.""";
+    }
+
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Optional<TimeAxis> time = Optional.ofNullable(inputs.values().get("snapshots")).flatMap(Outlook::time);
+        return new Expected(time.map(axis -> Map.of("forecast", ForecastTables.forecastColumns(axis), "reconstruction",
+                ForecastTables.reconstructionColumns(axis))).orElse(Map.of()), Map.of());
     }
 
     @Override

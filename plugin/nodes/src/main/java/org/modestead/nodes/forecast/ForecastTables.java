@@ -24,11 +24,26 @@ final class ForecastTables {
 
     private ForecastTables() {}
 
-    static MemoryTable forecast(ForecastResult result, Snapshots snapshots) {
-        TableSchema schema = TableSchema.of(Column.text("run"), time("time", snapshots.time()), Column.text("channel"),
-                Column.number("value"),
+    /** Columns of the forecast of a recording with such times. */
+    static TableSchema forecastColumns(TimeAxis axis) {
+        return TableSchema.of(Column.text("run"), time("time", axis), Column.text("channel"), Column.number("value"),
                 Column.number("low"), Column.number("high"), Column.text("route"));
-        MemoryTable.Builder rows = MemoryTable.builder(schema, "forecast");
+    }
+
+    /** Columns of the reconstruction of a recording with such times. */
+    static TableSchema reconstructionColumns(TimeAxis axis) {
+        return TableSchema.of(Column.text("run"), time("time", axis), Column.text("channel"), Column.number("observed"),
+                Column.number("reconstructed"));
+    }
+
+    /** Columns of the errors of a backtest on a recording with such times. */
+    static TableSchema errorColumns(TimeAxis axis) {
+        return TableSchema.of(Column.text("method"), Column.text("run"), time("origin", axis), Column.number("horizon"),
+                Column.text("channel"), Column.number("error"));
+    }
+
+    static MemoryTable forecast(ForecastResult result, Snapshots snapshots) {
+        MemoryTable.Builder rows = MemoryTable.builder(forecastColumns(snapshots.time()), "forecast");
         List<String> channels = names(snapshots);
         for (ForecastRow row : result.forecast()) {
             rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
@@ -39,9 +54,7 @@ final class ForecastTables {
     }
 
     static MemoryTable reconstruction(ForecastResult result, Snapshots snapshots) {
-        TableSchema schema = TableSchema.of(Column.text("run"), time("time", snapshots.time()), Column.text("channel"),
-                Column.number("observed"), Column.number("reconstructed"));
-        MemoryTable.Builder rows = MemoryTable.builder(schema, "reconstruction");
+        MemoryTable.Builder rows = MemoryTable.builder(reconstructionColumns(snapshots.time()), "reconstruction");
         List<String> channels = names(snapshots);
         for (ReconstructionRow row : result.reconstruction()) {
             rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.observed(),
@@ -59,10 +72,7 @@ final class ForecastTables {
     }
 
     static MemoryTable errors(BacktestResult result, Snapshots snapshots) {
-        TableSchema schema = TableSchema.of(Column.text("method"), Column.text("run"),
-                time("origin", snapshots.time()), Column.number("horizon"), Column.text("channel"),
-                Column.number("error"));
-        MemoryTable.Builder rows = MemoryTable.builder(schema, "errors");
+        MemoryTable.Builder rows = MemoryTable.builder(errorColumns(snapshots.time()), "errors");
         List<String> channels = names(snapshots);
         for (ErrorRow row : result.errors()) {
             rows.row(row.method(), row.run(), cell(snapshots.time(), row.origin()), row.horizon(),

@@ -36,9 +36,14 @@ final class RecordedTime {
      * @param unit asked for; empty for days (dates) or seconds (date-times)
      */
     static RecordedTime of(CellType type, int column, String first, String unit) {
+        return new RecordedTime(type, column, axis(type, first, unit));
+    }
+
+    /** Returns the time axis of a column; the parameters are those of {@link #of}. */
+    static TimeAxis axis(CellType type, String first, String unit) {
         TimeAxis.Kind kind = kind(type, first);
         String base = kind == TimeAxis.Kind.DATE ? "d" : kind == TimeAxis.Kind.DATE_TIME ? "s" : "";
-        return new RecordedTime(type, column, new TimeAxis(kind, unit.isEmpty() ? base : unit));
+        return new TimeAxis(kind, unit.isEmpty() ? base : unit);
     }
 
     /** Returns what a column of a type holds; for text that is known from its first cell only. */

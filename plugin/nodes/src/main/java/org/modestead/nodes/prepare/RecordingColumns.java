@@ -5,10 +5,13 @@ import java.util.HashSet;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.modestead.engine.recording.Channel;
+import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.TableSchema;
@@ -62,6 +65,20 @@ record RecordingColumns(
                 .filter(column -> column.type().isNumber() && !taken.contains(column.name()))
                 .map(Column::name)
                 .toList();
+    }
+
+    /** Returns what is known of a recording made from such a table; the kind of times in a column of text is told by its cells only. */
+    Outlook outlook(TableSchema schema) {
+        List<String> known = channelColumns(schema);
+        return new Outlook(describe(known), describe(inputs), axis(schema));
+    }
+
+    private Optional<TimeAxis> axis(TableSchema schema) {
+        if (time.isEmpty()) {
+            return Optional.of(new TimeAxis(TimeAxis.Kind.NUMBER, timeUnit));
+        }
+        Optional<CellType> type = schema.columns().stream().filter(column -> column.name().equals(time)).map(Column::type).findFirst();
+        return type.filter(found -> found != CellType.TEXT).map(found -> RecordedTime.axis(found, "", timeUnit));
     }
 
     /** Returns columns of text that nobody named and that therefore take no part. */

@@ -8,10 +8,12 @@ import org.modestead.engine.Doubt;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.SnapshotBuilder;
 import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
@@ -74,6 +76,13 @@ public final class SnapshotBuilderNode implements Node {
         Optional.ofNullable(inputs.get(SnapshotSettings.TABLE))
                 .ifPresent(schema -> problems.addAll(SnapshotChecks.againstTable(schema, settings)));
         return problems;
+    }
+
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Optional<Outlook> outlook = Optional.ofNullable(inputs.tables().get(SnapshotSettings.TABLE))
+                .map(schema -> SnapshotSettings.columns(settings).outlook(schema));
+        return new Expected(Map.of(), outlook.map(found -> Map.of("snapshots", found)).orElse(Map.of()));
     }
 
     @Override
