@@ -5,7 +5,10 @@ import java.util.List;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
 
-/** The nodes that this platform is offered: all that are found, whichever bundle brings them. */
+/**
+ * The nodes that this platform is offered: all that are found, whichever bundle brings them. Nodes that read and write tables are the
+ * embedded host's own and not there: the platform has better ones.
+ */
 final class NodeOffer {
 
     private NodeOffer() {}

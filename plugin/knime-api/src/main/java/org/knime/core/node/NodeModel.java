@@ -31,4 +31,24 @@ public abstract class NodeModel implements AbstractNodeView.ViewableModel {
     protected final void pushFlowVariableInt(final String name, final int value) {
         throw new UnsupportedOperationException();
     }
+
+    protected PortObject[] execute(final PortObject[] inObjects, final ExecutionContext exec) throws Exception {
+        throw new UnsupportedOperationException();
+    }
+
+    protected PortObjectSpec[] configure(final PortObjectSpec[] inSpecs) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
+    protected void onDispose() {
+        throw new UnsupportedOperationException();
+    }
+
+    protected final void setWarningMessage(final String message) {
+        throw new UnsupportedOperationException();
+    }
+
+    protected final void pushFlowVariableString(final String name, final String value) {
+        throw new UnsupportedOperationException();
+    }
 }

@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.stream.Collectors;
 import org.knime.core.node.InvalidSettingsException;
+import org.modestead.knime.columns.ColumnRules;
 import org.modestead.nodes.contract.ColumnChecks;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
@@ -19,15 +20,19 @@ public final class CheckedSettings {
     private CheckedSettings() {}
 
     /**
-     * Checks each setting against its declaration.
+     * Resolves column rules and checks each setting against its declaration.
      *
      * @param node whose settings they are
      * @param raw as {@link NativeSettings#read} gives them
+     * @param inputs schemas of connected input tables, by port id, where known
      * @throws InvalidSettingsException with one sentence a problem
      */
-    public static Settings read(Node node, Map<String, Object> raw) throws InvalidSettingsException {
-        SettingsReader.Reading reading = SettingsReader.read(node, raw);
-        return reading.settings().orElseThrow(() -> refusal(node.declaration(), reading.problems()));
+    public static Settings read(Node node, Map<String, Object> raw, Map<String, TableSchema> inputs) throws InvalidSettingsException {
+        ColumnRules.Resolved resolved = ColumnRules.resolved(node.declaration(), raw, inputs);
+        refuse(node.declaration(), resolved.problems());
+        SettingsReader.Reading reading = SettingsReader.read(node, resolved.values());
+        refuse(node.declaration(), reading.problems());
+        return reading.settings().orElseThrow();
     }
 
     /**
@@ -41,14 +46,14 @@ public final class CheckedSettings {
         if (problems.isEmpty()) {
             problems.addAll(node.check(inputs, settings));
         }
-        if (!problems.isEmpty()) {
-            throw refusal(node.declaration(), problems);
-        }
+        refuse(node.declaration(), problems);
     }
 
-    private static InvalidSettingsException refusal(NodeDeclaration declaration, List<SettingProblem> problems) {
-        return new InvalidSettingsException(problems.stream().map(problem -> sentence(declaration, problem))
-                .collect(Collectors.joining("\n")));
+    static void refuse(NodeDeclaration declaration, List<SettingProblem> problems) throws InvalidSettingsException {
+        if (!problems.isEmpty()) {
+            throw new InvalidSettingsException(problems.stream().map(problem -> sentence(declaration, problem))
+                    .collect(Collectors.joining("\n")));
+        }
     }
 
     private static String sentence(NodeDeclaration declaration, SettingProblem problem) {

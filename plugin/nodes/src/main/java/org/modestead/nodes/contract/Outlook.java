@@ -3,6 +3,7 @@ package org.modestead.nodes.contract;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Snapshots;
@@ -32,6 +33,9 @@ public record Outlook(List<Channel> channels, List<Channel> inputs, Optional<Tim
     public static Optional<Outlook> of(Object value) {
         if (value instanceof Snapshots snapshots) {
             return Optional.of(new Outlook(snapshots.channels(), snapshots.inputs(), Optional.of(snapshots.time())));
+        }
+        if (value instanceof Model model) {
+            return of(model.operator());
         }
         return value instanceof FittedOperator operator ? of(operator.snapshots()) : Optional.empty();
     }

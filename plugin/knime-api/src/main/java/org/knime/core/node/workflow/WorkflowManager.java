@@ -101,4 +101,8 @@ public final class WorkflowManager extends NodeContainer {
     public int getNrOutPorts() {
         throw new UnsupportedOperationException();
     }
+
+    public WorkflowContext getContext() {
+        throw new UnsupportedOperationException();
+    }
 }
