@@ -18,6 +18,7 @@ import org.modestead.nodes.contract.SettingsReader;
 public final class Bench {
     private final NodeCatalog catalog = NodeCatalog.load(List.of(Node.class.getClassLoader()));
     private final Map<String, NodeResult> results = new LinkedHashMap<>();
+    private final Map<String, Map<String, Object>> given = new LinkedHashMap<>();
     private final Path folder;
 
     /** @param folder for what nodes write */
@@ -26,8 +27,7 @@ public final class Bench {
     }
 
     /**
-     * Runs the six main nodes, the comparison, the poles over the order, refined rates, a backtest and the report on a short recording
-     * of the invented pump house.
+     * Runs every node on a short recording of the invented pump house.
      */
     public static Bench pumpHouse(Path folder) {
         Bench bench = new Bench(folder);
@@ -48,6 +48,12 @@ public final class Bench {
                 "spectrum-extractor.spectrum"));
         Map<String, String> told = with(judged, "verdict", "wellposedness-checker.verdict");
         bench.run("forecast", Map.of("horizon", 3, "origin", "before-holdout"), told);
+        bench.run("backtest", Map.of("origins", 3, "refit", "never", "horizon", 2), judged);
+        Map<String, String> model = Map.of("operator", "operator-fitter.operator", "spectrum", "spectrum-extractor.spectrum", "verdict",
+                "wellposedness-checker.verdict");
+        bench.run("model-writer", Map.of("file", "pump-house.modestead", "name", "Pump house"), model);
+        bench.run("model-reader", Map.of("file", "pump-house.modestead"), Map.of());
+        bench.run("model-applier", Map.of(), Map.of("model", "model-reader.model", "snapshots", "snapshot-builder.snapshots"));
         bench.run("mode-report", Map.of("title", "Pump house"), with(with(with(told, "forecast", "forecast.forecast"), "reconstruction",
                 "forecast.reconstruction"), "scores", "forecast.scores"));
         return bench;
@@ -72,12 +78,18 @@ public final class Bench {
         links.forEach((port, from) -> inputs.put(port, value(from)));
         NodeResult result = node.run(new NodeInputs(inputs), settings, new RunContext(Progress.NONE, folder, folder));
         results.put(id, result);
+        given.put(id, stored);
         return result;
     }
 
     /** Returns the output {@code node.port} of a node that has run. */
     public Object value(String from) {
         return results.get(from.substring(0, from.indexOf('.'))).outputs().get(from.substring(from.indexOf('.') + 1));
+    }
+
+    /** Returns the settings that nodes ran with by node id. */
+    public Map<String, Map<String, Object>> settings() {
+        return given;
     }
 
     /** Returns the results so far by node id, in order. */
