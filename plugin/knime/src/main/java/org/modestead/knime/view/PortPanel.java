@@ -21,8 +21,8 @@ public final class PortPanel {
     public static JComponent of(String title, List<PortFact> facts) {
         JPanel panel = new JPanel(new BorderLayout());
         panel.setName(title);
-        panel.add(Sheet.scrolled(List.of(Texts.heading(title, true), GridTable.of(title, List.of("What", "Value"), List.of(false, false),
-                facts.stream().map(fact -> List.of(fact.item(), fact.value())).toList()))), BorderLayout.CENTER);
+        panel.add(Sheet.scrolled(List.of(Texts.heading(title, true), FactList.of(facts.stream().map(fact -> new FactList.Fact(fact.item(),
+                fact.value())).toList()))), BorderLayout.CENTER);
         return panel;
     }
 }

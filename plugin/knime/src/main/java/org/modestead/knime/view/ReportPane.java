@@ -10,7 +10,6 @@ import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.document.ReportDocument.Block;
 import org.modestead.nodes.document.ReportDocument.Callout;
 import org.modestead.nodes.document.ReportDocument.Grid;
-import org.modestead.nodes.document.ReportDocument.Head;
 import org.modestead.nodes.document.ReportDocument.Heading;
 import org.modestead.nodes.document.ReportDocument.KeyValues;
 import org.modestead.nodes.document.ReportDocument.Paragraph;
@@ -45,8 +44,8 @@ final class ReportPane {
             return List.of(Texts.heading(callout.tone().word() + ": " + callout.title(), false),
                     Texts.paragraph(String.join("\n", callout.sentences()), callout.title()));
         } else if (block instanceof KeyValues values) {
-            return List.of(Texts.heading(values.caption(), false), GridTable.of(values.caption(), List.of("What", "Value"),
-                    List.of(false, false), values.entries().stream().map(entry -> List.of(entry.name(), entry.value())).toList()));
+            return List.of(Texts.heading(values.caption(), false), FactList.of(values.entries().stream()
+                    .map(entry -> new FactList.Fact(entry.name(), entry.value())).toList()));
         } else if (block instanceof Grid grid) {
             return grid(grid);
         }
@@ -55,9 +54,9 @@ final class ReportPane {
         return List.of(canvas, Texts.paragraph(((Picture) block).figure().caption(), ((Picture) block).figure().title()));
     }
 
-    private static List<JComponent> grid(Grid grid) {
-        List<JComponent> parts = new ArrayList<>(List.of(Texts.heading(grid.caption(), false), GridTable.of(grid.caption(),
-                grid.columns().stream().map(Head::text).toList(), grid.columns().stream().map(Head::numeric).toList(), grid.rows())));
+    /** Returns a table with its caption and note. */
+    static List<JComponent> grid(Grid grid) {
+        List<JComponent> parts = new ArrayList<>(List.of(Texts.heading(grid.caption(), false), GridTable.of(grid)));
         if (!grid.note().isEmpty()) {
             parts.add(Texts.paragraph(grid.note(), grid.caption()));
         }

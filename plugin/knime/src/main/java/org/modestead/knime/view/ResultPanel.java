@@ -27,7 +27,7 @@ import org.modestead.nodes.render.FigureRenderer;
 import org.modestead.nodes.report.HtmlReport;
 
 /**
- * What a node found: its summary, its figures one at a time, its doubts and, where it made one, its report. Drawn from the data that
+ * What a node found: its summary, its figures one at a time, its doubts, the first rows of its tables and, where it made one, its report. Drawn from the data that
  * the written report is drawn from. Needs no display to be made and painted.
  */
 public final class ResultPanel {
@@ -58,10 +58,11 @@ public final class ResultPanel {
         }
         tabs.addTab("Doubts (" + result.doubts().size() + ")", sentences(result.doubts().stream().map(doubt -> doubt.sentence()).toList(),
                 "There is nothing to doubt in what was checked.", "Doubts"));
-        result.document().ifPresent(document -> tabs.addTab("Report", report(document)));
-        if (result.figures().size() > 0) {
-            tabs.setSelectedIndex(1);
+        if (!result.tables().isEmpty()) {
+            tabs.addTab("Tables", Sheet.scrolled(result.tables().stream().flatMap(table -> ReportPane.grid(table).stream()).toList()));
         }
+        result.document().ifPresent(document -> tabs.addTab("Report", report(document)));
+        tabs.setSelectedIndex(result.document().isPresent() ? tabs.getTabCount() - 1 : result.figures().isEmpty() ? 0 : 1);
     }
 
     /** Returns what is to be shown; always the same. */

@@ -34,7 +34,6 @@ import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.modelfile.PortFiles;
-import org.modestead.nodes.modelfile.ResultFile;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
 
@@ -73,7 +72,8 @@ class PicturesTest {
             if (!node.declaration().settings().isEmpty()) {
                 painted.put("dialog-" + id, painted(dialog(node, bench.settings().get(id)), DIALOG));
             }
-            painted.put("view-" + id, painted(new ResultPanel(ResultFile.of(bench.results().get(id))).component(), VIEW));
+            painted.put("view-" + id, painted(new ResultPanel(bench.shown(id)).component(), VIEW));
+            assertTrue(bench.results().containsKey(id), id);
         }
         painted.put("dialog-snapshot-builder-wrong", painted(wrong(), DIALOG));
         ports().forEach((name, port) -> painted.put("port-" + name, painted(port, PORT)));

@@ -13,6 +13,7 @@ import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.contract.SettingsReader;
+import org.modestead.nodes.modelfile.ResultFile;
 
 /** Runs nodes one after the other, each on what those before it gave, for tests that need real results. */
 public final class Bench {
@@ -51,8 +52,8 @@ public final class Bench {
         bench.run("backtest", Map.of("origins", 3, "refit", "never", "horizon", 2), judged);
         Map<String, String> model = Map.of("operator", "operator-fitter.operator", "spectrum", "spectrum-extractor.spectrum", "verdict",
                 "wellposedness-checker.verdict");
-        bench.run("model-writer", Map.of("file", "pump-house.modestead", "name", "Pump house"), model);
-        bench.run("model-reader", Map.of("file", "pump-house.modestead"), Map.of());
+        bench.run("model-writer", Map.of("file", "pump-house.zip", "name", "Pump house"), model);
+        bench.run("model-reader", Map.of("file", "pump-house.zip"), Map.of());
         bench.run("model-applier", Map.of(), Map.of("model", "model-reader.model", "snapshots", "snapshot-builder.snapshots"));
         bench.run("mode-report", Map.of("title", "Pump house"), with(with(with(told, "forecast", "forecast.forecast"), "reconstruction",
                 "forecast.reconstruction"), "scores", "forecast.scores"));
@@ -85,6 +86,11 @@ public final class Bench {
     /** Returns the output {@code node.port} of a node that has run. */
     public Object value(String from) {
         return results.get(from.substring(0, from.indexOf('.'))).outputs().get(from.substring(from.indexOf('.') + 1));
+    }
+
+    /** Returns what a node shows beside its outputs. */
+    public ResultFile shown(String id) {
+        return ResultFile.of(catalog.find(id).orElseThrow().declaration(), results.get(id));
     }
 
     /** Returns the settings that nodes ran with by node id. */

@@ -11,6 +11,7 @@ import org.modestead.engine.modelfile.FieldsReader;
 import org.modestead.engine.modelfile.FieldsWriter;
 import org.modestead.engine.modelfile.Stored;
 import org.modestead.engine.modelfile.StoredSnapshots;
+import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.figure.Figure;
@@ -22,8 +23,10 @@ import org.modestead.nodes.figure.Figure;
  * @param summary sentences
  * @param doubts what a reader of the results must know
  * @param document a report, from a node that makes one
+ * @param tables the first rows of the output tables
  */
-public record ResultFile(List<Figure> figures, List<String> summary, List<Doubt> doubts, Optional<ReportDocument> document) {
+public record ResultFile(List<Figure> figures, List<String> summary, List<Doubt> doubts, Optional<ReportDocument> document,
+        List<ReportDocument.Grid> tables) {
 
     private static final String KIND = "result";
 
@@ -33,9 +36,20 @@ public record ResultFile(List<Figure> figures, List<String> summary, List<Doubt>
         summary = List.copyOf(summary);
         doubts = List.copyOf(doubts);
         Objects.requireNonNull(document);
+        tables = List.copyOf(tables);
     }
 
-    /** Returns what a result shows. */
+    /** Without tables. */
+    public ResultFile(List<Figure> figures, List<String> summary, List<Doubt> doubts, Optional<ReportDocument> document) {
+        this(figures, summary, doubts, document, List.of());
+    }
+
+    /** Returns what a result shows, with the heads of its tables. */
+    public static ResultFile of(NodeDeclaration declaration, NodeResult result) {
+        return new ResultFile(result.figures(), result.summary(), result.doubts(), result.document(), TableHeads.of(declaration, result.outputs()));
+    }
+
+    /** Returns what a result shows beside its tables. */
     public static ResultFile of(NodeResult result) {
         return new ResultFile(result.figures(), result.summary(), result.doubts(), result.document());
     }
@@ -48,7 +62,8 @@ public record ResultFile(List<Figure> figures, List<String> summary, List<Doubt>
      */
     public static void write(ResultFile result, OutputStream out) throws IOException {
         Stored.Fields content = new FieldsWriter().list("figures", result.figures(), StoredFigure::of).texts("summary", result.summary())
-                .list("doubts", result.doubts(), StoredSnapshots::of).put("document", result.document(), StoredDocument::of).done();
+                .list("doubts", result.doubts(), StoredSnapshots::of).put("document", result.document(), StoredDocument::of)
+                .list("tables", result.tables(), StoredDocument::of).done();
         ModelFile.write(KIND, content, out);
     }
 
@@ -65,6 +80,6 @@ public record ResultFile(List<Figure> figures, List<String> summary, List<Doubt>
 
     private static ResultFile read(FieldsReader in) {
         return new ResultFile(in.objects("figures", StoredFigure::read), in.texts("summary"), in.objects("doubts", StoredSnapshots::readDoubt),
-                in.optional("document", StoredDocument::read));
+                in.optional("document", StoredDocument::read), in.has("tables") ? in.objects("tables", StoredDocument::grid) : List.of());
     }
 }

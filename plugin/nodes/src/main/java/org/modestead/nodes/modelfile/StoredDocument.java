@@ -49,9 +49,7 @@ final class StoredDocument {
                     new FieldsWriter().text("name", entry.name()).text("value", entry.value()).done()).done();
         }
         if (block instanceof ReportDocument.Grid grid) {
-            return out.text("kind", "grid").text("caption", grid.caption()).list("columns", grid.columns(), head ->
-                    new FieldsWriter().text("text", head.text()).flag("numeric", head.numeric()).done())
-                    .list("rows", grid.rows(), row -> new FieldsWriter().texts("cells", row).done()).text("note", grid.note()).done();
+            return filled(out.text("kind", "grid"), grid);
         }
         return out.text("kind", "picture").put("figure", StoredFigure.of(((ReportDocument.Picture) block).figure())).done();
     }
@@ -71,7 +69,17 @@ final class StoredDocument {
         };
     }
 
-    private static ReportDocument.Grid grid(FieldsReader in) {
+    static Stored.Fields of(ReportDocument.Grid grid) {
+        return filled(new FieldsWriter(), grid);
+    }
+
+    private static Stored.Fields filled(FieldsWriter out, ReportDocument.Grid grid) {
+        return out.text("caption", grid.caption()).list("columns", grid.columns(), head -> new FieldsWriter().text("text", head.text())
+                .flag("numeric", head.numeric()).done()).list("rows", grid.rows(), row -> new FieldsWriter().texts("cells", row).done())
+                .text("note", grid.note()).done();
+    }
+
+    static ReportDocument.Grid grid(FieldsReader in) {
         List<ReportDocument.Head> columns = in.objects("columns", head -> new ReportDocument.Head(head.text("text"), head.flag("numeric")));
         List<List<String>> rows = in.objects("rows", row -> row.texts("cells"));
         return new ReportDocument.Grid(in.text("caption"), columns, rows, in.text("note"));

@@ -12,8 +12,14 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
+import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.table.MemoryTable;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.engine.Doubt;
 import org.modestead.nodes.document.ReportDocument;
+import org.modestead.nodes.data.SignalGenerator;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.render.FigureRenderer;
 import org.modestead.nodes.testing.Steps;
@@ -85,5 +91,22 @@ class ResultFileTest {
     void aResultWithNothingToShowIsAFile() throws IOException {
         assertEquals(new ResultFile(List.of(), List.of(), List.of(), Optional.empty()),
                 again(new ResultFile(List.of(), List.of(), List.of(), Optional.empty())));
+    }
+
+    /** Only as far as is shown: a table may be far larger than memory. */
+    @Test
+    void theFirstRowsOfTablesComeBack() throws IOException {
+        MemoryTable.Builder rows = MemoryTable.builder(TableSchema.of(Column.text("mode"), Column.number("rate"), Column.whole("n")), "here");
+        for (int i = 0; i < 25; i++) {
+            rows.row("m" + i, i == 0 ? null : 1.0 / 3, (long) i);
+        }
+        NodeDeclaration truth = new SignalGenerator().declaration();
+        ResultFile out = again(ResultFile.of(truth, new NodeResult(Map.of("truth", rows.build()), List.of(), List.of(), List.of())));
+        assertEquals(1, out.tables().size());
+        assertEquals("Truth", out.tables().get(0).caption());
+        assertEquals(List.of("m0", "", "0"), out.tables().get(0).rows().get(0));
+        assertEquals(List.of("m1", "0.33333", "1"), out.tables().get(0).rows().get(1));
+        assertEquals("The first 20 rows.", out.tables().get(0).note());
+        assertEquals(20, out.tables().get(0).rows().size());
     }
 }
