@@ -101,8 +101,7 @@ final class NodeRun {
             outputs.add(object(port, result.outputs().get(port.id()), prepared, writer));
         }
         Notices notices = new Notices(result);
-        return new Done(outputs.toArray(PortObject[]::new),
-                new ResultFile(result.figures(), result.summary(), result.doubts(), result.document()), notices.warning(),
+        return new Done(outputs.toArray(PortObject[]::new), ResultFile.of(declaration, result), notices.warning(),
                 notices.verdict());
     }
 

@@ -173,6 +173,7 @@ final class ColumnsEditor implements Editor {
             }
         });
         JScrollPane pane = new JScrollPane(table);
+        pane.setColumnHeaderView(table.getTableHeader());
         pane.setPreferredSize(new Dimension(0, HEIGHT));
         pane.setMinimumSize(new Dimension(0, HEIGHT));
         return pane;

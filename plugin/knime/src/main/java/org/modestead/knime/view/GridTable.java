@@ -64,6 +64,7 @@ final class GridTable {
     private static JScrollPane wide(JTable table) {
         table.setAutoResizeMode(JTable.AUTO_RESIZE_OFF);
         JScrollPane pane = new JScrollPane(table, JScrollPane.VERTICAL_SCROLLBAR_NEVER, JScrollPane.HORIZONTAL_SCROLLBAR_ALWAYS);
+        pane.setColumnHeaderView(table.getTableHeader());
         pane.setWheelScrollingEnabled(false);
         Dimension size = new Dimension(0, table.getPreferredSize().height + table.getTableHeader().getPreferredSize().height + BAR);
         pane.setPreferredSize(size);
