@@ -33,8 +33,16 @@ record ArrayReferences(Stored.Fields tree, Map<String, Reference> byEntry) {
      */
     record Reference(String entry, ArrayShape shape, String sha256) {}
 
+    /**
+     * An array to be written.
+     *
+     * @param array as it is held
+     * @param sum of its bytes in a file
+     */
+    record Entry(Stored array, Checksum sum) {}
+
     /** Returns a tree with references in the places of arrays, which are collected by entry. */
-    static Stored replace(Stored tree, String path, Map<String, Stored> arrays) throws IOException {
+    static Stored replace(Stored tree, String path, Map<String, Entry> arrays) throws IOException {
         if (tree instanceof Stored.Fields fields) {
             Map<String, Stored> out = new LinkedHashMap<>();
             for (Map.Entry<String, Stored> field : fields.byName().entrySet()) {
@@ -50,17 +58,16 @@ record ArrayReferences(Stored.Fields tree, Map<String, Reference> byEntry) {
             return new Stored.Items(out);
         }
         if (tree instanceof Stored.Numbers || tree instanceof Stored.Wholes) {
+            Checksum sum = new Checksum();
+            NpyArray.write(tree, sum);
             String entry = path + ".npy";
-            arrays.put(entry, tree);
-            return reference(entry, tree);
+            arrays.put(entry, new Entry(tree, sum));
+            return reference(entry, ArrayShape.of(tree), sum);
         }
         return tree;
     }
 
-    private static Stored.Fields reference(String entry, Stored array) throws IOException {
-        Checksum sum = new Checksum();
-        NpyArray.write(array, sum);
-        ArrayShape shape = ArrayShape.of(array);
+    private static Stored.Fields reference(String entry, ArrayShape shape, Checksum sum) {
         FieldsWriter out = new FieldsWriter().text(ENTRY, entry).text("dtype", shape.type().word())
                 .list("shape", shape.dimensions(), Stored.Whole::new);
         if (shape.pieces().size() != 1) {

@@ -35,37 +35,34 @@ final class ModelFile {
     private ModelFile() {}
 
     static void write(String kind, Stored.Fields content, OutputStream out) throws IOException {
-        Map<String, Stored> arrays = new LinkedHashMap<>();
+        Map<String, ArrayReferences.Entry> arrays = new LinkedHashMap<>();
         Map<String, Stored> file = new LinkedHashMap<>();
         file.put("format", new Stored.Text(FORMAT));
         file.put("version", new Stored.Whole(VERSION));
         file.put("kind", new Stored.Text(kind));
         file.put("content", ArrayReferences.replace(content, "", arrays));
         byte[] index = JsonTree.write(new Stored.Fields(file));
+        Checksum sum = new Checksum();
+        sum.write(index, 0, index.length);
         ZipOutputStream zip = new ZipOutputStream(out);
-        store(zip, INDEX, target -> target.write(index));
-        for (Map.Entry<String, Stored> array : arrays.entrySet()) {
-            store(zip, array.getKey(), target -> NpyArray.write(array.getValue(), target));
+        zip.putNextEntry(entry(INDEX, sum));
+        zip.write(index);
+        for (Map.Entry<String, ArrayReferences.Entry> array : arrays.entrySet()) {
+            zip.putNextEntry(entry(array.getKey(), array.getValue().sum()));
+            NpyArray.write(array.getValue().array(), zip);
         }
+        zip.closeEntry();
         zip.finish();
     }
 
-    private interface Source {
-        void writeTo(OutputStream out) throws IOException;
-    }
-
-    /** A stored entry tells size and checksum before its data, so it is written twice, the first time to nowhere. */
-    private static void store(ZipOutputStream zip, String name, Source source) throws IOException {
-        Checksum sum = new Checksum();
-        source.writeTo(sum);
+    /** A stored entry tells size and checksum before its data. */
+    private static ZipEntry entry(String name, Checksum sum) {
         ZipEntry entry = new ZipEntry(name);
         entry.setMethod(ZipEntry.STORED);
         entry.setSize(sum.count());
         entry.setCrc(sum.crc());
         entry.setTimeLocal(TIME);
-        zip.putNextEntry(entry);
-        source.writeTo(zip);
-        zip.closeEntry();
+        return entry;
     }
 
     static <T> T read(String kind, InputStream in, Function<FieldsReader, T> read) throws IOException {
