@@ -34,13 +34,13 @@ public final class StoredSnapshots {
 
     /** Returns the snapshots of a tree. */
     public static Snapshots read(FieldsReader in) {
-        List<Channel> channels = in.objects("channels", StoredSnapshots::readChannel);
-        List<Channel> inputs = in.objects("inputs", StoredSnapshots::readChannel);
+        List<Channel> channels = readChannels(in);
+        List<Channel> inputs = readInputs(in);
         OptionalDouble step = in.optionalNumber("step");
         if (step.isPresent() && !(step.getAsDouble() > 0 && Double.isFinite(step.getAsDouble()))) {
             throw in.wrong("step", "the number " + step.getAsDouble(), "a positive number");
         }
-        return new Snapshots(channels, inputs, in.object("time", time -> new TimeAxis(time.choice("kind", TimeAxis.Kind.class), time.text("unit"))),
+        return new Snapshots(channels, inputs, readTime(in),
                 in.object("training", runs -> readRuns(runs, channels.size(), inputs.size())),
                 in.object("calibration", runs -> readRuns(runs, channels.size(), inputs.size())),
                 in.object("holdout", runs -> readRuns(runs, channels.size(), inputs.size())),
@@ -48,6 +48,21 @@ public final class StoredSnapshots {
                 in.object("preparation", preparation -> readPreparation(preparation, channels.size())),
                 in.objects("facts", fact -> new Snapshots.Fact(fact.text("item"), fact.text("value"))),
                 in.objects("doubts", StoredSnapshots::readDoubt));
+    }
+
+    /** Returns the channels of a tree of snapshots. */
+    public static List<Channel> readChannels(FieldsReader in) {
+        return in.objects("channels", StoredSnapshots::readChannel);
+    }
+
+    /** Returns the inputs of a tree of snapshots. */
+    public static List<Channel> readInputs(FieldsReader in) {
+        return in.objects("inputs", StoredSnapshots::readChannel);
+    }
+
+    /** Returns the time axis of a tree of snapshots. */
+    public static TimeAxis readTime(FieldsReader in) {
+        return in.object("time", time -> new TimeAxis(time.choice("kind", TimeAxis.Kind.class), time.text("unit")));
     }
 
     static Stored.Fields of(Channel channel) {

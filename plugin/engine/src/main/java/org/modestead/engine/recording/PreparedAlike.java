@@ -52,11 +52,30 @@ public final class PreparedAlike {
         return new PreparedAlike(fitted, fresh).joined();
     }
 
-    private static void checkTimes(Snapshots fitted, Snapshots fresh) {
-        if (!fitted.time().equals(fresh.time())) {
-            throw new RecordingFault("new recording", "its times are " + words(fresh.time()) + ", those of the model " + words(fitted.time()),
+    /**
+     * Checks ahead of a recording what its columns tell.
+     *
+     * @throws RecordingFault if a channel or an input is missing or in another unit
+     */
+    public static void check(List<Channel> channels, List<Channel> fresh, List<Channel> inputs, List<Channel> freshInputs) {
+        places("channel", channels, fresh);
+        places("input", inputs, freshInputs);
+    }
+
+    /**
+     * Checks ahead of a recording what its time column tells.
+     *
+     * @throws RecordingFault if times are counted otherwise
+     */
+    public static void check(TimeAxis fitted, TimeAxis fresh) {
+        if (!fitted.equals(fresh)) {
+            throw new RecordingFault("new recording", "its times are " + words(fresh) + ", those of the model " + words(fitted),
                     "give them alike, and count them in the same unit");
         }
+    }
+
+    private static void checkTimes(Snapshots fitted, Snapshots fresh) {
+        check(fitted.time(), fresh.time());
         Wording wording = new Wording(fitted.time());
         OptionalDouble wanted = fitted.step();
         if (wanted.isPresent()) {

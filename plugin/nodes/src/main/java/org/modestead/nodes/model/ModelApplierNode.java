@@ -6,11 +6,14 @@ import java.util.Map;
 import java.util.Optional;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.modelfile.Model;
+import org.modestead.engine.recording.PreparedAlike;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
@@ -49,6 +52,19 @@ public final class ModelApplierNode implements Node {
                         Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "Its modes."),
                         Port.of("verdict", PortType.VERDICT, "Verdict", "As it was given on the recordings of the model.")),
                 List.of(), 1);
+    }
+
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Outlook model = inputs.values().getOrDefault("model", Outlook.NONE);
+        Outlook fresh = inputs.values().getOrDefault("snapshots", Outlook.NONE);
+        if (model.complete() && !fresh.channels().isEmpty()) {
+            PreparedAlike.check(model.channels(), fresh.channels(), model.inputs(), fresh.inputs());
+        }
+        if (model.complete() && fresh.time().isPresent()) {
+            PreparedAlike.check(model.time().orElseThrow(), fresh.time().orElseThrow());
+        }
+        return Node.super.expect(inputs, settings, context);
     }
 
     @Override

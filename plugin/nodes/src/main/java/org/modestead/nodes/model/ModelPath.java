@@ -10,6 +10,7 @@ import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
@@ -59,9 +60,22 @@ record ModelPath(Path path, String shown) {
     }
 
     Model read() {
+        return read(in -> (Model) PortFiles.read(PortType.MODEL, in));
+    }
+
+    /** Returns of which recording the model was made. */
+    Outlook outlook() {
+        return read(PortFiles::outlook);
+    }
+
+    private interface Reading<T> {
+        T of(InputStream in) throws IOException;
+    }
+
+    private <T> T read(Reading<T> reading) {
         requireReadable();
         try (InputStream in = new BufferedInputStream(Files.newInputStream(path))) {
-            return (Model) PortFiles.read(PortType.MODEL, in);
+            return reading.of(in);
         } catch (ModelFileFault fault) {
             throw new ModelFileFault(shown + ", " + fault.where(), fault.seen(), fault.wanted());
         } catch (IOException unreadable) {

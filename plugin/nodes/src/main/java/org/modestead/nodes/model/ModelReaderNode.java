@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import org.modestead.engine.modelfile.Model;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
@@ -49,6 +50,11 @@ public final class ModelReaderNode implements Node {
     public Map<String, TableSchema> schemas(Map<String, TableSchema> inputs, Settings settings, RunContext context) {
         ModelPath.of(settings, context).requireReadable();
         return Map.of();
+    }
+
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        return new Expected(Map.of(), Map.of("model", ModelPath.of(settings, context).outlook()));
     }
 
     @Override

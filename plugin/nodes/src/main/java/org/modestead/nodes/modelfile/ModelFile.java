@@ -68,16 +68,35 @@ final class ModelFile {
     static <T> T read(String kind, InputStream in, Function<FieldsReader, T> read) throws IOException {
         try {
             ZipEnd end = new ZipEnd(in);
-            Stored.Fields content = content(kind, new ZipInputStream(end));
+            ZipInputStream zip = new ZipInputStream(end);
+            ArrayReferences references = ArrayReferences.in(index(kind, zip));
+            Stored.Fields content = references.resolved(arrays(zip, references));
             end.require();
-            return new FieldsReader("model file", new Stored.Fields(Map.of("content", content))).object("content", read);
+            return made(content, read);
         } catch (ZipException | EOFException | IllegalArgumentException broken) {
-            throw new ModelFileFault("model file", "it is not a whole zip file (" + broken.getMessage() + ")",
-                    "take a file that was written to its end and not changed since");
+            throw notWhole(broken);
         }
     }
 
-    private static Stored.Fields content(String kind, ZipInputStream zip) throws IOException {
+    /** Reads what stands in the index alone, where the arrays are references; neither they nor the end of the file are looked at. */
+    static <T> T peek(String kind, InputStream in, Function<FieldsReader, T> read) throws IOException {
+        try {
+            return made(index(kind, new ZipInputStream(in)), read);
+        } catch (ZipException | EOFException | IllegalArgumentException broken) {
+            throw notWhole(broken);
+        }
+    }
+
+    private static <T> T made(Stored.Fields content, Function<FieldsReader, T> read) {
+        return new FieldsReader("model file", new Stored.Fields(Map.of("content", content))).object("content", read);
+    }
+
+    private static ModelFileFault notWhole(Exception broken) {
+        return new ModelFileFault("model file", "it is not a whole zip file (" + broken.getMessage() + ")",
+                "take a file that was written to its end and not changed since");
+    }
+
+    private static Stored.Fields index(String kind, ZipInputStream zip) throws IOException {
         ZipEntry first = zip.getNextEntry();
         if (first == null || !first.getName().equals(INDEX)) {
             throw new ModelFileFault("model file", first == null ? "it is no zip file" : "its first entry is " + shortened(first.getName()),
@@ -89,8 +108,7 @@ final class ModelFile {
         }
         FieldsReader file = new FieldsReader(INDEX, JsonTree.read(index));
         requireKnown(kind, file);
-        ArrayReferences references = ArrayReferences.in(file.object("content", FieldsReader::fields));
-        return references.resolved(arrays(zip, references));
+        return file.object("content", FieldsReader::fields);
     }
 
     private static void requireKnown(String kind, FieldsReader file) {

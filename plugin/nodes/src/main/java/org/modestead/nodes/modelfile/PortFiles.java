@@ -5,6 +5,7 @@ import java.io.InputStream;
 import java.io.OutputStream;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.modestead.engine.kernel.Kernel;
 import org.modestead.engine.modelfile.FieldsReader;
 import org.modestead.engine.modelfile.Model;
@@ -20,6 +21,7 @@ import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Verdict;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.PortType;
 
 /**
@@ -54,6 +56,19 @@ public final class PortFiles {
      */
     public static Object read(PortType type, InputStream in) throws IOException {
         return ModelFile.read(kind(type), in, content -> value(type, content));
+    }
+
+    /**
+     * Tells of which recording a stored model was made, without reading its arrays.
+     *
+     * @param in a file of type {@link PortType#MODEL}, read to the end of its index, not closed
+     * @throws IOException if the stream fails
+     * @throws ModelFileFault as {@link #read}, as far as the index tells
+     */
+    public static Outlook outlook(InputStream in) throws IOException {
+        return ModelFile.peek(kind(PortType.MODEL), in, model -> model.object("operator", operator -> operator.object("snapshots", snapshots ->
+                new Outlook(StoredSnapshots.readChannels(snapshots), StoredSnapshots.readInputs(snapshots),
+                        Optional.of(StoredSnapshots.readTime(snapshots))))));
     }
 
     /** Returns what is to be known of a value at a glance, in reading order. */

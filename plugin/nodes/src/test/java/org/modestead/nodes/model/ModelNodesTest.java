@@ -17,10 +17,16 @@ import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.Progress;
 import org.modestead.engine.RecordingFault;
 import org.modestead.engine.modelfile.ModelFileFault;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.nodes.contract.Expected;
+import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.Table;
@@ -165,6 +171,24 @@ class ModelNodesTest {
 
     private static String refused(MemoryTable table, Map<String, Object> settings) {
         return assertThrows(RecordingFault.class, () -> applied(model(), snapshots(table, settings))).getMessage();
+    }
+
+    @Test
+    void whatDoesNotSuitIsToldBeforeAnythingRuns() {
+        Path file = folder.resolve("early.zip");
+        write(file);
+        RunContext context = new RunContext(Progress.NONE, folder, folder);
+        Outlook model = new ModelReaderNode().expect(new Expected(Map.of(), Map.of()), new Settings(Map.of("file", "early.zip")), context).values()
+                .get("model");
+        assertEquals(Outlook.of(fitted.get("snapshots")).orElseThrow(), model);
+        Outlook same = Outlook.of(snapshots(laterRuns(), PLAIN)).orElseThrow();
+        Outlook other = Outlook.of(snapshots(table("run", "time", "x [bar]", "w [m]", 1, 0.05), PLAIN)).orElseThrow();
+        Node applier = new ModelApplierNode();
+        assertEquals(model, applier.expect(new Expected(Map.of(), Map.of("model", model, "snapshots", same)), new Settings(Map.of()), context).values()
+                .get("spectrum"));
+        assertThrows(RecordingFault.class, () -> applier.expect(new Expected(Map.of(), Map.of("model", model, "snapshots", other)),
+                new Settings(Map.of()), context));
+        assertEquals(Map.of(), applier.expect(new Expected(Map.of(), Map.of()), new Settings(Map.of()), context).values());
     }
 
     @Test
