@@ -35,7 +35,7 @@ public final class NativeSettings {
      * Writes all settings of a node in today's version.
      *
      * @param declaration of the node
-     * @param raw by key; absent means not set; a value of the wrong kind is written as what it is
+     * @param raw by key; absent means the default, or not set where there is none; a value of the wrong kind is written as what it is
      * @param into written to
      */
     public static void write(NodeDeclaration declaration, Map<String, Object> raw, NodeSettingsWO into) {
@@ -101,10 +101,10 @@ public final class NativeSettings {
         String key = setting.key();
         if (raw.isPresent() && !fits(setting, raw.get())) {
             writeAsItIs(key, raw.get(), into);
-        } else if (setting instanceof Setting.Number) {
-            into.addDouble(key, raw.map(value -> ((Number) value).doubleValue()).orElse(Double.NaN));
-        } else if (setting instanceof Setting.Whole) {
-            into.addLong(key, raw.map(value -> ((Number) value).longValue()).orElse(NOT_SET));
+        } else if (setting instanceof Setting.Number number) {
+            into.addDouble(key, raw.map(value -> ((Number) value).doubleValue()).orElse(number.initial().orElse(Double.NaN)));
+        } else if (setting instanceof Setting.Whole whole) {
+            into.addLong(key, raw.map(value -> ((Number) value).longValue()).orElse(whole.initial().orElse(NOT_SET)));
         } else if (setting instanceof Setting.Flag flag) {
             into.addBoolean(key, raw.map(Boolean.class::cast).orElse(flag.initial()));
         } else if (setting instanceof Setting.Numbers numbers) {
