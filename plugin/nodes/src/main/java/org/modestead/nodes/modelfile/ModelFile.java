@@ -40,6 +40,7 @@ final class ModelFile {
         file.put("format", new Stored.Text(FORMAT));
         file.put("version", new Stored.Whole(VERSION));
         file.put("kind", new Stored.Text(kind));
+        file.put("written_by", new Stored.Text(Release.name()));
         file.put("content", ArrayReferences.replace(content, "", arrays));
         byte[] index = JsonTree.write(new Stored.Fields(file));
         Checksum sum = new Checksum();

@@ -13,6 +13,7 @@ import java.nio.charset.StandardCharsets;
 import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.Map;
+import java.util.regex.Pattern;
 import java.util.zip.ZipEntry;
 import java.util.zip.ZipInputStream;
 import java.util.zip.ZipOutputStream;
@@ -62,6 +63,13 @@ class BrokenFilesTest {
     private static void refusedWith(String seen, byte[] bytes) {
         ModelFileFault fault = refused(bytes);
         assertTrue(fault.getMessage().contains(seen), fault.getMessage());
+    }
+
+    @Test
+    void theIndexTellsFormatVersionKindAndRelease() throws IOException {
+        String index = new String(entries().get("model.json"), StandardCharsets.US_ASCII);
+        assertTrue(Pattern.compile("^\\{\n  \"format\" : \"modestead-model\",\n  \"version\" : 1,\n  \"kind\" : \"snapshots\",\n"
+                + "  \"written_by\" : \"Modestead [0-9.]+(-SNAPSHOT)?\",\n  \"content\" : \\{").matcher(index).find(), index);
     }
 
     @Test
