@@ -52,6 +52,9 @@ final class ColumnEditor implements Editor {
         List<Item> items = items(schema, name);
         showing = true;
         list.setEditable(schema.isEmpty());
+        if (list.getEditor().getEditorComponent() instanceof JComponent text) {
+            text.getAccessibleContext().setAccessibleName(setting.common().label());
+        }
         list.removeAllItems();
         items.forEach(list::addItem);
         items.stream().filter(item -> item.name().equals(name)).findFirst().ifPresent(list::setSelectedItem);

@@ -13,6 +13,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeSet;
+import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import javax.imageio.ImageIO;
@@ -87,6 +88,15 @@ class PicturesTest {
             assertEquals(size(picture.getValue()), size(file), picture.getKey());
             assertTrue(colours(file) > 8, picture.getKey());
         }
+    }
+
+    /** Every kept picture is in the README, with a text for those who cannot see it, and no other is asked for. */
+    @Test
+    void theReadmeShowsEveryPicture() throws IOException {
+        String readme = Files.readString(Path.of("..", "..", "README.md"));
+        TreeSet<String> shown = Pattern.compile("<img src=\"plugin/knime/pictures/([a-z-]+)\\.png\" width=\"\\d+\" alt=\"[^\"]{10,}\">")
+                .matcher(readme).results().map(match -> match.group(1)).collect(Collectors.toCollection(TreeSet::new));
+        assertEquals(kept(), shown);
     }
 
     private static JComponent dialog(Node node, Map<String, Object> stored) {
