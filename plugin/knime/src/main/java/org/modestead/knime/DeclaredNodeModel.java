@@ -16,6 +16,7 @@ import org.knime.core.node.NodeSettingsWO;
 import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.port.PortType;
+import org.knime.core.node.property.hilite.HiLiteHandler;
 import org.modestead.engine.Cancelled;
 import org.modestead.engine.Fault;
 import org.modestead.knime.describe.DeclaredDescription;
@@ -34,6 +35,7 @@ public final class DeclaredNodeModel extends NodeModel {
 
     private final Node node;
     private final NodeRun run;
+    private final HiLiteHandler hilite = new HiLiteHandler();
     private Map<String, Object> raw = Map.of();
     private Optional<ResultFile> shown = Optional.empty();
 
@@ -82,7 +84,17 @@ public final class DeclaredNodeModel extends NodeModel {
         } catch (Fault fault) {
             exec.checkCanceled(); // what goes wrong after the person asked to stop, goes wrong because of it
             throw new KNIMEException(fault.getMessage(), fault);
+        } catch (RuntimeException defect) {
+            exec.checkCanceled();
+            throw new KNIMEException("An error in the program (" + defect.getClass().getSimpleName() + ": " + defect.getMessage()
+                    + "); please report it with the log.", defect);
         }
+    }
+
+    /** Rows of the outputs are not those of the inputs: what is marked there says nothing here. */
+    @Override
+    protected HiLiteHandler getOutHiLiteHandler(int outIndex) {
+        return hilite;
     }
 
     @Override

@@ -5,6 +5,7 @@ import java.io.IOException;
 import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.port.PortType;
+import org.knime.core.node.property.hilite.HiLiteHandler;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
 public abstract class NodeModel implements AbstractNodeView.ViewableModel {
@@ -24,19 +25,15 @@ public abstract class NodeModel implements AbstractNodeView.ViewableModel {
 
     protected abstract void reset();
 
-    protected final void pushFlowVariableDouble(final String name, final double value) {
-        throw new UnsupportedOperationException();
-    }
-
-    protected final void pushFlowVariableInt(final String name, final int value) {
-        throw new UnsupportedOperationException();
-    }
-
     protected PortObject[] execute(final PortObject[] inObjects, final ExecutionContext exec) throws Exception {
         throw new UnsupportedOperationException();
     }
 
     protected PortObjectSpec[] configure(final PortObjectSpec[] inSpecs) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
+    protected HiLiteHandler getOutHiLiteHandler(final int outIndex) {
         throw new UnsupportedOperationException();
     }
 

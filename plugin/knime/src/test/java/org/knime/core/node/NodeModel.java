@@ -8,6 +8,7 @@ import java.util.Optional;
 import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.port.PortType;
+import org.knime.core.node.property.hilite.HiLiteHandler;
 
 /** Stand-in for tests with just enough behaviour; the platform's own class is met in the integration tests. */
 public abstract class NodeModel implements AbstractNodeView.ViewableModel {
@@ -39,6 +40,10 @@ public abstract class NodeModel implements AbstractNodeView.ViewableModel {
     }
 
     protected PortObjectSpec[] configure(final PortObjectSpec[] inSpecs) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
+    protected HiLiteHandler getOutHiLiteHandler(final int outIndex) {
         throw new UnsupportedOperationException();
     }
 
