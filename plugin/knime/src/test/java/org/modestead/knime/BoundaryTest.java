@@ -38,6 +38,24 @@ class BoundaryTest {
                 "org.knime.core.ui..", "org.knime.core.internal..").check(bridge);
     }
 
+    /** Arrows point one way: knime -> nodes -> engine; the embedded host is another world. */
+    @Test
+    void theBridgeKnowsNothingOfTheEmbeddedHostAndTheNodesNothingOfTheBridge() {
+        noClasses().should().dependOnClassesThat().resideInAnyPackage("org.modestead.host..").check(bridge);
+        JavaClasses below = new ClassFileImporter().withImportOption(new ImportOption.DoNotIncludeTests())
+                .importPackages("org.modestead.nodes", "org.modestead.engine");
+        noClasses().should().dependOnClassesThat().resideInAnyPackage("org.modestead.knime..", "org.knime..").check(below);
+    }
+
+    /** What runs on a server knows nothing of what a person sees, except where the platform asks for it by signature. */
+    @Test
+    void onlyFactoryAndPortsKnowDialogsAndViews() {
+        noClasses().that().resideOutsideOfPackages("org.modestead.knime.dialog..", "org.modestead.knime.view..")
+                .and().doNotHaveFullyQualifiedName(DeclaredNodeFactory.class.getName())
+                .and().doNotHaveFullyQualifiedName("org.modestead.knime.port.PortViews")
+                .should().dependOnClassesThat().resideInAnyPackage("org.modestead.knime.dialog..", "org.modestead.knime.view..").check(bridge);
+    }
+
     /** Names inside texts too: a class could be asked for by reflection. */
     @Test
     void noClassFileMentionsAWorkbench() throws IOException {
