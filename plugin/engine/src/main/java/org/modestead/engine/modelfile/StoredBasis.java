@@ -158,7 +158,8 @@ final class StoredBasis {
         for (int i = 0; i < count; i++) {
             int samples = times.get(i).length;
             if (weights.get(i).length != samples || states.get(i).numRows != samples || states.get(i).numCols != arguments) {
-                throw in.wrong("states", "segment " + i + " of another shape", samples + " states of " + arguments + " components with as many weights");
+                throw in.wrong("states", "segment " + i + " of another shape",
+                        samples + " states of " + arguments + " components with as many weights");
             }
         }
         DMatrixRMaj starts = in.matrix("starts", count, arguments);

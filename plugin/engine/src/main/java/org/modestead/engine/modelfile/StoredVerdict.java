@@ -80,7 +80,8 @@ public final class StoredVerdict {
         List<LadderRow> out = new ArrayList<>(count);
         for (int i = 0; i < count; i++) {
             if (ranks[i] < 1 || ranks[i] > Integer.MAX_VALUE || modes[i] < 0 || modes[i] > Integer.MAX_VALUE) {
-                throw in.wrong("rank", "row " + i + " with rank " + ranks[i] + " and mode " + modes[i], "a rank of at least 1 and a mode of at least 0");
+                throw in.wrong("rank", "row " + i + " with rank " + ranks[i] + " and mode " + modes[i],
+                        "a rank of at least 1 and a mode of at least 0");
             }
             out.add(new LadderRow((int) ranks[i], (int) modes[i], rates.get(i), weight[i], weightNorm[i], normRatio[i], residual[i],
                     rawResidual[i], gap[i], overlap[i], new NoiseEffect(noiseRate[i], noiseWeight[i], noiseNorm[i])));

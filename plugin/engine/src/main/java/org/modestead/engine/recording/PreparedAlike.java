@@ -200,7 +200,7 @@ public final class PreparedAlike {
         for (int c = 0; c < channels.length; c++) {
             double share = shareOutside(runs, c, low[c] - MARGIN * (high[c] - low[c]), high[c] + MARGIN * (high[c] - low[c]));
             if (share > 0) {
-                outside.add(String.format(Locale.ROOT, "%s in %.2g %% of its samples", fitted.channels().get(c).label(), 100 * share));
+                outside.add(String.format(Locale.ROOT, "%s in %.3g %% of its samples", fitted.channels().get(c).label(), 100 * share));
             }
         }
         return outside.isEmpty() ? Optional.empty() : Optional.of(new Doubt("beyond-training", "The new recordings leave the range that the"

@@ -8,6 +8,7 @@ import java.io.OutputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import org.modestead.engine.Progress;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
 import org.modestead.nodes.contract.Outlook;
@@ -26,6 +27,7 @@ record ModelPath(Path path, String shown) {
 
     static final String SETTING = "file";
     static final String EXTENSION = "zip";
+    private static final int BLOCK = 1 << 20;
 
     static ModelPath of(Settings settings, RunContext context) {
         String shown = settings.text(SETTING);
@@ -59,23 +61,23 @@ record ModelPath(Path path, String shown) {
         }
     }
 
-    Model read() {
-        return read(in -> (Model) PortFiles.read(PortType.MODEL, in));
+    Model read(Progress progress) {
+        return read(in -> (Model) PortFiles.read(PortType.MODEL, in), progress);
     }
 
     /** Returns of which recording the model was made. */
     Outlook outlook() {
-        return read(PortFiles::outlook);
+        return read(PortFiles::outlook, Progress.NONE);
     }
 
     private interface Reading<T> {
         T of(InputStream in) throws IOException;
     }
 
-    private <T> T read(Reading<T> reading) {
+    private <T> T read(Reading<T> reading, Progress progress) {
         requireReadable();
-        try (InputStream in = new BufferedInputStream(Files.newInputStream(path))) {
-            return reading.of(in);
+        try (InputStream file = Files.newInputStream(path)) {
+            return reading.of(new BufferedInputStream(PolledStreams.reading(file, Math.max(1, Files.size(path)), "reading " + shown, progress), BLOCK));
         } catch (ModelFileFault fault) {
             throw new ModelFileFault(shown + ", " + fault.where(), fault.seen(), fault.wanted());
         } catch (IOException unreadable) {
@@ -84,13 +86,13 @@ record ModelPath(Path path, String shown) {
     }
 
     /** Writes beside the place and moves there in one step: one that was there before stays until then. */
-    void write(Model model) {
+    void write(Model model, Progress progress) {
         requireWritable();
         Path part = path.resolveSibling("." + path.getFileName() + "." + ProcessHandle.current().pid() + ".part");
         try {
             Files.createDirectories(path.getParent());
             try {
-                try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part))) {
+                try (OutputStream out = new BufferedOutputStream(PolledStreams.writing(Files.newOutputStream(part), progress), BLOCK)) {
                     PortFiles.write(PortType.MODEL, model, out);
                 }
                 Files.move(part, path, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);

@@ -60,8 +60,7 @@ public final class ModelReaderNode implements Node {
     @Override
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
         ModelPath file = ModelPath.of(settings, context);
-        context.progress().report(0, "reading " + file.shown());
-        Model model = file.read();
+        Model model = file.read(context.progress());
         context.progress().report(1, "read");
         MemoryTable.Builder facts = MemoryTable.builder(FACTS, file.shown());
         PortFiles.describe(PortType.MODEL, model).forEach(fact -> facts.row(fact.item(), fact.value()));

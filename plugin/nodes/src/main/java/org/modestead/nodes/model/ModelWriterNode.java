@@ -64,7 +64,7 @@ public final class ModelWriterNode implements Node {
                 inputs.get("spectrum", Spectrum.class), inputs.get("verdict", Verdict.class));
         ModelPath file = ModelPath.of(settings, context);
         context.progress().report(0, "writing " + file.shown());
-        file.write(model);
+        file.write(model, context.progress());
         context.progress().report(1, "written");
         return new NodeResult(Map.of("model", model), List.of(), List.of("Written to " + file.shown() + ".", ModelWords.verdict(model)), List.of());
     }

@@ -16,9 +16,11 @@ import java.util.stream.Stream;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.modestead.engine.Cancelled;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.RecordingFault;
+import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.nodes.contract.Expected;
@@ -208,6 +210,29 @@ class ModelNodesTest {
                 + " operator.", fault.getMessage());
         assertFalse(Files.exists(folder.resolve("no.zip")));
     }
+
+    @Test
+    void readingAndWritingCanBeStoppedAndLeaveNothingHalfDone() throws IOException {
+        Path file = folder.resolve("stopped/model.zip");
+        Model model = (Model) model();
+        assertThrows(Cancelled.class, () -> new ModelPath(file, "model.zip").write(model, STOPPED));
+        try (Stream<Path> left = Files.list(file.getParent())) {
+            assertEquals(List.of(), left.toList());
+        }
+        assertThrows(Cancelled.class, () -> new ModelPath(folder.resolve("shared.zip"), "shared.zip").read(STOPPED));
+    }
+
+    private static final Progress STOPPED = new Progress() {
+        @Override
+        public void report(double fraction, String message) {
+            // nobody watches
+        }
+
+        @Override
+        public void checkCancelled() {
+            throw new Cancelled("stopped");
+        }
+    };
 
     @Test
     void filesThatAreNotThereOrBrokenAreNamed() throws IOException {
