@@ -42,7 +42,7 @@ public final class ForecastNode implements Node {
                                 + " the American Statistical Association 102:359, 2007"),
                 List.of("prediction", "forecast", "reconstruction", "interval", "conformal", "backtest", "baseline",
                         "persistence"),
-                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The same snapshots that were fitted."),
+                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The snapshots that were fitted, or new ones from a Model Applier."),
                         Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator."),
                         Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "Its modes."),
                         Port.optional("verdict", PortType.VERDICT, "Verdict", "Decides between modes and projection;"

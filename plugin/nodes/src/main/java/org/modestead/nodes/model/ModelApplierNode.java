@@ -37,7 +37,7 @@ public final class ModelApplierNode implements Node {
 
                 The new recordings must bring every channel and input of the model by name, in the same unit and counted in the same unit \
                 of time, sampled at the same step: the Snapshot Builder resamples. How it detrends, scales, delays and splits is undone \
-                here; leave it without, and numbers are not even rounded twice. A run named as one of the model is called name (new).
+                here; leave it without, so that no number is rounded twice. A run named as one of the model is called name (new).
 
                 Without new recordings the model's own come out, holdout included.
 
