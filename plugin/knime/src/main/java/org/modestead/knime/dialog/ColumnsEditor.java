@@ -47,7 +47,7 @@ final class ColumnsEditor implements Editor {
     private static final int HEIGHT = 118;
     private static final int MARK_WIDTH = 44;
     private static final int PATTERN_WIDTH = 12;
-    private static final int TYPES_A_LINE = 3;
+    private static final int TYPES_A_LINE = 2;
 
     private final Setting.Columns setting;
     private final Edits edits;

@@ -111,7 +111,7 @@ public final class SettingText {
         }
         double size = Math.abs(value);
         boolean longWritten = size != 0 && (size < 1e-6 || size >= 1e15);
-        return longWritten ? Double.toString(value)
+        return longWritten ? Double.toString(value).replace(".0E", "e").replace('E', 'e')
                 : new BigDecimal(Double.toString(value)).stripTrailingZeros().toPlainString();
     }
 

@@ -56,7 +56,7 @@ class SettingTextTest {
     }
 
     @ParameterizedTest
-    @CsvSource({"0.1, 0.1", "3.0, 3", "1500000, 1500000", "-0.25, -0.25", "0, 0", "1e-300, 1.0E-300", "1e300, 1.0E300"})
+    @CsvSource({"0.1, 0.1", "3.0, 3", "1500000, 1500000", "-0.25, -0.25", "0, 0", "1e-300, 1e-300", "1e300, 1e300", "2.5e-9, 2.5e-9"})
     void numbersArePlainWhereThatIsShort(double value, String text) {
         assertEquals(text, SettingText.plain(value));
     }
