@@ -38,8 +38,8 @@ public final class BacktestNode implements Node {
                                 + " the American Statistical Association 102:359, 2007"),
                 List.of("rolling origin", "accuracy", "baseline", "persistence", "seasonal naive", "drift", "coverage",
                         "refit"),
-                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The same snapshots that were fitted, with"
-                                + " a holdout."),
+                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The snapshots that were fitted, or new ones"
+                                + " from a Model Applier, with a holdout."),
                         Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator; its estimator, rank and"
                                 + " ridge are used again."),
                         Port.optional("verdict", PortType.VERDICT, "Verdict", "Decides between modes and projection.")),

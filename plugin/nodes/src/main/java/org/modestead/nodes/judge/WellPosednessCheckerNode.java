@@ -38,8 +38,8 @@ public final class WellPosednessCheckerNode implements Node {
                         "Trefethen and Embree, Spectra and Pseudospectra, Princeton University Press, 2005"),
                 List.of("verdict", "validation", "residual", "spurious modes", "convergence", "existence",
                         "non-normality", "overlap"),
-                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The same snapshots that were fitted; the"
-                        + " holdout part judges."),
+                List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "The snapshots that were fitted, or new ones"
+                        + " from a Model Applier; the holdout part judges."),
                         Port.of("operator", PortType.OPERATOR, "Operator", "The fitted operator with all its ranks."),
                         Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "The modes to be judged.")),
                 List.of(Port.of("verdict", PortType.VERDICT, "Verdict", "What may be said, overall and mode by mode."),
