@@ -18,7 +18,7 @@ final class Battery {
         return out;
     }
 
-    /** The calibration part. */
+    /** The calibration part; the last of it was reported before. */
     static List<Case> calibrating() {
         List<Case> out = new ArrayList<>();
         out.addAll(LinearFlows.cases());
@@ -26,6 +26,7 @@ final class Battery {
         out.addAll(Oscillators.cases());
         out.addAll(Signals.cases());
         out.addAll(NoModes.cases());
+        out.addAll(Second.cases());
         return out;
     }
 
