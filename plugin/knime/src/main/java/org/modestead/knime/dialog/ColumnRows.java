@@ -2,7 +2,10 @@ package org.modestead.knime.dialog;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
+import java.util.Set;
 import java.util.function.BiConsumer;
+import java.util.stream.Collectors;
 import javax.swing.table.AbstractTableModel;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.table.Column;
@@ -32,17 +35,18 @@ final class ColumnRows extends AbstractTableModel {
     }
 
     /** Returns the rows for a setting: fitting columns of the input, then used names that are not among them. */
-    static List<Row> rows(Setting.Columns setting, java.util.Optional<TableSchema> schema, List<String> used) {
+    static List<Row> rows(Setting.Columns setting, Optional<TableSchema> schema, List<String> used) {
         List<Row> rows = new ArrayList<>();
+        Set<String> marked = Set.copyOf(used);
         List<Column> columns = schema.map(TableSchema::columns).orElse(List.of());
         columns.stream().filter(column -> setting.types().contains(column.type()))
-                .map(column -> new Row(column.name(), column.type().title(), used.contains(column.name()))).forEach(rows::add);
-        List<String> offered = rows.stream().map(Row::name).toList();
+                .map(column -> new Row(column.name(), column.type().title(), marked.contains(column.name()))).forEach(rows::add);
+        Set<String> offered = rows.stream().map(Row::name).collect(Collectors.toSet());
         used.stream().filter(name -> !offered.contains(name)).distinct().map(name -> new Row(name, lacking(schema, name), true)).forEach(rows::add);
         return rows;
     }
 
-    private static String lacking(java.util.Optional<TableSchema> schema, String name) {
+    private static String lacking(Optional<TableSchema> schema, String name) {
         return schema.isEmpty() ? "not known yet" : schema.get().indexOf(name).isEmpty() ? "not in the input" : "of another type";
     }
 

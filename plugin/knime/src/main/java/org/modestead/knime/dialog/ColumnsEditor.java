@@ -8,7 +8,9 @@ import java.awt.KeyboardFocusManager;
 import java.awt.event.ActionEvent;
 import java.awt.event.KeyEvent;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.EnumMap;
+import java.util.HashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
@@ -221,8 +223,12 @@ final class ColumnsEditor implements Editor {
 
     @Override
     public void follow(Draft changed) {
+        boolean same = storedRule().isBlank() && draft.value(setting.key()).equals(changed.value(setting.key()))
+                && draft.value(ColumnRules.key(setting)).equals(changed.value(ColumnRules.key(setting)));
         draft = changed;
-        arrange();
+        if (!same) {
+            arrange();
+        }
     }
 
     @Override
@@ -333,11 +339,13 @@ final class ColumnsEditor implements Editor {
     /** Keeps the order of the table while the list has it; a list in another order keeps its own, new names at the end. */
     private void store(Set<String> changed) {
         List<String> order = schema().map(TableSchema::names).orElse(List.of());
-        List<String> before = names().stream().filter(order::contains).toList();
-        boolean ordered = before.equals(order.stream().filter(before::contains).toList());
+        Map<String, Integer> places = new HashMap<>();
+        order.forEach(name -> places.putIfAbsent(name, places.size()));
+        List<Integer> before = names().stream().filter(places::containsKey).map(places::get).toList();
+        boolean ordered = before.equals(before.stream().sorted().toList());
         List<String> sorted = new ArrayList<>(changed);
         if (ordered) {
-            sorted.sort(java.util.Comparator.comparingInt(name -> order.contains(name) ? order.indexOf(name) : Integer.MAX_VALUE));
+            sorted.sort(Comparator.comparingInt(name -> places.getOrDefault(name, Integer.MAX_VALUE)));
         }
         edits.edited(setting.key(), sorted.isEmpty() ? Optional.empty() : Optional.of(List.copyOf(sorted)));
     }

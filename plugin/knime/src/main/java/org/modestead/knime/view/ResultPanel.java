@@ -33,6 +33,10 @@ import org.modestead.nodes.report.HtmlReport;
 public final class ResultPanel {
     private static final Dimension SIZE = new Dimension(780, 620);
 
+    private static final String FIGURE = "Figure";
+    private static final String FIGURES = "Figures";
+    private static final String TABLES = "Tables";
+
     private final JPanel panel = new JPanel(new BorderLayout());
     private final JTabbedPane tabs = new JTabbedPane();
     private final JComboBox<Named> chooser = new JComboBox<>();
@@ -54,15 +58,17 @@ public final class ResultPanel {
         tabs.getAccessibleContext().setAccessibleName("Parts of the result");
         tabs.addTab("Summary", sentences(result.summary(), "Nothing was said.", "Summary"));
         if (!result.figures().isEmpty()) {
-            tabs.addTab(result.figures().size() == 1 ? "Figure" : "Figures", figures(result.figures()));
+            tabs.addTab(result.figures().size() == 1 ? FIGURE : FIGURES, figures(result.figures()));
         }
         tabs.addTab("Doubts (" + result.doubts().size() + ")", sentences(result.doubts().stream().map(doubt -> doubt.sentence()).toList(),
                 "There is nothing to doubt in what was checked.", "Doubts"));
         if (!result.tables().isEmpty()) {
-            tabs.addTab("Tables", Sheet.scrolled(result.tables().stream().flatMap(table -> ReportPane.grid(table).stream()).toList()));
+            tabs.addTab(TABLES, Sheet.scrolled(result.tables().stream().flatMap(table -> ReportPane.grid(table).stream()).toList()));
         }
         result.document().ifPresent(document -> tabs.addTab("Report", report(document)));
-        tabs.setSelectedIndex(result.document().isPresent() ? tabs.getTabCount() - 1 : result.figures().isEmpty() ? 0 : 1);
+        int figures = tabs.indexOfTab(result.figures().size() == 1 ? FIGURE : FIGURES);
+        tabs.setSelectedIndex(Math.max(0, result.document().isPresent() ? tabs.getTabCount() - 1 : figures >= 0 ? figures
+                : tabs.indexOfTab(TABLES)));
     }
 
     /** Returns what is to be shown; always the same. */
@@ -77,10 +83,10 @@ public final class ResultPanel {
 
     private JComponent figures(List<Figure> figures) {
         chooser.putClientProperty("html.disable", Boolean.TRUE);
-        chooser.getAccessibleContext().setAccessibleName("Figure");
+        chooser.getAccessibleContext().setAccessibleName(FIGURE);
         figures.forEach(figure -> chooser.addItem(new Named(figure)));
         chooser.addActionListener(event -> show(chooser.getItemAt(chooser.getSelectedIndex()).figure()));
-        JLabel label = new JLabel("Figure");
+        JLabel label = new JLabel(FIGURE);
         label.setLabelFor(chooser);
         JButton save = new JButton("Save as SVG...");
         save.addActionListener(event -> save(chooser.getItemAt(chooser.getSelectedIndex()).figure().id() + ".svg",

@@ -13,6 +13,8 @@ import javax.swing.JComponent;
 import javax.swing.JTable;
 import javax.swing.JTextField;
 import org.junit.jupiter.api.Test;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.TableSchema;
 
 /** Choosing several columns: by name with a search, and by rule. */
 class ColumnsEditorTest {
@@ -100,6 +102,16 @@ class ColumnsEditorTest {
         part(JTextField.class).postActionEvent();
         assertEquals(Map.of("channels", List.of("p_9")), form.values());
         assertEquals(List.of("p_9 not known yet true"), rows());
+    }
+
+    /** Every mark sorts the list anew: in time that grows with the columns, not with their square. */
+    @Test
+    void thousandsOfColumnsAreNoHindrance() {
+        List<Column> many = IntStream.range(0, 5_000).mapToObj(i -> Column.number("c" + i)).toList();
+        form.load(Map.of(), Map.of("table", new TableSchema(many)));
+        button("All").doClick();
+        part(JTable.class).setValueAt(false, 2_500, 0);
+        assertEquals(4_999, ((List<?>) form.values().get("channels")).size());
     }
 
     private List<String> rows() {

@@ -1,13 +1,12 @@
 package org.modestead.nodes.contract;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalInt;
 import java.util.Set;
 import org.modestead.nodes.table.CellType;
-import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.TableSchema;
 
 /** Checks column settings against the columns that arrive. */
@@ -33,29 +32,37 @@ public final class ColumnChecks {
             if (setting instanceof Setting.OneColumn one && inputs.containsKey(one.port())) {
                 String name = settings.text(one.key());
                 if (!name.isEmpty()) {
-                    problem(one.key(), name, one.types(), inputs.get(one.port())).ifPresent(problems::add);
+                    problem(one.key(), name, one.types(), columns(inputs.get(one.port()))).ifPresent(problems::add);
                 }
             } else if (setting instanceof Setting.Columns several && inputs.containsKey(several.port())) {
+                Map<String, CellType> columns = columns(inputs.get(several.port()));
                 for (String name : settings.texts(several.key())) {
-                    problem(several.key(), name, several.types(), inputs.get(several.port())).ifPresent(problems::add);
+                    problem(several.key(), name, several.types(), columns).ifPresent(problems::add);
                 }
             }
         }
         return problems;
     }
 
-    private static Optional<SettingProblem> problem(String key, String name, Set<CellType> types, TableSchema schema) {
-        OptionalInt index = schema.indexOf(name);
-        List<String> fitting = schema.columns().stream()
-                .filter(column -> types.contains(column.type())).map(Column::name).toList();
-        if (index.isEmpty()) {
-            return Optional.of(new SettingProblem(key, "the input has no column " + name
-                    + NearestName.hint(name, schema.names()), wanted(types, fitting)));
+    /** Looked up by name, for a table may have thousands of columns and a setting name most of them. */
+    private static Map<String, CellType> columns(TableSchema schema) {
+        Map<String, CellType> columns = new LinkedHashMap<>();
+        schema.columns().forEach(column -> columns.putIfAbsent(column.name(), column.type()));
+        return columns;
+    }
+
+    private static Optional<SettingProblem> problem(String key, String name, Set<CellType> types, Map<String, CellType> columns) {
+        CellType type = columns.get(name);
+        if (type == null) {
+            return Optional.of(new SettingProblem(key, "the input has no column " + name + NearestName.hint(name, columns.keySet()),
+                    wanted(types, fitting(types, columns))));
         }
-        CellType type = schema.columns().get(index.getAsInt()).type();
         return types.contains(type) ? Optional.empty()
-                : Optional.of(new SettingProblem(key, "the column " + name + " holds " + type.title(), wanted(types,
-                        fitting)));
+                : Optional.of(new SettingProblem(key, "the column " + name + " holds " + type.title(), wanted(types, fitting(types, columns))));
+    }
+
+    private static List<String> fitting(Set<CellType> types, Map<String, CellType> columns) {
+        return columns.entrySet().stream().filter(column -> types.contains(column.getValue())).map(Map.Entry::getKey).toList();
     }
 
     private static String wanted(Set<CellType> types, List<String> fitting) {
