@@ -11,6 +11,7 @@ final class Chain {
             "detrend", "mean", "scaling", "std", "delay-depth", 4L, "holdout", "run-share", "calibration", "run-share");
 
     private final Map<String, Rig> rigs = new LinkedHashMap<>();
+    private final Map<String, PortObject[]> inputs = new LinkedHashMap<>();
     private final Map<String, PortObject[]> outputs = new LinkedHashMap<>();
 
     private Chain() {}
@@ -34,10 +35,11 @@ final class Chain {
         return chain;
     }
 
-    private void step(String id, Map<String, Object> raw, PortObject... inputs) throws Exception {
+    private void step(String id, Map<String, Object> raw, PortObject... in) throws Exception {
         Rig rig = Rig.of(id).with(raw);
         rigs.put(id, rig);
-        outputs.put(id, rig.run(inputs));
+        inputs.put(id, in);
+        outputs.put(id, rig.run(in));
     }
 
     Rig rig(String id) {
@@ -46,6 +48,11 @@ final class Chain {
 
     PortObject out(String id, String port) {
         return outputs.get(id)[rigs.get(id).output(port)];
+    }
+
+    /** What a node was run on. */
+    PortObject[] inputs(String id) {
+        return inputs.get(id).clone();
     }
 
     Map<String, PortObject[]> all() {

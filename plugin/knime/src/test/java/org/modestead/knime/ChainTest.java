@@ -11,6 +11,7 @@ import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
+import java.util.concurrent.atomic.AtomicInteger;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -135,6 +136,43 @@ class ChainTest {
         exec.cancel();
         Rig rig = Rig.of("snapshot-builder").with(Chain.SNAPSHOTS);
         assertThrows(CanceledExecutionException.class, () -> rig.engine().execute(exec, chain.out("signal-generator", "table")));
+    }
+
+    /** A person may ask to stop at any time: while rows are read, while numbers are crunched, while tables are written. */
+    @Test
+    void everyNodeAsksWhetherToStopAndStopsThen() throws Exception {
+        for (String id : chain.all().keySet()) {
+            Rig rig = Rig.of(id);
+            rig.engine().settings(chain.rig(id).engine().saved());
+            CountingContext all = new CountingContext(Integer.MAX_VALUE);
+            rig.engine().execute(all, chain.inputs(id));
+            assertTrue(all.asked() > 1, id + " asked " + all.asked() + " times");
+            for (int stopAt : new int[] {1, all.asked() / 2, all.asked()}) {
+                assertThrows(CanceledExecutionException.class, () -> rig.engine().execute(new CountingContext(stopAt), chain.inputs(id)), id);
+            }
+        }
+    }
+
+    /** Counts how often it is asked whether to stop, and says yes from one time on. */
+    private static final class CountingContext extends ExecutionContext {
+        private final AtomicInteger asked = new AtomicInteger();
+        private final int stopAt;
+
+        CountingContext(int stopAt) {
+            super();
+            this.stopAt = stopAt;
+        }
+
+        int asked() {
+            return asked.get();
+        }
+
+        @Override
+        public void checkCanceled() throws CanceledExecutionException {
+            if (asked.incrementAndGet() >= stopAt) {
+                throw new CanceledExecutionException();
+            }
+        }
     }
 
     @Test
