@@ -3,6 +3,7 @@ package org.modestead.knime.columns;
 import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Locale;
 import java.util.Set;
 import java.util.regex.Pattern;
 import java.util.regex.PatternSyntaxException;
@@ -133,8 +134,9 @@ public sealed interface ColumnRule {
         try {
             Pattern.compile(expression);
         } catch (PatternSyntaxException wrong) {
-            throw new SettingFault("setting " + key, "the regular expression \"" + expression + "\" (" + wrong.getDescription().toLowerCase(
-                    java.util.Locale.ROOT) + ")", "write one that can be read, such as p_\\d+ for p_ and a number");
+            throw new SettingFault("setting " + key, "the regular expression \"" + expression + "\" ("
+                    + wrong.getDescription().toLowerCase(Locale.ROOT) + ")",
+                    "write one that can be read, such as p_\\d+ for p_ and a number");
         }
         return new Regex(expression);
     }

@@ -5,6 +5,7 @@ import java.util.HashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
 import org.modestead.nodes.contract.NodeDeclaration;
@@ -56,7 +57,7 @@ public final class ColumnRules {
      */
     public static Resolved resolved(NodeDeclaration declaration, Map<String, Object> raw, Map<String, TableSchema> inputs) {
         Map<String, Object> values = new HashMap<>(raw);
-        values.values().removeIf(java.util.Objects::isNull);
+        values.values().removeIf(Objects::isNull);
         List<SettingProblem> problems = new ArrayList<>();
         for (Setting setting : declaration.settings()) {
             if (setting instanceof Setting.Columns columns) {

@@ -42,7 +42,8 @@ final class ColumnRows extends AbstractTableModel {
         columns.stream().filter(column -> setting.types().contains(column.type()))
                 .map(column -> new Row(column.name(), column.type().title(), marked.contains(column.name()))).forEach(rows::add);
         Set<String> offered = rows.stream().map(Row::name).collect(Collectors.toSet());
-        used.stream().filter(name -> !offered.contains(name)).distinct().map(name -> new Row(name, lacking(schema, name), true)).forEach(rows::add);
+        used.stream().filter(name -> !offered.contains(name)).distinct().map(name -> new Row(name, lacking(schema, name), true))
+                .forEach(rows::add);
         return rows;
     }
 

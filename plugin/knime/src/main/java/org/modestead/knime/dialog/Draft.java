@@ -5,6 +5,7 @@ import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
 import org.modestead.knime.columns.ColumnRules;
@@ -50,7 +51,7 @@ record Draft(Node node, NodeDeclaration declaration, Map<String, Object> values,
     static Draft of(Node node, Map<String, Object> stored, Map<String, TableSchema> inputs) {
         NodeDeclaration declaration = node.declaration();
         Map<String, Object> known = new HashMap<>(stored);
-        known.values().removeIf(java.util.Objects::isNull);
+        known.values().removeIf(Objects::isNull);
         Object version = known.remove(SettingsReader.VERSION);
         boolean older = version instanceof Integer number && number >= 1 && number < declaration.settingsVersion();
         return new Draft(node, declaration, older ? node.upgrade(Map.copyOf(known), (Integer) version) : known, inputs);

@@ -2,6 +2,7 @@ package org.modestead.knime.dialog;
 
 import java.awt.GridBagConstraints;
 import java.awt.Insets;
+import java.awt.Rectangle;
 import java.awt.event.FocusAdapter;
 import java.awt.event.FocusEvent;
 import java.util.ArrayList;
@@ -13,6 +14,7 @@ import javax.swing.JButton;
 import javax.swing.JComponent;
 import javax.swing.JLabel;
 import javax.swing.JPanel;
+import javax.swing.JRadioButton;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingProblem;
 
@@ -78,7 +80,7 @@ final class FieldRow {
             @Override
             public void focusGained(FocusEvent event) {
                 arrived.accept(setting);
-                part.scrollRectToVisible(new java.awt.Rectangle(0, 0, part.getWidth(), part.getHeight()));
+                part.scrollRectToVisible(new Rectangle(0, 0, part.getWidth(), part.getHeight()));
             }
         }));
     }
@@ -139,7 +141,7 @@ final class FieldRow {
     }
 
     private void describe(JComponent part, String description) {
-        if (!(part instanceof javax.swing.JRadioButton)) {
+        if (!(part instanceof JRadioButton)) {
             part.getAccessibleContext().setAccessibleDescription(description);
         }
     }

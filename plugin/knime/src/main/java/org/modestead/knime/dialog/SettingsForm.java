@@ -2,6 +2,7 @@ package org.modestead.knime.dialog;
 
 import java.awt.BorderLayout;
 import java.awt.Dimension;
+import java.awt.KeyboardFocusManager;
 import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
@@ -145,8 +146,8 @@ public final class SettingsForm {
         help.setLineWrap(true);
         help.setWrapStyleWord(true);
         help.setOpaque(false);
-        help.setFocusTraversalKeys(java.awt.KeyboardFocusManager.FORWARD_TRAVERSAL_KEYS, null);
-        help.setFocusTraversalKeys(java.awt.KeyboardFocusManager.BACKWARD_TRAVERSAL_KEYS, null);
+        help.setFocusTraversalKeys(KeyboardFocusManager.FORWARD_TRAVERSAL_KEYS, null);
+        help.setFocusTraversalKeys(KeyboardFocusManager.BACKWARD_TRAVERSAL_KEYS, null);
         help.getAccessibleContext().setAccessibleName("Help");
         help.setText(draft.declaration().purpose());
         JPanel foot = new JPanel(new BorderLayout(0, 4));

@@ -73,8 +73,8 @@ final class GridTable {
     }
 
     private static int width(JTable table, int column) {
-        Component head = table.getTableHeader().getDefaultRenderer().getTableCellRendererComponent(table, table.getColumnName(column), false,
-                false, -1, column);
+        Component head = table.getTableHeader().getDefaultRenderer().getTableCellRendererComponent(table, table.getColumnName(column),
+                false, false, -1, column);
         int widest = head.getPreferredSize().width;
         for (int i = 0; i < table.getRowCount(); i++) {
             widest = Math.max(widest, table.prepareRenderer(table.getCellRenderer(i, column), i, column).getPreferredSize().width);

@@ -27,8 +27,8 @@ import org.modestead.nodes.render.FigureRenderer;
 import org.modestead.nodes.report.HtmlReport;
 
 /**
- * What a node found: its summary, its figures one at a time, its doubts, the first rows of its tables and, where it made one, its report. Drawn from the data that
- * the written report is drawn from. Needs no display to be made and painted.
+ * What a node found: its summary, its figures one at a time, its doubts, the first rows of its tables and, where it made one, its
+ * report. Drawn from the data that the written report is drawn from. Needs no display to be made and painted.
  */
 public final class ResultPanel {
     private static final Dimension SIZE = new Dimension(780, 620);
@@ -77,7 +77,8 @@ public final class ResultPanel {
     }
 
     private static JComponent sentences(List<String> sentences, String none, String name) {
-        String text = sentences.isEmpty() ? none : sentences.stream().map(sentence -> "\u2022 " + sentence).collect(Collectors.joining("\n\n"));
+        String text = sentences.isEmpty() ? none : sentences.stream().map(sentence -> "\u2022 " + sentence)
+                .collect(Collectors.joining("\n\n"));
         return Sheet.scrolled(List.of(Texts.heading(name, true), Texts.paragraph(text, name)));
     }
 
@@ -126,8 +127,8 @@ public final class ResultPanel {
         files.setSelectedFile(new File(name.toLowerCase(Locale.ROOT)));
         if (files.showSaveDialog(panel) == JFileChooser.APPROVE_OPTION) {
             Path file = files.getSelectedFile().toPath();
-            boolean write = !Files.exists(file) || JOptionPane.showConfirmDialog(panel, file.getFileName() + " is there already. Replace it?",
-                    "Save", JOptionPane.OK_CANCEL_OPTION) == JOptionPane.OK_OPTION;
+            boolean write = !Files.exists(file) || JOptionPane.showConfirmDialog(panel, file.getFileName()
+                    + " is there already. Replace it?", "Save", JOptionPane.OK_CANCEL_OPTION) == JOptionPane.OK_OPTION;
             if (write) {
                 write(file, text);
             }
@@ -138,8 +139,8 @@ public final class ResultPanel {
         try {
             Files.writeString(file, text);
         } catch (IOException failed) {
-            JOptionPane.showMessageDialog(panel, file + " could not be written (" + failed.getMessage() + "); choose another place.", "Save",
-                    JOptionPane.ERROR_MESSAGE);
+            JOptionPane.showMessageDialog(panel, file + " could not be written (" + failed.getMessage() + "); choose another place.",
+                    "Save", JOptionPane.ERROR_MESSAGE);
         }
     }
 

@@ -18,7 +18,8 @@ import org.modestead.nodes.table.TableSchema;
 
 /** Choosing several columns: by name with a search, and by rule. */
 class ColumnsEditorTest {
-    private final SettingsForm form = DialogNodes.opened(DialogNodes.node("snapshot-builder"), Map.of("channels", List.of("p_1 [bar]", "gone")));
+    private final SettingsForm form = DialogNodes.opened(DialogNodes.node("snapshot-builder"), Map.of("channels", List.of("p_1 [bar]",
+            "gone")));
 
     @Test
     void onlyColumnsOfFittingTypesAreOffered() {
@@ -82,7 +83,8 @@ class ColumnsEditorTest {
         form.load(Map.of(), DialogNodes.inputs(DialogNodes.node("snapshot-builder")));
         way(ColumnsEditor.Way.REGEX);
         part(JTextField.class).setText("p_(");
-        assertTrue(form.row("channels").message().startsWith("To correct: The regular expression \"p_(\""), form.row("channels").message());
+        assertTrue(form.row("channels").message().startsWith("To correct: The regular expression \"p_(\""),
+                form.row("channels").message());
         assertEquals(1, form.refusals().size());
     }
 

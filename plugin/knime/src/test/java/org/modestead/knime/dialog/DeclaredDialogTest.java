@@ -92,7 +92,8 @@ class DeclaredDialogTest {
         assertTrue(texts(dialog).contains("Set by the flow variable starts."));
         dialog.made.get("origins").use(Optional.empty());
         assertTrue(shown(dialog, JTextField.class, 0).isEditable());
-        assertEquals("Flow variable for Origins", shown(dialog, FlowVariableModelButton.class, 0).getAccessibleContext().getAccessibleName());
+        assertEquals("Flow variable for Origins", shown(dialog, FlowVariableModelButton.class, 0)
+                .getAccessibleContext().getAccessibleName());
     }
 
     private static DeclaredDialog opened(String id, Map<String, Object> raw, DataTableSpec... tables) {
@@ -116,7 +117,8 @@ class DeclaredDialogTest {
 
     private static Map<String, Object> nonDefault(Node node, NodeSettings settings) {
         Map<String, Object> raw = new HashMap<>(NativeSettings.read(node.declaration(), settings));
-        node.declaration().settings().stream().filter(setting -> FieldWords.isDefault(setting, Optional.ofNullable(raw.get(setting.key()))))
+        node.declaration().settings().stream().filter(setting -> FieldWords.isDefault(setting,
+                Optional.ofNullable(raw.get(setting.key()))))
                 .forEach(setting -> raw.remove(setting.key()));
         return raw;
     }

@@ -64,7 +64,8 @@ class SettingsFormTest {
         assertEquals(row.editor().parts().get(0), row.label().getLabelFor());
         for (JComponent part : row.editor().parts()) {
             String name = part.getAccessibleContext().getAccessibleName();
-            assertTrue(name != null && name.contains(place.setting().common().label()), part.getClass().getSimpleName() + " is named " + name);
+            assertTrue(name != null && name.contains(place.setting().common().label()), part.getClass().getSimpleName() + " is named "
+                    + name);
             assertFalse(part.getAccessibleContext().getAccessibleDescription().isBlank());
             assertTrue(part.getToolTipText().startsWith("<html>"));
         }
@@ -82,8 +83,10 @@ class SettingsFormTest {
         for (Map<String, Object> stored : selections(node)) {
             SettingsForm form = opened(node, stored);
             var settings = SettingsReader.read(node.declaration(), stored, node.declaration().settingsVersion());
-            List<String> seen = node.declaration().settings().stream().map(Setting::key).filter(key -> form.row(key).label().isVisible()).toList();
-            assertEquals(Visibility.shown(node.declaration(), settings.settings().orElseThrow()).stream().map(Setting::key).toList(), seen,
+            List<String> seen = node.declaration().settings().stream().map(Setting::key)
+                    .filter(key -> form.row(key).label().isVisible()).toList();
+            assertEquals(Visibility.shown(node.declaration(), settings.settings().orElseThrow()).stream().map(Setting::key).toList(),
+                    seen,
                     stored.toString());
         }
     }
@@ -99,7 +102,8 @@ class SettingsFormTest {
                 }
             }
         }
-        selections.removeIf(stored -> SettingsReader.read(node.declaration(), stored, node.declaration().settingsVersion()).settings().isEmpty());
+        selections.removeIf(stored -> SettingsReader.read(node.declaration(), stored,
+                node.declaration().settingsVersion()).settings().isEmpty());
         return selections;
     }
 
@@ -126,10 +130,12 @@ class SettingsFormTest {
                     .filter(problem -> problem.key().equals(setting.key())).toList();
             boolean shown = form.row(setting.key()).label().isVisible();
             if (shown && (!told.isEmpty() || SettingsReader.read(place.node(), stored).problems().isEmpty())) {
-                assertTrue(form.row(setting.key()).message().startsWith(told.isEmpty() ? "" : "To correct: " + FieldWords.sentences(told)),
+                assertTrue(form.row(setting.key()).message().startsWith(told.isEmpty() ? "" : "To correct: "
+                        + FieldWords.sentences(told)),
                         place + " <- " + typed + ": " + form.row(setting.key()).message() + told);
             }
-            assertEquals(!told.isEmpty(), form.problems().stream().anyMatch(problem -> told.contains(problem)), place + " <- " + typed + told + form.problems());
+            assertEquals(!told.isEmpty(), form.problems().stream().anyMatch(problem -> told.contains(problem)), place + " <- " + typed
+                    + told + form.problems());
             assertEquals(told.isEmpty(), form.refusals().stream().noneMatch(text -> text.startsWith(setting.common().label() + ": ")
                     && told.stream().anyMatch(problem -> text.endsWith(FieldWords.sentence(problem)))), place + " <- " + typed + told);
         }
@@ -143,8 +149,10 @@ class SettingsFormTest {
             SettingsForm form = opened(place.node(), stored);
             assertEquals(stored, form.values(), "opening changes nothing");
             assertEquals(List.of(), form.refusals(), "what was stored wrong is not refused before it is touched");
-            Optional<SettingProblem> problem = form.problems().stream().filter(found -> found.key().equals(place.setting().key())).findFirst();
-            boolean wrong = !SettingsReader.read(place.node().declaration(), stored, place.node().declaration().settingsVersion()).problems().stream()
+            Optional<SettingProblem> problem = form.problems().stream().filter(found -> found.key().equals(place.setting().key()))
+                    .findFirst();
+            boolean wrong = !SettingsReader.read(place.node().declaration(), stored, place.node().declaration().settingsVersion())
+                    .problems().stream()
                     .noneMatch(found -> found.key().equals(place.setting().key()));
             assertTrue(!wrong || problem.isPresent());
             if (wrong && form.row(place.setting().key()).label().isVisible()) {
@@ -152,13 +160,15 @@ class SettingsFormTest {
                 assertTrue(form.status().contains(place.setting().common().label()));
             }
         }
-        Painted.image(Painted.laidOut(opened(place.node(), Map.of(place.setting().key(), "no such thing")).component(), new Dimension(740, 500)));
+        Painted.image(Painted.laidOut(opened(place.node(), Map.of(place.setting().key(), "no such thing")).component(),
+                new Dimension(740, 500)));
     }
 
     @Test
     void valuesThatAreNoneOfTheOptionsAreStillShown() {
         SettingsForm form = opened(DialogNodes.node("operator-fitter"), Map.of("estimator", "dictonary"));
-        assertEquals("dictonary (unknown)", ((javax.swing.JComboBox<?>) form.row("estimator").editor().parts().get(0)).getSelectedItem().toString());
+        assertEquals("dictonary (unknown)",
+                ((javax.swing.JComboBox<?>) form.row("estimator").editor().parts().get(0)).getSelectedItem().toString());
         assertTrue(form.row("estimator").message().contains("perhaps you meant dictionary"));
         SettingsForm number = opened(DialogNodes.node("operator-fitter"), Map.of("ridge", "much"));
         assertEquals("much", ((JTextComponent) number.row("ridge").editor().parts().get(0)).getText());
@@ -195,7 +205,8 @@ class SettingsFormTest {
             for (JComponent part : row.editor().parts()) {
                 assertTrue(part.isFocusable());
                 assertTrue(!(part instanceof JTextArea area) || area.getFocusTraversalKeys(0).stream()
-                        .anyMatch(key -> key.getKeyCode() == java.awt.event.KeyEvent.VK_TAB && key.getModifiers() == 0), "Tab leaves " + row.label().getText());
+                        .anyMatch(key -> key.getKeyCode() == java.awt.event.KeyEvent.VK_TAB && key.getModifiers() == 0), "Tab leaves "
+                                + row.label().getText());
             }
         }
     }

@@ -22,7 +22,8 @@ class DisplayTest {
 
     @Test
     void everyDialogIsWalkedThroughByTheKeyboardInAWindowOfEightHundredBySixHundred() throws IOException, InterruptedException {
-        assumeTrue(Stream.of(System.getenv("PATH").split(File.pathSeparator)).anyMatch(folder -> Files.isExecutable(Path.of(folder, "Xvfb"))),
+        assumeTrue(Stream.of(System.getenv("PATH").split(File.pathSeparator)).anyMatch(folder -> Files.isExecutable(Path.of(folder,
+                "Xvfb"))),
                 "no Xvfb on this machine");
         assumeTrue(Files.exists(Path.of(System.getProperty("java.home"), "lib", "libawt_xawt.so")), "this JDK opens no windows");
         Process screen = new ProcessBuilder("Xvfb", "-displayfd", "1", "-screen", "0", "1280x1024x24", "-nolisten", "tcp")
@@ -37,7 +38,8 @@ class DisplayTest {
     }
 
     private static List<String> walk(String display) throws IOException, InterruptedException {
-        ProcessBuilder command = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(), "-Djava.awt.headless=false",
+        ProcessBuilder command = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(),
+                "-Djava.awt.headless=false",
                 "-cp", System.getProperty("java.class.path"), OnDisplay.class.getName()).redirectErrorStream(true);
         command.environment().put("DISPLAY", display);
         Process walk = command.start();

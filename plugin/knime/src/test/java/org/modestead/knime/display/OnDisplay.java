@@ -29,8 +29,8 @@ import org.modestead.nodes.contract.NodeCatalog;
 import org.modestead.nodes.contract.Setting;
 
 /**
- * Opens the dialog of every node in a window of 800 x 600 on a real display and walks through it with the Tab key alone. Prints one line a
- * page; ends with an exception at the first fault. Run by {@link DisplayTest} in a machine of its own.
+ * Opens the dialog of every node in a window of 800 x 600 on a real display and walks through it with the Tab key alone. Prints one
+ * line a page; ends with an exception at the first fault. Run by {@link DisplayTest} in a machine of its own.
  */
 public final class OnDisplay {
     private static final int MOST_STOPS = 200;
@@ -67,7 +67,8 @@ public final class OnDisplay {
             made.setVisible(true);
             return made;
         });
-        JTabbedPane tabs = now(() -> Painted.shown(form.component()).stream().filter(JTabbedPane.class::isInstance).map(JTabbedPane.class::cast)
+        JTabbedPane tabs = now(() -> Painted.shown(form.component()).stream().filter(JTabbedPane.class::isInstance)
+                .map(JTabbedPane.class::cast)
                 .findFirst().orElseGet(JTabbedPane::new));
         for (int tab = 0; tab < Math.max(1, tabs.getTabCount()); tab++) {
             int shown = tab;
@@ -88,8 +89,9 @@ public final class OnDisplay {
 
     private static void page(Node node, SettingsForm form, JFrame frame, String title) throws Exception {
         List<String> wanted = now(() -> labels(form.component()));
-        List<JComponent> first = now(() -> Painted.shown(form.component()).stream().filter(JLabel.class::isInstance).map(JLabel.class::cast)
-                .filter(label -> label.getLabelFor() != null && isNamed(node, label.getText())).map(label -> (JComponent) label.getLabelFor()).toList());
+        List<JComponent> first = now(() -> Painted.shown(form.component()).stream().filter(JLabel.class::isInstance)
+                .map(JLabel.class::cast).filter(label -> label.getLabelFor() != null && isNamed(node, label.getText()))
+                .map(label -> (JComponent) label.getLabelFor()).toList());
         if (first.isEmpty()) {
             System.out.println(node.declaration().id() + " " + title + ": nothing to set");
             return;
@@ -105,7 +107,8 @@ public final class OnDisplay {
         for (int i = 0; i < first.size(); i++) {
             int here = position(order, first.get(i));
             if (here <= before) {
-                throw new IllegalStateException(node.declaration().id() + " " + title + ": Tab reaches " + wanted.get(i) + " at stop " + here
+                throw new IllegalStateException(node.declaration().id() + " " + title + ": Tab reaches " + wanted.get(i) + " at stop "
+                        + here
                         + ", the field before it at " + before);
             }
             before = here;
@@ -171,7 +174,8 @@ public final class OnDisplay {
             share = different(new Robot().createScreenCapture(frame.getBounds()), now(() -> painted(frame)));
         }
         if (share > MOST_DIFFERENT) {
-            throw new IllegalStateException(node.declaration().id() + ": the screen differs from the painting in " + share + " of the pixels");
+            throw new IllegalStateException(node.declaration().id() + ": the screen differs from the painting in " + share
+                    + " of the pixels");
         }
     }
 

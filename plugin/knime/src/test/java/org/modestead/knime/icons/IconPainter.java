@@ -127,7 +127,8 @@ public final class IconPainter {
                 case "L" -> path.lineTo(in.nextDouble(), in.nextDouble());
                 case "H" -> path.lineTo(in.nextDouble(), path.getCurrentPoint().getY());
                 case "V" -> path.lineTo(path.getCurrentPoint().getX(), in.nextDouble());
-                case "C" -> path.curveTo(in.nextDouble(), in.nextDouble(), in.nextDouble(), in.nextDouble(), in.nextDouble(), in.nextDouble());
+                case "C" -> path.curveTo(in.nextDouble(), in.nextDouble(), in.nextDouble(), in.nextDouble(), in.nextDouble(),
+                        in.nextDouble());
                 case "Z" -> path.closePath();
                 default -> throw new IllegalArgumentException("path " + d + ": step " + step);
             }

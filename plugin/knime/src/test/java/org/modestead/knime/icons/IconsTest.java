@@ -74,7 +74,8 @@ class IconsTest {
     }
 
     private static double share(BufferedImage a, BufferedImage b) {
-        return IntStream.range(0, 256).filter(k -> Math.abs(luminance(a.getRGB(k % 16, k / 16)) - luminance(b.getRGB(k % 16, k / 16))) > 0.2)
+        return IntStream.range(0, 256).filter(k -> Math.abs(luminance(a.getRGB(k % 16, k / 16)) - luminance(b.getRGB(k % 16,
+                k / 16))) > 0.2)
                 .count() / 256.0;
     }
 

@@ -41,7 +41,8 @@ final class PictureFile {
     }
 
     private static int nearest(int[] palette, int colour) {
-        return IntStream.range(0, palette.length).boxed().min(java.util.Comparator.comparingInt(k -> distance(palette[k], colour))).orElseThrow();
+        return IntStream.range(0, palette.length).boxed().min(java.util.Comparator.comparingInt(k -> distance(palette[k], colour)))
+                .orElseThrow();
     }
 
     private static int distance(int a, int b) {

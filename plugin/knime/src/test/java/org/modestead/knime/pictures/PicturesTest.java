@@ -111,7 +111,8 @@ class PicturesTest {
         Node node = NodeCatalog.load(List.of(Node.class.getClassLoader())).find("snapshot-builder").orElseThrow();
         SettingsForm form = new SettingsForm(node);
         JComponent component = form.component();
-        form.load(Map.of("time-column", "tme", "run-column", "run", "gap-factor", 0.5, "channels-by", "wildcard *_vibration"), inputs(node));
+        form.load(Map.of("time-column", "tme", "run-column", "run", "gap-factor", 0.5, "channels-by", "wildcard *_vibration"),
+                inputs(node));
         return component;
     }
 
@@ -148,7 +149,8 @@ class PicturesTest {
 
     private static TreeSet<String> kept() throws IOException {
         try (Stream<Path> files = Files.list(KEPT)) {
-            return files.map(file -> file.getFileName().toString().replaceFirst("\\.png$", "")).collect(Collectors.toCollection(TreeSet::new));
+            return files.map(file -> file.getFileName().toString().replaceFirst("\\.png$", ""))
+                    .collect(Collectors.toCollection(TreeSet::new));
         }
     }
 

@@ -94,7 +94,8 @@ class ResultPanelTest {
 
     @Test
     void aResultWithoutFiguresOrWordsIsShownToo() {
-        ResultPanel view = new ResultPanel(new ResultFile(List.of(), List.of(), List.of(new Doubt("d", "<html>A doubt.")), Optional.empty()));
+        ResultPanel view = new ResultPanel(new ResultFile(List.of(), List.of(), List.of(new Doubt("d", "<html>A doubt.")),
+                Optional.empty()));
         Painted.image(Painted.laidOut(view.component(), new Dimension(780, 620)));
         assertEquals(List.of("Summary", "Doubts (1)"), titles(view));
         assertTrue(texts(view.component()).contains("Nothing was said."));
@@ -117,9 +118,11 @@ class ResultPanelTest {
 
     @Test
     void everyPortTellsItsFacts() {
-        for (String port : List.of("snapshot-builder.snapshots", "kernel-chooser.kernel", "operator-fitter.operator", "spectrum-extractor.spectrum",
+        for (String port : List.of("snapshot-builder.snapshots", "kernel-chooser.kernel", "operator-fitter.operator",
+                "spectrum-extractor.spectrum",
                 "wellposedness-checker.verdict")) {
-            PortType type = List.of(PortType.values()).stream().filter(known -> known.valueClass().isInstance(bench.value(port))).findFirst().orElseThrow();
+            PortType type = List.of(PortType.values()).stream().filter(known -> known.valueClass().isInstance(bench.value(port)))
+                    .findFirst().orElseThrow();
             List<PortFact> facts = PortFiles.describe(type, bench.value(port));
             JComponent view = PortPanel.of(type.title(), facts);
             Painted.image(Painted.laidOut(view, new Dimension(600, 400)));
