@@ -2,6 +2,7 @@ package org.knime.core.node;
 
 import org.knime.core.node.config.ConfigRO;
 import org.knime.core.node.config.ConfigWO;
+import org.w3c.dom.Element;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
 public abstract class NodeFactory<T extends NodeModel> {
@@ -36,6 +37,14 @@ public abstract class NodeFactory<T extends NodeModel> {
     }
 
     public synchronized void init() {
+        throw new UnsupportedOperationException();
+    }
+
+    public final String getNodeName() {
+        throw new UnsupportedOperationException();
+    }
+
+    public Element getXMLDescription() {
         throw new UnsupportedOperationException();
     }
 

@@ -52,6 +52,10 @@ public final class WorkflowManager extends NodeContainer {
         throw new UnsupportedOperationException();
     }
 
+    public void saveNodeSettingsToDefault(final NodeID id) {
+        throw new UnsupportedOperationException();
+    }
+
     public void executeUpToHere(final NodeID... ids) {
         throw new UnsupportedOperationException();
     }

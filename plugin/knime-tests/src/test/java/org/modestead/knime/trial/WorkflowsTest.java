@@ -1,0 +1,55 @@
+package org.modestead.knime.trial;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Whole workflows in the real engine, and the same ones in the embedded host: the same figures, to the last digit. */
+class WorkflowsTest {
+
+    private static final Path FOLDERS = Path.of(System.getProperty("basedir", ""), "../../test-workflows").toAbsolutePath().normalize();
+
+    @TempDir
+    Path folder;
+
+    /** All, or those that are named by {@code -Dplatform.workflows=a,b}. */
+    static Stream<String> names() {
+        String some = System.getProperty("platform.workflows", "");
+        return Stream.of((some.isBlank() ? "three-decays,three-flows,pump-house,driven-shaft,sunspots,city-weather,kept-model" : some).split(","));
+    }
+
+    @ParameterizedTest
+    @MethodSource("names")
+    void aWorkflowGivesTheHostsFiguresAndStillDoesWhenSavedLoadedAndRunAgain(String name) throws Exception {
+        PlatformHome home = PlatformHome.givenOrSkipped();
+        HostRun host = HostRun.of(FOLDERS.resolve(name), folder.resolve("host"));
+        Path saved = folder.resolve(name);
+        PlatformWorkflow built;
+        try (Platform platform = Platform.start(home, folder.resolve("first"))) {
+            built = PlatformWorkflow.build(platform, host.workflow(), saved);
+            platform.ask("execute");
+            assertEquals(List.of(), built.unfinished(platform));
+            Tables.assertSame(host.tables(), built.tables(platform, folder.resolve("executed")));
+            platform.ask("save", saved);
+            assertEquals(List.of(), platform.problemsLogged());
+        }
+        try (Platform platform = Platform.start(home, folder.resolve("second"))) {
+            assertEquals(List.of(""), platform.ask("load", saved), "complaints about the saved workflow");
+            assertEquals(List.of(), built.unfinished(platform));
+            Tables.assertSame(host.tables(), built.tables(platform, folder.resolve("loaded")));
+            platform.ask("reset-all");
+            platform.ask("execute");
+            assertEquals(List.of(), built.unfinished(platform));
+            Tables.assertSame(host.tables(), built.tables(platform, folder.resolve("again")));
+            assertEquals(List.of(), platform.problemsLogged());
+        }
+        System.out.println(name + ": " + host.tables().size() + " tables with "
+                + Tables.lines(host.tables()) + " lines are the embedded host's, digit by digit, in the"
+                + " platform's engine; so they are after saving, loading in a fresh process, and running again.");
+    }
+}
