@@ -96,9 +96,10 @@ class TestWorkflowsTest {
                 + run.outcomes().keySet());
     }
 
+    /** All but the one with workflows of another host. */
     private static List<Path> folders() throws IOException {
         try (Stream<Path> entries = Files.list(FOLDERS)) {
-            return entries.filter(Files::isDirectory).sorted().toList();
+            return entries.filter(Files::isDirectory).filter(folder -> !folder.endsWith("knime")).sorted().toList();
         }
     }
 

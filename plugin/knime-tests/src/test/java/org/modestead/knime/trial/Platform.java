@@ -58,7 +58,7 @@ final class Platform implements AutoCloseable {
         Files.createDirectories(area);
         Path list = Files.write(area.resolve("bundles.txt"), bundles.stream().map(Path::toString).toList());
         Process process = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(), "-Xmx2g",
-                "-Djava.awt.headless=true", "-Duser.language=en", "-cp", home.framework() + System.getProperty("path.separator")
+                "-Djava.awt.headless=true", "-Duser.language=en", "-Duser.name=modestead", "-cp", home.framework() + System.getProperty("path.separator")
                         + Path.of("target", "test-classes").toAbsolutePath(),
                 PlatformStart.class.getName(), area.toString(), list.toString())
                         .redirectError(area.resolve("errors.txt").toFile()).start();

@@ -2,7 +2,10 @@ package org.modestead.knime.trial;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.util.List;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.io.TempDir;
@@ -47,9 +50,32 @@ class WorkflowsTest {
             assertEquals(List.of(), built.unfinished(platform));
             Tables.assertSame(host.tables(), built.tables(platform, folder.resolve("again")));
             assertEquals(List.of(), platform.problemsLogged());
+            keep(platform, saved, name);
         }
         System.out.println(name + ": " + host.tables().size() + " tables with "
                 + Tables.lines(host.tables()) + " lines are the embedded host's, digit by digit, in the"
                 + " platform's engine; so they are after saving, loading in a fresh process, and running again.");
+    }
+
+    /** Saves the workflow without its results into {@code -Dplatform.keep=<folder>}, for test-workflows/knime, when that is given. */
+    private static void keep(Platform platform, Path saved, String name) throws IOException {
+        String folder = System.getProperty("platform.keep", "");
+        if (!folder.isBlank()) {
+            platform.ask("reset-all");
+            platform.ask("save", saved);
+            Path target = Path.of(folder).resolve(name);
+            try (Stream<Path> files = Files.walk(saved)) {
+                for (Path file : files.filter(Files::isRegularFile).filter(WorkflowsTest::belongsToTheWorkflow).toList()) {
+                    Path copy = target.resolve(saved.relativize(file));
+                    Files.createDirectories(copy.getParent());
+                    Files.copy(file, copy, StandardCopyOption.REPLACE_EXISTING);
+                }
+            }
+        }
+    }
+
+    private static boolean belongsToTheWorkflow(Path file) {
+        String name = file.getFileName().toString();
+        return name.equals("settings.xml") || name.equals("workflow.knime") || name.endsWith(".csv") || name.equals("model.zip");
     }
 }
