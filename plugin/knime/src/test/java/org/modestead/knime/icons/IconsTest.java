@@ -25,7 +25,10 @@ class IconsTest {
         assertTrue(IconPainter.names().containsAll(wanted), () -> "missing among " + wanted);
     }
 
-    /** Pixels, not bytes: how a file is packed is up to the JDK. To draw anew run {@link IconPainter} in the module's folder. */
+    /**
+     * Pixels, not bytes: how a file is packed is up to the JDK, and edges differ between JDK 17 and 25 by up to 3 of 255; a shape that
+     * was changed differs by 100 and more. To draw anew run {@link IconPainter} in the module's folder.
+     */
     @Test
     void pixelFilesAreDrawnFromTheVectorSource() throws IOException {
         for (String name : IconPainter.names()) {
@@ -34,7 +37,7 @@ class IconsTest {
                 BufferedImage kept = ImageIO.read(IconPainter.FOLDER.resolve(name + (scale == 1 ? ".png" : "@2x.png")).toFile());
                 assertEquals(IconPainter.SIDE * scale, kept.getWidth(), name);
                 assertEquals(IconPainter.SIDE * scale, kept.getHeight(), name);
-                assertTrue(distance(drawn, kept) <= 2, name + " at scale " + scale + " differs by " + distance(drawn, kept) + " of 255");
+                assertTrue(distance(drawn, kept) <= 16, name + " at scale " + scale + " differs by " + distance(drawn, kept) + " of 255");
             }
         }
     }
