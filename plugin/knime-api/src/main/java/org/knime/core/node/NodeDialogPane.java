@@ -33,6 +33,10 @@ public abstract class NodeDialogPane {
         throw new UnsupportedOperationException();
     }
 
+    public final void finishEditingAndSaveSettingsTo(final NodeSettingsWO settings) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
     public void onOpen() {
         throw new UnsupportedOperationException();
     }

@@ -102,6 +102,15 @@ final class Project {
         return out.toString(StandardCharsets.UTF_8);
     }
 
+    /** Opens a node's dialog, as a person would, and saves from it untouched; returns the settings as they are then written out. */
+    String dialog(int node) throws Exception {
+        NodeSettings saved = new NodeSettings("node");
+        container(node).getDialogPaneWithSettings().finishEditingAndSaveSettingsTo(saved);
+        ByteArrayOutputStream out = new ByteArrayOutputStream();
+        saved.getNodeSettings(MODEL).saveToXML(out);
+        return out.toString(StandardCharsets.UTF_8);
+    }
+
     private NodeSettings settings(NodeID id) {
         NodeSettings all = new NodeSettings("node");
         workflow.saveNodeSettings(id, all);

@@ -40,6 +40,9 @@ final class Requests {
             case "settings" -> {
                 return List.of(project.settings(number(arguments, 0)));
             }
+            case "dialog" -> {
+                return List.of(project.dialog(number(arguments, 0)));
+            }
             case "execute" -> project.executeAll();
             case "start" -> project.start(number(arguments, 0));
             case "await" -> {

@@ -62,6 +62,19 @@ class NodesTest {
         }
     }
 
+    /** Without a display, as everything here. */
+    @Test
+    void everyDialogOpensAndSavesWhatIsStored() throws Exception {
+        try (Platform platform = Platform.start(PlatformHome.givenOrSkipped(), folder.resolve("platform"))) {
+            platform.ask("create", folder.resolve("dialogs"));
+            for (String id : platform.ask("offered")) {
+                int number = Integer.parseInt(platform.ask("node", id, id).get(0));
+                assertEquals(platform.ask("settings", number), platform.ask("dialog", number), id);
+            }
+            assertEquals(List.of(), platform.problemsLogged());
+        }
+    }
+
     @Test
     void everyNodeExecutesAndItsColumnsAreThoseItToldBefore() throws Exception {
         PlatformHome home = PlatformHome.givenOrSkipped();

@@ -1,5 +1,8 @@
 package org.knime.core.node.workflow;
 
+import org.knime.core.node.NodeDialogPane;
+import org.knime.core.node.NotConfigurableException;
+
 /** Signatures of the platform's public class of this name; no behaviour. */
 public abstract class NodeContainer {
     public final NodeID getID() {
@@ -15,6 +18,10 @@ public abstract class NodeContainer {
     }
 
     public void setUIInformation(final NodeUIInformation uiInformation) {
+        throw new UnsupportedOperationException();
+    }
+
+    public NodeDialogPane getDialogPaneWithSettings() throws NotConfigurableException {
         throw new UnsupportedOperationException();
     }
 
