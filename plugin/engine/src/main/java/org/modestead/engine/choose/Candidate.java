@@ -112,7 +112,7 @@ record Candidate(KernelSpec spec, int place, Optional<Fit> fit, Optional<KernelV
                 estimator, estimator.describe(), estimator.kernel(), split, List.of());
         Spectrum spectrum = SpectrumExtractor.extract(operator, progress.part(0, 0.2));
         double longest = split.states(Snapshots.Part.TRAINING).stream().mapToDouble(Candidate::duration).max().orElse(0);
-        return KernelVerdict.of(spectrum, WellPosedness.judge(split, operator, spectrum, JudgeSettings.DEFAULT, progress.part(0.2, 1)), longest);
+        return KernelVerdict.of(spectrum, WellPosedness.judge(split, operator, spectrum, JudgeSettings.DEFAULT.withReplays(0), progress.part(0.2, 1)), longest);
     }
 
     private static double duration(StateRun run) {

@@ -38,7 +38,7 @@ final class KnownAt {
                     .forEach(later -> append(known, later, time + ROUNDING * step, step));
         }
         return new Snapshots(all.channels(), all.inputs(), all.time(), known, List.of(), List.of(), all.step(), all.delay(),
-                all.preparation(), all.facts(), all.doubts());
+                all.preparation(), all.smoothing(), all.facts(), all.doubts());
     }
 
     private static void append(List<Run> known, Run later, double until, double step) {

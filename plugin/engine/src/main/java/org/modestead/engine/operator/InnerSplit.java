@@ -61,7 +61,7 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
     }
 
     private static Snapshots parts(Snapshots s, List<Run> training, List<Run> judging) {
-        return new Snapshots(s.channels(), s.inputs(), s.time(), training, List.of(), judging, s.step(), s.delay(), s.preparation(),
+        return new Snapshots(s.channels(), s.inputs(), s.time(), training, List.of(), judging, s.step(), s.delay(), s.preparation(), s.smoothing(),
                 s.facts(), s.doubts());
     }
 }

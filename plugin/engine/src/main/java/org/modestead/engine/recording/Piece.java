@@ -80,6 +80,11 @@ record Piece(
         }
     }
 
+    /** Returns the same piece smoothed; no part reads a sample of a later one. */
+    Piece smoothed(Smoothing smoothing) {
+        return new Piece(id, recorded, weight, times, smoothing.apply(times, values, ends), inputs, ends, interpolated, filled);
+    }
+
     /**
      * Returns the samples of one part, after as much history as its first predicted sample needs.
      *

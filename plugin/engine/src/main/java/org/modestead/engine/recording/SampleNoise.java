@@ -15,9 +15,10 @@ import org.ejml.data.DMatrixRMaj;
  * <p>Differencing after Gasser, Sroka and Jennen-Steinmetz, Biometrika 73:625, 1986 (there with a line, here with a cubic; formula from
  * memory).
  *
- * @param deviations n, in prepared units
+ * @param deviations n, in prepared units, of samples before smoothing
+ * @param smoothing that the samples went through, and added noise goes through
  */
-public record SampleNoise(double[] deviations) {
+public record SampleNoise(double[] deviations, Smoothing smoothing) {
 
     private static final int NEIGHBOURS = 2;
 
@@ -42,18 +43,23 @@ public record SampleNoise(double[] deviations) {
             double[] sorted = misses.stream().flatMapToDouble(Arrays::stream).map(Math::abs).sorted().toArray();
             out[c] = sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
         }
+        Smoothing smoothing = snapshots.smoothing();
         List<Run> runs = new ArrayList<>(snapshots.runs(Snapshots.Part.TRAINING));
         runs.addAll(snapshots.runs(Snapshots.Part.HOLDOUT));
-        return new SampleNoise(out).atMost(NearestStates.bounds(runs, n));
+        double[] unsmoothed = new SampleNoise(out, smoothing).atMost(NearestStates.bounds(runs, n)).deviations();
+        for (int c = 0; c < n; c++) {
+            out[c] = smoothing.touches(c) ? smoothing.noise().get(c) : unsmoothed[c];
+        }
+        return new SampleNoise(out, smoothing);
     }
 
-    /** Returns the lower of this level and given bounds, channel by channel. */
+    /** Returns the lower of this level and given bounds on the noise of prepared samples, channel by channel; smoothed ones tell nothing. */
     public SampleNoise atMost(double[] bounds) {
         double[] out = deviations.clone();
         for (int c = 0; c < out.length; c++) {
-            out[c] = Math.min(out[c], bounds[c]);
+            out[c] = smoothing.touches(c) ? out[c] : Math.min(out[c], bounds[c]);
         }
-        return new SampleNoise(out);
+        return new SampleNoise(out, smoothing);
     }
 
     /** Returns the level over the standard deviation of the training samples, root mean square over the channels that move. */
@@ -99,8 +105,7 @@ public record SampleNoise(double[] deviations) {
                 for (int i = 0; i < doses.size(); i++) {
                     training.add(disturbed(snapshots.training().get(i), doses.get(i), sign));
                 }
-                out.add(new Snapshots(snapshots.channels(), snapshots.inputs(), snapshots.time(), training, snapshots.calibration(),
-                        snapshots.holdout(), snapshots.step(), snapshots.delay(), snapshots.preparation(), snapshots.facts(), snapshots.doubts()));
+                out.add(snapshots.with(smoothing, training, snapshots.calibration(), snapshots.holdout()));
             }
         }
         return out;
@@ -136,13 +141,13 @@ public record SampleNoise(double[] deviations) {
         return weight;
     }
 
-    /** White noise of this level for every sample of a run, p x n. */
+    /** White noise of this level for every sample of a run, smoothed as the samples were, p x n. */
     public DMatrixRMaj noise(Run run, Random random) {
         DMatrixRMaj out = new DMatrixRMaj(run.values().numRows, run.values().numCols);
         for (int k = 0; k < out.getNumElements(); k++) {
             out.data[k] = deviations[k % deviations.length] * random.nextGaussian();
         }
-        return out;
+        return smoothing.apply(run.times(), out);
     }
 
     /** Returns a run with noise added, or taken off for the sign -1. */

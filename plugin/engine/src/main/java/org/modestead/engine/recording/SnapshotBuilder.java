@@ -10,7 +10,7 @@ import org.modestead.engine.RecordingFault;
 import org.modestead.engine.recording.Snapshots.Part;
 
 /**
- * Turns a recording into snapshots: checks, split into parts, missing cells, gaps, sample times, detrending, scaling.
+ * Turns a recording into snapshots: checks, split into parts, missing cells, gaps, sample times, detrending, scaling, smoothing.
  *
  * <p>Nothing in the training part depends on a value of calibration or holdout, nothing in calibration on holdout:
  * parts are cut at recorded samples first, interpolation reads the own and earlier parts only, trend and scales come
@@ -66,11 +66,17 @@ public final class SnapshotBuilder {
         Preparation preparation = preparation();
         prepare(preparation);
         RunWeights weights = RunWeights.of(training(), plan.weighting(), recording.channels().size());
+        progress.report(0.8, "smoothing");
+        Smoothing smoothing = plan.smoothing().of(training().stream()
+                .flatMap(piece -> piece.part(Part.TRAINING, plan.delay().reach()).stream()).toList(), recording.channels().size());
+        if (smoothing.active()) {
+            smooth(smoothing, preparation);
+        }
         List<Run> training = parts(Part.TRAINING, weights);
         List<Run> calibration = parts(Part.CALIBRATION, weights);
         List<Run> holdout = parts(Part.HOLDOUT, weights);
         Snapshots bare = new Snapshots(recording.channels(), recording.inputs(), recording.time(), training, calibration,
-                holdout, step, plan.delay(), preparation, List.of(), log.doubts());
+                holdout, step, plan.delay(), preparation, smoothing, List.of(), log.doubts());
         progress.report(1, "snapshots ready");
         return new SnapshotFacts(recording, plan, log, weights, bare).complete();
     }
@@ -83,6 +89,15 @@ public final class SnapshotBuilder {
                 piece.prepare(preparation);
             }
         }
+    }
+
+    private void smooth(Smoothing smoothing, Preparation preparation) {
+        for (int i = 0; i < pieces.size(); i++) {
+            progress.checkCancelled();
+            pieces.set(i, pieces.get(i).smoothed(smoothing));
+        }
+        log.add(new Doubt("smoothed", "Noise was smoothed away (" + SnapshotFacts.words(smoothing, recording.channels(), preparation)
+                + "): forecasts, scores and bands are those of the smoothed signal; single samples scatter by that noise in addition."));
     }
 
     private double uniformStep() {

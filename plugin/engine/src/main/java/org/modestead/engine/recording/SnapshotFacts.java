@@ -20,7 +20,7 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
     /** Returns the snapshots with their facts. */
     Snapshots complete() {
         return new Snapshots(bare.channels(), bare.inputs(), bare.time(), bare.training(), bare.calibration(),
-                bare.holdout(), bare.step(), bare.delay(), bare.preparation(), facts(), bare.doubts());
+                bare.holdout(), bare.step(), bare.delay(), bare.preparation(), bare.smoothing(), facts(), bare.doubts());
     }
 
     private List<Fact> facts() {
@@ -36,6 +36,7 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
         facts.add(new Fact("samples at new times", Long.toString(log.interpolated())));
         facts.add(new Fact("detrend", lower(plan.detrend())));
         facts.add(new Fact("scaling", lower(plan.scaling())));
+        facts.add(new Fact("smoothing", bare.smoothing().active() ? words(bare.smoothing(), bare.channels(), bare.preparation()) : "none"));
         facts.add(new Fact("delay", delay()));
         facts.add(new Fact("run weights", weights.words(plan.weighting())));
         for (Part part : Part.values()) {
@@ -69,6 +70,19 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
         }
         String window = new Wording(bare.time()).span(bare.delay().reach() * bare.step().orElse(Double.NaN));
         return "depth " + depth + ", spacing " + bare.delay().spacing() + ", reaching back " + window;
+    }
+
+    /** Returns what was smoothed, for example {@code level: 6 samples either side, noise 0.31 m}. */
+    static String words(Smoothing smoothing, List<Channel> channels, Preparation preparation) {
+        List<String> parts = new ArrayList<>();
+        for (int c = 0; c < channels.size(); c++) {
+            if (smoothing.touches(c)) {
+                String unit = channels.get(c).unit();
+                parts.add(channels.get(c).name() + ": " + smoothing.reach().get(c) + " samples either side, noise "
+                        + Wording.number(smoothing.noise().get(c) * preparation.scale()[c]) + (unit.isEmpty() ? "" : " " + unit));
+            }
+        }
+        return String.join("; ", parts);
     }
 
     private static String labels(List<Channel> channels) {

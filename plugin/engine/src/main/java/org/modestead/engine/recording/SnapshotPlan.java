@@ -17,6 +17,7 @@ import java.util.OptionalDouble;
  * @param holdout what only judges
  * @param calibration what only sets the width of forecast bands, taken from what the holdout leaves
  * @param weighting how much the samples of each training run count in a fit
+ * @param smoothing whether noise is smoothed away
  */
 public record SnapshotPlan(
         GapPolicy gapPolicy,
@@ -29,7 +30,8 @@ public record SnapshotPlan(
         DelayEmbedding delay,
         Split holdout,
         Split calibration,
-        RunWeighting weighting) {
+        RunWeighting weighting,
+        SmoothingRule smoothing) {
 
     /** Gap factor of a plan that names none. */
     public static final double DEFAULT_GAP_FACTOR = 1.5;
@@ -37,7 +39,7 @@ public record SnapshotPlan(
     /** Gaps split, recorded times and values kept, missing cells interpolated, no delays, everything trains. */
     public static final SnapshotPlan DEFAULT = new SnapshotPlan(GapPolicy.SPLIT, OptionalDouble.empty(), Resampling.KEEP,
             OptionalDouble.empty(), MissingPolicy.INTERPOLATE, Detrend.NONE, Scaling.NONE, DelayEmbedding.NONE,
-            new Split.None(), new Split.None(), RunWeighting.EQUAL_SAMPLES);
+            new Split.None(), new Split.None(), RunWeighting.EQUAL_SAMPLES, SmoothingRule.NONE);
 
     /** Checks the ranges. */
     public SnapshotPlan {
@@ -50,6 +52,7 @@ public record SnapshotPlan(
         Objects.requireNonNull(holdout);
         Objects.requireNonNull(calibration);
         Objects.requireNonNull(weighting);
+        Objects.requireNonNull(smoothing);
         if (gapFactor.isPresent() && !(gapFactor.getAsDouble() > 1)) {
             throw new IllegalArgumentException("a gap factor of " + gapFactor.getAsDouble() + " must be above 1");
         }
@@ -70,52 +73,57 @@ public record SnapshotPlan(
 
     /** The same plan with other weights of runs. */
     public SnapshotPlan withWeighting(RunWeighting rule) {
-        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, calibration, rule);
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, calibration, rule, smoothing);
     }
 
     /** The same plan with another way with gaps. */
     public SnapshotPlan withGaps(GapPolicy policy, double factor) {
         return new SnapshotPlan(policy, OptionalDouble.of(factor), resampling, step, missing, detrend, scaling, delay,
-                holdout, calibration, weighting);
+                holdout, calibration, weighting, smoothing);
     }
 
     /** The same plan, resampled to the median step of all runs. */
     public SnapshotPlan withUniformStep() {
         return new SnapshotPlan(gapPolicy, gapFactor, Resampling.UNIFORM, OptionalDouble.empty(), missing, detrend, scaling,
-                delay, holdout, calibration, weighting);
+                delay, holdout, calibration, weighting, smoothing);
     }
 
     /** The same plan, resampled to a step in time units. */
     public SnapshotPlan withUniformStep(double uniform) {
         return new SnapshotPlan(gapPolicy, gapFactor, Resampling.UNIFORM, OptionalDouble.of(uniform), missing, detrend,
-                scaling, delay, holdout, calibration, weighting);
+                scaling, delay, holdout, calibration, weighting, smoothing);
     }
 
     /** The same plan with another way with missing cells. */
     public SnapshotPlan withMissing(MissingPolicy policy) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, policy, detrend, scaling, delay, holdout,
-                calibration, weighting);
+                calibration, weighting, smoothing);
     }
 
     /** The same plan with other detrending and scaling. */
     public SnapshotPlan withPreparation(Detrend trend, Scaling scale) {
-        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, trend, scale, delay, holdout, calibration, weighting);
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, trend, scale, delay, holdout, calibration, weighting, smoothing);
     }
 
     /** The same plan with other delay coordinates. */
     public SnapshotPlan withDelay(int depth, int spacing) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling,
-                new DelayEmbedding(depth, spacing), holdout, calibration, weighting);
+                new DelayEmbedding(depth, spacing), holdout, calibration, weighting, smoothing);
     }
 
     /** The same plan with another holdout. */
     public SnapshotPlan withHoldout(Split split) {
         return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, split,
-                calibration, weighting);
+                calibration, weighting, smoothing);
     }
 
     /** The same plan with another calibration part. */
     public SnapshotPlan withCalibration(Split split) {
-        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, split, weighting);
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, split, weighting, smoothing);
+    }
+
+    /** The same plan with another way with noise. */
+    public SnapshotPlan withSmoothing(SmoothingRule rule) {
+        return new SnapshotPlan(gapPolicy, gapFactor, resampling, step, missing, detrend, scaling, delay, holdout, calibration, weighting, rule);
     }
 }

@@ -20,6 +20,7 @@ import org.modestead.engine.Doubt;
  * @param step uniform time step of every run, empty when uneven times were kept
  * @param delay delay coordinates; depth 1 when {@code step} is empty
  * @param preparation how recorded values became prepared ones
+ * @param smoothing what smoothing did to the prepared values
  * @param facts what was done to the data, for the summary and the report
  * @param doubts what a reader of the results must know
  */
@@ -33,6 +34,7 @@ public record Snapshots(
         OptionalDouble step,
         DelayEmbedding delay,
         Preparation preparation,
+        Smoothing smoothing,
         List<Fact> facts,
         List<Doubt> doubts) {
 
@@ -65,11 +67,34 @@ public record Snapshots(
         Objects.requireNonNull(step);
         Objects.requireNonNull(delay);
         Objects.requireNonNull(preparation);
+        Objects.requireNonNull(smoothing);
         facts = List.copyOf(facts);
         doubts = List.copyOf(doubts);
         if (step.isEmpty() && delay.depth() > 1) {
             throw new IllegalArgumentException("delay coordinates need a uniform step");
         }
+    }
+
+    /** Snapshots that were not smoothed. */
+    public Snapshots(List<Channel> channels, List<Channel> inputs, TimeAxis time, List<Run> training, List<Run> calibration, List<Run> holdout,
+            OptionalDouble step, DelayEmbedding delay, Preparation preparation, List<Fact> facts, List<Doubt> doubts) {
+        this(channels, inputs, time, training, calibration, holdout, step, delay, preparation, Smoothing.none(channels.size()), facts, doubts);
+    }
+
+    /** Returns the same snapshots with runs that were smoothed. */
+    Snapshots with(Smoothing applied, List<Run> fits, List<Run> calibrates, List<Run> judges) {
+        return new Snapshots(channels, inputs, time, fits, calibrates, judges, step, delay, preparation, applied, facts, doubts);
+    }
+
+    /**
+     * Returns the same snapshots with other runs that fit and judge, and none that calibrate.
+     *
+     * @param fits as prepared
+     * @param judges as prepared
+     * @param was what smoothing did to them
+     */
+    public Snapshots replaced(List<Run> fits, List<Run> judges, Smoothing was) {
+        return with(was, fits, List.of(), judges);
     }
 
     /** Returns the runs of one part, prepared but not embedded. */

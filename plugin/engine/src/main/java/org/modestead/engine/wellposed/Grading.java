@@ -11,7 +11,7 @@ import org.modestead.engine.spectrum.Mode;
  *
  * <ol>
  * <li>the space norm grows from rung to rung, or the residual stays above its threshold on every rung: absent
- * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a likeness whose norm still rises, or
+ * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises, or
  * rate or
  *     weight keep changing: drifts
  * <li>too few rungs, nothing held out, a fitted rank that does not show the mode as it is, too small a share captured, or another step
@@ -55,8 +55,9 @@ final class Grading {
             case DRIFTS -> {
                 failed(findings, mode, "clustered-eigenvalues").ifPresent(out::add);
                 failed(findings, mode, "resolved-rates").ifPresent(out::add);
+                failed(findings, mode, "determined-rate").ifPresent(out::add);
                 failed(findings, mode, SignalInSpace.LIKENESS).ifPresent(out::add);
-                failed(findings, mode, "settling").filter(f -> !Double.isNaN(f.value())).ifPresent(out::add);
+                failed(findings, mode, "settling").filter(f -> f.value() > f.threshold()).ifPresent(out::add);
             }
             case UNDECIDED -> {
                 failed(findings, mode, "settling").ifPresent(out::add);

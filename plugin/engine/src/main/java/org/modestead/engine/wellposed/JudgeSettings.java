@@ -16,6 +16,7 @@ package org.modestead.engine.wellposed;
  * @param stepThreshold largest relative difference of rates between a step and the other step; default 0.1
  * @param completenessThreshold least goodness of fit with which 1/‖x‖ heads linearly to zero before a run counts as
  *     escaping, in (0, 1); default 0.98
+ * @param replays with noise that a finding is held against, see {@link Replays}, at least 0 = none; default 8
  */
 public record JudgeSettings(
         int ladderFrom,
@@ -28,14 +29,21 @@ public record JudgeSettings(
         double gapThreshold,
         double captureThreshold,
         double stepThreshold,
-        double completenessThreshold) {
+        double completenessThreshold,
+        int replays) {
 
     /** The documented defaults. */
-    public static final JudgeSettings DEFAULT = new JudgeSettings(0, 0, 0.05, 0.25, 0.1, 3, 0.1, 0.1, 0.5, 0.1, 0.98);
+    public static final JudgeSettings DEFAULT = new JudgeSettings(0, 0, 0.05, 0.25, 0.1, 3, 0.1, 0.1, 0.5, 0.1, 0.98, 8);
 
     /** The same with other ends of the ladder. */
     public JudgeSettings withLadder(int from, int to) {
         return new JudgeSettings(from, to, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
-                gapThreshold, captureThreshold, stepThreshold, completenessThreshold);
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, replays);
+    }
+
+    /** The same with another number of replays. */
+    public JudgeSettings withReplays(int count) {
+        return new JudgeSettings(ladderFrom, ladderTo, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, count);
     }
 }

@@ -19,9 +19,6 @@ import org.modestead.engine.spectrum.Mode;
  */
 public final class Settling implements Check {
 
-    /** A rate that noise changes by more than this many times its own share of the mode is not determined by the data. */
-    private static final double AMPLIFIED = 10;
-
     /** Fewest rungs that can show settling. */
     static final int LEAST_RUNGS = 3;
 
@@ -56,16 +53,7 @@ public final class Settling implements Check {
         }
         List<LadderRow> usable = evidence.usableRungsOf(mode);
         if (usable.size() < LEAST_RUNGS) {
-            double limit = AMPLIFIED * evidence.noiseShare() / Math.sqrt(evidence.spectrum().modes().get(mode - 1).energyShare());
-            double[] upset = found.stream().mapToDouble(row -> row.noise().rate()).filter(change -> change > Math.max(limit, Evidence.USABLE)).sorted()
-                    .toArray();
-            if (upset.length >= LEAST_RUNGS) {
-                return new Finding(mode, id(), upset[upset.length / 2], threshold, false, String.format(Locale.ROOT, "As much noise again, %.2g of the"
-                        + " signal, changes its rate by %.3g of its size on %d of %d rungs: the data do not determine it.", evidence.noiseShare(),
-                        upset[upset.length / 2], upset.length, found.size()));
-            }
-            return new Finding(mode, id(), Double.NaN, threshold, false, "Only on " + usable.size() + " of " + found.size()
-                    + " rungs does noise of the size found in the data leave it as it is.");
+            return few(mode, usable, found.size(), evidence);
         }
         List<LadderRow> telling = evidence.tellingRungsOf(mode);
         List<LadderRow> rows = telling.subList(Math.max(0, telling.size() - Evidence.LAST_RUNGS), telling.size());
@@ -75,6 +63,16 @@ public final class Settling implements Check {
         return new Finding(mode, id(), value, threshold, value <= threshold, String.format(Locale.ROOT,
                 "On the last rungs that tell of it (ranks %d to %d) its rate differs by up to %.3g and its weight by up to %.3g.",
                 rows.get(0).rank(), rows.get(rows.size() - 1).rank(), rate, weight));
+    }
+
+    /** Two rungs that agree are less than settling needs, and more than nothing. */
+    private Finding few(int mode, List<LadderRow> usable, int found, Evidence evidence) {
+        double threshold = evidence.settings().settleThreshold();
+        double change = usable.size() < 2 ? Double.NaN
+                : Math.max(distance(usable, evidence.longest(), true), distance(usable, evidence.longest(), false));
+        String sentence = "Only on " + usable.size() + " of " + found + " rungs does noise of the size found in the data leave it as it is";
+        return change <= threshold ? new Finding(mode, id(), change, threshold, false, String.format(Locale.ROOT, "%s, and these agree to %.3g.", sentence, change))
+                : new Finding(mode, id(), Double.NaN, threshold, false, sentence + ".");
     }
 
     private Optional<Finding> closed(int mode, Evidence evidence, double threshold) {

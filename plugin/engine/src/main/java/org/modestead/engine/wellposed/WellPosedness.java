@@ -28,16 +28,23 @@ public final class WellPosedness {
         JudgingRuns judging = JudgingRuns.of(judged);
         Ladder ladder = Ladder.climb(judged, spectrum, judging, settings, progress.part(0, 0.6));
         Evidence evidence = Evidence.of(judged, spectrum, ladder, judging.heldOut(), settings);
+        List<Finding> plain = examine(evidence, progress.part(0.6, 0.8));
+        boolean noisy = settings.replays() > 0 && judging.heldOut() && judged.snapshots().smoothing().active();
+        List<Finding> findings = noisy ? Replays.of(evidence, ladder.noise()).weighed(plain, evidence, progress.part(0.8, 1)) : plain;
+        List<ModeVerdict> verdicts = spectrum.modes().stream().map(mode -> Grading.grade(mode, evidence, findings)).toList();
+        progress.report(1, "judged");
+        return new Verdict(Grading.overall(verdicts), verdicts, findings, ladder.rows(), doubts(judging, findings));
+    }
+
+    private static List<Finding> examine(Evidence evidence, Progress progress) {
         List<Finding> findings = new ArrayList<>();
         List<Check> checks = checks();
         for (Check check : checks) {
             progress.checkCancelled();
-            progress.report(0.6 + 0.4 * checks.indexOf(check) / checks.size(), check.id());
+            progress.report((double) checks.indexOf(check) / checks.size(), check.id());
             findings.addAll(check.examine(evidence, progress));
         }
-        List<ModeVerdict> verdicts = spectrum.modes().stream().map(mode -> Grading.grade(mode, evidence, findings)).toList();
-        progress.report(1, "judged");
-        return new Verdict(Grading.overall(verdicts), verdicts, findings, ladder.rows(), doubts(judging, findings));
+        return findings;
     }
 
     private static List<Check> checks() {

@@ -12,6 +12,7 @@ import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.SmoothingRule;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.JudgeSettings;
@@ -69,8 +70,9 @@ record Trial(Case truth, double noise, int runs, long seed) {
     private FittedOperator fitted() {
         List<Run> all = truth.system().runs(runs, noise, seed);
         int training = runs - (int) Math.max(1, Math.round(HELD_OUT * runs));
-        Snapshots snapshots = Motions.snapshots(truth.system().step(), truth.look().depth(), all.subList(0, training),
+        Snapshots plain = Motions.snapshots(truth.system().step(), truth.look().depth(), all.subList(0, training),
                 all.subList(training, runs));
+        Snapshots snapshots = SmoothingRule.AUTOMATIC.smooth(plain);
         return OperatorFitter.fit(snapshots, new ExtrapolatedEstimator(truth.look().estimator()), new RankRule.Holdout(30), 0, Progress.NONE);
     }
 }

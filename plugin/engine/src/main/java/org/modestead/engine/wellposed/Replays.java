@@ -1,0 +1,140 @@
+package org.modestead.engine.wellposed;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalInt;
+import java.util.Random;
+import java.util.Set;
+import org.modestead.engine.FitFault;
+import org.modestead.engine.Progress;
+import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.OperatorFitter;
+import org.modestead.engine.operator.RankRule;
+import org.modestead.engine.recording.SampleNoise;
+import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.spectrum.SpectrumExtractor;
+
+/**
+ * Whether what speaks against a mode is more than noise does. The recording is replayed as if its modes existed, see {@link ReplayedRuns}.
+ * Where the checks find the mode there without noise, they are put to replays with noise of the size found in the data. A finding
+ * that is as bad in one of k replays does not count: of k + 1 recordings that differ by their noise alone, the one at hand is the worst with
+ * probability 1/(k + 1), and so a mode that exists is blamed by a check. (A parametric bootstrap test, Davison and Hinkley,
+ * Bootstrap Methods and their Application, 1997, section 4.2.)
+ *
+ * <p>Only noise that smoothing has told from motion is replayed: otherwise chance in the motion itself could pass for noise in its
+ * measurement. Orthogonality is not asked here, nor is a lack of rungs excused: replays make no evidence.
+ *
+ * @param runs as if the modes existed
+ * @param spectrum whose modes are in question
+ * @param operator fitted
+ * @param noise found in the data
+ * @param settings of the judgement
+ */
+record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, SampleNoise noise, JudgeSettings settings) {
+
+    /** Checks whose figures noise makes worse. */
+    private static final Set<String> NOISY = Set.of("settling", "holdout-residual", "step-consistency", "fitted-rank", "noise-sensitivity",
+            "close-residual", "space-norm-growth", "captured-share");
+
+    private static final long SEED = 60103;
+    private static final int MOST_RANKS = 30;
+    private static final double TOO_FAR = 0.5;
+
+    static Replays of(Evidence evidence, SampleNoise noise) {
+        List<Mode> carrying = evidence.spectrum().modes().stream().filter(mode -> mode.constant() || evidence.carries(mode)).toList();
+        return new Replays(ReplayedRuns.of(evidence.operator(), evidence.spectrum(), carrying), evidence.spectrum(), evidence.operator(), noise,
+                evidence.settings().withReplays(0));
+    }
+
+    /** Returns the findings with those passed over that noise makes as well. */
+    List<Finding> weighed(List<Finding> findings, Evidence evidence, Progress progress) {
+        List<Finding> open = new ArrayList<>(findings.stream().filter(f -> questioned(f, evidence)).toList());
+        List<Finding> excused = new ArrayList<>();
+        int steps = evidence.settings().replays() + 1;
+        if (!open.isEmpty() && runs.finite()) {
+            Optional<Judgement> clean = judged(runs.clean(), progress.part(0, 1.0 / steps));
+            open.removeIf(f -> clean.isEmpty() || !clean.get().exists(f, this));
+            Random random = new Random(SEED);
+            for (int k = 0; k < evidence.settings().replays() && !open.isEmpty(); k++) {
+                progress.checkCancelled();
+                Optional<Judgement> replay = judged(runs.noisy(noise, random), progress.part((k + 1.0) / steps, (k + 2.0) / steps));
+                List<Finding> asBad = open.stream().filter(f -> replay.isPresent() && replay.get().asBad(f, this)).toList();
+                excused.addAll(asBad);
+                open.removeAll(asBad);
+            }
+        }
+        return findings.stream().map(f -> excused.contains(f) ? excused(f) : f).toList();
+    }
+
+    private static boolean questioned(Finding f, Evidence evidence) {
+        boolean counts = f.mode() == 0 || evidence.carries(evidence.spectrum().modes().get(f.mode() - 1));
+        return !f.passed() && !Double.isNaN(f.value()) && counts && NOISY.contains(f.check());
+    }
+
+    private static Finding excused(Finding f) {
+        return new Finding(f.mode(), f.check(), f.value(), f.threshold(), true, f.sentence()
+                + " The noise in the data makes as much of it where the mode exists, so this is not held against it.");
+    }
+
+    private Optional<Judgement> judged(Snapshots snapshots, Progress progress) {
+        try {
+            FittedOperator again = OperatorFitter.fit(snapshots, operator.estimator(), new RankRule.Holdout(MOST_RANKS), operator.ridge(), progress.part(0, 0.3));
+            Spectrum found = SpectrumExtractor.extract(again, Progress.NONE);
+            return Optional.of(new Judgement(found, WellPosedness.judge(snapshots, again, found, settings, progress.part(0.3, 1)),
+                    snapshots.training().stream().mapToDouble(run -> run.duration()).max().orElseThrow()));
+        } catch (FitFault fault) {
+            progress.checkCancelled();
+            return Optional.empty();
+        }
+    }
+
+    /**
+     * What was said of a replay.
+     *
+     * @param spectrum of the replay
+     * @param verdict on it
+     * @param longest duration of a run
+     */
+    private record Judgement(Spectrum spectrum, Verdict verdict, double longest) {
+
+        /** Whether the check passes, and the mode with it. */
+        boolean exists(Finding f, Replays replays) {
+            return same(f, replays).filter(Finding::passed).isPresent() && (f.mode() == 0 || reported(matched(f, replays).getAsInt()));
+        }
+
+        private boolean reported(int mode) {
+            Grade grade = verdict.of(mode).orElseThrow().grade();
+            return grade == Grade.STANDS || grade == Grade.SETTLES;
+        }
+
+        /** Whether the same check finds as much against the mode, or the mode is not found. */
+        boolean asBad(Finding f, Replays replays) {
+            Optional<Finding> same = same(f, replays);
+            return same.isEmpty() || !same.get().passed() && (Double.isNaN(same.get().value()) || excess(same.get()) >= excess(f));
+        }
+
+        private Optional<Finding> same(Finding f, Replays replays) {
+            OptionalInt mode = f.mode() == 0 ? OptionalInt.of(0) : matched(f, replays);
+            return mode.isEmpty() ? Optional.empty()
+                    : verdict.findings().stream().filter(g -> g.mode() == mode.getAsInt() && g.check().equals(f.check())).findFirst();
+        }
+
+        private OptionalInt matched(Finding f, Replays replays) {
+            Mode mode = replays.spectrum().modes().get(f.mode() - 1);
+            return spectrum.modes().stream().filter(other -> !other.constant() && distance(mode, other) < TOO_FAR)
+                    .min(java.util.Comparator.comparingDouble(other -> distance(mode, other))).stream().mapToInt(Mode::number).findFirst();
+        }
+
+        private double distance(Mode a, Mode b) {
+            return Ladder.relativeChange(a.rate(), b.rate(), longest) + Math.abs(a.energyShare() - b.energyShare());
+        }
+
+        /** How far a figure lies beyond its threshold, as a factor; the captured share is to stay above its own. */
+        private static double excess(Finding f) {
+            return f.check().equals("captured-share") ? f.threshold() / f.value() : Math.max(1, f.value() / f.threshold());
+        }
+    }
+}
