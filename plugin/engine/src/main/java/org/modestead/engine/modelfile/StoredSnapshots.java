@@ -1,7 +1,9 @@
 package org.modestead.engine.modelfile;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -9,6 +11,7 @@ import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
+import org.modestead.engine.recording.Smoothing;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
 
@@ -24,7 +27,9 @@ public final class StoredSnapshots {
                 .list("inputs", snapshots.inputs(), StoredSnapshots::of)
                 .put("time", new FieldsWriter().choice("kind", snapshots.time().kind()).text("unit", snapshots.time().unit()).done());
         snapshots.step().ifPresent(step -> out.number("step", step));
+        Optional<Smoothing> smoothed = Optional.of(snapshots.smoothing()).filter(Smoothing::active);
         return out.put("delay", of(snapshots.delay())).put("preparation", of(snapshots.preparation()))
+                .put("smoothing", smoothed, StoredSnapshots::of)
                 .put("training", runs(snapshots, snapshots.training()))
                 .put("calibration", runs(snapshots, snapshots.calibration()))
                 .put("holdout", runs(snapshots, snapshots.holdout()))
@@ -46,6 +51,7 @@ public final class StoredSnapshots {
                 in.object("holdout", runs -> readRuns(runs, channels.size(), inputs.size())),
                 step, in.object("delay", StoredSnapshots::readDelay),
                 in.object("preparation", preparation -> readPreparation(preparation, channels.size())),
+                in.optional("smoothing", own -> readSmoothing(own, channels.size())).orElseGet(() -> Smoothing.none(channels.size())),
                 in.objects("facts", fact -> new Snapshots.Fact(fact.text("item"), fact.text("value"))),
                 in.objects("doubts", StoredSnapshots::readDoubt));
     }
@@ -98,6 +104,19 @@ public final class StoredSnapshots {
 
     static Preparation readPreparation(FieldsReader in, int channels) {
         return new Preparation(in.number("origin"), in.vector("offset", channels), in.vector("slope", channels), in.vector("scale", channels));
+    }
+
+    private static Stored.Fields of(Smoothing smoothing) {
+        return new FieldsWriter().wholes("reach", smoothing.reach())
+                .vector("noise", smoothing.noise().stream().mapToDouble(Double::doubleValue).toArray()).done();
+    }
+
+    private static Smoothing readSmoothing(FieldsReader in, int channels) {
+        List<Integer> reach = in.wholes("reach", 0, Short.MAX_VALUE);
+        if (reach.size() != channels) {
+            throw in.wrong("reach", reach.size() + " entries", "one for each of " + channels + " channels");
+        }
+        return new Smoothing(reach, Arrays.stream(in.vector("noise", channels)).boxed().toList());
     }
 
     private static Stored.Fields runs(Snapshots snapshots, List<Run> runs) {

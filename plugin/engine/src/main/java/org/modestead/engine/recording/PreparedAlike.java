@@ -18,8 +18,8 @@ import org.modestead.engine.recording.Snapshots.Fact;
 import org.modestead.engine.recording.Snapshots.Part;
 
 /**
- * New recordings brought to where earlier ones are: the same channels in the same order, the same trend taken out, the same scales, step
- * and delays. They become the holdout, since no fit saw them; training and calibration stay those of the earlier recordings, so that
+ * New recordings brought to where earlier ones are: the same channels in the same order, the same trend taken out, the same scales, step,
+ * smoothing (unless they were smoothed already) and delays. They become the holdout, since no fit saw them; training and calibration stay those of the earlier recordings, so that
  * whatever is said of the new ones is measured against them.
  */
 public final class PreparedAlike {
@@ -137,7 +137,7 @@ public final class PreparedAlike {
         doubts.addAll(fresh.doubts());
         beyond(runs).ifPresent(doubts::add);
         return new Snapshots(fitted.channels(), fitted.inputs(), fitted.time(), fitted.training(), fitted.calibration(), runs, fitted.step(),
-                fitted.delay(), fitted.preparation(), facts(runs), doubts);
+                fitted.delay(), fitted.preparation(), fitted.smoothing(), facts(runs), doubts);
     }
 
     /** The parts of a run follow each other, each after a lead-in that repeats the end of the one before. */
@@ -160,7 +160,8 @@ public final class PreparedAlike {
                 }
             }
         }
-        return new Run(name, times, values, known, 0, parts.get(0).weight());
+        Run run = new Run(name, times, values, known, 0, parts.get(0).weight());
+        return fresh.smoothing().active() ? run : fitted.smoothing().apply(run);
     }
 
     private static int repeated(List<Run> parts, int i) {

@@ -48,7 +48,7 @@ class SampleNoiseTest {
     void copiesComeInPairsWhoseMeanIsTheRun() {
         Run run = Motions.run("a", 50, 0.1, t -> new double[] {t, -t});
         Snapshots snapshots = Motions.snapshots(0.1, 1, List.of(run), List.of());
-        List<Snapshots> copies = new SampleNoise(new double[] {0.5, 0}).disturbed(snapshots, 2, 1);
+        List<Snapshots> copies = new SampleNoise(new double[] {0.5, 0}, Smoothing.none(2)).disturbed(snapshots, 2, 1);
         assertEquals(4, copies.size());
         DMatrixRMaj first = copies.get(0).training().get(0).values();
         DMatrixRMaj second = copies.get(1).training().get(0).values();

@@ -339,7 +339,7 @@ class SnapshotBuilderTest {
         assertEquals(List.of("recorded runs: 1", "recorded samples: 50", "channels: 2: c0, c1", "inputs: none",
                 "step: 0.1 s, as recorded", "gaps: none", "missing cells: 0 of 100", "samples left out: 0",
                 "samples at new times: 0", "detrend: mean", "scaling: unit group",
-                "delay: depth 4, spacing 2, reaching back 0.6 s", "run weights: every sample alike",
+                "smoothing: none", "delay: depth 4, spacing 2, reaching back 0.6 s", "run weights: every sample alike",
                 "training runs: 1", "training samples: 40",
                 "training states: 34", "calibration runs: 0", "calibration samples: 0", "calibration states: 0",
                 "holdout runs: 1", "holdout samples: 10", "holdout states: 11"),

@@ -97,7 +97,7 @@ class ChecksTest {
     @Test
     void idsAreUniqueAndEveryCheckIsFoundByTheServiceLoader() {
         List<String> ids = ServiceLoader.load(Check.class).stream().map(p -> p.get().id()).toList();
-        assertEquals(21, ids.size());
+        assertEquals(22, ids.size());
         assertEquals(ids.size(), ids.stream().distinct().count());
         assertTrue(ids.stream().allMatch(id -> id.matches("[a-z]+(-[a-z]+)*")), ids.toString());
     }
@@ -206,9 +206,24 @@ class ChecksTest {
         for (LadderRow row : ladder(SAME, SAME, SAME, 0.2)) {
             rows.add(new LadderRow(row.rank(), 1, row.rate(), 1, 1, 1, 0.2, 0.2, 0, 0, new NoiseEffect(0.5, 0, 1)));
         }
-        Finding finding = only(new Settling(), evidence(DIAGONAL, List.of(SINGLE), rows), 1);
+        Evidence evidence = evidence(DIAGONAL, List.of(SINGLE), rows);
+        Finding finding = only(new DeterminedRate(), evidence, 1);
         assertEquals(0.5, finding.value());
         assertFalse(finding.passed());
+        assertTrue(Double.isNaN(only(new Settling(), evidence, 1).value()), "no rung tells whether it settles");
+    }
+
+    @Test
+    void twoRungsThatAgreeAreToldButAreTooFew() {
+        List<LadderRow> rows = new ArrayList<>();
+        for (LadderRow row : ladder(SAME, SAME, SAME, 0.2)) {
+            double noise = rows.size() < 2 ? 0.1 : 0.9;
+            rows.add(new LadderRow(row.rank(), 1, row.rate(), 1, 1, 1, 0.2, 0.2, 0, 0, new NoiseEffect(0, noise, 1)));
+        }
+        Finding finding = only(new Settling(), evidence(DIAGONAL, List.of(SINGLE), rows), 1);
+        assertEquals(0, finding.value());
+        assertFalse(finding.passed());
+        assertTrue(finding.sentence().endsWith("and these agree to 0.00."), finding.sentence());
     }
 
     @Test

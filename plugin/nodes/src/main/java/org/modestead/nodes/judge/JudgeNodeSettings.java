@@ -9,7 +9,7 @@ import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 
-/** Settings of the Well-posedness Checker: the ends of the ladder and every threshold, with the engine's defaults. */
+/** Settings of the Well-posedness Checker: the ends of the ladder, every threshold and the replays, with the engine's defaults. */
 final class JudgeNodeSettings {
 
     private static final String LADDER_FROM = "ladder-from";
@@ -23,7 +23,10 @@ final class JudgeNodeSettings {
     private static final String CAPTURE = "capture-threshold";
     private static final String STEP = "step-threshold";
     private static final String COMPLETENESS = "completeness-threshold";
+    private static final String REPLAYS = "replays";
     private static final String LADDER = "Ladder";
+    private static final String NOISE = "Noise";
+    private static final long MOST_REPLAYS = 1000;
     private static final String THRESHOLDS = "Thresholds";
     private static final long LARGEST_RANK = 10_000;
     private static final double LARGEST = 1e12;
@@ -59,7 +62,11 @@ final class JudgeNodeSettings {
                         + " or piece length, and from another; more speaks of a step too coarse.",
                         DEFAULT.stepThreshold()),
                 share(COMPLETENESS, "Fit of an escape", "Goodness of fit with which 1/size must head linearly to zero"
-                        + " before a run counts as escaping in finite time.", DEFAULT.completenessThreshold()));
+                        + " before a run counts as escaping in finite time.", DEFAULT.completenessThreshold()),
+                new Setting.Whole(new Common(REPLAYS, "Replays", NOISE, "A finding against a mode does not count when noise makes as much of"
+                        + " it in one of so many replays of the recording, in which the mode exists by construction. Only for recordings"
+                        + " that the Snapshot Builder has smoothed, since the noise is known there; 0 asks no replay. Each takes about as"
+                        + " long as the check itself."), "", 0, MOST_REPLAYS, OptionalLong.of(DEFAULT.replays())));
     }
 
     private static Setting rank(String key, String label, String help, int initial) {
@@ -89,6 +96,7 @@ final class JudgeNodeSettings {
         return new JudgeSettings(settings.whole(LADDER_FROM), settings.whole(LADDER_TO), settings.number(SHARE),
                 settings.number(RESIDUAL), settings.number(SETTLE), settings.number(NORM_GROWTH),
                         settings.number(OVERLAP),
-                settings.number(GAP), settings.number(CAPTURE), settings.number(STEP), settings.number(COMPLETENESS));
+                settings.number(GAP), settings.number(CAPTURE), settings.number(STEP), settings.number(COMPLETENESS),
+                settings.whole(REPLAYS));
     }
 }

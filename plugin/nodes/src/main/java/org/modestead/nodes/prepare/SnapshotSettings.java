@@ -16,6 +16,7 @@ import org.modestead.engine.recording.MissingPolicy;
 import org.modestead.engine.recording.Resampling;
 import org.modestead.engine.recording.RunWeighting;
 import org.modestead.engine.recording.Scaling;
+import org.modestead.engine.recording.SmoothingRule;
 import org.modestead.engine.recording.SnapshotPlan;
 import org.modestead.engine.recording.Split;
 import org.modestead.nodes.contract.Setting;
@@ -135,6 +136,13 @@ final class SnapshotSettings {
                         new Option("std", "Standard deviation", "Each channel by its own standard deviation."),
                         new Option("unit-group", "Standard deviation of the unit", "Channels that share a unit by their"
                                 + " common standard deviation, so that their relative sizes stay.")), "none"),
+                new Setting.Choice(new Common("smoothing", "Smooth", group, "Whether noise is smoothed away before the fit. Modes keep their"
+                        + " rates, noise loses most of its weight, and verdicts come out right more often. What is forecast and scored"
+                        + " afterwards is the smoothed signal, so leave it off where single readings are to be forecast."), List.of(
+                        new Option("none", "No", "Samples stay as recorded."),
+                        new Option("automatic", "Where it helps", "Every sample becomes the value of a parabola through its neighbours. For"
+                                + " each channel the window is taken that best tells samples left out, over the training runs. Channels"
+                                + " that move too fast, or that are mostly noise, stay as recorded.")), "none"),
                 new Setting.Whole(new Common(DELAY_DEPTH, "Delay depth", group, "Number of samples stacked into one"
                         + " state, the newest and earlier ones. 1 takes the sample alone; take more when fewer channels"
                         + " were measured than the system has degrees of freedom."), "samples", 1, 100_000,
@@ -219,7 +227,7 @@ final class SnapshotSettings {
                 option(Scaling.class, settings, "scaling"),
                 new DelayEmbedding(settings.whole(DELAY_DEPTH), settings.whole("delay-spacing")),
                 split(settings, HOLDOUT), split(settings, CALIBRATION),
-                option(RunWeighting.class, settings, RUN_WEIGHTS));
+                option(RunWeighting.class, settings, RUN_WEIGHTS), option(SmoothingRule.class, settings, "smoothing"));
     }
 
     private static Split split(Settings settings, String key) {
