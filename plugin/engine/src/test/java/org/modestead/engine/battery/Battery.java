@@ -30,10 +30,20 @@ final class Battery {
         return out;
     }
 
-    /** Every case at every noise and number of runs, seeds 1 to a number. */
-    static List<Trial> trials(int seeds) {
+    /** Returns one part by name, or all cases for an empty name. */
+    static List<Case> part(String name) {
+        return switch (name) {
+            case "" -> cases();
+            case "calibration" -> calibrating();
+            case "reporting" -> Reserved.cases();
+            default -> throw new IllegalArgumentException("a part is called calibration or reporting, not " + name);
+        };
+    }
+
+    /** Every given case at every noise and number of runs, seeds 1 to a number. */
+    static List<Trial> trials(List<Case> cases, int seeds) {
         List<Trial> out = new ArrayList<>();
-        for (Case known : cases()) {
+        for (Case known : cases) {
             for (double noise : NOISE) {
                 for (int runs : RUNS) {
                     for (long seed = 1; seed <= seeds; seed++) {
