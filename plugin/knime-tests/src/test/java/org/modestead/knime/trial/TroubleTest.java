@@ -6,6 +6,8 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
@@ -118,7 +120,7 @@ class TroubleTest {
         platform.ask("start", spectrum);
         assertEquals(List.of("true"), platform.ask("await", 300));
         assertEquals("executed", platform.state(spectrum).word(), platform.state(spectrum).toString());
-        long least = Long.MAX_VALUE;
+        List<Long> taken = new ArrayList<>();
         for (int i = 0; i < 3; i++) {
             platform.ask("start", check);
             while (!platform.state(check).word().equals("executing")) {
@@ -126,12 +128,11 @@ class TroubleTest {
                 Thread.sleep(20);
             }
             Thread.sleep(400 + 300 * i);
-            long taken = Long.parseLong(platform.ask("cancel", check).get(0));
+            taken.add(Long.parseLong(platform.ask("cancel", check).get(0)));
             assertEquals("configured", platform.state(check).word(), platform.state(check).toString());
-            least = Math.min(least, taken);
         }
-        System.out.println("Cancelling the Well-posedness Checker took " + least + " ms at the least of three tries.");
-        assertTrue(least <= A_SECOND, least + " ms");
+        System.out.println("Cancelling the Well-posedness Checker took " + taken + " ms.");
+        assertTrue(Collections.min(taken) <= A_SECOND, taken + " ms");
         assertEquals(List.of(), platform.problemsLogged());
     }
 
