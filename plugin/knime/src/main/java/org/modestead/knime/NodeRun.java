@@ -93,7 +93,9 @@ final class NodeRun {
         }
         Prepared prepared = prepare(raw, specs);
         Progress progress = new ExecutionProgress(exec);
-        NodeResult result = node.run(new NodeInputs(values(inputs)), prepared.settings(), context(progress.part(0, WORK)));
+        NodeInputs values = new NodeInputs(values(inputs));
+        RunContext context = context(progress.part(0, WORK));
+        NodeResult result = AttendedWork.result(() -> node.run(values, prepared.settings(), context), progress, "Modestead " + declaration.id());
         progress.checkCancelled();
         TableWriter writer = new TableWriter(exec, progress.part(WORK, 1));
         List<PortObject> outputs = new ArrayList<>();

@@ -7,9 +7,7 @@ import java.util.List;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.Progress;
-import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.fixtures.Motions;
-import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.ExtrapolatedEstimator;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.LinearEstimator;
@@ -25,7 +23,7 @@ import org.modestead.engine.spectrum.SpectrumExtractor;
 
 class ReplaysTest {
 
-    /** x' = -x, y' = -2y: x and y are eigenfunctions, and among monomials of degree 2 they are reportable. */
+    /** x' = -x, y' = -2y: x and y are eigenfunctions, orthogonal in the space of (1 + x·y)². */
     private static Snapshots decays(int runs, double noise, long seed) {
         Random random = new Random(seed);
         List<Run> all = new java.util.ArrayList<>();
@@ -39,8 +37,8 @@ class ReplaysTest {
     }
 
     private static FittedOperator fitted(Snapshots snapshots) {
-        return OperatorFitter.fit(snapshots, new ExtrapolatedEstimator(new DictionaryEstimator(Dictionary.monomials(2))), new RankRule.Holdout(30), 0,
-                Progress.NONE);
+        return OperatorFitter.fit(snapshots, new ExtrapolatedEstimator(new OccupationEstimator(Motions.kernel("polynomial", "degree", 2, "offset", 1),
+                new SegmentPlan(10, 10), 1)), new RankRule.Holdout(30), 0, Progress.NONE);
     }
 
     @Test
@@ -49,7 +47,7 @@ class ReplaysTest {
         int with = 0;
         int told = 0;
         for (long seed = 1; seed <= 6; seed++) {
-            FittedOperator operator = fitted(decays(5, 0.02, seed));
+            FittedOperator operator = fitted(decays(8, 0.02, seed));
             Verdict plain = Motions.judge(operator, JudgeSettings.DEFAULT.withReplays(0));
             Verdict weighed = Motions.judge(operator, JudgeSettings.DEFAULT);
             without += plain.overall().grade() == Grade.STANDS || plain.overall().grade() == Grade.SETTLES ? 1 : 0;

@@ -132,7 +132,7 @@ class TroubleTest {
             assertEquals("configured", platform.state(check).word(), platform.state(check).toString());
         }
         System.out.println("Cancelling the Well-posedness Checker took " + taken + " ms.");
-        assertTrue(Collections.min(taken) <= A_SECOND, taken + " ms");
+        assertTrue(Collections.max(taken) <= A_SECOND, taken + " ms");
         assertEquals(List.of(), platform.problemsLogged());
     }
 
