@@ -37,8 +37,7 @@ final class KnownAt {
             all.runs(part).stream().filter(later -> later.id().equals(run))
                     .forEach(later -> append(known, later, time + ROUNDING * step, step));
         }
-        return new Snapshots(all.channels(), all.inputs(), all.time(), known, List.of(), List.of(), all.step(), all.delay(),
-                all.preparation(), all.smoothing(), all.facts(), all.doubts());
+        return all.replaced(known, List.of(), all.smoothing());
     }
 
     private static void append(List<Run> known, Run later, double until, double step) {

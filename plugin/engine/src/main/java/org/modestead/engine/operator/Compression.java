@@ -16,7 +16,7 @@ import org.modestead.engine.basis.FunctionBasis;
  *
  * <p>Where m is large, the arrays are held by factors and never formed; see {@link FactoredCompression}.
  */
-public sealed interface Compression permits GramCompression, FactoredCompression, ConstrainedCompression, ExtrapolatedCompression {
+public sealed interface Compression permits GramCompression, FactoredCompression, CorrectedCompression {
 
     /** Returns the functions b. */
     FunctionBasis basis();

@@ -31,12 +31,12 @@ public record ExtrapolatedEstimator(Estimator plain) implements Estimator {
 
     @Override
     public Compression compress(Snapshots snapshots, Progress progress) {
-        return new ExtrapolatedCompression(plain.compress(snapshots, progress), whitened -> {
+        return new CorrectedCompression(plain.compress(snapshots, progress), whitened -> {
             if (whitened.inputs().isPresent()) {
                 throw new FitFault("noise correction", "inputs are separated, and the extrapolation to no noise does not reckon with them",
                         "choose total least squares, or fit without noise correction");
             }
-            return NoiseMoments.of(plain, snapshots, whitened, progress);
+            return whitened.corrected(NoisyStep.of(whitened.action(), NoiseMoments.of(plain, snapshots, whitened, progress)));
         });
     }
 

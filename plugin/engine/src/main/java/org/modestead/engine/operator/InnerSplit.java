@@ -46,7 +46,7 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
                 last.add(rows(run, Math.max(0, cut - 1 - snapshots.delay().reach()), run.samples()));
             }
         }
-        Snapshots fitting = parts(snapshots, first, last);
+        Snapshots fitting = snapshots.replaced(first, last, snapshots.smoothing());
         List<StateRun> judging = fitting.states(Snapshots.Part.HOLDOUT).stream().filter(run -> run.count() > 1).toList();
         if (judging.isEmpty()) {
             throw new FitFault("choice by held-out data", "the training runs are too short to leave a quarter out",
@@ -58,10 +58,5 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
     private static Run rows(Run run, int from, int to) {
         return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), Matrices.block(run.values(), from, to, 0, run.values().numCols),
                 Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0, run.weight());
-    }
-
-    private static Snapshots parts(Snapshots s, List<Run> training, List<Run> judging) {
-        return new Snapshots(s.channels(), s.inputs(), s.time(), training, List.of(), judging, s.step(), s.delay(), s.preparation(), s.smoothing(),
-                s.facts(), s.doubts());
     }
 }

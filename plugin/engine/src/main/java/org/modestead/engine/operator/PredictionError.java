@@ -1,5 +1,6 @@
 package org.modestead.engine.operator;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
@@ -47,27 +48,49 @@ public final class PredictionError {
     /** Errors of predicting the state half a run ahead, where spurious modes have had time to grow; 0 where inputs drive it on the way. */
     private static double[] halfwayAhead(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
             List<Integer> ranks, Progress progress) {
-        double[] errors = new double[ranks.size()];
         if (compression.inputs().isPresent()) {
-            return errors;
+            return new double[ranks.size()];
         }
+        double[] errors = errors(compression, runs, functions, ranks, progress, new Ahead() {
+            @Override
+            public int steps(StateRun run) {
+                return Math.max(1, (run.count() - 1) / 2);
+            }
+
+            @Override
+            public DMatrixRMaj states(StateRun run) {
+                return Matrices.block(run.states(), steps(run), run.count(), 0, run.states().numCols);
+            }
+        });
+        return Arrays.stream(errors).map(error -> Double.isNaN(error) ? Double.POSITIVE_INFINITY : error).toArray();
+    }
+
+    /** How far is predicted, and what is to be hit there. */
+    private interface Ahead {
+        int steps(StateRun run);
+
+        DMatrixRMaj states(StateRun run);
+    }
+
+    private static double[] errors(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
+            List<Integer> ranks, Progress progress, Ahead ahead) {
+        double[] errors = new double[ranks.size()];
         double spread = 0;
         for (int i = 0; i < runs.size(); i++) {
             StateRun run = runs.get(i);
-            int ahead = Math.max(1, (run.count() - 1) / 2);
-            DMatrixRMaj later = Matrices.block(run.states(), ahead, run.count(), 0, run.states().numCols);
+            int steps = ahead.steps(run);
+            DMatrixRMaj later = ahead.states(run);
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
                 OrthonormalCompression rung = compression.leading(ranks.get(k));
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), ahead), rung.observable());
-                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - ahead, 0, rung.rank());
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), steps), rung.observable());
+                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - steps, 0, rung.rank());
                 errors[k] += squaredDistance(Matrices.product(now, carried), later);
             }
             spread += squaredSpread(later);
         }
         for (int k = 0; k < errors.length; k++) {
-            double error = Math.sqrt(errors[k] / spread);
-            errors[k] = Double.isNaN(error) ? Double.POSITIVE_INFINITY : error;
+            errors[k] = Math.sqrt(errors[k] / spread);
         }
         return errors;
     }
@@ -87,24 +110,17 @@ public final class PredictionError {
      */
     public static double[] relative(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
             List<Integer> ranks, Progress progress) {
-        double[] errors = new double[ranks.size()];
-        double spread = 0;
-        for (int i = 0; i < runs.size(); i++) {
-            StateRun run = runs.get(i);
-            DMatrixRMaj next = compression.signalAhead(run);
-            for (int k = 0; k < errors.length; k++) {
-                progress.checkCancelled();
-                OrthonormalCompression rung = compression.leading(ranks.get(k));
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), 1), rung.observable());
-                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - 1, 0, rung.rank());
-                errors[k] += squaredDistance(Matrices.product(now, carried), next);
+        return errors(compression, runs, functions, ranks, progress, new Ahead() {
+            @Override
+            public int steps(StateRun run) {
+                return 1;
             }
-            spread += squaredSpread(next);
-        }
-        for (int k = 0; k < errors.length; k++) {
-            errors[k] = Math.sqrt(errors[k] / spread);
-        }
-        return errors;
+
+            @Override
+            public DMatrixRMaj states(StateRun run) {
+                return compression.signalAhead(run);
+            }
+        });
     }
 
     /**
@@ -121,7 +137,7 @@ public final class PredictionError {
     public static double[] leastOfNewest(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
             List<Integer> ranks, int channels) {
         double[] least = new double[channels];
-        java.util.Arrays.fill(least, Double.POSITIVE_INFINITY);
+        Arrays.fill(least, Double.POSITIVE_INFINITY);
         for (int rank : ranks) {
             OrthonormalCompression rung = compression.leading(rank);
             double[] squares = new double[channels];

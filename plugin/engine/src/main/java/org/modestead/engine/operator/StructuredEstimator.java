@@ -32,7 +32,7 @@ public record StructuredEstimator(Estimator free, Structure structure) implement
 
     @Override
     public Compression compress(Snapshots snapshots, Progress progress) {
-        return new ConstrainedCompression(free.compress(snapshots, progress), structure);
+        return new CorrectedCompression(free.compress(snapshots, progress), whitened -> whitened.constrained(structure));
     }
 
     @Override

@@ -43,6 +43,11 @@ public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inp
         return new Run(id, times, values, inputs, leadIn, other);
     }
 
+    /** The same run with other values, p x n. */
+    public Run withValues(DMatrixRMaj other) {
+        return new Run(id, times, other, inputs, leadIn, weight);
+    }
+
     /**
      * A run without inputs and without lead-in.
      *

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -32,25 +33,22 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
      */
     public static SampleNoise rough(Snapshots snapshots) {
         int n = snapshots.channels().size();
-        double[] out = new double[n];
-        for (int c = 0; c < n; c++) {
-            List<double[]> misses = new ArrayList<>();
-            for (Snapshots.Part part : List.of(Snapshots.Part.TRAINING, Snapshots.Part.HOLDOUT)) {
-                for (Run run : snapshots.runs(part)) {
-                    misses.add(misses(run, c));
-                }
-            }
-            double[] sorted = misses.stream().flatMapToDouble(Arrays::stream).map(Math::abs).sorted().toArray();
-            out[c] = sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
-        }
         Smoothing smoothing = snapshots.smoothing();
-        List<Run> runs = new ArrayList<>(snapshots.runs(Snapshots.Part.TRAINING));
-        runs.addAll(snapshots.runs(Snapshots.Part.HOLDOUT));
-        double[] unsmoothed = new SampleNoise(out, smoothing).atMost(NearestStates.bounds(runs, n)).deviations();
+        List<Run> runs = new ArrayList<>(snapshots.training());
+        runs.addAll(snapshots.holdout());
+        double[] out = new double[n];
+        boolean asked = false;
         for (int c = 0; c < n; c++) {
-            out[c] = smoothing.touches(c) ? smoothing.noise().get(c) : unsmoothed[c];
+            out[c] = smoothing.touches(c) ? smoothing.noise().get(c) : fromNeighbours(runs, c);
+            asked |= !smoothing.touches(c);
         }
-        return new SampleNoise(out, smoothing);
+        SampleNoise level = new SampleNoise(out, smoothing);
+        return asked ? level.atMost(NearestStates.bounds(runs, n)) : level;
+    }
+
+    private static double fromNeighbours(List<Run> runs, int channel) {
+        double[] sorted = runs.stream().flatMapToDouble(run -> Arrays.stream(misses(run, channel))).map(Math::abs).sorted().toArray();
+        return sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
     }
 
     /** Returns the lower of this level and given bounds on the noise of prepared samples, channel by channel; smoothed ones tell nothing. */
@@ -96,16 +94,23 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
      * @param seed of the noise
      */
     public List<Snapshots> disturbed(Snapshots snapshots, int pairs, long seed) {
-        Random random = new Random(seed);
-        List<Snapshots> out = new ArrayList<>();
+        return copies(snapshots.training(), pairs, new Random(seed)).stream()
+                .map(training -> snapshots.with(smoothing, training, snapshots.calibration(), snapshots.holdout())).toList();
+    }
+
+    /**
+     * Returns noisier copies of runs: {@code 2 pairs} lists, the second of a pair with the noise of the first taken off instead of added.
+     *
+     * @param runs not written
+     * @param pairs number of pairs
+     * @param random draws the noise
+     */
+    public List<List<Run>> copies(List<Run> runs, int pairs, Random random) {
+        List<List<Run>> out = new ArrayList<>();
         for (int pair = 0; pair < pairs; pair++) {
-            List<DMatrixRMaj> doses = snapshots.training().stream().map(run -> noise(run, random)).toList();
+            List<DMatrixRMaj> doses = runs.stream().map(run -> noise(run, random)).toList();
             for (double sign : new double[] {1, -1}) {
-                List<Run> training = new ArrayList<>();
-                for (int i = 0; i < doses.size(); i++) {
-                    training.add(disturbed(snapshots.training().get(i), doses.get(i), sign));
-                }
-                out.add(snapshots.with(smoothing, training, snapshots.calibration(), snapshots.holdout()));
+                out.add(IntStream.range(0, runs.size()).mapToObj(i -> disturbed(runs.get(i), doses.get(i), sign)).toList());
             }
         }
         return out;

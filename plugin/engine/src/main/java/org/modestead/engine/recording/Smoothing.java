@@ -1,7 +1,9 @@
 package org.modestead.engine.recording;
 
+import java.util.Arrays;
 import java.util.Collections;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -51,24 +53,29 @@ public record Smoothing(List<Integer> reach, List<Double> noise) {
 
     /** Smooths a stretch cut into parts, each from its own samples and those of parts before it. */
     DMatrixRMaj apply(double[] times, DMatrixRMaj values, int[] ends) {
-        int n = values.numCols;
         DMatrixRMaj out = values.copy();
-        for (int c = 0; c < n; c++) {
+        for (int h : reach.stream().filter(h -> h > 0).distinct().toList()) {
+            int[] channels = IntStream.range(0, reach.size()).filter(c -> reach.get(c) == h).toArray();
             int begin = 0;
             for (int end : ends) {
-                int h = Math.min(reach.get(c), (end - 1) / 2);
-                double[] known = java.util.Arrays.copyOf(times, end);
-                for (int k = begin; h > 0 && k < end; k++) {
-                    out.set(k, c, LocalParabola.at(known, k, h).value(values.data, n, c));
-                }
+                smooth(Arrays.copyOf(times, end), begin, Math.min(h, (end - 1) / 2), values, channels, out);
                 begin = end;
             }
         }
         return out;
     }
 
+    private static void smooth(double[] known, int begin, int h, DMatrixRMaj values, int[] channels, DMatrixRMaj out) {
+        for (int k = begin; h > 0 && k < known.length; k++) {
+            LocalParabola parabola = LocalParabola.at(known, k, h);
+            for (int c : channels) {
+                out.set(k, c, parabola.value(values.data, values.numCols, c));
+            }
+        }
+    }
+
     /** Returns a copy of a whole run, smoothed. */
     Run apply(Run run) {
-        return new Run(run.id(), run.times(), apply(run.times(), run.values()), run.inputs(), run.leadIn(), run.weight());
+        return run.withValues(apply(run.times(), run.values()));
     }
 }

@@ -53,20 +53,12 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
     JudgingRuns with(FittedOperator operator, SampleNoise noise) {
         int states = runs.stream().mapToInt(StateRun::count).sum();
         int copies = Math.max(2, Math.min(MOST_COPIES, 2 * (ENOUGH_STATES / (2 * states) + 1)));
-        Random random = new Random(SEED);
-        List<Run> recorded = operator.snapshots().runs(heldOut ? Snapshots.Part.HOLDOUT : Snapshots.Part.TRAINING).stream()
-                .filter(run -> run.samples() - operator.snapshots().delay().reach() > 1).toList();
-        List<DMatrixRMaj> noisier = new ArrayList<>();
-        for (int pair = 0; pair < copies / 2; pair++) {
-            List<DMatrixRMaj> doses = recorded.stream().map(run -> noise.noise(run, random)).toList();
-            for (double sign : new double[] {1, -1}) {
-                for (int i = 0; i < recorded.size(); i++) {
-                    Run run = SampleNoise.disturbed(recorded.get(i), doses.get(i), sign);
-                    noisier.add(operator.compression().evaluate(operator.compression().arguments(operator.snapshots().embed(run))));
-                }
-            }
-        }
-        return new JudgingRuns(heldOut, runs, functions, List.copyOf(noisier), longest);
+        Snapshots snapshots = operator.snapshots();
+        List<Run> recorded = snapshots.runs(heldOut ? Snapshots.Part.HOLDOUT : Snapshots.Part.TRAINING).stream()
+                .filter(run -> run.samples() - snapshots.delay().reach() > 1).toList();
+        List<DMatrixRMaj> noisier = noise.copies(recorded, copies / 2, new Random(SEED)).stream().flatMap(List::stream)
+                .map(run -> operator.compression().evaluate(operator.compression().arguments(snapshots.embed(run)))).toList();
+        return new JudgingRuns(heldOut, runs, functions, noisier, longest);
     }
 
     /**

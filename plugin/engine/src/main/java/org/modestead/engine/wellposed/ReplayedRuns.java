@@ -75,7 +75,7 @@ record ReplayedRuns(List<Run> training, List<Run> holdout, Snapshots like) {
                 add(run, states.times(), values, spectrum, j, out);
             }
         }
-        return new Run(run.id(), run.times(), out, run.inputs(), run.leadIn(), run.weight());
+        return run.withValues(out);
     }
 
     private static void add(Run run, double[] times, ZMatrixRMaj values, Spectrum spectrum, int j, DMatrixRMaj out) {

@@ -64,7 +64,7 @@ class StructureTest {
         for (Structure structure : List.of(Structure.SELF_ADJOINT, Structure.SKEW, Structure.UNITARY)) {
             Evolution evolution = structure == Structure.SKEW ? new Evolution.Generator(1) : new Evolution.StepMap(1);
             FactoredCompression data = random(seed, size, product, evolution);
-            OrthonormalCompression white = new ConstrainedCompression(data, structure).whiten(size);
+            OrthonormalCompression white = new CorrectedCompression(data, free -> free.constrained(structure)).whiten(size);
             assertStructure(structure, white.action());
             double least = misfit(data, white, white.action());
             Random random = new Random(seed + 1);
@@ -108,7 +108,7 @@ class StructureTest {
         InnerProduct product = inSpace ? InnerProduct.SPACE : InnerProduct.DATA;
         for (Structure structure : Structure.values()) {
             Evolution evolution = structure == Structure.SKEW ? new Evolution.Generator(1) : new Evolution.StepMap(1);
-            Compression data = new ConstrainedCompression(random(seed, size, product, evolution), structure);
+            Compression data = new CorrectedCompression(random(seed, size, product, evolution), free -> free.constrained(structure));
             OrthonormalCompression full = data.whiten(size);
             for (int r = 1; r < size; r++) {
                 assertArrayEquals(data.whiten(r).action().data, full.leading(r).action().data, 1e-7, structure + " at rank " + r);

@@ -1,17 +1,17 @@
 package org.modestead.engine.operator;
 
-import java.util.function.Function;
+import java.util.function.UnaryOperator;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.basis.FunctionBasis;
 
 /**
- * A compression whose action is extrapolated to no noise once it is written in orthonormal functions; the four arrays are those of the
- * data.
+ * A compression whose action is corrected once it is written in orthonormal functions, by what noise adds or by a structure it must
+ * have; the four arrays are those of the data.
  *
  * @param plain as the data give it
- * @param noise finds what noise adds to the moments of given functions
+ * @param correction of the compression in orthonormal functions
  */
-record ExtrapolatedCompression(Compression plain, Function<OrthonormalCompression, NoiseMoments> noise) implements Compression {
+record CorrectedCompression(Compression plain, UnaryOperator<OrthonormalCompression> correction) implements Compression {
 
     @Override
     public FunctionBasis basis() {
@@ -40,7 +40,6 @@ record ExtrapolatedCompression(Compression plain, Function<OrthonormalCompressio
 
     @Override
     public OrthonormalCompression whiten(int largest) {
-        OrthonormalCompression whitened = plain.whiten(largest);
-        return whitened.corrected(NoisyStep.of(whitened.action(), noise.apply(whitened)));
+        return correction.apply(plain.whiten(largest));
     }
 }
