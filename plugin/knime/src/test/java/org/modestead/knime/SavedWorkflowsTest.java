@@ -18,6 +18,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.knime.core.node.NodeSettings;
 import org.knime.core.node.NodeSettingsRO;
+import org.modestead.knime.columns.ColumnRules;
 import org.modestead.knime.settings.NativeSettings;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingsReader;
@@ -59,7 +60,7 @@ class SavedWorkflowsTest {
         unknown.removeIf(key -> key.endsWith("_Internals"));
         for (Setting setting : rig.declaration().settings()) {
             unknown.remove(setting.key());
-            unknown.remove(setting.key() + NativeSettings.RULE);
+            unknown.remove(setting.key() + ColumnRules.SUFFIX);
         }
         // a setting that came later is not stored and has its default; one that is stored must not have gone
         assertEquals(Set.of(), unknown, "stored, but of no use");

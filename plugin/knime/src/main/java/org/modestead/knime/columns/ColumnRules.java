@@ -48,6 +48,18 @@ public final class ColumnRules {
         return setting.key() + SUFFIX;
     }
 
+    /** Returns the keys of all settings of a node, and of the rules of its lists of columns. */
+    public static Set<String> keys(NodeDeclaration declaration) {
+        Set<String> keys = new LinkedHashSet<>();
+        for (Setting setting : declaration.settings()) {
+            keys.add(setting.key());
+            if (setting instanceof Setting.Columns columns) {
+                keys.add(key(columns));
+            }
+        }
+        return keys;
+    }
+
     /**
      * Resolves every rule.
      *

@@ -2,7 +2,6 @@ package org.modestead.knime.dialog;
 
 import java.util.ArrayList;
 import java.util.HashMap;
-import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
@@ -88,9 +87,7 @@ record Draft(Node node, NodeDeclaration declaration, Map<String, Object> values,
 
     /** Returns stored keys that the node does not know. */
     List<String> unknownKeys() {
-        Set<String> known = new HashSet<>(declaration.settings().stream().map(Setting::key).toList());
-        declaration.settings().stream().filter(Setting.Columns.class::isInstance)
-                .forEach(setting -> known.add(ColumnRules.key((Setting.Columns) setting)));
+        Set<String> known = ColumnRules.keys(declaration);
         return values.keySet().stream().filter(key -> !known.contains(key)).sorted().toList();
     }
 

@@ -1,7 +1,6 @@
 package org.modestead.knime.port;
 
 import java.io.IOException;
-import javax.swing.JComponent;
 import org.knime.core.node.ExecutionMonitor;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.port.PortObjectZipInputStream;
@@ -9,21 +8,6 @@ import org.knime.core.node.port.PortObjectZipOutputStream;
 
 /** Eigenvalues, eigenfunctions and weights. */
 public record SpectrumPort(PortContent content) implements StagePort {
-
-    @Override
-    public String getSummary() {
-        return content.summary();
-    }
-
-    @Override
-    public StageSpec getSpec() {
-        return content.spec();
-    }
-
-    @Override
-    public JComponent[] getViews() {
-        return new JComponent[] {PortViews.of(content)};
-    }
 
     /** Writes and reads such ports. */
     public static final class Serializer extends PortObjectSerializer<SpectrumPort> {

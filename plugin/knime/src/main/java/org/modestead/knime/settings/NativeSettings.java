@@ -7,6 +7,7 @@ import java.util.Optional;
 import java.util.stream.DoubleStream;
 import org.knime.core.node.NodeSettingsRO;
 import org.knime.core.node.NodeSettingsWO;
+import org.modestead.knime.columns.ColumnRules;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingsReader;
@@ -24,9 +25,6 @@ public final class NativeSettings {
     /** Key of the settings version; the platform shows keys that end so in no list of variables. */
     static final String VERSION = "version_Internals";
 
-    /** What follows a column list's key in the key of its rule. */
-    public static final String RULE = "-by";
-
     private static final long NOT_SET = Long.MIN_VALUE;
 
     private NativeSettings() {}
@@ -42,8 +40,9 @@ public final class NativeSettings {
         into.addInt(VERSION, declaration.settingsVersion());
         for (Setting setting : declaration.settings()) {
             write(setting, Optional.ofNullable(raw.get(setting.key())), into);
-            if (setting instanceof Setting.Columns) {
-                into.addString(setting.key() + RULE, raw.get(setting.key() + RULE) instanceof String rule ? rule : "");
+            if (setting instanceof Setting.Columns columns) {
+                String key = ColumnRules.key(columns);
+                into.addString(key, raw.get(key) instanceof String rule ? rule : "");
             }
         }
     }
@@ -66,9 +65,9 @@ public final class NativeSettings {
         }
         for (Setting setting : declaration.settings()) {
             read(setting, from).ifPresent(value -> raw.put(setting.key(), value));
-            if (setting instanceof Setting.Columns) {
-                StoredValue.text(from, setting.key() + RULE).filter(rule -> !rule.isEmpty())
-                        .ifPresent(rule -> raw.put(setting.key() + RULE, rule));
+            if (setting instanceof Setting.Columns columns) {
+                String key = ColumnRules.key(columns);
+                StoredValue.text(from, key).filter(rule -> !rule.isEmpty()).ifPresent(rule -> raw.put(key, rule));
             }
         }
         return raw;

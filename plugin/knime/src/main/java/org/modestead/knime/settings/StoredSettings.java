@@ -8,7 +8,6 @@ import org.knime.core.node.NodeSettingsRO;
 import org.modestead.knime.columns.ColumnRules;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
-import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.SettingsReader;
 
@@ -42,8 +41,7 @@ public final class StoredSettings {
         }
         raw.remove(SettingsReader.VERSION);
         Map<String, Object> today = new LinkedHashMap<>(node.upgrade(Map.copyOf(raw), version));
-        List<String> known = declaration.settings().stream().map(Setting::key).toList();
-        today.keySet().removeIf(key -> !known.contains(key) && !known.contains(key.replaceFirst(NativeSettings.RULE + "$", "")));
+        today.keySet().retainAll(ColumnRules.keys(declaration));
         return today;
     }
 
