@@ -161,6 +161,6 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
         for (int k = 0; k < values.getNumElements(); k++) {
             values.data[k] += sign * noise.data[k];
         }
-        return new Run(run.id(), run.times(), values, run.inputs(), run.leadIn());
+        return run.withValues(values);
     }
 }

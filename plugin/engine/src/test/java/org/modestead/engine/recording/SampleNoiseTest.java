@@ -45,6 +45,15 @@ class SampleNoiseTest {
     }
 
     @Test
+    void aCopyCountsAsMuchAsItsRun() {
+        Run run = Motions.run("a", 50, 0.1, t -> new double[] {t, -t}).weighted(0.25);
+        Snapshots snapshots = Motions.snapshots(0.1, 1, List.of(run), List.of());
+        for (Snapshots copy : new SampleNoise(new double[] {0.5, 0}, Smoothing.none(2)).disturbed(snapshots, 1, 1)) {
+            assertEquals(0.25, copy.training().get(0).weight());
+        }
+    }
+
+    @Test
     void copiesComeInPairsWhoseMeanIsTheRun() {
         Run run = Motions.run("a", 50, 0.1, t -> new double[] {t, -t});
         Snapshots snapshots = Motions.snapshots(0.1, 1, List.of(run), List.of());
