@@ -10,21 +10,11 @@ import org.modestead.nodes.document.ReportDocument.Paragraph;
 import org.modestead.nodes.document.ReportDocument.Points;
 import org.modestead.nodes.document.ReportDocument.Section;
 import org.modestead.nodes.document.ReportDocument.Tone;
+import org.modestead.nodes.words.Cautions;
 import org.modestead.nodes.words.Sentence;
 
 /** What a reader must know before relying on anything above. */
 final class DoubtsSection {
-    private static final List<String> STANDING = List.of(
-            "Results from recorded data support the judgement of a licensed engineer; they do not replace it. Where"
-            + " pressure,"
-                    + " structures, machines or grids are concerned, local codes and the limits of the equipment come"
-                    + " first.",
-            "The operator knows only the states that were recorded. A forecast that leaves the sampled region is"
-            + " extrapolation.",
-            "Samples of a time series are not exchangeable: a band or a score from one stretch of time holds for another"
-            + " only as far as"
-                    + " the system, its load and its sensors stay the same.");
-
     private DoubtsSection() {}
 
     static Section of(List<Doubt> doubts) {
@@ -33,7 +23,7 @@ final class DoubtsSection {
         blocks.add(doubts.isEmpty() ? new Paragraph("None of the steps raised a doubt.")
                 : new Points(doubts.stream().map(DoubtsSection::told).distinct().toList()));
         blocks.add(new Heading("Cautions that always hold"));
-        blocks.add(new Callout(Tone.CAUTION, "before these results are used", STANDING));
+        blocks.add(new Callout(Tone.CAUTION, "before these results are used", Cautions.STANDING));
         return new Section("doubts", "Doubts and cautions", blocks);
     }
 
