@@ -1,13 +1,10 @@
 package org.modestead.host.cli;
 
-import java.io.IOException;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.function.Supplier;
 import org.modestead.engine.Fault;
-import org.modestead.host.run.Versions;
+import org.modestead.host.run.DefectLog;
 import org.modestead.nodes.contract.NodeCatalog;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
@@ -36,6 +33,7 @@ public final class CommandLineHost {
         line.addSubcommand(new RunCommand(terminal, catalog));
         line.addSubcommand(new CheckCommand(terminal, catalog));
         line.addSubcommand(new NodesCommand(terminal, catalog));
+        line.addSubcommand(new BenchCommand(terminal, catalog));
         line.setOut(new PrintWriter(terminal.out(), true, StandardCharsets.UTF_8));
         line.setErr(new PrintWriter(terminal.err(), true, StandardCharsets.UTF_8));
         line.setUsageHelpLongOptionsMaxWidth(24);
@@ -57,22 +55,8 @@ public final class CommandLineHost {
             return ExitCode.FAILED;
         }
         terminal.err().println("An error in the program (" + failure.getClass().getSimpleName() + ": " + failure.getMessage()
-                + "); please report it with " + log(failure) + ".");
+                + "); please report it with " + DefectLog.write(failure) + ".");
         return ExitCode.FAILED;
-    }
-
-    /** Writes what a programmer needs to a file, so that the person need not see it; returns how to find it. */
-    static String log(Throwable defect) {
-        try {
-            Path file = Files.createTempFile("modestead-error", ".log");
-            try (PrintWriter writer = new PrintWriter(Files.newBufferedWriter(file))) {
-                writer.println("Modestead " + Versions.modestead() + ", Java " + System.getProperty("java.version"));
-                defect.printStackTrace(writer);
-            }
-            return "the log " + file;
-        } catch (IOException unwritable) {
-            return "this sentence (no log could be written: " + unwritable.getMessage() + ")";
-        }
     }
 
     /** The command without a subcommand: tells how to go on. */
@@ -86,7 +70,7 @@ public final class CommandLineHost {
 
         @Override
         public void run() {
-            throw new ParameterException(spec.commandLine(), "A command is missing: run, check or nodes.");
+            throw new ParameterException(spec.commandLine(), "A command is missing: run, check, nodes or bench.");
         }
     }
 }

@@ -7,6 +7,7 @@ import java.util.Optional;
 import java.util.concurrent.Callable;
 import java.util.function.Supplier;
 import org.modestead.host.run.CancelSwitch;
+import org.modestead.host.run.DefectLog;
 import org.modestead.host.run.RunResult;
 import org.modestead.host.run.StepOutcome;
 import org.modestead.host.run.WorkflowRunner;
@@ -68,7 +69,7 @@ final class RunCommand implements Callable<Integer> {
                 terminal.err().println("step " + step + ": left out, because step " + skipped.because()
                         + " gave no result.");
             } else if (outcome instanceof StepOutcome.Failed failed) {
-                failed.defect().ifPresent(defect -> terminal.err().println("Details: " + CommandLineHost.log(defect) + "."));
+                failed.defect().ifPresent(defect -> terminal.err().println("Details: " + DefectLog.write(defect) + "."));
             }
         });
         return switch (result.state()) {

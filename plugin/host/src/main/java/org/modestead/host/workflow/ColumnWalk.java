@@ -3,9 +3,7 @@ package org.modestead.host.workflow;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import org.modestead.engine.Fault;
 import org.modestead.engine.Progress;
-import org.modestead.nodes.contract.ColumnChecks;
 import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
@@ -23,13 +21,25 @@ final class ColumnWalk {
     private final Workflow workflow;
     private final Map<String, PlannedStep> planned;
     private final List<Problem> problems;
+    private final Foresight foresight;
     private final Map<Link.End, TableSchema> schemas = new HashMap<>();
     private final Map<Link.End, Outlook> outlooks = new HashMap<>();
 
-    ColumnWalk(Workflow workflow, Map<String, PlannedStep> planned, List<Problem> problems) {
+    ColumnWalk(Workflow workflow, Map<String, PlannedStep> planned, List<Problem> problems, Foresight foresight) {
         this.workflow = workflow;
         this.planned = planned;
         this.problems = problems;
+        this.foresight = foresight;
+    }
+
+    /** Returns the columns found, of all outputs that are tables. */
+    Map<Link.End, TableSchema> schemas() {
+        return schemas;
+    }
+
+    /** Returns what is known of the other outputs. */
+    Map<Link.End, Outlook> outlooks() {
+        return outlooks;
     }
 
     void walk(List<String> order) {
@@ -46,20 +56,14 @@ final class ColumnWalk {
             port.schema().filter(schema -> port.type() == PortType.TABLE)
                     .ifPresent(schema -> schemas.put(new Link.End(step.id(), port.id()), schema));
         }
-        Map<String, TableSchema> arriving = arriving(step, schemas);
-        int before = problems.size();
-        ColumnChecks.check(step.declaration(), step.settings(), arriving).forEach(found -> problem(step, found));
-        try {
-            step.node().check(arriving, step.settings()).forEach(found -> problem(step, found));
-            if (problems.size() == before) {
-                RunContext context = new RunContext(Progress.NONE, workflow.baseFolder(), workflow.baseFolder());
-                Expected expected = step.node().expect(new Expected(arriving, arriving(step, outlooks)), step.settings(), context);
-                expected.tables().forEach((port, schema) -> schemas.put(new Link.End(step.id(), port), schema));
-                expected.values().forEach((port, outlook) -> outlooks.put(new Link.End(step.id(), port), outlook));
-            }
-        } catch (Fault fault) {
-            problems.add(new Problem(workflow.fileName(), step.id(), fault.where(), fault.seen(), fault.wanted()));
-        }
+        RunContext context = new RunContext(Progress.NONE, workflow.baseFolder(), workflow.baseFolder());
+        Foresight.Seen seen = foresight.look(step, new Expected(arriving(step, schemas), arriving(step, outlooks)), context);
+        seen.problems().forEach(found -> problem(step, found));
+        seen.fault().ifPresent(fault -> problems.add(new Problem(workflow.fileName(), step.id(), fault.where(), fault.seen(), fault.wanted())));
+        seen.expected().ifPresent(expected -> {
+            expected.tables().forEach((port, schema) -> schemas.put(new Link.End(step.id(), port), schema));
+            expected.values().forEach((port, outlook) -> outlooks.put(new Link.End(step.id(), port), outlook));
+        });
     }
 
     private static <T> Map<String, T> arriving(PlannedStep step, Map<Link.End, T> known) {

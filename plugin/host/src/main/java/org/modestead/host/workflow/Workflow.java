@@ -12,15 +12,22 @@ import java.util.Optional;
  * @param file where it was read from, absolute
  * @param steps in file order
  * @param links in file order
+ * @param notes remarks on the whole; empty for none
  */
-public record Workflow(String name, Path file, List<Step> steps, List<Link> links) {
+public record Workflow(String name, Path file, List<Step> steps, List<Link> links, String notes) {
 
     /** Takes immutable copies. */
     public Workflow {
         Objects.requireNonNull(name);
         Objects.requireNonNull(file);
+        Objects.requireNonNull(notes);
         steps = List.copyOf(steps);
         links = List.copyOf(links);
+    }
+
+    /** A workflow without remarks. */
+    public Workflow(String name, Path file, List<Step> steps, List<Link> links) {
+        this(name, file, steps, links, "");
     }
 
     /** Returns the folder against which file settings are resolved. */
@@ -36,5 +43,15 @@ public record Workflow(String name, Path file, List<Step> steps, List<Link> link
     /** Returns a step by its id. */
     public Optional<Step> step(String id) {
         return steps.stream().filter(step -> step.id().equals(id)).findFirst();
+    }
+
+    /** The same workflow with other steps and links. */
+    public Workflow with(List<Step> otherSteps, List<Link> otherLinks) {
+        return new Workflow(name, file, otherSteps, otherLinks, notes);
+    }
+
+    /** The same workflow kept in another file. */
+    public Workflow in(Path other) {
+        return new Workflow(name, other, steps, links, notes);
     }
 }

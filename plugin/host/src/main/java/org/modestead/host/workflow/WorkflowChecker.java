@@ -14,10 +14,20 @@ import org.modestead.nodes.contract.NodeCatalog;
 public final class WorkflowChecker {
 
     private final NodeCatalog catalog;
+    private final Foresight foresight;
 
     /** @param catalog the nodes that a step may name */
     public WorkflowChecker(NodeCatalog catalog) {
+        this(catalog, Foresight.DIRECT);
+    }
+
+    /**
+     * @param catalog the nodes that a step may name
+     * @param foresight how it is told what a step will give
+     */
+    public WorkflowChecker(NodeCatalog catalog, Foresight foresight) {
         this.catalog = catalog;
+        this.foresight = foresight;
     }
 
     /**
@@ -46,18 +56,31 @@ public final class WorkflowChecker {
             return new Outcome(Optional.empty(), problems);
         }
         Workflow workflow = reading.workflow().get();
+        Survey survey = survey(workflow, overrides);
+        problems.addAll(survey.problems());
+        if (!problems.isEmpty()) {
+            return new Outcome(Optional.empty(), problems);
+        }
+        List<PlannedStep> ordered = survey.order().stream().map(survey.planned()::get).toList();
+        return new Outcome(Optional.of(new RunPlan(workflow, List.copyOf(survey.planned().values()), ordered)), problems);
+    }
+
+    /** Tells everything that can be told of a workflow of which parts may be wrong. */
+    public Survey survey(Workflow workflow) {
+        return survey(workflow, List.of());
+    }
+
+    private Survey survey(Workflow workflow, List<SettingOverride> overrides) {
+        List<Problem> problems = new ArrayList<>();
         StepSettings settings = new StepSettings(workflow, catalog, overrides);
         Map<String, StepSettings.Known> known = settings.read(problems);
         LinkCheck links = new LinkCheck(workflow, known, problems);
         Map<String, Map<String, Link.End>> inputs = links.inputs();
         List<String> order = new StepOrder(workflow, inputs).order(problems);
         Map<String, PlannedStep> planned = plan(known, inputs);
-        new ColumnWalk(workflow, planned, problems).walk(order);
-        if (!problems.isEmpty()) {
-            return new Outcome(Optional.empty(), problems);
-        }
-        List<PlannedStep> ordered = order.stream().map(planned::get).toList();
-        return new Outcome(Optional.of(new RunPlan(workflow, List.copyOf(planned.values()), ordered)), problems);
+        ColumnWalk walk = new ColumnWalk(workflow, planned, problems, foresight);
+        walk.walk(order);
+        return new Survey(problems, planned, order, inputs, walk.schemas(), walk.outlooks());
     }
 
     private static Map<String, PlannedStep> plan(Map<String, StepSettings.Known> known, Map<String, Map<String,

@@ -61,17 +61,31 @@ public final class WorkflowFile {
             String seen = Files.isDirectory(given) ? "the folder holds no " + DEFAULT_NAME : "there is no such file";
             return Reading.failed(given.toString(), "", seen, "give a workflow file or a folder with a " + DEFAULT_NAME);
         }
+        try {
+            return parse(file, Files.readAllBytes(file));
+        } catch (IOException unreadable) {
+            return Reading.failed(given.toString(), "", "the file cannot be read (" + unreadable.getMessage() + ")",
+                    "allow reading it");
+        }
+    }
+
+    /**
+     * Reads a workflow that is not, or not yet, in its file.
+     *
+     * @param file where it belongs, absolute
+     * @param json its bytes
+     */
+    public static Reading parse(Path file, byte[] json) {
         String name = file.getFileName().toString();
         try {
-            JsonNode root = MAPPER.readTree(Files.readAllBytes(file));
+            JsonNode root = MAPPER.readTree(json);
             return root.isObject() ? new WorkflowTree(file, root).read()
                     : Reading.failed(name, "", "the file holds " + JsonKind.of(root) + ", not an object",
                             "begin it with {\"format\": \"" + FORMAT + "\"");
         } catch (JsonProcessingException broken) {
             return Reading.failed(name, place(broken), firstLine(broken.getOriginalMessage()), "correct the JSON there");
-        } catch (IOException unreadable) {
-            return Reading.failed(given.toString(), "", "the file cannot be read (" + unreadable.getMessage() + ")",
-                    "allow reading it");
+        } catch (IOException impossible) {
+            throw new IllegalStateException("bytes in memory could not be read", impossible);
         }
     }
 

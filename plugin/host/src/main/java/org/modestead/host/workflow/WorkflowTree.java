@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalInt;
 import java.util.regex.Pattern;
 import org.modestead.nodes.contract.NearestName;
 
@@ -18,8 +19,8 @@ import org.modestead.nodes.contract.NearestName;
 final class WorkflowTree {
 
     private static final Pattern STEP_ID = Pattern.compile("[A-Za-z0-9][A-Za-z0-9_-]*");
-    private static final List<String> WORKFLOW_FIELDS = List.of("format", "name", "steps", "links");
-    private static final List<String> STEP_FIELDS = List.of("id", "node", "settings");
+    private static final List<String> WORKFLOW_FIELDS = List.of("format", "name", "steps", "links", "notes");
+    private static final List<String> STEP_FIELDS = List.of("id", "node", "settings", "title", "note", "place");
     private static final List<String> LINK_FIELDS = List.of("from", "to");
 
     private final Path file;
@@ -40,7 +41,7 @@ final class WorkflowTree {
         unknownFields(root, WORKFLOW_FIELDS, "", "the workflow");
         List<Step> steps = steps();
         List<Link> links = links();
-        return new WorkflowFile.Reading(Optional.of(new Workflow(name(), file, steps, links)), problems);
+        return new WorkflowFile.Reading(Optional.of(new Workflow(name(), file, steps, links, text(root, "notes", ""))), problems);
     }
 
     private String name() {
@@ -87,7 +88,26 @@ final class WorkflowTree {
         if (!usable) {
             problem(step, "field settings", JsonKind.of(settings), "write an object, {\"key\": value}");
         }
-        return Optional.of(new Step(step, node.asText(""), settings.isObject() ? values(settings) : Map.of()));
+        return Optional.of(new Step(step, node.asText(""), settings.isObject() ? values(settings) : Map.of(),
+                label(entry, step)));
+    }
+
+    private StepLabel label(JsonNode entry, String step) {
+        JsonNode place = entry.path("place");
+        boolean sound = place.isMissingNode() || place.isInt() && place.intValue() >= 0;
+        if (!sound) {
+            problem(step, "field place", JsonKind.of(place), "write a whole number from 0, the order among the steps of its stage");
+        }
+        return new StepLabel(text(entry, "title", step), text(entry, "note", step),
+                sound && !place.isMissingNode() ? OptionalInt.of(place.intValue()) : OptionalInt.empty());
+    }
+
+    private String text(JsonNode object, String field, String step) {
+        JsonNode text = object.path(field);
+        if (!text.isTextual() && !text.isMissingNode()) {
+            problem(step, "field " + field, JsonKind.of(text), "write a text in quotes, or leave the field out");
+        }
+        return text.isTextual() ? text.textValue() : "";
     }
 
     private List<Link> links() {

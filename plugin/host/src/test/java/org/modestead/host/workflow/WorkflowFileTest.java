@@ -71,10 +71,11 @@ class WorkflowFileTest {
                 "w.json, field format: the text \"modestead-workflow/9\"; write \"modestead-workflow/1\", the one format "
                 + "this release "
                         + "knows.",
-                "w.json, field nam: the workflow has no such field, perhaps you meant name; use format, name, steps, links.",
+                "w.json, field nam: the workflow has no such field, perhaps you meant name; use format, name, steps, links, "
+                        + "notes.",
                 "w.json, entry 1 of steps, field id: the text \"a b\"; write an id of letters, digits, - and _ in quotes.",
                 "w.json, step c, field setings: a step has no such field, perhaps you meant settings; use id, node, "
-                + "settings.",
+                + "settings, title, note, place.",
                 "w.json, step c, field node: the number 3; write the id of a node in quotes.",
                 "w.json, step c, field settings: a list; write an object, {\"key\": value}.",
                 "w.json, entry 3 of steps: the number 5; write an object, { ... }.",
