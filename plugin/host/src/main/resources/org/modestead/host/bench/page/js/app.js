@@ -1,0 +1,89 @@
+/** The page: puts the parts together and keeps them in step with the server. */
+import {html, render, useEffect} from '../lib.js';
+import {api} from './api.js';
+import {getState, setState, useStore} from './store.js';
+import {takeDesk} from './actions.js';
+import {listen} from './events.js';
+import {pageKey} from './keys.js';
+import {Bar} from './parts/bar.js';
+import {Bands} from './parts/bands.js';
+import {DragLayer} from './parts/drag-layer.js';
+import {DropZone} from './parts/drop-zone.js';
+import {DroppedDialog, OpenDialog, SaveAsDialog} from './parts/file-dialogs.js';
+import {LookPane} from './parts/look-pane.js';
+import {Notice, Told} from './parts/notice.js';
+import {Picker} from './parts/picker.js';
+import {Shelf} from './parts/shelf.js';
+import {
+  AboutDialog, ConfirmDialog, KeysDialog, NameDialog, NoteDialog, NotesDialog, ProblemsDialog, RenameDialog,
+} from './parts/small-dialogs.js';
+import {Splitter} from './parts/splitter.js';
+import {Start} from './parts/start.js';
+import {StepDialog} from './parts/step-dialog.js';
+import {Strip} from './parts/strip.js';
+
+const DIALOGS = {
+  settings: StepDialog,
+  picker: Picker,
+  rename: RenameDialog,
+  name: NameDialog,
+  note: NoteDialog,
+  notes: NotesDialog,
+  keys: KeysDialog,
+  problems: ProblemsDialog,
+  about: AboutDialog,
+  confirm: ConfirmDialog,
+  open: OpenDialog,
+  'save-as': SaveAsDialog,
+  dropped: DroppedDialog,
+};
+
+function Page() {
+  const {catalog, desk, dialog, wide, drag} = useStore();
+  useEffect(() => {
+    window.addEventListener('keydown', pageKey);
+    return () => window.removeEventListener('keydown', pageKey);
+  }, []);
+  useEffect(() => {
+    document.title = desk?.open ? `${desk.saved ? '' : '* '}${desk.name} · Modestead` : 'Modestead';
+  }, [desk?.open, desk?.name, desk?.saved]);
+  if (!catalog || !desk) {
+    return html`<p class="loading">Opening the bench.</p><${Notice} /><${Told} />`;
+  }
+  const Kind = dialog && DIALOGS[dialog.kind];
+  return html`${desk.open ? html`<div class=${'page' + (wide ? ' wide' : '') + (drag ? ` dragging dragging-${drag.kind}` : '')}>
+      <${Bar} />
+      <div class="room">
+        ${!wide && html`<${Shelf} />
+          <section class="bench" id="bench" tabindex="-1" data-part="bench" data-scroll="bench" aria-label="Bench"><${Bands} /></section>
+          <${Splitter} />`}
+        <${LookPane} />
+      </div>
+      <${Strip} />
+      <${DropZone} take=${() => {}} />
+    </div>` : html`<${Start} />`}
+    <${DragLayer} /><${Notice} /><${Told} />
+    ${Kind && html`<${Kind} key=${dialog.kind + (dialog.step ?? dialog.end ?? '')} ...${dialog} />`}`;
+}
+
+async function begin() {
+  render(html`<${Page} />`, document.getElementById('page'));
+  try {
+    const [catalog, desk] = await Promise.all([api.get('/api/nodes'), api.get('/api/desk')]);
+    setState({catalog});
+    takeDesk(desk);
+    listen();
+  } catch (fault) {
+    const page = document.getElementById('page');
+    render(null, page);
+    const words = document.createElement('p');
+    words.className = 'loading tone-stop';
+    words.setAttribute('role', 'alert');
+    words.textContent = fault.message;
+    page.replaceChildren(words);
+  }
+}
+
+if (!getState().catalog) {
+  begin();
+}

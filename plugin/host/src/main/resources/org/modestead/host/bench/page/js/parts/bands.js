@@ -1,0 +1,125 @@
+/** The bench itself: one band a stage, cards in rows, links between them. */
+import {html, useEffect, useLayoutEffect, useRef, useState} from '../../lib.js';
+import {getState} from '../store.js';
+import {choose, chooseLink, moveStep} from '../actions.js';
+import {arrange} from '../layout.js';
+import {Card} from './card.js';
+import {Wires} from './wires.js';
+
+export function Bands() {
+  const {catalog, desk, chosen, drag} = getState();
+  const area = useRef(null);
+  const [columns, setColumns] = useState(3);
+  useLayoutEffect(() => {
+    const measure = () => setColumns(columnsIn(area.current));
+    measure();
+    const watch = new ResizeObserver(measure);
+    watch.observe(area.current);
+    return () => watch.disconnect();
+  }, []);
+  useLayoutEffect(() => area.current.style.setProperty('--columns', String(columns)), [columns]);
+  const bands = arrange(desk.steps.map(({id, stage, place}) => ({id, stage, place})), desk.links,
+    catalog.stages.map((stage) => stage.id), columns);
+  const order = bands.flatMap((band) => band.rows);
+  const entry = chosen.at(-1) ?? order[0]?.[0]?.id;
+  useReveal(area, chosen);
+  const key = (event) => {
+    const card = event.target.closest('[data-card]');
+    if (card && !event.ctrlKey && !event.metaKey && !event.altKey) {
+      walk(event, order, card.dataset.card);
+    }
+  };
+  const clear = (event) => {
+    if (!event.target.closest('[data-step], [data-link], button')) {
+      choose([]);
+      chooseLink('');
+    }
+  };
+  return html`<div class="bands" ref=${area} onkeydown=${key} onclick=${clear}>
+    <${Wires} area=${area} columns=${columns} />
+    ${bands.map((band) => html`<${Band} key=${band.stage} band=${band} entry=${entry} catalog=${catalog} desk=${desk} drag=${drag} />`)}
+  </div>`;
+}
+
+/** @returns {number} how many cards of the least width stand side by side */
+function columnsIn(element) {
+  const style = getComputedStyle(element);
+  const size = (name) => parseFloat(style.getPropertyValue(name)) * parseFloat(getComputedStyle(document.documentElement).fontSize);
+  const width = element.clientWidth - size('--stage-width') - size('--bands-end');
+  return Math.max(1, Math.floor((width + size('--card-gap')) / (size('--card-width') + size('--card-gap'))));
+}
+
+function Band({band, entry, catalog, desk, drag}) {
+  const title = catalog.stages.find((stage) => stage.id === band.stage).title;
+  const steps = new Map(desk.steps.map((step) => [step.id, step]));
+  const wanted = drag?.kind === 'node' && catalog.nodes.find((node) => node.id === drag.node).stage === band.stage;
+  const own = drag?.kind === 'step' && steps.get(drag.step)?.stage === band.stage;
+  const empty = band.rows.length === 0;
+  return html`<section class=${'band' + (empty ? ' empty' : '') + (wanted || own ? ' wanted' : '')} data-band=${band.stage}
+      aria-label=${`${title}, ${empty ? 'no step yet' : `${band.rows.flat().length} steps`}`}>
+    <h2 class="band-title">${title}</h2>
+    ${empty
+      ? html`<p class="band-hint">${wanted ? 'Drop it here' : hint(band.stage)}</p>`
+      : html`<div class="band-rows">${band.rows.map((row, i) => html`<ul class="card-row" key=${i} data-row aria-label=${`${title}, row ${i + 1}`}>
+        ${row.map(({id, column}) => html`<${Card} key=${id} step=${steps.get(id)} column=${column} first=${id === entry} />`)}
+      </ul>`)}</div>`}
+  </section>`;
+}
+
+const HINTS = {
+  data: 'Tables come in here',
+  prepare: 'Tables become snapshots here',
+  fit: 'The operator is fitted here',
+  judge: 'Modes are found and judged here',
+  forecast: 'The recording is carried on here',
+  report: 'Results are handed on here',
+};
+
+function hint(stage) {
+  return HINTS[stage] ?? '';
+}
+
+function walk(event, order, id) {
+  const row = order.findIndex((cards) => cards.some((card) => card.id === id));
+  const cards = order[row];
+  const at = cards.findIndex((card) => card.id === id);
+  const near = (target) => target && target.reduce((best, card) => (
+    Math.abs(card.column - cards[at].column) < Math.abs(best.column - cards[at].column) ? card : best));
+  const next = {
+    ArrowLeft: cards[at - 1], ArrowRight: cards[at + 1], ArrowUp: near(order[row - 1]), ArrowDown: near(order[row + 1]),
+    Home: order[0][0], End: order.at(-1).at(-1),
+  }[event.key];
+  if (event.shiftKey && (event.key === 'ArrowLeft' || event.key === 'ArrowRight')) {
+    event.preventDefault();
+    shift(id, event.key === 'ArrowLeft' ? -1 : 1);
+  } else if (next && !event.shiftKey) {
+    event.preventDefault();
+    choose([next.id]);
+    focusCard(next.id);
+  }
+}
+
+/** Puts the focus on a step, once it is there. @param {string} id */
+export function focusCard(id) {
+  document.querySelector(`[data-card="${CSS.escape(id)}"]`)?.focus();
+}
+
+async function shift(id, by) {
+  const {desk} = getState();
+  const step = desk.steps.find((s) => s.id === id);
+  const band = desk.steps.filter((s) => s.stage === step.stage).sort((a, b) => a.place - b.place);
+  const place = band.indexOf(step) + by;
+  if (place >= 0 && place < band.length) {
+    await moveStep(id, place);
+    focusCard(id);
+  }
+}
+
+/** Brings a newly chosen step into sight. */
+function useReveal(area, chosen) {
+  const id = chosen.at(-1);
+  useEffect(() => {
+    const card = id && area.current?.querySelector(`[data-step="${CSS.escape(id)}"]`);
+    card?.scrollIntoView({block: 'nearest', inline: 'nearest'});
+  }, [id]);
+}

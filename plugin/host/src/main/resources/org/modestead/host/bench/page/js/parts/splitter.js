@@ -1,0 +1,50 @@
+/** Between bench and look: dragged or moved with the arrow keys; remembered on this machine. */
+import {html, useEffect, useRef, useState} from '../../lib.js';
+
+const KEY = 'modestead.split';
+const LEAST = 25;
+const MOST = 75;
+const USUAL = 51;
+
+function remembered() {
+  try {
+    return Number(window.localStorage.getItem(KEY)) || USUAL;
+  } catch {
+    return USUAL;
+  }
+}
+
+export function Splitter() {
+  const [share, setShare] = useState(remembered);
+  const bar = useRef(null);
+  useEffect(() => {
+    bar.current.parentElement.style.setProperty('--bench-share', String(share));
+    try {
+      window.localStorage.setItem(KEY, String(share));
+    } catch {
+      /* It holds for this page only. */
+    }
+  }, [share]);
+  const put = (value) => setShare(Math.round(Math.min(MOST, Math.max(LEAST, value))));
+  const drag = (event) => {
+    const room = bar.current.parentElement.getBoundingClientRect();
+    const shelf = bar.current.parentElement.firstElementChild.getBoundingClientRect();
+    bar.current.setPointerCapture(event.pointerId);
+    bar.current.onpointermove = (e) => put(((e.clientX - shelf.right) / (room.right - shelf.right)) * 100);
+    bar.current.onpointerup = () => {
+      bar.current.onpointermove = null;
+    };
+  };
+  const key = (event) => {
+    const by = {ArrowLeft: -2, ArrowRight: 2}[event.key];
+    if (by) {
+      event.preventDefault();
+      put(share + by);
+    } else if (event.key === 'Home' || event.key === 'End') {
+      event.preventDefault();
+      put(event.key === 'Home' ? LEAST : MOST);
+    }
+  };
+  return html`<div class="splitter" ref=${bar} role="separator" tabindex="0" aria-orientation="vertical" aria-label="Width of the bench" aria-valuenow=${share}
+    aria-valuemin=${LEAST} aria-valuemax=${MOST} data-action="split" onpointerdown=${drag} onkeydown=${key} ondblclick=${() => put(USUAL)}></div>`;
+}

@@ -1,0 +1,24 @@
+/** How the page looks, and help. */
+import {html, useState} from '../../lib.js';
+import {openDialog, say} from '../actions.js';
+import {Menu} from './menu.js';
+
+export function ViewMenu() {
+  const [choice, setChoice] = useState(window.modesteadTheme.choice());
+  const theme = (name, label) => ({
+    label: `${label}${choice === name ? ', as now' : ''}`,
+    action: `theme-${name}`,
+    act: () => {
+      window.modesteadTheme.choose(name);
+      setChoice(name);
+      say(`${label}.`);
+    },
+  });
+  return html`<${Menu} label="View" action="view-menu" items=${[
+    theme('light', 'Light'),
+    theme('dark', 'Dark'),
+    theme('system', 'As the system'),
+    null,
+    {label: 'Keys…', action: 'keys', keys: 'F1', act: () => openDialog({kind: 'keys'})},
+  ]} />`;
+}

@@ -1,0 +1,83 @@
+/** How the page says numbers, times and counts. Every module formats here. */
+
+const MINUS = '\u2212';
+
+/**
+ * A number with so many significant digits, without needless zeros.
+ *
+ * @param {number|string|null|undefined} value what is to be said; texts such as "NaN" say that there is none
+ * @param {number} [digits] significant digits
+ * @returns {string} an en dash where there is no number
+ */
+export function number(value, digits = 4) {
+  if (typeof value !== 'number' || Number.isNaN(value)) {
+    return '\u2013';
+  }
+  if (!Number.isFinite(value)) {
+    return value > 0 ? '\u221e' : MINUS + '\u221e';
+  }
+  if (value === 0) {
+    return '0';
+  }
+  const size = Math.abs(value);
+  const rounded = Number(size.toPrecision(digits));
+  const text = rounded >= 1e6 || rounded < 1e-4
+    ? rounded.toExponential().replace('e+', 'e').replace('e-', 'e' + MINUS)
+    : String(rounded);
+  return (value < 0 ? MINUS : '') + text;
+}
+
+/**
+ * @param {number|null} value
+ * @param {string} unit '' for none
+ * @param {number} [digits]
+ */
+export function withUnit(value, unit, digits = 4) {
+  return unit ? `${number(value, digits)}\u00a0${unit}` : number(value, digits);
+}
+
+/** @param {number} share from 0 to 1 */
+export function percent(share) {
+  return `${Math.round(share * 100)}\u00a0%`;
+}
+
+/** @param {number} count @param {string} one @param {string} [many] */
+export function counted(count, one, many = one + 's') {
+  return `${count.toLocaleString('en').replace(/,/g, '\u202f')} ${count === 1 ? one : many}`;
+}
+
+/** @param {number} seconds a time span, rounded as a person would say it */
+export function duration(seconds) {
+  if (seconds < 1) {
+    return 'less than 1\u00a0s';
+  }
+  if (seconds < 90) {
+    return `${Math.round(seconds)}\u00a0s`;
+  }
+  if (seconds < 5400) {
+    return `${Math.round(seconds / 60)}\u00a0min`;
+  }
+  return `${number(seconds / 3600, 2)}\u00a0h`;
+}
+
+/** @param {string[]} parts "a", "a and b", "a, b and c" */
+export function listed(parts) {
+  return parts.length < 2 ? parts.join('') : `${parts.slice(0, -1).join(', ')} and ${parts.at(-1)}`;
+}
+
+/** @param {string} word */
+export function article(word) {
+  return (/^[aeiou]/i.test(word) ? 'an ' : 'a ') + word;
+}
+
+/** @param {number} bytes */
+export function bytes(bytes) {
+  const units = ['bytes', 'kB', 'MB', 'GB'];
+  let size = bytes;
+  let unit = 0;
+  while (size >= 1000 && unit < units.length - 1) {
+    size /= 1000;
+    unit += 1;
+  }
+  return `${number(size, 3)}\u00a0${units[unit]}`;
+}
