@@ -1,16 +1,21 @@
 package org.modestead.host.table;
 
+import java.sql.Array;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.sql.Statement;
+import java.sql.Timestamp;
 import java.time.LocalDate;
 import java.time.LocalDateTime;
 import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.util.List;
+import java.time.ZonedDateTime;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.RowCursor;
 
 /** Steps through a streamed DuckDB result. Not for use by several threads. */
@@ -100,12 +105,32 @@ final class DuckDbCursor implements RowCursor {
             case DATE -> rows.getObject(column + 1, LocalDate.class);
             case DATE_TIME -> rows.getObject(column + 1, LocalDateTime.class);
             case ZONED_DATE_TIME -> rows.getObject(column + 1, OffsetDateTime.class);
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST -> list(column);
         };
         boolean missing = found == null || rows.wasNull() || found instanceof Double number && number.isNaN();
         if (missing) {
             return Optional.empty();
         }
-        return Optional.of(found instanceof OffsetDateTime moment ? moment.atZoneSameInstant(ZoneOffset.UTC) : found);
+        return Optional.of(found instanceof OffsetDateTime moment ? utc(moment) : found);
+    }
+
+    /** Returns the list, null when there is none, as {@code getString} does. */
+    private ListCell list(int column) throws SQLException {
+        Array found = rows.getArray(column + 1);
+        return found == null ? null : new ListCell(Stream.of((Object[]) found.getArray()).map(DuckDbCursor::entry).toList());
+    }
+
+    private static Optional<Object> entry(Object found) {
+        if (found instanceof Timestamp moment) {
+            return Optional.of(moment.toLocalDateTime());
+        } else if (found instanceof Double number && number.isNaN()) {
+            return Optional.empty();
+        }
+        return Optional.ofNullable(found instanceof OffsetDateTime moment ? utc(moment) : found);
+    }
+
+    private static ZonedDateTime utc(OffsetDateTime moment) {
+        return moment.atZoneSameInstant(ZoneOffset.UTC);
     }
 
     private <T> T read(Reading<T> reading) {

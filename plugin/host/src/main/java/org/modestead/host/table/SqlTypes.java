@@ -11,6 +11,9 @@ final class SqlTypes {
     /** Returns the node type that holds a DuckDB type; whatever has no counterpart is told as text. */
     static CellType cellType(String sqlType) {
         String type = sqlType.toUpperCase(Locale.ROOT);
+        if (type.endsWith("]")) {
+            return listType(type.substring(0, type.lastIndexOf('[')));
+        }
         if (type.startsWith("DECIMAL")) {
             return CellType.DOUBLE;
         }
@@ -25,6 +28,13 @@ final class SqlTypes {
         };
     }
 
+    /** Lists of lists, and of what has no counterpart, are told as text. */
+    private static CellType listType(String entries) {
+        CellType type = cellType(entries);
+        boolean told = type != CellType.TEXT || entries.equals("VARCHAR");
+        return told ? CellType.listOf(type).orElse(CellType.TEXT) : CellType.TEXT;
+    }
+
     /** Returns the DuckDB type that a cursor reads for a node type. */
     static String sqlType(CellType type) {
         return switch (type) {
@@ -35,6 +45,8 @@ final class SqlTypes {
             case DATE -> "DATE";
             case DATE_TIME -> "TIMESTAMP";
             case ZONED_DATE_TIME -> "TIMESTAMPTZ";
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST ->
+                sqlType(type.entries().orElseThrow()) + "[]";
         };
     }
 }

@@ -1,11 +1,15 @@
 package org.modestead.host.table;
 
 import java.sql.SQLException;
+import java.time.ZoneOffset;
+import java.time.ZonedDateTime;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.Collectors;
 import org.duckdb.DuckDBAppender;
 import org.duckdb.DuckDBConnection;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.RowCursor;
 import org.modestead.nodes.table.Table;
 
@@ -43,7 +47,17 @@ final class TableLoader {
             case FLAG -> appender.append((boolean) cursor.cell(index).orElseThrow());
             case DATE -> appender.append(cursor.date(index));
             case DATE_TIME -> appender.append(cursor.dateTime(index));
-            case ZONED_DATE_TIME -> appender.append(cursor.dateTime(index).atOffset(java.time.ZoneOffset.UTC));
+            case ZONED_DATE_TIME -> appender.append(cursor.dateTime(index).atOffset(ZoneOffset.UTC));
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST ->
+                appender.append(entries((ListCell) cursor.cell(index).orElseThrow()));
         }
+    }
+
+    /** Missing entries are null there. */
+    private static List<Object> entries(ListCell list) {
+        List<Object> entries = new ArrayList<>();
+        list.entries().forEach(entry -> entries.add(entry.map(found -> found instanceof ZonedDateTime zoned ? zoned.toOffsetDateTime() : found)
+                .orElse(null)));
+        return entries;
     }
 }

@@ -37,6 +37,7 @@ record TextRules(boolean decimalComma, String timeFormat, List<String> textColum
                     ? "CASE WHEN regexp_full_match(" + text + ", " + ZONE + ") AND length(" + text + ") > " + DATE_LENGTH
                             + " THEN TRY_CAST(" + text + " AS TIMESTAMPTZ) END"
                     : "CAST(NULL AS TIMESTAMPTZ)";
+            default -> throw new IllegalArgumentException("a text is not read as " + type.title());
         };
     }
 

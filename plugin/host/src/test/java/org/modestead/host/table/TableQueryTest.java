@@ -46,11 +46,11 @@ class TableQueryTest {
 
     @Test
     void typesWithoutCounterpartComeAsNumbersOrText() throws IOException {
-        Table table = query("SELECT 1.50::DECIMAL(5, 2) AS d, [1, 2] AS list, DATE '2020-01-01' AS day, "
-                + "TIMESTAMPTZ '2020-01-01 10:00:00+02' AS zoned, 3::HUGEINT AS huge FROM input LIMIT 1");
-        assertEquals(List.of(CellType.DOUBLE, CellType.TEXT, CellType.DATE, CellType.ZONED_DATE_TIME, CellType.DOUBLE),
-                table.schema().columns().stream().map(Column::type).toList());
-        assertEquals(List.of("1.5|[1, 2]|2020-01-01|2020-01-01T08:00Z|3.0"), Steps.rows(table));
+        Table table = query("SELECT 1.50::DECIMAL(5, 2) AS d, [1, 2] AS list, [[1], [2]] AS nested, [1.5, NULL]::DOUBLE[2] AS fixed, "
+                + "[TIME '10:00:00'] AS hours, DATE '2020-01-01' AS day, TIMESTAMPTZ '2020-01-01 10:00:00+02' AS zoned, 3::HUGEINT AS huge FROM input LIMIT 1");
+        assertEquals(List.of(CellType.DOUBLE, CellType.LONG_LIST, CellType.TEXT, CellType.DOUBLE_LIST, CellType.TEXT, CellType.DATE,
+                CellType.ZONED_DATE_TIME, CellType.DOUBLE), table.schema().columns().stream().map(Column::type).toList());
+        assertEquals(List.of("1.5|[1, 2]|[[1], [2]]|[1.5, ]|['10:00:00']|2020-01-01|2020-01-01T08:00Z|3.0"), Steps.rows(table));
     }
 
     @Test

@@ -7,8 +7,12 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.time.LocalDateTime;
+import java.time.ZoneOffset;
+import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
@@ -16,6 +20,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.modestead.host.output.OutputFault;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
@@ -45,6 +50,23 @@ class TableSinkTest {
             assertEquals(SCHEMA, back.schema(), name);
             assertEquals(Steps.rows(table), Steps.rows(back), name);
         }
+    }
+
+    @Test
+    void listsOfEveryTypeReadBackFromParquetWithTheirMissingEntries() {
+        LocalDateTime moment = LocalDateTime.of(2026, 12, 2, 1, 2, 3, 456_789_000);
+        Map<CellType, Object> entries = new EnumMap<>(Map.of(CellType.DOUBLE_LIST, 0.1, CellType.LONG_LIST, Long.MAX_VALUE,
+                CellType.TEXT_LIST, "a, \"b\"", CellType.FLAG_LIST, true, CellType.DATE_LIST, moment.toLocalDate(), CellType.DATE_TIME_LIST, moment,
+                CellType.ZONED_DATE_TIME_LIST, moment.atZone(ZoneOffset.UTC)));
+        MemoryTable.Builder rows = MemoryTable.builder(new TableSchema(entries.keySet().stream().map(type -> new Column(type.name(), type))
+                .toList()), "memory");
+        rows.row(entries.values().stream().map(entry -> new ListCell(List.of(Optional.of(entry), Optional.empty()))).toArray());
+        rows.row(new Object[entries.size()]);
+        Table lists = rows.build();
+        Steps.run(new TableSink(), folder, Map.of("table", lists), "path", "lists.parquet");
+        Table back = Steps.source(folder, "lists.parquet");
+        assertEquals(lists.schema(), back.schema());
+        assertEquals(Steps.rows(lists), Steps.rows(back));
     }
 
     @Test

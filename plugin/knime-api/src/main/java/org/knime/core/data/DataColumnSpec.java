@@ -1,5 +1,7 @@
 package org.knime.core.data;
 
+import java.util.List;
+
 /** Signatures of the platform's public class of this name; no behaviour. */
 public final class DataColumnSpec {
     private DataColumnSpec() {
@@ -7,6 +9,10 @@ public final class DataColumnSpec {
     }
 
     public String getName() {
+        throw new UnsupportedOperationException();
+    }
+
+    public List<String> getElementNames() {
         throw new UnsupportedOperationException();
     }
 

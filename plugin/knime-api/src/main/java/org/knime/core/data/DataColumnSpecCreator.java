@@ -6,6 +6,10 @@ public final class DataColumnSpecCreator {
         throw new UnsupportedOperationException();
     }
 
+    public void setElementNames(final String[] elNames) {
+        throw new UnsupportedOperationException();
+    }
+
     public DataColumnSpec createSpec() {
         throw new UnsupportedOperationException();
     }

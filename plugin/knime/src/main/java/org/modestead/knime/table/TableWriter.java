@@ -9,6 +9,7 @@ import org.knime.core.data.DataCellFactory;
 import org.knime.core.data.DataTableSpec;
 import org.knime.core.data.DataType;
 import org.knime.core.data.RowKey;
+import org.knime.core.data.collection.CollectionCellFactory;
 import org.knime.core.data.def.BooleanCell;
 import org.knime.core.data.def.DefaultRow;
 import org.knime.core.data.def.DoubleCell;
@@ -20,6 +21,7 @@ import org.knime.core.node.ExecutionContext;
 import org.modestead.engine.Progress;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.RowCursor;
 import org.modestead.nodes.table.Table;
 
@@ -75,7 +77,14 @@ public final class TableWriter {
             case TEXT -> value -> new StringCell((String) value);
             case FLAG -> value -> (Boolean) value ? BooleanCell.TRUE : BooleanCell.FALSE;
             case DATE, DATE_TIME, ZONED_DATE_TIME -> time(type);
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST ->
+                list(maker(kind.entries().orElseThrow(), type.getCollectionElementType()));
         };
+    }
+
+    private static Function<Object, DataCell> list(Function<Object, DataCell> entry) {
+        return value -> CollectionCellFactory.createListCell(((ListCell) value).entries().stream()
+                .map(found -> found.map(entry).orElseGet(DataType::getMissingCell)).toList());
     }
 
     private Function<Object, DataCell> time(DataType type) {

@@ -6,7 +6,7 @@ import java.io.Serializable;
 public abstract class DataCell implements DataValue, Serializable {
     private static final long serialVersionUID = 1L;
 
-    public final DataType getType() {
+    public DataType getType() {
         return DataType.getType(getClass());
     }
 

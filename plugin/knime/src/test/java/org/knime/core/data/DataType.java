@@ -1,5 +1,6 @@
 package org.knime.core.data;
 
+import java.util.Objects;
 import java.util.Optional;
 import org.knime.core.node.ExecutionContext;
 
@@ -7,13 +8,19 @@ import org.knime.core.node.ExecutionContext;
 public final class DataType {
 
     private final Class<? extends DataCell> cell;
+    private final DataType element;
 
-    private DataType(final Class<? extends DataCell> cell) {
+    private DataType(final Class<? extends DataCell> cell, final DataType element) {
         this.cell = cell;
+        this.element = element;
     }
 
     public static DataType getType(final Class<? extends DataCell> cell) {
-        return new DataType(cell);
+        return new DataType(cell, null);
+    }
+
+    public static DataType getType(final Class<? extends DataCell> cell, final DataType element) {
+        return new DataType(cell, element);
     }
 
     public static DataCell getMissingCell() {
@@ -25,7 +32,11 @@ public final class DataType {
     }
 
     public boolean isCollectionType() {
-        return false;
+        return element != null;
+    }
+
+    public DataType getCollectionElementType() {
+        return element;
     }
 
     @SuppressWarnings("unchecked")
@@ -43,7 +54,7 @@ public final class DataType {
 
     @Override
     public boolean equals(final Object other) {
-        return other instanceof DataType type && type.cell == cell;
+        return other instanceof DataType type && type.cell == cell && Objects.equals(type.element, element);
     }
 
     @Override

@@ -11,6 +11,7 @@ import java.time.ZonedDateTime;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.knime.core.data.DataCell;
 import org.knime.core.data.DataColumnSpec;
@@ -63,21 +64,22 @@ class TablesTest {
     private static BufferedDataTable everyType() {
         return table(List.of("double", "int", "long", "text", "flag", "day", "moment", "zoned", "list"), new DoubleCell(1.5), new IntCell(2),
                 new LongCell(3), new StringCell("x"), BooleanCell.TRUE, new TimeCell.Day(DAY), new TimeCell.Moment(MOMENT),
-                new TimeCell.Zoned(ZONED), new ListCell(new DoubleCell(1), new DoubleCell(2)));
+                new TimeCell.Zoned(ZONED), new ListCell(new DoubleCell(1), DataType.getMissingCell(), new DoubleCell(2)));
     }
 
     @Test
     void everyColumnTypeOfThePlatformIsRead() {
         PlatformTable table = new PlatformTable(everyType(), "the input table");
         assertEquals(List.of(CellType.DOUBLE, CellType.LONG, CellType.LONG, CellType.TEXT, CellType.FLAG, CellType.DATE, CellType.DATE_TIME,
-                CellType.ZONED_DATE_TIME, CellType.TEXT), table.schema().columns().stream().map(Column::type).toList());
+                CellType.ZONED_DATE_TIME, CellType.DOUBLE_LIST), table.schema().columns().stream().map(Column::type).toList());
         try (RowCursor cursor = table.open()) {
             assertTrue(cursor.next());
             List<Object> cells = new ArrayList<>();
             for (int j = 0; j < 9; j++) {
                 cells.add(cursor.cell(j).orElseThrow());
             }
-            assertEquals(List.of(1.5, 2L, 3L, "x", true, DAY, MOMENT, ZONED, "[1.0, 2.0]"), cells);
+            assertEquals(List.of(1.5, 2L, 3L, "x", true, DAY, MOMENT, ZONED,
+                    new org.modestead.nodes.table.ListCell(List.of(Optional.of(1.0), Optional.empty(), Optional.of(2.0)))), cells);
             assertEquals(2, cursor.number(1));
             assertTrue(cursor.next());
             for (int j = 0; j < 9; j++) {
@@ -115,6 +117,41 @@ class TablesTest {
             rows.next().forEach(cell -> assertTrue(cell.isMissing()));
         }
         assertEquals(schema, new PlatformTable(written, "again").schema());
+    }
+
+    @Test
+    void listsOfEveryTypeComeOutAsTheyWentInWithMissingEntriesAndTheNamesOfTheirEntries() {
+        DataCell no = DataType.getMissingCell();
+        DataCell[] lists = {new ListCell(new DoubleCell(0.1), no, new DoubleCell(-0.0)), new ListCell(new LongCell(Long.MAX_VALUE), no),
+            new ListCell(new StringCell("a, b"), no, new StringCell("")), new ListCell(BooleanCell.FALSE, no), new ListCell(new TimeCell.Day(DAY), no),
+            new ListCell(new TimeCell.Moment(MOMENT), no), new ListCell(no, new TimeCell.Zoned(ZONED))};
+        BufferedDataTable given = table(List.of("double", "long", "text", "flag", "day", "moment", "zoned"), lists);
+        PlatformTable read = new PlatformTable(given, "the input table");
+        assertEquals(List.of(CellType.DOUBLE_LIST, CellType.LONG_LIST, CellType.TEXT_LIST, CellType.FLAG_LIST, CellType.DATE_LIST,
+                CellType.DATE_TIME_LIST, CellType.ZONED_DATE_TIME_LIST), read.schema().columns().stream().map(Column::type).toList());
+        BufferedDataTable written = new TableWriter(new ExecutionContext(), Progress.NONE).write(read);
+        assertEquals(given.getDataTableSpec(), written.getDataTableSpec());
+        try (CloseableRowIterator rows = written.iterator()) {
+            DataRow row = rows.next();
+            for (int j = 0; j < lists.length; j++) {
+                assertEquals(lists[j].toString(), row.getCell(j).toString());
+            }
+            rows.next().forEach(cell -> assertTrue(cell.isMissing()));
+        }
+        TableSchema named = TableSchema.of(new Column("accel", CellType.DOUBLE_LIST, List.of("x", "y")));
+        assertEquals(named, TableSpecs.schema(TableSpecs.spec(named)));
+    }
+
+    /** A set has no order, and a list of lists no type of ours. */
+    @Test
+    void whatIsNoPlainListIsReadAsText() {
+        ListCell inner = new ListCell(new DoubleCell(1), new DoubleCell(2));
+        PlatformTable table = new PlatformTable(table(List.of("nested"), new ListCell(inner)), "the input table");
+        assertEquals(TableSchema.of(Column.text("nested")), table.schema());
+        try (RowCursor cursor = table.open()) {
+            cursor.next();
+            assertEquals("[[1.0, 2.0]]", cursor.text(0));
+        }
     }
 
     private static List<String> texts(DataRow row) {

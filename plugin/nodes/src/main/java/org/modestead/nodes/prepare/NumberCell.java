@@ -2,6 +2,7 @@ package org.modestead.nodes.prepare;
 
 import java.math.BigDecimal;
 import java.util.OptionalDouble;
+import java.util.function.DoubleConsumer;
 import org.modestead.engine.RecordingFault;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.RowCursor;
@@ -14,7 +15,12 @@ import org.modestead.nodes.table.RowCursor;
  * @param column its position
  * @param type of the column; text is accepted where every cell is a number
  */
-record NumberCell(String origin, String name, int column, CellType type) {
+record NumberCell(String origin, String name, int column, CellType type) implements MeasuredCell {
+
+    @Override
+    public void read(RowCursor cursor, DoubleConsumer into) {
+        into.accept(read(cursor));
+    }
 
     /** Returns the number in the current row, NaN when it is missing. */
     double read(RowCursor cursor) {

@@ -1,14 +1,10 @@
 package org.modestead.nodes.prepare;
 
-import java.util.ArrayList;
 import java.util.HashSet;
-import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.nodes.contract.Outlook;
@@ -23,7 +19,7 @@ import org.modestead.nodes.table.TableSchema;
  * @param rowStep time from row to row where there is no time column, positive
  * @param timeUnit unit of time, see {@link RecordingReader}; empty = that of the column
  * @param run column that names the run of each row; empty = one run
- * @param channels columns of measured quantities; empty = every column of numbers without another part
+ * @param channels columns of measured quantities; empty = every column of numbers, or lists of numbers, without another part
  * @param inputs columns of known inputs
  * @param weight column with the weight of each run, the same number in all its rows; empty = none
  * @param units unit by column name or channel name; others are read from {@code name [unit]}
@@ -37,8 +33,6 @@ record RecordingColumns(
         List<String> inputs,
         String weight,
         Map<String, String> units) {
-
-    private static final Pattern NAME_AND_UNIT = Pattern.compile("(.*\\S)\\s*\\[([^\\[\\]]*)\\]\\s*");
 
     RecordingColumns {
         channels = List.copyOf(channels);
@@ -62,15 +56,18 @@ record RecordingColumns(
         taken.add(run);
         taken.add(weight);
         return schema.columns().stream()
-                .filter(column -> column.type().isNumber() && !taken.contains(column.name()))
+                .filter(column -> (column.type().isNumber() || column.type().isNumberList()) && !taken.contains(column.name()))
                 .map(Column::name)
                 .toList();
     }
 
-    /** Returns what is known of a recording made from such a table; the kind of times in a column of text is told by its cells only. */
+    /**
+     * Returns what is known of a recording made from such a table. The kind of times in a column of text is told by its cells only, and
+     * so is the number of channels in lists whose entries have no names.
+     */
     Outlook outlook(TableSchema schema) {
-        List<String> known = channelColumns(schema);
-        return new Outlook(describe(known), describe(inputs), axis(schema));
+        return new Outlook(ListWidths.told(schema, channelColumns(schema)).map(this::describe).orElse(List.of()),
+                ListWidths.told(schema, inputs).map(this::describe).orElse(List.of()), axis(schema));
     }
 
     private Optional<TimeAxis> axis(TableSchema schema) {
@@ -94,24 +91,8 @@ record RecordingColumns(
                 .toList();
     }
 
-    /**
-     * Returns name and unit of each column. Where dropping the unit from the names would make two of them equal, the
-     * names stay as they are in the table.
-     */
-    List<Channel> describe(List<String> columns) {
-        List<Channel> named = new ArrayList<>();
-        for (String column : columns) {
-            Matcher match = NAME_AND_UNIT.matcher(column);
-            boolean bracketed = match.matches();
-            String name = bracketed ? match.group(1) : column;
-            String unit = bracketed ? match.group(2).strip() : "";
-            named.add(new Channel(name, units.getOrDefault(column, units.getOrDefault(name, unit))));
-        }
-        boolean unique = new LinkedHashSet<>(named.stream().map(Channel::name).toList()).size() == named.size();
-        List<Channel> kept = new ArrayList<>();
-        for (int i = 0; i < columns.size(); i++) {
-            kept.add(unique ? named.get(i) : new Channel(columns.get(i), named.get(i).unit()));
-        }
-        return kept;
+    /** Returns name and unit of the channels of some columns. */
+    List<Channel> describe(List<MeasuredColumn> measured) {
+        return MeasuredColumn.channels(measured, units);
     }
 }

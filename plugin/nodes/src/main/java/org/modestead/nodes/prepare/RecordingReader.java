@@ -1,15 +1,16 @@
 package org.modestead.nodes.prepare;
 
-import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.Progress;
 import org.modestead.engine.RecordingFault;
+import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Recording;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.TimeAxis;
@@ -22,7 +23,8 @@ import org.modestead.nodes.table.Table;
  *
  * <p>Rows of different runs may be mixed; the rows of one run must be in order of time. Dates count in days (or weeks,
  * years of 365.25 days), date-times in seconds (or min, h, d, week, year), numbers as they are. A missing cell of a
- * channel stays missing; what happens to it is the snapshot plan's business.
+ * channel stays missing; what happens to it is the snapshot plan's business. A column of lists is as many channels as its lists have
+ * entries.
  */
 final class RecordingReader {
 
@@ -30,21 +32,23 @@ final class RecordingReader {
     private static final int NONE = -1;
     private final Table table;
     private final RecordingColumns columns;
-    private final List<String> channelColumns;
-    private final List<NumberCell> cells;
+    private final List<MeasuredColumn> channels;
+    private final List<MeasuredColumn> inputs;
+    private final List<MeasuredCell> channelCells;
+    private final List<MeasuredCell> inputCells;
     private final List<TextColumnWatch> watches;
     private final int timeColumn;
     private final int runColumn;
     private final Optional<NumberCell> weightCell;
     private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
 
-    private RecordingReader(Table table, RecordingColumns columns) {
+    private RecordingReader(Table table, RecordingColumns columns, Progress progress) {
         this.table = table;
         this.columns = columns;
-        this.channelColumns = columns.channelColumns(table.schema());
-        List<String> read = new ArrayList<>(channelColumns);
-        read.addAll(columns.inputs());
-        this.cells = read.stream().map(name -> new NumberCell(table.origin(), name, position(name), type(name))).toList();
+        this.channels = measured(columns.channelColumns(table.schema()), progress);
+        this.inputs = measured(columns.inputs(), progress);
+        this.channelCells = channels.stream().map(column -> MeasuredCell.of(table, column)).toList();
+        this.inputCells = inputs.stream().map(column -> MeasuredCell.of(table, column)).toList();
         this.watches = columns.unusedTexts(table.schema()).stream()
                 .map(name -> new TextColumnWatch(name, position(name))).toList();
         this.timeColumn = columns.time().isEmpty() ? NONE : position(columns.time());
@@ -58,9 +62,11 @@ final class RecordingReader {
      *
      * @param recording as logged
      * @param rows number of table rows read
+     * @param columns channels, then inputs
+     * @param lists those of them that hold lists
      * @param doubts columns that look as if they should have been numbers
      */
-    record Reading(Recording recording, long rows, List<Doubt> doubts) {}
+    record Reading(Recording recording, long rows, List<MeasuredColumn> columns, List<MeasuredColumn> lists, List<Doubt> doubts) {}
 
     /**
      * Reads all rows.
@@ -68,11 +74,11 @@ final class RecordingReader {
      * @throws RecordingFault naming table, row, column and value when a cell cannot be used
      */
     static Reading read(Table table, RecordingColumns columns, Progress progress) {
-        return new RecordingReader(table, columns).read(progress);
+        return new RecordingReader(table, columns, progress).read(progress);
     }
 
     private Reading read(Progress progress) {
-        if (channelColumns.isEmpty()) {
+        if (channels.isEmpty()) {
             throw new RecordingFault(table.origin(), "no column of numbers is left for the channels among "
                     + String.join(", ", table.schema().names()), "choose the channels or convert their columns to"
                     + " numbers");
@@ -92,7 +98,14 @@ final class RecordingReader {
             }
         }
         checkRows(rows);
-        return new Reading(recording(axis), rows, watches.stream().flatMap(watch -> watch.doubt().stream()).toList());
+        List<MeasuredColumn> read = Stream.concat(channels.stream(), inputs.stream()).toList();
+        return new Reading(recording(axis), rows, read, read.stream().filter(column -> type(column.column()).isNumberList()).toList(),
+                watches.stream().flatMap(watch -> watch.doubt().stream()).toList());
+    }
+
+    private List<MeasuredColumn> measured(List<String> names, Progress progress) {
+        names.forEach(this::position);
+        return ListWidths.told(table.schema(), names).orElseGet(() -> ListWidths.found(table, names, progress));
     }
 
     private RecordedTime firstTime(RowCursor cursor) {
@@ -107,14 +120,8 @@ final class RecordingReader {
         }
         weightCell.ifPresent(cell -> readWeight(cell, cursor, run));
         run.start(cursor.row(), at);
-        for (int j = 0; j < cells.size(); j++) {
-            double value = cells.get(j).read(cursor);
-            if (j < channelColumns.size()) {
-                run.value(value);
-            } else {
-                run.input(value);
-            }
-        }
+        channelCells.forEach(cell -> cell.read(cursor, run::value));
+        inputCells.forEach(cell -> cell.read(cursor, run::input));
         watches.forEach(watch -> watch.see(cursor));
     }
 
@@ -176,9 +183,10 @@ final class RecordingReader {
     }
 
     private Recording recording(TimeAxis axis) {
-        List<Run> finished = runs.values().stream()
-                .map(run -> run.finish(channelColumns.size(), columns.inputs().size())).toList();
-        return new Recording(columns.describe(channelColumns), columns.describe(columns.inputs()), finished, axis);
+        List<Channel> measured = columns.describe(channels);
+        List<Channel> known = columns.describe(inputs);
+        List<Run> finished = runs.values().stream().map(run -> run.finish(measured.size(), known.size())).toList();
+        return new Recording(measured, known, finished, axis);
     }
 
     private String place(RowCursor cursor, String column) {

@@ -32,6 +32,7 @@ public final class SnapshotBuilderNode implements Node {
 
     private static final TableSchema SUMMARY = TableSchema.of(Column.text("item"), Column.text("value"));
     private static final int MOST_CHANNELS_DRAWN = 6;
+    private static final int MOST_NAMED = 6;
     private static final double SHARE_OF_READING = 0.5;
 
     @Override
@@ -67,6 +68,9 @@ public final class SnapshotBuilderNode implements Node {
                 Several runs train together. Long ones count more unless runs are weighted: alike, by their noise, or by a \
                 column; a run of weight 2 counts as one that is there twice.
 
+                A column of lists is several channels, one an entry, called as the table calls the entries or by the column's name and \
+                a number. All lists of a column must have the same length; a missing list, or a missing entry, is a missing cell.
+
                 The table is streamed; memory is needed for 8 bytes a sample, channel and copy.""";
     }
 
@@ -92,6 +96,7 @@ public final class SnapshotBuilderNode implements Node {
         RecordingReader.Reading reading = RecordingReader.read(table, columns, context.progress().part(0,
                 SHARE_OF_READING));
         checkTimeUnit(reading.recording().time());
+        checkUnits(columns, reading);
         Snapshots snapshots = SnapshotBuilder.build(reading.recording(), SnapshotSettings.plan(settings),
                 context.progress().part(SHARE_OF_READING, 1));
         List<Doubt> doubts = new ArrayList<>(reading.doubts());
@@ -111,10 +116,18 @@ public final class SnapshotBuilderNode implements Node {
         }
     }
 
+    /** How many channels a list gives may be known now only; what is known before is checked before. */
+    private static void checkUnits(RecordingColumns columns, RecordingReader.Reading reading) {
+        SnapshotChecks.unknownUnits(columns, reading.columns()).stream().findFirst().ifPresent(problem -> {
+            throw new SettingFault("setting " + problem.key(), problem.seen(), problem.wanted());
+        });
+    }
+
     private static MemoryTable summary(Table table, RecordingReader.Reading reading, Snapshots snapshots) {
         MemoryTable.Builder rows = MemoryTable.builder(SUMMARY, "summary of " + table.origin());
         rows.row("table", table.origin()).row("rows", Long.toString(reading.rows()));
         rows.row("time", timeText(snapshots.time()));
+        reading.lists().forEach(list -> rows.row("list " + list.column(), String.join(", ", list.names())));
         snapshots.facts().forEach(fact -> rows.row(fact.item(), fact.value()));
         return rows.build();
     }
@@ -126,11 +139,19 @@ public final class SnapshotBuilderNode implements Node {
                 : snapshots.holdout().size() + (snapshots.holdout().size() == 1 ? " run or end of a run" : " runs or"
                         + " ends of runs")
                         + " held out to judge.";
-        return List.of(reading.rows() + " rows of " + table.origin() + " became " + snapshots.training().size()
+        List<String> all = new ArrayList<>(List.of(reading.rows() + " rows of " + table.origin() + " became " + snapshots.training().size()
                 + " training " + (snapshots.training().size() == 1 ? "run" : "runs") + " with " + samples + " samples of "
                 + snapshots.channels().size() + (snapshots.channels().size() == 1 ? " channel" : " channels")
                 + "; a state has "
-                + snapshots.stateSize() + (snapshots.stateSize() == 1 ? " component." : " components."), holdout);
+                + snapshots.stateSize() + (snapshots.stateSize() == 1 ? " component." : " components."), holdout));
+        reading.lists().forEach(list -> all.add("Column " + list.column() + " holds lists of " + list.names().size()
+                + (list.names().size() == 1 ? " number: " : " numbers, each a channel or input of its own: ") + named(list.names()) + "."));
+        return all;
+    }
+
+    private static String named(List<String> names) {
+        return names.size() <= MOST_NAMED ? String.join(", ", names)
+                : String.join(", ", names.subList(0, MOST_NAMED)) + " and " + (names.size() - MOST_NAMED) + " more";
     }
 
     private static String timeText(TimeAxis time) {

@@ -6,7 +6,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
-import org.modestead.engine.recording.Channel;
+import java.util.stream.Stream;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.nodes.contract.NearestName;
 import org.modestead.nodes.contract.SettingProblem;
@@ -49,8 +49,11 @@ final class SnapshotChecks {
                     "choose the channels among " + String.join(", ", schema.names())));
         }
         timeUnit(schema, settings).ifPresent(problems::add);
-        if (channels.stream().allMatch(name -> schema.indexOf(name).isPresent())) {
-            problems.addAll(unknownUnits(columns, channels));
+        boolean there = Stream.concat(channels.stream(), columns.inputs().stream()).allMatch(name -> schema.indexOf(name).isPresent());
+        Optional<List<MeasuredColumn>> measured = there ? ListWidths.told(schema, channels) : Optional.empty();
+        Optional<List<MeasuredColumn>> inputs = there ? ListWidths.told(schema, columns.inputs()) : Optional.empty();
+        if (measured.isPresent() && inputs.isPresent()) {
+            problems.addAll(unknownUnits(columns, Stream.concat(measured.get().stream(), inputs.get().stream()).toList()));
         }
         return problems;
     }
@@ -106,11 +109,17 @@ final class SnapshotChecks {
                         + type.title(), "use one of " + String.join(", ", allowed)));
     }
 
-    private static List<SettingProblem> unknownUnits(RecordingColumns columns, List<String> channels) {
-        Set<String> known = new LinkedHashSet<>(columns.describe(channels).stream().map(Channel::name).toList());
-        known.addAll(channels);
-        known.addAll(columns.describe(columns.inputs()).stream().map(Channel::name).toList());
-        known.addAll(columns.inputs());
+    /**
+     * Returns units of channels that are not there.
+     *
+     * @param columns and what they mean
+     * @param measured channels and inputs, the entries of lists known
+     */
+    static List<SettingProblem> unknownUnits(RecordingColumns columns, List<MeasuredColumn> measured) {
+        Set<String> known = new LinkedHashSet<>();
+        measured.forEach(column -> column.names().forEach(name -> known.add(MeasuredColumn.base(name))));
+        measured.forEach(column -> known.addAll(column.names()));
+        measured.forEach(column -> known.addAll(List.of(MeasuredColumn.base(column.column()), column.column())));
         return columns.units().keySet().stream().filter(name -> !known.contains(name)).sorted()
                 .map(name -> new SettingProblem(SnapshotSettings.UNITS, "there is no channel " + name
                         + NearestName.hint(name, known),

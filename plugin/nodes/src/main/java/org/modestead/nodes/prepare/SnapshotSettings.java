@@ -46,6 +46,8 @@ final class SnapshotSettings {
     private static final Set<CellType> TIMES = Set.of(CellType.DOUBLE, CellType.LONG, CellType.DATE, CellType.DATE_TIME,
             CellType.ZONED_DATE_TIME, CellType.TEXT);
     private static final Set<CellType> NUMBERS = Set.of(CellType.DOUBLE, CellType.LONG, CellType.TEXT);
+    private static final Set<CellType> MEASURED = Set.of(CellType.DOUBLE, CellType.LONG, CellType.TEXT, CellType.DOUBLE_LIST,
+            CellType.LONG_LIST);
     private static final Set<CellType> NAMES = Set.of(CellType.TEXT, CellType.LONG, CellType.DATE, CellType.FLAG);
     private static final double LARGEST = Double.MAX_VALUE;
 
@@ -82,15 +84,17 @@ final class SnapshotSettings {
                         + " different runs may be mixed."),
                         TABLE, NAMES, false),
                 new Setting.Columns(new Common(CHANNELS, "Channels", group, "Measured columns whose modes are wanted."
-                        + " Empty takes every column of numbers that has no other part here. A column of text is"
-                        + " accepted when each cell holds a number."), TABLE, NUMBERS, 0, OptionalInt.empty()),
+                        + " Empty takes every column of numbers, and of lists of numbers, that has no other part here. A"
+                        + " column of lists is several channels, one an entry. A column of text is accepted when each cell"
+                        + " holds a number."), TABLE, MEASURED, 0, OptionalInt.empty()),
                 new Setting.Columns(new Common(INPUTS, "Inputs", group, "Columns of known inputs such as valve"
                         + " positions or set points. They are neither detrended, scaled nor forecast; the Operator Fitter can"
                         + " separate what they drive. At new sample times they are interpolated like channels, which rounds"
                         + " off steps: keep the recorded times where inputs are switched."), TABLE,
-                        NUMBERS, 0, OptionalInt.empty()),
+                        MEASURED, 0, OptionalInt.empty()),
                 new Setting.Texts(new Common(UNITS, "Units", group, "Units of channels as channel=unit, one a line, for"
-                        + " example flow=m3/h. A column named flow [m3/h] needs no entry."), List.of()));
+                        + " example flow=m3/h. A column named flow [m3/h] needs no entry. The name of a column of lists"
+                        + " stands for all of its channels."), List.of()));
     }
 
     private static List<Setting> timeSettings() {

@@ -32,7 +32,7 @@ record TableColumns(Table table) {
             case DATE -> TimeAxis.ofDate(cursor.date(column)) / unit;
             case DATE_TIME, ZONED_DATE_TIME -> TimeAxis.ofDateTime(cursor.dateTime(column)) / unit;
             case DOUBLE, LONG -> cursor.number(column);
-            case TEXT, FLAG -> throw new SettingFault(table.origin(), "column time holds " + cursor.text(column),
+            default -> throw new SettingFault(table.origin(), "column time holds " + cursor.text(column),
                     "connect a table whose times are numbers, dates or date-times");
         };
     }

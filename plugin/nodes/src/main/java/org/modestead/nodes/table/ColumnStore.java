@@ -41,6 +41,8 @@ sealed interface ColumnStore {
             case DATE -> cell instanceof LocalDate;
             case DATE_TIME -> cell instanceof LocalDateTime;
             case ZONED_DATE_TIME -> cell instanceof ZonedDateTime;
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST ->
+                cell instanceof ListCell list && list.holds(type.entries().orElseThrow());
         };
     }
 

@@ -15,9 +15,18 @@ public class ListCell extends DataCell implements ListDataValue {
         this.cells = List.of(cells);
     }
 
+    public static DataType getCollectionType(final DataType elementType) {
+        return DataType.getType(ListCell.class, elementType);
+    }
+
+    @Override
+    public DataType getType() {
+        return getCollectionType(getElementType());
+    }
+
     @Override
     public DataType getElementType() {
-        return cells.get(0).getType();
+        return cells.stream().filter(cell -> !cell.isMissing()).findFirst().orElseThrow().getType();
     }
 
     @Override
