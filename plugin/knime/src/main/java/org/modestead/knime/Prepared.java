@@ -29,8 +29,7 @@ record Prepared(List<Port> outputs, Settings settings, Expected expected) {
 
     /** Returns the spec of a value that is there: what was expected, completed by what the value tells. */
     StageSpec spec(Port port, Object value) {
-        Outlook outlook = outlook(port);
-        return new StageSpec(port.type(), outlook.complete() ? outlook : Outlook.of(value).orElse(outlook));
+        return new StageSpec(port.type(), outlook(port).completedBy(value));
     }
 
     private PortObjectSpec spec(Port port) {

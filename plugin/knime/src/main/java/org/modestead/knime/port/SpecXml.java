@@ -15,6 +15,7 @@ import org.modestead.nodes.contract.PortType;
 final class SpecXml {
 
     private static final int VERSION = 1;
+    private static final String KERNEL = "kernel";
 
     private SpecXml() {}
 
@@ -25,6 +26,7 @@ final class SpecXml {
         channels("inputs", spec.outlook().inputs(), into);
         into.addString("time-kind", spec.outlook().time().map(axis -> axis.kind().name()).orElse(""));
         into.addString("time-unit", spec.outlook().time().map(TimeAxis::unit).orElse(""));
+        spec.outlook().kernel().ifPresent(kernel -> into.addString(KERNEL, kernel)); // absent in specs of the first release, too
     }
 
     static StageSpec read(NodeSettingsRO from) throws InvalidSettingsException {
@@ -38,7 +40,8 @@ final class SpecXml {
             Optional<TimeAxis> time = kind.isEmpty() ? Optional.empty()
                     : Optional.of(new TimeAxis(TimeAxis.Kind.valueOf(kind), from.getString("time-unit")));
             return new StageSpec(PortType.valueOf(from.getString("type")),
-                    new Outlook(channels("channels", from), channels("inputs", from), time));
+                    new Outlook(channels("channels", from), channels("inputs", from), time,
+                            from.containsKey(KERNEL) ? Optional.of(from.getString(KERNEL)) : Optional.empty()));
         } catch (IllegalArgumentException unknown) {
             throw new InvalidSettingsException("it names an unknown type or kind of time; " + unknown.getMessage(), unknown);
         }

@@ -15,11 +15,13 @@ import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.kernel.ModeRoom;
 import org.modestead.engine.kernel.ScaleHeuristic;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.NearestName;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
@@ -108,6 +110,13 @@ public final class KernelChooserNode implements Node {
         } catch (FitFault wrong) {
             return Optional.of(new SettingProblem(KernelSettings.FAMILY, wrong.seen(), wrong.wanted()));
         }
+    }
+
+    /** The kernel is known before the data are there when it is given by hand; of one whose scale comes from the data, the family is. */
+    @Override
+    public Expected expect(Expected inputs, Settings settings, RunContext context) {
+        Outlook recording = inputs.values().getOrDefault("snapshots", Outlook.NONE);
+        return new Expected(Map.of(), Map.of("kernel", KernelSettings.foreseen(settings).map(recording::withKernel).orElse(recording)));
     }
 
     @Override

@@ -5,6 +5,7 @@ import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
 import java.util.TreeMap;
@@ -155,6 +156,14 @@ final class KernelSettings {
             values.put(parameter.name(), fromData ? settings.number(FACTOR) * median : settings.number(parameter.name()));
         }
         return new KernelSpec(family.id(), values);
+    }
+
+    /** Returns the kernel in words as far as the settings tell it, empty when it is chosen from the data. */
+    static Optional<String> foreseen(Settings settings) {
+        if (settings.text(CHOOSE).equals(RANK)) {
+            return Optional.empty();
+        }
+        return Optional.of(needsMedian(settings) ? settings.text(FAMILY) + ", its length scale from the data" : fixed(settings, Double.NaN).label());
     }
 
     /** Returns the kernels to be compared, in the order of the settings. */

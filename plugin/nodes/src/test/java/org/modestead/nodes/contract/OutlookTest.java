@@ -12,6 +12,7 @@ import org.junit.jupiter.params.provider.EnumSource;
 import org.modestead.engine.Progress;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.TimeAxis;
+import org.modestead.nodes.fit.KernelChooserNode;
 import org.modestead.nodes.forecast.BacktestNode;
 import org.modestead.nodes.forecast.ForecastNode;
 import org.modestead.nodes.judge.SpectrumExtractorNode;
@@ -49,6 +50,29 @@ class OutlookTest {
         TableSchema schema = TableSchema.of(Column.text("t"), Column.number("flow [l/s]"));
         Outlook outlook = snapshots(schema, Map.of("time-column", "t"));
         assertEquals(new Outlook(List.of(new Channel("flow", "l/s")), List.of(), Optional.empty()), outlook);
+    }
+
+    @Test
+    void aKernelIsForeseenAsFarAsItDoesNotDependOnTheData() {
+        Outlook recording = new Outlook(List.of(new Channel("x", "m")), List.of(), Optional.empty());
+        Expected inputs = new Expected(Map.of(), Map.of("snapshots", recording));
+        assertEquals(recording.withKernel("polynomial(degree=3, offset=1)"), expect(new KernelChooserNode(), inputs,
+                Map.of("family", "polynomial", "degree", 3)).values().get("kernel"));
+        assertEquals(Optional.of("gaussian, its length scale from the data"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian"))
+                .values().get("kernel").kernel());
+        assertEquals(Optional.of("gaussian(scale=0.800000)"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian", "scale-mode",
+                "explicit", "scale", 0.8)).values().get("kernel").kernel());
+        assertEquals(recording, expect(new KernelChooserNode(), inputs, Map.of("choose", "rank")).values().get("kernel"));
+    }
+
+    /** What is told before is what comes out. */
+    @Test
+    void aKernelThatWasForeseenIsTheOneThatComes() {
+        Outlook foreseen = expect(new KernelChooserNode(), new Expected(Map.of(), Map.of()), Map.of("family", "linear")).values().get("kernel");
+        Object snapshots = Steps.run("snapshot-builder", Map.of("table", Ringing.numbers(5)), Map.of("time-column", "time", "run-column", "run"))
+                .outputs().get("snapshots");
+        Object kernel = Steps.run("kernel-chooser", Map.of("snapshots", snapshots), Map.of("family", "linear")).outputs().get("kernel");
+        assertEquals(foreseen, foreseen.completedBy(kernel));
     }
 
     @ParameterizedTest
