@@ -28,6 +28,7 @@ public final class Desk {
      * @param arguments none
      */
     public static void main(String[] arguments) throws IOException {
+        Thread.currentThread().setContextClassLoader(Desk.class.getClassLoader()); // the trial's own node is found as any extension's
         PrintStream answers = System.out;
         BufferedReader requests = new BufferedReader(new InputStreamReader(System.in, StandardCharsets.UTF_8));
         Requests served = new Requests();

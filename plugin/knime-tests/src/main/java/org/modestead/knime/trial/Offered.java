@@ -12,7 +12,7 @@ final class Offered {
     private Offered() {}
 
     static List<String> ids() {
-        return List.copyOf(new ModesteadNodeSet().getNodeFactoryIds());
+        return new ModesteadNodeSet().getNodeFactoryIds().stream().filter(id -> !id.equals(EchoNode.ID)).toList();
     }
 
     /** Makes a factory as the platform does: by class name through its extension points, then with the stored settings. */

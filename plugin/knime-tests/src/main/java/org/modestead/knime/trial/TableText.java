@@ -11,7 +11,11 @@ import org.knime.core.data.DataTableSpec;
 import org.knime.core.data.DoubleValue;
 import org.knime.core.data.IntValue;
 import org.knime.core.data.LongValue;
+import org.knime.core.data.collection.ListDataValue;
 import org.knime.core.data.container.CloseableRowIterator;
+import org.knime.core.data.time.localdate.LocalDateValue;
+import org.knime.core.data.time.localdatetime.LocalDateTimeValue;
+import org.knime.core.data.time.zoneddatetime.ZonedDateTimeValue;
 import org.knime.core.node.BufferedDataTable;
 
 /** A table of the platform as text, read cell by cell without the bridge; every double with all its digits. */
@@ -58,6 +62,16 @@ final class TableText {
             return Long.toString(whole.getLongValue());
         } else if (cell instanceof DoubleValue number) {
             return Double.toString(number.getDoubleValue());
+        } else if (cell instanceof LocalDateValue day) {
+            return day.getLocalDate().toString();
+        } else if (cell instanceof LocalDateTimeValue moment) {
+            return moment.getLocalDateTime().toString();
+        } else if (cell instanceof ZonedDateTimeValue zoned) {
+            return zoned.getZonedDateTime().toString();
+        } else if (cell instanceof ListDataValue list) {
+            StringJoiner entries = new StringJoiner(", ", "[", "]");
+            list.forEach(entry -> entries.add(text(entry)));
+            return entries.toString();
         }
         return Desk.escaped(cell.toString());
     }

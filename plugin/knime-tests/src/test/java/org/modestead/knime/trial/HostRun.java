@@ -59,7 +59,8 @@ record HostRun(Workflow workflow, Map<String, List<String>> tables) {
         return new HostRun(result.plan().workflow(), tables);
     }
 
-    private static List<String> lines(Table table) {
+    /** Returns the lines of a table as {@link TableText} writes those of the platform. */
+    static List<String> lines(Table table) {
         List<Column> columns = table.schema().columns();
         List<String> lines = new ArrayList<>();
         StringJoiner names = new StringJoiner("\t");

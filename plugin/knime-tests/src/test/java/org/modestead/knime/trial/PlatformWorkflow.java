@@ -18,7 +18,8 @@ import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.Setting;
 
 /**
- * A workflow file of the embedded host, built node by node in the platform. Its table sources become the platform's own CSV Reader.
+ * A workflow file of the embedded host, built node by node in the platform. Its table sources become the platform's own CSV Reader; the one of
+ * {@link EveryKind}, which no CSV file can hold, becomes the trial's source of that table.
  *
  * @param workflow as the host reads it
  * @param numbers of the platform's nodes by step
@@ -33,11 +34,13 @@ record PlatformWorkflow(Workflow workflow, Map<String, Integer> numbers) {
         Map<String, Integer> numbers = new LinkedHashMap<>();
         for (Step step : workflow.steps()) {
             boolean source = step.node().equals(HostRun.SOURCE);
-            int number = Integer.parseInt(platform.ask("node", source ? CSV_READER : step.node(), step.id()).get(0));
+            boolean typed = source && step.settings().get("path").toString().endsWith(".parquet");
+            String node = typed ? EveryKindFactory.class.getName() : source ? CSV_READER : step.node();
+            int number = Integer.parseInt(platform.ask("node", node, step.id()).get(0));
             numbers.put(step.id(), number);
-            if (source) {
+            if (source && !typed) {
                 read(platform, number, workflow.baseFolder().resolve((String) step.settings().get("path")), folder);
-            } else if (!step.settings().isEmpty()) {
+            } else if (!source && !step.settings().isEmpty()) {
                 bring(workflow.baseFolder(), declaration(step), step.settings(), folder);
                 platform.ask("set", settings(number, declaration(step), step.settings()));
             }
