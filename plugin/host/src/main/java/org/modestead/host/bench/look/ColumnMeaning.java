@@ -23,7 +23,7 @@ public record ColumnMeaning(String unit, String kind) {
             case "lambda_real", "lambda_imag", "growth_rate" -> new ColumnMeaning(time.rate(), "rate");
             case "frequency" -> new ColumnMeaning(time.frequency(), "frequency");
             case "period", "doubling_time", "horizon", "time", "step" -> new ColumnMeaning(time.name(), "time");
-            case "damping_ratio", "energy_share", "captured_share", "damping", "coverage", "mac", "frequency_change" -> new ColumnMeaning("", "share");
+            case "damping_ratio", "energy_share", "captured_share", "damping", "coverage", "frequency_change" -> new ColumnMeaning("", "share");
             case "phase" -> new ColumnMeaning("rad", "angle");
             default -> NONE;
         };

@@ -7,6 +7,7 @@ import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.basis.KernelSections;
 import org.modestead.engine.basis.LandmarkFeatures;
@@ -72,10 +73,11 @@ public final class Matrices {
         int every = Math.max(1, (centres.numRows + MOST_FUNCTIONS - 1) / MOST_FUNCTIONS);
         DMatrixRMaj some = rows(centres, every);
         String left = every == 1 ? "" : " Every " + every + "th of " + centres.numRows + " is shown.";
+        DMatrixRMaj values = kernel.matrix(some, some);
         return new HeatMap("gram", "Gram matrix of the kernel sections", "The kernel " + kernel.spec().label() + " at all pairs of "
                 + title + "s: how alike two sections are in the space. A map of one level says that the sections can hardly be told apart;"
                 + " a bright diagonal alone, that none knows of another." + left, HeatMap.Side.numbered(title),
-                HeatMap.Side.numbered(title), false, kernel.matrix(some, some));
+                HeatMap.Side.numbered(title), CommonOps_DDRM.elementMin(values) < 0, values);
     }
 
     private static DMatrixRMaj rows(DMatrixRMaj all, int every) {

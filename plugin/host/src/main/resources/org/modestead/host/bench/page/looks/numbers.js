@@ -1,0 +1,111 @@
+/**
+ * Numbers for people, written as the report writes them: as many significant digits as the purpose bears, U+2212 for the minus,
+ * plain decimals from 0.001 to below 100000, powers of ten outside.
+ */
+
+const MINUS = '\u2212';
+const RAISED = '\u2070\u00b9\u00b2\u00b3\u2074\u2075\u2076\u2077\u2078\u2079';
+const UNKNOWN = '\u2013';
+
+/**
+ * @param {number|null} value null or NaN: not known
+ * @param {number} digits at least 1
+ * @returns {string} for example 1.52, −0.0430, 2.1 × 10⁻⁷
+ */
+export function significant(value, digits) {
+  if (value === null || value === undefined || Number.isNaN(value)) {
+    return UNKNOWN;
+  }
+  if (!Number.isFinite(value)) {
+    return value < 0 ? `${MINUS}\u221e` : '\u221e';
+  }
+  if (value === 0) {
+    return '0';
+  }
+  const sign = value < 0 ? MINUS : '';
+  const [mantissa, power] = Math.abs(value).toExponential(digits - 1).split('e');
+  const exponent = Number(power);
+  if (exponent < -3 || exponent > 4) {
+    return `${sign}${mantissa} \u00d7 10${raised(exponent)}`;
+  }
+  return sign + Number(`${mantissa}e${exponent}`).toFixed(Math.max(0, digits - 1 - exponent));
+}
+
+function raised(exponent) {
+  return [...String(exponent)].map((digit) => (digit === '-' ? '\u207b' : RAISED[Number(digit)])).join('');
+}
+
+/** Three digits, for running text. */
+export function figure(value) {
+  return significant(value, 3);
+}
+
+/** Five digits without zeros at the end, for tables. */
+export function cell(value) {
+  const text = significant(value, 5);
+  return text.includes('.') && !text.includes('\u00d7') ? text.replace(/0+$/, '').replace(/\.$/, '') : text;
+}
+
+/** A share of 1 as per cent without the sign, for a column that says per cent: 0.018 gives 1.8. */
+export function hundredths(value) {
+  return value === null ? UNKNOWN : trimmed(significant(100 * value, 4));
+}
+
+function trimmed(text) {
+  return text.includes('.') && !text.includes('\u00d7') ? text.replace(/0+$/, '').replace(/\.$/, '') : text;
+}
+
+/** A tick of an axis: as few characters as say it. */
+export function tick(value) {
+  if (value === 0 || !Number.isFinite(value)) {
+    return '0';
+  }
+  const [mantissa, power] = Math.abs(value).toExponential(6).replace(/\.?0+e/, 'e').split('e');
+  const exponent = Number(power);
+  const text = exponent >= -5 && exponent <= 5 ? String(Number(Math.abs(value).toPrecision(7))) : `${mantissa}e${exponent}`;
+  return (value < 0 ? MINUS : '') + text.replace('-', MINUS);
+}
+
+/** Whole numbers with narrow blanks between thousands: 12 345. */
+export function count(value) {
+  return String(value).replace(/\B(?=(\d{3})+(?!\d))/g, '\u202f');
+}
+
+/** "1 row", "3 rows". */
+export function counted(value, singular) {
+  return `${count(value)} ${singular}${value === 1 ? '' : 's'}`;
+}
+
+const DAY = 86400000;
+
+/** Milliseconds since 1970 of a figure's time; the number itself where the axis is plain. */
+export function milliseconds(value, time) {
+  return time === 'date' ? value * DAY : time === 'date-time' ? value * 1000 : value;
+}
+
+/** A value of an axis in words: a number, a date or a date and time. */
+export function onAxis(value, axis) {
+  if (axis.categories.length > 0) {
+    return axis.categories[Math.round(value)] ?? cell(value);
+  }
+  if (axis.time === 'date' || axis.time === 'date-time') {
+    const moment = new Date(milliseconds(value, axis.time));
+    if (Number.isNaN(moment.getTime())) {
+      return UNKNOWN;
+    }
+    return axis.time === 'date' ? moment.toISOString().slice(0, 10) : moment.toISOString().slice(0, 19).replace('T', ' ');
+  }
+  return cell(value);
+}
+
+/** Splits "growth rate [1/s]" into what and unit. */
+export function labelled(label) {
+  const found = /^(.*?)\s*\[([^\]]*)\]$/.exec(label);
+  return found ? {what: found[1], unit: found[2]} : {what: label, unit: ''};
+}
+
+/** A value with what it is and its unit: "frequency 0.62 Hz". */
+export function told(value, axis) {
+  const {what, unit} = labelled(axis.label);
+  return [what, onAxis(value, axis), axis.categories.length > 0 ? '' : unit].filter(Boolean).join(' ');
+}
