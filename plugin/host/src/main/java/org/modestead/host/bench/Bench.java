@@ -1,26 +1,55 @@
 package org.modestead.host.bench;
 
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
+import org.modestead.host.bench.desk.DeskFolder;
+import org.modestead.host.bench.folders.OpenedFolders;
+import org.modestead.host.bench.run.Build;
+import org.modestead.host.bench.run.KeptResults;
+import org.modestead.host.bench.run.ResultFolder;
 import org.modestead.host.bench.server.BenchServer;
 import org.modestead.host.bench.work.Workbench;
-import org.modestead.host.workflow.WorkflowFile;
 import org.modestead.nodes.contract.NodeCatalog;
 
 /** A bench at work: its server and what lies on it. */
 public final class Bench implements AutoCloseable {
 
+    private final Workbench workbench;
     private final BenchServer server;
 
-    private Bench(BenchServer server) {
+    private Bench(Workbench workbench, BenchServer server) {
+        this.workbench = workbench;
         this.server = server;
     }
 
+    /**
+     * How a bench is started.
+     *
+     * @param workflow to be opened; empty for the start page
+     * @param port of the page, 0 for a free one
+     * @param desk where work, uploads and results are kept
+     * @param folders opened beside those of the workflow and the desk
+     * @param keptBytes most bytes of results on disk
+     * @param uploadBytes most bytes of an uploaded file
+     */
+    public record Options(Optional<Path> workflow, int port, DeskFolder desk, List<Path> folders, long keptBytes, long uploadBytes) {
+
+        /** Takes an immutable copy. */
+        public Options {
+            folders = List.copyOf(folders);
+        }
+    }
+
     /** Starts it. */
-    public static Bench start(NodeCatalog catalog, Optional<Path> workflow, int port) {
-        Workbench workbench = new Workbench(catalog);
-        workflow.flatMap(file -> WorkflowFile.read(file).workflow()).ifPresent(workbench::open);
-        return new Bench(BenchServer.start(workbench, catalog, port));
+    public static Bench start(NodeCatalog catalog, Options options) {
+        List<Path> open = new ArrayList<>(List.of(options.desk().root()));
+        open.addAll(options.folders());
+        KeptResults results = new KeptResults(new ResultFolder(options.desk().results(), Build.mark(), options.keptBytes()));
+        Workbench workbench = new Workbench(catalog, results, new OpenedFolders(open));
+        options.workflow().ifPresent(file -> workbench.open(() -> options.desk().open(file)));
+        return new Bench(workbench, BenchServer.start(workbench, catalog, options.port()));
     }
 
     /** Returns the URL that opens the page. */
@@ -28,8 +57,10 @@ public final class Bench implements AutoCloseable {
         return server.startUrl();
     }
 
+    /** Stops what runs and ends; all work is kept. */
     @Override
     public void close() {
         server.close();
+        workbench.close();
     }
 }

@@ -13,7 +13,7 @@ import java.util.Optional;
 import java.util.concurrent.ThreadLocalRandom;
 
 /** Keeps two processes from writing one result folder; let go by the system even when the process is killed. */
-final class FolderLock implements AutoCloseable {
+public final class FolderLock implements AutoCloseable {
 
     private static final int LONGEST_MARK = 1 << 16;
 
@@ -26,7 +26,7 @@ final class FolderLock implements AutoCloseable {
     }
 
     /** Takes the lock, or returns empty when another process or run has it. */
-    static Optional<FolderLock> take(Path file) throws IOException {
+    public static Optional<FolderLock> take(Path file) throws IOException {
         while (true) {
             FileChannel channel = FileChannel.open(file, StandardOpenOption.CREATE, StandardOpenOption.READ,
                     StandardOpenOption.WRITE);

@@ -20,7 +20,7 @@ import org.modestead.nodes.contract.Setting;
  * What a step's result depends on, as one SHA-256 digest: node, settings, the files they name, and the fingerprints of
  * the steps it takes input from. Nodes give the same result for the same fingerprint.
  */
-final class Fingerprint {
+public final class Fingerprint {
 
     /** Larger files count by size and time of change alone: reading them would cost more than it saves. */
     private static final long LARGEST_HASHED = 16L << 20;
@@ -34,11 +34,27 @@ final class Fingerprint {
      * @return empty when the step has effects besides its result and must run every time
      */
     static Optional<String> of(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
-        NodeDeclaration declaration = step.declaration();
-        boolean writes = declaration.settings().stream().anyMatch(setting -> setting instanceof Setting.File file
+        return hasEffects(step) ? Optional.empty() : identity(step, inputs, baseFolder);
+    }
+
+    /** Returns whether a step does more than give a result: it writes a file, or gives none at all. */
+    public static boolean hasEffects(PlannedStep step) {
+        boolean writes = step.declaration().settings().stream().anyMatch(setting -> setting instanceof Setting.File file
                 && !file.reading());
-        boolean known = step.inputs().values().stream().allMatch(source -> inputs.containsKey(source.step()));
-        if (writes || declaration.outputs().isEmpty() || !known) {
+        return writes || step.declaration().outputs().isEmpty();
+    }
+
+    /**
+     * The same digest for steps with effects too: it tells whether a step has been done as it stands, not whether it may be left out.
+     *
+     * @param step whose result is meant
+     * @param inputs fingerprints by id of the steps that it takes input from
+     * @param baseFolder against which file settings are resolved
+     * @return empty when the fingerprint of an input is not known
+     */
+    public static Optional<String> identity(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
+        NodeDeclaration declaration = step.declaration();
+        if (!step.inputs().values().stream().allMatch(source -> inputs.containsKey(source.step()))) {
             return Optional.empty();
         }
         MessageDigest digest = sha256();
@@ -47,7 +63,7 @@ final class Fingerprint {
         new TreeMap<>(step.settings().values()).forEach((key, value) -> line(digest, "setting " + key,
                 value.getClass().getSimpleName() + " " + value));
         for (Setting setting : declaration.settings()) {
-            if (setting instanceof Setting.File && !step.settings().text(setting.key()).isEmpty()) {
+            if (setting instanceof Setting.File file && file.reading() && !step.settings().text(setting.key()).isEmpty()) {
                 line(digest, "file " + setting.key(), file(baseFolder.resolve(step.settings().text(setting.key()))));
             }
         }

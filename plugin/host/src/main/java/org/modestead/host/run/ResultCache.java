@@ -3,13 +3,14 @@ package org.modestead.host.run;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Optional;
+import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.NodeResult;
 
 /**
  * Results of earlier runs in memory, by what they depend on. Bounded: the result unused for longest goes first.
  * Thread-safe.
  */
-public final class ResultCache {
+public final class ResultCache implements Results {
 
     private final int capacity;
     private final Map<String, NodeResult> results = new LinkedHashMap<>(16, 0.75f, true);
@@ -19,11 +20,13 @@ public final class ResultCache {
         this.capacity = capacity;
     }
 
-    synchronized Optional<NodeResult> find(String fingerprint) {
+    @Override
+    public synchronized Optional<NodeResult> find(PlannedStep step, String fingerprint) {
         return Optional.ofNullable(results.get(fingerprint));
     }
 
-    synchronized void keep(String fingerprint, NodeResult result) {
+    @Override
+    public synchronized void keep(PlannedStep step, String fingerprint, NodeResult result) {
         results.put(fingerprint, result);
         while (results.size() > capacity) {
             results.remove(results.keySet().iterator().next());

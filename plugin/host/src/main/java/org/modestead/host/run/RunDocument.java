@@ -16,11 +16,12 @@ import org.modestead.nodes.report.RunReport;
 import org.modestead.nodes.report.StepAccount;
 
 /** The report of a run: what the steps that were done have to say, under a warning when others were not. */
-final class RunDocument {
+public final class RunDocument {
 
     private RunDocument() {}
 
-    static ReportDocument of(RunResult result) {
+    /** Returns the report of a run. */
+    public static ReportDocument of(RunResult result) {
         List<StepAccount> accounts = new ArrayList<>();
         List<String> missing = new ArrayList<>();
         for (PlannedStep step : result.plan().order()) {

@@ -21,12 +21,12 @@ final class StepRunner {
     private static final double WORK = 0.9;
 
     private final Path baseFolder;
-    private final ResultCache cache;
+    private final Results cache;
     private final StepStore store;
     private final RunListener listener;
     private final CancelSwitch cancel;
 
-    StepRunner(Path baseFolder, ResultCache cache, StepStore store, RunListener listener, CancelSwitch cancel) {
+    StepRunner(Path baseFolder, Results cache, StepStore store, RunListener listener, CancelSwitch cancel) {
         this.baseFolder = baseFolder;
         this.cache = cache;
         this.store = store;
@@ -55,13 +55,13 @@ final class StepRunner {
             cancel.check();
             listener.started(step.id());
             Optional<String> fingerprint = Fingerprint.of(step, inputs.fingerprints(), baseFolder);
-            Optional<NodeResult> known = fingerprint.flatMap(cache::find);
+            Optional<NodeResult> known = fingerprint.flatMap(found -> cache.find(step, found));
             NodeResult result = known.isPresent() ? known.get() : work(step, inputs);
             Optional<StepOutcome> unwritten = keep(step, result);
             if (unwritten.isPresent()) {
                 return new Ended(step, unwritten.get(), Optional.empty());
             }
-            fingerprint.ifPresent(found -> cache.keep(found, result));
+            fingerprint.ifPresent(found -> cache.keep(step, found, result));
             return new Ended(step, new StepOutcome.Done(result, since(start), known.isPresent()), fingerprint);
         } catch (Cancelled stopped) {
             return ended(step, new StepOutcome.Stopped());

@@ -97,15 +97,24 @@ final class DuckDbCursor implements RowCursor {
     }
 
     private Optional<Object> value(int column, CellType type) throws SQLException {
+        return cell(rows, column + 1, type);
+    }
+
+    /**
+     * Returns a cell of the current row.
+     *
+     * @param position of the column, from 1
+     */
+    static Optional<Object> cell(ResultSet rows, int position, CellType type) throws SQLException {
         Object found = switch (type) {
-            case DOUBLE -> number(column);
-            case LONG -> rows.getLong(column + 1);
-            case TEXT -> rows.getString(column + 1);
-            case FLAG -> rows.getBoolean(column + 1);
-            case DATE -> rows.getObject(column + 1, LocalDate.class);
-            case DATE_TIME -> rows.getObject(column + 1, LocalDateTime.class);
-            case ZONED_DATE_TIME -> rows.getObject(column + 1, OffsetDateTime.class);
-            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST -> list(column);
+            case DOUBLE -> rows.getDouble(position);
+            case LONG -> rows.getLong(position);
+            case TEXT -> rows.getString(position);
+            case FLAG -> rows.getBoolean(position);
+            case DATE -> rows.getObject(position, LocalDate.class);
+            case DATE_TIME -> rows.getObject(position, LocalDateTime.class);
+            case ZONED_DATE_TIME -> rows.getObject(position, OffsetDateTime.class);
+            case DOUBLE_LIST, LONG_LIST, TEXT_LIST, FLAG_LIST, DATE_LIST, DATE_TIME_LIST, ZONED_DATE_TIME_LIST -> list(rows, position);
         };
         boolean missing = found == null || rows.wasNull() || found instanceof Double number && number.isNaN();
         if (missing) {
@@ -115,8 +124,8 @@ final class DuckDbCursor implements RowCursor {
     }
 
     /** Returns the list, null when there is none, as {@code getString} does. */
-    private ListCell list(int column) throws SQLException {
-        Array found = rows.getArray(column + 1);
+    private static ListCell list(ResultSet rows, int position) throws SQLException {
+        Array found = rows.getArray(position);
         return found == null ? null : new ListCell(Stream.of((Object[]) found.getArray()).map(DuckDbCursor::entry).toList());
     }
 

@@ -20,13 +20,11 @@ import org.modestead.host.workflow.Workflow;
 public record Inspection(Survey survey, Map<String, List<Problem>> byStep, List<Problem> general) {
 
     /** Sorts the problems of a survey. */
-    public static Inspection of(Workflow workflow, Survey survey, List<Problem> more) {
+    public static Inspection of(Workflow workflow, Survey survey) {
         Map<String, List<Problem>> byStep = new LinkedHashMap<>();
         workflow.steps().stream().map(Step::id).forEach(id -> byStep.put(id, new ArrayList<>()));
         List<Problem> general = new ArrayList<>();
-        List<Problem> all = new ArrayList<>(survey.problems());
-        all.addAll(more);
-        for (Problem problem : all) {
+        for (Problem problem : survey.problems()) {
             String step = problem.step().isEmpty() ? target(workflow, problem) : problem.step();
             if (byStep.containsKey(step)) {
                 byStep.get(step).add(problem);

@@ -1,106 +1,419 @@
 package org.modestead.host.bench.work;
 
 import java.nio.file.Path;
+import java.time.Duration;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.modestead.host.bench.check.Inspection;
-import org.modestead.host.bench.check.RememberedForesight;
-import org.modestead.host.bench.desk.Bands;
+import java.util.OptionalDouble;
+import java.util.Set;
+import java.util.function.Supplier;
+import org.modestead.engine.Progress;
+import org.modestead.host.bench.check.DialogData;
+import org.modestead.host.bench.check.Fitting;
 import org.modestead.host.bench.desk.Change;
+import org.modestead.host.bench.desk.Desk;
+import org.modestead.host.bench.desk.DeskFault;
 import org.modestead.host.bench.desk.Edit;
 import org.modestead.host.bench.desk.EditFault;
-import org.modestead.host.bench.desk.Timeline;
+import org.modestead.host.bench.desk.LinkRules;
+import org.modestead.host.bench.desk.StepEdit;
+import org.modestead.host.bench.folders.FileSettings;
+import org.modestead.host.bench.folders.OpenedFolders;
+import org.modestead.host.bench.run.BenchRun;
+import org.modestead.host.bench.run.KeptResults;
+import org.modestead.host.bench.run.Spans;
 import org.modestead.host.bench.run.StepState;
-import org.modestead.host.workflow.Problem;
+import org.modestead.host.run.DefectLog;
+import org.modestead.host.run.RunDocument;
+import org.modestead.host.run.RunResult;
+import org.modestead.host.run.StepOutcome;
+import org.modestead.host.workflow.Link;
+import org.modestead.host.workflow.PlannedStep;
+import org.modestead.host.workflow.RunPlan;
 import org.modestead.host.workflow.Step;
 import org.modestead.host.workflow.Workflow;
-import org.modestead.host.workflow.WorkflowChecker;
+import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
+import org.modestead.nodes.contract.NodeInputs;
+import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.document.ReportDocument;
 
-/** The desk that is open, if one is. Everything that changes it comes here, one after the other. Thread-safe. */
-public final class Workbench {
+/**
+ * The desk that is open, if one is. Everything that changes it comes here, one after the other; whoever watches is told of every
+ * change by a number that rises. Thread-safe.
+ */
+public final class Workbench implements AutoCloseable, BenchRun.Watcher {
 
     private final NodeCatalog catalog;
-    private final WorkflowChecker checker;
-    private Optional<Timeline> timeline = Optional.empty();
+    private final KeptResults results;
+    private final OpenedFolders folders;
+    private final Overview overview;
+    private Optional<Desk> desk = Optional.empty();
+    private Optional<BenchRun> run = Optional.empty();
+    private Map<String, String> running = Map.of();
+    private final Map<String, Ending> endings = new HashMap<>();
+    private String last = "";
     private long revision;
+    private Optional<Snapshot> snapshot = Optional.empty();
 
-    /** @param catalog nodes that may be used */
-    public Workbench(NodeCatalog catalog) {
+    /**
+     * @param catalog nodes that may be used
+     * @param results of earlier runs
+     * @param folders that are open whatever workflow is
+     */
+    public Workbench(NodeCatalog catalog, KeptResults results, OpenedFolders folders) {
         this.catalog = catalog;
-        this.checker = new WorkflowChecker(catalog, new RememberedForesight());
+        this.results = results;
+        this.folders = folders;
+        this.overview = new Overview(catalog, results);
     }
 
-    /** What an edit gives: the desk after it, and the steps that it made. */
-    public record Edited(DeskView view, List<String> made) {}
+    /** How a step ended without a result. */
+    record Ending(String identity, StepState.Kind kind, String sentence) {}
 
-    /** Opens a document. */
-    public synchronized DeskView open(Workflow workflow) {
-        timeline = Optional.of(Timeline.begin(workflow));
-        revision++;
-        return view();
+    /** What was found out about the document at one revision. */
+    private record Snapshot(Overview.Found found, DeskView view) {}
+
+    /** What an edit gives: the desk after it, and the steps that it made. */
+    public record Edited(DeskView view, List<String> made) {
+
+        /** Takes an immutable copy. */
+        public Edited {
+            made = List.copyOf(made);
+        }
+    }
+
+    /** Puts another desk in the place of the one that is open, which is kept and closed first. */
+    public DeskView open(Supplier<Desk> opened) {
+        leave();
+        synchronized (this) {
+            desk = Optional.of(opened.get());
+            return changed();
+        }
+    }
+
+    /** Goes back to the start page; the desk is kept. */
+    public DeskView leave() {
+        stop();
+        synchronized (this) {
+            desk.ifPresent(Desk::close);
+            desk = Optional.empty();
+            endings.clear();
+            last = "";
+            return changed();
+        }
     }
 
     /** Does edits, all or none, as one step of undo. */
     public synchronized Edited edit(List<Edit> edits, String label) {
-        Timeline before = opened();
-        Workflow document = before.current();
+        Desk opened = opened();
+        Workflow before = opened.timeline().current();
+        Workflow document = before;
         List<String> made = new ArrayList<>();
+        Map<String, String> latest = opened.latest();
         for (Edit edit : edits) {
             Change change = edit.apply(document, catalog);
             document = change.workflow();
             made.addAll(change.made());
+            if (edit instanceof StepEdit.Rename rename && latest.containsKey(rename.step())) {
+                opened.latest(Map.of(rename.id(), latest.get(rename.step())));
+            }
         }
-        String words = label.isBlank() ? edits.get(0).words(before.current(), catalog) : label;
-        timeline = Optional.of(before.then(document, words));
-        revision++;
+        if (!document.equals(before)) {
+            opened.edit(document, label.isBlank() ? edits.get(0).words(before, catalog) : label);
+            changed();
+        }
         return new Edited(view(), made);
     }
 
     /** Takes the last edit back. */
     public synchronized DeskView undo() {
-        timeline = Optional.of(opened().undo());
-        revision++;
-        return view();
+        opened().undo();
+        return changed();
     }
 
     /** Does again what was taken back. */
     public synchronized DeskView redo() {
-        timeline = Optional.of(opened().redo());
-        revision++;
+        opened().redo();
+        return changed();
+    }
+
+    /**
+     * Writes the workflow to its file, or to another one.
+     *
+     * @param name of another file; empty for its own
+     */
+    public synchronized DeskView save(String name) {
+        Desk opened = opened();
+        Workflow document = opened.timeline().current();
+        Path file = name.isBlank() ? document.file() : folders(document).inside(name, document.baseFolder());
+        if (!file.getFileName().toString().endsWith(".json")) {
+            throw new DeskFault("file " + file, "its name does not end in .json", "save as workflow.json");
+        }
+        opened.save(file);
+        return changed();
+    }
+
+    /**
+     * Runs steps and all they need.
+     *
+     * @param steps to be run; empty for everything that is set up
+     * @param again whether these run even though they have a result
+     */
+    public DeskView run(List<String> steps, boolean again) {
+        BenchRun begun;
+        synchronized (this) {
+            if (run.isPresent()) {
+                throw new DeskFault("run", "one is going on", "wait for its end, or stop it");
+            }
+            Desk opened = opened();
+            changed();
+            Overview.Found found = found();
+            RunPlan plan = new Plans(found, opened.timeline().current()).plan(steps, again);
+            if (plan.steps().isEmpty()) {
+                last = "Everything is up to date.";
+                return changed();
+            }
+            Map<String, Double> expected = new HashMap<>();
+            found.seconds(opened.latest()).forEach(expected::put);
+            running = found.identities();
+            plan.steps().forEach(step -> endings.remove(step.id()));
+            begun = new BenchRun(plan, expected, results, again ? Set.copyOf(steps) : Set.of(), this);
+            run = Optional.of(begun);
+            last = "";
+            changed();
+        }
+        begun.start();
         return view();
     }
 
-    private Timeline opened() {
-        return timeline.orElseThrow(() -> new EditFault("desk", "none is open", "open one first"));
+    /** Stops what runs; over within a second. */
+    public DeskView stop() {
+        Optional<BenchRun> going;
+        synchronized (this) {
+            going = run;
+        }
+        going.ifPresent(BenchRun::stop);
+        return view();
+    }
+
+    @Override
+    public synchronized void began(BenchRun from, String step) {
+        changed();
+    }
+
+    @Override
+    public synchronized void ended(BenchRun from, PlannedStep step, StepOutcome outcome) {
+        String identity = running.getOrDefault(step.id(), "");
+        if (outcome instanceof StepOutcome.Done done) {
+            if (!done.cached() || results.facts(identity).isEmpty()) {
+                results.keep(step.declaration(), identity, done.result(), done.time().toNanos() / 1e9);
+            }
+            desk.ifPresent(opened -> opened.latest(Map.of(step.id(), identity)));
+        } else if (outcome instanceof StepOutcome.Failed failed) {
+            endings.put(step.id(), new Ending(identity, StepState.Kind.FAILED, failed.sentence()));
+            failed.defect().ifPresent(DefectLog::write);
+        }
+        changed();
+    }
+
+    @Override
+    public synchronized void over(BenchRun from, Map<String, StepOutcome> outcomes, boolean stopped) {
+        if (stopped) {
+            from.states().keySet().forEach(step -> endings.put(step, new Ending(running.getOrDefault(step, ""), StepState.Kind.STOPPED, "Stopped.")));
+        }
+        long failed = outcomes.values().stream().filter(StepOutcome.Failed.class::isInstance).count();
+        long done = outcomes.values().stream().filter(StepOutcome.Done.class::isInstance).count();
+        last = stopped ? "Stopped." : failed > 0 ? failed + (failed == 1 ? " step" : " steps") + " failed, " + done + " done."
+                : done + (done == 1 ? " step" : " steps") + " done.";
+        run = Optional.empty();
+        changed();
+    }
+
+    private Desk opened() {
+        return desk.orElseThrow(() -> new DeskFault("desk", "none is open", "open one first"));
+    }
+
+    private OpenedFolders folders(Workflow workflow) {
+        return folders.and(workflow.baseFolder());
+    }
+
+    /** Returns the folders that are open now. */
+    public synchronized OpenedFolders folders() {
+        return desk.map(opened -> folders(opened.timeline().current())).orElse(folders);
+    }
+
+    private DeskView changed() {
+        revision++;
+        snapshot = Optional.empty();
+        notifyAll();
+        return view();
     }
 
     /** Returns the desk as it stands. */
     public synchronized DeskView view() {
-        return new DeskView(revision, timeline.map(this::open));
+        return snapshot().view();
     }
 
-    private DeskView.Open open(Timeline timeline) {
-        Workflow workflow = timeline.current();
-        Inspection inspection = Inspection.of(workflow, checker.survey(workflow), List.of());
-        Map<String, DeskView.Standing> standing = new LinkedHashMap<>();
-        for (Step step : workflow.steps()) {
-            standing.put(step.id(), new DeskView.Standing(state(inspection, step.id()), Optional.empty()));
-        }
-        Path file = workflow.file();
-        return new DeskView.Open("desk", workflow, Bands.ordered(workflow, catalog), false, "not saved in " + file, "", timeline.undoLabel(),
-                timeline.redoLabel(), inspection, standing, DeskView.RunView.idle(""));
+    /** Returns all that is known of the document as it stands. */
+    public synchronized Overview.Found found() {
+        opened();
+        return snapshot().found();
     }
 
-    private static StepState state(Inspection inspection, String step) {
-        if (inspection.setUp(step)) {
-            boolean first = inspection.survey().inputs().getOrDefault(step, Map.of()).isEmpty();
-            return first ? StepState.of(StepState.Kind.READY, "") : StepState.of(StepState.Kind.WAITING, "A step before it has no result.");
+    /** Returns the document as it stands. */
+    public synchronized Workflow workflow() {
+        return opened().timeline().current();
+    }
+
+    /**
+     * A result that is looked at.
+     *
+     * @param id names it
+     * @param step as it stands
+     * @param node of the step
+     * @param result what the node gave
+     * @param stale whether it belongs to other settings, inputs or files
+     */
+    public record Looked(String id, Step step, Node node, NodeResult result, boolean stale) {}
+
+    /**
+     * Returns the result of a step; one that costs nothing to make is made again where it was not kept.
+     *
+     * @throws DeskFault if there is none
+     */
+    public Looked look(String id) {
+        Step step;
+        Overview.Found found;
+        Optional<String> shown;
+        synchronized (this) {
+            step = step(id);
+            found = found();
+            shown = view().desk().orElseThrow().standing().get(id).result();
         }
-        List<Problem> problems = inspection.byStep().get(step);
-        return StepState.of(StepState.Kind.UNSET, problems.isEmpty() ? "" : problems.get(0).seen() + "; " + problems.get(0).wanted() + ".");
+        Node node = catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + id, "its node is not known", "remove the step"));
+        String result = shown.orElseThrow(() -> new DeskFault("step " + id, "it has no result", "run it first"));
+        Optional<NodeResult> kept = results.find(node.declaration(), result);
+        boolean fresh = found.identity(id).filter(result::equals).isPresent();
+        PlannedStep planned = found.inspection().survey().planned().get(id);
+        if (kept.isEmpty() && fresh && results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
+            kept = Optional.of(madeAnew(planned, result));
+        }
+        return new Looked(result, step, node, kept.orElseThrow(() -> new DeskFault("step " + id, "its result is no longer kept", "run it again")), !fresh);
+    }
+
+    private NodeResult madeAnew(PlannedStep step, String result) {
+        Map<String, Object> inputs = new HashMap<>();
+        step.inputs().forEach((port, source) -> inputs.put(port, look(source.step()).result().outputs().get(source.port())));
+        Path folder = workflow().baseFolder();
+        NodeResult made = step.node().run(new NodeInputs(inputs), step.settings(), new RunContext(Progress.NONE, folder, folder));
+        results.remember(result, made);
+        return made;
+    }
+
+    /** Returns the report of all results on the desk; what has none is told in it. */
+    public ReportDocument report() {
+        Workflow workflow = workflow();
+        Overview.Found found = found();
+        Map<String, StepOutcome> outcomes = new LinkedHashMap<>();
+        List<PlannedStep> order = new ArrayList<>();
+        for (String id : found.inspection().survey().order()) {
+            PlannedStep step = found.inspection().survey().planned().get(id);
+            if (step != null) {
+                order.add(step);
+                outcomes.put(id, found.fresh(id) ? new StepOutcome.Done(look(id).result(), Duration.ZERO, true)
+                        : new StepOutcome.Failed("step " + id + ": it has no result that belongs to what is set; run it.", Optional.empty(), Duration.ZERO));
+            }
+        }
+        return RunDocument.of(new RunResult(new RunPlan(workflow, order, order), outcomes, workflow.baseFolder(), Duration.ZERO, false));
+    }
+
+    /** Returns a step as it stands. */
+    public synchronized Step step(String id) {
+        return workflow().step(id).orElseThrow(() -> new DeskFault("step " + id, "there is no such step", "choose one that is there"));
+    }
+
+    /**
+     * Returns what a dialog shows.
+     *
+     * @param id of the step
+     * @param typed in the dialog so far
+     */
+    public synchronized DialogData dialog(String id, Map<String, Object> typed) {
+        Step step = step(id);
+        Node node = catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + id, "its node is not known", "remove the step"));
+        Workflow workflow = workflow();
+        return DialogData.of(step, node, typed, found().inspection().survey(),
+                changed -> FileSettings.problems(changed, workflow.baseFolder(), node.declaration(), folders(workflow)));
+    }
+
+    /** Returns what fits an end of a link. */
+    public synchronized Fitting fitting(Link.End end, boolean output) {
+        return Fitting.of(workflow(), catalog, end, output);
+    }
+
+    /** Returns why a link may not be drawn, empty when it may. */
+    public synchronized Optional<EditFault> refusal(Link link) {
+        return LinkRules.refusal(workflow(), catalog, link);
+    }
+
+    /**
+     * Waits for a change.
+     *
+     * @param known revision that is known
+     * @param millis longest to wait
+     * @return the desk when it changed, empty when it did not
+     */
+    public synchronized Optional<DeskView> await(long known, long millis) throws InterruptedException {
+        if (revision == known) {
+            wait(millis);
+        }
+        return revision == known ? Optional.empty() : Optional.of(view());
+    }
+
+    /** How the work of a run goes on. */
+    public record Going(long revision, DeskView.RunView run, Map<String, StepState> states) {}
+
+    /** Returns how the work goes on, empty when nothing runs. */
+    public synchronized Optional<Going> going() {
+        return run.map(begun -> new Going(revision, runView(), begun.states()));
+    }
+
+    private Snapshot snapshot() {
+        Snapshot now = snapshot.orElseGet(() -> desk.map(this::look).orElseGet(() -> new Snapshot(Overview.Found.NOTHING, new DeskView(revision, Optional.empty()))));
+        snapshot = Optional.of(now);
+        return now;
+    }
+
+    private Snapshot look(Desk opened) {
+        Workflow workflow = opened.timeline().current();
+        Overview.Found found = overview.look(workflow, folders(workflow));
+        Map<String, DeskView.Standing> standing = found.standing(workflow, opened.latest(), endings, run);
+        return new Snapshot(found, new DeskView(revision, Optional.of(new DeskView.Open(opened.id(), workflow, found.ordered(), opened.isSaved(),
+                opened.savedWords(), opened.recovered(), opened.timeline().undoLabel(), opened.timeline().redoLabel(), found.inspection(), standing,
+                runView()))));
+    }
+
+    private DeskView.RunView runView() {
+        if (run.isEmpty()) {
+            return DeskView.RunView.idle(last);
+        }
+        BenchRun begun = run.get();
+        OptionalDouble left = begun.secondsLeft();
+        String words = begun.isStopping() ? "stopping" : "running, " + (int) Math.floor(100 * begun.fraction()) + " %"
+                + (left.isPresent() ? ", about " + Spans.words(left.getAsDouble()) + " left" : "");
+        return new DeskView.RunView(true, words, begun.fraction(), left, begun.isStopping(), "");
+    }
+
+    /** Stops what runs and closes the desk; all is kept. */
+    @Override
+    public void close() {
+        leave();
+        results.close();
     }
 }

@@ -1,0 +1,164 @@
+package org.modestead.host.bench.desk;
+
+import com.fasterxml.jackson.core.JsonProcessingException;
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.io.IOException;
+import java.nio.ByteBuffer;
+import java.nio.channels.FileChannel;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.nio.file.StandardOpenOption;
+import java.time.Instant;
+import java.time.temporal.ChronoUnit;
+import java.util.List;
+import java.util.Optional;
+import org.modestead.host.output.Disk;
+import org.modestead.host.output.WholeFile;
+import org.modestead.host.workflow.Workflow;
+import org.modestead.host.workflow.WorkflowFile;
+import org.modestead.host.workflow.WorkflowText;
+
+/**
+ * Writes down every edit at once, one line each, so that a killed process loses nothing. A line that was half-written when the process
+ * died is left out when the journal is read.
+ */
+final class Journal implements AutoCloseable {
+
+    /** Name of the file in the desk's folder. */
+    static final String NAME = "journal.jsonl";
+
+    private static final String FORMAT = "modestead-desk/1";
+    private static final int MOST_KEPT = 200;
+    private static final ObjectMapper MAPPER = new ObjectMapper();
+
+    private final FileChannel channel;
+
+    private Journal(FileChannel channel) {
+        this.channel = channel;
+    }
+
+    /**
+     * What a journal tells.
+     *
+     * @param timeline the document as it is and was
+     * @param saved checksum of the document that its file holds; empty when it was never saved
+     * @param changed when the last thing happened
+     */
+    record Told(Timeline timeline, String saved, Instant changed) {}
+
+    /** Begins a journal anew: what is there is replaced in one step. */
+    static Journal begin(Path folder, Told told) throws IOException {
+        List<Timeline.Moment> moments = told.timeline().moments();
+        int now = told.timeline().now();
+        int first = Math.max(0, Math.min(now, moments.size() - MOST_KEPT));
+        StringBuilder text = new StringBuilder(line(MAPPER.createObjectNode().put("format", FORMAT)
+                .put("file", told.timeline().current().file().toString()).put("saved", told.saved()).put("at", at(told.changed()))));
+        for (int i = first; i < moments.size(); i++) {
+            text.append(line(edit(moments.get(i).workflow(), moments.get(i).label(), told.changed())));
+        }
+        for (int i = now; i < moments.size() - 1; i++) {
+            text.append(line(MAPPER.createObjectNode().put("do", "undo").put("at", at(told.changed()))));
+        }
+        Path file = folder.resolve(NAME);
+        WholeFile.write(Disk.REAL, file, out -> out.write(text.toString().getBytes(StandardCharsets.UTF_8)));
+        return new Journal(FileChannel.open(file, StandardOpenOption.APPEND));
+    }
+
+    /** Reads a journal; empty when the folder holds none that can be read. */
+    static Optional<Told> read(Path folder) {
+        Path file = folder.resolve(NAME);
+        if (!Files.isRegularFile(file)) {
+            return Optional.empty();
+        }
+        try {
+            return new Reader().read(Files.readString(file).lines().toList());
+        } catch (IOException unreadable) {
+            return Optional.empty();
+        }
+    }
+
+    void edited(Workflow workflow, String label) throws IOException {
+        append(edit(workflow, label, Instant.now()));
+    }
+
+    void did(String what) throws IOException {
+        append(MAPPER.createObjectNode().put("do", what).put("at", at(Instant.now())));
+    }
+
+    void saved(Path file, String checksum) throws IOException {
+        append(MAPPER.createObjectNode().put("do", "saved").put("file", file.toString()).put("saved", checksum).put("at", at(Instant.now())));
+    }
+
+    private void append(ObjectNode entry) throws IOException {
+        ByteBuffer bytes = ByteBuffer.wrap(line(entry).getBytes(StandardCharsets.UTF_8));
+        while (bytes.hasRemaining()) {
+            channel.write(bytes);
+        }
+        channel.force(false);
+    }
+
+    private static ObjectNode edit(Workflow workflow, String label, Instant when) {
+        return MAPPER.createObjectNode().put("do", "edit").put("label", label)
+                .put("text", new String(WorkflowText.write(workflow), StandardCharsets.UTF_8)).put("at", at(when));
+    }
+
+    private static String at(Instant when) {
+        return when.truncatedTo(ChronoUnit.MILLIS).toString();
+    }
+
+    private static String line(ObjectNode entry) {
+        try {
+            return MAPPER.writeValueAsString(entry) + "\n";
+        } catch (JsonProcessingException impossible) {
+            throw new IllegalStateException("a tree could not be written", impossible);
+        }
+    }
+
+    @Override
+    public void close() throws IOException {
+        channel.close();
+    }
+
+    /** Follows a journal from its first line on, as far as it can be read. */
+    private static final class Reader {
+        private Path file = Path.of("");
+        private String saved = "";
+        private Instant changed = Instant.EPOCH;
+        private Optional<Timeline> timeline = Optional.empty();
+
+        Optional<Told> read(List<String> lines) {
+            try {
+                for (String line : lines) {
+                    entry(MAPPER.readTree(line));
+                }
+            } catch (JsonProcessingException | RuntimeException torn) {
+                // the process died while it wrote this line: what stands before it counts
+                changed = changed.equals(Instant.EPOCH) ? Instant.now() : changed;
+            }
+            return timeline.map(found -> new Told(found.in(file), saved, changed));
+        }
+
+        private void entry(JsonNode entry) {
+            String kind = entry.path("do").asText(entry.path("format").asText());
+            switch (kind) {
+                case FORMAT, "saved" -> {
+                    file = Path.of(entry.path("file").asText());
+                    saved = entry.path("saved").asText();
+                }
+                case "edit" -> {
+                    Workflow workflow = WorkflowFile.parse(file, entry.path("text").asText().getBytes(StandardCharsets.UTF_8)).workflow()
+                            .orElseThrow(() -> new IllegalArgumentException("no workflow"));
+                    timeline = Optional.of(timeline.map(found -> found.then(workflow, entry.path("label").asText()))
+                            .orElseGet(() -> Timeline.begin(workflow)));
+                }
+                case "undo" -> timeline = timeline.map(Timeline::undo);
+                case "redo" -> timeline = timeline.map(Timeline::redo);
+                default -> throw new IllegalArgumentException("a line of another format");
+            }
+            changed = Instant.parse(entry.path("at").asText());
+        }
+    }
+}

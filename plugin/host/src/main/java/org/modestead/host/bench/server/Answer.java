@@ -1,0 +1,67 @@
+package org.modestead.host.bench.server;
+
+import com.fasterxml.jackson.core.JsonProcessingException;
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import io.javalin.http.Context;
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import org.modestead.engine.Fault;
+
+/** JSON in requests and answers. */
+final class Answer {
+
+    private static final ObjectMapper MAPPER = new ObjectMapper();
+
+    private Answer() {}
+
+    /** Returns the body of a request. */
+    static JsonNode body(Context context) {
+        try {
+            byte[] bytes = context.bodyAsBytes();
+            return bytes.length == 0 ? JsonNodeFactory.instance.objectNode() : MAPPER.readTree(bytes);
+        } catch (JsonProcessingException broken) {
+            throw new RequestFault(400, "request", "its body is no JSON (" + broken.getOriginalMessage() + ")", "send JSON");
+        } catch (IOException impossible) {
+            throw new IllegalStateException("bytes in memory could not be read", impossible);
+        }
+    }
+
+    /** Returns the fields of an object as plain values. */
+    static Map<String, Object> values(JsonNode object) {
+        Map<String, Object> values = new LinkedHashMap<>();
+        object.properties().forEach(entry -> values.put(entry.getKey(), MAPPER.convertValue(entry.getValue(), Object.class)));
+        return values;
+    }
+
+    static void json(Context context, JsonNode json) {
+        context.contentType("application/json").result(bytes(json));
+    }
+
+    static void refuse(Context context, int status, Fault fault) {
+        ObjectNode json = JsonNodeFactory.instance.objectNode();
+        json.putObject("error").put("sentence", fault.getMessage()).put("where", fault.where()).put("seen", fault.seen()).put("wanted", fault.wanted());
+        json(context.status(status), json);
+    }
+
+    static byte[] bytes(JsonNode json) {
+        return text(json).getBytes(StandardCharsets.UTF_8);
+    }
+
+    static String text(JsonNode json) {
+        try {
+            return MAPPER.writeValueAsString(json);
+        } catch (JsonProcessingException impossible) {
+            throw new IllegalStateException("a tree could not be written", impossible);
+        }
+    }
+
+    /** Names an answer as a file to be kept. */
+    static void file(Context context, String name) {
+        context.header("Content-Disposition", "attachment; filename=\"" + name.replaceAll("[^A-Za-z0-9._-]", "_") + "\"");
+    }
+}
