@@ -79,6 +79,9 @@ export async function attempt(work) {
 async function change(path, body) {
   const answer = await attempt(() => api.post(path, body));
   if (answer) {
+    if (getState().notice?.tone === 'stop') {
+      closeNotice();
+    }
     takeDesk(answer);
   }
   return answer;
@@ -128,6 +131,9 @@ export async function removeSteps(ids) {
   const titles = desk.steps.filter((step) => ids.includes(step.id)).map((step) => step.title);
   if (titles.length && await edit([{do: 'remove', steps: ids}])) {
     say(`Removed: ${titles.join(', ')}. Undo brings it back.`);
+    if (document.activeElement === document.body) {
+      document.getElementById('bench')?.focus();
+    }
   }
 }
 

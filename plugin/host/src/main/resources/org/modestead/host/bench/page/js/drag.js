@@ -209,6 +209,9 @@ function judgePort(drag, over) {
       refused: true,
     };
   }
+  if (!drag.fitting) {
+    return {words: 'Looking for what fits', refused: false};
+  }
   if (over.port) {
     return judgeTarget(drag, ports.find((port) => port.end === over.port));
   }

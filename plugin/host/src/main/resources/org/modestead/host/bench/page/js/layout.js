@@ -21,6 +21,12 @@ export function arrange(steps, links, stages, columns) {
   });
 }
 
+/** @returns {number} how many steps the fullest row has when there is room for all; as `arrange` */
+export function widest(steps, links, stages) {
+  const rows = arrange(steps, links, stages, Math.max(1, steps.length)).flatMap((band) => band.rows);
+  return Math.max(1, ...rows.map((row) => row.length));
+}
+
 /** @param {string} end `step.port` */
 export function stepOf(end) {
   return end.slice(0, end.lastIndexOf('.'));

@@ -2,24 +2,28 @@
 import {html, useEffect, useLayoutEffect, useRef, useState} from '../../lib.js';
 import {getState} from '../store.js';
 import {choose, chooseLink, moveStep} from '../actions.js';
-import {arrange} from '../layout.js';
+import {arrange, widest} from '../layout.js';
 import {Card} from './card.js';
 import {Wires} from './wires.js';
+
+const FEWEST = 3;
 
 export function Bands() {
   const {catalog, desk, chosen, drag} = getState();
   const area = useRef(null);
-  const [columns, setColumns] = useState(3);
+  const [room, setRoom] = useState(FEWEST);
   useLayoutEffect(() => {
-    const measure = () => setColumns(columnsIn(area.current));
+    const measure = () => setRoom(columnsIn(area.current));
     measure();
     const watch = new ResizeObserver(measure);
     watch.observe(area.current);
     return () => watch.disconnect();
   }, []);
+  const places = desk.steps.map(({id, stage, place}) => ({id, stage, place}));
+  const stages = catalog.stages.map((stage) => stage.id);
+  const columns = Math.min(room, Math.max(FEWEST, widest(places, desk.links, stages)));
   useLayoutEffect(() => area.current.style.setProperty('--columns', String(columns)), [columns]);
-  const bands = arrange(desk.steps.map(({id, stage, place}) => ({id, stage, place})), desk.links,
-    catalog.stages.map((stage) => stage.id), columns);
+  const bands = arrange(places, desk.links, stages, columns);
   const order = bands.flatMap((band) => band.rows);
   const entry = chosen.at(-1) ?? order[0]?.[0]?.id;
   useReveal(area, chosen);
@@ -35,7 +39,7 @@ export function Bands() {
       chooseLink('');
     }
   };
-  return html`<div class="bands" ref=${area} onkeydown=${key} onclick=${clear}>
+  return html`<div class=${'bands' + (desk.steps.length ? '' : ' bare')} ref=${area} onkeydown=${key} onclick=${clear}>
     <${Wires} area=${area} columns=${columns} />
     ${bands.map((band) => html`<${Band} key=${band.stage} band=${band} entry=${entry} catalog=${catalog} desk=${desk} drag=${drag} />`)}
   </div>`;
@@ -101,7 +105,7 @@ function walk(event, order, id) {
 
 /** Puts the focus on a step, once it is there. @param {string} id */
 export function focusCard(id) {
-  document.querySelector(`[data-card="${CSS.escape(id)}"]`)?.focus();
+  setTimeout(() => document.querySelector(`[data-card="${CSS.escape(id)}"]`)?.focus(), 0);
 }
 
 async function shift(id, by) {

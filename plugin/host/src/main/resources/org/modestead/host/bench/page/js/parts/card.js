@@ -44,16 +44,26 @@ export function Card({step, column, first}) {
     if (event.target.closest('[data-port], [data-no-drag]')) {
       return;
     }
-    choose(event.ctrlKey || event.metaKey || event.shiftKey ? toggled(chosen, step.id) : [step.id]);
+    const more = event.ctrlKey || event.metaKey || event.shiftKey;
+    choose(more ? toggled(chosen, step.id) : [step.id]);
+    if (getState().chosen.includes(step.id)) {
+      event.currentTarget.querySelector('[data-card]').focus();
+    }
+  };
+  /* The pointer's press gives no focus: it would choose before it is known whether others stay chosen. */
+  const hold = (event) => {
+    if (!event.target.closest('[data-port], [data-no-drag]')) {
+      event.preventDefault();
+    }
   };
   return html`<li class=${classes.join(' ')} data-step=${step.id} data-node=${step.node} data-state=${kind}
       style=${{gridColumn: String(column + 1)}}
-      onpointerdown=${press} onclick=${pick} ondblclick=${(e) => openByDoubleClick(e, step)}>
+      onpointerdown=${press} onmousedown=${hold} onclick=${pick} ondblclick=${(e) => openByDoubleClick(e, step)}>
     <${Ports} step=${step} node=${node} output=${false} open=${looked} />
     <div class="card-middle">
       <button type="button" class="card-name" data-card=${step.id} tabindex=${first ? 0 : -1}
           aria-current=${looked ? 'true' : undefined} aria-label=${cardWords(desk, step, node, isChosen)}
-          onfocus=${(e) => focusChoose(e, step)} onkeydown=${(e) => cardKey(e, step)}>
+          onfocus=${() => focusChoose(step)} onkeydown=${(e) => cardKey(e, step)}>
         <span class="card-title">${step.title}</span>
       </button>
       ${step.named ? html`<span class="card-kind">${node.title}</span>`
@@ -75,10 +85,10 @@ function toggled(chosen, id) {
   return chosen.includes(id) ? chosen.filter((other) => other !== id) : [...chosen, id];
 }
 
-/** The keyboard's focus chooses, as a click would; a press of the pointer decides for itself what it chooses. */
-function focusChoose(event, step) {
+/** Whoever comes to a step by keyboard chooses it. */
+function focusChoose(step) {
   const {chosen, drag} = getState();
-  if (event.target.matches(':focus-visible') && !drag && !chosen.includes(step.id)) {
+  if (!drag && !chosen.includes(step.id)) {
     choose([step.id]);
   }
 }

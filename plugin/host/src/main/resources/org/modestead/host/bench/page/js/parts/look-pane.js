@@ -75,7 +75,7 @@ function WorkflowLook({desk}) {
       <label class="notes-label" for="workflow-notes">Notes</label>
       <textarea id="workflow-notes" class="field-input" rows="5" data-action="workflow-notes" value=${desk.notes} onchange=${write}
         placeholder="What this work is about, for whoever opens it next"></textarea>
-      <h3>Where it stands</h3>
+      ${desk.steps.length > 0 && html`<h3>Where it stands</h3>`}
       <ul class="overview">${desk.steps.map((step) => html`<li key=${step.id}><button type="button" class="overview-step" data-overview=${step.id}
         onclick=${() => setState({chosen: [step.id]})}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${step.title}</span>
         <span class="quiet small clip">${step.state.words}</span></button></li>`)}</ul>

@@ -5,6 +5,7 @@ import {addStep, attempt, closeDialog, link, unlink} from '../actions.js';
 import {endWords, matches, nodeOf, portAt, stageTitle, stepName, stepWith, typeTitle} from '../catalog.js';
 import {stepOf} from '../layout.js';
 import {fittingOf} from '../drag.js';
+import {focusCard} from './bands.js';
 import {Dialog} from './dialog.js';
 import {article, counted} from '../words.js';
 
@@ -88,7 +89,12 @@ function optionsOf({catalog, desk, fitting, end, output, step, query}) {
       action: 'add-fitting',
       label: node.title,
       more: stageTitle(catalog, node.stage),
-      act: then(() => addStep({node: node.id, ...(output ? {from: end} : {to: end})})),
+      act: then(async () => {
+        const answer = await addStep({node: node.id, ...(output ? {from: end} : {to: end})});
+        if (answer?.made?.length) {
+          focusCard(answer.made[0]);
+        }
+      }),
     }));
   return [
     {title: 'On the bench', items: [...free, ...ends.filter((item) => item.more)].filter((item) => wanted(item.label))},
