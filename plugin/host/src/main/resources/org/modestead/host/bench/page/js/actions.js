@@ -40,8 +40,19 @@ export function takeDesk(desk) {
     link: links.has(link) ? link : '',
     selection: another ? '' : getState().selection,
   });
+  tellRun(known, desk);
   if (desk.recovered && known?.desk !== desk.desk) {
     notify(desk.recovered);
+  }
+}
+
+/** Says that a run began or how it ended. */
+function tellRun(before, after) {
+  const ran = before?.open && before.run.running;
+  if (!ran && after.run.running && before?.open) {
+    say('Running.');
+  } else if (ran && !after.run.running) {
+    say(after.run.last || 'The run has ended.');
   }
 }
 
@@ -52,7 +63,9 @@ export function takeProgress({revision, run, states}) {
     return;
   }
   const steps = desk.steps.map((step) => (states[step.id] ? {...step, state: states[step.id]} : step));
-  setState({desk: {...desk, revision, run, steps}});
+  const now = {...desk, revision, run, steps};
+  setState({desk: now});
+  tellRun(desk, now);
 }
 
 /** @param {{from: string, to: string}} link */

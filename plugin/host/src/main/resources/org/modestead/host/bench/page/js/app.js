@@ -55,8 +55,10 @@ function Page() {
       <${Bar} />
       <div class="room">
         ${!wide && html`<${Shelf} />
-          <section class="bench" id="bench" tabindex="-1" data-part="bench" data-scroll="bench" aria-label="Bench"><${Bands} /></section>
-          <${Splitter} />`}
+          <section class="bench-frame" aria-label="Bench">
+            <div class="bench" id="bench" tabindex="-1" data-part="bench" data-scroll="bench"><${Bands} /></div>
+            <${Splitter} />
+          </section>`}
         <${LookPane} />
       </div>
       <${Strip} />

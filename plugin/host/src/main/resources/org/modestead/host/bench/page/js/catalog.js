@@ -27,7 +27,7 @@ export function stageTitle(catalog, stage) {
 export function portWords(catalog, port, siblings) {
   const type = typeTitle(catalog, port.type);
   const alike = siblings.filter((other) => other.type === port.type).length > 1;
-  const own = port.title.toLowerCase() === type.toLowerCase() ? '' : port.title;
+  const own = port.title.toLowerCase().startsWith(type.toLowerCase()) ? port.title.slice(type.length).trim() : port.title;
   return {type, own: alike || port.type === 'table' ? own : ''};
 }
 

@@ -16,7 +16,7 @@ export const KEYS = [
   {group: 'Build', keys: [
     ['Enter', 'on the shelf, add the step; on a port, list what fits; on a step, open its settings'],
     ['F2', 'rename the step'],
-    ['Shift + arrow left or right', 'move the step within its band'],
+    ['Shift + \u2190 or \u2192', 'move the step within its band'],
     ['Delete', 'remove the chosen steps or the chosen link'],
     ['Ctrl + C, Ctrl + V', 'copy the chosen steps, put them in'],
     ['Ctrl + D', 'duplicate the chosen steps'],

@@ -7,9 +7,8 @@ import {ViewMenu} from './view-menu.js';
 import {counted} from '../words.js';
 
 export function Bar() {
-  const {desk, chosen} = getState();
+  const {desk} = getState();
   const running = desk.run.running;
-  const target = chosen.at(-1);
   const results = desk.steps.some((step) => step.look);
   const file = [
     {label: 'New or other workflow…', action: 'close-desk', act: closeDesk},
@@ -40,9 +39,7 @@ export function Bar() {
     ${running
       ? html`<button type="button" class="button danger" data-action="cancel" aria-disabled=${desk.run.stopping ? 'true' : undefined}
           title="Ctrl + ." onclick=${cancel}>${desk.run.stopping ? 'Stopping' : 'Stop'}</button>`
-      : html`<button type="button" class="button" data-action="run-to" aria-disabled=${target ? undefined : 'true'}
-          title=${target ? 'Ctrl + Enter' : 'Choose a step first'} onclick=${() => target && run(chosen)}>Run to here</button>
-        <button type="button" class="button main" data-action="run-all" title="Ctrl + Shift + Enter" onclick=${() => run()}>Run all</button>`}
+      : html`<button type="button" class="button main" data-action="run-all" title="Ctrl + Shift + Enter" onclick=${() => run()}>Run all</button>`}
     <${ViewMenu} />
   </header>`;
 }

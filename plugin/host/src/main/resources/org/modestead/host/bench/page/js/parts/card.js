@@ -135,13 +135,13 @@ function Ports({step, node, output, open}) {
   const needed = (port) => linked(port) || (output ? port.type !== 'table' || port === ports[0] : !port.optional);
   const spare = ports.filter((port) => !needed(port));
   const folds = !open && (output ? spare.length > 0 : spare.length > MANY);
+  const folded = output ? counted(spare.length, 'table') : `${spare.length} optional`;
   const shown = folds ? ports.filter(needed) : ports;
   return html`<ul class=${'ports ' + (output ? 'gives' : 'takes')} aria-label=${`${step.title} ${output ? 'gives' : 'takes'}`}>
     ${shown.map((port) => html`<${Tab} key=${port.id} step=${step} port=${port} siblings=${ports} output=${output} reach=${open} />`)}
     ${folds && html`<li key="more"><button type="button" class="tab more" tabindex="-1" data-no-drag data-action="more-ports"
-      aria-label=${`${step.title}: show ${counted(spare.length, 'more port')}`}
-      onclick=${() => setState({chosen: [step.id]})}>
-      ${output ? counted(spare.length, 'table') : `${spare.length} optional`}</button></li>`}
+      aria-label=${`${folded} more of ${step.title}`}
+      onclick=${() => setState({chosen: [step.id]})}>${folded}</button></li>`}
   </ul>`;
 }
 
@@ -168,7 +168,7 @@ function Tab({step, port, siblings, output, reach}) {
         tabindex=${reach ? 0 : -1} aria-label=${tabWords(catalog, desk, port, words, links, output)} title=${port.description}
         onpointerdown=${(e) => grab(e, {kind: 'port', end, output})}
         onclick=${() => openDialog({kind: 'picker', end, output})}>
-      <span class="tab-type">${words.type}</span>${words.own && html`<span class="tab-own">${words.own.toLowerCase()}</span>`}
+      <span class="tab-type">${words.type}</span>${words.own && html` <span class="tab-own">${words.own.toLowerCase()}</span>`}
     </button>
   </li>`;
 }
@@ -182,7 +182,7 @@ function fitting(drag, end, output) {
 }
 
 function tabWords(catalog, desk, port, words, links, output) {
-  const name = words.own ? `${words.type}, ${words.own}` : words.type;
+  const name = words.own ? `${words.type} ${words.own.toLowerCase()}` : words.type;
   if (output) {
     const to = links.map((link) => stepName(desk, stepWith(desk, stepOf(link.to))));
     return `Gives ${name}${to.length ? ` to ${to.join(', ')}` : ', not linked'}`;

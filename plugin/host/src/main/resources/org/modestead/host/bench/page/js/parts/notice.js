@@ -15,7 +15,7 @@ export function Notice() {
     const timer = setTimeout(closeNotice, STAYS);
     return () => clearTimeout(timer);
   }, [notice?.id]);
-  return notice && html`<div class=${'notice ' + notice.tone} data-notice=${notice.tone}>
+  return notice && html`<div class=${'notice ' + notice.tone} role="region" aria-label="Message" data-notice=${notice.tone}>
     <p>${notice.text}</p>
     <button type="button" class="button plain" aria-label="Close this message" data-action="close-notice" onclick=${closeNotice}><${Glyph} name="close" /></button>
   </div>`;

@@ -22,7 +22,7 @@ export function Splitter() {
   const [share, setShare] = useState(remembered);
   const bar = useRef(null);
   useEffect(() => {
-    bar.current.parentElement.style.setProperty('--bench-share', String(share));
+    bar.current.closest('.room').style.setProperty('--bench-share', String(share));
     if (share === usual()) {
       return;
     }
@@ -34,8 +34,8 @@ export function Splitter() {
   }, [share]);
   const put = (value) => setShare(Math.round(Math.min(MOST, Math.max(LEAST, value))));
   const drag = (event) => {
-    const room = bar.current.parentElement.getBoundingClientRect();
-    const shelf = bar.current.parentElement.firstElementChild.getBoundingClientRect();
+    const room = bar.current.closest('.room').getBoundingClientRect();
+    const shelf = document.querySelector('.shelf').getBoundingClientRect();
     bar.current.setPointerCapture(event.pointerId);
     bar.current.onpointermove = (e) => put(((e.clientX - shelf.right) / (room.right - shelf.right)) * 100);
     bar.current.onpointerup = () => {

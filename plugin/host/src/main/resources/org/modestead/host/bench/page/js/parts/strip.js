@@ -9,7 +9,7 @@ export function Strip() {
   const {catalog, desk, link, lost, chosen} = getState();
   const [from, to] = link.split('>');
   const run = desk.run;
-  return html`<footer class="strip small" data-part="strip">
+  return html`<footer class="strip small">
     ${run.running && html`<progress class="strip-progress" max="1" value=${run.fraction ?? undefined} aria-label="Progress of the run"></progress>`}
     <span class="strip-run" data-run=${run.running ? 'running' : 'idle'}>${runWords(desk)}</span>
     <span class="grow"></span>
