@@ -24,7 +24,7 @@ import org.junit.jupiter.api.Test;
 class PageTest {
 
     private static final Path PAGE = page();
-    private static final Pattern IMPORT = Pattern.compile("(?:from|import)\\s*\\(?\\s*'([^']+)'");
+    private static final Pattern IMPORT = Pattern.compile("(?:from|import)\\s*\\(?\\s*'([^'\\s]+\\.js)'");
     private static final Pattern ADDRESS = Pattern.compile("(?:src|href)=\"([^\"]+)\"");
     private static final Pattern COLOUR = Pattern.compile("#[0-9a-fA-F]{3,8}\\b|\\brgba?\\(|\\bhsla?\\(");
 

@@ -73,7 +73,8 @@ function ChoiceField(props) {
 }
 
 function columnWords(column) {
-  return `${column.name} (${column.type}${column.unit ? `, ${column.unit}` : ''})`;
+  const unit = column.unit && !column.name.includes(column.unit) ? `, ${column.unit}` : '';
+  return `${column.name} (${column.type}${unit})`;
 }
 
 function offered({setting, about}) {
@@ -127,7 +128,7 @@ function ColumnsField(props) {
     </div>
     <ul class="columns-list">${found.slice(0, SHOWN).map((column) => html`<li key=${column.name}><label class="check"><input type="checkbox" data-column=${column.name}
       checked=${taken.includes(column.name)} onchange=${() => flip(column.name)} /><span class="clip grow">${column.name}</span>
-      <span class="quiet small">${column.unit || column.type}</span></label></li>`)}</ul>
+      <span class="quiet small">${column.unit && !column.name.includes(column.unit) ? column.unit : column.type}</span></label></li>`)}</ul>
     <p class="help">${counted(taken.length, 'column')} chosen of ${columns.length}.${found.length > SHOWN ? ` The first ${SHOWN} are shown: search for others.` : ''}</p>
   </div>`;
 }
