@@ -172,7 +172,13 @@ function endWords(desk, end) {
 
 /** Moves a step within its band. @param {string} id @param {number} place */
 export async function moveStep(id, place) {
-  return edit([{do: 'move', step: id, place}]);
+  const answer = await edit([{do: 'move', step: id, place}]);
+  if (answer) {
+    const step = answer.steps.find((s) => s.id === id);
+    const band = answer.steps.filter((s) => s.stage === step.stage);
+    say(`${step.title} is now ${step.place + 1} of ${band.length} in its band.`);
+  }
+  return answer;
 }
 
 /** @param {string[]} ids */

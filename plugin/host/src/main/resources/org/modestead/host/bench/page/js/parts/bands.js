@@ -108,12 +108,23 @@ export function focusCard(id) {
   setTimeout(() => document.querySelector(`[data-card="${CSS.escape(id)}"]`)?.focus(), 0);
 }
 
-async function shift(id, by) {
-  const {desk} = getState();
-  const step = desk.steps.find((s) => s.id === id);
+/** Where a step would stand in its band after a move, -1 where it cannot move so. */
+function placeAfter(desk, step, by) {
   const band = desk.steps.filter((s) => s.stage === step.stage).sort((a, b) => a.place - b.place);
-  const place = band.indexOf(step) + by;
-  if (place >= 0 && place < band.length) {
+  const place = band.findIndex((s) => s.id === step.id) + by;
+  return place < band.length ? place : -1;
+}
+
+/** @returns {boolean} whether a step has a neighbour in its band on that side */
+export function canShift(desk, step, by) {
+  return placeAfter(desk, step, by) >= 0;
+}
+
+/** Moves a step before or behind its neighbour in the band. @param {string} id @param {-1|1} by */
+export async function shift(id, by) {
+  const {desk} = getState();
+  const place = placeAfter(desk, desk.steps.find((s) => s.id === id), by);
+  if (place >= 0) {
     await moveStep(id, place);
     focusCard(id);
   }

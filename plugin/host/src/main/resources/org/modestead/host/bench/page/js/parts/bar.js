@@ -7,7 +7,7 @@ import {ViewMenu} from './view-menu.js';
 import {counted} from '../words.js';
 
 export function Bar() {
-  const {desk} = getState();
+  const {desk, wide} = getState();
   const running = desk.run.running;
   const results = desk.steps.some((step) => step.look);
   const file = [
@@ -23,7 +23,7 @@ export function Bar() {
     {label: 'Report of all results', action: 'report', off: !results, act: () => window.open('/api/report.html', '_blank', 'noopener')},
   ];
   return html`<header class="bar" data-part="bar">
-    <a class="skip" href="#bench" onclick=${skip}>Go to the bench</a>
+    <a class="skip" href=${wide ? '#look' : '#bench'} onclick=${skip}>${wide ? 'Go to the step' : 'Go to the bench'}</a>
     <img class="bar-mark" src="/mark.svg" alt="" width="24" height="24" />
     <h1 class="bar-name"><span class="unseen">Modestead: </span><button type="button" class="bar-title" data-action="rename-workflow" title="Rename the workflow"
       onclick=${() => openDialog({kind: 'name'})}>${desk.name}</button></h1>
@@ -46,7 +46,7 @@ export function Bar() {
 
 function skip(event) {
   event.preventDefault();
-  (document.querySelector('.bench [tabindex="0"]') ?? document.getElementById('bench'))?.focus();
+  (document.querySelector('.bench [tabindex="0"]') ?? document.getElementById('bench') ?? document.getElementById('look'))?.focus();
 }
 
 function Problems({desk}) {

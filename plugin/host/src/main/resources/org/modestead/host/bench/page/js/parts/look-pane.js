@@ -3,7 +3,8 @@ import {html} from '../../lib.js';
 import {Later} from './later.js';
 import {getState, setState} from '../store.js';
 import {run, openDialog, removeSteps, duplicate, mark, edit} from '../actions.js';
-import {nodeOf, stepWith} from '../catalog.js';
+import {hasTwin, nodeOf, stepName, stepWith} from '../catalog.js';
+import {canShift, shift} from './bands.js';
 import {stateKind} from './card.js';
 import {Menu} from './menu.js';
 import {Glyph} from '../glyphs.js';
@@ -27,6 +28,8 @@ function StepLook({step}) {
     {label: 'Rename…', action: 'rename-step', keys: 'F2', act: () => openDialog({kind: 'rename', step: step.id})},
     {label: step.note ? 'Change the note…' : 'Write a note…', action: 'note-step', act: () => openDialog({kind: 'note', step: step.id})},
     {label: 'Duplicate', action: 'duplicate-step', keys: 'Ctrl + D', act: () => duplicate(chosen)},
+    {label: 'Move left', action: 'move-left', keys: 'Shift + \u2190', off: !canShift(desk, step, -1), act: () => shift(step.id, -1)},
+    {label: 'Move right', action: 'move-right', keys: 'Shift + \u2192', off: !canShift(desk, step, 1), act: () => shift(step.id, 1)},
     {label: 'Run it again', action: 'run-again', act: () => run([step.id], true)},
     {label: `About ${node.title}…`, action: 'about-node', act: () => openDialog({kind: 'about', node: node.id})},
     null,
@@ -36,7 +39,7 @@ function StepLook({step}) {
       <div class="grow">
         <h2 class="look-title" data-first tabindex="-1">${step.title}</h2>
         <p class=${'look-state state-' + kind}><${Glyph} name=${kind} /><span data-look-state>${step.state.words}</span>
-          ${step.named && html`<span class="quiet"> · ${node.title}</span>`}</p>
+          ${(step.named || hasTwin(desk, step)) && html`<span class="quiet"> · ${step.named ? node.title : step.id}</span>`}</p>
       </div>
       <button type="button" class="button" data-action="settings" onclick=${() => openDialog({kind: 'settings', step: step.id})}>Settings…</button>
       <button type="button" class="button" data-action="run-step" aria-disabled=${desk.run.running ? 'true' : undefined}
@@ -77,7 +80,7 @@ function WorkflowLook({desk}) {
         placeholder="What this work is about, for whoever opens it next"></textarea>
       ${desk.steps.length > 0 && html`<h3>Where it stands</h3>`}
       <ul class="overview">${desk.steps.map((step) => html`<li key=${step.id}><button type="button" class="overview-step" data-overview=${step.id}
-        onclick=${() => setState({chosen: [step.id]})}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${step.title}</span>
+        onclick=${() => setState({chosen: [step.id]})}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${stepName(desk, step)}</span>
         <span class="quiet small clip">${step.state.words}</span></button></li>`)}</ul>
     </div>`;
 }

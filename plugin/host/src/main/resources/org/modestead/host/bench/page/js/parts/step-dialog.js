@@ -148,7 +148,7 @@ function Setting({setting, about, typed, type}) {
         ${unit && html`<span class="setting-unit">${unit}</span>`}
       </div>
       ${problems.length > 0 && html`<p class="setting-error" id=${error}>${problems.map((problem) => `Now ${problem.seen}: ${problem.wanted}.`).join(' ')}</p>`}
-      <p class="help" id=${help}>${option?.help ? html`<span>${option.help} </span>` : null}${setting.help}${range && html`<span class="setting-range"> ${range}</span>`}</p>
+      <p class="help" id=${help}>${option?.help && html`<strong>${option.label}:</strong> ${option.help}<br />`}${setting.help}${range && html`<span class="setting-range"> ${range}</span>`}</p>
     </div>
     <div class="setting-reset">${isInitial ? html`<span class="quiet small">default</span>`
       : html`<button type="button" class="link-button small" data-action="reset" data-reset=${setting.key}
