@@ -30,6 +30,9 @@ import org.modestead.nodes.modelfile.ResultFile;
 /**
  * The native node of one declared node. Knows settings and, for the view, the last result; everything that running needs comes from
  * the inputs and the settings, so that it can be reset, saved, loaded and run elsewhere.
+ *
+ * <p>It says nothing of streaming, by which the platform takes it for a node that needs its whole input and runs once: a fit goes over its rows
+ * more than once. In a streaming component it is handed whole tables.
  */
 public final class DeclaredNodeModel extends NodeModel {
 

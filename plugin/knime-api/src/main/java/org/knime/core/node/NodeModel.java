@@ -6,6 +6,8 @@ import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.port.PortType;
 import org.knime.core.node.property.hilite.HiLiteHandler;
+import org.knime.core.node.streamable.InputPortRole;
+import org.knime.core.node.streamable.OutputPortRole;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
 public abstract class NodeModel implements AbstractNodeView.ViewableModel {
@@ -30,6 +32,14 @@ public abstract class NodeModel implements AbstractNodeView.ViewableModel {
     }
 
     protected PortObjectSpec[] configure(final PortObjectSpec[] inSpecs) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
+    public InputPortRole[] getInputPortRoles() {
+        throw new UnsupportedOperationException();
+    }
+
+    public OutputPortRole[] getOutputPortRoles() {
         throw new UnsupportedOperationException();
     }
 

@@ -12,14 +12,21 @@ import org.knime.core.data.DataTableSpec;
 import org.knime.core.node.BufferedDataTable;
 import org.knime.core.node.ExecutionMonitor;
 import org.knime.core.node.NodeFactory;
+import org.knime.core.node.NodeModel;
 import org.knime.core.node.NodeSettings;
 import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
+import org.knime.core.node.streamable.InputPortRole;
+import org.knime.core.node.streamable.OutputPortRole;
+import org.knime.core.node.util.NodeExecutionJobManagerPool;
+import org.knime.core.node.workflow.NativeNodeContainer;
 import org.knime.core.node.workflow.NodeContainer;
 import org.knime.core.node.workflow.NodeContainerState;
+import org.knime.core.node.workflow.NodeExecutionJobManagerFactory;
 import org.knime.core.node.workflow.NodeID;
 import org.knime.core.node.workflow.NodeMessage;
 import org.knime.core.node.workflow.NodeUIInformation;
+import org.knime.core.node.workflow.WorkflowAnnotationID;
 import org.knime.core.node.workflow.WorkflowCreationHelper;
 import org.knime.core.node.workflow.WorkflowLoadHelper;
 import org.knime.core.node.workflow.WorkflowManager;
@@ -35,6 +42,8 @@ final class Project {
 
     /** Below which the platform keeps the settings that a node's own model wrote. */
     private static final String MODEL = "model";
+
+    private static final String STREAMING = "org.knime.core.streaming.SimpleStreamerNodeExecutionJobManagerFactory";
 
     private final WorkflowManager workflow;
 
@@ -119,6 +128,36 @@ final class Project {
             workflow.saveNodeSettings(id, all);
         }
         return all;
+    }
+
+    /**
+     * Puts nodes into a component whose nodes run at once, each handing its rows to the next as they come.
+     *
+     * @throws IllegalStateException when this installation lacks the extension that does so
+     */
+    int streamed(List<Integer> nodes) {
+        NodeExecutionJobManagerFactory streaming = NodeExecutionJobManagerPool.getJobManagerFactory(STREAMING);
+        if (streaming == null) {
+            throw new IllegalStateException("no streaming executor is installed");
+        }
+        NodeID[] ids = nodes.stream().map(number -> container(number).getID()).toArray(NodeID[]::new);
+        NodeID folded = workflow.collapseIntoMetaNode(ids, new WorkflowAnnotationID[0], "streamed").getCollapsedMetanodeID();
+        NodeID component = workflow.convertMetaNodeToSubNode(folded).getConvertedNodeID();
+        workflow.setJobManager(component, streaming.getInstance());
+        return component.getIndex();
+    }
+
+    /** Returns for each input, then each output of a node what the platform may do with its rows. */
+    List<String> roles(int node) {
+        NodeModel model = ((NativeNodeContainer) container(node)).getNodeModel();
+        List<String> roles = new ArrayList<>();
+        for (InputPortRole role : model.getInputPortRoles()) {
+            roles.add("in" + (role.isStreamable() ? " streamed" : " whole") + (role.isDistributable() ? " in parts" : " once"));
+        }
+        for (OutputPortRole role : model.getOutputPortRoles()) {
+            roles.add("out" + (role.isDistributable() ? " in parts" : " once"));
+        }
+        return roles;
     }
 
     void executeAll() {

@@ -43,6 +43,12 @@ final class Requests {
             case "dialog" -> {
                 return List.of(project.dialog(number(arguments, 0)));
             }
+            case "streamed" -> {
+                return List.of(Integer.toString(project.streamed(arguments.stream().map(Integer::valueOf).toList())));
+            }
+            case "roles" -> {
+                return project.roles(number(arguments, 0));
+            }
             case "execute" -> project.executeAll();
             case "start" -> project.start(number(arguments, 0));
             case "await" -> {

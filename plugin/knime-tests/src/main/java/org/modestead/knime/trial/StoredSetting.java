@@ -22,7 +22,7 @@ final class StoredSetting {
         String[] keys = path.split("/");
         NodeSettings folder = root;
         for (String key : Arrays.copyOf(keys, keys.length - 1)) {
-            folder = folder.getNodeSettings(key);
+            folder = folder.containsKey(key) ? folder.getNodeSettings(key) : (NodeSettings) folder.addNodeSettings(key);
         }
         String key = keys[keys.length - 1];
         switch (type) {

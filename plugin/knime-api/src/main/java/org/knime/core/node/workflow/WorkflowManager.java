@@ -10,6 +10,8 @@ import org.knime.core.node.InvalidSettingsException;
 import org.knime.core.node.NodeFactory;
 import org.knime.core.node.NodeSettingsRO;
 import org.knime.core.node.NodeSettingsWO;
+import org.knime.core.node.workflow.action.CollapseIntoMetaNodeResult;
+import org.knime.core.node.workflow.action.MetaNodeToSubNodeResult;
 import org.knime.core.util.LockFailedException;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
@@ -77,6 +79,18 @@ public final class WorkflowManager extends NodeContainer {
     }
 
     public void resetAndConfigureAll() {
+        throw new UnsupportedOperationException();
+    }
+
+    public CollapseIntoMetaNodeResult collapseIntoMetaNode(final NodeID[] orgIDs, final WorkflowAnnotationID[] orgAnnoIDs, final String name) {
+        throw new UnsupportedOperationException();
+    }
+
+    public MetaNodeToSubNodeResult convertMetaNodeToSubNode(final NodeID wfmID) {
+        throw new UnsupportedOperationException();
+    }
+
+    public void setJobManager(final NodeID nodeID, final NodeExecutionJobManager jobMgr) {
         throw new UnsupportedOperationException();
     }
 

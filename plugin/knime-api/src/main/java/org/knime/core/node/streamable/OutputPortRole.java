@@ -1,0 +1,5 @@
+package org.knime.core.node.streamable;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public final class OutputPortRole extends PortRole {
+}

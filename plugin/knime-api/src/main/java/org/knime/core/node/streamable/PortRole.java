@@ -1,0 +1,12 @@
+package org.knime.core.node.streamable;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public abstract class PortRole {
+    PortRole() {
+        throw new UnsupportedOperationException();
+    }
+
+    public final boolean isDistributable() {
+        throw new UnsupportedOperationException();
+    }
+}

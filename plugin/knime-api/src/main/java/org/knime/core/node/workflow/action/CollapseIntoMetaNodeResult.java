@@ -1,0 +1,14 @@
+package org.knime.core.node.workflow.action;
+
+import org.knime.core.node.workflow.NodeID;
+
+/** Signatures of the platform's public class of this name; no behaviour. */
+public final class CollapseIntoMetaNodeResult {
+    CollapseIntoMetaNodeResult() {
+        throw new UnsupportedOperationException();
+    }
+
+    public NodeID getCollapsedMetanodeID() {
+        throw new UnsupportedOperationException();
+    }
+}
