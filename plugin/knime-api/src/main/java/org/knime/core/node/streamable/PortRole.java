@@ -1,7 +1,7 @@
 package org.knime.core.node.streamable;
 
 /** Signatures of the platform's public class of this name; no behaviour. */
-public abstract class PortRole {
+public class PortRole {
     PortRole() {
         throw new UnsupportedOperationException();
     }
