@@ -94,7 +94,7 @@ function mapOption(figure, theme, selection) {
   const chosen = [...chosenOf(matrix.rowSelections, 0), ...chosenOf(matrix.columnSelections, 1)];
   return {
     animation: false, backgroundColor: 'transparent',
-    grid: {left: 6, right: 14, top: 6, bottom: 6, containLabel: true, show: true, borderColor: theme.edge, borderWidth: 1},
+    grid: {left: figure.x.categories[0]?.length > 3 ? 34 : 6, right: 14, top: 6, bottom: 6, containLabel: true, show: true, borderColor: theme.edge, borderWidth: 1},
     xAxis: side(figure.x),
     yAxis: {...side(figure.y), inverse: true},
     visualMap: {show: false, min: range.low, max: range.high, inRange: {color: palette(matrix, theme)}, seriesIndex: 0},

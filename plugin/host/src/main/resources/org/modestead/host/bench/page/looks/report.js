@@ -1,6 +1,6 @@
 import {html, useState} from '../lib.js';
 import {inMemory} from './sources.js';
-import {Picture} from './picture.js';
+import {Pictures} from './pictures.js';
 import {useRead} from './reading.js';
 import {rowKeys} from './keys.js';
 import {DataTable} from './table.js';
@@ -21,29 +21,41 @@ export function Report({address, file, resultId, selection, select}) {
       ${value.subtitle && html`<p class="lk-quiet">${value.subtitle}</p>`}
       ${value.sections.map((section) => html`<section key=${section.id} aria-label=${section.heading}>
         <h4 class="lk-section">${section.heading}</h4>
-        ${section.blocks.map((block, i) => html`<${Block} key=${i} block=${block} id=${`${section.id}-${i}`} resultId=${resultId}
-          selection=${selection} select=${select} />`)}
+        ${together(section.blocks).map((blocks, i) => (blocks[0].type === 'picture'
+          ? html`<${Pictures} key=${i} figures=${blocks.map((block) => block.figure)} whole=${true} resultId=${resultId} selection=${selection} select=${select} />`
+          : html`<${Block} key=${i} block=${blocks[0]} id=${`${section.id}-${i}`} selection=${selection} select=${select} />`))}
       </section>`)}
     </div>`}
   </section>`;
 }
 
-function Block({block, id, resultId, selection, select}) {
+/** Pictures that follow each other stand side by side. */
+function together(blocks) {
+  const groups = [];
+  for (const block of blocks) {
+    if (block.type === 'picture' && groups.at(-1)?.[0].type === 'picture') {
+      groups.at(-1).push(block);
+    } else {
+      groups.push([block]);
+    }
+  }
+  return groups;
+}
+
+function Block({block, id, selection, select}) {
   switch (block.type) {
     case 'heading':
       return html`<h5>${block.text}</h5>`;
     case 'paragraph':
       return html`<p>${block.text}</p>`;
     case 'points':
-      return html`<ul>${block.items.map((item, i) => html`<li key=${i}>${item}</li>`)}</ul>`;
+      return html`<ul class="lk-points">${block.items.map((item, i) => html`<li key=${i}>${item}</li>`)}</ul>`;
     case 'callout':
       return html`<${Callout} tone=${block.tone} word=${block.word} title=${block.title} sentences=${block.sentences} />`;
     case 'values':
       return html`<h5>${block.caption}</h5><dl class="lk-facts">${block.entries.map((entry, i) => html`<div key=${i}><dt>${entry.name}</dt><dd>${entry.value}</dd></div>`)}</dl>`;
     case 'grid':
       return html`<${Grid} grid=${block} id=${id} selection=${selection} select=${select} />`;
-    case 'picture':
-      return html`<${Picture} head=${block.figure} data=${block.figure} resultId=${resultId} selection=${selection} select=${select} />`;
     default:
       return null;
   }

@@ -4,8 +4,8 @@ import {rowKeys} from './keys.js';
 /**
  * Where the rows of a table come from.
  * @typedef {{name: string, unit: string, cell: string, kind: string}} Column
- * @typedef {{rows: any[][], numbers: number[], keys: string[], found: number}} Page
- * @typedef {{columns: Column[], total: number, selectable: boolean, searchable: boolean,
+ * @typedef {{rows: any[][], numbers: number[], keys: string[], found: number, total: number}} Page
+ * @typedef {{columns: Column[], total: number|null, selectable: boolean, searchable: boolean,
  *   page: (offset: number, limit: number, order: {sort: string, down: boolean, find: string}) => Promise<Page>}} Source
  */
 
@@ -37,7 +37,7 @@ export function inMemory(columns, rows, keys) {
     page: async (offset, limit, {sort, down, find}) => {
       const index = ordered(sort, down, find);
       const some = index.slice(offset, offset + limit);
-      return {rows: some.map((i) => rows[i]), numbers: some.map((i) => i + 1), keys: some.map((i) => keys[i] ?? ''), found: index.length};
+      return {rows: some.map((i) => rows[i]), numbers: some.map((i) => i + 1), keys: some.map((i) => keys[i] ?? ''), found: index.length, total: rows.length};
     },
   };
 }
@@ -69,7 +69,7 @@ export function fromServer(address, table) {
         query.set('find', find);
       }
       const answer = await read(`${address}?${query}`);
-      return {rows: answer.rows, numbers: answer.numbers, keys: answer.rows.map((row) => (keyOf ? keyOf(row) : '')), found: answer.found};
+      return {rows: answer.rows, numbers: answer.numbers, keys: answer.rows.map((row) => (keyOf ? keyOf(row) : '')), found: answer.found, total: answer.total};
     },
   };
 }

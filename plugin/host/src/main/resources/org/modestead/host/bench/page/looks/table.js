@@ -1,5 +1,5 @@
 import {html, useEffect, useId, useLayoutEffect, useMemo, useRef, useState} from '../lib.js';
-import {cell, count, counted, hundredths} from './numbers.js';
+import {cell, count, counted, hundredths, labelled} from './numbers.js';
 import {isSelected, words} from './keys.js';
 import {PAGE} from './sources.js';
 
@@ -24,7 +24,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const name = useId();
   const box = useRef(null);
   const [order, setOrder] = useState({sort: '', down: false, find: ''});
-  const [pages, setPages] = useState({key: '', found: source.total, held: new Map(), fault: ''});
+  const [pages, setPages] = useState({key: '', total: source.total, found: source.total ?? 0, held: new Map(), fault: ''});
   const [top, setTop] = useState(0);
   const [current, setCurrent] = useState(-1);
   const [height, setHeight] = useState(26);
@@ -34,7 +34,8 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const wanted = useRef('');
   wanted.current = key;
   const held = pages.key === key ? pages.held : new Map();
-  const found = pages.key === key || order.find === '' ? (pages.key === key ? pages.found : source.total) : pages.found;
+  const total = pages.total ?? 0;
+  const found = pages.key !== key && order.find === '' ? total : pages.found;
   const visible = Math.min(inSight, Math.max(found, 1));
   const tall = Math.min(TALLEST, found * height);
   const first = firstRow(top, tall, visible * height, found, height);
@@ -48,7 +49,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
       }
       source.page(page * PAGE, PAGE, order).then((answer) => {
         if (wanted.current === key) {
-          setPages((before) => ({key, found: answer.found, fault: '',
+          setPages((before) => ({key, total: answer.total, found: answer.found, fault: '',
             held: new Map([...(before.key === key ? before.held : []), [page, answer]].slice(-20))}));
         }
       }, (fault) => wanted.current === key && setPages((before) => ({...before, fault: fault.message})));
@@ -119,10 +120,10 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   // The bar is as long as all rows; where that is shorter than they would be, rows are put where the bar stands.
   const before = found * height <= TALLEST ? from * height : Math.max(0, Math.min(tall - (to - from) * height, top - (first - from) * height));
   const after = Math.max(0, tall - before - (to - from) * height);
-  const units = source.columns.some((column) => column.unit || column.kind === 'share');
+  const units = source.columns.some(unitOf);
   const indices = Array.from({length: Math.max(0, to - from)}, (_, i) => from + i);
-  return html`<div class="lk-table" data-table=${id} data-rows=${found} data-ready=${held.size > 0 || source.total === 0}>
-    <${Bar} source=${source} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
+  return html`<div class="lk-table" data-table=${id} data-rows=${found} data-ready=${String(held.size > 0)} aria-busy=${String(held.size === 0)}>
+    <${Bar} total=${total} searchable=${source.searchable} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
       go(number - 1);
       box.current?.querySelector('table')?.focus();
     }} csv=${csv} title=${title} id=${id} />
@@ -131,7 +132,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
         style=${{maxHeight: `calc(${visible * height}px + 3.6em)`}}>
       <table role="grid" tabindex="0" aria-label=${title} aria-rowcount=${found + 1} aria-colcount=${source.columns.length + 1}
           aria-activedescendant=${current >= from && current < to ? `${name}-${current}` : null} onKeyDown=${onKeyDown}>
-        ${sizes.current && html`<colgroup><col style=${{width: `${String(source.total).length + 3}ch`}} />
+        ${sizes.current && html`<colgroup><col style=${{width: `${String(total).length + 3}ch`}} />
           ${sizes.current.map((size) => html`<col style=${{width: `${size}ch`}} />`)}</colgroup>`}
         <thead><tr aria-rowindex="1"><th scope="col" class="lk-number"><span class="unseen">row</span></th>
           ${source.columns.map((column) => html`<${Head} key=${column.name} column=${column} order=${order} sort=${sort} units=${units} />`)}</tr></thead>
@@ -146,7 +147,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
         </tbody>
       </table>
     </div>
-    ${found === 0 && html`<p class="lk-quiet">${order.find ? `No row holds "${order.find}".` : 'This table has no rows.'}</p>`}
+    ${found === 0 && held.size > 0 && html`<p class="lk-quiet">${order.find ? `No row holds "${order.find}".` : 'This table has no rows.'}</p>`}
   </div>`;
 }
 
@@ -156,19 +157,19 @@ function firstRow(top, tall, view, found, height) {
   return Math.max(0, Math.min(found - 1, Math.floor(exact)));
 }
 
-function Bar({source, found, order, setOrder, go, csv, title, id}) {
+function Bar({total, searchable, found, order, setOrder, go, csv, title, id}) {
   const [typed, setTyped] = useState('');
   const [text, setText] = useState(order.find);
   useEffect(() => {
     const later = setTimeout(() => text !== order.find && setOrder({...order, find: text}), 250);
     return () => clearTimeout(later);
   }, [text]);
-  const many = source.total > SHOWN;
+  const many = total > SHOWN;
   return html`<div class="lk-bar">
-    <span class="lk-quiet" role="status">${order.find ? `${count(found)} of ${counted(source.total, 'row')}` : counted(source.total, 'row')}${
+    <span class="lk-quiet" role="status">${order.find ? `${count(found)} of ${counted(total, 'row')}` : counted(total, 'row')}${
       order.sort ? `, sorted by ${order.sort}, ${order.down ? 'falling' : 'rising'}` : ''}</span>
     <span class="lk-gap"></span>
-    ${many && source.searchable && html`<label>Find <input type="search" size="12" value=${text} data-action="find"
+    ${many && searchable && html`<label>Find <input type="search" size="12" value=${text} data-action="find"
       onInput=${(event) => setText(event.currentTarget.value)} /></label>`}
     ${many && html`<label>Row <input type="text" inputmode="numeric" size="7" value=${typed} data-action="jump" aria-label=${`Go to a row of ${title}`}
       onInput=${(event) => setTyped(event.currentTarget.value)} onKeyDown=${(event) => {
@@ -184,11 +185,11 @@ function Bar({source, found, order, setOrder, go, csv, title, id}) {
 
 function Head({column, order, sort, units}) {
   const sorted = order.sort === column.name ? (order.down ? 'descending' : 'ascending') : null;
-  const unit = column.kind === 'share' ? '%' : column.unit;
+  const unit = unitOf(column);
   return html`<th scope="col" aria-sort=${sorted} class=${numeric(column) ? 'lk-figure' : ''}>
     <button type="button" data-action="sort" data-column=${column.name} onClick=${() => sort(column.name)}
         title=${`Sort by ${column.name}`}>
-      <span class="lk-column">${column.name}</span>
+      <span class="lk-column">${labelled(column.name).what}</span>
       <span class="lk-arrow" aria-hidden="true">${sorted === 'ascending' ? '\u2191' : sorted === 'descending' ? '\u2193' : ''}</span>
       ${units && html`<span class="lk-unit">${unit || '\u00a0'}</span>`}
     </button>
@@ -232,6 +233,11 @@ function shown(value, column) {
   return String(value);
 }
 
+/** Dates and words have no unit. */
+function unitOf(column) {
+  return !numeric(column) ? '' : column.kind === 'share' ? '%' : column.unit || labelled(column.name).unit;
+}
+
 function numeric(column) {
   return column.cell === 'DOUBLE' || column.cell === 'LONG';
 }
@@ -240,6 +246,6 @@ function numeric(column) {
 function widths(columns, rows) {
   return columns.map((column, i) => {
     const longest = rows.reduce((most, row) => Math.max(most, row[i] === null ? 1 : shown(row[i], column).length), 0);
-    return Math.min(60, Math.max(longest + (numeric(column) ? 2 : 0), 1.15 * column.name.length + 2, (column.unit || '').length) + 3);
+    return Math.min(60, Math.max(longest + (numeric(column) ? 2 : 0), labelled(column.name).what.length + 1, unitOf(column).length) + 3);
   });
 }
