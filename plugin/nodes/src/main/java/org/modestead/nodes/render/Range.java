@@ -14,33 +14,43 @@ record Range(double low, double high) {
     /** A narrower logarithmic range is widened to whole decades, for only they carry labels. */
     private static final double LABELLED_DECADES = 2.5;
     private static final double LITTLE = 0.03;
+    private static final double NARROWEST = 0.02;
 
     static Range x(Figure figure) {
         return covering(figure.layers().stream().flatMapToDouble(Range::xs), figure.x(),
-                figure.kind() == Figure.Kind.TIME_SERIES ? 0.01 : MARGIN);
+                figure.kind() == Figure.Kind.TIME_SERIES ? 0.01 : MARGIN, narrowest(figure));
     }
 
     static Range y(Figure figure) {
-        return covering(figure.layers().stream().flatMapToDouble(Range::ys), figure.y(), MARGIN);
+        return covering(figure.layers().stream().flatMapToDouble(Range::ys), figure.y(), MARGIN, narrowest(figure));
+    }
+
+    /** A frequency that stays to the sixth digit is to look level: no picture of rates or curves shows less than this share of them. */
+    private static double narrowest(Figure figure) {
+        return figure.kind() == Figure.Kind.CURVES || figure.kind() == Figure.Kind.COMPLEX_PLANE ? NARROWEST : 0;
     }
 
     /** The range of the right axis. */
     static Range right(Figure figure, Figure.Axis axis) {
         return covering(figure.layers().stream().filter(Figure.Backdrop.class::isInstance)
-                .flatMapToDouble(layer -> DoubleStream.of(((Figure.Backdrop) layer).y())), axis, MARGIN);
+                .flatMapToDouble(layer -> DoubleStream.of(((Figure.Backdrop) layer).y())), axis, MARGIN, 0);
     }
 
-    private static Range covering(DoubleStream values, Figure.Axis axis, double margin) {
+    private static Range covering(DoubleStream values, Figure.Axis axis, double margin, double narrowest) {
         double[] drawn = values.filter(v -> drawable(v, axis)).sorted().toArray();
         if (drawn.length == 0) {
             return axis.logarithmic() ? new Range(0.1, 10) : new Range(0, 1);
         }
         double low = drawn[0];
         double high = drawn[drawn.length - 1];
-        return axis.logarithmic() ? logarithmic(low, high) : linear(low, high, margin);
+        return axis.logarithmic() ? logarithmic(low, high) : linear(low, high, margin, narrowest);
     }
 
-    private static Range linear(double low, double high, double margin) {
+    private static Range linear(double low, double high, double margin, double narrowest) {
+        double lacking = narrowest * Math.max(Math.abs(low), Math.abs(high)) - (high - low);
+        if (lacking > 0) {
+            return linear(low - lacking / 2, high + lacking / 2, margin, 0);
+        }
         double spread = high > low ? high - low : Math.max(Math.abs(low), 1e-12) * 0.2;
         return new Range(low - margin * spread, high + margin * spread);
     }

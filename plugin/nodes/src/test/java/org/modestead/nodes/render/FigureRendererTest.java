@@ -189,4 +189,15 @@ class FigureRendererTest {
         int from = svg.indexOf("viewBox=\"") + "viewBox=\"".length();
         return svg.substring(from, svg.indexOf('"', from));
     }
+
+    @Test
+    void aCurveThatHardlyChangesLooksLevelAndATimeSeriesKeepsItsRange() {
+        double[] rank = {1, 2, 3};
+        Figure.Layer line = new Figure.Line("mode 1", "", rank, new double[] {1, 1 + 1e-6, 1}, Figure.Emphasis.STRONG);
+        Figure curve = new Figure("a", Figure.Kind.CURVES, "", "", Figure.Axis.linear("rank"), Figure.Axis.linear("frequency"), List.of(line));
+        // two per cent of the value with a margin of a twentieth on either side
+        assertEquals(0.022, Range.y(curve).high() - Range.y(curve).low(), 1e-6);
+        Figure series = new Figure("a", Figure.Kind.TIME_SERIES, "", "", Figure.Axis.linear("time"), Figure.Axis.linear("value"), List.of(line));
+        assertEquals(1.1e-6, Range.y(series).high() - Range.y(series).low(), 1e-12);
+    }
 }

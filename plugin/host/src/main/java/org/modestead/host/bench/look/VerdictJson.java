@@ -4,11 +4,16 @@ import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
+import java.util.Optional;
+import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Finding;
 import org.modestead.engine.wellposed.ModeVerdict;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.nodes.words.Cautions;
+import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.ModeWords;
 import org.modestead.nodes.words.Sentence;
+import org.modestead.nodes.words.TimeUnit;
 import org.modestead.nodes.words.VerdictWords;
 
 /** Writes a verdict in plain words: what may be said of each mode, what decided it, what may be done, and what always holds. */
@@ -17,14 +22,24 @@ public final class VerdictJson {
 
     private VerdictJson() {}
 
-    /** Returns the whole verdict; of the findings only those that decided, and those on the operator as a whole. */
+    /** Returns the verdict without the figures of the modes. */
     public static ObjectNode of(Verdict verdict) {
+        return of(verdict, Optional.empty());
+    }
+
+    /**
+     * Returns the whole verdict; of the findings only those that decided, and those on the operator as a whole.
+     *
+     * @param verdict on the modes
+     * @param spectrum that was judged, where it is at hand: each mode is then told with its figures
+     */
+    public static ObjectNode of(Verdict verdict, Optional<Spectrum> spectrum) {
         ModeVerdict overall = verdict.overall();
         ObjectNode out = NODES.objectNode().put("overall", overall.grade().word())
                 .put("headline", Sentence.of(VerdictWords.headline(overall.grade()))).put("meaning", VerdictWords.overall(overall.grade()))
                 .put("sentence", Sentence.of(overall.sentence())).put("advice", VerdictWords.advice(overall.grade()));
         ArrayNode modes = out.putArray("modes");
-        verdict.modes().forEach(mode -> modes.add(mode(verdict, mode)));
+        verdict.modes().forEach(mode -> modes.add(mode(verdict, mode, figures(mode, spectrum))));
         out.set("whole", findings(verdict.findings().stream().filter(finding -> finding.mode() == 0 && !told(finding)).toList()));
         texts(out.putArray("doubts"), verdict.doubts().stream().map(doubt -> Sentence.of(doubt.sentence())).toList());
         texts(out.putArray("safety"), Cautions.STANDING);
@@ -36,8 +51,14 @@ public final class VerdictJson {
         return finding.check().equals("verdict");
     }
 
-    private static ObjectNode mode(Verdict verdict, ModeVerdict mode) {
-        ObjectNode out = NODES.objectNode().put("mode", mode.mode()).put("selection", "mode:" + mode.mode())
+    private static String figures(ModeVerdict judged, Optional<Spectrum> spectrum) {
+        return spectrum.flatMap(given -> given.modes().stream().filter(mode -> mode.number() == judged.mode()).findFirst()
+                .map(mode -> ModeWords.headline(mode, new TimeUnit(given.timeUnit())) + "; " + Digits.percent(mode.energyShare())
+                        + " of the signal")).orElse("");
+    }
+
+    private static ObjectNode mode(Verdict verdict, ModeVerdict mode, String figures) {
+        ObjectNode out = NODES.objectNode().put("mode", mode.mode()).put("selection", "mode:" + mode.mode()).put("figures", figures)
                 .put("grade", mode.grade().word()).put("counts", mode.counts()).put("meaning", VerdictWords.meaning(mode.grade()))
                 .put("sentence", Sentence.of(mode.sentence())).put("advice", VerdictWords.advice(mode.grade()));
         texts(out.putArray("decidedBy"), mode.decidedBy());

@@ -8,6 +8,7 @@ import com.fasterxml.jackson.databind.JsonNode;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.stream.StreamSupport;
 import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.BeforeAll;
@@ -85,6 +86,13 @@ class LookOfExamplesTest {
             assertTrue(named.containsAll(decided), named + " / " + decided);
         }
         assertTrue(json.get("safety").toString().contains("licensed engineer"));
+    }
+
+    @Test
+    void aModeIsToldWithItsFiguresWhereTheSpectrumIsAtHand() {
+        JsonNode modes = VerdictJson.of(verdict, Optional.of(spectrum)).get("modes");
+        assertTrue(StreamSupport.stream(modes.spliterator(), false).anyMatch(mode -> mode.get("figures").asText().contains("0.620 Hz")), modes.toString());
+        assertEquals("", VerdictJson.of(verdict).at("/modes/0/figures").asText());
     }
 
     @Test

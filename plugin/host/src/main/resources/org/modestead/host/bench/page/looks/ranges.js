@@ -3,6 +3,7 @@
 const MARGIN = 0.05;
 const LABELLED_DECADES = 2.5;
 const LITTLE = 0.03;
+const NARROWEST = 0.02;
 
 /** Whether a value can be drawn on an axis. */
 export function drawable(value, axis) {
@@ -12,7 +13,7 @@ export function drawable(value, axis) {
 /** @returns {{low: number, high: number}} of the horizontal axis */
 export function rangeX(figure) {
   const values = figure.layers.flatMap((layer) => (layer.type === 'rule' ? (layer.vertical ? [layer.at] : []) : layer.x ?? []));
-  return covering(values, figure.x, figure.kind === 'TIME_SERIES' ? 0.01 : MARGIN);
+  return covering(values, figure.x, figure.kind === 'TIME_SERIES' ? 0.01 : MARGIN, narrowest(figure));
 }
 
 /** @returns {{low: number, high: number}} of the vertical axis */
@@ -32,15 +33,20 @@ export function rangeY(figure) {
         return [];
     }
   });
-  return covering(values, figure.y, MARGIN);
+  return covering(values, figure.y, MARGIN, narrowest(figure));
 }
 
 /** @returns {{low: number, high: number}} of the right axis */
 export function rangeRight(figure) {
-  return covering(figure.layers.filter((layer) => layer.type === 'backdrop').flatMap((layer) => layer.y), figure.right, MARGIN);
+  return covering(figure.layers.filter((layer) => layer.type === 'backdrop').flatMap((layer) => layer.y), figure.right, MARGIN, 0);
 }
 
-function covering(values, axis, margin) {
+/** A frequency that stays to the sixth digit is to look level: no picture of rates or curves shows less than this share of them. */
+function narrowest(figure) {
+  return figure.kind === 'CURVES' || figure.kind === 'COMPLEX_PLANE' ? NARROWEST : 0;
+}
+
+function covering(values, axis, margin, least) {
   let low = Infinity;
   let high = -Infinity;
   for (const value of values) {
@@ -52,10 +58,14 @@ function covering(values, axis, margin) {
   if (low > high) {
     return axis.logarithmic ? {low: 0.1, high: 10} : {low: 0, high: 1};
   }
-  return axis.logarithmic ? logarithmic(low, high) : linear(low, high, margin);
+  return axis.logarithmic ? logarithmic(low, high) : linear(low, high, margin, least);
 }
 
-function linear(low, high, margin) {
+function linear(low, high, margin, least) {
+  const lacking = least * Math.max(Math.abs(low), Math.abs(high)) - (high - low);
+  if (lacking > 0) {
+    return linear(low - lacking / 2, high + lacking / 2, margin, 0);
+  }
   const spread = high > low ? high - low : Math.max(Math.abs(low), 1e-12) * 0.2;
   return {low: low - margin * spread, high: high + margin * spread};
 }

@@ -63,10 +63,10 @@ function Block({block, id, selection, select}) {
 
 /** Words that must not be overlooked; the tone is told by its word. */
 export function Callout({tone, word, title, sentences}) {
-  return html`<aside class=${`lk-callout lk-${tone.toLowerCase()}`} aria-label=${`${word}: ${title}`}>
+  return html`<div role="note" class=${`lk-callout lk-${tone.toLowerCase()}`} aria-label=${`${word}: ${title}`}>
     <p><strong>${word}: ${title}</strong></p>
     ${sentences.map((sentence, i) => html`<p key=${i}>${sentence}</p>`)}
-  </aside>`;
+  </div>`;
 }
 
 function Grid({grid, id, selection, select}) {

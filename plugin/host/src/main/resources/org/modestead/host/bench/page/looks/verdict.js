@@ -40,6 +40,7 @@ function Mode({mode, chosen, select}) {
       ${mode.deciding.length > 0 && html`<button type="button" class="lk-button" data-action="why" aria-expanded=${String(open)}
         aria-label=${`What decided mode ${mode.mode}`} onClick=${() => setOpen(!open)}>what decided it</button>`}
     </div>
+    ${mode.figures && html`<p class="lk-figures">${mode.figures}</p>`}
     <p>${mode.meaning} ${mode.advice}</p>
     ${!open && mode.deciding.length > 0 && html`<p class="lk-quiet">Decided by: ${mode.deciding.map((one) => one.name.toLowerCase()).join(', ')}.</p>`}
     ${open && html`<${Findings} findings=${mode.deciding} />`}
