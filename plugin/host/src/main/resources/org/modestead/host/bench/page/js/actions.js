@@ -1,6 +1,8 @@
 /** Everything a person can do that the server must know of, and how the page takes its answers. */
 import {api, ApiFault} from './api.js';
 import {getState, setState} from './store.js';
+import {nodeOf} from './catalog.js';
+import {furtherFeeds} from './feeding.js';
 import {stepOf} from './layout.js';
 
 let notices = 0;
@@ -76,7 +78,11 @@ export function linkKey(link) {
 /** Does what needs the server; a refusal is shown. @returns {Promise<object|null>} the answer, null when refused */
 export async function attempt(work) {
   try {
-    return await work();
+    const answer = await work();
+    if (getState().notice?.tone === 'stop') {
+      closeNotice();
+    }
+    return answer;
   } catch (fault) {
     if (fault instanceof ApiFault) {
       notify(fault.message, 'stop');
@@ -92,9 +98,6 @@ export async function attempt(work) {
 async function change(path, body) {
   const answer = await attempt(() => api.post(path, body));
   if (answer) {
-    if (getState().notice?.tone === 'stop') {
-      closeNotice();
-    }
     takeDesk(answer);
   }
   return answer;
@@ -128,15 +131,32 @@ export async function redo() {
   }
 }
 
-/** Adds a step and chooses it. @param {object} add fields of the edit */
+/** Adds a step and chooses it; what it is put behind also feeds what else it needs. @param {object} add fields of the edit */
 export async function addStep(add) {
-  const answer = await edit([{do: 'add', ...add}]);
-  if (answer?.made?.length) {
-    choose(answer.made);
-    const made = answer.steps.find((step) => step.id === answer.made[0]);
-    say(`${made.title} added: ${made.state.words}.`);
+  const {catalog, desk} = getState();
+  const node = nodeOf(catalog, add.node);
+  const feeds = add.from ? furtherFeeds(catalog, desk, node, add.from) : [];
+  const id = freeId(desk, node.id);
+  const answer = await edit([
+    {do: 'add', id, ...add},
+    ...feeds.map((feed) => ({do: 'link', from: feed.from, to: `${id}.${feed.port}`})),
+  ], `Add ${node.title}`);
+  if (answer) {
+    choose([id]);
+    const made = answer.steps.find((step) => step.id === id);
+    const also = feeds.map((feed) => endWords(answer, feed.from));
+    say(`${made.title} added: ${made.state.words}.${also.length ? ` Also fed by ${[...new Set(also)].join(' and ')}.` : ''}`);
   }
   return answer;
+}
+
+function freeId(desk, wanted) {
+  const taken = new Set(desk.steps.map((step) => step.id));
+  let id = wanted;
+  for (let n = 2; taken.has(id); n += 1) {
+    id = `${wanted}-${n}`;
+  }
+  return id;
 }
 
 export async function removeSteps(ids) {
@@ -235,14 +255,11 @@ export async function paste() {
 }
 
 function pasteEdits(clip, known, sameDesk) {
-  const taken = new Set(known);
+  const taken = [...known].map((id) => ({id}));
   const names = new Map();
   for (const step of clip.steps) {
-    let id = step.id;
-    for (let n = 2; taken.has(id); n += 1) {
-      id = `${step.id}-${n}`;
-    }
-    taken.add(id);
+    const id = freeId({steps: taken}, step.id);
+    taken.push({id});
     names.set(step.id, id);
   }
   const end = (text) => (names.get(stepOf(text)) ?? stepOf(text)) + text.slice(stepOf(text).length);

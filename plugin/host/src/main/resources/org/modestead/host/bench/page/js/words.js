@@ -27,42 +27,9 @@ export function number(value, digits = 4) {
   return (value < 0 ? MINUS : '') + text;
 }
 
-/**
- * @param {number|null} value
- * @param {string} unit '' for none
- * @param {number} [digits]
- */
-export function withUnit(value, unit, digits = 4) {
-  return unit ? `${number(value, digits)}\u00a0${unit}` : number(value, digits);
-}
-
-/** @param {number} share from 0 to 1 */
-export function percent(share) {
-  return `${Math.round(share * 100)}\u00a0%`;
-}
-
 /** @param {number} count @param {string} one @param {string} [many] */
 export function counted(count, one, many = one + 's') {
   return `${count.toLocaleString('en').replace(/,/g, '\u202f')} ${count === 1 ? one : many}`;
-}
-
-/** @param {number} seconds a time span, rounded as a person would say it */
-export function duration(seconds) {
-  if (seconds < 1) {
-    return 'less than 1\u00a0s';
-  }
-  if (seconds < 90) {
-    return `${Math.round(seconds)}\u00a0s`;
-  }
-  if (seconds < 5400) {
-    return `${Math.round(seconds / 60)}\u00a0min`;
-  }
-  return `${number(seconds / 3600, 2)}\u00a0h`;
-}
-
-/** @param {string[]} parts "a", "a and b", "a, b and c" */
-export function listed(parts) {
-  return parts.length < 2 ? parts.join('') : `${parts.slice(0, -1).join(', ')} and ${parts.at(-1)}`;
 }
 
 /** @param {string} word */

@@ -25,7 +25,8 @@ export function Bar() {
   return html`<header class="bar" data-part="bar">
     <a class="skip" href=${wide ? '#look' : '#bench'} onclick=${skip}>${wide ? 'Go to the step' : 'Go to the bench'}</a>
     <img class="bar-mark" src="/mark.svg" alt="" width="24" height="24" />
-    <h1 class="bar-name"><span class="unseen">Modestead: </span><button type="button" class="bar-title" data-action="rename-workflow" title="Rename the workflow"
+    <h1 class="bar-name"><span class="unseen">Modestead: </span><button type="button" class="bar-title" data-action="rename-workflow"
+      title="Rename the workflow"
       onclick=${() => openDialog({kind: 'name'})}>${desk.name}</button></h1>
     <span class="bar-saved quiet small clip" title=${desk.savedWords} data-saved=${String(desk.saved)}>${desk.savedWords}</span>
     <${Menu} label="Workflow" action="workflow-menu" items=${file} />
@@ -52,5 +53,6 @@ function skip(event) {
 function Problems({desk}) {
   const count = desk.problems.length;
   return html`<button type="button" class=${'button plain' + (count ? ' tone-caution' : ' quiet')} data-action="problems"
-    aria-haspopup="dialog" onclick=${() => openDialog({kind: 'problems'})}>${count ? counted(count, 'thing to set right', 'things to set right') : 'Nothing to set right'}</button>`;
+    aria-haspopup="dialog"
+      onclick=${() => openDialog({kind: 'problems'})}>${count ? counted(count, 'thing to set right', 'things to set right') : 'Nothing to set right'}</button>`;
 }

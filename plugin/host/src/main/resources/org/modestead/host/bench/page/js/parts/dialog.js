@@ -44,7 +44,8 @@ export function Dialog({title, kind, children, foot, onsubmit, light, onclose = 
       }} onpointerdown=${press}>
     <form class="dialog-form" method="dialog" novalidate onsubmit=${submit}>
       <div class="dialog-head"><h2 id=${heading}>${title}</h2>
-        <button type="button" class="button plain dialog-close" data-action="close-dialog" aria-label="Close" onclick=${() => onclose()}><${Glyph} name="close" /></button></div>
+        <button type="button" class="button plain dialog-close" data-action="close-dialog" aria-label="Close"
+          onclick=${() => onclose()}><${Glyph} name="close" /></button></div>
       <${Notice} /><${Told} />
       <div class="dialog-body">${children}</div>
       ${foot && html`<div class="dialog-foot">${foot}</div>`}

@@ -49,7 +49,8 @@ function NumbersField(props) {
 function TextField(props) {
   const {setting, value, type} = props;
   return setting.multiline
-    ? html`<textarea ...${common(props)} class="field-input mono" rows="7" spellcheck="false" value=${asText(value)} oninput=${(e) => type(e.target.value)}></textarea>`
+    ? html`<textarea ...${common(props)} class="field-input mono" rows="7" spellcheck="false" value=${asText(value)}
+      oninput=${(e) => type(e.target.value)}></textarea>`
     : html`<input ...${common(props)} class="field-input" autocomplete="off" placeholder=${asText(setting.initial)} value=${asText(value)}
       oninput=${(e) => type(e.target.value)} />`;
 }
@@ -63,7 +64,8 @@ function FlagField(props) {
 function ChoiceField(props) {
   const {setting, value, type, id} = props;
   if (setting.options.length <= FEW) {
-    return html`<div class="choices" role="radiogroup" aria-labelledby=${id + '-label'} aria-describedby=${props.describedby} data-field=${setting.key} id=${id}>
+    return html`<div class="choices" role="radiogroup" aria-labelledby=${id + '-label'} aria-describedby=${props.describedby}
+      data-field=${setting.key} id=${id}>
       ${setting.options.map((option) => html`<label class="check" key=${option.id}><input type="radio" name=${id} value=${option.id} data-option=${option.id}
         checked=${value === option.id} onchange=${() => type(option.id, true)} /><span>${option.label}</span></label>`)}</div>`;
   }
@@ -90,13 +92,15 @@ function ColumnField(props) {
   }
   if (columns.length > SHOWN) {
     return html`<input ...${common(props)} class="field-input" list=${id + '-list'} value=${asText(value)} oninput=${(e) => type(e.target.value)} />
-      <datalist id=${id + '-list'}>${columns.map((column) => html`<option key=${column.name} value=${column.name}>${columnWords(column)}</option>`)}</datalist>`;
+      <datalist id=${id + '-list'}>${columns.map((column) => html`<option key=${column.name}
+        value=${column.name}>${columnWords(column)}</option>`)}</datalist>`;
   }
   const missing = value && !columns.some((column) => column.name === value);
   return html`<select ...${common(props)} class="field-input" onchange=${(e) => type(e.target.value, true)}>
     <option value="" selected=${!value}>${setting.required ? 'Choose a column' : 'None'}</option>
     ${missing && html`<option value=${value} selected>${value} (not a fitting column of this table)</option>`}
-    ${columns.map((column) => html`<option key=${column.name} value=${column.name} selected=${column.name === value}>${columnWords(column)}</option>`)}</select>`;
+    ${columns.map((column) => html`<option key=${column.name} value=${column.name}
+      selected=${column.name === value}>${columnWords(column)}</option>`)}</select>`;
 }
 
 function asList(value) {
@@ -126,7 +130,8 @@ function ColumnsField(props) {
       <button type="button" class="button" data-action="all-columns" onclick=${() => all(true)}>All</button>
       <button type="button" class="button" data-action="no-columns" onclick=${() => all(false)}>None</button>
     </div>
-    <ul class="columns-list">${found.slice(0, SHOWN).map((column) => html`<li key=${column.name}><label class="check"><input type="checkbox" data-column=${column.name}
+    <ul class="columns-list">${found.slice(0, SHOWN).map((column) => html`<li key=${column.name}><label class="check"><input type="checkbox"
+      data-column=${column.name}
       checked=${taken.includes(column.name)} onchange=${() => flip(column.name)} /><span class="clip grow">${column.name}</span>
       <span class="quiet small">${column.unit && !column.name.includes(column.unit) ? column.unit : column.type}</span></label></li>`)}</ul>
     <p class="help">${counted(taken.length, 'column')} chosen of ${columns.length}.${found.length > SHOWN ? ` The first ${SHOWN} are shown: search for others.` : ''}</p>
@@ -150,8 +155,10 @@ function FileField(props) {
   const {setting, value, type, id} = props;
   const [open, setOpen] = useState(false);
   return html`<div class="file-field">
-    <div class="row"><input ...${common(props)} class="field-input grow" autocomplete="off" spellcheck="false" value=${asText(value)} oninput=${(e) => type(e.target.value)} />
-      <button type="button" class="button" data-action="choose-file" aria-expanded=${String(open)} aria-controls=${id + '-files'} onclick=${() => setOpen(!open)}>Choose…</button></div>
+    <div class="row"><input ...${common(props)} class="field-input grow" autocomplete="off" spellcheck="false" value=${asText(value)}
+      oninput=${(e) => type(e.target.value)} />
+      <button type="button" class="button" data-action="choose-file" aria-expanded=${String(open)} aria-controls=${id + '-files'}
+        onclick=${() => setOpen(!open)}>Choose…</button></div>
     ${open && html`<div id=${id + '-files'}><${FileBox} extensions=${setting.extensions} writing=${!setting.reading} label=${`Files for ${setting.label}`}
       pick=${(entry) => {
         setOpen(false);

@@ -42,7 +42,8 @@ export function FileBox({extensions, label, folder: start = '', pick, moved}) {
     <ul class="file-list">${entries.map((entry) => html`<li key=${entry.path}><button type="button" class="file-item" data-file=${entry.name}
       onclick=${() => (entry.folder ? setFolder(entry.path) : pick(entry))}><${Glyph} name=${entry.folder ? 'folder' : 'file'} />
       <span class="clip grow">${entry.name}</span>${!entry.folder && html`<span class="quiet small">${bytes(entry.bytes)}</span>`}</button></li>`)}</ul>
-    ${entries.length === 0 && html`<p class="quiet small">Nothing here${extensions.length ? ` that ends in ${extensions.map((e) => '.' + e).join(', ')}` : ''}.</p>`}
+    ${entries.length === 0 && html`<p
+      class="quiet small">Nothing here${extensions.length ? ` that ends in ${extensions.map((e) => '.' + e).join(', ')}` : ''}.</p>`}
     ${listing.cut && html`<p class="quiet small">Only the first entries are shown.</p>`}
   </div>`;
 }

@@ -65,7 +65,7 @@ export function DroppedDialog({file}) {
     const answer = await attempt(() => api.upload(file, file.name));
     if (answer) {
       closeDialog();
-      await addStep({node: 'table-source', settings: {path: answer.path}});
+      await addStep({node: 'table-source', title: file.name, settings: {path: answer.path}});
     }
   });
   const anew = run(async () => {

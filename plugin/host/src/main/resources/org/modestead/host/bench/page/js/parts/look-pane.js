@@ -45,13 +45,15 @@ function StepLook({step}) {
       <button type="button" class="button" data-action="run-step" aria-disabled=${desk.run.running ? 'true' : undefined}
         onclick=${() => !desk.run.running && run([step.id])}>Run to here</button>
       <${Menu} label="More" action="step-menu" items=${more} />
-      <button type="button" class="button plain" data-action="widen" aria-pressed=${String(wide)} title=${wide ? 'Show the bench again (Escape)' : 'Let this fill the page'}
+      <button type="button" class="button plain" data-action="widen" aria-pressed=${String(wide)}
+        title=${wide ? 'Show the bench again (Escape)' : 'Let this fill the page'}
         onclick=${() => setState({wide: !wide})}><${Glyph} name="widen" /><span>${wide ? 'Narrow' : 'Widen'}</span></button>
     </div>
     ${step.note && html`<p class="note" data-note><button type="button" class="note-text" onclick=${() => openDialog({kind: 'note', step: step.id})}
       title="Change the note">${step.note}</button></p>`}
     ${step.problems.length > 0 && html`<${StepProblems} step=${step} />`}
-    ${step.state.sentence && step.problems.length === 0 && html`<p class=${'callout' + (kind === 'failed' ? ' stop' : '')} data-sentence>${step.state.sentence}</p>`}
+    ${step.state.sentence && step.problems.length === 0 && html`<p class=${'callout' + (kind === 'failed' ? ' stop' : '')}
+      data-sentence>${step.state.sentence}</p>`}
     <div class="look-body"><${Later} load=${look} step=${step} desk=${desk} selection=${selection} select=${mark} wide=${wide} /></div>`;
 }
 

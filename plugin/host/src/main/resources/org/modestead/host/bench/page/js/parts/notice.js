@@ -17,7 +17,8 @@ export function Notice() {
   }, [notice?.id]);
   return notice && html`<div class=${'notice ' + notice.tone} role="region" aria-label="Message" data-notice=${notice.tone}>
     <p>${notice.text}</p>
-    <button type="button" class="button plain" aria-label="Close this message" data-action="close-notice" onclick=${closeNotice}><${Glyph} name="close" /></button>
+    <button type="button" class="button plain" aria-label="Close this message" data-action="close-notice"
+      onclick=${closeNotice}><${Glyph} name="close" /></button>
   </div>`;
 }
 

@@ -50,7 +50,8 @@ export function Picker({end, output, step}) {
           <ul>${group.items.map((item) => html`<li key=${item.key}><button type="button" class="picker-item" data-action=${item.action} data-pick=${item.key}
             onclick=${item.act}><span>${item.label}</span>${item.more && html`<span class="quiet small">${item.more}</span>`}</button></li>`)}</ul>
         </section>`)}
-        ${options?.length === 0 && html`<p class="quiet">${query ? 'Nothing that fits is called that.' : `Nothing fits: no step ${output ? 'takes' : 'gives'} ${type}.`}</p>`}
+        ${options?.length === 0 && html`<p
+          class="quiet">${query ? 'Nothing that fits is called that.' : `Nothing fits: no step ${output ? 'takes' : 'gives'} ${type}.`}</p>`}
       </div>
       ${fitting && !query && html`<${Unfit} fitting=${fitting} catalog=${catalog} desk=${desk} output=${output} />`}
     </div>
@@ -91,8 +92,8 @@ function optionsOf({catalog, desk, fitting, end, output, step, query}) {
       more: stageTitle(catalog, node.stage),
       act: then(async () => {
         const answer = await addStep({node: node.id, ...(output ? {from: end} : {to: end})});
-        if (answer?.made?.length) {
-          focusCard(answer.made[0]);
+        if (answer) {
+          focusCard(getState().chosen[0]);
         }
       }),
     }));

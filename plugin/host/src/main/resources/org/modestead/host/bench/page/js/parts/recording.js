@@ -46,18 +46,24 @@ export function Recording({guess: first, back}) {
     <div class="recording-head"><div class="grow"><h2 data-recording>${guess.name}</h2>
         ${guess.sentences.map((sentence, i) => html`<p key=${i}>${sentence}</p>`)}</div>
       <button type="button" class="button" data-action="another-file" onclick=${back}>Another file</button>
-      <button type="button" class="button" data-action="lay-out" aria-disabled=${ready ? undefined : 'true'} onclick=${() => ready && go(false)}>Lay out the steps</button>
-      <button type="button" class="button main" data-action="lay-out-run" aria-disabled=${ready ? undefined : 'true'} onclick=${() => ready && go(true)}>Lay out the steps and run</button></div>
-    ${guess.problems.length > 0 && html`<div class="callout caution" role="alert"><ul>${guess.problems.map((problem, i) => html`<li key=${i}>${problem}</li>`)}</ul></div>`}
+      <button type="button" class="button" data-action="lay-out" aria-disabled=${ready ? undefined : 'true'}
+        onclick=${() => ready && go(false)}>Lay out the steps</button>
+      <button type="button" class="button main" data-action="lay-out-run" aria-disabled=${ready ? undefined : 'true'}
+        onclick=${() => ready && go(true)}>Lay out the steps and run</button></div>
+    ${guess.problems.length > 0 && html`<div class="callout caution"
+      role="alert"><ul>${guess.problems.map((problem, i) => html`<li key=${i}>${problem}</li>`)}</ul></div>`}
     <div class="recording-room">
       <section aria-labelledby="columns-title"><h3 id="columns-title">What the columns are</h3>
-        <div class="recording-table" tabindex="0" role="region" aria-labelledby="columns-title"><table><thead><tr><th scope="col">Column</th><th scope="col">Taken as</th><th scope="col">Unit</th>
+        <div class="recording-table" tabindex="0" role="region" aria-label="Columns of the file"><table><thead><tr><th scope="col">Column</th><th scope="col">Taken as</th><th scope="col">Unit</th>
           <th scope="col" class="number">From</th><th scope="col" class="number">To</th><th scope="col" class="number">Missing</th></tr></thead>
-          <tbody>${guess.all.map((column) => html`<tr key=${column.name} data-column=${column.name}><th scope="row"><span class="clip" title=${column.name}>${column.title}</span></th>
-            <td><select class="field-input" aria-label=${`${column.title} is taken as`} title=${column.why} data-role=${column.name} onchange=${(e) => role(column.name, e.target.value)}>
+          <tbody>${guess.all.map((column) => html`<tr key=${column.name} data-column=${column.name}><th scope="row"><span class="clip"
+            title=${column.name}>${column.title}</span></th>
+            <td><select class="field-input" aria-label=${`${column.title} is taken as`} title=${column.why} data-role=${column.name}
+              onchange=${(e) => role(column.name, e.target.value)}>
               ${ROLES.map(([id, label]) => html`<option key=${id} value=${id} selected=${column.role === id}>${label}</option>`)}</select></td>
             <td>${column.role === 'time' ? html`<${TimeUnit} guess=${guess} ask=${ask} />` : column.unit}</td>
-            <td class="number">${number(column.low)}</td><td class="number">${number(column.high)}</td><td class="number">${column.missing || ''}</td></tr>`)}</tbody></table></div>
+            <td class="number">${number(column.low)}</td><td class="number">${number(column.high)}</td><td
+              class="number">${column.missing || ''}</td></tr>`)}</tbody></table></div>
         ${guess.all.length > 12 && html`<p class="help">${counted(guess.all.length, 'column')}.</p>`}
         <${Reading} guess=${guess} ask=${ask} />
       </section>
@@ -83,7 +89,7 @@ function withRole(guess, name, to) {
 }
 
 function TimeUnit({guess, ask}) {
-  return html`<input class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" value=${guess.columns.timeUnit}
+  return html`<input class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" placeholder="for example s" value=${guess.columns.timeUnit}
     onchange=${(e) => ask(guess.reading, {...guess.columns, timeUnit: e.target.value.trim()})} />`;
 }
 
@@ -97,10 +103,12 @@ function Reading({guess, ask}) {
   }
   const put = (key, value) => ask({...guess.reading, [key]: value});
   return html`<details class="reading"><summary>How the file is read</summary><div class="reading-fields">
-    ${settings.map((setting) => html`<label key=${setting.key}><span>${setting.label}</span>
+    ${settings.map((setting) => html`<label key=${setting.key} class=${setting.kind === 'flag' ? 'check' : ''}><span>${setting.label}</span>
       ${setting.kind === 'choice' ? html`<select class="field-input" data-reading=${setting.key} onchange=${(e) => put(setting.key, e.target.value)}>
-          ${setting.options.map((option) => html`<option key=${option.id} value=${option.id} selected=${option.id === guess.reading[setting.key]}>${option.label}</option>`)}</select>`
-        : setting.kind === 'flag' ? html`<input type="checkbox" data-reading=${setting.key} checked=${guess.reading[setting.key]} onchange=${(e) => put(setting.key, e.target.checked)} />`
+          ${setting.options.map((option) => html`<option key=${option.id} value=${option.id}
+            selected=${option.id === guess.reading[setting.key]}>${option.label}</option>`)}</select>`
+        : setting.kind === 'flag' ? html`<input type="checkbox" data-reading=${setting.key} checked=${guess.reading[setting.key]}
+          onchange=${(e) => put(setting.key, e.target.checked)} />`
           : html`<input class="field-input" data-reading=${setting.key} value=${guess.reading[setting.key] ?? ''}
               onchange=${(e) => put(setting.key, setting.kind === 'whole' ? Number(e.target.value) : e.target.value)} />`}</label>`)}
   </div></details>`;

@@ -24,7 +24,8 @@ export function RenameDialog({step: id}) {
   };
   return html`<${Dialog} title="Rename the step" kind="rename" onsubmit=${done} foot=${[cancelButton, mainButton('Rename')]}>
     <label for="rename-field">Name</label>
-    <input id="rename-field" class="field-input" data-focus maxlength="120" value=${title} oninput=${(e) => setTitle(e.target.value)} aria-describedby="rename-help" />
+    <input id="rename-field" class="field-input" data-focus maxlength="120" value=${title} oninput=${(e) => setTitle(e.target.value)}
+      aria-describedby="rename-help" />
     <p id="rename-help" class="help">Empty for its own name, ${node.title}. In files and messages the step is called <code>${id}</code>.</p>
   <//>`;
 }
@@ -106,7 +107,8 @@ export function AboutDialog({node: id}) {
     <dt>${typeTitle(catalog, port.type)}${port.title.toLowerCase() === typeTitle(catalog, port.type).toLowerCase() ? '' : `: ${port.title}`}${port.optional ? ' (optional)' : ''}</dt>
     <dd>${port.description}</dd></div>`)}</dl>`;
   return html`<${Dialog} title=${node.title} kind="about" light onsubmit=${add}
-      foot=${desk?.open ? [html`<button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Close</button>`, mainButton('Add to the bench')] : null}>
+      foot=${desk?.open ? [html`<button type="button" class="button" data-action="cancel-dialog"
+        onclick=${closeDialog}>Close</button>`, mainButton('Add to the bench')] : null}>
     <p><strong>${node.purpose}</strong></p>
     ${node.description.split(/\n\s*\n/).map((part, i) => html`<p key=${i}>${part}</p>`)}
     ${ports('Takes', node.inputs)}${ports('Gives', node.outputs)}

@@ -61,16 +61,21 @@ export function Start() {
         <p class="help">It stays on this machine${start ? `; up to ${bytes(start.uploadLimit)}` : ''}.</p>
       </section>
       ${start && start.recent.length > 0 && html`<section class="start-way" aria-labelledby="way-recent"><h2 id="way-recent">Go on with</h2>
-        <ul class="start-list">${start.recent.map((desk) => html`<li key=${desk.desk} class="start-row"><button type="button" class="start-item" data-resume=${desk.desk}
+        <ul class="start-list">${start.recent.map((desk) => html`<li key=${desk.desk} class="start-row"><button type="button" class="start-item"
+          data-resume=${desk.desk}
           onclick=${() => begin({resume: desk.desk}, 'Opening it.')}><strong>${desk.name}</strong>
-          <span class="quiet small">${desk.words}; ${counted(desk.steps, 'step')}${desk.file ? html`<br /><span class="clip">${desk.file}</span>` : ''}</span></button>
-          <button type="button" class="button plain" data-forget=${desk.desk} aria-label=${`Forget ${desk.name}`} onclick=${() => forget(desk)}>Forget</button></li>`)}</ul></section>`}
+          <span class="quiet small">${desk.words}; ${counted(desk.steps, 'step')}${desk.file ? html`<br /><span
+            class="clip">${desk.file}</span>` : ''}</span></button>
+          <button type="button" class="button plain" data-forget=${desk.desk} aria-label=${`Forget ${desk.name}`}
+            onclick=${() => forget(desk)}>Forget</button></li>`)}</ul></section>`}
       <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
         <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
-          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span class="quiet small">${example.words}</span></button></li>`)}</ul></section>
+          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
+            class="quiet small">${example.words}</span></button></li>`)}</ul></section>
       <section class="start-way" aria-labelledby="way-open"><h2 id="way-open">Open a workflow, or begin with none</h2>
         <div class="row"><button type="button" class="button" data-action="open" onclick=${() => openDialog({kind: 'open'})}>Open a workflow…</button>
-          <button type="button" class="button" data-action="new-empty" onclick=${() => begin({empty: true, name: 'New workflow'}, 'Making room.')}>Empty bench</button></div></section>
+          <button type="button" class="button" data-action="new-empty"
+            onclick=${() => begin({empty: true, name: 'New workflow'}, 'Making room.')}>Empty bench</button></div></section>
     </main>`}
     <${DropZone} take=${take} />
   </div>`;

@@ -2,7 +2,7 @@
 import {html, useEffect, useRef, useState} from '../../lib.js';
 import {api} from '../api.js';
 import {getState} from '../store.js';
-import {attempt, closeDialog, edit, openDialog, run, say} from '../actions.js';
+import {attempt, closeDialog, edit, run, say} from '../actions.js';
 import {nodeOf, stepWith} from '../catalog.js';
 import {Dialog} from './dialog.js';
 import {Field} from './fields.js';
@@ -17,6 +17,8 @@ export function StepDialog({step: id, field}) {
   const node = nodeOf(catalog, step.node);
   const [about, setAbout] = useState(null);
   const [typed, setTyped] = useState({});
+  const [busy, setBusy] = useState(false);
+  const [leaving, setLeaving] = useState(false);
   const judging = useRef({timer: 0, stop: null});
   const body = useRef(null);
   useEffect(() => {
@@ -52,11 +54,17 @@ export function StepDialog({step: id, field}) {
   const type = (key, value, atOnce) => {
     const now = {...typed, [key]: value};
     setTyped(now);
+    setLeaving(false);
     judge(now, atOnce);
   };
   const keep = async (thenRun) => {
+    if (busy) {
+      return;
+    }
     if (Object.keys(typed).length > 0) {
+      setBusy(true);
       const answer = await edit([{do: 'set', step: id, typed}]);
+      setBusy(false);
       if (!answer) {
         return;
       }
@@ -68,11 +76,11 @@ export function StepDialog({step: id, field}) {
     }
   };
   const changes = Object.keys(typed).length;
-  const close = () => (changes === 0 ? closeDialog() : openDialog({
-    kind: 'confirm', title: 'Leave the settings as they were?', words: `${counted(changes, 'setting was', 'settings were')} changed in the dialog of ${step.title} and not kept.`,
-    label: 'Leave them', act: () => {},
-  }));
-  const foot = html`<p class=${'grow dialog-told' + (about?.problems.length ? ' tone-stop' : ' quiet')} role="status">${about ? told(about, changes) : ''}</p>
+  const close = () => (changes === 0 ? closeDialog() : setLeaving(true));
+  const foot = leaving ? html`<p class="grow dialog-told" role="alert">${counted(changes, 'setting was', 'settings were')} changed and not kept.</p>
+    <button type="button" class="button" data-action="stay" onclick=${() => setLeaving(false)}>Go on setting</button>
+    <button type="button" class="button danger" data-action="leave" onclick=${closeDialog}>Leave them as they were</button>`
+    : html`<p class=${'grow dialog-told' + (about?.problems.length ? ' tone-stop' : ' quiet')} role="status">${busy ? 'Keeping the settings.' : about ? told(about, changes) : ''}</p>
     <button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Cancel</button>
     <button type="button" class="button" data-action="apply-run" onclick=${() => keep(true)}>Keep and run</button>
     <button type="submit" class="button main" data-action="apply">Keep</button>`;
@@ -100,7 +108,8 @@ function Form({node, about, typed, type}) {
   }
   return html`<div class="settings-frame">
     ${groups.length > 1 && html`<nav class="settings-groups" aria-label="Groups of settings"><ul>${groups.map((group) => html`<li key=${group}>
-      <button type="button" class="group-link" onclick=${(e) => goTo(e, group)}>${group}${wrongIn(group, shown, about) > 0 && html`<span class="tone-stop"> (${wrongIn(group, shown, about)})</span>`}</button></li>`)}</ul></nav>`}
+      <button type="button" class="group-link" onclick=${(e) => goTo(e, group)}>${group}${wrongIn(group, shown, about) > 0 && html`<span
+        class="tone-stop"> (${wrongIn(group, shown, about)})</span>`}</button></li>`)}</ul></nav>`}
     <div class="settings-list">
       <details class="settings-purpose"><summary>${node.purpose}</summary>
         ${node.description.split(/\n\s*\n/).map((part, i) => html`<p key=${i}>${part}</p>`)}</details>
@@ -143,16 +152,19 @@ function Setting({setting, about, typed, type}) {
     ${text}
     <div class="setting-field">
       <div class="setting-line">
-        <${Field} setting=${setting} value=${shownValue(setting, value, isInitial)} about=${about} id=${id} describedby=${problems.length ? `${error} ${help}` : help}
+        <${Field} setting=${setting} value=${shownValue(setting, value, isInitial)} about=${about}
+          id=${id} describedby=${problems.length ? `${error} ${help}` : help}
           wrong=${problems.length > 0} type=${(v, atOnce) => type(setting.key, v, atOnce)} />
         ${unit && html`<span class="setting-unit">${unit}</span>`}
       </div>
       ${problems.length > 0 && html`<p class="setting-error" id=${error}>${problems.map((problem) => `Now ${problem.seen}: ${problem.wanted}.`).join(' ')}</p>`}
-      <p class="help" id=${help}>${option?.help && html`<strong>${option.label}:</strong> ${option.help}<br />`}${setting.help}${range && html`<span class="setting-range"> ${range}</span>`}</p>
+      <p class="help" id=${help}>${setting.help}${range && html`<span class="setting-range"> ${range}</span>`}${
+        option?.help && html`<br /><strong>${option.label}:</strong> ${option.help}`}</p>
     </div>
     <div class="setting-reset">${isInitial ? html`<span class="quiet small">default</span>`
       : html`<button type="button" class="link-button small" data-action="reset" data-reset=${setting.key}
-          aria-label=${`Set ${setting.label} back to its default${initialWords(setting)}`} onclick=${() => type(setting.key, null, true)}>Default</button>`}</div>
+          aria-label=${`Set ${setting.label} back to its default${initialWords(setting)}`}
+            onclick=${() => type(setting.key, null, true)}>Default</button>`}</div>
   </div>`;
 }
 
