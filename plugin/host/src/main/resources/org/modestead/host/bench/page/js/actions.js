@@ -25,7 +25,7 @@ export function closeNotice() {
 
 /** Takes up a state of the desk unless a newer one is known. @param {object} desk */
 export function takeDesk(desk) {
-  const {desk: known, chosen, link} = getState();
+  const {desk: known, chosen, link, dialog} = getState();
   if (known && desk.revision < known.revision) {
     return;
   }
@@ -41,6 +41,7 @@ export function takeDesk(desk) {
     chosen: another ? [] : chosen.filter((id) => ids.has(id)),
     link: links.has(link) ? link : '',
     selection: another ? '' : getState().selection,
+    dialog: dialog?.step && !ids.has(dialog.step) ? null : dialog,
   });
   tellRun(known, desk);
   if (desk.recovered && known?.desk !== desk.desk) {

@@ -1,8 +1,8 @@
 /** The page: puts the parts together and keeps them in step with the server. */
-import {html, render, useEffect} from '../lib.js';
+import {html, render, useEffect, useErrorBoundary} from '../lib.js';
 import {api} from './api.js';
 import {getState, setState, useStore} from './store.js';
-import {takeDesk} from './actions.js';
+import {notify, takeDesk} from './actions.js';
 import {listen} from './events.js';
 import {pageKey} from './keys.js';
 import {Bar} from './parts/bar.js';
@@ -68,8 +68,23 @@ function Page() {
     ${Kind && html`<${Kind} key=${dialog.kind + (dialog.step ?? dialog.end ?? '')} ...${dialog} />`}`;
 }
 
+/** A defect of the page is told instead of leaving it blank; the work itself is safe with the server. */
+function Guarded() {
+  const [fault, again] = useErrorBoundary();
+  if (fault) {
+    return html`<div class="loading" role="alert"><p><strong>The page met a defect and stopped drawing.</strong> Your work is kept.</p>
+      <p>${String(fault.message ?? fault)}</p>
+      <button type="button" class="button main" data-action="draw-anew" onclick=${() => {
+        setState({dialog: null, drag: null, chosen: [], wide: false});
+        again();
+      }}>Draw it anew</button></div>`;
+  }
+  return html`<${Page} />`;
+}
+
 async function begin() {
-  render(html`<${Page} />`, document.getElementById('page'));
+  render(html`<${Guarded} />`, document.getElementById('page'));
+  window.addEventListener('unhandledrejection', (event) => notify(`The page met a defect: ${event.reason?.message ?? event.reason}.`, 'stop'));
   try {
     const [catalog, desk] = await Promise.all([api.get('/api/nodes'), api.get('/api/desk')]);
     setState({catalog});

@@ -61,3 +61,16 @@ export function matches(catalog, node, query) {
   const text = [node.title, node.id, node.purpose, ...node.keywords, stageTitle(catalog, node.stage)].join(' ').toLowerCase();
   return words.every((word) => text.includes(word));
 }
+
+/** What is wrong, in the names that the page shows. @param {boolean} withStep whether the step is named too */
+export function problemWords(catalog, desk, problem, withStep) {
+  const step = problem.step && stepWith(desk, problem.step);
+  const node = step && nodeOf(catalog, step.node);
+  if (!node || !problem.seen) {
+    return problem.sentence;
+  }
+  const setting = node.settings.find((s) => s.key === problem.setting);
+  const port = node.inputs.find((p) => p.id === problem.port);
+  const where = [withStep ? stepName(desk, step) : '', setting?.label ?? port?.title ?? ''].filter(Boolean).join(', ');
+  return `${where}${where ? ': ' : ''}${problem.seen}; ${problem.wanted}.`;
+}

@@ -27,19 +27,23 @@ function corners({from, to, track}, rows, gutters) {
   const below = gapBelow(rows, from.row) + shift;
   const above = gapAbove(rows, to.row) + shift;
   if (to.row === from.row + 1) {
-    return [from, {x: from.x, y: below}, {x: to.x, y: below}, to];
+    return [from, {x: from.x, y: above}, {x: to.x, y: above}, to];
   }
   const gutter = nearest(gutters, from.x, to.x) + shift;
   return [from, {x: from.x, y: below}, {x: gutter, y: below}, {x: gutter, y: above}, {x: to.x, y: above}, to];
 }
 
+/** Long ways run near the cards they leave and reach, so that a wide gap between bands does not fill with crossings. */
+const NEAR = 11;
+
 function gapBelow(rows, row) {
   const next = rows[row + 1];
-  return next ? (rows[row].bottom + next.top) / 2 : rows[row].bottom + 14;
+  return rows[row].bottom + (next ? Math.min(NEAR, (next.top - rows[row].bottom) / 2) : NEAR);
 }
 
 function gapAbove(rows, row) {
-  return row > 0 ? (rows[row - 1].bottom + rows[row].top) / 2 : rows[row].top - 14;
+  const before = rows[row - 1];
+  return rows[row].top - (before ? Math.min(NEAR, (rows[row].top - before.bottom) / 2) : NEAR);
 }
 
 function nearest(gutters, a, b) {

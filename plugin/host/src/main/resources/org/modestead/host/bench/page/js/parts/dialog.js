@@ -12,9 +12,10 @@ import {Glyph} from '../glyphs.js';
  * @param {any} [props.foot] what stands at the foot
  * @param {() => any} [props.onsubmit] what Enter in a field and the main button do
  * @param {boolean} [props.light] whether a press beside it shuts it; not where something could be lost
+ * @param {boolean} [props.text] whether it is there to be read: then its content can have the focus, to be scrolled by keys
  * @param {() => any} [props.onclose] instead of only shutting it
  */
-export function Dialog({title, kind, children, foot, onsubmit, light, onclose = closeDialog}) {
+export function Dialog({title, kind, children, foot, onsubmit, light, text, onclose = closeDialog}) {
   const box = useRef(null);
   const heading = 'dialog' + useId();
   useEffect(() => {
@@ -47,7 +48,7 @@ export function Dialog({title, kind, children, foot, onsubmit, light, onclose = 
         <button type="button" class="button plain dialog-close" data-action="close-dialog" aria-label="Close"
           onclick=${() => onclose()}><${Glyph} name="close" /></button></div>
       <${Notice} /><${Told} />
-      <div class="dialog-body">${children}</div>
+      <div class="dialog-body" tabindex=${text ? 0 : undefined} role=${text ? 'group' : undefined} aria-labelledby=${text ? heading : undefined}>${children}</div>
       ${foot && html`<div class="dialog-foot">${foot}</div>`}
     </form>
   </dialog>`;

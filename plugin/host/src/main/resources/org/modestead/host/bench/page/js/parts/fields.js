@@ -1,5 +1,8 @@
 /** One field a kind of setting. A field shows a value and tells what was typed; it judges nothing itself. */
-import {html, useState} from '../../lib.js';
+import {html, useRef, useState} from '../../lib.js';
+import {api} from '../api.js';
+import {attempt} from '../actions.js';
+import {getState} from '../store.js';
 import {counted} from '../words.js';
 import {FileBox} from './file-box.js';
 
@@ -154,17 +157,30 @@ function TextsField(props) {
 function FileField(props) {
   const {setting, value, type, id} = props;
   const [open, setOpen] = useState(false);
+  const elsewhere = useRef(null);
+  const take = (path) => {
+    setOpen(false);
+    type(path, true);
+    document.getElementById(id)?.focus();
+  };
+  const bring = async (file) => {
+    const answer = file && await attempt(() => api.upload(file, file.name));
+    if (answer) {
+      take(answer.path);
+    }
+  };
   return html`<div class="file-field">
     <div class="row"><input ...${common(props)} class="field-input grow" autocomplete="off" spellcheck="false" value=${asText(value)}
       oninput=${(e) => type(e.target.value)} />
       <button type="button" class="button" data-action="choose-file" aria-expanded=${String(open)} aria-controls=${id + '-files'}
         onclick=${() => setOpen(!open)}>Choose…</button></div>
-    ${open && html`<div id=${id + '-files'}><${FileBox} extensions=${setting.extensions} writing=${!setting.reading} label=${`Files for ${setting.label}`}
-      pick=${(entry) => {
-        setOpen(false);
-        type(entry.relative ?? entry.path, true);
-        document.getElementById(id)?.focus();
-      }} /></div>`}
+    ${open && html`<div id=${id + '-files'} class="file-choice">
+      <${FileBox} extensions=${setting.extensions} label=${`Files for ${setting.label}`} folder=${getState().desk.folder ?? ''}
+        pick=${(entry) => take(entry.relative ?? entry.path)} />
+      ${setting.reading && setting.extensions.includes('csv') && html`<input ref=${elsewhere} class="unseen" type="file" tabindex="-1" aria-hidden="true"
+          accept=${setting.extensions.map((end) => '.' + end).join(',')} onchange=${(e) => bring(e.target.files[0])} />
+        <button type="button" class="button" data-action="file-elsewhere" onclick=${() => elsewhere.current.click()}>Copy one from elsewhere…</button>`}
+    </div>`}
   </div>`;
 }
 

@@ -7,7 +7,6 @@ import {bytes} from '../words.js';
 /**
  * @param {object} props
  * @param {string[]} props.extensions only files that end so; empty for all
- * @param {boolean} [props.writing] whether a folder is chosen too
  * @param {string} props.label
  * @param {string} [props.folder] where to begin
  * @param {(entry: {path: string, name: string, relative: string|null}) => void} props.pick

@@ -3,7 +3,7 @@ import {html} from '../../lib.js';
 import {Later} from './later.js';
 import {getState, setState} from '../store.js';
 import {run, openDialog, removeSteps, duplicate, mark, edit} from '../actions.js';
-import {hasTwin, nodeOf, stepName, stepWith} from '../catalog.js';
+import {hasTwin, nodeOf, problemWords, stepName, stepWith} from '../catalog.js';
 import {canShift, shift} from './bands.js';
 import {stateKind} from './card.js';
 import {Menu} from './menu.js';
@@ -59,7 +59,7 @@ function StepLook({step}) {
 
 function StepProblems({step}) {
   return html`<div class="callout caution" data-problems><p><strong>${counted(step.problems.length, 'thing to set right', 'things to set right')}</strong></p>
-    <ul class="problem-list">${step.problems.map((problem, i) => html`<li key=${i}>${problem.sentence}
+    <ul class="problem-list">${step.problems.map((problem, i) => html`<li key=${i}>${problemWords(getState().catalog, getState().desk, problem, false)}
       ${problem.setting && html` <button type="button" class="link-button" data-action="fix" onclick=${() => openDialog({
         kind: 'settings', step: step.id, field: problem.setting})}>Set it</button>`}
       ${problem.port && html` <button type="button" class="link-button" data-action="fix" onclick=${() => openDialog({

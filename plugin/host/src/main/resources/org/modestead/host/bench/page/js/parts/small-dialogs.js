@@ -2,7 +2,7 @@
 import {html, useState} from '../../lib.js';
 import {getState} from '../store.js';
 import {choose, closeDialog, edit, openDialog, say, addStep} from '../actions.js';
-import {nodeOf, stepWith, typeTitle} from '../catalog.js';
+import {nodeOf, problemWords, stepWith, typeTitle} from '../catalog.js';
 import {KEYS} from '../keys.js';
 import {Dialog} from './dialog.js';
 import {counted} from '../words.js';
@@ -69,7 +69,7 @@ export function NotesDialog() {
 }
 
 export function KeysDialog() {
-  return html`<${Dialog} title="Keys" kind="keys" light>
+  return html`<${Dialog} title="Keys" kind="keys" light text>
     <div class="keys-groups">${KEYS.map((group) => html`<section key=${group.group}><h3>${group.group}</h3>
       <dl class="keys-list">${group.keys.map(([key, does]) => html`<div key=${key}><dt>${key.split(', ').map((part, i) => html`${i ? ', ' : ''}<kbd>${part}</kbd>`)}</dt>
         <dd>${does}</dd></div>`)}</dl></section>`)}</div>
@@ -79,7 +79,7 @@ export function KeysDialog() {
 }
 
 export function ProblemsDialog() {
-  const {desk} = getState();
+  const {catalog, desk} = getState();
   const go = (problem) => {
     if (problem.step) {
       choose([problem.step]);
@@ -87,10 +87,10 @@ export function ProblemsDialog() {
     openDialog(problem.setting ? {kind: 'settings', step: problem.step, field: problem.setting}
       : problem.port ? {kind: 'picker', end: `${problem.step}.${problem.port}`, output: false} : null);
   };
-  return html`<${Dialog} title="What is to be set right" kind="problems" light>
+  return html`<${Dialog} title="What is to be set right" kind="problems" light text>
     ${desk.problems.length === 0 ? html`<p>Nothing: every step is set up as far as can be told before running.</p>`
       : html`<p class="quiet">${counted(desk.problems.length, 'thing')}, in the order of the work.</p>
-        <ul class="problem-list">${desk.problems.map((problem, i) => html`<li key=${i}><span>${problem.sentence}</span>
+        <ul class="problem-list">${desk.problems.map((problem, i) => html`<li key=${i}><span>${problemWords(catalog, desk, problem, true)}</span>
           ${problem.step && html`<button type="button" class="button" data-action="go-to" onclick=${() => go(problem)}>${
             problem.setting ? 'Set it' : problem.port ? 'Link it' : 'Show the step'}</button>`}</li>`)}</ul>`}
   <//>`;
@@ -106,7 +106,7 @@ export function AboutDialog({node: id}) {
   const ports = (title, list) => list.length > 0 && html`<h3>${title}</h3><dl class="about-ports">${list.map((port) => html`<div key=${port.id}>
     <dt>${typeTitle(catalog, port.type)}${port.title.toLowerCase() === typeTitle(catalog, port.type).toLowerCase() ? '' : `: ${port.title}`}${port.optional ? ' (optional)' : ''}</dt>
     <dd>${port.description}</dd></div>`)}</dl>`;
-  return html`<${Dialog} title=${node.title} kind="about" light onsubmit=${add}
+  return html`<${Dialog} title=${node.title} kind="about" light text onsubmit=${add}
       foot=${desk?.open ? [html`<button type="button" class="button" data-action="cancel-dialog"
         onclick=${closeDialog}>Close</button>`, mainButton('Add to the bench')] : null}>
     <p><strong>${node.purpose}</strong></p>

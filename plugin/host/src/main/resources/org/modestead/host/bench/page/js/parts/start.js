@@ -50,7 +50,7 @@ export function Start() {
     <header class="start-head"><img src="/mark.svg" alt="" width="40" height="40" /><div class="grow"><h1>Modestead</h1>
       <p class="quiet">Takes a recording of something that moves, finds its modes, and tells which of them exist.</p></div><${ViewMenu} /></header>
     ${busy && html`<p class="callout" aria-busy="true">${busy}</p>`}
-    ${guess ? html`<${Recording} guess=${guess} back=${() => setState({guess: null})} />` : html`<main class="start-ways">
+    ${guess ? html`<${Recording} guess=${guess} back=${() => setState({guess: null})} />` : html`<main class="start-ways"><div class="start-column">
       <section class="start-way first" aria-labelledby="way-recording">
         <h2 id="way-recording">Take a recording</h2>
         <p>One row a sample, one column a channel; a time column and a run column if there are any. CSV, Parquet or JSON.
@@ -60,6 +60,11 @@ export function Start() {
         <button type="button" class="button main" data-first data-action="choose-recording" onclick=${() => input.current.click()}>Choose a file…</button>
         <p class="help">It stays on this machine${start ? `; up to ${bytes(start.uploadLimit)}` : ''}.</p>
       </section>
+      <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
+        <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
+          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
+            class="quiet small">${example.words}</span></button></li>`)}</ul></section>
+      </div><div class="start-column">
       ${start && start.recent.length > 0 && html`<section class="start-way" aria-labelledby="way-recent"><h2 id="way-recent">Go on with</h2>
         <ul class="start-list">${start.recent.map((desk) => html`<li key=${desk.desk} class="start-row"><button type="button" class="start-item"
           data-resume=${desk.desk}
@@ -68,15 +73,11 @@ export function Start() {
             class="clip">${desk.file}</span>` : ''}</span></button>
           <button type="button" class="button plain" data-forget=${desk.desk} aria-label=${`Forget ${desk.name}`}
             onclick=${() => forget(desk)}>Forget</button></li>`)}</ul></section>`}
-      <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
-        <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
-          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
-            class="quiet small">${example.words}</span></button></li>`)}</ul></section>
       <section class="start-way" aria-labelledby="way-open"><h2 id="way-open">Open a workflow, or begin with none</h2>
         <div class="row"><button type="button" class="button" data-action="open" onclick=${() => openDialog({kind: 'open'})}>Open a workflow…</button>
           <button type="button" class="button" data-action="new-empty"
             onclick=${() => begin({empty: true, name: 'New workflow'}, 'Making room.')}>Empty bench</button></div></section>
-    </main>`}
+    </div></main>`}
     <${DropZone} take=${take} />
   </div>`;
 }

@@ -136,7 +136,7 @@ function wrongIn(group, shown, about) {
 function Setting({setting, about, typed, type}) {
   const id = `set-${setting.key}`;
   const isTyped = Object.hasOwn(typed, setting.key);
-  const value = isTyped ? typed[setting.key] : about.values[setting.key];
+  const value = (isTyped ? typed[setting.key] : about.values[setting.key]) ?? setting.initial;
   const problems = about.problems.filter((problem) => problem.setting === setting.key);
   const isInitial = isTyped ? isEmpty(typed[setting.key]) || same(typed[setting.key], setting.initial)
     : !Object.hasOwn(about.settings, setting.key) || same(about.settings[setting.key], setting.initial);

@@ -44,10 +44,14 @@ function measure(area, links) {
   const origin = area.getBoundingClientRect();
   const rows = [...area.querySelectorAll('[data-row]')];
   const rowOf = new Map();
-  const boxes = rows.map((row, index) => {
-    row.querySelectorAll('[data-step]').forEach((card) => rowOf.set(card.dataset.step, index));
-    const box = row.getBoundingClientRect();
-    return {top: Math.round(box.top - origin.top), bottom: Math.round(box.bottom - origin.top)};
+  const edges = rows.map((row, index) => {
+    const cards = [...row.querySelectorAll('[data-step]')];
+    cards.forEach((card) => rowOf.set(card.dataset.step, index));
+    const boxes = cards.map((card) => card.getBoundingClientRect());
+    return {
+      top: Math.round(Math.min(...boxes.map((box) => box.top)) - origin.top),
+      bottom: Math.round(Math.max(...boxes.map((box) => box.bottom)) - origin.top),
+    };
   });
   const tracks = new Map();
   const ends = [];
@@ -63,7 +67,7 @@ function measure(area, links) {
       ends.push({key: linkKey(link), from: {...from, row: fromRow}, to: {...to, row: toRow}, track: tracks.get(link.from)});
     }
   }
-  return {links: ends, rows: boxes, gutters: guttersOf(rows[0], origin)};
+  return {links: ends, rows: edges, gutters: guttersOf(rows[0], origin)};
 }
 
 /** Where a link meets the edge of its card: at its tab, or, where tabs stand in several lines, at a point of its own. */
