@@ -283,7 +283,13 @@ function takeMade(answer) {
 
 /** @param {string[]} [steps] none for everything @param {boolean} [again] */
 export async function run(steps, again = false) {
-  return change('/api/run', steps ? {steps, again} : {});
+  const answer = await change('/api/run', steps ? {steps, again} : {});
+  if (answer && !steps && getState().chosen.length === 0) {
+    const {catalog} = getState();
+    const judge = answer.steps.find((step) => nodeOf(catalog, step.node).outputs.some((port) => port.type === 'verdict'));
+    choose(judge ? [judge.id] : []);
+  }
+  return answer;
 }
 
 export async function cancel() {

@@ -1,7 +1,6 @@
 /** Between bench and look: dragged or moved with the arrow keys; remembered on this machine. */
 import {html, useEffect, useRef, useState} from '../../lib.js';
 
-const KEY = 'modestead.split';
 const LEAST = 25;
 const MOST = 75;
 
@@ -11,11 +10,8 @@ function usual() {
 }
 
 function remembered() {
-  try {
-    return Number(window.localStorage.getItem(KEY)) || usual();
-  } catch {
-    return usual();
-  }
+  const kept = Number(window.modesteadPage.kept('split'));
+  return kept >= LEAST && kept <= MOST ? kept : usual();
 }
 
 export function Splitter() {
@@ -23,13 +19,8 @@ export function Splitter() {
   const bar = useRef(null);
   useEffect(() => {
     bar.current.closest('.room').style.setProperty('--bench-share', String(share));
-    if (share === usual()) {
-      return;
-    }
-    try {
-      window.localStorage.setItem(KEY, String(share));
-    } catch {
-      /* It holds for this page only. */
+    if (share !== usual()) {
+      window.modesteadPage.keep('split', String(share));
     }
   }, [share]);
   const put = (value) => setShare(Math.round(Math.min(MOST, Math.max(LEAST, value))));

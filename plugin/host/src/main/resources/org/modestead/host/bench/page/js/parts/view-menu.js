@@ -4,12 +4,12 @@ import {openDialog, say} from '../actions.js';
 import {Menu} from './menu.js';
 
 export function ViewMenu() {
-  const [choice, setChoice] = useState(window.modesteadTheme.choice());
+  const [choice, setChoice] = useState(window.modesteadPage.theme());
   const theme = (name, label) => ({
     label: `${label}${choice === name ? ', as now' : ''}`,
     action: `theme-${name}`,
     act: () => {
-      window.modesteadTheme.choose(name);
+      window.modesteadPage.chooseTheme(name);
       setChoice(name);
       say(`${label}.`);
     },
