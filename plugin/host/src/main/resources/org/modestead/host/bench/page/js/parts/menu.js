@@ -6,7 +6,7 @@ import {Glyph} from '../glyphs.js';
  * @param {object} props
  * @param {string} props.label
  * @param {string} props.action hook for tests
- * @param {Array<{label: string, action: string, keys?: string, off?: boolean, act: () => any}|null>} props.items null draws a line
+ * @param {Array<{label: string, action: string, keys?: string, off?: boolean, checked?: boolean, act: () => any}|null>} props.items null draws a line; `checked` makes it one of several of which one holds
  */
 export function Menu({label, action, items}) {
   const [open, setOpen] = useState(false);
@@ -16,7 +16,7 @@ export function Menu({label, action, items}) {
     if (!open) {
       return undefined;
     }
-    box.current.querySelector('[role="menuitem"]')?.focus();
+    box.current.querySelector('.menu-item')?.focus();
     const away = (event) => {
       if (!box.current.contains(event.target)) {
         setOpen(false);
@@ -52,20 +52,21 @@ export function Menu({label, action, items}) {
     ${open && html`<ul class="menu-list" role="menu" aria-label=${label}>
       ${items.map((item, i) => (item === null
         ? html`<li key=${i} role="separator" class="menu-line"></li>`
-        : html`<li key=${item.label} role="none"><button type="button" role="menuitem" class="menu-item" tabindex="-1" data-action=${item.action}
+        : html`<li key=${item.label} role="none"><button type="button" role=${item.checked === undefined ? 'menuitem' : 'menuitemradio'}
+            aria-checked=${item.checked === undefined ? undefined : String(item.checked)} class="menu-item" tabindex="-1" data-action=${item.action}
             aria-disabled=${item.off ? 'true' : undefined}
             onclick=${() => {
               if (!item.off) {
                 shut();
                 item.act();
               }
-            }}><span>${item.label}</span>${item.keys && html`<span class="quiet small">${item.keys}</span>`}</button></li>`))}
+            }}>${item.checked !== undefined && html`<span class="menu-check">${item.checked && html`<${Glyph} name="done" />`}</span>`}<span class="grow">${item.label}</span>${item.keys && html`<span class="quiet small">${item.keys}</span>`}</button></li>`))}
     </ul>`}
   </div>`;
 }
 
 function walk(box, key) {
-  const items = [...box.querySelectorAll('[role="menuitem"]')];
+  const items = [...box.querySelectorAll('.menu-item')];
   const at = items.indexOf(document.activeElement);
   const next = {ArrowDown: at + 1, ArrowUp: at - 1, Home: 0, End: items.length - 1}[key];
   items[(next + items.length) % items.length]?.focus();

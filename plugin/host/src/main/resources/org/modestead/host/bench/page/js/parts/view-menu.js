@@ -6,7 +6,8 @@ import {Menu} from './menu.js';
 export function ViewMenu() {
   const [choice, setChoice] = useState(window.modesteadPage.theme());
   const theme = (name, label) => ({
-    label: `${label}${choice === name ? ', as now' : ''}`,
+    label,
+    checked: choice === name,
     action: `theme-${name}`,
     act: () => {
       window.modesteadPage.chooseTheme(name);
