@@ -51,7 +51,7 @@ record Range(double low, double high) {
         if (lacking > 0) {
             return linear(low - lacking / 2, high + lacking / 2, margin, 0);
         }
-        double spread = high > low ? high - low : Math.max(Math.abs(low), 1e-12) * 0.2;
+        double spread = high > low ? high - low : low == 0 ? 1 : Math.abs(low) * 0.2;
         return new Range(low - margin * spread, high + margin * spread);
     }
 

@@ -16,6 +16,7 @@ export function colours() {
     font: token('sans') || 'sans-serif',
     size,
     small: Math.round(size * 0.857),
+    unit: size / 14,
   };
 }
 

@@ -75,7 +75,7 @@ function rangeOf(matrix) {
     const most = Math.max(Math.abs(matrix.low), Math.abs(matrix.high)) || 1;
     return {low: -most, high: most};
   }
-  const low = matrix.low >= 0 && matrix.low < 0.5 * matrix.high ? 0 : matrix.low;
+  const low = Math.min(0, matrix.low);
   return {low, high: matrix.high > low ? matrix.high : low + 1};
 }
 

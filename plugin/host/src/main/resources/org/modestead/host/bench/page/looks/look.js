@@ -1,4 +1,4 @@
-import {html, useRef} from '../lib.js';
+import {html, useLayoutEffect, useRef} from '../lib.js';
 import {words} from './keys.js';
 import {Pictures} from './pictures.js';
 import {Port} from './port.js';
@@ -17,6 +17,7 @@ import {Verdict} from './verdict.js';
 export function Look({step, selection = '', select}) {
   const {value: look, fault} = useRead(step.look ? `/api/steps/${encodeURIComponent(step.id)}/look` : null, step.resultId ?? '');
   const place = useRef(null);
+  useLayoutEffect(() => belowHead(place.current));
   if (!step.look) {
     return html`<div class="lk" data-look=${step.id}><p class="lk-quiet">There is nothing to look at yet: this step has not run.</p></div>`;
   }
@@ -67,6 +68,12 @@ export function Look({step, selection = '', select}) {
 }
 
 const FIRST_SENTENCES = 5;
+
+/** What stays in sight at the top of the region, if anything, is told to the style sheet, so that the parts lie beneath it. */
+function belowHead(element) {
+  const head = element?.parentElement?.parentElement?.querySelector('.look-head');
+  element?.style.setProperty('--lk-top', `${head ? head.offsetHeight : 0}px`);
+}
 
 /** The first sentences; the others are a press away. */
 function Sentences({sentences}) {

@@ -3,7 +3,7 @@ import {html} from '../lib.js';
 /** The shapes of points: shape and filling carry meaning where colour alone must not. Open ones are filled with paper. */
 
 /** @returns {{symbol: string, size: number, itemStyle: object}} as the chart library wants it */
-export function symbolOf(mark, colour, theme, size = 10, opacity = 1) {
+export function symbolOf(mark, colour, theme, size = 10 * theme.unit, opacity = 1) {
   const stroke = Math.max(1.8, size / 5.5);
   switch (mark) {
     case 'SQUARE':

@@ -163,7 +163,7 @@ class Drawing {
 
   backdrop(layer) {
     return {type: 'line', yAxisIndex: 1, z: 1, silent: true, showSymbol: false, connectNulls: false, name: layer.name,
-      lineStyle: {color: this.styles.colour(layer), width: 1.3, opacity: 0.8},
+      lineStyle: {color: this.styles.colour(layer), width: 1.3 * this.theme.unit, opacity: 0.8},
       data: layer.x.map((x, i) => [this.time(x), drawable(layer.y[i], this.figure.right) ? layer.y[i] : null])};
   }
 
@@ -211,7 +211,7 @@ class Drawing {
     const chosen = isSelected(layer.selection, this.selection);
     const colour = styles.colour(layer);
     const marked = figure.kind === 'CURVES' && group.every((one) => one.x.length <= MARKED_UP_TO);
-    const mark = symbolOf(styles.curveMark(layer), colour, theme, 8, ink);
+    const mark = symbolOf(styles.curveMark(layer), colour, theme, 8 * theme.unit, ink);
     const data = [];
     for (const one of group) {
       one.x.forEach((x, i) => data.push([this.category ? Math.round(x) : this.time(x), drawable(one.y[i], figure.y) ? one.y[i] : null]));
@@ -221,7 +221,7 @@ class Drawing {
       type: 'line', name: layer.name, z: chosen ? 6 : layer.emphasis === 'STRONG' && !styles.overTime ? 4 : styles.overTime && layer.emphasis === 'STRONG' ? 3 : 4,
       silent: true, clip: true, connectNulls: false, showSymbol: marked, showAllSymbol: true, symbol: mark.symbol, symbolSize: mark.size,
       itemStyle: mark.itemStyle, data,
-      lineStyle: {color: colour, width: styles.width(layer) + (chosen ? 1.2 : 0), type: styles.dash(layer).length ? styles.dash(layer) : 'solid',
+      lineStyle: {color: colour, width: styles.width(layer) + (chosen ? 1.2 * theme.unit : 0), type: styles.dash(layer).length ? styles.dash(layer) : 'solid',
         opacity: ink, cap: 'butt', join: 'round'},
     };
   }
@@ -229,7 +229,7 @@ class Drawing {
   bars(layers) {
     const overlapped = this.figure.kind === 'SHAPES' && layers.length > 1;
     return layers.map((layer) => ({
-      type: 'bar', name: layer.name, z: 3, silent: true, barGap: overlapped ? '-100%' : '10%', barCategoryGap: '32%',
+      type: 'bar', name: layer.name, z: 3, silent: true, barMaxWidth: 5 * this.theme.size, barGap: overlapped ? '-100%' : '10%', barCategoryGap: '32%',
       itemStyle: {color: this.styles.colour(layer), opacity: this.ink(layer.selection)},
       data: layer.heights.map((height) => (drawable(height, this.figure.y) ? height : '-')),
     }));
@@ -272,14 +272,14 @@ class Drawing {
   labelPlace(x) {
     const of = this.figure.x.logarithmic ? Math.log10 : (value) => value;
     const share = this.category ? 0 : (of(x) - of(this.x.low)) / (of(this.x.high) - of(this.x.low));
-    return share > 0.82 ? {position: [6, -3], align: 'right', verticalAlign: 'bottom'} : {position: [6, -3], align: 'left', verticalAlign: 'bottom'};
+    return share > 0.82 ? {position: [6 * this.theme.unit, -3], align: 'right', verticalAlign: 'bottom'} : {position: [6 * this.theme.unit, -3], align: 'left', verticalAlign: 'bottom'};
   }
 
   /** A ring around what is selected. */
   ring(layers) {
     return {
-      type: 'scatter', z: 7, silent: true, clip: true, symbol: 'circle', symbolSize: 22,
-      itemStyle: {color: 'transparent', borderColor: this.theme.accent, borderWidth: 2.2},
+      type: 'scatter', z: 7, silent: true, clip: true, symbol: 'circle', symbolSize: 22 * this.theme.unit,
+      itemStyle: {color: 'transparent', borderColor: this.theme.accent, borderWidth: 2.2 * this.theme.unit},
       data: layers.flatMap((layer) => layer.x.map((x, i) => [this.category ? Math.round(x) : this.time(x), layer.y[i]])),
     };
   }

@@ -3,7 +3,7 @@ import {useColours} from './colours.js';
 import {numbersOf} from './figure-numbers.js';
 import {isSelected, words} from './keys.js';
 import {Legend} from './legend.js';
-import {labelled} from './numbers.js';
+import {counted, labelled} from './numbers.js';
 import {Plot} from './plot.js';
 import {useRead} from './reading.js';
 import {useSeen} from './seen.js';
@@ -36,13 +36,20 @@ export function Picture({head, address = '', data = null, resultId, selection, s
 function Drawn({figure, selection, select, handle, captionId, title, say}) {
   const theme = useColours();
   const [hidden, setHidden] = useState(new Set());
+  const left = figure.y.logarithmic ? undrawn(figure) : 0;
   const right = figure.right ? labelled(figure.right.label) : null;
   return html`
     <p class="lk-axes" aria-hidden="true"><span>${axisWords(figure.y)}</span>${right && html`<span>${axisWords(figure.right)}</span>`}</p>
     <${Plot} figure=${figure} theme=${theme} selection=${selection} select=${select} hidden=${hidden} handle=${handle} say=${say}
       label=${`${title}. Arrow keys go from mark to mark, Enter selects, plus and minus zoom, 0 shows all.`} describedBy=${captionId} />
     <p class="lk-axes lk-axis-x" aria-hidden="true"><span>${axisWords(figure.x)}</span></p>
-    <${Legend} figure=${figure} theme=${theme} hidden=${hidden} setHidden=${setHidden} />`;
+    <${Legend} figure=${figure} theme=${theme} hidden=${hidden} setHidden=${setHidden} />
+    ${left > 0 && html`<p class="lk-quiet lk-left">${counted(left, 'value')} of 0 or below ${left === 1 ? 'is' : 'are'} not drawn: the axis is logarithmic.</p>`}`;
+}
+
+/** Values that a logarithmic axis has no place for. */
+function undrawn(figure) {
+  return figure.layers.flatMap((layer) => layer.y ?? layer.heights ?? []).filter((value) => value !== null && value <= 0).length;
 }
 
 function axisWords(axis) {

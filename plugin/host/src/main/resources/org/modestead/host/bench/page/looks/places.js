@@ -1,5 +1,5 @@
 import {cell, milliseconds, onAxis, told} from './numbers.js';
-import {words} from './keys.js';
+import {modeOf, words} from './keys.js';
 import {drawable} from './ranges.js';
 
 /** Where the things of a picture are on the screen, what is nearest to a place, and what is to be said of it. */
@@ -32,6 +32,11 @@ export function targets(figure, hidden) {
     } else if (layer.type === 'band') {
       layer.x.forEach((x, i) => drawable(layer.low[i], figure.y) && drawable(layer.high[i], figure.y)
         && add('band', layer, {x, y: (layer.low[i] + layer.high[i]) / 2, low: layer.low[i], high: layer.high[i]}));
+    }
+  }
+  for (const one of series.values()) {
+    if (one.kind === 'points' && one.items.every((item) => modeOf(item.key) !== null)) {
+      one.items.sort((a, b) => modeOf(a.key) - modeOf(b.key));
     }
   }
   return [...series.values()];

@@ -8,7 +8,7 @@ export function Port({step, port, shown, told, resultId, selection, select}) {
   const base = `/api/steps/${encodeURIComponent(step)}`;
   const facts = told && port.type === 'verdict' ? [] : port.facts;
   const own = (port.figures ?? []).filter((figure) => !shown.has(figure.id));
-  return html`<section class="lk-port" id=${`lk-port-${port.id}`} data-port=${port.id} aria-label=${`${port.title}, ${port.type}`}>
+  return html`<section class="lk-port" id=${`lk-port-${port.id}`} tabindex="-1" data-output=${port.id} aria-label=${`${port.title}, ${port.type}`}>
     <h3>${port.title} <span class="lk-type">${typeWords(port)}</span></h3>
     ${facts.length > 0 && html`<dl class="lk-facts">
       ${facts.map((fact) => html`<div key=${fact.item}><dt>${fact.item}</dt><dd>${fact.value}</dd></div>`)}</dl>`}

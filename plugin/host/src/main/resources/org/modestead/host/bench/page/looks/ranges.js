@@ -66,7 +66,7 @@ function linear(low, high, margin, least) {
   if (lacking > 0) {
     return linear(low - lacking / 2, high + lacking / 2, margin, 0);
   }
-  const spread = high > low ? high - low : Math.max(Math.abs(low), 1e-12) * 0.2;
+  const spread = high > low ? high - low : low === 0 ? 1 : Math.abs(low) * 0.2;
   return {low: low - margin * spread, high: high + margin * spread};
 }
 

@@ -41,8 +41,8 @@ export function layerStyles(figure, theme) {
   const dashed = figure.kind === 'CURVES' || figure.kind === 'MARKS';
   return {
     colour,
-    width: (layer) => (layer.emphasis === 'STRONG' ? (overTime ? 3.2 : 2.4) : layer.emphasis === 'NORMAL' ? (overTime ? 1.2 : 1.6) : 1.2),
-    dash: (layer) => (dashed && layer.type === 'line' ? DASHES[index(layer) % DASHES.length] : []),
+    width: (layer) => theme.unit * (layer.emphasis === 'STRONG' ? (overTime ? 3.2 : 2.4) : layer.emphasis === 'NORMAL' ? (overTime ? 1.2 : 1.6) : 1.2),
+    dash: (layer) => (dashed && layer.type === 'line' ? DASHES[index(layer) % DASHES.length].map((length) => length * theme.unit) : []),
     curveMark: (layer) => MARKS[index(layer) % MARKS.length],
     overTime,
   };

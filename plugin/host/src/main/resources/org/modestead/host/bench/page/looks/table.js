@@ -189,7 +189,7 @@ function Head({column, order, sort, units}) {
   return html`<th scope="col" aria-sort=${sorted} class=${numeric(column) ? 'lk-figure' : ''}>
     <button type="button" data-action="sort" data-column=${column.name} onClick=${() => sort(column.name)}
         title=${`Sort by ${column.name}`}>
-      <span class="lk-column">${labelled(column.name).what}</span>
+      <span class="lk-column">${numeric(column) ? labelled(column.name).what : column.name}</span>
       <span class="lk-arrow" aria-hidden="true">${sorted === 'ascending' ? '\u2191' : sorted === 'descending' ? '\u2193' : ''}</span>
       ${units && html`<span class="lk-unit">${unit || '\u00a0'}</span>`}
     </button>
@@ -239,13 +239,13 @@ function unitOf(column) {
 }
 
 function numeric(column) {
-  return column.cell === 'DOUBLE' || column.cell === 'LONG';
+  return column.cell === 'DOUBLE' || column.cell === 'LONG' || column.right === true;
 }
 
 /** Widths in letters, from the head and the first rows, so that nothing moves when other rows come into sight. */
 function widths(columns, rows) {
   return columns.map((column, i) => {
     const longest = rows.reduce((most, row) => Math.max(most, row[i] === null ? 1 : shown(row[i], column).length), 0);
-    return Math.min(60, Math.max(longest + (numeric(column) ? 2 : 0), labelled(column.name).what.length + 1, unitOf(column).length) + 3);
+    return Math.min(60, Math.max(longest + (numeric(column) ? 2 : 0), labelled(column.name).what.length + 2, unitOf(column).length) + 3);
   });
 }
