@@ -71,7 +71,7 @@ function optionsOf({catalog, desk, fitting, end, output, step, query}) {
     const found = portAt(catalog, desk, other, !output);
     return found && alone(other) ? stepName(desk, found.step) : endWords(catalog, desk, other, !output);
   };
-  const remove = links.map((l) => {
+  const remove = links.filter((l) => !step || stepOf(output ? l.to : l.from) === step).map((l) => {
     const other = output ? l.to : l.from;
     return {key: other, action: 'unlink', label: `Remove the link ${output ? 'to' : 'from'} ${name(other)}`, act: then(() => unlink(l.from, l.to))};
   });
