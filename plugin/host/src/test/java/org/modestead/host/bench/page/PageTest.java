@@ -68,6 +68,14 @@ class PageTest {
     }
 
     @Test
+    void modulesOfTheFrameAreAskedForTogether() throws IOException {
+        String index = text("index.html");
+        List<String> late = files(".js").stream().map(file -> PAGE.relativize(file).toString().replace('\\', '/'))
+                .filter(name -> !name.startsWith("looks/") && !index.contains("\"/" + name + "\"")).toList();
+        assertEquals(List.of(), late, "modules that a browser learns of only when it has read others");
+    }
+
+    @Test
     void nothingComesFromAnotherMachine() throws IOException {
         for (Path file : files("")) {
             String text = Files.readString(file).replace("http://www.w3.org/2000/svg", "");

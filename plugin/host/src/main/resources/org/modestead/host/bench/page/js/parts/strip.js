@@ -1,7 +1,7 @@
 /** The line at the foot of the page: how the run goes, and what the chosen link is. */
 import {html} from '../../lib.js';
 import {getState} from '../store.js';
-import {unlink} from '../actions.js';
+import {choose, unlink} from '../actions.js';
 import {endWords} from '../catalog.js';
 import {counted} from '../words.js';
 
@@ -9,9 +9,12 @@ export function Strip() {
   const {catalog, desk, link, lost, chosen} = getState();
   const [from, to] = link.split('>');
   const run = desk.run;
+  const failed = desk.steps.find((step) => step.state.kind === 'failed');
   return html`<footer class="strip small">
     ${run.running && html`<progress class="strip-progress" max="1" value=${run.fraction ?? undefined} aria-label="Progress of the run"></progress>`}
     <span class="strip-run" data-run=${run.running ? 'running' : 'idle'}>${runWords(desk)}</span>
+    ${failed && !run.running && html`<button type="button" class="link-button" data-action="show-failed"
+      onclick=${() => choose([failed.id])}>Show what failed</button>`}
     <span class="grow"></span>
     ${lost && html`<strong class="tone-stop">The bench does not answer; trying again.</strong>`}
     ${link && html`<span class="clip">Link: ${endWords(catalog, desk, from, true)} to ${endWords(catalog, desk, to, false)}</span>
