@@ -28,14 +28,19 @@ final class PercentScores {
      */
     static Optional<String> sentence(ForecastTask task, List<Judged> methods) {
         int horizon = task.longestScored();
-        if (horizon == 0 || !positive(task) || pairs(task, methods.get(0), horizon).errors().length == 0) {
+        if (horizon == 0 || !positive(task) || !isKnown(pairs(task, methods.get(0), horizon))) {
             return Optional.empty();
         }
-        String scores = methods.stream().map(method -> method.route().id() + " " + figures(pairs(task, method, horizon)))
-                .collect(Collectors.joining(", "));
+        String scores = methods.stream().filter(method -> isKnown(pairs(task, method, horizon)))
+                .map(method -> method.route().id() + " " + figures(pairs(task, method, horizon))).collect(Collectors.joining(", "));
         return Optional.of("In percent of what was observed, up to horizon " + Summary.figure(horizon * task.step())
                 + " (MAPE; of the mean of observed and forecast in brackets): " + scores
                 + ". Read it only where 0 on the scale means nothing.");
+    }
+
+    /** A method may reach the horizon from no origin, as the seasonal one where less than a season came before. */
+    private static boolean isKnown(Pairs pairs) {
+        return pairs.errors().length > 0 && !Double.isNaN(Scores.percent(pairs.errors(), pairs.observed()));
     }
 
     private static String figures(Pairs pairs) {

@@ -66,6 +66,20 @@ class ForecasterTest {
         }
     }
 
+    /** The seasonal method needs a season of 18 steps before its origin; the held-out run has 20, which leaves it two of the five leads. */
+    @Test
+    void aMethodThatReachesTheHorizonFromNowhereIsLeftOutOfTheSentences() {
+        Fixture.Signal slow = t -> 8 * Math.pow(0.99, t);
+        Snapshots snapshots = Fixture.snapshots(List.of("m"), List.of(run(0, 30, 0, slow)), List.of(),
+                List.of(Fixture.run("b", 0, 20, 0, 1, slow)),
+                OptionalDouble.of(1));
+        ForecastResult result = Fixture.linear(snapshots, new Evolution.StepMap(1), new double[][] {{0.99}})
+                .run(new ForecastPlan(Route.MODAL, Origin.RECORDING_END, OptionalDouble.of(5), 0.9, 18, List.of()), Grade.STANDS);
+        String percent = result.summary().stream().filter(sentence -> sentence.startsWith("In percent")).findFirst().orElseThrow();
+        assertTrue(percent.contains("persistence"), percent);
+        assertFalse(result.summary().toString().contains("NaN"), result.summary().toString());
+    }
+
     @Test
     void beforeHoldoutForecastsTheHoldoutAtItsOwnTimes() {
         Fixture fixture = decayWithHoldout();

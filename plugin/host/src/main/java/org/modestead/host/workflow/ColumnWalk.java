@@ -3,12 +3,15 @@ package org.modestead.host.workflow;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
+import java.util.stream.Collectors;
 import org.modestead.engine.Progress;
 import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.table.TableSchema;
 
@@ -59,11 +62,18 @@ final class ColumnWalk {
         RunContext context = new RunContext(Progress.NONE, workflow.baseFolder(), workflow.baseFolder());
         Foresight.Seen seen = foresight.look(step, new Expected(arriving(step, schemas), arriving(step, outlooks)), context);
         seen.problems().forEach(found -> problem(step, found));
-        seen.fault().ifPresent(fault -> problems.add(new Problem(workflow.fileName(), step.id(), fault.where(), fault.seen(), fault.wanted())));
+        seen.fault().filter(fault -> !fileTold(step)).ifPresent(fault -> problems.add(new Problem(workflow.fileName(), step.id(), fault.where(), fault.seen(), fault.wanted())));
         seen.expected().ifPresent(expected -> {
             expected.tables().forEach((port, schema) -> schemas.put(new Link.End(step.id(), port), schema));
             expected.values().forEach((port, outlook) -> outlooks.put(new Link.End(step.id(), port), outlook));
         });
+    }
+
+    /** Returns whether it was told already, under its setting, that a file of the step is not there: the node would say so once more. */
+    private boolean fileTold(PlannedStep step) {
+        Set<String> files = step.declaration().settings().stream().filter(Setting.File.class::isInstance).map(file -> "setting " + file.key())
+                .collect(Collectors.toSet());
+        return problems.stream().anyMatch(problem -> problem.step().equals(step.id()) && files.contains(problem.key()));
     }
 
     private static <T> Map<String, T> arriving(PlannedStep step, Map<Link.End, T> known) {

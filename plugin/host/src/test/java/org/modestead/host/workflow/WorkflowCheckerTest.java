@@ -71,6 +71,13 @@ class WorkflowCheckerTest {
     }
 
     @Test
+    void aMissingFileIsToldOnce() throws IOException {
+        List<String> problems = problems(List.of("s:table-source:{\"path\": \"nothing.csv\"}"), List.of());
+        assertEquals(1, problems.size(), problems::toString);
+        assertStarts("workflow.json, step s, setting path: there is no file nothing.csv", problems.get(0));
+    }
+
+    @Test
     void unknownStepAndPortOfALinkAreNamed() throws IOException {
         List<String> steps = List.of("s:table-source:{\"path\": \"pumps.csv\"}", "q:table-query");
         assertEquals("workflow.json, link other.table -> q.input: there is no step \"other\"; use one of s, q.",
