@@ -4,6 +4,7 @@ import {number} from '../words.js';
 
 const WIDTH = 1000;
 const HEIGHT = 60;
+const FEW = 3;
 
 /** @param {{figure: object}} props a figure of lines over time */
 export function Preview({figure}) {
@@ -11,7 +12,7 @@ export function Preview({figure}) {
   const all = lines.flatMap((line) => line.x.filter((x) => x !== null));
   const from = all.reduce((a, b) => Math.min(a, b), Infinity);
   const to = all.reduce((a, b) => Math.max(a, b), -Infinity);
-  return html`<figure class="preview"><ul>${lines.map((line, i) => html`<${Strip} key=${i} line=${line} from=${from} to=${to} />`)}</ul>
+  return html`<figure class=${'preview' + (lines.length <= FEW ? ' few' : '')}><ul>${lines.map((line, i) => html`<${Strip} key=${i} line=${line} from=${from} to=${to} />`)}</ul>
     <figcaption class="quiet small">${figure.x.label}: ${number(from)} to ${number(to)}. ${figure.caption}</figcaption></figure>`;
 }
 

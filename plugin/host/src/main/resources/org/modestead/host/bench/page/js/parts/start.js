@@ -61,6 +61,7 @@ export function Start() {
         <p class="help">It stays on this machine${start ? `; up to ${bytes(start.uploadLimit)}` : ''}.</p>
       </section>
       <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
+        ${!start && html`<p class="quiet" aria-busy="true">Reading what is there.</p>`}
         <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
           onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
             class="quiet small">${example.words}</span></button></li>`)}</ul></section>
