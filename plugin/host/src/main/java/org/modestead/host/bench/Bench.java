@@ -10,6 +10,8 @@ import org.modestead.host.bench.run.Build;
 import org.modestead.host.bench.run.KeptResults;
 import org.modestead.host.bench.run.ResultFolder;
 import org.modestead.host.bench.server.BenchServer;
+import org.modestead.host.bench.start.Doors;
+import org.modestead.host.bench.start.Uploads;
 import org.modestead.host.bench.work.Workbench;
 import org.modestead.nodes.contract.NodeCatalog;
 
@@ -47,9 +49,11 @@ public final class Bench implements AutoCloseable {
         List<Path> open = new ArrayList<>(List.of(options.desk().root()));
         open.addAll(options.folders());
         KeptResults results = new KeptResults(new ResultFolder(options.desk().results(), Build.mark(), options.keptBytes()));
-        Workbench workbench = new Workbench(catalog, results, new OpenedFolders(open));
+        OpenedFolders folders = new OpenedFolders(open);
+        Workbench workbench = new Workbench(catalog, results, folders);
+        Doors doors = new Doors(options.desk(), new Uploads(options.desk().uploads(), options.uploadBytes()), folders, catalog);
         options.workflow().ifPresent(file -> workbench.open(() -> options.desk().open(file)));
-        return new Bench(workbench, BenchServer.start(workbench, catalog, options.port()));
+        return new Bench(workbench, BenchServer.start(workbench, catalog, doors, options.port()));
     }
 
     /** Returns the URL that opens the page. */

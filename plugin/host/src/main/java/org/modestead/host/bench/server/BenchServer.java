@@ -7,6 +7,9 @@ import java.net.InetAddress;
 import java.net.ServerSocket;
 import org.modestead.engine.Fault;
 import org.modestead.host.bench.desk.EditFault;
+import org.modestead.host.bench.folders.FolderFault;
+import org.modestead.host.bench.start.Doors;
+import org.modestead.host.bench.start.Uploads;
 import org.modestead.host.bench.work.Workbench;
 import org.modestead.host.run.DefectLog;
 import org.modestead.nodes.contract.NodeCatalog;
@@ -15,6 +18,7 @@ import org.modestead.nodes.contract.NodeCatalog;
 public final class BenchServer implements AutoCloseable {
 
     private final Workbench workbench;
+    private final Doors doors;
     private final byte[] nodes;
     private final DeskJson deskJson;
     private final PageFiles files = new PageFiles();
@@ -23,8 +27,9 @@ public final class BenchServer implements AutoCloseable {
     private final Gate gate;
     private final Javalin server;
 
-    private BenchServer(Workbench workbench, NodeCatalog catalog, int port) {
+    private BenchServer(Workbench workbench, NodeCatalog catalog, Doors doors, int port) {
         this.workbench = workbench;
+        this.doors = doors;
         this.nodes = Answer.bytes(NodesJson.of(catalog));
         this.deskJson = new DeskJson(catalog);
         this.looks = new LookRoutes(workbench);
@@ -41,9 +46,9 @@ public final class BenchServer implements AutoCloseable {
     }
 
     /** Starts the server; port 0 takes a free one. */
-    public static BenchServer start(Workbench workbench, NodeCatalog catalog, int port) {
+    public static BenchServer start(Workbench workbench, NodeCatalog catalog, Doors doors, int port) {
         try {
-            return new BenchServer(workbench, catalog, port == 0 ? freePort() : port);
+            return new BenchServer(workbench, catalog, doors, port == 0 ? freePort() : port);
         } catch (IOException none) {
             throw new IllegalStateException("no port is free", none);
         }
@@ -74,6 +79,8 @@ public final class BenchServer implements AutoCloseable {
         server.get("/api/nodes", context -> context.contentType("application/json").result(nodes));
         new DeskRoutes(workbench, deskJson).on(server);
         new StepRoutes(workbench).on(server);
+        new StartRoutes(workbench, doors, deskJson).on(server);
+        new FileRoutes(workbench).on(server);
         looks.on(server);
         events.on(server);
         server.get("/api/<path>", context -> {
@@ -83,6 +90,8 @@ public final class BenchServer implements AutoCloseable {
         server.get("/", files::serve);
         server.exception(RequestFault.class, (fault, context) -> Answer.refuse(context, fault.status(), fault));
         server.exception(EditFault.class, (fault, context) -> Answer.refuse(context, 422, fault));
+        server.exception(FolderFault.class, (fault, context) -> Answer.refuse(context, 403, fault));
+        server.exception(Uploads.TooLarge.class, (fault, context) -> Answer.refuse(context, 413, fault));
         server.exception(Fault.class, (fault, context) -> Answer.refuse(context, 409, fault));
         server.exception(HttpResponseException.class, (failure, context) -> Answer.refuse(context, failure.getStatus(),
                 new RequestFault(failure.getStatus(), "request", failure.getMessage(), failure.getStatus() == 413 ? "send less" : "open the page anew")));

@@ -88,11 +88,21 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         }
     }
 
-    /** Puts another desk in the place of the one that is open, which is kept and closed first. */
+    /** Puts another desk in the place of the one that is open, which is kept; where that cannot be, the open one stays. */
     public DeskView open(Supplier<Desk> opened) {
+        Desk next;
+        try {
+            next = opened.get();
+        } catch (DeskFault fault) {
+            DeskView view = view();
+            if (view.desk().filter(open -> fault.where().equals("desk " + open.id())).isPresent()) {
+                return view;
+            }
+            throw fault;
+        }
         leave();
         synchronized (this) {
-            desk = Optional.of(opened.get());
+            desk = Optional.of(next);
             return changed();
         }
     }

@@ -1,0 +1,54 @@
+package org.modestead.host.bench.recording;
+
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import org.modestead.nodes.table.Column;
+
+/**
+ * What was seen in a column of a table.
+ *
+ * @param column name and type
+ * @param cells cells that are there
+ * @param missing cells that are not
+ * @param low smallest number, or time as a number; NaN without one
+ * @param high largest
+ * @param rises rows whose value is above the one before
+ * @param falls rows whose value is below the one before
+ * @param changes rows whose value differs from the one before
+ * @param distinct different values, counted up to a limit
+ */
+public record ColumnFacts(Column column, long cells, long missing, double low, double high, long rises, long falls, long changes, int distinct) {
+
+    /** Different values are counted up to here. */
+    static final int MOST_DISTINCT = 20_000;
+
+    private static final Pattern BRACKETS = Pattern.compile("(.*\\S)\\s*\\[([^\\[\\]]*)\\]\\s*");
+    private static final Pattern PARENTHESES = Pattern.compile("(.*\\S)\\s*\\(([^()]*)\\)\\s*");
+
+    /** Returns the name without a unit behind it. */
+    String title() {
+        Matcher match = match();
+        return match.matches() ? match.group(1) : column.name();
+    }
+
+    /** Returns the unit that stands behind the name in brackets or parentheses; empty without one. */
+    String unit() {
+        Matcher match = match();
+        return match.matches() ? match.group(2).strip() : "";
+    }
+
+    /** Returns whether the unit stands in brackets, where it needs no setting. */
+    boolean isBracketed() {
+        return BRACKETS.matcher(column.name()).matches();
+    }
+
+    private Matcher match() {
+        Matcher brackets = BRACKETS.matcher(column.name());
+        return brackets.matches() ? brackets.reset() : PARENTHESES.matcher(column.name());
+    }
+
+    /** Returns whether all cells are the same. */
+    boolean isConstant() {
+        return distinct < 2;
+    }
+}
