@@ -60,6 +60,9 @@ final class BenchCommand implements Callable<Integer> {
         try (Bench bench = Bench.start(catalog.get(), options)) {
             Runtime.getRuntime().addShutdownHook(new Thread(bench::close, "bench-end"));
             terminal.out().println("Bench: " + bench.startUrl());
+            if (!closed && terminal.live()) {
+                Browser.open(bench.startUrl());
+            }
             end.await();
         }
         return ExitCode.DONE;

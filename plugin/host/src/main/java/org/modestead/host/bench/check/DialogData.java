@@ -20,9 +20,9 @@ import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.Setting;
+import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.contract.SettingsReader;
-import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Visibility;
 import org.modestead.nodes.table.TableSchema;
 

@@ -27,7 +27,8 @@ import org.modestead.host.workflow.WorkflowText;
  */
 public final class Desk implements AutoCloseable {
 
-    private static final String LATEST = "latest.json";
+    /** Name of the file that tells the latest result of each step. */
+    static final String LATEST = "latest.json";
     private static final DateTimeFormatter CLOCK = DateTimeFormatter.ofPattern("HH:mm", Locale.ROOT);
     private static final ObjectMapper MAPPER = new ObjectMapper();
 

@@ -71,6 +71,14 @@ public record DeskFolder(Path root) {
         return root.resolve("results");
     }
 
+    /** Returns whether a file is the bench's own bookkeeping, of no use to a person who looks for tables. */
+    public boolean keepsBooksIn(Path file) {
+        boolean top = root.equals(file.getParent());
+        boolean inDesk = file.startsWith(root.resolve("desks")) && file.getNameCount() == root.getNameCount() + 3;
+        String name = file.getFileName().toString();
+        return top && !name.equals("desks") || inDesk && (name.equals(Journal.NAME) || name.equals(Desk.LATEST));
+    }
+
     /** Makes the folder of a new desk, for files that shall lie beside its workflow. */
     public Path fresh(String name) {
         SecureRandom random = new SecureRandom();

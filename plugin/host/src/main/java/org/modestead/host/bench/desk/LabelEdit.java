@@ -15,7 +15,7 @@ public sealed interface LabelEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return "Title of " + step;
+            return "Title of " + StepTitles.of(before, catalog, step);
         }
     }
 
@@ -28,7 +28,7 @@ public sealed interface LabelEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return "Note on " + step;
+            return "Note on " + StepTitles.of(before, catalog, step);
         }
     }
 
@@ -41,7 +41,7 @@ public sealed interface LabelEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return "Move " + step;
+            return "Move " + StepTitles.of(before, catalog, step);
         }
     }
 

@@ -35,7 +35,7 @@ public sealed interface LinkEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return "Link " + link.from().step() + " to " + link.to().step();
+            return "Link " + StepTitles.of(before, catalog, link.from().step()) + " to " + StepTitles.of(before, catalog, link.to().step());
         }
     }
 
@@ -51,7 +51,7 @@ public sealed interface LinkEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return "Remove the link from " + link.from().step() + " to " + link.to().step();
+            return "Remove the link from " + StepTitles.of(before, catalog, link.from().step()) + " to " + StepTitles.of(before, catalog, link.to().step());
         }
     }
 }

@@ -46,9 +46,4 @@ final class Lookup {
     static NodeDeclaration.Stage stage(Step step, NodeCatalog catalog) {
         return catalog.find(step.node()).map(node -> node.declaration().stage()).orElse(NodeDeclaration.Stage.DATA);
     }
-
-    static String title(Step step, NodeCatalog catalog) {
-        return step.label().title().isEmpty() ? catalog.find(step.node()).map(node -> node.declaration().title()).orElse(step.id())
-                : step.label().title();
-    }
 }

@@ -15,7 +15,7 @@ public sealed interface SettingEdit extends Edit {
 
     @Override
     default String words(Workflow before, NodeCatalog catalog) {
-        return "Settings of " + Lookup.title(Lookup.step(before, step()), catalog);
+        return "Settings of " + StepTitles.of(before, catalog, step());
     }
 
     /**

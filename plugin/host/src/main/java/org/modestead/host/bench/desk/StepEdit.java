@@ -88,7 +88,7 @@ public sealed interface StepEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return steps.size() == 1 ? "Remove " + Lookup.title(Lookup.step(before, steps.get(0)), catalog) : "Remove " + steps.size() + " steps";
+            return steps.size() == 1 ? "Remove " + StepTitles.of(before, catalog, steps.get(0)) : "Remove " + steps.size() + " steps";
         }
     }
 
@@ -128,7 +128,7 @@ public sealed interface StepEdit extends Edit {
 
         @Override
         public String words(Workflow before, NodeCatalog catalog) {
-            return steps.size() == 1 ? "Copy " + Lookup.title(Lookup.step(before, steps.get(0)), catalog) : "Copy " + steps.size() + " steps";
+            return steps.size() == 1 ? "Copy " + StepTitles.of(before, catalog, steps.get(0)) : "Copy " + steps.size() + " steps";
         }
     }
 

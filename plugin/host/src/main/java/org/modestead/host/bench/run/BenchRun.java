@@ -37,7 +37,6 @@ public final class BenchRun {
     private final Watcher watcher;
     private final CancelSwitch cancel = new CancelSwitch();
     private final CountDownLatch over = new CountDownLatch(1);
-    private final long started = System.nanoTime();
     private final Map<String, Work> working = new ConcurrentHashMap<>();
     private final Set<String> ended = ConcurrentHashMap.newKeySet();
 
@@ -160,11 +159,19 @@ public final class BenchRun {
         return all == 0 ? 1 : done / all;
     }
 
-    /** Returns the seconds that are left, where that can be told. */
+    /** Returns the seconds that are left, where that can be told: of all steps to come it is known what they took before. */
     public OptionalDouble secondsLeft() {
-        double spent = seconds(started);
-        double fraction = fraction();
-        return fraction > 2 * EARLY && spent > FIRST_SECOND ? OptionalDouble.of(spent * (1 - fraction) / fraction) : OptionalDouble.empty();
+        double left = 0;
+        for (PlannedStep step : plan.order()) {
+            Work work = working.get(step.id());
+            OptionalDouble own = ended.contains(step.id()) ? OptionalDouble.of(0) : work != null ? left(step.id(), work)
+                    : expected.containsKey(step.id()) ? OptionalDouble.of(expected.get(step.id())) : OptionalDouble.empty();
+            if (own.isEmpty()) {
+                return own;
+            }
+            left += own.getAsDouble();
+        }
+        return OptionalDouble.of(left);
     }
 
     private static double seconds(long since) {

@@ -80,7 +80,7 @@ public final class BenchServer implements AutoCloseable {
         new DeskRoutes(workbench, deskJson).on(server);
         new StepRoutes(workbench).on(server);
         new StartRoutes(workbench, doors, deskJson).on(server);
-        new FileRoutes(workbench).on(server);
+        new FileRoutes(workbench, doors.desks()).on(server);
         looks.on(server);
         events.on(server);
         server.get("/api/<path>", context -> {

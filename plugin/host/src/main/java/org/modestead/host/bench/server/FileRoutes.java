@@ -12,6 +12,7 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Stream;
+import org.modestead.host.bench.desk.DeskFolder;
 import org.modestead.host.bench.folders.OpenedFolders;
 import org.modestead.host.bench.work.DeskView;
 import org.modestead.host.bench.work.Workbench;
@@ -24,8 +25,11 @@ final class FileRoutes {
 
     private final Workbench workbench;
 
-    FileRoutes(Workbench workbench) {
+    private final DeskFolder desks;
+
+    FileRoutes(Workbench workbench, DeskFolder desks) {
         this.workbench = workbench;
+        this.desks = desks;
     }
 
     void on(Javalin server) {
@@ -49,7 +53,7 @@ final class FileRoutes {
         }
         List<Path> inside;
         try (Stream<Path> found = Files.list(folder)) {
-            inside = found.filter(path -> !path.getFileName().toString().startsWith(".")).filter(folders::holds)
+            inside = found.filter(path -> !path.getFileName().toString().startsWith(".")).filter(folders::holds).filter(path -> !desks.keepsBooksIn(path))
                     .sorted(Comparator.comparing((Path path) -> !Files.isDirectory(path)).thenComparing(path -> path.getFileName().toString())).toList();
         }
         Optional<Path> base = workbench.view().desk().map(DeskView.Open::workflow).map(workflow -> workflow.baseFolder());

@@ -1,12 +1,14 @@
 package org.modestead.host.bench.server;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
+import java.util.TreeMap;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
@@ -37,20 +39,22 @@ final class LookJson {
 
     private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
 
+    private final Workbench workbench;
     private final Workbench.Looked looked;
     private final NodeDeclaration declaration;
     private final NodeResult result;
     private final TimeUnit time;
 
-    private LookJson(Workbench.Looked looked) {
+    private LookJson(Workbench workbench, Workbench.Looked looked) {
+        this.workbench = workbench;
         this.looked = looked;
         this.declaration = looked.node().declaration();
         this.result = looked.result();
-        this.time = timeUnit(result);
+        this.time = timeUnit(workbench, looked);
     }
 
-    static ObjectNode of(Workbench.Looked looked) {
-        return new LookJson(looked).json();
+    static ObjectNode of(Workbench workbench, Workbench.Looked looked) {
+        return new LookJson(workbench, looked).json();
     }
 
     private ObjectNode json() {
@@ -69,13 +73,23 @@ final class LookJson {
         result.figures().forEach(figure -> figures.add(FigureJson.headline(figure)));
         ArrayNode ports = json.putArray("ports");
         declaration.outputs().forEach(port -> ports.add(port(port)));
-        json.set("verdict", verdict.<com.fasterxml.jackson.databind.JsonNode>map(VerdictJson::of).orElse(JSON.nullNode()));
+        json.set("verdict", verdict.<JsonNode>map(found -> VerdictJson.of(found, spectrum())).orElse(JSON.nullNode()));
         return json.put("report", result.document().isPresent()).put("document", result.document().isPresent());
     }
 
     private Optional<Verdict> verdict() {
-        return result.outputs().values().stream().flatMap(value -> value instanceof Verdict found ? java.util.stream.Stream.of(found)
-                : value instanceof Model model ? java.util.stream.Stream.of(model.verdict()) : java.util.stream.Stream.empty()).findFirst();
+        return result.outputs().values().stream().flatMap(value -> value instanceof Verdict found ? Stream.of(found)
+                : value instanceof Model model ? Stream.of(model.verdict()) : Stream.empty()).findFirst();
+    }
+
+    /** Returns the modes that were judged: the result's own, or those that feed the step. */
+    private Optional<Spectrum> spectrum() {
+        return spectrum(result).or(() -> workbench.upstream(looked.step().id(), LookJson::spectrum));
+    }
+
+    private static Optional<Spectrum> spectrum(NodeResult result) {
+        return new TreeMap<>(result.outputs()).values().stream().flatMap(value -> value instanceof Spectrum found ? Stream.of(found)
+                : value instanceof Model model ? Stream.of(model.spectrum()) : Stream.empty()).findFirst();
     }
 
     private ArrayNode settings() {
@@ -110,7 +124,7 @@ final class LookJson {
         ArrayNode figures = json.putArray("figures");
         if (value instanceof Table table) {
             ObjectNode columns = json.putObject("table");
-            columns.set("columns", columns(table, time));
+            columns.set("columns", columns(table, time, declaration));
             columns.set("rows", table instanceof MemoryTable memory ? JSON.numberNode(memory.rows()) : JSON.nullNode());
         } else {
             json.putNull("table");
@@ -121,30 +135,35 @@ final class LookJson {
         return json;
     }
 
-    /** Returns the columns of a table with their meaning. */
-    static ArrayNode columns(Table table, TimeUnit time) {
+    /** Returns the columns of a table with their meaning; those of recorded tables mean what their names say. */
+    static ArrayNode columns(Table table, TimeUnit time, NodeDeclaration declaration) {
         ArrayNode array = JSON.arrayNode();
+        boolean recorded = declaration.stage() == NodeDeclaration.Stage.DATA;
         table.schema().columns().forEach(column -> {
-            ColumnMeaning meaning = ColumnMeaning.of(column.name(), time);
+            ColumnMeaning meaning = recorded ? new ColumnMeaning(StepRoutes.unit(column.name()), "") : ColumnMeaning.of(column.name(), time);
             array.addObject().put("name", column.name()).put("type", column.type().title()).put("cell", column.type().name())
                     .put("unit", meaning.unit()).put("kind", meaning.kind());
         });
         return array;
     }
 
-    /** Returns the time unit that a result is told in, as far as its values tell. */
-    static TimeUnit timeUnit(NodeResult result) {
-        for (Object value : Map.copyOf(result.outputs()).values()) {
+    /** Returns the time unit that a result is told in: as its own values tell, or those that feed the step. */
+    static TimeUnit timeUnit(Workbench workbench, Workbench.Looked looked) {
+        return timeUnit(looked.result()).or(() -> workbench.upstream(looked.step().id(), LookJson::timeUnit)).orElseGet(() -> new TimeUnit(""));
+    }
+
+    private static Optional<TimeUnit> timeUnit(NodeResult result) {
+        for (Object value : new TreeMap<>(result.outputs()).values()) {
             if (value instanceof Spectrum spectrum) {
-                return new TimeUnit(spectrum.timeUnit());
+                return Optional.of(new TimeUnit(spectrum.timeUnit()));
             } else if (value instanceof Snapshots snapshots) {
-                return new TimeUnit(snapshots.time().unit());
+                return Optional.of(new TimeUnit(snapshots.time().unit()));
             } else if (value instanceof FittedOperator operator) {
-                return new TimeUnit(operator.snapshots().time().unit());
+                return Optional.of(new TimeUnit(operator.snapshots().time().unit()));
             } else if (value instanceof Model model) {
-                return new TimeUnit(model.spectrum().timeUnit());
+                return Optional.of(new TimeUnit(model.spectrum().timeUnit()));
             }
         }
-        return new TimeUnit("");
+        return Optional.empty();
     }
 }

@@ -33,7 +33,6 @@ import org.modestead.nodes.render.FigureRenderer;
 import org.modestead.nodes.report.HtmlReport;
 import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.Table;
-import org.modestead.nodes.words.TimeUnit;
 
 /** Everything that can be looked at or taken away of a result. */
 final class LookRoutes implements AutoCloseable {
@@ -52,7 +51,7 @@ final class LookRoutes implements AutoCloseable {
     }
 
     void on(Javalin server) {
-        server.get("/api/steps/{id}/look", context -> Answer.json(context, LookJson.of(looked(context))));
+        server.get("/api/steps/{id}/look", context -> Answer.json(context, LookJson.of(workbench, looked(context))));
         server.get("/api/steps/{id}/figures/{figure}", context -> figure(context, looked(context).result().figures()));
         server.get("/api/steps/{id}/ports/{port}/figures/{figure}", context -> figure(context, PortFigures.of(value(looked(context), context.pathParam("port")))));
         server.get("/api/steps/{id}/tables/{port}", this::table);
@@ -128,12 +127,13 @@ final class LookRoutes implements AutoCloseable {
         }
         TablePages.Wish wish = new TablePages.Wish((long) number(context, "offset", 0), (int) number(context, "limit", USUAL_ROWS), column,
                 "down".equals(context.queryParam("order")), Optional.ofNullable(context.queryParam("find")).orElse(""));
-        Answer.json(context, page(table, LookJson.timeUnit(looked.result()), wish, tables.page(looked.id() + "." + port, table, wish)));
+        Answer.json(context, page(LookJson.columns(table, LookJson.timeUnit(workbench, looked), looked.node().declaration()), wish,
+                 tables.page(looked.id() + "." + port, table, wish)));
     }
 
-    private static ObjectNode page(Table table, TimeUnit time, TablePages.Wish wish, TablePages.Page page) {
+    private static ObjectNode page(ArrayNode columns, TablePages.Wish wish, TablePages.Page page) {
         ObjectNode json = JSON.objectNode();
-        json.set("columns", LookJson.columns(table, time));
+        json.set("columns", columns);
         json.put("total", page.total()).put("found", page.found()).put("offset", wish.offset());
         ArrayNode rows = json.putArray("rows");
         page.rows().forEach(row -> {

@@ -70,9 +70,14 @@ final class StepRoutes {
     }
 
     private static ObjectNode column(Column column) {
-        Matcher unit = WITH_UNIT.matcher(column.name());
         return JSON.objectNode().put("name", column.name()).put("type", column.type().title()).put("cell", column.type().name())
-                .put("unit", unit.matches() ? unit.group(1).strip() : "");
+                .put("unit", unit(column.name()));
+    }
+
+    /** Returns the unit that stands in brackets behind a name; empty without one. */
+    static String unit(String name) {
+        Matcher unit = WITH_UNIT.matcher(name);
+        return unit.matches() ? unit.group(1).strip() : "";
     }
 
     private void fitting(Context context) {

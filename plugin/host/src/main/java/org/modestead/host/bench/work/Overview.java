@@ -4,9 +4,11 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.modestead.host.bench.check.Inspection;
 import org.modestead.host.bench.check.RememberedForesight;
 import org.modestead.host.bench.desk.Bands;
+import org.modestead.host.bench.desk.StepTitles;
 import org.modestead.host.bench.folders.FileSettings;
 import org.modestead.host.bench.folders.OpenedFolders;
 import org.modestead.host.bench.run.BenchRun;
@@ -41,12 +43,9 @@ final class Overview {
      * @param identities what each step's result depends on, where it can be told
      * @param ordered steps band by band
      * @param results of earlier runs
+     * @param titles of steps for people, by id
      */
-    record Found(Inspection inspection, Map<String, String> identities, List<Step> ordered, Optional<KeptResults> results) {
-
-        /** No document. */
-        static final Found NOTHING = new Found(new Inspection(new Survey(List.of(), Map.of(), List.of(), Map.of(), Map.of(), Map.of()), Map.of(), List.of()),
-                Map.of(), List.of(), Optional.empty());
+    record Found(Inspection inspection, Map<String, String> identities, List<Step> ordered, KeptResults results, UnaryOperator<String> titles) {
 
         /** Takes immutable copies. */
         Found {
@@ -64,7 +63,7 @@ final class Overview {
         }
 
         private Optional<KeptResults.Facts> facts(String id) {
-            return results.flatMap(kept -> kept.facts(id));
+            return results.facts(id);
         }
 
         /** Returns how long steps took last time. */
@@ -111,7 +110,7 @@ final class Overview {
                 return StepState.withResult(StepState.Kind.STALE, "What is shown belongs to other settings, inputs or files.", facts.doubts(), facts.seconds());
             }
             return inspection.survey().inputs().getOrDefault(step, Map.of()).values().stream().map(Link.End::step).filter(source -> !fresh(source)).findFirst()
-                    .map(source -> StepState.of(StepState.Kind.WAITING, "It waits for " + source + (inspection.setUp(source) ? "." : ", which is not set up.")))
+                    .map(source -> StepState.of(StepState.Kind.WAITING, "It waits for " + titles.apply(source) + (inspection.setUp(source) ? "." : ", which is not set up.")))
                     .orElseGet(() -> StepState.of(StepState.Kind.READY, ""));
         }
     }
@@ -121,6 +120,7 @@ final class Overview {
         Survey whole = checker.survey(files.workflow());
         Survey survey = new Survey(files.merged(whole.problems()), whole.planned(), whole.order(), whole.inputs(), whole.schemas(), whole.outlooks());
         Inspection inspection = Inspection.of(workflow, survey);
-        return new Found(inspection, Identities.of(survey, workflow.baseFolder()), Bands.ordered(workflow, catalog), Optional.of(results));
+        return new Found(inspection, Identities.of(survey, workflow.baseFolder()), Bands.ordered(workflow, catalog), results,
+                id -> StepTitles.of(workflow, catalog, id));
     }
 }

@@ -2,15 +2,21 @@ package org.modestead.host.bench.work;
 
 import java.nio.file.Path;
 import java.time.Duration;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Deque;
 import java.util.HashMap;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.TreeMap;
+import java.util.function.Function;
 import java.util.function.Supplier;
+import org.modestead.engine.Fault;
 import org.modestead.engine.Progress;
 import org.modestead.host.bench.check.DialogData;
 import org.modestead.host.bench.check.Fitting;
@@ -59,7 +65,8 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     private final Map<String, Ending> endings = new HashMap<>();
     private String last = "";
     private long revision;
-    private Optional<Snapshot> snapshot = Optional.empty();
+    private Optional<Overview.Found> found = Optional.empty();
+    private Optional<DeskView> view = Optional.empty();
 
     /**
      * @param catalog nodes that may be used
@@ -75,9 +82,6 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
 
     /** How a step ended without a result. */
     record Ending(String identity, StepState.Kind kind, String sentence) {}
-
-    /** What was found out about the document at one revision. */
-    private record Snapshot(Overview.Found found, DeskView view) {}
 
     /** What an edit gives: the desk after it, and the steps that it made. */
     public record Edited(DeskView view, List<String> made) {
@@ -182,21 +186,22 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
                 throw new DeskFault("run", "one is going on", "wait for its end, or stop it");
             }
             Desk opened = opened();
-            changed();
-            Overview.Found found = found();
-            RunPlan plan = new Plans(found, opened.timeline().current()).plan(steps, again);
+            found = Optional.empty();
+            Overview.Found known = found();
+            RunPlan plan = new Plans(known, opened.timeline().current()).plan(steps, again);
             if (plan.steps().isEmpty()) {
                 last = "Everything is up to date.";
-                return changed();
+                told();
+                return view();
             }
             Map<String, Double> expected = new HashMap<>();
-            found.seconds(opened.latest()).forEach(expected::put);
-            running = found.identities();
+            known.seconds(opened.latest()).forEach(expected::put);
+            running = known.identities();
             plan.steps().forEach(step -> endings.remove(step.id()));
             begun = new BenchRun(plan, expected, results, again ? Set.copyOf(steps) : Set.of(), this);
             run = Optional.of(begun);
             last = "";
-            changed();
+            told();
         }
         begun.start();
         return view();
@@ -214,7 +219,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
 
     @Override
     public synchronized void began(BenchRun from, String step) {
-        changed();
+        told();
     }
 
     @Override
@@ -229,7 +234,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
             endings.put(step.id(), new Ending(identity, StepState.Kind.FAILED, failed.sentence()));
             failed.defect().ifPresent(DefectLog::write);
         }
-        changed();
+        told();
     }
 
     @Override
@@ -242,7 +247,8 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         last = stopped ? "Stopped." : failed > 0 ? failed + (failed == 1 ? " step" : " steps") + " failed, " + done + " done."
                 : done + (done == 1 ? " step" : " steps") + " done.";
         run = Optional.empty();
-        changed();
+        found = Optional.empty();
+        told();
     }
 
     private Desk opened() {
@@ -258,22 +264,33 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         return desk.map(opened -> folders(opened.timeline().current())).orElse(folders);
     }
 
+    /** The document or its files may be others now. */
     private DeskView changed() {
-        revision++;
-        snapshot = Optional.empty();
-        notifyAll();
+        found = Optional.empty();
+        told();
         return view();
+    }
+
+    /** Something is to be told, but the document is the same. */
+    private void told() {
+        revision++;
+        view = Optional.empty();
+        notifyAll();
     }
 
     /** Returns the desk as it stands. */
     public synchronized DeskView view() {
-        return snapshot().view();
+        DeskView now = view.orElseGet(() -> new DeskView(revision, desk.map(this::look)));
+        view = Optional.of(now);
+        return now;
     }
 
     /** Returns all that is known of the document as it stands. */
-    public synchronized Overview.Found found() {
-        opened();
-        return snapshot().found();
+    synchronized Overview.Found found() {
+        Workflow workflow = workflow();
+        Overview.Found now = found.orElseGet(() -> overview.look(workflow, folders(workflow)));
+        found = Optional.of(now);
+        return now;
     }
 
     /** Returns the document as it stands. */
@@ -299,18 +316,18 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      */
     public Looked look(String id) {
         Step step;
-        Overview.Found found;
+        Overview.Found known;
         Optional<String> shown;
         synchronized (this) {
             step = step(id);
-            found = found();
+            known = found();
             shown = view().desk().orElseThrow().standing().get(id).result();
         }
         Node node = catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + id, "its node is not known", "remove the step"));
         String result = shown.orElseThrow(() -> new DeskFault("step " + id, "it has no result", "run it first"));
         Optional<NodeResult> kept = results.find(node.declaration(), result);
-        boolean fresh = found.identity(id).filter(result::equals).isPresent();
-        PlannedStep planned = found.inspection().survey().planned().get(id);
+        boolean fresh = known.identity(id).filter(result::equals).isPresent();
+        PlannedStep planned = known.inspection().survey().planned().get(id);
         if (kept.isEmpty() && fresh && results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
             kept = Optional.of(madeAnew(planned, result));
         }
@@ -326,17 +343,49 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         return made;
     }
 
+    /**
+     * Asks the results that feed a step, the nearest first, until one answers.
+     *
+     * @param id of the step
+     * @param question put to each result
+     */
+    public <T> Optional<T> upstream(String id, Function<NodeResult, Optional<T>> question) {
+        Map<String, Map<String, Link.End>> inputs = found().inspection().survey().inputs();
+        Deque<String> waiting = new ArrayDeque<>(List.of(id));
+        Set<String> seen = new HashSet<>(waiting);
+        while (!waiting.isEmpty()) {
+            for (Link.End source : new TreeMap<>(inputs.getOrDefault(waiting.remove(), Map.of())).values()) {
+                if (seen.add(source.step())) {
+                    waiting.add(source.step());
+                    Optional<T> answer = answer(source.step(), question);
+                    if (answer.isPresent()) {
+                        return answer;
+                    }
+                }
+            }
+        }
+        return Optional.empty();
+    }
+
+    private <T> Optional<T> answer(String step, Function<NodeResult, Optional<T>> question) {
+        try {
+            return question.apply(look(step).result());
+        } catch (Fault nothingThere) {
+            return Optional.empty();
+        }
+    }
+
     /** Returns the report of all results on the desk; what has none is told in it. */
     public ReportDocument report() {
         Workflow workflow = workflow();
-        Overview.Found found = found();
+        Overview.Found known = found();
         Map<String, StepOutcome> outcomes = new LinkedHashMap<>();
         List<PlannedStep> order = new ArrayList<>();
-        for (String id : found.inspection().survey().order()) {
-            PlannedStep step = found.inspection().survey().planned().get(id);
+        for (String id : known.inspection().survey().order()) {
+            PlannedStep step = known.inspection().survey().planned().get(id);
             if (step != null) {
                 order.add(step);
-                outcomes.put(id, found.fresh(id) ? new StepOutcome.Done(look(id).result(), Duration.ZERO, true)
+                outcomes.put(id, known.fresh(id) ? new StepOutcome.Done(look(id).result(), Duration.ZERO, true)
                         : new StepOutcome.Failed("step " + id + ": it has no result that belongs to what is set; run it.", Optional.empty(), Duration.ZERO));
             }
         }
@@ -394,19 +443,12 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         return run.map(begun -> new Going(revision, runView(), begun.states()));
     }
 
-    private Snapshot snapshot() {
-        Snapshot now = snapshot.orElseGet(() -> desk.map(this::look).orElseGet(() -> new Snapshot(Overview.Found.NOTHING, new DeskView(revision, Optional.empty()))));
-        snapshot = Optional.of(now);
-        return now;
-    }
-
-    private Snapshot look(Desk opened) {
+    private DeskView.Open look(Desk opened) {
         Workflow workflow = opened.timeline().current();
-        Overview.Found found = overview.look(workflow, folders(workflow));
-        Map<String, DeskView.Standing> standing = found.standing(workflow, opened.latest(), endings, run);
-        return new Snapshot(found, new DeskView(revision, Optional.of(new DeskView.Open(opened.id(), workflow, found.ordered(), opened.isSaved(),
-                opened.savedWords(), opened.recovered(), opened.timeline().undoLabel(), opened.timeline().redoLabel(), found.inspection(), standing,
-                runView()))));
+        Overview.Found known = found();
+        return new DeskView.Open(opened.id(), workflow, known.ordered(), opened.isSaved(), opened.savedWords(), opened.recovered(),
+                opened.timeline().undoLabel(), opened.timeline().redoLabel(), known.inspection(),
+                known.standing(workflow, opened.latest(), endings, run), runView());
     }
 
     private DeskView.RunView runView() {

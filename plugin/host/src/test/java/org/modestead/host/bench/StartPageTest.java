@@ -1,0 +1,101 @@
+package org.modestead.host.bench;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+import org.junit.jupiter.api.AfterEach;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.modestead.host.TestWorkflows;
+
+/** Every way in leads to a desk that is ready, and what was left is offered again. */
+class StartPageTest {
+
+    @TempDir
+    private Path folder;
+    private TestBench bench;
+
+    @BeforeEach
+    void start() throws IOException, InterruptedException {
+        bench = TestBench.start(TestWorkflows.allNodes(), folder, Optional.empty());
+    }
+
+    @AfterEach
+    void end() {
+        bench.close();
+    }
+
+    @Test
+    void everyTestWorkflowIsAnExampleWithNothingWrong() throws IOException, InterruptedException {
+        List<String> examples = bench.get("/api/start").json().path("examples").findValuesAsText("id");
+        try (var folders = Files.list(Path.of("..", "..", "test-workflows"))) {
+            assertEquals(folders.filter(path -> Files.exists(path.resolve("workflow.json"))).map(path -> path.getFileName().toString()).sorted().toList(),
+                    examples.stream().sorted().toList());
+        }
+        for (String example : examples) {
+            JsonNode desk = bench.post("/api/desk", "{\"example\": \"" + example + "\"}").json();
+            assertTrue(desk.path("open").asBoolean(), desk.toString());
+            assertEquals(0, desk.path("problems").size(), desk.path("problems").toString());
+            assertFalse(desk.path("saved").asBoolean());
+            assertTrue(desk.path("folder").asText().startsWith(folder.toString()));
+        }
+        assertEquals(examples.size(), bench.get("/api/start").json().path("recent").size());
+    }
+
+    @Test
+    void anOwnRecordingBecomesStepsThatRunToAVerdict() throws IOException, InterruptedException {
+        byte[] file = Files.readAllBytes(Path.of("..", "..", "test-workflows", "driven-shaft", "data", "recordings.csv"));
+        JsonNode guess = bench.upload("shaft.csv", file).json();
+        assertEquals(0, guess.path("problems").size());
+        assertEquals("input", guess.path("all").path(3).path("role").asText());
+        assertTrue(guess.path("path").isNull(), "no desk is open that could name it");
+        JsonNode desk = bench.post("/api/desk", "{\"recording\": {\"upload\": " + guess.path("upload") + ", \"name\": \"shaft.csv\"}}").json();
+        assertEquals("shaft", desk.path("name").asText());
+        assertEquals(0, desk.path("problems").size(), desk.path("problems").toString());
+        bench.post("/api/run", "{\"steps\": [\"check\"]}");
+        desk = bench.awaitRest();
+        assertEquals("done", TestBench.kind(desk, "check"), desk.toString());
+        JsonNode look = bench.get("/api/steps/check/look").json();
+        assertFalse(look.path("verdict").path("sentence").asText().isEmpty());
+        assertFalse(look.path("caution").asText().isEmpty());
+        JsonNode again = bench.upload("shaft.csv", file).json();
+        assertEquals("data/shaft.csv", again.path("path").asText(), "a step of the open desk reads it under this name");
+    }
+
+    @Test
+    void workIsOfferedAgainAndCanBeForgotten() throws IOException, InterruptedException {
+        String desk = bench.post("/api/desk", "{\"empty\": true, \"name\": \"Night shift\"}").json().path("desk").asText();
+        bench.post("/api/edit", "{\"edits\": [{\"do\": \"add\", \"node\": \"signal-generator\"}]}");
+        assertEquals(409, bench.post("/api/desk/forget", "{\"desk\": \"" + desk + "\"}").status(), "it is open");
+        assertFalse(bench.post("/api/desk/close", "").json().path("open").asBoolean());
+        JsonNode recent = bench.get("/api/start").json().path("recent").path(0);
+        assertEquals("Night shift", recent.path("name").asText());
+        assertTrue(recent.path("unsaved").asBoolean());
+        assertEquals(1, recent.path("steps").asInt());
+        JsonNode resumed = bench.post("/api/desk", "{\"resume\": \"" + desk + "\"}").json();
+        assertEquals("Add Signal Generator", resumed.path("undo").asText());
+        assertTrue(resumed.path("recovered").asText().startsWith("Unsaved work of "), resumed.toString());
+        bench.post("/api/desk/close", "");
+        assertEquals(0, bench.post("/api/desk/forget", "{\"desk\": \"" + desk + "\"}").json().path("recent").size());
+    }
+
+    @Test
+    void aDroppedWorkflowIsOpenedOrRefusedWithASentence() throws IOException, InterruptedException {
+        String text = TestWorkflows.text(List.of("g:signal-generator", "s:snapshot-builder:{\"time-column\": \"time\"}"), List.of("g.table>s.table"));
+        JsonNode desk = bench.post("/api/desk", "{\"workflow\": " + JsonNodeFactory.instance.textNode(text) + ", \"name\": \"workflow.json\"}").json();
+        assertEquals(2, desk.path("steps").size(), desk.toString());
+        TestBench.Reply refused = bench.post("/api/desk", "{\"workflow\": \"{\\\"format\\\": \\\"other\\\"}\", \"name\": \"workflow.json\"}");
+        assertEquals(409, refused.status());
+        assertTrue(refused.sentence().startsWith("workflow.json: field format"), refused.sentence());
+        assertTrue(bench.get("/api/desk").json().path("open").asBoolean(), "the desk that was open stays");
+    }
+}
