@@ -146,7 +146,7 @@ export async function addStep(add) {
     choose([id]);
     const made = answer.steps.find((step) => step.id === id);
     const also = feeds.map((feed) => endWords(answer, feed.from));
-    say(`${made.title} added: ${made.state.words}.${also.length ? ` Also fed by ${[...new Set(also)].join(' and ')}.` : ''}`);
+    say(`${made.title} added: ${made.state.words}.${also.length ? ` Also fed by ${[...new Set(also)].join(', ')}.` : ''}`);
   }
   return answer;
 }

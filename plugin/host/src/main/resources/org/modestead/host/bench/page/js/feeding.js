@@ -1,6 +1,7 @@
 /**
  * What else a new step needs, found along the line that it is put into: a checker that is fed with a spectrum also takes the
- * operator that the spectrum was made of, and the snapshots that the operator was fitted to. Pure computation.
+ * operator that the spectrum was made of, and the snapshots that the operator was fitted to. A report takes all there is, also what it
+ * could do without. Pure computation.
  */
 import {nodeOf} from './catalog.js';
 import {stepOf} from './layout.js';
@@ -15,7 +16,8 @@ import {stepOf} from './layout.js';
 export function furtherFeeds(catalog, desk, node, from) {
   const given = outputType(catalog, desk, from);
   const taken = node.inputs.find((port) => port.type === given);
-  const open = node.inputs.filter((port) => port !== taken && !port.optional && port.type !== 'table');
+  const wanted = (port) => !port.optional || node.stage === 'report';
+  const open = node.inputs.filter((port) => port !== taken && port.type !== given && port.type !== 'table' && wanted(port));
   return open.map((port) => ({port: port.id, from: nearest(catalog, desk, stepOf(from), port.type)})).filter((feed) => feed.from);
 }
 

@@ -58,12 +58,13 @@ function About({node, catalog}) {
   const takes = [...new Set(names(node.inputs))].join(', ');
   const gives = [...new Set(names(node.outputs))].join(', ');
   return html`<h3>${node.title}</h3>
-    <p class="small">${node.purpose}</p>
-    <p class="small quiet">${takes ? `Takes ${takes}. ` : ''}${gives ? `Gives ${gives}.` : ''}</p>
     <div class="row">
       <button type="button" class="button" data-action="add-shown" onclick=${() => addStep({node: node.id})}>Add</button>
-      <button type="button" class="button plain" data-action="about-node" onclick=${() => openDialog({kind: 'about', node: node.id})}>More about it</button>
-    </div>`;
+      <button type="button" class="button plain" data-action="about-node"
+        onclick=${() => openDialog({kind: 'about', node: node.id})}>More about it</button>
+    </div>
+    <p class="small">${node.purpose}</p>
+    <p class="small quiet">${takes ? `Takes ${takes}. ` : ''}${gives ? `Gives ${gives}.` : ''}</p>`;
 }
 
 function intoList(event, list) {
