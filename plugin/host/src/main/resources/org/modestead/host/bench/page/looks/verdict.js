@@ -38,7 +38,7 @@ function Mode({mode, chosen, select}) {
         <${Mark} mark=${GRADE_MARKS[mode.grade]} /> Mode ${mode.mode} <strong>${mode.grade}</strong>
       </button>
       ${mode.deciding.length > 0 && html`<button type="button" class="lk-button" data-action="why" aria-expanded=${String(open)}
-        aria-label=${`What decided mode ${mode.mode}`} onClick=${() => setOpen(!open)}>what decided it</button>`}
+        aria-label=${`what decided it, mode ${mode.mode}`} onClick=${() => setOpen(!open)}>what decided it</button>`}
     </div>
     ${mode.figures && html`<p class="lk-figures">${mode.figures}</p>`}
     <p>${mode.meaning} ${mode.advice}</p>
