@@ -2,6 +2,7 @@ package org.modestead.knime.trial;
 
 import java.io.BufferedWriter;
 import java.io.ByteArrayOutputStream;
+import java.lang.reflect.Method;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -14,6 +15,7 @@ import org.knime.core.node.ExecutionMonitor;
 import org.knime.core.node.NodeFactory;
 import org.knime.core.node.NodeModel;
 import org.knime.core.node.NodeSettings;
+import org.knime.core.node.NodeSettingsWO;
 import org.knime.core.node.port.PortObject;
 import org.knime.core.node.port.PortObjectSpec;
 import org.knime.core.node.streamable.InputPortRole;
@@ -102,6 +104,25 @@ final class Project {
             StoredSetting.write(model, triples.get(i), triples.get(i + 1), triples.get(i + 2));
         }
         workflow.loadNodeSettings(id, all);
+    }
+
+    /** Lets flow variables take the place of some of a node's settings; gives the settings with which its model then goes to work. */
+    String vary(int node, List<String> triples) throws Exception {
+        NodeID id = container(node).getID();
+        workflow.addWorkflowVariables(true, Variables.made(triples));
+        NodeSettings all = settings(id);
+        Variables.use(all, triples);
+        workflow.loadNodeSettings(id, all);
+        NodeModel model = ((NativeNodeContainer) container(node)).getNodeModel();
+        Method save = NodeModel.class.getDeclaredMethod("saveSettingsTo", NodeSettingsWO.class); // protected, and what it writes is what the model has
+        save.setAccessible(true);
+        NodeSettings used = new NodeSettings("used");
+        save.invoke(model, used);
+        Variables.use(all, List.of());
+        workflow.loadNodeSettings(id, all);
+        ByteArrayOutputStream out = new ByteArrayOutputStream();
+        used.saveToXML(out);
+        return out.toString(StandardCharsets.UTF_8);
     }
 
     /** Returns a node's settings as the platform writes them out. */

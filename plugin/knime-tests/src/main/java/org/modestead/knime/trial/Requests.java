@@ -37,6 +37,9 @@ final class Requests {
             }
             case "link" -> project.link(number(arguments, 0), number(arguments, 1), number(arguments, 2), number(arguments, 3));
             case "set" -> project.set(number(arguments, 0), arguments.subList(1, arguments.size()));
+            case "vary" -> {
+                return List.of(project.vary(number(arguments, 0), arguments.subList(1, arguments.size())));
+            }
             case "settings" -> {
                 return List.of(project.settings(number(arguments, 0)));
             }

@@ -17,8 +17,9 @@ import org.modestead.nodes.contract.SettingsReader;
  *
  * <p>One key a setting, typed, because a flow variable replaces a key of its own type only: numbers are doubles, whole numbers
  * longs, flags booleans, lists arrays, all else texts. What is not set is written too, so that a variable can be put there:
- * {@code NaN} for a number, {@link Long#MIN_VALUE} for a whole number, an empty text for a column or a file. Raw values are what
- * {@link SettingsReader} reads.
+ * {@code NaN} for a number, {@link Long#MIN_VALUE} for a whole number, an empty text for a column or a file. A list of no numbers is
+ * written as one {@code NaN}: the platform cannot tell the type of an empty list, and would round a variable's numbers there to the
+ * narrowest. Raw values are what {@link SettingsReader} reads.
  */
 public final class NativeSettings {
 
@@ -26,6 +27,7 @@ public final class NativeSettings {
     static final String VERSION = "version_Internals";
 
     private static final long NOT_SET = Long.MIN_VALUE;
+    private static final List<Double> NO_NUMBERS = List.of(Double.NaN);
 
     private NativeSettings() {}
 
@@ -84,7 +86,7 @@ public final class NativeSettings {
         } else if (setting instanceof Setting.Flag) {
             return typed(StoredValue.flag(from, key), from, key);
         } else if (setting instanceof Setting.Numbers) {
-            return typed(StoredValue.numbers(from, key), from, key);
+            return typed(StoredValue.numbers(from, key).map(list -> list.equals(NO_NUMBERS) ? List.of() : list), from, key);
         } else if (setting instanceof Setting.Columns || setting instanceof Setting.Texts) {
             return typed(StoredValue.texts(from, key), from, key);
         }
@@ -107,7 +109,8 @@ public final class NativeSettings {
         } else if (setting instanceof Setting.Flag flag) {
             into.addBoolean(key, raw.map(Boolean.class::cast).orElse(flag.initial()));
         } else if (setting instanceof Setting.Numbers numbers) {
-            into.addDoubleArray(key, numbers(raw.<List<?>>map(value -> (List<?>) value).orElse(numbers.initial())));
+            List<?> list = raw.<List<?>>map(value -> (List<?>) value).orElse(numbers.initial());
+            into.addDoubleArray(key, numbers(list.isEmpty() ? NO_NUMBERS : list));
         } else if (setting instanceof Setting.Columns) {
             into.addStringArray(key, texts(raw.<List<?>>map(value -> (List<?>) value).orElse(List.of())));
         } else if (setting instanceof Setting.Texts texts) {

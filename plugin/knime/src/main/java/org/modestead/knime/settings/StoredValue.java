@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.stream.IntStream;
 import org.knime.core.node.InvalidSettingsException;
 import org.knime.core.node.NodeSettingsRO;
 
@@ -39,7 +40,13 @@ final class StoredValue {
 
     static Optional<List<Double>> numbers(NodeSettingsRO from, String key) {
         return tried(() -> from.getDoubleArray(key)).map(array -> Arrays.stream(array).boxed().toList())
-                .or(() -> tried(() -> from.getIntArray(key)).map(array -> Arrays.stream(array).asDoubleStream().boxed().toList()));
+                .or(() -> tried(() -> from.getIntArray(key)).map(array -> Arrays.stream(array).asDoubleStream().boxed().toList()))
+                .or(() -> tried(() -> from.getFloatArray(key)).map(StoredValue::doubles));
+    }
+
+    /** The platform takes a list that was stored empty for one of the narrowest type, and writes a variable's numbers there so. */
+    private static List<Double> doubles(float[] narrow) {
+        return IntStream.range(0, narrow.length).mapToObj(i -> Double.valueOf(Float.toString(narrow[i]))).toList();
     }
 
     /** Returns the value as whatever native type it has. */

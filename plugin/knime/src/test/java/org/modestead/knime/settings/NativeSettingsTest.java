@@ -101,6 +101,19 @@ class NativeSettingsTest {
         assertEquals(14, settings.keySet().size());
     }
 
+    /** The platform cannot tell the type of an empty array; seen in its engine: a variable's numbers were written there as floats. */
+    @Test
+    void aListOfNoNumbersKeepsItsTypeAndNarrowNumbersAreReadAsTheyAreWritten() throws InvalidSettingsException {
+        NodeSettings none = written(Map.of("steps", List.of()));
+        assertEquals(1, none.getDoubleArray("steps").length);
+        assertEquals(List.of(), read(none).get("steps"));
+        none.addDoubleArray("steps");
+        assertEquals(List.of(), read(none).get("steps"));
+        NodeSettings narrow = written(Map.of());
+        narrow.addFloatArray("steps", 0.1f, 3);
+        assertEquals(List.of(0.1, 3.0), read(narrow).get("steps"));
+    }
+
     @Test
     void whatIsWrittenComesBack() {
         Map<String, Object> raw = Map.ofEntries(Map.entry("speed", 1.0), Map.entry("limit", 0.0), Map.entry("count", 0L), Map.entry("rank", 7L),

@@ -6,6 +6,10 @@ public final class FlowVariable {
         throw new UnsupportedOperationException();
     }
 
+    public <T> FlowVariable(final String name, final VariableType<T> type, final T value) {
+        throw new UnsupportedOperationException();
+    }
+
     public String getValueAsString() {
         throw new UnsupportedOperationException();
     }

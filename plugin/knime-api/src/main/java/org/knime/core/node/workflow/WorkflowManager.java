@@ -82,6 +82,10 @@ public final class WorkflowManager extends NodeContainer {
         throw new UnsupportedOperationException();
     }
 
+    public void addWorkflowVariables(final boolean skipReset, final FlowVariable... newVars) {
+        throw new UnsupportedOperationException();
+    }
+
     public CollapseIntoMetaNodeResult collapseIntoMetaNode(final NodeID[] orgIDs, final WorkflowAnnotationID[] orgAnnoIDs, final String name) {
         throw new UnsupportedOperationException();
     }

@@ -114,6 +114,11 @@ public abstract class ConfigBase implements ConfigBaseRO, ConfigBaseWO {
     }
 
     @Override
+    public float[] getFloatArray(final String key) throws InvalidSettingsException {
+        throw new UnsupportedOperationException();
+    }
+
+    @Override
     public int[] getIntArray(final String key) throws InvalidSettingsException {
         throw new UnsupportedOperationException();
     }

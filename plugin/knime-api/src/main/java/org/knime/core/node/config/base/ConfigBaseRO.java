@@ -33,6 +33,8 @@ public interface ConfigBaseRO extends Iterable<String> {
 
     long[] getLongArray(String key) throws InvalidSettingsException;
 
+    float[] getFloatArray(String key) throws InvalidSettingsException;
+
     int[] getIntArray(String key) throws InvalidSettingsException;
 
     String getKey();

@@ -164,6 +164,25 @@ public abstract class ConfigBase implements ConfigBaseRO, ConfigBaseWO {
     }
 
     @Override
+    public float[] getFloatArray(final String key) throws InvalidSettingsException {
+        Float[] boxed = array(key, Float.class, Float[]::new);
+        float[] values = new float[boxed.length];
+        for (int i = 0; i < values.length; i++) {
+            values[i] = boxed[i];
+        }
+        return values;
+    }
+
+    /** As the platform writes it where a variable replaces a list that was stored empty. */
+    public void addFloatArray(final String key, final float... values) {
+        Object[] boxed = new Object[values.length];
+        for (int i = 0; i < values.length; i++) {
+            boxed[i] = values[i];
+        }
+        add(key, boxed);
+    }
+
+    @Override
     public int[] getIntArray(final String key) throws InvalidSettingsException {
         return Arrays.stream(array(key, Integer.class, Integer[]::new)).mapToInt(value -> value).toArray();
     }
