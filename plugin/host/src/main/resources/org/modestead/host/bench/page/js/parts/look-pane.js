@@ -1,5 +1,6 @@
 /** The right part: what the chosen step is and shows; without one, the workflow as a whole. */
 import {html} from '../../lib.js';
+import {Draft} from './draft.js';
 import {Later} from './later.js';
 import {getState, setState} from '../store.js';
 import {run, openDialog, removeSteps, duplicate, mark, edit} from '../actions.js';
@@ -9,6 +10,9 @@ import {stateKind} from './card.js';
 import {Menu} from './menu.js';
 import {Glyph} from '../glyphs.js';
 import {counted} from '../words.js';
+
+/** Notes are handed on when typing pauses so long, in milliseconds. */
+const PAUSE = 1500;
 
 const look = () => import('../../looks/look.js').then((module) => module.Look);
 
@@ -68,18 +72,14 @@ function StepProblems({step}) {
 }
 
 function WorkflowLook({desk}) {
-  const write = (event) => {
-    if (event.target.value !== desk.notes) {
-      edit([{do: 'notes', notes: event.target.value}]);
-    }
-  };
+  const write = (notes) => edit([{do: 'notes', notes}]);
   return html`<div class="look-head"><div class="grow"><h2 class="look-title" data-first tabindex="-1">${desk.name}</h2>
       <p class="quiet small clip" title=${desk.file ?? ''}>${desk.file ?? 'Not in a file yet; kept on this machine all the same.'}</p></div></div>
     <div class="look-body">
       <p class="quiet">${desk.steps.length ? 'Choose a step to see its settings and results here.' : 'The bench is empty. Begin with a step that brings a table in, from the top of the shelf.'}</p>
       <label class="notes-label" for="workflow-notes">Notes</label>
-      <textarea id="workflow-notes" class="field-input" rows="5" data-action="workflow-notes" value=${desk.notes} onchange=${write}
-        placeholder="What this work is about, for whoever opens it next"></textarea>
+      <${Draft} key=${desk.desk} area=${true} id="workflow-notes" class="field-input" rows="5" data-action="workflow-notes" value=${desk.notes} put=${write} pause=${PAUSE}
+        placeholder="What this work is about, for whoever opens it next" />
       ${desk.steps.length > 0 && html`<h3>Where it stands</h3>`}
       <ul class="overview">${desk.steps.map((step) => html`<li key=${step.id}><button type="button" class="overview-step" data-overview=${step.id}
         onclick=${() => setState({chosen: [step.id]})}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${stepName(desk, step)}</span>

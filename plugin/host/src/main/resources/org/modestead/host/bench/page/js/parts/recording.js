@@ -5,6 +5,7 @@ import {attempt, choose, openDesk, run, say} from '../actions.js';
 import {nodeOf} from '../catalog.js';
 import {api} from '../api.js';
 import {counted, number} from '../words.js';
+import {Draft} from './draft.js';
 import {Preview} from './preview.js';
 
 const ROLES = [['time', 'Time'], ['run', 'Run'], ['channel', 'Channel'], ['input', 'Known input'], ['none', 'Leave out']];
@@ -89,8 +90,8 @@ function withRole(guess, name, to) {
 }
 
 function TimeUnit({guess, ask}) {
-  return html`<input class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" placeholder="for example s" value=${guess.columns.timeUnit}
-    onchange=${(e) => ask(guess.reading, {...guess.columns, timeUnit: e.target.value.trim()})} />`;
+  return html`<${Draft} class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" placeholder="for example s"
+    value=${guess.columns.timeUnit} put=${(text) => ask(guess.reading, {...guess.columns, timeUnit: text.trim()})} />`;
 }
 
 /** How the text of the file is read; the choices are those of the step that will read it. */
@@ -109,7 +110,7 @@ function Reading({guess, ask}) {
             selected=${option.id === guess.reading[setting.key]}>${option.label}</option>`)}</select>`
         : setting.kind === 'flag' ? html`<input type="checkbox" data-reading=${setting.key} checked=${guess.reading[setting.key]}
           onchange=${(e) => put(setting.key, e.target.checked)} />`
-          : html`<input class="field-input" data-reading=${setting.key} value=${guess.reading[setting.key] ?? ''}
-              onchange=${(e) => put(setting.key, setting.kind === 'whole' ? Number(e.target.value) : e.target.value)} />`}</label>`)}
+          : html`<${Draft} class="field-input" data-reading=${setting.key} value=${String(guess.reading[setting.key] ?? '')}
+              put=${(text) => put(setting.key, setting.kind === 'whole' ? Number(text) : text)} />`}</label>`)}
   </div></details>`;
 }
