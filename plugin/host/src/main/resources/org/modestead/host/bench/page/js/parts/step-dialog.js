@@ -152,7 +152,7 @@ function Setting({setting, about, typed, type}) {
     ${text}
     <div class="setting-field">
       <div class="setting-line">
-        <${Field} setting=${setting} value=${shownValue(setting, value, isInitial)} about=${about}
+        <${Field} setting=${setting} value=${shownValue(setting, value, isInitial && !isTyped)} about=${about}
           id=${id} describedby=${problems.length ? `${error} ${help}` : help}
           wrong=${problems.length > 0} type=${(v, atOnce) => type(setting.key, v, atOnce)} />
         ${unit && html`<span class="setting-unit">${unit}</span>`}
@@ -168,7 +168,7 @@ function Setting({setting, about, typed, type}) {
   </div>`;
 }
 
-/** A field at its default is empty and shows the default in its place, where it can. */
+/** A field at its default is empty and shows the default in its place, where it can; what is being typed stays, even where it is the default. */
 function shownValue(setting, value, isInitial) {
   return isInitial && (setting.kind === 'number' || setting.kind === 'whole' || setting.kind === 'numbers') ? '' : value;
 }
