@@ -1,0 +1,85 @@
+package org.modestead.host.bench.trial;
+
+import java.nio.file.Path;
+import java.util.Optional;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.openqa.selenium.Keys;
+
+/** Everything by keys alone: a step added, another linked to it, set up in its dialog, run; the focus comes back where it was. */
+@NeedsBrowser
+class KeyboardTrialTest {
+
+    @TempDir
+    Path folder;
+
+    @Test
+    void stepsAreAddedLinkedSetUpAndRunWithoutAMouse() {
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            Browser browser = trial.browser();
+            browser.see("[data-action=new-empty]");
+            browser.tabTo("[data-action=new-empty]");
+            browser.keys(Keys.ENTER);
+            browser.see("[data-part=shelf]");
+            browser.tabTo("#shelf-query");
+            browser.keys("invented recordings");
+            browser.await("one node found", () -> browser.all(".shelf-item").size() == 1);
+            browser.keys(Keys.ARROW_DOWN, Keys.ENTER);
+            browser.see("[data-step=signal-generator]");
+            browser.await("the bench by F6", () -> {
+                browser.keys(Keys.F6);
+                return browser.focused("[data-part=bench] *");
+            });
+            browser.tabTo("[data-card=signal-generator]");
+            setUp(trial);
+            link(trial);
+            browser.keys(Keys.ENTER);
+            browser.see("dialog[data-dialog=settings] [data-setting]");
+            browser.tabTo("[data-field=time-column]");
+            browser.keys("time");
+            browser.reads("dialog .dialog-foot [role=status]", "All settings can be used");
+            browser.keys(Keys.ESCAPE);
+            browser.see("[data-action=stay]");
+            browser.tabTo("[data-action=apply], [data-action=stay]");
+            browser.keys(Keys.ENTER);
+            browser.tabTo("[data-action=apply]");
+            browser.keys(Keys.ENTER);
+            browser.gone("dialog");
+            browser.await("the focus back on the step", () -> browser.focused("[data-card=snapshot-builder]"));
+            browser.chord(Keys.ENTER, Keys.CONTROL);
+            trial.state("snapshot-builder", "done", "doubts");
+            browser.reads("[data-look=snapshot-builder]", "Snapshots");
+            browser.await("the focus still there", () -> browser.focused("[data-card=snapshot-builder]"));
+        }
+    }
+
+    /** Opens a dialog, makes a choice, changes a number, keeps both. */
+    private static void setUp(Trial trial) {
+        Browser browser = trial.browser();
+        browser.keys(Keys.ENTER);
+        browser.see("dialog[data-dialog=settings] [data-field=runs]");
+        browser.tabTo("[data-field=scenario] *");
+        browser.keys(Keys.ARROW_DOWN);
+        browser.see("[data-field=flow]");
+        browser.tabTo("[data-field=runs]");
+        browser.keys("1", Keys.ENTER);
+        browser.gone("dialog");
+        browser.await("the focus back on the step", () -> browser.focused("[data-card=signal-generator]"));
+    }
+
+    /** Links a new step by the list of what fits. */
+    private static void link(Trial trial) {
+        Browser browser = trial.browser();
+        browser.tabTo(Trial.output("signal-generator.table"));
+        browser.keys(Keys.ENTER);
+        browser.see("dialog[data-dialog=picker] .picker-list[aria-busy=false]");
+        browser.keys(Keys.ESCAPE);
+        browser.gone("dialog");
+        browser.await("the focus back on the port", () -> browser.focused(Trial.output("signal-generator.table")));
+        browser.keys(Keys.ENTER);
+        browser.see("dialog[data-dialog=picker] [data-pick=snapshot-builder]");
+        browser.keys("snapshot builder", Keys.ENTER);
+        trial.linked("signal-generator.table", "snapshot-builder.table");
+        browser.await("the focus on the new step", () -> browser.focused("[data-card=snapshot-builder]"));
+    }
+}

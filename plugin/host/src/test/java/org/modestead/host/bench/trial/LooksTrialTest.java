@@ -1,0 +1,109 @@
+package org.modestead.host.bench.trial;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.openqa.selenium.Keys;
+
+/** What is looked at: a mode marked in one picture is marked in all and in the table; pictures and tables become files. */
+@NeedsBrowser
+class LooksTrialTest {
+
+    @TempDir
+    Path folder;
+
+    @Test
+    void aModeMarkedInOnePictureIsMarkedEverywhereUntilEscape() throws IOException {
+        try (Trial trial = Trial.start(folder, Optional.of(SmallStation.write(folder)))) {
+            Browser browser = trial.browser();
+            ran(trial);
+            browser.click("[data-action=widen]");
+            browser.see(".lk-complex-plane .lk-plot [data-drawn=true]");
+            browser.tabTo(".lk-complex-plane .lk-plot");
+            browser.await("a marked mode", () -> {
+                if (browser.has(".lk-complex-plane.lk-chosen")) {
+                    return true;
+                }
+                browser.keys(Keys.ARROW_RIGHT, Keys.ENTER);
+                return false;
+            });
+            String mode = browser.text(".lk-complex-plane .lk-tag").replaceAll("\\D", "");
+            browser.see("[data-table=modes] tr[data-row-mode=\"" + mode + "\"][aria-selected=true]");
+            browser.await("the mode in other pictures", () -> browser.all(".lk-picture.lk-chosen").size() > 1);
+            browser.reads(".lk-selected", "mode " + mode);
+            browser.picture("mode-marked");
+            browser.keys(Keys.ESCAPE);
+            browser.gone(".lk-chosen");
+            browser.gone("tr[aria-selected=true]");
+            browser.click("[data-table=modes] tr[data-row-mode=\"1\"] td:nth-child(2)");
+            browser.reads(".lk-selected", "mode 1");
+            browser.see(".lk-picture.lk-chosen");
+        }
+    }
+
+    @Test
+    void picturesAndTablesBecomeFiles() throws IOException {
+        try (Trial trial = Trial.start(folder, Optional.of(SmallStation.write(folder)))) {
+            Browser browser = trial.browser();
+            ran(trial);
+            String figure = browser.see("figure.lk-complex-plane").getAttribute("data-figure");
+            browser.click("[data-figure=\"" + figure + "\"] [data-action=svg]");
+            browser.click("[data-figure=\"" + figure + "\"] [data-action=png]");
+            browser.click("[data-table=modes] [data-action=csv]");
+            assertTrue(new String(downloaded(browser, ".svg"), StandardCharsets.UTF_8).contains("<svg"));
+            assertEquals("[-119, 80, 78, 71]", Arrays.toString(Arrays.copyOf(downloaded(browser, ".png"), 4)));
+            String rows = browser.see("[data-table=modes]").getAttribute("data-rows");
+            assertEquals(Integer.parseInt(rows) + 1, new String(downloaded(browser, ".csv"), StandardCharsets.UTF_8).lines().count());
+        }
+    }
+
+    @Test
+    void theFirstPaintIsMeasuredAndThePageComplainsOfNothing() {
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            trial.browser().see("[data-example=pump-house]");
+            trial.browser().picture("start");
+            trial.browser().await("the first paint", () -> paint(trial.browser()) > 0);
+            System.out.printf(Locale.ROOT, "trials: first paint of the start page after %.0f ms%n", paint(trial.browser()));
+            trial.empty();
+            trial.put("signal-generator", "[data-band=data]");
+            assertTrue(trial.browser().requests().size() > 10, "the browser's log of requests is read");
+            assertEquals("[]", trial.browser().complaints().toString());
+        }
+    }
+
+    private static double paint(Browser browser) {
+        return ((Number) browser.js("return performance.getEntriesByName('first-contentful-paint')[0]?.startTime ?? 0")).doubleValue();
+    }
+
+    private static void ran(Trial trial) {
+        trial.browser().click("[data-action=run-all]");
+        trial.state("spectrum", "done", "doubts");
+        trial.rest();
+        trial.choose("spectrum");
+        trial.browser().see("[data-look=spectrum] [data-table=modes][data-ready=true]");
+    }
+
+    /** Waits for a whole file of that ending. */
+    private byte[] downloaded(Browser browser, String end) throws IOException {
+        browser.await("a file " + end, () -> file(end).isPresent());
+        return Files.readAllBytes(file(end).orElseThrow());
+    }
+
+    private Optional<Path> file(String end) {
+        try (Stream<Path> files = Files.list(folder)) {
+            return files.filter(file -> file.toString().endsWith(end)).findFirst();
+        } catch (IOException broken) {
+            throw new java.io.UncheckedIOException(broken);
+        }
+    }
+}

@@ -1,0 +1,83 @@
+package org.modestead.host.bench.trial;
+
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Random;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/** Somebody who sees the bench for the first time comes to a verdict, on a recording of their own and on the example. */
+@NeedsBrowser
+class OwnFileTrialTest {
+
+    private static final int MOST_INTERACTIONS = 10;
+
+    @TempDir
+    Path folder;
+
+    private int interactions;
+
+    @Test
+    void anOwnRecordingComesToAVerdictWithinTenInteractions() throws IOException {
+        Path recording = recording(folder.resolve("tank.csv"));
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            Browser browser = trial.browser();
+            browser.see("[data-action=choose-recording]");
+            interactions += 2; // the button, and the choice in the system's own dialog, which no test can press
+            browser.type("#recording-file", recording.toString());
+            browser.reads("[data-recording]", "tank.csv");
+            browser.see("[data-column=\"time [s]\"]");
+            assertTrue(browser.has("[data-role=\"time [s]\"] option[value=time]:checked"), "the time is guessed");
+            assertTrue(browser.has("[data-role=\"run\"] option[value=run]:checked"), "the run is guessed");
+            assertTrue(browser.has("[data-role=\"level [m]\"] option[value=channel]:checked"), "a channel is guessed");
+            browser.see(".preview svg");
+            browser.picture("recording");
+            press(trial, "[data-action=lay-out-run]");
+            browser.see("[data-look] [data-verdict]");
+            browser.reads("[data-verdict]", "0.250 Hz");
+            browser.picture("own-file-verdict");
+            System.out.println("trials: an own recording came to its verdict with " + interactions + " interactions");
+            assertTrue(interactions <= MOST_INTERACTIONS, interactions + " interactions");
+        }
+    }
+
+    @Test
+    void theExampleComesToAVerdictWithTwoPresses() {
+        long begin = System.nanoTime();
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            press(trial, "[data-example=pump-house]");
+            press(trial, "[data-action=run-all]");
+            trial.browser().see("[data-look] [data-verdict]");
+            trial.browser().reads("[data-verdict]", "0.620 Hz");
+            System.out.printf(Locale.ROOT, "trials: the example came to its verdict %.0f s after the start of the bench, browser included%n",
+                    (System.nanoTime() - begin) / 1e9);
+            trial.browser().picture("example-verdict");
+        }
+    }
+
+    private void press(Trial trial, String css) {
+        interactions++;
+        trial.browser().click(css);
+    }
+
+    /** Five fillings of an invented tank: a swing of 0.25 Hz and 2 % damping seen by two sensors, and a slow settling. */
+    private static Path recording(Path file) throws IOException {
+        StringBuilder text = new StringBuilder("time [s],run,level [m],flow [m3/h]\n");
+        Random noise = new Random(7);
+        for (int run = 1; run <= 5; run++) {
+            for (int k = 0; k < 240; k++) {
+                double t = 0.25 * k;
+                double swing = Math.exp(-0.02 * 2 * Math.PI * 0.25 * t) * Math.cos(2 * Math.PI * 0.25 * t + run);
+                double settling = (1 + 0.2 * run) * Math.exp(-0.03 * t);
+                text.append(String.format(Locale.ROOT, "%.2f,%d,%.5f,%.5f%n", t, run, 3 + swing + settling + 0.002 * noise.nextGaussian(),
+                        40 + 6 * swing - 4 * settling + 0.01 * noise.nextGaussian()));
+            }
+        }
+        return Files.writeString(file, text);
+    }
+}
