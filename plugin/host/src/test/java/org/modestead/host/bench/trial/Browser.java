@@ -53,7 +53,7 @@ final class Browser implements AutoCloseable {
         options.setBinary(chromium.browser().toFile());
         options.addArguments("--headless=new", "--no-sandbox", "--disable-gpu", "--disable-quic", "--no-first-run", "--disable-background-networking",
                 "--disable-component-update", "--disable-sync", "--disable-default-apps", "--disable-extensions", "--force-color-profile=srgb",
-                "--hide-scrollbars=false", "--force-prefers-reduced-motion", "--lang=en");
+                "--force-prefers-reduced-motion", "--lang=en");
         options.setExperimentalOption("prefs", Map.of("download.default_directory", downloads.toAbsolutePath().toString(),
                 "download.prompt_for_download", false));
         LoggingPreferences logs = new LoggingPreferences();

@@ -30,7 +30,7 @@ record Trial(Optional<Bench> bench, Browser browser) implements AutoCloseable {
 
     /** Opens a bench in this Java. */
     static Trial start(Path folder, Optional<Path> workflow) {
-        Bench bench = Bench.start(nodes(), new Bench.Options(workflow, 0, new DeskFolder(folder.resolve("desk")), List.of(folder), 1L << 30, 1 << 26));
+        Bench bench = Bench.start(nodes(), new Bench.Options(workflow, 0, new DeskFolder(folder.resolve("desk")), List.of(folder), 1L << 30, 1L << 31));
         try {
             return at(Optional.of(bench), bench.startUrl(), folder);
         } catch (RuntimeException broken) {
