@@ -147,11 +147,18 @@ function inOrder(names, columns) {
   return [...names].sort((a, b) => (place.get(a) ?? Infinity) - (place.get(b) ?? Infinity) || 0);
 }
 
+/** The text stays as it is typed, with the line that is just begun, as long as it says what the setting holds. */
 function TextsField(props) {
   const {value, type} = props;
+  const [text, setText] = useState('');
+  const lines = (typed) => typed.split('\n').map((line) => line.trim()).filter(Boolean);
+  const held = Array.isArray(value) ? value.join('\n') : asText(value);
   return html`<textarea ...${common(props)} class="field-input" rows="3" spellcheck="false" placeholder="one a line"
-    value=${Array.isArray(value) ? value.join('\n') : asText(value)}
-    oninput=${(e) => type(e.target.value.split('\n').map((line) => line.trim()).filter(Boolean), false, e.target.value)}></textarea>`;
+    value=${lines(text).join('\n') === held ? text : held}
+    oninput=${(e) => {
+      setText(e.target.value);
+      type(lines(e.target.value));
+    }}></textarea>`;
 }
 
 function FileField(props) {
