@@ -6,21 +6,24 @@ import java.util.OptionalDouble;
  * Whether the fitted functions are all there are, and whether a mode is an eigenfunction among them. Where the fitted rank takes in all
  * directions that are not rounding noise, the last of them clear of it, no function is left to join: the space is finite and the
  * compression is the operator on it, so that there is nothing to settle and no norm that could grow without bound. What is left to ask
- * is whether the mode moves as its eigenvalue says, to an accuracy that no imitation reaches by chance.
+ * is whether the mode moves as its eigenvalue says.
  *
- * <p>The residual on the judging runs, the share of the noise taken off, answers that. A projection that only imitates misses by several
- * per cent over its own time even on short runs (x' = x² seen through polynomials of degree 5: 6 to 20 %).
+ * <p>The residual on the judging runs answers that: in a finite space an eigenfunction misses by rounding or by what the noise explains, while a
+ * projection that only imitates misses by more, however little that may be (x' = x² seen through polynomials of degree 5: 0.5 to 20 %).
  */
 final class Closure {
 
-    /** Residual up to which a mode of a finite space counts as an eigenfunction. */
-    static final double CLOSED = 0.05;
+    /** Residual up to which nothing but rounding and quadrature is to blame. */
+    static final double EXACT = 1e-3;
 
-    /** The same where most of what is seen is noise, so that the rest is known less well. */
-    private static final double CLOSED_IN_NOISE = 0.1;
+    /** Largest residual of an eigenfunction that noise blurs. */
+    private static final double BLURRED = 0.1;
 
-    /** Share of the seen residual below which most of its square is noise. */
-    private static final double MOSTLY_NOISE = 0.7;
+    /**
+     * Largest square of what is left of the residual once the noise is taken off, over what was taken off. The fitted rates carry the noise of
+     * the training runs, so that the two are of one size where the mode is an eigenfunction; an imitation misses by many times that.
+     */
+    private static final double TIMES_NOISE = 8;
 
     /**
      * Least square of the last singular value over the first. Where directions fade steadily, as in any space of infinitely many, the last
@@ -47,6 +50,7 @@ final class Closure {
     }
 
     private static boolean closed(LadderRow row) {
-        return row.residual() <= CLOSED || row.residual() <= CLOSED_IN_NOISE && row.residual() <= MOSTLY_NOISE * row.rawResidual();
+        double left = row.residual() * row.residual();
+        return row.residual() <= EXACT || row.residual() <= BLURRED && left <= TIMES_NOISE * (row.rawResidual() * row.rawResidual() - left);
     }
 }

@@ -6,7 +6,8 @@ import org.modestead.engine.Progress;
 
 /**
  * Whether the data determine the rate at all: a rate that as much noise again changes by far more than its own share of the mode, on most
- * rungs where the mode is found, belongs to a motion that no rate of its own carries (a defective one, or a continuum).
+ * rungs where the mode is found, belongs to a motion that no rate of its own carries (a defective one, or a continuum). Where the space is
+ * finite and has been seen whole, only the rung that holds all of it is asked.
  */
 public final class DeterminedRate implements Check {
 
@@ -26,13 +27,15 @@ public final class DeterminedRate implements Check {
     private Finding finding(int mode, Evidence evidence) {
         List<LadderRow> found = evidence.ladderOf(mode);
         double limit = Math.max(Evidence.USABLE, AMPLIFIED * evidence.noiseShare() / Math.sqrt(evidence.spectrum().modes().get(mode - 1).energyShare()));
-        boolean told = evidence.usableRungsOf(mode).size() >= Settling.LEAST_RUNGS || Closure.missed(mode, evidence).isPresent();
-        double[] upset = found.stream().mapToDouble(row -> row.noise().rate()).filter(change -> change > limit).sorted().toArray();
-        if (told || upset.length < Settling.LEAST_RUNGS) {
+        boolean closed = Closure.missed(mode, evidence).isPresent();
+        List<LadderRow> asked = closed ? List.of(evidence.fittedOf(mode)) : found;
+        double[] upset = asked.stream().mapToDouble(row -> row.noise().rate()).filter(change -> change > limit).sorted().toArray();
+        boolean told = closed ? upset.length == 0 : evidence.usableRungsOf(mode).size() >= Settling.LEAST_RUNGS || upset.length < Settling.LEAST_RUNGS;
+        if (told) {
             return new Finding(mode, id(), 0, limit, true, "Noise does not change its rate out of proportion.");
         }
         return new Finding(mode, id(), upset[upset.length / 2], limit, false, String.format(Locale.ROOT, "As much noise again, %.2g of the"
                 + " signal, changes its rate by %.3g of its size on %d of %d rungs: the data do not determine it.", evidence.noiseShare(),
-                upset[upset.length / 2], upset.length, found.size()));
+                upset[upset.length / 2], upset.length, asked.size()));
     }
 }

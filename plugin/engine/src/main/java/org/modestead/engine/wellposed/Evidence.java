@@ -22,6 +22,7 @@ import org.modestead.engine.spectrum.Spectrum;
  * @param predictionErrors per rung, relative one-step prediction error on the judging runs
  * @param undamped per rung, number of its modes with damping ratio below 5 %
  * @param twins per mode of the spectrum, whether the judging runs cannot tell it from half of a defective one
+ * @param halves per mode of the spectrum, its rate in both halves of the judging runs
  * @param noiseShare standard deviation of the noise over that of the signal, root mean square over the channels
  * @param heldOut whether the residuals were measured on runs the fit never saw
  * @param longest duration of the longest training run
@@ -40,6 +41,7 @@ public record Evidence(
         List<Double> predictionErrors,
         List<Integer> undamped,
         List<Boolean> twins,
+        List<HalfRates> halves,
         double noiseShare,
         boolean heldOut,
         double longest,
@@ -65,7 +67,8 @@ public record Evidence(
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
                 ladder.rungs().stream().map(Rung::captured).toList(), ladder.rungs().stream().map(Rung::carryingNorm).toList(), ladder.normEffects(),
                 ladder.rungs().stream().map(Evidence::median).toList(),
-                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), ladder.twins(), ladder.noiseShare(), heldOut, ladder.longest(), settings);
+                ladder.predictionErrors(), ladder.rungs().stream().map(Evidence::countUndamped).toList(), ladder.twins(),
+                ladder.halves(), ladder.noiseShare(), heldOut, ladder.longest(), settings);
     }
 
     private static double median(Rung rung) {

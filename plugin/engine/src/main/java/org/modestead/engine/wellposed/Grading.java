@@ -10,11 +10,11 @@ import org.modestead.engine.spectrum.Mode;
  * From findings to a grade. The order matters: evidence against a mode is taken before the lack of evidence for it.
  *
  * <ol>
- * <li>the space norm grows from rung to rung, or the residual stays above its threshold on every rung: absent
+ * <li>the space norm grows from rung to rung, or the residual stays above its threshold and noise does not explain it: absent
  * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises, or
  * rate or
  *     weight keep changing: drifts
- * <li>too few rungs, nothing held out, a fitted rank that does not show the mode as it is, too small a share captured, or another step
+ * <li>too few rungs, nothing held out, a residual that noise explains, a fitted rank that does not show the mode as it is, too small a share captured, or another step
  *     disagrees: undecided
  * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not
  * hold
@@ -25,6 +25,9 @@ import org.modestead.engine.spectrum.Mode;
  * The constant function with rate 0 is an eigenfunction of every flow: it stands but counts as no evidence.
  */
 final class Grading {
+
+    /** Square of what is left of a residual over the square that noise explains, up to which it is no evidence against a mode. */
+    private static final double BLURRED = 5;
 
     private Grading() {}
 
@@ -49,7 +52,7 @@ final class Grading {
         switch (grade) {
             case ABSENT -> {
                 failed(findings, mode, "space-norm-growth").ifPresent(out::add);
-                failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value()) && !FittedRank.spoilt(mode, evidence))
+                failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value()) && !FittedRank.spoilt(mode, evidence) && !blurred(mode, evidence))
                         .ifPresent(out::add);
             }
             case DRIFTS -> {
@@ -80,6 +83,13 @@ final class Grading {
             default -> throw new IllegalArgumentException(grade.word());
         }
         return out;
+    }
+
+    /** Whether noise in the runs judged on explains so much of the residual that what is left may be the error of rates fitted in noise. */
+    private static boolean blurred(int mode, Evidence evidence) {
+        LadderRow row = evidence.fittedOf(mode);
+        double left = row.residual() * row.residual();
+        return left <= BLURRED * (row.rawResidual() * row.rawResidual() - left);
     }
 
     private static Optional<Finding> failed(List<Finding> findings, int mode, String check) {

@@ -32,11 +32,12 @@ import org.modestead.engine.spectrum.TrainingSample;
  * @param predictionErrors per rung, relative one-step error on the judging runs
  * @param normEffects per rung, factor by which noise changes the mean norm of the modes that carry the signal
  * @param twins per mode of the spectrum, see {@link TwinRates}
+ * @param halves per mode of the spectrum, see {@link HalfRates}
  * @param noise its level, one a channel
  * @param noiseShare standard deviation of the noise over that of the signal, root mean square over the channels
  * @param longest duration of the longest training run
  */
-record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, SampleNoise noise,
+record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, List<HalfRates> halves, SampleNoise noise,
         double noiseShare, double longest) {
 
     private static final int MOST_RUNGS = 14;
@@ -75,8 +76,10 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         }
         int fitted = ranks.indexOf(operator.rank());
         List<Boolean> byPart = twins;
+        List<HalfRates> halves = HalfRates.of(rungs.get(fitted).expansion(), judging);
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
-                normEffects, spectrum.modes().stream().map(mode -> byPart.get(partOf(rungs.get(fitted), mode))).toList(), noise, noise.shareOf(operator.snapshots()),
+                normEffects, spectrum.modes().stream().map(mode -> byPart.get(partOf(rungs.get(fitted), mode))).toList(),
+                spectrum.modes().stream().map(mode -> halves.get(mode.indices().get(0))).toList(), noise, noise.shareOf(operator.snapshots()),
                 sample.longest());
     }
 

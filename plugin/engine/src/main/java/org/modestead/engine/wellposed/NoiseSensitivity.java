@@ -19,7 +19,11 @@ public final class NoiseSensitivity implements Check {
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
         double threshold = evidence.settings().settleThreshold();
-        return evidence.spectrum().modes().stream().map(mode -> finding(mode, evidence.clearestOf(mode.number()), threshold)).toList();
+        return evidence.spectrum().modes().stream().map(mode -> finding(mode, judgedOn(mode.number(), evidence), threshold)).toList();
+    }
+
+    private static LadderRow judgedOn(int mode, Evidence evidence) {
+        return Closure.missed(mode, evidence).isPresent() ? evidence.fittedOf(mode) : evidence.clearestOf(mode);
     }
 
     private Finding finding(Mode mode, LadderRow row, double threshold) {

@@ -101,7 +101,8 @@ final class Residuals {
         return out;
     }
 
-    private static double ownTime(Complex rate, double longest) {
+    /** Returns the time over which a mode of a rate is judged. */
+    static double ownTime(Complex rate, double longest) {
         double time = longest / 2;
         time = rate.re() == 0 ? time : Math.min(time, 1 / Math.abs(rate.re()));
         return rate.im() == 0 ? time : Math.min(time, 2 * Math.PI / Math.abs(rate.im()));

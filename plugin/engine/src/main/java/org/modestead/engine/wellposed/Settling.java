@@ -10,14 +10,16 @@ import org.modestead.engine.spectrum.Mode;
 
 /**
  * Whether rate and weight of a mode stop changing as functions join: how far they are, on the last four telling rungs, from those of the
- * last one, the worst of four left out (where two modes cross on the ladder, one rung may show neither). A change that noise of the
- * data's own size
- * makes as well does not count as one. A mode that is not found on the rungs next to the fitted rank counts as changed altogether (1).
+ * last one, the worst of four left out (where two modes cross on the ladder, one rung may show neither). Twice what noise of the
+ * data's own size changes is taken off. A mode that is not found on the rungs next to the fitted rank counts as changed altogether (1).
  *
  * <p>Where no function is left to join, because the fitted rank takes in all the data hold, the ladder has no upper part and
  * its lower rungs lack functions that the signal needs. There the question is answered by {@link Closure}.
  */
 public final class Settling implements Check {
+
+    /** Two rungs carry noise of their own, and the worst of two tries is not its bound. */
+    private static final double TWICE = 2;
 
     /** Fewest rungs that can show settling. */
     static final int LEAST_RUNGS = 3;
@@ -92,7 +94,7 @@ public final class Settling implements Check {
             double change = ofRate ? Ladder.relativeChange(row.rate(), last.rate(), longest)
                     : NoiseEffect.relativeDifference(row.weight(), last.weight());
             double noise = ofRate ? Math.max(row.noise().rate(), last.noise().rate()) : Math.max(row.noise().weight(), last.noise().weight());
-            return change <= noise ? 0 : change;
+            return Math.max(0, change - TWICE * noise);
         }).sorted().toArray();
         return distances[distances.length < Evidence.LAST_RUNGS - 1 ? distances.length - 1 : distances.length - 2];
     }

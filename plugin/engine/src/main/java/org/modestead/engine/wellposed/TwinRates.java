@@ -23,11 +23,18 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
     /** Overlap of unit eigenfunctions below which they are hardly halves of a defective one. */
     static final double PARALLEL = 0.25;
 
+    private static final double TWO_FIFTHS = 0.4;
     private static final double HALF = 0.5;
 
     /** Weight relative to the mode's from which another is taken for its half: halves carry large opposite weights. */
-    private static final double NOTABLE = 0.1;
-    private static final double MEAN = 0.25;
+    private static final double NOTABLE = 0.3;
+    private static final double MEAN = 0.5;
+
+    /** Difference of the rates, times the time looked at, below which two exponentials and t e^(λt) differ by a part in five hundred. */
+    private static final double INDISTINCT = 0.2;
+
+    /** Coupling over the time looked at, from which such a pair is a defective one rather than two functions of one rate. */
+    private static final double STRONG = 0.5;
 
     /** Coupling over the time looked at, below which the functions share a rate without being one defective pair. */
     private static final double UNCOUPLED = 0.1;
@@ -65,7 +72,7 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
         for (Rung.Part partner : rung.parts()) {
             for (int other : partner.weight() >= NOTABLE * part.weight() ? partner.group() : List.<Integer>of()) {
                 TwinRates pair = of(rung.expansion().vectors(), rung.expansion().rates(), column, other);
-                if (other != column && pair.parallel() && pair.coupled(judging) && (pair.splitByNoise(noisier) || !pair.toldApart(judging, values))) {
+                if (other != column && pair.parallel() && pair.coupling(judging) >= UNCOUPLED && pair.isOne(judging, values, noisier, partner.constant())) {
                     return true;
                 }
             }
@@ -74,9 +81,9 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
     }
 
     /**
-     * Whether as much noise again changes the squared difference of the rates by more than half, so that noise may have made all of it,
-     * while their mean stays. (Where it moves the mean as far as the rates lie apart, two independent functions share one rate, and their split
-     * is no more than that.)
+     * Whether as much noise again changes the squared difference of the rates by more than two fifths in one of two tries, so that noise may have made
+     * all of it, while their mean stays. (Where it moves the mean about as far as the rates lie apart, two independent functions share one rate, and
+     * their split is no more than that.)
      */
     private boolean splitByNoise(List<Rung> noisier) {
         Complex now = rateOne.minus(rateTwo);
@@ -86,8 +93,8 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
         for (Rung rung : noisier) {
             Complex[] near = nearest(rung);
             Complex then = near[0].minus(near[1]);
-            split |= then.times(then).minus(square).abs() > HALF * square.abs();
-            if (near[0].plus(near[1]).times(0.5).minus(mean).abs() > MEAN * now.abs()) {
+            split |= then.times(then).minus(square).abs() > TWO_FIFTHS * square.abs();
+            if (near[0].plus(near[1]).times(0.5).minus(mean).abs() > MEAN * Math.max(now.abs(), then.abs())) {
                 return false;
             }
         }
@@ -115,9 +122,26 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
         return overlap.abs() > PARALLEL && Double.isFinite(rateOne.re()) && Double.isFinite(rateTwo.re());
     }
 
-    /** Whether one of the functions pushes the other at all; functions that share a rate without that are two modes. */
-    private boolean coupled(JudgingRuns judging) {
-        return rateTwo.minus(rateOne).times(overlap).times(span(judging) / sine()).abs() >= UNCOUPLED;
+    /** How much one of the functions pushes the other; functions that share a rate without that are two modes. */
+    private double coupling(JudgingRuns judging) {
+        return rateTwo.minus(rateOne).times(overlap).times(span(judging) / sine()).abs();
+    }
+
+    private boolean isOne(JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier, boolean constant) {
+        boolean indistinct = rateTwo.minus(rateOne).abs() * span(judging) <= INDISTINCT && coupling(judging) >= STRONG;
+        return indistinct || (constant ? leftByNoise(noisier) : splitByNoise(noisier)) || !toldApart(judging, values);
+    }
+
+    /**
+     * Whether as much noise again changes the difference from the rate of the constant by more than half. That rate is 0 whatever the noise, so
+     * that the difference, not its square, is what noise changes in proportion to itself.
+     */
+    private boolean leftByNoise(List<Rung> noisier) {
+        Complex now = rateOne.minus(rateTwo);
+        return noisier.stream().anyMatch(rung -> {
+            Complex[] near = nearest(rung);
+            return near[0].minus(near[1]).minus(now).abs() > HALF * now.abs();
+        });
     }
 
     private double sine() {
