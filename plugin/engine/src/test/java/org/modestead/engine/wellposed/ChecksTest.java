@@ -70,7 +70,8 @@ class ChecksTest {
                 modes, List.of(new Channel("a", "")), DelayEmbedding.NONE, Preparation.identity(1), "s", List.of());
         List<Integer> rungs = captured.size() == RUNGS.size() ? RUNGS : List.of(compression.rank());
         return new Evidence(operator, spectrum, rungs, ladder, expansion, captured, List.of(1.0, 1.0, 1.0, 1.0), List.of(1.0, 1.0, 1.0, 1.0),
-                List.of(0.1, 0.1, 0.1, 0.1), List.of(0.1, 0.1, 0.1, 0.1), List.of(0, 0, 0, 0), modes.stream().map(mode -> false).toList(), 0.01, true, 10, JudgeSettings.DEFAULT);
+                List.of(0.1, 0.1, 0.1, 0.1), List.of(0.1, 0.1, 0.1, 0.1), List.of(0, 0, 0, 0), modes.stream().map(mode -> false).toList(),
+                modes.stream().map(mode -> HalfRates.UNKNOWN).toList(), 0.01, true, 10, JudgeSettings.DEFAULT);
     }
 
     private static List<LadderRow> ladder(double[] rates, double[] weights, double[] norms, double residual) {
@@ -97,7 +98,7 @@ class ChecksTest {
     @Test
     void idsAreUniqueAndEveryCheckIsFoundByTheServiceLoader() {
         List<String> ids = ServiceLoader.load(Check.class).stream().map(p -> p.get().id()).toList();
-        assertEquals(22, ids.size());
+        assertEquals(23, ids.size());
         assertEquals(ids.size(), ids.stream().distinct().count());
         assertTrue(ids.stream().allMatch(id -> id.matches("[a-z]+(-[a-z]+)*")), ids.toString());
     }
@@ -181,12 +182,15 @@ class ChecksTest {
     }
 
     @Test
-    void aChangeThatNoiseMakesAsWellIsNoChange() {
-        List<LadderRow> rows = new ArrayList<>();
-        for (LadderRow row : ladder(new double[] {-1, -1.15, -1.2, -1}, SAME, SAME, 0.2)) {
-            rows.add(new LadderRow(row.rank(), 1, row.rate(), 1, 1, 1, 0.2, 0.2, 0, 0, new NoiseEffect(0.2, 0, 1)));
+    void twiceWhatNoiseChangesIsTakenOffAChange() {
+        for (double noise : new double[] {0.05, 0.1}) {
+            List<LadderRow> rows = new ArrayList<>();
+            for (LadderRow row : ladder(new double[] {-1, -1, -1, -1.25}, SAME, SAME, 0.2)) {
+                rows.add(new LadderRow(row.rank(), 1, row.rate(), 1, 1, 1, 0.2, 0.2, 0, 0, new NoiseEffect(noise, 0, 1)));
+            }
+            // the rates differ by 0.2 of the larger
+            assertEquals(0.2 - 2 * noise, only(new Settling(), evidence(DIAGONAL, List.of(SINGLE), rows), 1).value(), 1e-14);
         }
-        assertEquals(0, only(new Settling(), evidence(DIAGONAL, List.of(SINGLE), rows), 1).value());
     }
 
     @Test
@@ -326,12 +330,12 @@ class ChecksTest {
         Evidence filling = new Evidence(base.operator(), base.spectrum(), List.of(10, 20, 30), List.of(), base.fitted(),
                 List.of(1.0, 1.0, 1.0),
                 List.of(1.0, 1.0, 1.0), List.of(1.0, 1.0, 1.0), List.of(0.5, 0.5, 0.5), List.of(0.1, 0.1, 0.1), List.of(4, 8, 14),
-                List.of(false), 0.01, true, 10, JudgeSettings.DEFAULT);
+                List.of(false), List.of(HalfRates.UNKNOWN), 0.01, true, 10, JudgeSettings.DEFAULT);
         assertFalse(only(new ContinuousSpectrum(), filling, 0).passed());
         Evidence falling = new Evidence(base.operator(), base.spectrum(), List.of(10, 20, 30), List.of(), base.fitted(),
                 List.of(1.0, 1.0, 1.0),
                 List.of(1.0, 1.0, 1.0), List.of(1.0, 1.0, 1.0), List.of(0.5, 0.3, 0.1), List.of(0.1, 0.1, 0.1), List.of(4, 8, 14),
-                List.of(false), 0.01, true, 10, JudgeSettings.DEFAULT);
+                List.of(false), List.of(HalfRates.UNKNOWN), 0.01, true, 10, JudgeSettings.DEFAULT);
         assertTrue(only(new ContinuousSpectrum(), falling, 0).passed());
     }
 
@@ -349,7 +353,7 @@ class ChecksTest {
         Evidence base = evidence(DIAGONAL, List.of(SINGLE), List.of());
         int fitted = base.operator().rank();
         return new Evidence(base.operator(), base.spectrum(), List.of(10, 20, fitted), List.of(), base.fitted(), List.of(1.0, 1.0, 1.0),
-                List.of(1.0, 1.0, 1.0), List.of(1.0, 1.0, 1.0), List.of(0.1, 0.1, 0.1), errors, List.of(0, 0, 0), List.of(false), 0.01, true, 10, JudgeSettings.DEFAULT);
+                List.of(1.0, 1.0, 1.0), List.of(1.0, 1.0, 1.0), List.of(0.1, 0.1, 0.1), errors, List.of(0, 0, 0), List.of(false), List.of(HalfRates.UNKNOWN), 0.01, true, 10, JudgeSettings.DEFAULT);
     }
 
     @Test

@@ -39,11 +39,15 @@ class GradingTest {
     }
 
     private static Evidence evidence(boolean heldOut) {
+        return evidence(heldOut, List.of());
+    }
+
+    private static Evidence evidence(boolean heldOut, List<LadderRow> ladder) {
         Run run = Motions.run("a", 20, 1, t -> new double[] {Math.exp(-t)});
         FittedOperator operator = Motions.fit(Motions.snapshots(1, 1, List.of(run), List.of()), new LinearEstimator(), 1);
         Spectrum spectrum = SpectrumExtractor.extract(operator, org.modestead.engine.Progress.NONE);
-        return new Evidence(operator, spectrum, List.of(1), List.of(), ModalExpansion.of(operator.chosen()), List.of(1.0),
-                List.of(1.0), List.of(1.0), List.of(0.0), List.of(0.0), List.of(0), List.of(false), 0.01, heldOut, 10, JudgeSettings.DEFAULT);
+        return new Evidence(operator, spectrum, List.of(1), ladder, ModalExpansion.of(operator.chosen()), List.of(1.0),
+                List.of(1.0), List.of(1.0), List.of(0.0), List.of(0.0), List.of(0), List.of(false), List.of(HalfRates.UNKNOWN), 0.01, heldOut, 10, JudgeSettings.DEFAULT);
     }
 
     private static Mode mode(double share, boolean constant) {
@@ -97,6 +101,16 @@ class GradingTest {
         assertEquals(Grade.ABSENT, verdict.grade());
         assertEquals(List.of("space-norm-growth"), verdict.decidedBy());
         assertTrue(verdict.sentence().contains("space-norm-growth says so."));
+    }
+
+    @Test
+    void aResidualThatNoiseExplainsIsLackOfEvidence() {
+        // 0.5 seen, of which noise makes 0.3: what is left, 0.4, is less than √5 times that; of 0.41 seen it is more than √5 times 0.09
+        for (double seen : new double[] {0.5, 0.41}) {
+            LadderRow row = new LadderRow(1, 1, new Complex(-1, 0), 1, 1, 1, 0.4, seen, 0, 0, NoiseEffect.NONE);
+            assertEquals(seen == 0.5 ? Grade.UNDECIDED : Grade.ABSENT,
+                    Grading.grade(mode(1, false), evidence(true, List.of(row)), failing("holdout-residual")).grade(), "seen " + seen);
+        }
     }
 
     @Test

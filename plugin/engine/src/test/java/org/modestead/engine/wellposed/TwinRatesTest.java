@@ -39,4 +39,17 @@ class TwinRatesTest {
     void halvesOfACriticallyDampedMotionAreNot(double noise) {
         assertFalse(resolved((a, t) -> a * Math.exp(-t), (b, t) -> 3 * b * t * Math.exp(-t), noise));
     }
+
+    @ParameterizedTest
+    @ValueSource(doubles = {0.0003, 0.001})
+    void rampsAreOneDefectiveMotionHoweverNoiseSplitsThem(double noise) {
+        assertFalse(resolved((a, t) -> a, (b, t) -> b * t, noise));
+    }
+
+    @ParameterizedTest
+    @ValueSource(doubles = {0.001, 0.003})
+    void aModeIsNotBlamedForAWeakNeighbourThatNoiseMoves(double noise) {
+        // a tenth of the weight: halves of one defective motion carry weights of one size
+        assertTrue(resolved((a, t) -> (a + Math.signum(a)) * Math.exp(-0.5 * t), (b, t) -> 0.1 * b * Math.exp(-1.2 * t), noise));
+    }
 }
