@@ -3,14 +3,18 @@ package org.modestead.engine.wellposed;
 import java.util.List;
 import java.util.Locale;
 import org.modestead.engine.Progress;
-import org.modestead.engine.spectrum.Mode;
 
 /**
  * Whether the residual of a mode, the noise taken off, is so small that no imitation reaches it on runs of ordinary length. The residual of
- * {@link HoldoutResidual} leaves room for motion that is only nearly of one rate; a mode that stands must do better, on one
- * of the rungs it is judged on.
+ * {@link HoldoutResidual} leaves room for motion that is only nearly of one rate; a mode that stands must do better.
+ *
+ * <p>What is taken off for noise is known only roughly, to a quarter of its square say. So a rung on which more than half of the square was taken
+ * off does not speak for itself: then two rungs must say so, with a quarter put back. Where the space is finite and has been seen whole, the rung
+ * that holds all of it speaks.
  */
 public final class CloseResidual implements Check {
+
+    private static final double DOUBTFUL = 0.25;
 
     @Override
     public String id() {
@@ -19,13 +23,29 @@ public final class CloseResidual implements Check {
 
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
-        return evidence.spectrum().modes().stream().map(mode -> finding(mode, evidence)).toList();
+        return evidence.spectrum().modes().stream().map(mode -> finding(mode.number(), evidence)).toList();
     }
 
-    private Finding finding(Mode mode, Evidence evidence) {
-        double value = evidence.tellingRungsOf(mode.number()).stream().mapToDouble(LadderRow::residual).filter(r -> !Double.isNaN(r)).min()
-                .orElse(Double.NaN);
-        return new Finding(mode.number(), id(), value, Evidence.GOOD, value <= Evidence.GOOD, String.format(Locale.ROOT,
-                "At best it misses its own rule of motion by %.3g of its size once the noise is taken off.", value));
+    private Finding finding(int mode, Evidence evidence) {
+        double value = Closure.missed(mode, evidence).orElseGet(() -> onTheLadder(evidence.tellingRungsOf(mode)));
+        return new Finding(mode, id(), value, Evidence.GOOD, value <= Evidence.GOOD, Double.isNaN(value)
+                ? "On no rung that tells of it do the runs excite it enough to see how well it keeps its own rule of motion."
+                : String.format(Locale.ROOT, "At best it misses its own rule of motion by %.3g of its size once the noise is taken off.", value));
+    }
+
+    private static double onTheLadder(List<LadderRow> telling) {
+        List<LadderRow> judged = telling.stream().filter(row -> !Double.isNaN(row.residual())).toList();
+        double[] bounds = judged.stream().mapToDouble(row -> Math.sqrt(square(row.residual()) + DOUBTFUL * taken(row))).sorted().toArray();
+        double alone = judged.stream().filter(row -> square(row.residual()) >= taken(row)).mapToDouble(LadderRow::residual).min().orElse(Double.NaN);
+        double agreed = bounds.length == 0 ? Double.NaN : bounds[Math.min(1, bounds.length - 1)];
+        return Double.isNaN(alone) ? agreed : Math.min(alone, agreed);
+    }
+
+    private static double taken(LadderRow row) {
+        return square(row.rawResidual()) - square(row.residual());
+    }
+
+    private static double square(double x) {
+        return x * x;
     }
 }
