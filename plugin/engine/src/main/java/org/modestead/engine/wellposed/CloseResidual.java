@@ -35,17 +35,9 @@ public final class CloseResidual implements Check {
 
     private static double onTheLadder(List<LadderRow> telling) {
         List<LadderRow> judged = telling.stream().filter(row -> !Double.isNaN(row.residual())).toList();
-        double[] bounds = judged.stream().mapToDouble(row -> Math.sqrt(square(row.residual()) + DOUBTFUL * taken(row))).sorted().toArray();
-        double alone = judged.stream().filter(row -> square(row.residual()) >= taken(row)).mapToDouble(LadderRow::residual).min().orElse(Double.NaN);
+        double[] bounds = judged.stream().mapToDouble(row -> Math.sqrt(row.residual() * row.residual() + DOUBTFUL * row.takenOff())).sorted().toArray();
+        double alone = judged.stream().filter(row -> row.residual() * row.residual() >= row.takenOff()).mapToDouble(LadderRow::residual).min().orElse(Double.NaN);
         double agreed = bounds.length == 0 ? Double.NaN : bounds[Math.min(1, bounds.length - 1)];
         return Double.isNaN(alone) ? agreed : Math.min(alone, agreed);
-    }
-
-    private static double taken(LadderRow row) {
-        return square(row.rawResidual()) - square(row.residual());
-    }
-
-    private static double square(double x) {
-        return x * x;
     }
 }

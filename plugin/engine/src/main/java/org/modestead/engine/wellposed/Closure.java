@@ -14,7 +14,7 @@ import java.util.OptionalDouble;
 final class Closure {
 
     /** Residual up to which nothing but rounding and quadrature is to blame. */
-    static final double EXACT = 1e-3;
+    private static final double EXACT = 1e-3;
 
     /** Largest residual of an eigenfunction that noise blurs. */
     private static final double BLURRED = 0.1;
@@ -50,7 +50,6 @@ final class Closure {
     }
 
     private static boolean closed(LadderRow row) {
-        double left = row.residual() * row.residual();
-        return row.residual() <= EXACT || row.residual() <= BLURRED && left <= TIMES_NOISE * (row.rawResidual() * row.rawResidual() - left);
+        return row.residual() <= EXACT || row.residual() <= BLURRED && row.withinNoise(TIMES_NOISE);
     }
 }

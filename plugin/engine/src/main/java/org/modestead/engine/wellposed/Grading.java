@@ -87,10 +87,7 @@ final class Grading {
 
     /** Whether noise in the runs judged on explains so much of the residual that what is left may be the error of rates fitted in noise. */
     private static boolean blurred(int mode, Evidence evidence) {
-        return evidence.ladderOf(mode).stream().filter(row -> row.rank() == evidence.operator().rank()).anyMatch(row -> {
-            double left = row.residual() * row.residual();
-            return left <= BLURRED * (row.rawResidual() * row.rawResidual() - left);
-        });
+        return evidence.ladderOf(mode).stream().anyMatch(row -> row.rank() == evidence.operator().rank() && row.withinNoise(BLURRED));
     }
 
     private static Optional<Finding> failed(List<Finding> findings, int mode, String check) {

@@ -18,4 +18,15 @@ import org.modestead.engine.linalg.Complex;
  * @param noise what noise of the data's own size does to the mode
  */
 public record LadderRow(int rank, int mode, Complex rate, double weight, double weightNorm, double normRatio, double residual,
-        double rawResidual, double gap, double overlap, NoiseEffect noise) {}
+        double rawResidual, double gap, double overlap, NoiseEffect noise) {
+
+    /** Returns the square of the residual that noise was found to make. */
+    double takenOff() {
+        return rawResidual * rawResidual - residual * residual;
+    }
+
+    /** Returns whether the square of what is left of the residual is at most so many times that which noise makes. */
+    boolean withinNoise(double times) {
+        return residual * residual <= times * takenOff();
+    }
+}

@@ -38,9 +38,8 @@ public final class SteadyRate implements Check {
 
     private Finding finding(Mode mode, HalfRates halves, Evidence evidence) {
         double value = halves.change() * evidence.longest() / 2;
-        double noise = evidence.fittedOf(mode.number()).noise().rate() * mode.rate().abs();
-        boolean told = halves.change() > SIGMAS * Math.hypot(halves.error(), noise);
-        return new Finding(mode.number(), id(), value, HALF, value <= HALF || !told, String.format(Locale.ROOT,
-                "From the first half of the runs to the second its rate changes by %.3g, with a standard error of %.2g.", halves.change(), Math.hypot(halves.error(), noise)));
+        double error = Math.hypot(halves.error(), evidence.fittedOf(mode.number()).noise().rate() * mode.rate().abs());
+        return new Finding(mode.number(), id(), value, HALF, value <= HALF || halves.change() <= SIGMAS * error, String.format(Locale.ROOT,
+                "From the first half of the runs to the second its rate changes by %.3g, with a standard error of %.2g.", halves.change(), error));
     }
 }
