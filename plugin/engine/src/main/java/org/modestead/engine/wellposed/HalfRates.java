@@ -72,21 +72,15 @@ record HalfRates(double change, double error) {
         double middle = (t[0] + t[t.length - 1]) / 2;
         double start = half == 0 ? t[0] : middle;
         double end = half == 0 ? middle : t[t.length - 1];
-        Half sum = Half.NONE;
-        int to = 1;
-        for (int from = 0; from < t.length - 1; from++) {
-            to = Math.max(to, from + 1);
-            while (to < t.length - 1 && t[to] - t[from] < lag * (1 - 1e-9)) {
-                to++;
-            }
-            if (t[from] >= start && t[to] <= end && t[to] - t[from] >= lag * (1 - 1e-9)) {
-                double tau = t[to] - t[from];
+        Half[] sum = {Half.NONE};
+        LaggedPairs.walk(t, lag, (from, to, tau) -> {
+            if (t[from] >= start && t[to] <= end) {
                 Complex now = ComplexMatrices.entry(values, from, j);
                 Complex next = rate.times(-tau).exp().times(ComplexMatrices.entry(values, to, j));
-                sum = sum.plus(new Half(now.conj().times(next), square(now), square(next), tau, 1, 0));
+                sum[0] = sum[0].plus(new Half(now.conj().times(next), square(now), square(next), tau, 1, 0));
             }
-        }
-        return sum.spanning(sum.pairs() == 0 ? 0 : Math.max(1, (end - start) / (sum.lags() / sum.pairs())));
+        });
+        return sum[0].spanning(sum[0].pairs() == 0 ? 0 : Math.max(1, (end - start) / (sum[0].lags() / sum[0].pairs())));
     }
 
     private static double square(Complex z) {

@@ -110,21 +110,12 @@ final class Residuals {
 
     private static void add(double[] times, ZMatrixRMaj values, Complex[] driven, int j, Complex rate, double target, double[] squares,
             int at) {
-        int to = 1;
-        for (int from = 0; from < times.length - 1; from++) {
-            to = Math.max(to, from + 1);
-            while (to < times.length - 1 && times[to] - times[from] < target * (1 - 1e-9)) {
-                to++;
-            }
-            double tau = times[to] - times[from];
-            if (tau < target * (1 - 1e-9)) {
-                return;
-            }
+        LaggedPairs.walk(times, target, (from, to, tau) -> {
             Complex next = ComplexMatrices.entry(values, to, j);
             double miss = free(values, driven, to, j).minus(rate.times(tau).exp().times(free(values, driven, from, j))).abs();
             squares[at] += miss * miss;
             squares[at + 1] += next.abs() * next.abs();
-        }
+        });
     }
 
     private static Complex free(ZMatrixRMaj values, Complex[] driven, int k, int j) {

@@ -182,19 +182,8 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
 
     /** Adds the squared misses by two rates and by each of three single ones, and the squared size: of e_2, then of e_1. */
     private int add(StateRun run, ZMatrixRMaj values, double s, double target, double[] sums) {
-        double[] t = run.times();
         Complex mean = rateOne.plus(rateTwo).times(0.5);
-        int pairs = 0;
-        int to = 1;
-        for (int from = 0; from < t.length - 1; from++) {
-            to = Math.max(to, from + 1);
-            while (to < t.length - 1 && t[to] - t[from] < target * (1 - 1e-9)) {
-                to++;
-            }
-            double tau = t[to] - t[from];
-            if (tau < target * (1 - 1e-9)) {
-                return pairs;
-            }
+        return LaggedPairs.walk(run.times(), target, (from, to, tau) -> {
             Complex oneNow = ComplexMatrices.entry(values, from, first);
             Complex twoNow = second(values, from, s);
             Complex oneNext = ComplexMatrices.entry(values, to, first);
@@ -211,9 +200,7 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
             sums[5] += square(oneNext.minus(rateOne.times(tau).exp().times(oneNow)));
             sums[4] += square(twoNext);
             sums[9] += square(oneNext);
-            pairs++;
-        }
-        return pairs;
+        });
     }
 
     private Complex second(ZMatrixRMaj values, int row, double s) {
