@@ -25,18 +25,16 @@ record HalfRates(double change, double error) {
 
     private static final double QUARTER = 0.25;
 
-    /** Share of the squared size that must not be noise. */
-    private static final double MOSTLY_NOISE = 0.5;
-
     /**
      * @param expansion at the fitted rank
      * @param judging runs
-     * @return one an eigenpair
+     * @param plain its eigenfunctions on them, per run p x r
+     * @param columns eigenpairs asked for
+     * @return one each
      */
-    static List<HalfRates> of(ModalExpansion expansion, JudgingRuns judging) {
-        List<ZMatrixRMaj> plain = judging.eigenfunctions(expansion);
+    static List<HalfRates> of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> plain, List<Integer> columns) {
         List<ZMatrixRMaj> disturbed = judging.disturbedEigenfunctions(expansion);
-        return java.util.stream.IntStream.range(0, expansion.rank()).mapToObj(j -> one(expansion, judging, plain, disturbed, j)).toList();
+        return columns.stream().map(j -> one(expansion, judging, plain, disturbed, j)).toList();
     }
 
     private static HalfRates one(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> plain, List<ZMatrixRMaj> disturbed, int j) {
@@ -50,7 +48,7 @@ record HalfRates(double change, double error) {
         for (int h = 0; h < 2; h++) {
             Half as = sums(judging.runs(), plain, rate, j, lag, h);
             halves[h] = disturbed.isEmpty() ? as : as.without(sums(judging.runs(), disturbed, rate, j, lag, h).over(disturbed.size() / plain.size()));
-            if (halves[h].pairs() == 0 || !(halves[h].size() >= MOSTLY_NOISE * as.size())) {
+            if (halves[h].pairs() == 0 || !(halves[h].size() >= Residuals.MOSTLY_NOISE * as.size())) {
                 return UNKNOWN;
             }
             errors[h] = as.error(halves[h].size());

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.TreeSet;
 import org.ejml.data.DMatrixRMaj;
+import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
@@ -37,8 +38,8 @@ import org.modestead.engine.spectrum.TrainingSample;
  * @param noiseShare standard deviation of the noise over that of the signal, root mean square over the channels
  * @param longest duration of the longest training run
  */
-record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins, List<HalfRates> halves, SampleNoise noise,
-        double noiseShare, double longest) {
+record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErrors, List<Double> normEffects, List<Boolean> twins,
+        List<HalfRates> halves, SampleNoise noise, double noiseShare, double longest) {
 
     private static final int MOST_RUNGS = 14;
     private static final double TOO_FAR = 1.5;
@@ -62,6 +63,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         List<List<NoiseEffect>> effects = new ArrayList<>();
         List<Double> normEffects = new ArrayList<>();
         List<Boolean> twins = List.of();
+        List<HalfRates> halves = List.of();
         for (int rank : ranks) {
             progress.checkCancelled();
             progress.report((double) rungs.size() / ranks.size(), "ladder, rank " + rank);
@@ -69,18 +71,18 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
             rungs.add(rung);
             List<Rung> others = noisier.stream().filter(fit -> fit.compression().rank() >= rank).map(fit -> fit.rung(rank, sample)).toList();
             if (rank == operator.rank()) {
-                twins = TwinRates.twins(rung, judging, others);
+                List<ZMatrixRMaj> values = judging.eigenfunctions(rung.expansion());
+                twins = TwinRates.twins(rung, judging, values, others);
+                halves = HalfRates.of(rung.expansion(), judging, values, spectrum.modes().stream().map(mode -> mode.indices().get(0)).toList());
             }
             effects.add(NoiseEffect.of(rung, others, sample.longest()));
             normEffects.add(others.stream().mapToDouble(o -> NoiseEffect.factor(rung.carryingNorm(), o.carryingNorm())).max().orElse(1));
         }
         int fitted = ranks.indexOf(operator.rank());
         List<Boolean> byPart = twins;
-        List<HalfRates> halves = HalfRates.of(rungs.get(fitted).expansion(), judging);
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
                 normEffects, spectrum.modes().stream().map(mode -> byPart.get(partOf(rungs.get(fitted), mode))).toList(),
-                spectrum.modes().stream().map(mode -> halves.get(mode.indices().get(0))).toList(), noise, noise.shareOf(operator.snapshots()),
-                sample.longest());
+                halves, noise, noise.shareOf(operator.snapshots()), sample.longest());
     }
 
     /**

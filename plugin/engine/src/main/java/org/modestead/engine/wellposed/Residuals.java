@@ -27,7 +27,7 @@ final class Residuals {
     private static final double[] SHARES = {0.25, 0.5, 1};
 
     /** Share of the squared size that must not be noise for the noise to be taken off. */
-    private static final double MOSTLY_NOISE = 0.5;
+    static final double MOSTLY_NOISE = 0.5;
 
     private Residuals() {}
 

@@ -59,11 +59,11 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
      *
      * @param rung fitted
      * @param judging runs
+     * @param values its eigenfunctions on them, per run p x r
      * @param noisier the same rank fitted to noisier runs
      * @return per part of the rung whether it has a twin
      */
-    static List<Boolean> twins(Rung rung, JudgingRuns judging, List<Rung> noisier) {
-        List<ZMatrixRMaj> values = judging.eigenfunctions(rung.expansion());
+    static List<Boolean> twins(Rung rung, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier) {
         return rung.parts().stream().map(part -> hasTwin(rung, part, judging, values, noisier)).toList();
     }
 

@@ -31,7 +31,9 @@ class HalfRatesTest {
     }
 
     private static HalfRates halves(FittedOperator operator) {
-        return HalfRates.of(ModalExpansion.of(operator.chosen()), JudgingRuns.of(operator)).get(0);
+        ModalExpansion expansion = ModalExpansion.of(operator.chosen());
+        JudgingRuns judging = JudgingRuns.of(operator);
+        return HalfRates.of(expansion, judging, judging.eigenfunctions(expansion), List.of(0)).get(0);
     }
 
     private static Finding steady(FittedOperator operator) {
