@@ -3,7 +3,6 @@ package org.modestead.engine.wellposed;
 import java.util.List;
 import org.modestead.engine.recording.StateRun;
 import org.modestead.engine.linalg.Complex;
-import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.ejml.data.ZMatrixRMaj;
 
@@ -13,7 +12,8 @@ import org.ejml.data.ZMatrixRMaj;
  *
  * <pre>    m = Σ conj(φ(t)) e^(-λτ) φ(t+τ) / Σ |φ(t)|²,    λ_half = λ + log(m)/τ</pre>
  *
- * with τ a quarter of the mode's own time (see {@link Residuals}), at least one step. Noise is taken off both sums as there. The standard error of
+ * with τ a quarter of the mode's own time (see {@link Residuals}), at least one step. Noise is taken off both sums as there,
+ * and what known inputs add, where they are separated, off φ. The standard error of
  * m is that of a regression whose residuals are independent from one τ to the next.
  *
  * @param change {@code |λ_second - λ_first|}; NaN where the runs cannot tell
@@ -34,10 +34,12 @@ record HalfRates(double change, double error) {
      */
     static List<HalfRates> of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> plain, List<Integer> columns) {
         List<ZMatrixRMaj> disturbed = judging.disturbedEigenfunctions(expansion);
-        return columns.stream().map(j -> one(expansion, judging, plain, disturbed, j)).toList();
+        List<Complex[][]> driven = judging.runs().stream().map(run -> Residuals.driven(expansion, run)).toList();
+        return columns.stream().map(j -> one(expansion, judging, plain, disturbed, driven, j)).toList();
     }
 
-    private static HalfRates one(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> plain, List<ZMatrixRMaj> disturbed, int j) {
+    private static HalfRates one(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> plain, List<ZMatrixRMaj> disturbed,
+            List<Complex[][]> driven, int j) {
         Complex rate = expansion.rates().get(j);
         if (!Double.isFinite(rate.re())) {
             return UNKNOWN;
@@ -46,8 +48,8 @@ record HalfRates(double change, double error) {
         Half[] halves = new Half[2];
         double[] errors = new double[2];
         for (int h = 0; h < 2; h++) {
-            Half as = sums(judging.runs(), plain, rate, j, lag, h);
-            halves[h] = disturbed.isEmpty() ? as : as.without(sums(judging.runs(), disturbed, rate, j, lag, h).over(disturbed.size() / plain.size()));
+            Half as = sums(judging.runs(), plain, driven, rate, j, lag, h);
+            halves[h] = disturbed.isEmpty() ? as : as.without(sums(judging.runs(), disturbed, driven, rate, j, lag, h).over(disturbed.size() / plain.size()));
             if (halves[h].pairs() == 0 || !(halves[h].size() >= Residuals.MOSTLY_NOISE * as.size())) {
                 return UNKNOWN;
             }
@@ -57,15 +59,15 @@ record HalfRates(double change, double error) {
     }
 
     /** Sums over one half of all runs; copies of the runs stand one after the other. */
-    private static Half sums(List<StateRun> runs, List<ZMatrixRMaj> values, Complex rate, int j, double lag, int half) {
+    private static Half sums(List<StateRun> runs, List<ZMatrixRMaj> values, List<Complex[][]> driven, Complex rate, int j, double lag, int half) {
         Half sum = Half.NONE;
         for (int i = 0; i < values.size(); i++) {
-            sum = sum.plus(sums(runs.get(i % runs.size()), values.get(i), rate, j, lag, half));
+            sum = sum.plus(sums(runs.get(i % runs.size()), values.get(i), driven.get(i % runs.size())[j], rate, j, lag, half));
         }
         return sum;
     }
 
-    private static Half sums(StateRun run, ZMatrixRMaj values, Complex rate, int j, double lag, int half) {
+    private static Half sums(StateRun run, ZMatrixRMaj values, Complex[] driven, Complex rate, int j, double lag, int half) {
         double[] t = run.times();
         double middle = (t[0] + t[t.length - 1]) / 2;
         double start = half == 0 ? t[0] : middle;
@@ -73,8 +75,8 @@ record HalfRates(double change, double error) {
         Half[] sum = {Half.NONE};
         LaggedPairs.walk(t, lag, (from, to, tau) -> {
             if (t[from] >= start && t[to] <= end) {
-                Complex now = ComplexMatrices.entry(values, from, j);
-                Complex next = rate.times(-tau).exp().times(ComplexMatrices.entry(values, to, j));
+                Complex now = Residuals.free(values, driven, from, j);
+                Complex next = rate.times(-tau).exp().times(Residuals.free(values, driven, to, j));
                 sum[0] = sum[0].plus(new Half(now.conj().times(next), square(now), square(next), tau, 1, 0));
             }
         });

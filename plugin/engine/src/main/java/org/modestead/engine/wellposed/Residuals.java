@@ -85,7 +85,7 @@ final class Residuals {
     }
 
     /** Returns what inputs have added to each eigenfunction since the run's first state; no entries where none are separated. */
-    private static Complex[][] driven(ModalExpansion expansion, StateRun run) {
+    static Complex[][] driven(ModalExpansion expansion, StateRun run) {
         Complex[][] out = new Complex[expansion.rank()][0];
         expansion.compression().inputs().ifPresent(effect -> {
             ZMatrixRMaj pushed = ComplexMatrices.product(effect.pushed(effect.arguments(run)), expansion.vectors());
@@ -118,7 +118,8 @@ final class Residuals {
         });
     }
 
-    private static Complex free(ZMatrixRMaj values, Complex[] driven, int k, int j) {
+    /** Returns an eigenfunction's value without what inputs have added. */
+    static Complex free(ZMatrixRMaj values, Complex[] driven, int k, int j) {
         Complex value = ComplexMatrices.entry(values, k, j);
         return driven.length == 0 ? value : value.minus(driven[k]);
     }

@@ -321,4 +321,15 @@ class InputSeparationTest {
         return LinearAlgebra.installed().eigen(estimator.compress(Driven.snapshots(1, runs, List.of()), Progress.NONE).whiten(2).action())
                 .values().stream().flatMapToDouble(value -> DoubleStream.of(value.re(), Math.abs(value.im()))).sorted().toArray();
     }
+
+    @Test
+    void aForceIsNotTakenForARateThatChanges() {
+        // the free motion has one rate throughout; the force on top of it does not
+        FORCES.forEach((name, force) -> {
+            Snapshots snapshots = Driven.snapshots(1, runs(force, false), List.of(Driven.run("c", 180, 0.7, 0.4, force, false)));
+            Finding steady = Motions.judge(Motions.fit(snapshots, new LinearEstimator(), 2), JudgeSettings.DEFAULT).findings().stream()
+                    .filter(f -> f.check().equals("steady-rate")).findFirst().orElseThrow();
+            assertEquals(0, steady.value(), 1e-6, name);
+        });
+    }
 }
