@@ -27,9 +27,8 @@ final class ListWidths {
      */
     static Optional<List<MeasuredColumn>> told(TableSchema schema, List<String> names) {
         List<Column> columns = columns(schema, names);
-        boolean all = columns.stream().allMatch(column -> column.type().entries().isEmpty() || !column.entries().isEmpty());
-        return all ? Optional.of(columns.stream().map(column -> MeasuredColumn.of(column, column.entries().size(), schema)).toList())
-                : Optional.empty();
+        return columns.stream().anyMatch(ListWidths::untold) ? Optional.empty()
+                : Optional.of(columns.stream().map(column -> MeasuredColumn.of(column, column.entries().size(), schema)).toList());
     }
 
     /**
@@ -46,8 +45,7 @@ final class ListWidths {
         List<Column> columns = columns(schema, names);
         columns.forEach(column -> widths.put(column.name(), column.entries().size()));
         TreeSet<Integer> unseen = new TreeSet<>();
-        columns.stream().filter(column -> column.type().entries().isPresent() && column.entries().isEmpty())
-                .forEach(column -> unseen.add(schema.indexOf(column.name()).orElseThrow()));
+        columns.stream().filter(ListWidths::untold).forEach(column -> unseen.add(schema.indexOf(column.name()).orElseThrow()));
         try (RowCursor cursor = table.open()) {
             while (!unseen.isEmpty() && cursor.next()) {
                 progress.checkCancelled();
@@ -70,6 +68,10 @@ final class ListWidths {
         }
         list.ifPresent(found -> widths.put(name, found.entries().size()));
         return list.isPresent();
+    }
+
+    private static boolean untold(Column column) {
+        return column.type().entries().isPresent() && column.entries().isEmpty();
     }
 
     private static List<Column> columns(TableSchema schema, List<String> names) {

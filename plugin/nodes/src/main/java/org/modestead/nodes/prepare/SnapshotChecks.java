@@ -49,11 +49,9 @@ final class SnapshotChecks {
                     "choose the channels among " + String.join(", ", schema.names())));
         }
         timeUnit(schema, settings).ifPresent(problems::add);
-        boolean there = Stream.concat(channels.stream(), columns.inputs().stream()).allMatch(name -> schema.indexOf(name).isPresent());
-        Optional<List<MeasuredColumn>> measured = there ? ListWidths.told(schema, channels) : Optional.empty();
-        Optional<List<MeasuredColumn>> inputs = there ? ListWidths.told(schema, columns.inputs()) : Optional.empty();
-        if (measured.isPresent() && inputs.isPresent()) {
-            problems.addAll(unknownUnits(columns, Stream.concat(measured.get().stream(), inputs.get().stream()).toList()));
+        List<String> read = Stream.concat(channels.stream(), columns.inputs().stream()).toList();
+        if (read.stream().allMatch(name -> schema.indexOf(name).isPresent())) {
+            ListWidths.told(schema, read).ifPresent(measured -> problems.addAll(unknownUnits(columns, measured)));
         }
         return problems;
     }
