@@ -63,7 +63,7 @@ final class ListWidths {
         Optional<ListCell> list = cursor.cell(column).map(ListCell.class::cast);
         String name = table.schema().columns().get(column).name();
         if (list.isPresent() && list.get().entries().isEmpty()) {
-            throw new RecordingFault(table.origin() + ", row " + cursor.row() + " below the header, column " + name, "the list is empty",
+            throw new RecordingFault(MeasuredCell.place(table.origin(), cursor, name), "the list is empty",
                     "give every row a list of as many numbers, or leave the cell empty when all are missing");
         }
         list.ifPresent(found -> widths.put(name, found.entries().size()));

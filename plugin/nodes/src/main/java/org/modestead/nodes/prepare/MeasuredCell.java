@@ -14,6 +14,11 @@ sealed interface MeasuredCell permits NumberCell, NumberListCell {
      */
     void read(RowCursor cursor, DoubleConsumer into);
 
+    /** Returns where a cell of the current row is, for messages. */
+    static String place(String origin, RowCursor cursor, String column) {
+        return origin + ", row " + cursor.row() + " below the header, column " + column;
+    }
+
     /**
      * Returns the reader of a column.
      *

@@ -50,6 +50,6 @@ record NumberCell(String origin, String name, int column, CellType type) impleme
     }
 
     private RecordingFault fault(RowCursor cursor, String seen, String wanted) {
-        return new RecordingFault(origin + ", row " + cursor.row() + " below the header, column " + name, seen, wanted);
+        return new RecordingFault(MeasuredCell.place(origin, cursor, name), seen, wanted);
     }
 }

@@ -43,6 +43,6 @@ record NumberListCell(String origin, String name, int column, int width) impleme
     }
 
     private RecordingFault fault(RowCursor cursor, String seen, String wanted) {
-        return new RecordingFault(origin + ", row " + cursor.row() + " below the header, column " + name, seen, wanted);
+        return new RecordingFault(MeasuredCell.place(origin, cursor, name), seen, wanted);
     }
 }

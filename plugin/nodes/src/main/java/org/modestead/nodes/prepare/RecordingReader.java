@@ -190,7 +190,7 @@ final class RecordingReader {
     }
 
     private String place(RowCursor cursor, String column) {
-        return table.origin() + ", row " + cursor.row() + " below the header, column " + column;
+        return MeasuredCell.place(table.origin(), cursor, column);
     }
 
     private int position(String name) {
