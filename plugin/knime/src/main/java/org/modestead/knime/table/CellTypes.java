@@ -29,10 +29,12 @@ final class CellTypes {
 
     /** Returns the kind, empty for a type that the nodes cannot read (pictures, mixed columns). */
     static Optional<CellType> kind(DataType type) {
-        boolean collection = type.isCompatible(CollectionDataValue.class);
+        if (!type.isCompatible(CollectionDataValue.class)) {
+            return single(type);
+        }
         Optional<CellType> list = type.isCompatible(ListDataValue.class)
-                ? kind(type.getCollectionElementType()).filter(entries -> entries.entries().isEmpty()).flatMap(CellType::listOf) : Optional.empty();
-        return list.or(() -> collection ? Optional.of(CellType.TEXT) : single(type));
+                ? kind(type.getCollectionElementType()).flatMap(CellType::listOf) : Optional.empty();
+        return list.or(() -> Optional.of(CellType.TEXT));
     }
 
     private static Optional<CellType> single(DataType type) {
