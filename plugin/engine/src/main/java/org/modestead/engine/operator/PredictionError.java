@@ -2,6 +2,7 @@ package org.modestead.engine.operator;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.Function;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Progress;
@@ -51,43 +52,31 @@ public final class PredictionError {
         if (compression.inputs().isPresent()) {
             return new double[ranks.size()];
         }
-        double[] errors = errors(compression, runs, functions, ranks, progress, new Ahead() {
-            @Override
-            public int steps(StateRun run) {
-                return Math.max(1, (run.count() - 1) / 2);
-            }
-
-            @Override
-            public DMatrixRMaj states(StateRun run) {
-                return Matrices.block(run.states(), steps(run), run.count(), 0, run.states().numCols);
-            }
+        double[] errors = errors(compression, runs, functions, ranks, progress, run -> {
+            int steps = Math.max(1, (run.count() - 1) / 2);
+            return new Ahead(steps, Matrices.block(run.states(), steps, run.count(), 0, run.states().numCols));
         });
         return Arrays.stream(errors).map(error -> Double.isNaN(error) ? Double.POSITIVE_INFINITY : error).toArray();
     }
 
     /** How far is predicted, and what is to be hit there. */
-    private interface Ahead {
-        int steps(StateRun run);
-
-        DMatrixRMaj states(StateRun run);
-    }
+    private record Ahead(int steps, DMatrixRMaj states) {}
 
     private static double[] errors(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
-            List<Integer> ranks, Progress progress, Ahead ahead) {
+            List<Integer> ranks, Progress progress, Function<StateRun, Ahead> ahead) {
         double[] errors = new double[ranks.size()];
         double spread = 0;
         for (int i = 0; i < runs.size(); i++) {
             StateRun run = runs.get(i);
-            int steps = ahead.steps(run);
-            DMatrixRMaj later = ahead.states(run);
+            Ahead goal = ahead.apply(run);
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
                 OrthonormalCompression rung = compression.leading(ranks.get(k));
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), steps), rung.observable());
-                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - steps, 0, rung.rank());
-                errors[k] += squaredDistance(Matrices.product(now, carried), later);
+                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), goal.steps()), rung.observable());
+                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - goal.steps(), 0, rung.rank());
+                errors[k] += squaredDistance(Matrices.product(now, carried), goal.states());
             }
-            spread += squaredSpread(later);
+            spread += squaredSpread(goal.states());
         }
         for (int k = 0; k < errors.length; k++) {
             errors[k] = Math.sqrt(errors[k] / spread);
@@ -110,17 +99,7 @@ public final class PredictionError {
      */
     public static double[] relative(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
             List<Integer> ranks, Progress progress) {
-        return errors(compression, runs, functions, ranks, progress, new Ahead() {
-            @Override
-            public int steps(StateRun run) {
-                return 1;
-            }
-
-            @Override
-            public DMatrixRMaj states(StateRun run) {
-                return compression.signalAhead(run);
-            }
-        });
+        return errors(compression, runs, functions, ranks, progress, run -> new Ahead(1, compression.signalAhead(run)));
     }
 
     /**
