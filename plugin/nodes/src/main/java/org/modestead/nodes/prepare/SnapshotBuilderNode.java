@@ -26,6 +26,7 @@ import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.Sentence;
 
 /** Turns a logged table into snapshots: runs, gaps, steps, units, delays and the parts that only judge. */
 public final class SnapshotBuilderNode implements Node {
@@ -139,13 +140,11 @@ public final class SnapshotBuilderNode implements Node {
                 : snapshots.holdout().size() + (snapshots.holdout().size() == 1 ? " run or end of a run" : " runs or"
                         + " ends of runs")
                         + " held out to judge.";
-        List<String> all = new ArrayList<>(List.of(reading.rows() + " rows of " + table.origin() + " became " + snapshots.training().size()
-                + " training " + (snapshots.training().size() == 1 ? "run" : "runs") + " with " + samples + " samples of "
-                + snapshots.channels().size() + (snapshots.channels().size() == 1 ? " channel" : " channels")
-                + "; a state has "
-                + snapshots.stateSize() + (snapshots.stateSize() == 1 ? " component." : " components."), holdout));
-        reading.lists().forEach(list -> all.add("Column " + list.column() + " holds lists of " + list.names().size()
-                + (list.names().size() == 1 ? " number: " : " numbers, each a channel or input of its own: ") + named(list.names()) + "."));
+        List<String> all = new ArrayList<>(List.of(reading.rows() + " rows of " + table.origin() + " became " + Sentence.count(snapshots.training().size(), "training run") + " with " + samples + " samples of "
+                + Sentence.count(snapshots.channels().size(), "channel") + "; a state has "
+                + Sentence.count(snapshots.stateSize(), "component") + ".", holdout));
+        reading.lists().forEach(list -> all.add("Column " + list.column() + " holds lists of " + Sentence.count(list.names().size(), "number")
+                + (list.names().size() == 1 ? ": " : ", each a channel or input of its own: ") + named(list.names()) + "."));
         return all;
     }
 
