@@ -8,6 +8,7 @@ import java.util.Optional;
 import java.util.Set;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.Sentence;
 
 /** Checks column settings against the columns that arrive. */
 public final class ColumnChecks {
@@ -69,8 +70,6 @@ public final class ColumnChecks {
         if (fitting.isEmpty()) {
             return "connect a table with a column of type " + SettingText.types(types);
         }
-        String more = fitting.size() > MOST_LISTED ? " and " + (fitting.size() - MOST_LISTED) + " more" : "";
-        return "choose a column of type " + SettingText.types(types) + ": "
-                + String.join(", ", fitting.subList(0, Math.min(MOST_LISTED, fitting.size()))) + more;
+        return "choose a column of type " + SettingText.types(types) + ": " + Sentence.listed(fitting, MOST_LISTED);
     }
 }

@@ -144,13 +144,8 @@ public final class SnapshotBuilderNode implements Node {
                 + Sentence.count(snapshots.channels().size(), "channel") + "; a state has "
                 + Sentence.count(snapshots.stateSize(), "component") + ".", holdout));
         reading.lists().forEach(list -> all.add("Column " + list.column() + " holds lists of " + Sentence.count(list.names().size(), "number")
-                + (list.names().size() == 1 ? ": " : ", each a channel or input of its own: ") + named(list.names()) + "."));
+                + (list.names().size() == 1 ? ": " : ", each a channel or input of its own: ") + Sentence.listed(list.names(), MOST_NAMED) + "."));
         return all;
-    }
-
-    private static String named(List<String> names) {
-        return names.size() <= MOST_NAMED ? String.join(", ", names)
-                : String.join(", ", names.subList(0, MOST_NAMED)) + " and " + (names.size() - MOST_NAMED) + " more";
     }
 
     private static String timeText(TimeAxis time) {

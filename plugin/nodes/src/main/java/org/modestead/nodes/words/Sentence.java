@@ -1,5 +1,6 @@
 package org.modestead.nodes.words;
 
+import java.util.List;
 import java.util.Locale;
 
 /** Makes sentences of fragments. */
@@ -19,6 +20,12 @@ public final class Sentence {
     /** Returns the text with a capital first letter. */
     public static String capital(String text) {
         return text.isEmpty() ? text : text.substring(0, 1).toUpperCase(Locale.ROOT) + text.substring(1);
+    }
+
+    /** Returns {@code a, b, c}, or {@code a, b and 3 more} where there are more names than are to be listed. */
+    public static String listed(List<String> names, int most) {
+        return names.size() <= most ? String.join(", ", names)
+                : String.join(", ", names.subList(0, most)) + " and " + (names.size() - most) + " more";
     }
 
     /** Returns {@code 1 run}, {@code 3 runs}. */
