@@ -84,11 +84,6 @@ public final class TablePages implements AutoCloseable {
         }
     }
 
-    /** Returns the number of rows. */
-    public long total() {
-        return total;
-    }
-
     /** Returns a page. */
     public synchronized Page page(Wish wish) {
         List<Column> columns = table.schema().columns();

@@ -91,11 +91,6 @@ public final class Desk implements AutoCloseable {
         return folder.getFileName().toString();
     }
 
-    /** Returns its folder. */
-    public Path folder() {
-        return folder;
-    }
-
     /** Returns the document as it is and was. */
     public Timeline timeline() {
         return timeline;

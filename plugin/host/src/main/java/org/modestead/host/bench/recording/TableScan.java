@@ -1,7 +1,6 @@
 package org.modestead.host.bench.recording;
 
 import java.time.ZoneOffset;
-import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
@@ -93,12 +92,5 @@ record TableScan(long rows, boolean whole, List<ColumnFacts> columns) {
         ColumnFacts facts() {
             return new ColumnFacts(column, cells, missing, low, high, rises, falls, changes, distinct.size());
         }
-    }
-
-    /** Returns the columns in the order of the table, for a list that grows. */
-    List<ColumnFacts> numbers() {
-        List<ColumnFacts> numbers = new ArrayList<>(columns);
-        numbers.removeIf(facts -> !facts.column().type().isNumber());
-        return numbers;
     }
 }
