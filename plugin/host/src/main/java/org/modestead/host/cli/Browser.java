@@ -18,7 +18,6 @@ final class Browser {
             new ProcessBuilder(command).redirectErrorStream(true).redirectOutput(ProcessBuilder.Redirect.DISCARD).start();
         } catch (IOException none) {
             // no such command: the address stands on the terminal
-            Thread.onSpinWait();
         }
     }
 }

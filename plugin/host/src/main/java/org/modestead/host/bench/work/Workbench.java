@@ -194,11 +194,9 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
                 told();
                 return view();
             }
-            Map<String, Double> expected = new HashMap<>();
-            known.seconds(opened.latest()).forEach(expected::put);
             running = known.identities();
             plan.steps().forEach(step -> endings.remove(step.id()));
-            begun = new BenchRun(plan, expected, results, again ? Set.copyOf(steps) : Set.of(), this);
+            begun = new BenchRun(plan, known.seconds(opened.latest()), results, again ? Set.copyOf(steps) : Set.of(), this);
             run = Optional.of(begun);
             last = "";
             told();
