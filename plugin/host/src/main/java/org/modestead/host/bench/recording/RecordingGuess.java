@@ -19,6 +19,7 @@ import org.modestead.nodes.contract.SettingsReader;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Table;
+import org.modestead.nodes.words.Sentence;
 
 /**
  * What a file seems to hold: how it is written, which column is what, how many runs at which step. Whatever a person said counts, the
@@ -142,19 +143,18 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
 
     private List<String> words() {
         List<String> words = new ArrayList<>();
-        int count = runs.runs().size();
         String unit = roles.timeUnit().isEmpty() ? "" : " " + roles.timeUnit();
-        words.add((whole ? "" : "The first ") + rows + " rows in " + count + (count == 1 ? " run" : " runs") + (roles.time().isEmpty() || Double.isNaN(step()) ? "."
+        words.add((whole ? "" : "The first ") + rows + " rows in " + Sentence.count(runs.runs().size(), "run") + (roles.time().isEmpty() || Double.isNaN(step()) ? "."
                 : (runs.isEven() ? ", every " : ", about every ") + String.format(Locale.ROOT, "%.4g", step()).replaceAll("(\\.\\d*?)0+$", "$1").replaceAll("\\.$", "")
                         + unit + "."));
         long gaps = roles.time().isEmpty() ? 0 : runs.gaps();
         if (gaps > 0) {
-            words.add(gaps + (gaps == 1 ? " pause" : " pauses") + ": runs are split there.");
+            words.add(Sentence.count(gaps, "pause") + ": runs are split there.");
         }
         words.add(roles.time().isEmpty() ? "No column of times was found: rows count as evenly spaced." : "Time is " + roles.time() + "."
                 + (roles.timeUnit().isEmpty() ? " Its unit is not told: write it, so that rates have one." : ""));
-        words.add(roles.channels().size() + (roles.channels().size() == 1 ? " channel" : " channels")
-                + (roles.inputs().isEmpty() ? "" : " and " + roles.inputs().size() + (roles.inputs().size() == 1 ? " known input" : " known inputs")) + ".");
+        words.add(Sentence.count(roles.channels().size(), "channel")
+                + (roles.inputs().isEmpty() ? "" : " and " + Sentence.count(roles.inputs().size(), "known input")) + ".");
         return words;
     }
 

@@ -2,6 +2,7 @@ package org.modestead.host.bench.run;
 
 import java.util.Locale;
 import java.util.OptionalDouble;
+import org.modestead.nodes.words.Sentence;
 
 /**
  * How a step stands.
@@ -56,7 +57,7 @@ public record StepState(Kind kind, String words, String sentence, OptionalDouble
 
     /** A step with a result. */
     public static StepState withResult(Kind kind, String sentence, int doubts, double seconds) {
-        String words = doubts == 0 ? kind.words : kind.words + ", " + doubts + (doubts == 1 ? " doubt" : " doubts");
+        String words = doubts == 0 ? kind.words : kind.words + ", " + Sentence.count(doubts, "doubt");
         return new StepState(kind, words, sentence, OptionalDouble.empty(), "", OptionalDouble.empty(), doubts, OptionalDouble.of(seconds));
     }
 

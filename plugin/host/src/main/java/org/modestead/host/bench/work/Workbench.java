@@ -48,6 +48,7 @@ import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.document.ReportDocument;
+import org.modestead.nodes.words.Sentence;
 
 /**
  * The desk that is open, if one is. Everything that changes it comes here, one after the other; whoever watches is told of every
@@ -242,8 +243,8 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         }
         long failed = outcomes.values().stream().filter(StepOutcome.Failed.class::isInstance).count();
         long done = outcomes.values().stream().filter(StepOutcome.Done.class::isInstance).count();
-        last = stopped ? "Stopped." : failed > 0 ? failed + (failed == 1 ? " step" : " steps") + " failed, " + done + " done."
-                : done + (done == 1 ? " step" : " steps") + " done.";
+        last = stopped ? "Stopped." : failed > 0 ? Sentence.count(failed, "step") + " failed, " + done + " done."
+                : Sentence.count(done, "step") + " done.";
         run = Optional.empty();
         found = Optional.empty();
         told();
