@@ -6,7 +6,6 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.List;
 import java.util.stream.Stream;
 
@@ -136,11 +135,7 @@ public final class OutputFolder implements AutoCloseable {
 
     private void clear() throws IOException {
         if (Files.exists(staging)) {
-            try (Stream<Path> inside = Files.walk(staging)) {
-                for (Path path : inside.sorted(Comparator.reverseOrder()).toList()) {
-                    Files.deleteIfExists(path);
-                }
-            }
+            WholeFolder.remove(staging);
         }
     }
 

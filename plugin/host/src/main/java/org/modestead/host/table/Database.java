@@ -8,10 +8,9 @@ import java.sql.DriverManager;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.sql.Statement;
-import java.util.Comparator;
 import java.util.List;
 import java.util.Properties;
-import java.util.stream.Stream;
+import org.modestead.host.output.WholeFolder;
 
 /**
  * A private DuckDB database in memory, for one reading or writing of a table. Results are streamed; what does not fit
@@ -122,10 +121,8 @@ final class Database implements AutoCloseable {
     }
 
     private static void remove(Path folder) {
-        try (Stream<Path> inside = Files.walk(folder)) {
-            for (Path path : inside.sorted(Comparator.reverseOrder()).toList()) {
-                Files.deleteIfExists(path);
-            }
+        try {
+            WholeFolder.remove(folder);
         } catch (IOException left) {
             // A temporary folder that cannot be removed harms nobody's result; the system clears it.
             folder.toFile().deleteOnExit();

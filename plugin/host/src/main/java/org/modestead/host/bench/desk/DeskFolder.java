@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.stream.Stream;
+import org.modestead.host.output.WholeFolder;
 import org.modestead.host.workflow.Problem;
 import org.modestead.host.workflow.Workflow;
 import org.modestead.host.workflow.WorkflowFile;
@@ -133,10 +134,8 @@ public record DeskFolder(Path root) {
     /** Removes a desk with what lies in its folder; files elsewhere stay. */
     public void forget(String id) {
         Path folder = folder(id);
-        try (Stream<Path> inside = Files.walk(folder)) {
-            for (Path path : inside.sorted(Comparator.reverseOrder()).toList()) {
-                Files.deleteIfExists(path);
-            }
+        try {
+            WholeFolder.remove(folder);
         } catch (IOException left) {
             throw new DeskFault("desk " + id, "it cannot be removed (" + left.getMessage() + ")", "allow writing in " + folder);
         }

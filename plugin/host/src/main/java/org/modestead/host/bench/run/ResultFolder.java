@@ -22,6 +22,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Stream;
 import org.modestead.engine.Fault;
+import org.modestead.host.output.WholeFolder;
 import org.modestead.host.table.KeptTable;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeResult;
@@ -195,10 +196,8 @@ public record ResultFolder(Path root, String build, long limit) {
         if (!Files.exists(folder)) {
             return;
         }
-        try (Stream<Path> inside = Files.walk(folder)) {
-            for (Path path : inside.sorted(Comparator.reverseOrder()).toList()) {
-                Files.deleteIfExists(path);
-            }
+        try {
+            WholeFolder.remove(folder);
         } catch (IOException left) {
             // without its facts a result counts as not there
             folder.resolve(FACTS).toFile().delete();

@@ -9,12 +9,12 @@ import java.nio.file.StandardCopyOption;
 import java.security.SecureRandom;
 import java.time.Duration;
 import java.time.Instant;
-import java.util.Comparator;
 import java.util.HexFormat;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Stream;
 import org.modestead.host.bench.desk.DeskFault;
+import org.modestead.host.output.WholeFolder;
 
 /**
  * Files that were dropped on the page, each in a folder of its own until a desk takes it.
@@ -140,10 +140,8 @@ public record Uploads(Path folder, long limit) {
         if (!Files.isDirectory(folder)) {
             return;
         }
-        try (Stream<Path> inside = Files.walk(folder)) {
-            for (Path path : inside.sorted(Comparator.reverseOrder()).toList()) {
-                Files.deleteIfExists(path);
-            }
+        try {
+            WholeFolder.remove(folder);
         } catch (IOException left) {
             // it is tried again when the next file comes
             folder.toFile().deleteOnExit();
