@@ -25,6 +25,9 @@ public final class WorkflowFile {
     /** File looked for when a folder is given. */
     public static final String DEFAULT_NAME = "workflow.json";
 
+    /** What is told of a workflow that has no step. */
+    static final String NO_STEP = "no step";
+
     private static final JsonMapper MAPPER = JsonMapper.builder()
             .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
             .enable(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
@@ -43,6 +46,14 @@ public final class WorkflowFile {
         /** Takes an immutable copy. */
         public Reading {
             problems = List.copyOf(problems);
+        }
+
+        /**
+         * Returns the first thing wrong besides having no step yet, which harms nothing until the workflow is to run; where there is
+         * none, the workflow was read whole.
+         */
+        public Optional<Problem> broken() {
+            return problems.stream().filter(problem -> !problem.seen().equals(NO_STEP)).findFirst();
         }
 
         static Reading failed(String file, String key, String seen, String wanted) {

@@ -145,7 +145,7 @@ final class WorkflowTree {
         if (wrong) {
             problem("", "field " + field, JsonKind.of(list), "write a list, [ ... ]");
         } else if (required && list.isEmpty()) {
-            problem("", "field " + field, "no step", "write at least one step");
+            problem("", "field " + field, WorkflowFile.NO_STEP, "write at least one step");
         }
         return list.isArray() ? list : JsonNodeFactory.instance.arrayNode();
     }

@@ -24,7 +24,6 @@ public record DeskFolder(Path root) {
 
     private static final int LONGEST_SLUG = 32;
     private static final int ID_LETTERS = 4;
-    private static final String NO_STEP = "no step";
 
     /** Takes the absolute folder. */
     public DeskFolder {
@@ -110,7 +109,7 @@ public record DeskFolder(Path root) {
      */
     public Desk open(Path given) {
         WorkflowFile.Reading reading = WorkflowFile.read(given);
-        Optional<Problem> broken = reading.problems().stream().filter(problem -> !problem.seen().equals(NO_STEP)).findFirst();
+        Optional<Problem> broken = reading.broken();
         Workflow workflow = reading.workflow().filter(found -> broken.isEmpty()).orElseThrow(() -> {
             Problem problem = broken.orElseThrow();
             String where = Stream.of(given.toString(), problem.step().isEmpty() ? "" : "step " + problem.step(), problem.key())

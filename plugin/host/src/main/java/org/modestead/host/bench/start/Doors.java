@@ -26,8 +26,6 @@ import org.modestead.nodes.contract.NodeCatalog;
  */
 public record Doors(DeskFolder desks, Uploads uploads, OpenedFolders folders, NodeCatalog catalog) {
 
-    private static final String NO_STEP = "no step";
-
     /** An empty desk. */
     public Desk empty(String name) {
         String called = name.isBlank() ? "New workflow" : name.strip();
@@ -55,7 +53,7 @@ public record Doors(DeskFolder desks, Uploads uploads, OpenedFolders folders, No
     public Desk dropped(String text, String name) {
         Path place = desks.root().resolve(WorkflowFile.DEFAULT_NAME);
         WorkflowFile.Reading reading = WorkflowFile.parse(place, text.getBytes(StandardCharsets.UTF_8));
-        Optional<Problem> broken = reading.problems().stream().filter(problem -> !problem.seen().equals(NO_STEP)).findFirst();
+        Optional<Problem> broken = reading.broken();
         Workflow workflow = reading.workflow().filter(found -> broken.isEmpty()).orElseThrow(() -> new DeskFault(name.isBlank() ? "workflow" : name,
                 broken.orElseThrow().key() + ": " + broken.get().seen(), broken.get().wanted()));
         return desks.begin(desks.fresh(workflow.name()), workflow);
