@@ -1,5 +1,7 @@
 package org.modestead.host.workflow;
 
+import java.util.Optional;
+
 /**
  * What carries the value of an output port to an input port.
  *
@@ -15,6 +17,13 @@ public record Link(End from, End to) {
      * @param port id of the port
      */
     public record End(String step, String port) {
+
+        /** Reads an end as it is written; empty when it is written otherwise. */
+        public static Optional<End> read(String text) {
+            String[] parts = text.split("\\.", -1);
+            return parts.length == 2 && !parts[0].isBlank() && !parts[1].isBlank() ? Optional.of(new End(parts[0], parts[1])) : Optional.empty();
+        }
+
         @Override
         public String toString() {
             return step + "." + port;

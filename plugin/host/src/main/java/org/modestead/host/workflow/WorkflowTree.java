@@ -131,12 +131,11 @@ final class WorkflowTree {
 
     private Optional<Link.End> end(JsonNode entry, String field, String place) {
         JsonNode text = entry.path(field);
-        String[] parts = text.asText("").split("\\.", -1);
-        if (text.isTextual() && parts.length == 2 && !parts[0].isBlank() && !parts[1].isBlank()) {
-            return Optional.of(new Link.End(parts[0], parts[1]));
+        Optional<Link.End> end = text.isTextual() ? Link.End.read(text.textValue()) : Optional.empty();
+        if (end.isEmpty()) {
+            problem("", place + ", field " + field, JsonKind.of(text), "write \"step.port\"");
         }
-        problem("", place + ", field " + field, JsonKind.of(text), "write \"step.port\"");
-        return Optional.empty();
+        return end;
     }
 
     private Iterable<JsonNode> list(String field, boolean required) {

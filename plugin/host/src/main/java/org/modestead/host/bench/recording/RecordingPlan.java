@@ -63,13 +63,8 @@ public final class RecordingPlan {
 
     private static void link(List<Link> links, String from, String... targets) {
         for (String to : targets) {
-            links.add(new Link(end(from), end(to)));
+            links.add(new Link(Link.End.read(from).orElseThrow(), Link.End.read(to).orElseThrow()));
         }
-    }
-
-    private static Link.End end(String text) {
-        int dot = text.indexOf('.');
-        return new Link.End(text.substring(0, dot), text.substring(dot + 1));
     }
 
     private Map<String, Object> source(String data) {
