@@ -4,6 +4,7 @@ import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Objects;
+import java.util.regex.Pattern;
 
 /**
  * One step of a workflow file, as written.
@@ -14,6 +15,8 @@ import java.util.Objects;
  * @param label what people wrote on it; says nothing to a run
  */
 public record Step(String id, String node, Map<String, Object> settings, StepLabel label) {
+
+    private static final Pattern ID = Pattern.compile("[A-Za-z0-9][A-Za-z0-9_-]*");
 
     /** Takes an immutable copy. */
     public Step {
@@ -26,6 +29,11 @@ public record Step(String id, String node, Map<String, Object> settings, StepLab
     /** A step on which nobody wrote anything. */
     public Step(String id, String node, Map<String, Object> settings) {
         this(id, node, settings, StepLabel.NONE);
+    }
+
+    /** Returns whether a text may be the id of a step. */
+    public static boolean isId(String text) {
+        return ID.matcher(text).matches();
     }
 
     /** The same step with other settings. */

@@ -12,13 +12,11 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
-import java.util.regex.Pattern;
 import org.modestead.nodes.contract.NearestName;
 
 /** Turns the JSON tree of a workflow file into a workflow and tells everything that does not fit the format. */
 final class WorkflowTree {
 
-    private static final Pattern STEP_ID = Pattern.compile("[A-Za-z0-9][A-Za-z0-9_-]*");
     private static final List<String> WORKFLOW_FIELDS = List.of("format", "name", "steps", "links", "notes");
     private static final List<String> STEP_FIELDS = List.of("id", "node", "settings", "title", "note", "place");
     private static final List<String> LINK_FIELDS = List.of("from", "to");
@@ -73,7 +71,7 @@ final class WorkflowTree {
 
     private Optional<Step> step(JsonNode entry, String place) {
         JsonNode id = entry.path("id");
-        if (!id.isTextual() || !STEP_ID.matcher(id.textValue()).matches()) {
+        if (!id.isTextual() || !Step.isId(id.textValue())) {
             problem("", place + ", field id", JsonKind.of(id), "write an id of letters, digits, - and _ in quotes");
             return Optional.empty();
         }

@@ -6,7 +6,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalInt;
-import java.util.regex.Pattern;
 import org.modestead.host.workflow.Link;
 import org.modestead.host.workflow.Step;
 import org.modestead.host.workflow.StepLabel;
@@ -158,8 +157,6 @@ public sealed interface StepEdit extends Edit {
 
     /** Ids of steps. */
     final class StepIds {
-        private static final Pattern FORM = Pattern.compile("[A-Za-z0-9][A-Za-z0-9_-]*");
-
         private StepIds() {}
 
         /** Returns the wished id, or with a number behind it, so that no other step has it. */
@@ -174,7 +171,7 @@ public sealed interface StepEdit extends Edit {
         }
 
         static String checked(Workflow workflow, String id) {
-            if (!FORM.matcher(id).matches()) {
+            if (!Step.isId(id)) {
                 throw new EditFault("id of a step", "\"" + id + "\"", "use letters, digits, - and _, beginning with a letter or digit");
             }
             if (taken(workflow, id)) {
