@@ -71,8 +71,8 @@ public final class VerdictJson {
         ArrayNode out = NODES.arrayNode();
         findings.forEach(finding -> {
             ObjectNode one = out.addObject().put("check", finding.check()).put("name", Sentence.capital(finding.check().replace('-', ' ')));
-            number(one, "value", finding.value());
-            number(one, "threshold", finding.threshold());
+            Numbers.put(one, "value", finding.value());
+            Numbers.put(one, "threshold", finding.threshold());
             one.put("outcome", outcome(finding)).put("sentence", Sentence.of(finding.sentence()));
         });
         return out;
@@ -83,14 +83,6 @@ public final class VerdictJson {
             return "for information";
         }
         return finding.passed() ? "passed" : "failed";
-    }
-
-    private static void number(ObjectNode out, String name, double value) {
-        if (Double.isFinite(value)) {
-            out.put(name, value);
-        } else {
-            out.putNull(name);
-        }
     }
 
     private static void texts(ArrayNode out, List<String> texts) {

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.modestead.host.bench.look.Numbers;
 import org.modestead.host.bench.run.StepState;
 import org.modestead.host.bench.work.DeskView;
 import org.modestead.host.run.Versions;
@@ -119,10 +120,6 @@ final class DeskJson {
     }
 
     private static void number(ObjectNode json, String field, OptionalDouble value) {
-        if (value.isPresent()) {
-            json.put(field, value.getAsDouble());
-        } else {
-            json.putNull(field);
-        }
+        Numbers.put(json, field, value.orElse(Double.NaN));
     }
 }

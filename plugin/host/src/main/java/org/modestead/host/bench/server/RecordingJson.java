@@ -8,6 +8,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.modestead.host.bench.look.FigureJson;
+import org.modestead.host.bench.look.Numbers;
 import org.modestead.host.bench.recording.RecordingGuess;
 
 /** What is guessed of a recording, as JSON. */
@@ -32,25 +33,17 @@ final class RecordingJson {
             }
             ObjectNode entry = all.addObject().put("name", column.name()).put("title", column.title()).put("unit", column.unit()).put("cell", column.type().name())
                     .put("type", column.type().title()).put("missing", column.missing());
-            number(entry, "low", column.low());
-            number(entry, "high", column.high());
+            Numbers.put(entry, "low", column.low());
+            Numbers.put(entry, "high", column.high());
             entry.put("role", column.role()).put("why", column.why());
         });
         json.put("rows", guess.rows()).put("whole", guess.whole()).put("runs", guess.runs().runs().size());
-        number(json, "step", guess.step());
+        Numbers.put(json, "step", guess.step());
         json.put("even", guess.runs().isEven());
         json.set("sentences", NodesJson.texts(guess.sentences()));
         json.set("problems", NodesJson.texts(guess.problems()));
         json.set("figure", guess.figure().<JsonNode>map(FigureJson::of).orElse(JSON.nullNode()));
         return json;
-    }
-
-    private static void number(ObjectNode json, String field, double value) {
-        if (Double.isFinite(value)) {
-            json.put(field, value);
-        } else {
-            json.putNull(field);
-        }
     }
 
     static List<String> texts(JsonNode list) {
