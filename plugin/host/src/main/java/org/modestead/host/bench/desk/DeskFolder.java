@@ -47,9 +47,18 @@ public record DeskFolder(Path root) {
      */
     public record Kept(String id, String name, Path file, Instant changed, boolean unsaved, int steps) {}
 
+    private Path all() {
+        return root.resolve("desks");
+    }
+
+    /** Returns where the desk of an id lies. */
+    public Path place(String id) {
+        return all().resolve(id);
+    }
+
     /** Returns the desks, the one changed last first. */
     public List<Kept> desks() {
-        Path desks = root.resolve("desks");
+        Path desks = all();
         if (!Files.isDirectory(desks)) {
             return List.of();
         }
@@ -74,9 +83,9 @@ public record DeskFolder(Path root) {
     /** Returns whether a file is the bench's own bookkeeping, of no use to a person who looks for tables. */
     public boolean keepsBooksIn(Path file) {
         boolean top = root.equals(file.getParent());
-        boolean inDesk = file.startsWith(root.resolve("desks")) && file.getNameCount() == root.getNameCount() + 3;
+        boolean inDesk = file.startsWith(all()) && file.getNameCount() == root.getNameCount() + 3;
         String name = file.getFileName().toString();
-        return top && !name.equals("desks") || inDesk && (name.equals(Journal.NAME) || name.equals(Desk.LATEST));
+        return top && !file.equals(all()) || inDesk && (name.equals(Journal.NAME) || name.equals(Desk.LATEST));
     }
 
     /** Makes the folder of a new desk, for files that shall lie beside its workflow. */
@@ -85,7 +94,7 @@ public record DeskFolder(Path root) {
         String slug = slug(name);
         try {
             while (true) {
-                Path folder = root.resolve("desks").resolve(slug + "-" + letters(random.nextLong()));
+                Path folder = place(slug + "-" + letters(random.nextLong()));
                 if (!Files.exists(folder)) {
                     return Files.createDirectories(folder);
                 }
@@ -141,7 +150,7 @@ public record DeskFolder(Path root) {
     }
 
     private Path folder(String id) {
-        Path folder = root.resolve("desks").resolve(id);
+        Path folder = place(id);
         if (!id.matches("[a-z0-9-]+") || !Files.isDirectory(folder)) {
             throw new DeskFault("desk " + id, "there is none of this name", "choose one that is there");
         }
@@ -150,7 +159,7 @@ public record DeskFolder(Path root) {
 
     /** A file that lies in a desk's own folder is that desk's; another one has a desk of its own, always the same. */
     private Path of(Path file) {
-        Path desks = root.resolve("desks");
+        Path desks = all();
         Path owner = file.getParent();
         if (owner != null && desks.equals(owner.getParent()) && file.getFileName().toString().equals(WorkflowFile.DEFAULT_NAME)) {
             return owner;

@@ -107,7 +107,7 @@ final class StartRoutes {
     }
 
     private String path(DeskView.Open open, String id) {
-        Path own = doors.desks().root().resolve("desks").resolve(open.id());
+        Path own = doors.desks().place(open.id());
         Path file = doors.uploads().into(id, own.resolve("data"));
         Path base = open.workflow().baseFolder();
         return base.equals(own) ? "data/" + file.getFileName() : file.toString();
