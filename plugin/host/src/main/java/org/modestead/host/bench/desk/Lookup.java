@@ -42,8 +42,4 @@ final class Lookup {
         step(workflow, id);
         return workflow.with(workflow.steps().stream().map(step -> step.id().equals(id) ? change.apply(step) : step).toList(), workflow.links());
     }
-
-    static NodeDeclaration.Stage stage(Step step, NodeCatalog catalog) {
-        return catalog.find(step.node()).map(node -> node.declaration().stage()).orElse(NodeDeclaration.Stage.DATA);
-    }
 }

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.modestead.host.bench.desk.Bands;
 import org.modestead.host.bench.look.Numbers;
 import org.modestead.host.bench.run.StepState;
 import org.modestead.host.bench.work.DeskView;
@@ -50,7 +51,7 @@ final class DeskJson {
         int place = 0;
         String band = "";
         for (Step step : desk.ordered()) {
-            String stage = stage(step);
+            String stage = NodesJson.word(Bands.stage(step, catalog));
             place = stage.equals(band) ? place + 1 : 0;
             band = stage;
             steps.add(step(desk, step, stage, place));
@@ -88,10 +89,6 @@ final class DeskJson {
                     .map(link -> link.from().toString()).findFirst().orElse(null));
         }
         return json;
-    }
-
-    private String stage(Step step) {
-        return NodesJson.word(catalog.find(step.node()).map(node -> node.declaration().stage()).orElse(NodeDeclaration.Stage.DATA));
     }
 
     static ObjectNode state(StepState state) {
