@@ -6,12 +6,11 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 import java.util.stream.IntStream;
 import org.modestead.engine.recording.Channel;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.words.NameWithUnit;
 
 /**
  * A column of the table and the names of the channels it gives: one, or one an entry where it holds lists.
@@ -23,8 +22,6 @@ import org.modestead.nodes.table.TableSchema;
  * @param names as columns of single numbers would have them, with units in brackets
  */
 record MeasuredColumn(String column, List<String> names) {
-
-    private static final Pattern NAME_AND_UNIT = Pattern.compile("(.*\\S)\\s*\\[([^\\[\\]]*)\\]\\s*");
 
     /** Takes an immutable copy. */
     MeasuredColumn {
@@ -83,12 +80,10 @@ record MeasuredColumn(String column, List<String> names) {
 
     /** Returns a name without the unit in brackets at its end. */
     static String base(String name) {
-        Matcher match = NAME_AND_UNIT.matcher(name);
-        return match.matches() ? match.group(1) : name;
+        return NameWithUnit.of(name).name();
     }
 
     private static Optional<String> bracketed(String name) {
-        Matcher match = NAME_AND_UNIT.matcher(name);
-        return match.matches() ? Optional.of(match.group(2).strip()) : Optional.empty();
+        return NameWithUnit.of(name).unit();
     }
 }

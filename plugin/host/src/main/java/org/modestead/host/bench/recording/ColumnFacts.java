@@ -1,8 +1,10 @@
 package org.modestead.host.bench.recording;
 
+import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.words.NameWithUnit;
 
 /**
  * What was seen in a column of a table.
@@ -22,29 +24,27 @@ public record ColumnFacts(Column column, long cells, long missing, double low, d
     /** Different values are counted up to here. */
     static final int MOST_DISTINCT = 20_000;
 
-    private static final Pattern BRACKETS = Pattern.compile("(.*\\S)\\s*\\[([^\\[\\]]*)\\]\\s*");
     private static final Pattern PARENTHESES = Pattern.compile("(.*\\S)\\s*\\(([^()]*)\\)\\s*");
 
     /** Returns the name without a unit behind it. */
     String title() {
-        Matcher match = match();
-        return match.matches() ? match.group(1) : column.name();
+        return named().name();
     }
 
     /** Returns the unit that stands behind the name in brackets or parentheses; empty without one. */
     String unit() {
-        Matcher match = match();
-        return match.matches() ? match.group(2).strip() : "";
+        return named().unit().orElse("");
     }
 
     /** Returns whether the unit stands in brackets, where it needs no setting. */
     boolean isBracketed() {
-        return BRACKETS.matcher(column.name()).matches();
+        return NameWithUnit.of(column.name()).unit().isPresent();
     }
 
-    private Matcher match() {
-        Matcher brackets = BRACKETS.matcher(column.name());
-        return brackets.matches() ? brackets.reset() : PARENTHESES.matcher(column.name());
+    private NameWithUnit named() {
+        NameWithUnit named = NameWithUnit.of(column.name());
+        Matcher match = PARENTHESES.matcher(column.name());
+        return named.unit().isPresent() || !match.matches() ? named : new NameWithUnit(match.group(1), Optional.of(match.group(2).strip()));
     }
 
     /** Returns whether all cells are the same. */

@@ -6,8 +6,6 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import io.javalin.Javalin;
 import io.javalin.http.Context;
 import java.util.Map;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 import org.modestead.engine.Fault;
 import org.modestead.host.bench.check.DialogData;
 import org.modestead.host.bench.check.Fitting;
@@ -16,12 +14,12 @@ import org.modestead.host.bench.work.Workbench;
 import org.modestead.host.workflow.Link;
 import org.modestead.host.workflow.Step;
 import org.modestead.nodes.table.Column;
+import org.modestead.nodes.words.NameWithUnit;
 
 /** Dialogs of steps, and which ends of links fit. */
 final class StepRoutes {
 
     private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
-    private static final Pattern WITH_UNIT = Pattern.compile(".*\\S\\s*\\[([^\\[\\]]*)\\]\\s*");
 
     private final Workbench workbench;
 
@@ -76,8 +74,7 @@ final class StepRoutes {
 
     /** Returns the unit that stands in brackets behind a name; empty without one. */
     static String unit(String name) {
-        Matcher unit = WITH_UNIT.matcher(name);
-        return unit.matches() ? unit.group(1).strip() : "";
+        return NameWithUnit.of(name).unit().orElse("");
     }
 
     private void fitting(Context context) {
