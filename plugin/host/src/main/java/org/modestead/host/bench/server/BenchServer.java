@@ -32,7 +32,7 @@ public final class BenchServer implements AutoCloseable {
         this.doors = doors;
         this.nodes = Answer.bytes(NodesJson.of(catalog));
         this.deskJson = new DeskJson(catalog);
-        this.looks = new LookRoutes(workbench);
+        this.looks = new LookRoutes(workbench.looks());
         this.events = new EventStream(workbench, deskJson);
         this.gate = Gate.fresh(port);
         this.server = Javalin.create(config -> {

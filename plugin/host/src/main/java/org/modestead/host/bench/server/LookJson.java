@@ -19,7 +19,7 @@ import org.modestead.host.bench.look.FigureJson;
 import org.modestead.host.bench.look.Matrices;
 import org.modestead.host.bench.look.PortFigures;
 import org.modestead.host.bench.look.VerdictJson;
-import org.modestead.host.bench.work.Workbench;
+import org.modestead.host.bench.work.Looks;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.Port;
@@ -39,22 +39,22 @@ final class LookJson {
 
     private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
 
-    private final Workbench workbench;
-    private final Workbench.Looked looked;
+    private final Looks looks;
+    private final Looks.Looked looked;
     private final NodeDeclaration declaration;
     private final NodeResult result;
     private final TimeUnit time;
 
-    private LookJson(Workbench workbench, Workbench.Looked looked) {
-        this.workbench = workbench;
+    private LookJson(Looks looks, Looks.Looked looked) {
+        this.looks = looks;
         this.looked = looked;
         this.declaration = looked.node().declaration();
         this.result = looked.result();
-        this.time = timeUnit(workbench, looked);
+        this.time = timeUnit(looks, looked);
     }
 
-    static ObjectNode of(Workbench workbench, Workbench.Looked looked) {
-        return new LookJson(workbench, looked).json();
+    static ObjectNode of(Looks looks, Looks.Looked looked) {
+        return new LookJson(looks, looked).json();
     }
 
     private ObjectNode json() {
@@ -84,7 +84,7 @@ final class LookJson {
 
     /** Returns the modes that were judged: the result's own, or those that feed the step. */
     private Optional<Spectrum> spectrum() {
-        return spectrum(result).or(() -> workbench.upstream(looked.step().id(), LookJson::spectrum));
+        return spectrum(result).or(() -> looks.upstream(looked.step().id(), LookJson::spectrum));
     }
 
     private static Optional<Spectrum> spectrum(NodeResult result) {
@@ -148,8 +148,8 @@ final class LookJson {
     }
 
     /** Returns the time unit that a result is told in: as its own values tell, or those that feed the step. */
-    static TimeUnit timeUnit(Workbench workbench, Workbench.Looked looked) {
-        return timeUnit(looked.result()).or(() -> workbench.upstream(looked.step().id(), LookJson::timeUnit)).orElseGet(() -> new TimeUnit(""));
+    static TimeUnit timeUnit(Looks looks, Looks.Looked looked) {
+        return timeUnit(looked.result()).or(() -> looks.upstream(looked.step().id(), LookJson::timeUnit)).orElseGet(() -> new TimeUnit(""));
     }
 
     private static Optional<TimeUnit> timeUnit(NodeResult result) {

@@ -21,7 +21,7 @@ import org.modestead.host.bench.look.FigureJson;
 import org.modestead.host.bench.look.HeatMap;
 import org.modestead.host.bench.look.Matrices;
 import org.modestead.host.bench.look.PortFigures;
-import org.modestead.host.bench.work.Workbench;
+import org.modestead.host.bench.work.Looks;
 import org.modestead.host.output.CsvWriter;
 import org.modestead.host.table.TablePages;
 import org.modestead.nodes.contract.Port;
@@ -43,15 +43,15 @@ final class LookRoutes implements AutoCloseable {
     private static final long SAFE_WHOLE = 1L << 53;
     private static final String REPORT_POLICY = "default-src 'none'; style-src 'unsafe-inline'; img-src data:; frame-ancestors 'none'; base-uri 'none'";
 
-    private final Workbench workbench;
+    private final Looks looks;
     private final TableLooks tables = new TableLooks();
 
-    LookRoutes(Workbench workbench) {
-        this.workbench = workbench;
+    LookRoutes(Looks looks) {
+        this.looks = looks;
     }
 
     void on(Javalin server) {
-        server.get("/api/steps/{id}/look", context -> Answer.json(context, LookJson.of(workbench, looked(context))));
+        server.get("/api/steps/{id}/look", context -> Answer.json(context, LookJson.of(looks, looked(context))));
         server.get("/api/steps/{id}/figures/{figure}", context -> figure(context, looked(context).result().figures()));
         server.get("/api/steps/{id}/ports/{port}/figures/{figure}", context -> figure(context, PortFigures.of(value(looked(context), context.pathParam("port")))));
         server.get("/api/steps/{id}/tables/{port}", this::table);
@@ -59,11 +59,11 @@ final class LookRoutes implements AutoCloseable {
         server.get("/api/steps/{id}/ports/{file}", this::port);
         server.get("/api/steps/{id}/document", context -> Answer.json(context, DocumentJson.of(document(looked(context)))));
         server.get("/api/steps/{id}/report.html", context -> report(context, document(looked(context))));
-        server.get("/api/report.html", context -> report(context, workbench.report()));
+        server.get("/api/report.html", context -> report(context, looks.report()));
     }
 
-    private Workbench.Looked looked(Context context) {
-        return workbench.look(context.pathParam("id"));
+    private Looks.Looked looked(Context context) {
+        return looks.look(context.pathParam("id"));
     }
 
     private void figure(Context context, List<Figure> figures) {
@@ -110,7 +110,7 @@ final class LookRoutes implements AutoCloseable {
         String name = context.pathParam("port");
         boolean csv = name.endsWith(".csv");
         String port = csv ? name.substring(0, name.length() - ".csv".length()) : name;
-        Workbench.Looked looked = looked(context);
+        Looks.Looked looked = looked(context);
         if (!(value(looked, port) instanceof Table table)) {
             throw missing("table " + port);
         }
@@ -127,7 +127,7 @@ final class LookRoutes implements AutoCloseable {
         }
         TablePages.Wish wish = new TablePages.Wish((long) number(context, "offset", 0), (int) number(context, "limit", USUAL_ROWS), column,
                 "down".equals(context.queryParam("order")), Optional.ofNullable(context.queryParam("find")).orElse(""));
-        Answer.json(context, page(LookJson.columns(table, LookJson.timeUnit(workbench, looked), looked.node().declaration()), wish,
+        Answer.json(context, page(LookJson.columns(table, LookJson.timeUnit(looks, looked), looked.node().declaration()), wish,
                  tables.page(looked.id() + "." + port, table, wish)));
     }
 
@@ -172,7 +172,7 @@ final class LookRoutes implements AutoCloseable {
 
     private void port(Context context) throws IOException {
         String name = context.pathParam("file");
-        Workbench.Looked looked = looked(context);
+        Looks.Looked looked = looked(context);
         Port port = looked.node().declaration().outputs().stream().filter(found -> name.equals(found.id() + ".zip") && found.type() != PortType.TABLE)
                 .findFirst().orElseThrow(() -> missing("file " + name));
         Answer.file(context, context.pathParam("id") + "-" + name);
@@ -182,11 +182,11 @@ final class LookRoutes implements AutoCloseable {
         }
     }
 
-    private static Object value(Workbench.Looked looked, String port) {
+    private static Object value(Looks.Looked looked, String port) {
         return Optional.ofNullable(looked.result().outputs().get(port)).orElseThrow(() -> missing("output " + port));
     }
 
-    private static ReportDocument document(Workbench.Looked looked) {
+    private static ReportDocument document(Looks.Looked looked) {
         return looked.result().document().orElseThrow(() -> missing("report"));
     }
 

@@ -1,23 +1,14 @@
 package org.modestead.host.bench.work;
 
 import java.nio.file.Path;
-import java.time.Duration;
-import java.util.ArrayDeque;
 import java.util.ArrayList;
-import java.util.Deque;
 import java.util.HashMap;
-import java.util.HashSet;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
-import java.util.TreeMap;
-import java.util.function.Function;
 import java.util.function.Supplier;
-import org.modestead.engine.Fault;
-import org.modestead.engine.Progress;
 import org.modestead.host.bench.check.DialogData;
 import org.modestead.host.bench.check.Fitting;
 import org.modestead.host.bench.desk.Change;
@@ -34,8 +25,6 @@ import org.modestead.host.bench.run.KeptResults;
 import org.modestead.host.bench.run.Spans;
 import org.modestead.host.bench.run.StepState;
 import org.modestead.host.run.DefectLog;
-import org.modestead.host.run.RunDocument;
-import org.modestead.host.run.RunResult;
 import org.modestead.host.run.StepOutcome;
 import org.modestead.host.workflow.Link;
 import org.modestead.host.workflow.PlannedStep;
@@ -44,10 +33,6 @@ import org.modestead.host.workflow.Step;
 import org.modestead.host.workflow.Workflow;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
-import org.modestead.nodes.contract.NodeInputs;
-import org.modestead.nodes.contract.NodeResult;
-import org.modestead.nodes.contract.RunContext;
-import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.words.Sentence;
 
 /**
@@ -60,6 +45,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     private final KeptResults results;
     private final OpenedFolders folders;
     private final Overview overview;
+    private final Looks looks;
     private Optional<Desk> desk = Optional.empty();
     private Optional<BenchRun> run = Optional.empty();
     private Map<String, String> running = Map.of();
@@ -79,6 +65,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         this.results = results;
         this.folders = folders;
         this.overview = new Overview(catalog, results);
+        this.looks = new Looks(this, results);
     }
 
     /** How a step ended without a result. */
@@ -298,97 +285,28 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     }
 
     /**
-     * A result that is looked at.
+     * A step and what is shown of it.
      *
-     * @param id names it
      * @param step as it stands
      * @param node of the step
-     * @param result what the node gave
-     * @param stale whether it belongs to other settings, inputs or files
+     * @param known of the document
+     * @param result names the result that can be looked at; empty without one
      */
-    public record Looked(String id, Step step, Node node, NodeResult result, boolean stale) {}
+    record Shown(Step step, Node node, Overview.Found known, Optional<String> result) {}
 
-    /**
-     * Returns the result of a step; one that costs nothing to make is made again where it was not kept.
-     *
-     * @throws DeskFault if there is none
-     */
-    public Looked look(String id) {
-        Step step;
-        Overview.Found known;
-        Optional<String> shown;
-        synchronized (this) {
-            step = step(id);
-            known = found();
-            shown = view().desk().orElseThrow().standing().get(id).result();
-        }
-        Node node = catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + id, "its node is not known", "remove the step"));
-        String result = shown.orElseThrow(() -> new DeskFault("step " + id, "it has no result", "run it first"));
-        Optional<NodeResult> kept = results.find(node.declaration(), result);
-        boolean fresh = known.identity(id).filter(result::equals).isPresent();
-        PlannedStep planned = known.inspection().survey().planned().get(id);
-        if (kept.isEmpty() && fresh && results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
-            kept = Optional.of(madeAnew(planned, result));
-        }
-        return new Looked(result, step, node, kept.orElseThrow(() -> new DeskFault("step " + id, "its result is no longer kept", "run it again")), !fresh);
+    /** Returns a step and what is shown of it, all of one moment. */
+    synchronized Shown shown(String id) {
+        Step step = step(id);
+        return new Shown(step, node(step), found(), view().desk().orElseThrow().standing().get(id).result());
     }
 
-    private NodeResult madeAnew(PlannedStep step, String result) {
-        Map<String, Object> inputs = new HashMap<>();
-        step.inputs().forEach((port, source) -> inputs.put(port, look(source.step()).result().outputs().get(source.port())));
-        Path folder = workflow().baseFolder();
-        NodeResult made = step.node().run(new NodeInputs(inputs), step.settings(), new RunContext(Progress.NONE, folder, folder));
-        results.remember(result, made);
-        return made;
+    private Node node(Step step) {
+        return catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + step.id(), "its node is not known", "remove the step"));
     }
 
-    /**
-     * Asks the results that feed a step, the nearest first, until one answers.
-     *
-     * @param id of the step
-     * @param question put to each result
-     */
-    public <T> Optional<T> upstream(String id, Function<NodeResult, Optional<T>> question) {
-        Map<String, Map<String, Link.End>> inputs = found().inspection().survey().inputs();
-        Deque<String> waiting = new ArrayDeque<>(List.of(id));
-        Set<String> seen = new HashSet<>(waiting);
-        while (!waiting.isEmpty()) {
-            for (Link.End source : new TreeMap<>(inputs.getOrDefault(waiting.remove(), Map.of())).values()) {
-                if (seen.add(source.step())) {
-                    waiting.add(source.step());
-                    Optional<T> answer = answer(source.step(), question);
-                    if (answer.isPresent()) {
-                        return answer;
-                    }
-                }
-            }
-        }
-        return Optional.empty();
-    }
-
-    private <T> Optional<T> answer(String step, Function<NodeResult, Optional<T>> question) {
-        try {
-            return question.apply(look(step).result());
-        } catch (Fault nothingThere) {
-            return Optional.empty();
-        }
-    }
-
-    /** Returns the report of all results on the desk; what has none is told in it. */
-    public ReportDocument report() {
-        Workflow workflow = workflow();
-        Overview.Found known = found();
-        Map<String, StepOutcome> outcomes = new LinkedHashMap<>();
-        List<PlannedStep> order = new ArrayList<>();
-        for (String id : known.inspection().survey().order()) {
-            PlannedStep step = known.inspection().survey().planned().get(id);
-            if (step != null) {
-                order.add(step);
-                outcomes.put(id, known.fresh(id) ? new StepOutcome.Done(look(id).result(), Duration.ZERO, true)
-                        : new StepOutcome.Failed("step " + id + ": it has no result that belongs to what is set; run it.", Optional.empty(), Duration.ZERO));
-            }
-        }
-        return RunDocument.of(new RunResult(new RunPlan(workflow, order, order), outcomes, workflow.baseFolder(), Duration.ZERO, false));
+    /** Returns the results of the open desk, to be looked at. */
+    public Looks looks() {
+        return looks;
     }
 
     /** Returns a step as it stands. */
@@ -404,7 +322,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      */
     public synchronized DialogData dialog(String id, Map<String, Object> typed) {
         Step step = step(id);
-        Node node = catalog.find(step.node()).orElseThrow(() -> new DeskFault("step " + id, "its node is not known", "remove the step"));
+        Node node = node(step);
         Workflow workflow = workflow();
         return DialogData.of(step, node, typed, found().inspection().survey(),
                 changed -> FileSettings.problems(changed, workflow.baseFolder(), node.declaration(), folders(workflow)));
