@@ -44,10 +44,10 @@ public final class BenchRun {
     public interface Watcher {
 
         /** A step began. */
-        void began(BenchRun run, String step);
+        void began();
 
         /** A step ended. */
-        void ended(BenchRun run, PlannedStep step, StepOutcome outcome);
+        void ended(PlannedStep step, StepOutcome outcome);
 
         /** The run is over; nothing more comes from it. */
         void over(BenchRun run, Map<String, StepOutcome> outcomes, boolean stopped);
@@ -185,7 +185,7 @@ public final class BenchRun {
             working.put(step, new Work(System.nanoTime(), 0, ""));
             synchronized (over) {
                 if (over.getCount() > 0) {
-                    watcher.began(BenchRun.this, step);
+                    watcher.began();
                 }
             }
         }
@@ -202,7 +202,7 @@ public final class BenchRun {
             synchronized (over) {
                 if (over.getCount() > 0) {
                     PlannedStep planned = plan.order().stream().filter(found -> found.id().equals(step)).findFirst().orElseThrow();
-                    watcher.ended(BenchRun.this, planned, outcome);
+                    watcher.ended(planned, outcome);
                 }
             }
         }

@@ -204,12 +204,12 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     }
 
     @Override
-    public synchronized void began(BenchRun from, String step) {
+    public synchronized void began() {
         told();
     }
 
     @Override
-    public synchronized void ended(BenchRun from, PlannedStep step, StepOutcome outcome) {
+    public synchronized void ended(PlannedStep step, StepOutcome outcome) {
         String identity = running.getOrDefault(step.id(), "");
         if (outcome instanceof StepOutcome.Done done) {
             if (!done.cached() || results.facts(identity).isEmpty()) {
