@@ -5,6 +5,7 @@ import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Objects;
+import java.util.function.Supplier;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 
@@ -62,9 +63,26 @@ public record HeatMap(String id, String title, String caption, Side rows, Side c
         }
     }
 
-    /** Returns what a list of matrices says of each. */
-    public ObjectNode headline() {
-        return NODES.objectNode().put("id", id).put("title", title).put("rows", values.numRows).put("columns", values.numCols);
+    /**
+     * A matrix that can be looked at, and is computed only then.
+     *
+     * @param id of the matrix
+     * @param title of the matrix
+     * @param rows how many
+     * @param columns how many
+     * @param map computes it
+     */
+    public record Offer(String id, String title, int rows, int columns, Supplier<HeatMap> map) {
+
+        /** Returns what a list of matrices says of each. */
+        public ObjectNode headline() {
+            return NODES.objectNode().put("id", id).put("title", title).put("rows", rows).put("columns", columns);
+        }
+    }
+
+    /** Offers a matrix that is there already. */
+    Offer offer() {
+        return new Offer(id, title, values.numRows, values.numCols, () -> this);
     }
 
     /** Returns the matrix, thinned to at most {@value #MOST} rows and columns, with the range of all its entries. */
@@ -73,7 +91,7 @@ public record HeatMap(String id, String title, String caption, Side rows, Side c
         int everyColumn = every(values.numCols);
         int shownRows = count(values.numRows, everyRow);
         int shownColumns = count(values.numCols, everyColumn);
-        ObjectNode out = headline().put("caption", caption + thinned(everyRow, everyColumn)).put("shownRows", shownRows)
+        ObjectNode out = offer().headline().put("caption", caption + thinned(everyRow, everyColumn)).put("shownRows", shownRows)
                 .put("shownColumns", shownColumns).put("everyRow", everyRow).put("everyColumn", everyColumn).put("rowTitle", rows.title())
                 .put("columnTitle", columns.title()).put("diverging", diverging);
         side(out, "row", rows, everyRow);

@@ -22,6 +22,10 @@ import org.modestead.engine.spectrum.Spectrum;
 /** The matrices that a value holds, as maps of colours. */
 public final class Matrices {
     private static final int MOST_FUNCTIONS = 512;
+    private static final String GRAM = "gram";
+    private static final String GRAM_TITLE = "Gram matrix of the kernel sections";
+    private static final String OVERLAP = "overlap";
+    private static final String OVERLAP_TITLE = "Overlap of the eigenfunctions";
 
     private Matrices() {}
 
@@ -32,7 +36,7 @@ public final class Matrices {
      * @return of an operator the compressed operator and the Gram matrix of kernel sections; of a spectrum the overlap of its
      *     eigenfunctions and the weights of its modes; of a model all of them; nothing of other values
      */
-    public static List<HeatMap> of(Object value) {
+    public static List<HeatMap.Offer> of(Object value) {
         if (value instanceof FittedOperator operator) {
             return operator(operator);
         }
@@ -43,25 +47,25 @@ public final class Matrices {
                 : List.of();
     }
 
-    private static List<HeatMap> operator(FittedOperator operator) {
-        List<HeatMap> out = new ArrayList<>();
+    private static List<HeatMap.Offer> operator(FittedOperator operator) {
+        List<HeatMap.Offer> out = new ArrayList<>();
         OrthonormalCompression chosen = operator.chosen();
         out.add(new HeatMap("compressed-operator", "Compressed operator at rank " + operator.rank(), "How the operator carries the"
                 + " orthonormal functions into each other: the column says which function, the row what of it is found in which function."
                 + " A map that is its own mirror image about the diagonal belongs to a self-adjoint operator, whose eigenfunctions are"
-                + " orthogonal.", HeatMap.Side.numbered("function"), HeatMap.Side.numbered("function"), true, chosen.action()));
+                + " orthogonal.", HeatMap.Side.numbered("function"), HeatMap.Side.numbered("function"), true, chosen.action()).offer());
         if (operator.compression().rank() > operator.rank()) {
             out.add(new HeatMap("whole-operator", "Compressed operator up to rank " + operator.compression().rank(), "The same up to the"
                     + " largest rank that the data support. The block of the first " + operator.rank() + " rows and columns belongs to the"
                     + " chosen rank; the ladder climbs from block to block.", HeatMap.Side.numbered("function"),
-                    HeatMap.Side.numbered("function"), true, operator.compression().action()));
+                    HeatMap.Side.numbered("function"), true, operator.compression().action()).offer());
         }
         gram(operator.compression().basis()).ifPresent(out::add);
         return out;
     }
 
     /** The kernel at all pairs of centres, which is their Gram matrix in the space. */
-    private static Optional<HeatMap> gram(FunctionBasis basis) {
+    private static Optional<HeatMap.Offer> gram(FunctionBasis basis) {
         if (basis instanceof KernelSections sections) {
             return Optional.of(gram(sections.kernel(), sections.centres(), "centre"));
         }
@@ -69,12 +73,17 @@ public final class Matrices {
                 : Optional.empty();
     }
 
-    private static HeatMap gram(Kernel kernel, DMatrixRMaj centres, String title) {
+    private static HeatMap.Offer gram(Kernel kernel, DMatrixRMaj centres, String title) {
         int every = Math.max(1, (centres.numRows + MOST_FUNCTIONS - 1) / MOST_FUNCTIONS);
+        int shown = (centres.numRows + every - 1) / every;
+        return new HeatMap.Offer(GRAM, GRAM_TITLE, shown, shown, () -> gram(kernel, centres, title, every));
+    }
+
+    private static HeatMap gram(Kernel kernel, DMatrixRMaj centres, String title, int every) {
         DMatrixRMaj some = rows(centres, every);
         String left = every == 1 ? "" : " Every " + every + "th of " + centres.numRows + " is shown.";
         DMatrixRMaj values = kernel.matrix(some, some);
-        return new HeatMap("gram", "Gram matrix of the kernel sections", "The kernel " + kernel.spec().label() + " at all pairs of "
+        return new HeatMap(GRAM, GRAM_TITLE, "The kernel " + kernel.spec().label() + " at all pairs of "
                 + title + "s: how alike two sections are in the space. A map of one level says that the sections can hardly be told apart;"
                 + " a bright diagonal alone, that none knows of another." + left, HeatMap.Side.numbered(title),
                 HeatMap.Side.numbered(title), CommonOps_DDRM.elementMin(values) < 0, values);
@@ -88,23 +97,27 @@ public final class Matrices {
         return out;
     }
 
-    private static List<HeatMap> spectrum(Spectrum spectrum) {
+    private static List<HeatMap.Offer> spectrum(Spectrum spectrum) {
         List<Integer> order = spectrum.modes().stream().flatMap(mode -> mode.indices().stream()).toList();
         List<Mode> modes = spectrum.modes().stream().filter(mode -> !mode.weights().isEmpty()).toList();
-        List<HeatMap> out = new ArrayList<>();
+        List<HeatMap.Offer> out = new ArrayList<>();
         if (!order.isEmpty()) {
-            out.add(new HeatMap("overlap", "Overlap of the eigenfunctions", "Size of the inner product of every two eigenfunctions of unit"
-                    + " length, a conjugate pair as two: 0 for orthogonal ones, 1 for such that cannot be told apart. Where modes overlap, the"
-                    + " weight of one depends on which others are fitted with it.", eigenfunctions(spectrum), eigenfunctions(spectrum), false,
-                    overlap(spectrum.vectors(), order)));
+            out.add(new HeatMap.Offer(OVERLAP, OVERLAP_TITLE, order.size(), order.size(), () -> overlap(spectrum, order)));
         }
         if (!modes.isEmpty()) {
             out.add(new HeatMap("weights", "Weights of the modes", "Size of each mode's weight in every component of the state, relative to the"
                     + " largest weight of the mode, in prepared units: the newest sample of every channel first, then earlier ones.",
                     new HeatMap.Side("mode", modes.stream().map(mode -> Integer.toString(mode.number())).toList(), modes.stream()
-                            .map(Matrices::selection).toList()), components(spectrum, modes.get(0).weights().size()), false, weights(modes)));
+                            .map(Matrices::selection).toList()), components(spectrum, modes.get(0).weights().size()), false, weights(modes)).offer());
         }
         return out;
+    }
+
+    private static HeatMap overlap(Spectrum spectrum, List<Integer> order) {
+        return new HeatMap(OVERLAP, OVERLAP_TITLE, "Size of the inner product of every two eigenfunctions of unit"
+                + " length, a conjugate pair as two: 0 for orthogonal ones, 1 for such that cannot be told apart. Where modes overlap, the"
+                + " weight of one depends on which others are fitted with it.", eigenfunctions(spectrum), eigenfunctions(spectrum), false,
+                overlap(spectrum.vectors(), order));
     }
 
     private static HeatMap.Side eigenfunctions(Spectrum spectrum) {

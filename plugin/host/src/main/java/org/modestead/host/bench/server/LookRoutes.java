@@ -165,9 +165,9 @@ final class LookRoutes implements AutoCloseable {
 
     private void matrix(Context context) {
         String id = context.pathParam("matrix");
-        HeatMap matrix = Matrices.of(value(looked(context), context.pathParam("port"))).stream().filter(found -> found.id().equals(id)).findFirst()
+        HeatMap.Offer matrix = Matrices.of(value(looked(context), context.pathParam("port"))).stream().filter(found -> found.id().equals(id)).findFirst()
                 .orElseThrow(() -> missing("matrix " + id));
-        Answer.json(context, matrix.json());
+        Answer.json(context, matrix.map().get().json());
     }
 
     private void port(Context context) throws IOException {

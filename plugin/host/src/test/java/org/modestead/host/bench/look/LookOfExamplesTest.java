@@ -54,14 +54,14 @@ class LookOfExamplesTest {
 
     @Test
     void theCompressedOperatorIsShownAtTheChosenRank() {
-        HeatMap map = Matrices.of(operator).get(0);
+        HeatMap map = Matrices.of(operator).get(0).map().get();
         assertEquals(operator.rank(), map.values().numRows);
         assertTrue(map.diverging());
     }
 
     @Test
     void eigenfunctionsOverlapThemselvesFullyAndOthersSymmetrically() {
-        HeatMap map = Matrices.of(spectrum).stream().filter(one -> one.id().equals("overlap")).findFirst().orElseThrow();
+        HeatMap map = Matrices.of(spectrum).stream().filter(one -> one.id().equals("overlap")).findFirst().orElseThrow().map().get();
         DMatrixRMaj overlap = map.values();
         for (int i = 0; i < overlap.numRows; i++) {
             // vectors are of unit length to rounding
