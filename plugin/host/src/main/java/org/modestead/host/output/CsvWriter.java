@@ -76,7 +76,8 @@ public final class CsvWriter {
         }
     }
 
-    private static String written(Object cell) {
+    /** Returns a cell as a text: date-times as ISO 8601 has them, seconds always. */
+    public static String written(Object cell) {
         if (cell instanceof LocalDateTime time) {
             return time.format(DateTimeFormatter.ISO_LOCAL_DATE_TIME);
         }

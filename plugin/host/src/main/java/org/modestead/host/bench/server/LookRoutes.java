@@ -9,9 +9,6 @@ import io.javalin.http.Context;
 import java.io.BufferedOutputStream;
 import java.io.IOException;
 import java.io.OutputStream;
-import java.time.LocalDateTime;
-import java.time.ZonedDateTime;
-import java.time.format.DateTimeFormatter;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
@@ -159,8 +156,7 @@ final class LookRoutes implements AutoCloseable {
             list.entries().forEach(entry -> entries.add(entry.map(LookRoutes::cell).orElse(JSON.nullNode())));
             return entries;
         }
-        return JSON.textNode(cell instanceof LocalDateTime time ? time.format(DateTimeFormatter.ISO_LOCAL_DATE_TIME)
-                : cell instanceof ZonedDateTime moment ? moment.format(DateTimeFormatter.ISO_OFFSET_DATE_TIME) : cell.toString());
+        return JSON.textNode(CsvWriter.written(cell));
     }
 
     private void matrix(Context context) {
