@@ -8,7 +8,9 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import io.javalin.http.Context;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import org.modestead.engine.Fault;
 
@@ -36,6 +38,13 @@ final class Answer {
         Map<String, Object> values = new LinkedHashMap<>();
         object.properties().forEach(entry -> values.put(entry.getKey(), MAPPER.convertValue(entry.getValue(), Object.class)));
         return values;
+    }
+
+    /** Returns the entries of a list as texts; none where it is no list. */
+    static List<String> texts(JsonNode list) {
+        List<String> texts = new ArrayList<>();
+        list.forEach(entry -> texts.add(entry.asText()));
+        return texts;
     }
 
     static void json(Context context, JsonNode json) {

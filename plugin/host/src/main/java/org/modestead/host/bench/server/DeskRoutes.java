@@ -4,8 +4,6 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import io.javalin.Javalin;
 import java.nio.charset.StandardCharsets;
-import java.util.ArrayList;
-import java.util.List;
 import org.modestead.host.bench.desk.EditReader;
 import org.modestead.host.bench.work.Workbench;
 import org.modestead.host.workflow.WorkflowText;
@@ -36,9 +34,7 @@ final class DeskRoutes {
         server.post("/api/desk/close", context -> Answer.json(context, json.of(workbench.leave())));
         server.post("/api/run", context -> {
             JsonNode body = Answer.body(context);
-            List<String> steps = new ArrayList<>();
-            body.path("steps").forEach(step -> steps.add(step.asText()));
-            Answer.json(context, json.of(workbench.run(steps, body.path("again").asBoolean(false))));
+            Answer.json(context, json.of(workbench.run(Answer.texts(body.path("steps")), body.path("again").asBoolean(false))));
         });
         server.post("/api/cancel", context -> Answer.json(context, json.of(workbench.stop())));
         server.get("/api/workflow.json", context -> {

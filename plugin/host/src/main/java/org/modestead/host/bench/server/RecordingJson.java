@@ -4,8 +4,6 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Optional;
 import org.modestead.host.bench.look.FigureJson;
 import org.modestead.host.bench.look.Numbers;
@@ -44,11 +42,5 @@ final class RecordingJson {
         json.set("problems", NodesJson.texts(guess.problems()));
         json.set("figure", guess.figure().<JsonNode>map(FigureJson::of).orElse(JSON.nullNode()));
         return json;
-    }
-
-    static List<String> texts(JsonNode list) {
-        List<String> texts = new ArrayList<>();
-        list.forEach(entry -> texts.add(entry.asText()));
-        return texts;
     }
 }

@@ -97,7 +97,7 @@ final class StartRoutes {
         Optional<JsonNode> reading = Optional.of(body.path("reading")).filter(JsonNode::isObject);
         Optional<JsonNode> columns = Optional.of(body.path("columns")).filter(JsonNode::isObject);
         return new RecordingWish(reading.map(Answer::values), columns.map(found -> new RecordingWish.Roles(found.path("time").asText(""),
-                found.path("timeUnit").asText(""), found.path("run").asText(""), RecordingJson.texts(found.path("channels")), RecordingJson.texts(found.path("inputs")))));
+                found.path("timeUnit").asText(""), found.path("run").asText(""), Answer.texts(found.path("channels")), Answer.texts(found.path("inputs")))));
     }
 
     /** Beside the guess stands the name under which a step of the open desk would read the file. */
