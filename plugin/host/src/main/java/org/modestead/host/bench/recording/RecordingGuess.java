@@ -87,11 +87,15 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         RecordingWish.Roles roles = wished.map(said -> known(said, table)).orElse(guessed.roles());
         RunScan runs = RunScan.of(table, roles, RecordingPicture.MOST_CHANNELS);
         List<ColumnFacts> channels = roles.channels().stream().flatMap(name -> scan.columns().stream().filter(facts -> facts.column().name().equals(name))).toList();
-        Optional<CellType> time = scan.columns().stream().filter(facts -> facts.column().name().equals(roles.time())).map(facts -> facts.column().type()).findFirst();
+        Optional<CellType> time = type(scan.columns(), roles.time());
         RecordingGuess guess = new RecordingGuess(file, reading, roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, List.of(), List.of(),
                 RecordingPicture.of(runs, roles, channels, time));
         return new RecordingGuess(file, reading, roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, guess.words(), guess.hindrances(time),
                 guess.figure());
+    }
+
+    private static Optional<CellType> type(List<ColumnFacts> columns, String name) {
+        return columns.stream().filter(facts -> facts.column().name().equals(name)).map(facts -> facts.column().type()).findFirst();
     }
 
     private static RecordingWish.Roles known(RecordingWish.Roles roles, Table table) {
@@ -129,7 +133,7 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
 
     /** Returns the middle step in the unit of time; NaN without one. */
     public double step() {
-        Optional<CellType> type = columns.stream().filter(facts -> facts.column().name().equals(roles.time())).map(facts -> facts.column().type()).findFirst();
+        Optional<CellType> type = type(columns, roles.time());
         double seconds = type.isEmpty() || type.get().isNumber() ? 1 : switch (roles.timeUnit()) {
             case "min" -> 60;
             case "h" -> 3600;
@@ -144,8 +148,9 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
     private List<String> words() {
         List<String> words = new ArrayList<>();
         String unit = roles.timeUnit().isEmpty() ? "" : " " + roles.timeUnit();
-        words.add((whole ? "" : "The first ") + rows + " rows in " + Sentence.count(runs.runs().size(), "run") + (roles.time().isEmpty() || Double.isNaN(step()) ? "."
-                : (runs.isEven() ? ", every " : ", about every ") + String.format(Locale.ROOT, "%.4g", step()).replaceAll("(\\.\\d*?)0+$", "$1").replaceAll("\\.$", "")
+        double step = step();
+        words.add((whole ? "" : "The first ") + rows + " rows in " + Sentence.count(runs.runs().size(), "run") + (roles.time().isEmpty() || Double.isNaN(step) ? "."
+                : (runs.isEven() ? ", every " : ", about every ") + String.format(Locale.ROOT, "%.4g", step).replaceAll("(\\.\\d*?)0+$", "$1").replaceAll("\\.$", "")
                         + unit + "."));
         long gaps = roles.time().isEmpty() ? 0 : runs.gaps();
         if (gaps > 0) {
