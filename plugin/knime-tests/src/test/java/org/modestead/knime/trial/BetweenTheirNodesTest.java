@@ -85,7 +85,7 @@ class BetweenTheirNodesTest {
     /** Returns the workflow with a Column Filter between its reader and our first node. */
     private PlatformWorkflow built(Platform platform, Path target) throws IOException {
         PlatformWorkflow built = PlatformWorkflow.build(platform, host.workflow(), target);
-        int filter = node(platform, COLUMN_FILTER);
+        int filter = platform.node(COLUMN_FILTER);
         platform.ask("link", built.numbers().get("source"), 1, filter, 1);
         platform.ask("link", filter, 1, built.numbers().get("snapshots"), 1);
         platform.ask("set", filter, "column-filter/filter-type", "text", "STANDARD", "column-filter/included_names", "texts", String.join("|", NEEDED.stream().sorted().toList()), "column-filter/excluded_names",
@@ -97,7 +97,7 @@ class BetweenTheirNodesTest {
         Files.createDirectories(target);
         Map<String, Path> files = new LinkedHashMap<>();
         for (Output output : outputs) {
-            int writer = node(platform, CSV_WRITER);
+            int writer = platform.node(CSV_WRITER);
             files.put(output.name(), target.resolve(output.name() + ".csv"));
             platform.ask("set", writer, "settings/file_chooser_settings/path/path", "text", files.get(output.name()), "advanced_settings/quote_mode", "text",
                     "IF_NEEDED");
@@ -114,7 +114,7 @@ class BetweenTheirNodesTest {
             Map<String, Path> written = csvWriters(platform, outputs, folder.resolve("csv"));
             Map<String, Path> kept = new LinkedHashMap<>();
             for (Output output : outputs) {
-                int writer = node(platform, TABLE_WRITER);
+                int writer = platform.node(TABLE_WRITER);
                 kept.put(output.name(), folder.resolve(output.name() + ".table"));
                 platform.ask("set", writer, "file_selection/path/path", "text", kept.get(output.name()));
                 platform.ask("link", output.node(), output.port(), writer, 1);
@@ -123,7 +123,7 @@ class BetweenTheirNodesTest {
             assertEquals(List.of(), built.unfinished(platform));
             for (Output output : outputs) {
                 assertSame(host.tables().get(output.name()), Csv.rows(written.get(output.name())), output.name());
-                int reader = node(platform, TABLE_READER);
+                int reader = platform.node(TABLE_READER);
                 platform.ask("set", reader, "settings/file_selection/path/path", "text", kept.get(output.name()));
                 platform.ask("start", reader);
                 platform.ask("await", 300);
@@ -147,7 +147,7 @@ class BetweenTheirNodesTest {
                 var declaration = HostRun.NODES.find(id).orElseThrow().declaration();
                 List<String> expected = Stream.concat(declaration.inputs().stream().map(port -> "in whole once"),
                         declaration.outputs().stream().map(port -> "out once")).toList();
-                assertEquals(expected, platform.ask("roles", node(platform, id)), id);
+                assertEquals(expected, platform.ask("roles", platform.node(id)), id);
             }
         }
     }
@@ -208,9 +208,5 @@ class BetweenTheirNodesTest {
     /** The one cell that may differ names where a table came from: a table of the platform does not tell. */
     private static List<String> withoutOrigin(List<String> lines) {
         return lines.stream().filter(line -> !line.startsWith("table\t")).toList();
-    }
-
-    private static int node(Platform platform, String node) {
-        return Integer.parseInt(platform.ask("node", node, node).get(0));
     }
 }

@@ -35,8 +35,8 @@ class ColumnKindsTest {
         int echo;
         try (Platform platform = Platform.start(home, folder.resolve("first"))) {
             platform.ask("create", saved);
-            source = node(platform, EveryKindFactory.class.getName());
-            echo = node(platform, EchoNode.ID);
+            source = platform.node(EveryKindFactory.class.getName());
+            echo = platform.node(EchoNode.ID);
             platform.ask("link", source, 1, echo, 1);
             List<String> told = platform.ask("spec", echo, 1);
             platform.ask("execute");
@@ -89,12 +89,12 @@ class ColumnKindsTest {
     void listsOfThePlatformsOwnNodesAreChannelsUnderTheNamesOfTheirColumns() throws Exception {
         try (Platform platform = Platform.start(PlatformHome.givenOrSkipped(), folder.resolve("platform"))) {
             platform.ask("create", folder.resolve("lists"));
-            int station = node(platform, "signal-generator");
-            int collect = node(platform, COLLECT);
-            int single = node(platform, "snapshot-builder");
-            int listed = node(platform, "snapshot-builder");
-            int echo = node(platform, EchoNode.ID);
-            int apart = node(platform, SPLIT);
+            int station = platform.node("signal-generator");
+            int collect = platform.node(COLLECT);
+            int single = platform.node("snapshot-builder");
+            int listed = platform.node("snapshot-builder");
+            int echo = platform.node(EchoNode.ID);
+            int apart = platform.node(SPLIT);
             List<Object> times = List.of("time-column", "text", "time", "time-unit", "text", "s", "run-column", "text", "run");
             platform.ask("link", station, 1, collect, 1);
             platform.ask("set", collect, "includes/included_names", "texts", "flow [m3/h]|sump_level [m]", "includes/excluded_names", "texts", "",
@@ -136,9 +136,5 @@ class ColumnKindsTest {
     private static List<String> table(Platform platform, int node, Path file) throws Exception {
         platform.ask("table", node, 1, file);
         return Files.readAllLines(file);
-    }
-
-    private static int node(Platform platform, String node) {
-        return Integer.parseInt(platform.ask("node", node, node).get(0));
     }
 }

@@ -26,7 +26,7 @@ class ModelTest {
         Path theirs = folder.resolve("platforms.model");
         try (Platform platform = Platform.start(home, folder.resolve("session-1"))) {
             PlatformWorkflow built = PlatformWorkflow.build(platform, host.workflow(), first);
-            int writer = node(platform, PLATFORM_WRITER);
+            int writer = platform.node(PLATFORM_WRITER);
             platform.ask("link", built.numbers().get("kept"), 1, writer, 1);
             platform.ask("set", writer, path(theirs));
             platform.ask("start", writer);
@@ -39,10 +39,10 @@ class ModelTest {
         Files.copy(first.resolve("model.zip"), second.resolve("model.zip"));
         try (Platform platform = Platform.start(home, folder.resolve("session-2"))) {
             platform.ask("create", second);
-            int ours = node(platform, "model-reader");
+            int ours = platform.node("model-reader");
             platform.ask("set", ours, "file", "text", "model.zip");
             forecastIsTheHosts(platform, ours, host, folder.resolve("ours"));
-            int reader = node(platform, PLATFORM_READER);
+            int reader = platform.node(PLATFORM_READER);
             platform.ask("set", reader, path(theirs));
             forecastIsTheHosts(platform, reader, host, folder.resolve("theirs"));
             assertEquals(List.of(), platform.problemsLogged());
@@ -50,8 +50,8 @@ class ModelTest {
     }
 
     private static void forecastIsTheHosts(Platform platform, int source, HostRun host, Path file) throws Exception {
-        int applied = node(platform, "model-applier");
-        int forecast = node(platform, "forecast");
+        int applied = platform.node("model-applier");
+        int forecast = platform.node("forecast");
         platform.ask("set", forecast, "horizon", "number", 10, "origin", "text", "before-holdout");
         platform.ask("link", source, 1, applied, 1);
         for (int port = 1; port <= 4; port++) {
@@ -66,9 +66,5 @@ class ModelTest {
 
     private static List<Object> path(Path file) {
         return List.of("filechooser/path/path", "text", file);
-    }
-
-    private static int node(Platform platform, String node) {
-        return Integer.parseInt(platform.ask("node", node, node).get(0));
     }
 }

@@ -50,7 +50,7 @@ class NodesTest {
             platform.ask("create", folder.resolve("fresh"));
             for (String id : platform.ask("offered")) {
                 NodeDeclaration declaration = HostRun.NODES.find(id).orElseThrow().declaration();
-                int number = Integer.parseInt(platform.ask("node", id, id).get(0));
+                int number = platform.node(id);
                 Platform.State state = platform.state(number);
                 boolean ready = state.word().equals("configured");
                 boolean waits = declaration.inputs().stream().anyMatch(port -> !port.optional());
@@ -68,7 +68,7 @@ class NodesTest {
         try (Platform platform = Platform.start(PlatformHome.givenOrSkipped(), folder.resolve("platform"))) {
             platform.ask("create", folder.resolve("dialogs"));
             for (String id : platform.ask("offered")) {
-                int number = Integer.parseInt(platform.ask("node", id, id).get(0));
+                int number = platform.node(id);
                 assertEquals(platform.ask("settings", number), platform.ask("dialog", number), id);
             }
             assertEquals(List.of(), platform.problemsLogged());
@@ -88,7 +88,7 @@ class NodesTest {
             }
             assertEquals(Set.of(READER), left, "nodes that were not tried");
             Tables.assertSame(host.tables(), built.tables(platform, folder.resolve("tables")));
-            int reader = Integer.parseInt(platform.ask("node", READER, READER).get(0));
+            int reader = platform.node(READER);
             platform.ask("set", reader, "file", "text", "model.zip");
             executed(platform, reader, HostRun.NODES.find(READER).orElseThrow().declaration());
             assertEquals(List.of(), platform.problemsLogged());

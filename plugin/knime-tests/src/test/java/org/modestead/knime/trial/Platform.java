@@ -111,6 +111,16 @@ final class Platform implements AutoCloseable {
         throw new AssertionError("the platform has ended\n" + String.join("\n", said) + "\n" + errors());
     }
 
+    /** Adds a node of ours by its id, or one of the platform's by the name of its factory; returns its number. */
+    int node(String node) {
+        return node(node, node);
+    }
+
+    /** Adds a node under a label; returns its number. */
+    int node(String node, String label) {
+        return Integer.parseInt(ask("node", node, label).get(0));
+    }
+
     State state(int node) {
         List<String> fields = ask("state", node);
         return new State(fields.get(0), fields.get(1), fields.get(2));

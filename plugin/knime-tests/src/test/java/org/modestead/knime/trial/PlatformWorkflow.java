@@ -36,7 +36,7 @@ record PlatformWorkflow(Workflow workflow, Map<String, Integer> numbers) {
             boolean source = step.node().equals(HostRun.SOURCE);
             boolean typed = source && step.settings().get("path").toString().endsWith(".parquet");
             String node = typed ? EveryKindFactory.class.getName() : source ? CSV_READER : step.node();
-            int number = Integer.parseInt(platform.ask("node", node, step.id()).get(0));
+            int number = platform.node(node, step.id());
             numbers.put(step.id(), number);
             if (source && !typed) {
                 read(platform, number, workflow.baseFolder().resolve((String) step.settings().get("path")), folder);

@@ -42,7 +42,7 @@ class TroubleTest {
     @Test
     void wrongSettingsAreRefusedWithASentenceAndTheOldOnesStay() throws Exception {
         platform.ask("create", folder.resolve("wrong"));
-        int fit = node("operator-fitter");
+        int fit = platform.node("operator-fitter");
         platform.ask("set", fit, "rank-rule", "text", "fixed", "rank", "whole", 9);
         String before = platform.ask("settings", fit).get(0);
         for (List<Object> wrong : List.<List<Object>>of(List.of("rank", "whole", -3), List.of("rank-rule", "text", "guess"),
@@ -59,9 +59,9 @@ class TroubleTest {
     @Test
     void aColumnThatVanishedIsNamedBeforeAnythingRuns() throws Exception {
         platform.ask("create", folder.resolve("vanished"));
-        int station = node("signal-generator");
-        int filter = node(COLUMN_FILTER);
-        int snapshots = node("snapshot-builder");
+        int station = platform.node("signal-generator");
+        int filter = platform.node(COLUMN_FILTER);
+        int snapshots = platform.node("snapshot-builder");
         platform.ask("link", station, 1, filter, 1);
         platform.ask("link", filter, 1, snapshots, 1);
         platform.ask("set", snapshots, "time-column", "text", "time", "run-column", "text", "run", "channels", "texts", "flow [m3/h]|sump_level [m]");
@@ -102,11 +102,11 @@ class TroubleTest {
     @Test
     void cancellingStopsWithinASecondAndLeavesTheNodeReady() throws Exception {
         platform.ask("create", folder.resolve("cancelled"));
-        int station = node("signal-generator");
-        int snapshots = node("snapshot-builder");
-        int fit = node("operator-fitter");
-        int spectrum = node("spectrum-extractor");
-        int check = node("wellposedness-checker");
+        int station = platform.node("signal-generator");
+        int snapshots = platform.node("snapshot-builder");
+        int fit = platform.node("operator-fitter");
+        int spectrum = platform.node("spectrum-extractor");
+        int check = platform.node("wellposedness-checker");
         platform.ask("link", station, 1, snapshots, 1);
         platform.ask("set", snapshots, "time-column", "text", "time", "run-column", "text", "run", "resampling", "text", "uniform", "step",
                 "number", 0.05, "scaling", "text", "std", "detrend", "text", "mean", "delay-depth", "whole", 20, "holdout", "text",
@@ -134,9 +134,5 @@ class TroubleTest {
         System.out.println("Cancelling the Well-posedness Checker took " + taken + " ms.");
         assertTrue(Collections.max(taken) <= A_SECOND, taken + " ms");
         assertEquals(List.of(), platform.problemsLogged());
-    }
-
-    private int node(String node) {
-        return Integer.parseInt(platform.ask("node", node, node).get(0));
     }
 }
