@@ -113,31 +113,30 @@ final class Project {
         NodeSettings all = settings(id);
         Variables.use(all, triples);
         workflow.loadNodeSettings(id, all);
-        NodeModel model = ((NativeNodeContainer) container(node)).getNodeModel();
         Method save = NodeModel.class.getDeclaredMethod("saveSettingsTo", NodeSettingsWO.class); // protected, and what it writes is what the model has
         save.setAccessible(true);
         NodeSettings used = new NodeSettings("used");
-        save.invoke(model, used);
+        save.invoke(model(node), used);
         Variables.use(all, List.of());
         workflow.loadNodeSettings(id, all);
-        ByteArrayOutputStream out = new ByteArrayOutputStream();
-        used.saveToXML(out);
-        return out.toString(StandardCharsets.UTF_8);
+        return xml(used);
     }
 
     /** Returns a node's settings as the platform writes them out. */
     String settings(int node) throws Exception {
-        ByteArrayOutputStream out = new ByteArrayOutputStream();
-        settings(container(node).getID()).getNodeSettings(MODEL).saveToXML(out);
-        return out.toString(StandardCharsets.UTF_8);
+        return xml(settings(container(node).getID()).getNodeSettings(MODEL));
     }
 
     /** Opens a node's dialog, as a person would, and saves from it untouched; returns the settings as they are then written out. */
     String dialog(int node) throws Exception {
         NodeSettings saved = new NodeSettings("node");
         container(node).getDialogPaneWithSettings().finishEditingAndSaveSettingsTo(saved);
+        return xml(saved.getNodeSettings(MODEL));
+    }
+
+    private static String xml(NodeSettings settings) throws Exception {
         ByteArrayOutputStream out = new ByteArrayOutputStream();
-        saved.getNodeSettings(MODEL).saveToXML(out);
+        settings.saveToXML(out);
         return out.toString(StandardCharsets.UTF_8);
     }
 
@@ -170,7 +169,7 @@ final class Project {
 
     /** Returns for each input, then each output of a node what the platform may do with its rows. */
     List<String> roles(int node) {
-        NodeModel model = ((NativeNodeContainer) container(node)).getNodeModel();
+        NodeModel model = model(node);
         List<String> roles = new ArrayList<>();
         for (InputPortRole role : model.getInputPortRoles()) {
             roles.add("in" + (role.isStreamable() ? " streamed" : " whole") + (role.isDistributable() ? " in parts" : " once"));
@@ -244,6 +243,10 @@ final class Project {
 
     void save(Path folder) throws Exception {
         workflow.save(folder.toFile(), new ExecutionMonitor(), true);
+    }
+
+    private NodeModel model(int node) {
+        return ((NativeNodeContainer) container(node)).getNodeModel();
     }
 
     private NodeContainer container(int number) {
