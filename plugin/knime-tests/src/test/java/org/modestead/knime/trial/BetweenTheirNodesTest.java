@@ -4,7 +4,6 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
-import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -40,10 +39,7 @@ class BetweenTheirNodesTest {
     @BeforeEach
     void runTheHost() throws IOException {
         home = PlatformHome.givenOrSkipped();
-        Path file = Files.createDirectories(folder.resolve("written")).resolve("workflow.json");
-        try (InputStream written = BetweenTheirNodesTest.class.getResourceAsStream("/six/workflow.json")) {
-            Files.copy(written, file);
-        }
+        Path file = HostRun.copied("six", folder);
         Files.write(file.resolveSibling("recordings.csv"), recordings());
         host = HostRun.of(file, folder.resolve("host"));
     }

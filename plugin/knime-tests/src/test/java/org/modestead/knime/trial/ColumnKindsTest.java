@@ -3,7 +3,6 @@ package org.modestead.knime.trial;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -119,10 +118,7 @@ class ColumnKindsTest {
     }
 
     private Path workflow() throws Exception {
-        Path copy = Files.createDirectories(folder.resolve("written")).resolve("workflow.json");
-        try (InputStream file = ColumnKindsTest.class.getResourceAsStream("/every-kind/workflow.json")) {
-            Files.copy(file, copy);
-        }
+        Path copy = HostRun.copied("every-kind", folder);
         TableSink sink = new TableSink();
         sink.run(new NodeInputs(Map.of("table", EveryKind.table())), SettingsReader.read(sink, Map.of("path", "every-kind.parquet")).settings().orElseThrow(),
                 new RunContext(Progress.NONE, copy.getParent(), copy.getParent()));

@@ -1,5 +1,8 @@
 package org.modestead.knime.trial;
 
+import java.io.IOException;
+import java.io.InputStream;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -33,6 +36,15 @@ record HostRun(Workflow workflow, Map<String, List<String>> tables) {
 
     /** Nodes that the host finds; those of the bridge are among them. */
     static final NodeCatalog NODES = NodeCatalog.load(List.of(HostRun.class.getClassLoader()));
+
+    /** Returns a copy, below a folder, of the trial's own workflow of a name: its nodes write beside it, and its data are put there. */
+    static Path copied(String name, Path folder) throws IOException {
+        Path copy = Files.createDirectories(folder.resolve("written")).resolve("workflow.json");
+        try (InputStream file = HostRun.class.getResourceAsStream("/" + name + "/workflow.json")) {
+            Files.copy(file, copy);
+        }
+        return copy;
+    }
 
     /** Runs a workflow, with some settings replaced, each written {@code step.key=value}. */
     static HostRun of(Path file, Path target, String... replaced) {

@@ -5,8 +5,6 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
-import java.io.InputStream;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
@@ -97,11 +95,7 @@ class NodesTest {
 
     /** Returns a copy of the workflow that has every node: it writes a file beside itself. */
     static Path everyNode(Path folder) throws IOException {
-        try (InputStream file = NodesTest.class.getResourceAsStream("/every-node/workflow.json")) {
-            Path copy = Files.createDirectories(folder.resolve("written")).resolve("workflow.json");
-            Files.copy(file, copy);
-            return copy;
-        }
+        return HostRun.copied("every-node", folder);
     }
 
     private static void executed(Platform platform, int number, NodeDeclaration declaration) {
