@@ -84,9 +84,12 @@ class BetweenTheirNodesTest {
         int filter = platform.node(COLUMN_FILTER);
         platform.ask("link", built.numbers().get("source"), 1, filter, 1);
         platform.ask("link", filter, 1, built.numbers().get("snapshots"), 1);
-        platform.ask("set", filter, "column-filter/filter-type", "text", "STANDARD", "column-filter/included_names", "texts", String.join("|", NEEDED.stream().sorted().toList()), "column-filter/excluded_names",
-                "texts", "note", "column-filter/enforce_option", "text", "EnforceInclusion");
-        return built;
+        platform.ask("set", filter, "column-filter/filter-type", "text", "STANDARD", "column-filter/included_names", "texts",
+                String.join("|", NEEDED.stream().sorted().toList()), "column-filter/excluded_names", "texts", "note", "column-filter/enforce_option", "text",
+                "EnforceInclusion");
+        Map<String, Integer> numbers = new LinkedHashMap<>(built.numbers());
+        numbers.put("filter", filter);
+        return new PlatformWorkflow(built.workflow(), numbers);
     }
 
     private static Map<String, Path> csvWriters(Platform platform, List<Output> outputs, Path target) throws IOException {
@@ -153,13 +156,7 @@ class BetweenTheirNodesTest {
         try (Platform platform = Platform.start(home, folder.resolve("platform"))) {
             PlatformWorkflow built = built(platform, folder.resolve("streamed"));
             Map<String, Path> written = csvWriters(platform, outputs(built), folder.resolve("csv"));
-            int filter = built.numbers().values().stream().mapToInt(Integer::intValue).max().orElseThrow() + 1;
-            List<Object> inside = new ArrayList<>(List.of(filter));
-            built.numbers().forEach((step, number) -> {
-                if (!step.equals("source")) {
-                    inside.add(number);
-                }
-            });
+            List<Integer> inside = built.numbers().entrySet().stream().filter(step -> !step.getKey().equals("source")).map(Map.Entry::getValue).toList();
             Platform.Answer answer = platform.tried("streamed", inside);
             Assumptions.assumeTrue(answer.ok() || !answer.fields().toString().contains("no streaming executor"), "the streaming executor is not installed");
             assertTrue(answer.ok(), answer.fields().toString());
