@@ -20,7 +20,6 @@ import org.knime.core.node.NodeSettings;
 import org.knime.core.node.NodeSettingsRO;
 import org.modestead.knime.columns.ColumnRules;
 import org.modestead.knime.settings.NativeSettings;
-import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.SettingsReader;
 
 /** The workflows of test-workflows/knime, which the platform itself has saved: every setting of every node of ours is still understood. */
@@ -58,10 +57,7 @@ class SavedWorkflowsTest {
         assertEquals(List.of(), reading.problems());
         Set<String> unknown = new TreeSet<>(model.keySet());
         unknown.removeIf(key -> key.endsWith("_Internals"));
-        for (Setting setting : rig.declaration().settings()) {
-            unknown.remove(setting.key());
-            unknown.remove(setting.key() + ColumnRules.SUFFIX);
-        }
+        unknown.removeAll(ColumnRules.keys(rig.declaration()));
         // a setting that came later is not stored and has its default; one that is stored must not have gone
         assertEquals(Set.of(), unknown, "stored, but of no use");
     }
