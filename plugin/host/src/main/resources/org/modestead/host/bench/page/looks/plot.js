@@ -1,4 +1,4 @@
-import {html, useEffect, useLayoutEffect, useRef, useState} from '../lib.js';
+import {html, useEffect, useLayoutEffect, useMemo, useRef, useState} from '../lib.js';
 import {charts} from './charts.js';
 import {mapping, nearest, reading, targets} from './places.js';
 import {optionOf} from './option.js';
@@ -25,7 +25,9 @@ export function Plot({figure, theme, selection, select, hidden, label, described
   const [width, setWidth] = useState(0);
   const [fault, setFault] = useState('');
   const latest = useRef({});
-  latest.current = {figure, selection, select, say, series: points(figure, hidden)};
+  /* Every move of the pointer tells something and so draws this anew: the things of a large picture are gathered once. */
+  const all = useMemo(() => points(figure, hidden), [figure, hidden]);
+  latest.current = {figure, selection, select, say, series: all};
 
   useEffect(() => {
     let gone = false;
@@ -174,23 +176,29 @@ export function Plot({figure, theme, selection, select, hidden, label, described
 /** Pointing tells, clicking selects. */
 function listen(chart, pointer, latest) {
   const zr = chart.getZr();
-  const find = (event) => nearest(latest.current.series, mapping(chart, latest.current.figure), event.offsetX, event.offsetY);
-  const inside = (event) => chart.containPixel({gridIndex: 0}, [event.offsetX, event.offsetY]);
+  /** What is under the pointer and where it lies; null for nothing. */
+  const find = (event) => {
+    if (!chart.containPixel({gridIndex: 0}, [event.offsetX, event.offsetY])) {
+      return null;
+    }
+    const map = mapping(chart, latest.current.figure);
+    const hit = nearest(latest.current.series, map, event.offsetX, event.offsetY);
+    return hit && {...hit, x: map.x(hit.item.x), y: map.y(hit.item.y)};
+  };
   zr.on('mousemove', (event) => {
-    const hit = inside(event) ? find(event) : null;
+    const hit = find(event);
     if (!hit) {
       pointer.attr({invisible: true});
       zr.setCursorStyle('default');
       return;
     }
-    const map = mapping(chart, latest.current.figure);
-    pointer.attr({x: map.x(hit.item.x), y: map.y(hit.item.y), invisible: false});
+    pointer.attr({x: hit.x, y: hit.y, invisible: false});
     zr.setCursorStyle(hit.item.key ? 'pointer' : 'crosshair');
     latest.current.say(reading(latest.current.figure, hit.series, hit.item));
   });
   zr.on('globalout', () => pointer.attr({invisible: true}));
   zr.on('click', (event) => {
-    const hit = inside(event) ? find(event) : null;
+    const hit = find(event);
     if (hit?.item.key) {
       latest.current.select(hit.item.key === latest.current.selection ? '' : hit.item.key);
     }
