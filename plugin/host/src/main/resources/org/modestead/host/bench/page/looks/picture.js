@@ -25,14 +25,15 @@ export function Picture({head, address = '', data = null, resultId, selection, s
   const seen = useSeen(frame);
   const {value, fault} = useRead(seen && !data ? address : null, resultId);
   const figure = data ?? value;
+  const chosen = figure?.layers.some((layer) => isSelected(layer.selection, selection)) ? selection : '';
   return html`<${Frame} frame=${frame} id=${head.id} kind=${head.kind} title=${head.title} caption=${head.caption} files=${address}
-      fault=${fault} chosen=${figure && selection && figure.layers.some((layer) => isSelected(layer.selection, selection)) ? words(selection) : ''}
-      numbers=${figure ? () => numbersOf(figure) : null} selection=${selection} select=${select}>
-    ${(tools) => (figure && seen ? html`<${Drawn} figure=${figure} selection=${selection} select=${select} ...${tools} />`
+      fault=${fault} chosen=${chosen && words(chosen)} numbers=${figure ? () => numbersOf(figure) : null} selection=${selection} select=${select}>
+    ${(tools) => (figure && seen ? html`<${Drawn} figure=${figure} selection=${chosen} select=${select} ...${tools} />`
       : html`<div class="lk-plot lk-empty"></div>`)}
   </${Frame}>`;
 }
 
+/** Told only a selection that it shows something of: a picture without it is not drawn anew when another mode is marked. */
 function Drawn({figure, selection, select, handle, captionId, title, say}) {
   const theme = useColours();
   const [hidden, setHidden] = useState(new Set());
