@@ -69,11 +69,17 @@ export function Callout({tone, word, title, sentences}) {
   </div>`;
 }
 
-function Grid({grid, id, selection, select}) {
+/** Rows that name a mode stand for it. */
+function sourceOf(grid) {
   const columns = grid.columns.map((head) => ({name: head.text, unit: '', cell: 'TEXT', kind: '', right: head.numeric}));
-  const keyOf = rowKeys(columns.map((column) => ({name: column.name.toLowerCase()})));
-  const keys = grid.rows.map((row) => (keyOf && /^\d+$/.test(row[columns.findIndex((column) => column.name.toLowerCase() === 'mode')] ?? '') ? keyOf(row) : ''));
-  const [source] = useState(() => inMemory(columns, grid.rows, keys));
+  const lower = columns.map((column) => ({name: column.name.toLowerCase()}));
+  const keyOf = rowKeys(lower);
+  const mode = lower.findIndex((column) => column.name === 'mode');
+  return inMemory(columns, grid.rows, grid.rows.map((row) => (keyOf && /^\d+$/.test(row[mode] ?? '') ? keyOf(row) : '')));
+}
+
+function Grid({grid, id, selection, select}) {
+  const [source] = useState(() => sourceOf(grid));
   return html`<h5>${grid.caption}</h5>
     <${DataTable} source=${source} id=${id} title=${grid.caption} selection=${selection} select=${select} />
     ${grid.note && html`<p class="lk-quiet">${grid.note}</p>`}`;

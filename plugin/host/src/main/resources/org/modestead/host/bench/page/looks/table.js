@@ -33,6 +33,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const key = JSON.stringify(order);
   const wanted = useRef('');
   wanted.current = key;
+  const asked = useRef(new Set());
   const held = pages.key === key ? pages.held : new Map();
   const total = pages.total ?? 0;
   const found = pages.key !== key && order.find === '' ? total : pages.found;
@@ -44,15 +45,18 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
 
   useEffect(() => {
     for (let page = Math.floor(from / PAGE); page * PAGE < Math.max(to, 1); page++) {
-      if (held.has(page)) {
+      const question = `${key} ${page}`;
+      if (held.has(page) || asked.current.has(question)) {
         continue;
       }
+      asked.current.add(question);
       source.page(page * PAGE, PAGE, order).then((answer) => {
         if (wanted.current === key) {
           setPages((before) => ({key, total: answer.total, found: answer.found, fault: '',
             held: new Map([...(before.key === key ? before.held : []), [page, answer]].slice(-20))}));
         }
-      }, (fault) => wanted.current === key && setPages((before) => ({...before, fault: fault.message})));
+      }, (fault) => wanted.current === key && setPages((before) => ({...before, fault: fault.message})))
+        .finally(() => asked.current.delete(question));
     }
   }, [key, from, to, source]);
 
