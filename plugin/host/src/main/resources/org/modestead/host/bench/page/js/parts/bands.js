@@ -22,7 +22,6 @@ export function Bands() {
   const places = desk.steps.map(({id, stage, place}) => ({id, stage, place}));
   const stages = catalog.stages.map((stage) => stage.id);
   const columns = Math.min(room, Math.max(FEWEST, widest(places, desk.links, stages)));
-  useLayoutEffect(() => area.current.style.setProperty('--columns', String(columns)), [columns]);
   const bands = arrange(places, desk.links, stages, columns);
   const order = bands.flatMap((band) => band.rows);
   const entry = chosen.at(-1) ?? order[0]?.[0]?.id;
@@ -39,8 +38,9 @@ export function Bands() {
       chooseLink('');
     }
   };
-  return html`<div class=${'bands' + (desk.steps.length ? '' : ' bare')} ref=${area} onkeydown=${key} onclick=${clear}>
-    <${Wires} area=${area} columns=${columns} />
+  return html`<div class=${'bands' + (desk.steps.length ? '' : ' bare')} ref=${area}
+      style=${{'--columns': String(columns)}} onkeydown=${key} onclick=${clear}>
+    <${Wires} area=${area} />
     ${bands.map((band) => html`<${Band} key=${band.stage} band=${band} entry=${entry} catalog=${catalog} desk=${desk} drag=${drag} />`)}
   </div>`;
 }

@@ -1,29 +1,29 @@
 /** The links, drawn behind the cards; those of the chosen step or link stand out. */
-import {html, useLayoutEffect, useRef, useState} from '../../lib.js';
+import {html, useEffect, useLayoutEffect, useRef, useState} from '../../lib.js';
 import {getState} from '../store.js';
 import {chooseLink, linkKey} from '../actions.js';
 import {stepOf} from '../layout.js';
 import {routes} from '../routes.js';
 
-/** @param {{area: {current: HTMLElement}, columns: number}} props the element that holds bands and cards */
+/** @param {{area: {current: HTMLElement}}} props the element that holds bands and cards */
 export function Wires({area}) {
   const {desk, chosen, link} = getState();
   const [drawn, setDrawn] = useState(new Map());
   const last = useRef('');
-  useLayoutEffect(() => {
-    const draw = () => {
-      const plan = measure(area.current, getState().desk.links);
-      const now = JSON.stringify(plan);
-      if (now !== last.current) {
-        last.current = now;
-        setDrawn(routes(plan.links, plan.rows, plan.gutters));
-      }
-    };
-    draw();
+  const draw = () => {
+    const plan = measure(area.current, getState().desk.links);
+    const now = JSON.stringify(plan);
+    if (now !== last.current) {
+      last.current = now;
+      setDrawn(routes(plan.links, plan.rows, plan.gutters));
+    }
+  };
+  useLayoutEffect(draw);
+  useEffect(() => {
     const watch = new ResizeObserver(draw);
     watch.observe(area.current);
     return () => watch.disconnect();
-  });
+  }, []);
   const shown = desk.links.filter((l) => drawn.has(linkKey(l)));
   const strong = (l) => linkKey(l) === link || (!link && (chosen.includes(stepOf(l.from)) || chosen.includes(stepOf(l.to))));
   const ordered = [...shown.filter((l) => !strong(l)), ...shown.filter(strong)];
