@@ -4,12 +4,10 @@ export class ApiFault extends Error {
   /**
    * @param {number} status of the answer, 0 when there was none
    * @param {string} sentence for people
-   * @param {object} [detail] where, seen, wanted
    */
-  constructor(status, sentence, detail = {}) {
+  constructor(status, sentence) {
     super(sentence);
     this.status = status;
-    this.detail = detail;
   }
 }
 
@@ -34,8 +32,7 @@ async function ask(path, options) {
 
 function faultOf(status, text) {
   try {
-    const {error} = JSON.parse(text);
-    return new ApiFault(status, error.sentence, error);
+    return new ApiFault(status, JSON.parse(text).error.sentence);
   } catch {
     return new ApiFault(status, status === 401
       ? 'This page has no key to the bench: open the address that the command printed.'

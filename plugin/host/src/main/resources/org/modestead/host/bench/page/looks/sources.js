@@ -1,4 +1,4 @@
-import {read} from './reading.js';
+import {api} from '../js/api.js';
 import {rowKeys} from './keys.js';
 
 /**
@@ -68,7 +68,7 @@ export function fromServer(address, table) {
       if (find) {
         query.set('find', find);
       }
-      const answer = await read(`${address}?${query}`);
+      const answer = await api.get(`${address}?${query}`);
       return {rows: answer.rows, numbers: answer.numbers, keys: answer.rows.map((row) => (keyOf ? keyOf(row) : '')), found: answer.found, total: answer.total};
     },
   };
