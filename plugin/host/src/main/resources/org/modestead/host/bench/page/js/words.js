@@ -1,4 +1,4 @@
-/** How the page says numbers, times and counts. Every module formats here. */
+/** How the frame of the page says numbers, sizes and counts; measured values are written as the report writes them, in looks/numbers.js. */
 
 const MINUS = '\u2212';
 
@@ -27,9 +27,14 @@ export function number(value, digits = 4) {
   return (value < 0 ? MINUS : '') + text;
 }
 
-/** @param {number} count @param {string} one @param {string} [many] */
-export function counted(count, one, many = one + 's') {
-  return `${count.toLocaleString('en').replace(/,/g, '\u202f')} ${count === 1 ? one : many}`;
+/** A whole number with narrow blanks between thousands: 12 345. @param {number} value */
+export function count(value) {
+  return String(value).replace(/\B(?=(\d{3})+(?!\d))/g, '\u202f');
+}
+
+/** "1 row", "3 rows". @param {number} value @param {string} one @param {string} [many] */
+export function counted(value, one, many = one + 's') {
+  return `${count(value)} ${value === 1 ? one : many}`;
 }
 
 /** @param {string} word */

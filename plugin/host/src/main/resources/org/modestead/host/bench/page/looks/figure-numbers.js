@@ -1,5 +1,4 @@
-import {labelled, onAxis} from './numbers.js';
-import {rowKeys} from './keys.js';
+import {isDated, labelled, onAxis} from './numbers.js';
 import {inMemory} from './sources.js';
 
 /** The numbers of a picture as a table: what is drawn, and nothing else. */
@@ -32,7 +31,7 @@ function byPoint(figure) {
   const x = labelled(figure.x.label);
   const y = labelled(figure.y.label);
   const drawn = figure.layers.filter((layer) => layer.type !== 'rule');
-  const dated = figure.x.time === 'date' || figure.x.time === 'date-time';
+  const dated = isDated(figure.x);
   const parts = {
     series: drawn.some((layer) => layer.name),
     key: drawn.some((layer) => layer.selection),
@@ -64,5 +63,3 @@ export function numbersOfMatrix(matrix) {
   const rows = matrix.values.map((row, i) => [rowName(i), ...row]);
   return inMemory(columns, rows, rows.map((_, i) => matrix.rowSelections?.[i] ?? ''));
 }
-
-export {rowKeys};

@@ -1,8 +1,9 @@
 import {html, useMemo, useRef} from '../lib.js';
+import {count} from '../js/words.js';
 import {scale, useColours} from './colours.js';
 import {numbersOfMatrix} from './figure-numbers.js';
 import {isSelected, words} from './keys.js';
-import {cell, count} from './numbers.js';
+import {cell} from './numbers.js';
 import {Frame} from './picture.js';
 import {Plot} from './plot.js';
 import {useRead} from './reading.js';

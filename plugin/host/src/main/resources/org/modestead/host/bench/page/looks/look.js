@@ -1,4 +1,5 @@
 import {html, useLayoutEffect, useRef} from '../lib.js';
+import {counted} from '../js/words.js';
 import {words} from './keys.js';
 import {Pictures} from './pictures.js';
 import {Port} from './port.js';
@@ -31,8 +32,8 @@ export function Look({step, selection = '', select}) {
   const shown = new Set(look.figures.map((figure) => figure.id));
   const parts = [
     look.verdict && {id: 'verdict', title: `Verdict: ${look.verdict.overall}`},
-    look.doubts.length > 0 && {id: 'doubts', title: look.doubts.length === 1 ? '1 doubt' : `${look.doubts.length} doubts`},
-    look.figures.length > 0 && {id: 'pictures', title: look.figures.length === 1 ? '1 picture' : `${look.figures.length} pictures`},
+    look.doubts.length > 0 && {id: 'doubts', title: counted(look.doubts.length, 'doubt')},
+    look.figures.length > 0 && {id: 'pictures', title: counted(look.figures.length, 'picture')},
     ...look.ports.map((port) => ({id: `port-${port.id}`, title: port.title})),
     look.settings.length > 0 && {id: 'settings', title: 'Settings'},
   ].filter(Boolean);

@@ -12,7 +12,7 @@ const UNKNOWN = '\u2013';
  * @param {number} digits at least 1
  * @returns {string} for example 1.52, −0.0430, 2.1 × 10⁻⁷
  */
-export function significant(value, digits) {
+function significant(value, digits) {
   if (value === null || value === undefined || Number.isNaN(value)) {
     return UNKNOWN;
   }
@@ -35,15 +35,9 @@ function raised(exponent) {
   return [...String(exponent)].map((digit) => (digit === '-' ? '\u207b' : RAISED[Number(digit)])).join('');
 }
 
-/** Three digits, for running text. */
-export function figure(value) {
-  return significant(value, 3);
-}
-
 /** Five digits without zeros at the end, for tables. */
 export function cell(value) {
-  const text = significant(value, 5);
-  return text.includes('.') && !text.includes('\u00d7') ? text.replace(/0+$/, '').replace(/\.$/, '') : text;
+  return trimmed(significant(value, 5));
 }
 
 /** A share of 1 as per cent without the sign, for a column that says per cent: 0.018 gives 1.8. */
@@ -66,17 +60,12 @@ export function tick(value) {
   return (value < 0 ? MINUS : '') + text.replace('-', MINUS);
 }
 
-/** Whole numbers with narrow blanks between thousands: 12 345. */
-export function count(value) {
-  return String(value).replace(/\B(?=(\d{3})+(?!\d))/g, '\u202f');
-}
-
-/** "1 row", "3 rows". */
-export function counted(value, singular) {
-  return `${count(value)} ${singular}${value === 1 ? '' : 's'}`;
-}
-
 const DAY = 86400000;
+
+/** Whether an axis carries dates. */
+export function isDated(axis) {
+  return axis.time === 'date' || axis.time === 'date-time';
+}
 
 /** Milliseconds since 1970 of a figure's time; the number itself where the axis is plain. */
 export function milliseconds(value, time) {
@@ -88,7 +77,7 @@ export function onAxis(value, axis) {
   if (axis.categories.length > 0) {
     return axis.categories[Math.round(value)] ?? cell(value);
   }
-  if (axis.time === 'date' || axis.time === 'date-time') {
+  if (isDated(axis)) {
     const moment = new Date(milliseconds(value, axis.time));
     if (Number.isNaN(moment.getTime())) {
       return UNKNOWN;

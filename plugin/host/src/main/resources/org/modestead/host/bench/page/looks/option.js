@@ -1,6 +1,6 @@
 import {isSelected} from './keys.js';
 import {faded} from './colours.js';
-import {milliseconds, tick} from './numbers.js';
+import {isDated, milliseconds, tick} from './numbers.js';
 import {drawable, rangeRight, rangeX, rangeY} from './ranges.js';
 import {symbolOf} from './marks.js';
 import {layerStyles} from './styles.js';
@@ -114,7 +114,7 @@ class Drawing {
 
   numeric(axis, range) {
     const shown = {...this.labels(), hideOverlap: true, showMinLabel: false, showMaxLabel: false};
-    if (axis.time === 'date' || axis.time === 'date-time') {
+    if (isDated(axis)) {
       return {type: 'time', min: milliseconds(range.low, axis.time), max: milliseconds(range.high, axis.time), splitNumber: 6,
         axisLabel: {...shown, formatter: DATES}};
     }

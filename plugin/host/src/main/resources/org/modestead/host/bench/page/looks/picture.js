@@ -1,9 +1,10 @@
 import {html, useCallback, useEffect, useId, useRef, useState} from '../lib.js';
+import {counted} from '../js/words.js';
 import {useColours} from './colours.js';
 import {numbersOf} from './figure-numbers.js';
 import {isSelected, words} from './keys.js';
 import {Legend} from './legend.js';
-import {counted, labelled} from './numbers.js';
+import {labelled} from './numbers.js';
 import {Plot} from './plot.js';
 import {useRead} from './reading.js';
 import {useSeen} from './seen.js';

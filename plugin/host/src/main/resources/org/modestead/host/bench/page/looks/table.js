@@ -1,5 +1,6 @@
 import {html, useEffect, useId, useLayoutEffect, useMemo, useRef, useState} from '../lib.js';
-import {cell, count, counted, hundredths, labelled} from './numbers.js';
+import {count, counted} from '../js/words.js';
+import {cell, hundredths, labelled} from './numbers.js';
 import {isSelected, words} from './keys.js';
 import {PAGE} from './sources.js';
 
