@@ -2,8 +2,6 @@ import {html} from '../lib.js';
 import {Mark} from './marks.js';
 import {layerStyles} from './styles.js';
 
-const MARKED_UP_TO = 60;
-
 /** The names of a picture's layers with what each looks like; a press hides or shows one. */
 export function Legend({figure, theme, hidden, setHidden}) {
   const styles = layerStyles(figure, theme);
@@ -26,13 +24,13 @@ export function Legend({figure, theme, hidden, setHidden}) {
   return html`<ul class="lk-legend" aria-label="What is drawn; press to hide or show">
     ${[...named].map(([name, layer]) => html`<li key=${name}>
       <button type="button" class="lk-name" aria-pressed=${String(!hidden.has(name))} onClick=${() => toggle(name)}>
-        <${Sign} layer=${layer} styles=${styles} theme=${theme} figure=${figure} />${name}
+        <${Sign} layer=${layer} styles=${styles} theme=${theme} />${name}
       </button>
     </li>`)}
   </ul>`;
 }
 
-function Sign({layer, styles, theme, figure}) {
+function Sign({layer, styles, theme}) {
   const colour = styles.colour(layer);
   if (layer.type === 'points') {
     return html`<${Mark} mark=${layer.mark} colour=${colour} />`;
@@ -42,14 +40,9 @@ function Sign({layer, styles, theme, figure}) {
       <rect x="1" y="3" width="14" height="10" fill=${colour} fill-opacity=${layer.type === 'band' ? theme.band * 1.4 : 1} />
     </svg>`;
   }
-  const marked = figure.kind === 'CURVES' && layer.type === 'line' && (layer.x?.length ?? 0) <= MARKED_UP_TO;
-  const mark = marked ? html`<svg x="6" y="0" width="16" height="16"><${Inner} mark=${styles.curveMark(layer)} colour=${colour} /></svg>` : null;
+  const mark = styles.isMarked(layer) ? html`<svg x="6" y="0" width="16" height="16"><${Mark} mark=${styles.curveMark(layer)} colour=${colour} /></svg>` : null;
   return html`<svg class="lk-sign lk-sign-line" viewBox="0 0 28 16" aria-hidden="true" focusable="false">
     <line x1="0" y1="8" x2="28" y2="8" stroke=${colour} stroke-width=${layer.type === 'backdrop' ? 1.4 : styles.width(layer)}
       stroke-dasharray=${styles.dash(layer).join(' ') || null} />${mark}
   </svg>`;
-}
-
-function Inner({mark, colour}) {
-  return html`<${Mark} mark=${mark} colour=${colour} />`;
 }

@@ -8,7 +8,6 @@ import {layerStyles} from './styles.js';
 /** Turns a figure, the same data that the report's picture is drawn from, into what the chart library draws. */
 
 const DIMMED = 0.22;
-const MARKED_UP_TO = 60;
 const LETTER = 0.56;
 const LONGEST = 22;
 
@@ -80,22 +79,22 @@ class Drawing {
     if (this.category) {
       const slanted = this.slanted();
       return {
-        ...this.axis(figure.x), type: 'category', data: figure.x.categories, splitLine: {show: false},
+        ...this.axis(), type: 'category', data: figure.x.categories, splitLine: {show: false},
         axisTick: {show: false},
         axisLabel: {...this.labels(), interval: 0, rotate: slanted ? 40 : 0, width: theme.small * LETTER * LONGEST, overflow: 'truncate',
           hideOverlap: false, formatter: (name) => name},
       };
     }
-    return {...this.axis(figure.x), ...this.numeric(figure.x, this.x)};
+    return {...this.axis(), ...this.numeric(figure.x, this.x)};
   }
 
   upwards() {
-    return {...this.axis(this.figure.y), ...this.numeric(this.figure.y, this.y), position: 'left'};
+    return {...this.axis(), ...this.numeric(this.figure.y, this.y), position: 'left'};
   }
 
   onTheRight() {
     const {figure} = this;
-    return {...this.axis(figure.right), ...this.numeric(figure.right, rangeRight(figure)), position: 'right', splitLine: {show: false}};
+    return {...this.axis(), ...this.numeric(figure.right, rangeRight(figure)), position: 'right', splitLine: {show: false}};
   }
 
   labels() {
@@ -146,6 +145,11 @@ class Drawing {
 
   time(value) {
     return milliseconds(value, this.figure.x.time);
+  }
+
+  /** Where a value stands on the horizontal axis, as the chart library counts: the number of its category, or a number. */
+  place(x) {
+    return this.category ? Math.round(x) : this.time(x);
   }
 
   series() {
@@ -210,16 +214,15 @@ class Drawing {
     const ink = this.ink(layer.selection);
     const chosen = isSelected(layer.selection, this.selection);
     const colour = styles.colour(layer);
-    const marked = figure.kind === 'CURVES' && group.every((one) => one.x.length <= MARKED_UP_TO);
     const mark = symbolOf(styles.curveMark(layer), colour, theme, 8 * theme.unit, ink);
     const data = [];
     for (const one of group) {
-      one.x.forEach((x, i) => data.push([this.category ? Math.round(x) : this.time(x), drawable(one.y[i], figure.y) ? one.y[i] : null]));
+      one.x.forEach((x, i) => data.push([this.place(x), drawable(one.y[i], figure.y) ? one.y[i] : null]));
       data.push([data.at(-1)?.[0] ?? 0, null]);
     }
     return {
-      type: 'line', name: layer.name, z: chosen ? 6 : layer.emphasis === 'STRONG' && !styles.overTime ? 4 : styles.overTime && layer.emphasis === 'STRONG' ? 3 : 4,
-      silent: true, clip: true, connectNulls: false, showSymbol: marked, showAllSymbol: true, symbol: mark.symbol, symbolSize: mark.size,
+      type: 'line', name: layer.name, z: chosen ? 6 : styles.overTime && layer.emphasis === 'STRONG' ? 3 : 4,
+      silent: true, clip: true, connectNulls: false, showSymbol: group.every(styles.isMarked), showAllSymbol: true, symbol: mark.symbol, symbolSize: mark.size,
       itemStyle: mark.itemStyle, data,
       lineStyle: {color: colour, width: styles.width(layer) + (chosen ? 1.2 * theme.unit : 0), type: styles.dash(layer).length ? styles.dash(layer) : 'solid',
         opacity: ink, cap: 'butt', join: 'round'},
@@ -254,7 +257,7 @@ class Drawing {
     const data = group.flatMap((layer) => layer.x.map((x, i) => {
       const ink = this.ink(layer.selection);
       return {
-        value: [this.category ? Math.round(x) : this.time(x), layer.y[i]],
+        value: [this.place(x), layer.y[i]],
         itemStyle: {opacity: ink},
         label: layer.labels[i] ? {show: true, formatter: layer.labels[i], opacity: Math.max(ink, 0.5), ...this.labelPlace(x)} : {show: false},
       };
@@ -272,7 +275,7 @@ class Drawing {
   labelPlace(x) {
     const of = this.figure.x.logarithmic ? Math.log10 : (value) => value;
     const share = this.category ? 0 : (of(x) - of(this.x.low)) / (of(this.x.high) - of(this.x.low));
-    return share > 0.82 ? {position: [6 * this.theme.unit, -3], align: 'right', verticalAlign: 'bottom'} : {position: [6 * this.theme.unit, -3], align: 'left', verticalAlign: 'bottom'};
+    return {position: [6 * this.theme.unit, -3], align: share > 0.82 ? 'right' : 'left', verticalAlign: 'bottom'};
   }
 
   /** A ring around what is selected. */
@@ -280,7 +283,7 @@ class Drawing {
     return {
       type: 'scatter', z: 7, silent: true, clip: true, symbol: 'circle', symbolSize: 22 * this.theme.unit,
       itemStyle: {color: 'transparent', borderColor: this.theme.accent, borderWidth: 2.2 * this.theme.unit},
-      data: layers.flatMap((layer) => layer.x.map((x, i) => [this.category ? Math.round(x) : this.time(x), layer.y[i]])),
+      data: layers.flatMap((layer) => layer.x.map((x, i) => [this.place(x), layer.y[i]])),
     };
   }
 

@@ -4,6 +4,8 @@
  */
 
 const DASHES = [[], [9, 4], [3, 3], [12, 4, 3, 4], [6, 3], [2, 4]];
+/** A curve of at most so many points shows them. */
+const MARKED_UP_TO = 60;
 const MARKS = ['DISC', 'SQUARE', 'RING', 'TRIANGLE', 'CROSS'];
 
 /** @param {any} figure @param {ReturnType<import('./colours.js').colours>} theme */
@@ -43,6 +45,7 @@ export function layerStyles(figure, theme) {
     colour,
     width: (layer) => theme.unit * (layer.emphasis === 'STRONG' ? (overTime ? 3.2 : 2.4) : layer.emphasis === 'NORMAL' ? (overTime ? 1.2 : 1.6) : 1.2),
     dash: (layer) => (dashed && layer.type === 'line' ? DASHES[index(layer) % DASHES.length].map((length) => length * theme.unit) : []),
+    isMarked: (layer) => figure.kind === 'CURVES' && layer.type === 'line' && layer.x.length <= MARKED_UP_TO,
     curveMark: (layer) => MARKS[index(layer) % MARKS.length],
     overTime,
   };
