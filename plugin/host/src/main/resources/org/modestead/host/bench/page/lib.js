@@ -4,12 +4,8 @@
  */
 import {templateTag} from './html.js';
 
-const {h, render, Fragment, createContext, Component} = globalThis.preact;
-const {useState, useEffect, useLayoutEffect, useRef, useMemo, useCallback, useContext, useReducer, useId, useErrorBoundary} =
-  globalThis.preactHooks;
+const {h, render} = globalThis.preact;
+const {useState, useEffect, useLayoutEffect, useRef, useMemo, useReducer, useId, useErrorBoundary} = globalThis.preactHooks;
 
 export const html = templateTag(h);
-export {
-  h, render, Fragment, Component, createContext,
-  useState, useEffect, useLayoutEffect, useRef, useMemo, useCallback, useContext, useReducer, useId, useErrorBoundary,
-};
+export {render, useState, useEffect, useLayoutEffect, useRef, useMemo, useReducer, useId, useErrorBoundary};

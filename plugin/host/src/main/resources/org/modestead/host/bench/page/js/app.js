@@ -1,7 +1,7 @@
 /** The page: puts the parts together and keeps them in step with the server. */
 import {html, render, useEffect, useErrorBoundary} from '../lib.js';
 import {api} from './api.js';
-import {getState, setState, useStore} from './store.js';
+import {setState, useStore} from './store.js';
 import {notify, takeDesk} from './actions.js';
 import {listen} from './events.js';
 import {pageKey} from './keys.js';
@@ -101,6 +101,4 @@ async function begin() {
   }
 }
 
-if (!getState().catalog) {
-  begin();
-}
+begin();

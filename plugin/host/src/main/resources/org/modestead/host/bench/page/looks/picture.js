@@ -1,4 +1,4 @@
-import {html, useCallback, useEffect, useId, useRef, useState} from '../lib.js';
+import {html, useId, useRef, useState} from '../lib.js';
 import {counted} from '../js/words.js';
 import {useColours} from './colours.js';
 import {numbersOf} from './figure-numbers.js';
@@ -68,10 +68,7 @@ export function Frame({frame, id, kind, title, caption, files, fault, chosen, nu
   const [large, setLarge] = useState(false);
   const [open, setOpen] = useState(false);
   const [told, setTold] = useState('');
-  const say = useCallback((text) => setTold(text), []);
-  useEffect(() => setTold(''), [id]);
   const captionId = `${own}-caption`;
-  const child = Array.isArray(children) ? children.find((one) => typeof one === 'function') : children;
   const button = (action, label, sign, act, pressed = null) => html`<button type="button" class="lk-button" data-action=${action}
     aria-label=${`${label}: ${title}`} title=${label} aria-pressed=${pressed} onClick=${act}>${sign}</button>`;
   return html`<figure class=${`lk-picture lk-${kind.toLowerCase().replace('_', '-')}${large ? ' lk-large' : ''}${chosen ? ' lk-chosen' : ''}`}
@@ -88,7 +85,7 @@ export function Frame({frame, id, kind, title, caption, files, fault, chosen, nu
           <a class="lk-button" href=${`${files}.png?scale=2&download=1`} download=${`${id}.png`} data-action="png" aria-label=${`${title} as a PNG file`}>PNG</a>`}
       </div>
     </div>
-    ${fault ? html`<p class="lk-fault" role="alert">${fault}</p>` : child({handle, captionId, title, say})}
+    ${fault ? html`<p class="lk-fault" role="alert">${fault}</p>` : children({handle, captionId, title, say: setTold})}
     <p class="lk-told" role="status"><span>${told}</span></p>
     <figcaption id=${captionId}>${caption}</figcaption>
     ${open && numbers && html`<${Numbers} make=${numbers} id=${`${id}-numbers`} title=${`Numbers of ${title}`} selection=${selection} select=${select} />`}

@@ -58,7 +58,7 @@ function StepLook({step}) {
     ${step.problems.length > 0 && html`<${StepProblems} step=${step} />`}
     ${step.state.sentence && step.problems.length === 0 && html`<p class=${'callout' + (kind === 'failed' ? ' stop' : '')}
       data-sentence>${step.state.sentence}</p>`}
-    ${(step.look || !step.state.sentence) && html`<div class="look-body"><${Later} load=${look} step=${step} desk=${desk} selection=${selection} select=${mark} wide=${wide} /></div>`}`;
+    ${(step.look || !step.state.sentence) && html`<div class="look-body"><${Later} load=${look} step=${step} selection=${selection} select=${mark} /></div>`}`;
 }
 
 function StepProblems({step}) {
