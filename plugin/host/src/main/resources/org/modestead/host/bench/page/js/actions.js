@@ -1,7 +1,7 @@
 /** Everything a person can do that the server must know of, and how the page takes its answers. */
 import {api, ApiFault} from './api.js';
 import {getState, setState} from './store.js';
-import {nodeOf} from './catalog.js';
+import {nodeOf, stepWith} from './catalog.js';
 import {furtherFeeds} from './feeding.js';
 import {stepOf} from './layout.js';
 
@@ -144,7 +144,7 @@ export async function addStep(add) {
   ], `Add ${node.title}`);
   if (answer) {
     choose([id]);
-    const made = answer.steps.find((step) => step.id === id);
+    const made = stepWith(answer, id);
     const also = feeds.map((feed) => endWords(answer, feed.from));
     say(`${made.title} added: ${made.state.words}.${also.length ? ` Also fed by ${[...new Set(also)].join(', ')}.` : ''}`);
   }
@@ -188,14 +188,14 @@ export async function unlink(from, to) {
 }
 
 function endWords(desk, end) {
-  return desk.steps.find((step) => step.id === stepOf(end))?.title ?? end;
+  return stepWith(desk, stepOf(end))?.title ?? end;
 }
 
 /** Moves a step within its band. @param {string} id @param {number} place */
 export async function moveStep(id, place) {
   const answer = await edit([{do: 'move', step: id, place}]);
   if (answer) {
-    const step = answer.steps.find((s) => s.id === id);
+    const step = stepWith(answer, id);
     const band = answer.steps.filter((s) => s.stage === step.stage);
     say(`${step.title} is now ${step.place + 1} of ${band.length} in its band.`);
   }

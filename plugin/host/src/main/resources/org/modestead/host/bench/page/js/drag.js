@@ -6,7 +6,7 @@ import {api} from './api.js';
 import {getState, setState} from './store.js';
 import {addStep, attempt, link, moveStep, notify, openDialog, say} from './actions.js';
 import {nodeOf, stageTitle, stepWith, endWords, typeTitle, portAt} from './catalog.js';
-import {stepOf, portOf} from './layout.js';
+import {bandOf, stepOf, portOf} from './layout.js';
 import {article} from './words.js';
 
 const SLACK = 5;
@@ -188,7 +188,7 @@ function judgeStep(drag, over, x) {
 }
 
 function placeBeside(desk, step, other, after) {
-  const band = desk.steps.filter((s) => s.stage === step.stage && s.id !== step.id).sort((a, b) => a.place - b.place);
+  const band = bandOf(desk.steps, step.stage).filter((s) => s.id !== step.id);
   return band.findIndex((s) => s.id === other.id) + (after ? 1 : 0);
 }
 
@@ -256,10 +256,11 @@ async function drop(x, y) {
   if (!drag) {
     return;
   }
-  let told = judge(drag, under(x, y), x);
-  if (drag.kind === 'port' && !drag.fitting && under(x, y).step) {
+  const over = under(x, y);
+  let told = judge(drag, over, x);
+  if (drag.kind === 'port' && !drag.fitting && over.step) {
     const fitting = await attempt(() => fittingOf(drag));
-    told = fitting ? judge({...drag, fitting}, under(x, y), x) : told;
+    told = fitting ? judge({...drag, fitting}, over, x) : told;
   }
   setState({drag: null});
   if (told.refused) {

@@ -3,7 +3,7 @@
  * operator that the spectrum was made of, and the snapshots that the operator was fitted to. A report takes all there is, also what it
  * could do without. Pure computation.
  */
-import {nodeOf} from './catalog.js';
+import {nodeOf, stepWith} from './catalog.js';
 import {stepOf} from './layout.js';
 
 /**
@@ -26,7 +26,7 @@ function outputType(catalog, desk, end) {
 }
 
 function outputsOf(catalog, desk, id) {
-  const step = desk.steps.find((s) => s.id === id);
+  const step = stepWith(desk, id);
   const node = step && nodeOf(catalog, step.node);
   return node ? node.outputs.map((port) => ({end: `${id}.${port.id}`, type: port.type})) : [];
 }

@@ -14,9 +14,7 @@ export function arrange(steps, links, stages, columns) {
   const parents = parentsOf(steps, links);
   const column = new Map();
   return stages.map((stage) => {
-    const own = steps.map((step, index) => ({...step, index})).filter((step) => step.stage === stage);
-    own.sort((a, b) => a.place - b.place || a.index - b.index);
-    const rows = tiers(own, parents).flatMap((tier) => cut(tier, columns));
+    const rows = tiers(bandOf(steps, stage), parents).flatMap((tier) => cut(tier, columns));
     return {stage, rows: rows.map((row) => seat(row, parents, column, columns))};
   });
 }
@@ -25,6 +23,11 @@ export function arrange(steps, links, stages, columns) {
 export function widest(steps, links, stages) {
   const rows = arrange(steps, links, stages, Math.max(1, steps.length)).flatMap((band) => band.rows);
   return Math.max(1, ...rows.map((row) => row.length));
+}
+
+/** @returns {Array<object>} the steps of a band in their order */
+export function bandOf(steps, stage) {
+  return steps.filter((step) => step.stage === stage).sort((a, b) => a.place - b.place);
 }
 
 /** @param {string} end `step.port` */

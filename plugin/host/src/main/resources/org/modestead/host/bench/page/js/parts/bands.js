@@ -1,8 +1,9 @@
 /** The bench itself: one band a stage, cards in rows, links between them. */
 import {html, useEffect, useLayoutEffect, useRef, useState} from '../../lib.js';
 import {getState} from '../store.js';
-import {choose, chooseLink, moveStep} from '../actions.js';
-import {arrange, widest} from '../layout.js';
+import {choose, moveStep} from '../actions.js';
+import {nodeOf, stageTitle, stepWith} from '../catalog.js';
+import {arrange, bandOf, widest} from '../layout.js';
 import {Card} from './card.js';
 import {Wires} from './wires.js';
 
@@ -35,7 +36,6 @@ export function Bands() {
   const clear = (event) => {
     if (!event.target.closest('[data-step], [data-link], button')) {
       choose([]);
-      chooseLink('');
     }
   };
   return html`<div class=${'bands' + (desk.steps.length ? '' : ' bare')} ref=${area}
@@ -54,9 +54,9 @@ function columnsIn(element) {
 }
 
 function Band({band, entry, catalog, desk, drag}) {
-  const title = catalog.stages.find((stage) => stage.id === band.stage).title;
+  const title = stageTitle(catalog, band.stage);
   const steps = new Map(desk.steps.map((step) => [step.id, step]));
-  const wanted = drag?.kind === 'node' && catalog.nodes.find((node) => node.id === drag.node).stage === band.stage;
+  const wanted = drag?.kind === 'node' && nodeOf(catalog, drag.node).stage === band.stage;
   const own = drag?.kind === 'step' && steps.get(drag.step)?.stage === band.stage;
   const empty = band.rows.length === 0;
   return html`<section class=${'band' + (empty ? ' empty' : '') + (wanted || own ? ' wanted' : '')} data-band=${band.stage}
@@ -110,7 +110,7 @@ export function focusCard(id) {
 
 /** Where a step would stand in its band after a move, -1 where it cannot move so. */
 function placeAfter(desk, step, by) {
-  const band = desk.steps.filter((s) => s.stage === step.stage).sort((a, b) => a.place - b.place);
+  const band = bandOf(desk.steps, step.stage);
   const place = band.findIndex((s) => s.id === step.id) + by;
   return place < band.length ? place : -1;
 }
@@ -123,7 +123,7 @@ export function canShift(desk, step, by) {
 /** Moves a step before or behind its neighbour in the band. @param {string} id @param {-1|1} by */
 export async function shift(id, by) {
   const {desk} = getState();
-  const place = placeAfter(desk, desk.steps.find((s) => s.id === id), by);
+  const place = placeAfter(desk, stepWith(desk, id), by);
   if (place >= 0) {
     await moveStep(id, place);
     focusCard(id);

@@ -2,7 +2,7 @@
 import {html, useState, useRef} from '../../lib.js';
 import {getState} from '../store.js';
 import {addStep, openDialog} from '../actions.js';
-import {matches, typeTitle} from '../catalog.js';
+import {matches, nodeOf, typeTitle} from '../catalog.js';
 import {grab} from '../drag.js';
 import {Glyph} from '../glyphs.js';
 
@@ -15,7 +15,7 @@ export function Shelf() {
   const groups = catalog.stages.map((stage) => ({
     stage, nodes: catalog.nodes.filter((node) => node.stage === stage.id && matches(catalog, node, query)),
   })).filter((group) => group.nodes.length > 0);
-  const about = catalog.nodes.find((node) => node.id === shown);
+  const about = nodeOf(catalog, shown);
   const flip = (id) => setShut((before) => {
     const after = new Set(before);
     after[after.has(id) ? 'delete' : 'add'](id);
