@@ -36,12 +36,12 @@ export function Card({step, column, first}) {
     classes.push('drop-after');
   }
   const press = (event) => {
-    if (!event.target.closest('[data-port], [data-no-drag]')) {
+    if (!onTab(event)) {
       grab(event, {kind: 'step', step: step.id});
     }
   };
   const pick = (event) => {
-    if (event.target.closest('[data-port], [data-no-drag]')) {
+    if (onTab(event)) {
       return;
     }
     const more = event.ctrlKey || event.metaKey || event.shiftKey;
@@ -52,7 +52,7 @@ export function Card({step, column, first}) {
   };
   /* The pointer's press gives no focus: it would choose before it is known whether others stay chosen. */
   const hold = (event) => {
-    if (!event.target.closest('[data-port], [data-no-drag]')) {
+    if (!onTab(event)) {
       event.preventDefault();
     }
   };
@@ -81,6 +81,11 @@ export function stateKind(state) {
   return state.kind === 'done' && state.doubts > 0 ? 'doubts' : state.kind;
 }
 
+/** Whether a press is meant for a tab of the card, not for the card. */
+function onTab(event) {
+  return event.target.closest('[data-port], [data-no-drag]') !== null;
+}
+
 function toggled(chosen, id) {
   return chosen.includes(id) ? chosen.filter((other) => other !== id) : [...chosen, id];
 }
@@ -94,7 +99,7 @@ function focusChoose(step) {
 }
 
 function openByDoubleClick(event, step) {
-  if (!event.target.closest('[data-port], [data-no-drag]')) {
+  if (!onTab(event)) {
     openDialog({kind: 'settings', step: step.id});
   }
 }

@@ -54,6 +54,8 @@ export function Dialog({title, kind, children, foot, onsubmit, light, text, oncl
   </dialog>`;
 }
 
+export const cancelButton = html`<button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Cancel</button>`;
+
 /** The element may have been drawn anew meanwhile: then its successor takes the focus. */
 function giveBack(before, card, port, side) {
   setTimeout(() => {

@@ -106,8 +106,12 @@ function ColumnField(props) {
       selected=${column.name === value}>${columnWords(column)}</option>`)}</select>`;
 }
 
+function linesOf(text) {
+  return text.split('\n').map((line) => line.trim()).filter(Boolean);
+}
+
 function asList(value) {
-  return Array.isArray(value) ? value : value ? String(value).split('\n').map((line) => line.trim()).filter(Boolean) : [];
+  return Array.isArray(value) ? value : value ? linesOf(String(value)) : [];
 }
 
 function ColumnsField(props) {
@@ -151,13 +155,12 @@ function inOrder(names, columns) {
 function TextsField(props) {
   const {value, type} = props;
   const [text, setText] = useState('');
-  const lines = (typed) => typed.split('\n').map((line) => line.trim()).filter(Boolean);
   const held = Array.isArray(value) ? value.join('\n') : asText(value);
   return html`<textarea ...${common(props)} class="field-input" rows="3" spellcheck="false" placeholder="one a line"
-    value=${lines(text).join('\n') === held ? text : held}
+    value=${linesOf(text).join('\n') === held ? text : held}
     oninput=${(e) => {
       setText(e.target.value);
-      type(lines(e.target.value));
+      type(linesOf(e.target.value));
     }}></textarea>`;
 }
 

@@ -3,13 +3,11 @@ import {html, useRef, useState} from '../../lib.js';
 import {getState, setState} from '../store.js';
 import {addStep, attempt, closeDialog, openDesk, save} from '../actions.js';
 import {api} from '../api.js';
-import {Dialog} from './dialog.js';
+import {Dialog, cancelButton} from './dialog.js';
 import {FileBox} from './file-box.js';
 import {bytes} from '../words.js';
 
 const TABLES = ['csv', 'tsv', 'txt', 'parquet', 'json', 'ndjson'];
-
-const cancelButton = html`<button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Cancel</button>`;
 
 export function OpenDialog() {
   const input = useRef(null);

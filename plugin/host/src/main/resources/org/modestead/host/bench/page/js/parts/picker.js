@@ -7,6 +7,7 @@ import {stepOf} from '../layout.js';
 import {fittingOf} from '../drag.js';
 import {focusCard} from './bands.js';
 import {Dialog} from './dialog.js';
+import {walkList} from './list-walk.js';
 import {article, counted} from '../words.js';
 
 /**
@@ -33,7 +34,7 @@ export function Picker({end, output, step}) {
     const by = {ArrowDown: 1, ArrowUp: -1}[event.key];
     if (by) {
       event.preventDefault();
-      walk(list.current, by);
+      walkList(list.current, by, 'picker-query');
     }
   };
   const first = () => options?.flatMap((group) => group.items)[0]?.act();
@@ -117,14 +118,4 @@ function Unfit({fitting, catalog, desk, output}) {
   }
   return html`<details class="unfit"><summary>${counted(others.length, 'port')} on the bench that ${others.length === 1 ? 'does' : 'do'} not fit, and why</summary>
     <ul>${others.map((port) => html`<li key=${port.end}><strong>${endWords(catalog, desk, port.end, !output)}</strong> ${port.refusal}</li>`)}</ul></details>`;
-}
-
-function walk(list, by) {
-  const items = [...list.querySelectorAll('button')];
-  const next = items.indexOf(document.activeElement) + by;
-  if (next < 0) {
-    document.getElementById('picker-query').focus();
-  } else {
-    items[next]?.focus();
-  }
 }

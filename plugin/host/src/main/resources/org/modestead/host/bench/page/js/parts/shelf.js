@@ -5,6 +5,7 @@ import {addStep, openDialog} from '../actions.js';
 import {matches, nodeOf, typeTitle} from '../catalog.js';
 import {grab} from '../drag.js';
 import {Glyph} from '../glyphs.js';
+import {walkList} from './list-walk.js';
 
 export function Shelf() {
   const {catalog} = getState();
@@ -79,12 +80,6 @@ function walk(event, list) {
   const by = {ArrowDown: 1, ArrowUp: -1}[event.key];
   if (by && !event.ctrlKey && !event.altKey) {
     event.preventDefault();
-    const items = [...list.current.querySelectorAll('button')];
-    const next = items.indexOf(document.activeElement) + by;
-    if (next < 0) {
-      document.getElementById('shelf-query').focus();
-    } else {
-      items[next]?.focus();
-    }
+    walkList(list.current, by, 'shelf-query');
   }
 }

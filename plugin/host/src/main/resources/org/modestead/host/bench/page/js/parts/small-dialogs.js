@@ -4,10 +4,8 @@ import {getState} from '../store.js';
 import {choose, closeDialog, edit, openDialog, say, addStep} from '../actions.js';
 import {nodeOf, problemWords, stepWith, typeTitle} from '../catalog.js';
 import {KEYS} from '../keys.js';
-import {Dialog} from './dialog.js';
+import {Dialog, cancelButton} from './dialog.js';
 import {counted} from '../words.js';
-
-const cancelButton = html`<button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Cancel</button>`;
 
 function mainButton(label) {
   return html`<button type="submit" class="button main" data-action="apply">${label}</button>`;

@@ -4,7 +4,7 @@ import {api} from '../api.js';
 import {getState} from '../store.js';
 import {attempt, closeDialog, edit, run, say} from '../actions.js';
 import {nodeOf, stepWith} from '../catalog.js';
-import {Dialog} from './dialog.js';
+import {Dialog, cancelButton} from './dialog.js';
 import {Field} from './fields.js';
 import {counted} from '../words.js';
 
@@ -81,7 +81,7 @@ export function StepDialog({step: id, field}) {
     <button type="button" class="button" data-action="stay" onclick=${() => setLeaving(false)}>Go on setting</button>
     <button type="button" class="button danger" data-action="leave" onclick=${closeDialog}>Leave them as they were</button>`
     : html`<p class=${'grow dialog-told' + (about?.problems.length ? ' tone-stop' : ' quiet')} role="status">${busy ? 'Keeping the settings.' : about ? told(about, changes) : ''}</p>
-    <button type="button" class="button" data-action="cancel-dialog" onclick=${closeDialog}>Cancel</button>
+    ${cancelButton}
     <button type="button" class="button" data-action="apply-run" onclick=${() => keep(true)}>Keep and run</button>
     <button type="submit" class="button main" data-action="apply">Keep</button>`;
   return html`<${Dialog} title=${`Settings of ${step.title}`} kind="settings" onsubmit=${() => keep(false)} onclose=${close} foot=${foot}>
