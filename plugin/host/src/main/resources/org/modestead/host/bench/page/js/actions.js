@@ -313,6 +313,16 @@ export async function openDesk(what) {
   return change('/api/desk', what);
 }
 
+/** Opens a workflow from anywhere on this machine. @param {File} file */
+export async function openFile(file) {
+  return openDesk({workflow: await file.text(), name: file.name});
+}
+
+/** Brings a file to the bench's own folder. @param {File} file @returns {Promise<object|null>} what it is, null when refused */
+export async function upload(file) {
+  return attempt(() => api.upload(file));
+}
+
 export async function closeDesk() {
   return change('/api/desk/close');
 }

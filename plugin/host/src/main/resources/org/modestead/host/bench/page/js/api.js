@@ -59,11 +59,8 @@ export const api = {
     signal,
   }),
 
-  /**
-   * @param {Blob} file
-   * @param {string} name
-   */
-  upload: (file, name) => ask(`/api/upload?name=${encodeURIComponent(name)}`, {
+  /** @param {File} file */
+  upload: (file) => ask(`/api/upload?name=${encodeURIComponent(file.name)}`, {
     method: 'POST',
     headers: {'Content-Type': 'application/octet-stream', 'X-Modestead': 'bench'},
     body: file,

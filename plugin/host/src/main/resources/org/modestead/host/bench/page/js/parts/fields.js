@@ -1,7 +1,6 @@
 /** One field a kind of setting. A field shows a value and tells what was typed; it judges nothing itself. */
 import {html, useRef, useState} from '../../lib.js';
-import {api} from '../api.js';
-import {attempt} from '../actions.js';
+import {upload} from '../actions.js';
 import {getState} from '../store.js';
 import {counted} from '../words.js';
 import {FileBox} from './file-box.js';
@@ -174,7 +173,7 @@ function FileField(props) {
     document.getElementById(id)?.focus();
   };
   const bring = async (file) => {
-    const answer = file && await attempt(() => api.upload(file, file.name));
+    const answer = file && await upload(file);
     if (answer) {
       take(answer.path);
     }

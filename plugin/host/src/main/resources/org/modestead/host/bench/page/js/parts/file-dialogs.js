@@ -1,13 +1,14 @@
 /** Open a workflow, save it under another name, say what a dropped file is for. */
 import {html, useRef, useState} from '../../lib.js';
 import {getState, setState} from '../store.js';
-import {addStep, attempt, closeDialog, openDesk, save} from '../actions.js';
+import {addStep, attempt, closeDialog, openDesk, openFile, save, upload} from '../actions.js';
 import {api} from '../api.js';
 import {Dialog, cancelButton} from './dialog.js';
 import {FileBox} from './file-box.js';
 import {bytes} from '../words.js';
 
-const TABLES = ['csv', 'tsv', 'txt', 'parquet', 'json', 'ndjson'];
+/** How files end that can be read as tables. */
+export const TABLES = ['csv', 'tsv', 'txt', 'parquet', 'json', 'ndjson'];
 
 export function OpenDialog() {
   const input = useRef(null);
@@ -17,7 +18,7 @@ export function OpenDialog() {
     }
   };
   const bring = async (file) => {
-    if (file && await openDesk({workflow: await file.text(), name: file.name})) {
+    if (file && await openFile(file)) {
       closeDialog();
     }
   };
@@ -60,14 +61,14 @@ export function DroppedDialog({file}) {
     setBusy(false);
   };
   const add = run(async () => {
-    const answer = await attempt(() => api.upload(file, file.name));
+    const answer = await upload(file);
     if (answer) {
       closeDialog();
       await addStep({node: 'table-source', title: file.name, settings: {path: answer.path}});
     }
   });
   const anew = run(async () => {
-    const answer = await attempt(() => api.upload(file, file.name));
+    const answer = await upload(file);
     if (answer) {
       setState({dialog: null});
       await attempt(() => api.post('/api/desk/close'));
@@ -75,7 +76,7 @@ export function DroppedDialog({file}) {
     }
   });
   const open = run(async () => {
-    if (await openDesk({workflow: await file.text(), name: file.name})) {
+    if (await openFile(file)) {
       closeDialog();
     }
   });

@@ -1,10 +1,11 @@
 /** Where one begins: a recording, a workflow, an example, or what was left. */
 import {html, useEffect, useRef, useState} from '../../lib.js';
 import {getState, setState} from '../store.js';
-import {attempt, openDesk, openDialog, say} from '../actions.js';
+import {attempt, openDesk, openDialog, openFile, say, upload} from '../actions.js';
 import {api} from '../api.js';
 import {bytes, counted} from '../words.js';
 import {DropZone} from './drop-zone.js';
+import {TABLES} from './file-dialogs.js';
 import {Recording} from './recording.js';
 import {ViewMenu} from './view-menu.js';
 
@@ -22,12 +23,12 @@ export function Start() {
       return;
     }
     if (file.name.toLowerCase() === 'workflow.json') {
-      await openDesk({workflow: await file.text(), name: file.name});
+      await openFile(file);
       return;
     }
     setBusy(`Reading ${file.name}.`);
     say(`Reading ${file.name}.`);
-    const answer = await attempt(() => api.upload(file, file.name));
+    const answer = await upload(file);
     setBusy('');
     if (answer) {
       setState({guess: answer});
@@ -55,7 +56,7 @@ export function Start() {
         <h2 id="way-recording">Take a recording</h2>
         <p>One row a sample, one column a channel; a time column and a run column if there are any. CSV, Parquet or JSON.
           Drop it anywhere on this page, or</p>
-        <input ref=${input} id="recording-file" class="unseen" type="file" accept=".csv,.tsv,.txt,.parquet,.json,.ndjson" tabindex="-1" aria-hidden="true"
+        <input ref=${input} id="recording-file" class="unseen" type="file" accept=${TABLES.map((end) => '.' + end).join(',')} tabindex="-1" aria-hidden="true"
           data-action="recording-file" onchange=${(e) => take(e.target.files[0])} />
         <button type="button" class="button main" data-first data-action="choose-recording" onclick=${() => input.current.click()}>Choose a file…</button>
         <p class="help">It stays on this machine${start ? `; up to ${bytes(start.uploadLimit)}` : ''}.</p>
