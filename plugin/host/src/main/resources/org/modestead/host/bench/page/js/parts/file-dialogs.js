@@ -1,8 +1,7 @@
 /** Open a workflow, save it under another name, say what a dropped file is for. */
 import {html, useRef, useState} from '../../lib.js';
 import {getState, setState} from '../store.js';
-import {addStep, attempt, closeDialog, openDesk, openFile, save, upload} from '../actions.js';
-import {api} from '../api.js';
+import {addStep, closeDesk, closeDialog, openDesk, openFile, save, upload} from '../actions.js';
 import {Dialog, cancelButton} from './dialog.js';
 import {FileBox} from './file-box.js';
 import {bytes} from '../words.js';
@@ -70,9 +69,10 @@ export function DroppedDialog({file}) {
   const anew = run(async () => {
     const answer = await upload(file);
     if (answer) {
-      setState({dialog: null});
-      await attempt(() => api.post('/api/desk/close'));
-      setState({desk: {...getState().desk, open: false}, guess: answer});
+      closeDialog();
+      if (await closeDesk()) {
+        setState({guess: answer});
+      }
     }
   });
   const open = run(async () => {
