@@ -1,7 +1,7 @@
 /** A recording that was brought: what was guessed of its columns, to be corrected, and the steps that come of it. */
 import {html, useRef, useState} from '../../lib.js';
 import {getState, setState} from '../store.js';
-import {attempt, choose, openDesk, run, say} from '../actions.js';
+import {attempt, openDesk, run, say} from '../actions.js';
 import {nodeOf} from '../catalog.js';
 import {api} from '../api.js';
 import {counted, number} from '../words.js';
@@ -34,11 +34,7 @@ export function Recording({guess: first, back}) {
       return;
     }
     setState({guess: null});
-    const verdict = desk.steps.find((step) => step.node === 'wellposedness-checker');
     if (runs) {
-      if (verdict) {
-        choose([verdict.id]);
-      }
       await run();
     }
   };
