@@ -94,7 +94,7 @@ function plainKey(event) {
     return chosen.length ? () => removeSteps(chosen) : null;
   }
   if (event.key === 'F2' && chosen.length === 1) {
-    return () => setState({dialog: {kind: 'rename', step: chosen[0]}});
+    return () => openDialog({kind: 'rename', step: chosen[0]});
   }
   if (event.key === 'Escape') {
     if (selection) {

@@ -1,6 +1,6 @@
 /** One step on the bench: what it takes, its name and state, what it gives. */
 import {html} from '../../lib.js';
-import {getState, setState} from '../store.js';
+import {getState} from '../store.js';
 import {choose, openDialog} from '../actions.js';
 import {nodeOf, portWords, endWords, hasTwin, stepName, stepWith} from '../catalog.js';
 import {stepOf} from '../layout.js';
@@ -146,7 +146,7 @@ function Ports({step, node, output, open}) {
     ${shown.map((port) => html`<${Tab} key=${port.id} step=${step} port=${port} siblings=${ports} output=${output} reach=${open} />`)}
     ${folds && html`<li key="more"><button type="button" class="tab more" tabindex="-1" data-no-drag data-action="more-ports"
       aria-label=${`${folded} more of ${step.title}`}
-      onclick=${() => setState({chosen: [step.id]})}>${folded}</button></li>`}
+      onclick=${() => choose([step.id])}>${folded}</button></li>`}
   </ul>`;
 }
 

@@ -3,7 +3,7 @@ import {html} from '../../lib.js';
 import {Draft} from './draft.js';
 import {Later} from './later.js';
 import {getState, setState} from '../store.js';
-import {run, openDialog, removeSteps, duplicate, mark, edit} from '../actions.js';
+import {run, choose, openDialog, removeSteps, duplicate, mark, edit} from '../actions.js';
 import {hasTwin, nodeOf, problemWords, stepName, stepWith} from '../catalog.js';
 import {canShift, shift} from './bands.js';
 import {stateKind} from './card.js';
@@ -82,7 +82,7 @@ function WorkflowLook({desk}) {
         placeholder="What this work is about, for whoever opens it next" />
       ${desk.steps.length > 0 && html`<h3>Where it stands</h3>`}
       <ul class="overview">${desk.steps.map((step) => html`<li key=${step.id}><button type="button" class="overview-step" data-overview=${step.id}
-        onclick=${() => setState({chosen: [step.id]})}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${stepName(desk, step)}</span>
+        onclick=${() => choose([step.id])}><${Glyph} name=${stateKind(step.state)} /><span class="clip">${stepName(desk, step)}</span>
         <span class="quiet small clip">${step.state.words}</span></button></li>`)}</ul>
     </div>`;
 }
