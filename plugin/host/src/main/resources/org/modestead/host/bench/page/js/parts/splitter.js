@@ -29,7 +29,7 @@ export function Splitter() {
     const shelf = document.querySelector('.shelf').getBoundingClientRect();
     bar.current.setPointerCapture(event.pointerId);
     bar.current.onpointermove = (e) => put(((e.clientX - shelf.right) / (room.right - shelf.right)) * 100);
-    bar.current.onpointerup = () => {
+    bar.current.onlostpointercapture = () => {
       bar.current.onpointermove = null;
     };
   };
