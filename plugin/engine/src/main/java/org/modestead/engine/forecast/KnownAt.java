@@ -4,9 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.stream.DoubleStream;
-import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.Snapshots.Part;
@@ -48,7 +46,7 @@ final class KnownAt {
         if (from >= to) {
             return;
         }
-        Run more = samples(later, from, to);
+        Run more = later.cut(from, to);
         if (last >= 0 && more.times()[0] - end <= CONTIGUOUS * step) {
             known.set(last, joined(known.get(last), more));
         } else {
@@ -70,15 +68,6 @@ final class KnownAt {
             count++;
         }
         return count;
-    }
-
-    private static Run samples(Run run, int from, int to) {
-        return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), rows(run.values(), from, to),
-                rows(run.inputs(), from, to), 0, run.weight());
-    }
-
-    private static DMatrixRMaj rows(DMatrixRMaj a, int from, int to) {
-        return Matrices.block(a, from, to, 0, a.numCols);
     }
 
     private static Run joined(Run before, Run after) {

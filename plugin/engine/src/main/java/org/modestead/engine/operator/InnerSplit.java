@@ -1,10 +1,8 @@
 package org.modestead.engine.operator;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import org.modestead.engine.FitFault;
-import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
@@ -42,8 +40,8 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
         } else {
             for (Run run : runs) {
                 int cut = run.samples() - run.samples() / 4;
-                first.add(rows(run, 0, cut));
-                last.add(rows(run, Math.max(0, cut - 1 - snapshots.delay().reach()), run.samples()));
+                first.add(run.cut(0, cut));
+                last.add(run.cut(Math.max(0, cut - 1 - snapshots.delay().reach()), run.samples()));
             }
         }
         Snapshots fitting = snapshots.replaced(first, last, snapshots.smoothing());
@@ -53,10 +51,5 @@ public record InnerSplit(Snapshots fitting, List<StateRun> judging) {
                     "use longer runs, a smaller delay depth, or choose by another rule");
         }
         return new InnerSplit(fitting, judging);
-    }
-
-    private static Run rows(Run run, int from, int to) {
-        return new Run(run.id(), Arrays.copyOfRange(run.times(), from, to), Matrices.block(run.values(), from, to, 0, run.values().numCols),
-                Matrices.block(run.inputs(), from, to, 0, run.inputs().numCols), 0, run.weight());
     }
 }

@@ -1,7 +1,9 @@
 package org.modestead.engine.recording;
 
+import java.util.Arrays;
 import java.util.Objects;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.linalg.Matrices;
 
 /**
  * One uninterrupted recording: {@code p} samples of {@code n} channels and {@code q} inputs at rising times.
@@ -46,6 +48,12 @@ public record Run(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inp
     /** The same run with other values, p x n. */
     public Run withValues(DMatrixRMaj other) {
         return new Run(id, times, other, inputs, leadIn, weight);
+    }
+
+    /** The samples [from, to) of this run, without lead-in. */
+    public Run cut(int from, int to) {
+        return new Run(id, Arrays.copyOfRange(times, from, to), Matrices.block(values, from, to, 0, values.numCols),
+                Matrices.block(inputs, from, to, 0, inputs.numCols), 0, weight);
     }
 
     /**
