@@ -16,6 +16,12 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.modestead.host.FakeNode;
 import org.modestead.host.TestWorkflows;
+import org.modestead.host.bench.desk.DeskFolder;
+import org.modestead.host.bench.folders.OpenedFolders;
+import org.modestead.host.bench.run.KeptResults;
+import org.modestead.host.bench.run.ResultFolder;
+import org.modestead.host.bench.work.DeskView;
+import org.modestead.host.bench.work.Workbench;
 import org.modestead.nodes.contract.NodeCatalog;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.table.RowCursor;
@@ -229,9 +235,45 @@ class RunsTest {
             }
         }
         try (TestBench bench = bench(List.of("a:add", "b:add"), List.of("a.table>b.a"))) {
-            bench.post("/api/run", "{\"steps\": [\"b\"], \"again\": true}");
+            TestBench.Reply gone = bench.get("/api/steps/b/look");
+            assertEquals(409, gone.status());
+            assertEquals("step b: its result is no longer kept; run it again.", gone.sentence());
+            assertEquals("ready", TestBench.kind(bench.get("/api/desk").json(), "b"), "the damage was found out");
+            bench.post("/api/run", "{\"steps\": [\"b\"]}");
             JsonNode desk = bench.awaitRest();
-            assertTrue(List.of("done", "failed").contains(TestBench.kind(desk, "b")), desk.toString());
+            assertEquals(List.of("done", "done"), List.of(TestBench.kind(desk, "a"), TestBench.kind(desk, "b")), desk.toString());
+            assertEquals(4, works.get(), "a was damaged too, and was made anew for b");
+            assertEquals(2, shown(bench, "b"));
+            assertEquals(1, shown(bench, "a"));
         }
+        try (TestBench bench = bench(List.of("a:add", "b:add"), List.of("a.table>b.a"))) {
+            assertEquals(2, shown(bench, "b"), "what was made anew is kept in the place of what was damaged");
+            assertEquals(4, works.get());
+        }
+    }
+
+    @Test
+    void whatFellOutOfMemoryAndDiskIsReadyAgainAndRunningToItRunsIt() throws IOException, InterruptedException {
+        Path work = Files.createDirectories(folder.resolve("work"));
+        TestWorkflows.write(work, List.of("a:add", "b:add", "c:add"), LINKS);
+        DeskFolder desk = new DeskFolder(folder.resolve("desk"));
+        KeptResults results = new KeptResults(new ResultFolder(desk.results(), "build", 1), 1);
+        try (Workbench workbench = new Workbench(nodes(), results, new OpenedFolders(List.of(folder)))) {
+            workbench.open(() -> desk.open(work));
+            workbench.run(List.of(), false);
+            assertEquals(List.of("READY", "WAITING", "DONE"), states(workbench), "only the last result had room");
+            workbench.run(List.of("b"), false);
+            assertEquals(List.of("READY", "DONE", "READY"), states(workbench));
+            assertEquals(5, works.get(), "a and b ran again");
+        }
+    }
+
+    private static List<String> states(Workbench workbench) throws InterruptedException {
+        DeskView view = workbench.view();
+        while (view.desk().orElseThrow().run().running()) {
+            view = workbench.await(view.revision(), TestBench.PATIENCE.toMillis()).orElse(view);
+        }
+        DeskView.Open open = view.desk().orElseThrow();
+        return List.of("a", "b", "c").stream().map(step -> open.standing().get(step).state().kind().name()).toList();
     }
 }

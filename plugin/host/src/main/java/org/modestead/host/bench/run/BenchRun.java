@@ -33,7 +33,9 @@ public final class BenchRun {
 
     private final RunPlan plan;
     private final Map<String, Double> expected;
+    private final KeptResults kept;
     private final Results results;
+    private volatile boolean keeping;
     private final Watcher watcher;
     private final CancelSwitch cancel = new CancelSwitch();
     private final CountDownLatch over = new CountDownLatch(1);
@@ -43,7 +45,7 @@ public final class BenchRun {
     /** Hears how a run goes; called from its threads, one call at a time for the end. */
     public interface Watcher {
 
-        /** A step began. */
+        /** A step began, or all have ended and their results are being written. */
         void began();
 
         /** A step ended. */
@@ -66,6 +68,7 @@ public final class BenchRun {
         this.plan = plan;
         this.expected = Map.copyOf(expected);
         this.watcher = watcher;
+        this.kept = kept;
         this.results = new Results() {
             @Override
             public Optional<NodeResult> find(PlannedStep step, String fingerprint) {
@@ -90,9 +93,30 @@ public final class BenchRun {
         Map<String, StepOutcome> outcomes = new LinkedHashMap<>();
         try {
             outcomes.putAll(StepsRun.run(plan, results, new NoStore(), new Listener(), cancel, Runtime.getRuntime().availableProcessors()));
+            settle();
         } finally {
             finish(outcomes);
         }
+    }
+
+    /** What is told to be done is not lost with the process: the run is over when its results lie on disk. */
+    private void settle() {
+        keeping = !kept.isSettled();
+        try {
+            synchronized (over) {
+                if (keeping && over.getCount() > 0) {
+                    watcher.began();
+                }
+            }
+            kept.settle();
+        } catch (InterruptedException hurried) {
+            Thread.currentThread().interrupt();
+        }
+    }
+
+    /** Returns whether all steps have ended and their results are being written. */
+    public boolean isKeeping() {
+        return keeping;
     }
 
     private void finish(Map<String, StepOutcome> outcomes) {

@@ -22,6 +22,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Stream;
 import org.modestead.engine.Fault;
+import org.modestead.host.output.Forced;
 import org.modestead.host.output.WholeFolder;
 import org.modestead.host.table.KeptTable;
 import org.modestead.nodes.contract.NodeDeclaration;
@@ -51,6 +52,11 @@ public record ResultFolder(Path root, String build, long limit) {
     private static final String FACTS = "facts.json";
     private static final String RESULT = "result.zip";
 
+    /** Returns whether a result is there now. */
+    boolean has(String id) {
+        return Files.isRegularFile(folder(id).resolve(FACTS));
+    }
+
     /** Returns what is known of a result, empty when there is none. */
     Optional<KeptResults.Facts> facts(String id) {
         return index(id).map(index -> new KeptResults.Facts(index.path("node").asText(), index.path("seconds").asDouble(),
@@ -68,14 +74,18 @@ public record ResultFolder(Path root, String build, long limit) {
 
     /** Reads a result; empty when it is not there whole, so that the step must run again. */
     Optional<NodeResult> read(NodeDeclaration declaration, String id) {
-        Optional<JsonNode> index = index(id).filter(found -> !found.path("anew").asBoolean());
-        if (index.isEmpty()) {
+        if (!has(id)) {
             return Optional.empty();
         }
         try {
+            JsonNode index = index(id).orElseThrow(() -> new IOException("its facts cannot be read"));
+            if (index.path("anew").asBoolean()) {
+                return Optional.empty();
+            }
+            checkSizes(folder(id), index.path("bytes"));
             Map<String, Object> outputs = new HashMap<>();
             for (Port port : declaration.outputs()) {
-                outputs.put(port.id(), port.type() == PortType.TABLE ? table(id, port, index.get().path("tables").path(port.id())) : value(id, port));
+                outputs.put(port.id(), port.type() == PortType.TABLE ? table(id, port, index.path("tables").path(port.id())) : value(id, port));
             }
             Files.setLastModifiedTime(folder(id).resolve(FACTS), FileTime.from(Instant.now()));
             ResultFile shown = shown(id);
@@ -83,6 +93,15 @@ public record ResultFolder(Path root, String build, long limit) {
         } catch (IOException | Fault broken) {
             remove(folder(id));
             return Optional.empty();
+        }
+    }
+
+    /** Tables are read late: that they are whole is seen from their size. */
+    private static void checkSizes(Path folder, JsonNode bytes) throws IOException {
+        for (Map.Entry<String, JsonNode> file : bytes.properties()) {
+            if (Files.size(folder.resolve(file.getKey())) != file.getValue().asLong()) {
+                throw new IOException(file.getKey() + " is not whole");
+            }
         }
     }
 
@@ -101,14 +120,14 @@ public record ResultFolder(Path root, String build, long limit) {
     private Table table(String id, Port port, JsonNode known) throws IOException {
         List<Column> columns = new ArrayList<>();
         known.path("columns").forEach(column -> columns.add(new Column(column.path("name").asText(), CellType.valueOf(column.path("type").asText()))));
-        Path file = folder(id).resolve(port.id() + ".parquet");
-        if (!Files.isRegularFile(file)) {
-            throw new IOException("no " + file);
-        }
-        return KeptTable.read(file, new TableSchema(columns), known.path("origin").asText());
+        return KeptTable.read(folder(id).resolve(port.id() + ".parquet"), new TableSchema(columns), known.path("origin").asText());
     }
 
-    /** Writes a result, whole or not at all. What cannot be written is not kept: the step runs again in another process. */
+    /**
+     * Writes a result, whole or not at all; it is on the disk itself before this returns, and in the place of an older one of the same
+     * name, which may have been damaged. What cannot be written, or is larger than all results together may be, is not kept: the step
+     * runs again in another process.
+     */
     void write(NodeDeclaration declaration, String id, NodeResult result, KeptResults.Facts facts) {
         Path folder = folder(id);
         Path part = folder.resolveSibling("." + id + "." + ProcessHandle.current().pid() + ".part");
@@ -116,10 +135,13 @@ public record ResultFolder(Path root, String build, long limit) {
             remove(part);
             Files.createDirectories(part);
             fill(part, declaration, result, facts);
-            if (!Files.exists(folder)) {
+            if (size(part) <= limit) {
+                Forced.files(part);
+                remove(folder);
                 Files.move(part, folder, StandardCopyOption.ATOMIC_MOVE);
+                Forced.names(folder.getParent());
+                shrink();
             }
-            shrink();
         } catch (IOException | Fault unwritable) {
             // a full disk or a part of another extension: the result stays in memory
             remove(folder);
@@ -148,6 +170,10 @@ public record ResultFolder(Path root, String build, long limit) {
         }
         try (OutputStream out = new BufferedOutputStream(Files.newOutputStream(part.resolve(RESULT)))) {
             ResultFile.write(ResultFile.of(result), out);
+        }
+        ObjectNode bytes = index.putObject("bytes");
+        try (Stream<Path> files = Files.list(part)) {
+            files.sorted().forEach(file -> bytes.put(file.getFileName().toString(), file.toFile().length()));
         }
         Files.write(part.resolve(FACTS), MAPPER.writeValueAsBytes(index));
     }

@@ -67,7 +67,12 @@ public final class Looks {
         if (kept.isEmpty() && fresh && results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
             kept = Optional.of(madeAnew(shown.known().inspection().survey().planned().get(id), result));
         }
-        return new Looked(result, shown.step(), shown.node(), kept.orElseThrow(() -> new DeskFault("step " + id, "its result is no longer kept", "run it again")), !fresh);
+        return new Looked(result, shown.step(), shown.node(), kept.orElseThrow(() -> gone(id)), !fresh);
+    }
+
+    private DeskFault gone(String id) {
+        workbench.lost();
+        return new DeskFault("step " + id, "its result is no longer kept", "run it again");
     }
 
     private NodeResult madeAnew(PlannedStep step, String result) {

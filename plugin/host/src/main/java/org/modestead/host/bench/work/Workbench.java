@@ -257,6 +257,11 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         return view();
     }
 
+    /** A result that was told of is not there any more. */
+    synchronized void lost() {
+        told();
+    }
+
     /** Something is to be told, but the document is the same. */
     private void told() {
         revision++;
@@ -374,7 +379,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         }
         BenchRun begun = run.get();
         OptionalDouble left = begun.secondsLeft();
-        String words = begun.isStopping() ? "stopping" : "running, " + (int) Math.floor(100 * begun.fraction()) + " %"
+        String words = begun.isStopping() ? "stopping" : begun.isKeeping() ? "keeping the results" : "running, " + (int) Math.floor(100 * begun.fraction()) + " %"
                 + (left.isPresent() ? ", about " + Spans.words(left.getAsDouble()) + " left" : "");
         return new DeskView.RunView(true, words, begun.fraction(), left, begun.isStopping(), "");
     }
