@@ -1,13 +1,17 @@
 package org.modestead.engine.modelfile;
 
+import java.io.Serializable;
 import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 
-/** A value as a tree: texts, numbers, lists, fields by name, and arrays at the leaves. Arrays are those of the value itself, not copies. */
-public sealed interface Stored {
+/**
+ * A value as a tree: texts, numbers, lists, fields by name, and arrays at the leaves. Arrays are those of the value itself, not copies. Serialisable,
+ * so that a value can travel as its tree between machines of one job; a file has another form.
+ */
+public sealed interface Stored extends Serializable {
 
     /** A text. */
     record Text(String value) implements Stored {

@@ -14,6 +14,7 @@ import org.modestead.engine.basis.KernelSections;
 import org.modestead.engine.basis.LandmarkFeatures;
 import org.modestead.engine.basis.MonomialFunctions;
 import org.modestead.engine.basis.OccupationFunctions;
+import org.modestead.engine.basis.RandomFourierFunctions;
 import org.modestead.engine.basis.ScaledFunctions;
 
 /** Functions of a state, by kind, with all they need to be evaluated anywhere. */
@@ -40,6 +41,9 @@ final class StoredBasis {
         if (basis instanceof LandmarkFeatures features) {
             return out.text("kind", "landmarks").put("kernel", StoredKernel.of(features.kernel())).matrix("landmarks", features.landmarks())
                     .matrix("inverse_transposed", features.inverseTransposed()).done();
+        }
+        if (basis instanceof RandomFourierFunctions waves) {
+            return out.text("kind", "random-waves").matrix("frequencies", waves.frequencies()).text("description", waves.description()).done();
         }
         if (basis instanceof OccupationFunctions occupation) {
             return of(out, occupation);
@@ -68,6 +72,7 @@ final class StoredBasis {
             case "harmonics" -> harmonics(in, arguments);
             case "kernel-sections" -> new KernelSections(in.object("kernel", StoredKernel::read), columns(in, "centres", arguments));
             case "landmarks" -> landmarks(in, arguments);
+            case "random-waves" -> new RandomFourierFunctions(columns(in, "frequencies", arguments), in.text("description"));
             case "occupation" -> new OccupationFunctions(in.object("kernel", StoredKernel::read), segments(in, arguments));
             case "scaled" -> scaled(in, arguments);
             case "joined" -> joined(in, arguments);

@@ -3,6 +3,7 @@ package org.modestead.engine.modelfile;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.basis.FourierDictionary;
 import org.modestead.engine.basis.MonomialDictionary;
+import org.modestead.engine.basis.RandomFourierDictionary;
 import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.ExtrapolatedEstimator;
@@ -79,6 +80,10 @@ final class StoredEstimator {
         if (dictionary instanceof FourierDictionary fourier) {
             return out.text("kind", "fourier").whole("order", fourier.order()).vector("periods", fourier.periods()).done();
         }
+        if (dictionary instanceof RandomFourierDictionary waves) {
+            return out.text("kind", "random-waves").put("kernel", StoredKernel.of(waves.kernel())).whole("waves", waves.waves())
+                    .whole("seed", waves.seed()).done();
+        }
         throw unknown("a dictionary of another extension (" + dictionary.describe() + ")");
     }
 
@@ -86,6 +91,8 @@ final class StoredEstimator {
         String kind = in.text("kind");
         return switch (kind) {
             case "monomials" -> new MonomialDictionary(in.count("degree", 1, Short.MAX_VALUE));
+            case "random-waves" -> new RandomFourierDictionary(in.object("kernel", StoredKernel::readSpec), in.count("waves", 1, Integer.MAX_VALUE),
+                    in.whole("seed"));
             case "fourier" -> new FourierDictionary(in.count("order", 1, Short.MAX_VALUE), in.vector("periods"));
             default -> throw in.wrong("kind", "a dictionary of kind " + kind, "a kind that is known here");
         };

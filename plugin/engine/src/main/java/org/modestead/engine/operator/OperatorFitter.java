@@ -31,6 +31,23 @@ public final class OperatorFitter {
     public static FittedOperator fit(Snapshots snapshots, Estimator estimator, RankRule rule, double ridge, Progress progress) {
         progress.report(0, "filling the arrays");
         Compression compression = estimator.compress(snapshots, progress.part(0, 0.5));
+        return fit(compression, snapshots, estimator, rule, ridge, progress);
+    }
+
+    /**
+     * Fits what was filled elsewhere.
+     *
+     * @param compression as the estimator would have filled it
+     * @param snapshots what of the recording is at hand for later steps
+     * @param estimator with which a fit is repeated
+     * @param rule how the rank is chosen
+     * @param ridge ρ, see {@link Ridge}; at least 0
+     * @param progress polled for cancel
+     * @return never null
+     * @throws FitFault if the rank asked for is more than the data hold
+     */
+    public static FittedOperator fit(Compression compression, Snapshots snapshots, Estimator estimator, RankRule rule, double ridge,
+            Progress progress) {
         progress.checkCancelled();
         progress.report(0.5, "whitening");
         OrthonormalCompression full = Ridge.apply(compression.whiten(largest(rule)), ridge);

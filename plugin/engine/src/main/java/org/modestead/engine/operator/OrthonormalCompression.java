@@ -50,6 +50,12 @@ public record OrthonormalCompression(
                 Optional.empty(), Optional.empty());
     }
 
+    /** The same compression as one of so many snapshots that it was folded from. */
+    OrthonormalCompression of(int count) {
+        return new OrthonormalCompression(basis, map, action, second, observable, singular, count, innerProduct, evolution, noisy, inputs,
+                imposed);
+    }
+
     /** The same functions with the action corrected for noise. */
     OrthonormalCompression corrected(NoisyStep step) {
         return new OrthonormalCompression(basis, map, step.corrected(singular), second, observable, singular, snapshots,

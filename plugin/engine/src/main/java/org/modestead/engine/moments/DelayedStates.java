@@ -1,0 +1,32 @@
+package org.modestead.engine.moments;
+
+import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.recording.DelayEmbedding;
+import org.modestead.engine.recording.Preparation;
+
+/** Delay-embedded, prepared states of neighbouring samples, in the order of columns of {@link DelayEmbedding}. */
+final class DelayedStates {
+
+    private DelayedStates() {}
+
+    /**
+     * @param times of the samples
+     * @param values as recorded, row by row, n numbers a row
+     * @param from first state; state k has sample k + reach as its newest
+     * @param to one past the last state
+     * @return (to - from) x N
+     */
+    static DMatrixRMaj of(DelayEmbedding delay, double[] times, double[] values, int n, Preparation preparation, int from, int to) {
+        DMatrixRMaj out = new DMatrixRMaj(to - from, n * delay.depth());
+        for (int k = from; k < to; k++) {
+            for (int d = 0; d < delay.depth(); d++) {
+                int sample = k + delay.reach() - d * delay.spacing();
+                int at = (k - from) * out.numCols + d * n;
+                for (int c = 0; c < n; c++) {
+                    out.data[at + c] = preparation.prepare(c, times[sample], values[sample * n + c]);
+                }
+            }
+        }
+        return out;
+    }
+}
