@@ -1,7 +1,8 @@
 package org.modestead.engine;
 
 /**
- * How long work tells how far it is and learns that it should stop. The only thing the numerics know of a host.
+ * How long work tells how far it is and learns that it should stop. The only thing the numerics know of a host, but for the interrupt of
+ * its thread, at which matrix products end ({@link Cancelled#ifInterrupted()}).
  *
  * <p>Every loop of unbounded length calls {@link #checkCancelled()}; implementations must be cheap and thread-safe.
  */

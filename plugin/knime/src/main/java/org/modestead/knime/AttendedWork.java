@@ -10,7 +10,8 @@ import org.modestead.engine.Progress;
 
 /**
  * Work on a thread of its own that is left when the person asks to stop. Between two questions whether to stop, a factorisation of a large matrix
- * may take seconds; the node is ready again at once, and the work ends by itself at its next question, its result thrown away.
+ * may take seconds; the node is ready again at once, and the work ends by itself
+ * at its next question or matrix product, its result thrown away.
  */
 final class AttendedWork {
 
@@ -33,17 +34,22 @@ final class AttendedWork {
         thread.setDaemon(true);
         thread.setContextClassLoader(Thread.currentThread().getContextClassLoader());
         thread.start();
-        while (true) {
-            try {
-                return task.get(MILLISECONDS, TimeUnit.MILLISECONDS);
-            } catch (TimeoutException notYet) {
-                progress.checkCancelled();
-            } catch (ExecutionException failed) {
-                throw thrown(failed.getCause());
-            } catch (InterruptedException stop) {
-                Thread.currentThread().interrupt();
-                throw new Cancelled("stopped by the platform");
+        try {
+            while (true) {
+                try {
+                    return task.get(MILLISECONDS, TimeUnit.MILLISECONDS);
+                } catch (TimeoutException notYet) {
+                    progress.checkCancelled();
+                }
             }
+        } catch (ExecutionException failed) {
+            throw thrown(failed.getCause());
+        } catch (InterruptedException stop) {
+            Thread.currentThread().interrupt();
+            throw new Cancelled("stopped by the platform");
+        } finally {
+            // what nobody waits for any more is interrupted; work that is done is not
+            task.cancel(true);
         }
     }
 

@@ -2,8 +2,12 @@ package org.modestead.engine.linalg;
 
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.Cancelled;
 
-/** New matrices from old ones, in the notation of the formulas. No argument is modified. */
+/**
+ * New matrices from old ones, in the notation of the formulas. No argument is modified. Nearly all long work goes through the
+ * products, so that they end where their thread is interrupted.
+ */
 public final class Matrices {
 
     private Matrices() {}
@@ -22,16 +26,19 @@ public final class Matrices {
 
     /** Returns A B. */
     public static DMatrixRMaj product(DMatrixRMaj a, DMatrixRMaj b) {
+        Cancelled.ifInterrupted();
         return LinearAlgebra.installed().multiply(a, b);
     }
 
     /** Returns Aᵀ B. */
     public static DMatrixRMaj transposeProduct(DMatrixRMaj a, DMatrixRMaj b) {
+        Cancelled.ifInterrupted();
         return LinearAlgebra.installed().multiplyTransA(a, b);
     }
 
     /** Returns A Bᵀ. */
     public static DMatrixRMaj productTranspose(DMatrixRMaj a, DMatrixRMaj b) {
+        Cancelled.ifInterrupted();
         return LinearAlgebra.installed().multiplyTransB(a, b);
     }
 

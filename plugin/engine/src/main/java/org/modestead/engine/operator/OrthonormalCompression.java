@@ -185,9 +185,6 @@ public record OrthonormalCompression(
      * @return p x R with entry (i, j) = q_j(x_i)
      */
     public DMatrixRMaj evaluate(DMatrixRMaj states) {
-        DMatrixRMaj values = basis.evaluate(states);
-        DMatrixRMaj out = new DMatrixRMaj(states.numRows, map.numCols);
-        CommonOps_DDRM.mult(values, map, out);
-        return out;
+        return Matrices.product(basis.evaluate(states), map);
     }
 }

@@ -86,7 +86,7 @@ public final class BacktestNode implements Node {
         BacktestResult result = RollingOrigin.run(snapshots, inputs.get("operator", FittedOperator.class),
                 inputs.find("verdict", Verdict.class), BacktestSettings.plan(settings), context.progress());
         return new NodeResult(Map.of("scores", ForecastTables.scores(result.scores()), "errors",
-                ForecastTables.errors(result, snapshots)), List.of(ScoreFigures.figure(result.scores())),
+                ForecastTables.errors(result, snapshots, context.progress())), List.of(ScoreFigures.figure(result.scores())),
                 result.summary(), result.doubts());
     }
 }

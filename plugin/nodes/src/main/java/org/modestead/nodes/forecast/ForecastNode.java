@@ -97,8 +97,8 @@ public final class ForecastNode implements Node {
         if (!result.scores().isEmpty()) {
             figures.add(ScoreFigures.figure(result.scores()));
         }
-        return new NodeResult(Map.of("forecast", ForecastTables.forecast(result, snapshots), "reconstruction",
-                ForecastTables.reconstruction(result, snapshots), "scores", ForecastTables.scores(result.scores())),
+        return new NodeResult(Map.of("forecast", ForecastTables.forecast(result, snapshots, context.progress()), "reconstruction",
+                ForecastTables.reconstruction(result, snapshots, context.progress()), "scores", ForecastTables.scores(result.scores())),
                 figures, result.summary(), result.doubts());
     }
 }

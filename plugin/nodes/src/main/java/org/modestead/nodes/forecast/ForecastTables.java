@@ -1,6 +1,7 @@
 package org.modestead.nodes.forecast;
 
 import java.util.List;
+import org.modestead.engine.Progress;
 import org.modestead.engine.forecast.BacktestResult;
 import org.modestead.engine.forecast.ErrorRow;
 import org.modestead.engine.forecast.ForecastResult;
@@ -42,10 +43,11 @@ final class ForecastTables {
                 Column.text("channel"), Column.number("error"));
     }
 
-    static MemoryTable forecast(ForecastResult result, Snapshots snapshots) {
+    static MemoryTable forecast(ForecastResult result, Snapshots snapshots, Progress progress) {
         MemoryTable.Builder rows = MemoryTable.builder(forecastColumns(snapshots.time()), "forecast");
         List<String> channels = names(snapshots);
         for (ForecastRow row : result.forecast()) {
+            progress.checkCancelled();
             rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
                     row.high(),
                     result.routeUsed().word());
@@ -53,10 +55,11 @@ final class ForecastTables {
         return rows.build();
     }
 
-    static MemoryTable reconstruction(ForecastResult result, Snapshots snapshots) {
+    static MemoryTable reconstruction(ForecastResult result, Snapshots snapshots, Progress progress) {
         MemoryTable.Builder rows = MemoryTable.builder(reconstructionColumns(snapshots.time()), "reconstruction");
         List<String> channels = names(snapshots);
         for (ReconstructionRow row : result.reconstruction()) {
+            progress.checkCancelled();
             rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.observed(),
                     row.reconstructed());
         }
@@ -71,10 +74,11 @@ final class ForecastTables {
         return rows.build();
     }
 
-    static MemoryTable errors(BacktestResult result, Snapshots snapshots) {
+    static MemoryTable errors(BacktestResult result, Snapshots snapshots, Progress progress) {
         MemoryTable.Builder rows = MemoryTable.builder(errorColumns(snapshots.time()), "errors");
         List<String> channels = names(snapshots);
         for (ErrorRow row : result.errors()) {
+            progress.checkCancelled();
             rows.row(row.method(), row.run(), cell(snapshots.time(), row.origin()), row.horizon(),
                     channels.get(row.channel()), row.error());
         }

@@ -22,12 +22,12 @@ import org.modestead.host.workflow.RunPlan;
 import org.modestead.nodes.contract.NodeResult;
 
 /**
- * One run in the background. Stopped, it is over within a second: work that does not ask whether to stop, such as the factorisation of
- * a large matrix, is left to end by itself, and what it gives is thrown away.
+ * One run in the background. Stopped, it is over at once: work that does not ask whether to stop for a quarter of a second, such as the
+ * factorisation of a large matrix, is left to end by itself, and what it gives is thrown away.
  */
 public final class BenchRun {
 
-    private static final long PATIENCE_MILLIS = 700;
+    private static final long PATIENCE_MILLIS = 250;
     private static final double EARLY = 0.02;
     private static final double FIRST_SECOND = 1;
 
@@ -128,7 +128,7 @@ public final class BenchRun {
         }
     }
 
-    /** Asks it to stop and returns when it is over, at the latest after a second. */
+    /** Asks it to stop and returns when it is over, at the latest after that time. */
     public void stop() {
         cancel.cancel("stopped by the person");
         try {
