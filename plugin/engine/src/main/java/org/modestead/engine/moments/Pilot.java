@@ -39,6 +39,16 @@ public record Pilot(double step, Preparation preparation, FunctionBasis basis, C
         return new Pilot(plan.step().orElse(survey.steps().mean()), preparation, basis, Conditioner.of(basis.evaluate(some)));
     }
 
+    /**
+     * Returns states of a survey, prepared by its own moments: those from which a pair begins.
+     *
+     * @throws RecordingFault if there is none
+     */
+    public static DMatrixRMaj states(StreamPlan plan, Moments survey) {
+        ChannelMoments channels = survey.channels().count() > 0 ? survey.channels() : anyOf(plan, survey);
+        return states(plan, survey, StreamPreparation.of(plan, channels));
+    }
+
     private static FunctionBasis basis(StreamPlan plan, DMatrixRMaj states, Progress progress) {
         if (plan.features() instanceof Features.Landmarks landmarks) {
             return LandmarkFeatures.choose(landmarks.kernelMade(), states, landmarks.landmarks(), progress);

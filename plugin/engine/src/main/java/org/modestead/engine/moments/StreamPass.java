@@ -33,6 +33,7 @@ public final class StreamPass {
     private String run = "";
     private double start;
     private double last = Double.NaN;
+    private boolean afterGap;
     private Part part = Part.TRAINING;
     private long rows;
     private long runs;
@@ -71,13 +72,15 @@ public final class StreamPass {
      *
      * @param name of the run, not that of one before
      * @param first time of the run's first row, from which stretches are counted
-     * @param whole whether the run begins here; false for later slices of it
+     * @param whole whether the run begins here; false for later slices of it, whose first row then follows a gap unless it is borrowed: rows
+     *     are to be borrowed as far as {@link StreamPlan#sliceReach} says
      */
     public void begin(String name, double first, boolean whole) {
         end();
         run = name;
         start = first;
         last = Double.NaN;
+        afterGap = !whole;
         runs += whole ? 1 : 0;
     }
 
@@ -125,6 +128,9 @@ public final class StreamPass {
         }
         if (!Double.isNaN(last)) {
             checkStep(time, time - last, own);
+        } else if (afterGap && own) {
+            gap(time, plan.sliceReach() * step);
+            gaps++;
         }
         return Math.max(0, Math.round((time - start) / step));
     }

@@ -81,6 +81,11 @@ public record StreamPlan(
         return delay.reach() + stride;
     }
 
+    /** Returns how many steps beyond its borders a slice of a run must know the rows, so that pairs, gaps and the length of pieces are as in the run. */
+    public long sliceReach() {
+        return Math.max(pairReach() + 2L, (long) Math.ceil(gapFactor) + 1);
+    }
+
     /** Returns whether a pass over all rows must come before the one that sums. */
     public boolean needsSurvey() {
         return features.needsSurvey(centred || scaling != Scaling.NONE);

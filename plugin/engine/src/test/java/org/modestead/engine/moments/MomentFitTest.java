@@ -139,7 +139,7 @@ class MomentFitTest {
     private static Stream<Moments> slices(StreamPlan plan, Pilot pilot, Run run) {
         return java.util.stream.IntStream.iterate(0, from -> from < run.samples(), from -> from + 300).mapToObj(from -> {
             StreamPass pass = StreamPass.summing(plan, pilot);
-            Streams.feed(pass, run, from, Math.min(run.samples(), from + 300), plan.pairReach() + 2);
+            Streams.feed(pass, run, from, Math.min(run.samples(), from + 300), (int) plan.sliceReach());
             return pass.finish();
         });
     }

@@ -12,6 +12,7 @@ import java.util.HexFormat;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
+import java.util.stream.Stream;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Setting;
@@ -73,6 +74,9 @@ public final class Fingerprint {
     }
 
     private static String file(Path path) throws IOException {
+        if (Files.isDirectory(path)) {
+            return folder(path);
+        }
         if (!Files.isRegularFile(path)) {
             return path + " missing";
         }
@@ -87,6 +91,17 @@ public final class Fingerprint {
         }
         return path.toAbsolutePath().normalize() + " " + size + " " + Files.getLastModifiedTime(path).toMillis()
                 + " " + content;
+    }
+
+    /** A folder is read as the table of its files. */
+    private static String folder(Path path) throws IOException {
+        StringBuilder files = new StringBuilder(path.toAbsolutePath().normalize().toString());
+        try (Stream<Path> found = Files.list(path)) {
+            for (Path file : found.filter(Files::isRegularFile).sorted().toList()) {
+                files.append(' ').append(file(file));
+            }
+        }
+        return files.toString();
     }
 
     private static void line(MessageDigest digest, String key, String value) {

@@ -1,28 +1,53 @@
 package org.modestead.host.table;
 
+import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.sql.SQLException;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Stream;
 
-/** Reads Parquet files, whose columns carry their types. */
+/** Reads Parquet files, whose columns carry their types: one, or all of a folder in the order of their names, as other programs write tables. */
 final class ParquetSource {
 
     private ParquetSource() {}
 
     /**
+     * Returns whether this is a folder of which some file is Parquet.
+     *
      * @param path absolute
+     */
+    static boolean isFolder(Path path) {
+        return Files.isDirectory(path) && !within(path, path.toString()).isEmpty();
+    }
+
+    /** Other programs begin the names of files that are no part of a table with a point or a low line. */
+    private static List<Path> within(Path folder, String shown) {
+        try (Stream<Path> files = Files.list(folder)) {
+            return files.filter(file -> file.getFileName().toString().matches("(?i)[^._].*\\.parquet") && Files.isRegularFile(file)).sorted()
+                    .toList();
+        } catch (IOException unreadable) {
+            throw new TableFault(shown, "the folder cannot be read (" + unreadable.getMessage() + ")", "allow reading it");
+        }
+    }
+
+    /**
+     * @param path absolute, a file or a folder of them
      * @param shown the name as the person wrote it
      * @param limits what it may cost
      */
     static DuckDbTable open(Path path, String shown, SourceLimits limits) {
-        String rows = "SELECT * FROM read_parquet(" + Sql.text(path.toString()) + ")";
+        List<Path> files = Files.isDirectory(path) ? within(path, shown) : List.of(path);
+        String rows = "SELECT * FROM read_parquet(" + Sql.texts(files.stream().map(Path::toString).toList()) + ")";
         try (Database database = Database.open(limits.megabytes())) {
             SelectShape shape = SelectShape.of(database, rows, shown);
             if (database.one("SELECT count(*) FROM (" + rows + ")", row -> row.getLong(1)) == 0) {
                 throw new TableFault(shown, "the table has " + shape.schema().columns().size() + " columns but no row",
                         "give a table with at least one row");
             }
-            return new DuckDbTable(Recipe.file(shape.select(), path), shape.schema(), shown, limits.megabytes(),
+            return new DuckDbTable(new Recipe(shape.select(), files, Map.of()), shape.schema(), shown, limits.megabytes(),
                     limits.copied(),
                     new ParquetExplainer(path, shown, limits));
         } catch (SQLException failure) {

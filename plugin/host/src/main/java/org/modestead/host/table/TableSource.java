@@ -61,7 +61,8 @@ public final class TableSource implements Node {
     private static List<Setting> fileSettings() {
         return List.of(
                 new Setting.File(new Setting.Common("path", "File", "File",
-                        "The file to read; a name is looked up in the folder of the workflow."), true,
+                        "The file to read; a name is looked up in the folder of the workflow. A folder of Parquet files is read as one"
+                        + " table, in the order of their names."), true,
                         List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson"), true),
                 new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by "
                 + "the "
@@ -143,8 +144,11 @@ public final class TableSource implements Node {
     private static DuckDbTable open(Settings settings, RunContext context) {
         String shown = settings.text("path");
         Path path = context.baseFolder().resolve(shown).toAbsolutePath().normalize();
-        FileChecks.readable(path, shown);
         SourceLimits limits = new SourceLimits(settings.whole("memory"), settings.flag("copy"));
+        if (List.of(AUTO, PARQUET).contains(settings.text("format")) && ParquetSource.isFolder(path)) {
+            return ParquetSource.open(path, shown, limits);
+        }
+        FileChecks.readable(path, shown);
         String format = format(settings, shown);
         if (format.equals(PARQUET)) {
             return ParquetSource.open(path, shown, limits);

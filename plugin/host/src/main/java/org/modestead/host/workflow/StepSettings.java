@@ -75,7 +75,7 @@ final class StepSettings {
         return new Known(node, reading.settings());
     }
 
-    /** Looks for the files to be read, whatever else is wrong with the step. */
+    /** Looks for the files to be read, whatever else is wrong with the step. Whether a folder will do is the node's to say. */
     private void missingFiles(String step, NodeDeclaration declaration, Map<String, Object> stored, List<Problem> problems) {
         for (Setting setting : declaration.settings()) {
             boolean read = setting instanceof Setting.File file && file.reading()
@@ -84,10 +84,7 @@ final class StepSettings {
                 continue;
             }
             Path path = workflow.baseFolder().resolve(name);
-            if (Files.isDirectory(path)) {
-                problems.add(new Problem(workflow.fileName(), step, "setting " + setting.key(), name + " is a folder",
-                        "name a file in it"));
-            } else if (!Files.exists(path)) {
+            if (!Files.exists(path)) {
                 problems.add(new Problem(workflow.fileName(), step, "setting " + setting.key(), "there is no file " + name
                         + Neighbours.hint(path), "name a file relative to " + workflow.baseFolder()
                         + " or with its full path"));

@@ -168,7 +168,7 @@ final class FitSettings {
                         OptionalDouble.of(0.99)));
     }
 
-    private static List<Setting> rankSettings() {
+    static List<Setting> rankSettings() {
         String group = "Rank";
         return List.of(
                 new Setting.Choice(new Common(RANK_RULE, "Rank by", group, "How many orthonormal functions are kept:"

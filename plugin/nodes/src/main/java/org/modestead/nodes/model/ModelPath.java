@@ -11,10 +11,12 @@ import java.nio.file.StandardCopyOption;
 import org.modestead.engine.Progress;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
+import org.modestead.engine.moments.Moments;
 import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.modelfile.MomentFiles;
 import org.modestead.nodes.modelfile.PortFiles;
 
 /**
@@ -63,6 +65,10 @@ record ModelPath(Path path, String shown) {
 
     Model read(Progress progress) {
         return read(in -> (Model) PortFiles.read(PortType.MODEL, in), progress);
+    }
+
+    Moments readMoments(Progress progress) {
+        return read(MomentFiles::read, progress);
     }
 
     /** Returns of which recording the model was made. */
