@@ -21,6 +21,7 @@ record ControlLimit(double weight, double height) {
     private static final double REACH = 4;
     private static final double LEAST_RATIO = 0.05;
     private static final double TALLEST = 60;
+    private static final double FEWEST_WINDOWS = 2;
     private static final double PROPER = 1e-4;
 
     /**
@@ -90,15 +91,15 @@ record ControlLimit(double weight, double height) {
         return least > height ? new ControlLimit(weight, least) : this;
     }
 
-    /** Returns after how many windows on the mean a lasting change of so many deviations of one window is found. */
+    /** Returns after how many windows on the mean a lasting change of so many deviations of one window is found; two at least. */
     double windowsToFind(double change) {
-        return RunLength.of(weight, height, change, 1);
+        return Math.max(FEWEST_WINDOWS, RunLength.of(weight, height, change, 1));
     }
 
     /** Returns the smallest change, in deviations of one window, that is found within so many windows on the mean. */
     double smallestFound(double windows) {
         double low = 0;
-        double high = TALLEST;
+        double high = Math.max(TALLEST, 3 * height);
         while (high - low > PROPER * high) {
             double middle = (low + high) / 2;
             if (windowsToFind(middle) > windows) {

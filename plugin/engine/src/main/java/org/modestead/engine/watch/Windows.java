@@ -86,7 +86,7 @@ record Windows(List<Window> windows, double leftOut) {
             if (!open.isEmpty() && !goesOn(run) && !whole) {
                 close();
             }
-            if (!open.isEmpty() && follows(run) && pause(run) > length) {
+            if (goesOn(run) && pause(run) > length) {
                 close();
             }
             int at = 0;
