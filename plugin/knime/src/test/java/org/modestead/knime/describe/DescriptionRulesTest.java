@@ -148,7 +148,7 @@ class DescriptionRulesTest {
                 Map.entry("model-applier", NodeType.Manipulator), Map.entry("kernel-chooser", NodeType.Learner),
                 Map.entry("operator-fitter", NodeType.Learner), Map.entry("spectrum-extractor", NodeType.Other),
                 Map.entry("wellposedness-checker", NodeType.Other), Map.entry("forecast", NodeType.Predictor),
-                Map.entry("backtest", NodeType.Other), Map.entry("mode-report", NodeType.Visualizer));
+                Map.entry("backtest", NodeType.Other), Map.entry("mode-watch", NodeType.Other), Map.entry("mode-report", NodeType.Visualizer));
         declarations().stream().filter(declaration -> expected.containsKey(declaration.id())).forEach(declaration ->
                 assertEquals(expected.get(declaration.id()), new DeclaredDescription(declaration).getType(), declaration.id()));
     }

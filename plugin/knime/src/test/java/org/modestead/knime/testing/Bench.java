@@ -55,6 +55,8 @@ public final class Bench {
         bench.run("model-writer", Map.of("file", "pump-house.zip", "name", "Pump house"), model);
         bench.run("model-reader", Map.of("file", "pump-house.zip"), Map.of());
         bench.run("model-applier", Map.of(), Map.of("model", "model-reader.model", "snapshots", "snapshot-builder.snapshots"));
+        bench.run("mode-watch", Map.of("window", 5, "watched-modes", "any-verdict", "window-replicates", 0, "replicates", 20), Map.of("model",
+                "model-reader.model", "snapshots", "snapshot-builder.snapshots"));
         bench.run("mode-report", Map.of("title", "Pump house"), with(with(with(told, "forecast", "forecast.forecast"), "reconstruction",
                 "forecast.reconstruction"), "scores", "forecast.scores"));
         return bench;

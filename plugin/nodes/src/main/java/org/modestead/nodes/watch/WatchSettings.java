@@ -28,7 +28,7 @@ final class WatchSettings {
     private static final String OWN = "window-replicates";
     private static final String SEED = "seed";
     private static final String ANY = "any-verdict";
-    private static final double LARGEST = 1e300;
+    private static final double LARGEST = 1e12;
     private static final int FEWEST = 20;
     private static final WatchPlan DEFAULT = WatchPlan.DEFAULT;
 
@@ -36,19 +36,19 @@ final class WatchSettings {
 
     static List<Setting> all() {
         return List.of(
-                new Setting.Number(new Common(WINDOW, "Window", "Windows", "Recorded time that is fitted together. Not set: 30 cycles of the"
+                new Setting.Number(new Common(WINDOW, "Window", "Watched", "Recorded time that is fitted together. Not set: 30 cycles of the"
                         + " slowest watched mode, less where the model's recordings hold fewer than 20 such windows, but at least 10 cycles."
                         + " Longer windows find smaller changes, but later."), "time", 0, true, LARGEST, OptionalDouble.empty()),
-                new Setting.Choice(new Common(MODES, "Modes watched", "Modes", "Which oscillating modes are watched."), List.of(
+                new Setting.Choice(new Common(MODES, "Modes watched", "Watched", "Which oscillating modes are watched."), List.of(
                         new Option("existing", "Those that exist", "Modes that stand or settle by the verdict of the model."),
                         new Option(ANY, "Whatever the verdict", "Also modes that drift, are absent or undecided: their figures may wander by"
                                 + " themselves.")), "existing"),
-                new Setting.Number(new Common(SHARE, "Least energy share", "Modes", "Share of the signal from which on a mode is watched. Weak"
+                new Setting.Number(new Common(SHARE, "Least energy share", "Watched", "Share of the signal from which on a mode is watched. Weak"
                         + " modes are found in some windows only."), "", 0, false, 1, OptionalDouble.of(DEFAULT.leastShare())),
-                new Setting.Number(new Common(CHANGE, "Largest change of frequency", "Modes", "Relative change up to which a mode of a window"
+                new Setting.Number(new Common(CHANGE, "Largest change of frequency", "Watched", "Relative change up to which a mode of a window"
                         + " may be the stored one; beyond it the mode counts as missing."), "", 0, true, 1,
                         OptionalDouble.of(DEFAULT.limits().change())),
-                new Setting.Number(new Common(ASSURANCE, "Least likeness of shape", "Modes", "Modal assurance from which on a mode of a window"
+                new Setting.Number(new Common(ASSURANCE, "Least likeness of shape", "Watched", "Modal assurance from which on a mode of a window"
                         + " may be the stored one; below it the mode counts as missing."), "", 0, false, 1,
                         OptionalDouble.of(DEFAULT.limits().assurance())),
                 new Setting.Number(new Common(EVERY, "Windows between false alarms", "Alarms", "How many windows pass on the mean until one"
