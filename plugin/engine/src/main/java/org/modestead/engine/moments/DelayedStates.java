@@ -17,14 +17,18 @@ final class DelayedStates {
      * @return (to - from) x N
      */
     static DMatrixRMaj of(DelayEmbedding delay, double[] times, double[] values, int n, Preparation preparation, int from, int to) {
+        int samples = to - from + delay.reach();
+        double[] prepared = new double[samples * n];
+        for (int k = 0, at = 0; k < samples; k++) {
+            for (int c = 0; c < n; c++, at++) {
+                prepared[at] = preparation.prepare(c, times[from + k], values[(from + k) * n + c]);
+            }
+        }
         DMatrixRMaj out = new DMatrixRMaj(to - from, n * delay.depth());
-        for (int k = from; k < to; k++) {
+        for (int k = 0; k < out.numRows; k++) {
             for (int d = 0; d < delay.depth(); d++) {
                 int sample = k + delay.reach() - d * delay.spacing();
-                int at = (k - from) * out.numCols + d * n;
-                for (int c = 0; c < n; c++) {
-                    out.data[at + c] = preparation.prepare(c, times[sample], values[sample * n + c]);
-                }
+                System.arraycopy(prepared, sample * n, out.data, k * out.numCols + d * n, n);
             }
         }
         return out;

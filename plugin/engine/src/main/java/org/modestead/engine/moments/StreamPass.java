@@ -34,6 +34,7 @@ public final class StreamPass {
     private double start;
     private double last = Double.NaN;
     private boolean afterGap;
+    private long stretch = -1;
     private Part part = Part.TRAINING;
     private long rows;
     private long runs;
@@ -81,6 +82,7 @@ public final class StreamPass {
         start = first;
         last = Double.NaN;
         afterGap = !whole;
+        stretch = -1;
         runs += whole ? 1 : 0;
     }
 
@@ -96,19 +98,25 @@ public final class StreamPass {
         rows += own ? 1 : 0;
         long index = checkTime(time, own);
         boolean complete = isComplete(time, values, own);
-        long stretch = index / plan.keeping().stretch();
-        Part now = plan.keeping().apart().of(plan.keeping().seed(), run, stretch);
-        if (now != part) {
-            closePiece();
-            part = now;
+        long number = index / plan.keeping().stretch();
+        if (number != stretch) {
+            stretch = number;
+            enter(plan.keeping().apart().of(plan.keeping().seed(), run, stretch));
         }
         if (complete) {
-            take(time, values, own, stretch);
+            take(time, values, own);
         }
         last = time;
     }
 
-    private void take(double time, double[] values, boolean own, long stretch) {
+    private void enter(Part next) {
+        if (next != part) {
+            closePiece();
+            part = next;
+        }
+    }
+
+    private void take(double time, double[] values, boolean own) {
         if (own) {
             sampler.add(run, stretch, part, time, values);
         }

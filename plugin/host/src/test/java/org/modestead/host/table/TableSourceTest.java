@@ -246,4 +246,19 @@ class TableSourceTest {
     private static List<CellType> types(Table table) {
         return table.schema().columns().stream().map(Column::type).collect(Collectors.toList());
     }
+
+    /** As other programs write tables: parts by number, and notes beside them that begin with a low line or a point. A query reads them, too. */
+    @Test
+    void aFolderOfParquetFilesIsOneTableInTheOrderOfNames() throws IOException {
+        Path parts = Files.createDirectory(folder.resolve("parts"));
+        for (int part = 1; part >= 0; part--) {
+            Files.writeString(folder.resolve("t.csv"), "time,flow\n" + 2 * part + ",1.5\n" + (2 * part + 1) + ",\n");
+            Steps.run(new TableSink(), folder, Map.of("table", Steps.source(folder, "t.csv")), "path", "parts/part-" + part + ".parquet");
+        }
+        Files.writeString(parts.resolve("_SUCCESS"), "");
+        Files.writeString(parts.resolve(".part-0.parquet"), "no table");
+        Table table = Steps.source(folder, "parts");
+        assertEquals(List.of("0|1.5", "1|", "2|1.5", "3|"), Steps.rows(table));
+        assertEquals(List.of("2"), Steps.rows(Steps.query(folder, "SELECT count(flow) AS n FROM input", Map.of("input", table))));
+    }
 }
