@@ -52,6 +52,29 @@ class MetadataIT {
         }
     }
 
+    /** Installing Modestead does not install the accelerator, and installing that asks for the engine. */
+    @Test
+    void theAcceleratorIsAFeatureOfItsOwn() {
+        Element main = unit("org.modestead.feature.feature.group");
+        Element accelerator = unit("org.modestead.accelerator.feature.feature.group");
+        assertTrue(required(main).stream().noneMatch(name -> name.startsWith("org.modestead.accelerator")), required(main).toString());
+        assertTrue(required(accelerator).containsAll(Set.of("org.modestead.engine", "org.modestead.accelerator", "org.modestead.accelerator.linux.x86_64",
+                "org.modestead.accelerator.windows.x86_64", "org.modestead.accelerator.macosx.arm64")), required(accelerator).toString());
+    }
+
+    private static Element unit(String id) {
+        return elements("unit").stream().filter(unit -> unit.getAttribute("id").equals(id)).findFirst().orElseThrow();
+    }
+
+    private static Set<String> required(Element unit) {
+        Set<String> names = new TreeSet<>();
+        NodeList found = unit.getElementsByTagName("required");
+        for (int i = 0; i < found.getLength(); i++) {
+            names.add(((Element) found.item(i)).getAttribute("name"));
+        }
+        return names;
+    }
+
     /** Requirements that neither the site nor a Java runtime meets. */
     private static Set<String> unmet() {
         List<Capability> provided = new ArrayList<>();

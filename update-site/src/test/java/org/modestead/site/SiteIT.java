@@ -1,5 +1,6 @@
 package org.modestead.site;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertNotNull;
@@ -48,6 +49,7 @@ class SiteIT {
     private static final Path PLUGINS = Path.of(System.getProperty("site.repository"), "plugins");
     private static final String ENGINE = "org.modestead.engine";
     private static final String NODES = "org.modestead.nodes";
+    private static final String ACCELERATOR = "org.modestead.accelerator";
     private static final String BRIDGE = "org.modestead.knime";
     /** Signatures under the name of the platform's core bundle: enough to resolve against, nothing to run. */
     private static final Path STAND_IN = Path.of(System.getProperty("platform.stand-in"));
@@ -71,7 +73,9 @@ class SiteIT {
         framework.getBundleContext().installBundle(STAND_IN.toUri().toString());
         framework.adapt(FrameworkWiring.class).resolveBundles(BUNDLES.values());
         for (Bundle bundle : BUNDLES.values()) {
-            bundle.start(); // says what is missing if it cannot be resolved
+            if (!fragment(bundle)) {
+                bundle.start(); // says what is missing if it cannot be resolved
+            }
         }
     }
 
@@ -88,7 +92,9 @@ class SiteIT {
             zip.stream().map(entry -> entry.getName()).filter(name -> name.endsWith(".jar"))
                     .forEach(name -> found.add(name.replaceFirst("_[^_]*[.]jar$", "")));
         }
-        assertEquals(new TreeSet<>(List.of("artifacts.jar", "content.jar", "features/org.modestead.feature",
+        assertEquals(new TreeSet<>(List.of("artifacts.jar", "content.jar", "features/org.modestead.feature", "features/org.modestead.accelerator.feature",
+                "plugins/" + ACCELERATOR, "plugins/" + ACCELERATOR + ".linux.x86_64", "plugins/" + ACCELERATOR + ".linux.arm64",
+                "plugins/" + ACCELERATOR + ".windows.x86_64", "plugins/" + ACCELERATOR + ".macosx.x86_64", "plugins/" + ACCELERATOR + ".macosx.arm64",
                 "plugins/" + ENGINE, "plugins/" + NODES, "plugins/" + BRIDGE, "plugins/org.ejml.core", "plugins/org.ejml.ddense", "plugins/org.ejml.zdense",
                 "plugins/org.jgrapht.core", "plugins/org.jheaps", "plugins/org.apfloat", "plugins/org.knowm.xchart", "plugins/de.erichseifert.vectorgraphics2d")), found);
     }
@@ -98,11 +104,39 @@ class SiteIT {
         assertFalse(BUNDLES.isEmpty());
         List<String> notStarted = new ArrayList<>();
         BUNDLES.forEach((name, bundle) -> {
-            if (bundle.getState() != Bundle.ACTIVE) {
+            if (!fragment(bundle) && bundle.getState() != Bundle.ACTIVE) {
                 notStarted.add(name + " is in state " + bundle.getState());
             }
         });
         assertEquals(List.of(), notStarted);
+    }
+
+    private static boolean fragment(Bundle bundle) {
+        return bundle.getHeaders("").get(Constants.FRAGMENT_HOST) != null;
+    }
+
+    /** Of the accelerator's fragments the one for this platform joins the engine, with the common one. */
+    @Test
+    void theNativeLibraryOfThisPlatformJoinsTheEngineAndNoOther() {
+        Set<String> joined = BUNDLES.entrySet().stream().filter(entry -> fragment(entry.getValue()) && entry.getValue().getState() == Bundle.RESOLVED)
+                .map(Map.Entry::getKey).collect(Collectors.toSet());
+        String os = framework.getBundleContext().getProperty("osgi.os").replace("win32", "windows");
+        String arch = framework.getBundleContext().getProperty("osgi.arch").replace("aarch64", "arm64");
+        assertEquals(Set.of(ACCELERATOR, ACCELERATOR + "." + os + "." + arch), joined);
+    }
+
+    /** Loads the library from the bundles and multiplies. */
+    @Test
+    void theEngineComputesWithTheAcceleratorWhereItIsInstalled() throws Exception {
+        ClassLoader engine = loader(ENGINE);
+        Class<?> type = engine.loadClass("org.modestead.engine.linalg.LinearAlgebra");
+        Class<?> matrix = engine.loadClass("org.ejml.data.DMatrixRMaj");
+        Object identity = engine.loadClass("org.ejml.dense.row.CommonOps_DDRM").getMethod("identity", int.class).invoke(null, 300);
+        Object algebra = type.getMethod("installed").invoke(null);
+        Object product = type.getMethod("multiply", matrix, matrix).invoke(algebra, identity, identity);
+        assertArrayEquals((double[]) matrix.getField("data").get(identity), (double[]) matrix.getField("data").get(product));
+        assertEquals(List.of(), type.getMethod("doubts").invoke(algebra));
+        assertTrue(type.getMethod("name").invoke(algebra).toString().startsWith("OpenBLAS "), type.getMethod("name").invoke(algebra).toString());
     }
 
     /** The root pom and libraries.target both name versions. */

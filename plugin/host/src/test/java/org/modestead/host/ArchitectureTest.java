@@ -49,6 +49,15 @@ class ArchitectureTest {
                 .should().dependOnClassesThat().resideInAPackage("com.fasterxml..").check(classes);
     }
 
+    /** The accelerator is found at run time and may be missing. */
+    @Test
+    void nothingKnowsTheAcceleratorWhichKnowsTheEngineOnly() {
+        noClasses().that().resideOutsideOfPackage("org.modestead.accelerator..").should().dependOnClassesThat()
+                .resideInAnyPackage("org.modestead.accelerator..", "org.bytedeco..").check(classes);
+        noClasses().that().resideInAPackage("org.modestead.accelerator..").should().dependOnClassesThat()
+                .resideInAnyPackage(NODES, HOST).check(classes);
+    }
+
     @Test
     void nothingKnowsAnEditorsWorkbench() {
         noClasses().should().dependOnClassesThat()

@@ -40,7 +40,7 @@ class ThirdPartyIT {
     /** Returns the licence files of every package prefix that is listed. */
     private static Map<String, List<String>> listed() throws IOException {
         Map<String, List<String>> listed = new LinkedHashMap<>();
-        for (String list : List.of("nodes-libraries.txt", "host-libraries.txt")) {
+        for (String list : List.of("nodes-libraries.txt", "host-libraries.txt", "accelerator-libraries.txt")) {
             for (String line : text(FOLDER + list).lines().skip(2).toList()) {
                 String[] cells = line.split("\\s*[|]\\s*");
                 assertEquals(4, cells.length, line);
@@ -98,5 +98,19 @@ class ThirdPartyIT {
         names().stream().filter(name -> name.startsWith(WEBJARS))
                 .forEach(name -> folders.add(name.substring(0, name.indexOf('/', name.indexOf('/', WEBJARS.length()) + 1) + 1)));
         folders.forEach(folder -> assertTrue(names().contains(folder + "LICENSE"), folder));
+    }
+
+    /** The fast linear algebra library of every platform is there, and of the released files only those that are loaded. */
+    @Test
+    void theNativeLibrariesOfEveryPlatformAreThere() {
+        Set<String> found = new TreeSet<>();
+        names().stream().filter(name -> name.startsWith("org/bytedeco/") && !name.endsWith(".class") && !name.endsWith(".properties"))
+                .forEach(name -> found.add(name.replaceFirst("^org/bytedeco/", "").replaceFirst("[.](so|dylib|dll)[.0-9]*$|([.][0-9.]+)?[.]dylib$", "")));
+        for (String platform : List.of("linux-arm64", "linux-x86_64", "macosx-arm64", "macosx-x86_64", "windows-x86_64")) {
+            assertTrue(found.contains("openblas/" + platform + "/libopenblas"), platform + " of " + found);
+            assertTrue(found.stream().anyMatch(name -> name.matches("openblas/" + platform + "/(lib)?jniopenblas")), platform + " of " + found);
+            assertTrue(found.stream().anyMatch(name -> name.matches("javacpp/" + platform + "/(lib)?jnijavacpp")), platform + " of " + found);
+        }
+        assertTrue(found.stream().noneMatch(name -> name.matches(".*(_full|_nolapack|[.]obj|[.]lib|[.]h)$")), found.toString());
     }
 }

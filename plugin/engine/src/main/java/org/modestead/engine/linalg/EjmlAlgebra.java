@@ -2,12 +2,16 @@ package org.modestead.engine.linalg;
 
 import java.util.Arrays;
 import java.util.Comparator;
+import java.util.Optional;
 import java.util.stream.IntStream;
+import org.ejml.EjmlVersion;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.SingularOps_DDRM;
 import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
+import org.ejml.interfaces.decomposition.CholeskyDecomposition_F64;
 import org.ejml.interfaces.decomposition.EigenDecomposition_F64;
+import org.ejml.interfaces.decomposition.QRDecomposition;
 import org.ejml.interfaces.decomposition.SingularValueDecomposition_F64;
 import org.modestead.engine.FitFault;
 
@@ -16,7 +20,7 @@ public final class EjmlAlgebra implements LinearAlgebra {
 
     @Override
     public String name() {
-        return "EJML";
+        return "EJML " + EjmlVersion.VERSION + " (pure Java)";
     }
 
     @Override
@@ -40,9 +44,35 @@ public final class EjmlAlgebra implements LinearAlgebra {
         return out;
     }
 
+    /** The full product: every entry is summed in the order of the rows, so it is symmetric to the last bit. */
+    @Override
+    public DMatrixRMaj gram(DMatrixRMaj a) {
+        return multiplyTransA(a, a);
+    }
+
+    @Override
+    public Optional<DMatrixRMaj> cholesky(DMatrixRMaj a) {
+        CholeskyDecomposition_F64<DMatrixRMaj> cholesky = DecompositionFactory_DDRM.chol(a.numRows, false);
+        return cholesky.decompose(a.copy()) ? Optional.of(cholesky.getT(null)) : Optional.empty();
+    }
+
+    @Override
+    public DMatrixRMaj divideByUpper(DMatrixRMaj a, DMatrixRMaj upper) {
+        return multiply(a, Triangular.inverseOfUpper(upper));
+    }
+
+    @Override
+    public Qr qr(DMatrixRMaj a) {
+        Entries.requireFinite("orthonormal columns", a);
+        QRDecomposition<DMatrixRMaj> qr = DecompositionFactory_DDRM.qr(a.numRows, a.numCols);
+        // It says no to dependent columns, but decomposes them.
+        qr.decompose(a.copy());
+        return new Qr(qr.getQ(null, true), qr.getR(null, true));
+    }
+
     @Override
     public SymmetricEigen symmetricEigen(DMatrixRMaj a) {
-        requireFinite("symmetric eigenvalues", a);
+        Entries.requireFinite("symmetric eigenvalues", a);
         int n = a.numRows;
         EigenDecomposition_F64<DMatrixRMaj> eigen = DecompositionFactory_DDRM.eig(n, true, true);
         if (!eigen.decompose(a.copy())) {
@@ -56,12 +86,12 @@ public final class EjmlAlgebra implements LinearAlgebra {
             values[j] = found[order[j]];
             CommonOps_DDRM.insert(eigen.getEigenVector(order[j]), vectors, 0, j);
         }
-        return new SymmetricEigen(values, signed(vectors));
+        return new SymmetricEigen(values, Entries.signed(vectors));
     }
 
     @Override
     public Svd svd(DMatrixRMaj a) {
-        requireFinite("singular values", a);
+        Entries.requireFinite("singular values", a);
         SingularValueDecomposition_F64<DMatrixRMaj> svd = DecompositionFactory_DDRM.svd(a.numRows, a.numCols, true, true, true);
         if (!svd.decompose(a.copy())) {
             throw notConverged("singular values", a);
@@ -82,30 +112,6 @@ public final class EjmlAlgebra implements LinearAlgebra {
     private static int[] falling(double[] values) {
         return IntStream.range(0, values.length).boxed().sorted(Comparator.comparingDouble(i -> -values[i]))
                 .mapToInt(Integer::intValue).toArray();
-    }
-
-    /** Fixes the sign of each column by its largest entry, so that equal input gives equal bytes everywhere. */
-    private static DMatrixRMaj signed(DMatrixRMaj vectors) {
-        for (int j = 0; j < vectors.numCols; j++) {
-            double largest = 0;
-            for (int i = 0; i < vectors.numRows; i++) {
-                double entry = vectors.get(i, j);
-                largest = Math.abs(entry) > Math.abs(largest) * (1 + 1e-9) ? entry : largest;
-            }
-            if (largest < 0) {
-                CommonOps_DDRM.scaleCol(-1, vectors, j);
-            }
-        }
-        return vectors;
-    }
-
-    private static void requireFinite(String what, DMatrixRMaj a) {
-        for (int i = 0; i < a.getNumElements(); i++) {
-            if (!Double.isFinite(a.data[i])) {
-                throw new FitFault(what, "row " + i / a.numCols + ", column " + i % a.numCols + " of a " + a.numRows + " x " + a.numCols
-                        + " matrix holds " + a.data[i], "scale the data, or choose functions that stay finite on them");
-            }
-        }
     }
 
     private static FitFault notConverged(String what, DMatrixRMaj a) {

@@ -1,7 +1,10 @@
 package org.modestead.engine.linalg;
 
+import java.util.List;
+import java.util.Optional;
 import java.util.ServiceLoader;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.Doubt;
 
 /**
  * The few dense operations the engine spends its time in, so that a faster library can stand in for EJML. Found by
@@ -15,8 +18,13 @@ public interface LinearAlgebra {
         return Installed.FOUND;
     }
 
-    /** Returns name and version for the record of a run. */
+    /** Returns name and version for the record of a run: what has computed so far. */
     String name();
+
+    /** Returns what a reader must know of it, for example that a faster library is there but could not be loaded. */
+    default List<Doubt> doubts() {
+        return List.of();
+    }
 
     /** Returns A B. */
     DMatrixRMaj multiply(DMatrixRMaj a, DMatrixRMaj b);
@@ -26,6 +34,31 @@ public interface LinearAlgebra {
 
     /** Returns A Bᵀ. */
     DMatrixRMaj multiplyTransB(DMatrixRMaj a, DMatrixRMaj b);
+
+    /** Returns Aᵀ A, exactly symmetric. */
+    DMatrixRMaj gram(DMatrixRMaj a);
+
+    /**
+     * Returns the upper triangular R of positive diagonal with {@code Rᵀ R = A}.
+     *
+     * @param a symmetric; only one triangle is read
+     * @return empty when A is not positive definite to rounding
+     */
+    Optional<DMatrixRMaj> cholesky(DMatrixRMaj a);
+
+    /**
+     * Returns {@code A R⁻¹}.
+     *
+     * @param upper R, n x n, upper triangular with a diagonal that is not 0
+     */
+    DMatrixRMaj divideByUpper(DMatrixRMaj a, DMatrixRMaj upper);
+
+    /**
+     * Decomposes a matrix with at least as many rows as columns by reflections, {@code A = Q R}.
+     *
+     * @throws org.modestead.engine.FitFault if an entry is not finite
+     */
+    Qr qr(DMatrixRMaj a);
 
     /**
      * Decomposes a symmetric matrix, {@code A = U diag(values) Uᵀ}, values falling.
@@ -47,6 +80,12 @@ public interface LinearAlgebra {
      * @throws org.modestead.engine.FitFault if an entry is not finite or it does not converge
      */
     GeneralEigen eigen(DMatrixRMaj a);
+
+    /**
+     * @param q m x n, orthonormal columns
+     * @param r n x n, upper triangular, diagonal of any sign
+     */
+    record Qr(DMatrixRMaj q, DMatrixRMaj r) {}
 
     /**
      * @param values falling, length n

@@ -42,6 +42,11 @@ public final class Matrices {
         return LinearAlgebra.installed().multiplyTransB(a, b);
     }
 
+    /** Returns Aᵀ A, exactly symmetric. */
+    public static DMatrixRMaj gram(DMatrixRMaj a) {
+        return LinearAlgebra.installed().gram(a);
+    }
+
     /**
      * Returns A^k by repeated squaring.
      *

@@ -461,29 +461,14 @@ final class RealSchur {
 
     /** Writes Z x, normalised, into column k, and its conjugate into column k+1 when λ is complex. */
     private void setColumn(ZMatrixRMaj vectors, int k, double[] x) {
-        double[] v = new double[2 * n];
-        double norm = 0;
-        double largest = 0;
-        int at = 0;
+        double[] real = new double[n];
+        double[] imaginary = new double[n];
         for (int i = 0; i < n; i++) {
             for (int j = 0; j < n; j++) {
-                v[2 * i] += z[i][j] * x[2 * j];
-                v[2 * i + 1] += z[i][j] * x[2 * j + 1];
-            }
-            double size = Math.hypot(v[2 * i], v[2 * i + 1]);
-            norm = Math.hypot(norm, size);
-            if (size > largest * (1 + 1e-9)) {
-                largest = size;
-                at = i;
+                real[i] += z[i][j] * x[2 * j];
+                imaginary[i] += z[i][j] * x[2 * j + 1];
             }
         }
-        Complex turn = new Complex(v[2 * at], -v[2 * at + 1]).times(1 / (largest * norm));
-        for (int i = 0; i < n; i++) {
-            Complex entry = new Complex(v[2 * i], v[2 * i + 1]).times(turn);
-            vectors.set(i, k, entry.re(), im[k] == 0 ? 0 : entry.im());
-            if (im[k] > 0) {
-                vectors.set(i, k + 1, entry.re(), -entry.im());
-            }
-        }
+        GeneralEigen.put(vectors, k, real, imaginary, im[k] > 0);
     }
 }

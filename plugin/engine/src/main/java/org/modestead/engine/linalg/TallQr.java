@@ -2,8 +2,6 @@ package org.modestead.engine.linalg;
 
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
-import org.ejml.dense.row.factory.DecompositionFactory_DDRM;
-import org.ejml.interfaces.decomposition.CholeskyDecomposition_F64;
 
 /**
  * {@code A = Q R} of a tall matrix by two rounds of Cholesky factorisation, {@code AᵀA = RᵀR}, {@code Q = A R⁻¹}: nearly all
@@ -25,21 +23,20 @@ record TallQr(DMatrixRMaj q, DMatrixRMaj r) {
     }
 
     private static Optional<TallQr> round(DMatrixRMaj a) {
-        int n = a.numCols;
-        CholeskyDecomposition_F64<DMatrixRMaj> cholesky = DecompositionFactory_DDRM.chol(n, false);
-        if (!cholesky.decompose(Matrices.transposeProduct(a, a))) {
+        Optional<DMatrixRMaj> factor = LinearAlgebra.installed().cholesky(Matrices.gram(a));
+        if (factor.isEmpty()) {
             return Optional.empty();
         }
-        DMatrixRMaj r = cholesky.getT(null);
+        DMatrixRMaj r = factor.get();
         double smallest = Double.POSITIVE_INFINITY;
         double largest = 0;
-        for (int i = 0; i < n; i++) {
+        for (int i = 0; i < r.numRows; i++) {
             smallest = Math.min(smallest, r.get(i, i));
             largest = Math.max(largest, r.get(i, i));
         }
         if (!(smallest > LEAST_PIVOT * largest)) {
             return Optional.empty();
         }
-        return Optional.of(new TallQr(Matrices.product(a, Triangular.inverseOfUpper(r)), r));
+        return Optional.of(new TallQr(LinearAlgebra.installed().divideByUpper(a, r), r));
     }
 }

@@ -53,7 +53,7 @@ public final class ThinSvd {
 
     private static Svd throughGram(DMatrixRMaj a, int largest) {
         LinearAlgebra algebra = LinearAlgebra.installed();
-        SymmetricEigen eigen = algebra.symmetricEigen(algebra.multiplyTransA(a, a));
+        SymmetricEigen eigen = algebra.symmetricEigen(algebra.gram(a));
         int k = 0;
         while (k < Math.min(a.numCols, largest) && eigen.values()[k] > GRAM_FLOOR * eigen.values()[0]) {
             k++;

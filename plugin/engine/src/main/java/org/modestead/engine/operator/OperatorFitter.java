@@ -7,6 +7,7 @@ import java.util.Locale;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
+import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.recording.Snapshots;
 
 /** Fits an operator: compress, whiten, choose the rank. */
@@ -81,7 +82,7 @@ public final class OperatorFitter {
     }
 
     private static List<Doubt> doubts(OrthonormalCompression full, int rank, Snapshots snapshots) {
-        List<Doubt> doubts = new ArrayList<>();
+        List<Doubt> doubts = new ArrayList<>(LinearAlgebra.installed().doubts());
         double thin = full.singular()[rank - 1] / full.singular()[0];
         if (thin < THIN) {
             doubts.add(new Doubt("ill-conditioned", String.format(Locale.ROOT,

@@ -7,14 +7,14 @@ import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 
 /** Square matrices that break naive decompositions, by name, and how far a decomposition is from what it should be. */
-final class AwkwardMatrices {
+public final class AwkwardMatrices {
 
     private static final double ULP = Math.ulp(1.0);
 
     private AwkwardMatrices() {}
 
     /** Finite square matrices in a fixed order. */
-    static Map<String, DMatrixRMaj> square() {
+    public static Map<String, DMatrixRMaj> square() {
         Map<String, DMatrixRMaj> all = new LinkedHashMap<>();
         all.put("1 x 1", new DMatrixRMaj(new double[][] {{-3}}));
         all.put("1 x 1 zero", new DMatrixRMaj(1, 1));
@@ -45,14 +45,14 @@ final class AwkwardMatrices {
     }
 
     /** Symmetric parts of the square ones. */
-    static Map<String, DMatrixRMaj> symmetric() {
+    public static Map<String, DMatrixRMaj> symmetric() {
         Map<String, DMatrixRMaj> all = new LinkedHashMap<>();
         square().forEach((name, a) -> all.put(name, symmetrised(a)));
         return all;
     }
 
     /** Square, tall, wide and rank-deficient ones. */
-    static Map<String, DMatrixRMaj> anyShape() {
+    public static Map<String, DMatrixRMaj> anyShape() {
         Map<String, DMatrixRMaj> all = square();
         all.put("tall", random(40, 7, 2));
         all.put("wide", random(7, 40, 3));
@@ -64,7 +64,7 @@ final class AwkwardMatrices {
         return all;
     }
 
-    static DMatrixRMaj random(int rows, int columns, long seed) {
+    public static DMatrixRMaj random(int rows, int columns, long seed) {
         Random random = new Random(seed);
         DMatrixRMaj a = new DMatrixRMaj(rows, columns);
         for (int i = 0; i < a.getNumElements(); i++) {
@@ -73,13 +73,13 @@ final class AwkwardMatrices {
         return a;
     }
 
-    static DMatrixRMaj scaled(DMatrixRMaj a, double c) {
+    public static DMatrixRMaj scaled(DMatrixRMaj a, double c) {
         DMatrixRMaj out = a.copy();
         CommonOps_DDRM.scale(c, out);
         return out;
     }
 
-    static DMatrixRMaj shift(int n) {
+    public static DMatrixRMaj shift(int n) {
         DMatrixRMaj a = new DMatrixRMaj(n, n);
         for (int i = 0; i < n; i++) {
             a.set((i + 1) % n, i, 1);
@@ -87,7 +87,7 @@ final class AwkwardMatrices {
         return a;
     }
 
-    static DMatrixRMaj jordan(int n, double value) {
+    public static DMatrixRMaj jordan(int n, double value) {
         DMatrixRMaj a = CommonOps_DDRM.identity(n);
         CommonOps_DDRM.scale(value, a);
         for (int i = 0; i + 1 < n; i++) {
@@ -97,7 +97,7 @@ final class AwkwardMatrices {
     }
 
     /** Companion matrix of (z-1)(z-2)...(z-n). */
-    static DMatrixRMaj companion(int n) {
+    public static DMatrixRMaj companion(int n) {
         double[] coefficients = new double[n + 1];
         coefficients[0] = 1;
         for (int root = 1; root <= n; root++) {
@@ -174,7 +174,7 @@ final class AwkwardMatrices {
         return a;
     }
 
-    static DMatrixRMaj symmetrised(DMatrixRMaj a) {
+    public static DMatrixRMaj symmetrised(DMatrixRMaj a) {
         DMatrixRMaj out = a.copy();
         for (int i = 0; i < a.numRows; i++) {
             for (int j = 0; j < a.numCols; j++) {
@@ -185,7 +185,7 @@ final class AwkwardMatrices {
     }
 
     /** {@code ‖A V - V D‖ / (‖A‖ ‖V‖ n ulp)} in the largest entries; 0 for an exact answer. */
-    static double eigenRatio(DMatrixRMaj a, GeneralEigen eigen) {
+    public static double eigenRatio(DMatrixRMaj a, GeneralEigen eigen) {
         int n = a.numRows;
         double norm = CommonOps_DDRM.elementMaxAbs(a);
         double worst = 0;
@@ -205,7 +205,7 @@ final class AwkwardMatrices {
     }
 
     /** {@code ‖QᵀQ - I‖ / (m ulp)} in the largest entry. */
-    static double orthogonalityRatio(DMatrixRMaj q) {
+    public static double orthogonalityRatio(DMatrixRMaj q) {
         double worst = 0;
         for (int i = 0; i < q.numCols; i++) {
             for (int j = 0; j < q.numCols; j++) {
@@ -220,7 +220,7 @@ final class AwkwardMatrices {
     }
 
     /** {@code ‖A - U diag(s) Vᵀ‖ / (‖A‖ max(m, n) ulp)} in the largest entry. */
-    static double factorRatio(DMatrixRMaj a, DMatrixRMaj u, double[] s, DMatrixRMaj v) {
+    public static double factorRatio(DMatrixRMaj a, DMatrixRMaj u, double[] s, DMatrixRMaj v) {
         double norm = CommonOps_DDRM.elementMaxAbs(a);
         double scale = norm == 0 ? 1 : norm;
         double worst = 0;

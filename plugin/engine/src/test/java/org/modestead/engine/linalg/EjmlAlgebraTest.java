@@ -3,7 +3,7 @@ package org.modestead.engine.linalg;
 class EjmlAlgebraTest extends LinearAlgebraContract {
 
     @Override
-    LinearAlgebra algebra() {
+    protected LinearAlgebra algebra() {
         return new EjmlAlgebra();
     }
 }

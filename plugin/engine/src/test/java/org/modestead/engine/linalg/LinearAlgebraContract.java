@@ -28,11 +28,11 @@ import org.modestead.engine.FitFault;
  * threshold an answer is as good as one rounding error in each entry of the input (common practice; LAPACK's own tests
  * use 20 to 50).
  */
-abstract class LinearAlgebraContract {
+public abstract class LinearAlgebraContract {
 
     private static final double THRESHOLD = 30;
 
-    abstract LinearAlgebra algebra();
+    protected abstract LinearAlgebra algebra();
 
     @TestFactory
     Stream<DynamicTest> eigenpairsSolveTheEigenproblem() {
@@ -199,6 +199,67 @@ abstract class LinearAlgebraContract {
     }
 
     @Test
+    void gramMatrixIsTheProductAndSymmetricToTheLastBit() {
+        for (int[] shape : new int[][] {{1, 1}, {3, 7}, {50, 9}, {700, 33}}) {
+            DMatrixRMaj a = AwkwardMatrices.random(shape[0], shape[1], 31);
+            DMatrixRMaj gram = algebra().gram(a);
+            // sums of up to 700 terms of size 1
+            assertArrayEquals(algebra().multiplyTransA(a, a).data, gram.data, 1e-12);
+            assertArrayEquals(CommonOps_DDRM.transpose(gram, null).data, gram.data);
+        }
+    }
+
+    @Test
+    void choleskyFactorIsUpperWithAPositiveDiagonalAndMultipliesBack() {
+        for (int n : new int[] {1, 5, 40, 150}) {
+            DMatrixRMaj a = algebra().gram(AwkwardMatrices.random(n + 5, n, 32));
+            DMatrixRMaj r = algebra().cholesky(a).orElseThrow();
+            for (int i = 0; i < n; i++) {
+                assertTrue(r.get(i, i) > 0);
+                for (int j = 0; j < i; j++) {
+                    assertEquals(0, r.get(i, j), 0);
+                }
+            }
+            // backward error of n roundings of the largest entry, about n
+            assertArrayEquals(a.data, algebra().multiplyTransA(r, r).data, 1e-15 * n * (n + 5) + 1e-14);
+        }
+    }
+
+    @Test
+    void aMatrixThatIsNotPositiveDefiniteHasNoCholeskyFactor() {
+        assertTrue(algebra().cholesky(new DMatrixRMaj(new double[][] {{1, 2}, {2, 1}})).isEmpty());
+        assertTrue(algebra().cholesky(new DMatrixRMaj(3, 3)).isEmpty());
+    }
+
+    @Test
+    void divisionByATriangleUndoesTheProduct() {
+        DMatrixRMaj r = algebra().cholesky(algebra().gram(AwkwardMatrices.random(90, 20, 33))).orElseThrow();
+        DMatrixRMaj a = AwkwardMatrices.random(41, 20, 34);
+        // the triangle's condition is about 3
+        assertArrayEquals(a.data, algebra().divideByUpper(algebra().multiply(a, r), r).data, 1e-13);
+    }
+
+    @TestFactory
+    Stream<DynamicTest> orthonormalColumnsTimesATriangleGiveTheMatrix() {
+        return AwkwardMatrices.anyShape().entrySet().stream().filter(entry -> entry.getValue().numRows >= entry.getValue().numCols)
+                .map(entry -> DynamicTest.dynamicTest(entry.getKey(), () -> {
+                    DMatrixRMaj a = entry.getValue();
+                    LinearAlgebra.Qr qr = algebra().qr(a);
+                    assertEquals(a.numCols, qr.q().numCols);
+                    assertTrue(AwkwardMatrices.orthogonalityRatio(qr.q()) < THRESHOLD);
+                    double[] ones = new double[a.numCols];
+                    Arrays.fill(ones, 1);
+                    double ratio = AwkwardMatrices.factorRatio(a, qr.q(), ones, CommonOps_DDRM.transpose(qr.r(), null));
+                    assertTrue(ratio < THRESHOLD, "scaled residual " + ratio);
+                    for (int i = 0; i < a.numCols; i++) {
+                        for (int j = 0; j < i; j++) {
+                            assertEquals(0, qr.r().get(i, j), 0);
+                        }
+                    }
+                }));
+    }
+
+    @Test
     void argumentsAreLeftAsTheyWere() {
         DMatrixRMaj a = AwkwardMatrices.symmetrised(AwkwardMatrices.random(8, 8, 26));
         double[] before = a.data.clone();
@@ -206,6 +267,9 @@ abstract class LinearAlgebraContract {
         algebra().symmetricEigen(a);
         algebra().svd(a);
         algebra().multiply(a, a);
+        algebra().gram(a);
+        algebra().qr(a);
+        algebra().cholesky(a);
         assertArrayEquals(before, a.data);
     }
 

@@ -17,6 +17,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
 import org.modestead.engine.Doubt;
+import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.host.workflow.PlannedStep;
 
 /**
@@ -63,6 +64,7 @@ final class RunRecord {
         root.put("state", result.state().word());
         root.put("versions", Versions.all());
         root.put("linear_algebra", Versions.linearAlgebra());
+        root.put("warnings", LinearAlgebra.installed().doubts().stream().map(RunRecord::warning).toList());
         root.put("started", started.truncatedTo(ChronoUnit.MILLIS).toString());
         root.put("seconds", seconds(result.time()));
         root.put("steps", result.plan().steps().stream().map(step -> step(step, result.outcomes().get(step.id()))).toList());

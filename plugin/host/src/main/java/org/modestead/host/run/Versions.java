@@ -6,6 +6,7 @@ import java.sql.SQLException;
 import java.util.Map;
 import java.util.TreeMap;
 import org.ejml.EjmlVersion;
+import org.modestead.engine.linalg.LinearAlgebra;
 
 /** What computed a result, for the record. */
 public final class Versions {
@@ -20,9 +21,9 @@ public final class Versions {
         return version == null ? UNPACKED : version;
     }
 
-    /** Returns the library that does the linear algebra, with its version. */
+    /** Returns the libraries that have done the linear algebra so far, with their versions. */
     static String linearAlgebra() {
-        return "EJML " + EjmlVersion.VERSION + " (pure Java)";
+        return LinearAlgebra.installed().name();
     }
 
     static Map<String, String> all() {
