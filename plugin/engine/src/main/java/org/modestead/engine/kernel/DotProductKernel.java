@@ -4,6 +4,7 @@ import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 import java.util.function.IntToDoubleFunction;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.linalg.Blocks;
 import org.modestead.engine.linalg.Matrices;
 
 /**
@@ -16,12 +17,17 @@ import org.modestead.engine.linalg.Matrices;
  */
 record DotProductKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile, IntToDoubleFunction coefficients) implements Kernel {
 
+    /** Values of a block, worth handing to another core. */
+    private static final int BLOCK = 1 << 14;
+
     @Override
     public DMatrixRMaj matrix(DMatrixRMaj x, DMatrixRMaj y) {
         DMatrixRMaj out = Matrices.productTranspose(x, y);
-        for (int i = 0; i < out.data.length; i++) {
-            out.data[i] = profile.applyAsDouble(out.data[i]);
-        }
+        Blocks.of(out.getNumElements(), BLOCK, (from, to) -> {
+            for (int i = from; i < to; i++) {
+                out.data[i] = profile.applyAsDouble(out.data[i]);
+            }
+        });
         return out;
     }
 

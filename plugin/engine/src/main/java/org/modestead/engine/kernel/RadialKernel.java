@@ -3,6 +3,7 @@ package org.modestead.engine.kernel;
 import java.util.Arrays;
 import java.util.function.DoubleUnaryOperator;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.linalg.Blocks;
 
 /**
  * A kernel that depends on the distance only, {@code K(x, y) = f(|x - y|)} with {@code f(0) = 1}.
@@ -16,21 +17,61 @@ import org.ejml.data.DMatrixRMaj;
  */
 record RadialKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile) implements Kernel {
 
+    /** Differences of a block, worth handing to another core. */
+    private static final int BLOCK = 1 << 18;
+
     @Override
     public DMatrixRMaj matrix(DMatrixRMaj x, DMatrixRMaj y) {
         DMatrixRMaj out = new DMatrixRMaj(x.numRows, y.numRows);
-        int n = x.numCols;
-        for (int i = 0; i < x.numRows; i++) {
-            for (int j = 0; j < y.numRows; j++) {
-                double sum = 0;
-                for (int k = 0; k < n; k++) {
-                    double d = x.data[i * n + k] - y.data[j * n + k];
-                    sum += d * d;
-                }
-                out.data[i * y.numRows + j] = profile.applyAsDouble(sum);
+        int pairs = Math.max(1, y.numRows * Math.max(1, x.numCols));
+        Blocks.of(x.numRows, Math.max(1, BLOCK / pairs), (from, to) -> {
+            for (int i = from; i < to; i++) {
+                row(x, i, y, out);
             }
-        }
+        });
         return out;
+    }
+
+    /** Four points of y beside each other, so that sums do not wait for each other; each is summed as it would be alone. */
+    private void row(DMatrixRMaj x, int i, DMatrixRMaj y, DMatrixRMaj out) {
+        int q = y.numRows;
+        int j = 0;
+        for (; j + 4 <= q; j += 4) {
+            four(x.data, i * x.numCols, y.data, j * x.numCols, x.numCols, out.data, i * q + j);
+        }
+        for (; j < q; j++) {
+            double sum = 0;
+            for (int k = 0; k < x.numCols; k++) {
+                double d = x.data[i * x.numCols + k] - y.data[j * x.numCols + k];
+                sum += d * d;
+            }
+            out.data[i * q + j] = sum;
+        }
+        for (int at = i * q; at < (i + 1) * q; at++) {
+            out.data[at] = profile.applyAsDouble(out.data[at]);
+        }
+    }
+
+    private static void four(double[] x, int xAt, double[] y, int yAt, int n, double[] out, int outAt) {
+        double a = 0;
+        double b = 0;
+        double c = 0;
+        double d = 0;
+        for (int k = 0; k < n; k++) {
+            double value = x[xAt + k];
+            double da = value - y[yAt + k];
+            double db = value - y[yAt + n + k];
+            double dc = value - y[yAt + 2 * n + k];
+            double dd = value - y[yAt + 3 * n + k];
+            a += da * da;
+            b += db * db;
+            c += dc * dc;
+            d += dd * dd;
+        }
+        out[outAt] = a;
+        out[outAt + 1] = b;
+        out[outAt + 2] = c;
+        out[outAt + 3] = d;
     }
 
     @Override

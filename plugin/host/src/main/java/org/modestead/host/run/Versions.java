@@ -1,9 +1,10 @@
 package org.modestead.host.run;
 
-import java.sql.Connection;
-import java.sql.DriverManager;
-import java.sql.SQLException;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
 import java.util.Map;
+import java.util.Properties;
 import java.util.TreeMap;
 import org.ejml.EjmlVersion;
 import org.modestead.engine.linalg.LinearAlgebra;
@@ -36,11 +37,14 @@ public final class Versions {
         return all;
     }
 
+    /** As built with: asking the database itself would load its native library into runs that need none. */
     private static String duckDb() {
-        try (Connection connection = DriverManager.getConnection("jdbc:duckdb:")) {
-            return connection.getMetaData().getDatabaseProductVersion();
-        } catch (SQLException absent) {
-            return "not available (" + absent.getMessage() + ")";
+        Properties libraries = new Properties();
+        try (InputStream in = Versions.class.getResourceAsStream("libraries.properties")) {
+            libraries.load(in);
+        } catch (IOException unreadable) {
+            throw new UncheckedIOException(unreadable);
         }
+        return "v" + libraries.getProperty("duckdb");
     }
 }
