@@ -3,6 +3,8 @@ package org.modestead.accelerator;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.atomic.AtomicBoolean;
+import org.bytedeco.javacpp.Loader;
+import org.bytedeco.javacpp.Pointer;
 import org.bytedeco.openblas.global.openblas;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -38,14 +40,28 @@ final class Library {
 
         /** Loads the library and has it do a product whose result is known, so that a library that does not work is not used. */
         private static OpenBlas loaded() {
-            // Cutting work for several cores is done here, in an order that does not depend on their number.
-            openblas.blas_set_num_threads(1);
+            Loader.load(openblas.class);
+            oneThread();
             OpenBlas library = new OpenBlas();
             double product = library.multiply(new DMatrixRMaj(new double[][] {{2, 3}}), new DMatrixRMaj(new double[][] {{5}, {7}})).get(0, 0);
             if (product != 31) {
                 throw new IllegalStateException("2·5 + 3·7 came out as " + product);
             }
             return library;
+        }
+
+        /**
+         * Cutting work for several cores is done here, in an order that does not depend on their number. The library's own call for that is not
+         * among the functions that its Java side knows; it is called through the type of a function that takes a number first, and reads no more.
+         */
+        private static void oneThread() {
+            Pointer setter = Loader.addressof("openblas_set_num_threads");
+            if (setter == null) {
+                throw new IllegalStateException("the number of its threads cannot be set");
+            }
+            try (openblas.openblas_dojob_callback call = new openblas.openblas_dojob_callback(setter)) {
+                call.call(1, null, 0);
+            }
         }
 
         private static Throwable rootOf(Throwable thrown) {

@@ -70,7 +70,7 @@ class AcceleratedAlgebraTest extends LinearAlgebraContract {
     /** Runs {@link Telling} in a fresh process. */
     private static String told(boolean natives, String size, String... options) throws IOException, InterruptedException {
         String path = Arrays.stream(System.getProperty("java.class.path").split(File.pathSeparator))
-                .filter(jar -> natives || !jar.matches(".*-(linux|windows|macosx)-[a-z0-9_]+[.]jar")).collect(Collectors.joining(File.pathSeparator));
+                .filter(jar -> natives || !jar.matches(".*(natives|[.](linux|windows|macosx)[.]).*")).collect(Collectors.joining(File.pathSeparator));
         List<String> command = new java.util.ArrayList<>(List.of(System.getProperty("java.home") + "/bin/java", "-cp", path));
         command.addAll(List.of(options));
         command.addAll(List.of(Telling.class.getName(), size));
