@@ -5,6 +5,7 @@ import java.util.Optional;
 import java.util.concurrent.atomic.AtomicBoolean;
 import org.bytedeco.javacpp.Loader;
 import org.bytedeco.javacpp.Pointer;
+import org.bytedeco.javacpp.PointerPointer;
 import org.bytedeco.openblas.global.openblas;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -59,8 +60,10 @@ final class Library {
             if (setter == null) {
                 throw new IllegalStateException("the number of its threads cannot be set");
             }
-            try (openblas.openblas_dojob_callback call = new openblas.openblas_dojob_callback(setter)) {
-                call.call(1, null, 0);
+            // A function of the Java side is a cell that holds the address of the native one.
+            try (PointerPointer<Pointer> cell = new PointerPointer<>(1L)) {
+                cell.put(setter);
+                new openblas.openblas_dojob_callback(cell).call(1, null, 0);
             }
         }
 
