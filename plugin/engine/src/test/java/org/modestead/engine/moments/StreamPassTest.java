@@ -7,6 +7,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
+import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.Random;
 import java.util.stream.IntStream;
@@ -15,8 +16,10 @@ import org.junit.jupiter.api.Test;
 import org.modestead.engine.Fault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.RecordingFault;
+import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.modelfile.FieldsReader;
 import org.modestead.engine.modelfile.StoredMoments;
+import org.modestead.engine.modelfile.StoredOperator;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.NoiseCorrection;
 import org.modestead.engine.operator.RankRule;
@@ -144,6 +147,21 @@ class StreamPassTest {
             assertEquals(plan.toString(), back.plan().toString());
             assertEquals(0, maxDifference(a.compression().action(), b.compression().action()), 0, "bit for bit");
             assertEquals(a.snapshots().holdout().get(0).id(), b.snapshots().holdout().get(0).id());
+        }
+    }
+
+    /** A model of random waves or landmarks is kept like any other, with all it needs to be evaluated and fitted again. */
+    @Test
+    void operatorsComeBackFromTheirTree() {
+        KernelSpec kernel = new KernelSpec("matern32", Map.of("scale", 2.0));
+        for (Features features : List.of(new Features.RandomFourier(kernel, 12, 3), new Features.Landmarks(kernel, 15))) {
+            StreamPlan plan = Streams.plan(features, DelayEmbedding.NONE, true, Scaling.STD);
+            FittedOperator operator = MomentFit.fit(Streams.moments(plan, Streams.recording()), new RankRule.Fixed(6), 0, Progress.NONE);
+            FittedOperator back = StoredOperator.read(new FieldsReader("test", StoredOperator.of(operator)));
+            DMatrixRMaj states = operator.snapshots().states(Part.HOLDOUT).get(0).states();
+            assertEquals(0, maxDifference(operator.chosen().evaluate(states), back.chosen().evaluate(states)), 0, "bit for bit");
+            assertEquals(operator.estimator().describe(), back.estimator().describe());
+            assertEquals(operator.method(), back.method());
         }
     }
 
