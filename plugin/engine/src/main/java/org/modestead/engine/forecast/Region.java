@@ -10,7 +10,7 @@ import org.modestead.engine.recording.Snapshots;
  * @param low smallest value per channel, length n
  * @param high largest value per channel, length n
  */
-record Region(double[] low, double[] high) {
+public record Region(double[] low, double[] high) {
 
     /** Beyond the box by more than this share of its width, a forecast is called extrapolation. */
     static final double MARGIN = 0.1;
@@ -18,7 +18,7 @@ record Region(double[] low, double[] high) {
     static final double LIMIT = 1e3;
 
     /** Returns the box of the training samples. */
-    static Region of(Snapshots snapshots) {
+    public static Region of(Snapshots snapshots) {
         int n = snapshots.channels().size();
         double[] low = new double[n];
         double[] high = new double[n];
@@ -34,7 +34,7 @@ record Region(double[] low, double[] high) {
     }
 
     /** Returns whether a prepared value lies outside the box with its margin. */
-    boolean leaves(int channel, double value) {
+    public boolean leaves(int channel, double value) {
         double margin = MARGIN * width(channel);
         return value < low[channel] - margin || value > high[channel] + margin;
     }

@@ -2,6 +2,7 @@ package org.modestead.nodes.figure;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
@@ -9,6 +10,7 @@ import java.util.function.ToDoubleFunction;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.modestead.engine.forecast.ForecastRow;
+import org.modestead.engine.forecast.Region;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
@@ -21,6 +23,7 @@ import org.modestead.engine.recording.Snapshots;
  */
 record ForecastFigure(Snapshots snapshots, List<ForecastRow> rows) {
     private static final int MOST_POINTS = 2000;
+    private static final int MOST_MARKS = 12;
     private static final double HISTORY = 2;
 
     /** Draws the last run that was forecast; empty when the channel has no rows. */
@@ -40,11 +43,25 @@ record ForecastFigure(Snapshots snapshots, List<ForecastRow> rows) {
         }
         layers.add(new Figure.Line("forecast", key(), times, column(ForecastRow::value), Figure.Emphasis.STRONG));
         layers.addAll(recorded());
+        beyond(times).ifPresent(layers::add);
         String band = banded ? " The shaded area is the band in which new values are expected."
                 : " No band could be given.";
         return new Figure("forecast-" + (channel() + 1), Figure.Kind.TIME_SERIES, "Forecast of " + named().name(),
-                "Forecast of run " + rows.get(0).run() + " against what was recorded." + band, Axes.time(snapshots.time()),
+                "Forecast of run " + rows.get(0).run() + " against what was recorded." + band
+                        + (beyond(times).isPresent() ? " Triangles stand where it leaves the range that the fit has seen: extrapolation." : ""), Axes.time(snapshots.time()),
                 Figure.Axis.linear(named().label()), layers);
+    }
+
+    /** Where the forecast leaves the range of the training samples by more than a tenth of it. */
+    private Optional<Figure.Layer> beyond(double[] times) {
+        Region region = Region.of(snapshots);
+        int[] outside = IntStream.range(0, rows.size()).filter(k -> region.leaves(channel(),
+                snapshots.preparation().prepare(channel(), rows.get(k).time(), rows.get(k).value()))).toArray();
+        int every = Math.max(1, outside.length / MOST_MARKS);
+        int[] marked = IntStream.range(0, outside.length).filter(k -> k % every == 0).map(k -> outside[k]).toArray();
+        return marked.length == 0 ? Optional.empty() : Optional.of(new Figure.Points("extrapolated", key(), Arrays.stream(marked)
+                .mapToDouble(k -> times[k]).toArray(), Arrays.stream(marked).mapToDouble(k -> rows.get(k).value()).toArray(),
+                Collections.nCopies(marked.length, ""), Figure.Emphasis.STRONG, Figure.Mark.TRIANGLE));
     }
 
     private List<Figure.Layer> recorded() {

@@ -7,6 +7,7 @@ import org.modestead.engine.forecast.ErrorRow;
 import org.modestead.engine.forecast.ForecastResult;
 import org.modestead.engine.forecast.ForecastRow;
 import org.modestead.engine.forecast.ReconstructionRow;
+import org.modestead.engine.forecast.Region;
 import org.modestead.engine.forecast.ScoreRow;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Snapshots;
@@ -25,10 +26,10 @@ final class ForecastTables {
 
     private ForecastTables() {}
 
-    /** Columns of the forecast of a recording with such times. */
+    /** Columns of the forecast of a recording with such times; {@code beyond}: outside the range that the fit has seen, so extrapolated. */
     static TableSchema forecastColumns(TimeAxis axis) {
         return TableSchema.of(Column.text("run"), time("time", axis), Column.text("channel"), Column.number("value"),
-                Column.number("low"), Column.number("high"), Column.text("route"));
+                Column.number("low"), Column.number("high"), Column.text("route"), Column.flag("beyond"));
     }
 
     /** Columns of the reconstruction of a recording with such times. */
@@ -46,11 +47,13 @@ final class ForecastTables {
     static MemoryTable forecast(ForecastResult result, Snapshots snapshots, Progress progress) {
         MemoryTable.Builder rows = MemoryTable.builder(forecastColumns(snapshots.time()), "forecast");
         List<String> channels = names(snapshots);
+        Region region = Region.of(snapshots);
         for (ForecastRow row : result.forecast()) {
             progress.checkCancelled();
             rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
                     row.high(),
-                    result.routeUsed().word());
+                    result.routeUsed().word(), region.leaves(row.channel(), snapshots.preparation().prepare(row.channel(), row.time(),
+                            row.value())));
         }
         return rows.build();
     }

@@ -8,6 +8,7 @@ import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
+import org.modestead.engine.recording.Fingerprint;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.ModeVerdict;
@@ -80,6 +81,7 @@ final class PortFacts {
         out.addAll(operator(model.operator()));
         out.add(new PortFact("modes", Integer.toString(model.spectrum().modes().size())));
         out.addAll(verdict(model.verdict()));
+        out.add(new PortFact("data fingerprint", Fingerprint.of(model.operator().snapshots())));
         return out;
     }
 

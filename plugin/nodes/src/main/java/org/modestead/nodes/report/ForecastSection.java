@@ -5,11 +5,13 @@ import java.util.Comparator;
 import java.util.List;
 import org.modestead.engine.forecast.ScoreRow;
 import org.modestead.nodes.document.ReportDocument.Block;
+import org.modestead.nodes.document.ReportDocument.Callout;
 import org.modestead.nodes.document.ReportDocument.Grid;
 import org.modestead.nodes.document.ReportDocument.Head;
 import org.modestead.nodes.document.ReportDocument.Paragraph;
 import org.modestead.nodes.document.ReportDocument.Picture;
 import org.modestead.nodes.document.ReportDocument.Section;
+import org.modestead.nodes.document.ReportDocument.Tone;
 import org.modestead.nodes.figure.ForecastFigures;
 import org.modestead.nodes.figure.ScoreFigures;
 import org.modestead.nodes.words.Digits;
@@ -35,6 +37,8 @@ final class ForecastSection {
             blocks.add(new Paragraph(route(source.forecast().route())));
         }
         ForecastSkill.sentence(source).ifPresent(skill -> blocks.add(new Paragraph(skill)));
+        Extrapolation.sentence(source).ifPresent(sentence -> blocks.add(new Callout(Tone.CAUTION, "part of the forecast is extrapolation",
+                List.of(sentence, "The table marks these values in its column beyond, the picture with triangles."))));
         source.snapshots().ifPresent(snapshots -> ForecastFigures.figures(snapshots, source.forecast().result(),
                 source.channels())
                 .forEach(figure -> blocks.add(new Picture(figure))));

@@ -44,7 +44,7 @@ public final class ModeReportNode implements Node {
                 """
                 Writes, in this order: a summary in plain words; the modes with their figures, the complex plane and the mode \
                 shapes; whether each mode exists, with the checks that decided it; the forecast with its bands and its scores \
-                against naive methods; how it was done; doubts and cautions.
+                against naive methods; the method and its limits; the quality of the data; what to do next; doubts and cautions.
 
                 Connect as much as there is. Only the spectrum is needed; without a verdict the report says that nobody has \
                 judged whether the modes exist, and without the recording it draws no time series.
@@ -91,8 +91,8 @@ public final class ModeReportNode implements Node {
         ReportSource source = source(inputs, settings);
         context.progress().report(0.3, "writing the report");
         List<Section> sections = List.of(SummarySection.of(source, settings.text(NOTES)), ModesSection.of(source),
-                ExistenceSection.of(source), ForecastSection.of(source), MethodSection.of(source),
-                DoubtsSection.of(source.doubts()));
+                ExistenceSection.of(source), ForecastSection.of(source), MethodSection.of(source), LimitsSection.of(source),
+                DataSection.of(source), NextSection.of(source), DoubtsSection.of(source.doubts()));
         context.progress().checkCancelled();
         ReportDocument document = new ReportDocument(settings.text(TITLE), "", sections);
         return new NodeResult(Map.of(REPORT, ReportRows.of(document)), List.of(), SummarySection.sentences(source),

@@ -34,6 +34,7 @@ final class ReportStyle {
             th,td{text-align:left;vertical-align:top;padding:.35rem .8rem .35rem .5rem;border-bottom:1px solid var(--rule)}
             thead th{border-bottom:2px solid var(--note);vertical-align:bottom}
             tbody th{font-weight:600}
+            td{overflow-wrap:anywhere}
             tbody tr:nth-child(even){background:var(--stripe)}
             .number{text-align:right;font-variant-numeric:tabular-nums}
             tbody .number{white-space:nowrap}

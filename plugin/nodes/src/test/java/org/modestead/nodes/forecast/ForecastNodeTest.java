@@ -53,7 +53,7 @@ class ForecastNodeTest {
         NodeResult result = forecast(Ringing.numbers(4), Map.of("holdout", "run-share", "holdout-run-share", 0.25),
                 Map.of("horizon", 0.5, "route", "projection"));
         Table table = (Table) result.outputs().get("forecast");
-        assertEquals(List.of("run", "time", "channel", "value", "low", "high", "route"), table.schema().names());
+        assertEquals(List.of("run", "time", "channel", "value", "low", "high", "route", "beyond"), table.schema().names());
         assertEquals(CellType.DOUBLE, table.schema().columns().get(1).type());
         List<String> first = Steps.texts(result, "forecast").get(0);
         double time = Double.parseDouble(first.get(1));

@@ -57,7 +57,7 @@ class ModeReportNodeTest {
 
     @Test
     void theReportRunsFromSummaryToCautions() {
-        assertEquals(List.of("summary", "modes", "existence", "forecast", "method", "doubts"),
+        assertEquals(List.of("summary", "modes", "existence", "forecast", "method", "limits", "data", "next", "doubts"),
                 full(Grade.STANDS).sections().stream().map(Section::id).toList());
     }
 

@@ -32,7 +32,7 @@ class RunReportTest {
     void aModeReportLeadsAndItsFiguresAreNotDrawnAgain() {
         ReportDocument document = RunReport.assemble("pumps", List.of(builder(), checker(), reporter()), VERSIONS);
         assertEquals("Pump house north", document.title());
-        assertEquals(List.of("summary", "modes", "existence", "forecast", "method", "doubts", "step-1-build",
+        assertEquals(List.of("summary", "modes", "existence", "forecast", "method", "limits", "data", "next", "doubts", "step-1-build",
                 "step-2-judge", "repeat"),
                 document.sections().stream().map(Section::id).toList());
         assertTrue(pictures(section(document, "step-1-build")).isEmpty());

@@ -21,7 +21,7 @@ class AccessibilityTrialTest {
 
     private static final String AXE = "/META-INF/resources/webjars/axe-core/4.6.3/axe.min.js";
     /** The attribute aria-description came with ARIA 1.3, after this release of axe. */
-    private static final String RUN = """
+    static final String RUN = """
             const done = arguments[0];
             axe.configure({standards: {ariaAttrs: {'aria-description': {type: 'string', allowEmpty: true, global: true}}}});
             axe.run(document, {resultTypes: ['violations']}).then(
@@ -80,7 +80,7 @@ class AccessibilityTrialTest {
         violations.forEach(violation -> found.add(page + ": " + violation));
     }
 
-    private static String axe() throws IOException {
+    static String axe() throws IOException {
         try (InputStream source = AccessibilityTrialTest.class.getResourceAsStream(AXE)) {
             return new String(source.readAllBytes(), StandardCharsets.UTF_8);
         }

@@ -6,6 +6,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.util.ArrayList;
+import java.util.Base64;
 import java.util.List;
 import java.util.Map;
 import java.util.function.BooleanSupplier;
@@ -75,6 +76,17 @@ final class Browser implements AutoCloseable {
     /** Makes the system light or dark. */
     void system(String scheme) {
         driver.executeCdpCommand("Emulation.setEmulatedMedia", Map.of("features", List.of(Map.of("name", "prefers-color-scheme", "value", scheme))));
+    }
+
+    /** Shows the page as on the screen or as on paper. */
+    void medium(String medium) {
+        driver.executeCdpCommand("Emulation.setEmulatedMedia", Map.of("media", medium));
+    }
+
+    /** Prints the page to paper of a size in inches, with the margins of its style sheet. */
+    byte[] pdf(double width, double height) {
+        return Base64.getDecoder().decode((String) driver.executeCdpCommand("Page.printToPDF", Map.of("paperWidth", width, "paperHeight", height,
+                "printBackground", true)).get("data"));
     }
 
     void open(String url) {
