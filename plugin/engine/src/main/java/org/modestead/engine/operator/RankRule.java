@@ -30,4 +30,13 @@ public sealed interface RankRule {
      * @param largest largest rank tried, at least 1
      */
     record Holdout(int largest) implements RankRule {}
+
+    /**
+     * The singular values that stand above the last clear drop, {@code s_{r+1} <= s_r / 5}: under weak noise a sum of few modes in stacked
+     * samples ends in such a drop, and what follows it falls slowly. Where there is none up to the largest rank, {@link Holdout} decides.
+     * Juang and Pappa, J. Guidance 8:620, 1985, take the same drop for the order of a system.
+     *
+     * @param largest largest rank tried, at least 1
+     */
+    record Drop(int largest) implements RankRule {}
 }

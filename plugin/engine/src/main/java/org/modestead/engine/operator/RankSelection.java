@@ -2,12 +2,16 @@ package org.modestead.engine.operator;
 
 import java.util.Arrays;
 import java.util.Locale;
+import java.util.Optional;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.recording.Snapshots;
 
 /** Applies a rank rule. */
 final class RankSelection {
+
+    /** Neighbours of a noise floor differ by less, and so do those of motion that is no sum of few modes. */
+    private static final double CLEAR = 5;
 
     private RankSelection() {}
 
@@ -23,7 +27,24 @@ final class RankSelection {
         if (rule instanceof RankRule.HardThreshold) {
             return hardThreshold(full);
         }
+        if (rule instanceof RankRule.Drop drop) {
+            return drop(full.singular(), drop.largest()).orElseGet(() -> unclear(holdout(drop.largest(), full, estimator, ridge, snapshots, progress)));
+        }
         return holdout(((RankRule.Holdout) rule).largest(), full, estimator, ridge, snapshots, progress);
+    }
+
+    private static Optional<RankChoice> drop(double[] singular, int largest) {
+        for (int rank = Math.min(largest, singular.length - 1); rank >= 1; rank--) {
+            if (CLEAR * singular[rank] <= singular[rank - 1]) {
+                return Optional.of(new RankChoice(rank, String.format(Locale.ROOT,
+                        "singular values above the last clear drop, to %.3g of the one before", singular[rank] / singular[rank - 1])));
+            }
+        }
+        return Optional.empty();
+    }
+
+    private static RankChoice unclear(RankChoice choice) {
+        return new RankChoice(choice.rank(), "no singular value drops clearly below the one before; " + choice.reason());
     }
 
     private static RankChoice fixed(int rank, OrthonormalCompression full) {

@@ -81,6 +81,27 @@ class OperatorFitterTest {
         assertTrue(rank >= 4 && rank <= 10, "rank " + rank);
     }
 
+    @ParameterizedTest
+    @ValueSource(doubles = {1e-6, 0.01, 0.1})
+    void theClearDropIsTheRankOfTheSignalWhateverTheWeakNoise(double noise) {
+        FittedOperator operator = fit(lowRank(noise, 8), new RankRule.Drop(30), 0);
+        assertEquals(4, operator.rank(), operator.rankChoice());
+        assertTrue(operator.rankChoice().contains("last clear drop"), operator.rankChoice());
+    }
+
+    @Test
+    void withoutAClearDropHeldOutDataDecide() {
+        FittedOperator operator = fit(lowRank(2, 9), new RankRule.Drop(12), 0);
+        FittedOperator byHoldout = fit(lowRank(2, 9), new RankRule.Holdout(12), 0);
+        assertEquals(byHoldout.rank(), operator.rank());
+        assertEquals("no singular value drops clearly below the one before; " + byHoldout.rankChoice(), operator.rankChoice());
+    }
+
+    @Test
+    void aDropBeyondTheLargestRankIsNotSeen() {
+        assertTrue(fit(lowRank(0.01, 8), new RankRule.Drop(3), 0).rank() <= 3);
+    }
+
     @Test
     void energyIsTheSmallestRankThatHoldsTheShare() {
         FittedOperator operator = fit(lowRank(0.3, 4), new RankRule.Energy(0.9), 0);
@@ -102,6 +123,7 @@ class OperatorFitterTest {
             assertThrows(FitFault.class, () -> fit(lowRank(0.1, 1), new RankRule.Energy(share), 0));
         }
         assertThrows(FitFault.class, () -> fit(lowRank(0.1, 1), new RankRule.Holdout(0), 0));
+        assertThrows(FitFault.class, () -> fit(lowRank(0.1, 1), new RankRule.Drop(0), 0));
         for (double ridge : new double[] {-1e-3, Double.NaN, Double.POSITIVE_INFINITY}) {
             FitFault fault = assertThrows(FitFault.class, () -> fit(lowRank(0.1, 1), new RankRule.Fixed(2), ridge));
             assertTrue(fault.getMessage().contains(Double.toString(ridge)), fault.getMessage());

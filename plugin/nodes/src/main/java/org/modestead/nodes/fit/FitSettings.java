@@ -179,7 +179,10 @@ final class FitSettings {
                         new Option("hard-threshold", "Noise threshold", "Singular values above the threshold that is"
                                 + " optimal for white noise of unknown level."),
                         new Option("holdout", "Smallest holdout error", "The number that predicts best one step ahead on"
-                                + " a quarter of the training samples, left out while choosing.")),
+                                + " a quarter of the training samples, left out while choosing."),
+                        new Option("drop", "Clear drop", "As many as stand above the last place where singular values fall to a"
+                                + " fifth or less from one to the next; where none falls so clearly, as by the smallest holdout"
+                                + " error. For recordings of which little is known beforehand.")),
                         "energy"),
                 new Setting.Number(new Common("energy", "Share", group, "Share of the sum of squared singular values to"
                         + " be held.")
@@ -187,7 +190,7 @@ final class FitSettings {
                 new Setting.Whole(new Common("rank", "Rank", group, "Number of functions kept.").when(RANK_RULE, "fixed"),
                         "functions", 1, 10_000, OptionalLong.of(10)),
                 new Setting.Whole(new Common("largest-rank", "Largest rank", group, "Largest number of functions tried.")
-                        .when(RANK_RULE, "holdout"), "functions", 1, 10_000, OptionalLong.of(30)),
+                        .when(RANK_RULE, "holdout", "drop"), "functions", 1, 10_000, OptionalLong.of(30)),
                 new Setting.Number(new Common(RIDGE, "Ridge", group, "Added to the squared singular values, relative to"
                         + " the largest, before they are divided by: steadies an ill-conditioned fit at the price of a"
                         + " small bias; 0 adds nothing."), "", 0, false, 1, OptionalDouble.of(0)));
@@ -331,6 +334,7 @@ final class FitSettings {
         return switch (settings.text(RANK_RULE)) {
             case "fixed" -> new RankRule.Fixed(settings.whole("rank"));
             case "hard-threshold" -> new RankRule.HardThreshold();
+            case "drop" -> new RankRule.Drop(settings.whole("largest-rank"));
             case "holdout" -> new RankRule.Holdout(settings.whole("largest-rank"));
             default -> new RankRule.Energy(settings.number("energy"));
         };

@@ -1,14 +1,5 @@
 package org.modestead.nodes.render;
 
-import java.awt.Graphics2D;
-import java.awt.RenderingHints;
-import java.awt.image.BufferedImage;
-import java.io.ByteArrayOutputStream;
-import java.io.IOException;
-import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
-import javax.imageio.ImageIO;
-import org.knowm.xchart.ChartEncoder;
 import org.modestead.nodes.figure.Figure;
 
 /**
@@ -30,13 +21,7 @@ public final class FigureRenderer {
      * @throws IllegalArgumentException if a layer does not fit the axes
      */
     public static String svg(Figure figure) {
-        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-        try {
-            ChartEncoder.saveChart(picture(figure), bytes, "svg");
-        } catch (IOException e) {
-            throw new UncheckedIOException("a figure could not be drawn in memory", e);
-        }
-        return SvgText.tidy(bytes.toString(StandardCharsets.UTF_8), figure);
+        return Canvas.svg(picture(figure), new SvgText.Described(figure.id(), figure.title(), figure.caption()));
     }
 
     /**
@@ -48,24 +33,7 @@ public final class FigureRenderer {
      * @throws IllegalArgumentException if a layer does not fit the axes or the scale is not positive
      */
     public static byte[] png(Figure figure, double scale) {
-        if (!(scale > 0)) {
-            throw new IllegalArgumentException("scale " + scale + " must be positive");
-        }
-        Drawing drawing = drawing(figure);
-        BufferedImage image = new BufferedImage((int) Math.round(drawing.width() * scale),
-                (int) Math.round(drawing.height() * scale),
-                BufferedImage.TYPE_INT_RGB);
-        Graphics2D graphics = image.createGraphics();
-        graphics.setRenderingHint(RenderingHints.KEY_RENDERING, RenderingHints.VALUE_RENDER_QUALITY);
-        drawing.paint(graphics, scale);
-        graphics.dispose();
-        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-        try {
-            ImageIO.write(image, "png", bytes);
-        } catch (IOException e) {
-            throw new UncheckedIOException("a figure could not be drawn in memory", e);
-        }
-        return bytes.toByteArray();
+        return Canvas.png(picture(figure), scale);
     }
 
     /**

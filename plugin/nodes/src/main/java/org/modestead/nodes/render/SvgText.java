@@ -13,7 +13,6 @@ import javax.xml.stream.XMLInputFactory;
 import javax.xml.stream.XMLStreamConstants;
 import javax.xml.stream.XMLStreamException;
 import javax.xml.stream.XMLStreamReader;
-import org.modestead.nodes.figure.Figure;
 
 /**
  * Rewrites drawn SVG so that it can stand inside a page: no declarations, ids that start with the figure's id, a text
@@ -28,14 +27,23 @@ final class SvgText {
 
     private final StringBuilder out = new StringBuilder();
     private final Map<String, String> ids = new LinkedHashMap<>();
-    private final Figure figure;
+    private final Described figure;
     private final Polyline open = new Polyline();
 
-    private SvgText(Figure figure) {
+    private SvgText(Described figure) {
         this.figure = figure;
     }
 
-    static String tidy(String svg, Figure figure) {
+    /**
+     * What is said of a picture.
+     *
+     * @param id with which ids in it start
+     * @param title one line
+     * @param caption with the title the text alternative
+     */
+    record Described(String id, String title, String caption) {}
+
+    static String tidy(String svg, Described figure) {
         SvgText text = new SvgText(figure);
         try {
             text.rewrite(DOCTYPE.matcher(svg).replaceFirst(""));

@@ -3,11 +3,20 @@ package org.modestead.host.bench.look;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Objects;
+import java.util.Set;
 import java.util.function.Supplier;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.nodes.render.ColourMap;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.MemoryTable;
+import org.modestead.nodes.table.Table;
+import org.modestead.nodes.table.TableSchema;
 
 /**
  * A matrix to be shown as a map of colours. Large ones are thinned: of every block of entries the one of largest size is
@@ -105,6 +114,49 @@ public record HeatMap(String id, String title, String caption, Side rows, Side c
             }
         }
         return out;
+    }
+
+    /** Returns the matrix to be drawn into a file, thinned as {@link #json} is. */
+    public ColourMap picture() {
+        int everyRow = every(values.numRows);
+        int everyColumn = every(values.numCols);
+        double[][] shown = new double[count(values.numRows, everyRow)][count(values.numCols, everyColumn)];
+        for (int i = 0; i < shown.length; i++) {
+            for (int j = 0; j < shown[i].length; j++) {
+                shown[i][j] = largest(i * everyRow, everyRow, j * everyColumn, everyColumn);
+            }
+        }
+        double[] finite = Arrays.stream(values.data, 0, values.getNumElements()).filter(Double::isFinite).toArray();
+        return new ColourMap(id, title, caption + thinned(everyRow, everyColumn), side(rows, values.numRows, everyRow), side(columns, values.numCols, everyColumn),
+                Arrays.stream(finite).min().orElse(Double.NaN), Arrays.stream(finite).max().orElse(Double.NaN), diverging, shown);
+    }
+
+    private static ColourMap.Side side(Side side, int size, int every) {
+        return new ColourMap.Side(side.title(), IntStream.range(0, size).filter(i -> i % every == 0).mapToObj(i -> name(side, i)).toList());
+    }
+
+    private static String name(Side side, int at) {
+        return side.labels().isEmpty() ? Integer.toString(at + 1) : side.labels().get(at);
+    }
+
+    /** Returns every entry as a table: one row a row, its name first. */
+    public Table table() {
+        List<Column> heads = new ArrayList<>(List.of(Column.text(rows.title())));
+        Set<String> taken = new HashSet<>(Set.of(rows.title()));
+        for (int j = 0; j < values.numCols; j++) {
+            String name = name(columns, j);
+            heads.add(Column.number(taken.add(name) ? name : name + " (" + (j + 1) + ")"));
+        }
+        MemoryTable.Builder table = MemoryTable.builder(new TableSchema(heads), id);
+        for (int i = 0; i < values.numRows; i++) {
+            Object[] cells = new Object[heads.size()];
+            cells[0] = name(rows, i);
+            for (int j = 0; j < values.numCols; j++) {
+                cells[j + 1] = values.get(i, j);
+            }
+            table.row(cells);
+        }
+        return table.build();
     }
 
     private static String thinned(int everyRow, int everyColumn) {

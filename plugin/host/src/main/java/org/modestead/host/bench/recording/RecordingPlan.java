@@ -12,8 +12,8 @@ import org.modestead.host.workflow.Workflow;
 /**
  * The steps for a recording, ready to run: read it, prepare it, fit, extract modes, judge them, forecast, and a report of all.
  *
- * <p>States stack as many samples as the strongest oscillation takes, so that few channels show it too; the rank is the one that
- * predicts best; a quarter of the runs, or the end of each where there are few, is held out to judge by.
+ * <p>States stack as many samples as the strongest oscillation takes, so that few channels show it too; the rank is where the singular
+ * values drop clearly, so that no noise is fitted and slow modes are not split, or else the one that predicts best; a quarter of the runs, or the end of each where there are few, is held out to judge by.
  */
 public final class RecordingPlan {
 
@@ -146,7 +146,7 @@ public final class RecordingPlan {
     private Map<String, Object> fit() {
         Map<String, Object> settings = new LinkedHashMap<>();
         settings.put("estimator", "linear");
-        settings.put("rank-rule", "holdout");
+        settings.put("rank-rule", "drop");
         return settings;
     }
 }

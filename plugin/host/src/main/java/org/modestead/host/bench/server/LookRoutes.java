@@ -15,6 +15,7 @@ import java.util.OptionalInt;
 import org.modestead.engine.Progress;
 import org.modestead.host.bench.look.DocumentJson;
 import org.modestead.host.bench.look.FigureJson;
+import org.modestead.host.bench.look.FigureTable;
 import org.modestead.host.bench.look.HeatMap;
 import org.modestead.host.bench.look.Matrices;
 import org.modestead.host.bench.look.PortFigures;
@@ -27,6 +28,7 @@ import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.modelfile.PortFiles;
 import org.modestead.nodes.render.FigureRenderer;
+import org.modestead.nodes.render.MapRenderer;
 import org.modestead.nodes.report.HtmlReport;
 import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.Table;
@@ -63,20 +65,25 @@ final class LookRoutes implements AutoCloseable {
         return looks.look(context.pathParam("id"));
     }
 
-    private void figure(Context context, List<Figure> figures) {
-        String name = context.pathParam("figure");
-        boolean svg = name.endsWith(".svg");
-        boolean png = name.endsWith(".png");
-        String id = svg || png ? name.substring(0, name.length() - ".svg".length()) : name;
-        Figure figure = figures.stream().filter(found -> found.id().equals(id)).findFirst().orElseThrow(() -> missing("picture " + id));
-        if (svg) {
-            String head = "<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n";
-            taken(context, name).contentType("image/svg+xml").result(head + FigureRenderer.svg(figure));
-        } else if (png) {
-            taken(context, name).contentType("image/png").result(FigureRenderer.png(figure, scale(context)));
-        } else {
-            Answer.json(context, FigureJson.of(figure));
+    private void figure(Context context, List<Figure> figures) throws IOException {
+        PictureName name = PictureName.read(context.pathParam("figure"));
+        Figure figure = figures.stream().filter(found -> found.id().equals(name.id())).findFirst().orElseThrow(() -> missing("picture " + name.id()));
+        switch (name.form()) {
+            case SVG -> svg(context, name, FigureRenderer.svg(figure));
+            case PNG -> taken(context, name.whole()).contentType("image/png").result(FigureRenderer.png(figure, scale(context)));
+            case CSV -> csv(context, name, FigureTable.of(figure));
+            case DATA -> Answer.json(context, FigureJson.of(figure));
         }
+    }
+
+    private static void svg(Context context, PictureName name, String svg) {
+        taken(context, name.whole()).contentType("image/svg+xml").result("<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n" + svg);
+    }
+
+    private static void csv(Context context, PictureName name, Table table) throws IOException {
+        Answer.file(context, context.pathParam("id") + "-" + name.whole());
+        context.contentType("text/csv; charset=utf-8");
+        CsvWriter.write(table, context.outputStream(), Progress.NONE);
     }
 
     private static Context taken(Context context, String name) {
@@ -112,9 +119,7 @@ final class LookRoutes implements AutoCloseable {
             throw missing("table " + port);
         }
         if (csv) {
-            Answer.file(context, context.pathParam("id") + "-" + name);
-            context.contentType("text/csv; charset=utf-8");
-            CsvWriter.write(table, context.outputStream(), Progress.NONE);
+            csv(context, PictureName.read(name), table);
             return;
         }
         String sort = context.queryParam("sort");
@@ -159,11 +164,16 @@ final class LookRoutes implements AutoCloseable {
         return JSON.textNode(CsvWriter.written(cell));
     }
 
-    private void matrix(Context context) {
-        String id = context.pathParam("matrix");
-        HeatMap.Offer matrix = Matrices.of(value(looked(context), context.pathParam("port"))).stream().filter(found -> found.id().equals(id)).findFirst()
-                .orElseThrow(() -> missing("matrix " + id));
-        Answer.json(context, matrix.map().get().json());
+    private void matrix(Context context) throws IOException {
+        PictureName name = PictureName.read(context.pathParam("matrix"));
+        HeatMap matrix = Matrices.of(value(looked(context), context.pathParam("port"))).stream().filter(found -> found.id().equals(name.id())).findFirst()
+                .orElseThrow(() -> missing("matrix " + name.id())).map().get();
+        switch (name.form()) {
+            case SVG -> svg(context, name, MapRenderer.svg(matrix.picture()));
+            case PNG -> taken(context, name.whole()).contentType("image/png").result(MapRenderer.png(matrix.picture(), scale(context)));
+            case CSV -> csv(context, name, matrix.table());
+            case DATA -> Answer.json(context, matrix.json());
+        }
     }
 
     private void port(Context context) throws IOException {

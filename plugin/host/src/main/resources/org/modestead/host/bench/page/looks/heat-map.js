@@ -21,7 +21,7 @@ export function HeatMap({head, address, resultId, selection, select}) {
   const keys = [...(matrix?.rowSelections ?? []), ...(matrix?.columnSelections ?? [])];
   const chosen = keys.some((key) => isSelected(key, selection)) ? selection : '';
   return html`<${Frame} frame=${frame} id=${head.id} kind="MATRIX" title=${head.title} fault=${fault} selection=${selection} select=${select}
-      caption=${`${caption} ${count(head.rows)} rows, ${count(head.columns)} columns.`.trim()} files="" chosen=${chosen && words(chosen)}
+      caption=${`${caption} ${count(head.rows)} rows, ${count(head.columns)} columns.`.trim()} files=${address} chosen=${chosen && words(chosen)}
       numbers=${matrix ? () => numbersOfMatrix(matrix) : null}>
     ${(tools) => (matrix ? html`<${Drawn} matrix=${matrix} selection=${chosen} select=${select} ...${tools} />`
       : html`<div class="lk-plot lk-empty"></div>`)}

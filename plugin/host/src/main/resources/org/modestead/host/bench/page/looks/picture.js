@@ -15,7 +15,7 @@ import {DataTable} from './table.js';
  *
  * @param {object} given
  * @param {{id: string, kind: string, title: string, caption: string}} given.head what the list of pictures says
- * @param {string} given.address of the figure's data; `.svg` and `.png` appended give files
+ * @param {string} given.address of the figure's data; `.svg`, `.png` and `.csv` appended give files
  * @param {any} [given.data] the figure itself, where it is here already
  * @param {string} given.resultId
  * @param {string} given.selection
@@ -82,7 +82,8 @@ export function Frame({frame, id, kind, title, caption, files, fault, chosen, nu
         ${button('larger', large ? 'Smaller' : 'Larger', large ? 'smaller' : 'larger', () => setLarge(!large), String(large))}
         ${numbers && button('numbers', 'Show the numbers', 'numbers', () => setOpen(!open), String(open))}
         ${files && html`<a class="lk-button" href=${`${files}.svg?download=1`} download=${`${id}.svg`} data-action="svg" aria-label=${`${title} as an SVG file`}>SVG</a>
-          <a class="lk-button" href=${`${files}.png?scale=2&download=1`} download=${`${id}.png`} data-action="png" aria-label=${`${title} as a PNG file`}>PNG</a>`}
+          <a class="lk-button" href=${`${files}.png?scale=2&download=1`} download=${`${id}.png`} data-action="png" aria-label=${`${title} as a PNG file`}>PNG</a>
+          <a class="lk-button" href=${`${files}.csv?download=1`} download=${`${id}.csv`} data-action="numbers-csv" aria-label=${`CSV: the numbers of ${title} as a file`}>CSV</a>`}
       </div>
     </div>
     ${fault ? html`<p class="lk-fault" role="alert">${fault}</p>` : children({handle, captionId, title, say: setTold})}
