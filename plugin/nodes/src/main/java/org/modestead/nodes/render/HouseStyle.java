@@ -18,6 +18,7 @@ final class HouseStyle {
     private static final int TICK_DIGITS = 7;
     private static final int SHORTEST_PLAIN = 5;
     private static final int LONGEST_PLAIN = 5;
+    private static final String RAISED = "\u2070\u00b9\u00b2\u00b3\u2074\u2075\u2076\u2077\u2078\u2079";
     private static final Font BOLD = new Font(Font.SANS_SERIF, Font.BOLD, 14);
 
     private HouseStyle() {}
@@ -54,7 +55,13 @@ final class HouseStyle {
                 .stripTrailingZeros();
         int exponent = rounded.precision() - rounded.scale() - 1;
         boolean plain = exponent >= -SHORTEST_PLAIN && exponent <= LONGEST_PLAIN;
-        return (plain ? rounded.toPlainString() : rounded.movePointLeft(exponent).toPlainString() + "e" + exponent)
-                .replace('-', '\u2212');
+        String text = plain ? rounded.toPlainString() : rounded.movePointLeft(exponent).toPlainString() + " \u00d7 10" + raised(exponent);
+        return text.replace('-', '\u2212');
+    }
+
+    private static String raised(int exponent) {
+        StringBuilder out = new StringBuilder(exponent < 0 ? "\u207b" : "");
+        Integer.toString(Math.abs(exponent)).chars().forEach(digit -> out.append(RAISED.charAt(digit - '0')));
+        return out.toString();
     }
 }

@@ -25,6 +25,7 @@ final class MapPicture implements IChart {
     private static final int SCALE_HEIGHT = 52;
     private static final int SCALE_WIDTH = 220;
     private static final int LINE = 16;
+    private static final int GAP = 10;
     private static final int LONGEST = 22;
 
     private final ColourMap map;
@@ -67,7 +68,7 @@ final class MapPicture implements IChart {
 
     @Override
     public int getHeight() {
-        return (int) Math.ceil(TITLE + down() + below.height() + SCALE_HEIGHT);
+        return (int) Math.ceil(TITLE + down() + GAP + below.height() + SCALE_HEIGHT);
     }
 
     @Override
@@ -84,8 +85,8 @@ final class MapPicture implements IChart {
         write(graphics, map.title(), BOLD, ROOM, TITLE - 18.0);
         cells(graphics);
         rows(graphics);
-        below.paint(graphics, width, (int) Math.round(TITLE + down()));
-        scale(graphics, TITLE + down() + below.height());
+        below.paint(graphics, width, (int) Math.round(TITLE + down()) + GAP);
+        scale(graphics, TITLE + down() + GAP + below.height());
     }
 
     private static void write(Graphics2D graphics, String words, Font font, double x, double y) {

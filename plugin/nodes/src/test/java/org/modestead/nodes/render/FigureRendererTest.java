@@ -157,9 +157,9 @@ class FigureRendererTest {
         assertEquals("0.3", HouseStyle.tick(0.1 + 0.2));
         assertEquals("\u22120.05", HouseStyle.tick(-0.05));
         assertEquals("100000", HouseStyle.tick(1e5));
-        assertEquals("1e6", HouseStyle.tick(1e6));
+        assertEquals("1 \u00d7 10\u2076", HouseStyle.tick(1e6));
         assertEquals("0.0001", HouseStyle.tick(1e-4));
-        assertEquals("1.5e\u22127", HouseStyle.tick(1.5e-7));
+        assertEquals("1.5 \u00d7 10\u207b\u2077", HouseStyle.tick(1.5e-7));
         assertEquals("0", HouseStyle.tick(-0.0));
     }
 

@@ -19,7 +19,7 @@ public final class RecordingPlan {
 
     private static final int ENOUGH_RUNS = 4;
     private static final int MANY_RUNS = 6;
-    private static final int LARGEST_STATE = 320;
+    private static final int LARGEST_STATE = 160;
     private static final int LEAST_DEPTH = 8;
     private static final int PART_OF_RUN = 5;
     private static final int LONG_PERIOD = 60;
@@ -143,9 +143,16 @@ public final class RecordingPlan {
         }
     }
 
+    /** Functions are the state's components and, where no input brings it along, the constant: the level at which motion rests is a mode. */
     private Map<String, Object> fit() {
         Map<String, Object> settings = new LinkedHashMap<>();
-        settings.put("estimator", "linear");
+        if (guess.roles().inputs().isEmpty()) {
+            settings.put("estimator", "dictionary");
+            settings.put("dictionary", "monomials");
+            settings.put("degree", 1);
+        } else {
+            settings.put("estimator", "linear");
+        }
         settings.put("rank-rule", "drop");
         return settings;
     }

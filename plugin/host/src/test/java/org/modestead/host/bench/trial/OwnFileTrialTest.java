@@ -1,10 +1,14 @@
 package org.modestead.host.bench.trial;
 
+import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.Random;
@@ -43,6 +47,31 @@ class OwnFileTrialTest {
             browser.picture("own-file-verdict");
             System.out.println("trials: an own recording came to its verdict with " + interactions + " interactions");
             assertTrue(interactions <= MOST_INTERACTIONS, interactions + " interactions");
+        }
+    }
+
+    /** The pump-house recordings as somebody's own file: the verdict names the modes that they were made with (data/truth.csv), and no other. */
+    @Test
+    void thePumpHouseAsAnOwnFileComesToATruthfulVerdict() {
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            Browser browser = trial.browser();
+            browser.see("[data-action=choose-recording]");
+            browser.type("#recording-file", Path.of("..", "..", "test-workflows", "pump-house", "data", "recordings.csv").toAbsolutePath().normalize().toString());
+            press(trial, "[data-action=lay-out-run]");
+            browser.see("[data-look] [data-verdict=stands]");
+            browser.reads("[data-verdict]", "0.620 Hz", "2.90 Hz");
+            List<String> counted = new ArrayList<>();
+            for (JsonNode mode : trial.json("/api/steps/check/look").path("verdict").path("modes")) {
+                if (mode.path("counts").asBoolean()) {
+                    counted.add(mode.path("grade").asText() + ": " + mode.path("figures").asText());
+                } else {
+                    assertTrue(List.of("undecided", "stands", "settles").contains(mode.path("grade").asText()), "weak but there, not absent: " + mode);
+                }
+            }
+            assertEquals(3, counted.size(), counted.toString());
+            assertTrue(counted.stream().allMatch(mode -> mode.startsWith("stands")), counted.toString());
+            assertTrue(counted.stream().anyMatch(mode -> mode.matches(".*\\b25\\.[0-9]* s.*|.*\\b25 s.*")), "the draining halves in 25 s: " + counted);
+            browser.picture("own-pump-house-verdict");
         }
     }
 

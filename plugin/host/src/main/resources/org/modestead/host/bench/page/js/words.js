@@ -21,10 +21,29 @@ export function number(value, digits = 4) {
   }
   const size = Math.abs(value);
   const rounded = Number(size.toPrecision(digits));
-  const text = rounded >= 1e6 || rounded < 1e-4
-    ? rounded.toExponential().replace('e+', 'e').replace('e-', 'e' + MINUS)
-    : String(rounded);
+  const [mantissa, exponent] = rounded.toExponential().split('e');
+  const text = rounded >= 1e6 || rounded < 1e-4 ? power(mantissa, Number(exponent)) : String(rounded);
   return (value < 0 ? MINUS : '') + text;
+}
+
+const RAISED = '\u2070\u00b9\u00b2\u00b3\u2074\u2075\u2076\u2077\u2078\u2079';
+
+/**
+ * A number by a power of ten, the one way in which the page writes it: 2 × 10⁻⁵.
+ *
+ * @param {string} mantissa as it is to be shown
+ * @param {number} exponent
+ */
+export function power(mantissa, exponent) {
+  const raised = [...String(exponent)].map((digit) => (digit === '-' ? '\u207b' : RAISED[Number(digit)])).join('');
+  return `${mantissa} \u00d7 10${raised}`;
+}
+
+const PROGRAM = /(?<![\w.])([-\u2212]?)(\d+(?:\.\d+)?)[eE]([+-]?\d+)(?![\w.]*\w)/g;
+
+/** A sentence with its numbers as the page writes them: 1.04e-05 becomes 1.04 × 10⁻⁵. @param {string} sentence */
+export function prose(sentence) {
+  return sentence.replace(PROGRAM, (whole, sign, mantissa, exponent) => (sign ? MINUS : '') + power(mantissa, Number(exponent)));
 }
 
 /** A whole number with narrow blanks between thousands: 12 345. @param {number} value */
@@ -52,4 +71,11 @@ export function bytes(bytes) {
     unit += 1;
   }
   return `${number(size, 3)}\u00a0${units[unit]}`;
+}
+
+/** A path in two parts, of which the first may be shortened: the last two names are what tells one from another. @param {string} path */
+export function pathParts(path) {
+  const separator = path.includes('\\') ? '\\' : '/';
+  const cut = path.lastIndexOf(separator, path.lastIndexOf(separator) - 1);
+  return cut > 0 ? {start: path.slice(0, cut), end: path.slice(cut)} : {start: '', end: path};
 }

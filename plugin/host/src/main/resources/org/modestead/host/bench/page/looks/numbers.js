@@ -3,8 +3,9 @@
  * plain decimals from 0.001 to below 100000, powers of ten outside.
  */
 
+import {power} from '../js/words.js';
+
 const MINUS = '\u2212';
-const RAISED = '\u2070\u00b9\u00b2\u00b3\u2074\u2075\u2076\u2077\u2078\u2079';
 const UNKNOWN = '\u2013';
 
 /**
@@ -26,13 +27,9 @@ function significant(value, digits) {
   const [mantissa, power] = Math.abs(value).toExponential(digits - 1).split('e');
   const exponent = Number(power);
   if (exponent < -3 || exponent > 4) {
-    return `${sign}${mantissa} \u00d7 10${raised(exponent)}`;
+    return sign + power(mantissa, exponent);
   }
   return sign + Number(`${mantissa}e${exponent}`).toFixed(Math.max(0, digits - 1 - exponent));
-}
-
-function raised(exponent) {
-  return [...String(exponent)].map((digit) => (digit === '-' ? '\u207b' : RAISED[Number(digit)])).join('');
 }
 
 /** Five digits without zeros at the end, for tables. */
@@ -56,7 +53,7 @@ export function tick(value) {
   }
   const [mantissa, power] = Math.abs(value).toExponential(6).replace(/\.?0+e/, 'e').split('e');
   const exponent = Number(power);
-  const text = exponent >= -5 && exponent <= 5 ? String(Number(Math.abs(value).toPrecision(7))) : `${mantissa}e${exponent}`;
+  const text = exponent >= -5 && exponent <= 5 ? String(Number(Math.abs(value).toPrecision(7))) : power(mantissa, exponent);
   return (value < 0 ? MINUS : '') + text.replace('-', MINUS);
 }
 

@@ -1,9 +1,24 @@
 import {useEffect, useState} from '../lib.js';
 import {api} from '../js/api.js';
+import {prose} from '../js/words.js';
 
 /** Answers that were read, by address and result: a result never changes, so neither do they. */
 const kept = new Map();
 const MOST = 400;
+
+/** Where an answer holds words for people. */
+const WORDS = new Set(['sentence', 'sentences', 'caption', 'text', 'items', 'value', 'advice', 'meaning', 'headline', 'figures', 'note', 'whole', 'rows']);
+
+/** The same answer with numbers in sentences as the page writes them. */
+function told(value, key) {
+  if (typeof value === 'string') {
+    return WORDS.has(key) ? prose(value) : value;
+  }
+  if (Array.isArray(value)) {
+    return typeof value[0] === 'number' ? value : value.map((entry) => told(entry, key));
+  }
+  return value && typeof value === 'object' ? Object.fromEntries(Object.entries(value).map(([name, entry]) => [name, told(entry, name)])) : value;
+}
 
 /** Reads JSON once a result. */
 function readOnce(address, resultId) {
@@ -12,7 +27,7 @@ function readOnce(address, resultId) {
     if (kept.size >= MOST) {
       kept.delete(kept.keys().next().value);
     }
-    const answer = api.get(address);
+    const answer = api.get(address).then((value) => told(value, ''));
     kept.set(key, answer);
     answer.catch(() => kept.delete(key));
   }

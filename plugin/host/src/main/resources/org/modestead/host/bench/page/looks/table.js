@@ -1,5 +1,5 @@
 import {html, useEffect, useId, useLayoutEffect, useMemo, useRef, useState} from '../lib.js';
-import {count, counted} from '../js/words.js';
+import {count, counted, prose} from '../js/words.js';
 import {cell, hundredths, labelled} from './numbers.js';
 import {isSelected, words} from './keys.js';
 import {PAGE} from './sources.js';
@@ -235,7 +235,7 @@ function shown(value, column) {
   if (typeof value === 'number' && column.cell === 'DOUBLE') {
     return column.kind === 'share' ? hundredths(value) : cell(value);
   }
-  return String(value);
+  return column.cell === 'TEXT' && typeof value === 'string' && value.includes(' ') ? prose(value) : String(value);
 }
 
 /** Dates and words have no unit. */

@@ -3,6 +3,7 @@ import {html, useEffect, useState} from '../../lib.js';
 import {api} from '../api.js';
 import {Glyph} from '../glyphs.js';
 import {bytes} from '../words.js';
+import {Path} from './path.js';
 
 /**
  * @param {object} props
@@ -35,12 +36,12 @@ export function FileBox({extensions, label, folder: start = '', pick, moved}) {
   const fits = (entry) => entry.folder || extensions.length === 0 || extensions.some((end) => entry.name.toLowerCase().endsWith('.' + end));
   const entries = listing.folder ? listing.entries.filter(fits) : listing.roots.map((root) => ({name: root.title, path: root.path, folder: true}));
   return html`<div class="file-box" role="group" aria-label=${label}>
-    <p class="file-where small"><span class="clip" title=${listing.folder ?? ''}>${listing.folder ?? 'Opened folders'}</span>
+    <p class="file-where small"><span class="clip">${listing.folder ? html`<${Path} path=${listing.folder} />` : 'Opened folders'}</span>
       ${listing.folder && html`<button type="button" class="link-button" data-action="folder-up" onclick=${() => setFolder(listing.parent ?? '')}>
         ${listing.parent ? 'Up' : 'Opened folders'}</button>`}</p>
     <ul class="file-list">${entries.map((entry) => html`<li key=${entry.path}><button type="button" class="file-item" data-file=${entry.name}
       onclick=${() => (entry.folder ? setFolder(entry.path) : pick(entry))}><${Glyph} name=${entry.folder ? 'folder' : 'file'} />
-      <span class="clip grow">${entry.name}</span>${!entry.folder && html`<span class="quiet small">${bytes(entry.bytes)}</span>`}</button></li>`)}</ul>
+      <span class="clip grow">${listing.folder ? entry.name : html`<${Path} path=${entry.name} />`}</span>${!entry.folder && html`<span class="quiet small">${bytes(entry.bytes)}</span>`}</button></li>`)}</ul>
     ${entries.length === 0 && html`<p
       class="quiet small">Nothing here${extensions.length ? ` that ends in ${extensions.map((e) => '.' + e).join(', ')}` : ''}.</p>`}
     ${listing.cut && html`<p class="quiet small">Only the first entries are shown.</p>`}

@@ -10,6 +10,7 @@ import {stateKind} from './card.js';
 import {Menu} from './menu.js';
 import {Glyph} from '../glyphs.js';
 import {counted} from '../words.js';
+import {Path} from './path.js';
 
 /** Notes are handed on when typing pauses so long, in milliseconds. */
 const PAUSE = 1500;
@@ -74,7 +75,7 @@ function StepProblems({step}) {
 function WorkflowLook({desk}) {
   const write = (notes) => edit([{do: 'notes', notes}]);
   return html`<div class="look-head"><div class="grow"><h2 class="look-title" data-first tabindex="-1">${desk.name}</h2>
-      <p class="quiet small clip" title=${desk.file ?? ''}>${desk.file ?? 'Not in a file yet; kept on this machine all the same.'}</p></div></div>
+      <p class="quiet small clip">${desk.file ? html`<${Path} path=${desk.file} />` : 'Not in a file yet; kept on this machine all the same.'}</p></div></div>
     <div class="look-body">
       <p class="quiet">${desk.steps.length ? 'Choose a step to see its settings and results here.' : 'The bench is empty. Begin with a step that brings a table in, from the top of the shelf.'}</p>
       <label class="notes-label" for="workflow-notes">Notes</label>

@@ -8,6 +8,7 @@ import {DropZone} from './drop-zone.js';
 import {TABLES} from './file-dialogs.js';
 import {Recording} from './recording.js';
 import {ViewMenu} from './view-menu.js';
+import {Path} from './path.js';
 
 export function Start() {
   const {guess} = getState();
@@ -71,8 +72,7 @@ export function Start() {
         <ul class="start-list">${start.recent.map((desk) => html`<li key=${desk.desk} class="start-row"><button type="button" class="start-item"
           data-resume=${desk.desk}
           onclick=${() => begin({resume: desk.desk}, 'Opening it.')}><strong>${desk.name}</strong>
-          <span class="quiet small">${desk.words}; ${counted(desk.steps, 'step')}${desk.file ? html`<br /><span
-            class="clip">${desk.file}</span>` : ''}</span></button>
+          <span class="quiet small">${desk.words}; ${counted(desk.steps, 'step')}${desk.file ? html`<br /><${Path} path=${desk.file} />` : ''}</span></button>
           <button type="button" class="button plain" data-forget=${desk.desk} aria-label=${`Forget ${desk.name}`}
             onclick=${() => forget(desk)}>Forget</button></li>`)}</ul></section>`}
       <section class="start-way" aria-labelledby="way-open"><h2 id="way-open">Open a workflow, or begin with none</h2>
