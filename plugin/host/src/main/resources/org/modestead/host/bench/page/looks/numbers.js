@@ -24,8 +24,8 @@ function significant(value, digits) {
     return '0';
   }
   const sign = value < 0 ? MINUS : '';
-  const [mantissa, power] = Math.abs(value).toExponential(digits - 1).split('e');
-  const exponent = Number(power);
+  const [mantissa, exponentText] = Math.abs(value).toExponential(digits - 1).split('e');
+  const exponent = Number(exponentText);
   if (exponent < -3 || exponent > 4) {
     return sign + power(mantissa, exponent);
   }
@@ -51,8 +51,8 @@ export function tick(value) {
   if (value === 0 || !Number.isFinite(value)) {
     return '0';
   }
-  const [mantissa, power] = Math.abs(value).toExponential(6).replace(/\.?0+e/, 'e').split('e');
-  const exponent = Number(power);
+  const [mantissa, exponentText] = Math.abs(value).toExponential(6).replace(/\.?0+e/, 'e').split('e');
+  const exponent = Number(exponentText);
   const text = exponent >= -5 && exponent <= 5 ? String(Number(Math.abs(value).toPrecision(7))) : power(mantissa, exponent);
   return (value < 0 ? MINUS : '') + text.replace('-', MINUS);
 }
