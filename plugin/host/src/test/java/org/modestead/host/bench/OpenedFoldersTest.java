@@ -46,6 +46,20 @@ class OpenedFoldersTest {
     }
 
     @Test
+    void aFileThatBecameALinkAfterTheRunIsNotReadWhenTheResultIsLookedAt() throws IOException, InterruptedException {
+        bench.post("/api/run", "{}");
+        bench.awaitRest();
+        assertEquals(200, bench.get("/api/steps/a/tables/table").status());
+        Files.delete(work.resolve("inside.csv"));
+        Files.createSymbolicLink(work.resolve("inside.csv"), outside);
+        for (String path : List.of("/api/steps/a/look", "/api/steps/a/tables/table", "/api/steps/a/tables/table.csv")) {
+            TestBench.Reply refused = bench.get(path);
+            assertEquals(409, refused.status(), path);
+            assertTrue(refused.sentence().startsWith("step a, setting path: inside.csv: it lies outside the opened folders; "), refused.body());
+        }
+    }
+
+    @Test
     void aStepThatReadsOutsideIsNotSetUpAndNothingIsToldOfTheFile() throws IOException, InterruptedException {
         for (String name : List.of(outside.toString(), "../outside/secret.csv", "link.csv", "door/secret.csv", "../outside/nothing.csv", "door/../door/secret.csv")) {
             JsonNode desk = bench.post("/api/edit", "{\"edits\": [{\"do\": \"set\", \"step\": \"a\", \"typed\": {\"path\": \"" + name + "\"}}]}").json();

@@ -17,6 +17,8 @@ import java.util.function.Function;
 import org.modestead.engine.Fault;
 import org.modestead.engine.Progress;
 import org.modestead.host.bench.desk.DeskFault;
+import org.modestead.host.bench.folders.FileSettings;
+import org.modestead.host.bench.folders.OpenedFolders;
 import org.modestead.host.bench.run.KeptResults;
 import org.modestead.host.run.RunDocument;
 import org.modestead.host.run.RunResult;
@@ -67,7 +69,30 @@ public final class Looks {
         if (kept.isEmpty() && fresh && results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
             kept = Optional.of(madeAnew(shown.known().inspection().survey().planned().get(id), result));
         }
-        return new Looked(result, shown.step(), shown.node(), kept.orElseThrow(() -> gone(id)), !fresh);
+        NodeResult found = kept.orElseThrow(() -> gone(id));
+        if (results.facts(result).filter(KeptResults.Facts::anew).isPresent()) {
+            filesStayInside(id);
+        }
+        return new Looked(result, shown.step(), shown.node(), found, !fresh);
+    }
+
+    /** Tables that are read late are read now: what has become a link out of the opened folders since the check is refused. */
+    private void filesStayInside(String id) {
+        Workflow workflow = workbench.workflow();
+        OpenedFolders folders = workbench.folders();
+        Map<String, PlannedStep> planned = workbench.found().inspection().survey().planned();
+        Deque<String> waiting = new ArrayDeque<>(List.of(id));
+        Set<String> seen = new HashSet<>(waiting);
+        while (!waiting.isEmpty()) {
+            String step = waiting.remove();
+            PlannedStep plan = planned.get(step);
+            if (plan != null) {
+                FileSettings.problems(workbench.step(step), workflow.baseFolder(), plan.declaration(), folders).stream().findFirst().ifPresent(problem -> {
+                    throw new DeskFault("step " + step + ", setting " + problem.key(), problem.seen(), problem.wanted());
+                });
+                plan.inputs().values().stream().map(Link.End::step).filter(seen::add).forEach(waiting::add);
+            }
+        }
     }
 
     private DeskFault gone(String id) {
