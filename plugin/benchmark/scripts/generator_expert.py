@@ -25,14 +25,14 @@ target = np.tensordot(nodes.reshape(len(train), length, -1), weight, (1, 0))
 w, matrix, s, u = compressed(now, after, 180)
 observable = (u / s).T @ target
 unseen = features(x[judge[0][0]:]) @ w
-rungs = []
-for rank in sorted({2, 60, 180} | {round(2 + k * 178 / 13) for k in range(14)}):
+rungs, most = [], len(s)
+for rank in sorted({min(rank, most) for rank in {2, 60, 180} | {round(2 + k * 178 / 13) for k in range(14)}}):
     lam, v = np.linalg.eig(matrix[:rank, :rank])
     joint = weights(v, observable[:rank])
     functions = (unseen[:, :rank] @ v).reshape(len(judge), length, rank)
     tau = t[1] - t[0]
     missed = np.linalg.norm(functions[:, 1:] - functions[:, :-1] * np.exp(lam * tau), axis=(0, 1)) / np.linalg.norm(functions[:, 1:], axis=(0, 1))
     rungs.append((rank, lam))
-    if rank == 60:
+    if rank == min(60, most):
         write(lam, residual=missed.tolist(), weight=np.linalg.norm(joint, axis=1).tolist())
 settle(rungs)

@@ -16,13 +16,14 @@ for i, (a, b) in enumerate(train):
         ends = exponential(x[[b - 1, a]], x[c:d]) @ weight[j]
         action[i, j] = ends[0] - ends[1]
 values, vectors = np.linalg.eigh(gram)
-s, q = np.sqrt(values[::-1][:180]), vectors[:, ::-1][:, :180]
+top = min(180, int((values > 1e-13 * values[-1]).sum()))
+s, q = np.sqrt(values[::-1][:top]), vectors[:, ::-1][:, :top]
 q = q / s
 observable = np.array([weight[i] @ x[a:b] for i, (a, b) in enumerate(train)])
 unseen = np.concatenate([np.column_stack([exponential(x[a:b], x[c:d]) @ weight[j] for j, (c, d) in enumerate(train)]) for a, b in judge])
 length = judge[0][1] - judge[0][0]
-rungs, residuals = [], []
-for rank in sorted({2, 60, 180} | {round(2 + k * 178 / 13) for k in range(14)}):
+rungs, residuals, most = [], [], len(s)
+for rank in sorted({min(rank, most) for rank in {2, 60, 180} | {round(2 + k * 178 / 13) for k in range(14)}}):
     lam, v = np.linalg.eig(q[:, :rank].T @ action @ q[:, :rank])
     joint = np.linalg.lstsq(v, (q[:, :rank].T @ observable).astype(complex), rcond=None)[0]
     functions = (unseen @ q[:, :rank] @ v).reshape(len(judge), length, rank)
@@ -30,6 +31,6 @@ for rank in sorted({2, 60, 180} | {round(2 + k * 178 / 13) for k in range(14)}):
     missed = np.linalg.norm(functions[:, 1:] - functions[:, :-1] * np.exp(lam * tau), axis=(0, 1)) / np.linalg.norm(functions[:, 1:], axis=(0, 1))
     rungs.append((rank, lam))
     residuals.append(missed.tolist())
-    if rank == 60:
+    if rank == min(60, most):
         write(lam, residual=missed.tolist(), weight=np.linalg.norm(joint, axis=1).tolist())
 settle(rungs)

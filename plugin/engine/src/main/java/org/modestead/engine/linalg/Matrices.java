@@ -44,6 +44,7 @@ public final class Matrices {
 
     /** Returns Aᵀ A, exactly symmetric. */
     public static DMatrixRMaj gram(DMatrixRMaj a) {
+        Cancelled.ifInterrupted();
         return LinearAlgebra.installed().gram(a);
     }
 

@@ -2,7 +2,9 @@ package org.modestead.engine.spread;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.Random;
+import java.util.concurrent.atomic.AtomicInteger;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.Progress;
@@ -36,14 +38,27 @@ record Replicates(Frame frame, Resampling resampling, double stretch, List<Refit
         }
         Resampling resampling = Resampling.of(runs, operator.snapshots().delay().reach() + 1);
         double share = resampling.wholeRuns() ? 1 : KEPT;
-        Random random = new Random(plan.seed());
-        List<Refit> refits = new ArrayList<>();
-        for (int b = 0; b < plan.replicates(); b++) {
+        List<double[]> draws = draws(resampling, plan);
+        AtomicInteger done = new AtomicInteger();
+        List<Refit> refits = draws.parallelStream().map(times -> {
             progress.checkCancelled();
-            progress.report((double) b / plan.replicates(), "replicate " + (b + 1));
-            frame.refit(Moments.sum(resampling.cells(), kept(resampling.draw(random), share))).ifPresent(refits::add);
+            Optional<Refit> refit = frame.refit(Moments.sum(resampling.cells(), kept(times, share)));
+            synchronized (done) { // told in order
+                progress.report((double) done.incrementAndGet() / plan.replicates(), "replicate " + done.get());
+            }
+            return refit;
+        }).flatMap(Optional::stream).toList();
+        return new Replicates(frame, resampling, 1 / share, refits);
+    }
+
+    /** All are drawn from one generator before any is fitted, so that the fits may run beside each other. */
+    private static List<double[]> draws(Resampling resampling, SpreadPlan plan) {
+        Random random = new Random(plan.seed());
+        List<double[]> draws = new ArrayList<>();
+        for (int b = 0; b < plan.replicates(); b++) {
+            draws.add(resampling.draw(random));
         }
-        return new Replicates(frame, resampling, 1 / share, List.copyOf(refits));
+        return draws;
     }
 
     private static double[] kept(double[] times, double share) {

@@ -1,8 +1,6 @@
 package org.modestead.nodes.render;
 
 import java.io.StringReader;
-import java.math.BigDecimal;
-import java.math.RoundingMode;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -23,7 +21,6 @@ final class SvgText {
     private static final Pattern DOCTYPE = Pattern.compile("<!DOCTYPE[^>]*>");
     private static final Pattern DECIMAL = Pattern.compile("-?\\d+\\.\\d+(?:[eE][-+]?\\d+)?");
     private static final Pattern REFERENCE = Pattern.compile("url\\(#([^)]*)\\)");
-    private static final int PLACES = 2;
 
     private final StringBuilder out = new StringBuilder();
     private final Map<String, String> ids = new LinkedHashMap<>();
@@ -138,10 +135,7 @@ final class SvgText {
 
     private static String rounded(String text) {
         Matcher matcher = DECIMAL.matcher(text);
-        return matcher.replaceAll(match -> {
-            BigDecimal number = new BigDecimal(match.group()).setScale(PLACES, RoundingMode.HALF_EVEN);
-            return number.signum() == 0 ? "0" : number.stripTrailingZeros().toPlainString();
-        });
+        return matcher.replaceAll(match -> Hundredths.of(match.group()));
     }
 
     private static Map<String, String> attributes(XMLStreamReader reader) {

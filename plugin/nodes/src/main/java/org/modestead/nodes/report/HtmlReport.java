@@ -1,5 +1,6 @@
 package org.modestead.nodes.report;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import org.modestead.nodes.document.ReportDocument;
@@ -24,19 +25,33 @@ import org.modestead.nodes.render.FigureRenderer;
  */
 public final class HtmlReport {
     private final StringBuilder out = new StringBuilder();
+    private final List<String> drawn;
     private int figures;
     private int tables;
 
-    private HtmlReport() {}
+    private HtmlReport(List<String> drawn) {
+        this.drawn = drawn;
+    }
 
     /**
      * @param document to write
      * @return a whole page, UTF-8 when stored
      */
     public static String write(ReportDocument document) {
-        HtmlReport report = new HtmlReport();
+        HtmlReport report = new HtmlReport(drawn(document));
         report.page(document);
         return report.out.toString();
+    }
+
+    /** Every figure in the order of the page. Drawing takes most of the time, and the figures know nothing of each other: all cores draw. */
+    private static List<String> drawn(ReportDocument document) {
+        List<Figure> figures = new ArrayList<>();
+        document.sections().forEach(section -> section.blocks().forEach(block -> {
+            if (block instanceof Picture picture) {
+                figures.add(picture.figure().named("figure-" + (figures.size() + 1)));
+            }
+        }));
+        return figures.parallelStream().map(FigureRenderer::svg).toList();
     }
 
     private void page(ReportDocument document) {
@@ -172,9 +187,8 @@ public final class HtmlReport {
 
     private void picture(Figure figure) {
         figures++;
-        Figure numbered = figure.named("figure-" + figures);
         out.append("<figure class=\"").append(width(figure)).append("\">\n")
-                .append(FigureRenderer.svg(numbered)).append("\n<figcaption>").append(escaped("Figure " + figures + "."
+                .append(drawn.get(figures - 1)).append("\n<figcaption>").append(escaped("Figure " + figures + "."
                 + " " + figure.caption()))
                 .append("</figcaption>\n</figure>\n");
     }
