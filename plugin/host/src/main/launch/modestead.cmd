@@ -1,0 +1,23 @@
+@echo off
+rem Starts Modestead with the classes of an earlier run, see the script modestead beside this one.
+setlocal
+set "jar=%~dp0modestead.jar"
+set "java=java"
+if defined JAVA_HOME set "java=%JAVA_HOME%\bin\java"
+set "folder=%LOCALAPPDATA%\modestead"
+for %%f in ("%jar%") do set "stamp=%%~zf-%%~tf"
+set "stamp=%stamp:/=%"
+set "stamp=%stamp::=%"
+set "stamp=%stamp: =%"
+set "kept=%folder%\classes-%stamp%.jsa"
+if exist "%kept%" (
+    "%java%" -XX:SharedArchiveFile="%kept%" -Xshare:auto -Xlog:disable -Xlog:all=error:stderr %MODESTEAD_OPTIONS% -jar "%jar%" %*
+    exit /b
+)
+if not "%~1"=="run" (
+    "%java%" %MODESTEAD_OPTIONS% -jar "%jar%" %*
+    exit /b
+)
+if not exist "%folder%" mkdir "%folder%"
+"%java%" -XX:ArchiveClassesAtExit="%kept%" -Xlog:disable -Xlog:all=error:stderr %MODESTEAD_OPTIONS% -jar "%jar%" %*
+exit /b
