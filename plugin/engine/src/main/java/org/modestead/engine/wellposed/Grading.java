@@ -4,13 +4,16 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.spectrum.Mode;
 
 /**
  * From findings to a grade. The order matters: evidence against a mode is taken before the lack of evidence for it.
  *
  * <ol>
- * <li>the space norm grows from rung to rung, or the residual stays above its threshold and noise does not explain it: absent
+ * <li>the space norm grows from rung to rung, the residual stays above its threshold and noise does not explain it, or in the space of a kernel neither
+ * rate nor weight
+ *     settles and the residual is not close on any rung: absent
  * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises, or
  * rate or
  *     weight keep changing: drifts
@@ -54,6 +57,9 @@ final class Grading {
                 failed(findings, mode, "space-norm-growth").ifPresent(out::add);
                 failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value()) && !FittedRank.spoilt(mode, evidence) && !blurred(mode, evidence))
                         .ifPresent(out::add);
+                if (out.isEmpty() && evidence.operator().compression().innerProduct() == InnerProduct.SPACE) {
+                    out.addAll(restless(findings, mode));
+                }
             }
             case DRIFTS -> {
                 failed(findings, mode, "clustered-eigenvalues").ifPresent(out::add);
@@ -83,6 +89,13 @@ final class Grading {
             default -> throw new IllegalArgumentException(grade.word());
         }
         return out;
+    }
+
+    /** Neither does the mode settle nor does it keep its own rule of motion closely on any rung: what drifts does keep it. */
+    private static List<Finding> restless(List<Finding> findings, int mode) {
+        Optional<Finding> unsettled = failed(findings, mode, "settling").filter(f -> f.value() > f.threshold());
+        Optional<Finding> missing = failed(findings, mode, "close-residual").filter(f -> f.value() > f.threshold());
+        return unsettled.isPresent() && missing.isPresent() ? List.of(unsettled.get(), missing.get()) : List.of();
     }
 
     /** Whether noise in the runs judged on explains so much of the residual that what is left may be the error of rates fitted in noise. */

@@ -9,6 +9,7 @@ import java.util.Set;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.SampleNoise;
@@ -25,7 +26,8 @@ import org.modestead.engine.spectrum.SpectrumExtractor;
  * Bootstrap Methods and their Application, 1997, section 4.2.)
  *
  * <p>Only noise that smoothing has told from motion is replayed: otherwise chance in the motion itself could pass for noise in its
- * measurement. Orthogonality is not asked here, nor is a lack of rungs excused: replays make no evidence.
+ * measurement. Orthogonality is not asked here, nor is a lack of rungs excused: replays make no evidence. In
+ * the data inner product settling is the only witness against an imitation, having no norm that could grow, and is not excused either.
  *
  * @param runs as if the modes existed
  * @param spectrum whose modes are in question
@@ -74,7 +76,8 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
 
     private static boolean questioned(Finding f, Evidence evidence) {
         boolean counts = f.mode() == 0 || evidence.carries(evidence.spectrum().modes().get(f.mode() - 1));
-        return !f.passed() && !Double.isNaN(f.value()) && counts && NOISY.contains(f.check());
+        boolean onlyWitness = f.check().equals("settling") && evidence.operator().compression().innerProduct() == InnerProduct.DATA;
+        return !f.passed() && !Double.isNaN(f.value()) && counts && NOISY.contains(f.check()) && !onlyWitness;
     }
 
     private static Finding excused(Finding f) {
