@@ -1,12 +1,17 @@
 package org.modestead.engine.wellposed;
 
+import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalInt;
 
 /**
  * Whether the fitted functions are all there are, and whether a mode is an eigenfunction among them. Where the fitted rank takes in all
  * directions that are not rounding noise, the last of them clear of it, no function is left to join: the space is finite and the
  * compression is the operator on it, so that there is nothing to settle and no norm that could grow without bound. What is left to ask
  * is whether the mode moves as its eigenvalue says.
+ *
+ * <p>A space of so few functions that no ladder of three rungs stands in it (the lines of three channels, say) has been seen whole as well where
+ * the ladder reaches its end: noise joins the last function, which a fit that predicts best leaves out.
  *
  * <p>The residual on the judging runs answers that: in a finite space an eigenfunction misses by rounding or by what the noise explains, while a
  * projection that only imitates misses by more, however little that may be (x' = x² seen through polynomials of degree 5: 0.5 to 20 %).
@@ -33,20 +38,23 @@ final class Closure {
 
     private Closure() {}
 
-    /** Whether no function is left to join. */
-    static boolean ended(Evidence evidence) {
-        int fitted = evidence.operator().rank();
+    /** Returns the rank of the whole space where the ladder reaches its end; empty otherwise. */
+    private static OptionalInt whole(Evidence evidence) {
+        int trusted = Ladder.trusted(evidence.operator());
         double[] singular = evidence.operator().compression().singular();
-        return Ladder.trusted(evidence.operator()) == fitted && Math.pow(singular[fitted - 1] / singular[0], 2) > CLEAR;
+        boolean reached = trusted == evidence.operator().rank() || evidence.rungs().size() < Settling.LEAST_RUNGS && evidence.rungs().contains(trusted);
+        return reached && Math.pow(singular[trusted - 1] / singular[0], 2) > CLEAR ? OptionalInt.of(trusted) : OptionalInt.empty();
+    }
+
+    /** Returns a mode of a space that has ended as it is in all of it, where it is an eigenfunction; empty otherwise. */
+    static Optional<LadderRow> row(int mode, Evidence evidence) {
+        OptionalInt whole = whole(evidence);
+        return evidence.ladderOf(mode).stream().filter(row -> whole.isPresent() && row.rank() == whole.getAsInt() && closed(row)).findFirst();
     }
 
     /** Returns the residual of a mode of a space that has ended, where it is an eigenfunction of it; empty otherwise. */
     static OptionalDouble missed(int mode, Evidence evidence) {
-        if (!ended(evidence)) {
-            return OptionalDouble.empty();
-        }
-        return evidence.ladderOf(mode).stream().filter(row -> row.rank() == evidence.operator().rank() && closed(row))
-                .mapToDouble(LadderRow::residual).findFirst();
+        return row(mode, evidence).stream().mapToDouble(LadderRow::residual).findFirst();
     }
 
     private static boolean closed(LadderRow row) {

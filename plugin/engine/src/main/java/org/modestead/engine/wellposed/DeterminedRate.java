@@ -2,6 +2,7 @@ package org.modestead.engine.wellposed;
 
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.modestead.engine.Progress;
 
 /**
@@ -27,10 +28,10 @@ public final class DeterminedRate implements Check {
     private Finding finding(int mode, Evidence evidence) {
         List<LadderRow> found = evidence.ladderOf(mode);
         double limit = Math.max(Evidence.USABLE, AMPLIFIED * evidence.noiseShare() / Math.sqrt(evidence.spectrum().modes().get(mode - 1).energyShare()));
-        boolean closed = Closure.missed(mode, evidence).isPresent();
-        List<LadderRow> asked = closed ? List.of(evidence.fittedOf(mode)) : found;
+        Optional<LadderRow> whole = Closure.row(mode, evidence);
+        List<LadderRow> asked = whole.map(List::of).orElse(found);
         double[] upset = asked.stream().mapToDouble(row -> row.noise().rate()).filter(change -> change > limit).sorted().toArray();
-        boolean told = closed ? upset.length == 0 : evidence.usableRungsOf(mode).size() >= Settling.LEAST_RUNGS || upset.length < Settling.LEAST_RUNGS;
+        boolean told = whole.isPresent() ? upset.length == 0 : evidence.usableRungsOf(mode).size() >= Settling.LEAST_RUNGS || upset.length < Settling.LEAST_RUNGS;
         if (told) {
             return new Finding(mode, id(), 0, limit, true, "Noise does not change its rate out of proportion.");
         }

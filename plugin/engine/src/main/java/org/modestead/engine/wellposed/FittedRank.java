@@ -2,6 +2,7 @@ package org.modestead.engine.wellposed;
 
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import org.modestead.engine.Progress;
 import org.modestead.engine.spectrum.Mode;
 
@@ -24,10 +25,11 @@ public final class FittedRank implements Check {
     private Finding finding(Mode mode, Evidence evidence) {
         double threshold = evidence.settings().settleThreshold();
         List<LadderRow> good = evidence.goodRungsOf(mode.number());
-        if (good.size() < Settling.LEAST_RUNGS || Closure.missed(mode.number(), evidence).isPresent()) {
+        Optional<LadderRow> whole = Closure.row(mode.number(), evidence);
+        if (good.size() < Settling.LEAST_RUNGS && whole.isEmpty()) {
             return new Finding(mode.number(), id(), 0, threshold, true, "Its figures are told by the fitted rank alone.");
         }
-        LadderRow last = good.get(good.size() - 1);
+        LadderRow last = whole.orElseGet(() -> good.get(good.size() - 1));
         LadderRow fitted = evidence.fittedOf(mode.number());
         double value = Ladder.relativeChange(fitted.rate(), last.rate(), evidence.longest());
         return new Finding(mode.number(), id(), value, threshold, value <= threshold, value <= threshold

@@ -23,7 +23,7 @@ public final class NoiseSensitivity implements Check {
     }
 
     private static LadderRow judgedOn(int mode, Evidence evidence) {
-        return Closure.missed(mode, evidence).isPresent() ? evidence.fittedOf(mode) : evidence.clearestOf(mode);
+        return Closure.row(mode, evidence).orElseGet(() -> evidence.clearestOf(mode));
     }
 
     private Finding finding(Mode mode, LadderRow row, double threshold) {

@@ -5,11 +5,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.fixtures.Motions;
 import org.modestead.engine.fixtures.Motions.Flow;
 import org.modestead.engine.operator.DictionaryEstimator;
+import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.SegmentPlan;
@@ -32,6 +34,22 @@ class ClosureTest {
         Snapshots snapshots = Motions.snapshots(0.1, 4, runs.subList(0, 4), runs.subList(4, 6));
         assertEquals(Grade.STANDS, Motions.judge(Motions.fit(snapshots, new LinearEstimator(), 1),
                 JudgeSettings.DEFAULT).overall().grade());
+    }
+
+    @Test
+    void threeChannelsLeaveNoRoomForALadderAndAreJudgedWhole() {
+        // three phases a third of a turn apart: a rotation in the plane of sum 0, orthogonal in the space of x·y; noise joins the third direction
+        Random random = new Random(11);
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 12; i++) {
+            double size = 0.5 + random.nextDouble();
+            double start = 2 * Math.PI * random.nextDouble();
+            runs.add(Motions.run("r" + i, Motions.grid(60, 0.1), t -> new double[] {size * Math.cos(3 * t + start),
+                size * Math.cos(3 * t + start - 2 * Math.PI / 3), size * Math.cos(3 * t + start + 2 * Math.PI / 3)}, 0.01, random));
+        }
+        Verdict verdict = Motions.judge(Motions.fit(Motions.snapshots(0.1, 1, runs.subList(0, 9), runs.subList(9, 12)),
+                new KernelStepEstimator(Motions.kernel("linear"), 300), 2), JudgeSettings.DEFAULT);
+        assertEquals(Grade.STANDS, verdict.overall().grade(), verdict.overall().sentence());
     }
 
     @Test

@@ -9,7 +9,9 @@ import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.fixtures.Motions;
 import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.operator.Estimator;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.spectrum.ModalExpansion;
@@ -21,7 +23,7 @@ class GradingTest {
 
     private static final String[] AGAINST = {"space-norm-growth", "holdout-residual", "clustered-eigenvalues", "settling",
             "step-consistency",
-        "eigenfunction-overlap", "joint-solo-gap"};
+        "eigenfunction-overlap", "joint-solo-gap", "close-residual"};
 
     private static Finding finding(String check, double value, boolean passed) {
         return new Finding(1, check, value, 0.1, passed, check + " says so.");
@@ -43,8 +45,12 @@ class GradingTest {
     }
 
     private static Evidence evidence(boolean heldOut, List<LadderRow> ladder) {
+        return evidence(heldOut, ladder, new LinearEstimator());
+    }
+
+    private static Evidence evidence(boolean heldOut, List<LadderRow> ladder, Estimator estimator) {
         Run run = Motions.run("a", 20, 1, t -> new double[] {Math.exp(-t)});
-        FittedOperator operator = Motions.fit(Motions.snapshots(1, 1, List.of(run), List.of()), new LinearEstimator(), 1);
+        FittedOperator operator = Motions.fit(Motions.snapshots(1, 1, List.of(run), List.of()), estimator, 1);
         Spectrum spectrum = SpectrumExtractor.extract(operator, org.modestead.engine.Progress.NONE);
         return new Evidence(operator, spectrum, List.of(1), ladder, ModalExpansion.of(operator.chosen()), List.of(1.0),
                 List.of(1.0), List.of(1.0), List.of(0.0), List.of(0.0), List.of(0), List.of(false), List.of(HalfRates.UNKNOWN), 0.01, heldOut, 10, JudgeSettings.DEFAULT);
@@ -101,6 +107,15 @@ class GradingTest {
         assertEquals(Grade.ABSENT, verdict.grade());
         assertEquals(List.of("space-norm-growth"), verdict.decidedBy());
         assertTrue(verdict.sentence().contains("space-norm-growth says so."));
+    }
+
+    @Test
+    void inAKernelSpaceWhatNeitherSettlesNorKeepsItsRuleCloselyIsAbsent() {
+        Evidence space = evidence(true, List.of(), new KernelStepEstimator(Motions.kernel("linear"), 20));
+        assertEquals(Grade.ABSENT, Grading.grade(mode(1, false), space, failing("settling", "close-residual")).grade());
+        assertEquals(Grade.DRIFTS, Grading.grade(mode(1, false), space, failing("settling")).grade(), "what keeps its rule drifts");
+        assertEquals(Grade.SETTLES, Grading.grade(mode(1, false), space, failing("close-residual")).grade());
+        assertEquals(Grade.DRIFTS, grade("settling", "close-residual").grade(), "averages over the data have no norm to leave");
     }
 
     @Test

@@ -7,7 +7,9 @@ import java.util.List;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.Progress;
+import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.fixtures.Motions;
+import org.modestead.engine.operator.DictionaryEstimator;
 import org.modestead.engine.operator.ExtrapolatedEstimator;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.LinearEstimator;
@@ -69,6 +71,21 @@ class ReplaysTest {
                     Motions.kernel("exponential", "rate", 1), new SegmentPlan(10, 10), 1)), new RankRule.Holdout(30), 0, Progress.NONE);
             Grade grade = Motions.judge(operator, JudgeSettings.DEFAULT).overall().grade();
             assertTrue(grade == Grade.ABSENT || grade == Grade.DRIFTS, "seed " + seed + ": " + grade);
+        }
+    }
+
+    @Test
+    void inADictionarySettlingIsTheOnlyWitnessAndIsNotExcused() {
+        // x' = -x^3 seen through polynomials of degree 5: no eigenfunction among them
+        for (long seed = 1; seed <= 3; seed++) {
+            List<Run> all = Motions.spread((start, t) -> start / Math.sqrt(1 + 2 * start * start * t), 20, -1.5, 1.5, 41, 2, 0.05, seed);
+            Snapshots snapshots = SmoothingRule.AUTOMATIC.smooth(Motions.snapshots(0.05, 1, all.subList(0, 15), all.subList(15, 20)));
+            FittedOperator operator = OperatorFitter.fit(snapshots, new ExtrapolatedEstimator(new DictionaryEstimator(Dictionary.monomials(5))),
+                    new RankRule.Holdout(30), 0, Progress.NONE);
+            Verdict verdict = Motions.judge(operator, JudgeSettings.DEFAULT);
+            assertTrue(verdict.findings().stream().noneMatch(f -> f.check().equals("settling") && f.sentence().endsWith("so this is not held against it.")),
+                    "seed " + seed);
+            assertTrue(verdict.overall().grade() != Grade.STANDS && verdict.overall().grade() != Grade.SETTLES, verdict.overall().sentence());
         }
     }
 

@@ -19,13 +19,13 @@ import java.util.function.DoubleSupplier;
 import java.util.stream.Stream;
 
 /**
- * The reporting part: systems of the kinds of the calibration part with other parameters, ranges and sampling, and some of other kinds,
- * written without a look at any verdict and without knowledge of the rules. Nothing may be set by them. Overlaps and harmonics that are
- * not in closed form were computed by another program.
+ * The fourth calibration part: it was the reporting part until rules were changed after it had been seen. Systems of the kinds of the first parts
+ * with other parameters, ranges and sampling, and some of other kinds. Overlaps and harmonics that are not in closed form were
+ * computed by another program.
  */
-final class Reserved {
+final class Fourth {
 
-    private Reserved() {}
+    private Fourth() {}
 
     static List<Case> cases() {
         List<Case> out = new ArrayList<>();
