@@ -2,6 +2,7 @@ package org.modestead.engine.recording;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Random;
 import java.util.stream.IntStream;
@@ -108,7 +109,7 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
     public List<List<Run>> copies(List<Run> runs, int pairs, Random random) {
         List<List<Run>> out = new ArrayList<>();
         for (int pair = 0; pair < pairs; pair++) {
-            List<DMatrixRMaj> doses = runs.stream().map(run -> noise(run, random)).toList();
+            List<DMatrixRMaj> doses = doses(runs, random);
             for (double sign : new double[] {1, -1}) {
                 out.add(IntStream.range(0, runs.size()).mapToObj(i -> disturbed(runs.get(i), doses.get(i), sign)).toList());
             }
@@ -146,8 +147,23 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
         return weight;
     }
 
-    /** White noise of this level for every sample of a run, smoothed as the samples were, p x n. */
-    public DMatrixRMaj noise(Run run, Random random) {
+    /**
+     * Draws noise of this level for every sample, smoothed as the samples were. It is drawn run by run in the order of their ids, shorter ids first, and
+     * of their times: the order in which runs are given moves nothing.
+     *
+     * @param runs not written
+     * @param random draws the noise
+     * @return per run as given p x n
+     */
+    public List<DMatrixRMaj> doses(List<Run> runs, Random random) {
+        DMatrixRMaj[] out = new DMatrixRMaj[runs.size()];
+        IntStream.range(0, out.length).boxed().sorted(Comparator.<Integer>comparingInt(i -> runs.get(i).id().length())
+                        .thenComparing(i -> runs.get(i).id()).thenComparingDouble(i -> runs.get(i).times()[0]))
+                .forEachOrdered(i -> out[i] = noise(runs.get(i), random));
+        return List.of(out);
+    }
+
+    private DMatrixRMaj noise(Run run, Random random) {
         DMatrixRMaj out = new DMatrixRMaj(run.values().numRows, run.values().numCols);
         for (int k = 0; k < out.getNumElements(); k++) {
             out.data[k] = deviations[k % deviations.length] * random.nextGaussian();

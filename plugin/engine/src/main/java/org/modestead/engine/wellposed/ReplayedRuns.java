@@ -3,6 +3,7 @@ package org.modestead.engine.wellposed;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;
@@ -58,7 +59,8 @@ record ReplayedRuns(List<Run> training, List<Run> holdout, Snapshots like) {
     }
 
     private static List<Run> noisy(List<Run> runs, SampleNoise noise, Random random) {
-        return runs.stream().map(run -> SampleNoise.disturbed(run, noise.noise(run, random), 1)).toList();
+        List<DMatrixRMaj> doses = noise.doses(runs, random);
+        return IntStream.range(0, runs.size()).mapToObj(i -> SampleNoise.disturbed(runs.get(i), doses.get(i), 1)).toList();
     }
 
     private static Run replayed(Run run, FittedOperator operator, Spectrum spectrum, List<Mode> carrying) {

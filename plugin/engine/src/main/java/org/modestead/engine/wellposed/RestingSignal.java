@@ -13,8 +13,8 @@ import org.modestead.engine.operator.OrthonormalCompression;
  * A function belongs to the space restricted to the set that was visited just where this is bounded, also where it does not belong to the space as a
  * whole: the coordinates are in a Gaussian space on a circle and not on an interval (the restriction theorem of Aronszajn 1950, section 1.5). On an
  * interval the sum goes on growing by a fifth or so with every other function (the parity of the signal). It rests where squared singular values fall by
- * two decades over at least four further functions and it grows by no more than a five-hundredth; where it does not rest, four functions
- * were never seen to reach a tenth of that fall. Noise off the set adds directions of its own with singular values as small as
+ * three decades over at least four further functions and it grows by no more than a five-hundredth; where it does not rest, four functions
+ * were never seen to reach a third of that fall. Noise off the set adds directions of its own with singular values as small as
  * the noise, and there it rises again; that says nothing about the set.
  *
  * @param from rank from which it rests
@@ -23,7 +23,7 @@ import org.modestead.engine.operator.OrthonormalCompression;
  */
 record RestingSignal(int from, int to, double squaredNorm) {
 
-    private static final double DECADES = 1e2;
+    private static final double DECADES = 1e3;
     private static final int FURTHER = 4;
     private static final double GROWTH = 1.002;
 

@@ -113,7 +113,7 @@ class SmoothingTest {
     void noiseAddedLaterGoesThroughTheSameWindow() {
         Smoothing smoothing = new Smoothing(List.of(6), List.of(0.2));
         Run run = runs(1, 5000, (r, k) -> 0).get(0);
-        DMatrixRMaj dose = new SampleNoise(new double[] {0.2}, smoothing).noise(run, new Random(2));
+        DMatrixRMaj dose = new SampleNoise(new double[] {0.2}, smoothing).doses(List.of(run), new Random(2)).get(0);
         double left = 0.2 * Math.sqrt(LocalParabola.at(run.times(), 2500, 6).gain());
         // 5000 samples, about 5 of them independent of each other in 13: 2 %; four of those
         assertEquals(left, Math.sqrt(distance(dose, new DMatrixRMaj(5000, 1)) / 5000), 0.08 * left);
