@@ -232,7 +232,7 @@ class SchedulerTest {
         JsonNode record = record();
         assertEquals("done", record.path("state").asText());
         assertEquals(7, record.path("steps").path(0).path("settings").path("level").asInt());
-        assertTrue(record.path("linear_algebra").asText().startsWith("EJML "), record::toString);
+        assertTrue(record.path("linear_algebra").asText().contains("EJML "), record::toString);
         assertTrue(record.path("versions").path("duckdb").asText().startsWith("v1."), record::toString);
         assertEquals("[\"a/table.csv\",\"report.html\"]", record.path("files").toString());
     }

@@ -26,6 +26,7 @@ public final class Examples {
             new Example("sunspots", "yearly sunspot numbers 1700-2008: a cycle of about eleven years"),
             new Example("three-decays", "a sum of three decays with certified rates"),
             new Example("one-pass", "invented pumping station, fitted in one pass over its rows as tables larger than memory are, and in memory beside it"),
+            new Example("air-vessel", "invented rising main that loses charge of its air vessel: a kept model held against later recordings, with charts and alarms"),
             new Example("kept-model", "a kept model and new recordings of the pumping station: forecast and judged without fitting"));
 
     private Examples() {}
