@@ -66,7 +66,7 @@ final class Grading {
                 failed(findings, mode, "resolved-rates").ifPresent(out::add);
                 failed(findings, mode, "determined-rate").ifPresent(out::add);
                 failed(findings, mode, SignalInSpace.LIKENESS).ifPresent(out::add);
-                failed(findings, mode, "settling").filter(f -> f.value() > f.threshold()).ifPresent(out::add);
+                exceeded(findings, mode, "settling").ifPresent(out::add);
             }
             case UNDECIDED -> {
                 failed(findings, mode, "settling").ifPresent(out::add);
@@ -93,8 +93,8 @@ final class Grading {
 
     /** Neither does the mode settle nor does it keep its own rule of motion closely on any rung: what drifts does keep it. */
     private static List<Finding> restless(List<Finding> findings, int mode) {
-        Optional<Finding> unsettled = failed(findings, mode, "settling").filter(f -> f.value() > f.threshold());
-        Optional<Finding> missing = failed(findings, mode, "close-residual").filter(f -> f.value() > f.threshold());
+        Optional<Finding> unsettled = exceeded(findings, mode, "settling");
+        Optional<Finding> missing = exceeded(findings, mode, "close-residual");
         return unsettled.isPresent() && missing.isPresent() ? List.of(unsettled.get(), missing.get()) : List.of();
     }
 
@@ -105,6 +105,11 @@ final class Grading {
 
     private static Optional<Finding> failed(List<Finding> findings, int mode, String check) {
         return findings.stream().filter(f -> f.mode() == mode && f.check().equals(check) && !f.passed()).findFirst();
+    }
+
+    /** A check that failed because its figure was measured and is above its threshold. */
+    private static Optional<Finding> exceeded(List<Finding> findings, int mode, String check) {
+        return failed(findings, mode, check).filter(f -> f.value() > f.threshold());
     }
 
     private static ModeVerdict verdict(Mode mode, Grade grade, List<Finding> deciding, boolean counts) {

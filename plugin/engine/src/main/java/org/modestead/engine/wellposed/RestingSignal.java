@@ -23,8 +23,8 @@ import org.modestead.engine.operator.OrthonormalCompression;
  */
 record RestingSignal(int from, int to, double squaredNorm) {
 
-    private static final double DECADES = 1e3;
-    private static final int FURTHER = 4;
+    private static final double LEAST_FALL = 1e3;
+    private static final int LEAST_FURTHER = 4;
     private static final double GROWTH = 1.002;
 
     /** Least share of the signal's variance that the resting projection must hold on the judging runs, or it rests elsewhere. */
@@ -44,7 +44,7 @@ record RestingSignal(int from, int to, double squaredNorm) {
             while (b + 1 < sums.length && sums[b + 1] <= GROWTH * sums[a]) {
                 b++;
             }
-            if (b - a >= FURTHER && Math.pow(singular[a] / singular[b], 2) >= DECADES && held.applyAsDouble(a + 1) >= HELD) {
+            if (b - a >= LEAST_FURTHER && Math.pow(singular[a] / singular[b], 2) >= LEAST_FALL && held.applyAsDouble(a + 1) >= HELD) {
                 return Optional.of(new RestingSignal(a + 1, b + 1, sums[b]));
             }
         }
