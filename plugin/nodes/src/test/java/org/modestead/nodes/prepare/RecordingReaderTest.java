@@ -69,15 +69,6 @@ class RecordingReaderTest {
     }
 
     @Test
-    void aNumberNamesItsRunByItsValue() {
-        Recording recording = read(table(Column.number("run"), Column.number("t"), Column.number("x")).row(2.0, 1.0, 2.0).row(2.0, 2.0, 4.0)
-                .row(0.5, 1.0, 1.0).row(0.5, 2.0, 3.0), columns("t", "run"));
-        assertEquals(List.of("2", "0.5"), recording.runs().stream().map(Run::id).toList());
-        assertEquals("pumps.csv, row 1 below the header, column run", fault(table(Column.number("run"), Column.number("t"), Column.number("x")).row(null, 1.0, 2.0), columns("t", "run"))
-                .where());
-    }
-
-    @Test
     void withoutATimeColumnRowsOfEachRunFollowAtTheGivenStep() {
         RecordingColumns columns = new RecordingColumns("", 0.25, "s", "run", List.of(), List.of(), Map.of());
         Recording recording = read(table(Column.whole("run"), Column.number("x")).row(1, 1.0).row(1, 2.0).row(2,

@@ -8,7 +8,6 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import org.modestead.nodes.prepare.RunNames;
 import org.modestead.nodes.table.CellType;
 
 /** Guesses what the columns of a recording are: its time, its runs, measured channels, known inputs, and what takes no part. */
@@ -106,9 +105,9 @@ final class RoleGuess {
 
     private boolean namesRuns(ColumnFacts facts, Optional<ColumnFacts> time) {
         CellType type = facts.column().type();
+        boolean usable = type == CellType.LONG || type == CellType.TEXT || type == CellType.FLAG || type == CellType.DATE;
         boolean named = hasWord(facts, RUN_WORDS);
-        boolean fraction = type == CellType.DOUBLE && (facts.low() != Math.rint(facts.low()) || facts.high() != Math.rint(facts.high()));
-        if (!RunNames.TYPES.contains(type) || fraction && !named || facts.missing() > 0 || facts.distinct() < (named ? 1 : 2) || facts.distinct() > Math.max(1, scan.rows() / 4)) {
+        if (!usable || facts.missing() > 0 || facts.distinct() < (named ? 1 : 2) || facts.distinct() > Math.max(1, scan.rows() / 4)) {
             return false;
         }
         boolean blocks = facts.changes() == facts.distinct() - 1L;

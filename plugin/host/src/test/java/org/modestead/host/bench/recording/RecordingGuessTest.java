@@ -132,10 +132,6 @@ class RecordingGuessTest {
         IntFunction<String> row = i -> i / 50 + "," + 0.5 * (i % 50) + "," + number(StrictMath.exp(-0.1 * (i % 50)));
         assertRoles("t", "", "trial", List.of("x"), List.of(), guess("named.csv", "trial,t,x\n" + rows(300, row)));
         assertRoles("t", "", "shift", List.of("x"), List.of(), guess("blocks.csv", "shift,t,x\n" + rows(300, row)));
-        IntFunction<String> decimals = i -> (1 + i / 50) + ".0," + 0.5 * (i % 50) + "," + number(StrictMath.exp(-0.1 * (i % 50)));
-        assertRoles("t", "", "trial", List.of("x"), List.of(), guess("named-decimals.csv", "trial,t,x\n" + rows(300, decimals)));
-        assertRoles("t", "", "shift", List.of("x"), List.of(), guess("decimals.csv", "shift,t,x\n" + rows(300, decimals)));
-        assertSetUp(RecordingPlan.workflow(guess("set-up.csv", "shift,t,x\n" + rows(300, decimals)), "decimals", "set-up.csv", folder.resolve("workflow.json")));
         RecordingGuess stacked = guess("stacked.csv", "t,x\n" + rows(300, i -> row.apply(i).replaceFirst("\\d+,", "")));
         assertEquals(List.of("The time t falls back or stands still at row 51: name the column that tells the runs apart, or take another column as time."),
                 stacked.problems());
