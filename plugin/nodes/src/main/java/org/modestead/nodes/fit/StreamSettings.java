@@ -28,6 +28,7 @@ import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.Setting.Option;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.prepare.RunName;
 import org.modestead.nodes.table.CellType;
 
 /** Settings of the Streaming Fit, and what they mean for the engine. */
@@ -75,7 +76,7 @@ final class StreamSettings {
                         + " year, date-times in s, min, h, d, week or year; empty means d and s there."), "", false, false),
                 new Setting.OneColumn(new Common(RUN, "Run column", group, "Column that names the run of each row. Leave it empty when the"
                         + " table holds one recording without restart."), TABLE,
-                        Set.of(CellType.TEXT, CellType.LONG, CellType.DATE, CellType.FLAG), false),
+                        RunName.TYPES, false),
                 new Setting.Columns(new Common(CHANNELS, "Channels", group, "Measured columns whose modes are wanted. Empty takes every column"
                         + " of numbers that has no other part here."), TABLE, Set.of(CellType.DOUBLE, CellType.LONG), 0, OptionalInt.empty()),
                 new Setting.Texts(new Common(UNITS, "Units", group, "Units of channels as channel=unit, one a line, for example flow=m3/h. A"

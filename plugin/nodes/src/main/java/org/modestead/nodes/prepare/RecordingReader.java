@@ -38,7 +38,7 @@ final class RecordingReader {
     private final List<MeasuredCell> inputCells;
     private final List<TextColumnWatch> watches;
     private final int timeColumn;
-    private final int runColumn;
+    private final RunName runName;
     private final Optional<NumberCell> weightCell;
     private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
 
@@ -52,7 +52,7 @@ final class RecordingReader {
         this.watches = columns.unusedTexts(table.schema()).stream()
                 .map(name -> new TextColumnWatch(name, position(name))).toList();
         this.timeColumn = columns.time().isEmpty() ? NONE : position(columns.time());
-        this.runColumn = columns.run().isEmpty() ? NONE : position(columns.run());
+        this.runName = RunName.of(table, columns.run());
         this.weightCell = Optional.of(columns.weight()).filter(name -> !name.isEmpty())
                 .map(name -> new NumberCell(table.origin(), name, position(name), type(name)));
     }
@@ -113,7 +113,7 @@ final class RecordingReader {
     }
 
     private void append(RowCursor cursor, RecordedTime time) {
-        RunBuffer run = runs.computeIfAbsent(runOf(cursor), RunBuffer::new);
+        RunBuffer run = runs.computeIfAbsent(runName.read(cursor), RunBuffer::new);
         double at = time == null ? run.samples() * columns.rowStep() : timeOf(cursor, time);
         if (run.samples() > 0 && at <= run.lastTime()) {
             throw outOfOrder(cursor, run, time, at);
@@ -136,18 +136,6 @@ final class RecordingReader {
                     + ", but other rows of run " + run.id() + " have another", "give all rows of a run the same weight");
         }
         run.weigh(weight);
-    }
-
-    private String runOf(RowCursor cursor) {
-        if (runColumn == NONE) {
-            return "1";
-        }
-        String name = cursor.text(runColumn).strip();
-        if (name.isEmpty()) {
-            throw new RecordingFault(place(cursor, columns.run()), "the name of the run is missing",
-                    "give every row the name of its run, or clear the run column");
-        }
-        return name;
     }
 
     private double timeOf(RowCursor cursor, RecordedTime time) {

@@ -95,7 +95,7 @@ public final class RecordingRows {
     public long read(Taker taker, String message, Progress progress) {
         long rows = 0;
         int timeColumn = position(columns.time());
-        int runColumn = columns.run().isEmpty() ? -1 : position(columns.run());
+        RunName run = RunName.of(table, columns.run());
         double[] values = new double[positions.length];
         try (RowCursor cursor = table.open()) {
             RecordedTime time = null;
@@ -108,7 +108,7 @@ public final class RecordingRows {
                     progress.checkCancelled();
                     progress.report(0, message + ", " + rows + " rows read");
                 }
-                if (!taker.take(runOf(cursor, runColumn), timeOf(cursor, timeColumn, time), values)) {
+                if (!taker.take(run.read(cursor), timeOf(cursor, timeColumn, time), values)) {
                     break;
                 }
             }
@@ -117,18 +117,6 @@ public final class RecordingRows {
             throw new RecordingFault(table.origin(), "the table has " + rows + " rows", "give at least two");
         }
         return rows;
-    }
-
-    private String runOf(RowCursor cursor, int column) {
-        if (column < 0) {
-            return "1";
-        }
-        String name = cursor.text(column).strip();
-        if (name.isEmpty()) {
-            throw new RecordingFault(MeasuredCell.place(table.origin(), cursor, columns.run()), "the name of the run is missing",
-                    "give every row the name of its run, or clear the run column");
-        }
-        return name;
     }
 
     private double timeOf(RowCursor cursor, int column, RecordedTime time) {

@@ -48,7 +48,6 @@ final class SnapshotSettings {
     private static final Set<CellType> NUMBERS = Set.of(CellType.DOUBLE, CellType.LONG, CellType.TEXT);
     private static final Set<CellType> MEASURED = Set.of(CellType.DOUBLE, CellType.LONG, CellType.TEXT, CellType.DOUBLE_LIST,
             CellType.LONG_LIST);
-    private static final Set<CellType> NAMES = Set.of(CellType.TEXT, CellType.LONG, CellType.DATE, CellType.FLAG);
     private static final double LARGEST = Double.MAX_VALUE;
 
     private SnapshotSettings() {}
@@ -81,8 +80,8 @@ final class SnapshotSettings {
                         + " or year (365.25 days); empty means d and s there."), "", false, false),
                 new Setting.OneColumn(new Common(RUN_COLUMN, "Run column", group, "Column that names the run each row"
                         + " belongs to. Leave it empty when the table holds one recording without restart. Rows of"
-                        + " different runs may be mixed."),
-                        TABLE, NAMES, false),
+                        + " different runs may be mixed. Whole numbers, texts, dates and true/false name runs; 1.0 is run 1."),
+                        TABLE, RunName.TYPES, false),
                 new Setting.Columns(new Common(CHANNELS, "Channels", group, "Measured columns whose modes are wanted."
                         + " Empty takes every column of numbers, and of lists of numbers, that has no other part here. A"
                         + " column of lists is several channels, one an entry. A column of text is accepted when each cell"

@@ -70,6 +70,23 @@ class SnapshotBuilderNodeTest {
         assertEquals(0.1, snapshots.step().orElseThrow(), 1e-12);
     }
 
+    /** Spreadsheets and arrays write the number of a run as 1.0. */
+    @Test
+    void decimalsThatAreWholeNameRunsAndOthersAreRefusedWithTheirPlace() {
+        MemoryTable.Builder rows = MemoryTable.builder(TableSchema.of(Column.number("run"), Column.number("t"), Column.number("x")), "pumps.csv");
+        for (int k = 0; k < 80; k++) {
+            rows.row(k < 40 ? 1.0 : 12.0, k % 40 * 0.1, Math.sin(k * 0.3));
+        }
+        Settings settings = settings(Map.of("time-column", "t", "run-column", "run"));
+        RunContext context = new RunContext(Progress.NONE, Path.of("."), Path.of("."));
+        Snapshots snapshots = (Snapshots) NODE.run(new NodeInputs(Map.of("table", rows.build())), settings, context).outputs().get("snapshots");
+        assertEquals(List.of("1", "12"), snapshots.training().stream().map(run -> run.id()).toList());
+        rows.row(12.5, 4.0, 0.0);
+        assertEquals("pumps.csv, row 81 below the header, column run: the run is 12.5, which is no whole number; number runs by whole numbers, or choose the"
+                + " column that names them.", assertThrows(org.modestead.engine.RecordingFault.class,
+                        () -> NODE.run(new NodeInputs(Map.of("table", rows.build())), settings, context)).getMessage());
+    }
+
     @Test
     void theSummaryTableAndTheSentencesTellWhatWasFound() {
         NodeResult result = run(Map.of("time-column", "t", "run-column", "run"));

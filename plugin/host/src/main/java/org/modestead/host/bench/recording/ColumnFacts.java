@@ -18,8 +18,9 @@ import org.modestead.nodes.words.NameWithUnit;
  * @param falls rows whose value is below the one before
  * @param changes rows whose value differs from the one before
  * @param distinct different values, counted up to a limit
+ * @param whole whether it holds numbers and all of them are whole, however they are written: 1, 1.0, 1e0
  */
-public record ColumnFacts(Column column, long cells, long missing, double low, double high, long rises, long falls, long changes, int distinct) {
+public record ColumnFacts(Column column, long cells, long missing, double low, double high, long rises, long falls, long changes, int distinct, boolean whole) {
 
     /** Different values are counted up to here. */
     static final int MOST_DISTINCT = 20_000;

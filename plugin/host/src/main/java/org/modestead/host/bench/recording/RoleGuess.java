@@ -105,7 +105,7 @@ final class RoleGuess {
 
     private boolean namesRuns(ColumnFacts facts, Optional<ColumnFacts> time) {
         CellType type = facts.column().type();
-        boolean usable = type == CellType.LONG || type == CellType.TEXT || type == CellType.FLAG || type == CellType.DATE;
+        boolean usable = facts.whole() || type == CellType.TEXT || type == CellType.FLAG || type == CellType.DATE;
         boolean named = hasWord(facts, RUN_WORDS);
         if (!usable || facts.missing() > 0 || facts.distinct() < (named ? 1 : 2) || facts.distinct() > Math.max(1, scan.rows() / 4)) {
             return false;

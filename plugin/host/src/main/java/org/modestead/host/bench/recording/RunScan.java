@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.OptionalLong;
+import org.modestead.nodes.prepare.RunName;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.RowCursor;
 import org.modestead.nodes.table.Table;
@@ -33,13 +34,13 @@ public record RunScan(List<Run> runs, OptionalLong fall) {
     /** Reads the rows; no more than are looked at elsewhere. */
     static RunScan of(Table table, RecordingWish.Roles roles, int channels) {
         int time = table.schema().indexOf(roles.time()).orElse(-1);
-        int run = table.schema().indexOf(roles.run()).orElse(-1);
+        RunName run = RunName.of(table, roles.run());
         int[] drawn = roles.channels().stream().limit(channels).mapToInt(name -> table.schema().indexOf(name).orElse(-1)).filter(index -> index >= 0).toArray();
         Map<String, Rows> rows = new LinkedHashMap<>();
         long fall = -1;
         try (RowCursor cursor = table.open()) {
             while (cursor.next() && cursor.row() <= TableScan.MOST_ROWS) {
-                Rows own = rows.computeIfAbsent(run < 0 ? "" : cursor.text(run), name -> new Rows(drawn.length));
+                Rows own = rows.computeIfAbsent(roles.run().isEmpty() ? "" : run.written(cursor), name -> new Rows(drawn.length));
                 double now = time < 0 ? own.times.size() : TableScan.number(cursor, time, type(table, time));
                 boolean falls = own.times.size() > 0 && !(now > own.times.get(own.times.size() - 1));
                 fall = fall < 0 && falls ? cursor.row() : fall;

@@ -64,6 +64,7 @@ record TableScan(long rows, boolean whole, List<ColumnFacts> columns) {
         private long rises;
         private long falls;
         private long changes;
+        private boolean whole = true;
 
         Counter(Column column) {
             this.column = column;
@@ -82,6 +83,7 @@ record TableScan(long rows, boolean whole, List<ColumnFacts> columns) {
                 distinct.add(text);
             }
             double value = number(cursor, index, column.type());
+            whole &= value == Math.rint(value);
             rises += value > before ? 1 : 0;
             falls += value < before ? 1 : 0;
             low = Double.isNaN(low) || value < low ? value : low;
@@ -90,7 +92,8 @@ record TableScan(long rows, boolean whole, List<ColumnFacts> columns) {
         }
 
         ColumnFacts facts() {
-            return new ColumnFacts(column, cells, missing, low, high, rises, falls, changes, distinct.size());
+            return new ColumnFacts(column, cells, missing, low, high, rises, falls, changes, distinct.size(),
+                    whole && cells > 0 && column.type().isNumber());
         }
     }
 }

@@ -137,6 +137,19 @@ class RecordingGuessTest {
                 stacked.problems());
     }
 
+    /** Spreadsheets and array files write the numbers of runs as 1.0, 2.0. */
+    @Test
+    void runsWrittenAsDecimalsAreRuns() throws IOException {
+        IntFunction<String> row = i -> i / 50 + ".0," + 0.5 * (i % 50) + "," + number(StrictMath.exp(-0.1 * (i % 50)));
+        RecordingGuess named = guess("named.csv", "run,t,x\n" + rows(300, row));
+        assertRoles("t", "", "run", List.of("x"), List.of(), named);
+        assertEquals(6, named.runs().runs().size());
+        assertSetUp(RecordingPlan.workflow(named, "named", "named.csv", folder.resolve("workflow.json")));
+        assertRoles("t", "", "shift", List.of("x"), List.of(), guess("blocks.csv", "shift,t,x\n" + rows(300, row)));
+        RecordingGuess halves = guess("halves.csv", "level,t,x\n" + rows(300, i -> row.apply(i).replaceFirst("\\.0", ".5")));
+        assertRoles("t", "", "", List.of("level", "x"), List.of(), halves);
+    }
+
     @Test
     void aColumnThatOnlyCountsOrNeverChangesIsNoChannel() throws IOException {
         RecordingGuess guess = guess("counter.csv", "id,time_ms,const,x\n" + rows(100, i -> i + "," + 20 * i + ",5," + number(StrictMath.sin(0.3 * i))));
