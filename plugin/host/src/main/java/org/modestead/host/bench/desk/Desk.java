@@ -103,21 +103,22 @@ public final class Desk implements AutoCloseable {
 
     /** Goes on with a changed document. */
     public void edit(Workflow workflow, String label) {
-        keep(() -> journal.edited(workflow, label));
-        timeline = timeline.then(workflow, label);
+        Timeline after = timeline.then(workflow, label);
+        keep(() -> journal.edited(after, label, saved));
+        timeline = after;
     }
 
     /** Takes the last edit back. */
     public void undo() {
         Timeline before = timeline.undo();
-        keep(() -> journal.did("undo"));
+        keep(() -> journal.did("undo", before, saved));
         timeline = before;
     }
 
     /** Does again what was taken back. */
     public void redo() {
         Timeline after = timeline.redo();
-        keep(() -> journal.did("redo"));
+        keep(() -> journal.did("redo", after, saved));
         timeline = after;
     }
 
@@ -131,8 +132,9 @@ public final class Desk implements AutoCloseable {
             throw new DeskFault("file " + file, "it cannot be written (" + unwritable.getMessage() + ")", "save under another name");
         }
         String sum = checksum(document);
-        keep(() -> journal.saved(file, sum));
-        timeline = timeline.in(file);
+        Timeline there = timeline.in(file);
+        keep(() -> journal.saved(there, sum));
+        timeline = there;
         saved = sum;
     }
 
@@ -216,8 +218,8 @@ public final class Desk implements AutoCloseable {
 
     /** Tells of a desk in a folder without opening it: what is there, when it changed, whether it was saved. */
     static Optional<DeskFolder.Kept> glance(Path folder) {
-        return Journal.read(folder).map(told -> new DeskFolder.Kept(folder.getFileName().toString(), told.timeline().current().name(),
-                told.timeline().current().file(), told.changed(), !told.saved().equals(checksum(told.timeline().current())),
-                told.timeline().current().steps().size()));
+        return Journal.glance(folder).or(() -> Journal.read(folder).map(told -> new Journal.Glance(told.timeline().current().name(), told.timeline().current().file(),
+                told.changed(), !told.saved().equals(checksum(told.timeline().current())), told.timeline().current().steps().size())))
+                .map(seen -> new DeskFolder.Kept(folder.getFileName().toString(), seen.name(), seen.file(), seen.changed(), seen.unsaved(), seen.steps()));
     }
 }

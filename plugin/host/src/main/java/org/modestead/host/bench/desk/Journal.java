@@ -13,6 +13,8 @@ import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
 import java.time.Instant;
 import java.time.temporal.ChronoUnit;
+import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.modestead.host.output.Disk;
@@ -23,7 +25,8 @@ import org.modestead.host.workflow.WorkflowText;
 
 /**
  * Writes down every edit at once, one line each, so that a killed process loses nothing. A line that was half-written when the process
- * died is left out when the journal is read.
+ * died is left out when the journal is read. Each line tells in short how the desk stands after it, so that a list of desks reads the
+ * last line of each and nothing else.
  */
 final class Journal implements AutoCloseable {
 
@@ -32,6 +35,7 @@ final class Journal implements AutoCloseable {
 
     private static final String FORMAT = "modestead-desk/1";
     private static final int MOST_KEPT = 200;
+    private static final int TAIL = 1 << 14;
     private static final ObjectMapper MAPPER = new ObjectMapper();
 
     private final FileChannel channel;
@@ -54,16 +58,22 @@ final class Journal implements AutoCloseable {
         List<Timeline.Moment> moments = told.timeline().moments();
         int now = told.timeline().now();
         int first = Math.max(0, Math.min(now, moments.size() - MOST_KEPT));
-        StringBuilder text = new StringBuilder(line(MAPPER.createObjectNode().put("format", FORMAT)
-                .put("file", told.timeline().current().file().toString()).put("saved", told.saved()).put("at", at(told.changed()))));
+        List<ObjectNode> entries = new ArrayList<>();
+        entries.add(MAPPER.createObjectNode().put("format", FORMAT).put("file", told.timeline().current().file().toString()).put("saved", told.saved())
+                .put("at", at(told.changed())));
         for (int i = first; i < moments.size(); i++) {
-            text.append(line(edit(moments.get(i).workflow(), moments.get(i).label(), told.changed())));
+            entries.add(edit(moments.get(i).workflow(), moments.get(i).label(), told.changed()));
         }
         for (int i = now; i < moments.size() - 1; i++) {
-            text.append(line(MAPPER.createObjectNode().put("do", "undo").put("at", at(told.changed()))));
+            entries.add(MAPPER.createObjectNode().put("do", "undo").put("at", at(told.changed())));
         }
+        entries.get(entries.size() - 1).set("now", now(told.timeline(), told.saved()));
         Path file = folder.resolve(NAME);
-        WholeFile.write(Disk.REAL, file, out -> out.write(text.toString().getBytes(StandardCharsets.UTF_8)));
+        WholeFile.write(Disk.REAL, file, out -> {
+            for (ObjectNode entry : entries) {
+                out.write(line(entry).getBytes(StandardCharsets.UTF_8));
+            }
+        });
         return new Journal(FileChannel.open(file, StandardOpenOption.APPEND));
     }
 
@@ -80,19 +90,72 @@ final class Journal implements AutoCloseable {
         }
     }
 
-    void edited(Workflow workflow, String label) throws IOException {
-        append(edit(workflow, label, Instant.now()));
+    /** Returns how a desk stands without reading what led to it; empty where the last line does not tell. */
+    static Optional<Glance> glance(Path folder) {
+        try (FileChannel journal = FileChannel.open(folder.resolve(NAME), StandardOpenOption.READ)) {
+            JsonNode last = MAPPER.readTree(lastLine(journal));
+            JsonNode now = last.path("now");
+            return now.isObject() ? Optional.of(new Glance(now.path("name").asText(), Path.of(now.path("file").asText()), Instant.parse(last.path("at").asText()),
+                    now.path("unsaved").asBoolean(), now.path("steps").asInt())) : Optional.empty();
+        } catch (IOException | RuntimeException unreadable) {
+            return Optional.empty();
+        }
     }
 
-    void did(String what) throws IOException {
-        append(MAPPER.createObjectNode().put("do", what).put("at", at(Instant.now())));
+    /**
+     * How a desk stands, in short.
+     *
+     * @param name of the workflow
+     * @param file where Save goes
+     * @param changed when the last thing happened
+     * @param unsaved whether the file holds something else
+     * @param steps how many
+     */
+    record Glance(String name, Path file, Instant changed, boolean unsaved, int steps) {}
+
+    /** Reads from the end, further and further back, until a whole line is there; a half-written last line is none. */
+    private static byte[] lastLine(FileChannel journal) throws IOException {
+        long size = journal.size();
+        for (long want = Math.min(TAIL, size);; want = Math.min(2 * want, size)) {
+            ByteBuffer tail = ByteBuffer.allocate(Math.toIntExact(want));
+            while (tail.hasRemaining() && journal.read(tail, size - want + tail.position()) >= 0) {
+                // on until it is full
+            }
+            byte[] bytes = tail.array();
+            int begin = bytes.length - 1;
+            if (begin < 0 || bytes[begin] != '\n') {
+                throw new IOException("the last line is not whole");
+            }
+            while (begin > 0 && bytes[begin - 1] != '\n') {
+                begin--;
+            }
+            if (begin > 0 || want == size) {
+                return Arrays.copyOfRange(bytes, begin, bytes.length);
+            }
+        }
     }
 
-    void saved(Path file, String checksum) throws IOException {
-        append(MAPPER.createObjectNode().put("do", "saved").put("file", file.toString()).put("saved", checksum).put("at", at(Instant.now())));
+    void edited(Timeline after, String label, String saved) throws IOException {
+        append(edit(after.current(), label, Instant.now()), after, saved);
     }
 
-    private void append(ObjectNode entry) throws IOException {
+    void did(String what, Timeline after, String saved) throws IOException {
+        append(MAPPER.createObjectNode().put("do", what).put("at", at(Instant.now())), after, saved);
+    }
+
+    void saved(Timeline after, String checksum) throws IOException {
+        append(MAPPER.createObjectNode().put("do", "saved").put("file", after.current().file().toString()).put("saved", checksum).put("at", at(Instant.now())),
+                after, checksum);
+    }
+
+    private static ObjectNode now(Timeline timeline, String saved) {
+        Workflow workflow = timeline.current();
+        return MAPPER.createObjectNode().put("name", workflow.name()).put("file", workflow.file().toString())
+                .put("unsaved", !saved.equals(Desk.checksum(workflow))).put("steps", workflow.steps().size());
+    }
+
+    private void append(ObjectNode entry, Timeline after, String saved) throws IOException {
+        entry.set("now", now(after, saved));
         ByteBuffer bytes = ByteBuffer.wrap(line(entry).getBytes(StandardCharsets.UTF_8));
         while (bytes.hasRemaining()) {
             channel.write(bytes);
