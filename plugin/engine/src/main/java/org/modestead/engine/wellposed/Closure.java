@@ -1,8 +1,11 @@
 package org.modestead.engine.wellposed;
 
+import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
+import org.modestead.engine.operator.InnerProduct;
+import org.modestead.engine.operator.OrthonormalCompression;
 
 /**
  * Whether the fitted functions are all there are, and whether a mode is an eigenfunction among them. Where the fitted rank takes in all
@@ -11,7 +14,8 @@ import java.util.OptionalInt;
  * is whether the mode moves as its eigenvalue says.
  *
  * <p>A space of so few functions that no ladder of three rungs stands in it (the lines of three channels, say) has been seen whole as well where
- * the ladder reaches its end: noise joins the last function, which a fit that predicts best leaves out.
+ * the ladder reaches its end: noise joins the last function, which a fit that predicts best leaves out. And a dictionary of which the
+ * ladder takes in every function has ended, however faint its last direction, for a mode that is an eigenfunction with and without that.
  *
  * <p>The residual on the judging runs answers that: in a finite space an eigenfunction misses by rounding or by what the noise explains, while a
  * projection that only imitates misses by more, however little that may be (x' = x² seen through polynomials of degree 5: 0.5 to 20 %).
@@ -30,6 +34,9 @@ final class Closure {
      */
     private static final double TIMES_NOISE = 8;
 
+    /** Largest share of it where there is no sign of an imitation at all. */
+    private static final double TENTH = 0.1;
+
     /**
      * Least square of the last singular value over the first. Where directions fade steadily, as in any space of infinitely many, the last
      * one before rounding lies close above it (1e-11): the ladder was cut, not ended.
@@ -46,10 +53,26 @@ final class Closure {
         return reached && Math.pow(singular[trusted - 1] / singular[0], 2) > CLEAR ? OptionalInt.of(trusted) : OptionalInt.empty();
     }
 
+    /**
+     * Returns a mode as it is among all functions of a dictionary, where noise explains all but a tenth of its squared residual there and with one
+     * function less. A dictionary has so many functions and no more; the landmarks of a kernel are a choice among functions without end.
+     */
+    private static Optional<LadderRow> twice(int mode, Evidence evidence) {
+        OrthonormalCompression compression = evidence.operator().compression();
+        int all = compression.basis().size();
+        int last = evidence.rungs().size() - 1;
+        if (compression.innerProduct() != InnerProduct.DATA || last < 1 || evidence.rungs().get(last) != all) {
+            return Optional.empty();
+        }
+        List<LadderRow> top = evidence.ladderOf(mode).stream().filter(row -> row.rank() >= evidence.rungs().get(last - 1)).toList();
+        return top.size() == 2 && top.stream().allMatch(row -> row.takenOff() > 0 && row.withinNoise(TENTH)) ? Optional.of(top.get(1)) : Optional.empty();
+    }
+
     /** Returns a mode of a space that has ended as it is in all of it, where it is an eigenfunction; empty otherwise. */
     static Optional<LadderRow> row(int mode, Evidence evidence) {
         OptionalInt whole = whole(evidence);
-        return evidence.ladderOf(mode).stream().filter(row -> whole.isPresent() && row.rank() == whole.getAsInt() && closed(row)).findFirst();
+        return evidence.ladderOf(mode).stream().filter(row -> whole.isPresent() && row.rank() == whole.getAsInt() && closed(row)).findFirst()
+                .or(() -> twice(mode, evidence));
     }
 
     /** Returns the residual of a mode of a space that has ended, where it is an eigenfunction of it; empty otherwise. */

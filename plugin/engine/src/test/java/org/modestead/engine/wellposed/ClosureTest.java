@@ -53,6 +53,20 @@ class ClosureTest {
     }
 
     @Test
+    void aDictionaryHasEndedWhenEveryFunctionOfItIsInHoweverFaintTheLast() {
+        // x(k+3) = x(k): mean and a third of a turn, three of four delays; the fourth holds noise only, whose square is 1e-8 of the signal's
+        double[] cycle = {0.15, 0.49, 0.96};
+        Random random = new Random(5);
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 12; i++) {
+            int phase = random.nextInt(3);
+            runs.add(Motions.run("r" + i, Motions.grid(60, 1), t -> new double[] {cycle[(phase + (int) Math.rint(t)) % 3]}, 1e-4, random));
+        }
+        Verdict verdict = Motions.judge(Motions.fit(Motions.snapshots(1, 4, runs.subList(0, 9), runs.subList(9, 12)), new LinearEstimator(), 4), JudgeSettings.DEFAULT);
+        assertTrue(verdict.overall().grade().compareTo(Grade.SETTLES) <= 0, verdict.overall().sentence());
+    }
+
+    @Test
     void polynomialsUnderTranslationAreOneDefectiveBlockAndDrift() {
         // d/dx is nilpotent on polynomials: x is a generalised eigenfunction only, CHECKS C2.18
         Snapshots snapshots = snapshots(Double::sum);
