@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
+import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.FittedOperator;
@@ -49,15 +50,19 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
      *
      * @param operator that was judged
      * @param noise its level
+     * @param progress polled for cancel
      */
-    JudgingRuns with(FittedOperator operator, SampleNoise noise) {
+    JudgingRuns with(FittedOperator operator, SampleNoise noise, Progress progress) {
         int states = runs.stream().mapToInt(StateRun::count).sum();
         int copies = Math.max(2, Math.min(MOST_COPIES, 2 * (ENOUGH_STATES / (2 * states) + 1)));
         Snapshots snapshots = operator.snapshots();
         List<Run> recorded = snapshots.runs(heldOut ? Snapshots.Part.HOLDOUT : Snapshots.Part.TRAINING).stream()
                 .filter(run -> run.samples() - snapshots.delay().reach() > 1).toList();
         List<DMatrixRMaj> noisier = noise.copies(recorded, copies / 2, new Random(SEED)).stream().flatMap(List::stream)
-                .map(run -> operator.compression().evaluate(operator.compression().arguments(snapshots.embed(run)))).toList();
+                .map(run -> {
+                    progress.checkCancelled();
+                    return operator.compression().evaluate(operator.compression().arguments(snapshots.embed(run)));
+                }).toList();
         return new JudgingRuns(heldOut, runs, functions, noisier, longest);
     }
 

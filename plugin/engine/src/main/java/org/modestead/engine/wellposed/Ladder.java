@@ -10,6 +10,7 @@ import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
+import org.modestead.engine.operator.Compression;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.PredictionError;
@@ -57,7 +58,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         double[] errors = PredictionError.relative(operator.compression(), unjudged.runs(), unjudged.functions(), ranks, progress);
         SampleNoise noise = SampleNoise.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
                 unjudged.runs(), unjudged.functions(), ranks, sample.channels()));
-        JudgingRuns judging = unjudged.with(operator, noise);
+        JudgingRuns judging = unjudged.with(operator, noise, progress);
         List<NoisierFit> noisier = noisierFits(operator, noise, ranks.get(ranks.size() - 1), sample, progress);
         List<Rung> rungs = new ArrayList<>();
         List<List<NoiseEffect>> effects = new ArrayList<>();
@@ -103,7 +104,11 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         List<NoisierFit> out = new ArrayList<>();
         for (Snapshots noisier : noise.disturbed(operator.snapshots(), 1, SEED)) {
             try {
-                OrthonormalCompression fit = Ridge.apply(operator.estimator().compress(noisier, progress).whiten(rank), operator.ridge());
+                progress.checkCancelled();
+                Compression compressed = operator.estimator().compress(noisier, progress);
+                progress.checkCancelled();
+                OrthonormalCompression fit = Ridge.apply(compressed.whiten(rank), operator.ridge());
+                progress.checkCancelled();
                 out.add(new NoisierFit(fit, fit.evaluate(sample.states())));
             } catch (FitFault fault) {
                 progress.checkCancelled();
