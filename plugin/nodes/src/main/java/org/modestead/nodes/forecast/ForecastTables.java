@@ -12,10 +12,10 @@ import org.modestead.engine.forecast.ScoreRow;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
-import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.table.TimeCells;
 
 /** Forecast, reconstruction, scores and errors as tables. Times are as recorded: number, date or date-time. */
 final class ForecastTables {
@@ -28,19 +28,19 @@ final class ForecastTables {
 
     /** Columns of the forecast of a recording with such times; {@code beyond}: outside the range that the fit has seen, so extrapolated. */
     static TableSchema forecastColumns(TimeAxis axis) {
-        return TableSchema.of(Column.text("run"), time("time", axis), Column.text("channel"), Column.number("value"),
+        return TableSchema.of(Column.text("run"), TimeCells.column("time", axis), Column.text("channel"), Column.number("value"),
                 Column.number("low"), Column.number("high"), Column.text("route"), Column.flag("beyond"));
     }
 
     /** Columns of the reconstruction of a recording with such times. */
     static TableSchema reconstructionColumns(TimeAxis axis) {
-        return TableSchema.of(Column.text("run"), time("time", axis), Column.text("channel"), Column.number("observed"),
+        return TableSchema.of(Column.text("run"), TimeCells.column("time", axis), Column.text("channel"), Column.number("observed"),
                 Column.number("reconstructed"));
     }
 
     /** Columns of the errors of a backtest on a recording with such times. */
     static TableSchema errorColumns(TimeAxis axis) {
-        return TableSchema.of(Column.text("method"), Column.text("run"), time("origin", axis), Column.number("horizon"),
+        return TableSchema.of(Column.text("method"), Column.text("run"), TimeCells.column("origin", axis), Column.number("horizon"),
                 Column.text("channel"), Column.number("error"));
     }
 
@@ -50,7 +50,7 @@ final class ForecastTables {
         Region region = Region.of(snapshots);
         for (ForecastRow row : result.forecast()) {
             progress.checkCancelled();
-            rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
+            rows.row(row.run(), TimeCells.cell(snapshots.time(), row.time()), channels.get(row.channel()), row.value(), row.low(),
                     row.high(),
                     result.routeUsed().word(), region.leaves(row.channel(), snapshots.preparation().prepare(row.channel(), row.time(),
                             row.value())));
@@ -63,7 +63,7 @@ final class ForecastTables {
         List<String> channels = names(snapshots);
         for (ReconstructionRow row : result.reconstruction()) {
             progress.checkCancelled();
-            rows.row(row.run(), cell(snapshots.time(), row.time()), channels.get(row.channel()), row.observed(),
+            rows.row(row.run(), TimeCells.cell(snapshots.time(), row.time()), channels.get(row.channel()), row.observed(),
                     row.reconstructed());
         }
         return rows.build();
@@ -82,7 +82,7 @@ final class ForecastTables {
         List<String> channels = names(snapshots);
         for (ErrorRow row : result.errors()) {
             progress.checkCancelled();
-            rows.row(row.method(), row.run(), cell(snapshots.time(), row.origin()), row.horizon(),
+            rows.row(row.method(), row.run(), TimeCells.cell(snapshots.time(), row.origin()), row.horizon(),
                     channels.get(row.channel()), row.error());
         }
         return rows.build();
@@ -90,21 +90,5 @@ final class ForecastTables {
 
     private static List<String> names(Snapshots snapshots) {
         return snapshots.channels().stream().map(Channel::name).toList();
-    }
-
-    private static Column time(String name, TimeAxis axis) {
-        return new Column(name, switch (axis.kind()) {
-            case NUMBER -> CellType.DOUBLE;
-            case DATE -> CellType.DATE;
-            case DATE_TIME -> CellType.DATE_TIME;
-        });
-    }
-
-    private static Object cell(TimeAxis axis, double time) {
-        return switch (axis.kind()) {
-            case NUMBER -> time;
-            case DATE -> axis.toDate(time);
-            case DATE_TIME -> axis.toDateTime(time);
-        };
     }
 }

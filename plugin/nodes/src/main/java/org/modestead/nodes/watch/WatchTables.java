@@ -11,10 +11,10 @@ import org.modestead.engine.watch.Sighting;
 import org.modestead.engine.watch.WatchResult;
 import org.modestead.engine.watch.WatchRow;
 import org.modestead.engine.watch.WatchedMode;
-import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
+import org.modestead.nodes.table.TimeCells;
 
 /**
  * Windows, alarms and limits as tables. Times are as recorded; frequencies in cycles per time unit. Limits are those of the moving average, in the
@@ -33,7 +33,7 @@ final class WatchTables {
     private WatchTables() {}
 
     static TableSchema watchColumns(TimeAxis axis) {
-        return TableSchema.of(Column.whole("window"), Column.text("run"), time("start", axis), time("end", axis), Column.whole("mode"),
+        return TableSchema.of(Column.whole("window"), Column.text("run"), TimeCells.column("start", axis), TimeCells.column("end", axis), Column.whole("mode"),
                 Column.flag("found"), Column.number("frequency"), Column.number("damping_ratio"), Column.number("mac"),
                 Column.number("frequency_low"), Column.number("frequency_high"), Column.number("damping_ratio_low"),
                 Column.number("damping_ratio_high"), Column.number("mac_low"), Column.number("frequency_score"), Column.number("damping_score"),
@@ -42,7 +42,7 @@ final class WatchTables {
 
     static TableSchema alarmColumns(TimeAxis axis) {
         return TableSchema.of(Column.whole("alarm"), Column.whole("mode"), Column.text("kind"), Column.whole("first_window"),
-                Column.whole("last_window"), Column.text("run"), time("start", axis), time("end", axis), time("began", axis),
+                Column.whole("last_window"), Column.text("run"), TimeCells.column("start", axis), TimeCells.column("end", axis), TimeCells.column("began", axis),
                 Column.flag("ongoing"), Column.number("before"), Column.number("after"), Column.number("change"), Column.number("height"),
                 Column.text("message"));
     }
@@ -52,7 +52,7 @@ final class WatchTables {
         for (WatchRow row : result.rows()) {
             Look look = row.look();
             WatchedMode mode = row.mode();
-            rows.row((long) look.window().number(), look.window().run(), cell(axis, look.window().start()), cell(axis, look.window().end()),
+            rows.row((long) look.window().number(), look.window().run(), TimeCells.cell(axis, look.window().start()), TimeCells.cell(axis, look.window().end()),
                     (long) mode.mode().number(), row.sighting().isPresent(), figure(row, Quantity.FREQUENCY), figure(row, Quantity.DAMPING),
                     figure(row, Quantity.SHAPE), limit(mode, Quantity.FREQUENCY, -1), limit(mode, Quantity.FREQUENCY, 1),
                     limit(mode, Quantity.DAMPING, -1), limit(mode, Quantity.DAMPING, 1), limit(mode, Quantity.SHAPE, 1),
@@ -82,8 +82,8 @@ final class WatchTables {
         List<Look> looks = result.looks();
         for (Alarm alarm : result.alarms()) {
             rows.row((long) alarm.number(), (long) alarm.mode(), alarm.kind().word(), (long) alarm.first() + 1, (long) alarm.last() + 1,
-                    looks.get(alarm.first()).window().run(), cell(axis, looks.get(alarm.first()).window().start()),
-                    cell(axis, looks.get(alarm.last()).window().end()), cell(axis, looks.get(alarm.began()).window().start()), alarm.ongoing(),
+                    looks.get(alarm.first()).window().run(), TimeCells.cell(axis, looks.get(alarm.first()).window().start()),
+                    TimeCells.cell(axis, looks.get(alarm.last()).window().end()), TimeCells.cell(axis, looks.get(alarm.began()).window().start()), alarm.ongoing(),
                     alarm.from(), alarm.to(), alarm.change(), alarm.height(), words.alarm(alarm));
         }
         return rows.build();
@@ -110,22 +110,6 @@ final class WatchTables {
             case FREQUENCY -> watched.mode().frequency();
             case DAMPING -> watched.mode().dampingRatio();
             case SHAPE -> 1;
-        };
-    }
-
-    private static Column time(String name, TimeAxis axis) {
-        return new Column(name, switch (axis.kind()) {
-            case NUMBER -> CellType.DOUBLE;
-            case DATE -> CellType.DATE;
-            case DATE_TIME -> CellType.DATE_TIME;
-        });
-    }
-
-    private static Object cell(TimeAxis axis, double time) {
-        return switch (axis.kind()) {
-            case NUMBER -> time;
-            case DATE -> axis.toDate(time);
-            case DATE_TIME -> axis.toDateTime(time);
         };
     }
 }
