@@ -18,6 +18,26 @@ def read():
     return t, np.ascontiguousarray(frame.to_numpy()), runs or [(0, len(t))]
 
 
+def samples():
+    """The recorded array, one sample a row, and the time from row to row."""
+    return np.load(sys.argv[1] + "/data.npy"), 0.05
+
+
+def snapshots():
+    """The recorded array with one snapshot a column, and the time between them."""
+    x, step = samples()
+    return x.T, step
+
+
+def foretold(last, step, functions, mu, weights, steps=100):
+    """Writes the table of what comes after the last sample."""
+    powers = mu[None, :] ** np.arange(1, steps + 1)[:, None]
+    values = ((powers * functions) @ weights).real
+    frame = pandas.DataFrame(values)
+    frame.insert(0, "time", last + step * np.arange(1, steps + 1))
+    frame.to_csv(sys.argv[1] + "/forecast.csv", index=False)
+
+
 def write(rates, **more):
     rates = np.asarray(rates)
     with open(sys.argv[1] + "/result.json", "w", encoding="utf-8") as out:

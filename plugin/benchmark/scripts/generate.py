@@ -1,6 +1,7 @@
 """Inputs of the cases: data files and workflows, the same bytes for the same size."""
 import json
 import os
+from multiprocessing import Pool
 import numpy as np
 
 CHECK = {"from": "snapshots.snapshots", "to": "check.snapshots"}
@@ -67,6 +68,85 @@ def bootstrap(folder, size):
         step("spectrum", "spectrum-extractor", {"intervals": "always", "replicates": 200})])
 
 
+def tall(folder, size):
+    """A field of many points that is the sum of fifteen rhythms, with noise; one snapshot a row."""
+    rng = np.random.default_rng(4)
+    t = np.arange(300) * 0.05
+    rates = -0.02 * (1 + np.arange(15) % 4) + 2j * np.pi * (0.21 + 0.37 * np.arange(15))
+    z = np.exp(np.outer(t, rates)) * (1.1 - 0.05 * np.arange(15))
+    x = np.concatenate([z.real, z.imag], axis=1) @ rng.standard_normal((30, size))
+    x += 1e-3 * rng.standard_normal(x.shape)
+    np.save(os.path.join(folder, "data.npy"), x)
+    workflow(folder, "tall", [
+        step("source", "table-source", {"path": "data.npy", "copy": False}),
+        step("snapshots", "snapshot-builder", {"row-step": 0.05}),
+        step("fit", "operator-fitter", {"estimator": "linear", "rank-rule": "fixed", "rank": 30}),
+        step("spectrum", "spectrum-extractor", {"intervals": "none"})])
+
+
+def csv(folder, size):
+    """Five oscillators driven by noise, seen by 16 channels, as text."""
+    from scipy.signal import lfilter
+    rng = np.random.default_rng(5)
+    y = np.zeros((size, 16))
+    for f in (0.7, 1.3, 2.1, 3.4, 5.2):
+        factor = np.exp((-0.02 * 2 * np.pi * f + 2j * np.pi * f) * 0.01)
+        push = (rng.standard_normal(size) + 1j * rng.standard_normal(size)) * np.sqrt(1 - abs(factor) ** 2)
+        z = lfilter([1], [1, -factor], push)
+        shape = rng.standard_normal(16) + 1j * rng.standard_normal(16)
+        y += np.outer(z.real, shape.real) - np.outer(z.imag, shape.imag)
+    y += 0.05 * rng.standard_normal(y.shape)
+    with open(os.path.join(folder, "data.csv"), "w", encoding="utf-8") as out:
+        out.write(",".join(["time"] + ["c%02d" % k for k in range(16)]) + "\n")
+        with Pool(2) as pool:
+            for text in pool.imap(lines, ((first, y[first:first + 50000]) for first in range(0, size, 50000))):
+                out.write(text)
+    workflow(folder, "csv", [
+        source(), step("fit", "streaming-fit", {"time-column": "time", "holdout": "none", "rank-rule": "fixed", "rank": 16}),
+        step("spectrum", "spectrum-extractor", {"intervals": "none"}), step("forecast", "forecast", {"route": "projection", "horizon": 1.0})],
+        links=[("source.table", "fit.table"), ("fit.operator", "spectrum.operator"), ("fit.snapshots", "forecast.snapshots"),
+               ("fit.operator", "forecast.operator"), ("spectrum.spectrum", "forecast.spectrum")])
+
+
+def lines(part):
+    first, rows = part
+    pattern = "%.2f" + ",%.7g" * rows.shape[1] + "\n"
+    return "".join([pattern % (0.01 * (first + k), *row) for k, row in enumerate(rows.tolist())])
+
+
+def scale(folder, size):
+    """The motion on a torus of the long kernel, 64 channels and a million snapshots."""
+    rng = np.random.default_rng(6)
+    t = np.arange(size) * 0.02
+    a, b = 2 * np.pi * 0.31 * t, 2 * np.pi * 0.097 * t
+    state = np.stack([np.cos(a), np.sin(a), np.cos(b), np.sin(b)], 1)
+    x = np.tanh(0.6 * state @ rng.normal(size=(4, 64)))
+    x += 0.02 * rng.standard_normal(x.shape)
+    fields = np.dtype([("time", "<f8")] + [("c%02d" % k, "<f8") for k in range(64)])
+    np.save(os.path.join(folder, "data.npy"), np.ascontiguousarray(np.concatenate([t[:, None], x], axis=1)).view(fields)[:, 0])
+    workflow(folder, "scale", [
+        step("source", "table-source", {"path": "data.npy", "copy": False}),
+        step("fit", "streaming-fit", {"time-column": "time", "functions": "landmarks", "landmarks": 300, "kernel": "gaussian", "scale": 6,
+                                      "holdout": "none", "rank-rule": "fixed", "rank": 300}),
+        step("spectrum", "spectrum-extractor", {"intervals": "none"})],
+        links=[("source.table", "fit.table"), ("fit.operator", "spectrum.operator")])
+
+
+def out_of_core(folder, size, program):
+    """Two rhythms of an invented recording, written as Parquet by the database in the project's jar."""
+    import subprocess
+    jar = os.path.join(os.path.dirname(program), "modestead.jar")
+    subprocess.run(["java", "-cp", jar, os.path.join(os.path.dirname(os.path.abspath(__file__)), "ManyRows.java"),
+                    os.path.join(folder, "data.parquet"), str(size)], check=True)
+    with open(os.path.join(folder, "result.json"), "w", encoding="utf-8") as out:
+        json.dump({"real": [0, 0], "imag": [2 * np.pi * 0.31, 2 * np.pi * 0.97]}, out)
+    workflow(folder, "out of core", [
+        step("source", "table-source", {"path": "data.parquet", "copy": False}),
+        step("fit", "streaming-fit", {"time-column": "time", "delay-depth": 4, "holdout": "none", "rank-rule": "fixed", "rank": 4}),
+        step("spectrum", "spectrum-extractor", {"intervals": "none"})],
+        links=[("source.table", "fit.table"), ("fit.operator", "spectrum.operator")])
+
+
 def start_up(folder, size):
     """The three flows that come as an example; nothing is made."""
     source_file = os.path.join(os.path.dirname(__file__), "..", "..", "..", "test-workflows", "three-flows", "workflow.json")
@@ -93,8 +173,8 @@ def table(folder, t, x, runs=None):
     np.savetxt(os.path.join(folder, "data.csv"), np.column_stack(columns), delimiter=",", fmt=formats, header=",".join(header), comments="")
 
 
-def workflow(folder, name, steps, kernel=False, check=False):
-    links = [("source.table", "snapshots.table"), ("snapshots.snapshots", "fit.snapshots"), ("fit.operator", "spectrum.operator")]
+def workflow(folder, name, steps, kernel=False, check=False, links=None):
+    links = links or [("source.table", "snapshots.table"), ("snapshots.snapshots", "fit.snapshots"), ("fit.operator", "spectrum.operator")]
     if kernel:
         links += [("snapshots.snapshots", "kernel.snapshots"), ("kernel.kernel", "fit.kernel")]
     if check:

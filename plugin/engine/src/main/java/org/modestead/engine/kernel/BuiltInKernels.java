@@ -22,7 +22,7 @@ public final class BuiltInKernels implements KernelLibrary {
         return new RadialFamily("gaussian", "Gaussian", "exp(-|x-y|²/(2 scale²))",
                 "The space holds no constant, no polynomial and no exponential, and its functions fade far off: no mode that grows or decays"
                         + " is in it, although forecasts through it may be good.",
-                scale -> squared -> Math.exp(-squared / (2 * scale * scale)));
+                scale -> squared -> Math.exp(-squared / (2 * scale * scale)), true);
     }
 
     /**
@@ -32,7 +32,7 @@ public final class BuiltInKernels implements KernelLibrary {
     private static KernelFamily laplacian() {
         return new RadialFamily("laplacian", "Laplacian", "exp(-|x-y|/scale)",
                 "The space holds functions with one weak derivative and no constant: a mode in it cannot be as smooth as smooth motion asks.",
-                scale -> squared -> Math.exp(-Math.sqrt(squared) / scale));
+                scale -> squared -> Math.exp(-Math.sqrt(squared) / scale), false);
     }
 
     /** {@code K(x, y) = (1 + a) e^-a} with {@code a = √3 |x-y|/s}. Rasmussen and Williams 2006, equation 4.17. */
@@ -40,7 +40,7 @@ public final class BuiltInKernels implements KernelLibrary {
         return new RadialFamily("matern32", "Matérn 3/2", "(1 + a) exp(-a), a = √3 |x-y|/scale", FINITE_SMOOTHNESS, scale -> squared -> {
             double a = Math.sqrt(3 * squared) / scale;
             return (1 + a) * Math.exp(-a);
-        });
+        }, false);
     }
 
     /** {@code K(x, y) = (1 + a + a²/3) e^-a} with {@code a = √5 |x-y|/s}. Rasmussen and Williams 2006, equation 4.17. */
@@ -49,6 +49,6 @@ public final class BuiltInKernels implements KernelLibrary {
                 scale -> squared -> {
                     double a = Math.sqrt(5 * squared) / scale;
                     return (1 + a + a * a / 3) * Math.exp(-a);
-                });
+                }, false);
     }
 }

@@ -13,8 +13,9 @@ import java.util.function.DoubleUnaryOperator;
  * @param formula in plain text
  * @param space what follows for modes from what the space holds; no space of this kind holds constants or coordinates
  * @param profile kernel as a function of the squared distance, for a scale
+ * @param smooth whether that function is smooth at zero
  */
-record RadialFamily(String id, String title, String formula, String space, DoubleFunction<DoubleUnaryOperator> profile)
+record RadialFamily(String id, String title, String formula, String space, DoubleFunction<DoubleUnaryOperator> profile, boolean smooth)
         implements KernelFamily {
 
     @Override
@@ -25,6 +26,7 @@ record RadialFamily(String id, String title, String formula, String space, Doubl
     @Override
     public Kernel create(KernelSpec spec) {
         double scale = Parameters.read(spec, this, ScaleHeuristic.PARAMETER.name());
-        return new RadialKernel(spec, new SpaceFacts(false, false, OptionalDouble.empty(), ModeRoom.STEADY, space), profile.apply(scale));
+        return new RadialKernel(spec, new SpaceFacts(false, false, OptionalDouble.empty(), ModeRoom.STEADY, space), profile.apply(scale),
+                smooth ? scale * scale : 0);
     }
 }

@@ -1,6 +1,7 @@
 package org.modestead.engine.kernel;
 
 import java.util.Arrays;
+import java.util.Optional;
 import java.util.function.DoubleUnaryOperator;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.linalg.Blocks;
@@ -13,15 +14,33 @@ import org.modestead.engine.linalg.Blocks;
  *
  * @param spec family and parameters
  * @param space facts about the space
+ * <p>Where f is smooth at zero, large matrices take the products all the same, about the mean of y: what cancellation leaves,
+ * {@code ε (|x|² + |y|²)}, is then looked at first, and must be below {@value #LOST} of the square over which f falls.
+ *
+ * @param spec family and parameters
+ * @param space facts about the space
  * @param profile f of the squared distance
+ * @param smooth square of the length over which f falls, where f is smooth at zero; 0 where it is kinked
  */
-record RadialKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile) implements Kernel {
+record RadialKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profile, double smooth) implements Kernel {
+
+    /** Multiplications from which a product is worth it. */
+    private static final long LARGE = 4_000_000;
+
+    private static final double LOST = 4e-15;
+    private static final int LEAST_WIDTH = 8;
 
     /** Differences of a block, worth handing to another core. */
     private static final int BLOCK = 1 << 18;
 
     @Override
     public DMatrixRMaj matrix(DMatrixRMaj x, DMatrixRMaj y) {
+        if (smooth > 0 && x != y && (long) x.numRows * y.numRows * x.numCols >= LARGE && x.numCols >= LEAST_WIDTH) {
+            Optional<DMatrixRMaj> squares = SquaredDistances.byProducts(x, y, LOST * smooth);
+            if (squares.isPresent()) {
+                return profiled(squares.get());
+            }
+        }
         DMatrixRMaj out = new DMatrixRMaj(x.numRows, y.numRows);
         int pairs = Math.max(1, y.numRows * Math.max(1, x.numCols));
         Blocks.of(x.numRows, Math.max(1, BLOCK / pairs), (from, to) -> {
@@ -30,6 +49,16 @@ record RadialKernel(KernelSpec spec, SpaceFacts space, DoubleUnaryOperator profi
             }
         });
         return out;
+    }
+
+    private DMatrixRMaj profiled(DMatrixRMaj squares) {
+        int q = squares.numCols;
+        Blocks.of(squares.numRows, Math.max(1, BLOCK / Math.max(1, q)), (from, to) -> {
+            for (int at = from * q; at < to * q; at++) {
+                squares.data[at] = profile.applyAsDouble(squares.data[at]);
+            }
+        });
+        return squares;
     }
 
     /** Four points of y beside each other, so that sums do not wait for each other; each is summed as it would be alone. */

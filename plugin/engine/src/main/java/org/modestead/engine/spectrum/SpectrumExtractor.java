@@ -48,7 +48,7 @@ public final class SpectrumExtractor {
         ZMatrixRMaj starts = expansion.eigenfunctions(sample.starts());
         List<Measured> measured = new ArrayList<>();
         for (List<Integer> group : Cluster.groups(expansion, clusters)) {
-            double energy = Contributions.meanSquare(Contributions.of(functions, expansion.joint(), group, 0, sample.channels()));
+            double energy = Contributions.meanSquare(functions, expansion.joint(), group, 0, sample.channels());
             measured.add(new Measured(group, energy, amplitude(expansion, starts, group, clusters, sample.channels())));
         }
         measured.sort(Comparator.comparingDouble(Measured::energy).reversed()

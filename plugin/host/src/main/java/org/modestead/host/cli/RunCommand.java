@@ -10,6 +10,7 @@ import org.modestead.host.run.CancelSwitch;
 import org.modestead.host.run.DefectLog;
 import org.modestead.host.run.RunResult;
 import org.modestead.host.run.StepOutcome;
+import org.modestead.host.run.Wanted;
 import org.modestead.host.run.WorkflowRunner;
 import org.modestead.host.workflow.RunPlan;
 import org.modestead.host.workflow.WorkflowChecker;
@@ -36,6 +37,9 @@ final class RunCommand implements Callable<Integer> {
     @Option(names = "--set", paramLabel = "STEP.KEY=VALUE", description = CheckCommand.SET_HELP)
     private List<String> set = new ArrayList<>();
 
+    @Option(names = "--only", paramLabel = "STEP.TABLE", description = "Write this table only, and no report; may be given several times.")
+    private List<String> only = new ArrayList<>();
+
     RunCommand(Terminal terminal, Supplier<NodeCatalog> catalog) {
         this.terminal = terminal;
         this.catalog = catalog;
@@ -49,12 +53,18 @@ final class RunCommand implements Callable<Integer> {
             CheckedFile.tell(terminal, outcome.problems());
             return ExitCode.WRONG;
         }
+        Wanted wanted = new Wanted(only);
+        Optional<String> unknown = wanted.problem(plan.get());
+        if (unknown.isPresent()) {
+            terminal.err().println(unknown.get());
+            return ExitCode.WRONG;
+        }
         Path target = Optional.ofNullable(out).orElse(plan.get().workflow().baseFolder().resolve("out"));
         CancelSwitch cancel = new CancelSwitch();
         ProgressLine progress = new ProgressLine(terminal, plan.get().steps().size());
         RunResult result;
         try (Interrupt interrupt = Interrupt.on(cancel, terminal)) {
-            result = WorkflowRunner.once().run(plan.get(), target, progress, cancel);
+            result = WorkflowRunner.once().run(plan.get(), target, wanted, progress, cancel);
             interrupt.ended(result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED);
         } finally {
             progress.close();

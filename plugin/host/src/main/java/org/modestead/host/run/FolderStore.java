@@ -6,6 +6,7 @@ import org.modestead.engine.Progress;
 import org.modestead.host.output.CsvWriter;
 import org.modestead.host.output.OutputFolder;
 import org.modestead.host.table.DuckDbTable;
+import org.modestead.host.table.NpyTable;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.Port;
@@ -15,9 +16,11 @@ import org.modestead.nodes.table.Table;
 final class FolderStore implements StepStore {
 
     private final OutputFolder folder;
+    private final Wanted wanted;
 
-    FolderStore(OutputFolder folder) {
+    FolderStore(OutputFolder folder, Wanted wanted) {
         this.folder = folder;
+        this.wanted = wanted;
     }
 
     @Override
@@ -28,7 +31,7 @@ final class FolderStore implements StepStore {
     @Override
     public void keep(PlannedStep step, NodeResult result, Progress progress) throws IOException {
         for (Port port : step.declaration().outputs()) {
-            if (result.outputs().get(port.id()) instanceof Table table && belongs(table)) {
+            if (result.outputs().get(port.id()) instanceof Table table && belongs(table) && wanted.table(step.id(), port.id())) {
                 progress.report(0, "writing " + port.id() + ".csv");
                 folder.write(step.id() + "/" + port.id() + ".csv", out -> CsvWriter.write(table, out, progress));
             }
@@ -37,6 +40,6 @@ final class FolderStore implements StepStore {
     }
 
     private static boolean belongs(Table table) {
-        return !(table instanceof DuckDbTable stored) || stored.isCopied();
+        return table instanceof DuckDbTable stored ? stored.isCopied() : !(table instanceof NpyTable array) || array.isCopied();
     }
 }

@@ -52,24 +52,36 @@ public final class WorkflowRunner {
      * @throws OutputFault if the folder cannot be used
      */
     public RunResult run(RunPlan plan, Path target, RunListener listener, CancelSwitch cancel) {
+        return run(plan, target, Wanted.ALL, listener, cancel);
+    }
+
+    /**
+     * Runs a workflow and writes what is wanted of it.
+     *
+     * @param wanted tables of steps of the plan
+     * @throws OutputFault if the folder cannot be used
+     */
+    public RunResult run(RunPlan plan, Path target, Wanted wanted, RunListener listener, CancelSwitch cancel) {
         Instant started = Instant.now();
         try (OutputFolder folder = OutputFolder.open(target, disk)) {
-            StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder), listener,
+            StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder, wanted), listener,
                     cancel);
             Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener, cancel).run(threads);
             RunResult result = new RunResult(plan, outcomes, folder.folder(), Duration.between(started, Instant.now()),
                     cancel.reason().isPresent());
             if (result.state() == RunResult.State.DONE || result.state() == RunResult.State.FAILED) {
-                publish(result, started, folder);
+                publish(result, started, folder, wanted);
             }
             return result;
         }
     }
 
-    private static void publish(RunResult result, Instant started, OutputFolder folder) {
+    private static void publish(RunResult result, Instant started, OutputFolder folder, Wanted wanted) {
         try {
-            byte[] report = HtmlReport.write(RunDocument.of(result)).getBytes(StandardCharsets.UTF_8);
-            folder.write(REPORT, out -> out.write(report));
+            if (wanted.report()) {
+                byte[] report = HtmlReport.write(RunDocument.of(result)).getBytes(StandardCharsets.UTF_8);
+                folder.write(REPORT, out -> out.write(report));
+            }
             List<String> earlier = RunRecord.filesOf(folder.folder());
             byte[] record = RunRecord.write(result, started, folder.files());
             folder.write(RunRecord.NAME, out -> out.write(record));

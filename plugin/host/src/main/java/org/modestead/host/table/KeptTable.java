@@ -17,7 +17,7 @@ public final class KeptTable {
 
     /** Returns whether a table makes its rows anew from files or a query, so that it costs nothing to keep and to make again. */
     public static boolean isMadeAnew(Table table) {
-        return table instanceof DuckDbTable;
+        return table instanceof DuckDbTable || table instanceof NpyTable;
     }
 
     /**

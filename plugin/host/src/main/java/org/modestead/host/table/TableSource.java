@@ -17,6 +17,7 @@ import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
 
 /** Node: brings in a table from a file. */
@@ -25,6 +26,7 @@ public final class TableSource implements Node {
     private static final String CSV = "csv";
     private static final String PARQUET = "parquet";
     private static final String JSON = "json";
+    private static final String NPY = "npy";
     private static final String AUTO = "auto";
     private static final long MOST_SKIPPED = 1_000_000;
 
@@ -34,7 +36,7 @@ public final class TableSource implements Node {
     @Override
     public NodeDeclaration declaration() {
         return new NodeDeclaration("table-source", "Table Source", NodeDeclaration.Stage.DATA,
-                "Reads a table from a CSV, Parquet or JSON file.",
+                "Reads a table from a CSV, Parquet, JSON or NPY file.",
                 """
                 Reads the file row by row whenever somebody asks for the rows, so it may be far larger than memory.
 
@@ -45,10 +47,13 @@ public final class TableSource implements Node {
                 without any cell (a delimiter at the end of each line) is left out; other columns without a name are
                 called column1, column2 and so on by their position.
 
+                An NPY file holds an array as NumPy saves it, one row a time: its fields are columns of their names, other arrays give columns
+                called column1, column2 and so on, and one column of lists called values where there are more than 1000.
+
                 The types are found in the first 20480 rows; columns that look whole or empty there are read to the end
                 once more.""",
                 List.of("RFC 4180, Common Format and MIME Type for CSV Files, 2005"),
-                List.of("csv", "parquet", "json", "import", "read", "load", "file"),
+                List.of("csv", "parquet", "json", "npy", "numpy", "import", "read", "load", "file"),
                 List.of(),
                 List.of(Port.of("table", PortType.TABLE, "Table", "The rows of the file.")),
                 settings(), 1);
@@ -63,14 +68,15 @@ public final class TableSource implements Node {
                 new Setting.File(new Setting.Common("path", "File", "File",
                         "The file to read; a name is looked up in the folder of the workflow. A folder of Parquet files is read as one"
                         + " table, in the order of their names."), true,
-                        List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson"), true),
+                        List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson", NPY), true),
                 new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by "
                 + "the "
-                        + "end of its name: .parquet, .json, .jsonl, .ndjson, and CSV for all others."),
+                        + "end of its name: .parquet, .json, .jsonl, .ndjson, .npy, and CSV for all others."),
                         List.of(new Setting.Option(AUTO, "By name", "Goes by the end of the file's name."),
                                 new Setting.Option(CSV, "CSV", "Text with one row a line; also gzipped."),
                                 new Setting.Option(PARQUET, "Parquet", "Columnar file with typed columns."),
-                                new Setting.Option(JSON, "JSON", "A list of objects, or one object a line.")), AUTO));
+                                new Setting.Option(JSON, "JSON", "A list of objects, or one object a line."),
+                                new Setting.Option(NPY, "NPY", "An array as NumPy saves it.")), AUTO));
     }
 
     private static List<Setting> csvSettings() {
@@ -132,7 +138,7 @@ public final class TableSource implements Node {
 
     @Override
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
-        DuckDbTable table = open(settings, context);
+        Table table = open(settings, context);
         List<String> columns = table.schema().columns().stream()
                 .map(column -> column.name() + " (" + column.type().title() + ")").toList();
         return new NodeResult(Map.of("table", table), List.of(),
@@ -141,7 +147,7 @@ public final class TableSource implements Node {
                 List.of());
     }
 
-    private static DuckDbTable open(Settings settings, RunContext context) {
+    private static Table open(Settings settings, RunContext context) {
         String shown = settings.text("path");
         Path path = context.baseFolder().resolve(shown).toAbsolutePath().normalize();
         SourceLimits limits = new SourceLimits(settings.whole("memory"), settings.flag("copy"));
@@ -152,6 +158,9 @@ public final class TableSource implements Node {
         String format = format(settings, shown);
         if (format.equals(PARQUET)) {
             return ParquetSource.open(path, shown, limits);
+        }
+        if (format.equals(NPY)) {
+            return NpyTable.open(path, shown, settings.flag("copy"));
         }
         List<String> missing = settings.texts("missing");
         TextFile file = format.equals(JSON) ? JsonSource.open(path, shown, missing, limits)
@@ -168,6 +177,8 @@ public final class TableSource implements Node {
             return chosen;
         } else if (name.endsWith(".parquet")) {
             return PARQUET;
+        } else if (name.endsWith(".npy")) {
+            return NPY;
         }
         String plain = name.endsWith(".gz") ? name.substring(0, name.length() - ".gz".length()) : name;
         return plain.endsWith(".json") || plain.endsWith(".jsonl") || plain.endsWith(".ndjson") ? JSON : CSV;

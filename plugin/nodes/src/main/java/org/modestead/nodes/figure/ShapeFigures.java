@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.spectrum.Mode;
@@ -15,6 +16,8 @@ import org.modestead.nodes.words.TimeUnit;
 
 /** How strongly, and how far out of step, each channel moves in a mode. */
 public final class ShapeFigures {
+    private static final int MOST_DRAWN = 1000;
+
     private ShapeFigures() {}
 
     /**
@@ -28,44 +31,59 @@ public final class ShapeFigures {
      */
     public static List<Figure> figures(Spectrum spectrum, Preparation preparation, int modes) {
         List<Figure> figures = new ArrayList<>();
+        boolean oneUnit = spectrum.channels().stream().map(Channel::unit).distinct().count() == 1;
         spectrum.modes().stream().filter(mode -> !mode.constant()).limit(modes).forEach(mode -> {
-            Shape shape = new Shape(spectrum, mode, preparation);
+            Shape shape = new Shape(spectrum, mode, preparation, newest(spectrum, mode, preparation), oneUnit);
             figures.add(shape.magnitude());
             figures.add(shape.phase());
         });
         return List.copyOf(figures);
     }
 
-    private record Shape(Spectrum spectrum, Mode mode, Preparation preparation) {
+    private static List<ModeShapes.Entry> newest(Spectrum spectrum, Mode mode, Preparation preparation) {
+        return ModeShapes.of(spectrum, mode, preparation).stream().filter(entry -> entry.delay() == 0)
+                .sorted(Comparator.comparingInt(ModeShapes.Entry::channelIndex)).toList();
+    }
+
+    private record Shape(Spectrum spectrum, Mode mode, Preparation preparation, List<ModeShapes.Entry> newest, boolean oneUnit) {
+
+        /** Evenly spaced channels where there are more than a picture can show. */
+        private List<ModeShapes.Entry> drawn() {
+            int every = every();
+            return IntStream.range(0, (newest.size() + every - 1) / every).mapToObj(k -> newest.get(k * every)).toList();
+        }
+
+        private int every() {
+            return Math.max(1, (newest.size() + MOST_DRAWN - 1) / MOST_DRAWN);
+        }
+
+        private String thinned() {
+            return every() == 1 ? "" : " Of " + newest.size() + " channels one in " + every() + " is drawn.";
+        }
 
         Figure magnitude() {
-            double[] sizes = newest().stream().mapToDouble(this::size).toArray();
-            double largest = Arrays.stream(sizes).max().orElse(0);
-            double[] heights = Arrays.stream(sizes).map(size -> largest > 0 ? size / largest : 0).toArray();
-            String scaled = oneUnit() ? "" : " Units differ, so each channel was first divided by the scale it was"
+            double largest = newest.stream().mapToDouble(this::size).max().orElse(0);
+            double[] heights = drawn().stream().mapToDouble(this::size).map(size -> largest > 0 ? size / largest : 0).toArray();
+            String scaled = oneUnit ? "" : " Units differ, so each channel was first divided by the scale it was"
                     + " prepared with.";
             return new Figure("shape-" + mode.number() + "-magnitude", Figure.Kind.SHAPES, title("magnitude"),
-                    "How far each channel moves in this mode, relative to the one that moves most." + scaled, channels(),
+                    "How far each channel moves in this mode, relative to the one that moves most." + scaled + thinned(), channels(),
                     Figure.Axis.linear("relative magnitude"),
                     List.of(new Figure.Bars("", "mode:" + mode.number(), heights)));
         }
 
-        private boolean oneUnit() {
-            return spectrum.channels().stream().map(Channel::unit).distinct().count() == 1;
-        }
-
         private double size(ModeShapes.Entry entry) {
-            return oneUnit() ? entry.magnitude() : entry.magnitude() / preparation.scale()[entry.channelIndex()];
+            return oneUnit ? entry.magnitude() : entry.magnitude() / preparation.scale()[entry.channelIndex()];
         }
 
         Figure phase() {
-            double[] degrees = newest().stream().mapToDouble(entry -> Math.toDegrees(entry.phase())).toArray();
+            double[] degrees = drawn().stream().mapToDouble(entry -> Math.toDegrees(entry.phase())).toArray();
             double[] positions = new double[degrees.length];
             Arrays.setAll(positions, i -> i);
             return new Figure("shape-" + mode.number() + "-phase", Figure.Kind.SHAPES, title("phase"),
                     "Phase of each channel against the one that moves most: 0° in step, 180° against it. Channels that"
                     + " hardly move"
-                            + " have a phase by chance.",
+                            + " have a phase by chance." + thinned(),
                     channels(), Figure.Axis.linear("phase [°]"), List.of(
                             new Figure.Rule("", "", false, -180), new Figure.Rule("", "", false, 0),
                             new Figure.Rule("", "", false, 180),
@@ -73,13 +91,8 @@ public final class ShapeFigures {
                                     Collections.nCopies(degrees.length, ""), Figure.Emphasis.STRONG)));
         }
 
-        private List<ModeShapes.Entry> newest() {
-            return ModeShapes.of(spectrum, mode, preparation).stream().filter(entry -> entry.delay() == 0)
-                    .sorted(Comparator.comparingInt(ModeShapes.Entry::channelIndex)).toList();
-        }
-
         private Figure.Axis channels() {
-            return Figure.Axis.categories("channel", newest().stream().map(entry -> entry.channel().name()).toList());
+            return Figure.Axis.categories("channel", drawn().stream().map(entry -> entry.channel().name()).toList());
         }
 
         private String title(String quantity) {

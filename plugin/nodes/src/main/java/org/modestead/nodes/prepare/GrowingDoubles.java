@@ -16,6 +16,14 @@ final class GrowingDoubles {
         values[size++] = value;
     }
 
+    void add(double[] more) {
+        if (size + more.length > values.length) {
+            values = Arrays.copyOf(values, Math.max(2 * size, size + more.length));
+        }
+        System.arraycopy(more, 0, values, size, more.length);
+        size += more.length;
+    }
+
     int size() {
         return size;
     }

@@ -1,6 +1,5 @@
 package org.modestead.nodes.prepare;
 
-import java.util.function.DoubleConsumer;
 import org.modestead.nodes.table.RowCursor;
 import org.modestead.nodes.table.Table;
 
@@ -12,7 +11,7 @@ sealed interface MeasuredCell permits NumberCell, NumberListCell {
      *
      * @throws org.modestead.engine.RecordingFault when the cell cannot be used
      */
-    void read(RowCursor cursor, DoubleConsumer into);
+    void read(RowCursor cursor, GrowingDoubles into);
 
     /** Returns where a cell of the current row is, for messages. */
     static String place(String origin, RowCursor cursor, String column) {

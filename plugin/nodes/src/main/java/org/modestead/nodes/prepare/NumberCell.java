@@ -2,7 +2,6 @@ package org.modestead.nodes.prepare;
 
 import java.math.BigDecimal;
 import java.util.OptionalDouble;
-import java.util.function.DoubleConsumer;
 import org.modestead.engine.RecordingFault;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.RowCursor;
@@ -18,8 +17,8 @@ import org.modestead.nodes.table.RowCursor;
 record NumberCell(String origin, String name, int column, CellType type) implements MeasuredCell {
 
     @Override
-    public void read(RowCursor cursor, DoubleConsumer into) {
-        into.accept(read(cursor));
+    public void read(RowCursor cursor, GrowingDoubles into) {
+        into.add(read(cursor));
     }
 
     /** Returns the number in the current row, NaN when it is missing. */

@@ -1,9 +1,7 @@
 package org.modestead.nodes.prepare;
 
 import java.util.Optional;
-import java.util.function.DoubleConsumer;
 import org.modestead.engine.RecordingFault;
-import org.modestead.nodes.table.ListCell;
 import org.modestead.nodes.table.RowCursor;
 
 /**
@@ -17,15 +15,15 @@ import org.modestead.nodes.table.RowCursor;
 record NumberListCell(String origin, String name, int column, int width) implements MeasuredCell {
 
     @Override
-    public void read(RowCursor cursor, DoubleConsumer into) {
-        Optional<Object> cell = cursor.cell(column);
+    public void read(RowCursor cursor, GrowingDoubles into) {
+        Optional<double[]> cell = cursor.numbers(column);
         if (cell.isEmpty()) {
             for (int i = 0; i < width; i++) {
-                into.accept(Double.NaN);
+                into.add(Double.NaN);
             }
             return;
         }
-        double[] numbers = ((ListCell) cell.get()).numbers();
+        double[] numbers = cell.get();
         if (numbers.length != width) {
             throw fault(cursor, "the list has " + entries(numbers.length) + ", not " + width + " as told or seen before",
                     "give every row a list of as many numbers, or leave the cell empty when all are missing");
@@ -34,8 +32,8 @@ record NumberListCell(String origin, String name, int column, int width) impleme
             if (Double.isInfinite(numbers[i])) {
                 throw fault(cursor, "entry " + (i + 1) + " of the list is infinite", "give a finite number or leave the entry empty");
             }
-            into.accept(numbers[i]);
         }
+        into.add(numbers);
     }
 
     private static String entries(int count) {

@@ -120,8 +120,8 @@ final class RecordingReader {
         }
         weightCell.ifPresent(cell -> readWeight(cell, cursor, run));
         run.start(cursor.row(), at);
-        channelCells.forEach(cell -> cell.read(cursor, run::value));
-        inputCells.forEach(cell -> cell.read(cursor, run::input));
+        channelCells.forEach(cell -> cell.read(cursor, run.values));
+        inputCells.forEach(cell -> cell.read(cursor, run.inputs));
         watches.forEach(watch -> watch.see(cursor));
     }
 
@@ -140,7 +140,7 @@ final class RecordingReader {
 
     private double timeOf(RowCursor cursor, RecordedTime time) {
         String name = columns.time();
-        if (cursor.isMissing(timeColumn) || cursor.text(timeColumn).isBlank()) {
+        if (cursor.isMissing(timeColumn) || type(name) == CellType.TEXT && cursor.text(timeColumn).isBlank()) {
             throw new RecordingFault(place(cursor, name), "the time is missing", "give every row its time or leave the"
                     + " row out");
         }
@@ -231,14 +231,6 @@ final class RecordingReader {
         void start(long row, double time) {
             lastRow = row;
             times.add(time);
-        }
-
-        void value(double value) {
-            values.add(value);
-        }
-
-        void input(double value) {
-            inputs.add(value);
         }
 
         Run finish(int channels, int knownInputs) {

@@ -27,6 +27,14 @@ public interface RowCursor extends AutoCloseable {
     /** Returns the number in a column of type DOUBLE or LONG; NaN when missing. */
     double number(int column);
 
+    /**
+     * Returns the numbers of a cell in a column of lists of numbers, NaN where an entry is missing; empty when the cell is. They may be
+     * written over when the cursor moves on.
+     */
+    default Optional<double[]> numbers(int column) {
+        return cell(column).map(list -> ((ListCell) list).numbers());
+    }
+
     /** Returns the cell written as text whatever its type; empty when missing. */
     default String text(int column) {
         return cell(column).map(Object::toString).orElse("");
