@@ -1,7 +1,7 @@
 """
 Runs every case beside its comparison scripts and prints the table of the README.
 
-    python3 bench.py --modestead ../../host/target/modestead [--cases long-kernel,generator] [--minutes 28] [--scale 1] [--readme ../../../README.md]
+    python3 bench.py --jar ../../host/target/modestead.jar [--cases long-kernel,generator] [--minutes 28] [--scale 1] [--readme ../../../README.md]
 
 Each contender is a whole process, start-up and reading of the file included, on the same cores; contenders take turns so that what disturbs the
 machine disturbs all. A ratio is the median of this project over the median of a script; beside it stands the spread, (largest - smallest) / median
@@ -219,14 +219,14 @@ def machine():
 
 def main():
     parser = argparse.ArgumentParser(description=__doc__.split("\n\n")[0].strip())
-    parser.add_argument("--modestead", required=True, help="the launch script beside the jar")
+    parser.add_argument("--jar", required=True, help="the runnable jar; the launch script beside it is what is run")
     parser.add_argument("--cases", default=",".join(CASES))
     parser.add_argument("--minutes", type=float, default=28, help="after which nothing is repeated and no slope is measured any more")
     parser.add_argument("--scale", type=float, default=1, help="of the sizes, to try the harness")
     parser.add_argument("--no-slope", action="store_true", help="leave out the runs at an eighth, a quarter and half of the size")
     parser.add_argument("--readme", help="write the table there, between its marks")
     arguments = parser.parse_args()
-    program = os.path.abspath(arguments.modestead)
+    program = os.path.join(os.path.dirname(os.path.abspath(arguments.jar)), "modestead")
     deadline = time.monotonic() + 60 * arguments.minutes
     lines = ["Measured on %s." % machine(), "",
              "| case | this project | textbook | expert | / textbook | / expert | slope | rates apart |", "|---|---|---|---|---|---|---|---|"]

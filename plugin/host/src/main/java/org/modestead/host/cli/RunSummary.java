@@ -1,6 +1,7 @@
 package org.modestead.host.cli;
 
 import java.io.PrintStream;
+import java.nio.file.Files;
 import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
@@ -83,7 +84,9 @@ final class RunSummary {
         if (doubts > 0) {
             out.println(doubts == 1 ? "1 doubt is told in the report." : doubts + " doubts are told in the report.");
         }
-        out.println("Report: " + result.folder().resolve(WorkflowRunner.REPORT));
+        if (Files.exists(result.folder().resolve(WorkflowRunner.REPORT))) {
+            out.println("Report: " + result.folder().resolve(WorkflowRunner.REPORT));
+        }
     }
 
     /** Tells the verdict of a step that judges; returns whether it is one. */

@@ -32,7 +32,7 @@ record NpyHeader(long rows, int columns, List<String> names, int bytes, long sta
     private static final Pattern ORDER = Pattern.compile("'fortran_order'\\s*:\\s*(True|False)");
     private static final Pattern SHAPE = Pattern.compile("'shape'\\s*:\\s*\\(\\s*(\\d+)\\s*(?:,\\s*(\\d+)\\s*)?,?\\s*\\)");
     private static final Pattern PLAIN = Pattern.compile("'descr'\\s*:\\s*'<f([48])'");
-    private static final Pattern STRUCTURED = Pattern.compile("'descr'\\s*:\\s*\\[(.*?)\\]");
+    private static final Pattern STRUCTURED = Pattern.compile("'descr'\\s*:\\s*\\[(.*)\\]\\s*,\\s*'fortran_order'");
     private static final Pattern FIELD = Pattern.compile("\\s*\\(\\s*'([^']*)'\\s*,\\s*'<f([48])'\\s*\\)\\s*,?\\s*");
 
     static NpyHeader read(FileChannel file, String shown) throws IOException {

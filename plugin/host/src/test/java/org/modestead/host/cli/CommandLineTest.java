@@ -48,6 +48,17 @@ class CommandLineTest {
     }
 
     @Test
+    void onlyTheTablesAskedForAreWrittenAndNoReport() throws IOException {
+        TestWorkflows.write(folder, List.of("a:source", "b:pass"), List.of("a.table>b.a"));
+        assertEquals(0, run("run", folder.toString(), "--only", "b.table"));
+        assertTrue(Files.exists(folder.resolve("out/b/table.csv")));
+        assertFalse(Files.exists(folder.resolve("out/a/table.csv")));
+        assertFalse(Files.exists(folder.resolve("out/report.html")));
+        assertEquals(2, run("run", folder.toString(), "--only", "b.tabel"));
+        assertTrue(err().contains("--only b.tabel: no step gives such a table; there are a.table, b.table.\n"), this::err);
+    }
+
+    @Test
     void settingsAndFolderOfTheCommandLineCount() throws IOException {
         TestWorkflows.write(folder, List.of("a:source"), List.of());
         assertEquals(0, run("run", folder.resolve("workflow.json").toString(), "--out", folder.resolve("x/y")
