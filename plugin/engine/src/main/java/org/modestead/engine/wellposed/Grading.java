@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.spectrum.Mode;
 
@@ -14,9 +15,9 @@ import org.modestead.engine.spectrum.Mode;
  * <li>the space norm grows from rung to rung, the residual stays above its threshold and noise does not explain it, or in the space of a kernel neither
  * rate nor weight
  *     settles and the residual is not close on any rung: absent
- * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises, or
- * rate or
- *     weight keep changing: drifts
+ * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises,
+ *     rate or weight that keep changing, or, in a mode that is nearly all of the signal, a residual that is not close and another rate in the second half of
+ *     the runs than in the first: drifts
  * <li>too few rungs, nothing held out, a residual that noise explains, a fitted rank that does not show the mode as it is, too small a share captured, or another step
  *     disagrees: undecided
  * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not
@@ -41,7 +42,7 @@ final class Grading {
         }
         boolean counts = evidence.carries(mode);
         for (Grade grade : List.of(Grade.ABSENT, Grade.DRIFTS, Grade.UNDECIDED, Grade.SETTLES)) {
-            List<Finding> against = against(grade, mode.number(), evidence, findings);
+            List<Finding> against = against(grade, mode, evidence, findings);
             if (!against.isEmpty()) {
                 return verdict(mode, grade, against, counts);
             }
@@ -50,8 +51,9 @@ final class Grading {
         return verdict(mode, Grade.STANDS, deciding, counts);
     }
 
-    private static List<Finding> against(Grade grade, int mode, Evidence evidence, List<Finding> findings) {
+    private static List<Finding> against(Grade grade, Mode judged, Evidence evidence, List<Finding> findings) {
         List<Finding> out = new ArrayList<>();
+        int mode = judged.number();
         switch (grade) {
             case ABSENT -> {
                 failed(findings, mode, "space-norm-growth").ifPresent(out::add);
@@ -67,6 +69,7 @@ final class Grading {
                 failed(findings, mode, "determined-rate").ifPresent(out::add);
                 failed(findings, mode, SignalInSpace.LIKENESS).ifPresent(out::add);
                 exceeded(findings, mode, "settling").ifPresent(out::add);
+                out.addAll(wandering(findings, judged, evidence));
             }
             case UNDECIDED -> {
                 failed(findings, mode, "settling").ifPresent(out::add);
@@ -96,6 +99,13 @@ final class Grading {
         Optional<Finding> unsettled = exceeded(findings, mode, "settling");
         Optional<Finding> missing = exceeded(findings, mode, "close-residual");
         return unsettled.isPresent() && missing.isPresent() ? List.of(unsettled.get(), missing.get()) : List.of();
+    }
+
+    /** Neither does a mode that is nearly all of the signal keep its own rule of motion closely nor its rate from one half of the runs to the other. */
+    private static List<Finding> wandering(List<Finding> findings, Mode mode, Evidence evidence) {
+        Optional<Finding> missing = exceeded(findings, mode.number(), "close-residual").filter(f -> SteadyRate.wanders(mode, evidence));
+        return findings.stream().filter(f -> missing.isPresent() && f.mode() == mode.number() && f.check().equals("steady-rate"))
+                .flatMap(steady -> Stream.of(steady, missing.get())).toList();
     }
 
     /** Whether noise in the runs judged on explains so much of the residual that what is left may be the error of rates fitted in noise. */

@@ -59,6 +59,21 @@ class HalfRatesTest {
         assertTrue(steady(decay(0.2, 0.002, new Random(1))).passed());
     }
 
+    /** t sin(t + phase), a defective pair at ±i: the pair that noise leaves to be seen grows faster at first than later. */
+    @Test
+    void aToneThatGrowsLikeTimeIsNotReportedUnderNoise() {
+        Random random = new Random(3);
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 20; i++) {
+            double phase = 2 * Math.PI * random.nextDouble();
+            runs.add(Motions.run("r" + i, Motions.grid(120, 0.2), t -> new double[] {t * Math.sin(t + phase)}, 0.1, random));
+        }
+        FittedOperator operator = Motions.fit(Motions.snapshots(0.2, 8, runs.subList(0, 15), runs.subList(15, 20)), new LinearEstimator(), 2);
+        Verdict verdict = Motions.judge(operator, JudgeSettings.DEFAULT);
+        assertEquals(Grade.DRIFTS, verdict.overall().grade(), verdict.overall().sentence());
+        assertEquals(List.of("steady-rate", "close-residual"), verdict.overall().decidedBy());
+    }
+
     @Test
     void theErrorIsTheSizeOfTheChangesThatNoiseMakes() {
         Random random = new Random(5);
