@@ -18,8 +18,8 @@ import org.modestead.engine.spectrum.Mode;
  * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises,
  *     rate or weight that keep changing, or, in a mode that is nearly all of the signal, a residual that is not close and another rate in the second half of
  *     the runs than in the first: drifts
- * <li>too few rungs, nothing held out, a residual that noise explains, a fitted rank that does not show the mode as it is, too small a share captured, or another step
- *     disagrees: undecided
+ * <li>too few rungs, nothing held out, neither a residual nor settling to be seen in the noise, a residual that noise explains, a fitted rank that does not
+ *     show the mode as it is, too small a share captured, or another step disagrees: undecided
  * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not
  * hold
  *     the signal: settles
@@ -77,6 +77,7 @@ final class Grading {
                 failed(findings, mode, "fitted-rank").ifPresent(out::add);
                 failed(findings, 0, "captured-share").ifPresent(out::add);
                 failed(findings, mode, "step-consistency").ifPresent(out::add);
+                unseen(findings, mode).ifPresent(out::add);
                 if (!evidence.heldOut()) {
                     out.add(new Finding(mode, "holdout-residual", Double.NaN, Double.NaN, false,
                             "Nothing was held out, so its residual is no independent evidence: hold out runs or a tail."));
@@ -106,6 +107,12 @@ final class Grading {
         Optional<Finding> missing = exceeded(findings, mode.number(), "close-residual").filter(f -> SteadyRate.wanders(mode, evidence));
         return findings.stream().filter(f -> missing.isPresent() && f.mode() == mode.number() && f.check().equals("steady-rate"))
                 .flatMap(steady -> Stream.of(steady, missing.get())).toList();
+    }
+
+    /** No rung tells how well a mode keeps its rule, and that it settles was not seen either but excused by noise: nothing speaks for it. */
+    private static Optional<Finding> unseen(List<Finding> findings, int mode) {
+        boolean excused = findings.stream().anyMatch(f -> f.mode() == mode && f.check().equals("settling") && f.passed() && !(f.value() <= f.threshold()));
+        return failed(findings, mode, "close-residual").filter(f -> excused && Double.isNaN(f.value()));
     }
 
     /** Whether noise in the runs judged on explains so much of the residual that what is left may be the error of rates fitted in noise. */

@@ -65,6 +65,16 @@ class GradingTest {
     }
 
     @Test
+    void whereNeitherResidualNorSettlingCouldBeSeenNothingIsReported() {
+        Finding unseen = new Finding(1, "close-residual", Double.NaN, 0.05, false, "On no rung.");
+        Finding excused = new Finding(1, "settling", 1, 0.1, true, "Noise makes as much of it.");
+        Finding settled = new Finding(1, "settling", 0.02, 0.1, true, "It settles.");
+        assertEquals(Grade.UNDECIDED, Grading.grade(mode(1, false), evidence(true), List.of(unseen, excused)).grade());
+        assertEquals(List.of("close-residual"), Grading.grade(mode(1, false), evidence(true), List.of(unseen, excused)).decidedBy());
+        assertEquals(Grade.SETTLES, Grading.grade(mode(1, false), evidence(true), List.of(unseen, settled)).grade());
+    }
+
+    @Test
     void nothingAgainstAModeMakesItStandByTheChecksThatDecided() {
         ModeVerdict verdict = grade();
         assertEquals(Grade.STANDS, verdict.grade());
