@@ -84,7 +84,8 @@ final class Journal implements AutoCloseable {
             return Optional.empty();
         }
         try {
-            return new Reader().read(Files.readString(file).lines().toList());
+            // a line that was torn within a letter is no UTF-8: it must not take the lines before it along
+            return new Reader().read(new String(Files.readAllBytes(file), StandardCharsets.UTF_8).lines().toList());
         } catch (IOException unreadable) {
             return Optional.empty();
         }

@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
@@ -32,6 +33,8 @@ import org.modestead.nodes.contract.NodeCatalog;
 class TimelinePropertiesTest {
 
     private static final NodeCatalog NODES = TestWorkflows.allNodes();
+    /** Cut within the second letter of the word, of which only the first of two bytes is there. */
+    private static final byte[] HALF_A_LINE = Arrays.copyOf("{\"do\":\"edit\",\"label\":\"d\u00e9".getBytes(StandardCharsets.UTF_8), 24);
     private Path root;
 
     @BeforeProperty
@@ -82,7 +85,7 @@ class TimelinePropertiesTest {
         // the process is gone without closing anything: its lock goes with it, here by hand; the last line is cut in two
         Files.deleteIfExists(own.resolve(".lock"));
         Path journal = own.resolve("journal.jsonl");
-        Files.writeString(journal, "{\"do\":\"edit\",\"label\":\"half-writ", java.nio.file.StandardOpenOption.APPEND);
+        Files.write(journal, HALF_A_LINE, java.nio.file.StandardOpenOption.APPEND);
         try (Desk again = Desk.resume(own)) {
             assertEquals(left, again.timeline());
             assertEquals(left.undoLabel(), again.timeline().undoLabel());
