@@ -236,7 +236,7 @@ final class Fresh {
             double v = size * (u[0] * sin(1.4 * t) + u[1] * cos(1.4 * t));
             return new double[] {x, v, forced(x, v)[0] + (u[2] - start[0]) * exp(-1.1 * t)};
         });
-        out.add(new Case(heat, Look.exponential(12), Truth.SETTLES));
+        out.add(new Case(heat, Look.exponential(16), Truth.SETTLES));
         out.add(new Case(heat, Look.monomials(2, 10), Truth.REPORTABLE));
     }
 
@@ -261,7 +261,7 @@ final class Fresh {
             double x = u[0] * exp(-0.5 * t);
             double angle = PI * u[1] + 1.5 * t + 0.7 * (u[0] - x);
             return new double[] {x, cos(angle), sin(angle)};
-        }), Look.exponential(16), Truth.SETTLES));
+        }), Look.exponential(20), Truth.SETTLES));
     }
 
     /**
