@@ -1,5 +1,7 @@
 package org.modestead.engine.recording;
 
+import java.util.Arrays;
+
 /**
  * Value at one sample of the least-squares parabola through 2h + 1 samples near it: h on either side, and at the ends of a run the
  * nearest ones. Of three samples a line is fitted, since a parabola meets all three.
@@ -75,6 +77,25 @@ record LocalParabola(int first, double[] weights) {
             sum += weights[i] * samples[(first + i) * n + channel];
         }
         return sum;
+    }
+
+    /**
+     * The values for neighbouring channels, each summed as {@link #value} sums it, row by row: with very many channels a column of the samples is
+     * spread over all memory.
+     *
+     * @param samples p x n
+     * @param from first channel
+     * @param out written, one a channel
+     */
+    void values(double[] samples, int n, int from, double[] out) {
+        Arrays.fill(out, 0);
+        for (int i = 0; i < weights.length; i++) {
+            double weight = weights[i];
+            int start = (first + i) * n + from;
+            for (int c = 0; c < out.length; c++) {
+                out[c] += weight * samples[start + c];
+            }
+        }
     }
 
     /** Returns the weight of the sample at which it is taken. */

@@ -3,6 +3,11 @@ package org.modestead.engine.recording;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.linalg.Blocks;
+import org.modestead.engine.linalg.LinearAlgebra;
 
 /**
  * How differently nearly equal states go on: of every sample and the one before it, the nearest other such pair is looked for (channels
@@ -19,7 +24,45 @@ final class NearestStates {
     private static final int MOST = 1500;
     private static final int ASKED = 300;
 
-    private NearestStates() {}
+    /** With more channels all distances come from matrix products. */
+    private static final int MANY = 128;
+
+    /** Channels worked on together. */
+    private static final int BLOCK = 1024;
+
+    private final int n;
+    private final List<State> states;
+    private final double[] mean;
+    private final double[] spread;
+
+    private NearestStates(List<State> states, int n) {
+        this.n = n;
+        this.states = states;
+        this.mean = new double[n];
+        this.spread = new double[n];
+        measure();
+    }
+
+    /**
+     * A sample together with the one before.
+     *
+     * @param samples of its run, p x n
+     * @param k row of the sample; the one before and the one after are there
+     */
+    private record State(double[] samples, int k) {
+
+        double now(int n, int channel) {
+            return samples[k * n + channel];
+        }
+
+        double before(int n, int channel) {
+            return samples[(k - 1) * n + channel];
+        }
+
+        double after(int n, int channel) {
+            return samples[(k + 1) * n + channel];
+        }
+    }
 
     /**
      * @param runs of n channels
@@ -27,81 +70,125 @@ final class NearestStates {
      * @return n bounds; infinite where there are too few samples
      */
     static double[] bounds(List<Run> runs, int n) {
-        List<double[]> states = states(runs, n);
+        List<State> states = states(runs);
         double[] out = new double[n];
         Arrays.fill(out, Double.POSITIVE_INFINITY);
-        if (states.size() < ASKED / 10) {
-            return out;
-        }
-        double[] spread = spread(states, n);
+        return states.size() < ASKED / 10 ? out : new NearestStates(states, n).bounds(out);
+    }
+
+    private double[] bounds(double[] out) {
         int every = Math.max(1, states.size() / ASKED);
-        List<double[]> differences = new ArrayList<>();
-        for (int i = 0; i < states.size(); i += every) {
-            double[] own = states.get(i);
-            double[] near = states.get(nearest(states, i, spread, n));
-            double[] difference = new double[n];
-            for (int c = 0; c < n; c++) {
-                difference[c] = Math.abs(own[2 * n + c] - near[2 * n + c]);
+        int[] asked = IntStream.range(0, states.size()).filter(i -> i % every == 0).toArray();
+        int[] near = n > MANY ? nearestByProducts(asked) : Arrays.stream(asked).map(this::nearest).toArray();
+        Blocks.of(n, BLOCK, (from, to) -> {
+            double[] sorted = new double[asked.length];
+            for (int c = from; c < to; c++) {
+                for (int i = 0; i < asked.length; i++) {
+                    sorted[i] = Math.abs(states.get(asked[i]).after(n, c) - states.get(near[i]).after(n, c));
+                }
+                Arrays.sort(sorted);
+                out[c] = sorted[sorted.length / 2] / (SampleNoise.MEDIAN_OF_NORMAL * Math.sqrt(2));
             }
-            differences.add(difference);
-        }
-        for (int c = 0; c < n; c++) {
-            int channel = c;
-            double[] sorted = differences.stream().mapToDouble(d -> d[channel]).sorted().toArray();
-            out[c] = sorted[sorted.length / 2] / (SampleNoise.MEDIAN_OF_NORMAL * Math.sqrt(2));
-        }
+        });
         return out;
     }
 
-    /** Sample, the one before, the one after; evenly thinned where there are very many. */
-    private static List<double[]> states(List<Run> runs, int n) {
+    /** Evenly thinned where there are very many. */
+    private static List<State> states(List<Run> runs) {
         int total = runs.stream().mapToInt(run -> Math.max(0, run.samples() - 2)).sum();
         int every = Math.max(1, total / MOST);
-        List<double[]> out = new ArrayList<>();
+        List<State> out = new ArrayList<>();
         int seen = 0;
         for (Run run : runs) {
             for (int k = 1; k + 1 < run.samples(); k++, seen++) {
                 if (seen % every == 0) {
-                    double[] state = new double[3 * n];
-                    System.arraycopy(run.values().data, k * n, state, 0, n);
-                    System.arraycopy(run.values().data, (k - 1) * n, state, n, n);
-                    System.arraycopy(run.values().data, (k + 1) * n, state, 2 * n, n);
-                    out.add(state);
+                    out.add(new State(run.values().data, k));
                 }
             }
         }
         return out;
     }
 
-    private static double[] spread(List<double[]> states, int n) {
-        double[] out = new double[n];
-        for (int c = 0; c < n; c++) {
-            double mean = 0;
-            double squares = 0;
-            for (double[] state : states) {
-                mean += state[c] / states.size();
-                squares += state[c] * state[c] / states.size();
+    private void measure() {
+        double[] squares = new double[n];
+        for (State state : states) {
+            for (int c = 0; c < n; c++) {
+                double value = state.now(n, c);
+                mean[c] += value / states.size();
+                squares[c] += value * value / states.size();
             }
-            double variance = squares - mean * mean;
-            out[c] = variance > 0 ? Math.sqrt(variance) : 1;
         }
-        return out;
+        for (int c = 0; c < n; c++) {
+            double variance = squares[c] - mean[c] * mean[c];
+            spread[c] = variance > 0 ? Math.sqrt(variance) : 1;
+        }
     }
 
-    private static int nearest(List<double[]> states, int of, double[] spread, int n) {
+    private int nearest(int of) {
         int best = of == 0 ? 1 : 0;
         double least = Double.POSITIVE_INFINITY;
         for (int j = 0; j < states.size(); j++) {
-            double distance = j == of ? Double.POSITIVE_INFINITY : 0;
-            for (int c = 0; c < 2 * n && distance < least; c++) {
-                double d = (states.get(j)[c] - states.get(of)[c]) / spread[c % n];
-                distance += d * d;
-            }
+            double distance = j == of ? Double.POSITIVE_INFINITY : distance(states.get(of), states.get(j), least);
             if (distance < least) {
                 least = distance;
                 best = j;
             }
         }
         return best;
+    }
+
+    /** Squared, or something not below a limit as soon as it is reached. */
+    private double distance(State a, State b, double limit) {
+        double distance = 0;
+        for (int c = 0; c < n && distance < limit; c++) {
+            double d = (b.now(n, c) - a.now(n, c)) / spread[c];
+            distance += d * d;
+        }
+        for (int c = 0; c < n && distance < limit; c++) {
+            double d = (b.before(n, c) - a.before(n, c)) / spread[c];
+            distance += d * d;
+        }
+        return distance;
+    }
+
+    /** {@code |a - b|² = |a|² + |b|² - 2 a·b} of states off their mean, in units of the spread; what is lost to rounding is far below any noise. */
+    private int[] nearestByProducts(int[] asked) {
+        double[] squares = new double[states.size()];
+        DMatrixRMaj products = new DMatrixRMaj(asked.length, states.size());
+        for (int from = 0; from < n; from += BLOCK) {
+            DMatrixRMaj block = scaled(from, Math.min(n, from + BLOCK));
+            DMatrixRMaj own = new DMatrixRMaj(asked.length, block.numCols);
+            for (int i = 0; i < asked.length; i++) {
+                System.arraycopy(block.data, asked[i] * block.numCols, own.data, i * block.numCols, block.numCols);
+            }
+            CommonOps_DDRM.addEquals(products, LinearAlgebra.installed().multiplyTransB(own, block));
+            for (int k = 0; k < block.getNumElements(); k++) {
+                squares[k / block.numCols] += block.data[k] * block.data[k];
+            }
+        }
+        return IntStream.range(0, asked.length).map(i -> nearest(asked[i], i, products, squares)).toArray();
+    }
+
+    private static int nearest(int of, int row, DMatrixRMaj products, double[] squares) {
+        int best = of == 0 ? 1 : 0;
+        for (int j = 0; j < squares.length; j++) {
+            if (j != of && squares[j] - 2 * products.get(row, j) < squares[best] - 2 * products.get(row, best)) {
+                best = j;
+            }
+        }
+        return best;
+    }
+
+    /** States in the channels of a block, now and before. */
+    private DMatrixRMaj scaled(int from, int to) {
+        int width = to - from;
+        DMatrixRMaj out = new DMatrixRMaj(states.size(), 2 * width);
+        for (int i = 0; i < states.size(); i++) {
+            for (int c = 0; c < width; c++) {
+                out.data[2 * i * width + c] = (states.get(i).now(n, from + c) - mean[from + c]) / spread[from + c];
+                out.data[(2 * i + 1) * width + c] = (states.get(i).before(n, from + c) - mean[from + c]) / spread[from + c];
+            }
+        }
+        return out;
     }
 }

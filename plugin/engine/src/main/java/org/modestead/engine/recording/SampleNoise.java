@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Random;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
+import org.modestead.engine.linalg.Blocks;
 
 /**
  * Standard deviation of the noise on single samples, one a channel: what a cubic through two neighbours on either side misses
@@ -24,6 +25,9 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
 
     private static final int NEIGHBOURS = 2;
 
+    /** Channels looked at together, so that samples of one time are read in a row. */
+    private static final int BLOCK = 256;
+
     /** Median of |x| for x normal with standard deviation 1. */
     static final double MEDIAN_OF_NORMAL = 0.6744897501960817;
 
@@ -37,19 +41,37 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
         Smoothing smoothing = snapshots.smoothing();
         List<Run> runs = new ArrayList<>(snapshots.training());
         runs.addAll(snapshots.holdout());
-        double[] out = new double[n];
+        boolean[] touched = new boolean[n];
         boolean asked = false;
         for (int c = 0; c < n; c++) {
-            out[c] = smoothing.touches(c) ? smoothing.noise().get(c) : fromNeighbours(runs, c);
-            asked |= !smoothing.touches(c);
+            touched[c] = smoothing.touches(c);
+            asked |= !touched[c];
+        }
+        double[] out = asked ? fromNeighbours(runs, n) : new double[n];
+        for (int c = 0; c < n; c++) {
+            out[c] = touched[c] ? smoothing.noise().get(c) : out[c];
         }
         SampleNoise level = new SampleNoise(out, smoothing);
         return asked ? level.atMost(NearestStates.bounds(runs, n)) : level;
     }
 
-    private static double fromNeighbours(List<Run> runs, int channel) {
-        double[] sorted = runs.stream().flatMapToDouble(run -> Arrays.stream(misses(run, channel))).map(Math::abs).sorted().toArray();
-        return sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
+    private static double[] fromNeighbours(List<Run> runs, int n) {
+        List<double[][]> weights = runs.stream().map(run -> weights(run.times())).toList();
+        int count = weights.stream().mapToInt(own -> own.length).sum();
+        double[] out = new double[n];
+        Blocks.of(n, BLOCK, (from, to) -> {
+            double[][] misses = new double[to - from][count];
+            int at = 0;
+            for (int i = 0; i < runs.size(); i++) {
+                at = misses(runs.get(i), weights.get(i), from, misses, at);
+            }
+            for (int c = from; c < to; c++) {
+                double[] sorted = misses[c - from];
+                Arrays.sort(sorted);
+                out[c] = sorted.length == 0 ? 0 : sorted[sorted.length / 2] / MEDIAN_OF_NORMAL;
+            }
+        });
+        return out;
     }
 
     /** Returns the lower of this level and given bounds on the noise of prepared samples, channel by channel; smoothed ones tell nothing. */
@@ -64,20 +86,22 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
     /** Returns the level over the standard deviation of the training samples, root mean square over the channels that move. */
     public double shareOf(Snapshots snapshots) {
         int n = deviations.length;
+        double[] sums = new double[n];
+        double[] squares = new double[n];
+        int count = 0;
+        for (Run run : snapshots.training()) {
+            for (int k = 0; k < run.samples(); k++, count++) {
+                for (int c = 0; c < n; c++) {
+                    double value = run.values().data[k * n + c];
+                    sums[c] += value;
+                    squares[c] += value * value;
+                }
+            }
+        }
         double sum = 0;
         int moving = 0;
         for (int c = 0; c < n; c++) {
-            double mean = 0;
-            double squares = 0;
-            int count = 0;
-            for (Run run : snapshots.training()) {
-                for (int k = 0; k < run.samples(); k++) {
-                    mean += run.values().get(k, c);
-                    squares += run.values().get(k, c) * run.values().get(k, c);
-                    count++;
-                }
-            }
-            double variance = squares / count - Math.pow(mean / count, 2);
+            double variance = squares[c] / count - Math.pow(sums[c] / count, 2);
             if (variance > 0) {
                 sum += deviations[c] * deviations[c] / variance;
                 moving++;
@@ -117,21 +141,38 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
         return out;
     }
 
-    private static double[] misses(Run run, int channel) {
-        int count = Math.max(0, run.samples() - 2 * NEIGHBOURS);
-        double[] out = new double[count];
-        for (int k = 0; k < count; k++) {
-            int at = k + NEIGHBOURS;
-            double miss = run.values().get(at, channel);
+    /** How far samples lie from the cubics through their neighbours, for channels from one on; returns the next free column. */
+    private static int misses(Run run, double[][] weights, int from, double[][] out, int column) {
+        int n = run.values().numCols;
+        double[] y = run.values().data;
+        for (int k = 0; k < weights.length; k++) {
+            double[] own = weights[k];
+            double size = own[NEIGHBOURS];
+            for (int c = 0; c < out.length; c++) {
+                double miss = y[(k + NEIGHBOURS) * n + from + c];
+                for (int j = 0; j < own.length; j++) {
+                    if (j != NEIGHBOURS) {
+                        miss -= own[j] * y[(k + j) * n + from + c];
+                    }
+                }
+                out[c][column + k] = Math.abs(miss / size);
+            }
+        }
+        return column + weights.length;
+    }
+
+    /** Per sample with enough neighbours their weights, and in its own place {@code √(1 + Σ w²)}. */
+    private static double[][] weights(double[] times) {
+        double[][] out = new double[Math.max(0, times.length - 2 * NEIGHBOURS)][2 * NEIGHBOURS + 1];
+        for (int k = 0; k < out.length; k++) {
             double squares = 1;
-            for (int j = k; j <= at + NEIGHBOURS; j++) {
-                if (j != at) {
-                    double weight = lagrange(run.times(), k, at + NEIGHBOURS, at, j);
-                    miss -= weight * run.values().get(j, channel);
-                    squares += weight * weight;
+            for (int j = 0; j < out[k].length; j++) {
+                if (j != NEIGHBOURS) {
+                    out[k][j] = lagrange(times, k, k + 2 * NEIGHBOURS, k + NEIGHBOURS, k + j);
+                    squares += out[k][j] * out[k][j];
                 }
             }
-            out[k] = miss / Math.sqrt(squares);
+            out[k][NEIGHBOURS] = Math.sqrt(squares);
         }
         return out;
     }

@@ -2,6 +2,7 @@ package org.modestead.engine.recording;
 
 import java.util.ArrayList;
 import java.util.List;
+import org.modestead.engine.linalg.Blocks;
 
 /** Whether noise is smoothed away before a fit. */
 public enum SmoothingRule {
@@ -30,6 +31,9 @@ public enum SmoothingRule {
     /** So many samples tell the window; of longer recordings every so-manieth is left out in turn. */
     private static final double ENOUGH = 20_000;
 
+    /** Channels looked at together: their samples under the longest window stay near the processor. */
+    private static final int BLOCK = 256;
+
     /**
      * @param training runs that fit
      * @param n channels
@@ -42,8 +46,9 @@ public enum SmoothingRule {
         List<Integer> reach = new ArrayList<>();
         List<Double> noise = new ArrayList<>();
         Miss[] best = best(runs, n);
+        double[] variance = variances(runs, n);
         for (int c = 0; c < n; c++) {
-            boolean told = best[c].reach() > TOO_SHORT && best[c].noise() < MOST_NOISE * MOST_NOISE * variance(runs, c);
+            boolean told = best[c].reach() > TOO_SHORT && best[c].noise() < MOST_NOISE * MOST_NOISE * variance[c];
             reach.add(told ? best[c].reach() : 0);
             noise.add(told ? Math.sqrt(best[c].noise()) : 0);
         }
@@ -84,17 +89,26 @@ public enum SmoothingRule {
     }
 
     private static Miss[] misses(List<Run> runs, int n, int h) {
+        Miss[] out = new Miss[n];
+        Blocks.of(n, BLOCK, (from, to) -> System.arraycopy(misses(runs, h, from, to), 0, out, from, to - from));
+        return out;
+    }
+
+    private static Miss[] misses(List<Run> runs, int h, int from, int to) {
         int stride = Math.max(1, (int) (samples(runs) / ENOUGH));
-        double[] left = new double[n];
-        double[] kept = new double[n];
+        double[] left = new double[to - from];
+        double[] kept = new double[to - from];
+        double[] values = new double[to - from];
         double freedom = 0;
         int count = 0;
         for (Run run : runs) {
+            int n = run.values().numCols;
             for (int k = 0; k < run.samples(); k += stride) {
                 LocalParabola parabola = LocalParabola.at(run.times(), k, h);
                 double own = parabola.own(k);
-                for (int c = 0; c < n; c++) {
-                    double miss = run.values().get(k, c) - parabola.value(run.values().data, n, c);
+                parabola.values(run.values().data, n, from, values);
+                for (int c = 0; c < values.length; c++) {
+                    double miss = run.values().data[k * n + from + c] - values[c];
                     left[c] += Math.pow(miss / (1 - own), 2);
                     kept[c] += miss * miss;
                 }
@@ -102,24 +116,33 @@ public enum SmoothingRule {
                 count++;
             }
         }
-        Miss[] out = new Miss[n];
-        for (int c = 0; c < n; c++) {
+        Miss[] out = new Miss[values.length];
+        for (int c = 0; c < out.length; c++) {
             out[c] = new Miss(h, left[c] / count, kept[c] / freedom);
         }
         return out;
     }
 
-    private static double variance(List<Run> runs, int channel) {
-        double mean = runs.stream().mapToDouble(run -> sum(run, channel, 0, 1)).sum() / samples(runs);
-        return runs.stream().mapToDouble(run -> sum(run, channel, mean, 2)).sum() / samples(runs);
-    }
-
-    private static double sum(Run run, int channel, double mean, int power) {
-        double sum = 0;
-        for (int k = 0; k < run.samples(); k++) {
-            sum += Math.pow(run.values().get(k, channel) - mean, power);
+    private static double[] variances(List<Run> runs, int n) {
+        double samples = samples(runs);
+        double[] means = new double[n];
+        double[] out = new double[n];
+        for (Run run : runs) {
+            for (int k = 0; k < run.samples(); k++) {
+                for (int c = 0; c < n; c++) {
+                    means[c] += run.values().data[k * n + c] / samples;
+                }
+            }
         }
-        return sum;
+        for (Run run : runs) {
+            for (int k = 0; k < run.samples(); k++) {
+                for (int c = 0; c < n; c++) {
+                    double away = run.values().data[k * n + c] - means[c];
+                    out[c] += away * away / samples;
+                }
+            }
+        }
+        return out;
     }
 
     private static double samples(List<Run> runs) {
