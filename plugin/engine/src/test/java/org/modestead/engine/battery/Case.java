@@ -13,7 +13,7 @@ record Case(KnownSystem system, Look look, Truth truth) {
         return system.name() + " / " + look.name();
     }
 
-    /** Thresholds may be set on these cases; figures are reported on the others, see {@link Unseen}. */
+    /** Thresholds may be set on these cases; figures are reported on the others, see {@link Fresh}. */
     boolean calibrates() {
         return Battery.calibrating().stream().anyMatch(known -> known.id().equals(id()));
     }

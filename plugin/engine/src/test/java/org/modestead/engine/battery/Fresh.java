@@ -22,7 +22,7 @@ import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
 
 /**
- * A reporting part: systems that no other part holds, written before any of them was judged and without a look at the code that judges.
+ * The reporting part: systems that no other part holds, written before any of them was judged and without a look at the code that judges.
  * Overlaps, harmonics and autocorrelations that are not in closed form were computed by another program. Nothing may be set by these cases.
  * Each overlap that makes a mode settle and not stand is above a third, and so is the distance of its joint weight from the solo one.
  */
