@@ -1,18 +1,14 @@
 package org.modestead.host.run;
 
 import java.io.IOException;
-import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.Files;
 import java.nio.file.Path;
-import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
-import java.util.stream.Stream;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Setting;
@@ -23,9 +19,6 @@ import org.modestead.nodes.contract.Setting;
  */
 public final class Fingerprint {
 
-    /** Larger files count by size and time of change alone: reading them would cost more than it saves. */
-    private static final long LARGEST_HASHED = 16L << 20;
-
     private Fingerprint() {}
 
     /**
@@ -35,7 +28,7 @@ public final class Fingerprint {
      * @return empty when the step has effects besides its result and must run every time
      */
     static Optional<String> of(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
-        return hasEffects(step) ? Optional.empty() : identity(step, inputs, baseFolder);
+        return hasEffects(step) ? Optional.empty() : identity(step, inputs, baseFolder, new FileMarks());
     }
 
     /** Returns whether a step does more than give a result: it writes a file, or gives none at all. */
@@ -51,9 +44,10 @@ public final class Fingerprint {
      * @param step whose result is meant
      * @param inputs fingerprints by id of the steps that it takes input from
      * @param baseFolder against which file settings are resolved
+     * @param marks of the files that settings name
      * @return empty when the fingerprint of an input is not known
      */
-    public static Optional<String> identity(PlannedStep step, Map<String, String> inputs, Path baseFolder) throws IOException {
+    public static Optional<String> identity(PlannedStep step, Map<String, String> inputs, Path baseFolder, FileMarks marks) throws IOException {
         NodeDeclaration declaration = step.declaration();
         if (!step.inputs().values().stream().allMatch(source -> inputs.containsKey(source.step()))) {
             return Optional.empty();
@@ -65,43 +59,12 @@ public final class Fingerprint {
                 value.getClass().getSimpleName() + " " + value));
         for (Setting setting : declaration.settings()) {
             if (setting instanceof Setting.File file && file.reading() && !step.settings().text(setting.key()).isEmpty()) {
-                line(digest, "file " + setting.key(), file(baseFolder.resolve(step.settings().text(setting.key()))));
+                line(digest, "file " + setting.key(), marks.of(baseFolder.resolve(step.settings().text(setting.key()))));
             }
         }
         step.inputs().forEach((port, source) -> line(digest, "input " + port, inputs.get(source.step())
                 + "." + source.port()));
         return Optional.of(HexFormat.of().formatHex(digest.digest()));
-    }
-
-    private static String file(Path path) throws IOException {
-        if (Files.isDirectory(path)) {
-            return folder(path);
-        }
-        if (!Files.isRegularFile(path)) {
-            return path + " missing";
-        }
-        long size = Files.size(path);
-        String content = "";
-        if (size <= LARGEST_HASHED) {
-            MessageDigest digest = sha256();
-            try (InputStream in = new DigestInputStream(Files.newInputStream(path), digest)) {
-                in.transferTo(java.io.OutputStream.nullOutputStream());
-            }
-            content = HexFormat.of().formatHex(digest.digest());
-        }
-        return path.toAbsolutePath().normalize() + " " + size + " " + Files.getLastModifiedTime(path).toMillis()
-                + " " + content;
-    }
-
-    /** A folder is read as the table of its files. */
-    private static String folder(Path path) throws IOException {
-        StringBuilder files = new StringBuilder(path.toAbsolutePath().normalize().toString());
-        try (Stream<Path> found = Files.list(path)) {
-            for (Path file : found.filter(Files::isRegularFile).sorted().toList()) {
-                files.append(' ').append(file(file));
-            }
-        }
-        return files.toString();
     }
 
     private static void line(MessageDigest digest, String key, String value) {
@@ -110,7 +73,7 @@ public final class Fingerprint {
         digest.update(bytes);
     }
 
-    private static MessageDigest sha256() {
+    static MessageDigest sha256() {
         try {
             return MessageDigest.getInstance("SHA-256");
         } catch (NoSuchAlgorithmException impossible) {

@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import java.util.Map;
+import org.modestead.host.run.FileMarks;
 import org.modestead.host.run.Fingerprint;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.host.workflow.Survey;
@@ -14,7 +15,7 @@ public final class Identities {
     private Identities() {}
 
     /** Returns the identities, by step id, of all steps for which they can be told. */
-    public static Map<String, String> of(Survey survey, Path baseFolder) {
+    public static Map<String, String> of(Survey survey, Path baseFolder, FileMarks marks) {
         Map<String, String> known = new LinkedHashMap<>();
         for (String id : survey.order()) {
             PlannedStep step = survey.planned().get(id);
@@ -22,7 +23,7 @@ public final class Identities {
                 continue;
             }
             try {
-                Fingerprint.identity(step, known, baseFolder).ifPresent(identity -> known.put(id, identity));
+                Fingerprint.identity(step, known, baseFolder, marks).ifPresent(identity -> known.put(id, identity));
             } catch (IOException unreadable) {
                 // a file that cannot be read now: the step says so when it runs
                 known.remove(id);

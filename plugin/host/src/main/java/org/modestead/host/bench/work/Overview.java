@@ -15,6 +15,7 @@ import org.modestead.host.bench.run.BenchRun;
 import org.modestead.host.bench.run.Identities;
 import org.modestead.host.bench.run.KeptResults;
 import org.modestead.host.bench.run.StepState;
+import org.modestead.host.run.FileMarks;
 import org.modestead.host.workflow.Link;
 import org.modestead.host.workflow.Problem;
 import org.modestead.host.workflow.Step;
@@ -23,12 +24,13 @@ import org.modestead.host.workflow.Workflow;
 import org.modestead.host.workflow.WorkflowChecker;
 import org.modestead.nodes.contract.NodeCatalog;
 
-/** Finds out how all steps of a document stand. */
+/** Finds out how all steps of a document stand: reads files, so it may take as long as they are large. Thread-safe. */
 final class Overview {
 
     private final NodeCatalog catalog;
     private final KeptResults results;
     private final WorkflowChecker checker;
+    private final FileMarks marks = new FileMarks();
 
     Overview(NodeCatalog catalog, KeptResults results) {
         this.catalog = catalog;
@@ -120,7 +122,7 @@ final class Overview {
         Survey whole = checker.survey(files.workflow());
         Survey survey = new Survey(files.merged(whole.problems()), whole.planned(), whole.order(), whole.inputs(), whole.schemas(), whole.outlooks());
         Inspection inspection = Inspection.of(workflow, survey);
-        return new Found(inspection, Identities.of(survey, workflow.baseFolder()), Bands.ordered(workflow, catalog), results,
+        return new Found(inspection, Identities.of(survey, workflow.baseFolder(), marks), Bands.ordered(workflow, catalog), results,
                 id -> StepTitles.of(workflow, catalog, id));
     }
 }

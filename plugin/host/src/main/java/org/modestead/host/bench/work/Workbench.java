@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.function.Function;
 import java.util.function.Supplier;
 import org.modestead.host.bench.check.DialogData;
 import org.modestead.host.bench.check.Fitting;
@@ -37,7 +38,8 @@ import org.modestead.nodes.words.Sentence;
 
 /**
  * The desk that is open, if one is. Everything that changes it comes here, one after the other; whoever watches is told of every
- * change by a number that rises. Thread-safe.
+ * change by a number that rises. What must be read of files to tell how steps stand is read without holding up anything else: a stop, or
+ * the progress of a run, never waits for a file. Thread-safe.
  */
 public final class Workbench implements AutoCloseable, BenchRun.Watcher {
 
@@ -52,6 +54,10 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     private final Map<String, Ending> endings = new HashMap<>();
     private String last = "";
     private long revision;
+    /** Rises with everything that makes {@link #found} out of date. */
+    private long document;
+    /** Held while files are read; never taken by who holds the workbench itself. */
+    private final Object reading = new Object();
     private Optional<Overview.Found> found = Optional.empty();
     private Optional<DeskView> view = Optional.empty();
 
@@ -95,8 +101,9 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         leave();
         synchronized (this) {
             desk = Optional.of(next);
-            return changed();
+            changed();
         }
+        return view();
     }
 
     /** Goes back to the start page; the desk is kept. */
@@ -107,12 +114,18 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
             desk = Optional.empty();
             endings.clear();
             last = "";
-            return changed();
+            changed();
         }
+        return view();
     }
 
     /** Does edits, all or none, as one step of undo. */
-    public synchronized Edited edit(List<Edit> edits, String label) {
+    public Edited edit(List<Edit> edits, String label) {
+        List<String> made = made(edits, label);
+        return new Edited(view(), made);
+    }
+
+    private synchronized List<String> made(List<Edit> edits, String label) {
         Desk opened = opened();
         Workflow before = opened.timeline().current();
         Workflow document = before;
@@ -130,19 +143,25 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
             opened.edit(document, label.isBlank() ? edits.get(0).words(before, catalog) : label);
             changed();
         }
-        return new Edited(view(), made);
+        return made;
     }
 
     /** Takes the last edit back. */
-    public synchronized DeskView undo() {
-        opened().undo();
-        return changed();
+    public DeskView undo() {
+        synchronized (this) {
+            opened().undo();
+            changed();
+        }
+        return view();
     }
 
     /** Does again what was taken back. */
-    public synchronized DeskView redo() {
-        opened().redo();
-        return changed();
+    public DeskView redo() {
+        synchronized (this) {
+            opened().redo();
+            changed();
+        }
+        return view();
     }
 
     /**
@@ -150,7 +169,12 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      *
      * @param name of another file; empty for its own
      */
-    public synchronized DeskView save(String name) {
+    public DeskView save(String name) {
+        write(name);
+        return view();
+    }
+
+    private synchronized void write(String name) {
         Desk opened = opened();
         Workflow document = opened.timeline().current();
         Path file = name.isBlank() ? document.file() : folders(document).inside(name, document.baseFolder());
@@ -158,7 +182,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
             throw new DeskFault("file " + file, "its name does not end in .json", "save as workflow.json");
         }
         opened.save(file);
-        return changed();
+        changed();
     }
 
     /**
@@ -168,29 +192,36 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      * @param again whether these run even though they have a result
      */
     public DeskView run(List<String> steps, boolean again) {
-        BenchRun begun;
         synchronized (this) {
-            if (run.isPresent()) {
-                throw new DeskFault("run", "one is going on", "wait for its end, or stop it");
-            }
-            Desk opened = opened();
-            found = Optional.empty();
-            Overview.Found known = found();
-            RunPlan plan = new Plans(known, opened.timeline().current()).plan(steps, again);
-            if (plan.steps().isEmpty()) {
-                last = "Everything is up to date.";
-                told();
-                return view();
-            }
-            running = known.identities();
-            plan.steps().forEach(step -> endings.remove(step.id()));
-            begun = new BenchRun(plan, known.seconds(opened.latest()), results, again ? Set.copyOf(steps) : Set.of(), this);
-            run = Optional.of(begun);
-            last = "";
-            told();
+            idle();
+            outdated();
         }
-        begun.start();
+        withFound(known -> begun(known, steps, again)).ifPresent(BenchRun::start);
         return view();
+    }
+
+    private void idle() {
+        if (run.isPresent()) {
+            throw new DeskFault("run", "one is going on", "wait for its end, or stop it");
+        }
+    }
+
+    /** Returns the run that is to be started; empty when there is nothing to do. */
+    private Optional<BenchRun> begun(Overview.Found known, List<String> steps, boolean again) {
+        idle();
+        Desk opened = opened();
+        RunPlan plan = new Plans(known, opened.timeline().current()).plan(steps, again);
+        if (plan.steps().isEmpty()) {
+            last = "Everything is up to date.";
+            told();
+            return Optional.empty();
+        }
+        running = known.identities();
+        plan.steps().forEach(step -> endings.remove(step.id()));
+        run = Optional.of(new BenchRun(plan, known.seconds(opened.latest()), results, again ? Set.copyOf(steps) : Set.of(), this));
+        last = "";
+        told();
+        return run;
     }
 
     /** Stops what runs; over within a second. */
@@ -233,8 +264,7 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         last = stopped ? "Stopped." : failed > 0 ? Sentence.count(failed, "step") + " failed, " + done + " done."
                 : Sentence.count(done, "step") + " done.";
         run = Optional.empty();
-        found = Optional.empty();
-        told();
+        changed();
     }
 
     private Desk opened() {
@@ -251,10 +281,14 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     }
 
     /** The document or its files may be others now. */
-    private DeskView changed() {
-        found = Optional.empty();
+    private void changed() {
+        outdated();
         told();
-        return view();
+    }
+
+    private void outdated() {
+        found = Optional.empty();
+        document++;
     }
 
     /** A result that was told of is not there any more. */
@@ -270,18 +304,62 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     }
 
     /** Returns the desk as it stands. */
-    public synchronized DeskView view() {
-        DeskView now = view.orElseGet(() -> new DeskView(revision, desk.map(this::look)));
+    public DeskView view() {
+        while (true) {
+            read();
+            synchronized (this) {
+                if (view.isPresent() || desk.isEmpty() || found.isPresent()) {
+                    return viewOf(found);
+                }
+            }
+        }
+    }
+
+    private DeskView viewOf(Optional<Overview.Found> known) {
+        DeskView now = view.orElseGet(() -> new DeskView(revision, desk.map(opened -> look(opened, known.orElseThrow()))));
         view = Optional.of(now);
         return now;
     }
 
     /** Returns all that is known of the document as it stands. */
-    synchronized Overview.Found found() {
-        Workflow workflow = workflow();
-        Overview.Found now = found.orElseGet(() -> overview.look(workflow, folders(workflow)));
-        found = Optional.of(now);
-        return now;
+    Overview.Found found() {
+        return withFound(known -> known);
+    }
+
+    /** Asks, with the workbench held, something of what is known of the document as it stands. */
+    private <T> T withFound(Function<Overview.Found, T> question) {
+        while (true) {
+            read();
+            synchronized (this) {
+                opened();
+                if (found.isPresent()) {
+                    return question.apply(found.get());
+                }
+            }
+        }
+    }
+
+    /** Finds out what is not known of the open document; files are read while nobody waits but who needs what they tell. */
+    private void read() {
+        synchronized (reading) {
+            Workflow workflow;
+            OpenedFolders open;
+            long before;
+            synchronized (this) {
+                if (desk.isEmpty() || found.isPresent()) {
+                    return;
+                }
+                workflow = workflow();
+                open = folders(workflow);
+                before = document;
+            }
+            Overview.Found now = overview.look(workflow, open);
+            synchronized (this) {
+                if (document == before) {
+                    found = Optional.of(now);
+                }
+            }
+        }
     }
 
     /** Returns the document as it stands. */
@@ -300,9 +378,11 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     record Shown(Step step, Node node, Overview.Found known, Optional<String> result) {}
 
     /** Returns a step and what is shown of it, all of one moment. */
-    synchronized Shown shown(String id) {
-        Step step = step(id);
-        return new Shown(step, node(step), found(), view().desk().orElseThrow().standing().get(id).result());
+    Shown shown(String id) {
+        return withFound(known -> {
+            Step step = step(id);
+            return new Shown(step, node(step), known, viewOf(found).desk().orElseThrow().standing().get(id).result());
+        });
     }
 
     private Node node(Step step) {
@@ -325,12 +405,15 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      * @param id of the step
      * @param typed in the dialog so far
      */
-    public synchronized DialogData dialog(String id, Map<String, Object> typed) {
-        Step step = step(id);
-        Node node = node(step);
-        Workflow workflow = workflow();
-        return DialogData.of(step, node, typed, found().inspection().survey(),
-                changed -> FileSettings.problems(changed, workflow.baseFolder(), node.declaration(), folders(workflow)));
+    public DialogData dialog(String id, Map<String, Object> typed) {
+        // judged when the workbench is free again: a file that was typed may be large
+        return withFound(known -> {
+            Step step = step(id);
+            Node node = node(step);
+            Workflow workflow = workflow();
+            return (Supplier<DialogData>) () -> DialogData.of(step, node, typed, known.inspection().survey(),
+                    changed -> FileSettings.problems(changed, workflow.baseFolder(), node.declaration(), folders(workflow)));
+        }).get();
     }
 
     /** Returns what fits an end of a link. */
@@ -350,11 +433,16 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      * @param millis longest to wait
      * @return the desk when it changed, empty when it did not
      */
-    public synchronized Optional<DeskView> await(long known, long millis) throws InterruptedException {
-        if (revision == known) {
-            wait(millis);
+    public Optional<DeskView> await(long known, long millis) throws InterruptedException {
+        synchronized (this) {
+            if (revision == known) {
+                wait(millis);
+            }
+            if (revision == known) {
+                return Optional.empty();
+            }
         }
-        return revision == known ? Optional.empty() : Optional.of(view());
+        return Optional.of(view());
     }
 
     /** How the work of a run goes on. */
@@ -365,9 +453,8 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         return run.map(begun -> new Going(revision, runView(), begun.states()));
     }
 
-    private DeskView.Open look(Desk opened) {
+    private DeskView.Open look(Desk opened, Overview.Found known) {
         Workflow workflow = opened.timeline().current();
-        Overview.Found known = found();
         return new DeskView.Open(opened.id(), workflow, known.ordered(), opened.isSaved(), opened.savedWords(), opened.recovered(),
                 opened.timeline().undoLabel(), opened.timeline().redoLabel(), known.inspection(),
                 known.standing(workflow, opened.latest(), endings, run), runView());
