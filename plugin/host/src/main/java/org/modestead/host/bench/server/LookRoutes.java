@@ -128,7 +128,8 @@ final class LookRoutes implements AutoCloseable {
             throw missing("column " + sort);
         }
         TablePages.Wish wish = new TablePages.Wish((long) number(context, "offset", 0), (int) number(context, "limit", USUAL_ROWS), column,
-                "down".equals(context.queryParam("order")), Optional.ofNullable(context.queryParam("find")).orElse(""));
+                "down".equals(context.queryParam("order")), Optional.ofNullable(context.queryParam("find")).orElse(""),
+                context.queryParam("whole") != null);
         Answer.json(context, page(LookJson.columns(table, LookJson.timeUnit(looks, looked), looked.node().declaration()), wish,
                  tables.page(looked.id() + "." + port, table, wish)));
     }
@@ -136,7 +137,7 @@ final class LookRoutes implements AutoCloseable {
     private static ObjectNode page(ArrayNode columns, TablePages.Wish wish, TablePages.Page page) {
         ObjectNode json = JSON.objectNode();
         json.set("columns", columns);
-        json.put("total", page.total()).put("found", page.found()).put("offset", wish.offset());
+        json.put("whole", page.whole()).put("total", page.total()).put("found", page.found()).put("offset", wish.offset());
         ArrayNode rows = json.putArray("rows");
         page.rows().forEach(row -> {
             ArrayNode cells = rows.addArray();

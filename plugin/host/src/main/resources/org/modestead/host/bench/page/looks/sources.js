@@ -4,8 +4,10 @@ import {rowKeys} from './keys.js';
 /**
  * Where the rows of a table come from.
  * @typedef {{name: string, unit: string, cell: string, kind: string}} Column
- * @typedef {{rows: any[][], numbers: number[], keys: string[], found: number, total: number}} Page
+ * @typedef {{rows: any[][], numbers: number[], keys: string[], found: number, total: number, whole: boolean}} Page
+ * `whole` tells whether the table was read to its end; where it was not, it has more rows than are told of, and `count` waits for their number.
  * @typedef {{columns: Column[], total: number|null, selectable: boolean, searchable: boolean,
+ *   count?: () => Promise<{found: number, total: number}>,
  *   page: (offset: number, limit: number, order: {sort: string, down: boolean, find: string}) => Promise<Page>}} Source
  */
 
@@ -37,7 +39,7 @@ export function inMemory(columns, rows, keys) {
     page: async (offset, limit, {sort, down, find}) => {
       const index = ordered(sort, down, find);
       const some = index.slice(offset, offset + limit);
-      return {rows: some.map((i) => rows[i]), numbers: some.map((i) => i + 1), keys: some.map((i) => keys[i] ?? ''), found: index.length, total: rows.length};
+      return {rows: some.map((i) => rows[i]), numbers: some.map((i) => i + 1), keys: some.map((i) => keys[i] ?? ''), found: index.length, total: rows.length, whole: true};
     },
   };
 }
@@ -59,6 +61,7 @@ export function fromServer(address, table) {
   const keyOf = rowKeys(table.columns);
   return {
     columns: table.columns, total: table.rows, selectable: keyOf !== null, searchable: true,
+    count: async () => api.get(`${address}?limit=0&whole=1`),
     page: async (offset, limit, {sort, down, find}) => {
       const query = new URLSearchParams({offset: String(offset), limit: String(limit)});
       if (sort) {
@@ -69,7 +72,8 @@ export function fromServer(address, table) {
         query.set('find', find);
       }
       const answer = await api.get(`${address}?${query}`);
-      return {rows: answer.rows, numbers: answer.numbers, keys: answer.rows.map((row) => (keyOf ? keyOf(row) : '')), found: answer.found, total: answer.total};
+      return {rows: answer.rows, numbers: answer.numbers, keys: answer.rows.map((row) => (keyOf ? keyOf(row) : '')), found: answer.found, total: answer.total,
+        whole: answer.whole};
     },
   };
 }

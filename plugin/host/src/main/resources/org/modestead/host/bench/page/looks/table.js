@@ -25,7 +25,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const name = useId();
   const box = useRef(null);
   const [order, setOrder] = useState({sort: '', down: false, find: ''});
-  const [pages, setPages] = useState({key: '', total: source.total, found: source.total ?? 0, held: new Map(), fault: ''});
+  const [pages, setPages] = useState({key: '', total: source.total, found: source.total ?? 0, whole: true, held: new Map(), fault: ''});
   const [top, setTop] = useState(0);
   const [current, setCurrent] = useState(-1);
   const [height, setHeight] = useState(26);
@@ -52,9 +52,15 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
       }
       asked.current.add(question);
       source.page(page * PAGE, PAGE, order).then((answer) => {
-        if (wanted.current === key) {
-          setPages((before) => ({key, total: answer.total, found: answer.found, fault: '',
-            held: new Map([...(before.key === key ? before.held : []), [page, answer]].slice(-20))}));
+        if (wanted.current !== key) {
+          return;
+        }
+        setPages((before) => ({key, ...(answer.whole || before.key !== key || !before.counted ? rowsOf(answer) : {total: before.total, found: before.found, whole: true}),
+          counted: before.counted || answer.whole, fault: '', held: new Map([...(before.key === key ? before.held : []), [page, answer]].slice(-20))}));
+        if (!answer.whole && !asked.current.has('count')) {
+          asked.current.add('count');
+          source.count().then((counted) => setPages((before) => ({...before, ...(before.key === key ? {...rowsOf(counted), counted: true} : {})})),
+            (fault) => setPages((before) => ({...before, fault: fault.message})));
         }
       }, (fault) => wanted.current === key && setPages((before) => ({...before, fault: fault.message})))
         .finally(() => asked.current.delete(question));
@@ -128,7 +134,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const units = source.columns.some(unitOf);
   const indices = Array.from({length: Math.max(0, to - from)}, (_, i) => from + i);
   return html`<div class="lk-table" data-table=${id} data-rows=${found} data-ready=${String(held.size > 0)} aria-busy=${String(held.size === 0)}>
-    <${Bar} total=${total} searchable=${source.searchable} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
+    <${Bar} total=${total} whole=${pages.whole} searchable=${source.searchable} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
       go(number - 1);
       box.current?.querySelector('table')?.focus();
     }} csv=${csv} title=${title} id=${id} />
@@ -156,13 +162,18 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   </div>`;
 }
 
+/** What an answer tells of the number of rows. */
+function rowsOf({total, found, whole}) {
+  return {total, found, whole};
+}
+
 /** The first row in sight for a place of the bar. */
 function firstRow(top, tall, view, found, height) {
   const exact = found * height <= TALLEST ? top / height : (top / Math.max(1, tall - view)) * (found - view / height);
   return Math.max(0, Math.min(found - 1, Math.floor(exact)));
 }
 
-function Bar({total, searchable, found, order, setOrder, go, csv, title, id}) {
+function Bar({total, whole, searchable, found, order, setOrder, go, csv, title, id}) {
   const [typed, setTyped] = useState('');
   const [text, setText] = useState(order.find);
   useEffect(() => {
@@ -171,7 +182,8 @@ function Bar({total, searchable, found, order, setOrder, go, csv, title, id}) {
   }, [text]);
   const many = total > SHOWN;
   return html`<div class="lk-bar">
-    <span class="lk-quiet" role="status">${order.find ? `${count(found)} of ${counted(total, 'row')}` : counted(total, 'row')}${
+    <span class="lk-quiet" role="status">${order.find ? `${count(found)} of ${counted(total, 'row')}` : whole ? counted(total, 'row')
+        : `the first ${counted(total, 'row')}; all are being counted`}${
       order.sort ? `, sorted by ${order.sort}, ${order.down ? 'falling' : 'rising'}` : ''}</span>
     <span class="lk-gap"></span>
     ${many && searchable && html`<label>Find <input type="search" size="12" value=${text} data-action="find"
