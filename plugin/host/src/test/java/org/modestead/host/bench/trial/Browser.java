@@ -19,6 +19,7 @@ import org.openqa.selenium.JavascriptException;
 import org.openqa.selenium.Keys;
 import org.openqa.selenium.NoSuchElementException;
 import org.openqa.selenium.OutputType;
+import org.openqa.selenium.Rectangle;
 import org.openqa.selenium.StaleElementReferenceException;
 import org.openqa.selenium.TimeoutException;
 import org.openqa.selenium.WebElement;
@@ -233,6 +234,23 @@ final class Browser implements AutoCloseable {
     void drag(String from, String to) {
         hold(from, to, 0, 0);
         drop();
+    }
+
+    /** Presses the mouse at a place in an element, told from its upper left corner. */
+    void clickAt(String css, long right, long down) {
+        WebElement element = see(css);
+        reveal(element);
+        Rectangle frame = element.getRect();
+        mouse().moveToElement(element, Math.toIntExact(right) - frame.getWidth() / 2, Math.toIntExact(down) - frame.getHeight() / 2).click().perform();
+    }
+
+    /** Drops a file of the system onto an element, as from a window of the system's own file manager. */
+    void dropFile(Path file, String css) {
+        Rectangle frame = see(css).getRect();
+        for (String event : List.of("dragEnter", "dragOver", "drop")) {
+            driver.executeCdpCommand("Input.dispatchDragEvent", Map.of("type", event, "x", frame.getX() + frame.getWidth() / 2, "y", frame.getY() + 40,
+                    "data", Map.of("items", List.of(), "files", List.of(file.toAbsolutePath().toString()), "dragOperationsMask", 1)));
+        }
     }
 
     private Actions mouse() {

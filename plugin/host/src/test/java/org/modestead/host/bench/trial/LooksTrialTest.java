@@ -8,6 +8,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.stream.Stream;
@@ -45,10 +46,38 @@ class LooksTrialTest {
             browser.keys(Keys.ESCAPE);
             browser.gone(".lk-chosen");
             browser.gone("tr[aria-selected=true]");
+            String clicked = clickAMark(browser, ".lk-complex-plane .lk-canvas");
+            browser.reads(".lk-selected", clicked);
+            browser.see("[data-table=modes] tr[data-row-mode=\"" + clicked.replaceAll("\\D", "") + "\"][aria-selected=true]");
+            browser.await("the mode in other pictures", () -> browser.all(".lk-picture.lk-chosen").size() > 1);
             browser.click("[data-table=modes] tr[data-row-mode=\"1\"] td:nth-child(2)");
             browser.reads(".lk-selected", "mode 1");
             browser.see(".lk-picture.lk-chosen");
         }
+    }
+
+    /** Looks for a place where the pointer becomes a hand, presses the mouse there, and returns the mode that the picture names for it. */
+    private static String clickAMark(Browser browser, String canvas) {
+        List<?> place = (List<?>) browser.js("""
+                const box = document.querySelector(arguments[0]);
+                box.scrollIntoView({block: 'center'});
+                const drawn = box.querySelector('canvas');
+                const frame = drawn.getBoundingClientRect();
+                for (let y = 4; y < frame.height; y += 6) {
+                  for (let x = 4; x < frame.width; x += 6) {
+                    drawn.dispatchEvent(new MouseEvent('mousemove', {bubbles: true, clientX: frame.left + x, clientY: frame.top + y}));
+                    if (drawn.parentElement.style.cursor === 'pointer') {
+                      const outer = box.getBoundingClientRect();
+                      return [Math.round(frame.left - outer.left + x), Math.round(frame.top - outer.top + y)];
+                    }
+                  }
+                }
+                return null;
+                """, canvas);
+        assertTrue(place != null, "some mark answers to the pointer");
+        browser.clickAt(canvas, ((Number) place.get(0)).longValue(), ((Number) place.get(1)).longValue());
+        browser.see(".lk-complex-plane.lk-chosen .lk-tag");
+        return browser.text(".lk-complex-plane .lk-tag").replaceAll("(?s).*?(mode \\d+).*", "$1");
     }
 
     @Test

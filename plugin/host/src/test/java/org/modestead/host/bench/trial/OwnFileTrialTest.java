@@ -32,8 +32,8 @@ class OwnFileTrialTest {
         try (Trial trial = Trial.start(folder, Optional.empty())) {
             Browser browser = trial.browser();
             browser.see("[data-action=choose-recording]");
-            interactions += 2; // the button, and the choice in the system's own dialog, which no test can press
-            browser.type("#recording-file", recording.toString());
+            browser.dropFile(recording, "[data-part=start]");
+            interactions++;
             browser.reads("[data-recording]", "tank.csv");
             browser.see("[data-column=\"time [s]\"]");
             assertTrue(browser.has("[data-role=\"time [s]\"] option[value=time]:checked"), "the time is guessed");
@@ -56,6 +56,7 @@ class OwnFileTrialTest {
         try (Trial trial = Trial.start(folder, Optional.empty())) {
             Browser browser = trial.browser();
             browser.see("[data-action=choose-recording]");
+            interactions += 2; // the button, and the choice in the system's own dialog, which no test can press
             browser.type("#recording-file", Path.of("..", "..", "test-workflows", "pump-house", "data", "recordings.csv").toAbsolutePath().normalize().toString());
             press(trial, "[data-action=lay-out-run]");
             List.of("snapshots", "fit", "spectrum", "check").forEach(step -> trial.state(step, "done", "doubts"));
