@@ -157,11 +157,31 @@ final class Journal implements AutoCloseable {
 
     private void append(ObjectNode entry, Timeline after, String saved) throws IOException {
         entry.set("now", now(after, saved));
-        ByteBuffer bytes = ByteBuffer.wrap(line(entry).getBytes(StandardCharsets.UTF_8));
-        while (bytes.hasRemaining()) {
-            channel.write(bytes);
+        append(channel, line(entry).getBytes(StandardCharsets.UTF_8));
+    }
+
+    /** Appends a line whole or, as far as the disk lets, not at all. */
+    private static void append(FileChannel channel, byte[] line) throws IOException {
+        ByteBuffer bytes = ByteBuffer.wrap(line);
+        long whole = channel.size();
+        try {
+            while (bytes.hasRemaining()) {
+                channel.write(bytes);
+            }
+            channel.force(false);
+        } catch (IOException full) {
+            takeBack(channel, whole, full);
+            throw full;
         }
-        channel.force(false);
+    }
+
+    /** Half a line would hide every line that is written after it, once there is room again. */
+    private static void takeBack(FileChannel channel, long whole, IOException full) {
+        try {
+            channel.truncate(whole);
+        } catch (IOException broken) {
+            full.addSuppressed(broken);
+        }
     }
 
     private static ObjectNode edit(Workflow workflow, String label, Instant when) {
