@@ -29,8 +29,8 @@ PATIENCE = 240
 # name: full size, what it is, contenders, how many leading rates are compared, their relative tolerance, how often it is run, Java's options
 CASES = {
     "start-up": dict(size=1, what="the three-flows workflow", scripts=("expert",), modes=0, tolerance=0, repeats=5, only=()),
-    "tall": dict(size=200000, what="states x 300 snapshots, rank 30, from an NPY file to the mode table (Java may take 14 GB)",
-                 scripts=("textbook", "expert"), modes=30, tolerance=1e-6, repeats=3, java="-Xmx14g"),
+    "tall": dict(size=200000, what="states x 300 snapshots, rank 30, from an NPY file to the mode table (Java may take 7.5 GB)",
+                 scripts=("textbook", "expert"), modes=30, tolerance=1e-6, repeats=3, java="-Xmx7500m"),
     "long-kernel": dict(size=20000, what="snapshots x 32 channels, Gaussian, rank 200, to spectrum and holdout residuals",
                         scripts=("textbook", "expert"), modes=4, tolerance=2e-2, repeats=3, only=("spectrum.modes", "check.findings")),
     "generator": dict(size=400, what="runs x 200 samples x 8 channels, exponential kernel, rank 60, full verdict with ladder",

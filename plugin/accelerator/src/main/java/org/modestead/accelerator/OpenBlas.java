@@ -38,10 +38,14 @@ final class OpenBlas implements LinearAlgebra {
     /** Entries of a block of rows that goes to native memory and back: 4 MB. */
     private static final int BLOCK = 1 << 19;
     private static final int LEAST_ROWS = 32;
+    /** Rows of a block, where there are as many, however long they are: the other factor is laid out anew for every block. */
+    private static final int WORTH_LAYING_OUT = 128;
     /** Parts of a long sum that are worked on beside each other. */
     private static final int PARTS = 4;
     /** Up to this many entries a long sum is kept once a part. */
     private static final int SMALL_SUM = 1 << 20;
+    /** A side is long that is so many times another. */
+    private static final int LONG = 4;
 
     private final Scratch scratch = new Scratch();
 
@@ -52,12 +56,31 @@ final class OpenBlas implements LinearAlgebra {
 
     @Override
     public DMatrixRMaj multiply(DMatrixRMaj a, DMatrixRMaj b) {
+        int m = a.numRows;
+        int n = b.numCols;
+        if (isLong(a.numCols, m, n)) {
+            return sum(a.numCols, m, n, (from, count, out) -> {
+                try (Loan left = columns(a, from, count); Loan right = scratch.lend(b.data, from * n, count * n)) {
+                    openblas.cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans, m, n, count, 1, left.doubles(), count, right.doubles(), n, 1, out, n);
+                }
+            });
+        }
         return rowsTimes(a, b, b.numCols, (from, count, rows, right, out) -> openblas.cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasNoTrans,
                 count, b.numCols, a.numCols, 1, rows, a.numCols, right, b.numCols, 0, out, b.numCols));
     }
 
     @Override
     public DMatrixRMaj multiplyTransB(DMatrixRMaj a, DMatrixRMaj b) {
+        int m = a.numRows;
+        int n = b.numRows;
+        if (isLong(a.numCols, m, n)) {
+            return sum(a.numCols, m, n, (from, count, out) -> {
+                try (Loan left = columns(a, from, count); Loan right = columns(b, from, count)) {
+                    openblas.cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasTrans, m, n, count, 1, left.doubles(), count, right.doubles(), count, 1,
+                            out, n);
+                }
+            });
+        }
         return rowsTimes(a, b, b.numRows, (from, count, rows, right, out) -> openblas.cblas_dgemm(CblasRowMajor, CblasNoTrans, CblasTrans,
                 count, b.numRows, a.numCols, 1, rows, a.numCols, right, a.numCols, 0, out, b.numRows));
     }
@@ -71,6 +94,20 @@ final class OpenBlas implements LinearAlgebra {
         });
     }
 
+    /** Whether the sums of a product are so long beside its result that they are better cut than copied whole. */
+    private static boolean isLong(int length, int m, int n) {
+        return m > 0 && n > 0 && (long) m * n <= SMALL_SUM && length >= LONG * (long) Math.max(m, n) && (long) length * Math.max(m, n) > SMALL_SUM;
+    }
+
+    /** Some columns of all rows in native memory, row by row. */
+    private Loan columns(DMatrixRMaj a, int from, int count) {
+        Loan loan = scratch.lend((long) a.numRows * count);
+        for (int i = 0; i < a.numRows; i++) {
+            loan.doubles().put(i * count, a.data, i * a.numCols + from, count);
+        }
+        return loan;
+    }
+
     /** What is done to a block of rows in native memory. */
     private interface RowWork {
         void of(int from, int count, DoubleBuffer rows, DoubleBuffer right, DoubleBuffer out);
@@ -82,7 +119,7 @@ final class OpenBlas implements LinearAlgebra {
         if (a.numRows == 0 || a.numCols == 0 || columns == 0) {
             return out;
         }
-        int size = Math.min(Math.max(1, BLOCK / Math.max(a.numCols, columns)), Math.max(LEAST_ROWS, (a.numRows + PARTS - 1) / PARTS));
+        int size = rowsOfBlock(a.numRows, Math.max(a.numCols, columns));
         try (Loan right = scratch.lend(b.data, 0, b.getNumElements())) {
             Blocks.of(a.numRows, size, (from, to) -> {
                 int count = to - from;
@@ -95,6 +132,12 @@ final class OpenBlas implements LinearAlgebra {
         return out;
     }
 
+    /** As many rows as fill a block, but not so few that laying out the other factor takes longer than the work, nor so many that cores idle. */
+    private static int rowsOfBlock(int rows, int length) {
+        int most = Math.max(LEAST_ROWS, (rows + PARTS - 1) / PARTS);
+        return Math.min(Math.max(WORTH_LAYING_OUT, BLOCK / length), most);
+    }
+
     @Override
     public DMatrixRMaj multiplyTransA(DMatrixRMaj a, DMatrixRMaj b) {
         int p = a.numCols;
@@ -103,7 +146,7 @@ final class OpenBlas implements LinearAlgebra {
             return new DMatrixRMaj(p, q);
         }
         if ((long) p * q > SMALL_SUM) {
-            return columnsTimes(a, b);
+            return q >= LONG * (long) Math.max(p, a.numRows) ? timesColumns(a, b) : columnsTimes(a, b);
         }
         return sum(a.numRows, p, q, (from, count, out) -> {
             try (Loan left = scratch.lend(a.data, from * p, count * p); Loan right = scratch.lend(b.data, from * q, count * q)) {
@@ -161,18 +204,37 @@ final class OpenBlas implements LinearAlgebra {
         return out;
     }
 
-    /** Aᵀ B where the result is large: block after block of its rows, from whole copies. */
+    /** Aᵀ B where the result is large: block after block of its rows. */
     private DMatrixRMaj columnsTimes(DMatrixRMaj a, DMatrixRMaj b) {
         int p = a.numCols;
         int q = b.numCols;
         DMatrixRMaj out = new DMatrixRMaj(p, q);
-        try (Loan left = scratch.lend(a.data, 0, a.getNumElements()); Loan right = scratch.lend(b.data, 0, b.getNumElements())) {
-            Blocks.of(p, Math.max(LEAST_ROWS, Math.min(BLOCK / q, (p + PARTS - 1) / PARTS)), (from, to) -> {
+        try (Loan right = scratch.lend(b.data, 0, b.getNumElements())) {
+            Blocks.of(p, rowsOfBlock(p, Math.max(q, a.numRows)), (from, to) -> {
                 int count = to - from;
-                try (Loan result = scratch.lend((long) count * q)) {
-                    openblas.cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, count, q, a.numRows, 1,
-                            left.doubles().slice(from, a.getNumElements() - from), p, right.doubles(), q, 0, result.doubles(), q);
+                try (Loan left = columns(a, from, count); Loan result = scratch.lend((long) count * q)) {
+                    openblas.cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, count, q, a.numRows, 1, left.doubles(), count, right.doubles(), q, 0,
+                            result.doubles(), q);
                     result.doubles().get(0, out.data, from * q, count * q);
+                }
+            });
+        }
+        return out;
+    }
+
+    /** Aᵀ B where B is wide: block after block of its columns. */
+    private DMatrixRMaj timesColumns(DMatrixRMaj a, DMatrixRMaj b) {
+        int p = a.numCols;
+        DMatrixRMaj out = new DMatrixRMaj(p, b.numCols);
+        try (Loan left = scratch.lend(a.data, 0, a.getNumElements())) {
+            Blocks.of(b.numCols, Math.max(LEAST_ROWS, BLOCK / Math.max(p, a.numRows)), (from, to) -> {
+                int count = to - from;
+                try (Loan right = columns(b, from, count); Loan result = scratch.lend((long) p * count)) {
+                    openblas.cblas_dgemm(CblasRowMajor, CblasTrans, CblasNoTrans, p, count, a.numRows, 1, left.doubles(), p, right.doubles(), count, 0,
+                            result.doubles(), count);
+                    for (int i = 0; i < p; i++) {
+                        result.doubles().get(i * count, out.data, i * out.numCols + from, count);
+                    }
                 }
             });
         }

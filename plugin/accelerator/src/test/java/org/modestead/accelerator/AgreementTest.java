@@ -56,7 +56,8 @@ class AgreementTest {
     /** Shapes at which work is cut: long rows of blocks, sums in parts, results too large to be kept once a part. */
     @Test
     void productsThatAreCutIntoBlocks() {
-        for (int[] shape : new int[][] {{20_000, 30, 40}, {70, 9_000, 12}, {600, 30, 1300}, {1100, 70, 1200}}) {
+        for (int[] shape : new int[][] {{20_000, 30, 40}, {70, 9_000, 12}, {600, 30, 1300}, {1100, 70, 1200}, {40, 40_000, 30},
+            {300, 20, 9_000}}) {
             DMatrixRMaj a = AwkwardMatrices.random(shape[0], shape[1], 3);
             DMatrixRMaj b = AwkwardMatrices.random(shape[1], shape[2], 4);
             DMatrixRMaj c = AwkwardMatrices.random(shape[0], shape[2], 5);

@@ -11,9 +11,13 @@ public record Complex(double re, double im) {
     /** 0. */
     public static final Complex ZERO = new Complex(0, 0);
 
-    /** Returns |z|. */
+    private static final double SMALL = 1e-140;
+    private static final double LARGE = 1e150;
+
+    /** Returns |z|, to one unit in the last place; where squares neither overflow nor vanish by a root, which is many times faster. */
     public double abs() {
-        return Math.hypot(re, im);
+        double larger = Math.max(Math.abs(re), Math.abs(im));
+        return larger > SMALL && larger < LARGE ? Math.sqrt(re * re + im * im) : Math.hypot(re, im);
     }
 
     /** Returns arg z in (-π, π]. */

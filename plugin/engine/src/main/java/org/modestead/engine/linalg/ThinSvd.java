@@ -21,6 +21,8 @@ public final class ThinSvd {
     private static final int FULL_UP_TO = 300;
     private static final int TALL = 4;
     private static final int WORTH_IT = 16;
+    /** Entries from which a wide matrix is not turned over. */
+    private static final int LARGE = 1 << 22;
     private static final double GRAM_FLOOR = 1e-14;
 
     private ThinSvd() {}
@@ -31,6 +33,12 @@ public final class ThinSvd {
      * @return k = min(m, n, largest) triples or fewer on the Gram path, values falling
      */
     public static Svd of(DMatrixRMaj a, int largest) {
+        if (a.numCols >= TALL * a.numRows && a.numRows >= WORTH_IT && a.getNumElements() >= LARGE) {
+            Optional<Svd> found = WideSvd.of(a);
+            if (found.isPresent()) {
+                return leading(found.get(), largest);
+            }
+        }
         if (a.numCols >= TALL * a.numRows) {
             return swapped(of(CommonOps_DDRM.transpose(a, null), largest));
         }
@@ -69,6 +77,9 @@ public final class ThinSvd {
 
     private static Svd leading(Svd svd, int largest) {
         int k = Math.min(svd.values().length, largest);
+        if (k == svd.values().length) {
+            return svd;
+        }
         return new Svd(Matrices.block(svd.u(), 0, svd.u().numRows, 0, k), Arrays.copyOf(svd.values(), k),
                 Matrices.block(svd.v(), 0, svd.v().numRows, 0, k));
     }

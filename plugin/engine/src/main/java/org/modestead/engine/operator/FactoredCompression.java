@@ -117,8 +117,8 @@ public record FactoredCompression(
             rank++;
         }
         double[] singular = java.util.Arrays.copyOf(svd.values(), rank);
-        DMatrixRMaj u = Matrices.block(svd.u(), 0, now.numRows, 0, rank);
-        DMatrixRMaj w = Matrices.block(svd.v(), 0, now.numCols, 0, rank);
+        DMatrixRMaj u = leading(svd.u(), rank);
+        DMatrixRMaj w = leading(svd.v(), rank);
         return innerProduct == InnerProduct.DATA ? inData(u, w, singular) : inSpace(u, w, singular);
     }
 
@@ -127,8 +127,12 @@ public record FactoredCompression(
         return inputs.map(effect -> Math.hypot(NormOps_DDRM.normF(now), NormOps_DDRM.normF(effect.now()))).orElse(0.0);
     }
 
-    private OrthonormalCompression inData(DMatrixRMaj u, DMatrixRMaj w, double[] singular) {
-        DMatrixRMaj map = w.copy();
+    /** Nobody else has the whole, so it need not be copied. */
+    private static DMatrixRMaj leading(DMatrixRMaj vectors, int rank) {
+        return rank == vectors.numCols ? vectors : Matrices.block(vectors, 0, vectors.numRows, 0, rank);
+    }
+
+    private OrthonormalCompression inData(DMatrixRMaj u, DMatrixRMaj map, double[] singular) {
         CommonOps_DDRM.divideCols(map, singular);
         DMatrixRMaj moved = Matrices.product(next, map);
         DMatrixRMaj action = Matrices.transposeProduct(u, moved);

@@ -6,6 +6,7 @@ import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.NormOps_DDRM;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.linalg.LinearAlgebra.Svd;
 import org.modestead.engine.linalg.Matrices;
@@ -34,7 +35,7 @@ final class StepRegression {
         double weight = 1 / Math.sqrt(pairs.count());
         DMatrixRMaj now = weights.rows(functions.evaluate(pairs.now()), weight);
         DMatrixRMaj next = weights.rows(functions.evaluate(pairs.next()), weight);
-        DMatrixRMaj target = weights.rows(pairs.now(), weight);
+        DMatrixRMaj target = functions instanceof Coordinates ? now : weights.rows(pairs.now(), weight);
         Evolution evolution = new Evolution.StepMap(pairs.step());
         if (use == InputUse.LEFT_IN || pairs.inputs() == 0) {
             return new FactoredCompression(functions, now, next, target, InnerProduct.DATA, evolution, correction);

@@ -1,0 +1,55 @@
+package org.modestead.engine.linalg;
+
+import java.util.Optional;
+import org.ejml.data.DMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.linalg.LinearAlgebra.Svd;
+
+/**
+ * The singular triples of a wide matrix of good condition, by what {@link TallQr} does to its transposed, which is never formed: with
+ * {@code A Aᵀ = RᵀR}, {@code B = R⁻ᵀ A}, {@code B Bᵀ = TᵀT} and {@code (T R)ᵀ = U S Wᵀ} follows {@code A = U S (Bᵀ T⁻¹ W)ᵀ}. Beside A only B and
+ * the right vectors are as large as A.
+ *
+ * <p>Yamamoto, Nakatsukasa, Yanagisawa and Fukaya, Electron. Trans. Numer. Anal. 44:306, 2015.
+ */
+final class WideSvd {
+
+    private static final double LEAST_PIVOT = 1e-6;
+
+    private WideSvd() {}
+
+    /**
+     * @param a m x n, n at least m
+     * @return m triples; empty when A is too close to rank deficient
+     */
+    static Optional<Svd> of(DMatrixRMaj a) {
+        return factor(a).flatMap(r -> {
+            DMatrixRMaj b = Matrices.product(inverseTransposed(r), a);
+            return factor(b).map(t -> {
+                Svd small = LinearAlgebra.installed().svd(CommonOps_DDRM.transpose(Matrices.product(t, r), null));
+                DMatrixRMaj turn = Matrices.transposeProduct(inverseTransposed(t), small.v());
+                return new Svd(small.u(), small.values(), Matrices.transposeProduct(b, turn));
+            });
+        });
+    }
+
+    /** R of {@code A Aᵀ = RᵀR}. */
+    private static Optional<DMatrixRMaj> factor(DMatrixRMaj a) {
+        return LinearAlgebra.installed().cholesky(Matrices.productTranspose(a, a)).filter(WideSvd::isSafe);
+    }
+
+    private static boolean isSafe(DMatrixRMaj r) {
+        double smallest = Double.POSITIVE_INFINITY;
+        double largest = 0;
+        for (int i = 0; i < r.numRows; i++) {
+            smallest = Math.min(smallest, r.get(i, i));
+            largest = Math.max(largest, r.get(i, i));
+        }
+        return smallest > LEAST_PIVOT * largest;
+    }
+
+    /** R⁻ᵀ. */
+    private static DMatrixRMaj inverseTransposed(DMatrixRMaj r) {
+        return Triangular.inverseOfLower(CommonOps_DDRM.transpose(r, null));
+    }
+}
