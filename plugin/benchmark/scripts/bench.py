@@ -1,7 +1,7 @@
 """
 Runs every case beside its comparison scripts and prints the table of the README.
 
-    python3 bench.py --jar ../../host/target/modestead.jar [--cases long-kernel,generator] [--minutes 28] [--scale 1] [--readme ../../../README.md]
+    python3 bench.py --jar ../../host/target/modestead.jar [--cases long-kernel,generator] [--minutes 45] [--scale 1] [--readme ../../../README.md]
 
 Each contender is a whole process, start-up and reading of the file included, on the same cores; contenders take turns so that what disturbs the
 machine disturbs all. A ratio is the median of this project over the median of a script; beside it stands the spread, (largest - smallest) / median
@@ -34,7 +34,8 @@ CASES = {
     "long-kernel": dict(size=20000, what="snapshots x 32 channels, Gaussian, rank 200, to spectrum and holdout residuals",
                         scripts=("textbook", "expert"), modes=4, tolerance=2e-2, repeats=3, only=("spectrum.modes", "check.findings")),
     "generator": dict(size=400, what="runs x 200 samples x 8 channels, exponential kernel, rank 60, full verdict with ladder",
-                      scripts=("textbook", "expert"), modes=4, tolerance=1e-4, repeats=3, only=("spectrum.modes", "check.findings", "check.ladder")),
+                      scripts=("textbook", "expert"), modes=4, tolerance=1e-4, repeats=3, only=("spectrum.modes", "check.findings", "check.ladder"),
+                      doublings=(1, -1, -2)),  # below a hundred runs there is no rank 60
     "bootstrap": dict(size=20000, what="rows x 16 channels, delay-linear of depth 20, 200 resamples",
                       scripts=("textbook", "expert"), modes=5, tolerance=1e-5, repeats=3),
     "csv": dict(size=2000000, what="rows x 16 channels of CSV to the forecast table",
@@ -140,15 +141,15 @@ def compared(case, scale, root, program, deadline):
 
 
 def slope(result, scale, root, program, deadline):
-    """Exponent of time over size through three doublings up to the full size."""
+    """Exponent of time over size through three doublings, up to the full size where the smallest is possible."""
     case = result["case"]
     if case == "start-up" or not CASES[case].get("slope", True) or not result["seconds"]["modestead"]:
         return float("nan")
     points = [(math.log(result["size"]), math.log(statistics.median(result["seconds"]["modestead"])))]
-    for halvings in (1, 2, 3):
+    for doubling in CASES[case].get("doublings", (-1, -2, -3)):
         if time.monotonic() > deadline:
             return float("nan")
-        size = max(1, round(CASES[case]["size"] * scale / 2 ** halvings))
+        size = max(1, round(CASES[case]["size"] * scale * 2.0 ** doubling))
         folder = generated(case, size, root, program)
         try:
             took = measured(command("modestead", case, folder, program), folder, CASES[case].get("java", ""))[0]
@@ -221,7 +222,7 @@ def main():
     parser = argparse.ArgumentParser(description=__doc__.split("\n\n")[0].strip())
     parser.add_argument("--jar", required=True, help="the runnable jar; the launch script beside it is what is run")
     parser.add_argument("--cases", default=",".join(CASES))
-    parser.add_argument("--minutes", type=float, default=28, help="after which nothing is repeated and no slope is measured any more")
+    parser.add_argument("--minutes", type=float, default=45, help="after which nothing is repeated and no slope is measured any more")
     parser.add_argument("--scale", type=float, default=1, help="of the sizes, to try the harness")
     parser.add_argument("--no-slope", action="store_true", help="leave out the runs at an eighth, a quarter and half of the size")
     parser.add_argument("--readme", help="write the table there, between its marks")

@@ -65,15 +65,15 @@ public final class PredictionError {
     private static double[] errors(OrthonormalCompression compression, List<StateRun> runs, List<DMatrixRMaj> functions,
             List<Integer> ranks, Progress progress, Function<StateRun, Ahead> ahead) {
         double[] errors = new double[ranks.size()];
+        Carriers carriers = new Carriers(compression, compression.observable().numCols, ranks.size());
         double spread = 0;
         for (int i = 0; i < runs.size(); i++) {
             StateRun run = runs.get(i);
             Ahead goal = ahead.apply(run);
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
-                OrthonormalCompression rung = compression.leading(ranks.get(k));
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), goal.steps()), rung.observable());
-                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - goal.steps(), 0, rung.rank());
+                DMatrixRMaj carried = carriers.of(k, ranks.get(k), meanStep(run), goal.steps());
+                DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - goal.steps(), 0, ranks.get(k));
                 errors[k] += squaredDistance(Matrices.product(now, carried), goal.states());
             }
             spread += squaredSpread(goal.states());
@@ -82,6 +82,34 @@ public final class PredictionError {
             errors[k] = Math.sqrt(errors[k] / spread);
         }
         return errors;
+    }
+
+    /** What carries the functions of each rank to the state ahead; made again only where a run's step or reach differs from that of the run before. */
+    private static final class Carriers {
+        private final OrthonormalCompression compression;
+        private final int components;
+        private final double[] step;
+        private final int[] steps;
+        private final DMatrixRMaj[] carried;
+
+        /** @param components of the state, from the first on */
+        Carriers(OrthonormalCompression compression, int components, int ranks) {
+            this.compression = compression;
+            this.components = components;
+            this.step = new double[ranks];
+            this.steps = new int[ranks];
+            this.carried = new DMatrixRMaj[ranks];
+        }
+
+        DMatrixRMaj of(int k, int rank, double time, int ahead) {
+            if (carried[k] == null || step[k] != time || steps[k] != ahead) {
+                OrthonormalCompression rung = compression.leading(rank);
+                carried[k] = Matrices.product(propagator(rung, time, ahead), Matrices.block(rung.observable(), 0, rank, 0, components));
+                step[k] = time;
+                steps[k] = ahead;
+            }
+            return carried[k];
+        }
     }
 
     private static DMatrixRMaj propagator(OrthonormalCompression rung, double step, int steps) {
@@ -117,18 +145,18 @@ public final class PredictionError {
             List<Integer> ranks, int channels) {
         double[] least = new double[channels];
         Arrays.fill(least, Double.POSITIVE_INFINITY);
-        for (int rank : ranks) {
-            OrthonormalCompression rung = compression.leading(rank);
+        Carriers carriers = new Carriers(compression, channels, ranks.size());
+        for (int k = 0; k < ranks.size(); k++) {
+            int rank = ranks.get(k);
             double[] squares = new double[channels];
             int count = 0;
             for (int i = 0; i < runs.size(); i++) {
                 StateRun run = runs.get(i);
-                DMatrixRMaj weights = Matrices.block(rung.observable(), 0, rank, 0, channels);
-                DMatrixRMaj carried = Matrices.product(propagator(rung, meanStep(run), 1), weights);
+                DMatrixRMaj carried = carriers.of(k, rank, meanStep(run), 1);
                 DMatrixRMaj predicted = Matrices.product(Matrices.block(functions.get(i), 0, run.count() - 1, 0, rank), carried);
                 DMatrixRMaj next = compression.signalAhead(run);
-                for (int k = 0; k < predicted.getNumElements(); k++) {
-                    squares[k % channels] += Math.pow(predicted.data[k] - next.get(k / channels, k % channels), 2);
+                for (int at = 0; at < predicted.getNumElements(); at++) {
+                    squares[at % channels] += Math.pow(predicted.data[at] - next.get(at / channels, at % channels), 2);
                 }
                 count += predicted.numRows;
             }
