@@ -187,10 +187,10 @@ class ChainTest {
 
     @Test
     void aColumnOfTheWrongTypeFailsBeforeRunningByName() throws Exception {
-        Rig rig = Rig.of("snapshot-builder").with(Map.of("run-column", "time"));
+        Rig rig = Rig.of("snapshot-builder").with(Map.of("time-column", "beyond"));
         InvalidSettingsException refused = assertThrows(InvalidSettingsException.class,
-                () -> rig.engine().configure(chain.out("signal-generator", "table").getSpec()));
-        assertTrue(refused.getMessage().contains("the column time holds number"), refused.getMessage());
+                () -> rig.engine().configure(chain.out("forecast", "forecast").getSpec()));
+        assertTrue(refused.getMessage().contains("the column beyond holds true/false"), refused.getMessage());
     }
 
     @Test
