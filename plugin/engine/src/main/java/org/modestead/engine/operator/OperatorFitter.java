@@ -60,6 +60,25 @@ public final class OperatorFitter {
                 doubts(full, choice.rank(), snapshots));
     }
 
+    /**
+     * Fills the arrays of a further fit and whitens them; polled for cancel between the two, either of which may take long.
+     *
+     * @param estimator which fills the compression
+     * @param snapshots of the recording
+     * @param largest cap on the rank
+     * @param ridge ρ, see {@link Ridge}; at least 0
+     * @param progress polled for cancel
+     * @throws FitFault if the data do not suit the estimator
+     */
+    public static OrthonormalCompression whitened(Estimator estimator, Snapshots snapshots, int largest, double ridge, Progress progress) {
+        progress.checkCancelled();
+        Compression compression = estimator.compress(snapshots, progress);
+        progress.checkCancelled();
+        OrthonormalCompression whitened = Ridge.apply(compression.whiten(largest), ridge);
+        progress.checkCancelled();
+        return whitened;
+    }
+
     private static String method(Estimator estimator, OrthonormalCompression full) {
         return estimator.describe() + full.inputs().map(effect -> ", inputs " + effect.use().words()).orElse("");
     }

@@ -94,8 +94,7 @@ final class RankSelection {
             throw new FitFault("rank", "the largest rank to try is " + largest, "give at least 1");
         }
         InnerSplit split = InnerSplit.of(snapshots);
-        OrthonormalCompression trial = Ridge.apply(
-                estimator.compress(split.fitting(), progress).whiten(Math.min(largest, full.rank())), ridge);
+        OrthonormalCompression trial = OperatorFitter.whitened(estimator, split.fitting(), Math.min(largest, full.rank()), ridge, progress);
         PredictionError.Best best = PredictionError.bestRank(trial, split.judging(), progress);
         return new RankChoice(best.rank(), String.format(Locale.ROOT,
                 "best one-step prediction on a quarter of the training data left out: relative error %.4g", best.error()));

@@ -10,11 +10,10 @@ import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
-import org.modestead.engine.operator.Compression;
 import org.modestead.engine.operator.FittedOperator;
+import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.PredictionError;
-import org.modestead.engine.operator.Ridge;
 import org.modestead.engine.recording.SampleNoise;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Matching;
@@ -104,11 +103,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         List<NoisierFit> out = new ArrayList<>();
         for (Snapshots noisier : noise.disturbed(operator.snapshots(), 1, SEED)) {
             try {
-                progress.checkCancelled();
-                Compression compressed = operator.estimator().compress(noisier, progress);
-                progress.checkCancelled();
-                OrthonormalCompression fit = Ridge.apply(compressed.whiten(rank), operator.ridge());
-                progress.checkCancelled();
+                OrthonormalCompression fit = OperatorFitter.whitened(operator.estimator(), noisier, rank, operator.ridge(), progress);
                 out.add(new NoisierFit(fit, fit.evaluate(sample.states())));
             } catch (FitFault fault) {
                 progress.checkCancelled();

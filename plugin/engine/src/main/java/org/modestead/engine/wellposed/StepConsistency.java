@@ -7,10 +7,9 @@ import java.util.Optional;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.Complex;
-import org.modestead.engine.operator.Compression;
 import org.modestead.engine.operator.Estimator;
+import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.OrthonormalCompression;
-import org.modestead.engine.operator.Ridge;
 import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
 
@@ -37,10 +36,7 @@ public final class StepConsistency implements Check {
         int rank = evidence.carrying().mapToInt(mode -> evidence.lastTellingOf(mode.number()).rank()).min().orElse(evidence.operator().rank());
         ModalExpansion expansion;
         try {
-            Compression compressed = other.get().compress(evidence.operator().snapshots(), progress);
-            progress.checkCancelled();
-            OrthonormalCompression again = Ridge.apply(compressed.whiten(rank), evidence.operator().ridge());
-            progress.checkCancelled();
+            OrthonormalCompression again = OperatorFitter.whitened(other.get(), evidence.operator().snapshots(), rank, evidence.operator().ridge(), progress);
             if (again.rank() < rank) {
                 return List.of(new Finding(0, id(), Double.NaN, Double.NaN, true, "Fitted with another step the data hold only rank "
                         + again.rank() + ", so the rates cannot be compared."));
