@@ -14,8 +14,6 @@ import org.modestead.engine.linalg.LinearAlgebra.Svd;
  */
 final class WideSvd {
 
-    private static final double LEAST_PIVOT = 1e-6;
-
     private WideSvd() {}
 
     /**
@@ -35,17 +33,7 @@ final class WideSvd {
 
     /** R of {@code A Aᵀ = RᵀR}. */
     private static Optional<DMatrixRMaj> factor(DMatrixRMaj a) {
-        return LinearAlgebra.installed().cholesky(Matrices.productTranspose(a, a)).filter(WideSvd::isSafe);
-    }
-
-    private static boolean isSafe(DMatrixRMaj r) {
-        double smallest = Double.POSITIVE_INFINITY;
-        double largest = 0;
-        for (int i = 0; i < r.numRows; i++) {
-            smallest = Math.min(smallest, r.get(i, i));
-            largest = Math.max(largest, r.get(i, i));
-        }
-        return smallest > LEAST_PIVOT * largest;
+        return GramFactor.of(Matrices.productTranspose(a, a));
     }
 
     /** R⁻ᵀ. */
