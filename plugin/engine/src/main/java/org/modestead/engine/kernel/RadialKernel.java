@@ -12,8 +12,6 @@ import org.modestead.engine.linalg.Blocks;
  * <p>Distances are summed coordinate by coordinate rather than as {@code |x|² - 2x·y + |y|²}, whose cancellation would
  * spoil the kinked families (Laplacian, Matérn) near zero distance.
  *
- * @param spec family and parameters
- * @param space facts about the space
  * <p>Where f is smooth at zero, large matrices take the products all the same, about the mean of y: what cancellation leaves,
  * {@code ε (|x|² + |y|²)}, is then looked at first, and must be below {@value #LOST} of the square over which f falls.
  *

@@ -7,7 +7,7 @@ import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.linalg.Blocks;
-import org.modestead.engine.linalg.LinearAlgebra;
+import org.modestead.engine.linalg.Matrices;
 
 /**
  * How differently nearly equal states go on: of every sample and the one before it, the nearest other such pair is looked for (channels
@@ -161,7 +161,7 @@ final class NearestStates {
             for (int i = 0; i < asked.length; i++) {
                 System.arraycopy(block.data, asked[i] * block.numCols, own.data, i * block.numCols, block.numCols);
             }
-            CommonOps_DDRM.addEquals(products, LinearAlgebra.installed().multiplyTransB(own, block));
+            CommonOps_DDRM.addEquals(products, Matrices.productTranspose(own, block));
             for (int k = 0; k < block.getNumElements(); k++) {
                 squares[k / block.numCols] += block.data[k] * block.data[k];
             }

@@ -41,16 +41,9 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
         Smoothing smoothing = snapshots.smoothing();
         List<Run> runs = new ArrayList<>(snapshots.training());
         runs.addAll(snapshots.holdout());
-        boolean[] touched = new boolean[n];
-        boolean asked = false;
-        for (int c = 0; c < n; c++) {
-            touched[c] = smoothing.touches(c);
-            asked |= !touched[c];
-        }
+        boolean asked = !IntStream.range(0, n).allMatch(smoothing::touches);
         double[] out = asked ? fromNeighbours(runs, n) : new double[n];
-        for (int c = 0; c < n; c++) {
-            out[c] = touched[c] ? smoothing.noise().get(c) : out[c];
-        }
+        IntStream.range(0, n).filter(smoothing::touches).forEach(c -> out[c] = smoothing.noise().get(c));
         SampleNoise level = new SampleNoise(out, smoothing);
         return asked ? level.atMost(NearestStates.bounds(runs, n)) : level;
     }

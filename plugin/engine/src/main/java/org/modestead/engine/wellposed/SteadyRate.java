@@ -51,8 +51,12 @@ public final class SteadyRate implements Check {
      */
     static boolean wanders(Mode mode, Evidence evidence) {
         HalfRates halves = evidence.halves().get(mode.number() - 1);
-        return mode.energyShare() >= ALONE && halves.change() * evidence.longest() / 2 >= VISIBLE
+        return mode.energyShare() >= ALONE && overHalf(halves, evidence) >= VISIBLE
                 && halves.change() >= LIKELY * error(mode, halves, evidence);
+    }
+
+    private static double overHalf(HalfRates halves, Evidence evidence) {
+        return halves.change() * evidence.longest() / 2;
     }
 
     private static double error(Mode mode, HalfRates halves, Evidence evidence) {
@@ -60,7 +64,7 @@ public final class SteadyRate implements Check {
     }
 
     private Finding finding(Mode mode, HalfRates halves, Evidence evidence) {
-        double value = halves.change() * evidence.longest() / 2;
+        double value = overHalf(halves, evidence);
         double error = error(mode, halves, evidence);
         return new Finding(mode.number(), id(), value, HALF, value <= HALF || halves.change() <= SIGMAS * error, String.format(Locale.ROOT,
                 "From the first half of the runs to the second its rate changes by %.3g, with a standard error of %.2g.", halves.change(), error));

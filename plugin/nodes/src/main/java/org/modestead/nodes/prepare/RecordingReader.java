@@ -38,6 +38,7 @@ final class RecordingReader {
     private final List<MeasuredCell> inputCells;
     private final List<TextColumnWatch> watches;
     private final int timeColumn;
+    private final boolean timeIsText;
     private final RunName runName;
     private final Optional<NumberCell> weightCell;
     private final Map<String, RunBuffer> runs = new LinkedHashMap<>();
@@ -52,6 +53,7 @@ final class RecordingReader {
         this.watches = columns.unusedTexts(table.schema()).stream()
                 .map(name -> new TextColumnWatch(name, position(name))).toList();
         this.timeColumn = columns.time().isEmpty() ? NONE : position(columns.time());
+        this.timeIsText = timeColumn != NONE && type(columns.time()) == CellType.TEXT;
         this.runName = RunName.of(table, columns.run());
         this.weightCell = Optional.of(columns.weight()).filter(name -> !name.isEmpty())
                 .map(name -> new NumberCell(table.origin(), name, position(name), type(name)));
@@ -140,7 +142,7 @@ final class RecordingReader {
 
     private double timeOf(RowCursor cursor, RecordedTime time) {
         String name = columns.time();
-        if (cursor.isMissing(timeColumn) || type(name) == CellType.TEXT && cursor.text(timeColumn).isBlank()) {
+        if (cursor.isMissing(timeColumn) || timeIsText && cursor.text(timeColumn).isBlank()) {
             throw new RecordingFault(place(cursor, name), "the time is missing", "give every row its time or leave the"
                     + " row out");
         }

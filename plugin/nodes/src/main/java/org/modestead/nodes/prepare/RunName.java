@@ -61,8 +61,10 @@ public record RunName(String origin, String column, int position, CellType type)
 
     /** Returns the cell of the current row as a name, whether it will do or not; empty where it is missing. */
     public String written(RowCursor cursor) {
-        if (type != CellType.DOUBLE || cursor.isMissing(position)) {
-            return cursor.isMissing(position) ? "" : cursor.text(position).strip();
+        if (cursor.isMissing(position)) {
+            return "";
+        } else if (type != CellType.DOUBLE) {
+            return cursor.text(position).strip();
         }
         double number = cursor.number(position);
         return number == Math.rint(number) && Math.abs(number) <= LARGEST_WHOLE ? Long.toString((long) number) : Double.toString(number);
