@@ -14,9 +14,6 @@ import static java.lang.StrictMath.tan;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Random;
-import java.util.function.DoubleSupplier;
-import java.util.stream.Stream;
 
 /**
  * The fifth calibration part: it was the reporting part until rules were changed after it had been seen. Systems that no part before holds, under looks
@@ -685,25 +682,13 @@ final class Fifth {
         }), Look.delays(6, 6), Truth.NONE));
     }
 
-    /** A path of numbers: every call gives the next. */
-    private interface Chain {
-        DoubleSupplier start(Random random);
-    }
-
-    private static KnownSystem chance(String name, double step, Chain chain) {
-        return new KnownSystem(name, step, random -> {
-            DoubleSupplier next = chain.start(random);
-            return Stream.generate(() -> new double[] {next.getAsDouble()}).limit(140).toArray(double[][]::new);
-        });
-    }
-
     /**
      * Coloured by a window and not by a rule: {@code 0.6e(k) + e(k-1) + 0.6e(k-2)}, whose mean is 0 three steps ahead whatever is known:
      * its only eigenvalue is 0, as of white noise. Noise whose size, not its sign, remembers, {@code σ² = 0.4 + 0.5x²}: the mean is 0 one
      * step ahead: absent.
      */
     private static void memory(List<Case> out) {
-        out.add(new Case(chance("moving average of noise", 0.1, random -> {
+        out.add(new Case(Paths.chance("moving average of noise", 140, 0.1, random -> {
             double[] e = {random.nextGaussian(), random.nextGaussian(), random.nextGaussian()};
             return () -> {
                 double x = 0.6 * e[0] + e[1] + 0.6 * e[2];
@@ -713,7 +698,7 @@ final class Fifth {
                 return x;
             };
         }), Look.delays(6, 4), Truth.ABSENT));
-        out.add(new Case(chance("volatile noise", 0.1, random -> {
+        out.add(new Case(Paths.chance("volatile noise", 140, 0.1, random -> {
             double[] x = {random.nextGaussian()};
             return () -> {
                 x[0] = sqrt(0.4 + 0.5 * x[0] * x[0]) * random.nextGaussian();
@@ -729,21 +714,21 @@ final class Fifth {
      * 0.70 to 0.96 and weather of 0.3 a step.
      */
     private static void kicked(List<Case> out) {
-        out.add(new Case(chance("shot noise", 0.1, random -> {
+        out.add(new Case(Paths.chance("shot noise", 140, 0.1, random -> {
             double[] x = {1};
             return () -> {
                 x[0] = 0.9 * x[0] - (random.nextDouble() < 0.1 ? log(1 - random.nextDouble()) : 0);
                 return x[0];
             };
         }), Look.monomials(3, 4), Truth.NONE));
-        out.add(new Case(chance("changing set points", 0.1, random -> {
+        out.add(new Case(Paths.chance("changing set points", 140, 0.1, random -> {
             double[] x = {random.nextGaussian()};
             return () -> {
                 x[0] = random.nextDouble() < 0.06 ? random.nextGaussian() : x[0];
                 return x[0];
             };
         }), Look.delays(6, 4), Truth.NONE));
-        out.add(new Case(chance("climate with two states", 0.2, random -> {
+        out.add(new Case(Paths.chance("climate with two states", 140, 0.2, random -> {
             double[] x = {random.nextBoolean() ? 1 : -1};
             return () -> {
                 for (int k = 0; k < 10; k++) {
@@ -780,7 +765,7 @@ final class Fifth {
             }
             return rows;
         }), Look.delays(6, 4), Truth.NONE));
-        out.add(new Case(chance("noise added up twice", 0.1, random -> {
+        out.add(new Case(Paths.chance("noise added up twice", 140, 0.1, random -> {
             double[] x = {random.nextGaussian(), 0.3 * random.nextGaussian()};
             return () -> {
                 x[1] += 0.1 * random.nextGaussian();

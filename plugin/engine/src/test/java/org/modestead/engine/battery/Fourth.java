@@ -15,7 +15,6 @@ import static java.lang.StrictMath.tanh;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
-import java.util.function.DoubleSupplier;
 import java.util.stream.Stream;
 
 /**
@@ -400,18 +399,6 @@ final class Fourth {
         out.add(new Case(lorenz, Look.monomials(3, 20), Truth.NONE));
     }
 
-    /** A path of numbers, one channel: every call gives the next. */
-    private interface Chain {
-        DoubleSupplier start(Random random);
-    }
-
-    private static KnownSystem chain(String name, int samples, double step, Chain chain) {
-        return new KnownSystem(name, step, random -> {
-            DoubleSupplier next = chain.start(random);
-            return Stream.generate(() -> new double[] {next.getAsDouble()}).limit(samples).toArray(double[][]::new);
-        });
-    }
-
     /**
      * As in {@link NoModes}: noise of heavy tails (Laplace) in three channels obeys no rule: absent. Ornstein-Uhlenbeck, theta = 0.8, and a
      * rotation {@code 0.96 e^(0.3i)} kicked at every step in both channels: over its own time the path misses the mean motion by
@@ -442,7 +429,7 @@ final class Fourth {
 
     /** {@code x -> keep x + drift + kick N(0, 1)}, started in N(0, 1). */
     private static KnownSystem autoregression(String name, double keep, double drift, double kick) {
-        return chain(name, 130, 0.1, random -> {
+        return Paths.chance(name, 130, 0.1, random -> {
             double[] x = {random.nextGaussian()};
             return () -> {
                 double now = x[0];
@@ -468,7 +455,7 @@ final class Fourth {
             }
             return rows;
         }), Look.delays(5, 4), Truth.NONE));
-        out.add(new Case(chain("random contact", 140, 0.1, random -> {
+        out.add(new Case(Paths.chance("random contact", 140, 0.1, random -> {
             double[] x = {random.nextBoolean() ? 1 : -1};
             return () -> {
                 x[0] = random.nextDouble() < 0.05 ? -x[0] : x[0];

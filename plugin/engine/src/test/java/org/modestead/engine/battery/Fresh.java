@@ -17,7 +17,6 @@ import static java.lang.StrictMath.tanh;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
-import java.util.function.DoubleSupplier;
 import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
 
@@ -563,18 +562,6 @@ final class Fresh {
         out.add(new Case(seen("double pendulum, wide", arms, x -> new double[] {sin(x[0]), sin(x[1])}), Look.delays(10, 8), Truth.NONE));
     }
 
-    /** A path of numbers: every call gives the next. */
-    private interface Chain {
-        DoubleSupplier start(Random random);
-    }
-
-    private static KnownSystem chance(String name, double step, Chain chain) {
-        return new KnownSystem(name, step, random -> {
-            DoubleSupplier next = chain.start(random);
-            return Stream.generate(() -> new double[] {next.getAsDouble()}).limit(140).toArray(double[][]::new);
-        });
-    }
-
     /**
      * Paths that miss their mean motion by most of their size over its own time, as Ornstein-Uhlenbeck in {@link NoModes}. A clock that is
      * jolted by 0.12 of a turn a step: mean multiplier {@code e^(-2π² 0.0144) = 0.75} in size. A drunkard on a ring, 0.35 rad a step: 0.94.
@@ -582,7 +569,7 @@ final class Fresh {
      * Flicker, three relaxations at 0.98, 0.85 and 0.4 a step, each kicked. Nothing to report.
      */
     private static void jolted(List<Case> out) {
-        out.add(new Case(chance("jolted clock", 1, random -> {
+        out.add(new Case(Paths.chance("jolted clock", 140, 1, random -> {
             double[] turn = {random.nextDouble()};
             return () -> {
                 turn[0] += 0.23 + 0.12 * random.nextGaussian();
@@ -590,18 +577,18 @@ final class Fresh {
                 return turn[0];
             };
         }), Look.fourier(3), Truth.NONE));
-        out.add(new Case(seen("drunkard on a ring", chance("", 0.1, random -> {
+        out.add(new Case(seen("drunkard on a ring", Paths.chance("", 140, 0.1, random -> {
             double[] angle = {2 * PI * random.nextDouble()};
             return () -> angle[0] += 0.35 * random.nextGaussian();
         }), x -> new double[] {cos(x[0]), sin(x[0])}), Look.monomials(2, 5), Truth.NONE));
-        out.add(new Case(chance("tone that is begun anew", 0.1, random -> {
+        out.add(new Case(Paths.chance("tone that is begun anew", 140, 0.1, random -> {
             double[] phase = {2 * PI * random.nextDouble()};
             return () -> {
                 phase[0] = random.nextDouble() < 0.06 ? 2 * PI * random.nextDouble() : phase[0] + 0.4;
                 return cos(phase[0]);
             };
         }), Look.delays(6, 2), Truth.NONE));
-        out.add(new Case(chance("seasons of noise", 1, random -> {
+        out.add(new Case(Paths.chance("seasons of noise", 140, 1, random -> {
             double[] past = random.doubles(12, -1, 1).toArray();
             int[] at = {0};
             return () -> {
@@ -610,7 +597,7 @@ final class Fresh {
                 return past[at[0]];
             };
         }), Look.delays(14, 8), Truth.NONE));
-        out.add(new Case(chance("flicker", 0.1, random -> {
+        out.add(new Case(Paths.chance("flicker", 140, 0.1, random -> {
             double[] keep = {0.98, 0.85, 0.4};
             double[] x = {random.nextGaussian(), random.nextGaussian(), random.nextGaussian()};
             return () -> {
@@ -627,15 +614,15 @@ final class Fresh {
      * a queue that grows or shrinks by one and is never below zero. Their mean motions have rates, their paths keep none: nothing to report.
      */
     private static void walks(List<Case> out) {
-        out.add(new Case(chance("walk that is set back", 0.1, random -> {
+        out.add(new Case(Paths.chance("walk that is set back", 140, 0.1, random -> {
             double[] x = {2 * random.nextGaussian()};
             return () -> x[0] = random.nextDouble() < 0.05 ? 0 : x[0] + random.nextGaussian();
         }), Look.delays(6, 4), Truth.NONE));
-        out.add(new Case(chance("price", 1, random -> {
+        out.add(new Case(Paths.chance("price", 140, 1, random -> {
             double[] x = {0.5 + random.nextDouble()};
             return () -> x[0] *= exp(0.12 * random.nextGaussian());
         }), Look.monomials(2, 3), Truth.NONE));
-        out.add(new Case(chance("queue", 1, random -> {
+        out.add(new Case(Paths.chance("queue", 140, 1, random -> {
             double[] x = {random.nextInt(8)};
             return () -> x[0] = max(0, x[0] + (random.nextDouble() < 0.48 ? 1 : -1));
         }), Look.delays(6, 4), Truth.NONE));

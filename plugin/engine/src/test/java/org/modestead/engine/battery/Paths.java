@@ -2,14 +2,16 @@ package org.modestead.engine.battery;
 
 import java.util.Arrays;
 import java.util.Random;
+import java.util.function.DoubleSupplier;
 import java.util.function.UnaryOperator;
+import java.util.stream.Stream;
 import org.ejml.data.DMatrixRMaj;
 import org.hipparchus.ode.ODEState;
 import org.hipparchus.ode.OrdinaryDifferentialEquation;
 import org.hipparchus.ode.nonstiff.DormandPrince853Integrator;
 import org.modestead.engine.linalg.MatrixExponential;
 
-/** Ways to make a path: closed form, iterated map, linear flow, integrated flow. */
+/** Ways to make a path: closed form, iterated map, linear flow, integrated flow, chance. */
 final class Paths {
 
     private Paths() {}
@@ -86,6 +88,19 @@ final class Paths {
                 x = advanced(field, x, step);
             }
             return rows;
+        });
+    }
+
+    /** A path of numbers: every call gives the next. */
+    interface Chain {
+        DoubleSupplier start(Random random);
+    }
+
+    /** One channel, each number the next of a chain. */
+    static KnownSystem chance(String name, int samples, double step, Chain chain) {
+        return new KnownSystem(name, step, random -> {
+            DoubleSupplier next = chain.start(random);
+            return Stream.generate(() -> new double[] {next.getAsDouble()}).limit(samples).toArray(double[][]::new);
         });
     }
 
