@@ -9,7 +9,6 @@ import java.util.Random;
 import org.hipparchus.distribution.discrete.BinomialDistribution;
 import org.hipparchus.distribution.discrete.PoissonDistribution;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.condition.DisabledIfSystemProperty;
 import org.junit.jupiter.api.condition.EnabledIfSystemProperty;
 import org.modestead.engine.Progress;
 import org.modestead.engine.modelfile.Model;
@@ -91,7 +90,6 @@ class WatchRatesTest {
     }
 
     @Test
-    @DisabledIfSystemProperty(named = "watch", matches = "full", disabledReason = "the full measurement holds this one")
     void stationaryRecordingsHardlyAlarmAndTwoPerCentAreFound() {
         Counts counts = count(QUIET, 25, 0, 11);
         assertQuietWhenNothingChanged(counts);
@@ -99,7 +97,6 @@ class WatchRatesTest {
     }
 
     @Test
-    @DisabledIfSystemProperty(named = "watch", matches = "full", disabledReason = "the full measurement holds this one")
     void alsoWithRealisticMeasurementNoise() {
         Counts counts = count(NOISY, 15, 0, 12);
         assertQuietWhenNothingChanged(counts);
