@@ -80,6 +80,7 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         List<List<Integer>> groups = Cluster.groups(expansion, Cluster.numbers(expansion));
         List<Eigenspace> spaces = IntStream.range(0, groups.size())
                 .mapToObj(p -> Eigenspace.of(expansion, groups, p, sample.longest())).toList();
+        ZMatrixRMaj carried = ComplexMatrices.product(functions, carriers(spaces, expansion.rank()));
         double[] weights = spaces.stream().mapToDouble(space -> Math.sqrt(Contributions.meanSquare(
                 Contributions.of(values, expansion.joint(), space.all(), 0, sample.channels())))).toArray();
         return IntStream.range(0, groups.size()).mapToObj(p -> {
@@ -87,7 +88,7 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
             double trained = rootMeanSquare(values, j);
             Residuals.Pair residual = judged[j] < EXCITED * trained ? Residuals.Pair.UNKNOWN : residuals.get(j);
             return new Part(groups.get(p), expansion.rates().get(j), weights[p], weightNorm(expansion, j, sample.channels()),
-                    1 / size(functions, spaces.get(p).carrier()), residual.clear(), residual.raw(), spaces.get(p).gap(),
+                    1 / rootMeanSquare(carried, p), residual.clear(), residual.raw(), spaces.get(p).gap(),
                     overlap(spaces, weights, p), ConstantFunction.is(values, j, expansion.rates().get(j), sample.longest()));
         }).toList();
     }
@@ -100,25 +101,34 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
         return norm;
     }
 
+    /** Root mean square of a column, measured in units of its largest part so that no square overflows or vanishes. */
     private static double rootMeanSquare(ZMatrixRMaj values, int j) {
-        double size = 0;
+        double unit = 0;
         for (int i = 0; i < values.numRows; i++) {
-            size = Math.hypot(size, ComplexMatrices.entry(values, i, j).abs());
+            unit = Math.max(unit, Math.max(Math.abs(values.getReal(i, j)), Math.abs(values.getImag(i, j))));
         }
-        return size / Math.sqrt(values.numRows);
+        if (!(unit > 0) || Double.isInfinite(unit)) {
+            return unit;
+        }
+        double squares = 0;
+        for (int i = 0; i < values.numRows; i++) {
+            double re = values.getReal(i, j) / unit;
+            double im = values.getImag(i, j) / unit;
+            squares += re * re + im * im;
+        }
+        return unit * Math.sqrt(squares / values.numRows);
     }
 
-    /** Root mean square over the sampled states of the function with given coefficients. */
-    private static double size(DMatrixRMaj functions, Complex[] coefficients) {
-        double size = 0;
-        for (int i = 0; i < functions.numRows; i++) {
-            Complex value = Complex.ZERO;
-            for (int k = 0; k < coefficients.length; k++) {
-                value = value.plus(coefficients[k].times(functions.get(i, k)));
+    /** The coefficients of the carriers, one a column, so that their values at all states are one product of matrices. */
+    private static ZMatrixRMaj carriers(List<Eigenspace> spaces, int rank) {
+        ZMatrixRMaj out = new ZMatrixRMaj(rank, spaces.size());
+        for (int p = 0; p < spaces.size(); p++) {
+            Complex[] carrier = spaces.get(p).carrier();
+            for (int k = 0; k < rank; k++) {
+                out.set(k, p, carrier[k].re(), carrier[k].im());
             }
-            size = Math.hypot(size, value.abs());
         }
-        return size / Math.sqrt(functions.numRows);
+        return out;
     }
 
     /** Largest overlap of the carrier with its own conjugate and with carriers of other rates that add a notable part to the signal. */
