@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
+import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
@@ -23,9 +24,11 @@ import org.modestead.engine.spectrum.ModalExpansion;
  * @param runs with at least two states each
  * @param functions per run, p x R values of the orthonormal functions
  * @param disturbed the same for copies of the runs with further noise, copy after copy, possibly none
+ * @param sideways R x P, the functions at the states of all runs one after the other, one function a row; then the same of every copy
  * @param longest duration of the longest run
  */
-record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, List<DMatrixRMaj> disturbed, double longest) {
+record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, List<DMatrixRMaj> disturbed,
+        List<DMatrixRMaj> sideways, double longest) {
 
     private static final int MOST_COPIES = 8;
     private static final int ENOUGH_STATES = 4000;
@@ -41,7 +44,7 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
             functions.add(operator.compression().evaluate(operator.compression().arguments(run)));
         }
         double longest = runs.stream().mapToDouble(run -> run.times()[run.count() - 1] - run.times()[0]).max().orElse(0);
-        return new JudgingRuns(heldOut, runs, functions, List.of(), longest);
+        return new JudgingRuns(heldOut, runs, functions, List.of(), List.of(sideways(functions)), longest);
     }
 
     /**
@@ -63,7 +66,11 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
                     progress.checkCancelled();
                     return operator.compression().evaluate(operator.compression().arguments(snapshots.embed(run)));
                 }).toList();
-        return new JudgingRuns(heldOut, runs, functions, noisier, longest);
+        List<DMatrixRMaj> all = new ArrayList<>(sideways);
+        for (int copy = 0; copy < copies; copy++) {
+            all.add(sideways(noisier.subList(copy * runs.size(), (copy + 1) * runs.size())));
+        }
+        return new JudgingRuns(heldOut, runs, functions, noisier, List.copyOf(all), longest);
     }
 
     /**
@@ -86,27 +93,20 @@ record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> funct
                 Matrices.block(evaluated, 0, evaluated.numRows, 0, expansion.rank()), expansion.vectors())).toList();
     }
 
-    /**
-     * Returns the root mean square of each eigenfunction over all states of the runs.
-     *
-     * @param eigenfunctions per run p x r
-     * @return length r
-     */
-    static double[] sizes(List<ZMatrixRMaj> eigenfunctions) {
-        double[] squares = new double[eigenfunctions.get(0).numCols];
-        int states = 0;
-        for (ZMatrixRMaj values : eigenfunctions) {
-            for (int i = 0; i < values.numRows; i++) {
-                for (int j = 0; j < squares.length; j++) {
-                    squares[j] += Math.pow(ComplexMatrices.entry(values, i, j).abs(), 2);
-                }
-            }
-            states += values.numRows;
+    /** The eigenfunctions along the runs, one run after the other; then along every copy with further noise. */
+    List<Tracks> tracks(ModalExpansion expansion) {
+        return sideways.stream().map(functions -> Tracks.of(expansion, functions)).toList();
+    }
+
+    private static DMatrixRMaj sideways(List<DMatrixRMaj> functions) {
+        int states = functions.stream().mapToInt(values -> values.numRows).sum();
+        DMatrixRMaj out = new DMatrixRMaj(functions.get(0).numCols, states);
+        int at = 0;
+        for (DMatrixRMaj values : functions) {
+            CommonOps_DDRM.insert(CommonOps_DDRM.transpose(values, null), out, 0, at);
+            at += values.numRows;
         }
-        for (int j = 0; j < squares.length; j++) {
-            squares[j] = Math.sqrt(squares[j] / states);
-        }
-        return squares;
+        return out;
     }
 
     private static List<StateRun> usable(Snapshots snapshots, Snapshots.Part part) {

@@ -1,8 +1,9 @@
 package org.modestead.engine.wellposed;
 
-import java.util.ArrayList;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.ejml.data.ZMatrixRMaj;
+import org.modestead.engine.linalg.Blocks;
 import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.recording.StateRun;
@@ -29,6 +30,9 @@ final class Residuals {
     /** Share of the squared size that must not be noise for the noise to be taken off. */
     static final double MOSTLY_NOISE = 0.5;
 
+    /** Eigenfunctions that one core works out in a row. */
+    private static final int SHARED = 4;
+
     private Residuals() {}
 
     /**
@@ -43,45 +47,76 @@ final class Residuals {
     /**
      * @param expansion on one rung
      * @param judging runs
-     * @param eigenfunctions per run p x r values of the expansion's eigenfunctions
-     * @param disturbed the same on copies of the runs with further noise, a whole number of copies one after the other, possibly none
+     * @param tracks its eigenfunctions along them, and along a number of copies with further noise, possibly none
      * @return length r, one an eigenpair; NaN where φ vanishes
      */
-    static List<Pair> of(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions, List<ZMatrixRMaj> disturbed) {
-        int runs = judging.runs().size();
-        int copies = disturbed.size() / runs;
-        double[][] plain = squares(expansion, judging, eigenfunctions);
-        double[][] noisier = new double[plain.length][plain[0].length];
-        for (int copy = 0; copy < copies; copy++) {
-            double[][] one = squares(expansion, judging, disturbed.subList(copy * runs, (copy + 1) * runs));
-            for (int j = 0; j < one.length; j++) {
-                for (int k = 0; k < one[j].length; k++) {
-                    noisier[j][k] += one[j][k] / copies;
-                }
+    static List<Pair> of(ModalExpansion expansion, JudgingRuns judging, List<Tracks> tracks) {
+        List<Complex[][]> driven = judging.runs().stream().map(run -> driven(expansion, run)).toList();
+        int[] first = tracks.get(0).first();
+        Pair[] out = new Pair[first.length];
+        Blocks.of(out.length, SHARED, (from, to) -> {
+            for (int j = from; j < to; j++) {
+                out[j] = first[j] == j ? of(expansion.rates().get(j), judging, tracks, driven, j) : Pair.UNKNOWN;
             }
-        }
-        List<Pair> out = new ArrayList<>();
-        for (int j = 0; j < plain.length; j++) {
-            out.add(worst(plain[j], copies == 0 ? plain[j] : noisier[j]));
-        }
-        return out;
+        });
+        return IntStream.range(0, out.length).mapToObj(j -> out[first[j]]).toList();
     }
 
-    private static double[][] squares(ModalExpansion expansion, JudgingRuns judging, List<ZMatrixRMaj> eigenfunctions) {
-        int r = expansion.rank();
-        double[][] squares = new double[r][2 * (SHARES.length + 1)];
-        for (int i = 0; i < judging.runs().size(); i++) {
-            StateRun run = judging.runs().get(i);
-            ZMatrixRMaj values = eigenfunctions.get(i);
-            Complex[][] driven = driven(expansion, run);
-            for (int j = 0; j < r; j++) {
-                for (int lag = 0; lag <= SHARES.length; lag++) {
-                    double target = lag == 0 ? 0 : SHARES[lag - 1] * ownTime(expansion.rates().get(j), judging.longest());
-                    add(run.times(), values, driven[j], j, expansion.rates().get(j), target, squares[j], 2 * lag);
-                }
+    private static Pair of(Complex rate, JudgingRuns judging, List<Tracks> tracks, List<Complex[][]> driven, int j) {
+        double[] plain = squares(rate, judging, tracks.get(0), driven, j);
+        int copies = tracks.size() - 1;
+        double[] noisier = new double[plain.length];
+        for (Tracks copy : tracks.subList(1, tracks.size())) {
+            double[] one = squares(rate, judging, copy, driven, j);
+            for (int k = 0; k < one.length; k++) {
+                noisier[k] += one[k] / copies;
             }
         }
+        return worst(plain, copies == 0 ? plain : noisier);
+    }
+
+    /** Squared misses and squared sizes, lag after lag. */
+    private static double[] squares(Complex rate, JudgingRuns judging, Tracks tracks, List<Complex[][]> driven, int j) {
+        double[] squares = new double[2 * (SHARES.length + 1)];
+        int at = 0;
+        for (int i = 0; i < judging.runs().size(); i++) {
+            double[] times = judging.runs().get(i).times();
+            Tracks.Track track = tracks.track(j, at, times.length, driven.get(i)[j]);
+            for (int lag = 0; lag <= SHARES.length; lag++) {
+                Misses misses = new Misses(rate, track);
+                LaggedPairs.walk(times, lag == 0 ? 0 : SHARES[lag - 1] * ownTime(rate, judging.longest()), misses);
+                squares[2 * lag] += misses.misses;
+                squares[2 * lag + 1] += misses.sizes;
+            }
+            at += times.length;
+        }
         return squares;
+    }
+
+    /** Sums over pairs of states of what one eigenfunction misses and of what it is. */
+    private static final class Misses implements LaggedPairs.Visitor {
+        private final Decay decay;
+        private final double[] re;
+        private final double[] im;
+        private final double[] size;
+        private double misses;
+        private double sizes;
+
+        Misses(Complex rate, Tracks.Track track) {
+            decay = new Decay(rate);
+            re = track.re();
+            im = track.im();
+            size = track.squares();
+        }
+
+        @Override
+        public void pair(int from, int to, double tau) {
+            decay.over(tau);
+            double real = re[to] - (decay.re() * re[from] - decay.im() * im[from]);
+            double imaginary = im[to] - (decay.re() * im[from] + decay.im() * re[from]);
+            misses += real * real + imaginary * imaginary;
+            sizes += size[to];
+        }
     }
 
     /** Returns what inputs have added to each eigenfunction since the run's first state; no entries where none are separated. */
@@ -106,16 +141,6 @@ final class Residuals {
         double time = longest / 2;
         time = rate.re() == 0 ? time : Math.min(time, 1 / Math.abs(rate.re()));
         return rate.im() == 0 ? time : Math.min(time, 2 * Math.PI / Math.abs(rate.im()));
-    }
-
-    private static void add(double[] times, ZMatrixRMaj values, Complex[] driven, int j, Complex rate, double target, double[] squares,
-            int at) {
-        LaggedPairs.walk(times, target, (from, to, tau) -> {
-            Complex next = ComplexMatrices.entry(values, to, j);
-            double miss = free(values, driven, to, j).minus(rate.times(tau).exp().times(free(values, driven, from, j))).abs();
-            squares[at] += miss * miss;
-            squares[at + 1] += next.abs() * next.abs();
-        });
     }
 
     /** Returns an eigenfunction's value without what inputs have added. */

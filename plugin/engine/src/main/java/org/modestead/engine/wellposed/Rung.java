@@ -58,9 +58,8 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
 
     static Rung of(OrthonormalCompression compression, DMatrixRMaj sampled, TrainingSample sample, JudgingRuns judging) {
         ModalExpansion expansion = ModalExpansion.of(compression);
-        List<ZMatrixRMaj> unseen = judging.eigenfunctions(expansion);
-        List<Residuals.Pair> residuals = Residuals.of(expansion, judging, unseen, judging.disturbedEigenfunctions(expansion));
-        List<Part> parts = parts(expansion, sampled, sample, residuals, JudgingRuns.sizes(unseen));
+        List<Tracks> tracks = judging.tracks(expansion);
+        List<Part> parts = parts(expansion, sampled, sample, Residuals.of(expansion, judging, tracks), tracks.get(0).sizes());
         return new Rung(expansion, parts, carryingNorm(parts), captured(compression, sample.channels(), judging));
     }
 
