@@ -2,7 +2,6 @@ package org.modestead.host.run;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
-import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import java.io.FilterOutputStream;
 import java.io.IOException;
@@ -10,12 +9,12 @@ import java.io.OutputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
-import java.util.concurrent.TimeUnit;
 import java.util.concurrent.atomic.AtomicLong;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.modestead.host.SmallDisk;
 import org.modestead.host.TestWorkflows;
 import org.modestead.host.output.Disk;
 import org.modestead.host.workflow.RunPlan;
@@ -56,16 +55,11 @@ class FullDiskTest {
 
     @Test
     void aReallyFullFileSystemDoesTheSame() throws Exception {
-        Path small = Files.createDirectory(folder.resolve("small"));
-        assumeTrue(command("mount", "-t", "tmpfs", "-o", "size=1m", "tmpfs", small.toString()) == 0,
-                "a small file system can be mounted (needs root on Linux)");
-        try {
+        try (SmallDisk small = SmallDisk.over(Files.createDirectory(folder.resolve("small")))) {
             RunResult result = new WorkflowRunner(2, new ResultCache(0), Disk.REAL)
-                    .run(plan, small.resolve("out"), RunListener.NONE, new CancelSwitch());
+                    .run(plan, small.folder().resolve("out"), RunListener.NONE, new CancelSwitch());
             assertTold(result);
-            assertEquals(List.of(), files(small));
-        } finally {
-            assertEquals(0, command("umount", small.toString()));
+            assertEquals(List.of(), files(small.folder()));
         }
     }
 
@@ -86,15 +80,6 @@ class FullDiskTest {
                 out.write(bytes, from, count);
             }
         };
-    }
-
-    private static int command(String... words) throws Exception {
-        try {
-            Process process = new ProcessBuilder(words).redirectErrorStream(true).start();
-            return process.waitFor(10, TimeUnit.SECONDS) ? process.exitValue() : -1;
-        } catch (IOException unknown) {
-            return -1;
-        }
     }
 
     private static List<String> files(Path root) throws IOException {
