@@ -27,6 +27,8 @@ public final class Examples {
             new Example("three-decays", "a sum of three decays with certified rates"),
             new Example("one-pass", "invented pumping station, fitted in one pass over its rows as tables larger than memory are, and in memory beside it"),
             new Example("air-vessel", "invented rising main that loses charge of its air vessel: a kept model held against later recordings, with charts and alarms"),
+            new Example("tower-ring-down", "invented building: ten releases, five channels; sway and twist with damping, against what a wind study assumed"),
+            new Example("grid-ring-down", "invented power grid: twelve line trips at five stations; a swing between areas against limits of its damping"),
             new Example("kept-model", "a kept model and new recordings of the pumping station: forecast and judged without fitting"));
 
     private Examples() {}
