@@ -102,9 +102,79 @@ def quadrature(t):
     return out
 
 
-def settle(rungs):
-    """Relative change of the nearest rate from rung to rung, the plainest reading of a ladder."""
-    out = []
-    for (_, before), (_, after) in zip(rungs, rungs[1:]):
-        out.append([float(np.min(np.abs(after - rate)) / max(abs(rate), 1e-9)) for rate in before])
-    return out
+def halves(t):
+    """Cuts a run into two segments that share their middle sample: first and last sample of each, and the weights of its integral."""
+    middle = (len(t) - 1) // 2
+    return [(0, middle, quadrature(t[:middle + 1])), (middle, len(t) - 1, quadrature(t[middle:]))]
+
+
+def noise(x):
+    """Deviation of the noise, one a channel, of runs x samples x channels: what a cubic through two neighbours on either side misses."""
+    missed = x[:, 2:-2] - (4 * (x[:, 1:-3] + x[:, 3:-1]) - x[:, :-4] - x[:, 4:]) / 6
+    return np.median(np.abs(missed.reshape(-1, x.shape[2])), axis=0) / 0.6745 / np.sqrt(1 + 34 / 36)
+
+
+def cleared(lam, plain, noisier, tau):
+    """Largest relative residual of eigenfunctions over one step and up to each mode's own time, with the share of the noise taken off."""
+    longest = (plain.shape[1] - 1) * tau
+    own = np.minimum(longest / 2, np.minimum(1 / np.maximum(np.abs(lam.real), 1e-300), 2 * np.pi / np.maximum(np.abs(lam.imag), 1e-300)))
+    worst = np.zeros(len(lam))
+    for share in (0, 0.25, 0.5, 1):
+        lags = np.clip(np.ceil(share * own / tau - 1e-6).astype(int), 1, plain.shape[1] - 1)
+        for lag in np.unique(lags):
+            k = lags == lag
+            sums = [missed(lam[k], values[:, :, k], lag, tau) for values in (plain, *noisier)]
+            miss, size = 2 * np.array(sums[0]) - np.mean(sums[1:], axis=0)
+            ratio = np.where(size < 0.5 * sums[0][1], sums[0][0] / sums[0][1], np.maximum(miss, 0) / size)
+            worst[k] = np.maximum(worst[k], np.sqrt(ratio))
+    return worst
+
+
+def missed(lam, values, lag, tau):
+    later = values[:, lag:]
+    apart = later - values[:, :-lag] * np.exp(lam * lag * tau)
+    return (apart.real ** 2 + apart.imag ** 2).sum((0, 1)), (later.real ** 2 + later.imag ** 2).sum((0, 1))
+
+
+def half_rates(lam, values, tau):
+    """Change of every rate from the first to the second half of the runs."""
+    middle = values.shape[1] // 2
+    found = []
+    for part in (values[:, :middle], values[:, middle:]):
+        found.append(np.log((part[:, :-1].conj() * part[:, 1:]).sum((0, 1)) / (np.abs(part[:, :-1]) ** 2).sum((0, 1))) / tau)
+    return np.abs(found[1] - found[0])
+
+
+def nearest(rates, others):
+    return np.abs(rates[:, None] - others[None, :]).argmin(1)
+
+
+def verdict(fits, unseen, tau, other, fitted):
+    """
+    What decides whether modes exist: at nested ranks rates, joint and solo weights, sizes on the data and residuals on unseen runs less
+    the noise's share, each beside those of two fits to noisier runs; at the fitted rank the rates of both halves; the rates with another step.
+
+    fits: matrix, observable and leading functions at some training states, of the fit and of the two noisier ones
+    unseen: leading functions, runs x samples x R, on the runs that judge and on their two noisier copies
+    other: matrix with another step
+    """
+    most = min(len(matrix) for matrix, _, _ in fits)
+    rungs = []
+    for rank in sorted({min(rank, most) for rank in {2, fitted, 180} | {round(2 + k * 178 / 13) for k in range(14)}}):
+        found = []
+        for matrix, observable, sampled in fits:
+            lam, v = np.linalg.eig(matrix[:rank, :rank])
+            joint, solo = weights(v, observable[:rank]), v.conj().T @ observable[:rank]
+            size = np.sqrt((np.abs(sampled[:, :rank] @ v) ** 2).mean(0))
+            found.append((lam, np.linalg.norm(joint, axis=1), np.linalg.norm(joint - solo, axis=1), 1 / size, v))
+        lam, weight, gap, norm, v = found[0]
+        functions = [(values[:, :, :rank].reshape(-1, rank) @ v).reshape(*values.shape[:2], rank) for values in unseen]
+        effects = [np.abs(np.log(norm / noisier[3][nearest(lam, noisier[0])])) for noisier in found[1:]]
+        rungs.append(dict(rank=rank, lam=lam, weight=weight, gap=gap, norm=norm, effect=np.max(effects, axis=0),
+                          residual=cleared(lam, functions[0], functions[1:], tau)))
+        if rank == min(fitted, most):
+            write(lam, residual=rungs[-1]["residual"].tolist(), weight=weight.tolist(), half=half_rates(lam, functions[0], tau).tolist())
+    settled = [np.abs(after["lam"][nearest(before["lam"], after["lam"])] - before["lam"]) / np.maximum(np.abs(before["lam"]), 1e-9)
+               for before, after in zip(rungs, rungs[1:])]
+    again = np.linalg.eigvals(other[:min(fitted, len(other)), :min(fitted, len(other))])
+    return rungs, settled, again

@@ -1,4 +1,4 @@
-"""Kernel step map of very many snapshots by a specialist: landmarks chosen among a part of them, sums over blocks, all else at rank r."""
+"""Kernel step map of very many snapshots by a specialist: landmarks chosen among a part of them, Gram sums over blocks, all else at rank r."""
 import sys
 import numpy as np
 import scipy.linalg as sl
@@ -9,17 +9,17 @@ now, step = data.view("<f8").reshape(len(data), -1)[:, 1:], 0.02
 rank, scale, block = 300, 6, 20000
 part = now[:-1:max(1, -(-len(now) // 50000))]
 chosen, factor = landmarks(lambda a, b: gaussian(a, b, scale), np.ones(len(part)), np.ascontiguousarray(part), rank)
-z, lower = part[chosen], factor[chosen]
-triangle, moved, seen = np.zeros((0, rank)), np.zeros((rank, rank)), np.zeros((rank, now.shape[1]))
+z, inverse = part[chosen], sl.solve_triangular(factor[chosen], np.eye(len(chosen)), lower=True).T
+gram, moved, seen = np.zeros((len(z), len(z))), np.zeros((len(z), len(z))), np.zeros((len(z), now.shape[1]))
 for a in range(0, len(now) - 1, block):
     rows = now[a:a + block + 1]
-    f = sl.solve_triangular(lower, gaussian(rows, z, scale).T, lower=True).T
-    q, triangle = np.linalg.qr(np.concatenate([triangle, f[:-1]]))
-    top = len(q) - len(f) + 1
-    moved = q[:top].T @ moved[:top] + q[top:].T @ f[1:]
-    seen = q[:top].T @ seen[:top] + q[top:].T @ rows[:-1]
-u, s, wt = np.linalg.svd(triangle)
-w = wt.T
-mu, v = np.linalg.eig((u / s).T @ moved @ w)
-joint = np.linalg.solve(v, ((u / s).T @ seen).astype(complex))
+    f = gaussian(rows, z, scale) @ inverse
+    gram += f[:-1].T @ f[:-1]
+    moved += f[:-1].T @ f[1:]
+    seen += f[:-1].T @ rows[:-1]
+values, vectors = np.linalg.eigh(gram)
+keep = values[::-1] > 1e-14 * values[-1]
+q = (vectors[:, ::-1] / np.sqrt(np.abs(values[::-1])))[:, keep]
+mu, v = np.linalg.eig(q.T @ moved @ q)
+joint = np.linalg.solve(v, (q.T @ seen).astype(complex))
 write(np.log(mu.astype(complex)) / step, weight=np.linalg.norm(joint, axis=1).tolist())
