@@ -30,7 +30,9 @@ public final class TableSource implements Node {
     private static final String AUTO = "auto";
     private static final long MOST_SKIPPED = 1_000_000;
 
-    /** Makes the node; it has no state. */
+    private final RememberedTypes types = new RememberedTypes();
+
+    /** Makes the node; it remembers nothing but what the columns of files hold. */
     public TableSource() {}
 
     @Override
@@ -147,7 +149,7 @@ public final class TableSource implements Node {
                 List.of());
     }
 
-    private static Table open(Settings settings, RunContext context) {
+    private Table open(Settings settings, RunContext context) {
         String shown = settings.text("path");
         Path path = context.baseFolder().resolve(shown).toAbsolutePath().normalize();
         SourceLimits limits = new SourceLimits(settings.whole("memory"), settings.flag("copy"));
@@ -167,7 +169,7 @@ public final class TableSource implements Node {
                 : CsvSource.open(csvFormat(settings, path, shown), missing);
         boolean comma = format.equals(CSV) && settings.text("decimal").equals("comma");
         TextRules rules = new TextRules(comma, settings.text("time-format").strip(), settings.texts("text-columns"));
-        return new TextTable(file, rules, limits).open();
+        return new TextTable(file, rules, limits, types).open();
     }
 
     private static String format(Settings settings, String shown) {

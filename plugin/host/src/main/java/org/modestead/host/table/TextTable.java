@@ -20,11 +20,13 @@ final class TextTable implements Explainer {
     private final TextFile file;
     private final TextRules rules;
     private final SourceLimits limits;
+    private final RememberedTypes types;
 
-    TextTable(TextFile file, TextRules rules, SourceLimits limits) {
+    TextTable(TextFile file, TextRules rules, SourceLimits limits, RememberedTypes types) {
         this.file = file;
         this.rules = rules;
         this.limits = limits;
+        this.types = types;
     }
 
     /**
@@ -34,8 +36,8 @@ final class TextTable implements Explainer {
      */
     DuckDbTable open() {
         List<Column> columns;
-        try (Database database = Database.open(limits.megabytes())) {
-            columns = columns(new TextTyper(database, file.read(), rules).types(file.names()));
+        try {
+            columns = columns(types.of(file, rules, this::search));
         } catch (SQLException failure) {
             throw explain(failure);
         }
@@ -43,6 +45,12 @@ final class TextTable implements Explainer {
                 + "" + file.read()));
         return new DuckDbTable(Recipe.file(select, file.path()), new TableSchema(columns), file.shown(), limits.megabytes(),
                 limits.copied(), this);
+    }
+
+    private TextTyper.Result search() throws SQLException {
+        try (Database database = Database.open(limits.megabytes())) {
+            return new TextTyper(database, file.read(), rules).types(file.names());
+        }
     }
 
     private List<Column> columns(TextTyper.Result result) throws SQLException {

@@ -47,7 +47,12 @@ final class TextTyper {
     record Found(CellType type, long cells, long misfits) {}
 
     /** The rows counted, and what each column holds. */
-    record Result(long rows, List<Found> columns) {}
+    record Result(long rows, List<Found> columns) {
+
+        Result {
+            columns = List.copyOf(columns);
+        }
+    }
 
     Result types(List<String> names) throws SQLException {
         Result sample = look(names, "(SELECT * FROM " + read + " LIMIT " + SAMPLE + ")");
