@@ -1,6 +1,7 @@
 package org.modestead.engine.spread;
 
 import java.util.List;
+import java.util.function.Function;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.linalg.Matrices;
@@ -17,6 +18,11 @@ import org.modestead.engine.operator.ObservedRun;
  * @param observable (p + k) x c
  */
 record Moments(DMatrixRMaj gram, DMatrixRMaj cross, DMatrixRMaj second, DMatrixRMaj observable) {
+
+    private static final List<Function<Moments, DMatrixRMaj>> PARTS = List.of(Moments::gram, Moments::cross, Moments::second, Moments::observable);
+
+    /** Sums that are added up at once: the copy of the cells stays small. */
+    private static final int STRIP = 4096;
 
     static Moments of(ObservedRun rows) {
         return new Moments(Matrices.transposeProduct(rows.now(), rows.now()), Matrices.transposeProduct(rows.now(), rows.next()),
@@ -39,6 +45,40 @@ record Moments(DMatrixRMaj gram, DMatrixRMaj cross, DMatrixRMaj second, DMatrixR
             }
         }
         return out;
+    }
+
+    /**
+     * Adds up cells for several draws: a product of the counts with the cells, strip by strip of the sums, instead of one pass over the cells
+     * for every draw.
+     *
+     * @param cells at least one
+     * @param times for each draw a count or weight for every cell
+     * @return one for each draw
+     */
+    static List<Moments> sums(List<Moments> cells, List<double[]> times) {
+        DMatrixRMaj counts = new DMatrixRMaj(times.toArray(double[][]::new));
+        Moments first = cells.get(0);
+        List<Moments> out = times.stream().map(draw -> new Moments(first.gram.createLike(), first.cross.createLike(), first.second.createLike(),
+                first.observable.createLike())).toList();
+        for (Function<Moments, DMatrixRMaj> part : PARTS) {
+            sum(counts, cells.stream().map(cell -> part.apply(cell).data).toList(), out.stream().map(sums -> part.apply(sums).data).toList());
+        }
+        return out;
+    }
+
+    private static void sum(DMatrixRMaj counts, List<double[]> cells, List<double[]> out) {
+        int size = cells.get(0).length;
+        for (int from = 0; from < size; from += STRIP) {
+            int width = Math.min(STRIP, size - from);
+            DMatrixRMaj strip = new DMatrixRMaj(cells.size(), width);
+            for (int k = 0; k < cells.size(); k++) {
+                System.arraycopy(cells.get(k), from, strip.data, k * width, width);
+            }
+            double[] sums = Matrices.product(counts, strip).data;
+            for (int b = 0; b < out.size(); b++) {
+                System.arraycopy(sums, b * width, out.get(b), from, width);
+            }
+        }
     }
 
     private void add(Moments other, double weight) {

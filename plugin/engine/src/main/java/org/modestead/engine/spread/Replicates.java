@@ -29,6 +29,9 @@ record Replicates(Frame frame, Resampling resampling, double stretch, List<Refit
 
     private static final double KEPT = 0.25;
 
+    /** Draws whose sums are held at a time. */
+    private static final int TOGETHER = 50;
+
     /** @return empty list of refits where the estimator offers no observations */
     static Replicates of(FittedOperator operator, SpreadPlan plan, Progress progress) {
         Frame frame = Frame.of(operator);
@@ -40,15 +43,20 @@ record Replicates(Frame frame, Resampling resampling, double stretch, List<Refit
         double share = resampling.wholeRuns() ? 1 : KEPT;
         List<double[]> draws = draws(resampling, plan);
         AtomicInteger done = new AtomicInteger();
-        List<Refit> refits = draws.parallelStream().map(times -> {
+        List<Refit> refits = new ArrayList<>();
+        for (int from = 0; from < draws.size(); from += TOGETHER) {
             progress.checkCancelled();
-            Optional<Refit> refit = frame.refit(Moments.sum(resampling.cells(), kept(times, share)));
-            synchronized (done) { // told in order
-                progress.report((double) done.incrementAndGet() / plan.replicates(), "replicate " + done.get());
-            }
-            return refit;
-        }).flatMap(Optional::stream).toList();
-        return new Replicates(frame, resampling, 1 / share, refits);
+            List<double[]> some = draws.subList(from, Math.min(from + TOGETHER, draws.size())).stream().map(times -> kept(times, share)).toList();
+            refits.addAll(Moments.sums(resampling.cells(), some).parallelStream().map(drawn -> {
+                progress.checkCancelled();
+                Optional<Refit> refit = frame.refit(drawn);
+                synchronized (done) { // told in order
+                    progress.report((double) done.incrementAndGet() / plan.replicates(), "replicate " + done.get());
+                }
+                return refit;
+            }).flatMap(Optional::stream).toList());
+        }
+        return new Replicates(frame, resampling, 1 / share, List.copyOf(refits));
     }
 
     /** All are drawn from one generator before any is fitted, so that the fits may run beside each other. */
