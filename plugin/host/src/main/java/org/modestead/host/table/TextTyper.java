@@ -19,8 +19,8 @@ final class TextTyper {
 
     static final int SAMPLE = 20480;
 
-    private static final List<CellType> TRIED = List.of(CellType.DOUBLE, CellType.LONG, CellType.FLAG, CellType.DATE,
-            CellType.DATE_TIME, CellType.ZONED_DATE_TIME);
+    private static final List<CellType> NUMBERS = List.of(CellType.DOUBLE, CellType.LONG);
+    private static final List<CellType> OTHERS = List.of(CellType.FLAG, CellType.DATE, CellType.DATE_TIME, CellType.ZONED_DATE_TIME);
 
     private final Database database;
     private final String read;
@@ -78,33 +78,62 @@ final class TextTyper {
         return new Result(whole.rows(), merged);
     }
 
+    /** What no number decides is looked at once more, for the other types: they cost several times what numbers do. */
     private Result look(List<String> names, String rows) throws SQLException {
-        String counts = names.stream().map(this::counts).collect(Collectors.joining(", "));
-        return database.one("SELECT count(*), " + counts + " FROM " + rows, row -> {
-            List<Found> found = new ArrayList<>();
-            int next = 2;
-            for (String name : names) {
-                long cells = row.getLong(next++);
-                Map<CellType, Long> fitting = new EnumMap<>(CellType.class);
-                for (CellType type : TRIED) {
-                    fitting.put(type, row.getLong(next++));
-                }
-                CellType type = rules.textColumns().contains(name) ? CellType.TEXT : type(cells, fitting);
-                found.add(new Found(type, cells, cells - fitting.getOrDefault(type, cells)));
+        Counts numbers = count(names, NUMBERS, rows);
+        List<String> undecided = names.stream().filter(name -> !numbers.decides(names.indexOf(name))).toList();
+        Counts others = undecided.isEmpty() ? new Counts(numbers.rows(), List.of(), List.of()) : count(undecided, OTHERS, rows);
+        List<Found> found = new ArrayList<>();
+        for (int j = 0; j < names.size(); j++) {
+            String name = names.get(j);
+            long cells = numbers.cells().get(j);
+            Map<CellType, Long> fitting = new EnumMap<>(numbers.fitting().get(j));
+            if (undecided.contains(name)) {
+                fitting.putAll(others.fitting().get(undecided.indexOf(name)));
             }
-            return new Result(row.getLong(1), found);
+            CellType type = rules.textColumns().contains(name) ? CellType.TEXT : type(cells, fitting);
+            found.add(new Found(type, cells, cells - fitting.getOrDefault(type, cells)));
+        }
+        return new Result(numbers.rows(), found);
+    }
+
+    /** Of each column, how many cells are not missing and how many of them fit each type that was tried. */
+    private record Counts(long rows, List<Long> cells, List<Map<CellType, Long>> fitting) {
+        boolean decides(int column) {
+            return areNumbers(cells.get(column), fitting.get(column));
+        }
+    }
+
+    private Counts count(List<String> names, List<CellType> types, String rows) throws SQLException {
+        String counts = names.stream().map(name -> counts(name, types)).collect(Collectors.joining(", "));
+        return database.one("SELECT count(*), " + counts + " FROM " + rows, row -> {
+            List<Long> cells = new ArrayList<>();
+            List<Map<CellType, Long>> fitting = new ArrayList<>();
+            int next = 2;
+            for (int j = 0; j < names.size(); j++) {
+                cells.add(row.getLong(next++));
+                Map<CellType, Long> fits = new EnumMap<>(CellType.class);
+                for (CellType type : types) {
+                    fits.put(type, row.getLong(next++));
+                }
+                fitting.add(fits);
+            }
+            return new Counts(row.getLong(1), cells, fitting);
         });
     }
 
-    private String counts(String name) {
-        return "count(" + Sql.name(name) + "), " + TRIED.stream()
+    private String counts(String name, List<CellType> types) {
+        return "count(" + Sql.name(name) + "), " + types.stream()
                 .map(type -> "count(" + rules.parsed(type, name) + ")").collect(Collectors.joining(", "));
     }
 
+    private static boolean areNumbers(long cells, Map<CellType, Long> fitting) {
+        return cells == 0 || 2 * fitting.get(CellType.DOUBLE) > cells;
+    }
+
     private static CellType type(long cells, Map<CellType, Long> fitting) {
-        long numbers = fitting.get(CellType.DOUBLE);
-        if (cells == 0 || 2 * numbers > cells) {
-            return cells > 0 && fitting.get(CellType.LONG) == numbers ? CellType.LONG : CellType.DOUBLE;
+        if (areNumbers(cells, fitting)) {
+            return cells > 0 && fitting.get(CellType.LONG).equals(fitting.get(CellType.DOUBLE)) ? CellType.LONG : CellType.DOUBLE;
         }
         for (CellType time : List.of(CellType.DATE, CellType.DATE_TIME, CellType.ZONED_DATE_TIME)) {
             if (2 * fitting.get(time) > cells) {
