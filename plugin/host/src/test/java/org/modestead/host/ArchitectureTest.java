@@ -1,6 +1,7 @@
 package org.modestead.host;
 
 import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAnyPackage;
+import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.classes;
 import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.noClasses;
 import static com.tngtech.archunit.library.dependencies.SlicesRuleDefinition.slices;
 import static org.junit.jupiter.api.Assertions.assertTrue;
@@ -10,8 +11,10 @@ import com.tngtech.archunit.core.importer.ClassFileImporter;
 import com.tngtech.archunit.core.importer.ImportOption;
 import com.tngtech.archunit.library.GeneralCodingRules;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.TestInstance;
 
-/** The arrows host -> nodes -> engine, and what each part may know. */
+/** The arrows host -> nodes -> engine, and what each part may know. The classes are read once for all tests. */
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
 class ArchitectureTest {
 
     private static final String ENGINE = "org.modestead.engine..";
@@ -56,6 +59,19 @@ class ArchitectureTest {
                 .resideInAnyPackage("org.modestead.accelerator..", "org.bytedeco..").check(classes);
         noClasses().that().resideInAPackage("org.modestead.accelerator..").should().dependOnClassesThat()
                 .resideInAnyPackage(NODES, HOST).check(classes);
+    }
+
+    /** The bridge and the job stand above or beside: BoundaryTest and SparkArrowsTest hold them from their side. */
+    @Test
+    void engineNodesAndHostKnowNeitherTheBridgeNorItsPlatformNorTheJobOnManyMachines() {
+        noClasses().should().dependOnClassesThat().resideInAnyPackage("org.modestead.knime..", "org.knime..",
+                "org.modestead.spark..", "org.apache.spark..", "org.apache.hadoop..").check(classes);
+    }
+
+    @Test
+    void theEngineKnowsItsTwoLibrariesAndTheJdkOnly() {
+        classes().that().resideInAPackage(ENGINE).should().onlyDependOnClassesThat()
+                .resideInAnyPackage(ENGINE, "org.ejml..", "org.jgrapht..", "java..").check(classes);
     }
 
     @Test

@@ -33,6 +33,7 @@ public final class CommandLineHost {
         line.addSubcommand(new RunCommand(terminal, catalog));
         line.addSubcommand(new CheckCommand(terminal, catalog));
         line.addSubcommand(new NodesCommand(terminal, catalog));
+        line.addSubcommand(new ReferenceCommand(terminal, catalog));
         line.addSubcommand(new BenchCommand(terminal, catalog));
         line.setOut(new PrintWriter(terminal.out(), true, StandardCharsets.UTF_8));
         line.setErr(new PrintWriter(terminal.err(), true, StandardCharsets.UTF_8));
@@ -70,7 +71,7 @@ public final class CommandLineHost {
 
         @Override
         public void run() {
-            throw new ParameterException(spec.commandLine(), "A command is missing: run, check, nodes or bench.");
+            throw new ParameterException(spec.commandLine(), "A command is missing: run, check, nodes, reference or bench.");
         }
     }
 }

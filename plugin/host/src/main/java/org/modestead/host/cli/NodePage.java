@@ -5,11 +5,9 @@ import java.util.List;
 import java.util.Optional;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
-import java.util.stream.Stream;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.Setting;
-import org.modestead.nodes.contract.SettingText;
 import org.modestead.nodes.table.Column;
 
 /** The reference page of one node as text. */
@@ -65,24 +63,13 @@ final class NodePage {
                 group = setting.common().group();
                 lines.add("  " + group);
             }
-            text("    ", setting.key() + ": " + kind(setting));
+            text("    ", setting.key() + ": " + SettingSummary.of(setting));
             text("        ", setting.common().help());
             if (setting instanceof Setting.Choice choice) {
                 choice.options().forEach(option -> text("          ", option.id() + ": " + option.help()));
             }
             condition(setting).ifPresent(shown -> text("        ", shown));
         }
-    }
-
-    private static String kind(Setting setting) {
-        String initial = SettingText.initial(setting);
-        String standing = SettingText.isRequired(setting) && initial.isEmpty() ? "required"
-                : initial.isEmpty() ? "not set by default" : "default " + initial;
-        String range = setting instanceof Setting.Choice ? "" : SettingText.range(setting);
-        String unit = SettingText.unit(setting);
-        return Stream.of(SettingText.kind(setting), range, range.contains(unit) || unit.isEmpty() ? "" : "in " + unit,
-                standing)
-                .filter(part -> !part.isEmpty()).collect(Collectors.joining(", ")) + ".";
     }
 
     private static Optional<String> condition(Setting setting) {

@@ -151,7 +151,7 @@ class CommandLineTest {
         assertTrue(out().startsWith("Modestead "), this::out);
         assertEquals(0, run("run", "--help"));
         assertEquals(2, run());
-        assertEquals("A command is missing: run, check, nodes or bench.\nTry: modestead --help\n", err());
+        assertEquals("A command is missing: run, check, nodes, reference or bench.\nTry: modestead --help\n", err());
         assertEquals(2, run("rnu"));
         assertEquals(2, run("run"));
         assertEquals(2, run("run", "none", "--oot"));
