@@ -7,6 +7,14 @@ import org.modestead.engine.wellposed.Grade;
  * whether a mode belongs to the space can be told in a kernel's space alone, and the findings say it there.
  */
 public final class VerdictWords {
+
+    /** What a reader must know of a mode that is absent because data the fit never saw do not keep its rule. */
+    public static final String DRIVEN = "Absent is said of these functions, not of what was recorded. A mode that something unrecorded keeps going,"
+            + " such as wind, traffic or turbulence, cannot be foretold from its own past and is called absent too, although its frequency may be real."
+            + " If that may be so: give what drives it as an input column, record runs in which the motion dies away by itself,"
+            + " or take longer states (delay depth of the Snapshot Builder); and see in a Stabilisation Diagram whether the same frequency and damping"
+            + " come back at every rank.";
+
     private VerdictWords() {}
 
     /** Returns one sentence: what was found, without a subject's name; starts with a capital letter. */

@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Optional;
 import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.wellposed.Finding;
+import org.modestead.engine.wellposed.Grade;
 import org.modestead.engine.wellposed.ModeVerdict;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.nodes.words.Cautions;
@@ -37,13 +38,19 @@ public final class VerdictJson {
         ModeVerdict overall = verdict.overall();
         ObjectNode out = NODES.objectNode().put("overall", overall.grade().word())
                 .put("headline", Sentence.of(VerdictWords.headline(overall.grade()))).put("meaning", VerdictWords.overall(overall.grade()))
-                .put("sentence", Sentence.of(overall.sentence())).put("advice", VerdictWords.advice(overall.grade()));
+                .put("sentence", Sentence.of(overall.sentence())).put("advice", VerdictWords.advice(overall.grade()))
+                .put("driven", verdict.modes().stream().anyMatch(VerdictJson::isUnforeseen) ? VerdictWords.DRIVEN : "");
         ArrayNode modes = out.putArray("modes");
         verdict.modes().forEach(mode -> modes.add(mode(verdict, mode, figures(mode, spectrum))));
         out.set("whole", findings(verdict.findings().stream().filter(finding -> finding.mode() == 0 && !told(finding)).toList()));
         texts(out.putArray("doubts"), verdict.doubts().stream().map(doubt -> Sentence.of(doubt.sentence())).toList());
         texts(out.putArray("safety"), Cautions.STANDING);
         return out;
+    }
+
+    /** Absent because it could not be foreseen on data that the fit never saw, as is a mode that something unrecorded drives. */
+    private static boolean isUnforeseen(ModeVerdict mode) {
+        return mode.counts() && mode.grade() == Grade.ABSENT && mode.decidedBy().contains("holdout-residual");
     }
 
     /** The verdict itself is told above the findings. */

@@ -18,6 +18,8 @@ import org.modestead.engine.kernel.KernelFamilies;
 import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.wellposed.Grade;
+import org.modestead.engine.wellposed.ModeVerdict;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
@@ -86,6 +88,20 @@ class LookOfExamplesTest {
             assertTrue(named.containsAll(decided), named + " / " + decided);
         }
         assertTrue(json.get("safety").toString().contains("licensed engineer"));
+    }
+
+    /** What data that the fit never saw do not keep may still be a mode that something unrecorded drives: who reads "absent" is told, nobody else. */
+    @Test
+    void absentByDataNeverSeenIsToldWithWhatElseMayBeTried() {
+        assertEquals("", VerdictJson.of(graded(Grade.ABSENT, "space-norm-growth")).get("driven").asText());
+        assertEquals("", VerdictJson.of(graded(Grade.UNDECIDED, "holdout-residual")).get("driven").asText());
+        String told = VerdictJson.of(graded(Grade.ABSENT, "holdout-residual")).get("driven").asText();
+        assertTrue(told.contains("delay depth") && told.contains("input") && told.contains("Stabilisation Diagram"), told);
+    }
+
+    private static Verdict graded(Grade grade, String check) {
+        ModeVerdict mode = new ModeVerdict(1, grade, List.of(check), true, "Mode 1.");
+        return new Verdict(mode, List.of(mode), List.of(), List.of(), List.of());
     }
 
     @Test

@@ -10,6 +10,7 @@ export function Verdict({verdict, selection, select}) {
   return html`<section class="lk-verdict" data-verdict=${verdict.overall} aria-label="Verdict">
     <p class="lk-overall"><${Mark} mark=${GRADE_MARKS[verdict.overall]} /> ${verdict.headline}</p>
     <p>${verdict.meaning} ${verdict.advice}</p>
+    ${verdict.driven && html`<p class="lk-quiet" data-driven>${verdict.driven}</p>`}
     ${counted.length > 0 && html`<${Modes} title="Modes that carry the signal" modes=${counted} selection=${selection} select=${select} />`}
     ${counted.length === 0 && html`<p>${verdict.sentence}</p>`}
     ${others.length > 0 && html`<details data-action="other-modes" open=${others.some((mode) => isSelected(mode.selection, selection)) || null}>
