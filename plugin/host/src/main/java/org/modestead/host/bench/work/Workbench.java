@@ -257,7 +257,8 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
     @Override
     public synchronized void over(BenchRun from, Map<String, StepOutcome> outcomes, boolean stopped) {
         if (stopped) {
-            from.states().keySet().forEach(step -> endings.put(step, new Ending(running.getOrDefault(step, ""), StepState.Kind.STOPPED, "Stopped.")));
+            from.states().keySet().forEach(step -> endings.put(step, new Ending(running.getOrDefault(step, ""), StepState.Kind.STOPPED,
+                    "You stopped the run before this step was done. What was done before it is kept; run to here to go on.")));
         }
         long failed = outcomes.values().stream().filter(StepOutcome.Failed.class::isInstance).count();
         long done = outcomes.values().stream().filter(StepOutcome.Done.class::isInstance).count();

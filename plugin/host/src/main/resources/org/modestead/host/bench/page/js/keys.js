@@ -13,6 +13,14 @@ export const KEYS = [
     ['Escape', 'give up what is going on: a link, a list, a marked mode'],
     ['F1', 'this list'],
   ]},
+  {group: 'Run and keep', keys: [
+    ['Ctrl + Enter', 'run up to the chosen step'],
+    ['Ctrl + Shift + Enter', 'run everything'],
+    ['Ctrl + .', 'stop the run'],
+    ['Ctrl + S', 'save the workflow'],
+    ['Ctrl + Shift + S', 'save it under another name'],
+    ['Ctrl + O', 'open a workflow'],
+  ]},
   {group: 'Build', keys: [
     ['Enter', 'on the shelf, add the step; on a port, list what fits; on a step, open its settings'],
     ['F2', 'rename the step'],
@@ -22,14 +30,6 @@ export const KEYS = [
     ['Ctrl + D', 'duplicate the chosen steps'],
     ['Ctrl + A', 'choose all steps'],
     ['Ctrl + Z, Ctrl + Y', 'undo, redo'],
-  ]},
-  {group: 'Run and keep', keys: [
-    ['Ctrl + Enter', 'run up to the chosen step'],
-    ['Ctrl + Shift + Enter', 'run everything'],
-    ['Ctrl + .', 'stop the run'],
-    ['Ctrl + S', 'save the workflow'],
-    ['Ctrl + Shift + S', 'save it under another name'],
-    ['Ctrl + O', 'open a workflow'],
   ]},
 ];
 

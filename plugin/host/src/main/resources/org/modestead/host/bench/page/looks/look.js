@@ -20,7 +20,8 @@ export function Look({step, selection = '', select}) {
   const place = useRef(null);
   useLayoutEffect(() => belowHead(place.current));
   if (!step.look) {
-    return html`<div class="lk" data-look=${step.id}><p class="lk-quiet">There is nothing to look at yet: this step has not run.</p></div>`;
+    return html`<div class="lk" data-look=${step.id}><p class="lk-quiet">${step.state?.kind === 'running'
+      ? 'This step is running; what it finds is shown here when it is done.' : 'There is nothing to look at yet: this step has not run.'}</p></div>`;
   }
   if (fault) {
     return html`<div class="lk" data-look=${step.id}><p class="lk-fault" role="alert">${fault}</p></div>`;

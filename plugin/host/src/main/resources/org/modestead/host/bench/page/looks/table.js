@@ -134,10 +134,10 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const units = source.columns.some(unitOf);
   const indices = Array.from({length: Math.max(0, to - from)}, (_, i) => from + i);
   return html`<div class="lk-table" data-table=${id} data-rows=${found} data-ready=${String(held.size > 0)} aria-busy=${String(held.size === 0)}>
-    <${Bar} total=${total} whole=${pages.whole} searchable=${source.searchable} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
+    ${!(pages.fault && held.size === 0) && html`<${Bar} total=${total} whole=${pages.whole} searchable=${source.searchable} found=${found} order=${order} setOrder=${setOrder} go=${(number) => {
       go(number - 1);
       box.current?.querySelector('table')?.focus();
-    }} csv=${csv} title=${title} id=${id} />
+    }} csv=${csv} title=${title} id=${id} />`}
     ${pages.fault && html`<p class="lk-fault" role="alert">${pages.fault}</p>`}
     <div class="lk-rows" ref=${box} onScroll=${(event) => setTop(event.currentTarget.scrollTop)}
         style=${{maxHeight: `calc(${visible * height}px + 3.6em)`}}>

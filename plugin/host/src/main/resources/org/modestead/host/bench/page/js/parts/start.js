@@ -62,12 +62,6 @@ export function Start() {
         <button type="button" class="button main" data-first data-action="choose-recording" onclick=${() => input.current.click()}>Choose a file…</button>
         <p class="help">It stays on this machine${start ? `; up to ${bytes(start.uploadLimit)}` : ''}.</p>
       </section>
-      <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
-        ${!start && html`<p class="quiet" aria-busy="true">Reading what is there.</p>`}
-        <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
-          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
-            class="quiet small">${example.words}</span></button></li>`)}</ul></section>
-      </div><div class="start-column">
       ${start && start.recent.length > 0 && html`<section class="start-way" aria-labelledby="way-recent"><h2 id="way-recent">Go on with</h2>
         <ul class="start-list">${start.recent.map((desk) => html`<li key=${desk.desk} class="start-row"><button type="button" class="start-item"
           data-resume=${desk.desk}
@@ -79,6 +73,12 @@ export function Start() {
         <div class="row"><button type="button" class="button" data-action="open" onclick=${() => openDialog({kind: 'open'})}>Open a workflow…</button>
           <button type="button" class="button" data-action="new-empty"
             onclick=${() => begin({empty: true, name: 'New workflow'}, 'Making room.')}>Empty bench</button></div></section>
+      </div><div class="start-column">
+      <section class="start-way" aria-labelledby="way-example"><h2 id="way-example">Start from an example</h2>
+        ${!start && html`<p class="quiet" aria-busy="true">Reading what is there.</p>`}
+        <ul class="start-list">${start?.examples.map((example) => html`<li key=${example.id}><button type="button" class="start-item" data-example=${example.id}
+          onclick=${() => begin({example: example.id}, 'Opening the example.')}><strong>${example.title}</strong><span
+            class="quiet small">${example.words}</span></button></li>`)}</ul></section>
     </div></main>`}
     <${DropZone} take=${take} />
   </div>`;
