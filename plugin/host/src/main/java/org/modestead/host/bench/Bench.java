@@ -13,6 +13,7 @@ import org.modestead.host.bench.server.BenchServer;
 import org.modestead.host.bench.start.Doors;
 import org.modestead.host.bench.start.Uploads;
 import org.modestead.host.bench.work.Workbench;
+import org.modestead.host.table.SpillFolder;
 import org.modestead.nodes.contract.NodeCatalog;
 
 /** A bench at work: its server and what lies on it. */
@@ -46,6 +47,7 @@ public final class Bench implements AutoCloseable {
 
     /** Starts it. */
     public static Bench start(NodeCatalog catalog, Options options) {
+        SpillFolder.clearAbandoned();
         List<Path> open = new ArrayList<>(List.of(options.desk().root()));
         open.addAll(options.folders());
         KeptResults results = new KeptResults(new ResultFolder(options.desk().results(), Build.mark(), options.keptBytes()));

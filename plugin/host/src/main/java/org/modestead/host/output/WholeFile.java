@@ -2,9 +2,11 @@ package org.modestead.host.output;
 
 import java.io.IOException;
 import java.io.OutputStream;
+import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
+import org.modestead.nodes.files.PartName;
 
 /** Writes a file beside its place and moves it there in one step when it is complete. */
 public final class WholeFile {
@@ -43,7 +45,13 @@ public final class WholeFile {
     /** As {@link #write}, for content that wants a file name. */
     public static void make(Path target, Maker maker) throws IOException {
         Files.createDirectories(target.getParent());
-        Path part = target.resolveSibling("." + target.getFileName() + "." + ProcessHandle.current().pid() + ".part");
+        if (isNoFile(target)) {
+            throw new FileSystemException(target.toString(), null, "not an ordinary file");
+        }
+        for (Path left : PartName.abandonedBeside(target)) {
+            Files.deleteIfExists(left);
+        }
+        Path part = PartName.of(target);
         try {
             maker.make(part);
             Files.move(part, target, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
@@ -57,11 +65,14 @@ public final class WholeFile {
      *
      * @param target absolute
      * @param shown the name as the person wrote it
-     * @throws OutputFault if it is a folder, or its folder is a file or may not be written
+     * @throws OutputFault if it is a folder, a device or a pipe, or its folder is a file or may not be written
      */
     public static void checkTarget(Path target, String shown) {
         if (Files.isDirectory(target)) {
             throw new OutputFault(shown, "this is a folder, not a file", "name a file in it");
+        }
+        if (isNoFile(target)) {
+            throw new OutputFault(shown, "this is a device or a pipe, not an ordinary file", "choose another name");
         }
         Path folder = target.getParent();
         while (folder != null && !Files.exists(folder)) {
@@ -74,5 +85,10 @@ public final class WholeFile {
             throw new OutputFault(shown, "the folder " + folder + " may not be written",
                     "allow writing there or choose another folder");
         }
+    }
+
+    /** Moving a file there would replace it. */
+    private static boolean isNoFile(Path target) {
+        return Files.exists(target) && !Files.isRegularFile(target);
     }
 }

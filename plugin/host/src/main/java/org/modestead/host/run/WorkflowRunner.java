@@ -10,6 +10,7 @@ import java.util.Map;
 import org.modestead.host.output.Disk;
 import org.modestead.host.output.OutputFault;
 import org.modestead.host.output.OutputFolder;
+import org.modestead.host.table.SpillFolder;
 import org.modestead.host.workflow.RunPlan;
 import org.modestead.nodes.report.HtmlReport;
 
@@ -63,6 +64,7 @@ public final class WorkflowRunner {
      */
     public RunResult run(RunPlan plan, Path target, Wanted wanted, RunListener listener, CancelSwitch cancel) {
         Instant started = Instant.now();
+        SpillFolder.clearAbandoned();
         try (OutputFolder folder = OutputFolder.open(target, disk)) {
             StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder, wanted), listener,
                     cancel);

@@ -20,16 +20,20 @@ final class CsvRecords implements Closeable {
 
     private static final int QUOTE = '"';
     private static final int BYTE_ORDER_MARK = 0xFEFF;
+    /** DuckDB refuses longer ones too; a line without end would fill the memory. */
+    private static final int LONGEST = 2_000_000;
 
     private final BufferedReader reader;
+    private final String shown;
     private final char delimiter;
     private long lines = 1;
     private long line = 1;
     private boolean unterminated;
     private List<String> cells = List.of();
 
-    private CsvRecords(BufferedReader reader, char delimiter) {
+    private CsvRecords(BufferedReader reader, String shown, char delimiter) {
         this.reader = reader;
+        this.shown = shown;
         this.delimiter = delimiter;
     }
 
@@ -43,12 +47,24 @@ final class CsvRecords implements Closeable {
         if (reader.read() != BYTE_ORDER_MARK) {
             reader.reset();
         }
-        CsvRecords records = new CsvRecords(reader, delimiter);
+        CsvRecords records = new CsvRecords(reader, format.shown(), delimiter);
         for (int i = 0; i < format.skipLines(); i++) {
-            reader.readLine();
-            records.lines++;
+            records.skipLine();
         }
         return records;
+    }
+
+    /** Moves behind the next line feed, carriage return or both. */
+    private void skipLine() throws IOException {
+        int c = reader.read();
+        while (c >= 0 && c != '\n' && c != '\r') {
+            c = reader.read();
+        }
+        reader.mark(1);
+        if (c == '\r' && reader.read() != '\n') {
+            reader.reset();
+        }
+        lines++;
     }
 
     /** Opens the text of the file; bytes that are not text of its encoding are an {@link IOException}. */
@@ -69,7 +85,11 @@ final class CsvRecords implements Closeable {
         }
     }
 
-    /** Moves on to the next record that is not an empty line; returns false at the end. */
+    /**
+     * Moves on to the next record that is not an empty line; returns false at the end.
+     *
+     * @throws TableFault if the record is longer than any table's
+     */
     boolean next() throws IOException {
         do {
             line = lines;
@@ -97,9 +117,12 @@ final class CsvRecords implements Closeable {
         List<String> record = new ArrayList<>();
         StringBuilder cell = new StringBuilder();
         boolean quoted = false;
-        boolean any = false;
+        int length = 0;
         for (int c = reader.read(); c >= 0; c = reader.read()) {
-            any = true;
+            length++;
+            if (length > LONGEST) {
+                throw tooLong(quoted);
+            }
             lines += c == '\n' ? 1 : 0;
             if (c == QUOTE) {
                 quoted = !quoted;
@@ -113,10 +136,17 @@ final class CsvRecords implements Closeable {
             }
         }
         unterminated |= quoted;
-        if (any) {
+        if (length > 0) {
             record.add(cell.toString());
         }
         return record;
+    }
+
+    private TableFault tooLong(boolean quoted) {
+        return quoted ? new TableFault(shown + ", line " + line, "a quote \" opens here and does not close within " + LONGEST + " characters",
+                "close it, or write \"\" for a quote inside quotes")
+                : new TableFault(shown + ", line " + line, "this line is longer than " + LONGEST + " characters",
+                        "check that lines end by line feeds, and that the file is a table");
     }
 
     @Override

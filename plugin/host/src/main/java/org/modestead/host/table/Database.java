@@ -1,7 +1,6 @@
 package org.modestead.host.table;
 
 import java.io.IOException;
-import java.nio.file.Files;
 import java.nio.file.Path;
 import java.sql.Connection;
 import java.sql.DriverManager;
@@ -46,7 +45,7 @@ final class Database implements AutoCloseable {
     static Database open(int megabytes) throws SQLException {
         Path spill;
         try {
-            spill = Files.createTempDirectory("modestead-spill");
+            spill = SpillFolder.make();
         } catch (IOException noRoom) {
             throw new SQLException("no temporary folder can be made (" + noRoom.getMessage() + ")", noRoom);
         }

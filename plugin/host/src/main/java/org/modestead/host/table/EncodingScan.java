@@ -1,11 +1,12 @@
 package org.modestead.host.table;
 
 import java.io.BufferedInputStream;
-import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.InputStream;
 import java.nio.ByteBuffer;
-import java.nio.charset.CharacterCodingException;
+import java.nio.CharBuffer;
+import java.nio.charset.CharsetDecoder;
+import java.nio.charset.CoderResult;
 import java.nio.file.Files;
 import java.util.Locale;
 import java.util.Optional;
@@ -13,6 +14,8 @@ import java.util.zip.GZIPInputStream;
 
 /** Finds the line of a CSV file that is not text of the encoding it is said to have. */
 final class EncodingScan {
+
+    private static final int BLOCK = 1 << 13;
 
     private EncodingScan() {}
 
@@ -32,30 +35,31 @@ final class EncodingScan {
         }
         try (InputStream file = new BufferedInputStream(Files.newInputStream(format.path()));
                 InputStream bytes = format.path().toString().endsWith(".gz") ? new GZIPInputStream(file) : file) {
-            long line = 1;
-            ByteArrayOutputStream text = new ByteArrayOutputStream();
-            for (int c = bytes.read(); c >= 0; c = bytes.read()) {
-                text.write(c);
-                if (c == '\n') {
-                    if (!decodes(format, text)) {
-                        return Optional.of(line);
-                    }
-                    text.reset();
-                    line++;
-                }
-            }
-            return decodes(format, text) ? Optional.empty() : Optional.of(line);
+            return firstBadLine(bytes, format.encoding().newDecoder());
         } catch (IOException unreadable) {
             return Optional.empty();
         }
     }
 
-    private static boolean decodes(CsvFormat format, ByteArrayOutputStream text) {
-        try {
-            format.encoding().newDecoder().decode(ByteBuffer.wrap(text.toByteArray()));
-            return true;
-        } catch (CharacterCodingException foreign) {
-            return false;
+    /** Decodes block by block: a line may be as long as the file. */
+    private static Optional<Long> firstBadLine(InputStream bytes, CharsetDecoder decoder) throws IOException {
+        ByteBuffer in = ByteBuffer.allocate(BLOCK);
+        // a byte never gives more than one character
+        CharBuffer out = CharBuffer.allocate(BLOCK);
+        long line = 1;
+        boolean end = false;
+        while (!end) {
+            int count = bytes.read(in.array(), in.position(), in.remaining());
+            end = count < 0;
+            in.position(in.position() + Math.max(0, count)).flip();
+            CoderResult result = decoder.decode(in, out, end);
+            line += out.flip().chars().filter(c -> c == '\n').count();
+            if (result.isError()) {
+                return Optional.of(line);
+            }
+            out.clear();
+            in.compact();
         }
+        return Optional.empty();
     }
 }

@@ -6,6 +6,7 @@ import com.fasterxml.jackson.databind.DeserializationFeature;
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.json.JsonMapper;
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -27,6 +28,9 @@ public final class WorkflowFile {
 
     /** What is told of a workflow that has no step. */
     static final String NO_STEP = "no step";
+
+    /** Megabytes of the largest file that is read: thousands of times a usual one. */
+    private static final int MOST_MEGABYTES = 16;
 
     private static final JsonMapper MAPPER = JsonMapper.builder()
             .enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION)
@@ -72,8 +76,10 @@ public final class WorkflowFile {
             String seen = Files.isDirectory(given) ? "the folder holds no " + DEFAULT_NAME : "there is no such file";
             return Reading.failed(given.toString(), "", seen, "give a workflow file or a folder with a " + DEFAULT_NAME);
         }
-        try {
-            return parse(file, Files.readAllBytes(file));
+        try (InputStream in = Files.newInputStream(file)) {
+            byte[] json = in.readNBytes((MOST_MEGABYTES << 20) + 1);
+            return json.length > MOST_MEGABYTES << 20 ? Reading.failed(given.toString(), "", "the file is larger than " + MOST_MEGABYTES + " MB",
+                    "give a workflow file") : parse(file, json);
         } catch (IOException unreadable) {
             return Reading.failed(given.toString(), "", "the file cannot be read (" + unreadable.getMessage() + ")",
                     "allow reading it");

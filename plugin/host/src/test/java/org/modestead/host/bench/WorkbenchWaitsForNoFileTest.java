@@ -16,6 +16,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.modestead.host.FakeNode;
 import org.modestead.host.WaitingNode;
 import org.modestead.host.bench.desk.DeskFolder;
+import org.modestead.host.bench.desk.LabelEdit;
 import org.modestead.host.bench.desk.SettingEdit;
 import org.modestead.host.bench.folders.OpenedFolders;
 import org.modestead.host.bench.run.KeptResults;
@@ -91,6 +92,37 @@ class WorkbenchWaitsForNoFileTest {
             slow.go().countDown();
             assertTrue(edited.get().view().desk().orElseThrow().inspection().setUp("slow"));
             assertEquals(Optional.empty(), stopped.get().desk().map(desk -> desk.run().running()).filter(going -> going));
+        }
+    }
+
+    /** A wait may end of its own accord; whoever waits for a change is told of nothing else. */
+    @Test
+    @Timeout(120)
+    void whoWaitsIsWokenByAChangeOnly() throws Exception {
+        DeskFolder desks = new DeskFolder(folder);
+        try (Workbench workbench = new Workbench(NodeCatalog.of(List.of(new WaitingNode())), new KeptResults(new ResultFolder(folder.resolve("results"), "test",
+                1L << 30)), new OpenedFolders(List.of(folder)))) {
+            Path own = desks.fresh("test");
+            long known = workbench.open(() -> desks.begin(own, new Workflow("test", own.resolve("workflow.json"), List.of(), List.of()))).revision();
+            CompletableFuture<Optional<DeskView>> told = new CompletableFuture<>();
+            Thread waiter = new Thread(() -> {
+                try {
+                    told.complete(workbench.await(known, TimeUnit.MINUTES.toMillis(1)));
+                } catch (InterruptedException stopped) {
+                    told.completeExceptionally(stopped);
+                }
+            });
+            waiter.start();
+            while (waiter.getState() != Thread.State.TIMED_WAITING) {
+                TimeUnit.MILLISECONDS.sleep(5);
+            }
+            synchronized (workbench) {
+                workbench.notifyAll();
+            }
+            TimeUnit.MILLISECONDS.sleep(50);
+            workbench.edit(List.of(new LabelEdit.Name("changed")), "");
+            assertEquals("changed", told.get().orElseThrow().desk().orElseThrow().workflow().name());
+            assertEquals(Optional.empty(), workbench.await(workbench.view().revision(), 20), "and nobody waits for ever");
         }
     }
 }

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
+import java.io.RandomAccessFile;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -110,5 +111,15 @@ class WorkflowFileTest {
 
     private WorkflowFile.Reading read(String text) throws IOException {
         return WorkflowFile.read(Files.writeString(folder.resolve("w.json"), text));
+    }
+
+    @Test
+    void aFileLargerThanAnyWorkflowIsRefusedUnread() throws IOException {
+        Path file = folder.resolve("workflow.json");
+        try (RandomAccessFile sparse = new RandomAccessFile(file.toFile(), "rw")) {
+            sparse.setLength(3L << 30);
+        }
+        assertEquals(List.of(file + ": the file is larger than 16 MB; give a workflow file."),
+                WorkflowFile.read(file).problems().stream().map(Problem::sentence).toList());
     }
 }

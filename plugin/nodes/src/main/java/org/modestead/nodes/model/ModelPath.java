@@ -16,6 +16,7 @@ import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.files.PartName;
 import org.modestead.nodes.modelfile.MomentFiles;
 import org.modestead.nodes.modelfile.PortFiles;
 
@@ -44,6 +45,9 @@ record ModelPath(Path path, String shown) {
         if (!Files.exists(path)) {
             throw new ModelFileFault(shown, "there is no such file", "name a file relative to the workflow's folder or with its full path");
         }
+        if (Files.exists(path) && !Files.isRegularFile(path)) {
+            throw new ModelFileFault(shown, "this is a device or a pipe, not an ordinary file", "name an ordinary file");
+        }
         if (!Files.isReadable(path)) {
             throw new ModelFileFault(shown, "the file may not be read", "allow reading it");
         }
@@ -53,6 +57,9 @@ record ModelPath(Path path, String shown) {
     void requireWritable() {
         if (Files.isDirectory(path)) {
             throw new ModelFileFault(shown, "this is a folder, not a file", "name a file in it");
+        }
+        if (Files.exists(path) && !Files.isRegularFile(path)) {
+            throw new ModelFileFault(shown, "this is a device or a pipe, not an ordinary file", "name an ordinary file");
         }
         Path folder = path.getParent();
         while (folder != null && !Files.exists(folder)) {
@@ -94,9 +101,12 @@ record ModelPath(Path path, String shown) {
     /** Writes beside the place and moves there in one step: one that was there before stays until then. */
     void write(Model model, Progress progress) {
         requireWritable();
-        Path part = path.resolveSibling("." + path.getFileName() + "." + ProcessHandle.current().pid() + ".part");
+        Path part = PartName.of(path);
         try {
             Files.createDirectories(path.getParent());
+            for (Path left : PartName.abandonedBeside(path)) {
+                Files.deleteIfExists(left);
+            }
             try {
                 try (OutputStream out = new BufferedOutputStream(PolledStreams.writing(Files.newOutputStream(part), progress), BLOCK)) {
                     PortFiles.write(PortType.MODEL, model, out);

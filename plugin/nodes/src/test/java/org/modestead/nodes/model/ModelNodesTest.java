@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import java.io.IOException;
 import java.nio.file.Files;
@@ -220,6 +221,18 @@ class ModelNodesTest {
             assertEquals(List.of(), left.toList());
         }
         assertThrows(Cancelled.class, () -> new ModelPath(folder.resolve("shared.zip"), "shared.zip").read(STOPPED));
+    }
+
+    /** Moving a file there would replace the device for everybody. */
+    @Test
+    void aPipeIsNeitherReadNorReplaced() throws Exception {
+        Path pipe = folder.resolve("pipe.zip");
+        assumeTrue(new ProcessBuilder("mkfifo", pipe.toString()).start().waitFor() == 0, "pipes can be made (POSIX)");
+        ModelPath path = new ModelPath(pipe, "pipe.zip");
+        String told = "pipe.zip: this is a device or a pipe, not an ordinary file; name an ordinary file.";
+        assertEquals(told, assertThrows(ModelFileFault.class, () -> path.write((Model) model(), Progress.NONE)).getMessage());
+        assertEquals(told, assertThrows(ModelFileFault.class, () -> path.read(Progress.NONE)).getMessage());
+        assertTrue(Files.exists(pipe) && !Files.isRegularFile(pipe));
     }
 
     private static final Progress STOPPED = new Progress() {

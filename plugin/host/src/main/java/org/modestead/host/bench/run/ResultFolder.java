@@ -29,6 +29,7 @@ import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
+import org.modestead.nodes.files.PartName;
 import org.modestead.nodes.modelfile.PortFiles;
 import org.modestead.nodes.modelfile.ResultFile;
 import org.modestead.nodes.table.CellType;
@@ -130,7 +131,7 @@ public record ResultFolder(Path root, String build, long limit) {
      */
     void write(NodeDeclaration declaration, String id, NodeResult result, KeptResults.Facts facts) {
         Path folder = folder(id);
-        Path part = folder.resolveSibling("." + id + "." + ProcessHandle.current().pid() + ".part");
+        Path part = PartName.of(folder);
         try {
             remove(part);
             Files.createDirectories(part);
@@ -194,6 +195,7 @@ public record ResultFolder(Path root, String build, long limit) {
         try (Stream<Path> builds = Files.list(root)) {
             builds.filter(other -> !other.getFileName().toString().equals(build)).toList().forEach(ResultFolder::remove);
         }
+        PartName.abandonedIn(root.resolve(build)).forEach(ResultFolder::remove);
         List<Path> folders;
         try (Stream<Path> found = Files.list(root.resolve(build))) {
             folders = found.filter(folder -> Files.isRegularFile(folder.resolve(FACTS)))

@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.concurrent.TimeUnit;
 import java.util.function.Function;
 import java.util.function.Supplier;
 import org.modestead.host.bench.check.DialogData;
@@ -435,12 +436,14 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      * @return the desk when it changed, empty when it did not
      */
     public Optional<DeskView> await(long known, long millis) throws InterruptedException {
+        long end = System.nanoTime() + TimeUnit.MILLISECONDS.toNanos(millis);
         synchronized (this) {
-            if (revision == known) {
-                wait(millis);
-            }
-            if (revision == known) {
-                return Optional.empty();
+            while (revision == known) {
+                long left = TimeUnit.NANOSECONDS.toMillis(end - System.nanoTime() + 999_999);
+                if (left <= 0) {
+                    return Optional.empty();
+                }
+                wait(left);
             }
         }
         return Optional.of(view());

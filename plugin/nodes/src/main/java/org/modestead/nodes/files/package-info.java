@@ -1,0 +1,2 @@
+/** How files come to their places whole or not at all. */
+package org.modestead.nodes.files;
