@@ -17,6 +17,13 @@ public sealed interface Evolution {
     double aliasingLimit();
 
     /**
+     * Returns the time over which the operator carries functions at once.
+     *
+     * @param sampling time from sample to sample, for a generator, which knows no step of its own
+     */
+    double step(double sampling);
+
+    /**
      * The Koopman operator of one time step: {@code λ = log(μ)/Δt}, principal branch, so frequencies above
      * {@code 1/(2Δt)} appear folded.
      *
@@ -31,6 +38,11 @@ public sealed interface Evolution {
         @Override
         public double aliasingLimit() {
             return 1 / (2 * step);
+        }
+
+        @Override
+        public double step(double sampling) {
+            return step;
         }
     }
 
@@ -48,6 +60,11 @@ public sealed interface Evolution {
         @Override
         public double aliasingLimit() {
             return Double.POSITIVE_INFINITY;
+        }
+
+        @Override
+        public double step(double sampling) {
+            return sampling;
         }
     }
 }

@@ -1,6 +1,8 @@
 package org.modestead.engine.operator;
 
+import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.modestead.engine.Progress;
@@ -53,11 +55,29 @@ public record NoiseMoments(DMatrixRMaj gram, DMatrixRMaj action, DMatrixRMaj gra
     }
 
     private static SampleNoise level(Snapshots snapshots, OrthonormalCompression functions, Progress progress) {
-        List<StateRun> runs = snapshots.states(Snapshots.Part.TRAINING).stream().filter(run -> run.count() > 1).toList();
+        List<StateRun> runs = snapshots.states(Snapshots.Part.TRAINING).stream().filter(run -> run.count() > 1)
+                .map(run -> paced(run, functions.evolution())).filter(run -> run.count() > 1).toList();
         List<DMatrixRMaj> values = runs.stream().map(run -> functions.evaluate(functions.arguments(run))).toList();
         progress.checkCancelled();
         return SampleNoise.rough(snapshots).atMost(PredictionError.leastOfNewest(functions, runs, values, List.of(functions.rank()),
                 snapshots.channels().size()));
+    }
+
+    /** States one step of the operator apart: part of a step is told by its rate alone, which is folded where the motion is faster than the step. */
+    private static StateRun paced(StateRun run, Evolution evolution) {
+        double sampling = (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
+        int stride = (int) Math.max(1, Math.round(evolution.step(sampling) / sampling));
+        int[] kept = IntStream.range(0, run.count()).filter(k -> k % stride == 0).toArray();
+        return stride == 1 ? run : new StateRun(run.id(), Arrays.stream(kept).mapToDouble(k -> run.times()[k]).toArray(),
+                rows(run.states(), kept), rows(run.inputs(), kept), run.weight());
+    }
+
+    private static DMatrixRMaj rows(DMatrixRMaj a, int[] kept) {
+        DMatrixRMaj out = new DMatrixRMaj(kept.length, a.numCols);
+        for (int i = 0; i < kept.length; i++) {
+            System.arraycopy(a.data, kept[i] * a.numCols, out.data, i * a.numCols, a.numCols);
+        }
+        return out;
     }
 
     private static DMatrixRMaj[] moments(Estimator estimator, Snapshots snapshots, OrthonormalCompression functions, Progress progress) {
