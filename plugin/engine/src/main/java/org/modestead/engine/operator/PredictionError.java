@@ -161,7 +161,9 @@ public final class PredictionError {
                 count += predicted.numRows;
             }
             for (int c = 0; c < channels; c++) {
-                least[c] = Math.min(least[c], Math.sqrt(squares[c] / count));
+                double missed = Math.sqrt(squares[c] / count);
+                // of a rank whose growth leaves the range of numbers within one step nothing is learnt
+                least[c] = Double.isNaN(missed) ? least[c] : Math.min(least[c], missed);
             }
         }
         return least;

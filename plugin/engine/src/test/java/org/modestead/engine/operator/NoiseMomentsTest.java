@@ -1,18 +1,24 @@
 package org.modestead.engine.operator;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
+import java.util.stream.IntStream;
+import org.ejml.data.DMatrixRMaj;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.basis.Dictionary;
 import org.modestead.engine.fixtures.Motions;
+import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+import org.modestead.engine.spectrum.ModalExpansion;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.SpectrumExtractor;
 
@@ -70,6 +76,35 @@ class NoiseMomentsTest {
         double plain = rateNear(new LinearEstimator(), snapshots, 2, -1.1);
         assertEquals(plain, rateNear(new ExtrapolatedEstimator(new LinearEstimator()), snapshots, 2, -1.1), 1e-7,
                 "what a cubic misses of these curves is 1e-7 of their size");
+    }
+
+    @Test
+    void withoutNoiseTwiceTheStepFindsTheSameDecayWhereItFoldsTheMotion() {
+        // amounts handed round five places, 0.97 of each a step: multipliers 0.97 e^(2πik/5), of which k = ±2 turn by more than half a turn in two steps
+        Random random = new Random(5);
+        List<Run> runs = new ArrayList<>();
+        for (int i = 0; i < 20; i++) {
+            double[] start = random.doubles(5, -1, 1).toArray();
+            runs.add(Motions.run("r" + i, 36, 1, t -> IntStream.range(0, 5)
+                    .mapToDouble(j -> Math.pow(0.97, t) * start[Math.floorMod(j - (int) t, 5)]).toArray()));
+        }
+        Snapshots snapshots = Motions.snapshots(1, 1, runs, List.of());
+        Estimator twice = new ExtrapolatedEstimator(new LinearEstimator()).otherStep(snapshots).orElseThrow();
+        for (Complex rate : ModalExpansion.of(twice.compress(snapshots, Progress.NONE).whiten(5)).rates()) {
+            assertEquals(Math.log(0.97), rate.re(), 1e-12, "no noise is taken off");
+        }
+    }
+
+    @Test
+    void anOperatorThatOverflowsWithinAStepBoundsNoNoise() {
+        Snapshots snapshots = decays(NOISE, new Random(3));
+        OrthonormalCompression fitted = new LinearEstimator().compress(snapshots, Progress.NONE).whiten(2);
+        DMatrixRMaj explosive = new DMatrixRMaj(new double[][] {{1e5, 1e4}, {-1e4, 1e5}});
+        OrthonormalCompression wild = new OrthonormalCompression(fitted.basis(), fitted.map(), explosive, fitted.second(), fitted.observable(),
+                fitted.singular(), fitted.snapshots(), fitted.innerProduct(), new Evolution.Generator(1));
+        List<StateRun> runs = snapshots.states(Snapshots.Part.TRAINING);
+        double[] bounds = PredictionError.leastOfNewest(wild, runs, runs.stream().map(run -> wild.evaluate(run.states())).toList(), List.of(2), 2);
+        assertArrayEquals(new double[] {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY}, bounds);
     }
 
     @Test
