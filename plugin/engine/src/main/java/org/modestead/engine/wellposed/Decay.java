@@ -44,6 +44,11 @@ final class Decay {
         }
     }
 
+    /** Returns e^(λτ). */
+    Complex factor() {
+        return new Complex(re, im);
+    }
+
     double re() {
         return re;
     }

@@ -89,9 +89,11 @@ record Eigenspace(List<Integer> columns, List<Integer> all, Complex[] carrier, d
         double size = 0;
         for (int k = 0; k < joint.length; k++) {
             Complex[] solo = projected(basis, expansion.compression().observable(), k);
+            Complex[] apart = new Complex[solo.length];
             for (int i = 0; i < solo.length; i++) {
-                difference = Math.hypot(difference, joint[k][i].minus(solo[i]).abs());
+                apart[i] = joint[k][i].minus(solo[i]);
             }
+            difference = Math.hypot(difference, norm(apart));
             size = Math.hypot(size, Math.max(norm(joint[k]), norm(solo)));
         }
         return size == 0 ? 0 : difference / size;
@@ -147,12 +149,22 @@ record Eigenspace(List<Integer> columns, List<Integer> all, Complex[] carrier, d
         return sum;
     }
 
+    /** Euclidean norm, measured in units of the largest part so that no square overflows or vanishes. */
     static double norm(Complex[] a) {
-        double norm = 0;
+        double unit = 0;
         for (Complex z : a) {
-            norm = Math.hypot(norm, z.abs());
+            unit = Math.max(unit, Math.max(Math.abs(z.re()), Math.abs(z.im())));
         }
-        return norm;
+        if (!(unit > 0) || Double.isInfinite(unit)) {
+            return unit;
+        }
+        double squares = 0;
+        for (Complex z : a) {
+            double re = z.re() / unit;
+            double im = z.im() / unit;
+            squares += re * re + im * im;
+        }
+        return unit * Math.sqrt(squares);
     }
 
     private static Complex[] scaled(Complex[] a, double factor) {

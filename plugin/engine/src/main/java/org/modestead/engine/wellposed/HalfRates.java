@@ -73,10 +73,12 @@ record HalfRates(double change, double error) {
         double start = half == 0 ? t[0] : middle;
         double end = half == 0 ? middle : t[t.length - 1];
         Half[] sum = {Half.NONE};
+        Decay back = new Decay(rate.times(-1));
         LaggedPairs.walk(t, lag, (from, to, tau) -> {
             if (t[from] >= start && t[to] <= end) {
+                back.over(tau);
                 Complex now = Residuals.free(values, driven, from, j);
-                Complex next = rate.times(-tau).exp().times(Residuals.free(values, driven, to, j));
+                Complex next = back.factor().times(Residuals.free(values, driven, to, j));
                 sum[0] = sum[0].plus(new Half(now.conj().times(next), square(now), square(next), tau, 1, 0));
             }
         });

@@ -182,22 +182,24 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
 
     /** Adds the squared misses by two rates and by each of three single ones, and the squared size: of e_2, then of e_1. */
     private int add(StateRun run, ZMatrixRMaj values, double s, double target, double[] sums) {
-        Complex mean = rateOne.plus(rateTwo).times(0.5);
+        List<Decay> decays = List.of(new Decay(rateOne), new Decay(rateTwo), new Decay(rateOne.plus(rateTwo).times(0.5)));
         return LaggedPairs.walk(run.times(), target, (from, to, tau) -> {
+            decays.forEach(decay -> decay.over(tau));
+            Complex one = decays.get(0).factor();
+            Complex two = decays.get(1).factor();
             Complex oneNow = ComplexMatrices.entry(values, from, first);
             Complex twoNow = second(values, from, s);
             Complex oneNext = ComplexMatrices.entry(values, to, first);
             Complex twoNext = second(values, to, s);
-            Complex grown = rateTwo.times(tau).exp().minus(rateOne.times(tau).exp()).times(overlap).times(1 / s);
-            sums[0] += square(twoNext.minus(rateTwo.times(tau).exp().times(twoNow)).minus(grown.times(oneNow)));
-            Complex[] single = {rateOne, rateTwo, mean};
-            for (int k = 0; k < single.length; k++) {
-                Complex factor = single[k].times(tau).exp();
+            Complex grown = two.minus(one).times(overlap).times(1 / s);
+            sums[0] += square(twoNext.minus(two.times(twoNow)).minus(grown.times(oneNow)));
+            for (int k = 0; k < decays.size(); k++) {
+                Complex factor = decays.get(k).factor();
                 Complex slope = rateTwo.minus(rateOne).times(overlap).times(tau / s);
                 sums[k + 1] += square(twoNext.minus(factor.times(twoNow.plus(slope.times(oneNow)))));
                 sums[k + 6] += square(oneNext.minus(factor.times(oneNow)));
             }
-            sums[5] += square(oneNext.minus(rateOne.times(tau).exp().times(oneNow)));
+            sums[5] += square(oneNext.minus(one.times(oneNow)));
             sums[4] += square(twoNext);
             sums[9] += square(oneNext);
         });
