@@ -173,7 +173,11 @@ final class PivotedCholesky {
         /** Adds the next column, from kernel values and the pivot's row of the factor. */
         void add(double[] column, double[] pivotRow, double root, int pivot) {
             int k = factor.size();
-            for (int l = 0; l < k; l++) {
+            int l = 0;
+            for (; l + 4 <= k; l += 4) {
+                subtract(column, pivotRow, l, factor.get(l), factor.get(l + 1), factor.get(l + 2), factor.get(l + 3));
+            }
+            for (; l < k; l++) {
                 subtract(column, pivotRow[l], factor.get(l));
             }
             for (int i = 0; i < column.length; i++) {
@@ -184,6 +188,17 @@ final class PivotedCholesky {
                 distance[pivot - from] = 0;
             }
             factor.add(column);
+        }
+
+        /** Four one after the other in the order in which they would be alone, so that each entry is read and written once for all. */
+        private static void subtract(double[] column, double[] weights, int l, double[] a, double[] b, double[] c, double[] d) {
+            double wa = weights[l];
+            double wb = weights[l + 1];
+            double wc = weights[l + 2];
+            double wd = weights[l + 3];
+            for (int i = 0; i < column.length; i++) {
+                column[i] = column[i] - wa * a[i] - wb * b[i] - wc * c[i] - wd * d[i];
+            }
         }
 
         private static void subtract(double[] column, double weight, double[] earlier) {
