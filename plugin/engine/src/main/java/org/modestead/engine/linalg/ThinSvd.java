@@ -34,9 +34,9 @@ public final class ThinSvd {
      */
     public static Svd of(DMatrixRMaj a, int largest) {
         if (a.numCols >= TALL * a.numRows && a.numRows >= WORTH_IT && a.getNumElements() >= LARGE) {
-            Optional<Svd> found = WideSvd.of(a);
+            Optional<Svd> found = WideSvd.of(a, largest);
             if (found.isPresent()) {
-                return leading(found.get(), largest);
+                return found.get();
             }
         }
         if (a.numCols >= TALL * a.numRows) {

@@ -1,5 +1,6 @@
 package org.modestead.engine.linalg;
 
+import java.util.Arrays;
 import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
@@ -18,15 +19,18 @@ final class WideSvd {
 
     /**
      * @param a m x n, n at least m
-     * @return m triples; empty when A is too close to rank deficient
+     * @param largest most triples wanted, at least 1
+     * @return m or as many triples as wanted; empty when A is too close to rank deficient
      */
-    static Optional<Svd> of(DMatrixRMaj a) {
+    static Optional<Svd> of(DMatrixRMaj a, int largest) {
         return factor(a).flatMap(r -> {
             DMatrixRMaj b = Matrices.product(inverseTransposed(r), a);
             return factor(b).map(t -> {
                 Svd small = LinearAlgebra.installed().svd(CommonOps_DDRM.transpose(Matrices.product(t, r), null));
-                DMatrixRMaj turn = Matrices.transposeProduct(inverseTransposed(t), small.v());
-                return new Svd(small.u(), small.values(), Matrices.transposeProduct(b, turn));
+                int k = Math.min(largest, small.values().length);
+                DMatrixRMaj turn = Matrices.transposeProduct(inverseTransposed(t), Matrices.block(small.v(), 0, small.v().numRows, 0, k));
+                return new Svd(Matrices.block(small.u(), 0, small.u().numRows, 0, k), Arrays.copyOf(small.values(), k),
+                        Matrices.transposeProduct(b, turn));
             });
         });
     }

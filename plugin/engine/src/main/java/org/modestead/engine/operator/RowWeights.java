@@ -26,8 +26,8 @@ record RowWeights(Optional<double[]> roots) {
 
     /** Returns the rows times their roots and a constant. */
     DMatrixRMaj rows(DMatrixRMaj a, double constant) {
-        DMatrixRMaj out = a.copy();
-        CommonOps_DDRM.scale(constant, out);
+        DMatrixRMaj out = new DMatrixRMaj(a.numRows, a.numCols);
+        CommonOps_DDRM.scale(constant, a, out);
         roots.ifPresent(factors -> CommonOps_DDRM.multRows(factors, out));
         return out;
     }

@@ -48,12 +48,15 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun>
 
     private static StatePairs of(Snapshots snapshots, List<StateRun> runs, int m, int stride, double step) {
         int n = snapshots.stateSize();
-        DMatrixRMaj now = new DMatrixRMaj(m, n);
+        // the states of a single run but its last are there already
+        DMatrixRMaj now = runs.size() == 1 ? DMatrixRMaj.wrap(m, n, runs.get(0).states().data) : new DMatrixRMaj(m, n);
         DMatrixRMaj next = new DMatrixRMaj(m, n);
         int at = 0;
         for (StateRun run : runs) {
             int count = run.count() - stride;
-            System.arraycopy(run.states().data, 0, now.data, at * n, count * n);
+            if (runs.size() > 1) {
+                System.arraycopy(run.states().data, 0, now.data, at * n, count * n);
+            }
             System.arraycopy(run.states().data, stride * n, next.data, at * n, count * n);
             at += count;
         }

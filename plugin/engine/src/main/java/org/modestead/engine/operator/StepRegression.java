@@ -33,9 +33,10 @@ final class StepRegression {
             NoiseCorrection correction) {
         RowWeights weights = pairs.weights();
         double weight = 1 / Math.sqrt(pairs.count());
-        DMatrixRMaj now = weights.rows(functions.evaluate(pairs.now()), weight);
-        DMatrixRMaj next = weights.rows(functions.evaluate(pairs.next()), weight);
-        DMatrixRMaj target = functions instanceof Coordinates ? now : weights.rows(pairs.now(), weight);
+        boolean plain = functions instanceof Coordinates;
+        DMatrixRMaj now = weights.rows(plain ? pairs.now() : functions.evaluate(pairs.now()), weight);
+        DMatrixRMaj next = weights.rows(plain ? pairs.next() : functions.evaluate(pairs.next()), weight);
+        DMatrixRMaj target = plain ? now : weights.rows(pairs.now(), weight);
         Evolution evolution = new Evolution.StepMap(pairs.step());
         if (use == InputUse.LEFT_IN || pairs.inputs() == 0) {
             return new FactoredCompression(functions, now, next, target, InnerProduct.DATA, evolution, correction);

@@ -130,7 +130,7 @@ public record Snapshots(
     }
 
     /**
-     * Embeds one prepared run.
+     * Embeds one prepared run. States of delay depth 1 are the run's samples themselves, which are not copied.
      *
      * @param run prepared, longer than the reach of the delays
      * @return samples - reach states
@@ -139,6 +139,9 @@ public record Snapshots(
         int reach = delay.reach();
         int count = run.samples() - reach;
         int n = channels.size();
+        if (delay.depth() == 1 && reach == 0) {
+            return new StateRun(run.id(), run.times(), run.values(), run.inputs(), run.weight());
+        }
         double[] times = new double[count];
         System.arraycopy(run.times(), reach, times, 0, count);
         DMatrixRMaj states = new DMatrixRMaj(count, stateSize());

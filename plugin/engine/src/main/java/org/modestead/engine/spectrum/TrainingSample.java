@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.function.Function;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.FitFault;
+import org.modestead.engine.linalg.Matrices;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
@@ -38,6 +39,9 @@ public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channel
             throw new FitFault("training part", "no run is long enough for one state", "use longer runs or a smaller delay depth");
         }
         int every = Math.max(1, (total + MOST - 1) / MOST);
+        if (runs.size() == 1 && every == 1) {
+            return ofOne(runs.get(0), arguments.apply(runs.get(0)), snapshots.channels().size());
+        }
         int n = arguments.apply(runs.get(0)).numCols;
         DMatrixRMaj states = new DMatrixRMaj((total + every - 1) / every, n);
         DMatrixRMaj starts = new DMatrixRMaj(runs.size(), n);
@@ -57,5 +61,10 @@ public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channel
             }
         }
         return new TrainingSample(states, starts, snapshots.channels().size(), longest);
+    }
+
+    /** All states of a single run, which are not copied. */
+    private static TrainingSample ofOne(StateRun run, DMatrixRMaj states, int channels) {
+        return new TrainingSample(states, Matrices.block(states, 0, 1, 0, states.numCols), channels, run.times()[run.count() - 1] - run.times()[0]);
     }
 }

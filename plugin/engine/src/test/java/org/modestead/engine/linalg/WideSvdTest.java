@@ -19,7 +19,7 @@ class WideSvdTest {
                 a.data[i * 3000 + j] *= Math.pow(0.6, i);
             }
         }
-        Svd svd = WideSvd.of(a).orElseThrow();
+        Svd svd = WideSvd.of(a, a.numRows).orElseThrow();
         assertTrue(AwkwardMatrices.orthogonalityRatio(svd.u()) < 30);
         assertTrue(AwkwardMatrices.orthogonalityRatio(svd.v()) < 30);
         DMatrixRMaj scaled = svd.u().copy();
@@ -38,6 +38,6 @@ class WideSvdTest {
     @Test
     void rowsThatDependOnEachOtherAreNotTakenThatWay() {
         DMatrixRMaj a = Matrices.product(AwkwardMatrices.random(20, 5, 2), AwkwardMatrices.random(5, 2000, 3));
-        assertTrue(WideSvd.of(a).isEmpty());
+        assertTrue(WideSvd.of(a, a.numRows).isEmpty());
     }
 }

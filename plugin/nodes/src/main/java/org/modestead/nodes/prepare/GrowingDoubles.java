@@ -1,39 +1,66 @@
 package org.modestead.nodes.prepare;
 
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.List;
 
-/** Numbers of which it is not known beforehand how many will come. */
+/** Numbers of which it is not known beforehand how many will come, held in parts that are never copied until all are there. */
 final class GrowingDoubles {
 
     private static final int FIRST_CAPACITY = 256;
-    private double[] values = new double[FIRST_CAPACITY];
-    private int size;
+    private static final int LARGEST_PART = 1 << 21;
+
+    private final List<double[]> full = new ArrayList<>();
+    private double[] part = new double[FIRST_CAPACITY];
+    private int inPart;
+    private int before;
 
     void add(double value) {
-        if (size == values.length) {
-            values = Arrays.copyOf(values, 2 * size);
+        if (inPart == part.length) {
+            next(1);
         }
-        values[size++] = value;
+        part[inPart++] = value;
     }
 
     void add(double[] more) {
-        if (size + more.length > values.length) {
-            values = Arrays.copyOf(values, Math.max(2 * size, size + more.length));
+        int here = Math.min(more.length, part.length - inPart);
+        System.arraycopy(more, 0, part, inPart, here);
+        inPart += here;
+        if (here < more.length) {
+            next(more.length - here);
+            System.arraycopy(more, here, part, 0, more.length - here);
+            inPart = more.length - here;
         }
-        System.arraycopy(more, 0, values, size, more.length);
-        size += more.length;
+    }
+
+    /** Begins another part, about as large as all before. */
+    private void next(int least) {
+        full.add(part);
+        before = Math.addExact(before, part.length);
+        part = new double[Math.max(least, Math.min(before, LARGEST_PART))];
+        inPart = 0;
     }
 
     int size() {
-        return size;
+        return Math.addExact(before, inPart);
     }
 
     double last() {
-        return values[size - 1];
+        return inPart > 0 ? part[inPart - 1] : full.get(full.size() - 1)[full.get(full.size() - 1).length - 1];
     }
 
     /** Returns a copy of the right length. */
     double[] toArray() {
-        return Arrays.copyOf(values, size);
+        if (full.isEmpty()) {
+            return Arrays.copyOf(part, inPart);
+        }
+        double[] out = new double[size()];
+        int at = 0;
+        for (double[] earlier : full) {
+            System.arraycopy(earlier, 0, out, at, earlier.length);
+            at += earlier.length;
+        }
+        System.arraycopy(part, 0, out, at, inPart);
+        return out;
     }
 }
