@@ -43,6 +43,7 @@ record ForecastTask(
         BandSource bands) {
 
     // Times are read from text and added up; a step shorter than this share of a step too much is rounding.
+    private static final int MOST_STEPS = Integer.MAX_VALUE / 2;
     private static final double ROUNDING = 1e-6;
     private static final double DEFAULT_SHARE = 0.1;
 
@@ -126,7 +127,7 @@ record ForecastTask(
     /** Returns a time rounded up to whole steps, at least 1. */
     static int wholeSteps(double time, double step) {
         double steps = Math.ceil(time / step - ROUNDING);
-        if (steps > Integer.MAX_VALUE / 2) {
+        if (steps > MOST_STEPS) {
             throw new ForecastFault("forecast horizon", "it is " + time + ", that is " + steps + " steps of " + step,
                     "it must be shorter");
         }

@@ -7,6 +7,8 @@ package org.modestead.engine.moments;
 final class SeededDraw {
 
     private static final long GOLDEN = 0x9e3779b97f4a7c15L;
+    /** Three times that, without what is more than 64 bits. */
+    private static final long THRICE_GOLDEN = 0xdaa66d2c7ddf743fL;
 
     private SeededDraw() {}
 
@@ -16,7 +18,7 @@ final class SeededDraw {
         for (int i = 0; i < name.length(); i++) {
             state = mixed(state + GOLDEN + name.charAt(i));
         }
-        return mixed(state + GOLDEN * 3 + mixed(index));
+        return mixed(state + THRICE_GOLDEN + mixed(index));
     }
 
     /** Returns bits as a number in [0, 1). */

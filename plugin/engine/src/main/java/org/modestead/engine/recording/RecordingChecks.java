@@ -100,7 +100,7 @@ public final class RecordingChecks {
                     throw new RecordingFault(wording.sample(run, i) + ", " + kind + " " + columns.get(c).name(),
                             "the value is " + value, "replace it by a finite number or leave the cell empty");
                 }
-                hasNumber[c] |= value == value;
+                hasNumber[c] |= !Double.isNaN(value);
             }
         }
         for (int c = 0; c < n; c++) {

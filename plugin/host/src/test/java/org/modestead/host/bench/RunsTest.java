@@ -59,7 +59,7 @@ class RunsTest {
     }
 
     private static double overflow(double value) {
-        return overflow(value + 1) + 1;
+        return value < 0 ? 0 : overflow(value + 1) + 1;
     }
 
     /** Hears no request to stop, not even an interrupt. */

@@ -3,7 +3,6 @@ package org.modestead.nodes.report;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Mode;
