@@ -27,6 +27,8 @@ final class DuckDbCursor implements RowCursor {
     private final Statement statement;
     private final InterruptWatch watch;
     private final ResultSet rows;
+    private final String select;
+    private boolean over;
     private long row;
 
     DuckDbCursor(Database database, String select, DuckDbTable table) throws SQLException {
@@ -35,7 +37,8 @@ final class DuckDbCursor implements RowCursor {
         this.columns = table.schema().columns();
         this.statement = database.connection().createStatement();
         this.watch = InterruptWatch.over(statement);
-        this.rows = rows(select);
+        this.select = select;
+        this.rows = rows(CompleteRows.marked(select, columns.size()));
     }
 
     private ResultSet rows(String select) throws SQLException {
@@ -54,9 +57,14 @@ final class DuckDbCursor implements RowCursor {
     @Override
     public boolean next() {
         return read(() -> {
-            boolean more = rows.next();
-            row += more ? 1 : 0;
-            return more;
+            if (over) {
+                return false;
+            } else if (!rows.next()) {
+                throw CompleteRows.reason(database, select, table, row);
+            }
+            over = rows.getBoolean(columns.size() + 1);
+            row += over ? 0 : 1;
+            return !over;
         });
     }
 

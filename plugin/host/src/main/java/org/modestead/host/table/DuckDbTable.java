@@ -67,7 +67,7 @@ public final class DuckDbTable implements Table {
         try {
             database = Database.open(megabytes);
             recipe.prepare(database, List.of());
-            cursor = new DuckDbCursor(database, recipe.select(), this);
+            cursor = ChunkedCursor.reads(this) ? new ChunkedCursor(database, recipe.select(), this) : new DuckDbCursor(database, recipe.select(), this);
             return cursor;
         } catch (SQLException failure) {
             throw explainer.explain(failure);

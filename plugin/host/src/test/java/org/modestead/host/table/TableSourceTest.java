@@ -121,6 +121,17 @@ class TableSourceTest {
     }
 
     @Test
+    void textFarBelowTheRowsThatDuckDbKeepsReadyIsNamedAndEndsNoTable() throws IOException {
+        StringBuilder text = new StringBuilder("time,flow\n");
+        for (int i = 1; i <= 300_000; i++) {
+            text.append(i).append(',').append(i == 250_000 ? "n.a." : "0.5").append('\n');
+        }
+        Table table = read(text.toString());
+        TableFault fault = assertThrows(TableFault.class, () -> Steps.rows(table));
+        assertEquals("t.csv, row 250000 (line 250001), column flow", fault.where());
+    }
+
+    @Test
     void textThatIsDeclaredMissingOrTextPasses() throws IOException {
         assertEquals(List.of("0|1", "1|", "2|3"),
                 Steps.rows(read("time,flow\n0,1\n1,n.a.\n2,3\n", "missing", List.of("n.a."))));
