@@ -15,7 +15,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.junit.jupiter.api.io.TempDir;
 
-/** The checker axe finds nothing on any kind of page, light or dark. */
+/** The checker axe finds nothing on any kind of page, light or dark; all that is pressed is large enough, and no page is wider than its window, even at 200 %. */
 @NeedsBrowser
 class AccessibilityTrialTest {
 
@@ -27,6 +27,27 @@ class AccessibilityTrialTest {
             axe.run(document, {resultTypes: ['violations']}).then(
                 (found) => done(JSON.stringify(found.violations.map((v) => ({id: v.id, help: v.help, at: v.nodes.map((n) => n.target.join(' ') + ': ' + n.failureSummary)})))),
                 (fault) => done(JSON.stringify([{id: 'axe', help: String(fault), at: []}])));
+            """;
+
+    /** What is pressed is 24 px wide and high, with what reaches beyond its frame (WCAG 2.2, 2.5.8); nothing is wider than the window. */
+    private static final String SMALL_OR_WIDE = """
+            const found = [];
+            const root = document.querySelector('dialog[open]') ?? document.body;
+            for (const one of root.querySelectorAll('button, a[href], input, select, textarea, summary, [role=separator][tabindex]')) {
+              const frame = one.getBoundingClientRect();
+              const reach = getComputedStyle(one, '::after');
+              const reached = reach.content !== 'none' && reach.position === 'absolute';
+              const label = one.closest('label')?.getBoundingClientRect();
+              const width = Math.max(frame.width, label?.width ?? 0, reached ? parseFloat(reach.width) : 0);
+              const height = Math.max(frame.height, label?.height ?? 0, reached ? parseFloat(reach.height) : 0);
+              if (frame.width > 1 && !one.matches('.skip, .unseen') && (width < 23.9 || height < 23.9)) {
+                found.push(`${one.outerHTML.slice(0, 120)} is ${width} x ${height}`);
+              }
+            }
+            if (document.documentElement.scrollWidth > innerWidth) {
+              found.push(`the page is ${document.documentElement.scrollWidth} wide in a window of ${innerWidth}`);
+            }
+            return found;
             """;
 
     @TempDir
@@ -78,6 +99,10 @@ class AccessibilityTrialTest {
         browser.picture(page);
         JsonNode violations = new ObjectMapper().readTree(String.valueOf(browser.later(RUN)));
         violations.forEach(violation -> found.add(page + ": " + violation));
+        ((List<?>) browser.js(SMALL_OR_WIDE)).forEach(one -> found.add(page + ": " + one));
+        browser.size(640, 400);
+        ((List<?>) browser.js(SMALL_OR_WIDE)).forEach(one -> found.add(page + " at twice the size: " + one));
+        browser.size(1280, 800);
     }
 
     static String axe() throws IOException {
