@@ -37,7 +37,8 @@ final class ModelFuzz implements FuzzedReader {
         void of(byte[] input) throws IOException;
     }
 
-    private record Entry(String name, byte[] bytes) {}
+    /** A file in a zip. */
+    record Entry(String name, byte[] bytes) {}
 
     /** Of the model files that are kept from each version of the format. */
     static ModelFuzz models() throws IOException {
@@ -93,7 +94,8 @@ final class ModelFuzz implements FuzzedReader {
         }
     }
 
-    private static List<Entry> entries(byte[] sample) {
+    /** Unpacks a sound zip. */
+    static List<Entry> entries(byte[] sample) {
         List<Entry> entries = new ArrayList<>();
         try (ZipInputStream zip = new ZipInputStream(new ByteArrayInputStream(sample))) {
             for (ZipEntry entry = zip.getNextEntry(); entry != null; entry = zip.getNextEntry()) {
@@ -106,7 +108,7 @@ final class ModelFuzz implements FuzzedReader {
     }
 
     /** Names may be there twice, which a {@link ZipOutputStream} refuses: then the second one is left out. */
-    private static byte[] zip(List<Entry> entries) {
+    static byte[] zip(List<Entry> entries) {
         ByteArrayOutputStream out = new ByteArrayOutputStream();
         List<String> names = new ArrayList<>();
         try (ZipOutputStream zip = new ZipOutputStream(out)) {

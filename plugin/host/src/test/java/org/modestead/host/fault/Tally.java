@@ -22,8 +22,9 @@ import org.modestead.engine.Fault;
  * @param defects any other outcome, with the place of the input
  * @param mostBytes most that one input made its thread allocate
  * @param mostMillis most processor time that one input took its thread
+ * @param seconds that passed in all
  */
-record Tally(String name, int taken, int refused, List<String> defects, long mostBytes, long mostMillis) {
+record Tally(String name, int taken, int refused, List<String> defects, long mostBytes, long mostMillis, double seconds) {
 
     private static final int MOST_TOLD = 12;
     private static final ThreadMXBean THREADS = (ThreadMXBean) ManagementFactory.getThreadMXBean();
@@ -38,6 +39,7 @@ record Tally(String name, int taken, int refused, List<String> defects, long mos
         List<String> defects = new ArrayList<>();
         Set<String> known = new TreeSet<>();
         long thread = Thread.currentThread().getId();
+        long began = System.nanoTime();
         for (int i = 0; i < inputs; i++) {
             byte[] input = reader.next(random);
             long bytes = THREADS.getThreadAllocatedBytes(thread);
@@ -57,7 +59,8 @@ record Tally(String name, int taken, int refused, List<String> defects, long mos
             mostBytes = Math.max(mostBytes, THREADS.getThreadAllocatedBytes(thread) - bytes);
             mostNanos = Math.max(mostNanos, THREADS.getCurrentThreadCpuTime() - nanos);
         }
-        return new Tally(reader.name(), taken, refused, List.copyOf(defects), mostBytes, mostNanos / 1_000_000);
+        return new Tally(reader.name(), taken, refused, List.copyOf(defects), mostBytes, mostNanos / 1_000_000,
+                (System.nanoTime() - began) / 1e9);
     }
 
     private static void note(FuzzedReader reader, int number, byte[] input, Throwable defect, Set<String> known, List<String> defects) throws IOException {
@@ -72,7 +75,7 @@ record Tally(String name, int taken, int refused, List<String> defects, long mos
     }
 
     String words() {
-        return String.format(Locale.ROOT, "%-16s %8d inputs, %8d taken, %8d refused, %d defects, most memory of one %.1f MB, most time of one %d ms", name,
-                taken + refused, taken, refused, defects.size(), mostBytes / 1e6, mostMillis);
+        return String.format(Locale.ROOT, "%-16s %8d inputs, %8d taken, %8d refused, %d defects, most memory of one %.1f MB, most time of one %d ms, %.1f s in all", name,
+                taken + refused, taken, refused, defects.size(), mostBytes / 1e6, mostMillis, seconds);
     }
 }
