@@ -1,7 +1,9 @@
 package org.modestead.host.bench.server;
 
 import io.javalin.Javalin;
+import io.javalin.compression.CompressionStrategy;
 import io.javalin.http.HttpResponseException;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.io.IOException;
 import java.net.InetAddress;
 import java.net.ServerSocket;
@@ -36,12 +38,12 @@ public final class BenchServer implements AutoCloseable {
         this.events = new EventStream(workbench, deskJson);
         this.gate = Gate.fresh(port);
         this.server = Javalin.create(config -> {
-            config.showJavalinBanner = false;
-            config.startupWatcherEnabled = false;
+            config.startup.showJavalinBanner = false;
+            config.startup.startupWatcherEnabled = false;
             config.http.maxRequestSize = 8L << 20;
-            config.http.gzipOnlyCompression();
+            config.http.compressionStrategy = CompressionStrategy.GZIP;
+            routes(config.routes);
         });
-        routes();
         server.start("127.0.0.1", port);
     }
 
@@ -65,9 +67,9 @@ public final class BenchServer implements AutoCloseable {
         return gate.startUrl();
     }
 
-    private void routes() {
-        server.before(Gate::harden);
-        server.before(context -> {
+    private void routes(JavalinDefaultRoutingApi routes) {
+        routes.before(Gate::harden);
+        routes.before(context -> {
             if (gate.opens(context)) {
                 context.html("<!doctype html><html lang=\"en\"><head><title>Modestead</title><meta http-equiv=\"refresh\" content=\"0;url=/\">"
                         + "</head><body><p><a href=\"/\">Go on</a></p></body></html>");
@@ -76,26 +78,26 @@ public final class BenchServer implements AutoCloseable {
                 gate.check(context);
             }
         });
-        server.get("/api/nodes", context -> context.contentType("application/json").result(nodes));
-        new DeskRoutes(workbench, deskJson).on(server);
-        new StepRoutes(workbench).on(server);
-        new StartRoutes(workbench, doors, deskJson).on(server);
-        new FileRoutes(workbench, doors.desks()).on(server);
-        looks.on(server);
-        events.on(server);
-        server.get("/api/<path>", context -> {
+        routes.get("/api/nodes", context -> context.contentType("application/json").result(nodes));
+        new DeskRoutes(workbench, deskJson).on(routes);
+        new StepRoutes(workbench).on(routes);
+        new StartRoutes(workbench, doors, deskJson).on(routes);
+        new FileRoutes(workbench, doors.desks()).on(routes);
+        looks.on(routes);
+        events.on(routes);
+        routes.get("/api/<path>", context -> {
             throw new RequestFault(404, "request", "there is no " + context.path(), "open the page anew");
         });
-        server.get("/<path>", files::serve);
-        server.get("/", files::serve);
-        server.exception(RequestFault.class, (fault, context) -> Answer.refuse(context, fault.status(), fault));
-        server.exception(EditFault.class, (fault, context) -> Answer.refuse(context, 422, fault));
-        server.exception(FolderFault.class, (fault, context) -> Answer.refuse(context, 403, fault));
-        server.exception(Uploads.TooLarge.class, (fault, context) -> Answer.refuse(context, 413, fault));
-        server.exception(Fault.class, (fault, context) -> Answer.refuse(context, 409, fault));
-        server.exception(HttpResponseException.class, (failure, context) -> Answer.refuse(context, failure.getStatus(),
+        routes.get("/<path>", files::serve);
+        routes.get("/", files::serve);
+        routes.exception(RequestFault.class, (fault, context) -> Answer.refuse(context, fault.status(), fault));
+        routes.exception(EditFault.class, (fault, context) -> Answer.refuse(context, 422, fault));
+        routes.exception(FolderFault.class, (fault, context) -> Answer.refuse(context, 403, fault));
+        routes.exception(Uploads.TooLarge.class, (fault, context) -> Answer.refuse(context, 413, fault));
+        routes.exception(Fault.class, (fault, context) -> Answer.refuse(context, 409, fault));
+        routes.exception(HttpResponseException.class, (failure, context) -> Answer.refuse(context, failure.getStatus(),
                 new RequestFault(failure.getStatus(), "request", failure.getMessage(), failure.getStatus() == 413 ? "send less" : "open the page anew")));
-        server.exception(Exception.class, (defect, context) -> Answer.refuse(context, 500, new RequestFault(500, "bench", "an error in the program ("
+        routes.exception(Exception.class, (defect, context) -> Answer.refuse(context, 500, new RequestFault(500, "bench", "an error in the program ("
                 + defect.getClass().getSimpleName() + ": " + defect.getMessage() + ")", "please report it with " + DefectLog.write(defect))));
     }
 

@@ -2,7 +2,7 @@ package org.modestead.host.bench.server;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.nio.charset.StandardCharsets;
 import org.modestead.host.bench.desk.EditReader;
 import org.modestead.host.bench.work.Workbench;
@@ -19,7 +19,7 @@ final class DeskRoutes {
         this.json = json;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.get("/api/desk", context -> Answer.json(context, json.of(workbench.view())));
         server.post("/api/edit", context -> {
             JsonNode body = Answer.body(context);

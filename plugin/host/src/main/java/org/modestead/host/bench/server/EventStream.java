@@ -2,8 +2,8 @@ package org.modestead.host.bench.server;
 
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
 import io.javalin.http.sse.SseClient;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.util.Optional;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
@@ -32,7 +32,7 @@ final class EventStream implements AutoCloseable {
         this.json = json;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.sse("/api/events", client -> {
             client.keepAlive();
             tellers.execute(() -> tell(client));

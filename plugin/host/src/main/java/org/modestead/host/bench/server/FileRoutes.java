@@ -3,8 +3,8 @@ package org.modestead.host.bench.server;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
 import io.javalin.http.Context;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -32,7 +32,7 @@ final class FileRoutes {
         this.desks = desks;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.get("/api/files", this::list);
     }
 

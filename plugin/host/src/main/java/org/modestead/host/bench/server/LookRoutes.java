@@ -4,8 +4,8 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
 import io.javalin.http.Context;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.io.BufferedOutputStream;
 import java.io.IOException;
 import java.io.OutputStream;
@@ -49,7 +49,7 @@ final class LookRoutes implements AutoCloseable {
         this.looks = looks;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.get("/api/steps/{id}/look", context -> Answer.json(context, LookJson.of(looks, looked(context))));
         server.get("/api/steps/{id}/figures/{figure}", context -> figure(context, looked(context).result().figures()));
         server.get("/api/steps/{id}/ports/{port}/figures/{figure}", context -> figure(context, PortFigures.of(value(looked(context), context.pathParam("port")))));

@@ -4,8 +4,8 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
 import io.javalin.http.Context;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.nio.file.Path;
 import java.time.Duration;
 import java.time.Instant;
@@ -37,7 +37,7 @@ final class StartRoutes {
         this.deskJson = deskJson;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.get("/api/start", context -> Answer.json(context, start()));
         server.post("/api/desk", context -> Answer.json(context, deskJson.of(workbench.open(door(Answer.body(context))))));
         server.post("/api/desk/forget", context -> {

@@ -3,8 +3,8 @@ package org.modestead.host.bench.server;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
-import io.javalin.Javalin;
 import io.javalin.http.Context;
+import io.javalin.router.JavalinDefaultRoutingApi;
 import java.util.Map;
 import org.modestead.engine.Fault;
 import org.modestead.host.bench.check.DialogData;
@@ -27,7 +27,7 @@ final class StepRoutes {
         this.workbench = workbench;
     }
 
-    void on(Javalin server) {
+    void on(JavalinDefaultRoutingApi server) {
         server.get("/api/steps/{id}/dialog", context -> dialog(context, Map.of()));
         server.post("/api/steps/{id}/check", context -> dialog(context, Answer.values(Answer.body(context).path("typed"))));
         server.get("/api/links/fitting", this::fitting);
