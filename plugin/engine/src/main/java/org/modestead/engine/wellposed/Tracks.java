@@ -1,6 +1,5 @@
 package org.modestead.engine.wellposed;
 
-import java.util.List;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.modestead.engine.linalg.Complex;

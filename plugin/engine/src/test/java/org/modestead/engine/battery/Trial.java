@@ -4,7 +4,6 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import org.modestead.engine.Fault;
-import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.fixtures.Motions;
 import org.modestead.engine.operator.ExtrapolatedEstimator;
