@@ -114,9 +114,16 @@ public record Evidence(
 
     /**
      * Returns the rung on which orthogonality is read: the highest telling one before noise begins to change the norm by more than a tenth of a
-     * per cent, or the one on which it changes it least; the fitted rank where none is telling.
+     * per cent, or the one on which it changes it least; the fitted rank where none is telling. Where the mode is an eigenfunction of a finite space
+     * and that rung shows another rate in its place, all of the space is asked.
      */
     LadderRow clearestOf(int mode) {
+        LadderRow telling = clearestTellingOf(mode);
+        return Closure.row(mode, this).filter(whole -> Ladder.relativeChange(whole.rate(), telling.rate(), longest()) > settings.settleThreshold())
+                .orElse(telling);
+    }
+
+    private LadderRow clearestTellingOf(int mode) {
         List<LadderRow> rows = tellingRungsOf(mode);
         List<LadderRow> still = clear(rows, row -> row.noise().norm() <= STILL_NORM);
         return still.isEmpty() ? rows.stream().min(java.util.Comparator.comparingDouble(row -> row.noise().norm())).orElseGet(() -> fittedOf(mode))
