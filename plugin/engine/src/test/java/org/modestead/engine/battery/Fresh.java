@@ -6,7 +6,6 @@ import static java.lang.StrictMath.atan;
 import static java.lang.StrictMath.cos;
 import static java.lang.StrictMath.exp;
 import static java.lang.StrictMath.floor;
-import static java.lang.StrictMath.log;
 import static java.lang.StrictMath.max;
 import static java.lang.StrictMath.min;
 import static java.lang.StrictMath.sin;
@@ -15,7 +14,6 @@ import static java.lang.StrictMath.tan;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Random;
 import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
 
