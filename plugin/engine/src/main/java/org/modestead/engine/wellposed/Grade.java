@@ -4,8 +4,8 @@ package org.modestead.engine.wellposed;
 public enum Grade {
     /** Settles, is in the space, passes holdout, captures its part, joint = solo: report the mode. */
     STANDS("stands", "report the mode"),
-    /** As {@link #STANDS}, but it overlaps other modes: report with its overlap. */
-    SETTLES("settles", "report the mode together with its overlap"),
+    /** As {@link #STANDS}, but overlap, noise, a rule kept only roughly or a signal partly outside the space limit it: report with that. */
+    SETTLES("settles", "report the mode together with what limits it"),
     /** Too few data, rungs or runs to tell. */
     UNDECIDED("undecided", "collect more data as the finding says"),
     /** Holdout passes, but the rate or the weight keeps changing as the basis grows. */
@@ -26,7 +26,7 @@ public enum Grade {
         return word;
     }
 
-    /** Returns what the analyst may do. */
+    /** Returns what the analyst may do, whichever check decided; {@link ModeVerdict#advice} tells it of one mode. */
     public String advice() {
         return advice;
     }

@@ -17,4 +17,9 @@ public record ModeVerdict(int mode, Grade grade, List<String> decidedBy, boolean
     public ModeVerdict {
         decidedBy = List.copyOf(decidedBy);
     }
+
+    /** Returns what the analyst may do; of a mode that settles, together with what is to be told of it. */
+    public String advice() {
+        return grade == Grade.SETTLES && mode != 0 ? Reservation.advice(decidedBy) : grade.advice();
+    }
 }

@@ -60,7 +60,7 @@ public final class WellPosednessCheckerNode implements Node {
                 data the fit never saw; whether eigenfunctions overlap; whether they hold the signal; whether another \
                 step gives the same rates; and whether runs escape in finite time.
 
-                The verdict stands: report the mode. Settles: report it together with its overlap. Drifts: the forecast \
+                The verdict stands: report the mode. Settles: report it together with what limits it. Drifts: the forecast \
                 may be used, the mode must not be reported. Absent: there is no such mode in this space; try another \
                 kernel. Undecided: too few data, and the finding says of what. Overall counts the worst verdict among \
                 modes that carry a stated share of the signal. The constant function, which every motion has, is no \

@@ -71,7 +71,7 @@ final class ExistenceSection {
         List<Finding> deciding = of(verdict, mode.number()).stream()
                 .filter(finding -> one.decidedBy().contains(finding.check())).toList();
         String reasons = deciding.isEmpty() ? Sentence.of(one.sentence()) + " " : "";
-        blocks.add(new Paragraph(VerdictWords.meaning(one.grade()) + " " + reasons + VerdictWords.advice(one.grade())));
+        blocks.add(new Paragraph(VerdictWords.meaning(one.grade()) + " " + reasons + VerdictWords.advice(one)));
         if (!deciding.isEmpty()) {
             blocks.add(new Paragraph("Decided by:"));
             blocks.add(new Points(deciding.stream().map(ExistenceSection::told).toList()));

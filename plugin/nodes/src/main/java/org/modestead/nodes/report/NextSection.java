@@ -18,8 +18,8 @@ final class NextSection {
 
     static Section of(ReportSource source) {
         List<String> steps = new ArrayList<>();
-        source.leading().forEach(mode -> source.grade(mode).ifPresent(grade -> steps.add(Sentence.of("Mode " + mode.number() + " ("
-                + ModeWords.headline(mode, source.unit()) + "): " + grade.advice()))));
+        source.leading().forEach(mode -> source.verdict().flatMap(verdict -> verdict.of(mode.number())).ifPresent(judged -> steps.add(Sentence.of("Mode "
+                + mode.number() + " (" + ModeWords.headline(mode, source.unit()) + "): " + judged.advice()))));
         if (source.verdict().isEmpty()) {
             steps.add("Have a Well-posedness Checker judge these modes before any of them is reported.");
         }

@@ -1,6 +1,7 @@
 package org.modestead.nodes.words;
 
 import org.modestead.engine.wellposed.Grade;
+import org.modestead.engine.wellposed.ModeVerdict;
 
 /**
  * What each verdict means, for a reader who has never seen the checks. Says only what holds in every function space:
@@ -22,8 +23,9 @@ public final class VerdictWords {
         return switch (grade) {
             case STANDS -> "It settles as functions are added, holds on data the fit never saw and does not depend on the"
                     + " other modes.";
-            case SETTLES -> "It settles as functions are added and holds on data the fit never saw, but it overlaps other"
-                    + " modes, so its size depends on them.";
+            case SETTLES -> "It settles as functions are added and holds on data the fit never saw, but not without limits:"
+                    + " it overlaps other modes, noise blurs it, it keeps its rule only roughly, or the space does not hold all of the"
+                    + " signal. The checks that decided tell which.";
             case UNDECIDED -> "The data are too few to tell whether it exists.";
             case DRIFTS -> "It forecasts data the fit never saw, but its rate or its weight keeps changing as functions"
                     + " are added:"
@@ -46,7 +48,7 @@ public final class VerdictWords {
     public static String headline(Grade grade) {
         return switch (grade) {
             case STANDS -> "the modes stand";
-            case SETTLES -> "the modes settle, but overlap";
+            case SETTLES -> "the modes settle, within limits";
             case UNDECIDED -> "whether the modes exist is undecided";
             case DRIFTS -> "the modes drift";
             case ABSENT -> "a leading mode is absent";
@@ -59,8 +61,7 @@ public final class VerdictWords {
             case STANDS -> "Every mode that carries a stated share of the signal settles as functions are added, holds on"
                     + " data the fit never saw and does not depend on the others.";
             case SETTLES -> "Every mode that carries a stated share of the signal settles and holds on data the fit"
-                    + " never saw, but"
-                    + " some overlap, so their sizes depend on each other.";
+                    + " never saw, but not all without limits: the checks that decided tell which.";
             case UNDECIDED -> "For at least one mode that carries a stated share of the signal the data are too few to"
                     + " tell whether it"
                     + " exists.";
@@ -75,5 +76,10 @@ public final class VerdictWords {
     /** Returns what may be done, as a sentence. */
     public static String advice(Grade grade) {
         return "What may be done: " + grade.advice() + ".";
+    }
+
+    /** Returns what may be done with one mode, true of the checks that decided, as a sentence. */
+    public static String advice(ModeVerdict mode) {
+        return "What may be done: " + mode.advice() + ".";
     }
 }

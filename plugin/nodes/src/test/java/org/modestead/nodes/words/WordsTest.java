@@ -16,6 +16,7 @@ import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.ModeIntervals;
 import org.modestead.engine.wellposed.Grade;
+import org.modestead.engine.wellposed.ModeVerdict;
 
 class WordsTest {
 
@@ -28,6 +29,21 @@ class WordsTest {
         }
         assertTrue(VerdictWords.advice(grade).contains(grade.advice()));
         assertTrue(VerdictWords.verb(grade).contains(grade.word()));
+    }
+
+    @Test
+    void aModeThatSettlesIsAdvisedByTheChecksThatDecidedAndByNoOther() {
+        assertEquals("What may be done: report the mode together with how well it keeps its rule.", settled(1, "close-residual"));
+        assertEquals("What may be done: report the mode together with its overlap with other modes, and with how far noise blurs it.",
+                settled(1, "eigenfunction-overlap", "joint-solo-gap", "noise-sensitivity"));
+        assertEquals("What may be done: report the mode together with how much of the signal the space does not hold.",
+                settled(1, "signal-in-space"));
+        // all modes together may be limited each by something else
+        assertEquals(VerdictWords.advice(Grade.SETTLES), settled(0, "close-residual"));
+    }
+
+    private static String settled(int mode, String... decidedBy) {
+        return VerdictWords.advice(new ModeVerdict(mode, Grade.SETTLES, List.of(decidedBy), true, ""));
     }
 
     @Test

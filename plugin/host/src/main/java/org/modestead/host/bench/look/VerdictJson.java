@@ -67,7 +67,7 @@ public final class VerdictJson {
     private static ObjectNode mode(Verdict verdict, ModeVerdict mode, String figures) {
         ObjectNode out = NODES.objectNode().put("mode", mode.mode()).put("selection", "mode:" + mode.mode()).put("figures", figures)
                 .put("grade", mode.grade().word()).put("counts", mode.counts()).put("meaning", VerdictWords.meaning(mode.grade()))
-                .put("sentence", Sentence.of(mode.sentence())).put("advice", VerdictWords.advice(mode.grade()));
+                .put("sentence", Sentence.of(mode.sentence())).put("advice", VerdictWords.advice(mode));
         texts(out.putArray("decidedBy"), mode.decidedBy());
         out.set("deciding", findings(verdict.findings().stream()
                 .filter(finding -> finding.mode() == mode.mode() && mode.decidedBy().contains(finding.check())).toList()));
