@@ -121,6 +121,14 @@ class GateTest {
     }
 
     @Test
+    void theIconThatABrowserAsksForByItselfIsTheMarkOfThePage() throws IOException, InterruptedException {
+        TestBench.Reply icon = bench.get("/favicon.ico");
+        assertEquals(200, icon.status());
+        assertEquals("image/svg+xml", icon.whole().headers().firstValue("Content-Type").orElse(""));
+        assertEquals(bench.get("/mark.svg").body(), icon.body());
+    }
+
+    @Test
     void itListensOnTheLoopbackAddressOnly() throws IOException {
         for (NetworkInterface each : Collections.list(NetworkInterface.getNetworkInterfaces())) {
             for (InetAddress address : Collections.list(each.getInetAddresses())) {

@@ -17,6 +17,8 @@ final class PageFiles {
 
     private static final String PAGE = "/org/modestead/host/bench/page/";
     private static final String LIBRARIES = "/META-INF/resources/webjars/";
+    /** Files under other names; a browser asks for the icon by itself where a document, such as a report, names none. */
+    private static final Map<String, String> NAMES = Map.of("/", "index.html", "/favicon.ico", "mark.svg");
     private static final Pattern NAME = Pattern.compile("[A-Za-z0-9_-][A-Za-z0-9._-]*(/[A-Za-z0-9_-][A-Za-z0-9._-]*)*");
     private static final Map<String, String> TYPES = Map.of("html", "text/html; charset=utf-8", "js", "text/javascript; charset=utf-8",
             "css", "text/css; charset=utf-8", "svg", "image/svg+xml", "json", "application/json", "txt", "text/plain; charset=utf-8",
@@ -26,7 +28,7 @@ final class PageFiles {
 
     /** Answers with a file. */
     void serve(Context context) {
-        String name = context.path().equals("/") ? "index.html" : context.path().substring(1);
+        String name = NAMES.getOrDefault(context.path(), context.path().substring(1));
         String type = TYPES.get(name.substring(name.lastIndexOf('.') + 1));
         Optional<byte[]> bytes = type == null || !NAME.matcher(name).matches() ? Optional.empty()
                 : name.startsWith("lib/") ? libraries.find(name.substring("lib/".length())) : page(name);
