@@ -99,6 +99,33 @@ class OpenedFoldersTest {
     }
 
     @Test
+    void stepsMeanTheSameFilesWhenTheWorkflowIsSavedInAnotherFolder() throws IOException, InterruptedException {
+        bench.post("/api/edit", "{\"edits\": [{\"do\": \"add\", \"node\": \"table-source\", \"id\": \"full\", \"settings\": {\"path\": \""
+                + work.resolve("inside.csv") + "\"}}]}");
+        assertEquals("", bench.post("/api/save", "{\"path\": \"other.json\"}").json().path("told").asText("?"), "the folder is the same");
+        Path there = Files.createDirectories(work.toRealPath().resolve("later/deep")).resolve("workflow.json");
+        JsonNode desk = bench.post("/api/save", "{\"path\": \"" + there + "\"}").json();
+        assertEquals("The folder is another one: file names in 1 step were written anew, so that they mean the same files as before.", desk.path("told").asText());
+        assertEquals("../../inside.csv", TestBench.step(desk, "a").path("settings").path("path").asText(), desk.toString());
+        assertEquals(work.resolve("inside.csv").toString(), TestBench.step(desk, "full").path("settings").path("path").asText());
+        assertTrue(Files.readString(there).contains("\"../../inside.csv\""));
+        assertEquals(List.of("ready", "ready", true), List.of(TestBench.kind(desk, "a"), TestBench.kind(desk, "full"), desk.path("saved").asBoolean()),
+                desk.toString());
+        String id = desk.path("desk").asText();
+        bench.post("/api/desk/close", "{}");
+        JsonNode resumed = bench.post("/api/desk", "{\"resume\": \"" + id + "\"}").json();
+        assertEquals("../../inside.csv", TestBench.step(resumed, "a").path("settings").path("path").asText(),
+                "the journal tells it as the file does");
+        // what the document was before is where the document is, and means the same file too
+        assertEquals("ready", TestBench.kind(bench.post("/api/undo", "{}").json(), "a"));
+        bench.post("/api/run", "{}");
+        bench.awaitRest();
+        assertEquals(200, bench.get("/api/steps/a/tables/table").status());
+        JsonNode back = bench.post("/api/save", "{\"path\": \"" + work.resolve("back.json") + "\"}").json();
+        assertEquals("inside.csv", TestBench.step(back, "a").path("settings").path("path").asText(), back.toString());
+    }
+
+    @Test
     void onlyOpenedFoldersAreListedAndLinksOutAreNotShown() throws IOException, InterruptedException {
         JsonNode listed = bench.get("/api/files?folder=" + URLEncoder.encode(work.toString(), StandardCharsets.UTF_8)).json();
         assertEquals(List.of("inside.csv", "workflow.json"), listed.path("entries").findValuesAsText("name"));

@@ -15,6 +15,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
+import java.util.function.UnaryOperator;
 import org.modestead.host.output.Disk;
 import org.modestead.host.output.FolderLock;
 import org.modestead.host.output.WholeFile;
@@ -34,9 +35,9 @@ public final class Desk implements AutoCloseable {
 
     private final Path folder;
     private final FolderLock lock;
-    private final Journal journal;
     private final String recovered;
     private final Map<String, String> latest;
+    private Journal journal;
     private Timeline timeline;
     private String saved;
     private Instant changed;
@@ -122,9 +123,15 @@ public final class Desk implements AutoCloseable {
         timeline = after;
     }
 
-    /** Writes the document to a file, where Save goes from now on. */
-    public void save(Path file) {
-        Workflow document = timeline.current().in(file);
+    /**
+     * Writes the document to a file, where Save goes from now on.
+     *
+     * @param way gives the document, as it is and was, in the file where it is to go
+     */
+    public void save(UnaryOperator<Workflow> way) {
+        Timeline there = timeline.moved(way);
+        Workflow document = there.current();
+        Path file = document.file();
         try {
             WholeFile.checkTarget(file, file.toString());
             WholeFile.write(Disk.REAL, file, out -> out.write(WorkflowText.write(document)));
@@ -132,10 +139,20 @@ public final class Desk implements AutoCloseable {
             throw new DeskFault("file " + file, "it cannot be written (" + unwritable.getMessage() + ")", "save under another name");
         }
         String sum = checksum(document);
-        Timeline there = timeline.in(file);
-        keep(() -> journal.saved(there, sum));
+        keep(() -> written(there, sum));
         timeline = there;
         saved = sum;
+    }
+
+    /** A line tells that it was saved; where the way there changed the document, as it is or was, the journal is begun anew. */
+    private void written(Timeline there, String sum) throws IOException {
+        if (there.equals(timeline.in(there.current().file()))) {
+            journal.saved(there, sum);
+            return;
+        }
+        Journal before = journal;
+        journal = Journal.begin(folder, new Journal.Told(there, sum, Instant.now()));
+        before.close();
     }
 
     /** Returns whether the file holds the document as it is. */

@@ -3,6 +3,7 @@ package org.modestead.host.bench.desk;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.modestead.host.workflow.Workflow;
 
 /**
@@ -72,7 +73,12 @@ public record Timeline(List<Moment> moments, int now) {
         return new Timeline(moments, now + 1);
     }
 
-    /** Returns the same with all moments in another file. */
+    /** Returns the same with all moments in another file, as the document gets there. */
+    public Timeline moved(UnaryOperator<Workflow> way) {
+        return new Timeline(moments.stream().map(moment -> new Moment(way.apply(moment.workflow()), moment.label())).toList(), now);
+    }
+
+    /** Returns the same with all moments in another file, word for word. */
     public Timeline in(java.nio.file.Path file) {
         return new Timeline(moments.stream().map(moment -> new Moment(moment.workflow().in(file), moment.label())).toList(), now);
     }

@@ -30,7 +30,10 @@ final class DeskRoutes {
         });
         server.post("/api/undo", context -> Answer.json(context, json.of(workbench.undo())));
         server.post("/api/redo", context -> Answer.json(context, json.of(workbench.redo())));
-        server.post("/api/save", context -> Answer.json(context, json.of(workbench.save(Answer.body(context).path("path").asText("")))));
+        server.post("/api/save", context -> {
+            Workbench.Saved saved = workbench.save(Answer.body(context).path("path").asText(""));
+            Answer.json(context, json.of(saved.view()).put("told", saved.told()));
+        });
         server.post("/api/desk/close", context -> Answer.json(context, json.of(workbench.leave())));
         server.post("/api/run", context -> {
             JsonNode body = Answer.body(context);

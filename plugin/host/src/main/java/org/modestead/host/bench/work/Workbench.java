@@ -21,6 +21,7 @@ import org.modestead.host.bench.desk.EditFault;
 import org.modestead.host.bench.desk.LinkRules;
 import org.modestead.host.bench.desk.StepEdit;
 import org.modestead.host.bench.folders.FileSettings;
+import org.modestead.host.bench.folders.MovedFiles;
 import org.modestead.host.bench.folders.OpenedFolders;
 import org.modestead.host.bench.run.BenchRun;
 import org.modestead.host.bench.run.KeptResults;
@@ -46,9 +47,9 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
 
     private final NodeCatalog catalog;
     private final KeptResults results;
-    private final OpenedFolders folders;
     private final Overview overview;
     private final Looks looks;
+    private OpenedFolders folders;
     private Optional<Desk> desk = Optional.empty();
     private Optional<BenchRun> run = Optional.empty();
     private Map<String, String> running = Map.of();
@@ -170,20 +171,27 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
      *
      * @param name of another file; empty for its own
      */
-    public DeskView save(String name) {
-        write(name);
-        return view();
+    public Saved save(String name) {
+        String told = write(name);
+        return new Saved(view(), told);
     }
 
-    private synchronized void write(String name) {
+    /** What saving gives: the desk after it, and a sentence on what was changed for it; empty when nothing was. */
+    public record Saved(DeskView view, String told) {}
+
+    private synchronized String write(String name) {
         Desk opened = opened();
         Workflow document = opened.timeline().current();
         Path file = name.isBlank() ? document.file() : folders(document).inside(name, document.baseFolder());
         if (!file.getFileName().toString().endsWith(".json")) {
             throw new DeskFault("file " + file, "its name does not end in .json", "save as workflow.json");
         }
-        opened.save(file);
+        MovedFiles way = new MovedFiles(catalog, file);
+        opened.save(way::moved);
+        // the files of the steps are still there, and a person opened that folder
+        folders = folders(document);
         changed();
+        return way.told(document);
     }
 
     /**

@@ -58,7 +58,7 @@ class DeskGlanceTest {
             desk.undo();
             assertGlance("first", 1, false);
             desk.redo();
-            desk.save(folder.resolve("workflow.json"));
+            desk.save(workflow -> workflow.in(folder.resolve("workflow.json")));
             assertGlance("second", 2, false);
         }
         try (Desk again = Desk.resume(folder)) {

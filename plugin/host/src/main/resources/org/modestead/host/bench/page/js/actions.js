@@ -303,7 +303,12 @@ export async function cancel() {
 export async function save(path) {
   const answer = await change('/api/save', path ? {path} : {});
   if (answer) {
-    say(`Saved to ${answer.file}.`);
+    const words = `Saved to ${answer.file}.`;
+    if (answer.told) {
+      notify(`${words} ${answer.told}`);
+    } else {
+      say(words);
+    }
   }
   return answer;
 }
