@@ -50,7 +50,45 @@ class KeyboardTrialTest {
             trial.state("snapshot-builder", "done", "doubts");
             browser.reads("[data-look=snapshot-builder]", "Snapshots");
             browser.await("the focus still there", () -> browser.focused("[data-card=snapshot-builder]"));
+            write(trial);
+            copy(trial);
         }
+    }
+
+    /** Gives the step a name and a note of the person's own. */
+    private static void write(Trial trial) {
+        Browser browser = trial.browser();
+        browser.keys(Keys.F2);
+        browser.see("dialog[data-dialog=rename]");
+        browser.await("the focus in the field", () -> browser.focused("#rename-field"));
+        browser.chord("a", Keys.CONTROL);
+        browser.keys("States of the first trip", Keys.ENTER);
+        browser.gone("dialog");
+        browser.reads("[data-step=snapshot-builder] .card-title", "States of the first trip");
+        browser.reads("[data-step=snapshot-builder] .card-kind", "Snapshot Builder");
+        browser.click("[data-action=step-menu]");
+        browser.click("[role=menu] [data-action=note-step]");
+        browser.await("the focus in the field", () -> browser.focused("#note-field"));
+        browser.keys("Gauge 2 was stuck.");
+        browser.click("dialog [data-action=apply]");
+        browser.gone("dialog");
+        browser.reads("[data-step=snapshot-builder] .card-note", "Gauge 2 was stuck.");
+        browser.reads("[data-look=snapshot-builder]", "Snapshots");
+    }
+
+    /** Copies the step with all that is written on it, and takes that back. */
+    private static void copy(Trial trial) {
+        Browser browser = trial.browser();
+        browser.click("[data-card=snapshot-builder]");
+        browser.chord("c", Keys.CONTROL);
+        browser.chord("v", Keys.CONTROL);
+        browser.see("[data-step=snapshot-builder-2]");
+        browser.reads("[data-step=snapshot-builder-2] .card-title", "States of the first trip");
+        browser.reads("[data-step=snapshot-builder-2] .card-note", "Gauge 2 was stuck.");
+        browser.await("the copy is chosen", () -> browser.has("[data-card=snapshot-builder-2][aria-current=true]"));
+        browser.chord("z", Keys.CONTROL);
+        browser.gone("[data-step=snapshot-builder-2]");
+        browser.reads("[data-step=snapshot-builder] .card-note", "Gauge 2 was stuck.");
     }
 
     /** Opens a dialog, makes a choice, changes a number, keeps both. */
