@@ -39,7 +39,7 @@ const DIALOGS = {
 };
 
 function Page() {
-  const {catalog, desk, dialog, wide, drag} = useStore();
+  const {catalog, desk, dialog, wide, drag, guess} = useStore();
   useEffect(() => {
     window.addEventListener('keydown', pageKey);
     return () => window.removeEventListener('keydown', pageKey);
@@ -47,7 +47,7 @@ function Page() {
   useEffect(() => {
     document.title = desk?.open ? `${desk.saved ? '' : '* '}${desk.name} · Modestead` : 'Modestead';
   }, [desk?.open, desk?.name, desk?.saved]);
-  if (!catalog || !desk) {
+  if (!desk || (!catalog && (desk.open || guess))) {
     return html`<p class="loading">Opening the bench.</p><${Notice} /><${Told} />`;
   }
   const Kind = dialog && DIALOGS[dialog.kind];
@@ -86,9 +86,8 @@ async function begin() {
   render(html`<${Guarded} />`, document.getElementById('page'));
   window.addEventListener('unhandledrejection', (event) => notify(`The page met a defect: ${event.reason?.message ?? event.reason}.`, 'stop'));
   try {
-    const [catalog, desk] = await Promise.all([api.get('/api/nodes'), api.get('/api/desk')]);
-    setState({catalog});
-    takeDesk(desk);
+    // each is shown when it is there: the start page needs no nodes
+    await Promise.all([api.get('/api/nodes').then((catalog) => setState({catalog})), api.get('/api/desk').then(takeDesk)]);
     listen();
   } catch (fault) {
     const page = document.getElementById('page');
