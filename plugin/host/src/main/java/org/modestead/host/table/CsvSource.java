@@ -20,6 +20,7 @@ final class CsvSource {
      * @param missing texts that stand for a missing cell, besides the empty one
      */
     static TextFile open(CsvFormat format, List<String> missing) {
+        LastLine.requireEnd(format);
         List<String> names = CsvHeader.names(format);
         Set<String> unnamed = new HashSet<>();
         for (int j = 0; j < names.size(); j++) {

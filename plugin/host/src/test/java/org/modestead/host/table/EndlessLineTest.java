@@ -66,6 +66,32 @@ class EndlessLineTest {
         assertTrue(allocated() - before < MOST_BYTES, (allocated() - before) + " bytes");
     }
 
+    /** The database would leave it out and say nothing. */
+    @Test
+    void aLastLineOfFortyMegabytesInAPlainFile() throws IOException {
+        for (String end : List.of("", "\n", "\r\n")) {
+            Path file = folder.resolve("t.csv");
+            byte[] block = new byte[40 << 20];
+            Arrays.fill(block, (byte) '1');
+            Files.writeString(file, "time,flow\n0,1\n2,");
+            Files.write(file, block, StandardOpenOption.APPEND);
+            Files.writeString(file, end, StandardOpenOption.APPEND);
+            assertRefused(file, "t.csv, last line: this line is longer than 4000000 bytes; "
+                    + "check that lines end by line feeds, and that the file is a table.");
+        }
+    }
+
+    /** What the database refuses by itself begins below what is looked for. */
+    @Test
+    void aLastLineOfThreeMegabytesIsRefusedAndOneOfOneIsRead() throws IOException {
+        Files.writeString(folder.resolve("t.csv"), "time,note\n0,a\n2," + "x".repeat(3_900_000));
+        assertThrows(TableFault.class, () -> Steps.rows(Steps.source(folder, "t.csv")));
+        Files.writeString(folder.resolve("t.csv"), "time,note\n0,a\n2," + "x".repeat(1_000_000));
+        assertEquals(2, Steps.rows(Steps.source(folder, "t.csv")).size());
+        Files.writeString(folder.resolve("t.csv"), "time,note\n0,a\n" + "2,x\n".repeat(1_200_000));
+        assertEquals(1_200_001, Steps.rows(Steps.source(folder, "t.csv")).size());
+    }
+
     @Test
     void aLetterCutByABlockIsText() throws IOException {
         Path file = folder.resolve("t.csv");

@@ -1,8 +1,10 @@
 package org.modestead.host.bench.server;
 
 import com.fasterxml.jackson.core.JsonProcessingException;
+import com.fasterxml.jackson.core.StreamReadFeature;
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
+import com.fasterxml.jackson.databind.json.JsonMapper;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import io.javalin.http.Context;
@@ -17,7 +19,7 @@ import org.modestead.engine.Fault;
 /** JSON in requests and answers. */
 final class Answer {
 
-    private static final ObjectMapper MAPPER = new ObjectMapper();
+    private static final ObjectMapper MAPPER = JsonMapper.builder().enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION).build();
 
     private Answer() {}
 
@@ -27,7 +29,7 @@ final class Answer {
             byte[] bytes = context.bodyAsBytes();
             return bytes.length == 0 ? JsonNodeFactory.instance.objectNode() : MAPPER.readTree(bytes);
         } catch (JsonProcessingException broken) {
-            throw new RequestFault(400, "request", "its body is no JSON (" + broken.getOriginalMessage() + ")", "send JSON");
+            throw new RequestFault(400, "request", "its body is no JSON (" + broken.getOriginalMessage().replaceAll(", from `[^`]*`", "") + ")", "send JSON");
         } catch (IOException impossible) {
             throw new IllegalStateException("bytes in memory could not be read", impossible);
         }
