@@ -22,6 +22,8 @@ final class RequestFuzz implements FuzzedReader {
 
     RequestFuzz(Path folder) throws IOException, InterruptedException {
         this.bench = TestBench.start(TestWorkflows.allNodes(), folder.resolve("desks"), Optional.empty(), folder);
+        // without an open desk every edit would be refused before it is read
+        bench.post("/api/desk", "{\"empty\": true, \"name\": \"Night shift\"}");
     }
 
     @Override
