@@ -61,11 +61,17 @@ public final class FixedSite {
         // Entries are told by their indentation: units hold artifacts of their own.
         Pattern entry = Pattern.compile("(?ms)^    <" + element + " .*?^    </" + element + ">\\R");
         Map<String, String> sorted = new TreeMap<>(entry.matcher(text).results().map(MatchResult::group)
-                .collect(Collectors.toMap(found -> found.lines().findFirst().orElseThrow(), this::summed)));
+                .collect(Collectors.toMap(found -> found.lines().findFirst().orElseThrow(), found -> ordered(summed(found)))));
         int first = text.indexOf("    <" + element + " ");
         String before = text.substring(0, first).replaceFirst("(name='p2.timestamp' value=')\\d+", "$1" + time.toEpochMilli());
         String after = entry.matcher(text.substring(first)).replaceAll("");
         Files.write(jar, zipped(Map.of(name + ".xml", (before + String.join("", sorted.values()) + after).getBytes(StandardCharsets.UTF_8))));
+    }
+
+    /** Returns the entry with what it provides in the order of the names: Tycho lists the packages of Java in an order of its own at each build. */
+    private static String ordered(String entry) {
+        return Pattern.compile("(?m)(?:^ +<provided [^\\n]*/>\\R)+").matcher(entry)
+                .replaceAll(provided -> Matcher.quoteReplacement(provided.group().lines().sorted().map(line -> line + "\n").collect(Collectors.joining())));
     }
 
     /** Returns an artifact's entry with size and checksums of its file as it is now; other entries as they were. */
