@@ -1,9 +1,19 @@
 """Three one-dimensional flows, fitted and judged over a ladder of ranks, as a short script would do it."""
 import sys
 import numpy as np
-from common import quadrature, settle, write
+from common import quadrature, write
 
 FLOWS = {"growth": lambda s, t: s * np.exp(t), "drift": lambda s, t: s + t, "escape": lambda s, t: s / (1 - s * t)}
+
+
+def settle(rungs):
+    """Relative change of the nearest rate from rung to rung, the plainest reading of a ladder."""
+    out = []
+    for (_, before), (_, after) in zip(rungs, rungs[1:]):
+        out.append([float(np.min(np.abs(after - rate)) / max(abs(rate), 1e-9)) for rate in before])
+    return out
+
+
 t = np.linspace(0, 0.4, 41)
 weight = quadrature(t)
 all_rates = []
