@@ -42,8 +42,8 @@ record ForecastTask(
         List<Series> holdout,
         BandSource bands) {
 
-    // Times are read from text and added up; a step shorter than this share of a step too much is rounding.
     private static final int MOST_STEPS = Integer.MAX_VALUE / 2;
+    // Times are read from text and added up; a step shorter than this share of a step too much is rounding.
     private static final double ROUNDING = 1e-6;
     private static final double DEFAULT_SHARE = 0.1;
 
