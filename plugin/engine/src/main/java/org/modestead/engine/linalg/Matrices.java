@@ -17,6 +17,20 @@ public final class Matrices {
         return r0 == r1 || c0 == c1 ? new DMatrixRMaj(r1 - r0, c1 - c0) : CommonOps_DDRM.extract(a, r0, r1, c0, c1);
     }
 
+    /**
+     * Returns chosen rows.
+     *
+     * @param a m x n
+     * @param chosen each in [0, m), in the order wanted
+     */
+    public static DMatrixRMaj rows(DMatrixRMaj a, int[] chosen) {
+        DMatrixRMaj out = new DMatrixRMaj(chosen.length, a.numCols);
+        for (int i = 0; i < chosen.length; i++) {
+            System.arraycopy(a.data, chosen[i] * a.numCols, out.data, i * a.numCols, a.numCols);
+        }
+        return out;
+    }
+
     /** Returns c · A. */
     public static DMatrixRMaj scaled(DMatrixRMaj a, double c) {
         DMatrixRMaj out = a.copy();

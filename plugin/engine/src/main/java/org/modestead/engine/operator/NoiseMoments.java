@@ -65,19 +65,11 @@ public record NoiseMoments(DMatrixRMaj gram, DMatrixRMaj action, DMatrixRMaj gra
 
     /** States one step of the operator apart: part of a step is told by its rate alone, which is folded where the motion is faster than the step. */
     private static StateRun paced(StateRun run, Evolution evolution) {
-        double sampling = (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
+        double sampling = run.meanStep();
         int stride = (int) Math.max(1, Math.round(evolution.step(sampling) / sampling));
         int[] kept = IntStream.range(0, run.count()).filter(k -> k % stride == 0).toArray();
         return stride == 1 ? run : new StateRun(run.id(), Arrays.stream(kept).mapToDouble(k -> run.times()[k]).toArray(),
-                rows(run.states(), kept), rows(run.inputs(), kept), run.weight());
-    }
-
-    private static DMatrixRMaj rows(DMatrixRMaj a, int[] kept) {
-        DMatrixRMaj out = new DMatrixRMaj(kept.length, a.numCols);
-        for (int i = 0; i < kept.length; i++) {
-            System.arraycopy(a.data, kept[i] * a.numCols, out.data, i * a.numCols, a.numCols);
-        }
-        return out;
+                Matrices.rows(run.states(), kept), Matrices.rows(run.inputs(), kept), run.weight());
     }
 
     private static DMatrixRMaj[] moments(Estimator estimator, Snapshots snapshots, OrthonormalCompression functions, Progress progress) {

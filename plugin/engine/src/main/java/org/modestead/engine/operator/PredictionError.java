@@ -72,7 +72,7 @@ public final class PredictionError {
             Ahead goal = ahead.apply(run);
             for (int k = 0; k < errors.length; k++) {
                 progress.checkCancelled();
-                DMatrixRMaj carried = carriers.of(k, ranks.get(k), meanStep(run), goal.steps());
+                DMatrixRMaj carried = carriers.of(k, ranks.get(k), run.meanStep(), goal.steps());
                 DMatrixRMaj now = Matrices.block(functions.get(i), 0, run.count() - goal.steps(), 0, ranks.get(k));
                 errors[k] += squaredDistance(Matrices.product(now, carried), goal.states());
             }
@@ -152,7 +152,7 @@ public final class PredictionError {
             int count = 0;
             for (int i = 0; i < runs.size(); i++) {
                 StateRun run = runs.get(i);
-                DMatrixRMaj carried = carriers.of(k, rank, meanStep(run), 1);
+                DMatrixRMaj carried = carriers.of(k, rank, run.meanStep(), 1);
                 DMatrixRMaj predicted = Matrices.product(Matrices.block(functions.get(i), 0, run.count() - 1, 0, rank), carried);
                 DMatrixRMaj next = compression.signalAhead(run);
                 for (int at = 0; at < predicted.getNumElements(); at++) {
@@ -167,10 +167,6 @@ public final class PredictionError {
             }
         }
         return least;
-    }
-
-    private static double meanStep(StateRun run) {
-        return (run.times()[run.count() - 1] - run.times()[0]) / (run.count() - 1);
     }
 
     private static double squaredDistance(DMatrixRMaj a, DMatrixRMaj b) {

@@ -157,11 +157,7 @@ final class NearestStates {
         DMatrixRMaj products = new DMatrixRMaj(asked.length, states.size());
         for (int from = 0; from < n; from += BLOCK) {
             DMatrixRMaj block = scaled(from, Math.min(n, from + BLOCK));
-            DMatrixRMaj own = new DMatrixRMaj(asked.length, block.numCols);
-            for (int i = 0; i < asked.length; i++) {
-                System.arraycopy(block.data, asked[i] * block.numCols, own.data, i * block.numCols, block.numCols);
-            }
-            CommonOps_DDRM.addEquals(products, Matrices.productTranspose(own, block));
+            CommonOps_DDRM.addEquals(products, Matrices.productTranspose(Matrices.rows(block, asked), block));
             for (int k = 0; k < block.getNumElements(); k++) {
                 squares[k / block.numCols] += block.data[k] * block.data[k];
             }

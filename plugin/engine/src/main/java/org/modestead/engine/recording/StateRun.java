@@ -28,6 +28,11 @@ public record StateRun(String id, double[] times, DMatrixRMaj states, DMatrixRMa
         this(id, times, states, inputs, 1);
     }
 
+    /** Returns the mean time from state to state, of two states or more. */
+    public double meanStep() {
+        return (times[times.length - 1] - times[0]) / (times.length - 1);
+    }
+
     /** Returns the number of states p. */
     public int count() {
         return times.length;
