@@ -15,6 +15,11 @@ public record Coordinates(int size) implements FunctionBasis {
     }
 
     @Override
+    public DMatrixRMaj values(DMatrixRMaj states) {
+        return states;
+    }
+
+    @Override
     public String describe() {
         return size + " state components";
     }

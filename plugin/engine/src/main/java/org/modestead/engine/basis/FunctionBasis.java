@@ -16,6 +16,16 @@ public interface FunctionBasis {
      */
     DMatrixRMaj evaluate(DMatrixRMaj states);
 
+    /**
+     * As {@link #evaluate}, for a caller that does not write.
+     *
+     * @param states p x N; not modified
+     * @return p x size; may be the states themselves
+     */
+    default DMatrixRMaj values(DMatrixRMaj states) {
+        return evaluate(states);
+    }
+
     /** Returns what the functions are, for the report, for example {@code 40 occupation functions}. */
     String describe();
 }

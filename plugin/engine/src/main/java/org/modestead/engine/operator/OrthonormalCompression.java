@@ -185,6 +185,6 @@ public record OrthonormalCompression(
      * @return p x R with entry (i, j) = q_j(x_i)
      */
     public DMatrixRMaj evaluate(DMatrixRMaj states) {
-        return Matrices.product(basis instanceof Coordinates ? states : basis.evaluate(states), map);
+        return Matrices.product(basis.values(states), map);
     }
 }

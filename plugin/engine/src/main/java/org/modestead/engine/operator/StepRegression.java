@@ -6,7 +6,6 @@ import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
 import org.ejml.dense.row.NormOps_DDRM;
 import org.modestead.engine.FitFault;
-import org.modestead.engine.basis.Coordinates;
 import org.modestead.engine.basis.FunctionBasis;
 import org.modestead.engine.linalg.LinearAlgebra.Svd;
 import org.modestead.engine.linalg.Matrices;
@@ -33,10 +32,10 @@ final class StepRegression {
             NoiseCorrection correction) {
         RowWeights weights = pairs.weights();
         double weight = 1 / Math.sqrt(pairs.count());
-        boolean plain = functions instanceof Coordinates;
-        DMatrixRMaj now = weights.rows(plain ? pairs.now() : functions.evaluate(pairs.now()), weight);
-        DMatrixRMaj next = weights.rows(plain ? pairs.next() : functions.evaluate(pairs.next()), weight);
-        DMatrixRMaj target = plain ? now : weights.rows(pairs.now(), weight);
+        DMatrixRMaj values = functions.values(pairs.now());
+        DMatrixRMaj now = weights.rows(values, weight);
+        DMatrixRMaj next = weights.rows(functions.values(pairs.next()), weight);
+        DMatrixRMaj target = values == pairs.now() ? now : weights.rows(pairs.now(), weight);
         Evolution evolution = new Evolution.StepMap(pairs.step());
         if (use == InputUse.LEFT_IN || pairs.inputs() == 0) {
             return new FactoredCompression(functions, now, next, target, InnerProduct.DATA, evolution, correction);
