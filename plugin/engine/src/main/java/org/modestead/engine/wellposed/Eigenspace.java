@@ -149,22 +149,8 @@ record Eigenspace(List<Integer> columns, List<Integer> all, Complex[] carrier, d
         return sum;
     }
 
-    /** Euclidean norm, measured in units of the largest part so that no square overflows or vanishes. */
     static double norm(Complex[] a) {
-        double unit = 0;
-        for (Complex z : a) {
-            unit = Math.max(unit, Math.max(Math.abs(z.re()), Math.abs(z.im())));
-        }
-        if (!(unit > 0) || Double.isInfinite(unit)) {
-            return unit;
-        }
-        double squares = 0;
-        for (Complex z : a) {
-            double re = z.re() / unit;
-            double im = z.im() / unit;
-            squares += re * re + im * im;
-        }
-        return unit * Math.sqrt(squares);
+        return SquaredSize.of(a).norm();
     }
 
     private static Complex[] scaled(Complex[] a, double factor) {

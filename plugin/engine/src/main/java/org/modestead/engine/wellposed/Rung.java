@@ -84,10 +84,10 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
                 Contributions.of(values, expansion.joint(), space.all(), 0, sample.channels())))).toArray();
         return IntStream.range(0, groups.size()).mapToObj(p -> {
             int j = groups.get(p).get(0);
-            double trained = rootMeanSquare(values, j);
+            double trained = SquaredSize.of(values, j).rootMean(values.numRows);
             Residuals.Pair residual = judged[j] < EXCITED * trained ? Residuals.Pair.UNKNOWN : residuals.get(j);
             return new Part(groups.get(p), expansion.rates().get(j), weights[p], weightNorm(expansion, j, sample.channels()),
-                    1 / rootMeanSquare(carried, p), residual.clear(), residual.raw(), spaces.get(p).gap(),
+                    1 / SquaredSize.of(carried, p).rootMean(carried.numRows), residual.clear(), residual.raw(), spaces.get(p).gap(),
                     overlap(spaces, weights, p), ConstantFunction.is(values, j, expansion.rates().get(j), sample.longest()));
         }).toList();
     }
@@ -98,24 +98,6 @@ record Rung(ModalExpansion expansion, List<Part> parts, double carryingNorm, dou
             norm = Math.hypot(norm, ComplexMatrices.entry(expansion.joint(), j, k).abs());
         }
         return norm;
-    }
-
-    /** Root mean square of a column, measured in units of its largest part so that no square overflows or vanishes. */
-    private static double rootMeanSquare(ZMatrixRMaj values, int j) {
-        double unit = 0;
-        for (int i = 0; i < values.numRows; i++) {
-            unit = Math.max(unit, Math.max(Math.abs(values.getReal(i, j)), Math.abs(values.getImag(i, j))));
-        }
-        if (!(unit > 0) || Double.isInfinite(unit)) {
-            return unit;
-        }
-        double squares = 0;
-        for (int i = 0; i < values.numRows; i++) {
-            double re = values.getReal(i, j) / unit;
-            double im = values.getImag(i, j) / unit;
-            squares += re * re + im * im;
-        }
-        return unit * Math.sqrt(squares / values.numRows);
     }
 
     /** The coefficients of the carriers, one a column, so that their values at all states are one product of matrices. */
