@@ -130,11 +130,11 @@ final class Grading {
     }
 
     private static ModeVerdict verdict(Mode mode, Grade grade, List<Finding> deciding, boolean counts) {
-        ModeVerdict silent = new ModeVerdict(mode.number(), grade, deciding.stream().map(Finding::check).distinct().toList(), counts, "");
+        List<String> decidedBy = deciding.stream().map(Finding::check).distinct().toList();
         StringBuilder sentence = new StringBuilder("Mode ").append(mode.number()).append(' ').append(grade.word()).append(": ")
-                .append(silent.advice()).append('.');
+                .append(Reservation.advice(grade, decidedBy)).append('.');
         deciding.forEach(finding -> sentence.append(' ').append(finding.sentence()));
-        return new ModeVerdict(mode.number(), grade, silent.decidedBy(), counts, sentence.toString());
+        return new ModeVerdict(mode.number(), grade, decidedBy, counts, sentence.toString());
     }
 
     /** The worst grade among the modes that count; undecided when none does. */

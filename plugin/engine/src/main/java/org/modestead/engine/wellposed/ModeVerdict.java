@@ -20,6 +20,6 @@ public record ModeVerdict(int mode, Grade grade, List<String> decidedBy, boolean
 
     /** Returns what the analyst may do; of a mode that settles, together with what is to be told of it. */
     public String advice() {
-        return grade == Grade.SETTLES && mode != 0 ? Reservation.advice(decidedBy) : grade.advice();
+        return mode == 0 ? grade.advice() : Reservation.advice(grade, decidedBy);
     }
 }

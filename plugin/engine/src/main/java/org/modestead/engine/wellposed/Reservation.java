@@ -8,10 +8,14 @@ final class Reservation {
 
     private Reservation() {}
 
-    /** @param decidedBy ids of the checks that decided the verdict */
-    static String advice(List<String> decidedBy) {
-        List<String> told = decidedBy.stream().flatMap(check -> words(check).stream()).distinct().toList();
-        return told.isEmpty() ? Grade.SETTLES.advice() : "report the mode together with " + String.join(", and with ", told);
+    /**
+     * Returns what may be done with one mode.
+     *
+     * @param decidedBy ids of the checks that decided the verdict
+     */
+    static String advice(Grade grade, List<String> decidedBy) {
+        List<String> told = grade == Grade.SETTLES ? decidedBy.stream().flatMap(check -> words(check).stream()).distinct().toList() : List.of();
+        return told.isEmpty() ? grade.advice() : "report the mode together with " + String.join(", and with ", told);
     }
 
     private static Optional<String> words(String check) {
