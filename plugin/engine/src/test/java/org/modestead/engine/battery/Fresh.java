@@ -14,7 +14,6 @@ import static java.lang.StrictMath.tan;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
 
 /**
@@ -69,20 +68,9 @@ final class Fresh {
         return y;
     }
 
-    /** What is seen of a hidden path. */
-    private static KnownSystem seen(String name, KnownSystem hidden, UnaryOperator<double[]> gauge) {
-        return new KnownSystem(name, hidden.step(), random -> {
-            double[][] rows = hidden.path().draw(random);
-            for (int k = 0; k < rows.length; k++) {
-                rows[k] = gauge.apply(rows[k]);
-            }
-            return rows;
-        });
-    }
-
     /** {@code x' = A x} from starts that are smaller by a factor: a kernel of rank 10 then tells the degrees apart. */
     private static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
-        return seen(name, Paths.linear("", samples, step, a), x -> {
+        return Paths.seen(name, Paths.linear("", samples, step, a), x -> {
             double[] y = x.clone();
             for (int i = 0; i < y.length; i++) {
                 y[i] *= factor;

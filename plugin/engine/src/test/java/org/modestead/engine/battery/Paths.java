@@ -91,6 +91,17 @@ final class Paths {
         });
     }
 
+    /** What is seen of a hidden path. */
+    static KnownSystem seen(String name, KnownSystem hidden, UnaryOperator<double[]> gauge) {
+        return new KnownSystem(name, hidden.step(), random -> {
+            double[][] rows = hidden.path().draw(random);
+            for (int k = 0; k < rows.length; k++) {
+                rows[k] = gauge.apply(rows[k]);
+            }
+            return rows;
+        });
+    }
+
     /** A path of numbers: every call gives the next. */
     interface Chain {
         DoubleSupplier start(Random random);

@@ -73,17 +73,6 @@ final class Sixth {
         };
     }
 
-    /** What is seen of a hidden path. */
-    private static KnownSystem seen(String name, KnownSystem hidden, UnaryOperator<double[]> gauge) {
-        return new KnownSystem(name, hidden.step(), random -> {
-            double[][] rows = hidden.path().draw(random);
-            for (int k = 0; k < rows.length; k++) {
-                rows[k] = gauge.apply(rows[k]);
-            }
-            return rows;
-        });
-    }
-
     /**
      * In units in which the energy is the sum of squares. A pendulum on a turning floor, {@code x' = 1.3v, v' = -1.3x - 0.5Jv}: skew, rates
      * ±i(√(1.69 + 0.0625) ± 0.25), ±1.07i and ±1.57i. A particle that hops between three sites, {@code ψ' = -iHψ} with H real and symmetric,
@@ -197,7 +186,7 @@ final class Sixth {
      */
     private static void sensors(List<Case> out) {
         KnownSystem hidden = Paths.linear("", 50, 0.06, new double[][] {{-0.3, 0}, {0, -1.2}});
-        KnownSystem gauges = seen("two decays seen by four gauges", hidden,
+        KnownSystem gauges = Paths.seen("two decays seen by four gauges", hidden,
                 times(new double[][] {{1, 0.8}, {0.9, 0.2}, {0.5, 0.9}, {0.3, 1}}));
         out.add(new Case(gauges, Look.linearKernel(2), Truth.SETTLES));
         out.add(new Case(gauges, Look.delays(3, 2), Truth.REPORTABLE));
@@ -346,7 +335,7 @@ final class Sixth {
             return new double[] {0.4 * random.nextDouble(), 0, cos(phase), sin(phase)};
         }, x -> new double[] {x[1], -0.5 * x[1] - sin(x[0]) + 0.7 * x[2], -1.2 * x[3], 1.2 * x[2]}), Look.delays(22, 2), Truth.REPORTABLE));
         KnownSystem turn = Paths.map("", 70, 1, Paths.box(1, 0, 1), x -> new double[] {x[0] + 0.29 + 0.08 * sin(2 * PI * x[0])});
-        out.add(new Case(seen("uneven rotation in steps", turn, x -> new double[] {cos(2 * PI * x[0]), sin(2 * PI * x[0])}),
+        out.add(new Case(Paths.seen("uneven rotation in steps", turn, x -> new double[] {cos(2 * PI * x[0]), sin(2 * PI * x[0])}),
                 Look.delays(10, 5), Truth.REPORTABLE));
     }
 
@@ -542,7 +531,7 @@ final class Sixth {
             double p = x[1] + 7 / (2 * PI) * sin(2 * PI * x[0]);
             return new double[] {(x[0] + p) % 1, p % 1};
         });
-        out.add(new Case(seen("kicked rotor", kicked, x -> new double[] {cos(2 * PI * x[0]), sin(2 * PI * x[0])}),
+        out.add(new Case(Paths.seen("kicked rotor", kicked, x -> new double[] {cos(2 * PI * x[0]), sin(2 * PI * x[0])}),
                 Look.delays(4, 6), Truth.NONE));
         out.add(new Case(Paths.map("intermittent map", 120, 1, Paths.box(1, 0.02, 0.98),
                 x -> new double[] {x[0] < 0.5 ? x[0] * (1 + sqrt(2 * x[0])) : 2 * x[0] - 1}), Look.monomials(4, 5), Truth.NONE));
@@ -559,7 +548,7 @@ final class Sixth {
             return new double[] {x[2], x[3], (-3 * sin(x[0]) - sin(x[0] - 2 * x[1]) - 2 * sin(d) * (x[3] * x[3] + x[2] * x[2] * cos(d))) / below,
                 2 * sin(d) * (2 * x[2] * x[2] + 2 * cos(x[0]) + x[3] * x[3] * cos(d)) / below};
         });
-        out.add(new Case(seen("double pendulum, wide", arms, x -> new double[] {sin(x[0]), sin(x[1])}), Look.delays(10, 8), Truth.NONE));
+        out.add(new Case(Paths.seen("double pendulum, wide", arms, x -> new double[] {sin(x[0]), sin(x[1])}), Look.delays(10, 8), Truth.NONE));
     }
 
     /**
@@ -577,7 +566,7 @@ final class Sixth {
                 return turn[0];
             };
         }), Look.fourier(3), Truth.NONE));
-        out.add(new Case(seen("drunkard on a ring", Paths.chance("", 140, 0.1, random -> {
+        out.add(new Case(Paths.seen("drunkard on a ring", Paths.chance("", 140, 0.1, random -> {
             double[] angle = {2 * PI * random.nextDouble()};
             return () -> angle[0] += 0.35 * random.nextGaussian();
         }), x -> new double[] {cos(x[0]), sin(x[0])}), Look.monomials(2, 5), Truth.NONE));
