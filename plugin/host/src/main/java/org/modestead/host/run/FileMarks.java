@@ -10,9 +10,9 @@ import java.nio.file.attribute.FileTime;
 import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.util.HexFormat;
-import java.util.LinkedHashMap;
-import java.util.Map;
+import java.util.Optional;
 import java.util.stream.Stream;
+import org.modestead.host.recent.RecentAnswers;
 
 /**
  * What stands for a file that a step reads: place, size, time of change and a digest of its content. A file that has not changed since it
@@ -28,7 +28,7 @@ public final class FileMarks {
 
     private static final int MOST = 1000;
 
-    private final Map<Path, Known> known = new LinkedHashMap<>(16, 0.75f, true);
+    private final RecentAnswers<Path, Known> known = new RecentAnswers<>(MOST);
 
     /** Remembers nothing yet. */
     public FileMarks() {}
@@ -56,11 +56,9 @@ public final class FileMarks {
     }
 
     private String digest(Path place, BasicFileAttributes facts) throws IOException {
-        synchronized (known) {
-            Known before = known.get(place);
-            if (before != null && before.size() == facts.size() && before.changed().equals(facts.lastModifiedTime())) {
-                return before.digest();
-            }
+        Optional<Known> before = known.find(place).filter(mark -> mark.size() == facts.size() && mark.changed().equals(facts.lastModifiedTime()));
+        if (before.isPresent()) {
+            return before.get().digest();
         }
         long begun = System.currentTimeMillis();
         MessageDigest digest = Fingerprint.sha256();
@@ -69,12 +67,7 @@ public final class FileMarks {
         }
         String content = HexFormat.of().formatHex(digest.digest());
         if (begun - facts.lastModifiedTime().toMillis() > UNSETTLED_MILLIS) {
-            synchronized (known) {
-                known.put(place, new Known(facts.size(), facts.lastModifiedTime(), content));
-                if (known.size() > MOST) {
-                    known.remove(known.keySet().iterator().next());
-                }
-            }
+            known.keep(place, new Known(facts.size(), facts.lastModifiedTime(), content));
         }
         return content;
     }

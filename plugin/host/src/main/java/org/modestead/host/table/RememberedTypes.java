@@ -8,11 +8,10 @@ import java.nio.channels.SeekableByteChannel;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.attribute.BasicFileAttributes;
-import java.util.LinkedHashMap;
-import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.TimeUnit;
 import java.util.zip.CRC32C;
+import org.modestead.host.recent.RecentAnswers;
 
 /**
  * What the columns of files were found to hold, so that a check and the run behind it do not both read a file to its end. An answer holds
@@ -30,7 +29,7 @@ final class RememberedTypes {
     /** A file that changed this shortly before it was read may change again within one tick of the clock of its file system. */
     private static final long UNSETTLED_MILLIS = 2_000;
 
-    private final Map<Question, TextTyper.Result> known = new LinkedHashMap<>(16, 0.75f, true);
+    private final RecentAnswers<Question, TextTyper.Result> known = new RecentAnswers<>(MOST);
 
     /** Finds types by reading. */
     interface Search<E extends Exception> {
@@ -54,20 +53,13 @@ final class RememberedTypes {
         if (question.isEmpty()) {
             return search.types();
         }
-        synchronized (known) {
-            TextTyper.Result before = known.get(question.get());
-            if (before != null) {
-                return before;
-            }
+        Optional<TextTyper.Result> before = known.find(question.get());
+        if (before.isPresent()) {
+            return before.get();
         }
         TextTyper.Result found = search.types();
         if (print(file.path()).filter(question.get().file()::equals).isPresent()) {
-            synchronized (known) {
-                known.put(question.get(), found);
-                if (known.size() > MOST) {
-                    known.remove(known.keySet().iterator().next());
-                }
-            }
+            known.keep(question.get(), found);
         }
         return found;
     }

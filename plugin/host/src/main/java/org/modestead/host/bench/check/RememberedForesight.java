@@ -3,12 +3,12 @@ package org.modestead.host.bench.check;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.TreeMap;
 import org.modestead.engine.Fault;
+import org.modestead.host.recent.RecentAnswers;
 import org.modestead.host.workflow.Foresight;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.nodes.contract.Expected;
@@ -23,7 +23,7 @@ public final class RememberedForesight implements Foresight {
 
     private static final int MOST = 2000;
 
-    private final Map<Key, Seen> seen = new LinkedHashMap<>(16, 0.75f, true);
+    private final RecentAnswers<Key, Seen> seen = new RecentAnswers<>(MOST);
 
     /**
      * What an answer depends on.
@@ -39,19 +39,12 @@ public final class RememberedForesight implements Foresight {
     @Override
     public Seen look(PlannedStep step, Expected arriving, RunContext context) {
         Key key = new Key(step.declaration().id(), step.settings().values(), context.baseFolder(), arriving, files(step, context.baseFolder()));
-        synchronized (seen) {
-            Seen known = seen.get(key);
-            if (known != null) {
-                return known;
-            }
+        Optional<Seen> known = seen.find(key);
+        if (known.isPresent()) {
+            return known.get();
         }
         Seen fresh = ask(step, arriving, context);
-        synchronized (seen) {
-            seen.put(key, fresh);
-            if (seen.size() > MOST) {
-                seen.remove(seen.keySet().iterator().next());
-            }
-        }
+        seen.keep(key, fresh);
         return fresh;
     }
 
