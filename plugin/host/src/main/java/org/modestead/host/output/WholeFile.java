@@ -2,11 +2,9 @@ package org.modestead.host.output;
 
 import java.io.IOException;
 import java.io.OutputStream;
-import java.nio.file.FileSystemException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.nio.file.StandardCopyOption;
-import org.modestead.nodes.files.PartName;
+import org.modestead.nodes.files.InOneStep;
 
 /** Writes a file beside its place and moves it there in one step when it is complete. */
 public final class WholeFile {
@@ -20,13 +18,6 @@ public final class WholeFile {
         void write(OutputStream out) throws IOException;
     }
 
-    /** Makes a file of its own accord. */
-    @FunctionalInterface
-    public interface Maker {
-        /** Makes the file, complete. */
-        void make(Path part) throws IOException;
-    }
-
     /**
      * Writes a file whole or not at all; one of that name stays until the new one is complete.
      *
@@ -35,29 +26,11 @@ public final class WholeFile {
      * @param content writes the bytes
      */
     public static void write(Disk disk, Path target, Content content) throws IOException {
-        make(target, part -> {
+        InOneStep.make(target, part -> {
             try (OutputStream out = disk.create(part)) {
                 content.write(out);
             }
         });
-    }
-
-    /** As {@link #write}, for content that wants a file name. */
-    public static void make(Path target, Maker maker) throws IOException {
-        Files.createDirectories(target.getParent());
-        if (isNoFile(target)) {
-            throw new FileSystemException(target.toString(), null, "not an ordinary file");
-        }
-        for (Path left : PartName.abandonedBeside(target)) {
-            Files.deleteIfExists(left);
-        }
-        Path part = PartName.of(target);
-        try {
-            maker.make(part);
-            Files.move(part, target, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
-        } finally {
-            Files.deleteIfExists(part);
-        }
     }
 
     /**
@@ -71,7 +44,7 @@ public final class WholeFile {
         if (Files.isDirectory(target)) {
             throw new OutputFault(shown, "this is a folder, not a file", "name a file in it");
         }
-        if (isNoFile(target)) {
+        if (InOneStep.isNoFile(target)) {
             throw new OutputFault(shown, "this is a device or a pipe, not an ordinary file", "choose another name");
         }
         Path folder = target.getParent();
@@ -85,10 +58,5 @@ public final class WholeFile {
             throw new OutputFault(shown, "the folder " + folder + " may not be written",
                     "allow writing there or choose another folder");
         }
-    }
-
-    /** Moving a file there would replace it. */
-    private static boolean isNoFile(Path target) {
-        return Files.exists(target) && !Files.isRegularFile(target);
     }
 }

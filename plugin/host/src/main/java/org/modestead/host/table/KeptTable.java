@@ -6,7 +6,7 @@ import java.sql.SQLException;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
-import org.modestead.host.output.WholeFile;
+import org.modestead.nodes.files.InOneStep;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
 
@@ -28,7 +28,7 @@ public final class KeptTable {
      */
     public static void write(Table table, Path file) throws IOException {
         Recipe recipe = Recipe.of(table);
-        WholeFile.make(file, part -> {
+        InOneStep.make(file, part -> {
             try (Database database = Database.open(Database.USUAL_MEGABYTES)) {
                 recipe.prepare(database, List.of(part));
                 database.execute("COPY (" + recipe.select() + ") TO " + Sql.text(part.toString()) + " (FORMAT parquet)");

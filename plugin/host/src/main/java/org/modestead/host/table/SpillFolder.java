@@ -10,6 +10,7 @@ import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.modestead.host.output.WholeFolder;
+import org.modestead.nodes.files.GoneProcess;
 
 /**
  * Temporary folders in which databases keep what does not fit into memory, {@code modestead-spill-PID-...}. Each is removed when its
@@ -38,13 +39,11 @@ public final class SpillFolder {
             }
         } catch (IOException notOurs) {
             // what another person left is left; it harms nobody's result
-            return;
         }
     }
 
     private static boolean isAbandoned(Path path, Instant late) {
         Matcher name = NAME.matcher(path.getFileName().toString());
-        return name.matches() && path.toFile().lastModified() < late.toEpochMilli()
-                && ProcessHandle.of(Long.parseLong(name.group(1))).filter(ProcessHandle::isAlive).isEmpty();
+        return name.matches() && GoneProcess.left(path, Long.parseLong(name.group(1)), late);
     }
 }

@@ -19,6 +19,7 @@ import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.files.InOneStep;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.table.TableSchema;
 
@@ -81,7 +82,7 @@ public final class TableSink implements Node {
             if (format.equals(CSV)) {
                 WholeFile.write(Disk.REAL, target, out -> CsvWriter.write(table, out, context.progress()));
             } else {
-                WholeFile.make(target, part -> copy(table, part, format));
+                InOneStep.make(target, part -> copy(table, part, format));
             }
         } catch (IOException unwritable) {
             throw OutputFault.of(shown, unwritable);

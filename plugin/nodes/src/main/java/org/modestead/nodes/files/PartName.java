@@ -44,12 +44,8 @@ public final class PartName {
                 String name = path.getFileName().toString();
                 Matcher part = PART.matcher(name);
                 return name.startsWith(beginning) && part.matches() && (beginning.length() == 1 || part.start(1) == beginning.length())
-                        && isGone(Long.parseLong(part.group(1))) && path.toFile().lastModified() < late.toEpochMilli();
+                        && GoneProcess.left(path, Long.parseLong(part.group(1)), late);
             }).sorted().toList();
         }
-    }
-
-    private static boolean isGone(long process) {
-        return ProcessHandle.of(process).filter(ProcessHandle::isAlive).isEmpty();
     }
 }

@@ -7,7 +7,6 @@ import java.io.InputStream;
 import java.io.OutputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.nio.file.StandardCopyOption;
 import org.modestead.engine.Progress;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
@@ -16,7 +15,7 @@ import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
-import org.modestead.nodes.files.PartName;
+import org.modestead.nodes.files.InOneStep;
 import org.modestead.nodes.modelfile.MomentFiles;
 import org.modestead.nodes.modelfile.PortFiles;
 
@@ -45,9 +44,7 @@ record ModelPath(Path path, String shown) {
         if (!Files.exists(path)) {
             throw new ModelFileFault(shown, "there is no such file", "name a file relative to the workflow's folder or with its full path");
         }
-        if (Files.exists(path) && !Files.isRegularFile(path)) {
-            throw new ModelFileFault(shown, "this is a device or a pipe, not an ordinary file", "name an ordinary file");
-        }
+        refuseDevices();
         if (!Files.isReadable(path)) {
             throw new ModelFileFault(shown, "the file may not be read", "allow reading it");
         }
@@ -58,15 +55,19 @@ record ModelPath(Path path, String shown) {
         if (Files.isDirectory(path)) {
             throw new ModelFileFault(shown, "this is a folder, not a file", "name a file in it");
         }
-        if (Files.exists(path) && !Files.isRegularFile(path)) {
-            throw new ModelFileFault(shown, "this is a device or a pipe, not an ordinary file", "name an ordinary file");
-        }
+        refuseDevices();
         Path folder = path.getParent();
         while (folder != null && !Files.exists(folder)) {
             folder = folder.getParent();
         }
         if (folder == null || !Files.isDirectory(folder) || !Files.isWritable(folder)) {
             throw new ModelFileFault(shown, "nothing can be written in the folder " + folder, "allow writing there or choose another folder");
+        }
+    }
+
+    private void refuseDevices() {
+        if (InOneStep.isNoFile(path)) {
+            throw new ModelFileFault(shown, "this is a device or a pipe, not an ordinary file", "name an ordinary file");
         }
     }
 
@@ -101,20 +102,12 @@ record ModelPath(Path path, String shown) {
     /** Writes beside the place and moves there in one step: one that was there before stays until then. */
     void write(Model model, Progress progress) {
         requireWritable();
-        Path part = PartName.of(path);
         try {
-            Files.createDirectories(path.getParent());
-            for (Path left : PartName.abandonedBeside(path)) {
-                Files.deleteIfExists(left);
-            }
-            try {
+            InOneStep.make(path, part -> {
                 try (OutputStream out = new BufferedOutputStream(PolledStreams.writing(Files.newOutputStream(part), progress), BLOCK)) {
                     PortFiles.write(PortType.MODEL, model, out);
                 }
-                Files.move(part, path, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
-            } finally {
-                Files.deleteIfExists(part);
-            }
+            });
         } catch (IOException unwritable) {
             throw new ModelFileFault(shown, "the file cannot be written (" + unwritable.getMessage() + ")",
                     "make room and allow writing, or choose another folder");
