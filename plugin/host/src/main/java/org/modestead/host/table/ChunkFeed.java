@@ -137,7 +137,6 @@ final class ChunkFeed {
             statement.cancel();
         } catch (SQLException ended) {
             // A statement that cannot be stopped any more has ended.
-            stopped = true;
         }
     }
 }

@@ -21,7 +21,7 @@ final class CsvRecords implements Closeable {
     private static final int QUOTE = '"';
     private static final int BYTE_ORDER_MARK = 0xFEFF;
     /** DuckDB refuses longer ones too; a line without end would fill the memory. */
-    private static final int LONGEST = 2_000_000;
+    static final int LONGEST = 2_000_000;
 
     private final BufferedReader reader;
     private final String shown;

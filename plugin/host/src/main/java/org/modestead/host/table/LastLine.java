@@ -12,7 +12,7 @@ import java.util.stream.IntStream;
 final class LastLine {
 
     /** Twice what DuckDB takes as one line, because a letter in UTF-16 takes twice the room; what is shorter it refuses itself. */
-    static final int LONGEST = 4_000_000;
+    static final int LONGEST = 2 * CsvRecords.LONGEST;
 
     private LastLine() {}
 

@@ -3,9 +3,11 @@ package org.modestead.host.table;
 import java.sql.SQLException;
 import java.util.ArrayList;
 import java.util.EnumMap;
+import java.util.Iterator;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.modestead.nodes.table.CellType;
 
 /**
@@ -81,15 +83,15 @@ final class TextTyper {
     /** What no number decides is looked at once more, for the other types: they cost several times what numbers do. */
     private Result look(List<String> names, String rows) throws SQLException {
         Counts numbers = count(names, NUMBERS, rows);
-        List<String> undecided = names.stream().filter(name -> !numbers.decides(names.indexOf(name))).toList();
-        Counts others = undecided.isEmpty() ? new Counts(numbers.rows(), List.of(), List.of()) : count(undecided, OTHERS, rows);
+        List<String> undecided = IntStream.range(0, names.size()).filter(j -> !numbers.decides(j)).mapToObj(names::get).toList();
+        Iterator<Map<CellType, Long>> others = (undecided.isEmpty() ? List.<Map<CellType, Long>>of() : count(undecided, OTHERS, rows).fitting()).iterator();
         List<Found> found = new ArrayList<>();
         for (int j = 0; j < names.size(); j++) {
             String name = names.get(j);
             long cells = numbers.cells().get(j);
             Map<CellType, Long> fitting = new EnumMap<>(numbers.fitting().get(j));
-            if (undecided.contains(name)) {
-                fitting.putAll(others.fitting().get(undecided.indexOf(name)));
+            if (!numbers.decides(j)) {
+                fitting.putAll(others.next());
             }
             CellType type = rules.textColumns().contains(name) ? CellType.TEXT : type(cells, fitting);
             found.add(new Found(type, cells, cells - fitting.getOrDefault(type, cells)));

@@ -100,7 +100,7 @@ public final class WorkflowFile {
                     : Reading.failed(name, "", "the file holds " + JsonKind.of(root) + ", not an object",
                             "begin it with {\"format\": \"" + FORMAT + "\"");
         } catch (JsonProcessingException broken) {
-            return Reading.failed(name, place(broken), firstLine(broken.getOriginalMessage()), "correct the JSON there");
+            return Reading.failed(name, place(broken), JsonWords.of(broken), "correct the JSON there");
         } catch (IOException impossible) {
             throw new IllegalStateException("bytes in memory could not be read", impossible);
         }
@@ -109,10 +109,5 @@ public final class WorkflowFile {
     private static String place(JsonProcessingException broken) {
         return broken.getLocation() == null ? ""
                 : "line " + broken.getLocation().getLineNr() + ", column " + broken.getLocation().getColumnNr();
-    }
-
-    private static String firstLine(String message) {
-        // a limit is named with the library's setting for it, which the person cannot change
-        return message.lines().findFirst().orElse("broken JSON").replaceAll(", from `[^`]*`", "");
     }
 }

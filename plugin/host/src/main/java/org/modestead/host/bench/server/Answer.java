@@ -15,6 +15,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.modestead.engine.Fault;
+import org.modestead.host.workflow.JsonWords;
 
 /** JSON in requests and answers. */
 final class Answer {
@@ -29,7 +30,7 @@ final class Answer {
             byte[] bytes = context.bodyAsBytes();
             return bytes.length == 0 ? JsonNodeFactory.instance.objectNode() : MAPPER.readTree(bytes);
         } catch (JsonProcessingException broken) {
-            throw new RequestFault(400, "request", "its body is no JSON (" + broken.getOriginalMessage().replaceAll(", from `[^`]*`", "") + ")", "send JSON");
+            throw new RequestFault(400, "request", "its body is no JSON (" + JsonWords.of(broken) + ")", "send JSON");
         } catch (IOException impossible) {
             throw new IllegalStateException("bytes in memory could not be read", impossible);
         }
