@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import java.io.IOException;
 import java.nio.file.Files;
@@ -36,7 +37,8 @@ class StartPageTest {
 
     @Test
     void everyTestWorkflowIsAnExampleWithNothingWrong() throws IOException, InterruptedException {
-        List<String> examples = bench.get("/api/start").json().path("examples").findValuesAsText("id");
+        JsonNode offered = bench.get("/api/start").json().path("examples");
+        List<String> examples = offered.findValuesAsText("id");
         try (var folders = Files.list(Path.of("..", "..", "test-workflows"))) {
             assertEquals(folders.filter(path -> Files.exists(path.resolve("workflow.json"))).map(path -> path.getFileName().toString()).sorted().toList(),
                     examples.stream().sorted().toList());
@@ -44,11 +46,29 @@ class StartPageTest {
         for (String example : examples) {
             JsonNode desk = bench.post("/api/desk", "{\"example\": \"" + example + "\"}").json();
             assertTrue(desk.path("open").asBoolean(), desk.toString());
+            assertEquals(offered.path(examples.indexOf(example)).path("title").asText(), desk.path("name").asText(), "the title is the workflow's name");
             assertEquals(0, desk.path("problems").size(), desk.path("problems").toString());
             assertFalse(desk.path("saved").asBoolean());
             assertTrue(desk.path("folder").asText().startsWith(folder.toString()));
         }
         assertEquals(examples.size(), bench.get("/api/start").json().path("recent").size());
+    }
+
+    @Test
+    void theDocumentHoldsWhatTheStartPageShowsAndNothingOfAnOpenDesk() throws IOException, InterruptedException {
+        bench.post("/api/desk", "{\"empty\": true, \"name\": \"</script><b>\"}");
+        assertEquals("", first(), "how the steps stand is asked for");
+        bench.post("/api/desk/close", "");
+        String first = first();
+        assertFalse(first.contains("<"), "a name ends no element: " + first);
+        JsonNode told = new ObjectMapper().readTree(first);
+        assertFalse(told.path("desk").path("open").asBoolean(true));
+        assertEquals("</script><b>", told.path("start").path("recent").path(0).path("name").asText());
+        assertEquals(bench.get("/api/start").json().path("examples"), told.path("start").path("examples"));
+    }
+
+    private String first() throws IOException, InterruptedException {
+        return bench.get("/").body().replaceAll("(?s).*<script id=\"first\" type=\"application/json\">(.*?)</script>.*", "$1").replace("{}", "");
     }
 
     @Test

@@ -41,7 +41,8 @@ public final class BenchServer implements AutoCloseable {
             config.startup.showJavalinBanner = false;
             config.startup.startupWatcherEnabled = false;
             config.http.maxRequestSize = 8L << 20;
-            config.http.compressionStrategy = CompressionStrategy.GZIP;
+            // nothing leaves this machine: packing would only cost time
+            config.http.compressionStrategy = CompressionStrategy.NONE;
             routes(config.routes);
         });
         server.start("127.0.0.1", port);
@@ -81,7 +82,7 @@ public final class BenchServer implements AutoCloseable {
         routes.get("/api/nodes", context -> context.contentType("application/json").result(nodes));
         new DeskRoutes(workbench, deskJson).on(routes);
         new StepRoutes(workbench).on(routes);
-        new StartRoutes(workbench, doors, deskJson).on(routes);
+        new StartRoutes(workbench, doors, deskJson, files).on(routes);
         new FileRoutes(workbench, doors.desks()).on(routes);
         looks.on(routes);
         events.on(routes);
@@ -89,7 +90,6 @@ public final class BenchServer implements AutoCloseable {
             throw new RequestFault(404, "request", "there is no " + context.path(), "open the page anew");
         });
         routes.get("/<path>", files::serve);
-        routes.get("/", files::serve);
         routes.exception(RequestFault.class, (fault, context) -> Answer.refuse(context, fault.status(), fault));
         routes.exception(EditFault.class, (fault, context) -> Answer.refuse(context, 422, fault));
         routes.exception(FolderFault.class, (fault, context) -> Answer.refuse(context, 403, fault));

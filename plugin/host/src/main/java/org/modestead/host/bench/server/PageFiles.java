@@ -1,8 +1,10 @@
 package org.modestead.host.bench.server;
 
+import com.fasterxml.jackson.databind.JsonNode;
 import io.javalin.http.Context;
 import java.io.IOException;
 import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Map;
@@ -17,14 +19,29 @@ final class PageFiles {
 
     private static final String PAGE = "/org/modestead/host/bench/page/";
     private static final String LIBRARIES = "/META-INF/resources/webjars/";
-    /** Files under other names; a browser asks for the icon by itself where a document, such as a report, names none. */
-    private static final Map<String, String> NAMES = Map.of("/", "index.html", "/favicon.ico", "mark.svg");
+    private static final String DOCUMENT = "index.html";
+    /** Where the document takes what the page shows first. */
+    private static final String FIRST = "<script id=\"first\" type=\"application/json\">";
+    /** A file under another name: a browser asks for the icon by itself where a document, such as a report, names none. */
+    private static final Map<String, String> NAMES = Map.of("/favicon.ico", "mark.svg");
     private static final Pattern NAME = Pattern.compile("[A-Za-z0-9_-][A-Za-z0-9._-]*(/[A-Za-z0-9_-][A-Za-z0-9._-]*)*");
     private static final Map<String, String> TYPES = Map.of("html", "text/html; charset=utf-8", "js", "text/javascript; charset=utf-8",
             "css", "text/css; charset=utf-8", "svg", "image/svg+xml", "json", "application/json", "txt", "text/plain; charset=utf-8",
             "png", "image/png", "ico", "image/x-icon", "woff2", "font/woff2");
 
     private final Libraries libraries = new Libraries();
+
+    /**
+     * Answers with the document.
+     *
+     * @param first what the page shows first: it stands in the document, so that the page need not ask for it
+     */
+    void serve(Context context, JsonNode first) {
+        String document = new String(page(DOCUMENT).orElseThrow(), StandardCharsets.UTF_8);
+        // no text of the data may end the element that they stand in
+        String whole = document.replace(FIRST, FIRST + Answer.text(first).replace("<", "\\u003c"));
+        context.contentType(TYPES.get("html")).result(whole.getBytes(StandardCharsets.UTF_8));
+    }
 
     /** Answers with a file. */
     void serve(Context context) {
@@ -78,8 +95,8 @@ final class PageFiles {
 
         /** The hooks name Preact as packages do; a page without a build step needs its address. */
         private static byte[] atHome(byte[] module) {
-            String text = new String(module, java.nio.charset.StandardCharsets.UTF_8);
-            return text.replace("from\"preact\"", "from\"/lib/preact.js\"").getBytes(java.nio.charset.StandardCharsets.UTF_8);
+            String text = new String(module, StandardCharsets.UTF_8);
+            return text.replace("from\"preact\"", "from\"/lib/preact.js\"").getBytes(StandardCharsets.UTF_8);
         }
     }
 }

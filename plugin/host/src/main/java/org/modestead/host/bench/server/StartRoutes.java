@@ -30,14 +30,17 @@ final class StartRoutes {
     private final Workbench workbench;
     private final Doors doors;
     private final DeskJson deskJson;
+    private final PageFiles files;
 
-    StartRoutes(Workbench workbench, Doors doors, DeskJson deskJson) {
+    StartRoutes(Workbench workbench, Doors doors, DeskJson deskJson, PageFiles files) {
         this.workbench = workbench;
         this.doors = doors;
         this.deskJson = deskJson;
+        this.files = files;
     }
 
     void on(JavalinDefaultRoutingApi server) {
+        server.get("/", context -> files.serve(context, first()));
         server.get("/api/start", context -> Answer.json(context, start()));
         server.post("/api/desk", context -> Answer.json(context, deskJson.of(workbench.open(door(Answer.body(context))))));
         server.post("/api/desk/forget", context -> {
@@ -56,10 +59,20 @@ final class StartRoutes {
         });
     }
 
+    /** What the page shows before it has asked for anything; nothing while a desk is open, since how its steps stand may have to be read of files. */
+    private ObjectNode first() {
+        ObjectNode json = JSON.objectNode();
+        if (!workbench.isOpen()) {
+            json.set("desk", deskJson.of(workbench.view()));
+            json.set("start", start());
+        }
+        return json;
+    }
+
     private ObjectNode start() {
         ObjectNode json = JSON.objectNode();
         ArrayNode examples = json.putArray("examples");
-        Examples.shown().forEach(example -> examples.addObject().put("id", example.id()).put("title", example.title()).put("words", example.words()));
+        Examples.all().forEach(example -> examples.addObject().put("id", example.id()).put("title", example.title()).put("words", example.words()));
         ArrayNode recent = json.putArray("recent");
         doors.desks().desks().stream().limit(MOST_RECENT).forEach(kept -> recent.addObject().put("desk", kept.id()).put("name", kept.name())
                 .put("file", kept.file().toString()).put("when", kept.changed().toString()).put("unsaved", kept.unsaved())

@@ -19,36 +19,43 @@ public final class Examples {
     private static final String PLACE = "/org/modestead/host/bench/examples/";
 
     private static final List<Example> ALL = List.of(
-            new Example("pump-house", "invented pumping station: 16 runs, 8 channels, noise, gaps, uneven steps; surge, draining, a bearing resonance, a growing whirl"),
-            new Example("three-flows", "three flows with a known answer: x' = x stands, x' = 1 drifts, x' = x² is absent"),
-            new Example("driven-shaft", "invented surge shaft: 8 runs, driven by a gate and a pump that are recorded"),
-            new Example("city-weather", "daily temperatures and wind of one city over four years; a forecast of the fourth"),
-            new Example("sunspots", "yearly sunspot numbers 1700-2008: a cycle of about eleven years"),
-            new Example("three-decays", "a sum of three decays with certified rates"),
-            new Example("one-pass", "invented pumping station, fitted in one pass over its rows as tables larger than memory are, and in memory beside it"),
-            new Example("air-vessel", "invented rising main that loses charge of its air vessel: a kept model held against later recordings, with charts and alarms"),
-            new Example("tower-ring-down", "invented building: ten releases, five channels; sway and twist with damping, against what a wind study assumed"),
-            new Example("grid-ring-down", "invented power grid: twelve line trips at five stations; a swing between areas against limits of its damping"),
-            new Example("kept-model", "a kept model and new recordings of the pumping station: forecast and judged without fitting"));
+            new Example("pump-house", "Pump house: which modes stand?",
+                    "invented pumping station: 16 runs, 8 channels, noise, gaps, uneven steps; surge, draining, a bearing resonance, a growing whirl"),
+            new Example("three-flows", "Three flows: stands, drifts, absent",
+                    "three flows with a known answer: x' = x stands, x' = 1 drifts, x' = x² is absent"),
+            new Example("driven-shaft", "Driven shaft: free motion beside known inputs",
+                    "invented surge shaft: 8 runs, driven by a gate and a pump that are recorded"),
+            new Example("city-weather", "City weather: the year and the next one",
+                    "daily temperatures and wind of one city over four years; a forecast of the fourth"),
+            new Example("sunspots", "Sunspots: the cycle of about eleven years",
+                    "yearly sunspot numbers 1700-2008: a cycle of about eleven years"),
+            new Example("three-decays", "Three decays: certified rates",
+                    "a sum of three decays with certified rates"),
+            new Example("one-pass", "One pass: sums over rows give the fit in memory",
+                    "invented pumping station, fitted in one pass over its rows as tables larger than memory are, and in memory beside it"),
+            new Example("air-vessel", "Air vessel: the surge of a rising main watched from stop to stop",
+                    "invented rising main that loses charge of its air vessel: a kept model held against later recordings, with charts and alarms"),
+            new Example("tower-ring-down", "Tower ring-down: sway, twist and damping after a release",
+                    "invented building: ten releases, five channels; sway and twist with damping, against what a wind study assumed"),
+            new Example("grid-ring-down", "Grid ring-down: swings between areas after a line trip",
+                    "invented power grid: twelve line trips at five stations; a swing between areas against limits of its damping"),
+            new Example("kept-model", "Pump house: a kept model on new recordings, without fitting",
+                    "a kept model and new recordings of the pumping station: forecast and judged without fitting"));
 
     private Examples() {}
 
-    /** @param words what it is, for people */
-    private record Example(String id, String words) {}
-
     /**
-     * An example as the start page shows it.
+     * An example as the start page shows it. The title is told here once more, so that the page does not wait for the files to be read.
      *
      * @param id of the folder
      * @param title name of the workflow
      * @param words what it is, for people
      */
-    public record Shown(String id, String title, String words) {}
+    public record Example(String id, String title, String words) {}
 
-    /** Returns those that are there. */
-    public static List<Shown> shown() {
-        return ALL.stream().flatMap(example -> workflow(example.id(), Path.of(WorkflowFile.DEFAULT_NAME).toAbsolutePath()).stream()
-                .map(workflow -> new Shown(example.id(), workflow.name(), example.words()))).toList();
+    /** Returns them as they are offered. */
+    public static List<Example> all() {
+        return ALL;
     }
 
     private static Optional<Workflow> workflow(String id, Path file) {

@@ -372,6 +372,11 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         }
     }
 
+    /** Returns whether a desk is open; nothing is read for the answer. */
+    public synchronized boolean isOpen() {
+        return desk.isPresent();
+    }
+
     /** Returns the document as it stands. */
     public synchronized Workflow workflow() {
         return opened().timeline().current();

@@ -17,6 +17,7 @@ import java.util.TreeMap;
 import java.util.TreeSet;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 
@@ -25,6 +26,7 @@ class PageTest {
 
     private static final Path PAGE = page();
     private static final Pattern IMPORT = Pattern.compile("(?:from|import)\\s*\\(?\\s*'([^'\\s]+\\.js)'");
+    private static final Pattern STATIC_IMPORT = Pattern.compile("from '([^'\\s]+\\.js)'");
     private static final Pattern ADDRESS = Pattern.compile("(?:src|href)=\"([^\"]+)\"");
     private static final Pattern COLOUR = Pattern.compile("#[0-9a-fA-F]{3,8}\\b|\\brgba?\\(|\\bhsla?\\(");
 
@@ -76,6 +78,24 @@ class PageTest {
     }
 
     @Test
+    void modulesOfTheStartPageComeBeforeAllOthers() throws IOException {
+        Set<String> first = new TreeSet<>();
+        List<Path> read = new ArrayList<>(List.of(PAGE.resolve("js/app.js")));
+        for (int at = 0; at < read.size(); at++) {
+            Matcher imports = STATIC_IMPORT.matcher(Files.readString(read.get(at)));
+            while (imports.find()) {
+                Path target = read.get(at).getParent().resolve(imports.group(1)).normalize();
+                if (first.add("/" + PAGE.relativize(target).toString().replace('\\', '/'))) {
+                    read.add(target);
+                }
+            }
+        }
+        Set<String> asked = Pattern.compile("<link rel=\"modulepreload\" href=\"([^\"]+)\">").matcher(text("index.html")).results()
+                .map(link -> link.group(1)).collect(Collectors.toCollection(TreeSet::new));
+        assertEquals(first, asked, "all others are asked for with a low priority");
+    }
+
+    @Test
     void nothingComesFromAnotherMachine() throws IOException {
         for (Path file : files("")) {
             String text = Files.readString(file).replace("http://www.w3.org/2000/svg", "");
@@ -86,7 +106,7 @@ class PageTest {
     @Test
     void thePageHoldsNoScriptOrStyleOfItsOwnThatItsPolicyWouldRefuse() throws IOException {
         String index = text("index.html");
-        assertFalse(Pattern.compile("<script(?![^>]*\\bsrc=)").matcher(index).find(), "a script without a file");
+        assertFalse(Pattern.compile("<script(?![^>]*\\b(src=|type=\"application/json\"))").matcher(index).find(), "a script without a file that is not data");
         assertFalse(index.contains("<style") || index.contains("style=") || Pattern.compile("\\son[a-z]+=").matcher(index).find());
     }
 

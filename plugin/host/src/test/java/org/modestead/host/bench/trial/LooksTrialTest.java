@@ -102,7 +102,10 @@ class LooksTrialTest {
             trial.browser().see("[data-example=pump-house]");
             trial.browser().picture("start");
             trial.browser().await("the first paint", () -> paint(trial.browser()) > 0);
-            System.out.printf(Locale.ROOT, "trials: first paint of the start page after %.0f ms%n", paint(trial.browser()));
+            System.out.printf(Locale.ROOT, "trials: first paint of the start page after %.0f ms, of all that it offers after %.0f ms%n", paint(trial.browser()),
+                    filled(trial.browser()));
+            assertEquals("[]", trial.browser().js("return JSON.stringify(performance.getEntriesByType('resource').map(e => new URL(e.name).pathname)"
+                    + ".filter(path => ['/api/start', '/api/desk'].includes(path)))"), "what the start page offers comes with the page");
             trial.empty();
             trial.put("signal-generator", "[data-band=data]");
             assertTrue(trial.browser().requests().size() > 10, "the browser's log of requests is read");
@@ -112,6 +115,12 @@ class LooksTrialTest {
 
     private static double paint(Browser browser) {
         return ((Number) browser.js("return performance.getEntriesByName('first-contentful-paint')[0]?.startTime ?? 0")).doubleValue();
+    }
+
+    /** The largest paint so far: the start page has it when its lists are there. */
+    private static double filled(Browser browser) {
+        return ((Number) browser.later("const tell = arguments[0]; new PerformanceObserver(all => tell(all.getEntries().at(-1).startTime))"
+                + ".observe({type: 'largest-contentful-paint', buffered: true})")).doubleValue();
     }
 
     private static void ran(Trial trial) {

@@ -14,6 +14,7 @@ import {useEffect, useReducer} from '../lib.js';
  * @property {boolean} wide whether the look fills the page
  * @property {{tone: string, text: string, id: number}|null} notice a message that stays until it is closed or replaced
  * @property {string} said what a screen reader is told
+ * @property {object|null} start what the start page offers, as the server told it with the page; null when it is to be asked for
  * @property {object|null} guess a recording that was brought on the start page, as the server guesses it
  * @property {boolean} lost whether the server no longer answers
  */
@@ -31,6 +32,7 @@ let state = {
   wide: false,
   notice: null,
   said: '',
+  start: null,
   guess: null,
   lost: false,
 };

@@ -2,7 +2,7 @@
 import {html, useEffect, useState} from '../../lib.js';
 import {getState} from '../store.js';
 import {notify, openDialog} from '../actions.js';
-import {isTable} from './file-dialogs.js';
+import {isTable} from '../tables.js';
 
 /** @param {{take: (file: File) => any}} props what is done with a file when no workflow is open */
 export function DropZone({take}) {

@@ -6,9 +6,6 @@ import {Dialog, cancelButton} from './dialog.js';
 import {FileBox} from './file-box.js';
 import {bytes} from '../words.js';
 
-/** How files end that can be read as tables. */
-export const TABLES = ['csv', 'tsv', 'txt', 'parquet', 'json', 'ndjson'];
-
 export function OpenDialog() {
   const input = useRef(null);
   const open = async (path) => {
@@ -88,9 +85,4 @@ export function DroppedDialog({file}) {
       ${workflow && html`<button type="button" class="button" data-action="drop-open" onclick=${open}>Open it as a workflow</button>`}
     </div>
   <//>`;
-}
-
-/** @param {string} name @returns {boolean} whether such a file can be read as a table */
-export function isTable(name) {
-  return TABLES.some((end) => name.toLowerCase().endsWith('.' + end));
 }

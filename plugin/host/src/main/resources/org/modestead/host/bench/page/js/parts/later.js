@@ -1,8 +1,11 @@
 /** A component that is fetched when it is first wanted, so that the page is painted before. */
 import {html, useEffect, useState} from '../../lib.js';
 
-/** @param {{load: () => Promise<any>}} props how to get the component; all other properties are its own */
-export function Later({load, ...properties}) {
+/**
+ * @param {{load: () => Promise<any>, meanwhile?: any}} props how to get the component, and what stands in its place until it is there;
+ * all other properties are its own
+ */
+export function Later({load, meanwhile = null, ...properties}) {
   const [got, setGot] = useState({});
   useEffect(() => {
     let wanted = true;
@@ -14,5 +17,5 @@ export function Later({load, ...properties}) {
   if (got.fault) {
     return html`<p class="callout stop">This part of the page could not be loaded: ${got.fault.message}</p>`;
   }
-  return got.component ? html`<${got.component} ...${properties} />` : null;
+  return got.component ? html`<${got.component} ...${properties} />` : meanwhile;
 }

@@ -5,19 +5,23 @@ import {attempt, openDesk, openDialog, openFile, say, upload} from '../actions.j
 import {api} from '../api.js';
 import {bytes, counted} from '../words.js';
 import {DropZone} from './drop-zone.js';
-import {TABLES} from './file-dialogs.js';
+import {TABLES} from '../tables.js';
 import {Recording} from './recording.js';
 import {ViewMenu} from './view-menu.js';
 import {Path} from './path.js';
 
 export function Start() {
-  const {guess} = getState();
-  const [start, setStart] = useState(null);
+  const {guess, start: first} = getState();
+  const [start, setStart] = useState(first);
   const [busy, setBusy] = useState('');
   const input = useRef(null);
   const load = () => attempt(() => api.get('/api/start')).then((answer) => answer && setStart(answer));
   useEffect(() => {
-    load();
+    if (!first) {
+      load();
+    }
+    // once a desk was open there is more to go on with
+    setState({start: null});
   }, []);
   const take = async (file) => {
     if (!file) {
