@@ -55,13 +55,16 @@ public final class Fingerprint {
         MessageDigest digest = sha256();
         line(digest, "node", declaration.id() + " " + declaration.settingsVersion() + " " + step.node().getClass()
                 .getName());
-        new TreeMap<>(step.settings().values()).forEach((key, value) -> line(digest, "setting " + key,
-                value.getClass().getSimpleName() + " " + value));
+        Map<String, Object> settings = new TreeMap<>(step.settings().values());
         for (Setting setting : declaration.settings()) {
-            if (setting instanceof Setting.File file && file.reading() && !step.settings().text(setting.key()).isEmpty()) {
-                line(digest, "file " + setting.key(), marks.of(baseFolder.resolve(step.settings().text(setting.key()))));
+            if (setting instanceof Setting.File file && !step.settings().text(setting.key()).isEmpty()) {
+                // a file counts as what it is, however the workflow names it from its own folder
+                settings.remove(setting.key());
+                Path meant = baseFolder.resolve(step.settings().text(setting.key())).toAbsolutePath().normalize();
+                line(digest, "file " + setting.key(), file.reading() ? marks.of(meant) : meant.toString());
             }
         }
+        settings.forEach((key, value) -> line(digest, "setting " + key, value.getClass().getSimpleName() + " " + value));
         step.inputs().forEach((port, source) -> line(digest, "input " + port, inputs.get(source.step())
                 + "." + source.port()));
         return Optional.of(HexFormat.of().formatHex(digest.digest()));

@@ -91,6 +91,7 @@ final class StepRunner {
                         + " at output " + port.id());
             }
         }
+        store.made(result);
         return result;
     }
 

@@ -13,6 +13,13 @@ public interface StepStore {
     Path folder(PlannedStep step) throws IOException;
 
     /**
+     * Looks at a result that a step has just given, not at one that was known, before it counts as done.
+     *
+     * @throws org.modestead.engine.Fault if it is not what it says; the step fails with that
+     */
+    default void made(NodeResult result) {}
+
+    /**
      * Keeps a step's result.
      *
      * @throws IOException if it cannot be written

@@ -60,6 +60,11 @@ public final class DuckDbTable implements Table {
         return explainer;
     }
 
+    /** Returns the memory limit of DuckDB. */
+    int megabytes() {
+        return megabytes;
+    }
+
     @Override
     public RowCursor open() {
         Database database = null;

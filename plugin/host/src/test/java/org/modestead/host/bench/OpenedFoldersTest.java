@@ -126,6 +126,21 @@ class OpenedFoldersTest {
     }
 
     @Test
+    void whatWasFoundIsUpToDateAfterTheWorkflowIsSavedInAnotherFolder() throws IOException, InterruptedException {
+        bench.post("/api/edit", "{\"edits\": [{\"do\": \"add\", \"node\": \"table-sink\", \"id\": \"out\", \"settings\": {\"path\": \"out.csv\"}},"
+                + "{\"do\": \"link\", \"from\": \"a.table\", \"to\": \"out.table\"}]}");
+        bench.post("/api/run", "{}");
+        JsonNode ran = bench.awaitRest();
+        assertEquals(List.of("done", "done"), List.of(TestBench.kind(ran, "a"), TestBench.kind(ran, "out")), ran.toString());
+        Path there = Files.createDirectories(work.toRealPath().resolve("later")).resolve("workflow.json");
+        JsonNode desk = bench.post("/api/save", "{\"path\": \"" + there + "\"}").json();
+        assertEquals("../out.csv", TestBench.step(desk, "out").path("settings").path("path").asText(), desk.toString());
+        assertEquals(List.of("done", "done"), List.of(TestBench.kind(desk, "a"), TestBench.kind(desk, "out")), "the files are the same: " + desk);
+        JsonNode other = bench.post("/api/edit", "{\"edits\": [{\"do\": \"set\", \"step\": \"out\", \"typed\": {\"path\": \"out.csv\"}}]}").json();
+        assertEquals("stale", TestBench.kind(other, "out"), "the same name from another folder is another file: " + other);
+    }
+
+    @Test
     void onlyOpenedFoldersAreListedAndLinksOutAreNotShown() throws IOException, InterruptedException {
         JsonNode listed = bench.get("/api/files?folder=" + URLEncoder.encode(work.toString(), StandardCharsets.UTF_8)).json();
         assertEquals(List.of("inside.csv", "workflow.json"), listed.path("entries").findValuesAsText("name"));

@@ -11,6 +11,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.modestead.host.TestWorkflows;
@@ -58,10 +60,10 @@ class QuerySafetyTest {
                 if (!TestBench.kind(desk, "q").equals("unset")) {
                     // DuckDB looks at this file only when rows are asked for
                     bench.post("/api/run", "{}");
-                    bench.awaitRest();
-                    TestBench.Reply rows = bench.get("/api/steps/q/tables/table");
-                    assertEquals(409, rows.status(), sql);
-                    sentence = "step q, " + rows.sentence();
+                    JsonNode ran = bench.awaitRest();
+                    assertEquals("failed", TestBench.kind(ran, "q"), sql);
+                    sentence = TestBench.step(ran, "q").path("state").path("sentence").asText();
+                    assertEquals(409, bench.get("/api/steps/q/tables/table").status(), sql);
                 }
                 assertTrue(sentence.startsWith("step q, setting sql: "), sql + " gave " + sentence);
                 assertFalse(desk.path("problems").toString().contains("found_it"), desk.toString());
@@ -73,6 +75,25 @@ class QuerySafetyTest {
             bench.post("/api/run", "{}");
             bench.awaitRest();
             assertEquals("[[2,6],[1,4]]", bench.get("/api/steps/q/tables/table").json().path("rows").toString());
+        }
+    }
+
+    @Test
+    void aQueryThatFailsAtARowFailsAsItsOwnStepAndNotAsTheNextOne() throws IOException, InterruptedException {
+        Path work = Files.createDirectories(folder.resolve("work"));
+        Files.writeString(work.resolve("x.csv"), "time,x,word\n" + IntStream.range(0, 5000).mapToObj(row -> row + ",2," + (row == 4321 ? "three" : "3"))
+                .collect(Collectors.joining("\n", "", "\n")));
+        TestWorkflows.write(work, List.of("a:table-source:{\"path\": \"x.csv\", \"text-columns\": [\"word\"]}", "q:table-query", "s:snapshot-builder:{\"time-column\": \"time\"}"),
+                List.of("a.table>q.input", "q.table>s.table"));
+        try (TestBench bench = TestBench.start(TestWorkflows.allNodes(), folder.resolve("desk"), Optional.of(work))) {
+            assertEquals("waiting", TestBench.kind(sql(bench, "SELECT time, x, CAST(word AS DOUBLE) AS y FROM input"), "q"), "nothing is wrong with it by itself");
+            bench.post("/api/run", "{\"steps\": [\"q\"]}");
+            JsonNode ran = bench.awaitRest();
+            assertEquals(List.of("done", "failed", "waiting"), List.of(TestBench.kind(ran, "a"), TestBench.kind(ran, "q"), TestBench.kind(ran, "s")),
+                    ran.toString());
+            String sentence = TestBench.step(ran, "q").path("state").path("sentence").asText();
+            assertTrue(sentence.startsWith("step q, setting sql: ") && sentence.contains("three"), sentence);
+            assertEquals("1 step failed, 1 done.", ran.path("run").path("last").asText());
         }
     }
 

@@ -27,9 +27,8 @@ public record MovedFiles(NodeCatalog catalog, Path file) {
                 : there.with(workflow.steps().stream().map(step -> step.with(settings(step, workflow.baseFolder()))).toList(), workflow.links());
     }
 
-    /** Tells in a sentence what moving changes; empty when it changes no name. */
-    public String told(Workflow workflow) {
-        Workflow there = moved(workflow);
+    /** Tells in a sentence what moving changed; empty when it changed no name. */
+    public static String told(Workflow workflow, Workflow there) {
         long changed = workflow.steps().stream().filter(step -> !there.steps().contains(step)).count();
         return changed == 0 ? "" : "The folder is another one: file names in " + (changed == 1 ? "1 step" : changed + " steps")
                 + " were written anew, so that they mean the same files as before.";

@@ -17,9 +17,11 @@ import org.modestead.host.run.RunListener;
 import org.modestead.host.run.StepOutcome;
 import org.modestead.host.run.StepStore;
 import org.modestead.host.run.StepsRun;
+import org.modestead.host.table.AllRows;
 import org.modestead.host.workflow.PlannedStep;
 import org.modestead.host.workflow.RunPlan;
 import org.modestead.nodes.contract.NodeResult;
+import org.modestead.nodes.table.Table;
 
 /**
  * One run in the background. Stopped, it is over at once: work that does not ask whether to stop for a quarter of a second, such as the
@@ -237,6 +239,12 @@ public final class BenchRun {
         @Override
         public Path folder(PlannedStep step) throws java.io.IOException {
             return Files.createDirectories(Path.of(System.getProperty("java.io.tmpdir"), "modestead-bench-steps"));
+        }
+
+        /** Nothing is written here for which rows would be read: a query that fails at one must fail as its own step, not as the next one. */
+        @Override
+        public void made(NodeResult result) {
+            result.outputs().values().stream().filter(Table.class::isInstance).map(Table.class::cast).forEach(AllRows::demand);
         }
 
         @Override

@@ -186,12 +186,11 @@ public final class Workbench implements AutoCloseable, BenchRun.Watcher {
         if (!file.getFileName().toString().endsWith(".json")) {
             throw new DeskFault("file " + file, "its name does not end in .json", "save as workflow.json");
         }
-        MovedFiles way = new MovedFiles(catalog, file);
-        opened.save(way::moved);
+        opened.save(new MovedFiles(catalog, file)::moved);
         // the files of the steps are still there, and a person opened that folder
         folders = folders(document);
         changed();
-        return way.told(document);
+        return MovedFiles.told(document, opened.timeline().current());
     }
 
     /**
