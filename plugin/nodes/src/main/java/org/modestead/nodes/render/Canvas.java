@@ -1,14 +1,13 @@
 package org.modestead.nodes.render;
 
+import de.erichseifert.vectorgraphics2d.VectorGraphics2D;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
 import java.awt.image.BufferedImage;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
-import java.nio.charset.StandardCharsets;
 import javax.imageio.ImageIO;
-import org.knowm.xchart.ChartEncoder;
 import org.knowm.xchart.internal.chartpart.IChart;
 
 /** Makes files of what can be painted. */
@@ -18,13 +17,9 @@ final class Canvas {
 
     /** Returns one {@code svg} element. */
     static String svg(IChart painted, SvgText.Described described) {
-        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-        try {
-            ChartEncoder.saveChart(painted, bytes, "svg");
-        } catch (IOException e) {
-            throw new UncheckedIOException("a figure could not be drawn in memory", e);
-        }
-        return SvgText.tidy(bytes.toString(StandardCharsets.UTF_8), described);
+        VectorGraphics2D recorder = new VectorGraphics2D();
+        painted.paint(recorder, painted.getWidth(), painted.getHeight());
+        return SvgText.of(recorder.getCommands(), painted.getWidth(), painted.getHeight(), described);
     }
 
     /** Returns a file's bytes. */

@@ -10,7 +10,22 @@ final class Hundredths {
     /** Digits that a long holds with room for the two places. */
     private static final int MOST_DIGITS = 15;
 
+    /** What rounding of the product may move it by, many times over; nearer to a half than this the digits decide. */
+    private static final double NEAR = 1e-6;
+    /** Below this the product with a hundred is nearer to the exact one than {@link #NEAR}. */
+    private static final double LARGE = 1e7;
+
     private Hundredths() {}
+
+    /** Rounds a number as its shortest decimal digits would be; what is not finite is named as Java does. */
+    static String of(double number) {
+        double scaled = 100 * Math.abs(number);
+        if (Math.abs(number) < LARGE && Math.abs(scaled - Math.floor(scaled) - 0.5) > NEAR) {
+            long hundredths = Math.round(scaled);
+            return text(number < 0 && hundredths != 0 ? "-" : "", hundredths);
+        }
+        return Double.isFinite(number) ? of(Double.toString(number)) : Double.toString(number);
+    }
 
     /** @param number digits, a point and digits, perhaps signed, perhaps with an exponent */
     static String of(String number) {
@@ -34,7 +49,10 @@ final class Hundredths {
             value = 10 * value + (i < number.length() ? number.charAt(i) - '0' : 0);
         }
         value += up(number, point + PLACES + 1, value) ? 1 : 0;
-        String sign = negative && value != 0 ? "-" : "";
+        return text(negative && value != 0 ? "-" : "", value);
+    }
+
+    private static String text(String sign, long value) {
         long hundredths = value % 100;
         if (hundredths == 0) {
             return sign + value / 100;

@@ -1,34 +1,39 @@
 package org.modestead.nodes.render;
 
-import java.io.StringReader;
+import de.erichseifert.vectorgraphics2d.intermediate.CommandSequence;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.Command;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.CreateCommand;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.DisposeCommand;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.DrawShapeCommand;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.FillShapeCommand;
+import de.erichseifert.vectorgraphics2d.intermediate.commands.StateCommand;
+import java.awt.Shape;
+import java.awt.geom.AffineTransform;
+import java.awt.geom.Line2D;
+import java.util.ArrayDeque;
+import java.util.Deque;
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
-import java.util.TreeMap;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
-import javax.xml.stream.XMLInputFactory;
-import javax.xml.stream.XMLStreamConstants;
-import javax.xml.stream.XMLStreamException;
-import javax.xml.stream.XMLStreamReader;
 
 /**
- * Rewrites drawn SVG so that it can stand inside a page: no declarations, ids that start with the figure's id, a text
+ * Writes what was drawn as SVG that can stand inside a page: no declarations, ids that start with the figure's id, a text
  * alternative, coordinates to a hundredth of a pixel, and touching line segments of one style joined to one path (so
  * that dashes run through and the file is some ten times smaller).
  */
 final class SvgText {
-    private static final Pattern DOCTYPE = Pattern.compile("<!DOCTYPE[^>]*>");
-    private static final Pattern DECIMAL = Pattern.compile("-?\\d+\\.\\d+(?:[eE][-+]?\\d+)?");
-    private static final Pattern REFERENCE = Pattern.compile("url\\(#([^)]*)\\)");
 
     private final StringBuilder out = new StringBuilder();
-    private final Map<String, String> ids = new LinkedHashMap<>();
+    private final StringBuilder clips = new StringBuilder();
+    private final Map<Shape, String> ids = new LinkedHashMap<>();
+    private final Deque<SvgPen> pens = new ArrayDeque<>();
+    private final SvgLines lines = new SvgLines();
     private final Described figure;
-    private final Polyline open = new Polyline();
+    private boolean grouped;
+    private boolean moved;
 
     private SvgText(Described figure) {
         this.figure = figure;
+        pens.push(SvgPen.FIRST);
     }
 
     /**
@@ -40,152 +45,103 @@ final class SvgText {
      */
     record Described(String id, String title, String caption) {}
 
-    static String tidy(String svg, Described figure) {
+    /**
+     * @param drawn shapes and how they are drawn
+     * @param width pixels
+     * @param height pixels
+     * @return one {@code svg} element
+     * @throws IllegalStateException if something else than a shape in one colour was drawn
+     */
+    static String of(CommandSequence drawn, int width, int height, Described figure) {
         SvgText text = new SvgText(figure);
-        try {
-            text.rewrite(DOCTYPE.matcher(svg).replaceFirst(""));
-        } catch (XMLStreamException e) {
-            throw new IllegalStateException("the drawn figure " + figure.id() + " is not well-formed", e);
+        for (Command<?> command : drawn) {
+            text.take(command);
         }
-        return text.out.toString();
+        text.lines.writeTo(text.out);
+        return text.root(width, height) + (text.clips.isEmpty() ? "" : "\n<defs>" + text.clips + "</defs>") + text.out
+                + (text.grouped ? "</g>" : "") + "</svg>";
     }
 
-    private void rewrite(String svg) throws XMLStreamException {
-        XMLInputFactory factory = XMLInputFactory.newInstance();
-        factory.setProperty(XMLInputFactory.SUPPORT_DTD, false);
-        factory.setProperty(XMLInputFactory.IS_SUPPORTING_EXTERNAL_ENTITIES, false);
-        XMLStreamReader reader = factory.createXMLStreamReader(new StringReader(svg));
-        while (reader.hasNext()) {
-            int event = reader.next();
-            if (event == XMLStreamConstants.START_ELEMENT) {
-                start(reader.getLocalName(), attributes(reader));
-            } else if (event == XMLStreamConstants.END_ELEMENT) {
-                end(reader.getLocalName());
-            } else if (event == XMLStreamConstants.CHARACTERS && !reader.isWhiteSpace()) {
-                out.append(escape(reader.getText()));
-            }
+    private void take(Command<?> command) {
+        if (command instanceof DrawShapeCommand outline) {
+            shape(outline.getValue(), pens.element().line());
+        } else if (command instanceof FillShapeCommand area) {
+            shape(area.getValue(), pens.element().area());
+        } else if (command instanceof StateCommand<?> change) {
+            change(change);
+        } else {
+            throw new IllegalStateException("the figure " + figure.id() + " draws by " + command.getClass().getSimpleName()
+                    + ", which is not written as SVG; draw shapes");
         }
     }
 
-    private void start(String name, Map<String, String> attributes) {
-        if (name.equals("line")) {
-            if (!open.continues(attributes)) {
-                close();
-                open.begin(attributes);
+    private void change(StateCommand<?> change) {
+        SvgPen before = pens.element();
+        if (change instanceof CreateCommand) {
+            pens.push(before);
+        } else if (change instanceof DisposeCommand) {
+            pens.pop();
+            moved = true;
+        } else {
+            pens.pop();
+            pens.push(before.after(change));
+            moved |= SvgPen.moves(change);
+        }
+    }
+
+    private void shape(Shape shape, String style) {
+        if (moved) {
+            lines.writeTo(out);
+            group(pens.element());
+            moved = false;
+        }
+        if (shape instanceof Line2D line) {
+            if (!lines.continuedBy(line, style)) {
+                lines.writeTo(out);
             }
-            open.extend(attributes);
-            return;
+            lines.add(line, style);
+        } else {
+            lines.writeTo(out);
+            SvgShapes.write(out, shape, style);
         }
-        close();
-        if (name.equals("svg")) {
-            root(attributes);
-            return;
+    }
+
+    /** What follows is drawn at another place or within other bounds. */
+    private void group(SvgPen pen) {
+        out.append(grouped ? "</g>" : "").append("\n<g");
+        pen.clip().ifPresent(clip -> out.append(" clip-path=\"url(#").append(id(clip)).append(")\""));
+        if (!pen.place().isIdentity()) {
+            out.append(" transform=\"").append(transform(pen.place())).append('"');
         }
-        element(name, attributes);
         out.append('>');
+        grouped = true;
     }
 
-    private void end(String name) {
-        if (!name.equals("line")) {
-            close();
-            out.append("</").append(name).append(">");
+    private String id(Shape clip) {
+        return ids.computeIfAbsent(clip, unseen -> {
+            String id = figure.id() + "-clip-" + (ids.size() + 1);
+            clips.append("\n<clipPath id=\"").append(id).append("\">");
+            SvgShapes.write(clips, unseen, "");
+            clips.append("</clipPath>");
+            return id;
+        });
+    }
+
+    private static String transform(AffineTransform place) {
+        if (place.getType() == AffineTransform.TYPE_TRANSLATION) {
+            return "translate(" + Hundredths.of(place.getTranslateX()) + " " + Hundredths.of(place.getTranslateY()) + ")";
         }
+        return "matrix(" + place.getScaleX() + " " + place.getShearY() + " " + place.getShearX() + " " + place.getScaleY() + " "
+                + Hundredths.of(place.getTranslateX()) + " " + Hundredths.of(place.getTranslateY()) + ")";
     }
 
-    private void close() {
-        if (!open.isEmpty()) {
-            element("path", Map.of("d", open.path(), "style", open.style()));
-            out.append("/>");
-            open.clear();
-        }
-    }
-
-    private void root(Map<String, String> attributes) {
-        String[] box = attributes.get("viewBox").split(" ");
-        out.append("<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" viewBox=\"").append(attributes.get("viewBox"))
-                .append("\" width=\"").append(box[2]).append("\" height=\"").append(box[3]).append("\" aria-label=\"")
-                .append(escape(figure.title() + ". " + figure.caption())).append("\"><title>")
-                .append(escape(figure.title()))
-                .append("</title>");
-    }
-
-    private void element(String name, Map<String, String> attributes) {
-        out.append("\n<").append(name);
-        new TreeMap<>(attributes).forEach((key, value) -> out.append(' ').append(key).append("=\"")
-                .append(value(key, value)).append('"'));
-    }
-
-    private String value(String key, String value) {
-        return switch (key) {
-            case "id" -> id(value);
-            case "clip-path" -> REFERENCE.matcher(value).replaceAll(match -> "url(#" + id(match.group(1)) + ")");
-            case "style" -> escape(plainStyle(value));
-            default -> escape(rounded(value));
-        };
-    }
-
-    private String id(String drawn) {
-        return ids.computeIfAbsent(drawn, unseen -> figure.id() + "-clip-" + (ids.size() + 1));
-    }
-
-    private static String plainStyle(String style) {
-        return rounded(style.replace("stroke-miterlimit:10;", "").replace("stroke-dasharray:3,0;", "")
-                .replace("stroke:none;", ""));
-    }
-
-    private static String rounded(String text) {
-        Matcher matcher = DECIMAL.matcher(text);
-        return matcher.replaceAll(match -> Hundredths.of(match.group()));
-    }
-
-    private static Map<String, String> attributes(XMLStreamReader reader) {
-        Map<String, String> found = new LinkedHashMap<>();
-        for (int i = 0; i < reader.getAttributeCount(); i++) {
-            found.put(reader.getAttributeLocalName(i), reader.getAttributeValue(i));
-        }
-        return found;
+    private String root(int width, int height) {
+        return "<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" viewBox=\"0 0 " + width + " " + height + "\" width=\"" + width
+                + "\" height=\"" + height + "\" aria-label=\"" + escape(figure.title() + ". " + figure.caption()) + "\"><title>"
+                + escape(figure.title()) + "</title>";
     }
 
     private static String escape(String text) {
         return text.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;").replace("\"", "&quot;");
-    }
-
-    /** Line segments that touch, in drawing order. */
-    private static final class Polyline {
-        private final StringBuilder path = new StringBuilder();
-        private String style = "";
-        private List<String> end = List.of();
-
-        boolean continues(Map<String, String> line) {
-            return style.equals(line.get("style")) && end.equals(List.of(line.get("x1"), line.get("y1")));
-        }
-
-        void begin(Map<String, String> line) {
-            style = line.get("style");
-            path.append('M').append(line.get("x1")).append(',').append(line.get("y1"));
-        }
-
-        void extend(Map<String, String> line) {
-            path.append(" L").append(line.get("x2")).append(',').append(line.get("y2"));
-            end = List.of(line.get("x2"), line.get("y2"));
-        }
-
-        boolean isEmpty() {
-            return path.isEmpty();
-        }
-
-        String path() {
-            return path.toString();
-        }
-
-        String style() {
-            return style;
-        }
-
-        void clear() {
-            path.setLength(0);
-            style = "";
-            end = List.of();
-        }
     }
 }

@@ -26,4 +26,12 @@ class HundredthsTest {
         BigDecimal exact = new BigDecimal(number).setScale(2, RoundingMode.HALF_EVEN);
         assertEquals(exact.signum() == 0 ? "0" : exact.stripTrailingZeros().toPlainString(), Hundredths.of(number));
     }
+
+    /** Near halves too: one number in ten lies within a few last places of one. */
+    @Property(tries = 2000)
+    void aBinaryNumberIsRoundedAsItsShortestDigits(@ForAll @IntRange(min = -2_000_000_000, max = 2_000_000_000) int thousandths,
+            @ForAll @IntRange(min = -2, max = 2) int away) {
+        double number = thousandths / 1000.0 + away * Math.ulp(thousandths / 1000.0);
+        assertEquals(Hundredths.of(Double.toString(number)), Hundredths.of(number));
+    }
 }
