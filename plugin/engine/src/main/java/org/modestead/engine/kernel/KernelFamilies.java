@@ -8,12 +8,15 @@ import org.modestead.engine.FitFault;
 /** The kernel families at hand: those of every {@link KernelLibrary} that {@link ServiceLoader} finds. */
 public final class KernelFamilies {
 
+    /** Looked for once: it opens every jar, and the class loader that is asked stays the same. */
+    private static final List<KernelFamily> FOUND = ServiceLoader.load(KernelLibrary.class, KernelLibrary.class.getClassLoader()).stream()
+            .flatMap(provider -> provider.get().families().stream()).toList();
+
     private KernelFamilies() {}
 
     /** Returns all families in the order of the service files, the engine's own first; ids are unique. */
     public static List<KernelFamily> all() {
-        return ServiceLoader.load(KernelLibrary.class, KernelLibrary.class.getClassLoader()).stream()
-                .flatMap(provider -> provider.get().families().stream()).toList();
+        return FOUND;
     }
 
     /** Returns the family of an id. */

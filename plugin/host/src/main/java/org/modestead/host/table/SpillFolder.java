@@ -18,14 +18,15 @@ import org.modestead.nodes.files.GoneProcess;
  */
 public final class SpillFolder {
 
-    private static final Pattern NAME = Pattern.compile("modestead-spill-(\\d{1,18})-.*");
+    private static final String PREFIX = "modestead-spill-";
+    private static final Pattern NAME = Pattern.compile(PREFIX + "(\\d{1,18})-.*");
     /** A process of another container that shares the folder has numbers of its own; a database at work changes its folder now and then. */
     private static final Duration QUIET = Duration.ofHours(1);
 
     private SpillFolder() {}
 
     static Path make() throws IOException {
-        return Files.createTempDirectory("modestead-spill-" + ProcessHandle.current().pid() + "-");
+        return Files.createTempDirectory(PREFIX + ProcessHandle.current().pid() + "-");
     }
 
     /** Removes, as far as it may, what processes that are gone left behind an hour ago or earlier. */
@@ -43,7 +44,12 @@ public final class SpillFolder {
     }
 
     private static boolean isAbandoned(Path path, Instant late) {
-        Matcher name = NAME.matcher(path.getFileName().toString());
+        String file = path.getFileName().toString();
+        // other programs leave hundreds of thousands of files there
+        if (!file.startsWith(PREFIX)) {
+            return false;
+        }
+        Matcher name = NAME.matcher(file);
         return name.matches() && GoneProcess.left(path, Long.parseLong(name.group(1)), late);
     }
 }
