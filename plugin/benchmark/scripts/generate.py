@@ -21,7 +21,7 @@ def long_kernel(folder, size):
         step("kernel", "kernel-chooser", {"family": "gaussian", "scale-mode": "explicit", "scale": 4}),
         step("fit", "operator-fitter", {"estimator": "kernel-step", "landmarks": 200, "rank-rule": "fixed", "rank": 200}),
         step("spectrum", "spectrum-extractor", {"intervals": "none"}),
-        step("check", "wellposedness-checker", {"ladder-from": 199, "ladder-to": 200})], kernel=True, check=True)
+        step("check", "wellposedness-checker", {"extent": "residuals"})], kernel=True, check=True)
 
 
 def generator(folder, size):

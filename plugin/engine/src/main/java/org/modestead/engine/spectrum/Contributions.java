@@ -26,16 +26,25 @@ public final class Contributions {
      */
     public static DMatrixRMaj of(ZMatrixRMaj eigenfunctions, ZMatrixRMaj joint, List<Integer> group, int first, int channels) {
         DMatrixRMaj out = new DMatrixRMaj(eigenfunctions.numRows, channels);
-        for (int i = 0; i < out.numRows; i++) {
-            for (int j : group) {
-                double re = eigenfunctions.getReal(i, j);
-                double im = eigenfunctions.getImag(i, j);
-                for (int k = 0; k < channels; k++) {
-                    out.data[i * channels + k] += re * joint.getReal(j, first + k) - im * joint.getImag(j, first + k);
-                }
+        for (int j : group) {
+            double[] re = new double[channels];
+            double[] im = new double[channels];
+            for (int k = 0; k < channels; k++) {
+                re[k] = joint.getReal(j, first + k);
+                im[k] = joint.getImag(j, first + k);
+            }
+            for (int i = 0; i < out.numRows; i++) {
+                add(eigenfunctions.getReal(i, j), re, eigenfunctions.getImag(i, j), im, out.data, i * channels);
             }
         }
         return out;
+    }
+
+    /** Adds {@code Re (a + ib)(re + i im)} to what begins at a place. */
+    private static void add(double a, double[] re, double b, double[] im, double[] out, int from) {
+        for (int k = 0; k < re.length; k++) {
+            out[from + k] += a * re[k] - b * im[k];
+        }
     }
 
     /**

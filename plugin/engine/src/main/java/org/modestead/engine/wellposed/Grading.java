@@ -37,8 +37,7 @@ final class Grading {
 
     static ModeVerdict grade(Mode mode, Evidence evidence, List<Finding> findings) {
         if (mode.constant()) {
-            return new ModeVerdict(mode.number(), Grade.STANDS, List.of(), false,
-                    "This is the constant function, which every motion leaves alone: true, but no evidence of a mode.");
+            return constant(mode);
         }
         boolean counts = evidence.carries(mode);
         for (Grade grade : List.of(Grade.ABSENT, Grade.DRIFTS, Grade.UNDECIDED, Grade.SETTLES)) {
@@ -49,6 +48,11 @@ final class Grading {
         }
         List<Finding> deciding = findings.stream().filter(f -> f.mode() == mode.number() && !Double.isNaN(f.threshold())).toList();
         return verdict(mode, Grade.STANDS, deciding, counts);
+    }
+
+    static ModeVerdict constant(Mode mode) {
+        return new ModeVerdict(mode.number(), Grade.STANDS, List.of(), false,
+                "This is the constant function, which every motion leaves alone: true, but no evidence of a mode.");
     }
 
     private static List<Finding> against(Grade grade, Mode judged, Evidence evidence, List<Finding> findings) {

@@ -27,7 +27,7 @@ public final class HoldoutResidual implements Check {
         return findings;
     }
 
-    private static String sentence(String where, double value) {
+    static String sentence(String where, double value) {
         return Double.isNaN(value)
                 ? String.format(Locale.ROOT, "On %s it is weaker than %.0f %% of its size on the training runs, so they"
                         + " cannot judge it: hold out a run that excites it.", where, 100 * Rung.EXCITED)

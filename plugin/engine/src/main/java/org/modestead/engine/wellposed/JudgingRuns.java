@@ -6,6 +6,7 @@ import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.data.ZMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
+import org.modestead.engine.Doubt;
 import org.modestead.engine.Progress;
 import org.modestead.engine.linalg.ComplexMatrices;
 import org.modestead.engine.linalg.Matrices;
@@ -29,6 +30,9 @@ import org.modestead.engine.spectrum.ModalExpansion;
  */
 record JudgingRuns(boolean heldOut, List<StateRun> runs, List<DMatrixRMaj> functions, List<DMatrixRMaj> disturbed,
         List<DMatrixRMaj> sideways, double longest) {
+
+    /** Told where the training runs have to judge. */
+    static final Doubt NOTHING_HELD_OUT = new Doubt("nothing-held-out", "No run was held out: residuals were measured on the data the fit saw.");
 
     private static final int MOST_COPIES = 8;
     private static final int ENOUGH_STATES = 4000;

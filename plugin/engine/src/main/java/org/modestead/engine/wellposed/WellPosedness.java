@@ -36,6 +36,20 @@ public final class WellPosedness {
         return new Verdict(Grading.overall(verdicts), verdicts, findings, ladder.rows(), doubts(judging, findings));
     }
 
+    /**
+     * Measures only how far the modes miss their own rule of motion on the runs held out, at the fitted rank and noise included; a small part of the time of
+     * {@link #judge}, and it decides nothing.
+     *
+     * @param snapshots those of the operator
+     * @param operator fitted
+     * @param spectrum extracted from it
+     * @param settings thresholds of residual and share
+     * @return one finding {@code holdout-residual} a mode, an empty ladder, and every mode but the constant function undecided
+     */
+    public static Verdict residuals(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, JudgeSettings settings) {
+        return QuickLook.of(operator.on(snapshots), spectrum, settings);
+    }
+
     private static List<Finding> examine(Evidence evidence, Progress progress) {
         List<Finding> findings = new ArrayList<>();
         List<Check> checks = checks();
@@ -54,7 +68,7 @@ public final class WellPosedness {
     private static List<Doubt> doubts(JudgingRuns judging, List<Finding> findings) {
         List<Doubt> doubts = new ArrayList<>();
         if (!judging.heldOut()) {
-            doubts.add(new Doubt("nothing-held-out", "No run was held out: residuals were measured on the data the fit saw."));
+            doubts.add(JudgingRuns.NOTHING_HELD_OUT);
         }
         findings.stream().filter(finding -> finding.mode() == 0 && !finding.passed())
                 .forEach(finding -> doubts.add(new Doubt(finding.check(), finding.sentence())));

@@ -9,9 +9,11 @@ import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 
-/** Settings of the Well-posedness Checker: the ends of the ladder, every threshold and the replays, with the engine's defaults. */
+/** Settings of the Well-posedness Checker: its extent, the ends of the ladder, every threshold and the replays, with the engine's defaults. */
 final class JudgeNodeSettings {
 
+    private static final String EXTENT = "extent";
+    private static final String RESIDUALS = "residuals";
     private static final String LADDER_FROM = "ladder-from";
     private static final String LADDER_TO = "ladder-to";
     private static final String SHARE = "share-threshold";
@@ -37,6 +39,10 @@ final class JudgeNodeSettings {
     /** Returns the settings in dialog order. */
     static List<Setting> declared() {
         return List.of(
+                new Setting.Choice(new Common(EXTENT, "Extent", "Extent", "How much is looked into."), List.of(
+                        new Setting.Option("verdict", "Whole verdict", "All checks, over the whole ladder."),
+                        new Setting.Option(RESIDUALS, "Residuals only", "Only how far each mode misses its own law on data the fit never saw, at the"
+                                + " fitted rank and noise included. A quick look: every mode stays undecided, and the ladder is empty.")), "verdict"),
                 rank(LADDER_FROM, "Lowest rank", "Rank of the lowest rung; 0 takes 2.",
                         DEFAULT.ladderFrom()),
                 rank(LADDER_TO, "Highest rank", "Rank of the highest rung; 0 takes three times the fitted rank,"
@@ -89,6 +95,11 @@ final class JudgeNodeSettings {
         int to = settings.whole(LADDER_TO);
         return from > 0 && to > 0 && from >= to ? List.of(new SettingProblem(LADDER_TO, "the highest rank " + to
                 + " is not above the lowest rank " + from, "give a highest rank above the lowest one, or 0")) : List.of();
+    }
+
+    /** Returns whether residuals are all that is asked for. */
+    static boolean residualsOnly(Settings settings) {
+        return settings.text(EXTENT).equals(RESIDUALS);
     }
 
     /** Returns what the engine is to judge by. */

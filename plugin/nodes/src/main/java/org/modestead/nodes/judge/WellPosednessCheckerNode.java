@@ -7,6 +7,7 @@ import java.util.Optional;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Spectrum;
+import org.modestead.engine.wellposed.JudgeSettings;
 import org.modestead.engine.wellposed.ModeVerdict;
 import org.modestead.engine.wellposed.Verdict;
 import org.modestead.engine.wellposed.WellPosedness;
@@ -82,15 +83,19 @@ public final class WellPosednessCheckerNode implements Node {
     @Override
     public NodeResult run(NodeInputs inputs, Settings settings, RunContext context) {
         Spectrum spectrum = inputs.get("spectrum", Spectrum.class);
-        Verdict verdict = WellPosedness.judge(inputs.get("snapshots", Snapshots.class), inputs.get("operator",
-                FittedOperator.class),
-                spectrum, JudgeNodeSettings.read(settings), context.progress());
+        Verdict verdict = verdict(inputs.get("snapshots", Snapshots.class), inputs.get("operator", FittedOperator.class), spectrum, settings, context);
         List<Figure> figures = new ArrayList<>();
         figures.add(EigenvaluePlane.figure(spectrum, Optional.of(verdict)));
         figures.addAll(LadderFigures.figures(spectrum, verdict));
         Map<String, Object> outputs = Map.of("verdict", verdict, "findings", FindingTable.of(verdict), "ladder",
                 LadderTable.of(verdict), "modes", ModeTable.of(spectrum, Optional.of(verdict)));
         return new NodeResult(outputs, figures, summary(verdict), verdict.doubts());
+    }
+
+    private static Verdict verdict(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, Settings settings, RunContext context) {
+        JudgeSettings thresholds = JudgeNodeSettings.read(settings);
+        return JudgeNodeSettings.residualsOnly(settings) ? WellPosedness.residuals(snapshots, operator, spectrum, thresholds)
+                : WellPosedness.judge(snapshots, operator, spectrum, thresholds, context.progress());
     }
 
     private static List<String> summary(Verdict verdict) {

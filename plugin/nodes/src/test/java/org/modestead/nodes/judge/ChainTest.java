@@ -89,6 +89,17 @@ class ChainTest {
     }
 
     @Test
+    void residualsAloneAreToldOfEveryModeAndDecideNothing() {
+        Chain chain = ringing();
+        NodeResult residuals = Steps.run("wellposedness-checker", Map.of("snapshots", chain.snapshots().outputs().get("snapshots"), "operator",
+                chain.operator().outputs().get("operator"), "spectrum", chain.spectrum().outputs().get("spectrum")), Map.of("extent", "residuals"));
+        assertEquals(List.of("verdict", "verdict", "holdout-residual"), Steps.column(residuals, "findings", "check"));
+        assertEquals(0, Steps.number(residuals, "findings", "value", 2), CLEAN);
+        assertEquals(List.of(), Steps.column(residuals, "ladder", "rank"));
+        assertEquals(List.of("undecided"), Steps.column(residuals, "modes", "verdict"));
+    }
+
+    @Test
     void picturesCanBeSelectedByMode() {
         Chain chain = ringing();
         Figure plane = chain.spectrum().figures().get(0);

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import java.util.List;
 import java.util.Map;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.modestead.engine.wellposed.JudgeSettings;
 import org.modestead.nodes.contract.Settings;
@@ -32,6 +33,12 @@ class CheckerSettingsTest {
                 Map.entry("step-threshold", 0.18), Map.entry("completeness-threshold", 0.19), Map.entry("replays", 3)));
         assertEquals(new JudgeSettings(3, 9, 0.11, 0.12, 0.13, 1.4, 0.15, 0.16, 0.17, 0.18, 0.19, 3),
                 JudgeNodeSettings.read(settings));
+    }
+
+    @Test
+    void residualsAloneAreLookedIntoWhereAskedFor() {
+        assertEquals(List.of(false, false, true), Stream.of(Map.<String, Object>of(), Map.<String, Object>of("extent", "verdict"),
+                Map.<String, Object>of("extent", "residuals")).map(raw -> JudgeNodeSettings.residualsOnly(read(raw))).toList());
     }
 
     @Test
