@@ -131,8 +131,8 @@ public final class StabilisationNode implements Node {
         List<PoleLine> lines = found.lines().stream().filter(line -> line.poles().size() >= least).toList();
         long stable = found.poles().stream().filter(Pole::stable).count();
         List<String> sentences = new ArrayList<>();
-        sentences.add("Of " + Sentence.count(found.poles().size(), "pole") + " at orders " + found.orders().get(0) + " to "
-                + found.orders().get(found.orders().size() - 1) + " " + stable + " kept frequency, damping and shape from the order before.");
+        sentences.add(stable + " of " + Sentence.count(found.poles().size(), "pole") + " at orders " + found.orders().get(0) + " to "
+                + found.orders().get(found.orders().size() - 1) + " kept frequency, damping and shape from the order before.");
         List<PoleLine> oscillating = lines.stream().filter(line -> line.last().dampingRatio().isPresent()).toList();
         sentences.add(oscillating.isEmpty() ? "No oscillation is found again at " + least + " orders or more."
                 : "Oscillations found at " + least + " orders or more: " + oscillating.stream().map(line -> told(line, unit))

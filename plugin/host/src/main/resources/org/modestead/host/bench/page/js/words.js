@@ -46,6 +46,11 @@ export function prose(sentence) {
   return sentence.replace(PROGRAM, (whole, sign, mantissa, exponent) => (sign ? MINUS : '') + power(mantissa, Number(exponent)));
 }
 
+/** Words in which a number is not parted from its unit at the end of a line. @param {string} text */
+export function unparted(text) {
+  return text.replace(/(\d) (?=%|s\b|min\b|h\b)/g, '$1\u00a0');
+}
+
 /** A whole number with narrow blanks between thousands: 12 345. @param {number} value */
 export function count(value) {
   return String(value).replace(/\B(?=(\d{3})+(?!\d))/g, '\u202f');

@@ -35,7 +35,7 @@ export function optionOf(figure, theme, selection, view) {
     useUTC: true,
     backgroundColor: 'transparent',
     textStyle: {fontFamily: theme.font, fontSize: theme.small, color: theme.quiet},
-    grid: {left: drawing.left(), right: figure.right ? 6 : 14, top: 10, bottom: 6, containLabel: true, show: true, borderColor: theme.edge, borderWidth: 1},
+    grid: {left: drawing.left(), right: figure.right ? 6 : 14, top: drawing.top(), bottom: 6, containLabel: true, show: true, borderColor: theme.edge, borderWidth: 1},
     xAxis: drawing.across(),
     yAxis: figure.right ? [drawing.upwards(), drawing.onTheRight()] : [drawing.upwards()],
     series: drawing.series(),
@@ -72,6 +72,11 @@ class Drawing {
     const band = (this.view.width - 60) / categories.length;
     const reach = categories.slice(0, 3).map((name, i) => Math.min(name.length, LONGEST) * this.theme.small * LETTER * 0.77 - band * (i + 0.5) - 30);
     return Math.max(6, ...reach);
+  }
+
+  /** Names of upright lines stand above the plot, where they cover no mark. */
+  top() {
+    return this.figure.layers.some((layer) => layer.type === 'rule' && layer.vertical && layer.name) ? this.theme.small + 8 : 10;
   }
 
   across() {
@@ -287,11 +292,11 @@ class Drawing {
     };
   }
 
-  /** Straight lines across the whole plot, each with its name inside, on the side that has room. */
+  /** Straight lines across the whole plot, each with its name: above it, or inside at the right end. */
   rules(layers) {
     const {theme} = this;
     return {
-      type: 'custom', z: 6, silent: true, clip: true, data: layers.map((_, i) => [i]), encode: {x: -1, y: -1},
+      type: 'custom', z: 6, silent: true, clip: false, data: layers.map((_, i) => [i]), encode: {x: -1, y: -1},
       renderItem: (params, api) => {
         const rule = layers[api.value(0)];
         const {x, y, width, height} = params.coordSys;
@@ -300,8 +305,8 @@ class Drawing {
           return null;
         }
         const shape = rule.vertical ? {x1: across, x2: across, y1: y, y2: y + height} : {x1: x, x2: x + width, y1: upwards, y2: upwards};
-        const left = rule.vertical && across - x < 0.6 * width;
-        const text = rule.vertical ? {x: across + (left ? 5 : -5), y: y + 4, align: left ? 'left' : 'right', verticalAlign: 'top'}
+        const align = across - x < 0.25 * width ? 'left' : across - x > 0.75 * width ? 'right' : 'center';
+        const text = rule.vertical ? {x: across, y: y - 4, align, verticalAlign: 'bottom'}
           : {x: x + width - 5, y: upwards - 3, align: 'right', verticalAlign: 'bottom'};
         const children = [{type: 'line', silent: true, shape, style: {stroke: theme.quiet, lineWidth: 1.2, lineDash: [5, 4]}}];
         if (rule.name) {

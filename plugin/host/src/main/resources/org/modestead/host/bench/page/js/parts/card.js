@@ -6,7 +6,7 @@ import {nodeOf, portWords, endWords, hasTwin, stepName, stepWith} from '../catal
 import {stepOf} from '../layout.js';
 import {grab} from '../drag.js';
 import {Glyph} from '../glyphs.js';
-import {counted} from '../words.js';
+import {counted, unparted} from '../words.js';
 
 const MANY = 4;
 
@@ -68,7 +68,7 @@ export function Card({step, column, first}) {
       </button>
       ${step.named ? html`<span class="card-kind">${node.title}</span>`
         : hasTwin(desk, step) && html`<span class="card-kind">${step.id}</span>`}
-      <p class="card-state"><${Glyph} name=${kind} /><span>${step.state.words}</span></p>
+      <p class="card-state"><${Glyph} name=${kind} /><span>${unparted(step.state.words)}</span></p>
       ${step.note && html`<p class="card-note">${step.note}</p>`}
     </div>
     ${kind === 'running' && html`<${Progress} state=${step.state} />`}
