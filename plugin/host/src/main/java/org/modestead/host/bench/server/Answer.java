@@ -9,6 +9,7 @@ import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import io.javalin.http.Context;
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -20,19 +21,44 @@ import org.modestead.host.workflow.JsonWords;
 /** JSON in requests and answers. */
 final class Answer {
 
+    /** Of a body that nobody asked for; a longer one ends its connection. */
+    private static final long MOST_UNREAD = 8L << 20;
+
     private static final ObjectMapper MAPPER = JsonMapper.builder().enable(StreamReadFeature.STRICT_DUPLICATE_DETECTION).build();
 
     private Answer() {}
 
-    /** Returns the body of a request. */
+    /**
+     * Returns the body of a request.
+     *
+     * @throws RequestFault if it broke off or is no JSON
+     */
     static JsonNode body(Context context) {
         try {
             byte[] bytes = context.bodyAsBytes();
             return bytes.length == 0 ? JsonNodeFactory.instance.objectNode() : MAPPER.readTree(bytes);
         } catch (JsonProcessingException broken) {
             throw new RequestFault(400, "request", "its body is no JSON (" + JsonWords.of(broken) + ")", "send JSON");
-        } catch (IOException impossible) {
-            throw new IllegalStateException("bytes in memory could not be read", impossible);
+        } catch (IOException gone) {
+            // bodyAsBytes throws it undeclared
+            throw new RequestFault(400, "request", "its body broke off (" + gone.getMessage() + ")", "send it again");
+        }
+    }
+
+    /**
+     * Reads what nobody has read of a request's body. A connection whose body is not at its end is closed behind the answer, and the page's
+     * next request, which may be on its way already, would get none.
+     */
+    static void readToTheEnd(Context context) {
+        try {
+            InputStream body = context.bodyInputStream();
+            long left = MOST_UNREAD;
+            for (long skipped = body.skip(left); skipped > 0; skipped = body.skip(left)) {
+                left -= skipped;
+            }
+        } catch (IOException gone) {
+            // who has left gets no answer, and asks for nothing more
+            context.header("Connection", "close");
         }
     }
 

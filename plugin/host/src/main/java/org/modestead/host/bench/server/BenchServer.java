@@ -90,6 +90,7 @@ public final class BenchServer implements AutoCloseable {
             throw new RequestFault(404, "request", "there is no " + context.path(), "open the page anew");
         });
         routes.get("/<path>", files::serve);
+        routes.after(Answer::readToTheEnd);
         routes.exception(RequestFault.class, (fault, context) -> Answer.refuse(context, fault.status(), fault));
         routes.exception(EditFault.class, (fault, context) -> Answer.refuse(context, 422, fault));
         routes.exception(FolderFault.class, (fault, context) -> Answer.refuse(context, 403, fault));
