@@ -65,11 +65,10 @@ public record SamplingSpread(SpreadPlan plan, List<ModeSpread> modes, String dra
                     "No intervals: this fit offers nothing that could be resampled, or none of the resampled fits succeeded.")));
         }
         Followed followed = Followed.of(operator, spectrum, modes, replicates.frame(), replicates.stretch());
-        List<List<Optional<Followed.Found>>> found = new ArrayList<>();
-        for (Refit refit : replicates.refits()) {
+        List<List<Optional<Followed.Found>>> found = replicates.refits().parallelStream().map(refit -> {
             progress.checkCancelled();
-            found.add(followed.in(refit));
-        }
+            return followed.in(refit);
+        }).toList();
         List<ModeSpread> out = new ArrayList<>();
         for (int m = 0; m < modes.size(); m++) {
             int at = m;

@@ -1,7 +1,9 @@
 package org.modestead.engine.spectrum;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import java.util.Arrays;
 import java.util.Random;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
@@ -24,6 +26,25 @@ class MatchingPropertiesTest {
             total += cost[i][matched[i]];
         }
         assertEquals(best(cost, 0, new boolean[n]), total, 1e-12);
+    }
+
+    /** A table is also searched when it is made ambiguous: two rows more that are equally near to a column more, and to nothing else. */
+    @Property(tries = 200)
+    void whatIsSeenAtOnceIsWhatASearchFinds(@ForAll long seed, @ForAll @IntRange(min = 1, max = 6) int rows,
+            @ForAll @IntRange(min = 1, max = 6) int columns, @ForAll @IntRange(min = 1, max = 4) int scale) {
+        Random random = new Random(seed);
+        double[][] cost = new double[rows][columns];
+        double[][] ambiguous = new double[rows + 2][columns + 1];
+        for (int i = 0; i < rows + 2; i++) {
+            for (int j = 0; j < columns + 1; j++) {
+                boolean inner = i < rows && j < columns;
+                ambiguous[i][j] = inner ? scale * random.nextDouble() : i >= rows && j == columns ? 0.5 : 9;
+                if (inner) {
+                    cost[i][j] = ambiguous[i][j];
+                }
+            }
+        }
+        assertArrayEquals(Matching.of(cost, 1), Arrays.copyOf(Matching.of(ambiguous, 1), rows));
     }
 
     private static double best(double[][] cost, int row, boolean[] taken) {
