@@ -30,6 +30,17 @@ public final class ComplexMatrices {
         return out;
     }
 
+    /** Returns A* B (conjugate transpose of A) for a real B, which is never held as a complex matrix. */
+    public static ZMatrixRMaj conjugateTransposeProduct(ZMatrixRMaj a, DMatrixRMaj b) {
+        DMatrixRMaj real = new DMatrixRMaj(a.numRows, a.numCols);
+        DMatrixRMaj opposite = new DMatrixRMaj(a.numRows, a.numCols);
+        for (int i = 0; i < real.getNumElements(); i++) {
+            real.data[i] = a.data[2 * i];
+            opposite.data[i] = 0 - a.data[2 * i + 1];
+        }
+        return joined(Matrices.transposeProduct(real, b), Matrices.transposeProduct(opposite, b));
+    }
+
     /** Returns A* B (conjugate transpose of A). */
     public static ZMatrixRMaj conjugateTransposeProduct(ZMatrixRMaj a, ZMatrixRMaj b) {
         ZMatrixRMaj out = new ZMatrixRMaj(a.numCols, b.numCols);

@@ -52,9 +52,8 @@ public final class ComplexSystem {
     public ZMatrixRMaj solve(DMatrixRMaj b) {
         int m = matrix.numRows;
         int r = matrix.numCols;
-        DMatrixRMaj stacked = new DMatrixRMaj(2 * m, b.numCols);
-        System.arraycopy(b.data, 0, stacked.data, 0, b.getNumElements());
-        DMatrixRMaj coefficients = Matrices.transposeProduct(svd.u(), stacked);
+        // below the real B stand zeros only
+        DMatrixRMaj coefficients = Matrices.transposeProduct(Matrices.block(svd.u(), 0, m, 0, svd.u().numCols), b);
         double floor = Math.ulp(1.0) * 2 * Math.max(m, r) * svd.values()[0];
         for (int i = 0; i < coefficients.numRows; i++) {
             double factor = svd.values()[i] > floor ? 1 / svd.values()[i] : 0;

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.RecordingFault;
@@ -93,14 +94,13 @@ public final class RecordingChecks {
     private void numbers(Run run, DMatrixRMaj values, List<Channel> columns, String kind) {
         int n = columns.size();
         boolean[] hasNumber = new boolean[n];
-        for (int i = 0, at = 0; i < run.samples(); i++) {
-            for (int c = 0; c < n; c++, at++) {
-                double value = values.data[at];
-                if (Double.isInfinite(value)) {
-                    throw new RecordingFault(wording.sample(run, i) + ", " + kind + " " + columns.get(c).name(),
-                            "the value is " + value, "replace it by a finite number or leave the cell empty");
-                }
-                hasNumber[c] |= !Double.isNaN(value);
+        boolean whole = false;
+        for (int i = 0; i < run.samples(); i++) {
+            if (!finite(values.data, i * n, n)) {
+                cells(run, i, values, columns, kind, hasNumber);
+            } else if (!whole) {
+                Arrays.fill(hasNumber, true);
+                whole = true;
             }
         }
         for (int c = 0; c < n; c++) {
@@ -112,43 +112,61 @@ public final class RecordingChecks {
         }
     }
 
-    private List<Doubt> constants() {
-        int n = recording.channels().size();
-        double[] low = new double[n];
-        double[] high = new double[n];
-        range(low, high);
-        List<Doubt> doubts = new ArrayList<>();
-        for (int c = 0; c < n; c++) {
-            if (low[c] == high[c]) {
-                doubts.add(new Doubt("constant-channel", "Channel " + recording.channels().get(c).name() + " is "
-                        + Wording.number(low[c]) + " in every sample; it tells nothing about the motion."));
-            }
+    /** Zero times a number is zero, times anything else no number. */
+    private static boolean finite(double[] data, int from, int length) {
+        double sum = 0;
+        for (int k = from; k < from + length; k++) {
+            sum += 0 * data[k];
         }
-        if (doubts.size() == n) {
-            throw new RecordingFault("recording", n == 1 ? "channel " + recording.channels().get(0).name() + " is "
-                    + Wording.number(low[0]) + " in every sample" : "all " + n + " channels are constant",
-                    "name at least one channel that moves");
-        }
-        return doubts;
+        return sum == 0;
     }
 
-    private void range(double[] low, double[] high) {
-        int n = low.length;
-        Arrays.fill(low, Double.POSITIVE_INFINITY);
-        Arrays.fill(high, Double.NEGATIVE_INFINITY);
+    private void cells(Run run, int row, DMatrixRMaj values, List<Channel> columns, String kind, boolean[] hasNumber) {
+        for (int c = 0; c < hasNumber.length; c++) {
+            double value = values.data[row * hasNumber.length + c];
+            if (Double.isInfinite(value)) {
+                throw new RecordingFault(wording.sample(run, row) + ", " + kind + " " + columns.get(c).name(),
+                        "the value is " + value, "replace it by a finite number or leave the cell empty");
+            }
+            hasNumber[c] |= !Double.isNaN(value);
+        }
+    }
+
+    private List<Doubt> constants() {
+        int n = recording.channels().size();
+        double[] seen = new double[n];
+        Arrays.fill(seen, Double.NaN);
+        int[] unmoved = unmoved(seen);
+        if (unmoved.length == n) {
+            throw new RecordingFault("recording", n == 1 ? "channel " + recording.channels().get(0).name() + " is "
+                    + Wording.number(seen[0]) + " in every sample" : "all " + n + " channels are constant",
+                    "name at least one channel that moves");
+        }
+        return Arrays.stream(unmoved).mapToObj(c -> new Doubt("constant-channel", "Channel " + recording.channels().get(c).name() + " is "
+                + Wording.number(seen[c]) + " in every sample; it tells nothing about the motion.")).toList();
+    }
+
+    /** Channels without two different numbers; moving ones drop out at the first difference and are not looked at further. */
+    private int[] unmoved(double[] seen) {
+        int[] left = IntStream.range(0, seen.length).toArray();
+        int count = left.length;
         for (Run run : recording.runs()) {
-            double[] data = run.values().data;
-            for (int at = 0, end = run.samples() * n; at < end; at += n) {
-                for (int c = 0; c < n; c++) {
-                    double value = data[at + c];
-                    if (value < low[c]) {
-                        low[c] = value;
-                    }
-                    if (value > high[c]) {
-                        high[c] = value;
-                    }
-                }
+            for (int i = 0; i < run.samples() && count > 0; i++) {
+                count = alike(left, count, run.values().data, i * seen.length, seen);
             }
         }
+        return Arrays.copyOf(left, count);
+    }
+
+    private static int alike(int[] left, int count, double[] data, int from, double[] seen) {
+        int kept = 0;
+        for (int k = 0; k < count; k++) {
+            int c = left[k];
+            seen[c] = Double.isNaN(seen[c]) ? data[from + c] : seen[c];
+            if (data[from + c] == seen[c] || Double.isNaN(data[from + c])) {
+                left[kept++] = c;
+            }
+        }
+        return kept;
     }
 }

@@ -52,7 +52,7 @@ public record ModalExpansion(
         }
         ComplexSystem system = ComplexSystem.of(eigen.vectors());
         return new ModalExpansion(compression, eigen.values(), rates, eigen.vectors(), system.solve(compression.observable()),
-                ComplexMatrices.conjugateTransposeProduct(eigen.vectors(), ComplexMatrices.of(compression.observable())),
+                ComplexMatrices.conjugateTransposeProduct(eigen.vectors(), compression.observable()),
                 system.condition());
     }
 

@@ -109,6 +109,20 @@ class RecordingChecksTest {
     }
 
     @Test
+    void aChannelThatStartsWithMissingCellsIsConstantAllTheSame() {
+        List<Doubt> doubts = RecordingChecks.check(
+                Recordings.of(run("A", new double[] {0, 1, 2, 3}, 1, Double.NaN, 2, 4.5, 2, 4.5, 2, Double.NaN)));
+        assertEquals(List.of("constant-channel"), doubts.stream().map(Doubt::code).toList());
+    }
+
+    @Test
+    void anInfiniteValueBesideAMissingCellIsRefused() {
+        assertEquals("run A, sample 2 (time 1.0 s), channel c1: the value is Infinity; "
+                + "replace it by a finite number or leave the cell empty.",
+                fault(Recordings.of(run("A", new double[] {0, 1}, 1, 2, Double.NaN, Double.POSITIVE_INFINITY))));
+    }
+
+    @Test
     void onlyConstantChannelsAreRefused() {
         assertEquals("recording: all 2 channels are constant; name at least one channel that moves.",
                 fault(Recordings.of(run("A", new double[] {0, 1}, 1, 4, 1, 4))));

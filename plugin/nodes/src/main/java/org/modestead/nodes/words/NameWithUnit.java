@@ -16,6 +16,9 @@ public record NameWithUnit(String name, Optional<String> unit) {
 
     /** Reads a name as it is written; without brackets it is the name itself. */
     public static NameWithUnit of(String written) {
+        if (written.indexOf('[') < 0) {
+            return new NameWithUnit(written, Optional.empty());
+        }
         Matcher match = BRACKETS.matcher(written);
         return match.matches() ? new NameWithUnit(match.group(1), Optional.of(match.group(2).strip())) : new NameWithUnit(written, Optional.empty());
     }
