@@ -183,24 +183,32 @@ public record SampleNoise(double[] deviations, Smoothing smoothing) {
 
     /**
      * Draws noise of this level for every sample, smoothed as the samples were. It is drawn run by run in the order of their ids, shorter ids first, and
-     * of their times: the order in which runs are given moves nothing.
+     * of their times, and channel by channel as {@link ChannelsByShape} tells: neither the order in which runs are given nor order, sign or unit of the channels
+     * moves anything.
      *
      * @param runs not written
      * @param random draws the noise
      * @return per run as given p x n
      */
     public List<DMatrixRMaj> doses(List<Run> runs, Random random) {
+        if (runs.isEmpty()) {
+            return List.of();
+        }
+        ChannelsByShape channels = ChannelsByShape.of(runs);
         DMatrixRMaj[] out = new DMatrixRMaj[runs.size()];
         IntStream.range(0, out.length).boxed().sorted(Comparator.<Integer>comparingInt(i -> runs.get(i).id().length())
                         .thenComparing(i -> runs.get(i).id()).thenComparingDouble(i -> runs.get(i).times()[0]))
-                .forEachOrdered(i -> out[i] = noise(runs.get(i), random));
+                .forEachOrdered(i -> out[i] = noise(runs.get(i), channels, random));
         return List.of(out);
     }
 
-    private DMatrixRMaj noise(Run run, Random random) {
+    private DMatrixRMaj noise(Run run, ChannelsByShape channels, Random random) {
         DMatrixRMaj out = new DMatrixRMaj(run.values().numRows, run.values().numCols);
-        for (int k = 0; k < out.getNumElements(); k++) {
-            out.data[k] = deviations[k % deviations.length] * random.nextGaussian();
+        for (int k = 0; k < out.numRows; k++) {
+            for (int place = 0; place < out.numCols; place++) {
+                int channel = channels.at(place);
+                out.set(k, channel, channels.sign(channel) * deviations[channel] * random.nextGaussian());
+            }
         }
         return smoothing.apply(run.times(), out);
     }

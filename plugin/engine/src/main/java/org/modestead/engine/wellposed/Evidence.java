@@ -62,6 +62,9 @@ public record Evidence(
 
     private static final double UNDAMPED = 0.05;
 
+    /** Share of the signal below which nothing moves that could be judged. */
+    private static final double MOVES = 1e-3;
+
     static Evidence of(FittedOperator operator, Spectrum spectrum, Ladder ladder, boolean heldOut, JudgeSettings settings) {
         ModalExpansion fitted = ladder.rungs().stream().filter(rung -> rung.rank() == operator.rank()).findFirst().orElseThrow().expansion();
         return new Evidence(operator, spectrum, ladder.rungs().stream().map(Rung::rank).toList(), ladder.rows(), fitted,
@@ -112,6 +115,15 @@ public record Evidence(
         return clear(tellingRungsOf(mode), row -> row.noise().norm() <= NOISY_NORM);
     }
 
+    /** Returns the rank of the rung that predicts the judging runs best one step ahead. */
+    int bestPredicting() {
+        int best = 0;
+        for (int k = 1; k < predictionErrors.size(); k++) {
+            best = predictionErrors.get(k) < predictionErrors.get(best) ? k : best;
+        }
+        return rungs.get(best);
+    }
+
     /**
      * Returns the rung on which orthogonality is read: the highest telling one before noise begins to change the norm by more than a tenth of a
      * per cent, or the one on which it changes it least; the fitted rank where none is telling. Where the mode is an eigenfunction of a finite space
@@ -151,8 +163,20 @@ public record Evidence(
         return spectrum.modes().stream().filter(this::carries);
     }
 
-    /** Returns whether a mode carries a stated share of the signal and is not the constant function. */
+    /**
+     * Returns whether a mode carries a stated share of the signal and is not the constant function. Where none does because the constant holds nearly all of the
+     * signal, the share is taken of the part that moves.
+     */
     public boolean carries(Mode mode) {
-        return !mode.constant() && mode.energyShare() >= settings.shareThreshold();
+        if (mode.constant()) {
+            return false;
+        }
+        double moving = moving().mapToDouble(Mode::energyShare).sum();
+        boolean hidden = moving >= MOVES && moving().allMatch(other -> other.energyShare() < settings.shareThreshold());
+        return mode.energyShare() >= settings.shareThreshold() * (hidden ? moving : 1);
+    }
+
+    private Stream<Mode> moving() {
+        return spectrum.modes().stream().filter(mode -> !mode.constant());
     }
 }

@@ -21,10 +21,7 @@ public final class PredictionLimit implements Check {
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
         List<Double> errors = evidence.predictionErrors();
-        int best = 0;
-        for (int k = 1; k < errors.size(); k++) {
-            best = errors.get(k) < errors.get(best) ? k : best;
-        }
+        int best = evidence.rungs().indexOf(evidence.bestPredicting());
         int fitted = evidence.rungs().indexOf(evidence.operator().rank());
         boolean noise = best < fitted && errors.get(fitted) > WORSE * errors.get(best);
         return List.of(new Finding(0, id(), evidence.rungs().get(best), Double.NaN, !noise, String.format(Locale.ROOT,

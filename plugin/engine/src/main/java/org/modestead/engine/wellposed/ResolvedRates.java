@@ -19,7 +19,7 @@ public final class ResolvedRates implements Check {
 
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
-        return evidence.spectrum().modes().stream().map(mode -> finding(mode, evidence.twins().get(mode.number() - 1))).toList();
+        return evidence.spectrum().modes().stream().map(mode -> finding(mode, evidence.twins().get(mode.number() - 1) && !CarriedAlone.at(mode.number(), evidence))).toList();
     }
 
     private Finding finding(Mode mode, boolean twin) {

@@ -12,6 +12,9 @@ import org.modestead.engine.spectrum.Mode;
  * Growth of {@code ‖φ‖_H / ‖φ‖_L2(data)} over the ladder. Bounded: the eigenfunction belongs to the space. Growing without
  * bound (see {@link NormTrend}): it only imitates an eigenfunction on the sampled region. In the data inner product both norms are the
  * same and the question has no content, nor has it for a cluster, whose members are directions that rounding picked.
+ *
+ * <p>An imitation needs its growing norm to predict at all. Where the norm rests up to the rung that predicts best and grows on the rungs after it alone, it is
+ * those rungs that fit more than the motion, and the mode needs none of that.
  */
 public final class SpaceNormGrowth implements Check {
 
@@ -41,14 +44,23 @@ public final class SpaceNormGrowth implements Check {
             }
             List<LadderRow> rows = evidence.clearNormsOf(mode.number());
             if (rows.size() >= Settling.LEAST_RUNGS) {
-                findings.add(finding(mode.number(), "Its norm", rows.stream().map(LadderRow::normRatio).toList(),
-                        rows.stream().map(LadderRow::rank).toList(), threshold));
+                List<LadderRow> predicting = rows.stream().filter(row -> row.rank() <= evidence.bestPredicting()).toList();
+                boolean rests = predicting.size() >= Settling.LEAST_RUNGS && !trend(predicting, threshold).growing();
+                findings.add(finding(mode.number(), rests ? predicting : rows, threshold));
             } else if (clear.size() >= Settling.LEAST_RUNGS && evidence.carries(mode)) {
                 findings.add(finding(mode.number(), "It cannot be followed down the ladder; the norm of the modes that carry the signal",
                         clear.stream().map(evidence.carryingNorm()::get).toList(), clear.stream().map(evidence.rungs()::get).toList(), threshold));
             }
         }
         return findings;
+    }
+
+    private static NormTrend trend(List<LadderRow> rows, double threshold) {
+        return NormTrend.of(rows.stream().map(LadderRow::normRatio).toList(), threshold);
+    }
+
+    private Finding finding(int mode, List<LadderRow> rows, double threshold) {
+        return finding(mode, "Its norm", rows.stream().map(LadderRow::normRatio).toList(), rows.stream().map(LadderRow::rank).toList(), threshold);
     }
 
     private Finding finding(int mode, String what, List<Double> ratios, List<Integer> ranks, double threshold) {

@@ -68,4 +68,19 @@ class SampleNoiseTest {
         }
         assertTrue(largest > 0.5, "they differ");
     }
+
+    @Test
+    void noiseFollowsAChannelWhereverItStandsWhicheverSignAndUnitItHas() {
+        Run run = Motions.run("a", 40, 0.1, t -> new double[] {Math.exp(t), Math.sin(3 * t), t * t * t});
+        Run turned = Motions.run("a", 40, 0.1, t -> new double[] {-1000 * t * t * t, Math.exp(t), 2 * Math.sin(3 * t)});
+        DMatrixRMaj noise = new SampleNoise(new double[] {0.1, 0.2, 0.3}, Smoothing.none(3)).doses(List.of(run), new Random(5)).get(0);
+        DMatrixRMaj its = new SampleNoise(new double[] {300, 0.1, 0.4}, Smoothing.none(3)).doses(List.of(turned), new Random(5)).get(0);
+        for (int k = 0; k < 40; k++) {
+            // products of a few doubles: a few times the rounding of their size
+            assertEquals(noise.get(k, 0), its.get(k, 1), 1e-14);
+            assertEquals(2 * noise.get(k, 1), its.get(k, 2), 1e-14);
+            assertEquals(-1000 * noise.get(k, 2), its.get(k, 0), 1e-10);
+        }
+        assertTrue(Math.abs(noise.get(0, 0)) > 0, "there is noise");
+    }
 }

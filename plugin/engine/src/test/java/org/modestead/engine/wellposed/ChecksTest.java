@@ -318,9 +318,26 @@ class ChecksTest {
         assertTrue(new ClusteredEigenvalues().examine(evidence(DIAGONAL, List.of(SINGLE), List.of()),
                 Progress.NONE).isEmpty());
         Mode clustered = mode(1, List.of(0, 1), Complex.ZERO, 1, 0, 1);
-        Finding finding = only(new ClusteredEigenvalues(), evidence(NILPOTENT, List.of(clustered), List.of()), 1);
+        Finding finding = only(new ClusteredEigenvalues(), evidence(NILPOTENT, List.of(clustered), List.of(sighting(2, 1, 1, 0))), 1);
         assertFalse(finding.passed());
         assertEquals(2, finding.value());
+    }
+
+    @Test
+    void aClusterIsExcusedWhereOneFunctionOfALowerRungCarriesAllOfItAloneAndExactly() {
+        assertTrue(clusterWith(sighting(1, 1, 1, 1e-4)).passed());
+        assertFalse(clusterWith(sighting(1, 0.9, 0.9, 1e-4)).passed(), "a tenth is carried by the rest");
+        assertFalse(clusterWith(sighting(1, 1, 1, 0.01)).passed(), "it misses its own rule");
+        assertFalse(clusterWith(sighting(1, 1, 100, 1e-4)).passed(), "a second function takes most of it away again");
+    }
+
+    private static Finding clusterWith(LadderRow lower) {
+        Mode clustered = mode(1, List.of(0, 1), Complex.ZERO, 1, 0, 1);
+        return only(new ClusteredEigenvalues(), evidence(NILPOTENT, List.of(clustered), List.of(lower, sighting(2, 1, 1, 0))), 1);
+    }
+
+    private static LadderRow sighting(int rank, double weight, double weightNorm, double residual) {
+        return new LadderRow(rank, 1, Complex.ZERO, weight, weightNorm, 1, residual, residual, 0, 0, NoiseEffect.NONE);
     }
 
     @Test
