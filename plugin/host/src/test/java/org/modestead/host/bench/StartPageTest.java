@@ -57,6 +57,7 @@ class StartPageTest {
     @Test
     void theDocumentHoldsWhatTheStartPageShowsAndNothingOfAnOpenDesk() throws IOException, InterruptedException {
         bench.post("/api/desk", "{\"empty\": true, \"name\": \"</script><b>\"}");
+        bench.post("/api/edit", "{\"edits\": [{\"do\": \"add\", \"node\": \"signal-generator\"}]}");
         assertEquals("", first(), "how the steps stand is asked for");
         bench.post("/api/desk/close", "");
         String first = first();
@@ -106,6 +107,18 @@ class StartPageTest {
         assertTrue(resumed.path("recovered").asText().startsWith("Unsaved work of "), resumed.toString());
         bench.post("/api/desk/close", "");
         assertEquals(0, bench.post("/api/desk/forget", "{\"desk\": \"" + desk + "\"}").json().path("recent").size());
+    }
+
+    @Test
+    void anEmptyBenchThatWasLeftEmptyIsNoWorkToGoOnWith() throws IOException, InterruptedException {
+        bench.post("/api/desk", "{\"empty\": true, \"name\": \"Nothing yet\"}");
+        bench.post("/api/desk/close", "");
+        assertEquals(0, bench.get("/api/start").json().path("recent").size());
+        bench.post("/api/desk", "{\"empty\": true, \"name\": \"Thoughts\"}");
+        bench.post("/api/edit", "{\"edits\": [{\"do\": \"notes\", \"notes\": \"Ask for the night runs.\"}]}");
+        bench.post("/api/desk/close", "");
+        JsonNode recent = bench.get("/api/start").json().path("recent");
+        assertEquals(List.of("Thoughts"), recent.findValuesAsText("name"), "what was only written is work");
     }
 
     @Test

@@ -235,8 +235,7 @@ public final class Desk implements AutoCloseable {
 
     /** Tells of a desk in a folder without opening it: what is there, when it changed, whether it was saved. */
     static Optional<DeskFolder.Kept> glance(Path folder) {
-        return Journal.glance(folder).or(() -> Journal.read(folder).map(told -> new Journal.Glance(told.timeline().current().name(), told.timeline().current().file(),
-                told.changed(), !told.saved().equals(checksum(told.timeline().current())), told.timeline().current().steps().size())))
-                .map(seen -> new DeskFolder.Kept(folder.getFileName().toString(), seen.name(), seen.file(), seen.changed(), seen.unsaved(), seen.steps()));
+        return Journal.glance(folder).or(() -> Journal.read(folder).map(Journal.Glance::of)).map(seen -> new DeskFolder.Kept(folder.getFileName().toString(),
+                seen.name(), seen.file(), seen.changed(), seen.unsaved(), seen.steps(), seen.untouched()));
     }
 }

@@ -44,8 +44,9 @@ public record DeskFolder(Path root) {
      * @param changed when it changed last
      * @param unsaved whether the file holds something else
      * @param steps how many
+     * @param untouched whether it was begun empty and nothing was done since
      */
-    public record Kept(String id, String name, Path file, Instant changed, boolean unsaved, int steps) {}
+    public record Kept(String id, String name, Path file, Instant changed, boolean unsaved, int steps, boolean untouched) {}
 
     private Path all() {
         return root.resolve("desks");
@@ -56,14 +57,14 @@ public record DeskFolder(Path root) {
         return all().resolve(id);
     }
 
-    /** Returns the desks, the one changed last first. */
+    /** Returns the desks that hold work, the one changed last first; one that was begun empty and left so is none. */
     public List<Kept> desks() {
         Path desks = all();
         if (!Files.isDirectory(desks)) {
             return List.of();
         }
         try (Stream<Path> folders = Files.list(desks)) {
-            return folders.filter(Files::isDirectory).sorted().flatMap(folder -> Desk.glance(folder).stream())
+            return folders.filter(Files::isDirectory).sorted().flatMap(folder -> Desk.glance(folder).stream()).filter(kept -> !kept.untouched())
                     .sorted(Comparator.comparing(Kept::changed).reversed()).toList();
         } catch (IOException unreadable) {
             throw new DeskFault("desk folder " + desks, "it cannot be read (" + unreadable.getMessage() + ")", "allow reading it");

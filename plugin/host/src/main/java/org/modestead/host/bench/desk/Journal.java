@@ -97,7 +97,7 @@ final class Journal implements AutoCloseable {
             JsonNode last = MAPPER.readTree(lastLine(journal));
             JsonNode now = last.path("now");
             return now.isObject() ? Optional.of(new Glance(now.path("name").asText(), Path.of(now.path("file").asText()), Instant.parse(last.path("at").asText()),
-                    now.path("unsaved").asBoolean(), now.path("steps").asInt())) : Optional.empty();
+                    now.path("unsaved").asBoolean(), now.path("steps").asInt(), now.path("untouched").asBoolean())) : Optional.empty();
         } catch (IOException | RuntimeException unreadable) {
             return Optional.empty();
         }
@@ -111,8 +111,20 @@ final class Journal implements AutoCloseable {
      * @param changed when the last thing happened
      * @param unsaved whether the file holds something else
      * @param steps how many
+     * @param untouched whether it was begun empty and nothing was done since
      */
-    record Glance(String name, Path file, Instant changed, boolean unsaved, int steps) {}
+    record Glance(String name, Path file, Instant changed, boolean unsaved, int steps, boolean untouched) {
+
+        static Glance of(Told told) {
+            return of(told.timeline(), told.saved(), told.changed());
+        }
+
+        private static Glance of(Timeline timeline, String saved, Instant changed) {
+            Workflow workflow = timeline.current();
+            return new Glance(workflow.name(), workflow.file(), changed, !saved.equals(Desk.checksum(workflow)), workflow.steps().size(),
+                    saved.isEmpty() && timeline.moments().size() == 1 && workflow.steps().isEmpty());
+        }
+    }
 
     /** Reads from the end, further and further back, until a whole line is there; a half-written last line is none. */
     private static byte[] lastLine(FileChannel journal) throws IOException {
@@ -150,9 +162,9 @@ final class Journal implements AutoCloseable {
     }
 
     private static ObjectNode now(Timeline timeline, String saved) {
-        Workflow workflow = timeline.current();
-        return MAPPER.createObjectNode().put("name", workflow.name()).put("file", workflow.file().toString())
-                .put("unsaved", !saved.equals(Desk.checksum(workflow))).put("steps", workflow.steps().size());
+        Glance glance = Glance.of(timeline, saved, Instant.EPOCH);
+        return MAPPER.createObjectNode().put("name", glance.name()).put("file", glance.file().toString()).put("unsaved", glance.unsaved())
+                .put("steps", glance.steps()).put("untouched", glance.untouched());
     }
 
     private void append(ObjectNode entry, Timeline after, String saved) throws IOException {

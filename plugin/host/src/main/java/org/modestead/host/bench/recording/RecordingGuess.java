@@ -156,8 +156,8 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         if (gaps > 0) {
             words.add(Sentence.count(gaps, "pause") + ": runs are split there.");
         }
-        words.add(roles.time().isEmpty() ? "No column of times was found: rows count as evenly spaced." : "Time is " + roles.time() + "."
-                + (roles.timeUnit().isEmpty() ? " Its unit is not told: write it, so that rates have one." : ""));
+        words.add(roles.time().isEmpty() ? "No column of times was found: rows count as evenly spaced." : "The time stands in column " + roles.time()
+                + (roles.timeUnit().isEmpty() ? "; its unit is not told: write it, so that rates have one." : "."));
         words.add(Sentence.count(roles.channels().size(), "channel")
                 + (roles.inputs().isEmpty() ? "" : " and " + Sentence.count(roles.inputs().size(), "known input")) + ".");
         return words;

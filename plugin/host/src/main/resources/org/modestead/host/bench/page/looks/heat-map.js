@@ -9,6 +9,9 @@ import {Plot} from './plot.js';
 import {useRead} from './reading.js';
 import {useSeen} from './seen.js';
 
+/** Most labels on the upright axis. */
+const MOST_LABELS = 12;
+
 /**
  * A matrix as a map of colours. Where the sign matters the colours part at zero, in equal steps to both sides; else they run from
  * light to dark (or dark to light on a dark ground). The range is told at the bar beneath.
@@ -93,12 +96,15 @@ function mapOption(figure, theme, selection) {
   const labels = {color: theme.quiet, fontSize: theme.small, fontFamily: theme.font};
   const side = (axis) => ({type: 'category', data: axis.categories, axisLine: {show: false}, axisTick: {show: false},
     splitArea: {show: false}, axisLabel: {...labels, hideOverlap: true, width: theme.small * 9, overflow: 'truncate'}});
+  const upright = side(figure.y);
+  // the library leaves out too few of many upright labels
+  upright.axisLabel.interval = Math.ceil(figure.y.categories.length / MOST_LABELS) - 1;
   const chosen = [...chosenOf(matrix.rowSelections, 0), ...chosenOf(matrix.columnSelections, 1)];
   return {
     animation: false, backgroundColor: 'transparent',
     grid: {left: figure.x.categories[0]?.length > 3 ? 34 : 6, right: 14, top: 6, bottom: 6, containLabel: true, show: true, borderColor: theme.edge, borderWidth: 1},
     xAxis: side(figure.x),
-    yAxis: {...side(figure.y), inverse: true},
+    yAxis: {...upright, inverse: true},
     visualMap: {show: false, min: range.low, max: range.high, inRange: {color: palette(matrix, theme)}, seriesIndex: 0},
     dataZoom: [{type: 'inside', id: 'across', xAxisIndex: 0, zoomOnMouseWheel: 'ctrl', moveOnMouseMove: true, moveOnMouseWheel: false, filterMode: 'none'},
       {type: 'inside', id: 'upwards', yAxisIndex: 0, zoomOnMouseWheel: 'ctrl', moveOnMouseMove: true, moveOnMouseWheel: false, filterMode: 'none'}],

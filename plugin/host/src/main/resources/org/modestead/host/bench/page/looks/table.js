@@ -4,6 +4,8 @@ import {cell, hundredths, labelled} from './numbers.js';
 import {isSelected, words} from './keys.js';
 import {PAGE} from './sources.js';
 
+/** Room for the bar below, which otherwise covers the last row. */
+const BAR = 18;
 /** More rows than this in one view are mapped onto a shorter bar, for no browser scrolls hundreds of millions of pixels. */
 const TALLEST = 8000000;
 const SHOWN = 14;
@@ -140,7 +142,7 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
     }} csv=${csv} title=${title} id=${id} />`}
     ${pages.fault && html`<p class="lk-fault" role="alert">${pages.fault}</p>`}
     <div class="lk-rows" ref=${box} onScroll=${(event) => setTop(event.currentTarget.scrollTop)}
-        style=${{maxHeight: `calc(${visible * height}px + 3.6em)`}}>
+        style=${{maxHeight: `calc(${visible * height}px + 3.6em + ${BAR}px)`}}>
       <table role="grid" tabindex="0" aria-label=${title} aria-rowcount=${found + 1} aria-colcount=${source.columns.length + 1}
           aria-activedescendant=${current >= from && current < to ? `${name}-${current}` : null} onKeyDown=${onKeyDown}>
         ${sizes.current && html`<colgroup><col style=${{width: `${String(total).length + 3}ch`}} />

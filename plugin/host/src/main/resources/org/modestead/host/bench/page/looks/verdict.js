@@ -1,4 +1,5 @@
 import {html, useState} from '../lib.js';
+import {unparted} from '../js/words.js';
 import {isSelected, words} from './keys.js';
 import {GRADE_MARKS, Mark} from './marks.js';
 import {cell} from './numbers.js';
@@ -41,7 +42,7 @@ function Mode({mode, chosen, select}) {
       ${mode.deciding.length > 0 && html`<button type="button" class="lk-button" data-action="why" aria-expanded=${String(open)}
         aria-label=${`what decided it, mode ${mode.mode}`} onClick=${() => setOpen(!open)}>what decided it</button>`}
     </div>
-    ${mode.figures && html`<p class="lk-figures">${mode.figures}</p>`}
+    ${mode.figures && html`<p class="lk-figures">${unparted(mode.figures)}</p>`}
     <p>${mode.meaning} ${mode.advice}</p>
     ${!open && mode.deciding.length > 0 && html`<p class="lk-quiet">Decided by: ${mode.deciding.map((one) => one.name.toLowerCase()).join(', ')}.</p>`}
     ${open && html`<${Findings} findings=${mode.deciding} />`}

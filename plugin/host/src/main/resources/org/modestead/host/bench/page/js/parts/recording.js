@@ -86,7 +86,7 @@ function withRole(guess, name, to) {
 }
 
 function TimeUnit({guess, ask}) {
-  return html`<${Draft} class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" placeholder="for example s"
+  return html`<${Draft} class="field-input unit-input" aria-label="Unit of time" data-action="time-unit" size="5" placeholder="such as s"
     value=${guess.columns.timeUnit} put=${(text) => ask(guess.reading, {...guess.columns, timeUnit: text.trim()})} />`;
 }
 
