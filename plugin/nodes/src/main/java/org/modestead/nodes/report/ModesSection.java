@@ -2,7 +2,6 @@ package org.modestead.nodes.report;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.function.DoubleFunction;
 import java.util.function.Function;
 import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.recording.Preparation;
@@ -20,6 +19,7 @@ import org.modestead.nodes.document.ReportDocument.Section;
 import org.modestead.nodes.figure.EigenvaluePlane;
 import org.modestead.nodes.figure.ShapeFigures;
 import org.modestead.nodes.words.Digits;
+import org.modestead.nodes.words.Estimate;
 import org.modestead.nodes.words.TimeUnit;
 
 /** The modes in figures: table, complex plane, shapes. */
@@ -71,20 +71,18 @@ final class ModesSection {
                 + " judged");
         boolean oscillates = mode.oscillates();
         return List.of(Integer.toString(mode.number()),
-                oscillates ? Digits.figure(mode.frequency()) + range(mode, ModeIntervals::frequency, Digits::figure) : "none",
+                oscillates ? estimate(mode, mode.frequency(), ModeIntervals::frequency).figure() : "none",
                 oscillates ? Digits.figure(mode.naturalFrequency()) : "none",
-                oscillates ? Digits.figure(mode.period()) + range(mode, ModeIntervals::period, Digits::figure) : "none",
-                Digits.figure(mode.rate().re()) + range(mode, ModeIntervals::growth, Digits::figure),
-                oscillates ? Digits.percent(mode.dampingRatio()) + range(mode, ModeIntervals::dampingRatio, Digits::percent) : "none",
-                Digits.figure(mode.doublingTime())
-                        + range(mode, found -> found.doublingTime(mode.rate().re()), Digits::figure),
-                Digits.figure(mode.amplitude()) + range(mode, ModeIntervals::amplitude, Digits::figure),
+                oscillates ? estimate(mode, mode.period(), ModeIntervals::period).figure() : "none",
+                estimate(mode, mode.rate().re(), ModeIntervals::growth).figure(),
+                oscillates ? estimate(mode, mode.dampingRatio(), ModeIntervals::dampingRatio).percent() : "none",
+                estimate(mode, mode.doublingTime(), found -> found.doublingTime(mode.rate().re())).figure(),
+                estimate(mode, mode.amplitude(), ModeIntervals::amplitude).figure(),
                 Digits.percent(mode.energyShare()), verdict);
     }
 
-    private static String range(Mode mode, Function<ModeIntervals, Interval> which, DoubleFunction<String> words) {
-        return mode.intervals().map(which).filter(interval -> !Double.isNaN(interval.low()) || !Double.isNaN(interval.high()))
-                .map(interval -> " (" + words.apply(interval.low()) + " to " + words.apply(interval.high()) + ")").orElse("");
+    private static Estimate estimate(Mode mode, double value, Function<ModeIntervals, Interval> which) {
+        return new Estimate(value, mode.intervals().map(which).orElse(Interval.UNKNOWN));
     }
 
     private static String intervals(List<Mode> modes) {

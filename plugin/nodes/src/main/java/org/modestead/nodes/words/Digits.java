@@ -16,8 +16,10 @@ public final class Digits {
     private static final int SMALLEST_PLAIN = -3;
     private static final int LARGEST_PLAIN = 4;
     private static final int FREQUENCY = 3;
-    private static final int RATIO = 2;
-    private static final int FIGURE = 3;
+    /** Digits of a share in per cent. */
+    static final int RATIO = 2;
+    /** Digits of most figures in running text. */
+    static final int FIGURE = 3;
     private static final int CELL = 5;
 
     private Digits() {}

@@ -1,5 +1,6 @@
 package org.modestead.nodes.words;
 
+import org.modestead.engine.spectrum.Interval;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.ModeIntervals;
 
@@ -28,7 +29,7 @@ public final class ModeWords {
         if (!mode.oscillates()) {
             return "no oscillation, " + change(mode, unit);
         }
-        return cycle(mode, unit) + range(mode, unit) + ", " + damping(mode, unit);
+        return cycleWithin(mode, unit) + ", " + damping(mode, unit);
     }
 
     /** Returns the frequency of an oscillating mode, or how long a cycle lasts where that is easier to grasp. */
@@ -37,13 +38,14 @@ public final class ModeWords {
                 : Digits.frequency(mode.frequency(), unit.frequency());
     }
 
-    /** Returns where the frequency, or the length of a cycle, may lie; empty without intervals or where an end is not known. */
-    private static String range(Mode mode, TimeUnit unit) {
+    /** Returns the same with the interval in which it may lie; without it where there is none or an end is not known. */
+    private static String cycleWithin(Mode mode, TimeUnit unit) {
         boolean slow = mode.frequency() < SLOW;
         return mode.intervals().map(found -> slow ? found.period() : found.frequency())
                 .filter(found -> Double.isFinite(found.low()) && Double.isFinite(found.high()))
-                .map(found -> " (" + (slow ? unit.span(found.low()) : Digits.figure(found.low())) + " to "
-                        + (slow ? unit.span(found.high()) : Digits.figure(found.high())) + ")").orElse("");
+                .map(found -> slow ? "one cycle every " + new Estimate(mode.period(), found).span(unit.name())
+                        : new Estimate(mode.frequency(), found).figure(unit.frequency()))
+                .orElse(cycle(mode, unit));
     }
 
     private static String damping(Mode mode, TimeUnit unit) {
@@ -51,9 +53,8 @@ public final class ModeWords {
             return "next to no damping";
         }
         String growing = mode.rate().re() > 0 ? ", growing: " + change(mode, unit) : "";
-        String range = mode.intervals().map(ModeIntervals::dampingRatio)
-                .map(found -> " (" + Digits.percent(found.low()) + " to " + Digits.percent(found.high()) + ")").orElse("");
-        return "damping ratio " + Digits.percent(mode.dampingRatio()) + range + growing;
+        return "damping ratio " + new Estimate(mode.dampingRatio(), mode.intervals().map(ModeIntervals::dampingRatio).orElse(Interval.UNKNOWN)).percent()
+                + growing;
     }
 
     /** Returns {@code doubles every …}, {@code halves every …} or {@code neither grows nor decays}. */

@@ -102,4 +102,16 @@ class WordsTest {
                 Interval.UNKNOWN));
         assertEquals("one cycle every 62.8 s, damping ratio 10 % (0 % to 20 %)", ModeWords.headline(slow, new TimeUnit("s")));
     }
+
+    @Test
+    void digitsAreSoManyThatAnIntervalIsSeen() {
+        assertEquals("1.52 Hz (1.50 to 1.54)", new Estimate(1.52, new Interval(1.5, 1.54)).figure("Hz"));
+        assertEquals("2.00 % (1.96 % to 2.04 %)", new Estimate(0.02, new Interval(0.0196, 0.0204)).percent());
+        assertEquals("0.62000 (0.61998 to 0.62002)", new Estimate(0.62, new Interval(0.61998, 0.62002)).figure());
+        assertEquals("364.0 s (363.8 s to 364.2 s)", new Estimate(364, new Interval(363.8, 364.2)).span("s"));
+        assertEquals("\u22120.172 (\u22120.250 to \u2013)", new Estimate(-0.1719, new Interval(-0.25, Double.NaN)).figure(), "an end is not known");
+        assertEquals("1.52", new Estimate(1.52, Interval.UNKNOWN).figure());
+        assertEquals("1.52 Hz (to all digits shown)", new Estimate(1.52, new Interval(1.52, 1.52 + 1e-9)).figure("Hz"), "more than six digits help nobody");
+        assertEquals("0 (to all digits shown)", new Estimate(0, new Interval(0, 0)).figure());
+    }
 }

@@ -173,6 +173,11 @@ final class Browser implements AutoCloseable {
         });
     }
 
+    /** Presses an element if it is there now; it may be gone in the same moment, when the page is drawn anew. */
+    void pressIfThere(String css) {
+        all(css).stream().findFirst().ifPresent(WebElement::click);
+    }
+
     void doubleClick(String css) {
         WebElement element = see(css);
         reveal(element);

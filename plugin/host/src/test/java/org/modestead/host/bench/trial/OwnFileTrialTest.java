@@ -43,7 +43,7 @@ class OwnFileTrialTest {
             browser.picture("recording");
             press(trial, "[data-action=lay-out-run]");
             browser.see("[data-look] [data-verdict]");
-            browser.reads("[data-verdict]", "0.250 Hz");
+            trial.verdictTells(0.25, "Hz");
             browser.picture("own-file-verdict");
             System.out.println("trials: an own recording came to its verdict with " + interactions + " interactions");
             assertTrue(interactions <= MOST_INTERACTIONS, interactions + " interactions");
@@ -61,7 +61,8 @@ class OwnFileTrialTest {
             press(trial, "[data-action=lay-out-run]");
             List.of("snapshots", "fit", "spectrum", "check").forEach(step -> trial.state(step, "done", "doubts"));
             browser.see("[data-look] [data-verdict=stands]");
-            browser.reads("[data-verdict]", "0.620 cycles/time unit", "2.90 cycles/time unit");
+            trial.verdictTells(0.62, "cycles/time unit");
+            trial.verdictTells(2.9, "cycles/time unit");
             List<String> counted = new ArrayList<>();
             for (JsonNode mode : trial.json("/api/steps/check/look").path("verdict").path("modes")) {
                 if (mode.path("counts").asBoolean()) {
@@ -84,7 +85,7 @@ class OwnFileTrialTest {
             press(trial, "[data-example=pump-house]");
             press(trial, "[data-action=run-all]");
             trial.browser().see("[data-look] [data-verdict]");
-            trial.browser().reads("[data-verdict]", "0.620 Hz");
+            trial.verdictTells(0.62, "Hz");
             System.out.printf(Locale.ROOT, "trials: the example came to its verdict %.0f s after the start of the bench, browser included%n",
                     (System.nanoTime() - begin) / 1e9);
             trial.browser().picture("example-verdict");

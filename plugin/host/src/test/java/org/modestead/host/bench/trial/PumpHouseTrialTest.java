@@ -83,7 +83,8 @@ class PumpHouseTrialTest {
     /** In plain words, with the frequency of the surge that the recording was made with. */
     private static void theVerdictIsTold(Trial trial, PumpHouse plan) {
         trial.choose(plan.verdict());
-        trial.browser().reads("[data-look=\"" + plan.verdict() + "\"] [data-verdict]", "0.620 Hz");
+        trial.browser().see("[data-look=\"" + plan.verdict() + "\"] [data-verdict]");
+        trial.verdictTells(0.62, "Hz");
         plan.modes().forEach(mode -> trial.browser().see("[data-verdict] [data-row-mode=\"" + mode + "\"][data-grade=stands],"
                 + "[data-verdict] [data-row-mode=\"" + mode + "\"][data-grade=settles]"));
         trial.browser().picture("verdict");
@@ -131,9 +132,8 @@ class PumpHouseTrialTest {
         trial.browser().click("[role=menu] [data-action=save-as]");
         trial.browser().see("dialog[data-dialog=save-as] .file-list");
         trial.browser().await("the opened folders", () -> {
-            if (trial.browser().has("dialog [data-action=folder-up]")) {
-                trial.browser().click("dialog [data-action=folder-up]");
-            }
+            // at the top there is no way up: a press that waits for one would never come back
+            trial.browser().pressIfThere("dialog [data-action=folder-up]");
             return trial.browser().has("dialog [data-file$=\"/station\"]");
         });
         trial.browser().click("dialog [data-file$=\"/station\"]");

@@ -131,6 +131,13 @@ record Trial(Optional<Bench> bench, Browser browser) implements AutoCloseable {
         browser.await(step + " to be " + String.join(" or ", kinds), () -> browser.has(css));
     }
 
+    /** Waits for a verdict that tells a frequency; how many digits it has hangs on its interval, and no other mode lies within 1 % of it. */
+    void verdictTells(double frequency, String unit) {
+        Pattern told = Pattern.compile("(\\d+\\.\\d+) " + Pattern.quote(unit));
+        browser.await("a verdict on " + frequency + " " + unit, () -> told.matcher(browser.text("[data-look] [data-verdict]")).results()
+                .anyMatch(found -> Math.abs(Double.parseDouble(found.group(1)) - frequency) < 0.01 * frequency));
+    }
+
     /** Waits until a run has ended. */
     void rest() {
         browser.see("[data-run=idle]");
