@@ -4,12 +4,20 @@ import static com.tngtech.archunit.core.domain.JavaClass.Predicates.resideInAnyP
 import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.classes;
 import static com.tngtech.archunit.lang.syntax.ArchRuleDefinition.noClasses;
 import static com.tngtech.archunit.library.dependencies.SlicesRuleDefinition.slices;
+import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import com.tngtech.archunit.core.domain.JavaClasses;
 import com.tngtech.archunit.core.importer.ClassFileImporter;
 import com.tngtech.archunit.core.importer.ImportOption;
 import com.tngtech.archunit.library.GeneralCodingRules;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
 
@@ -105,5 +113,31 @@ class ArchitectureTest {
     @Test
     void noClassThrowsExceptionsWithoutAName() {
         noClasses().should(GeneralCodingRules.THROW_GENERIC_EXCEPTIONS).check(classes);
+    }
+
+    /** A draw that fails once in many builds tells nothing of the change that is built. */
+    @Test
+    void everyPropertyDrawsFromAWrittenSeed() throws IOException {
+        Pattern unseeded = Pattern.compile("(?m)^\\s*@Property\\b(?!\\([^)]*\\bseed = )");
+        List<String> found = new ArrayList<>();
+        for (Path tests : testsOfAllModules()) {
+            try (Stream<Path> files = Files.walk(tests)) {
+                for (Path source : files.filter(path -> path.toString().endsWith(".java")).toList()) {
+                    if (unseeded.matcher(Files.readString(source)).find()) {
+                        found.add(source.toString());
+                    }
+                }
+            }
+        }
+        assertEquals(List.of(), found);
+    }
+
+    /** Only the sources: what a build writes beside them changes while they are read. */
+    private static List<Path> testsOfAllModules() throws IOException {
+        try (Stream<Path> modules = Files.list(Path.of(".."))) {
+            List<Path> tests = modules.map(module -> module.resolve("src/test/java")).filter(Files::isDirectory).toList();
+            assertTrue(tests.size() > 3, "modules with tests: " + tests);
+            return tests;
+        }
     }
 }

@@ -19,7 +19,7 @@ class QuadraturePropertiesTest {
         return times;
     }
 
-    @Property(tries = 200)
+    @Property(tries = 200, seed = "20261201")
     void weightsSumToTheDuration(@ForAll @IntRange(min = 2, max = 40) int count,
             @ForAll @DoubleRange(min = 0, max = 0.9) double jitter,
             @ForAll long seed) {
@@ -32,7 +32,7 @@ class QuadraturePropertiesTest {
     }
 
     /** Up to a jitter of two fifths of the step: where samples lie closer the rule lowers its degree (0 of 300 000 drawn times at 0.4, 9 at 0.45, 6913 at 0.6). */
-    @Property(tries = 200)
+    @Property(tries = 200, seed = "20261201")
     void quinticsAreIntegratedExactlyAtUnevenTimes(@ForAll @IntRange(min = 6, max = 40) int count,
             @ForAll @DoubleRange(min = 0, max = 0.4) double jitter, @ForAll @IntRange(min = 0, max = 5) int power,
                     @ForAll long seed) {

@@ -38,7 +38,7 @@ class NearestStableTest {
         return out;
     }
 
-    @Property(tries = 60)
+    @Property(tries = 60, seed = "20261201")
     void aStableBlockIsTheNearestOfAll(@ForAll long seed, @ForAll @DoubleRange(min = 0.3, max = 3) double size, @ForAll boolean disc) {
         StableRegion region = disc ? StableRegion.DISC : StableRegion.HALF_PLANE;
         Random random = new Random(seed);
@@ -88,7 +88,7 @@ class NearestStableTest {
         }
     }
 
-    @Property(tries = 30)
+    @Property(tries = 30, seed = "20261201")
     void whatIsStableStaysAsItIs(@ForAll long seed, @ForAll @IntRange(min = 1, max = 8) int n, @ForAll boolean disc) {
         StableRegion region = disc ? StableRegion.DISC : StableRegion.HALF_PLANE;
         DMatrixRMaj a = feasible(RandomMatrices_DDRM.rectangle(n, n, -1, 1, new Random(seed)), region);

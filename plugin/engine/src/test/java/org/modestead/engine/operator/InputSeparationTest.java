@@ -150,7 +150,7 @@ class InputSeparationTest {
         assertEquals(2 * Driven.GROWTH, square.rate().re(), 1e-7);
     }
 
-    @Property(tries = 40)
+    @Property(tries = 40, seed = "20261201")
     void projectingInputsOutIsTheJointRegression(@ForAll long seed, @ForAll @IntRange(min = 1, max = 4) int n,
             @ForAll @IntRange(min = 1, max = 3) int q) {
         Random random = new Random(seed);
@@ -299,7 +299,7 @@ class InputSeparationTest {
         assertArrayEquals(alone.inputs().orElseThrow().next().data, full.leading(4).inputs().orElseThrow().next().data, 1e-11);
     }
 
-    @Property(tries = 30)
+    @Property(tries = 30, seed = "20261201")
     void unitAndZeroOfAnInputDoNotMatter(@ForAll long seed, @ForAll @DoubleRange(min = -4, max = 4) double exponent,
             @ForAll @DoubleRange(min = -100, max = 100) double offset, @ForAll boolean monomials) {
         Random random = new Random(seed);

@@ -56,7 +56,7 @@ class NoiseCorrectionTest {
                 new Evolution.StepMap(1), correction);
     }
 
-    @Property(tries = 60)
+    @Property(tries = 60, seed = "20261201")
     void withoutNoiseEveryCorrectionIsLeastSquares(@ForAll long seed, @ForAll @IntRange(min = 1, max = 8) int size) {
         DMatrixRMaj plain = factored(seed, 40, size, NoiseCorrection.NONE, true).whiten(size).action();
         for (NoiseCorrection correction : CORRECTIONS) {
@@ -66,7 +66,7 @@ class NoiseCorrectionTest {
         }
     }
 
-    @Property(tries = 60)
+    @Property(tries = 60, seed = "20261201")
     void totalLeastSquaresLeavesTheSmallestJointSingularValues(@ForAll long seed,
             @ForAll @IntRange(min = 1, max = 8) int size) {
         // definition: the columns (K; -I) span what the leading right singular vectors of [X Y] leave out
@@ -79,7 +79,7 @@ class NoiseCorrectionTest {
         assertEquals(0, CommonOps_DDRM.elementMaxAbs(Matrices.transposeProduct(leading, left)), 1e-10);
     }
 
-    @Property(tries = 60)
+    @Property(tries = 60, seed = "20261201")
     void forwardAndBackwardRunTheSameStepInBothDirections(@ForAll long seed, @ForAll @IntRange(min = 1, max = 8) int size) {
         // the geometric mean of the exchanged data is the inverse
         FactoredCompression data = factored(seed, 40, size, NoiseCorrection.FORWARD_BACKWARD, false);

@@ -11,7 +11,7 @@ import net.jqwik.api.constraints.IntRange;
 
 class MatchingPropertiesTest {
 
-    @Property(tries = 200)
+    @Property(tries = 200, seed = "20261201")
     void theTotalIsTheSmallestOfAllPermutations(@ForAll long seed, @ForAll @IntRange(min = 1, max = 6) int n) {
         Random random = new Random(seed);
         double[][] cost = new double[n][n];

@@ -91,14 +91,14 @@ class WatchRatesTest {
 
     @Test
     void stationaryRecordingsHardlyAlarmAndTwoPerCentAreFound() {
-        Counts counts = count(QUIET, 25, 0, 11);
+        Counts counts = count(QUIET, 15, 0, 11);
         assertQuietWhenNothingChanged(counts);
         assertTwoPerCentFound(counts);
     }
 
     @Test
     void alsoWithRealisticMeasurementNoise() {
-        Counts counts = count(NOISY, 15, 0, 12);
+        Counts counts = count(NOISY, 8, 0, 12);
         assertQuietWhenNothingChanged(counts);
         assertTwoPerCentFound(counts);
     }

@@ -179,7 +179,7 @@ class RunsTest {
             assertEquals(false, desk.path("run").path("running").asBoolean());
             assertEquals("Stopped.", desk.path("run").path("last").asText());
             assertEquals("stopped", TestBench.kind(desk, "a"));
-            assertTrue(seconds < 10, "it waited for the work: " + seconds + " s");
+            assertTrue(seconds < 30, "it waited for the work: " + seconds + " s");
             assertEquals(409, bench.post("/api/undo", "").status() == 422 ? 409 : 0, "nothing was edited");
             release.countDown();
             Thread.sleep(200);

@@ -34,7 +34,7 @@ import org.modestead.nodes.table.Table;
 /** How a run goes: in parallel, past failures, stopped, from the cache; with nodes that only count and wait. */
 class SchedulerTest {
 
-    private static final long PATIENCE_SECONDS = 30;
+    private static final long PATIENCE_SECONDS = 120;
 
     @TempDir
     Path folder;

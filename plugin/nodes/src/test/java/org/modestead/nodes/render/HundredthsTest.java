@@ -19,7 +19,7 @@ class HundredthsTest {
         assertEquals(expected, Hundredths.of(number));
     }
 
-    @Property(tries = 2000)
+    @Property(tries = 2000, seed = "20261201")
     void everyNumberIsRoundedAsInExactArithmetic(@ForAll @IntRange(min = -2_000_000_000, max = 2_000_000_000) int digits,
             @ForAll @IntRange(min = 1, max = 8) int places) {
         String number = BigDecimal.valueOf(digits, places).toPlainString();
@@ -28,7 +28,7 @@ class HundredthsTest {
     }
 
     /** Near halves too: one number in ten lies within a few last places of one. */
-    @Property(tries = 2000)
+    @Property(tries = 2000, seed = "20261201")
     void aBinaryNumberIsRoundedAsItsShortestDigits(@ForAll @IntRange(min = -2_000_000_000, max = 2_000_000_000) int thousandths,
             @ForAll @IntRange(min = -2, max = 2) int away) {
         double number = thousandths / 1000.0 + away * Math.ulp(thousandths / 1000.0);

@@ -19,7 +19,7 @@ import org.modestead.host.Main;
  */
 record BenchProcess(Process process, String url) implements AutoCloseable {
 
-    private static final long PATIENCE_SECONDS = 90;
+    private static final long PATIENCE_SECONDS = 240;
 
     /** Starts it and waits for its address. */
     static BenchProcess start(Path folder, String... arguments) throws IOException, InterruptedException {
