@@ -29,7 +29,7 @@ class MatchingPropertiesTest {
     }
 
     /** A table is also searched when it is made ambiguous: two rows more that are equally near to a column more, and to nothing else. */
-    @Property(tries = 200)
+    @Property(tries = 200, seed = "20261201")
     void whatIsSeenAtOnceIsWhatASearchFinds(@ForAll long seed, @ForAll @IntRange(min = 1, max = 6) int rows,
             @ForAll @IntRange(min = 1, max = 6) int columns, @ForAll @IntRange(min = 1, max = 4) int scale) {
         Random random = new Random(seed);
