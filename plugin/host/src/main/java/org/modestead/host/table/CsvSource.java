@@ -20,7 +20,6 @@ final class CsvSource {
      * @param missing texts that stand for a missing cell, besides the empty one
      */
     static TextFile open(CsvFormat format, List<String> missing) {
-        LastLine.requireEnd(format);
         List<String> names = CsvHeader.names(format);
         Set<String> unnamed = new HashSet<>();
         for (int j = 0; j < names.size(); j++) {
@@ -53,6 +52,11 @@ final class CsvSource {
 
     /** Finds rows and faults in a CSV file by reading it once more, record by record. */
     private record CsvPlaces(CsvFormat format) implements TextFile.Places {
+
+        @Override
+        public void requireEnd() {
+            LastLine.requireEnd(format);
+        }
 
         @Override
         public String row(long row) {

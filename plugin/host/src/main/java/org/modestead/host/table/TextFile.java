@@ -22,12 +22,15 @@ record TextFile(Path path, String shown, String read, List<String> names, Set<St
         unnamed = Set.copyOf(unnamed);
     }
 
-    /** Names places in the file; asked only after something went wrong. */
+    /** Names places in the file. */
     interface Places {
-        /** Returns how a person finds a data row, counted from 1. */
+        /** @throws TableFault if the last row would be left out because it is too long; asked once for a file, before its columns are looked at */
+        void requireEnd();
+
+        /** Returns how a person finds a data row, counted from 1; asked only after something went wrong. */
         String row(long row);
 
-        /** Looks through the file for a row or a letter that makes it unreadable. */
+        /** Looks through the file for a row or a letter that makes it unreadable; asked only after something went wrong. */
         Optional<TableFault> broken();
     }
 }

@@ -48,6 +48,7 @@ final class TextTable implements Explainer {
     }
 
     private TextTyper.Result search() throws SQLException {
+        file.places().requireEnd();
         try (Database database = Database.open(limits.megabytes())) {
             return new TextTyper(database, file.read(), rules).types(file.names());
         }

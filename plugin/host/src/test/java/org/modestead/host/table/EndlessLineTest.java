@@ -81,6 +81,17 @@ class EndlessLineTest {
         }
     }
 
+    /** The database would leave out this one too. */
+    @Test
+    void aLastLineOfFortyMegabytesInAPackedFile() throws IOException {
+        for (String end : List.of("", "\n", "\r\n")) {
+            assertRefused(packed("time,flow\n0,1\n2,", '1', 40, end), "t.csv.gz, last line: this line is longer than 4000000 bytes; "
+                    + "check that lines end by line feeds, and that the file is a table.");
+        }
+        assertEquals(List.of("0|1", "2|" + "1".repeat(1 << 20)),
+                Steps.rows(Steps.source(folder, packed("time,flow\n0,1\n2,", '1', 1, "\n").getFileName().toString(), "text-columns", List.of("flow"))));
+    }
+
     /** What the database refuses by itself begins below what is looked for. */
     @Test
     void aLastLineOfThreeMegabytesIsRefusedAndOneOfOneIsRead() throws IOException {
@@ -114,12 +125,16 @@ class EndlessLineTest {
     }
 
     private Path bomb(String head, char filler, String tail) throws IOException {
+        return packed(head, filler, LENGTH >> 20, tail);
+    }
+
+    private Path packed(String head, char filler, int blocks, String tail) throws IOException {
         Path file = folder.resolve("t.csv.gz");
         byte[] block = new byte[1 << 20];
         Arrays.fill(block, (byte) filler);
         try (OutputStream out = new GZIPOutputStream(Files.newOutputStream(file), 1 << 16)) {
             out.write(head.getBytes(StandardCharsets.UTF_8));
-            for (int written = 0; written < LENGTH; written += block.length) {
+            for (int k = 0; k < blocks; k++) {
                 out.write(block);
             }
             out.write(tail.getBytes(StandardCharsets.UTF_8));
