@@ -35,7 +35,7 @@ final class Summary {
             double shortest = rows.stream().mapToDouble(ScoreRow::horizon).min().orElseThrow();
             double longest = rows.stream().mapToDouble(ScoreRow::horizon).max().orElseThrow();
             rows.stream().filter(row -> row.horizon() == shortest || row.horizon() == longest)
-                    .map(Summary::score).forEach(out::add);
+                    .map(row -> score(task, row)).forEach(out::add);
         }
         return out;
     }
@@ -48,17 +48,20 @@ final class Summary {
 
     /** Returns the horizon in time units and steps. */
     static String length(ForecastTask task) {
+        return horizon(task, task.steps() * task.step()) + ", " + task.steps() + " steps of " + figure(task.step());
+    }
+
+    private static String horizon(ForecastTask task, double time) {
         String unit = task.snapshots().time().unit();
-        return "Horizon " + figure(task.steps() * task.step()) + (unit.isEmpty() ? "" : " " + unit) + ", " + task.steps()
-                + " steps of " + figure(task.step());
+        return "Horizon " + figure(time) + (unit.isEmpty() ? "" : " " + unit);
     }
 
     private static String scale(ForecastTask task) {
         return task.season().isPresent() ? "a season of " + task.season().getAsInt() + " steps" : "one step";
     }
 
-    private static String score(ScoreRow row) {
-        return "Horizon " + figure(row.horizon()) + ", " + row.method() + ": RMSE " + figure(row.rmse()) + ", MASE "
+    private static String score(ForecastTask task, ScoreRow row) {
+        return horizon(task, row.horizon()) + ", " + row.method() + ": RMSE " + figure(row.rmse()) + ", MASE "
                 + (Double.isNaN(row.mase()) ? "unknown" : figure(row.mase())) + ".";
     }
 

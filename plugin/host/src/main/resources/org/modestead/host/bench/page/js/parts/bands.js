@@ -60,7 +60,7 @@ function Band({band, entry, catalog, desk, drag}) {
   const own = drag?.kind === 'step' && steps.get(drag.step)?.stage === band.stage;
   const empty = band.rows.length === 0;
   return html`<section class=${'band' + (empty ? ' empty' : '') + (wanted || own ? ' wanted' : '')} data-band=${band.stage}
-      aria-label=${`${title}, ${empty ? 'no step yet' : `${band.rows.flat().length} steps`}`}>
+      aria-label=${`${title}, ${empty ? 'no step yet' : told(band.rows.flat().length)}`}>
     <h2 class="band-title">${title}</h2>
     ${empty
       ? html`<p class="band-hint">${wanted ? 'Drop it here' : hint(band.stage)}</p>`
@@ -78,6 +78,10 @@ const HINTS = {
   forecast: 'The recording is carried on here',
   report: 'Results are handed on here',
 };
+
+function told(count) {
+  return count === 1 ? '1 step' : `${count} steps`;
+}
 
 function hint(stage) {
   return HINTS[stage] ?? '';
