@@ -6,8 +6,8 @@ import java.util.Optional;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.kernel.KernelSpec;
-import org.modestead.engine.linalg.MatrixExponential;
 import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.linalg.MatrixExponential;
 import org.modestead.engine.recording.Snapshots;
 
 /**

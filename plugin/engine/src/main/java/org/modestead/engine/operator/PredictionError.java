@@ -6,8 +6,8 @@ import java.util.function.Function;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Progress;
-import org.modestead.engine.linalg.MatrixExponential;
 import org.modestead.engine.linalg.Matrices;
+import org.modestead.engine.linalg.MatrixExponential;
 import org.modestead.engine.recording.StateRun;
 
 /**

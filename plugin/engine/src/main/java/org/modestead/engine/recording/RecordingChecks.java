@@ -1,6 +1,5 @@
 package org.modestead.engine.recording;
 
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;

@@ -1,10 +1,10 @@
 package org.modestead.engine.wellposed;
 
 import java.util.List;
-import org.modestead.engine.recording.StateRun;
-import org.modestead.engine.linalg.Complex;
-import org.modestead.engine.spectrum.ModalExpansion;
 import org.ejml.data.ZMatrixRMaj;
+import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.recording.StateRun;
+import org.modestead.engine.spectrum.ModalExpansion;
 
 /**
  * The rate of an eigenfunction in the first and in the second half of the judging runs. In each half the multiplier over a lag τ, freed of the

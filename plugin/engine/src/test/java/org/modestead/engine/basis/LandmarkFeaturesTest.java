@@ -5,9 +5,9 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.Random;
 import org.ejml.data.DMatrixRMaj;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
-import org.junit.jupiter.api.Test;
 import org.modestead.engine.Progress;
 import org.modestead.engine.fixtures.Motions;
 import org.modestead.engine.kernel.Kernel;

@@ -4,8 +4,8 @@ import java.util.List;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.ejml.dense.row.CommonOps_DDRM;
-import org.modestead.engine.linalg.LinearAlgebra;
 import org.modestead.engine.linalg.Complex;
+import org.modestead.engine.linalg.LinearAlgebra;
 
 /** Rows C3 of the table of checks, by kernels, their norms and their occupation functions. */
 final class MeasuredSpaces {

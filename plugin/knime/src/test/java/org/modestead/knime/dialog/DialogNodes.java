@@ -8,8 +8,8 @@ import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeCatalog;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.Setting;
-import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.CellType;
+import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.TableSchema;
 
 /** Every node that is offered, and a table that each of them can be connected to. */

@@ -15,10 +15,10 @@ import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.Settings;
+import org.modestead.nodes.modelfile.PortFiles;
 import org.modestead.nodes.table.Column;
 import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.TableSchema;
-import org.modestead.nodes.modelfile.PortFiles;
 
 /** Takes up a model that was written by another session. */
 public final class ModelReaderNode implements Node {

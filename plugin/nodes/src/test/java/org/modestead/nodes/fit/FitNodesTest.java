@@ -19,8 +19,8 @@ import org.modestead.engine.kernel.KernelSpec;
 import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.nodes.contract.NodeResult;
-import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.contract.SettingFault;
+import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.testing.Ringing;
 import org.modestead.nodes.testing.Steps;
 

@@ -12,16 +12,16 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import org.junit.jupiter.api.Test;
-import org.modestead.nodes.table.TableSchema;
-import org.modestead.nodes.table.MemoryTable;
-import org.modestead.nodes.table.Column;
-import org.modestead.nodes.contract.NodeResult;
-import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.engine.Doubt;
-import org.modestead.nodes.document.ReportDocument;
+import org.modestead.nodes.contract.NodeDeclaration;
+import org.modestead.nodes.contract.NodeResult;
 import org.modestead.nodes.data.SignalGenerator;
+import org.modestead.nodes.document.ReportDocument;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.render.FigureRenderer;
+import org.modestead.nodes.table.Column;
+import org.modestead.nodes.table.MemoryTable;
+import org.modestead.nodes.table.TableSchema;
 import org.modestead.nodes.testing.Steps;
 
 /** What a node showed is shown again after it was read back. */
