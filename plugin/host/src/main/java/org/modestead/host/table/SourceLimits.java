@@ -10,6 +10,14 @@ import java.util.Optional;
  */
 record SourceLimits(int megabytes, boolean copied) {
 
+    /** DuckDB holds some vectors of 2048 texts, 16 bytes each, of every column at once. */
+    private static final double MEGABYTES_A_COLUMN = 0.2;
+
+    /** Returns the same for a text table of so many columns, with the memory that these need at least. */
+    SourceLimits holding(int columns) {
+        return new SourceLimits(Math.max(megabytes, (int) Math.ceil(MEGABYTES_A_COLUMN * columns)), copied);
+    }
+
     /** Returns the fault when DuckDB ran out of memory or disk, empty when it is about something else. */
     Optional<TableFault> explain(String shown, DuckDbMessage message) {
         if (message.isAbout("no space left") || message.isAbout("max_temp_directory_size")) {

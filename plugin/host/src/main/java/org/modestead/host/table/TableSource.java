@@ -119,7 +119,7 @@ public final class TableSource implements Node {
         return List.of(
                 new Setting.Whole(new Setting.Common("memory", "Memory", "Limits",
                         "Memory for reading; any file can be read with the default, because it is never loaded "
-                        + "whole."), "MB",
+                        + "whole. A text file takes at least 0.2 MB a column."), "MB",
                         Database.LEAST_MEGABYTES, Database.MOST_MEGABYTES, OptionalLong.of(Database.USUAL_MEGABYTES)),
                 new Setting.Flag(new Setting.Common("copy", "Copy to results", "Limits", "Whether the table as read is "
                         + "written to the result folder too; switch it off for very large files."), true));
@@ -169,7 +169,7 @@ public final class TableSource implements Node {
                 : CsvSource.open(csvFormat(settings, path, shown), missing);
         boolean comma = format.equals(CSV) && settings.text("decimal").equals("comma");
         TextRules rules = new TextRules(comma, settings.text("time-format").strip(), settings.texts("text-columns"));
-        return new TextTable(file, rules, limits, types).open();
+        return new TextTable(file, rules, limits.holding(file.names().size()), types).open();
     }
 
     private static String format(Settings settings, String shown) {

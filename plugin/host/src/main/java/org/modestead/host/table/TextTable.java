@@ -79,8 +79,7 @@ final class TextTable implements Explainer {
         String parsed = rules.parsed(column.type(), column.name());
         String text = Sql.name(column.name());
         return column.type() == CellType.TEXT ? text
-                : "CASE WHEN " + text + " IS NOT NULL AND " + parsed + " IS NULL THEN error('" + mark(column) + "') ELSE "
-                         + parsed + " END AS " + text;
+                : "coalesce(" + parsed + ", CASE WHEN " + text + " IS NOT NULL THEN error('" + mark(column) + "') END) AS " + text;
     }
 
     /** Stands in DuckDB's message for the column whose cell did not fit; the row is looked for only then. */
