@@ -20,10 +20,16 @@ class WorkflowsTest {
     @TempDir
     Path folder;
 
-    /** All, or those that are named by {@code -Dplatform.workflows=a,b}. */
-    static Stream<String> names() {
+    /** Those of every folder that holds one, or those that are named by {@code -Dplatform.workflows=a,b}. */
+    static List<String> names() throws IOException {
         String some = System.getProperty("platform.workflows", "");
-        return Stream.of((some.isBlank() ? "three-decays,three-flows,pump-house,driven-shaft,sunspots,city-weather,kept-model" : some).split(","));
+        if (!some.isBlank()) {
+            return List.of(some.split(","));
+        }
+        try (Stream<Path> folders = Files.list(FOLDERS)) {
+            return folders.filter(folder -> Files.isRegularFile(folder.resolve("workflow.json"))).map(folder -> folder.getFileName().toString())
+                    .sorted().toList();
+        }
     }
 
     @ParameterizedTest
