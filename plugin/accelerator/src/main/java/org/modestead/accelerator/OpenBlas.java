@@ -73,6 +73,13 @@ final class OpenBlas implements LinearAlgebra {
     public DMatrixRMaj multiplyTransB(DMatrixRMaj a, DMatrixRMaj b) {
         int m = a.numRows;
         int n = b.numRows;
+        if (a == b && isLong(a.numCols, m, m)) {
+            return mirrored(sum(a.numCols, m, m, (from, count, out) -> {
+                try (Loan rows = columns(a, from, count)) {
+                    openblas.cblas_dsyrk(CblasRowMajor, CblasUpper, CblasNoTrans, m, count, 1, rows.doubles(), count, 1, out, m);
+                }
+            }));
+        }
         if (isLong(a.numCols, m, n)) {
             return sum(a.numCols, m, n, (from, count, out) -> {
                 try (Loan left = columns(a, from, count); Loan right = columns(b, from, count)) {

@@ -199,7 +199,7 @@ record ForecastTask(
                     + " apart (the median training step), and observed values are interpolated linearly to these times for"
                     + " the scores."));
         }
-        if (operator.compression().inputs().isPresent()) {
+        if (operator.functions().inputs().isPresent()) {
             out.add(new Doubt("inputs-assumed", "Forecast and scores take the inputs as they were recorded, those after the origin"
                     + " included; where the recording ends they are held at their last values."));
         } else if (!snapshots.inputs().isEmpty()) {

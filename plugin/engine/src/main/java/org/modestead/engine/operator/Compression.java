@@ -16,7 +16,7 @@ import org.modestead.engine.basis.FunctionBasis;
  *
  * <p>Where m is large, the arrays are held by factors and never formed; see {@link FactoredCompression}.
  */
-public sealed interface Compression permits GramCompression, FactoredCompression, CorrectedCompression {
+public sealed interface Compression permits GramCompression, FactoredCompression, CorrectedCompression, StatesCompression {
 
     /** Returns the functions b. */
     FunctionBasis basis();
@@ -42,4 +42,14 @@ public sealed interface Compression permits GramCompression, FactoredCompression
      * @throws org.modestead.engine.FitFault if G is zero or not finite
      */
     OrthonormalCompression whiten(int largest);
+
+    /**
+     * The same, with functions that nobody asks for left to be made where that is much work.
+     *
+     * @param largest cap on R, at least 1
+     * @throws org.modestead.engine.FitFault if G is zero or not finite
+     */
+    default Whitened whitened(int largest) {
+        return whiten(largest);
+    }
 }

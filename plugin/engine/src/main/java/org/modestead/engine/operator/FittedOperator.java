@@ -13,7 +13,7 @@ import org.modestead.engine.recording.Snapshots;
 /**
  * An operator fitted to snapshots: the compression up to the largest rank the data support, and the rank chosen.
  *
- * @param compression up to rank R
+ * @param functions up to rank R
  * @param rank chosen r in [1, R]
  * @param rankChoice why r was chosen, in words
  * @param ridge ρ that was applied, see {@link Ridge}
@@ -24,7 +24,7 @@ import org.modestead.engine.recording.Snapshots;
  * @param doubts what a reader of the results must know
  */
 public record FittedOperator(
-        OrthonormalCompression compression,
+        Whitened functions,
         int rank,
         String rankChoice,
         double ridge,
@@ -36,7 +36,7 @@ public record FittedOperator(
 
     /** Takes immutable copies. */
     public FittedOperator {
-        Objects.requireNonNull(compression);
+        Objects.requireNonNull(functions);
         Objects.requireNonNull(estimator);
         Objects.requireNonNull(kernel);
         doubts = List.copyOf(doubts);
@@ -44,17 +44,22 @@ public record FittedOperator(
 
     /** Returns the compression at the chosen rank. */
     public OrthonormalCompression chosen() {
-        return compression.leading(rank);
+        return functions.leading(rank);
+    }
+
+    /** Returns the compression up to the largest rank, which may have to be made first: ask {@link #functions} for what they tell. */
+    public OrthonormalCompression compression() {
+        return functions.whole();
     }
 
     /** The same operator judged against other runs: only the runs change, not what was fitted. */
     public FittedOperator on(Snapshots others) {
-        return new FittedOperator(compression, rank, rankChoice, ridge, estimator, method, kernel, others, doubts);
+        return new FittedOperator(functions, rank, rankChoice, ridge, estimator, method, kernel, others, doubts);
     }
 
     /** Returns step map or generator. */
     public Evolution evolution() {
-        return compression.evolution();
+        return functions.evolution();
     }
 
     /**
@@ -66,7 +71,7 @@ public record FittedOperator(
      */
     public DMatrixRMaj propagator(double time) {
         DMatrixRMaj action = chosen().action();
-        if (compression.evolution() instanceof Evolution.StepMap map) {
+        if (functions.evolution() instanceof Evolution.StepMap map) {
             return Matrices.power(action, wholeSteps(time, map.step()));
         }
         return MatrixExponential.of(Matrices.scaled(action, time));

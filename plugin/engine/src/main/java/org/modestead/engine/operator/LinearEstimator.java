@@ -48,6 +48,12 @@ public record LinearEstimator(int stride, NoiseCorrection correction, InputUse i
 
     @Override
     public Compression compress(Snapshots snapshots, Progress progress) {
+        if (correction == NoiseCorrection.NONE && (inputs == InputUse.LEFT_IN || snapshots.inputs().isEmpty())) {
+            Optional<StatesCompression> states = StatesCompression.of(snapshots, stride);
+            if (states.isPresent()) {
+                return states.get();
+            }
+        }
         StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, stride);
         return StepRegression.of(pairs, new Coordinates(snapshots.stateSize()), inputs, InputTerms::new, correction);
     }

@@ -51,13 +51,14 @@ public final class OperatorFitter {
             Progress progress) {
         progress.checkCancelled();
         progress.report(0.5, "whitening");
-        OrthonormalCompression full = Ridge.apply(compression.whiten(largest(rule)), ridge);
+        Whitened full = ridge == 0 ? compression.whitened(largest(rule)) : Ridge.apply(compression.whiten(largest(rule)), ridge);
         progress.checkCancelled();
         progress.report(0.8, "choosing the rank");
         RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
+        Whitened made = full.at(choice.rank());
         progress.report(1, "fitted");
-        return new FittedOperator(full, choice.rank(), choice.reason(), ridge, estimator, method(estimator, full), estimator.kernel(), snapshots,
-                doubts(full, choice.rank(), snapshots));
+        return new FittedOperator(made, choice.rank(), choice.reason(), ridge, estimator, method(estimator, full), estimator.kernel(), snapshots,
+                doubts(made, choice.rank(), snapshots));
     }
 
     /**
@@ -79,11 +80,11 @@ public final class OperatorFitter {
         return whitened;
     }
 
-    private static String method(Estimator estimator, OrthonormalCompression full) {
+    private static String method(Estimator estimator, Whitened full) {
         return estimator.describe() + full.inputs().map(effect -> ", inputs " + effect.use().words()).orElse("");
     }
 
-    private static double freeShare(OrthonormalCompression full, InputEffect effect) {
+    private static double freeShare(Whitened full, InputEffect effect) {
         double free = Arrays.stream(full.singular()).map(s -> s * s).sum();
         double explained = 0;
         for (int j = 0; j < full.rank(); j++) {
@@ -100,7 +101,7 @@ public final class OperatorFitter {
         return rule instanceof RankRule.HardThreshold ? Integer.MAX_VALUE : LARGEST_RANK;
     }
 
-    private static List<Doubt> doubts(OrthonormalCompression full, int rank, Snapshots snapshots) {
+    private static List<Doubt> doubts(Whitened full, int rank, Snapshots snapshots) {
         List<Doubt> doubts = new ArrayList<>(LinearAlgebra.installed().doubts());
         double thin = full.singular()[rank - 1] / full.singular()[0];
         if (thin < THIN) {

@@ -41,7 +41,8 @@ public record OrthonormalCompression(
         Evolution evolution,
         Optional<NoisyStep> noisy,
         Optional<InputEffect> inputs,
-        Optional<ImposedStructure> imposed) {
+        Optional<ImposedStructure> imposed)
+        implements Whitened {
 
     /** Without a noise correction and without inputs. */
     public OrthonormalCompression(FunctionBasis basis, DMatrixRMaj map, DMatrixRMaj action, DMatrixRMaj second,
@@ -124,16 +125,8 @@ public record OrthonormalCompression(
         return out;
     }
 
-    /** Returns R. */
-    public int rank() {
-        return singular.length;
-    }
-
-    /**
-     * Returns the compression onto the leading r functions; a noise correction is made and a structure imposed anew for them.
-     *
-     * @param r in [1, R]
-     */
+    /** A noise correction is made and a structure imposed anew for them. */
+    @Override
     public OrthonormalCompression leading(int r) {
         if (r == rank()) {
             return this;
@@ -149,9 +142,14 @@ public record OrthonormalCompression(
         return imposed.map(imposing -> free.constrained(imposing.structure())).orElse(free);
     }
 
-    /** Returns the number of functions of the state that the q are combined from. */
-    public int functions() {
-        return basis.size() - inputs.map(effect -> effect.terms().size()).orElse(0);
+    @Override
+    public OrthonormalCompression whole() {
+        return this;
+    }
+
+    @Override
+    public Whitened at(int r) {
+        return this;
     }
 
     /** Returns what the functions are evaluated at for every state of a run: the states, with the inputs where they are separated. */

@@ -16,7 +16,7 @@ final class RankSelection {
     private RankSelection() {}
 
     /** @throws FitFault if the rule asks for what cannot be */
-    static RankChoice choose(RankRule rule, OrthonormalCompression full, Estimator estimator, double ridge, Snapshots snapshots,
+    static RankChoice choose(RankRule rule, Whitened full, Estimator estimator, double ridge, Snapshots snapshots,
             Progress progress) {
         if (rule instanceof RankRule.Fixed fixed) {
             return fixed(fixed.rank(), full);
@@ -47,7 +47,7 @@ final class RankSelection {
         return new RankChoice(choice.rank(), "no singular value drops clearly below the one before; " + choice.reason());
     }
 
-    private static RankChoice fixed(int rank, OrthonormalCompression full) {
+    private static RankChoice fixed(int rank, Whitened full) {
         if (rank < 1 || rank > full.rank()) {
             throw new FitFault("rank", "rank " + rank + " was asked for but " + full.snapshots() + " snapshots of "
                     + full.basis().describe() + " hold only " + full.rank() + " independent directions",
@@ -71,7 +71,7 @@ final class RankSelection {
                 sum / total, share));
     }
 
-    private static RankChoice hardThreshold(OrthonormalCompression full) {
+    private static RankChoice hardThreshold(Whitened full) {
         int rows = full.snapshots();
         int columns = full.innerProduct() == InnerProduct.DATA ? full.functions() : rows;
         double beta = (double) Math.min(rows, columns) / Math.max(rows, columns);
@@ -88,7 +88,7 @@ final class RankSelection {
         return falling.length % 2 == 1 ? falling[middle] : (falling[middle - 1] + falling[middle]) / 2;
     }
 
-    private static RankChoice holdout(int largest, OrthonormalCompression full, Estimator estimator, double ridge,
+    private static RankChoice holdout(int largest, Whitened full, Estimator estimator, double ridge,
             Snapshots snapshots, Progress progress) {
         if (largest < 1) {
             throw new FitFault("rank", "the largest rank to try is " + largest, "give at least 1");

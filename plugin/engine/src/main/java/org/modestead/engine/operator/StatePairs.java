@@ -86,6 +86,12 @@ record StatePairs(DMatrixRMaj now, DMatrixRMaj next, double step, List<StateRun>
         return out;
     }
 
+    /** Returns the number of pairs in the training runs, without making the states. */
+    static long number(Snapshots snapshots, int stride) {
+        return snapshots.runs(Snapshots.Part.TRAINING).stream().filter(run -> run.weight() > 0)
+                .mapToLong(run -> Math.max(0, run.samples() - snapshots.delay().reach() - stride)).sum();
+    }
+
     /** Returns whether some training run has a pair at this stride. */
     static boolean exist(Snapshots snapshots, int stride) {
         return snapshots.states(Snapshots.Part.TRAINING).stream().anyMatch(run -> run.count() > stride);

@@ -50,7 +50,7 @@ public record Stabilisation(List<Pole> poles, List<PoleLine> lines, List<Integer
         }
 
         private List<Integer> of(FittedOperator operator) {
-            int most = operator.compression().rank();
+            int most = operator.functions().rank();
             int to = highest == 0 ? Math.min(most, Math.max(LEAST, TIMES * operator.rank())) : highest;
             if (to > most || lowest + every > to) {
                 throw new FitFault("model orders", "orders " + lowest + " to " + to + " by " + every + " were asked for, and the data hold orders"
@@ -77,7 +77,7 @@ public record Stabilisation(List<Pole> poles, List<PoleLine> lines, List<Integer
         for (int order : asked) {
             progress.checkCancelled();
             progress.report((double) asked.indexOf(order) / asked.size(), "order " + order);
-            follower.add(found(operator.compression().leading(order), channels));
+            follower.add(found(operator.functions().leading(order), channels));
         }
         return new Stabilisation(follower.poles(), follower.lines(), asked);
     }

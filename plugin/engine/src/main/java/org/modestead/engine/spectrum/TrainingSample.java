@@ -29,7 +29,7 @@ public record TrainingSample(DMatrixRMaj states, DMatrixRMaj starts, int channel
 
     /** Collects what the functions of an operator are evaluated at over the training part. */
     public static TrainingSample of(FittedOperator operator) {
-        return of(operator.snapshots(), operator.compression()::arguments);
+        return of(operator.snapshots(), operator.chosen()::arguments);
     }
 
     private static TrainingSample of(Snapshots snapshots, Function<StateRun, DMatrixRMaj> arguments) {

@@ -54,7 +54,7 @@ record Followed(List<Complex> rates, ZMatrixRMaj functions, DMatrixRMaj starts, 
      */
     static Followed of(FittedOperator operator, Spectrum spectrum, List<Mode> modes, Frame frame, double stretch) {
         TrainingSample sample = TrainingSample.of(operator);
-        boolean divided = operator.compression().innerProduct() == InnerProduct.SPACE;
+        boolean divided = operator.functions().innerProduct() == InnerProduct.SPACE;
         DMatrixRMaj starts = frame.functions().evaluate(sample.starts());
         if (divided) {
             CommonOps_DDRM.divideCols(starts, frame.scale());

@@ -55,7 +55,7 @@ public final class ForecastSpread {
      *     be resampled, and above rank 80, where it would take long
      */
     public static Optional<ForecastSpread> of(FittedOperator operator, SpreadPlan plan, Progress progress) {
-        boolean power = operator.evolution() instanceof Evolution.StepMap && operator.compression().inputs().isEmpty();
+        boolean power = operator.evolution() instanceof Evolution.StepMap && operator.functions().inputs().isEmpty();
         if (!power || operator.rank() > HIGHEST_RANK) {
             return Optional.empty();
         }

@@ -14,6 +14,7 @@ import org.modestead.engine.operator.InputEffect;
 import org.modestead.engine.operator.ObservedRun;
 import org.modestead.engine.operator.OrthonormalCompression;
 import org.modestead.engine.operator.Ridge;
+import org.modestead.engine.operator.Whitened;
 
 /**
  * The leading R' functions of a fit, within which it is repeated with other weights: what the observations sum to is
@@ -37,7 +38,7 @@ record Frame(OrthonormalCompression functions, double[] scale, int rank, double 
     private static final double NULL = 1e-12;
 
     static Frame of(FittedOperator operator) {
-        OrthonormalCompression full = operator.compression();
+        Whitened full = operator.functions();
         int rank = operator.rank();
         int width = Math.min(full.rank(), Math.max(rank, Math.min(WIDE, 3 * rank + 12)));
         OrthonormalCompression head = full.leading(width);

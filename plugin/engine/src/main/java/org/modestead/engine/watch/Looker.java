@@ -53,8 +53,9 @@ record Looker(FittedOperator operator, Spectrum spectrum, List<Mode> watched, do
         Snapshots stored = operator.snapshots();
         Snapshots own = stored.replaced(window.pieces(), List.of(), stored.smoothing());
         FittedOperator whole = OperatorFitter.fit(own, operator.estimator(), new RankRule.Fixed(1), operator.ridge(), progress);
-        return new FittedOperator(whole.compression(), Math.min(operator.rank(), whole.compression().rank()), operator.rankChoice(),
-                whole.ridge(), whole.estimator(), whole.method(), whole.kernel(), own, whole.doubts());
+        int rank = Math.min(operator.rank(), whole.functions().rank());
+        return new FittedOperator(whole.functions().at(rank), rank, operator.rankChoice(), whole.ridge(), whole.estimator(),
+                whole.method(), whole.kernel(), own, whole.doubts());
     }
 
     private Optional<Sighting> sighting(Mode mode, List<Pair> pairs, Optional<SamplingSpread> spread) {

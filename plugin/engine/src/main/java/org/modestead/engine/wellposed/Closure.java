@@ -48,7 +48,7 @@ final class Closure {
     /** Returns the rank of the whole space where the ladder reaches its end; empty otherwise. */
     private static OptionalInt whole(Evidence evidence) {
         int trusted = Ladder.trusted(evidence.operator());
-        double[] singular = evidence.operator().compression().singular();
+        double[] singular = evidence.operator().functions().singular();
         boolean reached = trusted == evidence.operator().rank() || evidence.rungs().size() < Settling.LEAST_RUNGS && evidence.rungs().contains(trusted);
         return reached && Math.pow(singular[trusted - 1] / singular[0], 2) > CLEAR ? OptionalInt.of(trusted) : OptionalInt.empty();
     }

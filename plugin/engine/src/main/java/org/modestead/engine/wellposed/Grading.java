@@ -63,7 +63,7 @@ final class Grading {
                 failed(findings, mode, "space-norm-growth").ifPresent(out::add);
                 failed(findings, mode, "holdout-residual").filter(f -> !Double.isNaN(f.value()) && !FittedRank.spoilt(mode, evidence) && !blurred(mode, evidence))
                         .ifPresent(out::add);
-                if (out.isEmpty() && evidence.operator().compression().innerProduct() == InnerProduct.SPACE) {
+                if (out.isEmpty() && evidence.operator().functions().innerProduct() == InnerProduct.SPACE) {
                     out.addAll(restless(findings, mode));
                 }
             }

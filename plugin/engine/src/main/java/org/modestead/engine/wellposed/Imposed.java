@@ -22,6 +22,6 @@ final class Imposed {
 
     /** Returns whether orthogonal eigenfunctions were imposed, so that none overlap. */
     static boolean orthogonality(FittedOperator operator) {
-        return operator.compression().imposed().map(ImposedStructure::structure).filter(structure -> structure.orthogonal()).isPresent();
+        return operator.chosen().imposed().map(ImposedStructure::structure).filter(structure -> structure.orthogonal()).isPresent();
     }
 }

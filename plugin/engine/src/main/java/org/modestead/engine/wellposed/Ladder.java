@@ -116,10 +116,10 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         int fitted = operator.rank();
         int from = settings.ladderFrom() > 0 ? settings.ladderFrom() : Math.min(2, fitted);
         int to = settings.ladderTo() > 0 ? settings.ladderTo() : Math.min(trusted(operator), Math.max(3 * fitted, fitted + HIGHER));
-        if (settings.ladderTo() > operator.compression().rank() || settings.ladderFrom() > fitted) {
+        if (settings.ladderTo() > operator.functions().rank() || settings.ladderFrom() > fitted) {
             throw new FitFault("ladder", "ranks " + from + " to " + to + " were asked for, the operator has rank " + fitted
-                    + " and the data hold " + operator.compression().rank(),
-                    "let the ladder start at or below " + fitted + " and end at or below " + operator.compression().rank());
+                    + " and the data hold " + operator.functions().rank(),
+                    "let the ladder start at or below " + fitted + " and end at or below " + operator.functions().rank());
         }
         TreeSet<Integer> ranks = new TreeSet<>(List.of(Math.min(from, fitted), fitted, Math.max(to, fitted)));
         int low = ranks.first();
@@ -133,7 +133,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
 
     /** Highest rank whose direction is not rounding noise. */
     static int trusted(FittedOperator operator) {
-        double[] singular = operator.compression().singular();
+        double[] singular = operator.functions().singular();
         int rank = operator.rank();
         while (rank < singular.length && Math.pow(singular[rank] / singular[0], 2) > TRUSTED) {
             rank++;

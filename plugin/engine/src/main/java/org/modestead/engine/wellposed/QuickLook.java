@@ -57,7 +57,7 @@ final class QuickLook {
 
     /** Length r, one an eigenpair of the fitted rank; NaN where the judging runs do not excite it. */
     private static double[] residuals(FittedOperator operator, JudgingRuns judging) {
-        OrthonormalCompression compression = operator.compression().leading(operator.rank());
+        OrthonormalCompression compression = operator.chosen();
         ModalExpansion expansion = ModalExpansion.of(compression);
         List<Tracks> tracks = judging.tracks(expansion);
         double[] judged = tracks.get(0).sizes();

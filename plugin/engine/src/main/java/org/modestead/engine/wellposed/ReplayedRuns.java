@@ -69,8 +69,8 @@ record ReplayedRuns(List<Run> training, List<Run> holdout, Snapshots like) {
             return run;
         }
         StateRun states = snapshots.embed(run);
-        ZMatrixRMaj values = ComplexMatrices.product(operator.compression().leading(operator.rank())
-                .evaluate(operator.compression().arguments(states)), spectrum.vectors());
+        ZMatrixRMaj values = ComplexMatrices.product(operator.chosen()
+                .evaluate(operator.chosen().arguments(states)), spectrum.vectors());
         DMatrixRMaj out = new DMatrixRMaj(run.samples(), snapshots.channels().size());
         for (Mode mode : carrying) {
             for (int j : mode.indices()) {

@@ -76,7 +76,7 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
 
     private static boolean questioned(Finding f, Evidence evidence) {
         boolean counts = f.mode() == 0 || evidence.carries(evidence.spectrum().modes().get(f.mode() - 1));
-        boolean onlyWitness = f.check().equals("settling") && evidence.operator().compression().innerProduct() == InnerProduct.DATA;
+        boolean onlyWitness = f.check().equals("settling") && evidence.operator().functions().innerProduct() == InnerProduct.DATA;
         return !f.passed() && !Double.isNaN(f.value()) && counts && NOISY.contains(f.check()) && !onlyWitness;
     }
 

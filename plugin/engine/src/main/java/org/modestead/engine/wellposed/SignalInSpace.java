@@ -31,7 +31,7 @@ public final class SignalInSpace implements Check {
 
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
-        if (evidence.operator().compression().innerProduct() != InnerProduct.SPACE || evidence.operator().kernel().isEmpty()) {
+        if (evidence.operator().functions().innerProduct() != InnerProduct.SPACE || evidence.operator().kernel().isEmpty()) {
             return List.of();
         }
         SpaceFacts facts = KernelFamilies.create(evidence.operator().kernel().get()).space();

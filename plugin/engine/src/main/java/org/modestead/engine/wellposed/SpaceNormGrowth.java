@@ -26,7 +26,7 @@ public final class SpaceNormGrowth implements Check {
     @Override
     public List<Finding> examine(Evidence evidence, Progress progress) {
         List<Finding> findings = new ArrayList<>();
-        if (evidence.operator().compression().innerProduct() == InnerProduct.DATA) {
+        if (evidence.operator().functions().innerProduct() == InnerProduct.DATA) {
             findings.add(new Finding(0, id(), 1, Double.NaN, true,
                     "The space is the average over the data, so its norm cannot tell an eigenfunction from an imitation."));
             return findings;

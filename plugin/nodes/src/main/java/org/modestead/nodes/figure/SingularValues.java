@@ -16,7 +16,7 @@ public final class SingularValues {
      * @return kind {@link Figure.Kind#CURVES}, logarithmic upwards
      */
     public static Figure figure(FittedOperator operator) {
-        double[] singular = operator.compression().singular();
+        double[] singular = operator.functions().singular();
         double[] number = IntStream.rangeClosed(1, singular.length).asDoubleStream().toArray();
         double[] relative = Arrays.stream(singular).map(value -> value / singular[0]).toArray();
         List<Figure.Layer> layers = List.of(

@@ -21,7 +21,7 @@ final class FitTable {
     private FitTable() {}
 
     static MemoryTable of(FittedOperator operator, double ridge) {
-        double[] singular = operator.compression().singular();
+        double[] singular = operator.functions().singular();
         TimeUnit unit = new TimeUnit(operator.snapshots().time().unit());
         MemoryTable.Builder rows = MemoryTable.builder(SCHEMA, "fit");
         rows.row("operator", operator.estimator().id());
@@ -29,13 +29,13 @@ final class FitTable {
         rows.row("kernel", operator.kernel().map(KernelSpec::label).orElse("none"));
         rows.row("kind", kind(operator.evolution(), unit));
         rows.row("highest frequency", frequency(operator.evolution().aliasingLimit(), unit));
-        rows.row("inner product", operator.compression().innerProduct() == InnerProduct.DATA ? "average over the data"
+        rows.row("inner product", operator.functions().innerProduct() == InnerProduct.DATA ? "average over the data"
                 : "kernel space");
-        rows.row("functions", operator.compression().basis().describe());
+        rows.row("functions", operator.functions().basis().describe());
         rows.row("inputs", inputs(operator));
         rows.row("structure", structure(operator.chosen()));
-        rows.row("snapshot pairs or pieces", Integer.toString(operator.compression().snapshots()));
-        rows.row("largest rank", Integer.toString(operator.compression().rank()));
+        rows.row("snapshot pairs or pieces", Integer.toString(operator.functions().snapshots()));
+        rows.row("largest rank", Integer.toString(operator.functions().rank()));
         rows.row("rank", Integer.toString(operator.rank()));
         rows.row("rank chosen by", operator.rankChoice());
         rows.row("condition", Digits.cell(singular[0] / singular[operator.rank() - 1]));
@@ -50,7 +50,7 @@ final class FitTable {
 
     private static String inputs(FittedOperator operator) {
         int columns = operator.snapshots().inputs().size();
-        return columns == 0 ? "none" : operator.compression().inputs().map(effect -> columns + ", " + effect.use().words() + ", "
+        return columns == 0 ? "none" : operator.functions().inputs().map(effect -> columns + ", " + effect.use().words() + ", "
                 + effect.count() + " independent terms").orElse(columns + ", " + InputUse.LEFT_IN.words());
     }
 

@@ -51,7 +51,7 @@ public final class MomentFitting {
         said.add("Fitted: " + operator.method() + ".");
         said.add(String.format(Locale.ROOT, "%d rows of %d runs were read; %d samples gave %d pairs of states.", moments.counts().rows(),
                 moments.counts().runs(), moments.counts().training(), moments.pairs().pairs()));
-        said.add("Rank " + operator.rank() + " of at most " + operator.compression().rank() + ": " + operator.rankChoice() + ".");
+        said.add("Rank " + operator.rank() + " of at most " + operator.functions().rank() + ": " + operator.rankChoice() + ".");
         return new NodeResult(Map.of("snapshots", operator.snapshots(), "operator", operator, "fit", FitTable.of(operator, ridge), "summary",
                 summary.build()), List.of(SingularValues.figure(operator)), said, List.copyOf(doubts));
     }

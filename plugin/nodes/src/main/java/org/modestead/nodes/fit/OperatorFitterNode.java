@@ -121,7 +121,7 @@ public final class OperatorFitterNode implements Node {
             doubts.add(new Doubt("kernel-unused", "A kernel is connected, but the operator " + operator.estimator()
                     + " uses none."));
         }
-        String rank = "Rank " + operator.rank() + " of at most " + operator.compression().rank() + ": "
+        String rank = "Rank " + operator.rank() + " of at most " + operator.functions().rank() + ": "
                 + operator.rankChoice() + ".";
         return new NodeResult(Map.of("operator", operator, "fit", FitTable.of(operator,
                 settings.number(FitSettings.RIDGE))),

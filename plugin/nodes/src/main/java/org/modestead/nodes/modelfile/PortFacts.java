@@ -55,7 +55,7 @@ final class PortFacts {
     private static List<PortFact> operator(FittedOperator operator) {
         List<PortFact> out = new ArrayList<>();
         out.add(new PortFact("method", operator.method()));
-        out.add(new PortFact("rank", operator.rank() + " of " + operator.compression().rank()));
+        out.add(new PortFact("rank", operator.rank() + " of " + operator.functions().rank()));
         out.add(new PortFact("channels", labels(operator.snapshots().channels())));
         out.add(new PortFact("time unit", unit(operator.snapshots().time().unit())));
         out.add(new PortFact("delay", delay(operator.snapshots().delay())));

@@ -38,10 +38,10 @@ final class MethodSection {
         entries.add(new Entry("What was fitted", Sentence.of(operator.method())));
         entries.add(new Entry("Estimator", operator.estimator().id()));
         entries.add(new Entry("Kernel", operator.kernel().map(KernelSpec::label).orElse("none")));
-        entries.add(new Entry("Inner product", operator.compression().innerProduct() == InnerProduct.SPACE
+        entries.add(new Entry("Inner product", operator.functions().innerProduct() == InnerProduct.SPACE
                 ? "that of the kernel's space" : "average over the data"));
         entries.add(new Entry("Evolution", evolution(operator.evolution(), unit)));
-        entries.add(new Entry("Rank", operator.rank() + " of at most " + operator.compression().rank()));
+        entries.add(new Entry("Rank", operator.rank() + " of at most " + operator.functions().rank()));
         entries.add(new Entry("Why this rank", Sentence.of(operator.rankChoice())));
         return new KeyValues("Operator", entries);
     }

@@ -54,13 +54,13 @@ public final class Matrices {
                 + " orthonormal functions into each other: the column says which function, the row what of it is found in which function."
                 + " A map that is its own mirror image about the diagonal belongs to a self-adjoint operator, whose eigenfunctions are"
                 + " orthogonal.", HeatMap.Side.numbered("function"), HeatMap.Side.numbered("function"), true, chosen.action()).offer());
-        if (operator.compression().rank() > operator.rank()) {
-            out.add(new HeatMap("whole-operator", "Compressed operator up to rank " + operator.compression().rank(), "The same up to the"
+        if (operator.functions().rank() > operator.rank()) {
+            out.add(new HeatMap("whole-operator", "Compressed operator up to rank " + operator.functions().rank(), "The same up to the"
                     + " largest rank that the data support. The block of the first " + operator.rank() + " rows and columns belongs to the"
                     + " chosen rank; the ladder climbs from block to block.", HeatMap.Side.numbered("function"),
                     HeatMap.Side.numbered("function"), true, operator.compression().action()).offer());
         }
-        gram(operator.compression().basis()).ifPresent(out::add);
+        gram(operator.functions().basis()).ifPresent(out::add);
         return out;
     }
 
