@@ -2,6 +2,7 @@ package org.modestead.engine.recording;
 
 import java.util.Arrays;
 import java.util.Optional;
+import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 
 /**
@@ -11,7 +12,7 @@ import org.ejml.data.DMatrixRMaj;
  * @param recorded name of the run it was cut from
  * @param weight of that run as recorded
  * @param times rising
- * @param values channels; written once, by {@link #prepare(Preparation)}
+ * @param values channels; those of the recorded run where every sample of it is one
  * @param inputs inputs
  * @param ends one past the last sample of training, calibration and holdout
  * @param interpolated samples at times that were not recorded
@@ -40,6 +41,10 @@ record Piece(
      */
     static Piece sample(String id, Run run, StagedRows rows, Gaps gaps, TargetTimes wanted) {
         double[] times = wanted.of(rows, gaps);
+        if (rows.values() == run.values() && Arrays.equals(times, run.times())) {
+            int[] same = IntStream.of(rows.ends()).map(end -> wanted.count(times, rows, end)).toArray();
+            return new Piece(id, run.id(), run.weight(), times, run.values(), run.inputs(), same, 0, rows.filled());
+        }
         DMatrixRMaj values = new DMatrixRMaj(times.length, rows.values().numCols);
         DMatrixRMaj inputs = new DMatrixRMaj(times.length, rows.inputs().numCols);
         int[] ends = new int[rows.ends().length];
@@ -70,14 +75,16 @@ record Piece(
         return ends[stage] - (stage == 0 ? 0 : ends[stage - 1]);
     }
 
-    /** Turns recorded values into prepared ones, in place. */
-    void prepare(Preparation preparation) {
+    /** Returns the same piece with prepared values instead of recorded ones. */
+    Piece prepared(Preparation preparation) {
         int n = values.numCols;
+        DMatrixRMaj out = values.createLike();
         for (int k = 0, at = 0; k < times.length; k++) {
             for (int c = 0; c < n; c++, at++) {
-                values.data[at] = preparation.prepare(c, times[k], values.data[at]);
+                out.data[at] = preparation.prepare(c, times[k], values.data[at]);
             }
         }
+        return new Piece(id, recorded, weight, times, out, inputs, ends, interpolated, filled);
     }
 
     /** Returns the same piece smoothed; no part reads a sample of a later one. */

@@ -21,7 +21,9 @@ record RunWeights(Map<String, Double> byRun) {
         Map<String, Double> given = new LinkedHashMap<>();
         for (Piece piece : training) {
             samples.merge(piece.recorded(), (double) piece.samples(Snapshots.Part.TRAINING), Double::sum);
-            noise.merge(piece.recorded(), NoiseLevel.none(channels).and(piece), NoiseLevel::and);
+            if (rule == RunWeighting.NOISE) {
+                noise.merge(piece.recorded(), NoiseLevel.none(channels).and(piece), NoiseLevel::and);
+            }
             given.put(piece.recorded(), piece.weight());
         }
         NoiseLevel pool = noise.values().stream().reduce(NoiseLevel.none(channels), NoiseLevel::and);

@@ -14,7 +14,8 @@ import org.modestead.engine.recording.Snapshots.Part;
  *
  * <p>Nothing in the training part depends on a value of calibration or holdout, nothing in calibration on holdout:
  * parts are cut at recorded samples first, interpolation reads the own and earlier parts only, trend and scales come
- * from the training samples. Memory: one copy of the recording, a second one of runs whose end is kept away.
+ * from the training samples. Memory: a copy of the runs that samples are added to, one of
+ * all where values are changed, one of runs whose end is kept away.
  */
 public final class SnapshotBuilder {
     private final Recording recording;
@@ -83,11 +84,9 @@ public final class SnapshotBuilder {
 
     private void prepare(Preparation preparation) {
         boolean untouched = plan.detrend() == Detrend.NONE && plan.scaling() == Scaling.NONE;
-        for (Piece piece : pieces) {
+        for (int i = 0; i < pieces.size() && !untouched; i++) {
             progress.checkCancelled();
-            if (!untouched) {
-                piece.prepare(preparation);
-            }
+            pieces.set(i, pieces.get(i).prepared(preparation));
         }
     }
 

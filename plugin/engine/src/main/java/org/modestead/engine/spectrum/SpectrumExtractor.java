@@ -1,6 +1,7 @@
 package org.modestead.engine.spectrum;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
@@ -104,23 +105,34 @@ public final class SpectrumExtractor {
 
     /** ‖joint - solo‖ over the larger of their norms, so that it does not depend on how the channels are turned. */
     private static double gap(ModalExpansion expansion, int j) {
-        double difference = 0;
-        double jointSize = 0;
-        double soloSize = 0;
-        for (int k = 0; k < expansion.joint().numCols; k++) {
-            Complex joint = ComplexMatrices.entry(expansion.joint(), j, k);
-            Complex solo = ComplexMatrices.entry(expansion.solo(), j, k);
-            difference = Math.hypot(difference, joint.minus(solo).abs());
-            jointSize = Math.hypot(jointSize, joint.abs());
-            soloSize = Math.hypot(soloSize, solo.abs());
+        double[] joint = row(expansion.joint(), j);
+        double[] solo = row(expansion.solo(), j);
+        double size = Math.max(norm(joint), norm(solo));
+        for (int k = 0; k < joint.length; k++) {
+            joint[k] -= solo[k];
         }
-        double size = Math.max(jointSize, soloSize);
-        return size == 0 ? 0 : difference / size;
+        return size == 0 ? 0 : norm(joint) / size;
+    }
+
+    private static double[] row(ZMatrixRMaj a, int j) {
+        return Arrays.copyOfRange(a.data, 2 * j * a.numCols, 2 * (j + 1) * a.numCols);
+    }
+
+    private static double norm(double[] parts) {
+        double largest = Arrays.stream(parts).map(Math::abs).max().orElse(0);
+        if (largest == 0 || Double.isInfinite(largest)) {
+            return largest;
+        }
+        double sum = 0;
+        for (double part : parts) {
+            sum += (part / largest) * (part / largest);
+        }
+        return largest * Math.sqrt(sum);
     }
 
     /** The joint weights; for a cluster what its members add together at the first state, since theirs alone mean nothing. */
     private static List<Complex> weights(ModalExpansion expansion, ZMatrixRMaj starts, List<Integer> group, int[] clusters) {
-        List<Complex> weights = new ArrayList<>();
+        List<Complex> weights = new ArrayList<>(expansion.joint().numCols);
         boolean clustered = clusters[group.get(0)] != 0;
         for (int k = 0; k < expansion.joint().numCols; k++) {
             Complex sum = Complex.ZERO;

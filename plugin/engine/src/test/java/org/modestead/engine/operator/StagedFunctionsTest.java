@@ -23,14 +23,14 @@ import org.modestead.engine.recording.Snapshots;
 /** Few states of very many components: the functions that are asked for come first, and nothing depends on when the others are made. */
 class StagedFunctionsTest {
 
-    private static final int COMPONENTS = 60_000;
+    private static final int COMPONENTS = 175_000;
     private static final int RANK = 4;
 
-    /** Three runs of 25 states, two damped oscillations and noise. */
+    /** Three runs of 9 states, two damped oscillations and noise. */
     private static Snapshots tall(double noise, double... weights) {
         Random random = new Random(5);
         double[] shapes = random.doubles(4L * COMPONENTS, -1, 1).toArray();
-        List<Run> runs = IntStream.range(0, weights.length).mapToObj(i -> Motions.run("r" + i, Motions.grid(25, 0.1), t -> {
+        List<Run> runs = IntStream.range(0, weights.length).mapToObj(i -> Motions.run("r" + i, Motions.grid(9, 0.1), t -> {
             double first = Math.exp(-0.1 * t);
             double second = 0.5 * Math.exp(-0.3 * t);
             double[] parts = {first * Math.cos(3 * t + i), first * Math.sin(3 * t + i), second * Math.cos(7 * t - i), second * Math.sin(7 * t - i)};
@@ -94,14 +94,14 @@ class StagedFunctionsTest {
         FittedOperator operator = fit(snapshots);
         OrthonormalCompression whole = operator.compression();
         OrthonormalCompression expected = allAtOnce(snapshots);
-        assertEquals(72, whole.rank());
-        assertEquals(72, operator.functions().rank());
+        assertEquals(24, whole.rank());
+        assertEquals(24, operator.functions().rank());
         StatePairs pairs = StatePairs.of(snapshots, Snapshots.Part.TRAINING, 1);
         DMatrixRMaj q = pairs.weights().rows(whole.evaluate(pairs.now()), 1 / Math.sqrt(pairs.count()));
         DMatrixRMaj gram = Matrices.gram(q);
-        for (int i = 0; i < 72; i++) {
+        for (int i = 0; i < 24; i++) {
             assertEquals(expected.singular()[i], whole.singular()[i], 1e-12 * expected.singular()[0]);
-            for (int j = 0; j < 72; j++) {
+            for (int j = 0; j < 24; j++) {
                 // rounding of one evaluation over the weakest of the directions, a thousandth of the first
                 assertEquals(i == j ? 1 : 0, gram.get(i, j), 1e-11);
             }

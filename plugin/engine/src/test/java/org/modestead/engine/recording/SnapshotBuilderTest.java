@@ -3,6 +3,7 @@ package org.modestead.engine.recording;
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertSame;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.modestead.engine.recording.Recordings.build;
@@ -45,7 +46,7 @@ class SnapshotBuilderTest {
         Snapshots snapshots = build(PLAIN, run);
         assertEquals(0.1, snapshots.step().orElseThrow(), 1e-16);
         assertArrayEquals(run.times(), snapshots.training().get(0).times());
-        assertArrayEquals(run.values().data, snapshots.training().get(0).values().data);
+        assertSame(run.values(), snapshots.training().get(0).values(), "what is not changed is not copied");
         assertEquals(List.of(), snapshots.doubts());
         assertArrayEquals(new double[] {1, 1}, snapshots.preparation().scale());
     }
@@ -56,6 +57,15 @@ class SnapshotBuilderTest {
         double[] before = run.values().data.clone();
         build(PLAIN.withPreparation(Detrend.LINEAR, Scaling.NONE), run);
         assertArrayEquals(before, run.values().data);
+    }
+
+    @Test
+    void norAreThoseOfARunWithoutAHole() {
+        Run run = run("A", grid(20, 0.1), Math::sin, t -> 3 + t);
+        double[] before = run.values().data.clone();
+        Snapshots detrended = build(PLAIN.withPreparation(Detrend.LINEAR, Scaling.NONE), run);
+        assertArrayEquals(before, run.values().data);
+        assertEquals(0, detrended.training().get(0).values().get(7, 1), 1e-12, "a straight line is all trend");
     }
 
     @Test

@@ -5,6 +5,7 @@ import java.nio.channels.FileChannel;
 import java.nio.file.Path;
 import java.nio.file.StandardOpenOption;
 import java.util.List;
+import java.util.OptionalLong;
 import java.util.stream.IntStream;
 import org.modestead.nodes.table.CellType;
 import org.modestead.nodes.table.Column;
@@ -61,6 +62,11 @@ public final class NpyTable implements Table {
     @Override
     public TableSchema schema() {
         return schema;
+    }
+
+    @Override
+    public OptionalLong rowCount() {
+        return OptionalLong.of(header.rows());
     }
 
     @Override

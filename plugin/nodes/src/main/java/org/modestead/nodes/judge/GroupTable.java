@@ -23,7 +23,7 @@ final class GroupTable {
     static MemoryTable of(Spectrum spectrum, List<ChannelGroup> groups, int most) {
         MemoryTable.Builder rows = MemoryTable.builder(SCHEMA, "groups");
         for (Mode mode : spectrum.modes()) {
-            if (most == 0 || mode.number() <= most) {
+            if (!groups.isEmpty() && (most == 0 || mode.number() <= most)) {
                 ChannelGroup.shares(spectrum, mode, groups).forEach(share -> rows.row((long) mode.number(), share.group().name(),
                         (long) share.group().channels().size(), share.energyShare(), share.magnitude(), share.phase(), share.inStep()));
             }

@@ -4,16 +4,26 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 
-/** Numbers of which it is not known beforehand how many will come, held in parts that are never copied until all are there. */
+/** Numbers of which it may not be known beforehand how many will come, held in parts that are never copied until all are there. */
 final class GrowingDoubles {
 
     private static final int FIRST_CAPACITY = 256;
     private static final int LARGEST_PART = 1 << 21;
 
     private final List<double[]> full = new ArrayList<>();
-    private double[] part = new double[FIRST_CAPACITY];
+    private double[] part;
     private int inPart;
     private int before;
+
+    /** Of which nothing is known. */
+    GrowingDoubles() {
+        this(FIRST_CAPACITY);
+    }
+
+    /** @param expected how many will come in all likelihood: if so, they are held once only */
+    GrowingDoubles(int expected) {
+        part = new double[expected];
+    }
 
     void add(double value) {
         if (inPart == part.length) {
@@ -37,7 +47,7 @@ final class GrowingDoubles {
     private void next(int least) {
         full.add(part);
         before = Math.addExact(before, part.length);
-        part = new double[Math.max(least, Math.min(before, LARGEST_PART))];
+        part = new double[Math.max(least, Math.max(FIRST_CAPACITY, Math.min(before, LARGEST_PART)))];
         inPart = 0;
     }
 
@@ -49,10 +59,10 @@ final class GrowingDoubles {
         return inPart > 0 ? part[inPart - 1] : full.get(full.size() - 1)[full.get(full.size() - 1).length - 1];
     }
 
-    /** Returns a copy of the right length. */
+    /** Returns them in an array of the right length; nothing may be added afterwards. */
     double[] toArray() {
         if (full.isEmpty()) {
-            return Arrays.copyOf(part, inPart);
+            return inPart == part.length ? part : Arrays.copyOf(part, inPart);
         }
         double[] out = new double[size()];
         int at = 0;

@@ -30,6 +30,8 @@ final class RecordingReader {
 
     private static final int ROWS_BETWEEN_REPORTS = 4096;
     private static final int NONE = -1;
+    /** More numbers than an array can hold are not asked for at once. */
+    private static final long MOST_EXPECTED = Integer.MAX_VALUE - 8;
     private final Table table;
     private final RecordingColumns columns;
     private final List<MeasuredColumn> channels;
@@ -115,7 +117,7 @@ final class RecordingReader {
     }
 
     private void append(RowCursor cursor, RecordedTime time) {
-        RunBuffer run = runs.computeIfAbsent(runName.read(cursor), RunBuffer::new);
+        RunBuffer run = runs.computeIfAbsent(runName.read(cursor), this::buffer);
         double at = time == null ? run.samples() * columns.rowStep() : timeOf(cursor, time);
         if (run.samples() > 0 && at <= run.lastTime()) {
             throw outOfOrder(cursor, run, time, at);
@@ -125,6 +127,13 @@ final class RecordingReader {
         channelCells.forEach(cell -> cell.read(cursor, run.values));
         inputCells.forEach(cell -> cell.read(cursor, run.inputs));
         watches.forEach(watch -> watch.see(cursor));
+    }
+
+    /** All rows belong to one run where no column names it. */
+    private RunBuffer buffer(String id) {
+        long rows = columns.run().isEmpty() ? table.rowCount().orElse(0) : 0;
+        long cells = rows * channels.stream().mapToLong(column -> column.names().size()).sum();
+        return rows > 0 && cells <= MOST_EXPECTED ? new RunBuffer(id, (int) rows, (int) cells) : new RunBuffer(id);
     }
 
     private void readWeight(NumberCell cell, RowCursor cursor, RunBuffer run) {
@@ -196,14 +205,24 @@ final class RecordingReader {
     /** The rows of one run so far. */
     private static final class RunBuffer {
         private final String id;
-        private final GrowingDoubles times = new GrowingDoubles();
-        private final GrowingDoubles values = new GrowingDoubles();
+        private final GrowingDoubles times;
+        private final GrowingDoubles values;
         private final GrowingDoubles inputs = new GrowingDoubles();
         private long lastRow;
         private double weight = 1;
 
         RunBuffer(String id) {
+            this(id, new GrowingDoubles(), new GrowingDoubles());
+        }
+
+        RunBuffer(String id, int rows, int cells) {
+            this(id, new GrowingDoubles(rows), new GrowingDoubles(cells));
+        }
+
+        private RunBuffer(String id, GrowingDoubles times, GrowingDoubles values) {
             this.id = id;
+            this.times = times;
+            this.values = values;
         }
 
         String id() {

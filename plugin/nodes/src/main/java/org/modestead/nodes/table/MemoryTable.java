@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.OptionalLong;
 
 /**
  * A table held in memory, one typed store a column; immutable once built, so many threads may read it.
@@ -58,6 +59,11 @@ public final class MemoryTable implements Table {
     /** Returns the number of rows. */
     public int rows() {
         return rows;
+    }
+
+    @Override
+    public OptionalLong rowCount() {
+        return OptionalLong.of(rows);
     }
 
     @Override

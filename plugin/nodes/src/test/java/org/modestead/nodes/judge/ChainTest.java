@@ -67,6 +67,7 @@ class ChainTest {
     void theShapeTableTellsMagnitudeAndPhaseAgainstTheLargestChannel() {
         NodeResult spectrum = ringing().spectrum();
         assertEquals(List.of("x", "y"), Steps.column(spectrum, "shapes", "channel"));
+        assertEquals(2, ((Table) spectrum.outputs().get("shapes")).rowCount().orElseThrow());
         double ratio = Steps.number(spectrum, "shapes", "magnitude", 1) / Steps.number(spectrum, "shapes", "magnitude",
                 0);
         assertEquals(2, ratio, CLEAN);

@@ -29,7 +29,6 @@ import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.contract.SettingsReader;
 import org.modestead.nodes.contract.Visibility;
 import org.modestead.nodes.modelfile.PortFiles;
-import org.modestead.nodes.table.MemoryTable;
 import org.modestead.nodes.table.Table;
 import org.modestead.nodes.words.Cautions;
 import org.modestead.nodes.words.TimeUnit;
@@ -125,7 +124,7 @@ final class LookJson {
         if (value instanceof Table table) {
             ObjectNode columns = json.putObject("table");
             columns.set("columns", columns(table, time, declaration));
-            columns.set("rows", table instanceof MemoryTable memory ? JSON.numberNode(memory.rows()) : JSON.nullNode());
+            columns.set("rows", table.rowCount().isPresent() ? JSON.numberNode(table.rowCount().getAsLong()) : JSON.nullNode());
         } else {
             json.putNull("table");
             PortFiles.describe(port.type(), value).forEach(fact -> facts.addObject().put("item", fact.item()).put("value", fact.value()));
