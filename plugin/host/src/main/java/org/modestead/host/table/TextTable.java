@@ -117,7 +117,7 @@ final class TextTable implements Explainer {
                     file.shown() + ", " + file.places().row(row.getLong(1)) + ", column " + column.name(),
                     "the text \"" + shortened(row.getString(2)) + "\" in a column of type " + column.type().title(),
                     "correct the cell, add this text to the setting missing, or name the column in the setting "
-                    + "text-columns"));
+                    + "text-columns", row.getString(2)));
         } catch (SQLException failure) {
             throw explainOnce(failure);
         }

@@ -11,9 +11,11 @@ import java.util.Optional;
 import java.util.function.Consumer;
 import org.modestead.engine.Fault;
 import org.modestead.engine.Progress;
+import org.modestead.host.table.TableFault;
 import org.modestead.host.table.TableSource;
 import org.modestead.nodes.contract.NodeInputs;
 import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.contract.SettingsReader;
 import org.modestead.nodes.figure.Figure;
@@ -27,7 +29,8 @@ import org.modestead.nodes.words.Sentence;
  *
  * @param file that was looked at
  * @param reading settings of the step that reads it, by key
- * @param roles of the columns
+ * @param longForm how one row a reading becomes one row a time; empty where there is one row a time
+ * @param roles of the columns, of one row a time
  * @param columns what was seen in each
  * @param why each column has its part, by name
  * @param rows looked at
@@ -37,10 +40,14 @@ import org.modestead.nodes.words.Sentence;
  * @param problems what stands in the way; empty when the steps can be laid out
  * @param figure the recording, thinned; empty where there is nothing to draw
  */
-public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWish.Roles roles, List<ColumnFacts> columns, Map<String, String> why, long rows,
+public record RecordingGuess(Path file, Map<String, Object> reading, Optional<LongForm> longForm, RecordingWish.Roles roles, List<ColumnFacts> columns, Map<String, String> why, long rows,
         boolean whole, RunScan runs, List<String> sentences, List<String> problems, Optional<Figure> figure) {
 
     private static final int FEWEST_ROWS = 20;
+    private static final int MOST_TEXTS = 8;
+    private static final String MISSING = "missing";
+    private static final List<String> STANDARD_MISSING = ((Setting.Texts) new TableSource().declaration().settings().stream()
+            .filter(setting -> setting.key().equals(MISSING)).findFirst().orElseThrow()).initial();
     private static final RecordingWish.Roles NO_ROLES = new RecordingWish.Roles("", "", "", List.of(), List.of());
 
     /** Takes immutable copies. */
@@ -57,9 +64,8 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         Map<String, Object> reading = new LinkedHashMap<>();
         try {
             reading.putAll(wish.reading().isPresent() ? wish.reading().get() : ReadingGuess.of(file));
-            Table table = open(file, reading);
-            TableScan scan = TableScan.of(table);
-            return of(file, reading, table, scan, wish.columns());
+            Scanned scanned = scan(file, reading);
+            return of(file, reading, scanned, wish.columns());
         } catch (Fault fault) {
             return nothing(file, reading, fault.getMessage());
         } catch (IOException unreadable) {
@@ -67,8 +73,35 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         }
     }
 
+    /** A table with one row a time, what was seen in it, and how it became so. */
+    private record Scanned(Table table, TableScan scan, Optional<LongForm> longForm) {
+
+        static Scanned of(Path file, Table table) {
+            TableScan scan = TableScan.of(table);
+            Optional<LongForm> found = LongForm.of(table, scan);
+            Table wide = found.map(form -> form.wide(table, context(file))).orElse(table);
+            return new Scanned(wide, found.isEmpty() ? scan : TableScan.of(wide), found);
+        }
+    }
+
+    /** Reads a table; texts in columns of numbers, such as "sensor off", count as missing cells from then on, as long as they are few different ones. */
+    private static Scanned scan(Path file, Map<String, Object> reading) {
+        for (int found = 0;; found++) {
+            try {
+                return Scanned.of(file, open(file, reading));
+            } catch (TableFault fault) {
+                List<Object> missing = new ArrayList<>(reading.get(MISSING) instanceof List<?> texts ? texts : STANDARD_MISSING);
+                if (fault.misfit().isEmpty() || found == MOST_TEXTS || missing.contains(fault.misfit().get())) {
+                    throw fault;
+                }
+                missing.add(fault.misfit().get());
+                reading.put(MISSING, missing);
+            }
+        }
+    }
+
     private static RecordingGuess nothing(Path file, Map<String, Object> reading, String problem) {
-        return new RecordingGuess(file, reading, NO_ROLES, List.of(), Map.of(), 0, true, new RunScan(List.of(), java.util.OptionalLong.empty()), List.of(),
+        return new RecordingGuess(file, reading, Optional.empty(), NO_ROLES, List.of(), Map.of(), 0, true, new RunScan(List.of(), java.util.OptionalLong.empty()), List.of(),
                 List.of(problem), Optional.empty());
     }
 
@@ -78,19 +111,24 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         SettingsReader.Reading read = SettingsReader.read(new TableSource(), stored);
         Settings settings = read.settings().orElseThrow(() -> new RecordingFault("setting " + read.problems().get(0).key(), read.problems().get(0).seen(),
                 read.problems().get(0).wanted()));
-        RunContext context = new RunContext(Progress.NONE, file.getParent(), file.getParent());
-        return (Table) new TableSource().run(new NodeInputs(Map.of()), settings, context).outputs().get("table");
+        return (Table) new TableSource().run(new NodeInputs(Map.of()), settings, context(file)).outputs().get("table");
     }
 
-    private static RecordingGuess of(Path file, Map<String, Object> reading, Table table, TableScan scan, Optional<RecordingWish.Roles> wished) {
+    private static RunContext context(Path file) {
+        return new RunContext(Progress.NONE, file.getParent(), file.getParent());
+    }
+
+    private static RecordingGuess of(Path file, Map<String, Object> reading, Scanned scanned, Optional<RecordingWish.Roles> wished) {
+        Table table = scanned.table();
+        TableScan scan = scanned.scan();
         RoleGuess.Guessed guessed = RoleGuess.of(scan);
         RecordingWish.Roles roles = wished.map(said -> known(said, table)).orElse(guessed.roles());
         RunScan runs = RunScan.of(table, roles, RecordingPicture.MOST_CHANNELS);
         List<ColumnFacts> channels = roles.channels().stream().flatMap(name -> scan.columns().stream().filter(facts -> facts.column().name().equals(name))).toList();
         Optional<CellType> time = type(scan.columns(), roles.time());
-        RecordingGuess guess = new RecordingGuess(file, reading, roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, List.of(), List.of(),
+        RecordingGuess guess = new RecordingGuess(file, reading, scanned.longForm(), roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, List.of(), List.of(),
                 RecordingPicture.of(runs, roles, channels, time));
-        return new RecordingGuess(file, reading, roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, guess.words(), guess.hindrances(time),
+        return new RecordingGuess(file, reading, scanned.longForm(), roles, scan.columns(), guessed.why(), scan.rows(), scan.whole(), runs, guess.words(), guess.hindrances(time),
                 guess.figure());
     }
 
@@ -156,11 +194,19 @@ public record RecordingGuess(Path file, Map<String, Object> reading, RecordingWi
         if (gaps > 0) {
             words.add(Sentence.count(gaps, "pause") + ": runs are split there.");
         }
+        longForm.ifPresent(form -> words.add(form.words()));
+        missingTexts().ifPresent(words::add);
         words.add(roles.time().isEmpty() ? "No column of times was found: rows count as evenly spaced." : "The time stands in column " + roles.time()
                 + (roles.timeUnit().isEmpty() ? "; its unit is not told: write it, so that rates have one." : "."));
         words.add(Sentence.count(roles.channels().size(), "channel")
                 + (roles.inputs().isEmpty() ? "" : " and " + Sentence.count(roles.inputs().size(), "known input")) + ".");
         return words;
+    }
+
+    private Optional<String> missingTexts() {
+        List<String> texts = reading.get(MISSING) instanceof List<?> all ? all.stream().filter(text -> !STANDARD_MISSING.contains(text))
+                .map(text -> "\"" + text + "\"").toList() : List.of();
+        return texts.isEmpty() ? Optional.empty() : Optional.of("Cells that hold " + String.join(" or ", texts) + " count as missing.");
     }
 
     private List<String> hindrances(Optional<CellType> time) {

@@ -10,7 +10,7 @@ import org.modestead.host.workflow.Step;
 import org.modestead.host.workflow.Workflow;
 
 /**
- * The steps for a recording, ready to run: read it, prepare it, fit, extract modes, judge them, forecast, and a report of all.
+ * The steps for a recording, ready to run: read it, where it has one row a reading bring it to one row a time, prepare it, fit, extract modes, judge them, forecast, and a report of all.
  *
  * <p>States stack as many samples as the strongest oscillation takes, so that few channels show it too; the rank is where the singular
  * values drop clearly, so that no noise is fitted and slow modes are not split, or else the one that predicts best; a quarter of the runs, or the end of each where there are few, is held out to judge by.
@@ -41,16 +41,21 @@ public final class RecordingPlan {
      */
     public static Workflow workflow(RecordingGuess guess, String name, String data, Path file) {
         RecordingPlan plan = new RecordingPlan(guess);
-        List<Step> steps = List.of(new Step("source", "table-source", plan.source(data)), new Step("snapshots", "snapshot-builder", plan.snapshots()),
+        List<Step> steps = new ArrayList<>(List.of(new Step("source", "table-source", plan.source(data))));
+        guess.longForm().ifPresent(form -> steps.add(new Step("wide", "table-query", Map.of("sql", form.sql()))));
+        steps.addAll(List.of(new Step("snapshots", "snapshot-builder", plan.snapshots()),
                 new Step("fit", "operator-fitter", plan.fit()), new Step("spectrum", "spectrum-extractor", Map.of()),
                 new Step("check", "wellposedness-checker", Map.of()), new Step("forecast", "forecast", Map.of("origin", "before-holdout")),
-                new Step("report", "mode-report", Map.of("title", name)));
-        return new Workflow(name, file, steps, links());
+                new Step("report", "mode-report", Map.of("title", name))));
+        return new Workflow(name, file, steps, plan.links());
     }
 
-    private static List<Link> links() {
+    private List<Link> links() {
         List<Link> links = new ArrayList<>();
-        link(links, "source.table", "snapshots.table");
+        if (guess.longForm().isPresent()) {
+            link(links, "source.table", "wide.input");
+        }
+        link(links, guess.longForm().isPresent() ? "wide.table" : "source.table", "snapshots.table");
         link(links, "snapshots.snapshots", "fit.snapshots", "check.snapshots", "forecast.snapshots", "report.snapshots");
         link(links, "fit.operator", "spectrum.operator", "check.operator", "forecast.operator", "report.operator");
         link(links, "spectrum.spectrum", "check.spectrum", "forecast.spectrum", "report.spectrum");

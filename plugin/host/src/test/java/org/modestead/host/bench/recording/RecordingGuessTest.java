@@ -111,6 +111,45 @@ class RecordingGuessTest {
     }
 
     @Test
+    void momentsWithATimeZoneAreTimes() throws IOException {
+        RecordingGuess guess = guess("zone.csv", "logged at,inside [degC]\n" + rows(300, i -> String.format(Locale.ROOT, "2026-03-%02dT%02d:%02d:00+01:00,%.3f",
+                1 + i / 144, i / 6 % 24, i % 6 * 10, StrictMath.sin(0.3 * i))));
+        assertRoles("logged at", "min", "", List.of("inside [degC]"), List.of(), guess);
+        assertEquals(10, guess.step(), 1e-9);
+        assertEquals(List.of(), guess.problems());
+        assertSetUp(RecordingPlan.workflow(guess, "zone", "zone.csv", folder.resolve("workflow.json")));
+    }
+
+    @Test
+    void textsInColumnsOfNumbersCountAsMissingAndAreTold() throws IOException {
+        RecordingGuess guess = guess("texts.csv", "# made by a logger\ntime;p [kPa];q\n" + rows(300, i -> number(0.1 * i) + ";"
+                + (i >= 40 && i < 44 ? "sensor off" : number(StrictMath.sin(0.3 * i))) + ";" + (i == 90 ? "---" : number(StrictMath.cos(0.3 * i)))));
+        assertRoles("time", "", "", List.of("p [kPa]", "q"), List.of(), guess);
+        assertEquals(List.of(), guess.problems());
+        assertTrue(guess.sentences().contains("Cells that hold \"sensor off\" or \"---\" count as missing."), guess.sentences().toString());
+        assertEquals(List.of(0L, 4L, 1L), guess.columns().stream().map(ColumnFacts::missing).toList());
+        Workflow workflow = RecordingPlan.workflow(guess, "texts", "texts.csv", folder.resolve("workflow.json"));
+        assertTrue(String.valueOf(workflow.step("source").orElseThrow().settings().get("missing")).contains("sensor off, ---"));
+        assertSetUp(workflow);
+    }
+
+    /** Three readings a time, in rows of their own; the first run misses one. */
+    @Test
+    void oneRowAReadingBecomesOneRowATime() throws IOException {
+        RecordingGuess guess = guess("long.csv", "id,trial,time_ms,sensor,value,by\n" + rows(900, i -> i + 1 + "," + (1 + i / 450) + "," + i / 3 % 150 * 5 + ","
+                + List.of("acc x", "acc y", "level's").get(i % 3) + "," + number(StrictMath.sin(0.1 * (i / 3)) + i % 3) + ",anna")
+                .replaceFirst("\n5,[^\n]*", ""));
+        assertRoles("time_ms", "ms", "trial", List.of("acc x", "acc y", "level's"), List.of(), guess);
+        assertEquals(300, guess.rows());
+        assertEquals(List.of(), guess.problems());
+        assertTrue(guess.sentences().contains("Column sensor names what column value measures: each of its 3 names becomes a column."), guess.sentences().toString());
+        assertEquals(1, guess.columns().stream().filter(facts -> facts.column().name().equals("acc y")).findFirst().orElseThrow().missing());
+        Workflow workflow = RecordingPlan.workflow(guess, "long", "long.csv", folder.resolve("workflow.json"));
+        assertEquals("table-query", workflow.step("wide").orElseThrow().node());
+        assertSetUp(workflow);
+    }
+
+    @Test
     void withoutATimeRowsCountAsEvenlySpaced() throws IOException {
         RecordingGuess guess = guess("plain.csv", "a,b\n" + rows(100, i -> number(StrictMath.sin(0.3 * i)) + "," + number(StrictMath.cos(0.3 * i))));
         assertRoles("", "", "", List.of("a", "b"), List.of(), guess);

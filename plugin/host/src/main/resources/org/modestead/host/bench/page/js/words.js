@@ -26,6 +26,20 @@ export function number(value, digits = 4) {
   return (value < 0 ? MINUS : '') + text;
 }
 
+/**
+ * A time of a recording as it is written: numbers as they are, dates of days since 1970, moments of seconds since then.
+ *
+ * @param {number|null} value
+ * @param {string} kind `date`, `date-time`, or empty for numbers
+ */
+export function moment(value, kind) {
+  if (typeof value !== 'number' || !kind) {
+    return number(value);
+  }
+  const text = new Date(value * (kind === 'date' ? 86400000 : 1000)).toISOString();
+  return kind === 'date' ? text.slice(0, 10) : text.slice(0, 19).replace('T', ' ').replace(/:00$/, '');
+}
+
 const RAISED = '\u2070\u00b9\u00b2\u00b3\u2074\u2075\u2076\u2077\u2078\u2079';
 
 /**
@@ -48,7 +62,7 @@ export function prose(sentence) {
 
 /** Words in which a number is not parted from its unit at the end of a line. @param {string} text */
 export function unparted(text) {
-  return text.replace(/(\d) (?=%|s\b|min\b|h\b)/g, '$1\u00a0');
+  return text.replace(/([\d\u2070-\u2079\u00b9\u00b2\u00b3]) (?=%|(?:s|min|h|d|Hz)\b)/g, '$1\u00a0').replace(/ \u00d7 (?=10)/g, '\u00a0\u00d7\u00a0');
 }
 
 /** A whole number with narrow blanks between thousands: 12 345. @param {number} value */

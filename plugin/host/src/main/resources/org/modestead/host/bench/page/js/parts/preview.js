@@ -1,6 +1,6 @@
 /** A recording at a glance: one strip a channel, each in its own range, time running to the right. */
 import {html} from '../../lib.js';
-import {number} from '../words.js';
+import {moment, number} from '../words.js';
 
 const WIDTH = 1000;
 const HEIGHT = 60;
@@ -13,7 +13,7 @@ export function Preview({figure}) {
   const from = all.reduce((a, b) => Math.min(a, b), Infinity);
   const to = all.reduce((a, b) => Math.max(a, b), -Infinity);
   return html`<figure class=${'preview' + (lines.length <= FEW ? ' few' : '')}><ul>${lines.map((line, i) => html`<${Strip} key=${i} line=${line} from=${from} to=${to} />`)}</ul>
-    <figcaption class="quiet small">${figure.x.label}: ${number(from)} to ${number(to)}. ${figure.caption}</figcaption></figure>`;
+    <figcaption class="quiet small">${figure.x.label}: ${moment(from, figure.x.time)} to ${moment(to, figure.x.time)}. ${figure.caption}</figcaption></figure>`;
 }
 
 function Strip({line, from, to}) {

@@ -4,10 +4,12 @@ import {getState, setState} from '../store.js';
 import {attempt, openDesk, run, say} from '../actions.js';
 import {nodeOf} from '../catalog.js';
 import {api} from '../api.js';
-import {counted, number} from '../words.js';
+import {counted, moment} from '../words.js';
 import {Draft} from './draft.js';
 import {Preview} from './preview.js';
 
+/** How the numbers of a column of times are to be read, by the type of its cells. */
+const KINDS = {DATE: 'date', DATE_TIME: 'date-time', ZONED_DATE_TIME: 'date-time'};
 const ROLES = [['time', 'Time'], ['run', 'Run'], ['channel', 'Channel'], ['input', 'Known input'], ['none', 'Leave out']];
 
 /** @param {{guess: object, back: () => any}} props the server's guess */
@@ -59,7 +61,7 @@ export function Recording({guess: first, back}) {
               onchange=${(e) => role(column.name, e.target.value)}>
               ${ROLES.map(([id, label]) => html`<option key=${id} value=${id} selected=${column.role === id}>${label}</option>`)}</select></td>
             <td>${column.role === 'time' ? html`<${TimeUnit} guess=${guess} ask=${ask} />` : column.unit}</td>
-            <td class="number">${number(column.low)}</td><td class="number">${number(column.high)}</td><td
+            <td class="number">${moment(column.low, KINDS[column.cell])}</td><td class="number">${moment(column.high, KINDS[column.cell])}</td><td
               class="number">${column.missing || ''}</td></tr>`)}</tbody></table></div>
         ${guess.all.length > 12 && html`<p class="help">${counted(guess.all.length, 'column')}.</p>`}
         <${Reading} guess=${guess} ask=${ask} />
@@ -90,11 +92,15 @@ function TimeUnit({guess, ask}) {
     value=${guess.columns.timeUnit} put=${(text) => ask(guess.reading, {...guess.columns, timeUnit: text.trim()})} />`;
 }
 
+function typed(kind, text) {
+  return kind === 'whole' ? Number(text) : kind === 'texts' ? text.split(',').map((one) => one.trim()).filter(Boolean) : text;
+}
+
 /** How the text of the file is read; the choices are those of the step that will read it. */
 function Reading({guess, ask}) {
   const source = nodeOf(getState().catalog, 'table-source');
   const settings = source?.settings.filter((setting) => Object.hasOwn(guess.reading, setting.key)
-    && ['choice', 'flag', 'whole', 'text'].includes(setting.kind)) ?? [];
+    && ['choice', 'flag', 'whole', 'text', 'texts'].includes(setting.kind)) ?? [];
   if (settings.length === 0) {
     return null;
   }
@@ -106,7 +112,7 @@ function Reading({guess, ask}) {
             selected=${option.id === guess.reading[setting.key]}>${option.label}</option>`)}</select>`
         : setting.kind === 'flag' ? html`<input type="checkbox" data-reading=${setting.key} checked=${guess.reading[setting.key]}
           onchange=${(e) => put(setting.key, e.target.checked)} />`
-          : html`<${Draft} class="field-input" data-reading=${setting.key} value=${String(guess.reading[setting.key] ?? '')}
-              put=${(text) => put(setting.key, setting.kind === 'whole' ? Number(text) : text)} />`}</label>`)}
+          : html`<${Draft} class="field-input" data-reading=${setting.key} value=${[guess.reading[setting.key] ?? ''].flat().join(', ')}
+              put=${(text) => put(setting.key, typed(setting.kind, text))} />`}</label>`)}
   </div></details>`;
 }
