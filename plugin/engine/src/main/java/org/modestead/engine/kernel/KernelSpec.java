@@ -1,8 +1,11 @@
 package org.modestead.engine.kernel;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Map;
 import java.util.OptionalDouble;
 import java.util.TreeMap;
+import java.util.stream.Collectors;
 
 /**
  * Names a kernel: enough to make it again.
@@ -11,6 +14,8 @@ import java.util.TreeMap;
  * @param parameters by name, sorted
  */
 public record KernelSpec(String family, Map<String, Double> parameters) {
+
+    private static final MathContext DIGITS = new MathContext(4);
 
     /** Takes an immutable, sorted copy. */
     public KernelSpec {
@@ -25,11 +30,15 @@ public record KernelSpec(String family, Map<String, Double> parameters) {
         return parameters.containsKey("rate") ? OptionalDouble.of(1 / Math.sqrt(parameters.get("rate"))) : OptionalDouble.empty();
     }
 
-    /** Returns for example {@code gaussian(scale=0.8)}. */
+    /** Returns the name for people, for example {@code Gaussian (scale 0.8)}, numbers to four significant digits; the id of a family that is not at hand. */
     public String label() {
-        StringBuilder text = new StringBuilder(family).append('(');
-        parameters.forEach((name, value) -> text.append(text.charAt(text.length() - 1) == '(' ? "" : ", ").append(name)
-                .append('=').append(value % 1 == 0 ? Long.toString(value.longValue()) : String.format(java.util.Locale.ROOT, "%.6g", value)));
-        return text.append(')').toString();
+        String title = KernelFamilies.byId(family).map(KernelFamily::title).orElse(family);
+        String values = parameters.entrySet().stream().map(one -> one.getKey() + " " + rounded(one.getValue())).collect(Collectors.joining(", "));
+        return values.isEmpty() ? title : title + " (" + values + ")";
+    }
+
+    private static String rounded(double value) {
+        BigDecimal number = new BigDecimal(value, DIGITS).stripTrailingZeros();
+        return number.scale() <= 0 && number.precision() - number.scale() < 7 ? number.toPlainString() : number.toString();
     }
 }

@@ -11,7 +11,6 @@ import org.modestead.engine.FitFault;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.Preparation;
 import org.modestead.engine.recording.Run;
-import org.modestead.engine.recording.Scaling;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.Snapshots.Fact;
 
@@ -71,7 +70,7 @@ final class KeptSnapshots {
         facts.add(new Fact("samples fitted", Long.toString(counts.training())));
         facts.add(new Fact("snapshot pairs", Long.toString(moments.pairs().pairs())));
         facts.add(new Fact("detrend", plan.centred() ? "mean" : "none"));
-        facts.add(new Fact("scaling", plan.scaling() == Scaling.NONE ? "none" : plan.scaling() == Scaling.STD ? "std" : "unit group"));
+        facts.add(new Fact("scaling", plan.scaling().words()));
         facts.add(new Fact("delay", plan.delay().depth() == 1 ? "none" : "depth " + plan.delay().depth() + ", spacing " + plan.delay().spacing()));
         facts.add(kept("training", moments.training()));
         facts.add(kept("calibration", moments.calibration()));

@@ -35,7 +35,7 @@ record SnapshotFacts(Recording recording, SnapshotPlan plan, PreparationLog log,
         facts.add(new Fact("samples left out", Long.toString(log.dropped())));
         facts.add(new Fact("samples at new times", Long.toString(log.interpolated())));
         facts.add(new Fact("detrend", lower(plan.detrend())));
-        facts.add(new Fact("scaling", lower(plan.scaling())));
+        facts.add(new Fact("scaling", plan.scaling().words()));
         facts.add(new Fact("smoothing", bare.smoothing().active() ? words(bare.smoothing(), bare.channels(), bare.preparation()) : "none"));
         facts.add(new Fact("delay", delay()));
         facts.add(new Fact("run weights", weights.words(plan.weighting())));

@@ -1,5 +1,7 @@
 package org.modestead.engine.wellposed;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.List;
 import java.util.Locale;
 import org.modestead.engine.Progress;
@@ -13,6 +15,8 @@ import org.modestead.engine.spectrum.ModeIntervals;
  * without intervals.
  */
 public final class SpreadOfRates implements Check {
+
+    private static final MathContext DIGITS = new MathContext(4);
 
     @Override
     public String id() {
@@ -32,8 +36,12 @@ public final class SpreadOfRates implements Check {
         String turn = mode.oscillates() ? String.format(Locale.ROOT, " and its angular frequency by %.3g", turning) : "";
         String sign = found.growth().low() < 0 && found.growth().high() > 0 ? " Whether it grows or fades is not certain." : "";
         return new Finding(mode.number(), id(), share, Double.NaN, true, String.format(Locale.ROOT,
-                "With other recordings of this kind its growth rate may be off by %.3g%s, together %.2g of the rate (%.4g %% intervals).%s",
-                growth, turn, share, 100 * found.level(), sign));
+                "With other recordings of this kind its growth rate may be off by %.3g%s, together %.2g of the rate (%s %% intervals).%s",
+                growth, turn, share, percent(found.level()), sign));
+    }
+
+    private static String percent(double level) {
+        return BigDecimal.valueOf(100 * level).round(DIGITS).stripTrailingZeros().toPlainString();
     }
 
     private static double half(Interval interval) {

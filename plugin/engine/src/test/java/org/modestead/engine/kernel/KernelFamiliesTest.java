@@ -141,11 +141,13 @@ class KernelFamiliesTest {
     }
 
     @Test
-    void aLabelNamesFamilyAndParameters() {
-        assertEquals("gaussian(scale=0.800000)", new KernelSpec("gaussian", Map.of("scale", 0.8)).label());
-        assertEquals("polynomial(degree=3, offset=1)", new KernelSpec("polynomial",
-                Map.of("offset", 1.0, "degree", 3.0)).label());
-        assertEquals("linear()", new KernelSpec("linear", Map.of()).label());
+    void aLabelIsInWordsForPeopleWithSensibleDigits() {
+        assertEquals("Gaussian (scale 0.8)", new KernelSpec("gaussian", Map.of("scale", 0.8)).label());
+        assertEquals("Gaussian (scale 1.235)", new KernelSpec("gaussian", Map.of("scale", 1.23456789)).label());
+        assertEquals("Polynomial (degree 3, offset 1)", new KernelSpec("polynomial", Map.of("offset", 1.0, "degree", 3.0)).label());
+        assertEquals("Exponential dot product (rate 120)", new KernelSpec("exponential", Map.of("rate", 120.0)).label());
+        assertEquals("Linear", new KernelSpec("linear", Map.of()).label(), "without parameters no brackets");
+        assertEquals("of-an-extension", new KernelSpec("of-an-extension", Map.of()).label());
     }
 
     @Test

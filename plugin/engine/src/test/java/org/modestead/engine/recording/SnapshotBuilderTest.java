@@ -348,7 +348,7 @@ class SnapshotBuilderTest {
                 .withPreparation(Detrend.MEAN, Scaling.UNIT_GROUP), run("A", grid(50, 0.1), Math::sin, Math::cos));
         assertEquals(List.of("recorded runs: 1", "recorded samples: 50", "channels: 2: c0, c1", "inputs: none",
                 "step: 0.1 s, as recorded", "gaps: none", "missing cells: 0 of 100", "samples left out: 0",
-                "samples at new times: 0", "detrend: mean", "scaling: unit group",
+                "samples at new times: 0", "detrend: mean", "scaling: standard deviation of the unit",
                 "smoothing: none", "delay: depth 4, spacing 2, reaching back 0.6 s", "run weights: every sample alike",
                 "training runs: 1", "training samples: 40",
                 "training states: 34", "calibration runs: 0", "calibration samples: 0", "calibration states: 0",

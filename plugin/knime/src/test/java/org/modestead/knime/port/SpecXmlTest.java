@@ -50,11 +50,11 @@ class SpecXmlTest {
     /** What a release that knows no kernels in specs leaves alone. */
     @Test
     void theKernelIsKeptWhereItIsKnownAndToldOnItsPort() throws Exception {
-        StageSpec known = new StageSpec(PortType.KERNEL, SPEC.outlook().withKernel("gaussian(scale=0.5)"));
+        StageSpec known = new StageSpec(PortType.KERNEL, SPEC.outlook().withKernel("Gaussian (scale 0.5)"));
         NodeSettings written = new NodeSettings("spec");
         SpecXml.write(known, written);
         assertEquals(known, SpecXml.read(written));
-        assertEquals("gaussian(scale=0.5)", PortViews.facts(known).get(0).value());
+        assertEquals("Gaussian (scale 0.5)", PortViews.facts(known).get(0).value());
         assertEquals("chosen from the data when the node runs", PortViews.facts(new StageSpec(PortType.KERNEL, SPEC.outlook())).get(0).value());
         assertEquals("channels", PortViews.facts(SPEC).get(0).item());
     }

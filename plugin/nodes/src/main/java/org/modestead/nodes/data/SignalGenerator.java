@@ -109,8 +109,8 @@ public final class SignalGenerator implements Node {
     private static List<Setting> disturbances() {
         return List.of(
                 new Setting.Number(new Common("noise", "Noise", "Disturbances",
-                        "Standard deviation of the noise as a share of a channel's usual swing (of the start 1 for a flow);"
-                                + " when not set 0.01 for the pump house and 0 for a flow."), "", 0, false, 1,
+                        "Standard deviation of the noise, for the pump house as a share of a channel's usual swing, for a flow in the"
+                                + " unit of its state x; when not set 0.01 for the pump house and 0 for a flow."), "", 0, false, 1,
                         OptionalDouble.empty()),
                 number(new Common("jitter", "Uneven steps", "Disturbances",
                         "Largest shift of a sample time as a share of the step.").when("scenario", PUMP_HOUSE), "", 0,

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.DoubleStream;
 import org.modestead.engine.choose.RankedKernel;
 import org.modestead.engine.kernel.KernelFamilies;
 import org.modestead.engine.kernel.KernelFamily;
@@ -71,7 +72,8 @@ public record RankingFigure(List<RankedKernel> rows, int steps) {
     }
 
     private Figure.Axis errors() {
-        double[] sorted = rows.stream().mapToDouble(RankedKernel::heldOutError).sorted().toArray();
+        double[] sorted = rows.stream().flatMapToDouble(row -> DoubleStream.of(row.heldOutError(), row.persistenceError()))
+                .filter(Double::isFinite).sorted().toArray();
         String label = "error " + ahead() + " / spread";
         return sorted[0] > 0 && sorted[sorted.length - 1] > WIDE * sorted[0] ? Figure.Axis.log(label) : Figure.Axis.linear(label);
     }

@@ -3,6 +3,7 @@ package org.modestead.nodes.figure;
 import java.util.Comparator;
 import java.util.List;
 import org.modestead.engine.forecast.ScoreRow;
+import org.modestead.nodes.words.TimeUnit;
 
 /** Forecast error against the naive methods, over the horizon. */
 public final class ScoreFigures {
@@ -15,9 +16,10 @@ public final class ScoreFigures {
      * The scale is logarithmic when the errors span more than a factor of 100.
      *
      * @param scores by method and horizon
+     * @param unit of the horizons
      * @return kind {@link Figure.Kind#CURVES}; without layers when nothing was scored
      */
-    public static Figure figure(List<ScoreRow> scores) {
+    public static Figure figure(List<ScoreRow> scores, TimeUnit unit) {
         List<String> methods = scores.stream().map(ScoreRow::method).distinct().toList();
         List<Figure.Layer> layers = methods.stream().map(method -> curve(scores, method,
                 method.equals(methods.get(0)))).toList();
@@ -26,7 +28,7 @@ public final class ScoreFigures {
                 + " fitted operator"
                         + " is worth using only where its curve lies below those of the naive methods.";
         return new Figure("scores", Figure.Kind.CURVES, "Forecast error by horizon", caption,
-                Figure.Axis.linear("horizon [time units of the recording]"), errorAxis(scores), layers);
+                Figure.Axis.linear(Axes.labelled("horizon", unit.name())), errorAxis(scores), layers);
     }
 
     private static Figure.Axis errorAxis(List<ScoreRow> scores) {
@@ -40,7 +42,7 @@ public final class ScoreFigures {
                 .sorted(Comparator.comparingDouble(ScoreRow::horizon)).toList();
         double[] errors = own.stream().mapToDouble(ScoreRow::rmse).map(e -> Double.isFinite(e) ? e : Double.NaN).toArray();
         double[] horizons = own.stream().mapToDouble(ScoreRow::horizon).toArray();
-        return new Figure.Line(method, "method:" + method, horizons, errors,
+        return new Figure.Line(method.replace('-', ' '), "method:" + method, horizons, errors,
                 first ? Figure.Emphasis.STRONG : Figure.Emphasis.NORMAL);
     }
 }

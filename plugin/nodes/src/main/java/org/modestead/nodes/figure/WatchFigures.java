@@ -83,8 +83,8 @@ public final class WatchFigures {
         layers.add(new Figure.Rule("limit", "", false, 1));
         layers.add(new Figure.Rule("limit", "", false, -1));
         return new Figure("watch-scores-" + mode.mode().number(), Figure.Kind.TIME_SERIES, "Charts of " + named(mode), "The moving averages of"
-                + " frequency, damping ratio and shape, each divided by its limit: beyond 1 or below -1 the figure has changed. A shape can only"
-                + " become less alike, so below -1 it says nothing.", horizontal(), Figure.Axis.linear("moving average over its limit"), layers);
+                + " frequency, damping ratio and shape, each divided by its limit: beyond 1 or below \u22121 the figure has changed. A shape can only"
+                + " become less alike, so below \u22121 it says nothing.", horizontal(), Figure.Axis.linear("moving average over its limit"), layers);
     }
 
     /** Where the mode counts as missing a mark stands at its stored frequency. */

@@ -163,7 +163,7 @@ final class KernelSettings {
         if (settings.text(CHOOSE).equals(RANK)) {
             return Optional.empty();
         }
-        return Optional.of(needsMedian(settings) ? settings.text(FAMILY) + ", its length scale from the data" : fixed(settings, Double.NaN).label());
+        return Optional.of(needsMedian(settings) ? KernelFamilies.byId(settings.text(FAMILY)).orElseThrow().title() + ", its length scale from the data" : fixed(settings, Double.NaN).label());
     }
 
     /** Returns the kernels to be compared, in the order of the settings. */

@@ -20,6 +20,7 @@ import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.figure.ScoreFigures;
+import org.modestead.nodes.words.TimeUnit;
 
 /** Forecasts the holdout from later and later origins and scores the operator against naive methods. */
 public final class BacktestNode implements Node {
@@ -86,7 +87,7 @@ public final class BacktestNode implements Node {
         BacktestResult result = RollingOrigin.run(snapshots, inputs.get("operator", FittedOperator.class),
                 inputs.find("verdict", Verdict.class), BacktestSettings.plan(settings), context.progress());
         return new NodeResult(Map.of("scores", ForecastTables.scores(result.scores()), "errors",
-                ForecastTables.errors(result, snapshots, context.progress())), List.of(ScoreFigures.figure(result.scores())),
+                ForecastTables.errors(result, snapshots, context.progress())), List.of(ScoreFigures.figure(result.scores(), new TimeUnit(snapshots.time().unit()))),
                 result.summary(), result.doubts());
     }
 }

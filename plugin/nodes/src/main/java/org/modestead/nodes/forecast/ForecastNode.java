@@ -24,6 +24,7 @@ import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.figure.ForecastFigures;
 import org.modestead.nodes.figure.ScoreFigures;
+import org.modestead.nodes.words.TimeUnit;
 
 /** Rebuilds what was recorded, forecasts with bands, and scores the forecast against naive methods. */
 public final class ForecastNode implements Node {
@@ -95,7 +96,7 @@ public final class ForecastNode implements Node {
                 context.progress());
         List<Figure> figures = new ArrayList<>(ForecastFigures.figures(snapshots, result, MOST_CHANNELS_DRAWN));
         if (!result.scores().isEmpty()) {
-            figures.add(ScoreFigures.figure(result.scores()));
+            figures.add(ScoreFigures.figure(result.scores(), new TimeUnit(snapshots.time().unit())));
         }
         return new NodeResult(Map.of("forecast", ForecastTables.forecast(result, snapshots, context.progress()), "reconstruction",
                 ForecastTables.reconstruction(result, snapshots, context.progress()), "scores", ForecastTables.scores(result.scores())),

@@ -76,7 +76,7 @@ final class JudgeNodeSettings {
     }
 
     private static Setting rank(String key, String label, String help, int initial) {
-        return new Setting.Whole(new Common(key, label, LADDER, help), "functions", 0, LARGEST_RANK,
+        return new Setting.Whole(new Common(key, label, LADDER, help), "", 0, LARGEST_RANK,
                 OptionalLong.of(initial));
     }
 

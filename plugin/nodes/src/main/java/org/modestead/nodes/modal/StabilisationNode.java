@@ -85,11 +85,11 @@ public final class StabilisationNode implements Node {
     private static List<Setting> settings() {
         return List.of(
                 new Setting.Whole(new Common(LOWEST, "Lowest order", "Orders", "Model order, that is number of functions, to begin with."),
-                        "functions", 1, LARGEST, OptionalLong.of(2)),
+                        "", 1, LARGEST, OptionalLong.of(2)),
                 new Setting.Whole(new Common(HIGHEST, "Highest order", "Orders", "Model order to end with; 0 takes three times the fitted"
-                        + " rank, and at least 30, as far as the data hold."), "functions", 0, LARGEST, OptionalLong.of(0)),
+                        + " rank, and at least 30, as far as the data hold."), "", 0, LARGEST, OptionalLong.of(0)),
                 new Setting.Whole(new Common(EVERY, "Step", "Orders", "Distance between orders. An oscillation takes two functions, so"
-                        + " steps of 2 are common practice."), "functions", 1, LARGEST, OptionalLong.of(2)),
+                        + " steps of 2 are common practice."), "", 1, LARGEST, OptionalLong.of(2)),
                 limit(FREQUENCY, "Change of frequency", "Largest relative change of the frequency from the order before for a pole that"
                         + " stays. Limits differ between trades; 0.01 is common practice.", StabilityLimits.DEFAULT.frequency()),
                 limit(DAMPING, "Change of damping", "Largest relative change of the damping ratio, or of the growth rate of what does not"

@@ -24,7 +24,7 @@ final class PortFacts {
             return snapshots(snapshots);
         }
         if (value instanceof Kernel kernel) {
-            return List.of(new PortFact("kernel", kernel.spec().label()), new PortFact("room", kernel.space().room().phrase()));
+            return List.of(new PortFact("kernel", kernel.spec().label()), new PortFact("holds", kernel.space().room().phrase()));
         }
         if (value instanceof FittedOperator operator) {
             return operator(operator);

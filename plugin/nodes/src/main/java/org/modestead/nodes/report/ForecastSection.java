@@ -46,7 +46,7 @@ final class ForecastSection {
             blocks.add(new Paragraph("Nothing was held out, so the forecast could not be scored against data the fit"
                     + " never saw."));
         } else {
-            blocks.add(new Picture(ScoreFigures.figure(source.forecast().result().scores())));
+            blocks.add(new Picture(ScoreFigures.figure(source.forecast().result().scores(), source.unit())));
             blocks.add(scores(source));
         }
     }
@@ -64,7 +64,7 @@ final class ForecastSection {
     private static Grid scores(ReportSource source) {
         List<ScoreRow> scores = source.forecast().scores();
         List<List<String>> rows = scores.stream().sorted(Comparator.comparingDouble(ScoreRow::horizon)).limit(MOST_ROWS)
-                .map(row -> List.of(Digits.cell(row.horizon()), row.method(), Digits.figure(row.rmse()),
+                .map(row -> List.of(Digits.cell(row.horizon()), row.method().replace('-', ' '), Digits.figure(row.rmse()),
                 Digits.figure(row.mae()),
                         Digits.figure(row.mase()), Double.isNaN(row.coverage()) ? "–" : Digits.percent(row.coverage()),
                         Digits.figure(row.intervalScore()))).toList();

@@ -17,6 +17,7 @@ import org.modestead.nodes.document.ReportDocument.Points;
 import org.modestead.nodes.document.ReportDocument.Section;
 import org.modestead.nodes.figure.Figure;
 import org.modestead.nodes.render.FigureRenderer;
+import org.modestead.nodes.words.Digits;
 
 /**
  * Writes a report as one HTML file that needs nothing beside it: style and pictures are in the page, there is no
@@ -180,7 +181,7 @@ public final class HtmlReport {
     }
 
     private void cell(String start, String end, Head head, String text) {
-        out.append('<').append(start).append(head.numeric() ? " class=\"number\"" : "").append('>').append(escaped(text))
+        out.append('<').append(start).append(head.numeric() ? " class=\"number\"" : "").append('>').append(escaped(Digits.prose(text)))
                 .append("</")
                 .append(end).append('>');
     }
@@ -194,7 +195,7 @@ public final class HtmlReport {
     }
 
     private void element(String name, String text) {
-        out.append('<').append(name).append('>').append(escaped(text)).append("</").append(name).append(">\n");
+        out.append('<').append(name).append('>').append(escaped(Digits.prose(text))).append("</").append(name).append(">\n");
     }
 
     private static String escaped(String text) {

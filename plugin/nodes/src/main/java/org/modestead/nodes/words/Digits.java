@@ -3,6 +3,7 @@ package org.modestead.nodes.words;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
+import java.util.regex.Pattern;
 
 /**
  * Writes numbers for people: as many significant digits as the purpose bears, the same in every locale.
@@ -22,7 +23,16 @@ public final class Digits {
     static final int FIGURE = 3;
     private static final int CELL = 5;
 
+    /** A number as a program writes it: not part of a name, and with a power of ten. */
+    private static final Pattern PROGRAM = Pattern.compile("(?<![\\w.])([-\u2212]?)(\\d+(?:\\.\\d+)?)[eE]([+-]?\\d+)(?![\\w.]*\\w)");
+
     private Digits() {}
+
+    /** Returns a sentence with its powers of ten as people write them: {@code 7.71e-07} becomes {@code 7.71 × 10⁻⁷}; a text without a blank is a name and stays. */
+    public static String prose(String sentence) {
+        return sentence.indexOf(' ') < 0 ? sentence : PROGRAM.matcher(sentence).replaceAll(number ->
+                (number.group(1).isEmpty() ? "" : MINUS) + number.group(2) + " × 10" + raised(Integer.parseInt(number.group(3))));
+    }
 
     /** A frequency, rate, period or amplitude in running text: three digits. */
     public static String figure(double value) {

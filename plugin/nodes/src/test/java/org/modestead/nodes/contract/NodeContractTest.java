@@ -92,6 +92,16 @@ class NodeContractTest {
                         assertEquals(List.of(), SettingValue.check(setting, value).problems(), setting.key()))));
     }
 
+    /** "Highest order: 0 functions" reads as if there were none, where 0 leaves the choice to the node. */
+    @TestFactory
+    Stream<DynamicTest> aCountThatMayBeZeroIsOfWhatItsLabelOrHelpTellsOf() {
+        return everyNode((declaration, node) -> declaration.settings().stream().filter(Setting.Whole.class::isInstance).map(Setting.Whole.class::cast)
+                .filter(whole -> whole.min() == 0 && whole.unit().matches("[a-z]{3,}")).forEach(whole -> {
+                    String told = (whole.common().label() + " " + whole.common().help()).toLowerCase(Locale.ROOT);
+                    assertTrue(told.contains(whole.unit().replaceFirst("s$", "")), whole.key() + " counts " + whole.unit());
+                }));
+    }
+
     @TestFactory
     Stream<DynamicTest> choicesOfferTheirDefaultAndExplainEachOption() {
         return everyNode((declaration, node) -> declaration.settings().stream().filter(Setting.Choice.class::isInstance)

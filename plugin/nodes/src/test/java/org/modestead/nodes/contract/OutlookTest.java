@@ -56,11 +56,11 @@ class OutlookTest {
     void aKernelIsForeseenAsFarAsItDoesNotDependOnTheData() {
         Outlook recording = new Outlook(List.of(new Channel("x", "m")), List.of(), Optional.empty());
         Expected inputs = new Expected(Map.of(), Map.of("snapshots", recording));
-        assertEquals(recording.withKernel("polynomial(degree=3, offset=1)"), expect(new KernelChooserNode(), inputs,
+        assertEquals(recording.withKernel("Polynomial (degree 3, offset 1)"), expect(new KernelChooserNode(), inputs,
                 Map.of("family", "polynomial", "degree", 3)).values().get("kernel"));
-        assertEquals(Optional.of("gaussian, its length scale from the data"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian"))
+        assertEquals(Optional.of("Gaussian, its length scale from the data"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian"))
                 .values().get("kernel").kernel());
-        assertEquals(Optional.of("gaussian(scale=0.800000)"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian", "scale-mode",
+        assertEquals(Optional.of("Gaussian (scale 0.8)"), expect(new KernelChooserNode(), inputs, Map.of("family", "gaussian", "scale-mode",
                 "explicit", "scale", 0.8)).values().get("kernel").kernel());
         assertEquals(recording, expect(new KernelChooserNode(), inputs, Map.of("choose", "rank")).values().get("kernel"));
     }

@@ -22,6 +22,7 @@ import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.TimeAxis;
 import org.modestead.engine.wellposed.Grade;
 import org.modestead.nodes.report.ReportFixture;
+import org.modestead.nodes.words.TimeUnit;
 
 class FigureFactoriesTest {
 
@@ -155,9 +156,9 @@ class FigureFactoriesTest {
 
     @Test
     void withoutScoresThePictureIsEmptyAndSaysWhy() {
-        Figure empty = ScoreFigures.figure(List.of());
+        Figure empty = ScoreFigures.figure(List.of(), new TimeUnit("s"));
         assertTrue(empty.layers().isEmpty());
         assertTrue(empty.caption().contains("Nothing was held out"));
-        assertFalse(ScoreFigures.figure(ReportFixture.forecast(ReportFixture.snapshots()).scores()).layers().isEmpty());
+        assertFalse(ScoreFigures.figure(ReportFixture.forecast(ReportFixture.snapshots()).scores(), new TimeUnit("s")).layers().isEmpty());
     }
 }

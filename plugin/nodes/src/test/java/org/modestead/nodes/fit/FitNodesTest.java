@@ -84,7 +84,7 @@ class FitNodesTest {
         sorted.sort(null);
         assertEquals(sorted, errors);
         assertEquals(List.of("1", "2", "3"), Steps.column(ranked, "ranking", "place"));
-        assertEquals("linear()", Steps.column(ranked, "ranking", "kernel").get(0), "ringing is linear motion");
+        assertEquals("Linear", Steps.column(ranked, "ranking", "kernel").get(0), "ringing is linear motion");
         assertEquals("linear", ((Kernel) ranked.outputs().get("kernel")).spec().family());
         assertEquals("kernel-ranking", ranked.figures().get(0).id());
         assertEquals(List.of("", "", ""), Steps.column(ranked, "ranking", "verdict"));
@@ -94,8 +94,8 @@ class FitNodesTest {
     void rankingByVerdictTellsEachKernelsVerdictAndWhatItsSpaceHolds() {
         NodeResult ranked = choose(Map.of("choose", "rank", "candidates", List.of("gaussian", "linear"),
                 "scale-multiples", List.of(1, 4), "judged-per-family", 1));
-        assertEquals(List.of("linear", "gaussian", "gaussian"), Steps.column(ranked, "ranking", "kernel").stream()
-                .map(label -> label.substring(0, label.indexOf('('))).toList());
+        assertEquals(List.of("Linear", "Gaussian", "Gaussian"), Steps.column(ranked, "ranking", "kernel").stream()
+                .map(label -> label.split(" ")[0]).toList());
         List<String> verdicts = Steps.column(ranked, "ranking", "verdict");
         // x' = Ax in the space of linear functions, whose two modes take in all there is
         assertTrue(List.of("stands", "settles").contains(verdicts.get(0)), verdicts.toString());
@@ -105,7 +105,7 @@ class FitNodesTest {
         List<String> holds = Steps.column(ranked, "ranking", "holds");
         assertTrue(holds.get(0).startsWith("modes of linear motion about zero only"), holds.get(0));
         assertTrue(holds.get(1).startsWith("no mode that grows or decays"), holds.get(1));
-        assertTrue(ranked.summary().get(0).startsWith("Of 3 kernels, linear() comes first"), ranked.summary().get(0));
+        assertTrue(ranked.summary().get(0).startsWith("Of 3 kernels, Linear comes first"), ranked.summary().get(0));
         assertTrue(ranked.summary().get(1).contains("modes of linear motion about zero"), ranked.summary().toString());
         assertEquals(Figure.Kind.MARKS, ranked.figures().get(0).kind());
     }

@@ -124,7 +124,7 @@ class StreamingFitNodeTest {
         NodeResult result = stream(Map.of("functions", functions, "scaling", "std", "waves", 40, "landmarks", 60, "rank-rule", "fixed", "rank", 25),
                 Progress.NONE);
         FittedOperator operator = (FittedOperator) result.outputs().get("operator");
-        assertTrue(operator.method().contains("gaussian(scale="), operator.method());
+        assertTrue(operator.method().contains("Gaussian (scale "), operator.method());
         assertEquals(25, operator.rank());
     }
 

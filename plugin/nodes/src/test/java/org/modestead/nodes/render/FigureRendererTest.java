@@ -33,6 +33,7 @@ import org.modestead.nodes.figure.RecordingFigure;
 import org.modestead.nodes.figure.ScoreFigures;
 import org.modestead.nodes.figure.ShapeFigures;
 import org.modestead.nodes.report.ReportFixture;
+import org.modestead.nodes.words.TimeUnit;
 import org.w3c.dom.Document;
 import org.xml.sax.InputSource;
 
@@ -48,7 +49,7 @@ class FigureRendererTest {
         figures.addAll(ShapeFigures.figures(ReportFixture.spectrum(), Preparation.identity(2), 1));
         figures.addAll(LadderFigures.figures(ReportFixture.spectrum(), ReportFixture.verdict(Grade.ABSENT)));
         figures.addAll(ForecastFigures.figures(snapshots, ReportFixture.forecast(snapshots), 1));
-        figures.add(ScoreFigures.figure(ReportFixture.forecast(snapshots).scores()));
+        figures.add(ScoreFigures.figure(ReportFixture.forecast(snapshots).scores(), new TimeUnit("s")));
         figures.add(curves(Figure.Axis.log("nothing"), List.of()));
         figures.add(marks());
         return figures;

@@ -32,6 +32,13 @@ class DigitsTest {
     }
 
     @Test
+    void sentencesHavePowersOfTenAsPeopleWriteThemAndNamesStay() {
+        assertEquals("its rate differs by 7.71 × 10⁻⁷, or \u22121.2 × 10⁶.", Digits.prose("its rate differs by 7.71e-07, or -1.2e+06."));
+        assertEquals("run 2e5b and sensor_1e3 of v1.2e4", Digits.prose("run 2e5b and sensor_1e3 of v1.2e4"), "parts of names");
+        assertEquals("7e3", Digits.prose("7e3"), "a name of its own");
+    }
+
+    @Test
     void roundingUpToAPowerOfTenKeepsTheNumberOfDigits() {
         assertEquals("10.0", Digits.figure(9.996));
         assertEquals("0.00100", Digits.figure(0.00099999));
