@@ -1,7 +1,6 @@
 package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import org.modestead.engine.forecast.Backtest.Errors;
 
@@ -9,9 +8,9 @@ import org.modestead.engine.forecast.Backtest.Errors;
  * A forecast as a distribution: its value less each error that was made at the same lead time in calibration, all equally
  * likely. It judges a method as a whole, where a band shows two quantiles only.
  *
- * @param errors per lead time and channel the errors of calibration, rising, prepared units
+ * @param errors per lead time and channel the errors of calibration, prepared units
  */
-record ErrorDistribution(List<List<double[]>> errors) {
+record ErrorDistribution(List<List<EqualChances>> errors) {
 
     /** Fewer errors are no distribution: their steps would be seen more than its shape. */
     private static final int FEWEST = 10;
@@ -22,22 +21,19 @@ record ErrorDistribution(List<List<double[]>> errors) {
      * @param channels n
      */
     static ErrorDistribution of(List<Errors> calibration, int leads, int channels) {
-        List<List<double[]>> out = new ArrayList<>();
+        List<List<EqualChances>> out = new ArrayList<>();
         for (int lead = 1; lead <= leads; lead++) {
-            List<double[]> at = new ArrayList<>();
+            List<EqualChances> at = new ArrayList<>();
             for (int c = 0; c < channels; c++) {
-                at.add(rising(calibration, lead, c));
+                at.add(EqualChances.of(errors(calibration, lead, c)));
             }
             out.add(List.copyOf(at));
         }
         return new ErrorDistribution(List.copyOf(out));
     }
 
-    private static double[] rising(List<Errors> calibration, int lead, int channel) {
-        double[] out = calibration.stream().filter(e -> e.leads() >= lead)
-                .mapToDouble(e -> e.values().get(lead - 1, channel)).toArray();
-        Arrays.sort(out);
-        return out;
+    private static double[] errors(List<Errors> calibration, int lead, int channel) {
+        return calibration.stream().filter(e -> e.leads() >= lead).mapToDouble(e -> e.values().get(lead - 1, channel)).toArray();
     }
 
     /**
@@ -45,7 +41,7 @@ record ErrorDistribution(List<List<double[]>> errors) {
      * forecast's distribution at what was observed, mirrored. NaN where calibration reaches the lead too seldom.
      */
     double score(int lead, int channel, double error) {
-        double[] rising = errors.get(lead - 1).get(channel);
-        return rising.length < FEWEST ? Double.NaN : Scores.crps(rising, error);
+        EqualChances made = errors.get(lead - 1).get(channel);
+        return made.count() < FEWEST ? Double.NaN : made.crps(error);
     }
 }

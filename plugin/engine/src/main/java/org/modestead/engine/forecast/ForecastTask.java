@@ -3,6 +3,7 @@ package org.modestead.engine.forecast;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Locale;
 import java.util.OptionalInt;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
@@ -46,6 +47,8 @@ record ForecastTask(
     // Times are read from text and added up; a step shorter than this share of a step too much is rounding.
     private static final double ROUNDING = 1e-6;
     private static final double DEFAULT_SHARE = 0.1;
+    // A row takes some 60 bytes: 2 GB.
+    private static final double MOST_ROWS = 1 << 25;
 
     /** @throws ForecastFault if the parts do not belong together or the plan cannot be met */
     static ForecastTask of(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, ForecastPlan plan) {
@@ -54,7 +57,9 @@ record ForecastTask(
         int memory = snapshots.delay().reach() + 1;
         List<Series> holdout = Series.of(snapshots, Part.HOLDOUT, step);
         List<Series> calibration = Series.of(snapshots, Part.CALIBRATION, step);
-        return new ForecastTask(snapshots, plan, step, memory, steps(snapshots, plan, holdout, memory, step),
+        int steps = steps(snapshots, plan, holdout, memory, step);
+        requireMemory(snapshots, steps);
+        return new ForecastTask(snapshots, plan, step, memory, steps,
                 season(snapshots, plan, spectrum, step), Region.of(snapshots), holdout,
                 BandSource.of(calibration, holdout, memory));
     }
@@ -118,6 +123,15 @@ record ForecastTask(
         int held = observedLeads(holdout, memory);
         double longest = runs(snapshots).mapToDouble(Run::duration).max().orElse(0);
         return held > 0 ? held : wholeSteps(DEFAULT_SHARE * longest, step);
+    }
+
+    private static void requireMemory(Snapshots snapshots, int steps) {
+        double runs = runs(snapshots).map(Run::id).distinct().count();
+        double rows = runs * steps * snapshots.channels().size();
+        if (rows > MOST_ROWS) {
+            throw new ForecastFault("forecast horizon", String.format(Locale.ROOT, "%d steps of %.0f runs and %d channels are %.3g rows", steps, runs,
+                    snapshots.channels().size(), rows), "choose a shorter horizon, fewer runs or fewer channels");
+        }
     }
 
     private static Stream<Run> runs(Snapshots snapshots) {

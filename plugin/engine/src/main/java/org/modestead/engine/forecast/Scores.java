@@ -94,11 +94,7 @@ final class Scores {
      * @param observed y
      */
     static double crps(double[] rising, double observed) {
-        double sum = 0;
-        for (int i = 0; i < rising.length; i++) {
-            sum += pinball((i + 0.5) / rising.length, rising[i], observed);
-        }
-        return 2 * sum / rising.length;
+        return EqualChances.of(rising).crps(observed);
     }
 
     /** Returns the mean, NaN of nothing. */

@@ -2,6 +2,7 @@ package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -38,8 +39,9 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
      */
     static List<Series> of(Snapshots snapshots, Snapshots.Part part, double step) {
         List<Series> out = new ArrayList<>();
+        Map<String, List<Run>> earlier = earlier(snapshots, part);
         for (Run run : snapshots.runs(part)) {
-            Series series = joined(snapshots, part, run, step);
+            Series series = joined(earlier, run, step);
             out.add(snapshots.step().isPresent() ? series : series.even(step, Math.max(series.first - 1, 0)));
         }
         return out;
@@ -52,8 +54,9 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
     static List<Series> ends(Snapshots snapshots, double step) {
         Map<String, Series> latest = new LinkedHashMap<>();
         for (Snapshots.Part part : Snapshots.Part.values()) {
+            Map<String, List<Run>> earlier = earlier(snapshots, part);
             for (Run run : snapshots.runs(part)) {
-                latest.merge(run.id(), joined(snapshots, part, run, step), (a, b) -> a.end() > b.end() ? a : b);
+                latest.merge(run.id(), joined(earlier, run, step), (a, b) -> a.end() > b.end() ? a : b);
             }
         }
         if (snapshots.step().isPresent()) {
@@ -62,14 +65,21 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
         return latest.values().stream().map(series -> series.even(step, series.length() - 1)).toList();
     }
 
-    private static Series joined(Snapshots snapshots, Snapshots.Part part, Run run, double step) {
-        Series out = new Series(run.id(), run.times(), run.values(), run.inputs(), run.leadIn());
+    /** Returns the runs of earlier parts by name, those of the part just before first. */
+    private static Map<String, List<Run>> earlier(Snapshots snapshots, Snapshots.Part part) {
+        Map<String, List<Run>> byName = new HashMap<>();
         for (int earlier = part.ordinal() - 1; earlier >= 0; earlier--) {
-            for (Run before : snapshots.runs(Snapshots.Part.values()[earlier])) {
-                if (before.id().equals(run.id())) {
-                    out = out.after(before, step);
-                }
+            for (Run run : snapshots.runs(Snapshots.Part.values()[earlier])) {
+                byName.computeIfAbsent(run.id(), name -> new ArrayList<>()).add(run);
             }
+        }
+        return byName;
+    }
+
+    private static Series joined(Map<String, List<Run>> earlier, Run run, double step) {
+        Series out = new Series(run.id(), run.times(), run.values(), run.inputs(), run.leadIn());
+        for (Run before : earlier.getOrDefault(run.id(), List.of())) {
+            out = out.after(before, step);
         }
         return out;
     }

@@ -4,6 +4,7 @@ import java.util.Optional;
 import org.modestead.engine.RecordingFault;
 import org.modestead.engine.recording.GapPolicy;
 import org.modestead.engine.recording.MissingPolicy;
+import org.modestead.engine.recording.SizeLimits;
 import org.modestead.engine.recording.Snapshots.Part;
 
 /**
@@ -170,9 +171,8 @@ public final class StreamPass {
 
     private boolean isComplete(double time, double[] values, boolean own) {
         for (int c = 0; c < plan.channels().size(); c++) {
-            if (Double.isInfinite(values[c])) {
-                throw new RecordingFault("run " + run + ", time " + plan.time().format(time) + ", channel " + plan.channels().get(c).name(),
-                        "the value is " + values[c], "replace it by a finite number or leave the cell empty");
+            if (!SizeLimits.holds(values[c]) && !Double.isNaN(values[c])) {
+                throw SizeLimits.tooLarge("run " + run + ", time " + plan.time().format(time) + ", channel " + plan.channels().get(c).name(), values[c]);
             }
             if (Double.isNaN(values[c])) {
                 if (plan.missing() == MissingPolicy.REFUSE) {

@@ -160,6 +160,7 @@ public final class PreparedAlike {
                 }
             }
         }
+        SizeLimits.requirePrepared(name, values, fitted.channels());
         Run run = new Run(name, times, values, known, 0, parts.get(0).weight());
         return fresh.smoothing().active() ? run : fitted.smoothing().apply(run);
     }

@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.stream.IntStream;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.Doubt;
@@ -13,8 +14,8 @@ import org.modestead.engine.RecordingFault;
  * Whether a recording can be used at all, before any preparation.
  *
  * <p>Refused: no channel, no run, two runs of one name, a run of fewer than two samples, times that are no finite
- * numbers or do not rise, infinite values, a channel or an input without a single number in some run, and channels that
- * are all constant. One constant channel among others is a doubt: it carries nothing, but harms nothing either.
+ * numbers or do not rise, infinite values, numbers beyond {@link SizeLimits}, a channel or an input without a single number in some run,
+ * and channels that are all constant. One constant channel among others is a doubt: it carries nothing, but harms nothing either.
  */
 public final class RecordingChecks {
     private final Recording recording;
@@ -40,6 +41,8 @@ public final class RecordingChecks {
             checks.numbers(run, run.values(), recording.channels(), "channel");
             checks.numbers(run, run.inputs(), recording.inputs(), "input");
         }
+        checks.sizes(recording.channels().size(), false);
+        checks.sizes(recording.inputs().size(), true);
         return checks.constants();
     }
 
@@ -75,6 +78,10 @@ public final class RecordingChecks {
             if (i > 0 && times[i] <= times[i - 1]) {
                 throw risingFault(run, i);
             }
+            Optional<RecordingFault> size = SizeLimits.ofTime("run " + run.id() + ", sample " + (i + 1), times[i], i == 0 ? 1 : times[i] - times[i - 1]);
+            if (size.isPresent()) {
+                throw size.get();
+            }
         }
     }
 
@@ -95,7 +102,7 @@ public final class RecordingChecks {
         boolean[] hasNumber = new boolean[n];
         boolean whole = false;
         for (int i = 0; i < run.samples(); i++) {
-            if (!finite(values.data, i * n, n)) {
+            if (!usable(values.data, i * n, n)) {
                 cells(run, i, values, columns, kind, hasNumber);
             } else if (!whole) {
                 Arrays.fill(hasNumber, true);
@@ -111,21 +118,28 @@ public final class RecordingChecks {
         }
     }
 
-    /** Zero times a number is zero, times anything else no number. */
-    private static boolean finite(double[] data, int from, int length) {
-        double sum = 0;
-        for (int k = from; k < from + length; k++) {
-            sum += 0 * data[k];
+    private void sizes(int columns, boolean input) {
+        for (int c = 0; c < columns; c++) {
+            Optional<RecordingFault> tooSmall = SizeLimits.ofColumn(recording, c, input);
+            if (tooSmall.isPresent()) {
+                throw tooSmall.get();
+            }
         }
-        return sum == 0;
+    }
+
+    private static boolean usable(double[] data, int from, int length) {
+        boolean usable = true;
+        for (int k = from; k < from + length; k++) {
+            usable &= SizeLimits.holds(data[k]);
+        }
+        return usable;
     }
 
     private void cells(Run run, int row, DMatrixRMaj values, List<Channel> columns, String kind, boolean[] hasNumber) {
         for (int c = 0; c < hasNumber.length; c++) {
             double value = values.data[row * hasNumber.length + c];
-            if (Double.isInfinite(value)) {
-                throw new RecordingFault(wording.sample(run, row) + ", " + kind + " " + columns.get(c).name(),
-                        "the value is " + value, "replace it by a finite number or leave the cell empty");
+            if (!SizeLimits.holds(value) && !Double.isNaN(value)) {
+                throw SizeLimits.tooLarge(wording.sample(run, row) + ", " + kind + " " + columns.get(c).name(), value);
             }
             hasNumber[c] |= !Double.isNaN(value);
         }

@@ -42,7 +42,7 @@ public final class SnapshotBuilder {
      * @return runs of each part in recorded order; a run cut into several pieces is named {@code id#1, id#2, ...}
      * @throws RecordingFault if the recording cannot be used as planned, see {@link RecordingChecks}; if a gap or a
      *     missing cell is refused; if a run is too short for two states; if the delays need even times and the times are
-     *     uneven; if no run is left to train; if a channel to be scaled does not vary
+     *     uneven; if no run is left to train; if a channel to be scaled does not vary; if a sample is beyond {@link SizeLimits} once scaled
      */
     public static Snapshots build(Recording recording, SnapshotPlan plan, Progress progress) {
         return new SnapshotBuilder(recording, plan, progress).build();
@@ -87,6 +87,7 @@ public final class SnapshotBuilder {
         for (int i = 0; i < pieces.size() && !untouched; i++) {
             progress.checkCancelled();
             pieces.set(i, pieces.get(i).prepared(preparation));
+            SizeLimits.requirePrepared(pieces.get(i).id(), pieces.get(i).values(), recording.channels());
         }
     }
 

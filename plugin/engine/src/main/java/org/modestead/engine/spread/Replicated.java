@@ -49,7 +49,7 @@ record Replicated(double fitted, double[] values) {
         return new Interval(Math.max(least, Math.min(most, centre - half)), Math.min(most, Math.max(least, centre + half)));
     }
 
-    /** Returns the interval of a positive figure, found on its logarithm. */
+    /** Returns the interval of a positive figure, found on its logarithm; an upper end beyond all numbers is missing. */
     Interval positive(double level, double pieces) {
         if (!(fitted > 0)) {
             return interval(level, pieces, 0, Double.POSITIVE_INFINITY);
@@ -57,7 +57,8 @@ record Replicated(double fitted, double[] values) {
         DoubleUnaryOperator log = value -> Math.log(Math.max(value, Double.MIN_NORMAL));
         Interval found = new Replicated(log.applyAsDouble(fitted), Arrays.stream(values).map(log).toArray())
                 .interval(level, pieces, Double.NEGATIVE_INFINITY, Double.POSITIVE_INFINITY);
-        return new Interval(Math.exp(found.low()), Math.exp(found.high()));
+        double high = Math.exp(found.high());
+        return new Interval(Math.exp(found.low()), Double.isInfinite(high) ? Double.NaN : high);
     }
 
     /** Returns how many standard deviations of the replicates an interval reaches to either side. */

@@ -135,4 +135,23 @@ class RecordingChecksTest {
         assertEquals(List.of(), RecordingChecks.check(
                 Recordings.of(run("A", new double[] {0, 1}, 1, 1), run("B", new double[] {0, 1}, 2, 2))));
     }
+
+    @Test
+    void valuesAndTimesWhoseSquaresLeaveTheRangeOfNumbersAreRefused() {
+        double[] times = {0, 0.5};
+        assertEquals("run A, sample 2 (time 0.5 s), channel c0: the value is -2E+100; leave the cell empty if such a number marks what is missing,"
+                + " or take a larger unit, so that values do not pass 1.0E100.", fault(Recordings.of(run("A", times, 1, -2e100))));
+        assertEquals("channel c0: its largest value is 5E-101; take a smaller unit, so that values reach 1.0E-100.",
+                fault(Recordings.of(run("A", times, 1e-200, -5e-101), run("B", times, 0, Double.MIN_VALUE))));
+        assertEquals("run A, sample 2: the time is 2E+100; count times from a nearer origin or in a larger unit, so that they do not pass 1.0E100.",
+                fault(Recordings.of(run("A", new double[] {0, 2e100}, 1, 2))));
+        assertEquals("run A, sample 2: the time is 1E-101 after the one before; count times in a smaller unit, so that steps reach 1.0E-100.",
+                fault(Recordings.of(run("A", new double[] {0, 1e-101}, 1, 2))));
+    }
+
+    @Test
+    void theLimitsThemselvesAndSmallNumbersAmongOrdinaryOnesArePassed() {
+        assertEquals(List.of(), RecordingChecks.check(Recordings.of(run("A", new double[] {0, 1e-100}, 1e-100, -1e100),
+                run("B", new double[] {-1e100, 1e100}, Double.MIN_VALUE, 0))));
+    }
 }

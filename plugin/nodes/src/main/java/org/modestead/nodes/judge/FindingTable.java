@@ -10,7 +10,8 @@ import org.modestead.nodes.table.TableSchema;
 
 /**
  * The finding table: first the operator as a whole (mode 0), then mode by mode; the first row of each is its verdict
- * ({@code check = verdict}, passed when the mode may be reported), the others its checks.
+ * ({@code check = verdict}, passed when the mode may be reported), the others its checks. A value beyond all numbers is missing; the
+ * sentence tells it.
  */
 final class FindingTable {
 
@@ -31,9 +32,13 @@ final class FindingTable {
         rows.row((long) judged.mode(), "verdict", null, null, passed, judged.sentence());
         for (Finding finding : verdict.findings()) {
             if (finding.mode() == judged.mode()) {
-                rows.row((long) finding.mode(), finding.check(), finding.value(), finding.threshold(), finding.passed(),
+                rows.row((long) finding.mode(), finding.check(), finite(finding.value()), finding.threshold(), finding.passed(),
                         finding.sentence());
             }
         }
+    }
+
+    private static double finite(double value) {
+        return Double.isInfinite(value) ? Double.NaN : value;
     }
 }

@@ -72,6 +72,9 @@ public final class SnapshotBuilderNode implements Node {
                 A column of lists is several channels, one an entry, called as the table calls the entries or by the column's name and \
                 a number. All lists of a column must have the same length; a missing list, or a missing entry, is a missing cell.
 
+                Values and times beyond 1e100, and channels or time steps all below 1e-100, are refused: their squares are no numbers. \
+                Such values mostly mark what is missing.
+
                 The table is streamed; memory is needed for 8 bytes a sample, channel and copy.""";
     }
 
