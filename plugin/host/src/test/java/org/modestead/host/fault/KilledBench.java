@@ -106,6 +106,7 @@ final class KilledBench {
             }
             Thread.sleep(20);
         }
-        throw new AssertionError("it did not start: " + child.said());
+        throw new AssertionError("it did not start, " + (child.process().isAlive() ? "and still tries" : "exit code " + child.process().exitValue()) + ": "
+                + child.said() + (Files.exists(out) ? Files.readString(out) : ""));
     }
 }
