@@ -4,10 +4,13 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.modestead.engine.Doubt;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.recording.PreparedAlike;
+import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.Snapshots.Part;
 import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
@@ -17,13 +20,16 @@ import org.modestead.nodes.contract.Outlook;
 import org.modestead.nodes.contract.Port;
 import org.modestead.nodes.contract.PortType;
 import org.modestead.nodes.contract.RunContext;
+import org.modestead.nodes.contract.Setting;
 import org.modestead.nodes.contract.Settings;
 import org.modestead.nodes.figure.RecordingFigure;
+import org.modestead.nodes.table.Table;
 
 /** Hands out what a model holds, with new recordings prepared as its own were. */
 public final class ModelApplierNode implements Node {
 
     private static final int MOST_CHANNELS_DRAWN = 6;
+    private static final String COORDINATES = "coordinates";
 
     @Override
     public NodeDeclaration declaration() {
@@ -41,6 +47,11 @@ public final class ModelApplierNode implements Node {
 
                 Without new recordings the model's own come out, holdout included.
 
+                Switch the modal coordinates on to have the recordings projected on the modes: the value of each eigenfunction at each \
+                state. Along a motion that obeys its mode it turns, grows or fades at the mode's rate; where it does not, the mode does not \
+                hold there. Magnitude and phase of a mode over time follow from its two columns, and with the joint weights of the model \
+                file the prepared values. Modes of a cluster have no coordinate of their own and are left out.
+
                 Samples outside the range of the training, by more than a tenth of it, are told as a doubt: there the model extrapolates. \
                 Where decisions on pressure, structures or grids hang on it, keep the usual safety margins.""",
                 List.of(), List.of("apply", "predict", "predictor", "score", "new data", "transfer", "reuse"),
@@ -50,8 +61,11 @@ public final class ModelApplierNode implements Node {
                 List.of(Port.of("snapshots", PortType.SNAPSHOTS, "Snapshots", "Training of the model, new recordings as holdout."),
                         Port.of("operator", PortType.OPERATOR, "Operator", "As it was fitted."),
                         Port.of("spectrum", PortType.SPECTRUM, "Spectrum", "Its modes."),
-                        Port.of("verdict", PortType.VERDICT, "Verdict", "As it was given on the recordings of the model.")),
-                List.of(), 1);
+                        Port.of("verdict", PortType.VERDICT, "Verdict", "As it was given on the recordings of the model."),
+                        Port.of("coordinates", PortType.TABLE, "Coordinates", "Real and imaginary part of every mode's eigenfunction by run, time"
+                                + " and mode, of the new recordings or else of the model's own; empty unless switched on.")),
+                List.of(new Setting.Flag(new Setting.Common(COORDINATES, "Modal coordinates", "Projection", "Whether the recordings are projected on"
+                        + " the modes: one row a run, time and mode, some 40 bytes each."), false)), 1);
     }
 
     @Override
@@ -64,7 +78,8 @@ public final class ModelApplierNode implements Node {
         if (model.complete() && fresh.time().isPresent()) {
             PreparedAlike.check(model.time().orElseThrow(), fresh.time().orElseThrow());
         }
-        return Node.super.expect(inputs, settings, context);
+        Expected values = Node.super.expect(inputs, settings, context);
+        return new Expected(model.time().map(axis -> Map.of(COORDINATES, CoordinateTable.columns(axis))).orElse(Map.of()), values.values());
     }
 
     @Override
@@ -76,8 +91,16 @@ public final class ModelApplierNode implements Node {
         fresh.ifPresent(recordings -> summary.add(sentence(snapshots)));
         List<Doubt> doubts = new ArrayList<>(model.doubts());
         snapshots.doubts().stream().filter(doubt -> !doubts.contains(doubt)).forEach(doubts::add);
+        Table coordinates = CoordinateTable.of(model, snapshots, projected(settings, snapshots, fresh.isPresent()), context.progress());
         return new NodeResult(Map.of("snapshots", snapshots, "operator", model.operator(), "spectrum", model.spectrum(), "verdict",
-                model.verdict()), List.of(RecordingFigure.figure(snapshots, MOST_CHANNELS_DRAWN)), summary, doubts);
+                model.verdict(), COORDINATES, coordinates), List.of(RecordingFigure.figure(snapshots, MOST_CHANNELS_DRAWN)), summary, doubts);
+    }
+
+    private static List<Run> projected(Settings settings, Snapshots snapshots, boolean fresh) {
+        if (!settings.flag(COORDINATES)) {
+            return List.of();
+        }
+        return Stream.of(Part.values()).filter(part -> !fresh || part == Part.HOLDOUT).flatMap(part -> snapshots.runs(part).stream()).toList();
     }
 
     private static String sentence(Snapshots snapshots) {

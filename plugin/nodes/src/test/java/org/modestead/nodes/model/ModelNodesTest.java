@@ -14,6 +14,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Stream;
+import org.ejml.data.ZMatrixRMaj;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -21,9 +22,13 @@ import org.modestead.engine.Cancelled;
 import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.RecordingFault;
+import org.modestead.engine.linalg.Complex;
 import org.modestead.engine.modelfile.Model;
 import org.modestead.engine.modelfile.ModelFileFault;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.recording.StateRun;
+import org.modestead.engine.spectrum.ModalExpansion;
+import org.modestead.engine.spectrum.Mode;
 import org.modestead.nodes.contract.Expected;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeResult;
@@ -256,5 +261,84 @@ class ModelNodesTest {
                 assertThrows(ModelFileFault.class, () -> read(folder)).getMessage());
         assertThrows(ModelFileFault.class, () -> read(folder.resolve("none.zip")));
         assertThrows(ModelFileFault.class, () -> write(broken.resolve("below/a/file.zip")));
+    }
+
+    private static NodeResult projected(Map<String, Object> inputs) {
+        return Steps.run("model-applier", inputs, Map.of("coordinates", true));
+    }
+
+    private static Complex coordinate(List<String> row) {
+        return new Complex(Double.parseDouble(row.get(3)), Double.parseDouble(row.get(4)));
+    }
+
+    /** The eigenfunctions that the eigenproblem itself gives, at the states of training, by the first index of each mode. */
+    @Test
+    void coordinatesOfTheTrainingAreThoseOfTheSpectrum() {
+        Model model = (Model) model();
+        List<List<String>> rows = Steps.texts(projected(Map.of("model", model)), "coordinates");
+        Snapshots snapshots = model.operator().snapshots();
+        ModalExpansion expansion = ModalExpansion.of(model.operator().chosen());
+        int at = 0;
+        for (StateRun run : snapshots.states(Snapshots.Part.TRAINING)) {
+            ZMatrixRMaj values = expansion.eigenfunctions(run.states());
+            for (int k = 0; k < run.count(); k++) {
+                for (Mode mode : model.spectrum().modes()) {
+                    List<String> row = rows.get(at++);
+                    assertEquals(List.of(run.times()[k], (double) mode.number()), List.of(Double.parseDouble(row.get(1)), Double.parseDouble(row.get(2))));
+                    Complex wanted = new Complex(values.getReal(k, mode.indices().get(0)), values.getImag(k, mode.indices().get(0)));
+                    // the same products, and as many digits as a text of a double has
+                    assertEquals(0, coordinate(row).minus(wanted).abs(), 1e-12);
+                }
+            }
+        }
+        assertTrue(at < rows.size(), "calibration and holdout of the model follow");
+    }
+
+    /** The recordings are noise-free sums of the modes, so each coordinate goes on at its rate to rounding. */
+    @Test
+    void coordinatesOfNewRecordingsGoOnAtTheRatesOfTheModel() {
+        Model model = (Model) model();
+        NodeResult applied = projected(Map.of("model", model, "snapshots", snapshots(laterRuns(), PLAIN)));
+        List<List<String>> rows = Steps.texts(applied, "coordinates");
+        int modes = model.spectrum().modes().size();
+        double step = model.operator().snapshots().step().orElseThrow();
+        int pairs = 0;
+        for (int i = 0; i + modes < rows.size(); i++) {
+            Mode mode = model.spectrum().modes().get(i % modes);
+            assertEquals(Integer.toString(mode.number()), rows.get(i).get(2));
+            if (rows.get(i).get(0).equals(rows.get(i + modes).get(0))) {
+                Complex turned = coordinate(rows.get(i)).times(mode.rate().times(step).exp());
+                assertEquals(0, coordinate(rows.get(i + modes)).minus(turned).abs(), 1e-9);
+                pairs++;
+            }
+        }
+        assertTrue(pairs > 20, pairs + " pairs");
+        assertEquals(List.of("r6", "r0 (new)"), rows.stream().map(row -> row.get(0)).distinct().toList());
+    }
+
+    /** Prepared values are sums of joint weights times coordinates, twice the real part for a pair: what the forecast calls the reconstruction. */
+    @Test
+    void coordinatesAndJointWeightsRebuildTheRecording() {
+        Model model = (Model) model();
+        NodeResult applied = projected(Map.of("model", model, "snapshots", snapshots(laterRuns(), PLAIN)));
+        List<List<String>> rows = Steps.texts(applied, "coordinates");
+        List<List<String>> rebuilt = Steps.texts(Steps.run("forecast", new HashMap<>(applied.outputs()), Map.of("origin", "before-holdout", "horizon", 1)),
+                "reconstruction").stream().filter(row -> row.get(0).equals("r6") && row.get(2).equals(model.spectrum().channels().get(0).name())).toList();
+        int modes = model.spectrum().modes().size();
+        for (int k = 0; k < rebuilt.size(); k++) {
+            double prepared = 0;
+            for (int m = 0; m < modes; m++) {
+                Mode mode = model.spectrum().modes().get(m);
+                prepared += (mode.indices().size() > 1 ? 2 : 1) * coordinate(rows.get(k * modes + m)).times(mode.weights().get(0)).re();
+            }
+            double time = Double.parseDouble(rebuilt.get(k).get(1));
+            assertEquals(Double.parseDouble(rebuilt.get(k).get(4)), model.spectrum().preparation().restore(0, time, prepared), 1e-9);
+        }
+        assertTrue(rebuilt.size() > 20);
+    }
+
+    @Test
+    void withoutTheSwitchThereAreNoCoordinates() {
+        assertEquals(List.of(), Steps.texts(applied(model(), snapshots(laterRuns(), PLAIN)), "coordinates"));
     }
 }
