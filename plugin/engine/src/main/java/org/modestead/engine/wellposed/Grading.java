@@ -12,16 +12,14 @@ import org.modestead.engine.spectrum.Mode;
  * From findings to a grade. The order matters: evidence against a mode is taken before the lack of evidence for it.
  *
  * <ol>
- * <li>the space norm grows from rung to rung, the residual stays above its threshold and noise does not explain it, or in the space of a kernel neither
- * rate nor weight
- *     settles and the residual is not close on any rung: absent
+ * <li>the space norm grows from rung to rung, the residual stays above its threshold and noise does not explain it, or in the space of a kernel neither rate
+ *     nor weight settles and the residual is not close on any rung: absent
  * <li>a cluster of eigenvalues with one eigenfunction, a twin that the runs cannot tell from it, a rate that noise upsets, a likeness whose norm still rises,
  *     rate or weight that keep changing, or, in a mode that is nearly all of the signal, a residual that is not close and another rate in the second half of
  *     the runs than in the first: drifts
  * <li>too few rungs, nothing held out, neither a residual nor settling to be seen in the noise, a residual that noise explains, a fitted rank that does not
  *     show the mode as it is, too small a share captured, or another step disagrees: undecided
- * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not
- * hold
+ * <li>overlap with other modes, joint and solo weights differ, noise blurs its figures, the residual is not close, or the space does not hold
  *     the signal: settles
  * <li>otherwise: stands
  * </ol>

@@ -58,6 +58,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         SampleNoise noise = SampleNoise.rough(operator.snapshots()).atMost(PredictionError.leastOfNewest(operator.compression(),
                 unjudged.runs(), unjudged.functions(), ranks, sample.channels()));
         JudgingRuns judging = unjudged.with(operator, noise, progress);
+        double noiseShare = noise.shareOf(operator.snapshots());
         List<NoisierFit> noisier = noisierFits(operator, noise, ranks.get(ranks.size() - 1), sample, progress);
         List<Rung> rungs = new ArrayList<>();
         List<List<NoiseEffect>> effects = new ArrayList<>();
@@ -72,7 +73,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
             List<Rung> others = noisier.stream().filter(fit -> fit.compression().rank() >= rank).map(fit -> fit.rung(rank, sample)).toList();
             if (rank == operator.rank()) {
                 List<ZMatrixRMaj> values = judging.eigenfunctions(rung.expansion());
-                twins = TwinRates.twins(rung, judging, values, others);
+                twins = TwinRates.twins(rung, judging, values, others, noiseShare);
                 halves = HalfRates.of(rung.expansion(), judging, values, spectrum.modes().stream().map(mode -> mode.indices().get(0)).toList());
             }
             effects.add(NoiseEffect.of(rung, others, sample.longest()));
@@ -82,7 +83,7 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         List<Boolean> byPart = twins;
         return new Ladder(List.copyOf(rungs), rows(rungs, effects, spectrum, fitted, sample.longest()), Arrays.stream(errors).boxed().toList(),
                 normEffects, spectrum.modes().stream().map(mode -> byPart.get(partOf(rungs.get(fitted), mode))).toList(),
-                halves, noise, noise.shareOf(operator.snapshots()), sample.longest());
+                halves, noise, noiseShare, sample.longest());
     }
 
     /**
@@ -201,14 +202,18 @@ record Ladder(List<Rung> rungs, List<LadderRow> rows, List<Double> predictionErr
         return Arrays.stream(parts).mapToObj(part -> new Sighting(rung, part)).toArray(Sighting[]::new);
     }
 
-    /** Finds the modes on another rung, whether or not the rung between has them, and notes where they were seen. */
+    /**
+     * Finds the modes on another rung, whether or not the rung between has them, and notes where they were seen. The constant function is none of them, however
+     * near to it a mode of a low rank may look.
+     */
     private static int[] follow(Sighting[] seen, Rung to, double longest) {
         double[][] cost = new double[seen.length][to.parts().size()];
         for (int a = 0; a < cost.length; a++) {
             Rung.Part left = seen[a].rung().parts().get(seen[a].part());
             for (int b = 0; b < cost[a].length; b++) {
                 Rung.Part right = to.parts().get(b);
-                cost[a][b] = Math.min(1, relativeChange(left.rate(), right.rate(), longest)) + 1
+                cost[a][b] = right.constant() && !left.constant() ? 2 * TOO_FAR
+                        : Math.min(1, relativeChange(left.rate(), right.rate(), longest)) + 1
                         - overlap(seen[a].rung(), left.group().get(0), to, right.group().get(0)) + NoiseEffect.weight(left, right) / 2;
             }
         }

@@ -21,6 +21,9 @@ public record NoiseEffect(double rate, double weight, double norm) {
 
     private static final double TOO_FAR = 1.5;
 
+    /** Relative change of a rate that is none but rounding. */
+    private static final double IDENTICAL = 1e-9;
+
     /**
      * @param rung as fitted
      * @param noisier the same rank fitted to noisier runs, several times
@@ -32,7 +35,7 @@ public record NoiseEffect(double rate, double weight, double norm) {
         for (Rung other : noisier) {
             int[] matched = matched(rung, other, longest);
             for (int p = 0; p < matched.length; p++) {
-                NoiseEffect one = matched[p] < 0 ? LOST : between(rung.parts().get(p), other.parts().get(matched[p]), longest);
+                NoiseEffect one = matched[p] < 0 ? lost(rung.parts().get(p), other, longest) : between(rung.parts().get(p), other.parts().get(matched[p]), longest);
                 out.set(p, out.get(p).worse(one));
             }
         }
@@ -52,6 +55,13 @@ public record NoiseEffect(double rate, double weight, double norm) {
 
     private static NoiseEffect between(Rung.Part a, Rung.Part b, double longest) {
         return new NoiseEffect(Ladder.relativeChange(a.rate(), b.rate(), longest), weight(a, b), factor(a.normRatio(), b.normRatio()));
+    }
+
+    /** Functions that share a rate may be other ones among themselves in the noisier fit: their rate is not lost with them. */
+    private static NoiseEffect lost(Rung.Part part, Rung noisier, double longest) {
+        return noisier.parts().stream().filter(other -> !other.constant()).mapToDouble(other -> Ladder.relativeChange(part.rate(), other.rate(), longest))
+                .filter(change -> change < IDENTICAL).min().stream().mapToObj(change -> new NoiseEffect(change, 1, Double.POSITIVE_INFINITY)).findFirst()
+                .orElse(LOST);
     }
 
     private NoiseEffect worse(NoiseEffect other) {

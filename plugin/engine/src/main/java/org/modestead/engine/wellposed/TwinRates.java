@@ -36,6 +36,15 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
     /** Coupling over the time looked at, from which such a pair is a defective one rather than two functions of one rate. */
     private static final double STRONG = 0.5;
 
+    /** Coupling over the time looked at, from which two functions are hardly more than each other's shadow. */
+    private static final double FIRM = 1.4;
+
+    /**
+     * Square of the difference of the rates, times the time looked at, over the share of noise, up to which noise hides it: the motion by two rates,
+     * {@code sinh(x)/x} times t e^(λt) with {@code x = (λ_2 - λ_1) t/2}, then differs from that by one, {@code x²/6}, by less than half of the noise of a sample.
+     */
+    private static final double HIDDEN = 10;
+
     /** Coupling over the time looked at, below which the functions share a rate without being one defective pair. */
     private static final double UNCOUPLED = 0.1;
 
@@ -61,18 +70,19 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
      * @param judging runs
      * @param values its eigenfunctions on them, per run p x r
      * @param noisier the same rank fitted to noisier runs
+     * @param noiseShare standard deviation of the noise over that of the signal
      * @return per part of the rung whether it has a twin
      */
-    static List<Boolean> twins(Rung rung, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier) {
-        return rung.parts().stream().map(part -> hasTwin(rung, part, judging, values, noisier)).toList();
+    static List<Boolean> twins(Rung rung, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier, double noiseShare) {
+        return rung.parts().stream().map(part -> hasTwin(rung, part, judging, values, noisier, noiseShare)).toList();
     }
 
-    private static boolean hasTwin(Rung rung, Rung.Part part, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier) {
+    private static boolean hasTwin(Rung rung, Rung.Part part, JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier, double noiseShare) {
         int column = part.group().get(0);
         for (Rung.Part partner : rung.parts()) {
             for (int other : partner.weight() >= NOTABLE * part.weight() ? partner.group() : List.<Integer>of()) {
                 TwinRates pair = of(rung.expansion().vectors(), rung.expansion().rates(), column, other);
-                if (other != column && pair.parallel() && pair.coupling(judging) >= UNCOUPLED && pair.isOne(judging, values, noisier, partner.constant())) {
+                if (other != column && pair.parallel() && pair.coupling(judging) >= UNCOUPLED && (pair.hidden(judging, noiseShare) || pair.isOne(judging, values, noisier, partner.constant()))) {
                     return true;
                 }
             }
@@ -125,6 +135,10 @@ record TwinRates(ZMatrixRMaj vectors, int first, int second, Complex rateOne, Co
     /** How much one of the functions pushes the other; functions that share a rate without that are two modes. */
     private double coupling(JudgingRuns judging) {
         return rateTwo.minus(rateOne).times(overlap).times(span(judging) / sine()).abs();
+    }
+
+    private boolean hidden(JudgingRuns judging, double noiseShare) {
+        return coupling(judging) >= FIRM && Math.pow(rateTwo.minus(rateOne).abs() * span(judging), 2) <= HIDDEN * noiseShare;
     }
 
     private boolean isOne(JudgingRuns judging, List<ZMatrixRMaj> values, List<Rung> noisier, boolean constant) {
