@@ -1,13 +1,11 @@
 package org.modestead.host.table;
 
-import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.sql.SQLException;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.stream.Stream;
 
 /** Reads Parquet files, whose columns carry their types: one, or all of a folder in the order of their names, as other programs write tables. */
 final class ParquetSource {
@@ -23,14 +21,8 @@ final class ParquetSource {
         return Files.isDirectory(path) && !within(path, path.toString()).isEmpty();
     }
 
-    /** Other programs begin the names of files that are no part of a table with a point or a low line. */
     private static List<Path> within(Path folder, String shown) {
-        try (Stream<Path> files = Files.list(folder)) {
-            return files.filter(file -> file.getFileName().toString().matches("(?i)[^._].*\\.parquet") && Files.isRegularFile(file)).sorted()
-                    .toList();
-        } catch (IOException unreadable) {
-            throw new TableFault(shown, "the folder cannot be read (" + unreadable.getMessage() + ")", "allow reading it");
-        }
+        return FolderFiles.of(folder, shown, "parquet");
     }
 
     /**

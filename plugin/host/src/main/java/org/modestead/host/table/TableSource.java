@@ -2,6 +2,7 @@ package org.modestead.host.table;
 
 import java.nio.charset.Charset;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
@@ -28,6 +29,8 @@ public final class TableSource implements Node {
     private static final String JSON = "json";
     private static final String NPY = "npy";
     private static final String AUTO = "auto";
+    /** Endings of text files that are found in a folder. */
+    private static final String TEXTS = "(csv|tsv|txt)(\\.gz)?";
     private static final long MOST_SKIPPED = 1_000_000;
 
     private final RememberedTypes types = new RememberedTypes();
@@ -49,6 +52,11 @@ public final class TableSource implements Node {
                 without any cell (a delimiter at the end of each line) is left out; other columns without a name are
                 called column1, column2 and so on by their position.
 
+                A folder of CSV files (.csv, .tsv, .txt, also .gz) is one table, as recorders write it that begin a file a day: file after file
+                in the order of their names, each with the same header. Name files so that this is the order of time, or give each run a
+                column of its own. Files whose names begin with a point or a low line are passed over. Where there are Parquet files, those
+                are read unless the format says CSV.
+
                 An NPY file holds an array as NumPy saves it, one row a time: its fields are columns of their names, other arrays give columns
                 called column1, column2 and so on, and one column of lists called values where there are more than 1000.
 
@@ -68,8 +76,8 @@ public final class TableSource implements Node {
     private static List<Setting> fileSettings() {
         return List.of(
                 new Setting.File(new Setting.Common("path", "File", "File",
-                        "The file to read; a name is looked up in the folder of the workflow. A folder of Parquet files is read as one"
-                        + " table, in the order of their names."), true,
+                        "The file to read; a name is looked up in the folder of the workflow. A folder of Parquet or of CSV files of the same"
+                        + " columns is read as one table, in the order of their names."), true,
                         List.of(CSV, "tsv", "txt", "gz", PARQUET, JSON, "jsonl", "ndjson", NPY), true),
                 new Setting.Choice(new Setting.Common("format", "Format", "File", "How the file is written; auto goes by "
                 + "the "
@@ -156,6 +164,13 @@ public final class TableSource implements Node {
         if (List.of(AUTO, PARQUET).contains(settings.text("format")) && ParquetSource.isFolder(path)) {
             return ParquetSource.open(path, shown, limits);
         }
+        if (List.of(AUTO, CSV).contains(settings.text("format")) && Files.isDirectory(path)) {
+            List<Path> files = FolderFiles.of(path, shown, TEXTS);
+            if (!files.isEmpty()) {
+                return new TextFolder(shown, files.stream().map(file -> csv(settings, file, shown + "/" + file.getFileName(), limits)).toList(), limits)
+                        .open();
+            }
+        }
         FileChecks.readable(path, shown);
         String format = format(settings, shown);
         if (format.equals(PARQUET)) {
@@ -164,12 +179,21 @@ public final class TableSource implements Node {
         if (format.equals(NPY)) {
             return NpyTable.open(path, shown, settings.flag("copy"));
         }
-        List<String> missing = settings.texts("missing");
-        TextFile file = format.equals(JSON) ? JsonSource.open(path, shown, missing, limits)
-                : CsvSource.open(csvFormat(settings, path, shown), missing);
-        boolean comma = format.equals(CSV) && settings.text("decimal").equals("comma");
+        if (format.equals(JSON)) {
+            return text(JsonSource.open(path, shown, settings.texts("missing"), limits), settings, false, limits).open();
+        }
+        return csv(settings, path, shown, limits).open();
+    }
+
+    private TextTable csv(Settings settings, Path path, String shown, SourceLimits limits) {
+        FileChecks.readable(path, shown);
+        return text(CsvSource.open(csvFormat(settings, path, shown), settings.texts("missing")), settings, settings.text("decimal").equals("comma"),
+                limits);
+    }
+
+    private TextTable text(TextFile file, Settings settings, boolean comma, SourceLimits limits) {
         TextRules rules = new TextRules(comma, settings.text("time-format").strip(), settings.texts("text-columns"));
-        return new TextTable(file, rules, limits.holding(file.names().size()), types).open();
+        return new TextTable(file, rules, limits.holding(file.names().size()), types);
     }
 
     private static String format(Settings settings, String shown) {

@@ -35,16 +35,25 @@ final class TextTable implements Explainer {
      * @throws TableFault if it has no row, or a cell among those looked at does not fit
      */
     DuckDbTable open() {
-        List<Column> columns;
-        try {
-            columns = columns(types.of(file, rules, this::search));
-        } catch (SQLException failure) {
-            throw explain(failure);
+        List<TextTyper.Found> found = found().columns();
+        List<Column> columns = new ArrayList<>();
+        for (int j = 0; j < found.size(); j++) {
+            String name = file.names().get(j);
+            if (found.get(j).cells() > 0 || !file.unnamed().contains(name)) {
+                columns.add(new Column(name, found.get(j).type()));
+            }
         }
-        String select = columns.stream().map(this::cell).collect(Collectors.joining(", ", "SELECT ", " FROM "
-                + "" + file.read()));
-        return new DuckDbTable(Recipe.file(select, file.path()), new TableSchema(columns), file.shown(), limits.megabytes(),
+        return new DuckDbTable(Recipe.file(select(columns), file.path()), new TableSchema(columns), file.shown(), limits.megabytes(),
                 limits.copied(), this);
+    }
+
+    TextFile file() {
+        return file;
+    }
+
+    /** Returns the SELECT of columns of this file, read as the types that are told. */
+    String select(List<Column> columns) {
+        return columns.stream().map(this::cell).collect(Collectors.joining(", ", "SELECT ", " FROM " + file.read()));
     }
 
     private TextTyper.Result search() throws SQLException {
@@ -54,25 +63,29 @@ final class TextTable implements Explainer {
         }
     }
 
-    private List<Column> columns(TextTyper.Result result) throws SQLException {
+    /**
+     * Returns what the columns hold, with all cells that were looked at of their column's type.
+     *
+     * @throws TableFault if there is no row, or a cell does not fit
+     */
+    TextTyper.Result found() {
+        TextTyper.Result result;
+        try {
+            result = types.of(file, rules, this::search);
+        } catch (SQLException failure) {
+            throw explain(failure);
+        }
         if (result.rows() == 0) {
             throw new TableFault(file.shown(), "there is a header (" + String.join(", ", file.names())
                     + ") but no row below it",
                     "give a table with at least one row");
         }
-        List<Column> columns = new ArrayList<>();
         for (int j = 0; j < file.names().size(); j++) {
-            String name = file.names().get(j);
-            TextTyper.Found found = result.columns().get(j);
-            Column column = new Column(name, found.type());
-            if (found.misfits() > 0) {
-                throw misfit(column);
-            }
-            if (found.cells() > 0 || !file.unnamed().contains(name)) {
-                columns.add(column);
+            if (result.columns().get(j).misfits() > 0) {
+                throw misfit(new Column(file.names().get(j), result.columns().get(j).type()));
             }
         }
-        return columns;
+        return result;
     }
 
     private String cell(Column column) {
