@@ -4,7 +4,11 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import java.io.BufferedReader;
 import java.io.IOException;
+import java.io.InputStreamReader;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
@@ -186,6 +190,26 @@ class RunsTest {
             assertEquals("stopped", TestBench.kind(bench.get("/api/desk").json(), "a"), "what comes too late is thrown away");
             bench.post("/api/run", "{}");
             assertEquals("done", TestBench.kind(bench.awaitRest(), "b"), "and the next run is a new one");
+        }
+    }
+
+    /** As the page hears it: where a step stays at its half for more than a second, about as much is left as was spent. */
+    @Test
+    void aRunTellsHowFarItIsAndHowMuchTimeIsLeft() throws IOException, InterruptedException {
+        try (TestBench bench = bench(List.of("a:half"), List.of());
+                BufferedReader events = new BufferedReader(new InputStreamReader(bench.events(), StandardCharsets.UTF_8))) {
+            bench.post("/api/run", "{}");
+            String line = events.readLine();
+            while (!line.contains(" left\"")) {
+                line = events.readLine();
+            }
+            JsonNode told = new ObjectMapper().readTree(line.substring(line.indexOf('{')));
+            assertTrue(told.path("run").path("words").asText().matches("running, 45 %, about \\d+ (s|min) left"), line);
+            assertEquals(0.45, told.path("run").path("fraction").asDouble(), 0.01, "its half, and a tenth is for keeping the result");
+            assertTrue(told.path("states").path("a").path("words").asText().matches("running, 45 %, \\d+ (s|min) left"), line);
+            assertEquals("half of it", told.path("states").path("a").path("message").asText());
+            release.countDown();
+            assertEquals("done", TestBench.kind(bench.awaitRest(), "a"));
         }
     }
 

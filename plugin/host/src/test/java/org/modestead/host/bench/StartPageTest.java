@@ -8,9 +8,11 @@ import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
@@ -88,8 +90,32 @@ class StartPageTest {
         JsonNode look = bench.get("/api/steps/check/look").json();
         assertFalse(look.path("verdict").path("sentence").asText().isEmpty());
         assertFalse(look.path("caution").asText().isEmpty());
+        assertTrue(bench.get("/api/report.html").body().contains("Step: Well-posedness Checker (check)"), "the report of all results is a page of its own");
         JsonNode again = bench.upload("shaft.csv", file).json();
         assertEquals("data/shaft.csv", again.path("path").asText(), "a step of the open desk reads it under this name");
+    }
+
+    /** One row a reading, decimal commas, and words where a sensor was silent: upload, open and run, and there is a verdict. */
+    @Test
+    void aTableWithOneRowAReadingAndWordsAmongNumbersRunsToAVerdict() throws IOException, InterruptedException {
+        StringBuilder text = new StringBuilder("trial;time_ms;sensor;value\n");
+        for (int run = 1; run <= 5; run++) {
+            for (int k = 0; k < 200; k++) {
+                double swing = StrictMath.exp(-0.004 * k) * StrictMath.cos(0.4 * k + run);
+                String first = run == 2 && k == 9 ? "sensor off" : String.format(Locale.ROOT, "%.5f", swing).replace('.', ',');
+                text.append(String.format(Locale.ROOT, "%d;%d;acc x;%s%n%d;%d;acc y;%s%n", run, 5 * k, first, run, 5 * k,
+                        String.format(Locale.ROOT, "%.5f", 0.5 * StrictMath.exp(-0.004 * k) * StrictMath.cos(0.4 * k + run + 0.3)).replace('.', ',')));
+            }
+        }
+        JsonNode guess = bench.upload("rig.csv", text.toString().getBytes(StandardCharsets.UTF_8)).json();
+        assertEquals(0, guess.path("problems").size(), guess.path("problems").toString());
+        JsonNode desk = bench.post("/api/desk", "{\"recording\": {\"upload\": " + guess.path("upload") + ", \"reading\": " + guess.path("reading")
+                + ", \"columns\": " + guess.path("columns") + ", \"name\": \"rig.csv\"}}").json();
+        assertEquals(0, desk.path("problems").size(), desk.path("problems").toString());
+        bench.post("/api/run", "{\"steps\": [\"check\"]}");
+        assertEquals("done", TestBench.kind(bench.awaitRest(), "check"), desk.toString());
+        JsonNode verdict = bench.get("/api/steps/check/look").json().path("verdict");
+        assertTrue(List.of("stands", "settles").contains(verdict.path("overall").asText()), verdict.toString());
     }
 
     @Test

@@ -7,6 +7,7 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.List;
 import java.util.Optional;
 import java.util.TreeMap;
+import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import org.modestead.engine.modelfile.Model;
@@ -37,6 +38,8 @@ import org.modestead.nodes.words.TimeUnit;
 final class LookJson {
 
     private static final JsonNodeFactory JSON = JsonNodeFactory.instance;
+    /** Units that are nouns in the plural, such as samples; MB and 1/s are none. */
+    private static final Pattern NOUN = Pattern.compile("[a-z]{3,}s");
 
     private final Looks looks;
     private final Looks.Looked looked;
@@ -96,11 +99,20 @@ final class LookJson {
         Optional<Settings> read = SettingsReader.read(looked.node(), looked.step().settings()).settings();
         for (Setting setting : read.map(settings -> Visibility.shown(declaration, settings)).orElse(List.of())) {
             Object value = read.get().values().get(setting.key());
+            String words = words(setting, value);
             array.addObject().put("key", setting.key()).put("label", setting.common().label()).put("group", setting.common().group())
-                    .put("value", words(setting, value)).put("unit", SettingText.unit(setting))
+                    .put("value", words).put("unit", unit(SettingText.unit(setting), words))
                     .put("initial", !looked.step().settings().containsKey(setting.key()));
         }
         return array;
+    }
+
+    /** Returns the unit of a value as it is said: in the time unit of the recording, of one thing in the singular, of nothing none. */
+    private String unit(String declared, String value) {
+        if (value.isEmpty() || declared.equals("time")) {
+            return value.isEmpty() ? "" : time.name();
+        }
+        return declared.equals("1/time") ? time.rate() : value.equals("1") && NOUN.matcher(declared).matches() ? declared.substring(0, declared.length() - 1) : declared;
     }
 
     private static String words(Setting setting, Object value) {

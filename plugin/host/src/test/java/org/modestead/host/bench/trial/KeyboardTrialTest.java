@@ -1,5 +1,6 @@
 package org.modestead.host.bench.trial;
 
+import java.io.IOException;
 import java.nio.file.Path;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
@@ -55,6 +56,34 @@ class KeyboardTrialTest {
         }
     }
 
+    private static boolean down(Browser browser) {
+        browser.keys(Keys.ARROW_DOWN);
+        return false;
+    }
+
+    /** A recording of their own by keys: only the choice in the system's own dialog cannot be pressed here. */
+    @Test
+    void anOwnRecordingComesToAVerdictWithoutAMouse() throws IOException {
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            Browser browser = trial.browser();
+            browser.see("[data-action=choose-recording]");
+            browser.tabTo("[data-action=choose-recording]");
+            browser.type("#recording-file", TankRecording.write(folder.resolve("tank.csv")).toString());
+            browser.reads("[data-recording]", "tank.csv");
+            browser.tabTo("[data-action=lay-out-run]");
+            browser.keys(Keys.ENTER);
+            browser.see("[data-look] [data-verdict]");
+            trial.verdictTells(0.25, "Hz");
+            browser.await("the look by F6", () -> {
+                browser.keys(Keys.F6);
+                return browser.focused("[data-part=look], [data-part=look] *");
+            });
+            browser.tabTo("[data-action=why]");
+            browser.keys(Keys.ENTER);
+            browser.see("[data-verdict] [data-check]");
+        }
+    }
+
     /** Gives the step a name and a note of the person's own. */
     private static void write(Trial trial) {
         Browser browser = trial.browser();
@@ -66,11 +95,15 @@ class KeyboardTrialTest {
         browser.gone("dialog");
         browser.reads("[data-step=snapshot-builder] .card-title", "States of the first trip");
         browser.reads("[data-step=snapshot-builder] .card-kind", "Snapshot Builder");
-        browser.click("[data-action=step-menu]");
-        browser.click("[role=menu] [data-action=note-step]");
+        browser.tabTo("[data-action=step-menu]");
+        browser.keys(Keys.ENTER);
+        browser.see("[role=menu] [data-action=note-step]");
+        browser.await("the entry in the menu", () -> browser.focused("[role=menu] [data-action=note-step]") || down(browser));
+        browser.keys(Keys.ENTER);
         browser.await("the focus in the field", () -> browser.focused("#note-field"));
         browser.keys("Gauge 2 was stuck.");
-        browser.click("dialog [data-action=apply]");
+        browser.tabTo("dialog [data-action=apply]");
+        browser.keys(Keys.ENTER);
         browser.gone("dialog");
         browser.reads("[data-step=snapshot-builder] .card-note", "Gauge 2 was stuck.");
         browser.reads("[data-look=snapshot-builder]", "Snapshots");
@@ -79,7 +112,11 @@ class KeyboardTrialTest {
     /** Copies the step with all that is written on it, and takes that back. */
     private static void copy(Trial trial) {
         Browser browser = trial.browser();
-        browser.click("[data-card=snapshot-builder]");
+        browser.await("the bench by F6", () -> {
+            browser.keys(Keys.F6);
+            return browser.focused("[data-part=bench] *");
+        });
+        browser.tabTo("[data-card=snapshot-builder]");
         browser.chord("c", Keys.CONTROL);
         browser.chord("v", Keys.CONTROL);
         browser.see("[data-step=snapshot-builder-2]");

@@ -1,12 +1,14 @@
 package org.modestead.host.bench.trial;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
@@ -78,6 +80,54 @@ class LooksTrialTest {
         browser.clickAt(canvas, ((Number) place.get(0)).longValue(), ((Number) place.get(1)).longValue());
         browser.see(".lk-complex-plane.lk-chosen .lk-tag");
         return browser.text(".lk-complex-plane .lk-tag").replaceAll("(?s).*?(mode \\d+).*", "$1");
+    }
+
+    /** Of the example: lines at 0.62, 1.37 and 2.90 Hz end at one order, side by side. */
+    @Test
+    void everyLineOfTheStabilisationDiagramBearsItsFrequency() {
+        try (Trial trial = Trial.start(folder, Optional.empty())) {
+            Browser browser = trial.browser();
+            browser.click("[data-example=pump-house]");
+            trial.choose("stabilisation");
+            browser.click("[data-action=run-step]");
+            trial.state("stabilisation", "done", "doubts");
+            browser.see("figure.lk-marks [data-drawn=true]");
+            browser.await("three labels", () -> labels(browser).size() == 3);
+            List<List<Number>> boxes = new ArrayList<>();
+            List<String> words = new ArrayList<>();
+            labels(browser).forEach(label -> {
+                words.add(label.get(0).toString());
+                boxes.add(List.of((Number) label.get(1), (Number) label.get(2), (Number) label.get(3), (Number) label.get(4)));
+            });
+            assertTrue(words.stream().anyMatch(word -> word.startsWith("1.37")), words.toString());
+            for (int i = 0; i < boxes.size(); i++) {
+                for (int j = 0; j < i; j++) {
+                    assertFalse(overlap(boxes.get(i), boxes.get(j)), words + " at " + boxes);
+                }
+            }
+            browser.picture("stabilisation");
+        }
+    }
+
+    /** Frequencies that are written in the picture, each with left, top, right and bottom. */
+    @SuppressWarnings("unchecked")
+    private static List<List<Object>> labels(Browser browser) {
+        return (List<List<Object>>) browser.later("""
+                const done = arguments[0];
+                import('/lib/echarts.esm.min.js').then((library) => {
+                  const chart = library.getInstanceByDom(document.querySelector('figure.lk-marks [data-drawn=true]'));
+                  done(chart.getZr().storage.getDisplayList(true).filter((one) => / Hz$/.test(one.style?.text ?? '')).map((one) => {
+                    const box = one.getBoundingRect().clone();
+                    box.applyTransform(one.getComputedTransform() ?? [1, 0, 0, 1, 0, 0]);
+                    return [one.style.text, box.x, box.y, box.x + box.width, box.y + box.height];
+                  }));
+                }, (fault) => done([[String(fault), 0, 0, 0, 0]]));
+                """);
+    }
+
+    private static boolean overlap(List<Number> a, List<Number> b) {
+        return a.get(0).doubleValue() < b.get(2).doubleValue() && b.get(0).doubleValue() < a.get(2).doubleValue()
+                && a.get(1).doubleValue() < b.get(3).doubleValue() && b.get(1).doubleValue() < a.get(3).doubleValue();
     }
 
     @Test

@@ -15,8 +15,9 @@ export function say(text) {
 /** Shows a sentence above the page and tells it. @param {string} text @param {'note'|'stop'} [tone] */
 export function notify(text, tone = 'note') {
   notices += 1;
-  setState({notice: {tone, text, id: notices}});
-  say(text);
+  const sentence = text.charAt(0).toUpperCase() + text.slice(1);
+  setState({notice: {tone, text: sentence, id: notices}});
+  say(sentence);
 }
 
 export function closeNotice() {

@@ -92,7 +92,7 @@ function Settings({settings}) {
   return html`<section id="lk-settings" tabindex="-1" aria-label="Settings it ran with" class="lk-settings">
     <h3>Settings it ran with</h3>
     <dl class="lk-facts">${settings.map((setting) => html`<div key=${setting.key} data-setting=${setting.key}>
-      <dt>${setting.label}</dt><dd>${setting.value}${setting.unit ? ` ${setting.unit}` : ''}${setting.initial ? html` <span class="lk-quiet">(default)</span>` : ''}</dd>
+      <dt>${setting.label}</dt><dd>${setting.value || 'not set'}${setting.unit ? ` ${setting.unit}` : ''}${setting.initial ? html` <span class="lk-quiet">(default)</span>` : ''}</dd>
     </div>`)}</dl>
   </section>`;
 }

@@ -10,6 +10,9 @@ import {layerStyles} from './styles.js';
 const DIMMED = 0.22;
 const LETTER = 0.56;
 const LONGEST = 22;
+/* How far right of and above a mark its label stands. */
+const ASIDE = 6;
+const ABOVE = 3;
 
 const DATES = {
   year: '{yyyy}', month: '{yyyy}-{MM}', day: '{MM}-{dd}', hour: '{HH}:{mm}', minute: '{HH}:{mm}', second: '{HH}:{mm}:{ss}',
@@ -54,6 +57,7 @@ class Drawing {
     this.x = rangeX(figure);
     this.y = rangeY(figure);
     this.some = figure.layers.some((layer) => isSelected(layer.selection, selection));
+    this.apart = this.labelMover();
   }
 
   /** Whether names of categories have no room side by side. */
@@ -74,9 +78,13 @@ class Drawing {
     return Math.max(6, ...reach);
   }
 
-  /** Names of upright lines stand above the plot, where they cover no mark. */
+  /** Names of upright lines stand above the plot, where they cover no mark; so do the labels of marks at its upper edge, in two lines where they are close. */
   top() {
-    return this.figure.layers.some((layer) => layer.type === 'rule' && layer.vertical && layer.name) ? this.theme.small + 8 : 10;
+    const {layers, kind} = this.figure;
+    if (kind === 'MARKS' && layers.some((layer) => layer.type === 'points' && layer.labels.some(Boolean))) {
+      return 2 * this.theme.small + 8;
+    }
+    return layers.some((layer) => layer.type === 'rule' && layer.vertical && layer.name) ? this.theme.small + 8 : 10;
   }
 
   across() {
@@ -272,7 +280,32 @@ class Drawing {
       itemStyle: base.itemStyle, data,
       label: {color: theme.ink, fontSize: theme.small, fontFamily: theme.font,
         textBorderColor: theme.paper, textBorderWidth: 3},
-      labelLayout: {hideOverlap: true},
+      labelLayout: this.apart,
+    };
+  }
+
+  /**
+   * Moves a label off those laid out before it: a line up, to the left of its mark, both, two lines up; a label that no move frees is hidden.
+   * Labels are laid out one after the other, again and again as the picture changes: one that comes a second time begins another round. Its own place
+   * is told from its mark, for the frame that the library tells of a label is where the round before left it.
+   */
+  labelMover() {
+    const {theme} = this;
+    const taken = new Map();
+    return ({seriesIndex, dataIndex, align, rect, labelRect: {width, height}}) => {
+      const id = `${seriesIndex} ${dataIndex}`;
+      if (taken.has(id)) {
+        taken.clear();
+      }
+      const x = rect.x + ASIDE * theme.unit - (align === 'right' ? width : 0);
+      const y = rect.y - ABOVE - height;
+      const left = align === 'right' ? 0 : -(width + 2 * ASIDE * theme.unit);
+      const line = -(height + 1);
+      const free = ([dx, dy]) => [...taken.values()].every((other) => x + dx >= other.x + other.width || x + dx + width <= other.x
+        || y + dy >= other.y + other.height || y + dy + height <= other.y);
+      const [dx, dy] = [[0, 0], [0, line], [left, 0], [left, line], [0, 2 * line]].find(free) ?? [0, 0];
+      taken.set(id, {x: x + dx, y: y + dy, width, height});
+      return {dx, dy, hideOverlap: true};
     };
   }
 
@@ -280,7 +313,7 @@ class Drawing {
   labelPlace(x) {
     const of = this.figure.x.logarithmic ? Math.log10 : (value) => value;
     const share = this.category ? 0 : (of(x) - of(this.x.low)) / (of(this.x.high) - of(this.x.low));
-    return {position: [6 * this.theme.unit, -3], align: share > 0.82 ? 'right' : 'left', verticalAlign: 'bottom'};
+    return {position: [ASIDE * this.theme.unit, -ABOVE], align: share > 0.82 ? 'right' : 'left', verticalAlign: 'bottom'};
   }
 
   /** A ring around what is selected. */

@@ -1,6 +1,6 @@
 import {useEffect, useState} from '../lib.js';
 import {api} from '../js/api.js';
-import {prose} from '../js/words.js';
+import {prose, unparted} from '../js/words.js';
 
 /** Answers that were read, by address and result: a result never changes, so neither do they. */
 const kept = new Map();
@@ -9,10 +9,10 @@ const MOST = 400;
 /** Where an answer holds words for people. */
 const WORDS = new Set(['sentence', 'sentences', 'caption', 'text', 'items', 'value', 'advice', 'meaning', 'headline', 'figures', 'note', 'whole', 'rows']);
 
-/** The same answer with numbers in sentences as the page writes them. */
+/** The same answer with numbers in sentences as the page writes them, none parted from its unit. */
 function told(value, key) {
   if (typeof value === 'string') {
-    return WORDS.has(key) ? prose(value) : value;
+    return WORDS.has(key) ? unparted(prose(value)) : value;
   }
   if (Array.isArray(value)) {
     return typeof value[0] === 'number' ? value : value.map((entry) => told(entry, key));

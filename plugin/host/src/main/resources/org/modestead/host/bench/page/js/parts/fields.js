@@ -77,8 +77,14 @@ function ChoiceField(props) {
 }
 
 function columnWords(column) {
-  const unit = column.unit && !column.name.includes(column.unit) ? `, ${column.unit}` : '';
+  const unit = column.unit && bareName(column) === column.name ? `, ${column.unit}` : '';
   return `${column.name} (${column.type}${unit})`;
+}
+
+/** A name without the unit that it ends with, which stands beside it: `flow [m3/h]` is flow. */
+function bareName({name, unit}) {
+  const end = `[${unit}]`;
+  return unit && name.endsWith(end) && name.length > end.length ? name.slice(0, -end.length).trim() : name;
 }
 
 function offered({setting, about}) {
@@ -138,8 +144,8 @@ function ColumnsField(props) {
     </div>
     <ul class="columns-list">${found.slice(0, SHOWN).map((column) => html`<li key=${column.name}><label class="check"><input type="checkbox"
       data-column=${column.name}
-      checked=${taken.includes(column.name)} onchange=${() => flip(column.name)} /><span class="clip grow">${column.name}</span>
-      <span class="quiet small">${column.unit && !column.name.includes(column.unit) ? column.unit : column.type}</span></label></li>`)}</ul>
+      checked=${taken.includes(column.name)} onchange=${() => flip(column.name)} /><span class="clip grow" title=${column.name}>${bareName(column)}</span>
+      <span class="quiet small" data-unit=${column.unit}>${column.unit || column.type}</span></label></li>`)}</ul>
     <p class="help">${counted(taken.length, 'column')} chosen of ${columns.length}.${found.length > SHOWN ? ` The first ${SHOWN} are shown: search for others.` : ''}</p>
   </div>`;
 }

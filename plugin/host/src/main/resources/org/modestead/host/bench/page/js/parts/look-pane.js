@@ -58,8 +58,14 @@ function StepLook({step}) {
       title="Change the note">${step.note}</button></p>`}
     ${step.problems.length > 0 && html`<${StepProblems} step=${step} />`}
     ${step.state.sentence && step.problems.length === 0 && html`<p class=${'callout' + (kind === 'failed' ? ' stop' : '')}
-      data-sentence>${step.state.sentence}</p>`}
+      data-sentence>${ownWords(step)}</p>`}
     ${(step.look || !step.state.sentence) && html`<div class="look-body"><${Later} load=${look} step=${step} selection=${selection} select=${mark} /></div>`}`;
+}
+
+/** What is said of a step, below its own name. */
+function ownWords({id, state: {sentence}}) {
+  const own = sentence.startsWith(`step ${id}`) ? sentence.slice(`step ${id}`.length).replace(/^[,:] /, '') : sentence;
+  return own.charAt(0).toUpperCase() + own.slice(1);
 }
 
 function StepProblems({step}) {

@@ -142,9 +142,9 @@ function Setting({setting, about, typed, type}) {
     : !Object.hasOwn(about.settings, setting.key) || same(about.settings[setting.key], setting.initial);
   const help = `${id}-help`;
   const error = `${id}-error`;
-  const unit = setting.unit === 'time' ? about.timeUnit || 'time units' : setting.unit;
+  const unit = unitWords(setting.unit, about.timeUnit);
   const option = setting.kind === 'choice' && setting.options.find((o) => o.id === value);
-  const range = rangeWords(setting);
+  const range = rangeWords(setting, about.timeUnit);
   const text = setting.kind === 'flag' ? html`<span class="setting-label"></span>`
     : html`<label class="setting-label" id=${id + '-label'} for=${setting.kind === 'choice' && setting.options.length <= 3 ? undefined : id}>${setting.label}${
       setting.required && html`<span class="quiet small"> needed</span>`}</label>`;
@@ -186,7 +186,14 @@ function initialWords(setting) {
 }
 
 /** What is allowed, where the field does not show it by itself. */
-function rangeWords(setting) {
+function rangeWords(setting, timeUnit) {
   const shows = ['choice', 'column', 'columns', 'flag'].includes(setting.kind);
-  return !shows && setting.range ? `Allowed: ${setting.range}.` : '';
+  const range = timeUnit ? setting.range.replace(/time units$/, timeUnit).replace(/1\/time$/, `1/${timeUnit}`) : setting.range;
+  return !shows && range ? `Allowed: ${range}.` : '';
+}
+
+/** The unit beside a field; times and rates are counted in that of the recording, where it is known. */
+function unitWords(unit, timeUnit) {
+  const time = timeUnit || 'time units';
+  return {time, '1/time': timeUnit ? `1/${timeUnit}` : 'per time unit'}[unit] ?? unit;
 }
