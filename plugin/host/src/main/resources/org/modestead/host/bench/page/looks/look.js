@@ -49,7 +49,7 @@ export function Look({step, selection = '', select}) {
   return html`<div class="lk" data-look=${step.id} ref=${place}>
     ${look.stale && html`<p class="lk-callout lk-caution" data-stale>Out of date: these results belong to other settings or inputs. Run the step again.</p>`}
     ${parts.length > 1 && html`<nav class="lk-parts" aria-label="Parts of what this step found">
-      ${parts.map((part) => html`<button type="button" key=${part.id} class="lk-link" data-part=${part.id} onClick=${() => go(part.id)}>${part.title}</button>`)}
+      ${parts.map((part) => html`<button type="button" key=${part.id} class="lk-link" data-goes-to=${part.id} onClick=${() => go(part.id)}>${part.title}</button>`)}
       ${selection && html`<span class="lk-selected" role="status">selected: ${words(selection)}
         <button type="button" class="lk-button" data-action="clear-selection" onClick=${() => select('')}>clear (Esc)</button></span>`}
     </nav>`}
