@@ -13,6 +13,7 @@ import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.KernelStepEstimator;
 import org.modestead.engine.operator.OccupationEstimator;
 import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.operator.SegmentPlan;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.recording.StateRun;
@@ -108,11 +109,11 @@ record Candidate(KernelSpec spec, int place, Optional<Fit> fit, Optional<KernelV
     /** The fit with another step, which the judge compares rates with, needs fewer landmarks than the choice of the rank. */
     private static KernelVerdict judge(Fit made, Snapshots split, Progress progress) {
         Estimator estimator = estimator(made.kernel(), split, Math.min(LANDMARKS, Math.max(SECOND_STEP, PER_FUNCTION * made.rank())));
-        FittedOperator operator = new FittedOperator(made.compression(), made.rank(), "predicts held-out data as well as any, within noise", 0,
+        FittedOperator operator = new FittedOperator(made.compression(), made.rank(), new RankRule.Fixed(made.rank()), "predicts held-out data as well as any, within noise", 0,
                 estimator, estimator.describe(), estimator.kernel(), split, List.of());
         Spectrum spectrum = SpectrumExtractor.extract(operator, progress.part(0, 0.2));
         double longest = split.states(Snapshots.Part.TRAINING).stream().mapToDouble(Candidate::duration).max().orElse(0);
-        return KernelVerdict.of(spectrum, WellPosedness.judge(split, operator, spectrum, JudgeSettings.DEFAULT.withReplays(0), progress.part(0.2, 1)), longest);
+        return KernelVerdict.of(spectrum, WellPosedness.judge(split, operator, spectrum, JudgeSettings.DEFAULT.withReplays(0).withSplits(1), progress.part(0.2, 1)), longest);
     }
 
     private static double duration(StateRun run) {

@@ -93,7 +93,7 @@ public final class MomentFit {
             doubts.add(new Doubt("first-rows-unlike", String.format(Locale.ROOT, "The rows by which sums were balanced differ from the rest"
                     + " (condition %.2g): about %d digits of the sums are good.", condition, Math.max(0, (int) (15.5 - Math.log10(condition))))));
         }
-        return new FittedOperator(fitted.functions(), fitted.rank(), fitted.rankChoice(), fitted.ridge(), fitted.estimator(),
+        return new FittedOperator(fitted.functions(), fitted.rank(), fitted.rule(), fitted.rankChoice(), fitted.ridge(), fitted.estimator(),
                 fitted.method() + ", in one pass", fitted.kernel(), fitted.snapshots(), doubts);
     }
 }

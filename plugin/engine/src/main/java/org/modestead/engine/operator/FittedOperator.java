@@ -15,6 +15,7 @@ import org.modestead.engine.recording.Snapshots;
  *
  * @param functions up to rank R
  * @param rank chosen r in [1, R]
+ * @param rule by which r was chosen, for fits to other data
  * @param rankChoice why r was chosen, in words
  * @param ridge ρ that was applied, see {@link Ridge}
  * @param estimator what filled the compression, kept so that checks can refit with another step
@@ -26,6 +27,7 @@ import org.modestead.engine.recording.Snapshots;
 public record FittedOperator(
         Whitened functions,
         int rank,
+        RankRule rule,
         String rankChoice,
         double ridge,
         Estimator estimator,
@@ -37,6 +39,7 @@ public record FittedOperator(
     /** Takes immutable copies. */
     public FittedOperator {
         Objects.requireNonNull(functions);
+        Objects.requireNonNull(rule);
         Objects.requireNonNull(estimator);
         Objects.requireNonNull(kernel);
         doubts = List.copyOf(doubts);
@@ -54,7 +57,7 @@ public record FittedOperator(
 
     /** The same operator judged against other runs: only the runs change, not what was fitted. */
     public FittedOperator on(Snapshots others) {
-        return new FittedOperator(functions, rank, rankChoice, ridge, estimator, method, kernel, others, doubts);
+        return new FittedOperator(functions, rank, rule, rankChoice, ridge, estimator, method, kernel, others, doubts);
     }
 
     /** Returns step map or generator. */

@@ -57,7 +57,7 @@ public final class OperatorFitter {
         RankChoice choice = RankSelection.choose(rule, full, estimator, ridge, snapshots, progress.part(0.8, 1));
         Whitened made = full.at(choice.rank());
         progress.report(1, "fitted");
-        return new FittedOperator(made, choice.rank(), choice.reason(), ridge, estimator, method(estimator, full), estimator.kernel(), snapshots,
+        return new FittedOperator(made, choice.rank(), rule, choice.reason(), ridge, estimator, method(estimator, full), estimator.kernel(), snapshots,
                 doubts(made, choice.rank(), snapshots));
     }
 

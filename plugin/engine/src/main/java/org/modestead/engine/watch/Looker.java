@@ -54,7 +54,7 @@ record Looker(FittedOperator operator, Spectrum spectrum, List<Mode> watched, do
         Snapshots own = stored.replaced(window.pieces(), List.of(), stored.smoothing());
         FittedOperator whole = OperatorFitter.fit(own, operator.estimator(), new RankRule.Fixed(1), operator.ridge(), progress);
         int rank = Math.min(operator.rank(), whole.functions().rank());
-        return new FittedOperator(whole.functions().at(rank), rank, operator.rankChoice(), whole.ridge(), whole.estimator(),
+        return new FittedOperator(whole.functions().at(rank), rank, operator.rule(), operator.rankChoice(), whole.ridge(), whole.estimator(),
                 whole.method(), whole.kernel(), own, whole.doubts());
     }
 

@@ -17,6 +17,7 @@ package org.modestead.engine.wellposed;
  * @param completenessThreshold least goodness of fit with which 1/‖x‖ heads linearly to zero before a run counts as
  *     escaping, in (0, 1); default 0.98
  * @param replays with noise that a finding is held against, see {@link Replays}, at least 0 = none; default 8
+ * @param splits of the runs that are judged in all where few runs were held out, see {@link Splits}, at least 1 = only the one at hand; default 5
  */
 public record JudgeSettings(
         int ladderFrom,
@@ -30,20 +31,27 @@ public record JudgeSettings(
         double captureThreshold,
         double stepThreshold,
         double completenessThreshold,
-        int replays) {
+        int replays,
+        int splits) {
 
     /** The documented defaults. */
-    public static final JudgeSettings DEFAULT = new JudgeSettings(0, 0, 0.05, 0.25, 0.1, 3, 0.1, 0.1, 0.5, 0.1, 0.98, 8);
+    public static final JudgeSettings DEFAULT = new JudgeSettings(0, 0, 0.05, 0.25, 0.1, 3, 0.1, 0.1, 0.5, 0.1, 0.98, 8, 5);
 
     /** The same with other ends of the ladder. */
     public JudgeSettings withLadder(int from, int to) {
         return new JudgeSettings(from, to, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
-                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, replays);
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, replays, splits);
     }
 
     /** The same with another number of replays. */
     public JudgeSettings withReplays(int count) {
         return new JudgeSettings(ladderFrom, ladderTo, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
-                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, count);
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, count, splits);
+    }
+
+    /** The same with another number of splits. */
+    public JudgeSettings withSplits(int count) {
+        return new JudgeSettings(ladderFrom, ladderTo, shareThreshold, residualThreshold, settleThreshold, normGrowthThreshold, overlapThreshold,
+                gapThreshold, captureThreshold, stepThreshold, completenessThreshold, replays, count);
     }
 }

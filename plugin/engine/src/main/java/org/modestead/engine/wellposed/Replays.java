@@ -46,12 +46,11 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
 
     private static final long SEED = 60103;
     private static final int MOST_RANKS = 30;
-    private static final double TOO_FAR = 0.5;
 
     static Replays of(Evidence evidence, SampleNoise noise) {
         List<Mode> carrying = evidence.spectrum().modes().stream().filter(mode -> mode.constant() || evidence.carries(mode)).toList();
         return new Replays(ReplayedRuns.of(evidence.operator(), evidence.spectrum(), carrying), evidence.spectrum(), evidence.operator(), noise,
-                evidence.settings().withReplays(0));
+                evidence.settings().withReplays(0).withSplits(1));
     }
 
     /** Returns the findings with those passed over that noise makes as well. */
@@ -129,13 +128,7 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
         }
 
         private OptionalInt matched(Finding f, Replays replays) {
-            Mode mode = replays.spectrum().modes().get(f.mode() - 1);
-            return spectrum.modes().stream().filter(other -> !other.constant() && distance(mode, other) < TOO_FAR)
-                    .min(java.util.Comparator.comparingDouble(other -> distance(mode, other))).stream().mapToInt(Mode::number).findFirst();
-        }
-
-        private double distance(Mode a, Mode b) {
-            return Ladder.relativeChange(a.rate(), b.rate(), longest) + Math.abs(a.energyShare() - b.energyShare());
+            return FoundAgain.in(spectrum, replays.spectrum().modes().get(f.mode() - 1), longest);
         }
 
         /** How far a figure lies beyond its threshold, as a factor; the captured share is to stay above its own. */

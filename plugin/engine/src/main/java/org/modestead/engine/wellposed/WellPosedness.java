@@ -24,6 +24,13 @@ public final class WellPosedness {
      * @throws org.modestead.engine.FitFault if the ladder asked for does not fit the operator
      */
     public static Verdict judge(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, JudgeSettings settings, Progress progress) {
+        Splits splits = Splits.of(operator, spectrum, snapshots, settings);
+        double own = 1.0 / (1 + splits.others().size());
+        Verdict alone = alone(snapshots, operator, spectrum, settings, progress.part(0, own));
+        return splits.weighed(alone, progress.part(own, 1));
+    }
+
+    private static Verdict alone(Snapshots snapshots, FittedOperator operator, Spectrum spectrum, JudgeSettings settings, Progress progress) {
         FittedOperator judged = operator.on(snapshots);
         JudgingRuns judging = JudgingRuns.of(judged);
         Ladder ladder = Ladder.climb(judged, spectrum, judging, settings, progress.part(0, 0.6));

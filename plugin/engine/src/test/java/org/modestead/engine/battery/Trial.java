@@ -57,8 +57,12 @@ record Trial(Case truth, double noise, int runs, long seed) {
     }
 
     Outcome judge() {
+        return judge(JudgeSettings.DEFAULT);
+    }
+
+    Outcome judge(JudgeSettings settings) {
         try {
-            Verdict verdict = Motions.judge(fitted(), JudgeSettings.DEFAULT);
+            Verdict verdict = Motions.judge(fitted(), settings);
             return new Outcome(this, Optional.of(verdict.overall().grade()), verdict.overall().sentence());
         } catch (Fault fault) {
             return new Outcome(this, Optional.empty(), fault.getMessage());

@@ -23,6 +23,7 @@ import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Preparation;
@@ -85,7 +86,7 @@ record Fixture(FittedOperator operator, Spectrum spectrum) {
         Arrays.fill(singular, 1);
         OrthonormalCompression compression = new OrthonormalCompression(basis, CommonOps_DDRM.identity(r), action,
                 CommonOps_DDRM.identity(r), observable, singular, 1, InnerProduct.DATA, evolution);
-        FittedOperator operator = new FittedOperator(compression, r, "by hand", 0, new ByHand(), "by hand", Optional.empty(),
+        FittedOperator operator = new FittedOperator(compression, r, new RankRule.Fixed(r), "by hand", 0, new ByHand(), "by hand", Optional.empty(),
                 snapshots, List.of());
         return new Fixture(operator, spectrum(snapshots, evolution, action, observable));
     }

@@ -21,6 +21,7 @@ import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.operator.OrthonormalCompression;
+import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.Channel;
 import org.modestead.engine.recording.DelayEmbedding;
 import org.modestead.engine.recording.Preparation;
@@ -61,7 +62,7 @@ class ChecksTest {
         OrthonormalCompression compression = compression(action, product, evolution);
         Run run = Motions.run("a", 20, 1, t -> new double[action.numRows]);
         Snapshots snapshots = Motions.snapshots(1, 1, List.of(run), List.of());
-        FittedOperator operator = new FittedOperator(compression, compression.rank(), "fixed", 0, new LinearEstimator(),
+        FittedOperator operator = new FittedOperator(compression, compression.rank(), new RankRule.Fixed(compression.rank()), "fixed", 0, new LinearEstimator(),
                 "by hand", Optional.empty(),
                 snapshots, List.of());
         ModalExpansion expansion = ModalExpansion.of(compression);

@@ -9,7 +9,7 @@ import org.modestead.nodes.contract.Setting.Common;
 import org.modestead.nodes.contract.SettingProblem;
 import org.modestead.nodes.contract.Settings;
 
-/** Settings of the Well-posedness Checker: its extent, the ends of the ladder, every threshold and the replays, with the engine's defaults. */
+/** Settings of the Well-posedness Checker: its extent, the ends of the ladder, every threshold, the replays and the splits, with the engine's defaults. */
 final class JudgeNodeSettings {
 
     private static final String EXTENT = "extent";
@@ -26,9 +26,12 @@ final class JudgeNodeSettings {
     private static final String STEP = "step-threshold";
     private static final String COMPLETENESS = "completeness-threshold";
     private static final String REPLAYS = "replays";
+    private static final String SPLITS = "splits";
     private static final String LADDER = "Ladder";
     private static final String NOISE = "Noise";
+    private static final String RUNS = "Runs held out";
     private static final long MOST_REPLAYS = 1000;
+    private static final long MOST_SPLITS = 100;
     private static final String THRESHOLDS = "Thresholds";
     private static final long LARGEST_RANK = 10_000;
     private static final double LARGEST = 1e12;
@@ -72,7 +75,10 @@ final class JudgeNodeSettings {
                 new Setting.Whole(new Common(REPLAYS, "Replays", NOISE, "A finding against a mode does not count when noise makes as much of"
                         + " it in one of so many replays of the recording, in which the mode exists by construction. Only for recordings"
                         + " that the Snapshot Builder has smoothed, since the noise is known there; 0 asks no replay. Each takes about as"
-                        + " long as the check itself."), "", 0, MOST_REPLAYS, OptionalLong.of(DEFAULT.replays())));
+                        + " long as the check itself."), "", 0, MOST_REPLAYS, OptionalLong.of(DEFAULT.replays())),
+                new Setting.Whole(new Common(SPLITS, "Splits", RUNS, "Where fewer than four runs were held out, up to 50 000 samples in all, fit and check are repeated"
+                        + " with others held out in their place, and each mode takes the grade that most of so many splits give it; 1 leaves it at the split"
+                        + " of the Snapshot Builder. Each takes about as long as the check itself."), "", 1, MOST_SPLITS, OptionalLong.of(DEFAULT.splits())));
     }
 
     private static Setting rank(String key, String label, String help, int initial) {
@@ -108,6 +114,6 @@ final class JudgeNodeSettings {
                 settings.number(RESIDUAL), settings.number(SETTLE), settings.number(NORM_GROWTH),
                         settings.number(OVERLAP),
                 settings.number(GAP), settings.number(CAPTURE), settings.number(STEP), settings.number(COMPLETENESS),
-                settings.whole(REPLAYS));
+                settings.whole(REPLAYS), settings.whole(SPLITS));
     }
 }

@@ -30,8 +30,8 @@ class CheckerSettingsTest {
                         Map.entry("norm-growth-threshold", 1.4),
                 Map.entry("overlap-threshold", 0.15), Map.entry("gap-threshold", 0.16), Map.entry("capture-threshold",
                         0.17),
-                Map.entry("step-threshold", 0.18), Map.entry("completeness-threshold", 0.19), Map.entry("replays", 3)));
-        assertEquals(new JudgeSettings(3, 9, 0.11, 0.12, 0.13, 1.4, 0.15, 0.16, 0.17, 0.18, 0.19, 3),
+                Map.entry("step-threshold", 0.18), Map.entry("completeness-threshold", 0.19), Map.entry("replays", 3), Map.entry("splits", 2)));
+        assertEquals(new JudgeSettings(3, 9, 0.11, 0.12, 0.13, 1.4, 0.15, 0.16, 0.17, 0.18, 0.19, 3, 2),
                 JudgeNodeSettings.read(settings));
     }
 
