@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalInt;
+import org.modestead.engine.operator.Evolution;
 import org.modestead.engine.operator.InnerProduct;
 import org.modestead.engine.operator.OrthonormalCompression;
 
@@ -22,8 +23,11 @@ import org.modestead.engine.operator.OrthonormalCompression;
  */
 final class Closure {
 
-    /** Residual up to which nothing but rounding and quadrature is to blame. */
+    /** Residual up to which nothing but rounding, and what stacked samples leave between them, is to blame. */
     private static final double EXACT = 1e-3;
+
+    /** The same of a generator, whose integrals along the runs are quadratures: a tenth of a radian a step costs about so much. */
+    private static final double EXACT_QUADRATURE = 3e-3;
 
     /** Largest residual of an eigenfunction that noise blurs. */
     private static final double BLURRED = 0.1;
@@ -71,7 +75,7 @@ final class Closure {
     /** Returns a mode of a space that has ended as it is in all of it, where it is an eigenfunction; empty otherwise. */
     static Optional<LadderRow> row(int mode, Evidence evidence) {
         OptionalInt whole = whole(evidence);
-        return evidence.ladderOf(mode).stream().filter(row -> whole.isPresent() && row.rank() == whole.getAsInt() && closed(row)).findFirst()
+        return evidence.ladderOf(mode).stream().filter(row -> whole.isPresent() && row.rank() == whole.getAsInt() && closed(row, evidence)).findFirst()
                 .or(() -> twice(mode, evidence));
     }
 
@@ -80,7 +84,8 @@ final class Closure {
         return row(mode, evidence).stream().mapToDouble(LadderRow::residual).findFirst();
     }
 
-    private static boolean closed(LadderRow row) {
-        return row.residual() <= EXACT || row.residual() <= BLURRED && row.withinNoise(TIMES_NOISE);
+    private static boolean closed(LadderRow row, Evidence evidence) {
+        boolean quadrature = evidence.operator().evolution() instanceof Evolution.Generator;
+        return row.residual() <= (quadrature ? EXACT_QUADRATURE : EXACT) || row.residual() <= BLURRED && row.withinNoise(TIMES_NOISE);
     }
 }

@@ -23,8 +23,9 @@ import org.modestead.engine.spectrum.SpectrumExtractor;
 /**
  * Whether a verdict hangs on which runs were held out. Where they are few, others are held out in their place, as many at a time: the operator is fitted
  * anew, with a rank by the same rule, its modes are judged, and every mode takes the grade that most splits give it, the stricter one of two that
- * are as frequent. A mode that another split does not show, see {@link FoundAgain}, drifts there: it belongs to the runs that were fitted. (Cross-validation, Stone,
- * J. R. Stat. Soc. B 36:111, 1974; the vote of fits to parts of the data, Breiman, Machine Learning 24:123, 1996.)
+ * are as frequent. A mode that another split does not show, see {@link FoundAgain}, drifts there: it belongs to the runs that were fitted. A split says
+ * nothing of a mode that hardly any of its runs excite on one side, see {@link Excitation}. (Cross-validation, Stone, J. R. Stat. Soc. B 36:111, 1974; the vote
+ * of fits to parts of the data, Breiman, Machine Learning 24:123, 1996.)
  *
  * <p>Only whole runs change places. Where the end of runs was held out, or other runs judge than those of the fit's own recording, there is one split.
  *
@@ -88,14 +89,16 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
         if (judged.isEmpty()) {
             return alone;
         }
+        Excitation excitation = Excitation.of(operator, spectrum);
         List<Finding> findings = new ArrayList<>(alone.findings());
         List<ModeVerdict> verdicts = new ArrayList<>();
         for (ModeVerdict verdict : alone.modes()) {
             Mode mode = spectrum.modes().get(verdict.mode() - 1);
-            if (mode.constant()) {
+            List<Judgement> telling = mode.constant() ? List.of() : judged.stream().filter(other -> excitation.told(other.snapshots(), mode)).toList();
+            if (telling.isEmpty()) {
                 verdicts.add(verdict);
             } else {
-                Vote vote = new Vote(verdict, judged.stream().map(other -> other.of(mode)).toList());
+                Vote vote = new Vote(verdict, excitation.told(operator.snapshots(), mode), telling.stream().map(other -> other.of(mode)).toList());
                 findings.add(vote.finding());
                 verdicts.add(vote.verdict());
             }
@@ -108,7 +111,7 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
             FittedOperator again = OperatorFitter.fit(snapshots, operator.estimator(), operator.rule(), operator.ridge(), progress.part(0, 0.2));
             Spectrum found = SpectrumExtractor.extract(again, Progress.NONE);
             Verdict verdict = WellPosedness.judge(snapshots, again, found, settings.withSplits(1).withLadder(0, 0), progress.part(0.2, 1));
-            return Optional.of(new Judgement(found, verdict, snapshots.training().stream().mapToDouble(Run::duration).max().orElseThrow()));
+            return Optional.of(new Judgement(snapshots, found, verdict, snapshots.training().stream().mapToDouble(Run::duration).max().orElseThrow()));
         } catch (FitFault fault) {
             progress.checkCancelled();
             return Optional.empty();
@@ -118,11 +121,12 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
     /**
      * What was said of another split.
      *
+     * @param snapshots so split
      * @param spectrum fitted to it
      * @param verdict on it
      * @param longest duration of a run that was fitted
      */
-    private record Judgement(Spectrum spectrum, Verdict verdict, double longest) {
+    private record Judgement(Snapshots snapshots, Spectrum spectrum, Verdict verdict, double longest) {
 
         /** Returns the verdict on a mode there; empty where it is not found again. */
         Optional<ModeVerdict> of(Mode mode) {
@@ -135,9 +139,10 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
      * The verdicts on one mode.
      *
      * @param own of the split at hand
-     * @param others of the further ones, empty where the mode is not found again
+     * @param told whether that split can tell of the mode, and so has a vote
+     * @param others of the further ones that can, empty where the mode is not found again
      */
-    record Vote(ModeVerdict own, List<Optional<ModeVerdict>> others) {
+    record Vote(ModeVerdict own, boolean told, List<Optional<ModeVerdict>> others) {
 
         /** The grade of most splits. */
         Grade grade() {
@@ -145,15 +150,15 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
         }
 
         private int votes(Grade grade) {
-            return (own.grade() == grade ? 1 : 0) + (int) others.stream().filter(other -> other.map(ModeVerdict::grade).orElse(Grade.DRIFTS) == grade).count();
+            return (told && own.grade() == grade ? 1 : 0) + (int) others.stream().filter(other -> other.map(ModeVerdict::grade).orElse(Grade.DRIFTS) == grade).count();
         }
 
         Finding finding() {
-            int all = others.size() + 1;
-            String told = Stream.of(Grade.values()).filter(grade -> votes(grade) > 0).map(grade -> votes(grade) + " say " + grade.word()).collect(Collectors.joining(", "));
+            int all = others.size() + (told ? 1 : 0);
+            String grades = Stream.of(Grade.values()).filter(grade -> votes(grade) > 0).map(grade -> votes(grade) + " say " + grade.word()).collect(Collectors.joining(", "));
             long lost = others.stream().filter(Optional::isEmpty).count();
             return new Finding(own.mode(), CHECK, (double) votes(own.grade()) / all, 0.5, own.grade() == grade(), "Of " + all
-                    + " splits, each with other runs held out, " + told + (lost == 0 ? "." : "; in " + lost + " of them it is not found again, which counts as drifts."));
+                    + " splits that tell of it, each with other runs held out, " + grades + (lost == 0 ? "." : "; in " + lost + " of them it is not found again, which counts as drifts."));
         }
 
         ModeVerdict verdict() {

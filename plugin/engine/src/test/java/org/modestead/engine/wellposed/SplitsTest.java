@@ -18,6 +18,8 @@ import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.LinearEstimator;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
+import org.modestead.engine.spectrum.Mode;
+import org.modestead.engine.spectrum.Spectrum;
 import org.modestead.engine.spectrum.SpectrumExtractor;
 
 class SplitsTest {
@@ -103,16 +105,39 @@ class SplitsTest {
         assertEquals(Grade.STANDS, vote(Grade.ABSENT, Grade.STANDS, Grade.STANDS).grade());
         assertEquals(Grade.DRIFTS, vote(Grade.STANDS, Grade.DRIFTS).grade());
         assertEquals(Grade.UNDECIDED, vote(Grade.STANDS, Grade.UNDECIDED, Grade.STANDS, Grade.UNDECIDED, Grade.SETTLES).grade());
-        Splits.Vote lost = new Splits.Vote(verdict(Grade.STANDS), List.of(Optional.empty(), Optional.empty()));
+        Splits.Vote lost = new Splits.Vote(verdict(Grade.STANDS), true, List.of(Optional.empty(), Optional.empty()));
         assertEquals(Grade.DRIFTS, lost.grade());
-        assertEquals("Of 3 splits, each with other runs held out, 1 say stands, 2 say drifts; in 2 of them it is not found again, which counts as drifts.",
+        assertEquals("Of 3 splits that tell of it, each with other runs held out, 1 say stands, 2 say drifts; in 2 of them it is not found again, which counts as drifts.",
                 lost.finding().sentence());
         assertEquals(List.of("other-splits", "why-drifts"), vote(Grade.STANDS, Grade.DRIFTS).verdict().decidedBy());
         assertEquals(List.of("why-stands"), vote(Grade.STANDS, Grade.STANDS).verdict().decidedBy());
     }
 
+    @Test
+    void aSplitWhoseRunsDoNotExciteAModeHasNoVote() {
+        Splits.Vote vote = new Splits.Vote(verdict(Grade.UNDECIDED), false, List.of(Optional.of(verdict(Grade.STANDS))));
+        assertEquals(Grade.STANDS, vote.grade());
+        List<Run> runs = new ArrayList<>();
+        double[] second = {1, 1, 0, 0, 0, 1};
+        for (int i = 0; i < second.length; i++) {
+            double y = second[i];
+            runs.add(Motions.run("r" + i, Motions.grid(40, 0.05), t -> new double[] {Math.exp(-t), y * Math.exp(-2 * t)}, 0, new Random(1)));
+        }
+        Snapshots fitted = split(runs, 1);
+        FittedOperator operator = Motions.fit(fitted, new LinearEstimator(), 2);
+        Spectrum spectrum = SpectrumExtractor.extract(operator, Progress.NONE);
+        Excitation excitation = Excitation.of(operator, spectrum);
+        Mode slow = Motions.nearest(spectrum, -1, 0);
+        Mode fast = Motions.nearest(spectrum, -2, 0);
+        assertEquals(List.of(true, true, false, false), others(fitted, fitted, JudgeSettings.DEFAULT).stream().map(other -> excitation.told(other, fast)).toList(),
+                "y is excited in runs 0, 1 and 5 only");
+        assertTrue(others(fitted, fitted, JudgeSettings.DEFAULT).stream().allMatch(other -> excitation.told(other, slow)));
+        Snapshots alone = split(List.of(runs.get(2), runs.get(3)), List.of(runs.get(0)));
+        assertEquals(false, excitation.told(alone, fast), "no run that fits excites it");
+    }
+
     private static Splits.Vote vote(Grade own, Grade... others) {
-        return new Splits.Vote(verdict(own), Stream.of(others).map(grade -> Optional.of(verdict(grade))).toList());
+        return new Splits.Vote(verdict(own), true, Stream.of(others).map(grade -> Optional.of(verdict(grade))).toList());
     }
 
     private static ModeVerdict verdict(Grade grade) {
