@@ -21,6 +21,9 @@ import org.modestead.engine.spectrum.Spectrum;
  */
 record Excitation(Map<Run, Part> parts) {
 
+    /** What hardly shows in the runs that fit cannot be fitted, however well noise alone seems to excite it. */
+    private static final double FITTED = 0.25;
+
     /**
      * @param squares length r, sum of |φ|² over the states
      * @param states their number
@@ -44,11 +47,11 @@ record Excitation(Map<Run, Part> parts) {
         return new Excitation(parts);
     }
 
-    /** Whether a split can tell of a mode: the runs that fit and those that judge excite it, neither less than a twentieth of the other. */
+    /** Whether a split can tell of a mode: the runs that fit excite it at least a quarter as much as those that judge, and these a twentieth as much as they. */
     boolean told(Snapshots split, Mode mode) {
         double fits = size(split.training(), mode);
         double judges = size(split.holdout(), mode);
-        return judges >= Rung.EXCITED * fits && fits >= Rung.EXCITED * judges;
+        return judges >= Rung.EXCITED * fits && fits >= FITTED * judges;
     }
 
     private double size(List<Run> runs, Mode mode) {

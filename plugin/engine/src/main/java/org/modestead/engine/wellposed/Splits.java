@@ -24,7 +24,8 @@ import org.modestead.engine.spectrum.SpectrumExtractor;
  * Whether a verdict hangs on which runs were held out. Where they are few, others are held out in their place, as many at a time: the operator is fitted
  * anew, with a rank by the same rule, its modes are judged, and every mode takes the grade that most splits give it, the stricter one of two that
  * are as frequent. A mode that another split does not show, see {@link FoundAgain}, drifts there: it belongs to the runs that were fitted. A split says
- * nothing of a mode that hardly any of its runs excite on one side, see {@link Excitation}. (Cross-validation, Stone, J. R. Stat. Soc. B 36:111, 1974; the vote
+ * nothing of a mode that hardly any of its runs excite on one side, see {@link Excitation}, and where no more than half of the splits tell of it the one at hand
+ * decides alone. (Cross-validation, Stone, J. R. Stat. Soc. B 36:111, 1974; the vote
  * of fits to parts of the data, Breiman, Machine Learning 24:123, 1996.)
  *
  * <p>Only whole runs change places. Where the end of runs was held out, or other runs judge than those of the fit's own recording, there is one split.
@@ -95,10 +96,11 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
         for (ModeVerdict verdict : alone.modes()) {
             Mode mode = spectrum.modes().get(verdict.mode() - 1);
             List<Judgement> telling = mode.constant() ? List.of() : judged.stream().filter(other -> excitation.told(other.snapshots(), mode)).toList();
-            if (telling.isEmpty()) {
+            boolean told = excitation.told(operator.snapshots(), mode);
+            if (2 * (telling.size() + (told ? 1 : 0)) <= others.size() + 1) {
                 verdicts.add(verdict);
             } else {
-                Vote vote = new Vote(verdict, excitation.told(operator.snapshots(), mode), telling.stream().map(other -> other.of(mode)).toList());
+                Vote vote = new Vote(verdict, told, telling.stream().map(other -> other.of(mode)).toList());
                 findings.add(vote.finding());
                 verdicts.add(vote.verdict());
             }
