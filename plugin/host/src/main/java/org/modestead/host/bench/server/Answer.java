@@ -81,9 +81,14 @@ final class Answer {
     }
 
     static void refuse(Context context, int status, Fault fault) {
+        json(context.status(status), refusal(fault));
+    }
+
+    /** Returns what a refusal says. */
+    static JsonNode refusal(Fault fault) {
         ObjectNode json = JsonNodeFactory.instance.objectNode();
         json.putObject("error").put("sentence", fault.getMessage()).put("where", fault.where()).put("seen", fault.seen()).put("wanted", fault.wanted());
-        json(context.status(status), json);
+        return json;
     }
 
     static byte[] bytes(JsonNode json) {

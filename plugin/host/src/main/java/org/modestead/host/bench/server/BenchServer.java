@@ -43,6 +43,7 @@ public final class BenchServer implements AutoCloseable {
             config.http.maxRequestSize = 8L << 20;
             // nothing leaves this machine: packing would only cost time
             config.http.compressionStrategy = CompressionStrategy.NONE;
+            PlainRefusals.on(config.jetty);
             routes(config.routes);
         });
         server.start("127.0.0.1", port);

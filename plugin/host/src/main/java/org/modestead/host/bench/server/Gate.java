@@ -7,6 +7,7 @@ import java.security.MessageDigest;
 import java.security.SecureRandom;
 import java.util.Base64;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 
@@ -26,6 +27,10 @@ final class Gate {
     private static final Set<HandlerType> READING = Set.of(HandlerType.GET, HandlerType.HEAD);
     private static final String POLICY = "default-src 'none'; script-src 'self'; style-src 'self'; img-src 'self' data: blob:; "
             + "connect-src 'self'; font-src 'self'; form-action 'none'; frame-ancestors 'none'; base-uri 'none'";
+
+    /** What every answer has, refusals too. */
+    static final Map<String, String> HEADERS = Map.of("Content-Security-Policy", POLICY, "X-Content-Type-Options", "nosniff", "Referrer-Policy", "no-referrer",
+            "Cross-Origin-Opener-Policy", "same-origin", "Cross-Origin-Resource-Policy", "same-origin", "X-Frame-Options", "DENY", "Cache-Control", "no-store");
 
     private final String token;
     private final String session;
@@ -56,9 +61,7 @@ final class Gate {
 
     /** Sets the headers that every answer has, refusals too. */
     static void harden(Context context) {
-        context.header("Content-Security-Policy", POLICY).header("X-Content-Type-Options", "nosniff").header("Referrer-Policy", "no-referrer")
-                .header("Cross-Origin-Opener-Policy", "same-origin").header("Cross-Origin-Resource-Policy", "same-origin")
-                .header("X-Frame-Options", "DENY").header("Cache-Control", "no-store");
+        HEADERS.forEach(context::header);
     }
 
     /** Returns whether this is the start URL with the right token; then the answer carries the cookie. */
