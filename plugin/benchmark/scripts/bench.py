@@ -170,7 +170,7 @@ def row(result, exponent):
 
     def ratio(name):
         if "modestead" in middle and stopped.get(name, "").startswith("stopped"):
-            return "below %.2f" % (middle["modestead"] / PATIENCE)
+            return "below %.2f" % (math.ceil(100 * middle["modestead"] / PATIENCE) / 100)
         if name not in middle or "modestead" not in middle:
             return "-"
         if CASES[case]["modes"] and not result["apart"].get(name, 0) <= tolerance:

@@ -42,8 +42,8 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
     /** So many runs held out are no accident of one of them. */
     private static final int ENOUGH = 4;
 
-    /** Of longer recordings no run decides by itself, and fitting them again takes its time. */
-    private static final int MOST_SAMPLES = 50_000;
+    /** Numbers in all samples together: of larger recordings no run decides by itself, and fitting them again takes its time. */
+    private static final long MOST_NUMBERS = 2_000_000;
 
     /** @param settings whose number of splits is heeded */
     static Splits of(FittedOperator operator, Spectrum spectrum, Snapshots judging, JudgeSettings settings) {
@@ -54,8 +54,8 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
         Set<String> held = names(judging.holdout());
         List<String> fits = List.copyOf(names(fitted.training().stream().filter(run -> run.weight() > 0).toList()));
         int size = held.size();
-        int samples = Stream.concat(fitted.training().stream(), judging.holdout().stream()).mapToInt(Run::samples).sum();
-        if (size == 0 || size >= ENOUGH || samples > MOST_SAMPLES || !held.equals(names(fitted.holdout())) || !Collections.disjoint(held, names(fitted.training()))) {
+        long numbers = Stream.concat(fitted.training().stream(), judging.holdout().stream()).mapToLong(run -> run.values().getNumElements()).sum();
+        if (size == 0 || size >= ENOUGH || numbers > MOST_NUMBERS || !held.equals(names(fitted.holdout())) || !Collections.disjoint(held, names(fitted.training()))) {
             return List.of();
         }
         int count = Math.min(most, fits.size() / size);
@@ -157,10 +157,12 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
 
         Finding finding() {
             int all = others.size() + (told ? 1 : 0);
-            String grades = Stream.of(Grade.values()).filter(grade -> votes(grade) > 0).map(grade -> votes(grade) + " say " + grade.word()).collect(Collectors.joining(", "));
+            String grades = Stream.of(Grade.values()).filter(grade -> votes(grade) > 0)
+                    .map(grade -> votes(grade) + (votes(grade) == 1 ? " says " : " say ") + grade.word()).collect(Collectors.joining(", "));
             long lost = others.stream().filter(Optional::isEmpty).count();
             return new Finding(own.mode(), CHECK, (double) votes(own.grade()) / all, 0.5, own.grade() == grade(), "Of " + all
-                    + " splits that tell of it, each with other runs held out, " + grades + (lost == 0 ? "." : "; in " + lost + " of them it is not found again, which counts as drifts."));
+                    + " splits that tell of it, each with other runs held out, " + grades
+                    + (lost == 0 ? "." : "; not to find it again counts as drifts (" + lost + ")."));
         }
 
         ModeVerdict verdict() {

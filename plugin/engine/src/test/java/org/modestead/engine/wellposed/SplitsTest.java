@@ -107,7 +107,7 @@ class SplitsTest {
         assertEquals(Grade.UNDECIDED, vote(Grade.STANDS, Grade.UNDECIDED, Grade.STANDS, Grade.UNDECIDED, Grade.SETTLES).grade());
         Splits.Vote lost = new Splits.Vote(verdict(Grade.STANDS), true, List.of(Optional.empty(), Optional.empty()));
         assertEquals(Grade.DRIFTS, lost.grade());
-        assertEquals("Of 3 splits that tell of it, each with other runs held out, 1 say stands, 2 say drifts; in 2 of them it is not found again, which counts as drifts.",
+        assertEquals("Of 3 splits that tell of it, each with other runs held out, 1 says stands, 2 say drifts; not to find it again counts as drifts (2).",
                 lost.finding().sentence());
         assertEquals(List.of("other-splits", "why-drifts"), vote(Grade.STANDS, Grade.DRIFTS).verdict().decidedBy());
         assertEquals(List.of("why-stands"), vote(Grade.STANDS, Grade.STANDS).verdict().decidedBy());

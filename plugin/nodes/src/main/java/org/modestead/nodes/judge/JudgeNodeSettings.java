@@ -76,7 +76,7 @@ final class JudgeNodeSettings {
                         + " it in one of so many replays of the recording, in which the mode exists by construction. Only for recordings"
                         + " that the Snapshot Builder has smoothed, since the noise is known there; 0 asks no replay. Each takes about as"
                         + " long as the check itself."), "", 0, MOST_REPLAYS, OptionalLong.of(DEFAULT.replays())),
-                new Setting.Whole(new Common(SPLITS, "Splits", RUNS, "Where fewer than four runs were held out, up to 50 000 samples in all, fit and check are repeated"
+                new Setting.Whole(new Common(SPLITS, "Splits", RUNS, "Where fewer than four runs were held out, in recordings of up to two million numbers, fit and check are repeated"
                         + " with others held out in their place, and each mode takes the grade that most of so many splits give it; 1 leaves it at the split"
                         + " of the Snapshot Builder. Each takes about as long as the check itself."), "", 1, MOST_SPLITS, OptionalLong.of(DEFAULT.splits())));
     }
