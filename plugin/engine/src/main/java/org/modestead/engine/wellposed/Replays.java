@@ -6,17 +6,14 @@ import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Random;
 import java.util.Set;
-import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.operator.FittedOperator;
 import org.modestead.engine.operator.InnerProduct;
-import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.operator.RankRule;
 import org.modestead.engine.recording.SampleNoise;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
-import org.modestead.engine.spectrum.SpectrumExtractor;
 
 /**
  * Whether what speaks against a mode is more than noise does. The recording is replayed as if its modes existed, see {@link ReplayedRuns}.
@@ -59,13 +56,13 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
         List<Finding> excused = new ArrayList<>();
         int steps = evidence.settings().replays() + 1;
         if (!open.isEmpty() && runs.finite()) {
-            Optional<Judgement> clean = judged(runs.clean(), progress.part(0, 1.0 / steps));
-            open.removeIf(f -> clean.isEmpty() || !clean.get().exists(f, this));
+            Optional<JudgedAgain> clean = judged(runs.clean(), progress.part(0, 1.0 / steps));
+            open.removeIf(f -> clean.isEmpty() || !exists(f, clean.get()));
             Random random = new Random(SEED);
             for (int k = 0; k < evidence.settings().replays() && !open.isEmpty(); k++) {
                 progress.checkCancelled();
-                Optional<Judgement> replay = judged(runs.noisy(noise, random), progress.part((k + 1.0) / steps, (k + 2.0) / steps));
-                List<Finding> asBad = open.stream().filter(f -> replay.isPresent() && replay.get().asBad(f, this)).toList();
+                Optional<JudgedAgain> replay = judged(runs.noisy(noise, random), progress.part((k + 1.0) / steps, (k + 2.0) / steps));
+                List<Finding> asBad = open.stream().filter(f -> replay.isPresent() && asBad(f, replay.get())).toList();
                 excused.addAll(asBad);
                 open.removeAll(asBad);
             }
@@ -84,56 +81,37 @@ record Replays(ReplayedRuns runs, Spectrum spectrum, FittedOperator operator, Sa
                 + " The noise in the data makes as much of it where the mode exists, so this is not held against it.");
     }
 
-    private Optional<Judgement> judged(Snapshots snapshots, Progress progress) {
-        try {
-            FittedOperator again = OperatorFitter.fit(snapshots, operator.estimator(), new RankRule.Holdout(MOST_RANKS), operator.ridge(), progress.part(0, 0.3));
-            Spectrum found = SpectrumExtractor.extract(again, Progress.NONE);
-            return Optional.of(new Judgement(found, WellPosedness.judge(snapshots, again, found, settings, progress.part(0.3, 1)),
-                    snapshots.training().stream().mapToDouble(run -> run.duration()).max().orElseThrow()));
-        } catch (FitFault fault) {
-            progress.checkCancelled();
-            return Optional.empty();
-        }
+    private Optional<JudgedAgain> judged(Snapshots snapshots, Progress progress) {
+        return JudgedAgain.of(snapshots, operator, new RankRule.Holdout(MOST_RANKS), settings, progress);
     }
 
-    /**
-     * What was said of a replay.
-     *
-     * @param spectrum of the replay
-     * @param verdict on it
-     * @param longest duration of a run
-     */
-    private record Judgement(Spectrum spectrum, Verdict verdict, double longest) {
+    /** Whether the check passes in a replay, and the mode with it. */
+    private boolean exists(Finding f, JudgedAgain replay) {
+        return same(f, replay).filter(Finding::passed).isPresent() && (f.mode() == 0 || replay.of(mode(f)).filter(Replays::reported).isPresent());
+    }
 
-        /** Whether the check passes, and the mode with it. */
-        boolean exists(Finding f, Replays replays) {
-            return same(f, replays).filter(Finding::passed).isPresent() && (f.mode() == 0 || reported(matched(f, replays).getAsInt()));
-        }
+    private static boolean reported(ModeVerdict verdict) {
+        return verdict.grade() == Grade.STANDS || verdict.grade() == Grade.SETTLES;
+    }
 
-        private boolean reported(int mode) {
-            Grade grade = verdict.of(mode).orElseThrow().grade();
-            return grade == Grade.STANDS || grade == Grade.SETTLES;
-        }
+    /** Whether the same check finds as much against the mode in a replay, or the mode is not found. */
+    private boolean asBad(Finding f, JudgedAgain replay) {
+        Optional<Finding> same = same(f, replay);
+        return same.isEmpty() || !same.get().passed() && (Double.isNaN(same.get().value()) || excess(same.get()) >= excess(f));
+    }
 
-        /** Whether the same check finds as much against the mode, or the mode is not found. */
-        boolean asBad(Finding f, Replays replays) {
-            Optional<Finding> same = same(f, replays);
-            return same.isEmpty() || !same.get().passed() && (Double.isNaN(same.get().value()) || excess(same.get()) >= excess(f));
-        }
+    private Optional<Finding> same(Finding f, JudgedAgain replay) {
+        OptionalInt number = f.mode() == 0 ? OptionalInt.of(0) : replay.number(mode(f));
+        return number.isEmpty() ? Optional.empty()
+                : replay.verdict().findings().stream().filter(g -> g.mode() == number.getAsInt() && g.check().equals(f.check())).findFirst();
+    }
 
-        private Optional<Finding> same(Finding f, Replays replays) {
-            OptionalInt mode = f.mode() == 0 ? OptionalInt.of(0) : matched(f, replays);
-            return mode.isEmpty() ? Optional.empty()
-                    : verdict.findings().stream().filter(g -> g.mode() == mode.getAsInt() && g.check().equals(f.check())).findFirst();
-        }
+    private Mode mode(Finding f) {
+        return spectrum.modes().get(f.mode() - 1);
+    }
 
-        private OptionalInt matched(Finding f, Replays replays) {
-            return FoundAgain.in(spectrum, replays.spectrum().modes().get(f.mode() - 1), longest);
-        }
-
-        /** How far a figure lies beyond its threshold, as a factor; the captured share is to stay above its own. */
-        private static double excess(Finding f) {
-            return f.check().equals("captured-share") ? f.threshold() / f.value() : Math.max(1, f.value() / f.threshold());
-        }
+    /** How far a figure lies beyond its threshold, as a factor; the captured share is to stay above its own. */
+    private static double excess(Finding f) {
+        return f.check().equals("captured-share") ? f.threshold() / f.value() : Math.max(1, f.value() / f.threshold());
     }
 }

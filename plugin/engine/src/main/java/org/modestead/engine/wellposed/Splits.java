@@ -5,28 +5,23 @@ import java.util.Collections;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalInt;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
-import org.modestead.engine.FitFault;
 import org.modestead.engine.Progress;
 import org.modestead.engine.operator.FittedOperator;
-import org.modestead.engine.operator.OperatorFitter;
 import org.modestead.engine.recording.Run;
 import org.modestead.engine.recording.Snapshots;
 import org.modestead.engine.spectrum.Mode;
 import org.modestead.engine.spectrum.Spectrum;
-import org.modestead.engine.spectrum.SpectrumExtractor;
 
 /**
  * Whether a verdict hangs on which runs were held out. Where they are few, others are held out in their place, as many at a time: the operator is fitted
  * anew, with a rank by the same rule, its modes are judged, and every mode takes the grade that most splits give it, the stricter one of two that
- * are as frequent. A mode that another split does not show, see {@link FoundAgain}, drifts there: it belongs to the runs that were fitted. A split says
- * nothing of a mode that hardly any of its runs excite on one side, see {@link Excitation}, and where no more than half of the splits tell of it the one at hand
- * decides alone. (Cross-validation, Stone, J. R. Stat. Soc. B 36:111, 1974; the vote
- * of fits to parts of the data, Breiman, Machine Learning 24:123, 1996.)
+ * are as frequent. A mode that another split does not show, see {@link JudgedAgain#number}, drifts there: it belongs to the runs that were fitted. A split says
+ * nothing of a mode that hardly any of its runs excite on one side, see {@link Excitation}, and where no more than half of the splits tell of it the one at
+ * hand decides alone. (Cross-validation, Stone, J. R. Stat. Soc. B 36:111, 1974; the vote of fits to parts of the data, Breiman, Machine Learning 24:123, 1996.)
  *
  * <p>Only whole runs change places. Where the end of runs was held out, or other runs judge than those of the fit's own recording, there is one split.
  *
@@ -83,9 +78,11 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
      * @return the same where there is no other split
      */
     Verdict weighed(Verdict alone, Progress progress) {
-        List<Judgement> judged = new ArrayList<>();
+        JudgeSettings once = settings.withSplits(1).withLadder(0, 0);
+        List<JudgedAgain> judged = new ArrayList<>();
         for (int k = 0; k < others.size(); k++) {
-            judged(others.get(k), progress.part((double) k / others.size(), (k + 1.0) / others.size())).ifPresent(judged::add);
+            Progress part = progress.part((double) k / others.size(), (k + 1.0) / others.size());
+            JudgedAgain.of(others.get(k), operator, operator.rule(), once, part).ifPresent(judged::add);
         }
         if (judged.isEmpty()) {
             return alone;
@@ -95,7 +92,7 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
         List<ModeVerdict> verdicts = new ArrayList<>();
         for (ModeVerdict verdict : alone.modes()) {
             Mode mode = spectrum.modes().get(verdict.mode() - 1);
-            List<Judgement> telling = mode.constant() ? List.of() : judged.stream().filter(other -> excitation.told(other.snapshots(), mode)).toList();
+            List<JudgedAgain> telling = mode.constant() ? List.of() : judged.stream().filter(other -> excitation.told(other.snapshots(), mode)).toList();
             boolean told = excitation.told(operator.snapshots(), mode);
             if (2 * (telling.size() + (told ? 1 : 0)) <= others.size() + 1) {
                 verdicts.add(verdict);
@@ -106,35 +103,6 @@ record Splits(FittedOperator operator, Spectrum spectrum, JudgeSettings settings
             }
         }
         return new Verdict(Grading.overall(verdicts), verdicts, findings, alone.ladder(), alone.doubts());
-    }
-
-    private Optional<Judgement> judged(Snapshots snapshots, Progress progress) {
-        try {
-            FittedOperator again = OperatorFitter.fit(snapshots, operator.estimator(), operator.rule(), operator.ridge(), progress.part(0, 0.2));
-            Spectrum found = SpectrumExtractor.extract(again, Progress.NONE);
-            Verdict verdict = WellPosedness.judge(snapshots, again, found, settings.withSplits(1).withLadder(0, 0), progress.part(0.2, 1));
-            return Optional.of(new Judgement(snapshots, found, verdict, snapshots.training().stream().mapToDouble(Run::duration).max().orElseThrow()));
-        } catch (FitFault fault) {
-            progress.checkCancelled();
-            return Optional.empty();
-        }
-    }
-
-    /**
-     * What was said of another split.
-     *
-     * @param snapshots so split
-     * @param spectrum fitted to it
-     * @param verdict on it
-     * @param longest duration of a run that was fitted
-     */
-    private record Judgement(Snapshots snapshots, Spectrum spectrum, Verdict verdict, double longest) {
-
-        /** Returns the verdict on a mode there; empty where it is not found again. */
-        Optional<ModeVerdict> of(Mode mode) {
-            OptionalInt found = FoundAgain.in(spectrum, mode, longest);
-            return found.isEmpty() ? Optional.empty() : verdict.of(found.getAsInt());
-        }
     }
 
     /**
