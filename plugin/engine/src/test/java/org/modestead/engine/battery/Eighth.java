@@ -72,27 +72,6 @@ final class Eighth {
         return out;
     }
 
-    private static double[] times(double[][] a, double[] x) {
-        double[] y = new double[a.length];
-        for (int i = 0; i < y.length; i++) {
-            for (int j = 0; j < x.length; j++) {
-                y[i] += a[i][j] * x[j];
-            }
-        }
-        return y;
-    }
-
-    /** {@code x' = A x} from starts that are smaller by a factor: a kernel of small rank then tells the degrees apart. */
-    private static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
-        return Paths.seen(name, Paths.linear("", samples, step, a), x -> {
-            double[] y = x.clone();
-            for (int i = 0; i < y.length; i++) {
-                y[i] *= factor;
-            }
-            return y;
-        });
-    }
-
     /**
      * Excitations of three sites that spread and turn, {@code z' = (0.3 + 0.9i) L z} with the second differences L, real and imaginary
      * parts: a normal matrix, rates (0.3 ± 0.9i) times -0.59, -2, -3.41: stands in the dual space of the state; delays hold all of it.
@@ -134,7 +113,7 @@ final class Eighth {
             {0.35, -0.6, 0.25, -0.15}, {0.1, 0.25, -1.6, 0.4}, {0, -0.15, 0.4, -0.8}});
         out.add(new Case(four, Look.linearKernel(4), Truth.STANDS));
         out.add(new Case(four, Look.delays(3, 4), Truth.REPORTABLE));
-        KnownSystem two = near("bead in a tilted trough 2d", 50, 0.05, 0.8, new double[][] {{-0.6, 0.35}, {0.35, -1.2}});
+        KnownSystem two = Paths.near("bead in a tilted trough 2d", 50, 0.05, 0.8, new double[][] {{-0.6, 0.35}, {0.35, -1.2}});
         out.add(new Case(two, Look.exponential(6), Truth.STANDS));
         out.add(new Case(two, Look.polynomial(2, 6), Truth.STANDS));
         out.add(new Case(two, Look.gaussian(1, 8), Truth.NONE));
@@ -145,7 +124,7 @@ final class Eighth {
      * across it are orthogonal, so the matrix is normal: stands in the spaces of exp(x·y) and (1 + x·y)². Affine functions hold it.
      */
     private static void updraught(List<Case> out) {
-        KnownSystem air = near("updraught that turns 3d", 50, 0.05, 0.5, new double[][] {{0, -1.02, 0.96}, {1.38, -0.27, -1.02},
+        KnownSystem air = Paths.near("updraught that turns 3d", 50, 0.05, 0.5, new double[][] {{0, -1.02, 0.96}, {1.38, -0.27, -1.02},
             {-0.24, 1.38, 0}});
         out.add(new Case(air, Look.exponential(12), Truth.STANDS));
         out.add(new Case(air, Look.polynomial(2, 10), Truth.STANDS));
@@ -165,7 +144,7 @@ final class Eighth {
                 both[i][j] = rows[i / 3][j / 3] * columns[i % 3][j % 3];
             }
         }
-        KnownSystem picture = Paths.map("picture that blurs 6d", 20, 1, Paths.box(6, -1, 1), x -> times(both, x));
+        KnownSystem picture = Paths.map("picture that blurs 6d", 20, 1, Paths.box(6, -1, 1), x -> Paths.times(both, x));
         out.add(new Case(picture, Look.linearKernel(6), Truth.STANDS));
         out.add(new Case(picture, Look.monomials(1, 7), Truth.REPORTABLE));
     }
@@ -207,7 +186,7 @@ final class Eighth {
      * degree 2 are -1, -1.9, -2.8. The Gaussian space holds none (C3.12).
      */
     private static void kettle(List<Case> out) {
-        KnownSystem kettle = near("kettle and its thermometer 2d", 50, 0.06, 0.9, new double[][] {{-0.5, 0}, {1.6, -1.4}});
+        KnownSystem kettle = Paths.near("kettle and its thermometer 2d", 50, 0.06, 0.9, new double[][] {{-0.5, 0}, {1.6, -1.4}});
         out.add(new Case(kettle, Look.exponential(6), Truth.SETTLES));
         out.add(new Case(kettle, Look.polynomial(2, 6), Truth.SETTLES));
         out.add(new Case(kettle, Look.delays(3, 2), Truth.REPORTABLE));
@@ -270,7 +249,7 @@ final class Eighth {
      */
     private static void reservoirs(List<Case> out) {
         double[] c = {0.6, 0.8, 0.5};
-        KnownSystem about = near("", 50, 0.07, 0.8, new double[][] {{-0.8, 0.3, 0}, {0.3, -0.6, 0.2}, {0, 0.2, -1.3}});
+        KnownSystem about = Paths.near("", 50, 0.07, 0.8, new double[][] {{-0.8, 0.3, 0}, {0.3, -0.6, 0.2}, {0, 0.2, -1.3}});
         KnownSystem filled = Paths.seen("three reservoirs filled evenly 3d", about,
                 x -> new double[] {c[0] + x[0], c[1] + x[1], c[2] + x[2]});
         out.add(new Case(filled, Look.polynomial(2, 10), Truth.SETTLES));
@@ -284,7 +263,7 @@ final class Eighth {
      */
     private static void shops(List<Case> out) {
         double[][] lend = {{0.9, 0.6, 0}, {-0.15, 0.7, 0.5}, {0, 0.05, 0.5}};
-        KnownSystem shops = Paths.map("three shops that lend 3d", 24, 1, Paths.box(3, -0.8, 0.8), x -> times(lend, x));
+        KnownSystem shops = Paths.map("three shops that lend 3d", 24, 1, Paths.box(3, -0.8, 0.8), x -> Paths.times(lend, x));
         out.add(new Case(shops, Look.linearKernel(3), Truth.SETTLES));
         out.add(new Case(shops, Look.step("polynomial", 10, "degree", 2, "offset", 1), Truth.SETTLES));
         out.add(new Case(shops, Look.monomials(1, 4), Truth.REPORTABLE));

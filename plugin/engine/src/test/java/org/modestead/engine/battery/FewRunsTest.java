@@ -1,7 +1,7 @@
 package org.modestead.engine.battery;
 
-import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -19,6 +19,7 @@ class FewRunsTest {
         Case known = Battery.calibrating().stream().filter(one -> one.id().equals(id)).findFirst().orElseThrow();
         Trial trial = new Trial(known, noise, RUNS, 1);
         assertFalse(trial.judge(JudgeSettings.DEFAULT.withSplits(1)).right(), "the run at hand misleads");
-        assertEquals(true, trial.judge().right(), trial.judge().toString());
+        Trial.Outcome outcome = trial.judge();
+        assertTrue(outcome.right(), outcome.toString());
     }
 }

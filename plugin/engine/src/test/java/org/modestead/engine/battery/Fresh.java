@@ -74,39 +74,12 @@ final class Fresh {
         return out;
     }
 
-    private static double[] times(double[][] a, double[] x) {
-        double[] y = new double[a.length];
-        for (int i = 0; i < y.length; i++) {
-            for (int j = 0; j < x.length; j++) {
-                y[i] += a[i][j] * x[j];
-            }
-        }
-        return y;
-    }
-
-    /** {@code x' = A x} from starts that are smaller by a factor: a kernel of small rank then tells the degrees apart. */
-    private static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
-        return Paths.seen(name, Paths.linear("", samples, step, a), x -> {
-            double[] y = x.clone();
-            for (int i = 0; i < y.length; i++) {
-                y[i] *= factor;
-            }
-            return y;
-        });
-    }
-
-    /** A number of samples of the first channels, begun at a random time of a span after a state. */
-    private static KnownSystem orbit(String name, int samples, double step, double span, int channels, double[] from, Paths.Field field) {
-        return new KnownSystem(name, step, random -> Paths.flow("", samples, step, 0.01 + span * random.nextDouble(), channels,
-                ignored -> from.clone(), field).path().draw(random));
-    }
-
     /**
      * A turn of 1.5 rad/s that grows by 0.2: a skew matrix and a multiple of one, so normal: {@code x ± iy} are orthogonal in the spaces
      * of exp(x·y) and (1 + x·y)² (C3.3): stands. The Gaussian space holds no polynomial (C3.12): nothing to report.
      */
     private static void growingTurn(List<Case> out) {
-        KnownSystem turn = near("growing turn 2d", 60, 0.05, 0.5, new double[][] {{0.2, -1.5}, {1.5, 0.2}});
+        KnownSystem turn = Paths.near("growing turn 2d", 60, 0.05, 0.5, new double[][] {{0.2, -1.5}, {1.5, 0.2}});
         out.add(new Case(turn, Look.exponential(6), Truth.STANDS));
         out.add(new Case(turn, Look.polynomial(2, 6), Truth.STANDS));
         out.add(new Case(turn, Look.gaussian(1, 8), Truth.NONE));
@@ -117,7 +90,7 @@ final class Fresh {
      * orthogonal in the spaces of exp(x·y) and x·y (C3.3): stands. Affine functions hold all of it: reportable.
      */
     private static void greenhouse(List<Case> out) {
-        KnownSystem rooms = near("three rooms of a greenhouse 3d", 60, 0.06, 0.8, new double[][] {{-0.9, 0.4, 0.1}, {0.4, -1.3, 0.3},
+        KnownSystem rooms = Paths.near("three rooms of a greenhouse 3d", 60, 0.06, 0.8, new double[][] {{-0.9, 0.4, 0.1}, {0.4, -1.3, 0.3},
             {0.1, 0.3, -0.5}});
         out.add(new Case(rooms, Look.exponential(10), Truth.STANDS));
         out.add(new Case(rooms, Look.linearKernel(3), Truth.STANDS));
@@ -178,7 +151,7 @@ final class Fresh {
      * The Gaussian space holds none (C3.12).
      */
     private static void shearedTurn(List<Case> out) {
-        KnownSystem turn = near("shrinking turn along an ellipse 2d", 60, 0.07, 0.8, new double[][] {{-0.1, 2.2}, {-0.7, -0.5}});
+        KnownSystem turn = Paths.near("shrinking turn along an ellipse 2d", 60, 0.07, 0.8, new double[][] {{-0.1, 2.2}, {-0.7, -0.5}});
         out.add(new Case(turn, Look.exponential(6), Truth.SETTLES));
         out.add(new Case(turn, Look.polynomial(2, 6), Truth.SETTLES));
         out.add(new Case(turn, Look.delays(6, 2), Truth.REPORTABLE));
@@ -190,7 +163,7 @@ final class Fresh {
      * weights 0.63 and more apart, in the dual space of the state and, degree 1 having the same angles, in that of exp(x·y): settles.
      */
     private static void filters(List<Case> out) {
-        KnownSystem filters = near("three filters and a feedback 3d", 60, 0.06, 0.8, new double[][] {{-0.3, 1.1, 0}, {0, -1.2, 0.9},
+        KnownSystem filters = Paths.near("three filters and a feedback 3d", 60, 0.06, 0.8, new double[][] {{-0.3, 1.1, 0}, {0, -1.2, 0.9},
             {0.1, 0, -2.6}});
         out.add(new Case(filters, Look.exponential(10), Truth.SETTLES));
         out.add(new Case(filters, Look.linearKernel(3), Truth.SETTLES));
@@ -245,7 +218,7 @@ final class Fresh {
      */
     private static void herds(List<Case> out) {
         double[][] year = {{0.9, 0.35, 0, 0}, {-0.35, 0.8, 0.5, 0}, {0, 0, 0.7, 0.45}, {0, 0, -0.3, 0.65}};
-        KnownSystem herds = Paths.map("two herds year by year 4d", 24, 1, Paths.box(4, -1, 1), x -> times(year, x));
+        KnownSystem herds = Paths.map("two herds year by year 4d", 24, 1, Paths.box(4, -1, 1), x -> Paths.times(year, x));
         out.add(new Case(herds, Look.linearKernel(4), Truth.SETTLES));
         out.add(new Case(herds, Look.monomials(1, 5), Truth.REPORTABLE));
     }
@@ -428,7 +401,7 @@ final class Fresh {
         KnownSystem many = pendulum("pendulum of 1.5, amplitudes 0.8 to 2.7", 0, 0.8, 2.7);
         out.add(new Case(many, Look.delays(12, 6), Truth.NONE));
         out.add(new Case(many, Look.monomials(3, 10), Truth.NONE));
-        out.add(new Case(orbit("pendulum of 1.5, one orbit", 120, 0.2, 7.3, 1, new double[] {2.2, 0}, x -> new double[] {x[1],
+        out.add(new Case(Paths.orbit("pendulum of 1.5, one orbit", 120, 0.2, 7.3, 1, new double[] {2.2, 0}, x -> new double[] {x[1],
             -1.5 * sin(x[0])}), Look.delays(38, 4), Truth.REPORTABLE));
         out.add(new Case(pendulum("damped pendulum of 1.5, small", 0.3, 0.02, 0.05), Look.delays(12, 2), Truth.REPORTABLE));
         out.add(new Case(pendulum("damped pendulum of 1.5, amplitudes 0.6 to 2.6", 0.25, 0.6, 2.6),
@@ -450,7 +423,7 @@ final class Fresh {
             1.3 + 3.2 * random.nextDouble()}, field);
         out.add(new Case(many, Look.delays(12, 7), Truth.NONE));
         out.add(new Case(many, Look.monomials(3, 10), Truth.NONE));
-        out.add(new Case(orbit("foxes and rabbits, orbit", 110, 0.16, 5, 2, new double[] {1, 1.9}, field), Look.delays(33, 9),
+        out.add(new Case(Paths.orbit("foxes and rabbits, orbit", 110, 0.16, 5, 2, new double[] {1, 1.9}, field), Look.delays(33, 9),
                 Truth.REPORTABLE));
     }
 
@@ -479,7 +452,7 @@ final class Fresh {
         out.add(new Case(straight, Look.linearKernel(4), Truth.STANDS));
         out.add(new Case(straight, Look.step("gaussian", 9, "scale", 1), Truth.STANDS));
         double[][] gauges = {{1, 0.3, 0.5, 0}, {0, 1, 0.4, 0.2}, {-0.4, 0.2, 1, 0.6}, {0.1, 0.5, -0.3, 0.8}};
-        KnownSystem askew = Paths.closed("two wheels seen askew 4d", 60, 1, Paths.box(4, 0, 1), (u, t) -> times(gauges, new double[] {
+        KnownSystem askew = Paths.closed("two wheels seen askew 4d", 60, 1, Paths.box(4, 0, 1), (u, t) -> Paths.times(gauges, new double[] {
             (0.5 + u[2]) * cos(2 * PI * u[0] + 0.6 * t), (0.5 + u[2]) * sin(2 * PI * u[0] + 0.6 * t),
             (0.5 + u[3]) * cos(2 * PI * u[1] + 1.5 * t), (0.5 + u[3]) * sin(2 * PI * u[1] + 1.5 * t)}));
         out.add(new Case(askew, Look.linearKernel(4), Truth.SETTLES));

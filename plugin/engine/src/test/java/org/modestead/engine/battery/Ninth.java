@@ -68,17 +68,6 @@ final class Ninth {
         return out;
     }
 
-    /** {@code x' = A x} from starts that are smaller by a factor: a kernel of small rank then tells the degrees apart. */
-    private static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
-        return Paths.seen(name, Paths.linear("", samples, step, a), x -> {
-            double[] y = x.clone();
-            for (int i = 0; i < y.length; i++) {
-                y[i] *= factor;
-            }
-            return y;
-        });
-    }
-
     /**
      * Six points of a water network, pressures even out along eight pipes and leak: a symmetric matrix, rates -0.22, -0.72, -0.91, -1.26,
      * -2.31, -2.72: stands in the dual space of the state; affine functions hold all of it.
@@ -177,7 +166,7 @@ final class Ninth {
      * 0.82, 0.18; of degree 2 1.64, 1.00, 0.36: stands. The Gaussian space holds no w·x (C3.12).
      */
     private static void firms(List<Case> out) {
-        KnownSystem firms = near("two firms that help each other 2d", 50, 0.03, 0.5, new double[][] {{0.7, 0.25}, {0.25, 0.3}});
+        KnownSystem firms = Paths.near("two firms that help each other 2d", 50, 0.03, 0.5, new double[][] {{0.7, 0.25}, {0.25, 0.3}});
         out.add(new Case(firms, Look.exponential(6), Truth.STANDS));
         out.add(new Case(firms, Look.polynomial(2, 6), Truth.STANDS));
         out.add(new Case(firms, Look.gaussian(1, 8), Truth.NONE));
@@ -244,7 +233,7 @@ final class Ninth {
      * Gaussian space holds none (C3.12).
      */
     private static void bacteria(List<Case> out) {
-        KnownSystem bacteria = near("bacteria awake and dormant 2d", 50, 0.05, 0.6, new double[][] {{0.3, 0.9}, {0.1, -0.8}});
+        KnownSystem bacteria = Paths.near("bacteria awake and dormant 2d", 50, 0.05, 0.6, new double[][] {{0.3, 0.9}, {0.1, -0.8}});
         out.add(new Case(bacteria, Look.exponential(6), Truth.SETTLES));
         out.add(new Case(bacteria, Look.polynomial(2, 6), Truth.SETTLES));
         out.add(new Case(bacteria, Look.delays(3, 2), Truth.REPORTABLE));
@@ -327,7 +316,7 @@ final class Ninth {
      * of exp(x·y), its solo weight is 0.61 against 1; in that of (1 + x·y)², where ‖w·x‖² = 1/2, 0.75 and 0.44: settles.
      */
     private static void lake(List<Case> out) {
-        KnownSystem lake = Paths.seen("two basins of a lake, fed 2d", near("", 50, 0.05, 0.5, new double[][] {{-0.9, 0.3}, {0.3, -0.6}}),
+        KnownSystem lake = Paths.seen("two basins of a lake, fed 2d", Paths.near("", 50, 0.05, 0.5, new double[][] {{-0.9, 0.3}, {0.3, -0.6}}),
                 x -> new double[] {0.7 + x[0], 0.5 + x[1]});
         out.add(new Case(lake, Look.exponential(6), Truth.SETTLES));
         out.add(new Case(lake, Look.polynomial(2, 6), Truth.SETTLES));
@@ -414,19 +403,13 @@ final class Ninth {
             0.3 + 0.66 * random.nextDouble(), 0}, open);
         out.add(new Case(sizes, Look.delays(12, 6), Truth.NONE));
         out.add(new Case(sizes, Look.monomials(3, 10), Truth.NONE));
-        out.add(new Case(orbit("well open on one side, one orbit", 9.6, new double[] {0.9, 0}, open), Look.delays(40, 7), Truth.REPORTABLE));
+        out.add(new Case(Paths.orbit("well open on one side, one orbit", 110, 0.25, 9.6, 1, new double[] {0.9, 0}, open), Look.delays(40, 7), Truth.REPORTABLE));
         Paths.Field sextic = x -> new double[] {x[1], -pow(x[0], 5)};
         out.add(new Case(Paths.flow("sextic well, many sizes", 120, 0.15, 0, 2, random -> new double[] {0.8 + 0.7 * random.nextDouble(), 0},
                 sextic), Look.delays(12, 6), Truth.NONE));
-        out.add(new Case(orbit("sextic well, one orbit", 8.4, new double[] {1, 0}, sextic), Look.delays(36, 4), Truth.REPORTABLE));
+        out.add(new Case(Paths.orbit("sextic well, one orbit", 110, 0.25, 8.4, 1, new double[] {1, 0}, sextic), Look.delays(36, 4), Truth.REPORTABLE));
         out.add(new Case(Paths.flow("spring of square law, many sizes", 120, 0.15, 0, 2, random -> new double[] {
             0.4 + 3.6 * random.nextDouble(), 0}, x -> new double[] {x[1], -x[0] * abs(x[0])}), Look.delays(12, 6), Truth.NONE));
-    }
-
-    /** 110 samples of the first channel, 0.25 apart, begun at a random time of a span after a state. */
-    private static KnownSystem orbit(String name, double span, double[] from, Paths.Field field) {
-        return new KnownSystem(name, 0.25, random -> Paths.flow("", 110, 0.25, 0.01 + span * random.nextDouble(), 1,
-                ignored -> from.clone(), field).path().draw(random));
     }
 
     /**
@@ -439,8 +422,7 @@ final class Ninth {
             1.3 + 4.2 * random.nextDouble()}, field);
         out.add(new Case(many, Look.delays(12, 7), Truth.NONE));
         out.add(new Case(many, Look.monomials(3, 10), Truth.NONE));
-        out.add(new Case(new KnownSystem("quick predators, orbit", 0.12, random -> Paths.flow("", 100, 0.12, 0.01
-                + 3.7 * random.nextDouble(), 2, ignored -> new double[] {1, 2}, field).path().draw(random)), Look.delays(32, 7),
+        out.add(new Case(Paths.orbit("quick predators, orbit", 100, 0.12, 3.7, 2, new double[] {1, 2}, field), Look.delays(32, 7),
                 Truth.REPORTABLE));
     }
 
@@ -583,8 +565,8 @@ final class Ninth {
     }
 
     /**
-     * Chaos: nothing to report. Kaplan and Yorke's map, {@code (x, y) -> (3x mod 1, 0.4y + cos 2πx)} (Lecture Notes in Mathematics
-     * 730:204, 1979): an eigenfunction {@code y + h(x)} would need Fourier coefficients of h that grow 2.5-fold from each power of 3 to
+     * Chaos: nothing to report. Kaplan and Yorke's map, {@code (x, y) -> (3x mod 1, 0.4y + cos 2πx)} (Functional Differential Equations
+     * and Approximation of Fixed Points, Springer, 1979, p. 204): an eigenfunction {@code y + h(x)} would need Fourier coefficients of h that grow 2.5-fold from each power of 3 to
      * the next. Salmon that crowd each other, {@code x -> x e^(3(1 - x))} (Ricker, Journal of the Fisheries Research Board of Canada
      * 11:559, 1954): exponent 0.39, autocorrelations -0.75, 0.35, -0.17, then below 0.3. Rucklidge's flow, {@code (-2x + 6.7y - yz, x, y²
      * - z)} (Journal of Fluid Mechanics 237:209, 1992), x and y: autocorrelations below 0.2 from 1.8 on.

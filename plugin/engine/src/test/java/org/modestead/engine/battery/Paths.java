@@ -76,6 +76,28 @@ final class Paths {
         });
     }
 
+    /** {@code A x}, A of any shape. */
+    static double[] times(double[][] a, double[] x) {
+        double[] y = new double[a.length];
+        for (int i = 0; i < y.length; i++) {
+            for (int j = 0; j < x.length; j++) {
+                y[i] += a[i][j] * x[j];
+            }
+        }
+        return y;
+    }
+
+    /** {@code x' = A x} from starts that are smaller by a factor: a kernel of small rank then tells the degrees apart. */
+    static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
+        return seen(name, linear("", samples, step, a), x -> {
+            double[] y = x.clone();
+            for (int i = 0; i < y.length; i++) {
+                y[i] *= factor;
+            }
+            return y;
+        });
+    }
+
     /** Integrated to 1e-10, first on to a given time that is not recorded; channels are the first ones of the state. */
     static KnownSystem flow(String name, int samples, double step, double unrecorded, int channels, Start start,
             Field field) {
@@ -89,6 +111,12 @@ final class Paths {
             }
             return rows;
         });
+    }
+
+    /** A number of samples of the first channels, begun at a random time of a span after a state. */
+    static KnownSystem orbit(String name, int samples, double step, double span, int channels, double[] from, Field field) {
+        return new KnownSystem(name, step, random -> flow("", samples, step, 0.01 + span * random.nextDouble(), channels,
+                ignored -> from.clone(), field).path().draw(random));
     }
 
     /** What is seen of a hidden path. */

@@ -58,27 +58,6 @@ final class Seventh {
         return out;
     }
 
-    private static double[] times(double[][] a, double[] x) {
-        double[] y = new double[a.length];
-        for (int i = 0; i < y.length; i++) {
-            for (int j = 0; j < x.length; j++) {
-                y[i] += a[i][j] * x[j];
-            }
-        }
-        return y;
-    }
-
-    /** {@code x' = A x} from starts that are smaller by a factor: a kernel of rank 10 then tells the degrees apart. */
-    private static KnownSystem near(String name, int samples, double step, double factor, double[][] a) {
-        return Paths.seen(name, Paths.linear("", samples, step, a), x -> {
-            double[] y = x.clone();
-            for (int i = 0; i < y.length; i++) {
-                y[i] *= factor;
-            }
-            return y;
-        });
-    }
-
     /**
      * Two gyroscopes on a platform, in units in which the energy is the sum of squares: a skew matrix without a block, rates ±0.90i and
      * ±1.90i. Skew is normal, w·x are orthogonal in the dual space of the state, see {@link LinearFlows}: stands.
@@ -98,14 +77,14 @@ final class Seventh {
      * -0.16, -0.44, -0.91, -1.71, -3.29.
      */
     private static void symmetric(List<Case> out) {
-        KnownSystem stagnation = near("flow to a point of stagnation 3d", 50, 0.04, 0.5, new double[][] {{0.1, 0.45, 0.2},
+        KnownSystem stagnation = Paths.near("flow to a point of stagnation 3d", 50, 0.04, 0.5, new double[][] {{0.1, 0.45, 0.2},
             {0.45, -0.2, 0.3}, {0.2, 0.3, -0.3}});
         out.add(new Case(stagnation, Look.exponential(12), Truth.STANDS));
         out.add(new Case(stagnation, Look.polynomial(2, 10), Truth.STANDS));
         out.add(new Case(stagnation, Look.gaussian(1, 10), Truth.NONE));
         double[][] listen = {{0.8, 0.1, 0.025, 0, 0.05}, {0.1, 0.75, 0.075, 0.05, 0}, {0.025, 0.075, 0.825, 0.05, 0},
             {0, 0.05, 0.05, 0.775, 0.1}, {0.05, 0, 0, 0.1, 0.825}};
-        KnownSystem opinions = Paths.map("opinions that come together 5d", 24, 1, Paths.box(5, -1, 1), x -> times(listen, x));
+        KnownSystem opinions = Paths.map("opinions that come together 5d", 24, 1, Paths.box(5, -1, 1), x -> Paths.times(listen, x));
         out.add(new Case(opinions, Look.linearKernel(5), Truth.STANDS));
         out.add(new Case(opinions, Look.monomials(1, 6), Truth.REPORTABLE));
         double[] conductance = {1, 1, 1, 0.3, 0.3, 0.3};
@@ -197,7 +176,7 @@ final class Seventh {
      * 0.80 and more apart. Sums of degree 2 are -0.6, -1.05, -1.5, -1.6, -2.05, -2.6: no rate comes twice: settles.
      */
     private static void pools(List<Case> out) {
-        KnownSystem pools = near("spill in three pools 3d", 50, 0.06, 0.8, new double[][] {{-0.3, 0, 0}, {0.5, -0.75, 0},
+        KnownSystem pools = Paths.near("spill in three pools 3d", 50, 0.06, 0.8, new double[][] {{-0.3, 0, 0}, {0.5, -0.75, 0},
             {0.3, 0.7, -1.3}});
         out.add(new Case(pools, Look.exponential(14), Truth.SETTLES));
         out.add(new Case(pools, Look.polynomial(2, 10), Truth.SETTLES));
@@ -212,7 +191,7 @@ final class Seventh {
     private static void aside(List<Case> out) {
         double[][] a = {{0.5, 0.2}, {1.1, -0.9}};
         double[] c = {0.6, 0.4};
-        KnownSystem moved = near("", 40, 0.04, 0.5, a);
+        KnownSystem moved = Paths.near("", 40, 0.04, 0.5, a);
         KnownSystem saddle = new KnownSystem("saddle beside zero 2d", 0.04, random -> {
             double[][] rows = moved.path().draw(random);
             for (double[] row : rows) {
@@ -320,9 +299,9 @@ final class Seventh {
      * 0.98 rad a step, second harmonic 17 %.
      */
     private static void orbits(List<Case> out) {
-        out.add(new Case(orbit("pendulum, one wide swing", 9.5, new double[] {2.2, 0}, x -> new double[] {x[1], -sin(x[0])}),
+        out.add(new Case(Paths.orbit("pendulum, one wide swing", 110, 0.25, 9.5, 1, new double[] {2.2, 0}, x -> new double[] {x[1], -sin(x[0])}),
                 Look.delays(36, 4), Truth.REPORTABLE));
-        out.add(new Case(orbit("Toda bond, one orbit", 7.3, new double[] {1.6, 0}, x -> new double[] {x[1], 1 - exp(x[0])}),
+        out.add(new Case(Paths.orbit("Toda bond, one orbit", 110, 0.25, 7.3, 1, new double[] {1.6, 0}, x -> new double[] {x[1], 1 - exp(x[0])}),
                 Look.delays(30, 5), Truth.REPORTABLE));
         out.add(new Case(Paths.flow("clockwork that keeps the time of its drive", 110, 0.25, 120, 1, random -> {
             double phase = 2 * PI * random.nextDouble();
@@ -340,12 +319,6 @@ final class Seventh {
             }
             return rows;
         }), Look.delays(14, 5), Truth.REPORTABLE));
-    }
-
-    /** 110 samples of the first channel, 0.25 apart, begun at a random time of a span after a state. */
-    private static KnownSystem orbit(String name, double span, double[] from, Paths.Field field) {
-        return new KnownSystem(name, 0.25, random -> Paths.flow("", 110, 0.25, 0.01 + span * random.nextDouble(), 1,
-                ignored -> from.clone(), field).path().draw(random));
     }
 
     /**
@@ -376,12 +349,12 @@ final class Seventh {
      * second, 0.6. A smoothing by 0.7 three times over, one Jordan block of three.
      */
     private static void equal(List<Case> out) {
-        KnownSystem mutants = near("cells and their mutants 2d", 50, 0.04, 0.5, new double[][] {{0.4, 0}, {0.6, 0.4}});
+        KnownSystem mutants = Paths.near("cells and their mutants 2d", 50, 0.04, 0.5, new double[][] {{0.4, 0}, {0.6, 0.4}});
         out.add(new Case(mutants, Look.exponential(6), Truth.DRIFTS));
         out.add(new Case(mutants, Look.linearKernel(2), Truth.DRIFTS));
         out.add(new Case(mutants, Look.polynomial(2, 6), Truth.DRIFTS));
         double[][] smooth = {{0.7, 0, 0}, {0.3, 0.7, 0}, {0, 0.3, 0.7}};
-        KnownSystem smoothing = Paths.map("smoothing three times over", 20, 1, Paths.box(3, -1, 1), x -> times(smooth, x));
+        KnownSystem smoothing = Paths.map("smoothing three times over", 20, 1, Paths.box(3, -1, 1), x -> Paths.times(smooth, x));
         out.add(new Case(smoothing, Look.linearKernel(3), Truth.DRIFTS));
         out.add(new Case(smoothing, Look.monomials(1, 4), Truth.DRIFTS));
     }

@@ -17,7 +17,6 @@ import static java.lang.StrictMath.tanh;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Random;
-import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
 
 /**
@@ -59,18 +58,6 @@ final class Sixth {
         walks(out);
         counts(out);
         return out;
-    }
-
-    private static UnaryOperator<double[]> times(double[][] a) {
-        return x -> {
-            double[] y = new double[a.length];
-            for (int i = 0; i < y.length; i++) {
-                for (int j = 0; j < x.length; j++) {
-                    y[i] += a[i][j] * x[j];
-                }
-            }
-            return y;
-        };
     }
 
     /**
@@ -187,7 +174,7 @@ final class Sixth {
     private static void sensors(List<Case> out) {
         KnownSystem hidden = Paths.linear("", 50, 0.06, new double[][] {{-0.3, 0}, {0, -1.2}});
         KnownSystem gauges = Paths.seen("two decays seen by four gauges", hidden,
-                times(new double[][] {{1, 0.8}, {0.9, 0.2}, {0.5, 0.9}, {0.3, 1}}));
+                x -> Paths.times(new double[][] {{1, 0.8}, {0.9, 0.2}, {0.5, 0.9}, {0.3, 1}}, x));
         out.add(new Case(gauges, Look.linearKernel(2), Truth.SETTLES));
         out.add(new Case(gauges, Look.delays(3, 2), Truth.REPORTABLE));
     }
