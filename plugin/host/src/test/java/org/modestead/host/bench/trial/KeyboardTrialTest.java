@@ -1,5 +1,8 @@
 package org.modestead.host.bench.trial;
 
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import com.fasterxml.jackson.databind.JsonNode;
 import java.io.IOException;
 import java.nio.file.Path;
 import java.util.Optional;
@@ -74,11 +77,51 @@ class KeyboardTrialTest {
             browser.keys(Keys.ENTER);
             browser.see("[data-look] [data-verdict]");
             trial.verdictTells(0.25, "Hz");
-            browser.await("the look by F6", () -> {
+            browser.await("the bench by F6", () -> {
                 browser.keys(Keys.F6);
-                return browser.focused("[data-part=look], [data-part=look] *");
+                return browser.focused("[data-card=check]");
             });
+            browser.await("the look by F6, still of the step with the verdict", () -> {
+                browser.keys(Keys.F6);
+                return browser.focused("[data-part=look] .look-title");
+            });
+            theReasonOfAVerdictIsRead(trial);
         }
+    }
+
+    /** The Tab key comes to the button that explains a verdict and goes on from there, also after the step found something else meanwhile. */
+    private static void theReasonOfAVerdictIsRead(Trial trial) {
+        Browser browser = trial.browser();
+        trial.rest();
+        browser.tabTo("[data-look=check] [data-action=why]");
+        browser.keys(Keys.ENTER);
+        browser.see("[data-action=why][aria-expanded=true]");
+        browser.see("[data-look=check] .lk-findings [data-check]");
+        browser.await("the focus still on the button", () -> browser.focused("[data-action=why]"));
+        String result = result(trial, "check");
+        browser.later("""
+                const done = arguments[0];
+                Promise.all([import('/js/actions.js'), import('/js/store.js')]).then(async ([{edit, run}, {getState}]) => {
+                  const {settings} = getState().desk.steps.find((step) => step.id === 'check');
+                  await edit([{do: 'set', step: 'check', settings: {...settings, 'share-threshold': 0.06}}]);
+                  await run(['check']);
+                  done('');
+                });
+                """);
+        browser.await("another result", () -> !result(trial, "check").equals(result));
+        trial.rest();
+        browser.see("[data-look=check] [data-verdict]");
+        assertTrue(browser.focused("[data-look=check] *, .look-title"), "the focus stays in the look when another result is drawn");
+        browser.tabTo("[data-look=check] [data-action=why]");
+    }
+
+    private static String result(Trial trial, String step) {
+        for (JsonNode one : trial.desk().path("steps")) {
+            if (one.path("id").asText().equals(step)) {
+                return one.path("resultId").asText();
+            }
+        }
+        throw new AssertionError("no step " + step);
     }
 
     /** Gives the step a name and a note of the person's own. */

@@ -16,18 +16,19 @@ import {Verdict} from './verdict.js';
  * @param {(key: string) => void} given.select
  */
 export function Look({step, selection = '', select}) {
+  const holds = useHeldFocus();
   const {value: look, fault} = useRead(step.look ? `/api/steps/${encodeURIComponent(step.id)}/look` : null, step.resultId ?? '');
   const place = useRef(null);
   useLayoutEffect(() => belowHead(place.current));
   if (!step.look) {
-    return html`<div class="lk" data-look=${step.id}><p class="lk-quiet">${step.state?.kind === 'running'
+    return html`<div class="lk" data-look=${step.id} onfocusin=${holds}><p class="lk-quiet">${step.state?.kind === 'running'
       ? 'This step is running; what it finds is shown here when it is done.' : 'There is nothing to look at yet: this step has not run.'}</p></div>`;
   }
   if (fault) {
-    return html`<div class="lk" data-look=${step.id}><p class="lk-fault" role="alert">${fault}</p></div>`;
+    return html`<div class="lk" data-look=${step.id} onfocusin=${holds}><p class="lk-fault" role="alert">${fault}</p></div>`;
   }
   if (!look) {
-    return html`<div class="lk" data-look=${step.id}><p class="lk-quiet" role="status">Reading what this step found.</p></div>`;
+    return html`<div class="lk" data-look=${step.id} onfocusin=${holds}><p class="lk-quiet" role="status">Reading what this step found.</p></div>`;
   }
   const base = `/api/steps/${encodeURIComponent(step.id)}`;
   const shown = new Set(look.figures.map((figure) => figure.id));
@@ -46,7 +47,7 @@ export function Look({step, selection = '', select}) {
   const told = look.verdict ? [look.verdict.sentence, ...look.verdict.modes.map((mode) => mode.sentence)] : [];
   const sentences = look.sentences.filter((sentence) => !told.includes(sentence));
   const common = {resultId: look.resultId ?? step.resultId, selection, select};
-  return html`<div class="lk" data-look=${step.id} ref=${place}>
+  return html`<div class="lk" data-look=${step.id} ref=${place} onfocusin=${holds}>
     ${look.stale && html`<p class="lk-callout lk-caution" data-stale>Out of date: these results belong to other settings or inputs. Run the step again.</p>`}
     ${parts.length > 1 && html`<nav class="lk-parts" aria-label="Parts of what this step found">
       ${parts.map((part) => html`<button type="button" key=${part.id} class="lk-link" data-goes-to=${part.id} onClick=${() => go(part.id)}>${part.title}</button>`)}
@@ -70,6 +71,27 @@ export function Look({step, selection = '', select}) {
 }
 
 const FIRST_SENTENCES = 5;
+
+/**
+ * When what has the focus is drawn no more, because the step runs or found something else, the focus goes to the step's name above
+ * instead of being lost.
+ *
+ * @returns {(event: FocusEvent) => void} to be told of every focus within
+ */
+function useHeldFocus() {
+  const last = useRef(null);
+  useLayoutEffect(() => {
+    if (last.current && !last.current.isConnected) {
+      last.current = null;
+      if (document.activeElement === document.body) {
+        document.querySelector('.look-title')?.focus({preventScroll: true});
+      }
+    }
+  });
+  return (event) => {
+    last.current = event.target;
+  };
+}
 
 /** What stays in sight at the top of the region, if anything, is told to the style sheet, so that the parts lie beneath it. */
 function belowHead(element) {

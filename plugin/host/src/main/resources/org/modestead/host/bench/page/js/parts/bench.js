@@ -14,6 +14,10 @@ import {Strip} from './strip.js';
 export function Bench() {
   const {wide, drag} = getState();
   useEffect(() => {
+    // the page that had the focus is gone
+    if (document.activeElement === document.body) {
+      document.getElementById('bench')?.focus({preventScroll: true});
+    }
     window.addEventListener('keydown', pageKey);
     return () => window.removeEventListener('keydown', pageKey);
   }, []);

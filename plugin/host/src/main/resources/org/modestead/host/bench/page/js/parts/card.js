@@ -14,7 +14,7 @@ const MANY = 4;
  * @param {object} props
  * @param {object} props.step as the desk tells it
  * @param {number} props.column from 0
- * @param {boolean} props.first whether the Tab key enters the bench here
+ * @param {boolean} props.first whether the Tab key and F6 enter the bench here
  */
 export function Card({step, column, first}) {
   const {catalog, desk, chosen, drag} = getState();
@@ -61,7 +61,7 @@ export function Card({step, column, first}) {
       onpointerdown=${press} onmousedown=${hold} onclick=${pick} ondblclick=${(e) => openByDoubleClick(e, step)}>
     <${Ports} step=${step} node=${node} output=${false} open=${looked} />
     <div class="card-middle">
-      <button type="button" class="card-name" data-card=${step.id} tabindex=${first ? 0 : -1}
+      <button type="button" class="card-name" data-card=${step.id} tabindex=${first ? 0 : -1} data-first=${first ? '' : undefined}
           aria-current=${looked ? 'true' : undefined} aria-label=${cardWords(desk, step, node, isChosen)}
           onfocus=${() => focusChoose(step)} onkeydown=${(e) => cardKey(e, step)}>
         <span class="card-title">${step.title}</span>
