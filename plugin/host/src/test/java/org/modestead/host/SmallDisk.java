@@ -39,6 +39,11 @@ public record SmallDisk(Path folder) implements AutoCloseable {
         }
     }
 
+    /** From now on nobody may write on it, the superuser neither; nothing on it may be open for writing. */
+    public void forbidWriting() {
+        assertEquals(0, command("mount", "-o", "remount,ro", folder.toString()), "nothing on the small disk is being written");
+    }
+
     @Override
     public void close() {
         assertEquals(0, command("umount", folder.toString()), "nothing on the small disk is open any more");

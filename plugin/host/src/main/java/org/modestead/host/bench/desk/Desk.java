@@ -81,9 +81,23 @@ public final class Desk implements AutoCloseable {
             Files.createDirectories(folder);
             FolderLock lock = FolderLock.take(folder.resolve(".lock")).orElseThrow(() -> new DeskFault("desk " + folder.getFileName(),
                     "another bench has it open", "go on there, or close that bench"));
-            return new Desk(folder, lock, Journal.begin(folder, told), told, recovered, readLatest(folder));
+            return begun(folder, lock, told, recovered);
         } catch (IOException unwritable) {
             throw unkept(folder, unwritable);
+        }
+    }
+
+    /** A desk whose journal cannot be begun lets others try. */
+    private static Desk begun(Path folder, FolderLock lock, Journal.Told told, String recovered) throws IOException {
+        boolean begun = false;
+        try {
+            Desk desk = new Desk(folder, lock, Journal.begin(folder, told), told, recovered, readLatest(folder));
+            begun = true;
+            return desk;
+        } finally {
+            if (!begun) {
+                lock.close();
+            }
         }
     }
 

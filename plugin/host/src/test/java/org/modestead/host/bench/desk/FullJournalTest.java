@@ -33,6 +33,18 @@ class FullJournalTest {
         }
     }
 
+    /** Its lock was held until the process ended. */
+    @Test
+    void aDeskWhoseJournalCouldNotBeBegunIsOpenedOnceItCan() throws Exception {
+        Path own = folder.resolve("desk");
+        Path inTheWay = Files.createDirectories(own.resolve(Journal.NAME));
+        assertThrows(DeskFault.class, () -> Desk.begin(own, named("start"), false));
+        Files.delete(inTheWay);
+        try (Desk desk = Desk.begin(own, named("start"), false)) {
+            assertEquals("start", desk.timeline().current().name());
+        }
+    }
+
     private static Workflow named(String name) {
         return new Workflow(name, Path.of("/desk/workflow.json"), List.of(), List.of());
     }
