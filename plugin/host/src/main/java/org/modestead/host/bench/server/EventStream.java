@@ -59,9 +59,18 @@ final class EventStream implements AutoCloseable {
                 }
             }
         } catch (InterruptedException ending) {
+            farewell(client);
+            Thread.currentThread().interrupt();
+        }
+    }
+
+    /** Tells a page that the bench ends; one that left in the same moment has no answer any more to write to, which is no defect. */
+    private static void farewell(SseClient client) {
+        try {
             client.sendEvent("bye", "{\"sentence\": \"The bench has ended; start it again with the command.\"}", "");
             client.close();
-            Thread.currentThread().interrupt();
+        } catch (IllegalStateException left) {
+            client.close();
         }
     }
 

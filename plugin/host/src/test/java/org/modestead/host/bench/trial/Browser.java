@@ -71,7 +71,12 @@ final class Browser implements AutoCloseable {
 
     /** Sets the size of the page. */
     void size(int width, int height) {
-        driver.executeCdpCommand("Emulation.setDeviceMetricsOverride", Map.of("width", width, "height", height, "deviceScaleFactor", 1, "mobile", false));
+        size(width, height, 1);
+    }
+
+    /** Sets the size of the page in its own pixels, and how many pixels of the screen each of them has. */
+    void size(int width, int height, double scale) {
+        driver.executeCdpCommand("Emulation.setDeviceMetricsOverride", Map.of("width", width, "height", height, "deviceScaleFactor", scale, "mobile", false));
     }
 
     /** Makes the system light or dark. */

@@ -6,6 +6,7 @@ import {Port} from './port.js';
 import {useRead} from './reading.js';
 import {Callout, Report} from './report.js';
 import {Verdict} from './verdict.js';
+import {useWindowHeight} from './window-height.js';
 
 /**
  * Everything that a step found: its sentences, its verdict, its doubts, its pictures, what every output holds, its settings.
@@ -19,6 +20,7 @@ export function Look({step, selection = '', select}) {
   const holds = useHeldFocus();
   const {value: look, fault} = useRead(step.look ? `/api/steps/${encodeURIComponent(step.id)}/look` : null, step.resultId ?? '');
   const place = useRef(null);
+  useWindowHeight();
   useLayoutEffect(() => belowHead(place.current));
   if (!step.look) {
     return html`<div class="lk" data-look=${step.id} onfocusin=${holds}><p class="lk-quiet">${step.state?.kind === 'running'
@@ -36,7 +38,7 @@ export function Look({step, selection = '', select}) {
     look.verdict && {id: 'verdict', title: `Verdict: ${look.verdict.overall}`},
     look.doubts.length > 0 && {id: 'doubts', title: counted(look.doubts.length, 'doubt')},
     look.figures.length > 0 && {id: 'pictures', title: counted(look.figures.length, 'picture')},
-    ...look.ports.map((port) => ({id: `port-${port.id}`, title: port.title})),
+    ...look.ports.filter((port) => !look.verdict || port.type !== 'verdict').map((port) => ({id: `port-${port.id}`, title: port.title})),
     look.settings.length > 0 && {id: 'settings', title: 'Settings'},
   ].filter(Boolean);
   const go = (id) => {

@@ -20,7 +20,8 @@ export function Pictures({figures, base = '', whole = false, matrices = [], matr
   }
   return groups.map((group, i) => {
     const maps = i === groups.length - 1 ? matrices : [];
-    return html`<div key=${i} class=${`lk-pictures${group.wide ? ' lk-wide' : ''}${group.figures.length + maps.length === 1 ? ' lk-single' : ''}`}>
+    const few = ['', ' lk-single', group.wide ? '' : ' lk-pair'][group.figures.length + maps.length] ?? '';
+    return html`<div key=${i} class=${`lk-pictures${group.wide ? ' lk-wide' : ''}${few}`}>
       ${group.figures.map((figure) => html`<${Picture} key=${figure.id} head=${figure} data=${whole ? figure : null} address=${whole ? '' : `${base}/${figure.id}`} ...${common} />`)}
       ${maps.map((matrix) => html`<${HeatMap} key=${matrix.id} head=${matrix} address=${`${matrixBase}/${matrix.id}`} ...${common} />`)}
     </div>`;

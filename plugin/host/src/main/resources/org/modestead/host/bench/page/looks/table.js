@@ -3,12 +3,15 @@ import {count, counted, prose} from '../js/words.js';
 import {cell, hundredths, labelled} from './numbers.js';
 import {isSelected, words} from './keys.js';
 import {PAGE} from './sources.js';
+import {useWindowHeight} from './window-height.js';
 
 /** Room for the bar below, which otherwise covers the last row. */
 const BAR = 18;
 /** More rows than this in one view are mapped onto a shorter bar, for no browser scrolls hundreds of millions of pixels. */
 const TALLEST = 8000000;
+/** Rows in sight; on a tall screen as many as fill this share of it. */
 const SHOWN = 14;
+const SHARE = 0.4;
 const SPARE = 8;
 
 /**
@@ -21,9 +24,9 @@ const SPARE = 8;
  * @param {string} given.selection
  * @param {(key: string) => void} given.select
  * @param {string} [given.csv] address of the whole table as a file
- * @param {number} [given.rows] most rows in sight
+ * @param {number} [given.rows] most rows in sight; 0 for as many as suit the screen
  */
-export function DataTable({source, id, title, selection, select, csv = '', rows: inSight = SHOWN}) {
+export function DataTable({source, id, title, selection, select, csv = '', rows = 0}) {
   const name = useId();
   const box = useRef(null);
   const [order, setOrder] = useState({sort: '', down: false, find: ''});
@@ -40,6 +43,8 @@ export function DataTable({source, id, title, selection, select, csv = '', rows:
   const held = pages.key === key ? pages.held : new Map();
   const total = pages.total ?? 0;
   const found = pages.key !== key && order.find === '' ? total : pages.found;
+  const suiting = Math.max(SHOWN, Math.floor(SHARE * useWindowHeight() / height));
+  const inSight = rows || suiting;
   const visible = Math.min(inSight, Math.max(found, 1));
   const tall = Math.min(TALLEST, found * height);
   const first = firstRow(top, tall, visible * height, found, height);
