@@ -32,6 +32,12 @@ final class ProgressLine implements RunListener, AutoCloseable {
     }
 
     @Override
+    public synchronized void told(String sentence) {
+        clear();
+        err.println(sentence);
+    }
+
+    @Override
     public synchronized void started(String step) {
         running.put(step, step);
         if (live) {

@@ -7,6 +7,8 @@ import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
+import java.util.TreeSet;
 import java.util.stream.Stream;
 
 /**
@@ -89,30 +91,54 @@ public final class OutputFolder implements AutoCloseable {
     }
 
     /**
-     * Moves all files to their places; the last one tells that the rest is complete.
+     * Moves all files to their places; the last one tells that the rest is complete. Where results of an earlier run may lie, an
+     * {@link UnfinishedRun} marks the folder meanwhile; what a run that was killed so had moved there goes too.
      *
+     * @param begun when the run began, for the mark
      * @param earlier files that an earlier run left and this one did not make: removed, so that the folder tells of one
      *     run only
      * @param last name of the file to be moved last
      */
-    public void publish(List<String> earlier, String last) throws IOException {
+    public void publish(String begun, List<String> earlier, String last) throws IOException {
         List<String> files = new ArrayList<>(files());
         if (!Files.exists(folder)) {
             Files.move(staging, folder, StandardCopyOption.ATOMIC_MOVE);
             return;
         }
         files.remove(last);
+        Set<String> stale = new TreeSet<>(earlier);
+        UnfinishedRun.in(folder).ifPresent(killed -> stale.addAll(killed.files()));
+        mark(new UnfinishedRun(begun, union(stale, files)));
         for (String name : files) {
             move(name);
         }
-        for (String name : earlier) {
-            Path stale = folder.resolve(name).normalize();
-            if (!files.contains(name) && !name.equals(last) && stale.startsWith(folder)) {
-                Files.deleteIfExists(stale);
-                removeIfEmpty(stale.getParent());
-            }
+        stale.removeAll(files);
+        stale.remove(last);
+        for (String name : stale) {
+            removeStale(folder.resolve(name).normalize());
         }
         move(last);
+        Files.delete(folder.resolve(UnfinishedRun.NAME));
+    }
+
+    /** What neither run may leave behind: whichever is killed next, the one after it knows all that may lie there. */
+    private static List<String> union(Set<String> stale, List<String> files) {
+        Set<String> all = new TreeSet<>(stale);
+        all.addAll(files);
+        return List.copyOf(all);
+    }
+
+    private void mark(UnfinishedRun run) throws IOException {
+        byte[] mark = run.write();
+        write(UnfinishedRun.NAME, out -> out.write(mark));
+        move(UnfinishedRun.NAME);
+    }
+
+    private void removeStale(Path stale) throws IOException {
+        if (stale.startsWith(folder) && !stale.equals(folder)) {
+            Files.deleteIfExists(stale);
+            removeIfEmpty(stale.getParent());
+        }
     }
 
     private void move(String name) throws IOException {

@@ -12,6 +12,7 @@ import java.security.MessageDigest;
 import java.util.HexFormat;
 import java.util.Optional;
 import java.util.stream.Stream;
+import org.modestead.host.output.UnfinishedRun;
 import org.modestead.host.recent.RecentAnswers;
 
 /**
@@ -52,7 +53,8 @@ public final class FileMarks {
     private String file(Path path) throws IOException {
         Path place = path.toAbsolutePath().normalize();
         BasicFileAttributes facts = Files.readAttributes(path, BasicFileAttributes.class);
-        return place + " " + facts.size() + " " + facts.lastModifiedTime().toMillis() + " " + (facts.size() <= LARGEST_HASHED ? digest(place, facts) : "");
+        return place + " " + facts.size() + " " + facts.lastModifiedTime().toMillis() + " " + (facts.size() <= LARGEST_HASHED ? digest(place, facts) : "")
+                + (UnfinishedRun.doubtOf(place).isPresent() ? " unfinished" : "");
     }
 
     private String digest(Path place, BasicFileAttributes facts) throws IOException {

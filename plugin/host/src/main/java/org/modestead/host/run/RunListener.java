@@ -21,6 +21,11 @@ public interface RunListener {
         }
     };
 
+    /** The run found something that the person must know before it begins; not heard unless taken up. */
+    default void told(String sentence) {
+        // who shows no sentences needs none
+    }
+
     /** A step began. */
     void started(String step);
 

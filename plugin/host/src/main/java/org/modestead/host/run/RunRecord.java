@@ -65,12 +65,17 @@ final class RunRecord {
         root.put("versions", Versions.all());
         root.put("linear_algebra", Versions.linearAlgebra());
         root.put("warnings", LinearAlgebra.installed().doubts().stream().map(RunRecord::warning).toList());
-        root.put("started", started.truncatedTo(ChronoUnit.MILLIS).toString());
+        root.put("started", time(started));
         root.put("seconds", seconds(result.time()));
         root.put("steps", result.plan().steps().stream().map(step -> step(step, result.outcomes().get(step.id()))).toList());
         root.put("files", files);
         ObjectWriter writer = new ObjectMapper().enable(SerializationFeature.INDENT_OUTPUT).writer();
         return writer.writeValueAsBytes(root);
+    }
+
+    /** Returns a time as the record writes it. */
+    static String time(Instant time) {
+        return time.truncatedTo(ChronoUnit.MILLIS).toString();
     }
 
     private static Map<String, Object> step(PlannedStep step, StepOutcome outcome) {

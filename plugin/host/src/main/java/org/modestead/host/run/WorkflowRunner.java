@@ -10,6 +10,7 @@ import java.util.Map;
 import org.modestead.host.output.Disk;
 import org.modestead.host.output.OutputFault;
 import org.modestead.host.output.OutputFolder;
+import org.modestead.host.output.UnfinishedRun;
 import org.modestead.host.table.SpillFolder;
 import org.modestead.host.workflow.RunPlan;
 import org.modestead.nodes.report.HtmlReport;
@@ -66,6 +67,7 @@ public final class WorkflowRunner {
         Instant started = Instant.now();
         SpillFolder.clearAbandoned();
         try (OutputFolder folder = OutputFolder.open(target, disk)) {
+            UnfinishedRun.in(folder.folder()).ifPresent(killed -> listener.told(killed.sentence(target.toString())));
             StepRunner steps = new StepRunner(plan.workflow().baseFolder(), cache, new FolderStore(folder, wanted), listener,
                     cancel);
             Map<String, StepOutcome> outcomes = new Scheduler(plan, steps, listener, cancel).run(threads);
@@ -87,7 +89,7 @@ public final class WorkflowRunner {
             List<String> earlier = RunRecord.filesOf(folder.folder());
             byte[] record = RunRecord.write(result, started, folder.files());
             folder.write(RunRecord.NAME, out -> out.write(record));
-            folder.publish(earlier, RunRecord.NAME);
+            folder.publish(RunRecord.time(started), earlier, RunRecord.NAME);
         } catch (IOException unwritable) {
             throw OutputFault.of(folder.folder().toString(), unwritable);
         }

@@ -9,6 +9,8 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.OptionalLong;
 import java.util.stream.Stream;
+import org.modestead.engine.Doubt;
+import org.modestead.host.output.UnfinishedRun;
 import org.modestead.nodes.contract.Node;
 import org.modestead.nodes.contract.NodeDeclaration;
 import org.modestead.nodes.contract.NodeInputs;
@@ -154,12 +156,16 @@ public final class TableSource implements Node {
         return new NodeResult(Map.of("table", table), List.of(),
                 List.of("Read from " + table.origin() + " with " + columns.size() + " columns: " + String.join(", ", columns)
                 + "."),
-                List.of());
+                UnfinishedRun.doubtOf(path(settings, context)).map(sentence -> new Doubt("unfinished-run", sentence)).stream().toList());
+    }
+
+    private static Path path(Settings settings, RunContext context) {
+        return context.baseFolder().resolve(settings.text("path")).toAbsolutePath().normalize();
     }
 
     private Table open(Settings settings, RunContext context) {
         String shown = settings.text("path");
-        Path path = context.baseFolder().resolve(shown).toAbsolutePath().normalize();
+        Path path = path(settings, context);
         SourceLimits limits = new SourceLimits(settings.whole("memory"), settings.flag("copy"));
         if (List.of(AUTO, PARQUET).contains(settings.text("format")) && ParquetSource.isFolder(path)) {
             return ParquetSource.open(path, shown, limits);

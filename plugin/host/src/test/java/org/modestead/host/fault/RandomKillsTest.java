@@ -10,6 +10,7 @@ import java.nio.file.Path;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Random;
 import java.util.Set;
 import java.util.TreeMap;
@@ -21,6 +22,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.modestead.host.ChildProcess;
 import org.modestead.host.TestWorkflows;
+import org.modestead.host.output.UnfinishedRun;
 
 /**
  * Processes that are killed at a moment drawn from a seed, over and over in the same folders: every file of a run is the one of before or
@@ -62,6 +64,7 @@ class RandomKillsTest {
         assertEquals(oldFiles.keySet(), newFiles.keySet());
         Random random = new Random(SEED);
         int mixed = 0;
+        int marks = 0;
         for (int k = 0; k < KILLS / 2; k++) {
             ChildProcess run = start(k % 2 == 0 ? "old" : "new");
             if (k % 4 < 2) {
@@ -72,16 +75,49 @@ class RandomKillsTest {
             }
             run.process().destroyForcibly().waitFor();
             Map<String, String> found = contents();
+            boolean marked = found.remove(UnfinishedRun.NAME) != null;
             assertEquals(oldFiles.keySet(), found.keySet(), "kill " + k);
-            mixed += isMixed(found, oldFiles, newFiles, "kill " + k) ? 1 : 0;
+            boolean isMixed = isMixed(found, oldFiles, newFiles, "kill " + k);
+            assertTrue(marked || !isMixed, "kill " + k + ": files of two runs lie beside each other unmarked");
+            mixed += isMixed ? 1 : 0;
+            marks += marked ? 1 : 0;
             new ObjectMapper().readTree(found.get("run.json"));
             assertTrue(found.get("report.html").strip().endsWith("</html>"), "kill " + k);
         }
-        System.out.println(KILLS / 2 + " runs of " + lasts / 1_000_000 + " ms killed; then " + mixed + " folders held whole files of two runs");
-        assertEquals(tables(newFiles).toList(), tables(finished("new")).toList(), "the run after takes no harm");
+        System.out.println(KILLS / 2 + " runs of " + lasts / 1_000_000 + " ms killed; then " + mixed + " folders held whole files of two runs, and " + marks + " were marked");
+        boolean marked = Files.exists(folder.resolve("out").resolve(UnfinishedRun.NAME));
+        ChildProcess after = start("new");
+        assertEquals(0, after.exit(), after.said());
+        assertEquals(marked, after.said().contains("files of two runs may lie beside each other"), after.said());
+        assertEquals(tables(newFiles).toList(), tables(contents()).toList(), "the run after takes no harm");
         try (Stream<Path> beside = Files.list(folder)) {
             assertEquals(List.of(), beside.filter(path -> path.getFileName().toString().startsWith(".")).toList());
         }
+    }
+
+    @Test
+    void theRunAfterAndWhoReadsTheFilesSayThatAFolderIsMixed() throws IOException, InterruptedException {
+        finished("old");
+        Files.writeString(folder.resolve("out").resolve(UnfinishedRun.NAME),
+                "{\"format\": \"modestead-unfinished-run/1\", \"begun\": \"2026-12-04T03:00:00Z\", \"files\": [\"gone/table.csv\"]}");
+        Files.writeString(Files.createDirectories(folder.resolve("out/gone")).resolve("table.csv"), "of the killed run");
+        Files.createDirectory(folder.resolve("reader"));
+        TestWorkflows.write(folder.resolve("reader"), List.of("source:table-source:{\"path\": \"../out/spectrum/modes.csv\"}"), List.of());
+        String told = folder.resolve("out") + ": a run begun at 2026-12-04T03:00:00Z did not come to the end of moving its files here";
+        assertTrue(finishedReader().contains(told));
+        ChildProcess after = start("new");
+        assertEquals(0, after.exit(), after.said());
+        assertTrue(after.said().contains(told), after.said());
+        assertEquals(Optional.empty(), UnfinishedRun.in(folder.resolve("out")));
+        assertTrue(Files.notExists(folder.resolve("out/gone")), "what the killed run had moved there is gone");
+        assertTrue(!finishedReader().contains("did not come to the end"));
+    }
+
+    /** Returns the record of a workflow that reads a table of the folder. */
+    private String finishedReader() throws IOException, InterruptedException {
+        ChildProcess run = ChildProcess.start(folder.resolve("said"), QUICK, "run", folder.resolve("reader").toString());
+        assertEquals(0, run.exit(), run.said());
+        return Files.readString(folder.resolve("reader/out/run.json"));
     }
 
     private static Stream<Map.Entry<String, String>> tables(Map<String, String> files) {

@@ -9,12 +9,15 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
 /** The result folder: complete files or the old ones, one writer, no trace of what was not published. */
 class OutputFolderTest {
+
+    private static final String BEGUN = "2026-12-04T03:00:00Z";
 
     @TempDir
     Path parent;
@@ -24,7 +27,7 @@ class OutputFolderTest {
         try (OutputFolder folder = OutputFolder.open(out(), Disk.REAL)) {
             write(folder, "a/table.csv", "new");
             assertTrue(Files.notExists(out()));
-            folder.publish(List.of(), "run.json");
+            folder.publish(BEGUN, List.of(), "run.json");
         }
         assertEquals(List.of("out", "out/a", "out/a/table.csv"), all());
     }
@@ -48,10 +51,45 @@ class OutputFolderTest {
         try (OutputFolder folder = OutputFolder.open(out(), Disk.REAL)) {
             write(folder, "a/table.csv", "new");
             write(folder, "run.json", "{}");
-            folder.publish(List.of("a/table.csv", "gone/table.csv", "../outside.txt"), "run.json");
+            folder.publish(BEGUN, List.of("a/table.csv", "gone/table.csv", "../outside.txt"), "run.json");
         }
         assertEquals(List.of("out", "out/a", "out/a/table.csv", "out/mine.txt", "out/run.json", "outside.txt"), all());
         assertEquals("new", Files.readString(out().resolve("a/table.csv")));
+    }
+
+    /** A folder in the way of the second file stops the run as a kill would, after the first one moved. */
+    @Test
+    void aRunThatStopsWhileItsFilesMoveLeavesAMarkAndTheNextOneClearsUp() throws IOException {
+        Files.createDirectories(out().resolve("b.csv/in the way"));
+        Files.writeString(out().resolve("mine.txt"), "kept");
+        try (OutputFolder folder = OutputFolder.open(out(), Disk.REAL)) {
+            write(folder, "a.csv", "half published");
+            write(folder, "b.csv", "never published");
+            write(folder, "run.json", "{}");
+            assertThrows(IOException.class, () -> folder.publish(BEGUN, List.of(), "run.json"));
+        }
+        UnfinishedRun killed = UnfinishedRun.in(out()).orElseThrow();
+        assertEquals(new UnfinishedRun(BEGUN, List.of("a.csv", "b.csv")), killed);
+        assertEquals("out: a run begun at " + BEGUN + " did not come to the end of moving its files here, so that files of two runs may lie beside each other; "
+                + "run the workflow again.", killed.sentence("out"));
+        assertEquals(Optional.of(killed.sentence(out().toString())), UnfinishedRun.doubtOf(out().resolve("a/table.csv")));
+        assertEquals(Optional.empty(), UnfinishedRun.doubtOf(parent.resolve("table.csv")));
+        WholeFolder.remove(out().resolve("b.csv"));
+        try (OutputFolder folder = OutputFolder.open(out(), Disk.REAL)) {
+            write(folder, "c.csv", "new");
+            write(folder, "run.json", "{}");
+            folder.publish(BEGUN, List.of(), "run.json");
+        }
+        assertEquals(List.of("out", "out/c.csv", "out/mine.txt", "out/run.json"), all(), "no file of the run that stopped, and no mark");
+    }
+
+    @Test
+    void aMarkThatIsNotOursIsNone() throws IOException {
+        Files.createDirectories(out());
+        for (String foreign : List.of("", "{", "{\"files\": [\"a\"]}", "[".repeat(100_000))) {
+            Files.writeString(out().resolve(UnfinishedRun.NAME), foreign);
+            assertEquals(Optional.empty(), UnfinishedRun.in(out()), foreign);
+        }
     }
 
     @Test
