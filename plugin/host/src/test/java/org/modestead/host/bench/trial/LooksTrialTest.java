@@ -139,10 +139,17 @@ class LooksTrialTest {
             browser.click("[data-figure=\"" + figure + "\"] [data-action=svg]");
             browser.click("[data-figure=\"" + figure + "\"] [data-action=png]");
             browser.click("[data-table=modes] [data-action=csv]");
+            browser.await("the picture, its file, and the table", () -> files(".svg") == 1 && files(".png") == 1 && files(".csv") == 1);
             assertTrue(new String(downloaded(browser, ".svg"), StandardCharsets.UTF_8).contains("<svg"));
             assertEquals("[-119, 80, 78, 71]", Arrays.toString(Arrays.copyOf(downloaded(browser, ".png"), 4)));
             String rows = browser.see("[data-table=modes]").getAttribute("data-rows");
             assertEquals(Integer.parseInt(rows) + 1, new String(downloaded(browser, ".csv"), StandardCharsets.UTF_8).lines().count());
+            browser.click("[data-figure=\"" + figure + "\"] [data-action=numbers-csv]");
+            browser.await("the numbers of the picture", () -> files(".csv") == 2);
+            browser.click("[data-action=workflow-menu]");
+            assertFalse(browser.has("[role=menu] [data-action=report][aria-disabled=true]"), "there are results to report");
+            String report = String.valueOf(browser.later("fetch('/api/report.html').then((answer) => answer.text()).then(arguments[0])"));
+            assertTrue(report.strip().endsWith("</html>") && report.contains("Spectrum Extractor"), "the report is a whole page and tells of every step");
         }
     }
 
@@ -185,6 +192,14 @@ class LooksTrialTest {
     private byte[] downloaded(Browser browser, String end) throws IOException {
         browser.await("a file " + end, () -> file(end).isPresent());
         return Files.readAllBytes(file(end).orElseThrow());
+    }
+
+    private long files(String end) {
+        try (Stream<Path> files = Files.list(folder)) {
+            return files.filter(file -> file.toString().endsWith(end)).count();
+        } catch (IOException broken) {
+            throw new java.io.UncheckedIOException(broken);
+        }
     }
 
     private Optional<Path> file(String end) {

@@ -80,6 +80,48 @@ class RefusedLinksTrialTest {
         }
     }
 
+    /** Everything else that is refused while something is held: circles, ends of one side, a link that is there, a node and a step out of place. */
+    @Test
+    void whateverElseIsRefusedIsToldWhileDragging() throws IOException {
+        Path chain = TestWorkflows.write(folder, List.of("made:signal-generator", "a:table-query", "b:table-query", "snapshots:snapshot-builder"),
+                List.of("made.table>a.input", "a.table>b.input"));
+        try (Trial trial = Trial.start(folder, Optional.of(chain))) {
+            Browser browser = trial.browser();
+            browser.size(1500, 1500);
+            int links = trial.desk().path("links").size();
+            refused(trial, "b", Trial.output("b.table"), Trial.input("a.input"), "already takes input from", "circle");
+            refused(trial, "b", Trial.output("b.table"), Trial.input("b.input"), "both ends are the same step");
+            refused(trial, "b", Trial.output("b.table"), Trial.output("a.table"), "An output cannot feed another output");
+            refused(trial, "b", Trial.input("b.input"), Trial.input("a.input"), "An input cannot feed another input");
+            refused(trial, "a", Trial.output("a.table"), Trial.input("b.input"), "These two are linked already");
+            refused(trial, "snapshots", Trial.output("snapshots.snapshots"), "[data-card=made]", "takes no Snapshots");
+            refused(trial, "made", ".shelf-item[data-node=operator-fitter]", Trial.output("made.table"), "gives Table here", "takes none");
+            refused(trial, "made", "[data-card=made]", "[data-band=prepare] .band-title", "a step stays in the band of its stage");
+            assertEquals(links, trial.desk().path("links").size(), "no link is made and none is lost");
+            assertEquals(4, trial.desk().path("steps").size(), "no step is added");
+            trial.choose("made");
+            browser.hold(Trial.output("made.table"), Trial.input("b.input"), 0, 0);
+            browser.reads("[data-drag-words]", "Links, in place of");
+            browser.keys(Keys.ESCAPE);
+            browser.gone("[data-drag-words]");
+            browser.drop();
+            assertEquals(links, trial.desk().path("links").size(), "a link that is given up changes nothing");
+            trial.linked("a.table", "b.input");
+        }
+    }
+
+    /** Holds one thing over another, reads why it is refused, drops it and reads that again. */
+    private static void refused(Trial trial, String chosen, String held, String over, String... words) {
+        Browser browser = trial.browser();
+        trial.choose(chosen);
+        browser.hold(held, over, 0, 0);
+        browser.reads(".drag-ghost.refused [data-drag-words]", words);
+        browser.drop();
+        browser.reads("[data-notice=stop] p", words);
+        browser.click("[data-action=close-notice]");
+        browser.gone("[data-notice=stop]");
+    }
+
     private static boolean tells(String reason, String given, String taken) {
         return reason.contains("gives " + article(given)) && reason.contains("takes " + article(taken));
     }
