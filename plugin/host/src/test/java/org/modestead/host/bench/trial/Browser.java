@@ -281,6 +281,11 @@ final class Browser implements AutoCloseable {
         return driver.executeAsyncScript(script, arguments);
     }
 
+    /** Returns when something of the page was first seen, in milliseconds after it was asked for; 0 before. */
+    double firstPaint() {
+        return ((Number) js("return performance.getEntriesByName('first-contentful-paint')[0]?.startTime ?? 0")).doubleValue();
+    }
+
     /** Returns every address that was asked for since the last time, as the browser itself logs it. */
     List<String> requests() {
         List<String> urls = new ArrayList<>();

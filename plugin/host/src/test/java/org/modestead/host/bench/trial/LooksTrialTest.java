@@ -158,8 +158,8 @@ class LooksTrialTest {
         try (Trial trial = Trial.start(folder, Optional.empty())) {
             trial.browser().see("[data-example=pump-house]");
             trial.browser().picture("start");
-            trial.browser().await("the first paint", () -> paint(trial.browser()) > 0);
-            System.out.printf(Locale.ROOT, "trials: first paint of the start page after %.0f ms, of all that it offers after %.0f ms%n", paint(trial.browser()),
+            trial.browser().await("the first paint", () -> trial.browser().firstPaint() > 0);
+            System.out.printf(Locale.ROOT, "trials: first paint of the start page after %.0f ms, of all that it offers after %.0f ms%n", trial.browser().firstPaint(),
                     filled(trial.browser()));
             assertEquals("[]", trial.browser().js("return JSON.stringify(performance.getEntriesByType('resource').map(e => new URL(e.name).pathname)"
                     + ".filter(path => ['/api/start', '/api/desk'].includes(path)))"), "what the start page offers comes with the page");
@@ -168,10 +168,6 @@ class LooksTrialTest {
             assertTrue(trial.browser().requests().size() > 10, "the browser's log of requests is read");
             assertEquals("[]", trial.browser().complaints().toString());
         }
-    }
-
-    private static double paint(Browser browser) {
-        return ((Number) browser.js("return performance.getEntriesByName('first-contentful-paint')[0]?.startTime ?? 0")).doubleValue();
     }
 
     /** The largest paint so far: the start page has it when its lists are there. */
