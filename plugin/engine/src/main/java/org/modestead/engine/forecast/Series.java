@@ -2,9 +2,11 @@ package org.modestead.engine.forecast;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collection;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Locale;
 import java.util.Map;
 import org.ejml.data.DMatrixRMaj;
 import org.modestead.engine.linalg.Matrices;
@@ -25,6 +27,9 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
     /** Neighbouring samples further apart than this many steps do not belong to one uninterrupted recording. */
     private static final double CONTIGUOUS = 1.5;
 
+    /** All grids of a forecast together, in numbers of 8 bytes: 270 MB. */
+    private static final double MOST_NUMBERS = 1 << 25;
+
     /** Without inputs. */
     Series(String id, double[] times, DMatrixRMaj values, int first) {
         this(id, times, values, new DMatrixRMaj(times.length, 0), first);
@@ -36,20 +41,23 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
      *
      * @param step in time units, positive
      * @return possibly empty
+     * @throws ForecastFault if such grids would fill the memory
      */
     static List<Series> of(Snapshots snapshots, Snapshots.Part part, double step) {
-        List<Series> out = new ArrayList<>();
         Map<String, List<Run>> earlier = earlier(snapshots, part);
-        for (Run run : snapshots.runs(part)) {
-            Series series = joined(earlier, run, step);
-            out.add(snapshots.step().isPresent() ? series : series.even(step, Math.max(series.first - 1, 0)));
+        List<Series> joined = snapshots.runs(part).stream().map(run -> joined(earlier, run, step)).toList();
+        if (snapshots.step().isPresent()) {
+            return joined;
         }
-        return out;
+        requireRoom(joined, step);
+        return joined.stream().map(series -> series.even(step, Math.max(series.first - 1, 0))).toList();
     }
 
     /**
      * Returns every run once, up to the last sample recorded of it in any part; uneven runs are interpolated to the
      * step on a grid through that sample.
+     *
+     * @throws ForecastFault if such grids would fill the memory
      */
     static List<Series> ends(Snapshots snapshots, double step) {
         Map<String, Series> latest = new LinkedHashMap<>();
@@ -62,7 +70,21 @@ record Series(String id, double[] times, DMatrixRMaj values, DMatrixRMaj inputs,
         if (snapshots.step().isPresent()) {
             return List.copyOf(latest.values());
         }
+        requireRoom(latest.values(), step);
         return latest.values().stream().map(series -> series.even(step, series.length() - 1)).toList();
+    }
+
+    /** One time that is far off makes a grid of any size. */
+    private static void requireRoom(Collection<Series> uneven, double step) {
+        double numbers = 0;
+        for (Series series : uneven) {
+            double samples = Math.floor((series.end() - series.times[0]) / step) + 1;
+            numbers += samples * Math.max(1, series.values.numCols + series.inputs.numCols);
+            if (!(numbers <= MOST_NUMBERS)) {
+                throw new ForecastFault("run " + series.id, String.format(Locale.ROOT, "its times from %s to %s are %.3g steps of %s", series.times[0], series.end(), samples,
+                        step), "split the run where its times leap, or resample it to a longer step");
+            }
+        }
     }
 
     /** Returns the runs of earlier parts by name, those of the part just before first. */

@@ -2,6 +2,7 @@ package org.modestead.engine.forecast;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 
 import java.util.List;
 import java.util.OptionalDouble;
@@ -79,6 +80,19 @@ class SeriesTest {
         assertEquals(4, series.first());
         for (int k = 0; k < 6; k++) {
             assertEquals(3 - 2 * series.times()[k], series.values().data[k], 1e-12);
+        }
+    }
+
+    /** A grid of 10^12 steps, and one whose count passes what a whole number holds. */
+    @Test
+    void aTimeFarOffIsRefusedBeforeAGridFillsTheMemory() {
+        for (double far : new double[] {1e12, 1e99}) {
+            Run run = new Run("a", new double[] {0, 1, 2, far}, new DMatrixRMaj(4, 1), new DMatrixRMaj(4, 0), 0);
+            Snapshots uneven = snapshots(List.of(Fixture.run("b", 0, 5, 0, 1, CLOCK)), List.of(), List.of(run), OptionalDouble.empty());
+            String sentence = "run a: its times from 0.0 to " + far + " are " + (far == 1e12 ? "1.00e+12" : "1.00e+99")
+                    + " steps of 1.0; split the run where its times leap, or resample it to a longer step.";
+            assertEquals(sentence, assertThrows(ForecastFault.class, () -> Series.of(uneven, Part.HOLDOUT, 1)).getMessage());
+            assertEquals(sentence, assertThrows(ForecastFault.class, () -> Series.ends(uneven, 1)).getMessage());
         }
     }
 }

@@ -9,7 +9,7 @@ import java.util.stream.Collectors;
 /** What DuckDB says when it refuses, cut down to the part that helps a person. */
 record DuckDbMessage(String text) {
 
-    private static final Pattern KIND = Pattern.compile("^([A-Z][A-Za-z ]* Error): *");
+    private static final Pattern KIND = Pattern.compile("^(?:(?:[A-Z][A-Za-z ]* Error|[A-Za-z]+Exception): *)+");
     private static final Pattern LINE = Pattern.compile("CSV Error on Line: (\\d+)");
     private static final Pattern CELLS = Pattern.compile("Expected Number of Columns: (\\d+) Found: (\\d+)");
 

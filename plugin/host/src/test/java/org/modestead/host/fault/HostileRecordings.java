@@ -1,5 +1,9 @@
 package org.modestead.host.fault;
 
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
+import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.TreeMap;
@@ -46,6 +50,21 @@ final class HostileRecordings {
         all.put("times of 1e-310", table(i -> ring(i), 1e-310, "0"));
         all.put("a run kept away that is 1e189 times the others", table(i -> (i / SAMPLES == RUNS - 1 ? 1e99 : 1e-90) * ring(i), 1, "0"));
         return all;
+    }
+
+    /**
+     * Returns a table of numbers as an NPY file: the columns are {@code column1} to {@code column4}.
+     *
+     * @param table as above
+     */
+    static byte[] npy(String table) {
+        List<String> rows = table.lines().skip(1).toList();
+        byte[] header = String.format(Locale.ROOT, "%-117s%n", "{'descr': '<f8', 'fortran_order': False, 'shape': (" + rows.size() + ", 4), }")
+                .getBytes(StandardCharsets.UTF_8);
+        ByteBuffer out = ByteBuffer.allocate(10 + header.length + 32 * rows.size()).order(ByteOrder.LITTLE_ENDIAN);
+        out.put((byte) 0x93).put("NUMPY".getBytes(StandardCharsets.UTF_8)).put((byte) 1).put((byte) 0).putShort((short) header.length).put(header);
+        rows.forEach(row -> List.of(row.split(",")).forEach(cell -> out.putDouble(Double.parseDouble(cell))));
+        return out.array();
     }
 
     private static double ring(int i) {

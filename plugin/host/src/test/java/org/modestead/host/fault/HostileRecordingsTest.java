@@ -11,6 +11,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 
@@ -81,6 +82,29 @@ class HostileRecordingsTest {
             assertTrue(outcome.sentence().matches("(?s).+: .+; .+\\."), outcome.sentence());
             assertFalse(outcome.sentence().contains("NaN"), outcome.sentence());
         }
+    }
+
+    /** The same numbers in an NPY file, where an infinite one and one that is missing are numbers like any other, come out as from the text. */
+    @Test
+    void anArrayOfTheSameNumbersIsTakenOrRefusedAsTheText() throws IOException {
+        Map<String, String> all = new TreeMap<>(HostileRecordings.sound());
+        all.putAll(HostileRecordings.unsound());
+        for (Map.Entry<String, String> recording : all.entrySet()) {
+            RecordingLine.Outcome text = run("delays", recording.getValue());
+            RecordingLine.Outcome array = array(recording.getValue());
+            assertEquals(List.of(), RecordingLine.unusable(array.tables(), WHOLE), recording.getKey());
+            assertEquals(text.taken(), array.taken(), recording.getKey() + ": " + text.words() + " and " + array.words());
+            assertTrue(array.taken() || array.sentence().matches("(?s).+: .+; .+\\."), array.sentence());
+        }
+    }
+
+    private RecordingLine.Outcome array(String table) throws IOException {
+        Files.write(folder.resolve("t.npy"), HostileRecordings.npy(table));
+        Map<String, Map<String, Object>> settings = new LinkedHashMap<>(ways().get("delays"));
+        Map<String, Object> preparation = new LinkedHashMap<>(settings.get("snapshot-builder"));
+        preparation.putAll(Map.of("run-column", "column1", "time-column", "column2"));
+        settings.put("snapshot-builder", preparation);
+        return new RecordingLine(folder, "t.npy", settings).run(LINE);
     }
 
     @Test

@@ -37,10 +37,22 @@ final class TableFuzz implements FuzzedReader {
     private final Node source = TestWorkflows.allNodes().find("table-source").orElseThrow();
     private final Path folder;
     private final String ending;
+    private final byte[] parquet;
 
-    TableFuzz(Path folder, String ending) {
+    TableFuzz(Path folder, String ending) throws IOException {
         this.folder = folder;
         this.ending = ending;
+        this.parquet = ending.equals("parquet") ? parquet() : new byte[0];
+    }
+
+    /** The text above, as the Table Sink writes it. */
+    private byte[] parquet() throws IOException {
+        Files.write(folder.resolve("t.csv"), bytes(CSV));
+        Node sink = TestWorkflows.allNodes().find("table-sink").orElseThrow();
+        RunContext context = new RunContext(Progress.NONE, folder, folder);
+        Object table = source.run(new NodeInputs(Map.of()), SettingsReader.read(source, Map.of("path", "t.csv")).settings().orElseThrow(), context).outputs().get("table");
+        sink.run(new NodeInputs(Map.of("table", table)), SettingsReader.read(sink, Map.of("path", "sample.parquet")).settings().orElseThrow(), context);
+        return Files.readAllBytes(folder.resolve("sample.parquet"));
     }
 
     @Override
@@ -52,6 +64,7 @@ final class TableFuzz implements FuzzedReader {
     public byte[] next(Random random) {
         Mutations mutations = new Mutations(random);
         return switch (ending) {
+            case "parquet" -> mutations.bits(parquet);
             case "npy" -> random.nextBoolean() ? mutations.bits(array()) : mutations.text(array(), array());
             case "json" -> mutations.text(bytes(JSON), bytes(LINES));
             case "csv.gz" -> random.nextBoolean() ? mutations.bits(zipped(bytes(CSV))) : zipped(mutations.text(bytes(CSV), bytes(SEMICOLONS)));

@@ -92,6 +92,23 @@ class EndlessLineTest {
                 Steps.rows(Steps.source(folder, packed("time,flow\n0,1\n2,", '1', 1, "\n").getFileName().toString(), "text-columns", List.of("flow"))));
     }
 
+    /** Its line feeds end no line; such a last line is not left out either, whether its quote closes or not. */
+    @Test
+    void aQuotedLastCellOfFortyMegabytesOfLineFeeds() throws IOException {
+        String rows = "0,1\n".repeat(3000);
+        for (String end : List.of("", "\"", "\"\n")) {
+            Path plain = folder.resolve("t.csv");
+            byte[] block = new byte[40 << 20];
+            Arrays.fill(block, (byte) '\n');
+            Files.writeString(plain, "time,note\n" + rows + "2,\"x");
+            Files.write(plain, block, StandardOpenOption.APPEND);
+            Files.writeString(plain, "x" + end, StandardOpenOption.APPEND);
+            String told = ", line 3002: a quote \" opens here and does not close within 2000000 characters; close it, or write \"\" for a quote inside quotes.";
+            assertRefused(plain, "t.csv" + told);
+            assertRefused(packed("time,note\n" + rows + "2,\"x", '\n', 40, "x" + end), "t.csv.gz" + told);
+        }
+    }
+
     /** What the database refuses by itself begins below what is looked for. */
     @Test
     void aLastLineOfThreeMegabytesIsRefusedAndOneOfOneIsRead() throws IOException {
